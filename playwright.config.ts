@@ -1,0 +1,32 @@
+import { availableParallelism } from 'node:os'
+import { defineConfig } from '@playwright/test'
+
+/** The database, the server and the browser share the machine. */
+const workers = Math.max(1, Math.min(2, availableParallelism() - 1))
+
+export default defineConfig({
+  testDir: 'tests/e2e',
+  outputDir: 'test-results/e2e',
+  forbidOnly: true,
+  fullyParallel: false,
+  workers,
+  timeout: 90_000,
+  expect: { timeout: 15_000 },
+  use: {
+    baseURL: process.env['E2E_URL'] ?? 'http://127.0.0.1:4310',
+    locale: 'en-US',
+    timezoneId: 'America/Los_Angeles',
+    screenshot: 'only-on-failure',
+    trace: 'retain-on-failure',
+    launchOptions: {
+      executablePath: '/usr/bin/chromium',
+      // Debian's Chromium on a machine without a way out: nothing but the page under test
+      args: ['--disable-quic', '--disable-background-networking', '--disable-component-update', '--disable-sync', '--no-first-run'],
+    },
+  },
+  // A spec runs on the desk and on the phone, unless its name says which: *.desk.spec.ts, *.phone.spec.ts.
+  projects: [
+    { name: 'desk', testIgnore: '**/*.phone.spec.ts', use: { viewport: { width: 1440, height: 900 } } },
+    { name: 'phone', testIgnore: '**/*.desk.spec.ts', use: { viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true, deviceScaleFactor: 2 } },
+  ],
+})

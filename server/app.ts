@@ -1,0 +1,56 @@
+import { randomUUID } from 'node:crypto'
+import compression from 'compression'
+import express, { type Express, type RequestHandler } from 'express'
+import { pinoHttp } from 'pino-http'
+import { AppError } from './errors.ts'
+import { handleErrors } from './middleware/handleErrors.ts'
+import { limitPasswords } from './middleware/limitPasswords.ts'
+import { refuseForeign } from './middleware/refuseForeign.ts'
+import { serveClient } from './middleware/serveClient.ts'
+import { useSessions } from './middleware/session.ts'
+import { setHeaders } from './middleware/setHeaders.ts'
+import { API_PAGE_STYLE, renderApiPage } from './routes/apiPage.ts'
+import { mountRoutes } from './routes/mountRoutes.ts'
+import { describeApi } from './routes/openApi.ts'
+import { ROUTES } from './routes/routes.ts'
+import type { Services } from './services/services.ts'
+
+const BODY_LIMIT = '1mb'
+const VERSION = '0.1.0'
+
+/** The whole server without listening. @param clientFolder the built client, or null to serve the API alone. */
+export function createApp(services: Services, clientFolder: string | null): { app: Express; close(): void } {
+  const app = express()
+  const sessions = useSessions(services)
+  app.disable('x-powered-by')
+  app.set('etag', false)
+  app.use(pinoHttp({ logger: services.logger, genReqId: () => randomUUID(), autoLogging: false }))
+  app.use(setHeaders(services.config.publicUrl?.startsWith('https:') ?? false))
+  app.use(compression())
+  app.use('/api', createApi(services, sessions.handlers))
+  if (clientFolder !== null) app.use(serveClient(clientFolder))
+  app.use(handleErrors(services))
+  return { app, close: sessions.close }
+}
+
+function createApi(services: Services, sessionHandlers: RequestHandler[]): express.Router {
+  const api = express.Router()
+  const description = describeApi(ROUTES, VERSION)
+  const page = renderApiPage(description)
+  const limits = limitPasswords(services)
+  api.use((_request, response, next) => {
+    response.set('Cache-Control', 'no-store')
+    next()
+  })
+  api.get('/openapi.json', (_request, response) => void response.json(description))
+  api.get('/docs', (_request, response) => void response.type('html').send(page))
+  api.get('/docs.css', (_request, response) => void response.type('css').send(API_PAGE_STYLE))
+  api.use(refuseForeign)
+  api.use(express.json({ limit: BODY_LIMIT, inflate: true }))
+  api.use(...sessionHandlers)
+  api.use(mountRoutes(ROUTES, services, limits))
+  api.use(() => {
+    throw new AppError('not-found', 'not_found')
+  })
+  return api
+}

@@ -1,0 +1,24 @@
+import type { Role } from '../../shared/contract/session.ts'
+
+/** A signed-in account on one farm, as the database said at the start of this request. */
+export interface FarmActor {
+  accountId: string
+  farmId: string
+  farmName: string
+  /** IANA zone of the farm. */
+  zone: string
+  /** MM-DD. */
+  seasonStart: string
+  role: Role
+  /** Null for a certifier, who is no person of the farm. */
+  personId: string | null
+  personName: string | null
+  /** Seasons that may be read; null for the farm's own people. */
+  seasons: number[] | null
+}
+
+/** The person id of somebody who writes; a certifier never does. @throws {Error} for a certifier. */
+export function personOf(actor: FarmActor): string {
+  if (actor.personId === null) throw new Error('A certifier writes nothing')
+  return actor.personId
+}

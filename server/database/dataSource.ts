@@ -1,0 +1,36 @@
+import 'reflect-metadata'
+import pg from 'pg'
+import { DataSource } from 'typeorm'
+import { CreateHouse1764547200000 } from '../../migrations/1764547200000-CreateHouse.ts'
+import { ENTITIES } from './entities.ts'
+
+const DATE_TYPE = 1082
+/** Civil dates stay 'YYYY-MM-DD': a driver's local midnight would be another day elsewhere. */
+pg.types.setTypeParser(DATE_TYPE, (text) => text)
+
+const common = {
+  type: 'postgres',
+  entities: ENTITIES,
+  installExtensions: false,
+  uuidExtension: 'pgcrypto',
+  logging: false,
+} as const
+
+/**
+ * The app role's data source. Import it in server/database only; everything else goes through `inFarm` or `inHouse`.
+ * @param onFault hears of idle connections that broke; the pool replaces them.
+ */
+export function createAppSource(url: string, poolSize: number, onFault: (error: unknown) => void): DataSource {
+  return new DataSource({ ...common, url, poolSize, poolErrorHandler: onFault, extra: { application_name: 'drenchleaf' } })
+}
+
+/** The owner role's data source, for migrations and rights; one connection, closed after use. */
+export function createOwnerSource(url: string): DataSource {
+  return new DataSource({
+    ...common,
+    url,
+    poolSize: 1,
+    migrations: [CreateHouse1764547200000],
+    migrationsTransactionMode: 'each',
+  })
+}

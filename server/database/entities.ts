@@ -1,0 +1,38 @@
+import { Account } from '../entities/Account.ts'
+import { AccountToken } from '../entities/AccountToken.ts'
+import { ApplicationRecord } from '../entities/ApplicationRecord.ts'
+import { Block } from '../entities/Block.ts'
+import { Farm } from '../entities/Farm.ts'
+import { FarmHead } from '../entities/FarmHead.ts'
+import { Grant } from '../entities/Grant.ts'
+import { JournalEntry } from '../entities/JournalEntry.ts'
+import { Lot } from '../entities/Lot.ts'
+import { LotEntry } from '../entities/LotEntry.ts'
+import { Material } from '../entities/Material.ts'
+import { Person } from '../entities/Person.ts'
+import { RecordComponent } from '../entities/RecordComponent.ts'
+import { RecordLine } from '../entities/RecordLine.ts'
+import { RecordVersion } from '../entities/RecordVersion.ts'
+import { SeasonCounter } from '../entities/SeasonCounter.ts'
+import { Sprayer } from '../entities/Sprayer.ts'
+
+/** Every entity of the house. */
+export const ENTITIES = [
+  Account,
+  AccountToken,
+  ApplicationRecord,
+  Block,
+  Farm,
+  FarmHead,
+  Grant,
+  JournalEntry,
+  Lot,
+  LotEntry,
+  Material,
+  Person,
+  RecordComponent,
+  RecordLine,
+  RecordVersion,
+  SeasonCounter,
+  Sprayer,
+]

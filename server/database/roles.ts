@@ -1,0 +1,27 @@
+/**
+ * What the app role may do with each table. Evidence tables take inserts and nothing else; no table is deleted
+ * from, save the projections of a record, which are rewritten with it, and sessions.
+ */
+export const APP_RIGHTS: Record<string, string> = {
+  accounts: 'SELECT, INSERT, UPDATE',
+  account_tokens: 'SELECT, INSERT, UPDATE',
+  sessions: 'SELECT, INSERT, UPDATE, DELETE',
+  farms: 'SELECT, INSERT, UPDATE',
+  farm_heads: 'SELECT, INSERT, UPDATE',
+  season_counters: 'SELECT, INSERT, UPDATE',
+  people: 'SELECT, INSERT, UPDATE',
+  grants: 'SELECT, INSERT, UPDATE',
+  blocks: 'SELECT, INSERT, UPDATE',
+  materials: 'SELECT, INSERT, UPDATE',
+  lots: 'SELECT, INSERT, UPDATE',
+  lot_entries: 'SELECT, INSERT',
+  sprayers: 'SELECT, INSERT, UPDATE',
+  application_records: 'SELECT, INSERT, UPDATE',
+  record_lines: 'SELECT, INSERT, DELETE',
+  record_components: 'SELECT, INSERT, DELETE',
+  record_versions: 'SELECT, INSERT',
+  journal: 'SELECT, INSERT',
+}
+
+/** Functions the app role may call that look over farm borders; each answers only what its name says. */
+export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'find_check_code(text)']

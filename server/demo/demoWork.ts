@@ -1,0 +1,29 @@
+import type { RecordContentInput } from '../../shared/contract/record.ts'
+
+/** One kind of work that the demo farm repeats: which blocks, what goes in, how it is sized. */
+export interface DemoWork {
+  blocks: string[]
+  method: 'foliar' | 'drench'
+  everyDays: number
+  sprayer: string
+  purpose: string
+  water: NonNullable<RecordContentInput['water']>
+  components: { material: string; basis: NonNullable<RecordContentInput['components']>[number]['basis'] }[]
+  minutes: number
+  by: 'tam' | 'ruan' | 'oda'
+}
+
+const rate = (value: string) => ({ sizedFrom: 'sprayRate', value, unit: 'L/ha', source: 'Rain tank 2' }) as const
+const litres = (value: string) => ({ sizedFrom: 'water', value, unit: 'L', source: 'Rain tank 1' }) as const
+const parts = (n: string) => ({ kind: 'ratio', parts: n }) as const
+
+/** The farm's year in seven kinds of work; amounts are of a size that people really spray and drench. */
+export const DEMO_WORK: DemoWork[] = [
+  { blocks: ['A1', 'A2', 'A3', 'A4', 'A5'], method: 'foliar', everyDays: 13, sprayer: 'M2', purpose: 'Leaf strength before bloom and after', water: rate('425'), components: [{ material: 'nettle', basis: parts('40') }], minutes: 46, by: 'tam' },
+  { blocks: ['P1', 'P2', 'P3'], method: 'foliar', everyDays: 17, sprayer: 'M2', purpose: 'Leaf strength', water: rate('440'), components: [{ material: 'nettle', basis: parts('50') }], minutes: 52, by: 'tam' },
+  { blocks: ['C1', 'C2', 'L1'], method: 'foliar', everyDays: 23, sprayer: 'M2', purpose: 'Firm skins', water: rate('400'), components: [{ material: 'eggshell', basis: parts('500') }], minutes: 41, by: 'ruan' },
+  { blocks: ['S1', 'S2', 'S3'], method: 'foliar', everyDays: 19, sprayer: 'M2', purpose: 'Mildew on young leaves', water: rate('480'), components: [{ material: 'horsetail', basis: parts('30') }], minutes: 25, by: 'oda' },
+  { blocks: ['T1', 'T2'], method: 'drench', everyDays: 9, sprayer: 'D1', purpose: 'Soil life in the tunnel beds', water: litres('320'), components: [{ material: 'leafMould', basis: parts('20') }], minutes: 35, by: 'ruan' },
+  { blocks: ['H1'], method: 'drench', everyDays: 16, sprayer: 'D1', purpose: 'Feed after cutting', water: litres('300'), components: [{ material: 'comfrey', basis: parts('15') }], minutes: 30, by: 'ruan' },
+  { blocks: ['V6'], method: 'foliar', everyDays: 31, sprayer: 'M2', purpose: 'Aphids on shoot tips', water: rate('510'), components: [{ material: 'soap', basis: { kind: 'ratio', parts: '100' } }], minutes: 38, by: 'tam' },
+]

@@ -1,0 +1,123 @@
+import { readFile } from 'node:fs/promises'
+import { join } from 'node:path'
+import type { Feature, FeatureCollection, Polygon } from 'geojson'
+import { v7 as uuidV7 } from 'uuid'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import { seasonOf } from '../../shared/time/seasonOf.ts'
+import { fixedClock } from '../clock.ts'
+import type { FarmActor } from '../database/actor.ts'
+import { Account } from '../entities/Account.ts'
+import { DEMO_FOLDER } from '../projectFolders.ts'
+import { createBlock } from '../services/blocks/createBlock.ts'
+import { createFarm } from '../services/farms/createFarm.ts'
+import { createSprayer } from '../services/farms/sprayers.ts'
+import { hashPassword } from '../services/passwords.ts'
+import type { Services } from '../services/services.ts'
+import { buildBlock } from './buildThings.ts'
+import { makeAccount, makeGrant, makePerson } from './makeAccount.ts'
+import { seedNeighbour } from './seedNeighbour.ts'
+import { seedInputs } from './seedInputs.ts'
+import { seedRecords } from './seedRecords.ts'
+
+const DAY_MS = 86_400_000
+export const DEMO_ZONE = 'America/Los_Angeles'
+/** History begins this long before the demo is opened. */
+const HISTORY_DAYS = 200
+
+const ACCOUNTS = {
+  owner: { email: 'owner@demo.test', name: 'Hesper Quill' },
+  manager: { email: 'manager@demo.test', name: 'Oda Verrill' },
+  applicator: { email: 'applicator@demo.test', name: 'Tam Lisk' },
+  certifier: { email: 'certifier@demo.test', name: 'Mirel Achter' },
+  neighbour: { email: 'neighbour@demo.test', name: 'Corin Vane' },
+}
+type AccountName = keyof typeof ACCOUNTS
+
+export interface Demo {
+  password: string
+  accounts: Record<AccountName, string>
+  farmId: string
+  neighbourFarmId: string
+}
+
+/** Makes the demo farm and its neighbour in an empty database; where they stand already, finds them. */
+export async function seedDemo(services: Services, password: string): Promise<Demo> {
+  const accounts = Object.fromEntries(Object.entries(ACCOUNTS).map(([name, { email }]) => [name, email])) as Demo['accounts']
+  const known = await findDemo(services)
+  if (known) return { password, accounts, ...known }
+  const beginning = fixedClock(new Date(services.clock.now().getTime() - HISTORY_DAYS * DAY_MS).toISOString())
+  const ids = await makeAccounts(services, password, beginning.now())
+  const past = { ...services, clock: beginning }
+  const { farm } = await createFarm(past, ids.owner, { id: uuidV7(), name: 'Wennick Hollow', zone: DEMO_ZONE, seasonStart: '03-01' })
+  const ruanId = await makePeople(services, farm.id, ids, beginning.now())
+  const manager = await actorOf(services, ids.manager, farm.id)
+  const blocks = await seedBlocks(past, manager)
+  const sprayers = await seedSprayers(past, manager)
+  const lots = await seedInputs(services, manager)
+  await seedRecords(services, { manager, applicator: await actorOf(services, ids.applicator, farm.id), ruanId, blocks, sprayers, lots })
+  const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
+  return { password, accounts, farmId: farm.id, neighbourFarmId }
+}
+
+async function findDemo(services: Services): Promise<{ farmId: string; neighbourFarmId: string } | null> {
+  const farmOf = async (email: string): Promise<string | null> => {
+    const account = await services.database.inHouse((manager) => manager.findOneBy(Account, { email }))
+    if (!account) return null
+    const [access] = await services.database.listAccess(account.id, services.clock.now())
+    return access?.farmId ?? null
+  }
+  const farmId = await farmOf(ACCOUNTS.owner.email)
+  const neighbourFarmId = await farmOf(ACCOUNTS.neighbour.email)
+  return farmId !== null && neighbourFarmId !== null ? { farmId, neighbourFarmId } : null
+}
+
+async function makeAccounts(services: Services, password: string, createdAt: Date): Promise<Record<AccountName, string>> {
+  const passwordHash = await hashPassword(password)
+  return services.database.inHouse(async (manager) => {
+    const made: Partial<Record<AccountName, string>> = {}
+    for (const name of Object.keys(ACCOUNTS) as AccountName[]) {
+      made[name] = await makeAccount(manager, { ...ACCOUNTS[name], passwordHash, createdAt })
+    }
+    return made as Record<AccountName, string>
+  })
+}
+
+/** Everybody besides the owner; Ruan has no e-mail, the certifier reads the season that is running. */
+async function makePeople(services: Services, farmId: string, ids: Record<AccountName, string>, createdAt: Date): Promise<string> {
+  const now = services.clock.now()
+  const season = seasonOf(civilDateIn(DEMO_ZONE, now.toISOString()), '03-01')
+  const endsOn = new Date(now.getTime() + 90 * DAY_MS).toISOString().slice(0, 10)
+  return services.database.inFarm({ farmId, seasons: null }, async (manager) => {
+    await makePerson(manager, { farmId, name: ACCOUNTS.manager.name, role: 'manager', accountId: ids.manager, createdAt })
+    await makePerson(manager, { farmId, name: ACCOUNTS.applicator.name, role: 'applicator', accountId: ids.applicator, createdAt })
+    await makeGrant(manager, { farmId, accountId: ids.certifier, seasons: [season], endsOn, createdAt })
+    return makePerson(manager, { farmId, name: 'Ruan Teal', role: 'applicator', accountId: null, createdAt })
+  })
+}
+
+async function actorOf(services: Services, accountId: string, farmId: string): Promise<FarmActor> {
+  const access = await services.database.listAccess(accountId, services.clock.now())
+  const actor = access.find((candidate) => candidate.farmId === farmId)
+  if (!actor) throw new Error('The demo account has no way into the demo farm')
+  return actor
+}
+
+async function seedBlocks(services: Services, actor: FarmActor): Promise<Map<string, string>> {
+  const drawing = JSON.parse(await readFile(join(DEMO_FOLDER, 'demoBlocks.geojson'), 'utf8')) as FeatureCollection<Polygon>
+  const ids = new Map<string, string>()
+  for (const feature of drawing.features as Feature<Polygon, { code: string; name: string; crop: string; variety: string }>[]) {
+    const { code, name, crop, variety } = feature.properties
+    const { block } = await createBlock(services, actor, buildBlock({ code, name, crop: `${crop}, ${variety}`, geometry: { ...feature.geometry } }))
+    ids.set(code, block.id)
+  }
+  return ids
+}
+
+async function seedSprayers(services: Services, actor: FarmActor): Promise<Map<string, string>> {
+  const ids = new Map<string, string>()
+  for (const [code, name, tankL] of [['M2', 'Mist sprayer', '400'], ['D1', 'Drencher', '400'], ['K1', 'Knapsack', '15']] as const) {
+    const { sprayer } = await createSprayer(services, actor, { id: uuidV7(), code, name, tankL })
+    ids.set(code, sprayer.id)
+  }
+  return ids
+}

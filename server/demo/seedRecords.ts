@@ -1,0 +1,92 @@
+import { v7 as uuidV7 } from 'uuid'
+import { createRecordSchema } from '../../shared/contract/record.ts'
+import { fixedClock } from '../clock.ts'
+import type { FarmActor } from '../database/actor.ts'
+import { createRecord } from '../services/records/createRecord.ts'
+import { sealRecord } from '../services/records/sealRecord.ts'
+import type { Services } from '../services/services.ts'
+import { DEMO_WORK, type DemoWork } from './demoWork.ts'
+import type { DemoLots } from './seedInputs.ts'
+
+const DAY_MS = 86_400_000
+const MINUTE_MS = 60_000
+const HISTORY_DAYS = 84
+
+interface Ground {
+  manager: FarmActor
+  applicator: FarmActor
+  ruanId: string
+  blocks: Map<string, string>
+  sprayers: Map<string, string>
+  lots: Map<string, DemoLots>
+}
+
+interface Task {
+  work: DemoWork
+  block: string
+  startedAt: Date
+  /** Hours from the end of the work to the signature. */
+  signedAfterH: number
+  windMs: string
+}
+
+/** Twelve weeks of work up to this morning, one spray begun and not signed, and one that went on in too much wind. */
+export async function seedRecords(services: Services, ground: Ground): Promise<void> {
+  const tasks = DEMO_WORK.flatMap((work, row) => listTasks(work, row, services.clock.now())).sort((a, b) => a.startedAt.getTime() - b.startedAt.getTime())
+  for (const task of tasks) await recordTask(services, ground, task, true)
+  const [apples] = DEMO_WORK
+  if (apples) {
+    const startedAt = new Date(services.clock.now().getTime() - 25 * MINUTE_MS)
+    await recordTask(services, ground, { work: apples, block: 'A2', startedAt, signedAfterH: 0, windMs: '1.6' }, false)
+  }
+}
+
+function listTasks(work: DemoWork, row: number, now: Date): Task[] {
+  const rounds = Math.floor(HISTORY_DAYS / work.everyDays)
+  return Array.from({ length: rounds }, (_, round) =>
+    work.blocks.map((block, place) => {
+      // Work of one round goes from block to block of a morning; rounds end one to six days ago, the tunnels this morning.
+      const daysAgo = round * work.everyDays + (row === 4 ? 0 : 1 + row)
+      const startedAt = new Date(now.getTime() - daysAgo * DAY_MS - (190 - place * (work.minutes + 9)) * MINUTE_MS)
+      const late = row === 2 && round === 1 && place === 0
+      const gusty = work.purpose.startsWith('Aphids') && round === 0
+      return { work, block, startedAt, signedAfterH: late ? 31 : 0.5, windMs: gusty ? '4.4' : (1.4 + ((round * 7 + place * 3) % 16) / 10).toFixed(1) }
+    }),
+  ).flat()
+}
+
+async function recordTask(services: Services, ground: Ground, task: Task, sign: boolean): Promise<void> {
+  const { work, startedAt } = task
+  const endedAt = new Date(startedAt.getTime() + work.minutes * MINUTE_MS)
+  const enteredAt = sign ? new Date(Math.min(endedAt.getTime() + task.signedAfterH * 3_600_000, services.clock.now().getTime())) : startedAt
+  const then = { ...services, clock: fixedClock(enteredAt.toISOString()) }
+  const actor = work.by === 'tam' ? ground.applicator : ground.manager
+  const input = createRecordSchema.parse({
+    id: uuidV7(),
+    method: work.method,
+    lines: [{ blockId: ground.blocks.get(task.block), startedAt: startedAt.toISOString(), endedAt: sign ? endedAt.toISOString() : null }],
+    components: work.components.map(({ material, basis }) => ({ materialId: ground.lots.get(material)?.materialId, lotId: lotAt(ground.lots.get(material), startedAt), basis })),
+    water: work.water,
+    sprayerId: ground.sprayers.get(work.sprayer),
+    weather: {
+      wind: { value: task.windMs, unit: 'ms', kind: 'readHere' },
+      windFrom: 'NW',
+      air: { value: '13.4', unit: 'degC', kind: 'station' },
+      humidity: { value: '78', unit: '%', kind: 'station' },
+    },
+    purpose: work.purpose,
+    doneById: work.by === 'ruan' ? ground.ruanId : null,
+    deviceAt: enteredAt.toISOString(),
+  })
+  const { record } = await createRecord(then, actor, input)
+  if (!sign) return
+  const acknowledged = [{ code: 'record.stop', reason: 'A gust came up in the last rows. Mirel Achter told the same day.' }]
+  const stopped = record.checks.some(({ verdict }) => verdict === 'stop')
+  await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, stopped ? acknowledged : []))
+}
+
+/** The lot in use on a day: the newest that had been received. */
+function lotAt(lots: DemoLots | undefined, day: Date): string | null {
+  const inUse = (lots?.lots ?? []).filter(({ receivedAt }) => receivedAt <= day).sort((a, b) => b.receivedAt.getTime() - a.receivedAt.getTime())
+  return inUse[0]?.id ?? lots?.lots.at(-1)?.id ?? null
+}

@@ -1,0 +1,28 @@
+import { Check, Column, Entity, ForeignKey, PrimaryColumn, Unique } from 'typeorm'
+import type { Boundary } from '../../shared/contract/block.ts'
+import type { Acknowledged } from '../../shared/contract/common.ts'
+
+@Entity({ name: 'blocks' })
+@Unique('blocks_farm_id_code_key', ['farmId', 'code'])
+@ForeignKey('Farm', ['farmId'], ['id'], { name: 'blocks_farm_fkey' })
+@Check('blocks_area_check', `area_m2 > 0 AND area_m2 < 1e12`)
+export class Block {
+  @PrimaryColumn({ name: 'farm_id', type: 'uuid', primaryKeyConstraintName: 'blocks_pkey' }) farmId!: string
+  @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'blocks_pkey' }) id!: string
+  @Column({ type: 'text' }) code!: string
+  @Column({ type: 'text' }) name!: string
+  @Column({ type: 'text', nullable: true }) crop!: string | null
+  @Column({ type: 'jsonb' }) geometry!: Boundary
+  /** Plan area on the WGS84 ellipsoid, square metres; always computed from the boundary. */
+  @Column({ name: 'area_m2', type: 'numeric' }) areaM2!: string
+  /** All rings, metres. */
+  @Column({ name: 'perimeter_m', type: 'numeric' }) perimeterM!: string
+  /** Counts boundary versions. */
+  @Column({ type: 'integer', default: 1 }) version!: number
+  /** Optimistic lock: counts writes. */
+  @Column({ type: 'integer', default: 1 }) revision!: number
+  @Column({ type: 'jsonb', default: [] }) acknowledged!: Acknowledged
+  /** Digest of the command that made it; tells a repeat from other content under the same id. */
+  @Column({ name: 'creation_digest', type: 'text' }) creationDigest!: string
+  @Column({ name: 'created_at', type: 'timestamptz' }) createdAt!: Date
+}

@@ -1,0 +1,19 @@
+import { Check, Column, Entity, ForeignKey, PrimaryColumn, Unique } from 'typeorm'
+
+@Entity({ name: 'sprayers' })
+@Unique('sprayers_farm_id_code_key', ['farmId', 'code'])
+@ForeignKey('Farm', ['farmId'], ['id'], { name: 'sprayers_farm_fkey' })
+@Check('sprayers_tank_check', `tank_l > 0 AND tank_l < 1e7`)
+export class Sprayer {
+  @PrimaryColumn({ name: 'farm_id', type: 'uuid', primaryKeyConstraintName: 'sprayers_pkey' }) farmId!: string
+  @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'sprayers_pkey' }) id!: string
+  @Column({ type: 'text' }) code!: string
+  @Column({ type: 'text' }) name!: string
+  /** Usable tank volume, litres. */
+  @Column({ name: 'tank_l', type: 'numeric' }) tankL!: string
+  /** Optimistic lock: counts writes. */
+  @Column({ type: 'integer', default: 1 }) revision!: number
+  /** Digest of the command that made it; tells a repeat from other content under the same id. */
+  @Column({ name: 'creation_digest', type: 'text' }) creationDigest!: string
+  @Column({ name: 'created_at', type: 'timestamptz' }) createdAt!: Date
+}

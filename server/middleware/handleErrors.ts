@@ -1,0 +1,24 @@
+import type { ErrorRequestHandler } from 'express'
+import { AppError } from '../errors.ts'
+import type { Services } from '../services/services.ts'
+import { WRONG_PASSWORD } from './limitPasswords.ts'
+import { presentProblem, presentUnforeseen } from './presentProblem.ts'
+import { readLanguage } from './readLanguage.ts'
+
+/** Every refusal and fault leaves here as problem JSON; what nobody foresaw is logged once, with its stack. */
+export function handleErrors(services: Services): ErrorRequestHandler {
+  return (error: unknown, request, response, next) => {
+    if (response.headersSent) {
+      services.logger.error({ err: error, requestId: request.id }, 'answer broke off')
+      next(error)
+      return
+    }
+    if (error instanceof AppError && error.code.startsWith('session.wrong')) response.locals[WRONG_PASSWORD] = true
+    const language = readLanguage(request)
+    const requestId = String(request.id)
+    const problem = presentProblem(error, language, requestId)
+    if (!problem) services.logger.error({ err: error, requestId }, 'unforeseen')
+    const answer = problem ?? presentUnforeseen(language, requestId)
+    response.status(answer.status).type('application/problem+json').send(JSON.stringify(answer))
+  }
+}

@@ -1,0 +1,175 @@
+import { addElement, drawArtifact, type Canvas, type Element } from './canvas.ts'
+import { drawAccountLine, drawDoubleRule, drawRule } from './drawRules.ts'
+import { ensureRoom, roomLeft, turnPage, type Flow } from './pageFlow.ts'
+import { RULES, STYLES } from './styles.ts'
+import { drawLines, wrapText, type Line, type Span } from './wrapText.ts'
+
+export interface Column {
+  head: string
+  /** Points, white at its sides included. */
+  width: number
+  align?: 'left' | 'right'
+  /** The columns of an account begin here, behind a double line. */
+  opensAccount?: boolean
+}
+export interface TableRow {
+  cells: readonly (readonly Span[])[]
+  /** A sum: a firm line over it, a double one under it. */
+  isTotal?: boolean
+  /** The first cell is the head of the row. */
+  hasHead?: boolean
+  /** How many columns the first cell's words may run over; the cells under them are empty. */
+  firstSpans?: number
+  /** A firm line over the row. */
+  opensGroup?: boolean
+  /** Stands on the same page as the row after it. */
+  keepsWithNext?: boolean
+  /** Drawn over the cell at this column by readers by eye alone. */
+  mark?: { column: number; draw: (at: { x: number; y: number }) => void }
+}
+export interface Table {
+  x: number
+  columns: readonly Column[]
+  rows: readonly TableRow[]
+  leading: number
+  padding: number
+  /** Whether column heads are drawn; they are in the structure in any case. */
+  showsHeads: boolean
+}
+
+const SIDE = 4.5
+const HEAD_PADDING = { top: 3, bottom: 2.5 }
+
+interface SetRow { row: TableRow; cells: Line[][]; height: number }
+
+/** Draws a table into the flow: rows never split, heads are drawn again on every page. */
+export function drawLedgerTable(flow: Flow, parent: Element, table: Table): void {
+  const { canvas } = flow
+  const rows = table.rows.map((row) => setRow(canvas, table, row))
+  const heads = setHeads(canvas, table)
+  const element = addElement(canvas, parent, 'Table')
+  ensureRoom(flow, headHeight(table, heads) + keptHeight(rows, 0))
+  flow.y += drawHeads(flow, table, { heads, head: addElement(canvas, element, 'THead') })
+  const body = addElement(canvas, element, 'TBody')
+  rows.forEach((set, index) => {
+    const isKept = rows[index - 1]?.row.keepsWithNext === true
+    if (!isKept && keptHeight(rows, index) > roomLeft(flow) && index > 0) {
+      turnPage(flow)
+      flow.y += drawHeads(flow, table, { heads, head: null })
+    }
+    drawRow(flow, table, { set, parent: body })
+  })
+}
+
+/** Height of a table that stays on one page, points. */
+export function ledgerTableHeight(canvas: Canvas, table: Table): number {
+  const rows = table.rows.map((row) => setRow(canvas, table, row))
+  return rows.reduce((sum, { height }) => sum + height, headHeight(table, setHeads(canvas, table)))
+}
+
+/** Height of a row and of those that must stand with it. */
+function keptHeight(rows: readonly SetRow[], from: number): number {
+  let height = 0
+  for (const { row, height: own } of rows.slice(from)) {
+    height += own
+    if (row.keepsWithNext !== true) break
+  }
+  return height
+}
+
+function setRow(canvas: Canvas, table: Table, row: TableRow): SetRow {
+  const cells = row.cells.map((spans, index) => wrapText(canvas, spans, cellBox(table, row, index).width))
+  const lines = Math.max(1, ...cells.map((cell) => cell.length))
+  return { row, cells, height: lines * table.leading + 2 * table.padding + (row.isTotal ? 2.5 : 0) }
+}
+
+function setHeads(canvas: Canvas, table: Table): Line[][] {
+  return table.columns.map(({ head }, index) =>
+    wrapText(canvas, [{ text: head, style: STYLES.columnHead }], innerBox(table, index).width))
+}
+
+function headHeight({ showsHeads }: Table, heads: Line[][]): number {
+  if (!showsHeads) return 0
+  return Math.max(...heads.map((lines) => lines.length)) * STYLES.columnHead.leading + HEAD_PADDING.top + HEAD_PADDING.bottom
+}
+
+/** Where a column's words stand: no white outside the first and the last. */
+function innerBox({ x, columns }: Table, index: number): { x: number; width: number } {
+  const left = columns.slice(0, index).reduce((sum, { width }) => sum + width, x)
+  const width = columns[index]?.width ?? 0
+  const before = index === 0 ? 0 : SIDE
+  const after = index === columns.length - 1 ? 0 : SIDE
+  return { x: left + before, width: width - before - after }
+}
+
+function cellBox(table: Table, { firstSpans = 1 }: TableRow, index: number): { x: number; width: number } {
+  const box = innerBox(table, index)
+  if (index > 0) return box
+  const last = innerBox(table, firstSpans - 1)
+  return { x: box.x, width: last.x + last.width - box.x }
+}
+
+function tableWidth({ columns }: Table): number {
+  return columns.reduce((sum, { width }) => sum + width, 0)
+}
+
+/** Draws column heads; without an element they are the repetition that readers by ear are spared. */
+function drawHeads(flow: Flow, table: Table, { heads, head }: { heads: Line[][]; head: Element | null }): number {
+  const { canvas, y } = flow
+  const height = headHeight(table, heads)
+  const draw = (index: number): void => {
+    const lines = heads[index] ?? []
+    const top = y + height - HEAD_PADDING.bottom - lines.length * STYLES.columnHead.leading
+    drawLines(canvas, lines, { ...innerBox(table, index), y: top, leading: STYLES.columnHead.leading, align: table.columns[index]?.align ?? 'left' })
+  }
+  const indices = table.columns.map((_column, index) => index)
+  if (head) {
+    const row = addElement(canvas, head, 'TR')
+    for (const index of indices) {
+      const name = table.columns[index]?.head ?? ''
+      addElement(canvas, row, 'TH', table.showsHeads ? () => draw(index) : undefined, {
+        scope: 'Column', ...(!table.showsHeads && { actual: name }),
+      })
+    }
+  } else if (table.showsHeads) {
+    drawArtifact(canvas, () => indices.forEach(draw), 'Pagination')
+  }
+  if (!table.showsHeads) return 0
+  drawAccountLines(canvas, table, { top: y, bottom: y + height })
+  drawRule(canvas, { x: table.x, y: y + height, width: tableWidth(table) }, 0.6)
+  return height
+}
+
+function drawRow(flow: Flow, table: Table, { set, parent }: { set: SetRow; parent: Element }): void {
+  const { canvas, y } = flow
+  const { row, cells, height } = set
+  const element = addElement(canvas, parent, 'TR')
+  cells.forEach((lines, index) => {
+    const isHead = index === 0 && row.hasHead === true
+    const hasWords = lines.some(({ spans }) => spans.length > 0)
+    const draw = (): void => drawLines(canvas, lines, {
+      ...cellBox(table, row, index), y: y + table.padding, leading: table.leading, align: table.columns[index]?.align ?? 'left',
+    })
+    addElement(canvas, element, isHead ? 'TH' : 'TD', hasWords ? draw : undefined, isHead ? { scope: 'Row' } : {})
+  })
+  const { mark } = row
+  if (mark) drawArtifact(canvas, () => mark.draw({ x: innerBox(table, mark.column).x, y: y + table.padding }))
+  drawAccountLines(canvas, table, { top: y, bottom: y + height - (row.isTotal ? 2.5 : 0) })
+  drawRowRules(canvas, table, { row, top: y, bottom: y + height })
+  flow.y += height
+}
+
+function drawRowRules(canvas: Canvas, table: Table, { row, top, bottom }: { row: TableRow; top: number; bottom: number }): void {
+  const stretch = { x: table.x, width: tableWidth(table) }
+  if (row.opensGroup || row.isTotal) drawRule(canvas, { ...stretch, y: top }, 0.6)
+  if (row.isTotal) drawDoubleRule(canvas, { ...stretch, y: bottom - 2.5 }, [0.7, 0.7])
+  else drawRule(canvas, { ...stretch, y: bottom }, 0.4, RULES.hair)
+}
+
+function drawAccountLines(canvas: Canvas, { x, columns }: Table, span: { top: number; bottom: number }): void {
+  let left = x
+  for (const { width, opensAccount } of columns) {
+    if (opensAccount) drawAccountLine(canvas, left, span)
+    left += width
+  }
+}

@@ -1,0 +1,100 @@
+import type { Canvas, TextStyle } from './canvas.ts'
+import { drawText, measureText } from './setText.ts'
+import { toLetters } from './splitRuns.ts'
+
+/** Words set in one style. */
+export interface Span { text: string; style: TextStyle }
+export interface Line { spans: Span[]; width: number }
+
+/** Words of several styles on lines no wider than `width` points; a word wider than that is cut between letters. */
+export function wrapText(canvas: Canvas, spans: readonly Span[], width: number): Line[] {
+  const lines: Line[] = [{ spans: [], width: 0 }]
+  for (const word of toWords(spans)) {
+    if (word.breaksLine) {
+      lines.push({ spans: [], width: 0 })
+      continue
+    }
+    const bare = word.spans.map(({ text, style }) => ({ text: text.replace(/ +$/, ''), style }))
+    const line = lines.at(-1)
+    if (line && line.width + widthOf(canvas, bare) > width && line.spans.length > 0) lines.push({ spans: [], width: 0 })
+    if (widthOf(canvas, bare) > width) cutWord(canvas, word.spans, { lines, width })
+    else appendWord(canvas, lines, word.spans)
+  }
+  return lines.map((line) => trimLine(canvas, line))
+}
+
+/** Height of lines, points. */
+export function heightOf(lines: readonly Line[], leading: number): number {
+  return lines.length * leading
+}
+
+export interface LineBox { x: number; y: number; width: number; leading: number; align?: 'left' | 'right' }
+
+/** Draws lines one under the other. */
+export function drawLines(canvas: Canvas, lines: readonly Line[], box: LineBox): void {
+  lines.forEach((line, index) => {
+    let x = box.align === 'right' ? box.x + box.width - line.width : box.x
+    for (const { text, style } of line.spans) {
+      drawText(canvas, text, { x, y: box.y + index * box.leading }, { ...style, leading: box.leading })
+      x += measureText(canvas, text, style)
+    }
+  })
+}
+
+interface Word { spans: Span[]; breaksLine: boolean }
+
+/** Spans cut where a line may break; a word may run over several spans. */
+function toWords(spans: readonly Span[]): Word[] {
+  const words: Word[] = []
+  let isOpen = false
+  for (const { text, style } of spans) {
+    for (const piece of text.match(/\r\n|[\n\r\u2028\u2029]|[^ \n\r\u2028\u2029]+ *| +/gu) ?? []) {
+      const breaksLine = /^[\r\n\u2028\u2029]/.test(piece)
+      const last = words.at(-1)
+      if (isOpen && last && !breaksLine) last.spans.push({ text: piece, style })
+      else words.push({ spans: breaksLine ? [] : [{ text: piece, style }], breaksLine })
+      isOpen = !breaksLine && !piece.endsWith(' ')
+    }
+  }
+  return words
+}
+
+function widthOf(canvas: Canvas, spans: readonly Span[]): number {
+  return spans.reduce((sum, { text, style }) => sum + measureText(canvas, text, style), 0)
+}
+
+function appendWord(canvas: Canvas, lines: Line[], spans: readonly Span[]): void {
+  const line = lines.at(-1)
+  if (!line) return
+  line.width += widthOf(canvas, spans)
+  for (const span of spans) {
+    const last = line.spans.at(-1)
+    if (last && last.style === span.style) last.text += span.text
+    else line.spans.push({ ...span })
+  }
+}
+
+function cutWord(canvas: Canvas, spans: readonly Span[], { lines, width }: { lines: Line[]; width: number }): void {
+  for (const { text, style } of spans) {
+    let piece = ''
+    let room = width - (lines.at(-1)?.width ?? 0)
+    for (const letter of toLetters(text)) {
+      const letterWidth = measureText(canvas, letter, style)
+      if (letterWidth > room && room < width) {
+        appendWord(canvas, lines, piece === '' ? [] : [{ text: piece, style }])
+        lines.push({ spans: [], width: 0 })
+        piece = ''
+        room = width
+      }
+      piece += letter
+      room -= letterWidth
+    }
+    if (piece !== '') appendWord(canvas, lines, [{ text: piece, style }])
+  }
+}
+
+function trimLine(canvas: Canvas, { spans }: Line): Line {
+  const last = spans.at(-1)
+  if (last) last.text = last.text.replace(/ +$/, '')
+  return { spans, width: widthOf(canvas, spans) }
+}

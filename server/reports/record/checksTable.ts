@@ -1,0 +1,75 @@
+import { RESTS, VERDICTS, type Check } from '../../../shared/contract/record.ts'
+import { renderMessage } from '../../../shared/messages/renderMessage.ts'
+import type { Canvas, TextStyle } from '../parts/canvas.ts'
+import { drawVerdictMark } from '../parts/drawMarks.ts'
+import type { Table, TableRow } from '../parts/ledgerTable.ts'
+import { measureText } from '../parts/setText.ts'
+import { STYLES } from '../parts/styles.ts'
+import type { ReportWords } from './reportWords.ts'
+
+/** Checks by what they rest on, the worst first in each; equal ones keep their order. */
+export function groupChecks(checks: readonly Check[]): Check[] {
+  return [...checks].sort((a, b) =>
+    RESTS.indexOf(a.rests) - RESTS.indexOf(b.rests) || VERDICTS.indexOf(a.verdict) - VERDICTS.indexOf(b.verdict))
+}
+
+/** What stands beside the head: stops, and what is not known; never how many passed. */
+export function checksTally(checks: readonly Check[], { say }: ReportWords): string {
+  const stops = checks.filter(({ verdict }) => verdict === 'stop').length
+  const unknown = checks.filter(({ verdict }) => verdict === 'unknown').length
+  if (stops === 0) return unknown === 0 ? say('checks.noStop') : say('checks.noStopUnknown', { unknown })
+  const stop = stops === 1 ? say('checks.oneStop') : say('checks.stops', { stops })
+  return unknown === 0 ? stop : say('checks.stopUnknown', { stop, unknown })
+}
+
+interface ChecksInput { canvas: Canvas; checks: readonly Check[]; words: ReportWords; place: { x: number; width: number } }
+
+/** The table of checks as they stood at signing. */
+export function checksTable({ canvas, checks, words, place }: ChecksInput): Table {
+  const { say } = words
+  const grouped = groupChecks(checks)
+  const widest = (ids: string[], style: TextStyle): number => Math.max(...ids.map((id) => measureText(canvas, say(id), style)))
+  const widths = {
+    rests: widest(RESTS.map((rests) => `checks.rests.${rests}`), STYLES.smallBold) + 7,
+    mark: 14,
+    verdict: widest(VERDICTS.map((verdict) => `checks.verdict.${verdict}`), STYLES.smallSemibold) + 10,
+    title: 76, figure: 62, source: 88,
+  }
+  const text = place.width - Object.values(widths).reduce((sum, width) => sum + width, 0)
+  const rows = grouped.map((check, index): TableRow => {
+    const opensGroup = check.rests !== grouped[index - 1]?.rests
+    const isSecond = !opensGroup && check.rests !== grouped[index - 2]?.rests
+    return {
+      opensGroup: opensGroup && index > 0,
+      keepsWithNext: opensGroup && !isSecond && grouped[index + 1]?.rests === check.rests,
+      mark: { column: 1, draw: ({ x, y }) => drawVerdictMark(canvas, check.verdict, { x, y: y + 0.8, size: 9 }) },
+      cells: cellsOf(check, { words, showsRests: opensGroup }),
+    }
+  })
+  return {
+    x: place.x, rows, leading: STYLES.small.leading, padding: 2.7, showsHeads: false,
+    columns: [
+      { head: say('checks.column.rests'), width: widths.rests },
+      { head: '', width: widths.mark },
+      { head: say('checks.column.verdict'), width: widths.verdict },
+      { head: say('checks.column.title'), width: widths.title },
+      { head: say('checks.column.figure'), width: widths.figure },
+      { head: say('checks.column.text'), width: text },
+      { head: say('checks.column.source'), width: widths.source },
+    ],
+  }
+}
+
+function cellsOf(check: Check, { words, showsRests }: { words: ReportWords; showsRests: boolean }): TableRow['cells'] {
+  const { say, language } = words
+  const { title, figure, text, source } = check
+  return [
+    showsRests ? [{ text: say(`checks.rests.${check.rests}`), style: STYLES.smallBold }] : [],
+    [],
+    [{ text: say(`checks.verdict.${check.verdict}`), style: STYLES.smallSemibold }],
+    [{ text: renderMessage(language, title), style: STYLES.small }],
+    figure ? [{ text: renderMessage(language, figure), style: STYLES.smallSemibold }] : [],
+    [{ text: renderMessage(language, text), style: STYLES.small }],
+    source ? [{ text: say('checks.source', { source: renderMessage(language, source) }), style: STYLES.note }] : [],
+  ]
+}

@@ -1,0 +1,147 @@
+import { drawBlockPlan, planHeight } from '../parts/blockPlan.ts'
+import { addElement, type Canvas, type Element } from '../parts/canvas.ts'
+import { drawFacts, factsHeight, type FactsBox } from '../parts/factsList.ts'
+import { drawLedgerTable, ledgerTableHeight, type Table } from '../parts/ledgerTable.ts'
+import { ensureRoom, FRAME, FRAME_WIDTH, roomLeft, turnPage, type Flow } from '../parts/pageFlow.ts'
+import { drawSectionHead, sectionHeadHeight } from '../parts/sectionHead.ts'
+import { STYLES } from '../parts/styles.ts'
+import { drawLines, wrapText, type Line } from '../parts/wrapText.ts'
+import type { RecordReportData } from '../recordReportData.ts'
+import { blockLinesTable, LINES_BESIDE_PLAN } from './blockLines.ts'
+import { checksTable, checksTally } from './checksTable.ts'
+import { peopleFacts, placeFacts, weatherFacts } from './factsOfRecord.ts'
+import { mixAside, mixTable } from './mixTable.ts'
+import { planOf } from './planOf.ts'
+import { reasonsTable } from './reasonsTable.ts'
+import type { RecordFigures } from './recordFigures.ts'
+import { plain, type ReportWords } from './reportWords.ts'
+
+/** What the parts of the record's PDF are drawn from and into. */
+export interface Page {
+  canvas: Canvas
+  flow: Flow
+  part: Element
+  data: RecordReportData
+  words: ReportWords
+  figures: RecordFigures
+}
+
+const PLAN = { width: 207, height: 151.5 }
+const GAP = 18
+const WHOLE = { x: FRAME.left, width: FRAME_WIDTH }
+
+/** Facts and block lines at the left, the plan at the right. */
+export function drawPlace(page: Page): void {
+  const { canvas, flow, part, data, words, figures } = page
+  const frame = { x: FRAME.right - PLAN.width, y: flow.y + 0.5, ...PLAN }
+  const place = { x: FRAME.left, width: FRAME_WIDTH - PLAN.width - GAP }
+  const top = flow.y
+  const isWide = data.signed.content.lines.length > LINES_BESIDE_PLAN
+  drawBlockPlan(canvas, part, { plan: planOf(data, words), frame })
+  drawFacts(flow, part, { facts: placeFacts(data, words), box: { ...place, labelWidth: 69 } })
+  if (!isWide) {
+    flow.y += 4
+    drawLedgerTable(flow, part, blockLinesTable({ signed: data.signed, figures, words, isWide, place }))
+  }
+  if (flow.pages === 1) flow.y = Math.max(flow.y, top + planHeight(PLAN.height))
+  if (!isWide) return
+  startSection(page, words.say('lines.title'), { needs: 70 })
+  drawLedgerTable(flow, part, blockLinesTable({ signed: data.signed, figures, words, isWide, place: WHOLE }))
+}
+
+export function drawMix(page: Page): void {
+  const { flow, part, data, words, figures } = page
+  const table = mixTable({ signed: data.signed, figures, words, place: WHOLE })
+  startSection(page, words.say('mix.title'), { aside: mixAside(data.signed, words), needs: 60 })
+  drawLedgerTable(flow, part, table)
+  if (!figures.agrees) drawParagraph(page, words.say('mix.differs'))
+}
+
+/** Sprayer and weather at the left, people and times at the right. */
+export function drawWeatherAndPeople(page: Page): void {
+  const { canvas, flow, part, data, words } = page
+  const left = { x: FRAME.left, width: (FRAME_WIDTH - GAP) * 0.46 }
+  const right = { x: FRAME.left + left.width + GAP, width: FRAME_WIDTH - GAP - left.width }
+  const halves = [
+    { place: left, title: words.say('weather.title'), facts: weatherFacts(data, words), labelWidth: 54 },
+    { place: right, title: words.say('people.title'), facts: peopleFacts(data, words), labelWidth: words.language === 'es' ? 82 : 64 },
+  ].map((half) => ({ ...half, box: { ...half.place, labelWidth: half.labelWidth } satisfies FactsBox }))
+  const headHeight = sectionHeadHeight(canvas, { title: '', y: 0, ...WHOLE })
+  const bodyHeight = Math.max(...halves.map(({ facts, box }) => factsHeight(canvas, facts, box)))
+  flow.y += SECTION_GAP
+  ensureRoom(flow, headHeight + bodyHeight)
+  const top = flow.y
+  for (const { place, title, facts, box } of halves) {
+    drawSectionHead(canvas, part, { title, y: top, ...place })
+    flow.y = top + headHeight
+    drawFacts(flow, part, { facts, box })
+  }
+  flow.y = top + headHeight + bodyHeight
+}
+
+export function drawChecks(page: Page): void {
+  const { canvas, flow, part, data, words } = page
+  const { checks } = data.signed
+  const table = checksTable({ canvas, checks, words, place: WHOLE })
+  const aside = checks.length === 0 ? words.say('checks.none') : checksTally(checks, words)
+  startSection(page, words.say('checks.title'), { aside, needs: 40 })
+  if (checks.length > 0) drawLedgerTable(flow, part, table)
+}
+
+/** Why it was signed although something spoke against it; nothing where no reason was asked for. */
+export function drawReasons(page: Page): void {
+  const { flow, part, data, words } = page
+  if (data.signed.acknowledged.length === 0) return
+  const table = reasonsTable(data.signed, { words, place: WHOLE })
+  startSection(page, words.say('reasons.title'), { needs: firstRowsHeight(page.canvas, table) })
+  drawLedgerTable(flow, part, table)
+}
+
+export function drawNotes(page: Page): void {
+  const { data, words } = page
+  const { notes } = data.signed.content
+  if (notes !== null) {
+    startSection(page, words.say('notes.title'), { needs: 3 * STYLES.body.leading })
+    for (const paragraph of notes.split(/\r\n|[\n\r\u2028\u2029]/)) drawParagraph(page, paragraph)
+  }
+  if (page.canvas.hasReplaced) {
+    page.flow.y += 6
+    drawParagraph(page, words.say('foot.replaced'))
+  }
+}
+
+const SECTION_GAP = 9
+
+/** Turns the page unless the head and what it `needs` under it, points, fit on this one; draws the head. */
+function startSection({ canvas, flow, part }: Page, title: string, { aside = '', needs }: { aside?: string; needs: number }): void {
+  flow.y += SECTION_GAP
+  const head = { title, aside, ...WHOLE }
+  const height = sectionHeadHeight(canvas, { ...head, y: 0 })
+  ensureRoom(flow, height + needs)
+  drawSectionHead(canvas, part, { ...head, y: flow.y })
+  flow.y += height
+}
+
+function firstRowsHeight(canvas: Canvas, table: Table): number {
+  return ledgerTableHeight(canvas, { ...table, rows: table.rows.slice(0, 1) })
+}
+
+/** Words over the whole width that run on over pages, line by line. */
+function drawParagraph({ canvas, flow, part }: Page, text: string): void {
+  const { leading } = STYLES.body
+  let lines = wrapText(canvas, plain(text), FRAME_WIDTH)
+  const element = addElement(canvas, part, 'P')
+  flow.y += 2
+  while (lines.length > 0) {
+    const fitting = Math.floor(roomLeft(flow) / leading)
+    if (fitting < 1) {
+      turnPage(flow)
+      continue
+    }
+    const now: Line[] = lines.slice(0, fitting)
+    const { y } = flow
+    element.add(() => drawLines(canvas, now, { ...WHOLE, y, leading }))
+    flow.y += now.length * leading
+    lines = lines.slice(fitting)
+  }
+}

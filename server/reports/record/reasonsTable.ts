@@ -1,0 +1,20 @@
+import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
+import { renderMessage } from '../../../shared/messages/renderMessage.ts'
+import type { Table } from '../parts/ledgerTable.ts'
+import { STYLES } from '../parts/styles.ts'
+import { bold, plain, type ReportWords } from './reportWords.ts'
+
+/** What spoke against signing, each with the reason given. */
+export function reasonsTable(
+  { acknowledged, checks }: SignedRecord, { words, place }: { words: ReportWords; place: { x: number; width: number } },
+): Table {
+  const { say, language } = words
+  return {
+    x: place.x, leading: STYLES.body.leading, padding: 2.4, showsHeads: true,
+    columns: [{ head: say('reasons.what'), width: 150 }, { head: say('reasons.why'), width: place.width - 150 }],
+    rows: acknowledged.map(({ code, reason }) => {
+      const check = checks.find((candidate) => candidate.code === code)
+      return { hasHead: true, cells: [bold(check ? renderMessage(language, check.title) : code), plain(reason)] }
+    }),
+  }
+}

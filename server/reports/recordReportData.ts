@@ -1,0 +1,34 @@
+import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
+import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
+import type { Language } from '../../shared/messages/translate.ts'
+
+/** Something of the ground near a block that the plan shows for orientation. */
+export interface PlanSite {
+  kind: string
+  name: string
+  geometry:
+    | Boundary
+    | { type: 'LineString'; coordinates: Position[] }
+    | { type: 'MultiLineString'; coordinates: Position[][] }
+    | { type: 'Point'; coordinates: Position }
+}
+
+/** All that the PDF of a record shows: plain data, no clock, no database. */
+export interface RecordReportData {
+  signed: SignedRecord
+  /** SHA-256 of the signed text, hex. */
+  digest: string
+  names: { doneBy: string; enteredBy: string; signedBy: string }
+  neighbours: readonly { code: string; geometry: Boundary }[]
+  sites: readonly PlanSite[]
+  state: 'signed' | 'withdrawn'
+  /** RFC 3339 instant. */
+  printedAt: string
+  /** Where the QR code leads. */
+  checkUrl: string
+  /** The address of the check page as a person types it. */
+  checkPage: string
+  /** Who runs the server: the farm itself, or a name. */
+  runBy: string
+  language: Language
+}

@@ -1,0 +1,23 @@
+import type { Writable } from 'node:stream'
+import { pipeline } from 'node:stream/promises'
+import { gatherChunks } from './parts/gatherChunks.ts'
+import { recordReport } from './recordReport.ts'
+import type { RecordReportData } from './recordReportData.ts'
+
+/** Everything the server can print; a new document is a new kind. */
+export interface ReportJob { kind: 'record'; data: RecordReportData }
+
+/**
+ * Draws a document into a stream; resolves when the stream has taken all of it.
+ * @throws what the drawing or the stream throws; the stream is then destroyed.
+ */
+export async function renderReport(job: ReportJob, stream: Writable): Promise<void> {
+  const chunks = gatherChunks()
+  const taken = pipeline(chunks, stream)
+  try {
+    recordReport(job.data, chunks)
+  } catch (error) {
+    chunks.destroy(error instanceof Error ? error : new Error(String(error)))
+  }
+  await taken
+}

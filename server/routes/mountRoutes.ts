@@ -1,0 +1,73 @@
+import { Router, type Request, type RequestHandler, type Response } from 'express'
+import type { z } from 'zod'
+import { AppError, forbidden, notFound } from '../errors.ts'
+import type { FarmActor } from '../database/actor.ts'
+import { readLanguage } from '../middleware/readLanguage.ts'
+import type { Services } from '../services/services.ts'
+import type { Route } from './defineRoute.ts'
+
+/**
+ * The router of all routes. The order of refusals is the same everywhere: no session 401, not your world 404,
+ * not your job 403, then what was sent 422. A method that a path does not have is 405.
+ */
+export function mountRoutes(routes: Route[], services: Services, limitPasswords: RequestHandler[]): Router {
+  const router = Router({ caseSensitive: true })
+  for (const route of routes) {
+    const guards = route.guardsPassword ? limitPasswords : []
+    router[route.method](route.path, ...guards, (request: Request, response: Response) => serve(route, services, request, response))
+  }
+  for (const path of new Set(routes.map((route) => route.path))) {
+    router.all(path, (_request: Request, response: Response) => {
+      const methods = routes.filter((route) => route.path === path).map((route) => route.method.toUpperCase())
+      response.set('Allow', methods.join(', '))
+      throw new AppError('wrong-method', 'wrong_method')
+    })
+  }
+  return router
+}
+
+async function serve(route: Route, services: Services, request: Request, response: Response): Promise<void> {
+  const accountId = request.user?.accountId ?? ''
+  if (route.roles !== 'everybody' && accountId === '') throw new AppError('unauthenticated', 'unauthenticated')
+  const params = parsePath(route.params, request.params)
+  const actor = Array.isArray(route.roles) ? await authorise(route, services, accountId, params) : null
+  const answer = await route.run({
+    params,
+    query: route.query ? route.query.parse(request.query) : refuseQuery(request.query),
+    body: route.body ? route.body.parse(request.body ?? {}) : {},
+    actor,
+    accountId,
+    language: readLanguage(request),
+    services,
+    request,
+    response,
+  })
+  if (answer === 'sent') return
+  if (services.checkAnswers) route.answer.parse(answer.body)
+  response.status(answer.status ?? 200)
+  if (answer.body === null) response.end()
+  else response.json(answer.body)
+}
+
+/** A path that names nothing readable names nothing that is there. */
+function parsePath(schema: z.ZodType | undefined, params: unknown): unknown {
+  if (!schema) return {}
+  const result = schema.safeParse(params)
+  if (!result.success) throw notFound()
+  return result.data
+}
+
+function refuseQuery(query: object): Record<string, never> {
+  const errors = Object.keys(query).map((path) => ({ path, code: 'unknown_field' }))
+  if (errors.length > 0) throw new AppError('invalid-input', 'invalid', { errors })
+  return {}
+}
+
+async function authorise(route: Route, services: Services, accountId: string, params: unknown): Promise<FarmActor> {
+  const { farmId } = params as { farmId: string }
+  const access = await services.database.listAccess(accountId, services.clock.now())
+  const actor = access.find((candidate) => candidate.farmId === farmId.toLowerCase())
+  if (!actor) throw notFound()
+  if (!route.roles.includes(actor.role)) throw forbidden()
+  return actor
+}

@@ -1,0 +1,57 @@
+import { z } from 'zod'
+import { checkCodeAnswerSchema } from '../../shared/contract/record.ts'
+import { passwordSchema } from '../../shared/contract/session.ts'
+import { lineText } from '../../shared/contract/text.ts'
+import { notFound } from '../errors.ts'
+import { findCheckCode } from '../services/findCheckCode.ts'
+import { acceptWelcome, readWelcome } from '../services/welcome.ts'
+import { defineRoute } from './defineRoute.ts'
+
+const tileParams = z.strictObject({
+  z: z.coerce.number().int().min(0).max(22),
+  x: z.coerce.number().int().min(0).max(2 ** 22 - 1),
+  y: z.coerce.number().int().min(0).max(2 ** 22 - 1),
+})
+const DAY_S = 86_400
+
+export const openRoutes = [
+  defineRoute({
+    method: 'get', path: '/health', summary: 'Whether the server serves.', roles: 'everybody',
+    answer: z.object({ status: z.literal('ok') }),
+    run: async () => ({ body: { status: 'ok' as const } }),
+  }),
+  defineRoute({
+    method: 'get', path: '/config', summary: 'What this server offers to its pages.', roles: 'everybody',
+    answer: z.object({ tiles: z.boolean(), demo: z.boolean() }),
+    run: async ({ services }) => ({ body: { tiles: services.tiles !== null, demo: services.config.demo !== null } }),
+  }),
+  defineRoute({
+    method: 'get', path: '/check/:code', summary: 'Whether a signed entry stands under a check code.', roles: 'everybody',
+    params: z.strictObject({ code: z.string().max(80) }), answer: checkCodeAnswerSchema,
+    run: async ({ services, params }) => ({ body: await findCheckCode(services, params.code) }),
+  }),
+  defineRoute({
+    method: 'get', path: '/welcome/:token', summary: 'Whom a one-time link is for.', roles: 'everybody',
+    params: z.strictObject({ token: z.string().max(80) }), answer: z.object({ email: z.string() }),
+    run: async ({ services, params }) => ({ body: await readWelcome(services, params.token) }),
+  }),
+  defineRoute({
+    method: 'post', path: '/welcome', summary: 'Spend a one-time link: take a name and a password.', roles: 'everybody',
+    guardsPassword: true, body: z.strictObject({ token: z.string().max(80), name: lineText(120), password: passwordSchema }),
+    answer: z.null(),
+    run: async ({ services, body }) => {
+      await acceptWelcome(services, body)
+      return { status: 204, body: null }
+    },
+  }),
+  defineRoute({
+    method: 'get', path: '/tiles/:z/:x/:y', summary: 'A square of the ground plan.', roles: 'account',
+    params: tileParams, answer: z.null(), contentType: 'image/svg+xml',
+    run: async ({ services, params, response }) => {
+      if (!services.tiles || Math.max(params.x, params.y) >= 2 ** params.z) throw notFound()
+      const tile = await services.tiles.read(params.z, params.x, params.y)
+      response.type(tile.contentType).set('Cache-Control', `private, max-age=${DAY_S}`).send(tile.bytes)
+      return 'sent'
+    },
+  }),
+]

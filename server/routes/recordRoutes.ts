@@ -1,0 +1,63 @@
+import { z } from 'zod'
+import { farmParamsSchema, idSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
+import { createRecordSchema, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
+import { collectRecordReport } from '../services/records/collectRecordReport.ts'
+import { createRecord } from '../services/records/createRecord.ts'
+import { getRecord, listRecords, listRecordVersions } from '../services/records/readRecords.ts'
+import { signRecord } from '../services/records/signRecord.ts'
+import { updateRecord } from '../services/records/updateRecord.ts'
+import { defineRoute } from './defineRoute.ts'
+import { EVERY_ROLE, FARM_PEOPLE } from './roleGroups.ts'
+import { sendReport } from './sendReport.ts'
+
+const versionsSchema = z.object({
+  items: z.array(z.object({ version: z.number().int(), digest: z.string(), canonicalText: z.string(), signed: signedRecordSchema })),
+  next: z.null(),
+})
+
+export const recordRoutes = [
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/records', summary: 'The register, newest work first.', roles: EVERY_ROLE,
+    params: farmParamsSchema, query: pageQuerySchema.extend({ block: idSchema.optional() }), answer: pageOf(registerRowSchema),
+    run: async ({ services, actor, query }) => ({ body: await listRecords(services, actor, query) }),
+  }),
+  defineRoute({
+    method: 'post', path: '/farms/:farmId/records', summary: 'Take in a draft or a started record.', roles: FARM_PEOPLE,
+    params: farmParamsSchema, body: createRecordSchema, answer: recordSchema,
+    run: async ({ services, actor, body }) => {
+      const { made, record } = await createRecord(services, actor, body)
+      return { status: made ? 201 : 200, body: record }
+    },
+  }),
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/records/:id', summary: 'One record with its figures and checks.', roles: EVERY_ROLE,
+    params: thingParamsSchema, answer: recordSchema,
+    run: async ({ services, actor, params }) => ({ body: await getRecord(services, actor, params.id) }),
+  }),
+  defineRoute({
+    method: 'put', path: '/farms/:farmId/records/:id', summary: 'Write an unsigned record anew.', roles: FARM_PEOPLE,
+    params: thingParamsSchema, body: updateRecordSchema, answer: recordSchema,
+    run: async ({ services, actor, params, body }) => ({ body: await updateRecord(services, actor, params.id, body) }),
+  }),
+  defineRoute({
+    method: 'post', path: '/farms/:farmId/records/:id/sign', summary: 'Sign a record with the password: it gets its number, its lots are drawn down.', roles: FARM_PEOPLE,
+    guardsPassword: true, params: thingParamsSchema, body: signRecordSchema, answer: recordSchema,
+    run: async ({ services, actor, params, body }) => ({ body: await signRecord(services, actor, params.id, body) }),
+  }),
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/records/:id/versions', summary: 'Signed versions with the text their digests are over.', roles: EVERY_ROLE,
+    params: thingParamsSchema, answer: versionsSchema,
+    run: async ({ services, actor, params }) => ({ body: await listRecordVersions(services, actor, params.id) }),
+  }),
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/records/:id/pdf', summary: 'The application record as PDF.', roles: EVERY_ROLE,
+    params: thingParamsSchema, query: z.strictObject({ language: z.enum(['en', 'es']).optional() }), answer: z.null(), contentType: 'application/pdf',
+    run: async (call) => {
+      const language = call.query.language ?? call.language
+      const data = await collectRecordReport(call.services, call.actor, call.params.id, language)
+      await sendReport(call, { kind: 'record', data }, `record-${data.signed.record.number}.pdf`)
+      return 'sent'
+    },
+  }),
+]

@@ -1,0 +1,24 @@
+import { v7 as uuidV7 } from 'uuid'
+import type { EntityManager } from 'typeorm'
+import type { FarmActor } from '../database/actor.ts'
+import { JournalEntry } from '../entities/JournalEntry.ts'
+import type { Services } from './services.ts'
+
+/** Writes who did what into the farm's journal, in the transaction of the deed itself. */
+export async function appendJournal(
+  services: Pick<Services, 'clock'>,
+  manager: EntityManager,
+  actor: Pick<FarmActor, 'farmId' | 'personId' | 'accountId'>,
+  entry: { action: string; subjectId: string; detail?: Record<string, string | number> },
+): Promise<void> {
+  await manager.insert(JournalEntry, {
+    farmId: actor.farmId,
+    id: uuidV7(),
+    at: services.clock.now(),
+    personId: actor.personId,
+    accountId: actor.accountId,
+    action: entry.action,
+    subjectId: entry.subjectId,
+    detail: entry.detail ?? {},
+  })
+}

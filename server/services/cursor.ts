@@ -1,0 +1,35 @@
+import { z } from 'zod'
+import { invalid } from '../errors.ts'
+
+const keySchema = z.tuple([z.string().max(200), z.guid()])
+
+/** Where a list goes on: the sort key and id of the last row shown. */
+export function encodeCursor(key: string, id: string): string {
+  return Buffer.from(JSON.stringify([key, id])).toString('base64url')
+}
+
+/** @returns null at the start of the list. @throws {AppError} if the text is no cursor of ours. */
+export function decodeCursor(text: string | undefined): { key: string; id: string } | null {
+  if (text === undefined) return null
+  try {
+    const [key, id] = keySchema.parse(JSON.parse(Buffer.from(text, 'base64url').toString('utf8')))
+    return { key, id }
+  } catch {
+    throw invalid([{ path: 'cursor', code: 'cursor.invalid' }])
+  }
+}
+
+/** Cuts the row that was read beyond the page, and says where the next page begins. */
+export function cutPage<Row, Item>(
+  rows: Row[],
+  limit: number,
+  present: (row: Row) => Item,
+  keyOf: (row: Row) => [string, string],
+): { items: Item[]; next: string | null } {
+  const shown = rows.slice(0, limit)
+  const last = shown.at(-1)
+  return {
+    items: shown.map(present),
+    next: rows.length > limit && last !== undefined ? encodeCursor(...keyOf(last)) : null,
+  }
+}

@@ -1,0 +1,54 @@
+import { randomBytes } from 'node:crypto'
+import { v7 as uuidV7 } from 'uuid'
+import type { z } from 'zod'
+import type { createFarmSchema, Farm as FarmAnswer } from '../../../shared/contract/farm.ts'
+import { isZone } from '../../../shared/time/isZone.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import { Account } from '../../entities/Account.ts'
+import { Farm } from '../../entities/Farm.ts'
+import { FarmHead } from '../../entities/FarmHead.ts'
+import { Person } from '../../entities/Person.ts'
+import { AppError, invalid } from '../../errors.ts'
+import { appendJournal } from '../appendJournal.ts'
+import { digestOf } from '../insertOnce.ts'
+import type { Services } from '../services.ts'
+import { describeFarm } from './describeFarm.ts'
+
+/** Makes a farm whose owner is the caller. @returns the farm, and whether this call made it. */
+export async function createFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>): Promise<{ made: boolean; farm: FarmAnswer }> {
+  if (!isZone(input.zone)) throw invalid([{ path: 'zone', code: 'farm.zone' }])
+  const creationDigest = digestOf(input)
+  const open = await findOpen(services, accountId, input.id)
+  if (open) {
+    const stored = await services.database.inFarm(open, (manager) => manager.findOneByOrFail(Farm, { id: input.id }))
+    if (stored.creationDigest !== creationDigest) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
+    return { made: false, farm: await describeFarm(services, open) }
+  }
+  await insertFarm(services, accountId, input, creationDigest)
+  const actor = await findOpen(services, accountId, input.id)
+  if (!actor) throw new AppError('conflict', 'conflict')
+  return { made: true, farm: await describeFarm(services, actor) }
+}
+
+async function findOpen(services: Services, accountId: string, farmId: string): Promise<FarmActor | undefined> {
+  const access = await services.database.listAccess(accountId, services.clock.now())
+  return access.find((candidate) => candidate.farmId === farmId)
+}
+
+async function insertFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>, creationDigest: string): Promise<void> {
+  const createdAt = services.clock.now()
+  await services.database.inFarm({ farmId: input.id, seasons: null }, async (manager) => {
+    const account = await manager.findOneByOrFail(Account, { id: accountId })
+    const taken = await manager.createQueryBuilder().insert().into(Farm)
+      .values({ ...input, revision: 1, creationDigest, createdAt }).orIgnore().returning('id').execute()
+    // An id of somebody else's farm is answered like one's own repeated with other content: nothing is learned.
+    if ((taken.raw as unknown[]).length === 0) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
+    await manager.insert(FarmHead, { farmId: input.id, lastSeq: 0 })
+    const personId = uuidV7()
+    await manager.insert(Person, {
+      farmId: input.id, id: personId, accountId, name: account.name, nameSalt: randomBytes(16).toString('hex'),
+      role: 'owner', active: true, createdAt,
+    })
+    await appendJournal(services, manager, { farmId: input.id, personId, accountId }, { action: 'farm.created', subjectId: input.id, detail: { name: input.name } })
+  })
+}

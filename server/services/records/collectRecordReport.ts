@@ -1,0 +1,56 @@
+import { In, type EntityManager } from 'typeorm'
+import { signedRecordSchema, type SignedRecord } from '../../../shared/contract/signedRecord.ts'
+import { distanceKm } from '../../../shared/geo/distanceKm.ts'
+import type { Language } from '../../../shared/messages/translate.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
+import { Block } from '../../entities/Block.ts'
+import { Person } from '../../entities/Person.ts'
+import { RecordVersion } from '../../entities/RecordVersion.ts'
+import { AppError, notFound } from '../../errors.ts'
+import type { RecordReportData } from '../../reports/recordReportData.ts'
+import { publicAddress } from '../publicAddress.ts'
+import type { Services } from '../services.ts'
+
+/** Blocks whose middle lies further away are not drawn as neighbours. */
+const NEIGHBOUR_KM = 1
+
+/** Everything the PDF of a record shows, from its newest signed version. @throws {AppError} not-found, `record.not_signed`. */
+export async function collectRecordReport(services: Services, actor: FarmActor, id: string, language: Language): Promise<RecordReportData> {
+  return services.database.inFarm(actor, async (manager) => {
+    const record = await manager.findOneBy(ApplicationRecord, { farmId: actor.farmId, id })
+    if (!record) throw notFound()
+    if (record.state !== 'signed' && record.state !== 'withdrawn') throw new AppError('conflict', 'record.not_signed')
+    const version = await manager.findOneOrFail(RecordVersion, { where: { farmId: actor.farmId, recordId: id }, order: { version: 'DESC' } })
+    const signed = signedRecordSchema.parse(JSON.parse(version.canonicalText))
+    const checkPage = `${publicAddress(services.config)}/check`
+    return {
+      signed,
+      digest: version.digest,
+      names: await nameThem(manager, signed),
+      neighbours: await findNeighbours(manager, signed),
+      sites: [],
+      state: record.state,
+      printedAt: services.clock.now().toISOString(),
+      checkUrl: `${checkPage}/${version.checkCode}`,
+      checkPage: checkPage.replace(/^https?:\/\//, ''),
+      runBy: 'farm',
+      language,
+    }
+  })
+}
+
+async function nameThem(manager: EntityManager, { farm, people }: SignedRecord): Promise<RecordReportData['names']> {
+  const ids = [people.doneBy.id, people.enteredBy.id, people.signedBy.id]
+  const found = await manager.find(Person, { select: { id: true, name: true }, where: { farmId: farm.id, id: In(ids) } })
+  const name = (id: string) => found.find((person) => person.id === id)?.name ?? ''
+  return { doneBy: name(people.doneBy.id), enteredBy: name(people.enteredBy.id), signedBy: name(people.signedBy.id) }
+}
+
+async function findNeighbours(manager: EntityManager, { farm, blocks }: SignedRecord): Promise<RecordReportData['neighbours']> {
+  const own = new Set(blocks.map(({ id }) => id))
+  const others = await manager.find(Block, { select: { id: true, code: true, geometry: true }, where: { farmId: farm.id } })
+  return others
+    .filter(({ id, geometry }) => !own.has(id) && blocks.some((block) => distanceKm(block.geometry, geometry) < NEIGHBOUR_KM))
+    .map(({ code, geometry }) => ({ code, geometry }))
+}

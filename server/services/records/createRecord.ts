@@ -1,0 +1,43 @@
+import type { ApplicationRecord as RecordAnswer, CreateRecord } from '../../../shared/contract/record.ts'
+import { personOf, type FarmActor } from '../../database/actor.ts'
+import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
+import { appendJournal } from '../appendJournal.ts'
+import { digestOf, insertOnce } from '../insertOnce.ts'
+import type { Services } from '../services.ts'
+import { draftRecord } from './draftRecord.ts'
+import { presentRecord } from './presentRecord.ts'
+import { storeProjections } from './storeProjections.ts'
+
+/** Takes in a draft or a started record. @returns the record, and whether this call made it. */
+export async function createRecord(services: Services, actor: FarmActor, input: CreateRecord): Promise<{ made: boolean; record: RecordAnswer }> {
+  const now = services.clock.now()
+  return services.database.inFarm(actor, async (manager) => {
+    const { id, deviceAt, ...content } = input
+    const creationDigest = digestOf({ ...content, id })
+    const row: ApplicationRecord = {
+      ...(await draftRecord(manager, actor, content, now)),
+      farmId: actor.farmId,
+      id,
+      acknowledged: [],
+      season: null,
+      number: null,
+      seq: null,
+      digest: null,
+      version: 0,
+      revision: 1,
+      enteredById: personOf(actor),
+      signedById: null,
+      deviceAt: deviceAt === null ? null : new Date(deviceAt),
+      receivedAt: now,
+      signedAt: null,
+      creationDigest,
+    }
+    const made = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
+    if (!made) {
+      return { made, record: await presentRecord(manager, await manager.findOneByOrFail(ApplicationRecord, { farmId: actor.farmId, id })) }
+    }
+    await storeProjections(manager, row, false)
+    await appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id })
+    return { made, record: await presentRecord(manager, row) }
+  })
+}

@@ -1,0 +1,60 @@
+import type { RecordContent } from '../../../shared/contract/record.ts'
+import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
+import type { FieldError } from '../../errors.ts'
+import type { RecordGround } from './loadRecordGround.ts'
+
+const FUTURE_TOLERANCE_MS = 10 * 60_000
+const LONGEST_LINE_MS = 24 * 3_600_000
+
+/** What is impossible in a record, at whatever stage; nothing that is merely not written yet. */
+export function findRecordFaults(content: RecordContent, ground: RecordGround, now: Date): FieldError[] {
+  return [
+    ...content.lines.flatMap((line, index) => findTimeFaults(line, `lines.${index}`, now)),
+    ...findRepeatedBlocks(content),
+    ...content.components.flatMap((_, index) => findComponentFaults(content, ground, index)),
+  ]
+}
+
+function findTimeFaults({ startedAt, endedAt }: RecordContent['lines'][number], path: string, now: Date): FieldError[] {
+  const latest = now.getTime() + FUTURE_TOLERANCE_MS
+  const faults: FieldError[] = []
+  for (const [name, instant] of [['startedAt', startedAt], ['endedAt', endedAt]] as const) {
+    if (instant !== null && Date.parse(instant) > latest) faults.push({ path: `${path}.${name}`, code: 'time.future' })
+  }
+  if (startedAt === null || endedAt === null) return faults
+  const lengthMs = Date.parse(endedAt) - Date.parse(startedAt)
+  if (lengthMs < 0) {
+    faults.push({ path: `${path}.startedAt`, code: 'time.end_before_start' }, { path: `${path}.endedAt`, code: 'time.end_before_start' })
+  }
+  if (lengthMs > LONGEST_LINE_MS) faults.push({ path: `${path}.endedAt`, code: 'time.too_long' })
+  return faults
+}
+
+function findRepeatedBlocks({ lines }: RecordContent): FieldError[] {
+  return lines.flatMap(({ blockId }, index) =>
+    lines.findIndex((other) => other.blockId === blockId) < index ? [{ path: `lines.${index}.blockId`, code: 'record.same_block' }] : [],
+  )
+}
+
+function findComponentFaults(content: RecordContent, { materials, lots }: RecordGround, index: number): FieldError[] {
+  const component = content.components[index]
+  const material = materials.find(({ id }) => id === component?.materialId)
+  if (!component || !material) return []
+  const path = `components.${index}`
+  const faults: FieldError[] = []
+  const { basis } = component
+  if (basis.kind === 'ratio' && material.measuredIn === 'mass') faults.push({ path: `${path}.basis.kind`, code: 'unit.not_volume' })
+  if (basis.kind !== 'ratio' && measureOf(basis.unit) !== material.measuredIn) {
+    faults.push({ path: `${path}.basis.unit`, code: `unit.needs_${material.measuredIn}` })
+  }
+  const lot = lots.find(({ id }) => id === component.lotId)
+  if (lot && lot.materialId !== material.id) faults.push({ path: `${path}.lotId`, code: 'lot.other_material', params: { code: lot.code } })
+  return faults
+}
+
+/** Volume or mass, of an amount or of the amount in a rate over land. */
+function measureOf(unit: Exclude<RecordContent['components'][number]['basis'], { kind: 'ratio' }>['unit']): string {
+  const dimension = dimensionOf(unit)
+  if (dimension === 'volume' || dimension === 'volumePerArea') return 'volume'
+  return 'mass'
+}

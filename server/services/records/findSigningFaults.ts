@@ -1,0 +1,40 @@
+import type { Acknowledged } from '../../../shared/contract/common.ts'
+import type { Check, RecordContent } from '../../../shared/contract/record.ts'
+import { lastEnd } from '../../../shared/records/registerRow.ts'
+import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
+import type { FieldError } from '../../errors.ts'
+
+const DAY_MS = 86_400_000
+/** A record entered later than this needs a reason. */
+const LATE_DAYS = 30
+
+/** What a record lacks before it can be signed: what happened must be said whole. */
+export function findMissing(content: RecordContent, sheet: RecordSheet): FieldError[] {
+  const missing = [
+    ...content.lines.flatMap(({ startedAt, endedAt }, index) => [
+      ...(startedAt === null ? [{ path: `lines.${index}.startedAt`, code: 'time.missing_start' }] : []),
+      ...(endedAt === null ? [{ path: `lines.${index}.endedAt`, code: 'time.missing_end' }] : []),
+    ]),
+    ...(content.components.length === 0 ? [{ path: 'components', code: 'record.component_missing' }] : []),
+    ...content.components.flatMap(({ lotId }, index) => (lotId === null ? [{ path: `components.${index}.lotId`, code: 'lot.missing' }] : [])),
+    ...(content.water === null ? [{ path: 'water', code: 'record.water_missing' }] : []),
+    ...(content.sprayerId === null && content.components.some(({ basis }) => basis.kind === 'perTank') ? [{ path: 'sprayerId', code: 'sprayer.needed' }] : []),
+  ]
+  const blank = sheet.totalL === null || sheet.components.some(({ amount }) => amount === null)
+  return missing.length === 0 && blank ? [{ path: 'components', code: 'record.figures_missing' }] : missing
+}
+
+/**
+ * What is unlikely about signing this: each stop, and a very late entry. A reason for `record.stop` covers every
+ * stop, a reason for a check's own code that one.
+ */
+export function findUnlikely(content: RecordContent, checks: Check[], acknowledged: Acknowledged, now: Date): FieldError[] {
+  const given = new Set(acknowledged.map(({ code }) => code))
+  const stops = checks
+    .filter(({ verdict, code }) => verdict === 'stop' && !given.has('record.stop') && !given.has(code))
+    .map(({ code, about, title }) => ({ path: about ?? '', code: 'record.stop', params: { checkCode: code }, about: title }))
+  const end = lastEnd(content)
+  const days = end === null ? 0 : Math.floor((now.getTime() - Date.parse(end)) / DAY_MS)
+  const late = days > LATE_DAYS && !given.has('record.late') ? [{ path: 'lines', code: 'record.late', params: { days } }] : []
+  return [...stops, ...late]
+}

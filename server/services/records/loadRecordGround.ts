@@ -1,0 +1,58 @@
+import { In, type EntityManager } from 'typeorm'
+import type { RecordContent } from '../../../shared/contract/record.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import { Block } from '../../entities/Block.ts'
+import { Lot } from '../../entities/Lot.ts'
+import { Material } from '../../entities/Material.ts'
+import { Sprayer } from '../../entities/Sprayer.ts'
+import { invalid, type FieldError } from '../../errors.ts'
+
+/** What a record rests on, as it stands now; each in the order of the record. */
+export interface RecordGround {
+  blocks: Block[]
+  materials: Material[]
+  lots: Lot[]
+  sprayer: Sprayer | null
+}
+
+/**
+ * Loads what a record names. With `forSigning` its lots stay locked until the transaction ends, in the order of
+ * their ids, so that two signatures never wait for each other crosswise.
+ * @throws {AppError} invalid-input naming everything that is not on this farm.
+ */
+export async function loadRecordGround(
+  manager: EntityManager,
+  { farmId }: Pick<FarmActor, 'farmId'>,
+  content: RecordContent,
+  forSigning = false,
+): Promise<RecordGround> {
+  const lotIds = unique(content.components.flatMap(({ lotId }) => (lotId === null ? [] : [lotId])))
+  const blocks = await manager.findBy(Block, { farmId, id: In(unique(content.lines.map(({ blockId }) => blockId))) })
+  const materials = await manager.findBy(Material, { farmId, id: In(unique(content.components.map(({ materialId }) => materialId))) })
+  const lots = lotIds.length === 0 ? [] : await manager.find(Lot, {
+    where: { farmId, id: In(lotIds) },
+    order: { id: 'ASC' },
+    ...(forSigning && { lock: { mode: 'pessimistic_write' as const } }),
+  })
+  const sprayer = content.sprayerId === null ? null : await manager.findOneBy(Sprayer, { farmId, id: content.sprayerId })
+  const ground = { blocks, materials, lots, sprayer }
+  const errors = findUnknown(content, ground)
+  if (errors.length > 0) throw invalid(errors)
+  return ground
+}
+
+function findUnknown(content: RecordContent, { blocks, materials, lots, sprayer }: RecordGround): FieldError[] {
+  const has = (things: { id: string }[], id: string) => things.some((thing) => thing.id === id)
+  return [
+    ...content.lines.flatMap(({ blockId }, index) => (has(blocks, blockId) ? [] : [{ path: `lines.${index}.blockId`, code: 'block.unknown' }])),
+    ...content.components.flatMap(({ materialId, lotId }, index) => [
+      ...(has(materials, materialId) ? [] : [{ path: `components.${index}.materialId`, code: 'material.unknown' }]),
+      ...(lotId === null || has(lots, lotId) ? [] : [{ path: `components.${index}.lotId`, code: 'lot.unknown' }]),
+    ]),
+    ...(content.sprayerId !== null && sprayer === null ? [{ path: 'sprayerId', code: 'sprayer.unknown' }] : []),
+  ]
+}
+
+function unique(ids: string[]): string[] {
+  return [...new Set(ids)].sort()
+}

@@ -1,0 +1,38 @@
+import type { ApplicationRecord as RecordAnswer, UpdateRecord } from '../../../shared/contract/record.ts'
+import { canonicalText } from '../../../shared/evidence/canonicalText.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
+import { AppError, notFound, stale } from '../../errors.ts'
+import { appendJournal } from '../appendJournal.ts'
+import type { Services } from '../services.ts'
+import { assertMayWrite } from './assertMayWrite.ts'
+import { draftRecord } from './draftRecord.ts'
+import { presentRecord } from './presentRecord.ts'
+import { storeProjections } from './storeProjections.ts'
+
+/**
+ * Writes an unsigned record anew. Sending again what already stands answers as it did the first time.
+ * @throws {AppError} not-found, forbidden, `record.signed`, or `stale` with the record as it is now.
+ */
+export async function updateRecord(services: Services, actor: FarmActor, id: string, input: UpdateRecord): Promise<RecordAnswer> {
+  const now = services.clock.now()
+  return services.database.inFarm(actor, async (manager) => {
+    const record = await manager.findOne(ApplicationRecord, { where: { farmId: actor.farmId, id }, lock: { mode: 'pessimistic_write' } })
+    if (!record) throw notFound()
+    assertMayWrite(actor, record)
+    const { revision, deviceAt, ...content } = input
+    if (record.state === 'signed' || record.state === 'withdrawn') throw new AppError('conflict', 'record.signed', { current: await presentRecord(manager, record) })
+    if (record.revision !== revision) {
+      const current = await presentRecord(manager, record)
+      if (canonicalText(record.content) === canonicalText(content)) return current
+      throw stale(current)
+    }
+    const columns = await draftRecord(manager, actor, content, now)
+    const changes = { ...columns, revision: revision + 1, deviceAt: deviceAt === null ? record.deviceAt : new Date(deviceAt) }
+    await manager.update(ApplicationRecord, { farmId: actor.farmId, id }, changes as never)
+    const written = { ...record, ...changes }
+    await storeProjections(manager, written, true)
+    await appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } })
+    return presentRecord(manager, written)
+  })
+}

@@ -1,0 +1,70 @@
+import { createHash, randomBytes } from 'node:crypto'
+import { IsNull, MoreThan, type EntityManager } from 'typeorm'
+import { v7 as uuidV7 } from 'uuid'
+import { Account } from '../entities/Account.ts'
+import { AccountToken } from '../entities/AccountToken.ts'
+import { AppError, invalid } from '../errors.ts'
+import { COMMON_PASSWORDS } from './commonPasswords.ts'
+import { hashPassword } from './passwords.ts'
+import type { Services } from './services.ts'
+
+const HOURS_VALID = 72
+const SHORTEST_PASSWORD = 12
+
+type Parts = Pick<Services, 'clock' | 'database'>
+
+/** Makes a one-time link's secret for an e-mail, and its account if there is none. Only a digest is kept. */
+export async function inviteOwner(services: Parts, email: string): Promise<{ token: string; expiresAt: Date }> {
+  const token = randomBytes(32).toString('base64url')
+  const createdAt = services.clock.now()
+  const expiresAt = new Date(createdAt.getTime() + HOURS_VALID * 3_600_000)
+  await services.database.inHouse(async (manager) => {
+    const known = await manager.findOneBy(Account, { email: email.toLowerCase() })
+    const accountId = known?.id ?? uuidV7()
+    if (!known) {
+      await manager.insert(Account, { id: accountId, email: email.toLowerCase(), name: email, passwordHash: null, language: 'en', createdAt, deactivatedAt: null })
+    }
+    await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, purpose: 'welcome', createdAt, expiresAt, usedAt: null })
+  })
+  return { token, expiresAt }
+}
+
+/** Whom a link is for. @throws {AppError} `welcome.used_up` for a link that is spent, late or unknown: one text for all. */
+export async function readWelcome(services: Parts, token: string): Promise<{ email: string }> {
+  return services.database.inHouse(async (manager) => {
+    const found = await findToken(services, manager, token)
+    return { email: (await manager.findOneByOrFail(Account, { id: found.accountId })).email }
+  })
+}
+
+/** Spends a link: the account takes its name and password. @returns the account's id. */
+export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<string> {
+  assertGoodPassword(input.password)
+  const passwordHash = await hashPassword(input.password)
+  return services.database.inHouse(async (manager) => {
+    const { accountId, tokenHash } = await findToken(services, manager, input.token)
+    const spent = await manager.update(AccountToken, { tokenHash, usedAt: IsNull() }, { usedAt: services.clock.now() })
+    if (spent.affected !== 1) throw usedUp()
+    await manager.update(Account, { id: accountId }, { name: input.name, passwordHash })
+    return accountId
+  })
+}
+
+async function findToken(services: Parts, manager: EntityManager, token: string): Promise<AccountToken> {
+  const found = await manager.findOneBy(AccountToken, { tokenHash: hashToken(token), usedAt: IsNull(), expiresAt: MoreThan(services.clock.now()) })
+  if (!found) throw usedUp()
+  return found
+}
+
+function assertGoodPassword(password: string): void {
+  if ([...password].length < SHORTEST_PASSWORD) throw invalid([{ path: 'password', code: 'welcome.password_short' }])
+  if (COMMON_PASSWORDS.has(password.toLowerCase())) throw invalid([{ path: 'password', code: 'welcome.password_known' }])
+}
+
+function hashToken(token: string): string {
+  return createHash('sha256').update(token).digest('hex')
+}
+
+function usedUp(): AppError {
+  return new AppError('bad-request', 'welcome.used_up')
+}

@@ -1,0 +1,26 @@
+import { readFile } from 'node:fs/promises'
+import { join } from 'node:path'
+import { createGroundTiles } from './adapters/tiles/groundTiles.ts'
+import { fixedClock, systemClock } from './clock.ts'
+import type { Config } from './config.ts'
+import { openDatabase } from './database/database.ts'
+import { prepareDatabase } from './database/prepareDatabase.ts'
+import { createLogger } from './logger.ts'
+import { DEMO_FOLDER } from './projectFolders.ts'
+import { createReportProcess } from './reports/reportProcess.ts'
+import type { Services } from './services/services.ts'
+
+/** Brings the database up to date and makes everything that use cases reach. */
+export async function startServices(config: Config): Promise<Services> {
+  const logger = createLogger(config.logFile)
+  await prepareDatabase(config.databaseOwnerUrl, decodeURIComponent(new URL(config.databaseUrl).username))
+  return {
+    config,
+    logger,
+    clock: config.fixedClock === null ? systemClock : fixedClock(config.fixedClock),
+    database: await openDatabase(config.databaseUrl, config.databasePool, (error) => logger.warn({ err: error }, 'idle database connection broke')),
+    reports: createReportProcess(),
+    tiles: config.demo === null ? null : createGroundTiles(JSON.parse(await readFile(join(DEMO_FOLDER, 'demoGround.geojson'), 'utf8'))),
+    checkAnswers: false,
+  }
+}

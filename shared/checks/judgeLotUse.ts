@@ -1,0 +1,34 @@
+import type { Check } from '../contract/record.ts'
+import { civilDateIn } from '../time/civilDate.ts'
+import { buildCheck, words } from './buildCheck.ts'
+import { labelSource } from './labelSource.ts'
+import type { FactLot, FactMaterial, RecordFacts } from './recordFacts.ts'
+
+/** The civil day of use: of the first start written, else of the judgement. */
+function dayOfUse({ content, zone, now }: RecordFacts): string {
+  const starts = content.lines.map((line) => line.startedAt).filter((start) => start !== null)
+  const first = starts.reduce<string | null>((early, start) => (early === null || Date.parse(start) < Date.parse(early) ? start : early), null)
+  return civilDateIn(zone, first ?? now)
+}
+
+/**
+ * Whether a lot is used by its date. Past it, a bought lot of a labelled material is a stop, since the label is the law; any other
+ * lot is a caution, since the date is the farm's own.
+ * @returns null where the lot has no such date.
+ */
+export function judgeLotUse(facts: RecordFacts, lot: FactLot, material: FactMaterial, about: string): Check | null {
+  if (lot.expiresOn === null) return null
+  const rests = lot.origin === 'bought' && material.label !== null ? 'label' : 'house'
+  const isPast = dayOfUse(facts) > lot.expiresOn
+  const late = rests === 'label' ? 'stop' : 'caution'
+  return buildCheck({
+    code: 'lot.pastUse',
+    verdict: isPast ? late : 'pass',
+    rests,
+    title: words('checks.lotUse.title', { lot: lot.code }),
+    text: words(isPast ? 'checks.lotUse.past' : 'checks.lotUse.within', { material: material.name, expiresOn: lot.expiresOn }),
+    figure: words('checks.figure.date', { dayOn: lot.expiresOn }),
+    source: rests === 'label' ? labelSource(material) : null,
+    about,
+  })
+}

@@ -1,0 +1,66 @@
+import type { Check } from '../contract/record.ts'
+import { appliedShare } from './appliedShare.ts'
+import { buildCheck, words } from './buildCheck.ts'
+import { judgePreHarvest, judgeReEntry } from './judgeHolds.ts'
+import { judgeLabelRate } from './judgeLabelRate.ts'
+import { judgeLabelStrength } from './judgeLabelStrength.ts'
+import { judgeLotLeft } from './judgeLotLeft.ts'
+import { judgeLotUse } from './judgeLotUse.ts'
+import { judgeStatus } from './judgeStatus.ts'
+import { judgeWind } from './judgeWind.ts'
+import type { FactMaterial, RecordFacts } from './recordFacts.ts'
+import { sortChecks } from './sortChecks.ts'
+
+/** No rule set is kept yet, so nothing of the law was looked at; that is said, not passed over. */
+const lawNotKnown = (): Check =>
+  buildCheck({ code: 'law.rules', verdict: 'unknown', rests: 'law', title: words('checks.law.title'), text: words('checks.law.none') })
+
+function checksOfComponent(facts: RecordFacts, index: number, share: string): (Check | null)[] {
+  const written = facts.content.components[index]
+  const sheet = facts.sheet.components[index]
+  const material = facts.materials.find((one) => one.id === written?.materialId)
+  if (!written || !sheet || !material) return []
+  const about = `component:${index}`
+  const lot = facts.lots.find((one) => one.id === written.lotId)
+  return [
+    judgeLabelRate(material, sheet, share, about),
+    judgeLabelStrength(material, sheet, facts.sheet, about),
+    judgeStatus(material, about),
+    lot
+      ? judgeLotUse(facts, lot, material, about)
+      : buildCheck({
+          code: 'lot.none', verdict: 'unknown', rests: 'house', about,
+          title: words('checks.lotNone.title', { material: material.name }), text: words('checks.lotNone.text'),
+        }),
+  ]
+}
+
+/** One check a lot, however many components draw on it. */
+function checksOfLots({ content, sheet, lots }: RecordFacts): Check[] {
+  return lots.flatMap((lot) => {
+    const first = content.components.findIndex((component) => component.lotId === lot.id)
+    if (first < 0) return []
+    const drawing = sheet.components.filter((_, index) => content.components[index]?.lotId === lot.id)
+    return [judgeLotLeft(lot, drawing, `component:${first}`)]
+  })
+}
+
+/**
+ * Every check of a record, as it is being written and again when it is signed, worst first within what each rests on. Pure: the
+ * moment of the judgement is `facts.now`. A half-written record gives "not known" where a figure is missing, never a pass.
+ */
+export function recordChecks(facts: RecordFacts): Check[] {
+  const share = appliedShare(facts)
+  const materials = facts.content.components
+    .map(({ materialId }) => facts.materials.find((one) => one.id === materialId))
+    .filter((one): one is FactMaterial => one !== undefined)
+  const found = [
+    lawNotKnown(),
+    ...facts.content.components.flatMap((_, index) => checksOfComponent(facts, index, share)),
+    judgeReEntry(facts, materials),
+    judgePreHarvest(facts, materials),
+    judgeWind(facts.content),
+    ...checksOfLots(facts),
+  ]
+  return sortChecks(found.filter((check) => check !== null))
+}

@@ -1,0 +1,51 @@
+import type { Message } from '../contract/common.ts'
+import type { RecordSheet, SheetComponent } from '../mix/sheetTypes.ts'
+import { settle } from './settle.ts'
+import { words } from './buildCheck.ts'
+
+/** Six digits: enough that the sums on the page add up when done again by hand. */
+const shown = (value: string | number): number => settle(value).toSignificantDigits(6).toNumber()
+
+function componentWorking(component: SheetComponent, name: string): Message | null {
+  const { amount, measure } = component
+  if (amount === null) return null
+  const sum = { name, amount: shown(amount.value) }
+  const { params } = measure
+  const known = (key: string): number => shown(params[key] ?? 0)
+  switch (measure.id) {
+    case 'sheet.measure.ratio':
+      return words('records.working.ratio', { ...sum, water: known('waterL'), parts: known('parts') })
+    case 'sheet.measure.perArea':
+      return words('records.working.perArea', { ...sum, rate: known('value'), rateUnit: String(params['unit']), hectares: known('areaHa'), unit: amount.unit })
+    case 'sheet.measure.perTank':
+      return words('records.working.perTank', { ...sum, value: known('value'), unit: amount.unit, loads: known('loads') })
+    default:
+      return null
+  }
+}
+
+function totalWorking({ totalL, waterL, sprayLPerHa, areaHa }: RecordSheet, sizedFrom: 'water' | 'sprayRate'): Message[] {
+  if (totalL === null || waterL === null || sprayLPerHa === null) return []
+  const liquids = settle(totalL).minus(settle(waterL))
+  const figures = { water: shown(waterL), liquids: shown(liquids.toFixed()), total: shown(totalL), hectares: shown(areaHa), rate: shown(sprayLPerHa) }
+  return sizedFrom === 'water'
+    ? [words('records.working.total', figures), words('records.working.sprayRate', figures)]
+    : [words('records.working.fromRate', figures), words('records.working.waterLeft', figures)]
+}
+
+function loadsWorking({ loads, totalL }: RecordSheet): Message[] {
+  if (loads === null || totalL === null) return []
+  return [words('records.working.loads', { total: shown(totalL), tank: shown(loads.tankL), full: loads.full, last: shown(loads.lastL) })]
+}
+
+/**
+ * How the figures of a sheet were worked out, one sum a line, in the order they follow from each other.
+ * @param names of the components, in the sheet's order.
+ */
+export function workingLines(sheet: RecordSheet, { names, sizedFrom }: { names: readonly string[]; sizedFrom: 'water' | 'sprayRate' }): Message[] {
+  const components = sheet.components
+    .map((component, index) => componentWorking(component, names[index] ?? ''))
+    .filter((line) => line !== null)
+  const total = totalWorking(sheet, sizedFrom)
+  return [...(sizedFrom === 'water' ? [...components, ...total] : [...total, ...components]), ...loadsWorking(sheet)]
+}

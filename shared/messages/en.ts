@@ -1,0 +1,28 @@
+import { blocks } from './en/blocks.ts'
+import { checks } from './en/checks.ts'
+import { common } from './en/common.ts'
+import { farm } from './en/farm.ts'
+import { frame } from './en/frame.ts'
+import { inputs } from './en/inputs.ts'
+import { pdf } from './en/pdf.ts'
+import { problems } from './en/problems.ts'
+import { records } from './en/records.ts'
+import { register } from './en/register.ts'
+import { session } from './en/session.ts'
+import { today } from './en/today.ts'
+import { units } from './en/units.ts'
+
+/** Every word a person reads, in English; `{name}` stands for a parameter. The shape of every other language. */
+export const en = {
+  blocks, checks, common, farm, frame, inputs, pdf, problems, records, register, session, today, units,
+}
+
+/** The same tree with any words in its leaves. */
+export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }
+export type Messages = WordsLike<typeof en>
+
+type Path<Tree> = {
+  [Key in keyof Tree & string]: Tree[Key] extends string ? Key : `${Key}.${Path<Tree[Key]>}`
+}[keyof Tree & string]
+/** The dotted name of one message. */
+export type MessageId = Path<typeof en>

@@ -1,0 +1,82 @@
+/** Words of checks. */
+export const checks = {
+  figure: {
+    amount: '{value} {unit}',
+    percent: '{value} %',
+    time: '{time}',
+    date: '{dayOn}',
+  },
+  source: {
+    label: '{material}, label',
+    labelPart: '{material}, label, {part}',
+  },
+  law: {
+    title: 'Law',
+    none: 'No rule set is in force for this farm, so nothing of the law was looked at.',
+  },
+  labelRate: {
+    title: 'Rate',
+    over: '{material}: {value} {unit}. The label allows at most {limit} {unit}.',
+    within: '{material}: {value} {unit}. Label: at most {limit} {unit}.',
+    noAmount: '{material}: no rate yet. Label: at most {limit} {unit}.',
+    otherMeasure: '{material}: the label allows at most {limit} {unit}, and the mix does not measure it that way.',
+  },
+  labelStrength: {
+    title: 'Strength',
+    overRange: '{material}: {part} L in {total} L is {value} %. The label asks for {low} to {high} %.',
+    overMost: '{material}: {part} L in {total} L is {value} %. The label allows at most {high} %.',
+    overLeast: '{material}: {part} L in {total} L is {value} %. The label asks for at least {low} %.',
+    underRange: '{material}: {part} L in {total} L is {value} %. The label asks for {low} to {high} %.',
+    underMost: '{material}: {part} L in {total} L is {value} %. The label allows at most {high} %.',
+    underLeast: '{material}: {part} L in {total} L is {value} %. The label asks for at least {low} %.',
+    withinRange: '{material}: {part} L in {total} L. Label: {low} to {high} %.',
+    withinMost: '{material}: {part} L in {total} L. Label: at most {high} %.',
+    withinLeast: '{material}: {part} L in {total} L. Label: at least {low} %.',
+    noAmount: '{material}: the mix gives no strength yet, and the label sets one.',
+    weighed: '{material}: weighed out, and the label sets its strength by volume.',
+  },
+  reEntry: {
+    title: 'Keep out, {hours} h',
+    fromEnd: '{material}: {hours} h from the end of the work.',
+    until: 'Keep out of {blocks} until {untilTime} on {untilOn}.',
+  },
+  preHarvest: {
+    title: 'Do not pick, {days} d',
+    fromEnd: '{material}: {days} d from the day the work ends.',
+    before: 'Do not pick {blocks} before {pickOn}.',
+  },
+  status: {
+    title: '{material}',
+    allowed: 'Allowed: {basis}',
+    allowedBare: 'Written down as allowed, on no paper or listing.',
+    restricted: 'Restricted: {basis}',
+    restrictedBare: 'Restricted, and nothing says on what terms.',
+    prohibited: 'Prohibited: {basis}',
+    prohibitedBare: 'Prohibited on organic land.',
+    unknown: 'Nothing says if organic land may take it.',
+  },
+  lotUse: {
+    title: 'Use by, lot {lot}',
+    past: '{material}: past its use, {expiresOn}.',
+    within: '{material}: use by {expiresOn}.',
+  },
+  lotLeft: {
+    title: 'Lot {lot}',
+    enough: 'Takes {taken} of {left} {unit}, leaves {rest}.',
+    short: 'The mix takes {taken} {unit} and the lot holds {left}: {short} {unit} short.',
+    noAmount: 'It holds {left} {unit}; the mix does not say yet what it takes.',
+    otherMeasure: 'It holds {left} {unit}, and the mix measures it another way.',
+  },
+  lotNone: {
+    title: 'Lot of {material}',
+    text: 'No lot named: nothing is drawn down and nothing can be traced.',
+  },
+  wind: {
+    title: 'Wind',
+    notRead: 'Not read. The house rule is {low} to {high} {unit} (3 to 8 mph).',
+    under: '{value} {unit}, under {low} to {high} (3 to 8 mph): still air may carry mist far.',
+    over: '{value} {unit}, over {low} to {high} (3 to 8 mph): the spray drifts.',
+    within: '{low} to {high} {unit} (3 to 8 mph).',
+    source: 'common practice, 3 to 8 mph; a label wins over it',
+  },
+}

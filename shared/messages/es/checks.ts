@@ -1,0 +1,82 @@
+/** Words of checks. */
+export const checks = {
+  figure: {
+    amount: '{value} {unit}',
+    percent: '{value} %',
+    time: '{time}',
+    date: '{dayOn}',
+  },
+  source: {
+    label: '{material}, etiqueta',
+    labelPart: '{material}, etiqueta, {part}',
+  },
+  law: {
+    title: 'Ley',
+    none: 'No hay ningún reglamento en vigor para esta finca, así que no se ha mirado nada de la ley.',
+  },
+  labelRate: {
+    title: 'Dosis',
+    over: '{material}: {value} {unit}. La etiqueta permite como máximo {limit} {unit}.',
+    within: '{material}: {value} {unit}. Etiqueta: como máximo {limit} {unit}.',
+    noAmount: '{material}: todavía sin dosis. Etiqueta: como máximo {limit} {unit}.',
+    otherMeasure: '{material}: la etiqueta permite como máximo {limit} {unit}, y la mezcla no lo mide así.',
+  },
+  labelStrength: {
+    title: 'Concentración',
+    overRange: '{material}: {part} L en {total} L es {value} %. La etiqueta pide de {low} a {high} %.',
+    overMost: '{material}: {part} L en {total} L es {value} %. La etiqueta permite como máximo {high} %.',
+    overLeast: '{material}: {part} L en {total} L es {value} %. La etiqueta pide al menos {low} %.',
+    underRange: '{material}: {part} L en {total} L es {value} %. La etiqueta pide de {low} a {high} %.',
+    underMost: '{material}: {part} L en {total} L es {value} %. La etiqueta permite como máximo {high} %.',
+    underLeast: '{material}: {part} L en {total} L es {value} %. La etiqueta pide al menos {low} %.',
+    withinRange: '{material}: {part} L en {total} L. Etiqueta: de {low} a {high} %.',
+    withinMost: '{material}: {part} L en {total} L. Etiqueta: como máximo {high} %.',
+    withinLeast: '{material}: {part} L en {total} L. Etiqueta: al menos {low} %.',
+    noAmount: '{material}: la mezcla aún no da una concentración, y la etiqueta fija una.',
+    weighed: '{material}: se mide por peso, y la etiqueta fija la concentración por volumen.',
+  },
+  reEntry: {
+    title: 'No entrar, {hours} h',
+    fromEnd: '{material}: {hours} h desde que termina el trabajo.',
+    until: 'No entrar en {blocks} hasta las {untilTime} del {untilOn}.',
+  },
+  preHarvest: {
+    title: 'No cosechar, {days} d',
+    fromEnd: '{material}: {days} d desde el día en que termina el trabajo.',
+    before: 'No cosechar {blocks} antes del {pickOn}.',
+  },
+  status: {
+    title: '{material}',
+    allowed: 'Permitido: {basis}',
+    allowedBare: 'Anotado como permitido, sin papel ni lista que lo diga.',
+    restricted: 'Restringido: {basis}',
+    restrictedBare: 'Restringido, y nada dice en qué condiciones.',
+    prohibited: 'Prohibido: {basis}',
+    prohibitedBare: 'Prohibido en tierra ecológica.',
+    unknown: 'Nada dice si se puede usar en tierra ecológica.',
+  },
+  lotUse: {
+    title: 'Fecha límite, lote {lot}',
+    past: '{material}: pasado de fecha, {expiresOn}.',
+    within: '{material}: usar antes del {expiresOn} o ese día.',
+  },
+  lotLeft: {
+    title: 'Lote {lot}',
+    enough: 'Toma {taken} de {left} {unit}, quedan {rest}.',
+    short: 'La mezcla toma {taken} {unit} y el lote tiene {left}: faltan {short} {unit}.',
+    noAmount: 'Tiene {left} {unit}; la mezcla aún no dice cuánto toma.',
+    otherMeasure: 'Tiene {left} {unit}, y la mezcla lo mide de otra manera.',
+  },
+  lotNone: {
+    title: 'Lote de {material}',
+    text: 'Sin lote: no se descuenta nada y nada se puede rastrear.',
+  },
+  wind: {
+    title: 'Viento',
+    notRead: 'Sin leer. La norma de la casa es de {low} a {high} {unit} (de 3 a 8 mph).',
+    under: '{value} {unit}, por debajo de {low} a {high} (de 3 a 8 mph): el aire quieto puede llevar lejos la niebla.',
+    over: '{value} {unit}, por encima de {low} a {high} (de 3 a 8 mph): el caldo deriva.',
+    within: 'De {low} a {high} {unit} (de 3 a 8 mph).',
+    source: 'práctica común, de 3 a 8 mph; la etiqueta manda sobre ella',
+  },
+}

@@ -1,0 +1,32 @@
+import type { Message } from '../contract/common.ts'
+import { formatNumber } from '../units/formatQuantity.ts'
+import { formatDay } from './formatDay.ts'
+import { translate, type Language } from './translate.ts'
+
+/**
+ * A verdict, finding or label in words. Numbers take the language's marks, params whose name ends in `On` are
+ * civil dates, `unit` is the code of a unit; every other string stands as it is.
+ * @throws {RangeError} if there is no message of that id.
+ */
+export function renderMessage(language: Language, message: Message): string {
+  return translate(language, message.id, localiseParams(language, message.params))
+}
+
+/** The params of a message as words of a language; see `renderMessage`. */
+export function localiseParams(language: Language, params: Message['params']): Record<string, string> {
+  return Object.fromEntries(
+    Object.entries(params).map(([name, value]) => [name, localise(language, name, value)]),
+  )
+}
+
+function localise(language: Language, name: string, value: string | number): string {
+  if (typeof value === 'number') return formatNumber(value, { digits: decimalsOf(value) }, language)
+  if (name.endsWith('On')) return formatDay(language, value)
+  if (name === 'unit') return translate(language, `units.${value}`)
+  return value
+}
+
+/** Digits after the point that the number already carries: its maker has rounded it for display. */
+function decimalsOf(value: number): number {
+  return String(value).split('.')[1]?.length ?? 0
+}

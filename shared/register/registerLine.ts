@@ -1,0 +1,24 @@
+import type { Method } from '../contract/record.ts'
+
+/** What a line of the register shows, in words of a language; empty text where there is nothing to show. */
+export interface RegisterLine {
+  id: string
+  state: 'draft' | 'started' | 'signed' | 'withdrawn'
+  /** Number as the ledger prints it, short inside its own season; null before signing. */
+  number: string | null
+  version: number
+  method: Method | null
+  blockIds: string[]
+  codes: string
+  preparation: string
+  lots: string
+  day: string
+  start: string
+  hectares: string
+  litres: string
+  rate: string
+  by: string
+  lateHours: number | null
+  /** Checks by verdict; null for a draft, which the server has not judged. */
+  tally: { stop: number; caution: number; unknown: number } | null
+}

@@ -1,0 +1,68 @@
+import type { MessageId } from '../messages/en.ts'
+
+/** One sentence of the day: its message, the count its plural follows, and the figures that stand in their own ink. */
+export interface DaySentence {
+  id: MessageId
+  count: number
+  figures: Record<string, { text: string; ink: 'eld' | 'wel' | 'mad' | 'pen' | 'plain' }>
+}
+
+export interface DayFacts {
+  /** Block codes of each record that is started and not signed. */
+  started: readonly string[]
+  drafts: number
+  signedToday: number
+  /** Codes of lots past their last day that still hold something. */
+  pastLots: readonly string[]
+  /** Lots whose last day is at most 7 days away, with that day in words. */
+  soonLots: readonly { code: string; day: string }[]
+}
+
+/**
+ * What the day comes to, most urgent first: started work, the lots that are past or end soon (the worse of both), drafts, what was signed.
+ * @returns at least one sentence; a day with nothing in it says so.
+ */
+export function dayLine(facts: DayFacts): DaySentence[] {
+  const ending = facts.pastLots.length > 0 ? pastSentence(facts) : soonSentence(facts)
+  const waiting = [...startedSentence(facts), ...ending, ...draftSentence(facts)]
+  if (waiting.length === 0) waiting.push({ id: 'today.line.quiet', count: 0, figures: {} })
+  return [...waiting, ...signedSentence(facts)]
+}
+
+function startedSentence({ started }: DayFacts): DaySentence[] {
+  const [only] = started
+  if (only === undefined) return []
+  if (started.length === 1) return [{ id: 'today.line.startedOne', count: 1, figures: { codes: { text: only, ink: 'wel' } } }]
+  return [{ id: 'today.line.startedMany', count: started.length, figures: { figure: { text: String(started.length), ink: 'wel' } } }]
+}
+
+function draftSentence({ drafts }: DayFacts): DaySentence[] {
+  if (drafts === 0) return []
+  return [{ id: 'today.line.drafts', count: drafts, figures: { figure: { text: String(drafts), ink: 'pen' } } }]
+}
+
+function pastSentence({ pastLots }: DayFacts): DaySentence[] {
+  const [only] = pastLots
+  if (only === undefined) return []
+  const many = pastLots.length > 1
+  const text = many ? String(pastLots.length) : only
+  return [{ id: many ? 'today.line.pastMany' : 'today.line.pastOne', count: pastLots.length, figures: { figure: { text, ink: 'mad' } } }]
+}
+
+function soonSentence({ soonLots }: DayFacts): DaySentence[] {
+  const [only] = soonLots
+  if (only === undefined) return []
+  if (soonLots.length > 1) {
+    return [{ id: 'today.line.soonMany', count: soonLots.length, figures: { figure: { text: String(soonLots.length), ink: 'wel' } } }]
+  }
+  return [{
+    id: 'today.line.soonOne',
+    count: 1,
+    figures: { code: { text: only.code, ink: 'plain' }, figure: { text: only.day, ink: 'wel' } },
+  }]
+}
+
+function signedSentence({ signedToday }: DayFacts): DaySentence[] {
+  if (signedToday === 0) return [{ id: 'today.line.noneSigned', count: 0, figures: {} }]
+  return [{ id: 'today.line.signed', count: signedToday, figures: { figure: { text: String(signedToday), ink: 'eld' } } }]
+}

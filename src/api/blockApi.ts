@@ -1,0 +1,9 @@
+import { blockSchema, type Block } from '../../shared/contract/block.ts'
+import { allPages } from './allPages.ts'
+import { http } from './http.ts'
+
+/** The blocks of a farm; writes go through submit(command). */
+export const blockApi = {
+  list: (farmId: string): Promise<Block[]> => allPages(`/farms/${farmId}/blocks`, blockSchema),
+  read: (farmId: string, id: string): Promise<Block> => http.get(`/farms/${farmId}/blocks/${id}`, blockSchema),
+}

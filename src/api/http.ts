@@ -1,0 +1,78 @@
+import type { z } from 'zod'
+import { problemSchema } from '../../shared/contract/problem.ts'
+import { ApiError, NetworkError } from './errors.ts'
+
+type Query = Record<string, string | number | null | undefined>
+type Method = 'GET' | 'POST' | 'PUT' | 'DELETE'
+
+/** Asks the person to sign in again; answers whether they did. */
+type SignInAgain = () => Promise<boolean>
+let signInAgain: SignInAgain | null = null
+
+/** Sets what to do when the session has ended in the middle of work. */
+export function onSessionEnd(ask: SignInAgain): void {
+  signInAgain = ask
+}
+
+/**
+ * Requests to the server's API. Paths start after `/api`; answers are read with their schema.
+ * @throws {ApiError} when the server refused, {NetworkError} when no answer of ours came.
+ */
+export const http = {
+  get: <Schema extends z.ZodType>(path: string, schema: Schema, query: Query = {}) =>
+    request('GET', `${path}${queryText(query)}`, undefined, schema),
+  post: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('POST', path, body, schema),
+  put: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('PUT', path, body, schema),
+  del: <Schema extends z.ZodType>(path: string, schema: Schema) => request('DELETE', path, undefined, schema),
+}
+
+async function request<Schema extends z.ZodType>(
+  method: Method, path: string, body: unknown, schema: Schema,
+): Promise<z.output<Schema>> {
+  let response = await send(method, path, body)
+  const sessionEnded = response.status === 401 && !path.startsWith('/session')
+  if (sessionEnded && signInAgain !== null && (await signInAgain())) response = await send(method, path, body)
+  if (!response.ok) throw await refusalOf(response)
+  const answer: unknown = response.status === 204 ? undefined : await jsonOf(response)
+  const read = schema.safeParse(answer)
+  if (!read.success) throw new NetworkError(read.error)
+  return read.data
+}
+
+async function send(method: Method, path: string, body: unknown): Promise<Response> {
+  const headers: Record<string, string> = { Accept: 'application/json' }
+  if (method !== 'GET') headers['X-Requested-With'] = 'drenchleaf'
+  if (body !== undefined) headers['Content-Type'] = 'application/json'
+  const init: RequestInit = { method, headers, credentials: 'same-origin' }
+  if (body !== undefined) init.body = JSON.stringify(body)
+  try {
+    return await fetch(`/api${path}`, init)
+  } catch (cause) {
+    throw new NetworkError(cause)
+  }
+}
+
+async function refusalOf(response: Response): Promise<ApiError | NetworkError> {
+  const read = problemSchema.safeParse(await jsonOf(response).catch(() => null))
+  if (!read.success) return new NetworkError(response.status)
+  return new ApiError(read.data, retryAfterOf(response))
+}
+
+/** Seconds of a Retry-After header; a date in it is not used by this server. */
+function retryAfterOf(response: Response): number | null {
+  const seconds = Number(response.headers.get('Retry-After') ?? Number.NaN)
+  return Number.isFinite(seconds) && seconds >= 0 ? seconds : null
+}
+
+async function jsonOf(response: Response): Promise<unknown> {
+  try {
+    return await response.json()
+  } catch (cause) {
+    throw new NetworkError(cause)
+  }
+}
+
+function queryText(query: Query): string {
+  const pairs = Object.entries(query).filter(([, value]) => value !== null && value !== undefined)
+  return pairs.length === 0 ? '' : `?${new URLSearchParams(pairs.map(([key, value]) => [key, String(value)]))}`
+}

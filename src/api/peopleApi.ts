@@ -1,0 +1,7 @@
+import { personSchema, type Person } from '../../shared/contract/farm.ts'
+import { allPages } from './allPages.ts'
+
+/** The people of a farm. */
+export const peopleApi = {
+  list: (farmId: string): Promise<Person[]> => allPages(`/farms/${farmId}/people`, personSchema),
+}

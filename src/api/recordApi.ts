@@ -1,0 +1,32 @@
+import { z } from 'zod'
+import { pageOf } from '../../shared/contract/common.ts'
+import { recordSchema, registerRowSchema, type ApplicationRecord, type RegisterRow } from '../../shared/contract/record.ts'
+import { http } from './http.ts'
+
+/** Which rows of the register to read. */
+export interface RegisterQuery {
+  limit?: number
+  season?: number
+  block?: string
+  method?: string
+  material?: string
+  person?: string
+  state?: string
+  q?: string
+  sort?: string
+}
+
+export interface RegisterPage {
+  items: RegisterRow[]
+  next: string | null
+}
+
+/** Records and the register; writes go through submit(command). */
+export const recordApi = {
+  page: (farmId: string, query: RegisterQuery = {}, cursor?: string): Promise<RegisterPage> =>
+    http.get(`/farms/${farmId}/records`, pageOf(registerRowSchema), { ...query, cursor }),
+  read: (farmId: string, id: string): Promise<ApplicationRecord> =>
+    http.get(`/farms/${farmId}/records/${id}`, recordSchema),
+  versions: async (farmId: string, id: string): Promise<ApplicationRecord[]> =>
+    (await http.get(`/farms/${farmId}/records/${id}/versions`, z.object({ items: z.array(recordSchema) }))).items,
+}

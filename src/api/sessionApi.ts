@@ -1,0 +1,10 @@
+import { z } from 'zod'
+import { sessionSchema, type Session } from '../../shared/contract/session.ts'
+import { http } from './http.ts'
+
+/** Signing in, staying and leaving. */
+export const sessionApi = {
+  read: (): Promise<Session> => http.get('/session', sessionSchema),
+  signIn: (email: string, password: string): Promise<Session> => http.post('/session', { email, password }, sessionSchema),
+  signOut: (): Promise<unknown> => http.del('/session', z.unknown()),
+}

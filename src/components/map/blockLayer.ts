@@ -1,0 +1,48 @@
+import { layerGroup, polygon, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Renderer } from 'leaflet'
+import { handleMarker } from './handleMarker.ts'
+import { polygonsOf, toLatLng } from './leafletGeometry.ts'
+import type { MapBlock } from '../../composables/mapTypes.ts'
+
+/** Handles on more corners than this would hide the outline. */
+const MOST_HANDLES = 60
+
+/** The outlines of the blocks: casing, ground and line; the chosen one last and heavier. */
+export interface BlockLayer {
+  show(blocks: readonly MapBlock[], chosenId: string | null): void
+}
+
+/**
+ * Adds the layer of blocks to a map.
+ * @param onChoose called with a block's id when it is clicked or tapped.
+ */
+export function createBlockLayer(map: LeafletMap, renderer: Renderer, onChoose: (id: string) => void): BlockLayer {
+  const group = layerGroup().addTo(map)
+  return {
+    show(blocks, chosenId) {
+      group.clearLayers()
+      const chosenLast = [...blocks].sort((a, b) => Number(a.id === chosenId) - Number(b.id === chosenId))
+      for (const block of chosenLast) {
+        addBlock(group, renderer, block, block.id === chosenId).on('click', () => onChoose(block.id))
+      }
+    },
+  }
+}
+
+function addBlock(group: LayerGroup, renderer: Renderer, block: MapBlock, isChosen: boolean) {
+  const rings: LatLngTuple[][][] = polygonsOf(block.geometry).map((polygonRings) =>
+    polygonRings.map((ring) => ring.map(toLatLng)),
+  )
+  const chosen = isChosen ? ' is-chosen' : ''
+  const common = { renderer, smoothFactor: 0.2, bubblingMouseEvents: false }
+  group.addLayer(polygon(rings, { ...common, className: `map-case${chosen}`, interactive: false, fill: false }))
+  const line = polygon(rings, { ...common, className: `map-block${chosen}`, fill: true })
+  group.addLayer(line)
+  if (isChosen) addHandles(group, rings)
+  return line
+}
+
+function addHandles(group: LayerGroup, rings: LatLngTuple[][][]): void {
+  const corners = rings.flat().flatMap((ring) => ring.slice(0, -1))
+  if (corners.length > MOST_HANDLES) return
+  for (const corner of corners) group.addLayer(handleMarker(corner, 'map-handle'))
+}

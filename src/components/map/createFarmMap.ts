@@ -1,0 +1,119 @@
+import { latLngBounds, map as leafletMap, svg, tileLayer, type Map as LeafletMap } from 'leaflet'
+import type { Position } from '../../../shared/geo/geometryTypes.ts'
+import { createBlockLayer } from './blockLayer.ts'
+import { createDraftLayer } from './draftLayer.ts'
+import { createLabelLayer } from './labelLayer.ts'
+import { toLatLng } from './leafletGeometry.ts'
+import type { MapBlock, MapDraft, MapView, Pixel } from '../../composables/mapTypes.ts'
+
+/** What the map tells its component. */
+export interface FarmMapEvents {
+  /** A tap or click on the ground. */
+  tapped(position: Position): void
+  chosen(blockId: string): void
+  /** The view has moved or changed scale; `byHand` unless the program moved it itself. */
+  moved(view: MapView, byHand: boolean): void
+}
+
+/** The map of a farm: with its layers, the only modules that know Leaflet. */
+export interface FarmMap {
+  showBlocks(blocks: readonly MapBlock[], chosenId: string | null): void
+  showDraft(draft: MapDraft | null): void
+  setDrawing(isDrawing: boolean): void
+  /** Ground tiles under everything, or bare paper where there are none. */
+  setTiles(url: string | null): void
+  setView(view: MapView): void
+  /** Shows all of these positions with a margin in pixels. */
+  fit(positions: readonly Position[], marginPx: number): void
+  /** Moves as little as brings the position into view. */
+  bringIntoView(position: Position): void
+  pan(dx: number, dy: number): void
+  view(): MapView
+  metresPerPixel(): number
+  /** Middles of the labels in the map's pixels, by block. */
+  middles(): ReadonlyMap<string, Pixel>
+  sizeChanged(): void
+  destroy(): void
+}
+
+const WORLD: MapView = { centre: [0, 20], zoom: 2 }
+const MOST_ZOOM = 22
+const MOST_FIT_ZOOM = 19
+const EDGE_PX: [number, number] = [56, 56]
+
+/** Makes the map in its host element. */
+export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap {
+  let ownMove = false
+  const map = makeMap(host)
+  const renderer = svg({ padding: 0.5 })
+  const blocks = createBlockLayer(map, renderer, events.chosen)
+  const draft = createDraftLayer(map, renderer)
+  const labels = createLabelLayer(map)
+  let shown: { blocks: readonly MapBlock[]; chosenId: string | null } = { blocks: [], chosenId: null }
+  let tiles: ReturnType<typeof tileLayer> | null = null
+
+  function move(act: () => void): void {
+    ownMove = true
+    act()
+    ownMove = false
+  }
+  map.on('move', () => events.moved(viewOf(map), !ownMove))
+  map.on('zoomend', () => labels.show(shown.blocks, shown.chosenId))
+  map.on('click', ({ latlng, originalEvent }) => {
+    // The second click of a double tap would set the same corner twice.
+    if (originalEvent.detail > 1) return
+    const { lat, lng } = latlng.wrap()
+    events.tapped([lng, lat])
+  })
+
+  return {
+    showBlocks(list, chosenId) {
+      shown = { blocks: list, chosenId }
+      blocks.show(list, chosenId)
+      labels.show(list, chosenId)
+    },
+    showDraft: draft.show,
+    setDrawing(isDrawing) {
+      if (isDrawing) map.doubleClickZoom.disable()
+      else map.doubleClickZoom.enable()
+    },
+    setTiles(url) {
+      tiles?.remove()
+      tiles = url === null ? null : tileLayer(url, { maxZoom: MOST_ZOOM, className: 'map-ground' }).addTo(map)
+    },
+    setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),
+    fit: (positions, marginPx) => move(() => fitTo(map, positions, marginPx)),
+    bringIntoView: (position) => move(() => map.panInside(toLatLng(position), { padding: EDGE_PX, animate: false })),
+    pan: (dx, dy) => move(() => map.panBy([dx, dy], { animate: false })),
+    view: () => viewOf(map),
+    metresPerPixel: () => metresPerPixel(map),
+    middles: labels.middles,
+    sizeChanged: () => move(() => map.invalidateSize({ animate: false })),
+    destroy: () => void map.remove(),
+  }
+}
+
+function makeMap(host: HTMLElement): LeafletMap {
+  return leafletMap(host, {
+    attributionControl: false, zoomControl: false, keyboard: false, fadeAnimation: false, boxZoom: false,
+    zoomAnimation: !window.matchMedia('(prefers-reduced-motion: reduce)').matches,
+    zoomSnap: 0.1, minZoom: 2, maxZoom: MOST_ZOOM, maxBounds: [[-86, -200], [86, 200]],
+  }).setView(toLatLng(WORLD.centre), WORLD.zoom)
+}
+
+function fitTo(map: LeafletMap, positions: readonly Position[], marginPx: number): void {
+  if (positions.length === 0) return
+  const bounds = latLngBounds(positions.map(toLatLng))
+  map.fitBounds(bounds, { padding: [marginPx, marginPx], maxZoom: MOST_FIT_ZOOM, animate: false })
+}
+
+function viewOf(map: LeafletMap): MapView {
+  const { lat, lng } = map.getCenter()
+  return { centre: [lng, lat], zoom: map.getZoom() }
+}
+
+/** Across the middle of the map, where its scale bar holds. */
+function metresPerPixel(map: LeafletMap): number {
+  const { x, y } = map.getSize().divideBy(2)
+  return map.distance(map.containerPointToLatLng([x - 50, y]), map.containerPointToLatLng([x + 50, y])) / 100
+}

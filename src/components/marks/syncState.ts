@@ -1,0 +1,6 @@
+/** How the device stands with the server; `at` is a time of day in words, null before the first sending. */
+export type SyncState =
+  | { kind: 'sent'; at: string | null }
+  | { kind: 'sending'; count: number; of: number }
+  | { kind: 'kept'; count: number; online: boolean }
+  | { kind: 'needsYou'; count: number }

@@ -1,0 +1,40 @@
+import type { Method, RegisterRow } from '../../shared/contract/record.ts'
+import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
+import { translate, type Language } from '../../shared/messages/translate.ts'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import { formatNumber } from '../../shared/units/formatQuantity.ts'
+
+/** A record among the last of its block, in words. */
+export interface BlockRecordLine {
+  id: string
+  /** "0131" of 2026-0131; the state in a word where there is no number yet. */
+  number: string
+  fullNumber: string
+  state: RegisterRow['state']
+  day: string
+  method: Method
+  preparation: string
+  rate: string | null
+}
+
+/** Litres per hectare: whole from 100 up, one decimal below. */
+function rateText(language: Language, rate: string): string {
+  return formatNumber(rate, { digits: Number(rate) >= 100 ? 0 : 1 }, language)
+}
+
+/** One register row as a line of its block's page. @param zone the farm's time zone. */
+export function blockRecordLine(language: Language, zone: string, row: RegisterRow): BlockRecordLine {
+  const started = row.startedAt === null ? '' : formatDayShort(language, civilDateIn(zone, row.startedAt))
+  const word = translate(language, 'blocks.page.started')
+  const fullNumber = row.number ?? word
+  return {
+    id: row.id,
+    number: row.number?.slice(row.number.lastIndexOf('-') + 1) ?? word,
+    fullNumber: row.state === 'withdrawn' ? `${fullNumber}, ${translate(language, 'blocks.page.withdrawn')}` : fullNumber,
+    state: row.state,
+    day: started,
+    method: row.method,
+    preparation: row.preparations.join(', '),
+    rate: row.sprayLPerHa === null ? null : translate(language, 'blocks.page.rate', { figure: rateText(language, row.sprayLPerHa) }),
+  }
+}

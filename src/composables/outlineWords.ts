@@ -1,0 +1,32 @@
+import type { GeometryFinding } from '../../shared/geo/geometryTypes.ts'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import { translate, type Language } from '../../shared/messages/translate.ts'
+
+const OWN_WORDS: Partial<Record<string, string>> = {
+  'geometry.self_intersection': 'blocks.draw.crossing',
+  'geometry.area_range': 'blocks.geometry.area_range',
+}
+/** Codes whose words the refusals hold already. */
+const KNOWN = new Set([
+  'geometry.type', 'geometry.out_of_range', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
+  'geometry.area_zero', 'geometry.spike', 'geometry.too_many_points', 'geometry.crosses_antimeridian',
+])
+
+/** What is impossible in an outline, in words. */
+export function outlineWords(language: Language, finding: GeometryFinding): string {
+  const { code, params } = finding
+  const own = OWN_WORDS[code]
+  if (own !== undefined) return renderMessage(language, { id: own, params })
+  if (params['hint'] !== undefined) return translate(language, 'problems.geometry.degrees_needed')
+  if (!KNOWN.has(code)) return translate(language, 'blocks.geometry.other')
+  return renderMessage(language, { id: `problems.${code}`, params: code === 'geometry.too_many_points' ? { maximum: 5000, ...params } : params })
+}
+
+/** Numbers (from 0) of the edges that cross, as found. */
+export function crossingEdges(findings: readonly GeometryFinding[]): number[] {
+  return findings
+    .filter(({ code }) => code === 'geometry.self_intersection')
+    .flatMap(({ params }) => [params['edgeA'], params['edgeB']])
+    .filter((edge) => typeof edge === 'number')
+    .map((edge) => edge - 1)
+}

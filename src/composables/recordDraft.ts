@@ -1,0 +1,123 @@
+import type { ApplicationRecord, Basis, Method, Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/record.ts'
+import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
+import { toInstant } from '../../shared/time/toInstant.ts'
+import { newId } from './newId.ts'
+
+/** Everything below is as typed: numbers are text, and what is not chosen yet is empty. */
+export interface ComponentDraft {
+  key: string
+  materialId: string
+  lotId: string
+  kind: Basis['kind']
+  value: string
+  /** Not read for a ratio. */
+  unit: string
+}
+
+export interface ReadingDraft {
+  value: string
+  unit: string
+  kind: (typeof WEATHER_KINDS)[number]
+}
+
+/** A time of the farm's clock; `offset` is chosen only where the clock shows it twice. */
+export interface MomentDraft {
+  date: string
+  time: string
+  offset: string
+}
+
+/** What the form of a record holds. */
+export interface RecordDraft {
+  step: 1 | 2
+  method: Method
+  blockId: string
+  purpose: string
+  notes: string
+  /** Empty: the person who writes. */
+  doneById: string
+  sprayerId: string
+  components: ComponentDraft[]
+  water: { sizedFrom: 'water' | 'sprayRate'; value: string; unit: string; source: string }
+  weather: { wind: ReadingDraft; windFrom: (typeof WIND_POINTS)[number] | ''; air: ReadingDraft; humidity: ReadingDraft }
+  start: MomentDraft
+  end: MomentDraft
+  /** `value` is read only where it was measured or counted; worked out, it is the sheet's. */
+  amount: { value: string; unit: string; known: 'measured' | 'counted' | 'workedOut' }
+  /** Said of every stop that was sprayed all the same. */
+  stop: { why: string; told: string; done: string }
+  /** The revision the server gave last; null before it has the record. */
+  revision: number | null
+}
+
+export const emptyComponent = (): ComponentDraft => ({ key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L' })
+const emptyMoment = (): MomentDraft => ({ date: '', time: '', offset: '' })
+
+/** A form with nothing in it yet. */
+export const emptyRecord = (): RecordDraft => ({
+  step: 1,
+  method: 'foliar',
+  blockId: '', purpose: '', notes: '', doneById: '', sprayerId: '',
+  components: [emptyComponent()],
+  water: { sizedFrom: 'water', value: '', unit: 'L', source: '' },
+  weather: {
+    wind: { value: '', unit: 'ms', kind: 'readHere' },
+    windFrom: '',
+    air: { value: '', unit: 'degC', kind: 'readHere' },
+    humidity: { value: '', unit: '%', kind: 'readHere' },
+  },
+  start: emptyMoment(),
+  end: emptyMoment(),
+  amount: { value: '', unit: 'L', known: 'workedOut' },
+  stop: { why: '', told: '', done: '' },
+  revision: null,
+})
+
+/** The farm's clock at an instant. */
+export function momentAt(zone: string, instant: string): MomentDraft {
+  const moment = { date: civilDateIn(zone, instant), time: civilTimeIn(zone, instant) }
+  const read = toInstant({ ...moment, zone })
+  if (read.ok || read.problem.id !== 'time.ambiguous') return { ...moment, offset: '' }
+  const near = read.candidates.findLast((one) => Date.parse(one.instant) <= Date.parse(instant))
+  return { ...moment, offset: near?.offset ?? '' }
+}
+
+function draftOfBasis(basis: Basis): Pick<ComponentDraft, 'kind' | 'value' | 'unit'> {
+  return basis.kind === 'ratio' ? { kind: 'ratio', value: basis.parts, unit: 'L' } : basis
+}
+
+/** A new form with the mix, method, sprayer and purpose of a record, for another block or another day. */
+export function draftLike(record: ApplicationRecord): RecordDraft {
+  const empty = emptyRecord()
+  return {
+    ...empty,
+    method: record.method,
+    purpose: record.purpose ?? '',
+    sprayerId: record.sprayerId ?? '',
+    components: record.components.map(({ materialId, lotId, basis }) => ({ key: newId(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis) })),
+    water: record.water === null ? empty.water : { ...record.water, source: record.water.source ?? '' },
+  }
+}
+
+function draftOfWeather(weather: Weather): RecordDraft['weather'] {
+  const { weather: empty } = emptyRecord()
+  return { wind: weather.wind ?? empty.wind, windFrom: weather.windFrom ?? '', air: weather.air ?? empty.air, humidity: weather.humidity ?? empty.humidity }
+}
+
+/** The form of a record that was started: on this device or on another. */
+export function draftOfRecord(record: ApplicationRecord, zone: string): RecordDraft {
+  const line = record.lines[0]
+  const like = draftLike(record)
+  return {
+    ...like,
+    step: record.state === 'started' ? 2 : 1,
+    blockId: line?.blockId ?? '',
+    notes: record.notes ?? '',
+    doneById: record.doneById ?? '',
+    weather: record.weather === null ? like.weather : draftOfWeather(record.weather),
+    start: line?.startedAt ? momentAt(zone, line.startedAt) : like.start,
+    end: line?.endedAt ? momentAt(zone, line.endedAt) : like.end,
+    amount: line?.amount ?? like.amount,
+    revision: record.revision,
+  }
+}

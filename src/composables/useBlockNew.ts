@@ -1,0 +1,100 @@
+import { computed, watch, type ComputedRef } from 'vue'
+import type { Block } from '../../shared/contract/block.ts'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import { translate } from '../../shared/messages/translate.ts'
+import { formatNumber } from '../../shared/units/formatQuantity.ts'
+import type { Submitted } from '../stores/outbox.ts'
+import type { Caution } from './blockCautions.ts'
+import type { OutlineBy } from './blockDraftContent.ts'
+import { hectaresText, metresText } from './blockWords.ts'
+import type { MapDraft } from './mapTypes.ts'
+import { outlineWords } from './outlineWords.ts'
+import { useBlockSave, type BlockSave, type FieldError } from './useBlockSave.ts'
+import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useBlockWork, type BlockWork } from './useBlockWork.ts'
+import { useMessages } from './useMessages.ts'
+
+/** The new block's page: the work on its outline, its words, and saving it. */
+export interface BlockNew {
+  work: BlockWork
+  saving: BlockSave
+  mapDraft: ComputedRef<MapDraft>
+  /** Figures in words; empty while nothing is enclosed. */
+  figures: ComputedRef<{ area: string; perimeter: string; points: string }>
+  /** "New block: 0.93 ha, perimeter 414 m, 14 points". */
+  banner: ComputedRef<string>
+  /** What is impossible, in words. */
+  impossible: ComputedRef<readonly string[]>
+  /** What is unlikely, as seen from this device, in words. */
+  unlikely: ComputedRef<readonly string[]>
+  asked: ComputedRef<readonly { code: string; sentences: string[] }[]>
+  errors: ComputedRef<Record<string, string>>
+  refusal: ComputedRef<string>
+  /** Saves; answers what was saved, or undefined where something is still missing. */
+  save: () => Promise<{ code: string; area: string; outcome: Submitted<Block> } | undefined>
+}
+
+export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
+  const { farmId, language, blocks, farm } = place
+  const { render, problem } = useMessages()
+  const work = useBlockWork({
+    farmId, by, language: () => language.value, others: () => blocks.value, farmPlace: () => farm.value?.place ?? null,
+  })
+  const saving = useBlockSave()
+  const { content } = work.draft
+  const { outline } = work
+  const sentencesOf = (caution: Caution): string[] =>
+    caution.sentences.map((each) => (typeof each === 'string' ? each : render(each)))
+  const wordsOf = (error: FieldError): string => ('words' in error ? error.words : translate(language.value, error.id))
+
+  watch(outline.geometry, () => { saving.forget() })
+
+  const figures = computed(() => {
+    const measure = outline.measure.value
+    return {
+      area: measure === null ? '' : translate(language.value, 'blocks.hectares', { figure: hectaresText(language.value, measure.areaM2) }),
+      perimeter: measure === null ? '' : metresText(language.value, measure.perimeterM),
+      points: formatNumber(content.value.points.length, { digits: 0 }, language.value),
+    }
+  })
+
+  async function save(): ReturnType<BlockNew['save']> {
+    const geometry = outline.geometry.value
+    if (geometry === null || !content.value.closed) {
+      saving.errors.value = { geometry: { id: 'blocks.form.outlineNeeded' } }
+      return undefined
+    }
+    const { code } = content.value
+    const { area } = figures.value
+    const outcome = await saving.save({
+      farmId: farmId.value, id: work.draft.id.value, content: content.value, geometry,
+      cautions: work.cautions.value, takenCodes: blocks.value.map((block) => block.code),
+    })
+    if (outcome === undefined) return undefined
+    await work.draft.discard()
+    return { code, area, outcome }
+  }
+
+  return {
+    work, saving, figures, save,
+    mapDraft: computed(() => ({
+      points: content.value.points,
+      closed: content.value.closed,
+      crossingEdges: work.crossing.value,
+      cross: work.isDrawing.value ? outline.cross.value : null,
+    })),
+    banner: computed(() => bannerText(language.value, figures.value, content.value.points.length)),
+    impossible: computed(() => outline.findings.value.map((finding) => outlineWords(language.value, finding))),
+    unlikely: computed(() => work.cautions.value.flatMap(sentencesOf)),
+    asked: computed(() => saving.asked.value.map((caution) => ({ code: caution.code, sentences: sentencesOf(caution) }))),
+    errors: computed(() => Object.fromEntries(Object.entries(saving.errors.value).map(([path, error]) => [path, wordsOf(error)]))),
+    refusal: computed(() => (saving.error.value === null ? '' : problem(saving.error.value))),
+  }
+}
+
+function bannerText(language: 'en' | 'es', { area, perimeter, points }: { area: string; perimeter: string; points: string }, count: number): string {
+  if (count === 0) return translate(language, 'blocks.draw.none')
+  if (count < 3) return translate(language, 'blocks.draw.corner', { points })
+  if (area === '') return translate(language, 'blocks.draw.pointsOnly', { points })
+  return renderMessage(language, { id: 'blocks.draw.figures', params: { area, perimeter, points } })
+}

@@ -1,0 +1,66 @@
+import { computed, watch, type ComputedRef, type Ref } from 'vue'
+import { formatPoints } from '../../shared/geo/formatPoints.ts'
+import type { Position } from '../../shared/geo/geometryTypes.ts'
+import type { NamedBoundary } from '../../shared/geo/findOverlaps.ts'
+import type { Language } from '../../shared/messages/translate.ts'
+import { findCautions, type Caution } from './blockCautions.ts'
+import type { OutlineBy } from './blockDraftContent.ts'
+import { crossingEdges } from './outlineWords.ts'
+import { useBlockDraft, type BlockDraft } from './useBlockDraft.ts'
+import { useOutline, type Outline } from './useOutline.ts'
+import { useTypedPoints, type TypedPoints } from './useTypedPoints.ts'
+
+/** A block in the making: its draft, its outline drawn or typed, and what is unlikely about it. */
+export interface BlockWork {
+  draft: BlockDraft
+  outline: Outline
+  typed: TypedPoints
+  by: ComputedRef<OutlineBy>
+  setBy: (by: OutlineBy) => void
+  setTyped: (text: string) => void
+  cautions: ComputedRef<readonly Caution[]>
+  /** Numbers (from 0) of the edges that cross. */
+  crossing: ComputedRef<readonly number[]>
+  isDrawing: ComputedRef<boolean>
+}
+
+interface Around {
+  farmId: Ref<string>
+  by: OutlineBy
+  language: () => Language
+  others: () => readonly NamedBoundary[]
+  farmPlace: () => Position | null
+}
+
+/** Joins the draft with its outline; drawn corners can be read as typed points and the other way round. */
+export function useBlockWork({ farmId, by, language, others, farmPlace }: Around): BlockWork {
+  const draft = useBlockDraft(farmId, by)
+  const { content } = draft
+  const outline = useOutline(content)
+  const typed = useTypedPoints(() => content.value.typed, language)
+
+  watch(typed.points, (points) => {
+    if (content.value.by === 'points') outline.replace(points)
+  })
+
+  watch(draft.ready, (isReady) => { if (isReady) setBy(by) }, { immediate: true })
+
+  function setBy(next: OutlineBy): void {
+    if (next === content.value.by) return
+    const isUntyped = content.value.typed.trim() === ''
+    const text = next === 'points' && (isUntyped || typed.errors.value.length === 0) ? formatPoints(content.value.points) : content.value.typed
+    content.value = { ...content.value, by: next, typed: text }
+  }
+
+  return {
+    draft, outline, typed, setBy,
+    by: computed(() => content.value.by),
+    setTyped: (text) => { content.value = { ...content.value, typed: text } },
+    cautions: computed(() => {
+      const geometry = outline.geometry.value
+      return geometry === null ? [] : findCautions(geometry, others(), farmPlace())
+    }),
+    crossing: computed(() => crossingEdges(outline.findings.value)),
+    isDrawing: computed(() => content.value.by === 'draw' && !content.value.closed),
+  }
+}

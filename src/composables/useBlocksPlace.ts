@@ -1,0 +1,72 @@
+import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import type { Block } from '../../shared/contract/block.ts'
+import type { Farm } from '../../shared/contract/farm.ts'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import type { Language } from '../../shared/messages/translate.ts'
+import type { MapView } from './mapTypes.ts'
+import { usePreferences } from '../stores/preferences.ts'
+import { useSession } from '../stores/session.ts'
+import { blockWords, hectaresText, type BlockWords } from './blockWords.ts'
+import { useBlocks } from './useBlocks.ts'
+import { useConfig } from './useConfig.ts'
+import { useFarm } from './useFarm.ts'
+
+/** What all pages of Blocks share: the blocks in words, the ground, and where the map looked last. */
+export interface BlocksPlace {
+  farmId: ComputedRef<string>
+  farm: ComputedRef<Farm | null>
+  language: ComputedRef<Language>
+  canManage: ComputedRef<boolean>
+  canRecord: ComputedRef<boolean>
+  query: ReturnType<typeof useBlocks>
+  blocks: ComputedRef<readonly BlockWords[]>
+  /** "24 blocks, 23.82 ha"; empty before the first. */
+  count: ComputedRef<string>
+  /** "23.82". */
+  area: ComputedRef<string>
+  tilesUrl: ComputedRef<string | null>
+  startAt: ComputedRef<MapView | null>
+  remember: (view: MapView) => void
+  chosenId: Ref<string | null>
+}
+
+/** Where the map of each farm looked last, as long as this page lives. */
+const lastViews = new Map<string, MapView>()
+const FARM_ZOOM = 15
+
+export function useBlocksPlace(): BlocksPlace {
+  const session = useSession()
+  const preferences = usePreferences()
+  const farmId = computed(() => session.farmId)
+  const language = computed(() => preferences.language)
+  const query = useBlocks(farmId)
+  const farm = useFarm(farmId)
+  const config = useConfig()
+  const all = computed<readonly Block[]>(() => query.data.value ?? [])
+  const area = computed(() => hectaresText(language.value, all.value.reduce((sum, { areaM2 }) => sum + areaM2, 0)))
+
+  function startView(): MapView | null {
+    const last = lastViews.get(farmId.value)
+    const place = farm.data.value?.place ?? null
+    if (last !== undefined) return last
+    return place !== null && query.data.value?.length === 0 ? { centre: place, zoom: FARM_ZOOM } : null
+  }
+
+  return {
+    farmId, language, query, area,
+    farm: computed(() => farm.data.value ?? null),
+    canManage: computed(() => session.canManage),
+    canRecord: computed(() => session.canRecord),
+    blocks: computed(() => all.value.map((block) => blockWords(language.value, block))),
+    count: computed(() => countWords(language.value, all.value.length, area.value)),
+    tilesUrl: computed(() => (config.data.value?.tiles === true ? '/api/tiles/{z}/{x}/{y}' : null)),
+    startAt: computed(startView),
+    remember: (view) => { lastViews.set(farmId.value, view) },
+    chosenId: ref<string | null>(null),
+  }
+}
+
+function countWords(language: Language, count: number, area: string): string {
+  if (count === 0) return ''
+  return renderMessage(language, { id: count === 1 ? 'blocks.countOne' : 'blocks.count', params: { count, area } })
+}

@@ -1,0 +1,59 @@
+import { liveQuery } from 'dexie'
+import { computed, onScopeDispose, ref, shallowRef, toValue, watch, type MaybeRefOrGetter, type Ref, type ShallowRef } from 'vue'
+import { device } from '../plugins/device.ts'
+import type { Draft, DraftKind } from '../stores/draftTypes.ts'
+import { draftWriter } from '../stores/draftWriter.ts'
+import { useSession } from '../stores/session.ts'
+
+/** Drafts of one farm on this device, of the account that is signed in, newest first. */
+export interface Drafts {
+  drafts: Readonly<ShallowRef<Draft[]>>
+  /** False until the device has answered once. */
+  ready: Readonly<Ref<boolean>>
+  /** The draft of that id if it is this account's, else null. */
+  read: <Content>(id: string) => Promise<Draft<Content> | null>
+  /** Keeps the whole content as it stands; call at every keystroke, it is written within 150 ms. */
+  write: (id: string, kind: DraftKind, content: unknown) => void
+  /** Writes what still waits. */
+  flush: () => Promise<void>
+  remove: (id: string) => Promise<void>
+}
+
+/** Drafts survive a reload and signing out; they leave only by `remove`. */
+export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): Drafts {
+  const session = useSession()
+  const drafts = shallowRef<Draft[]>([])
+  const ready = ref(false)
+  const owner = computed(() => ({ accountId: session.user?.id ?? '', farmId: toValue(farmId) }))
+
+  const stop = watch(owner, ({ accountId, farmId: farm }, _before, onCleanup) => {
+    const watching = liveQuery(() => listDrafts(accountId, farm, kind)).subscribe({
+      next: (found) => { drafts.value = found; ready.value = true },
+      error: () => { drafts.value = []; ready.value = true },
+    })
+    onCleanup(() => { watching.unsubscribe() })
+  }, { immediate: true })
+  onScopeDispose(stop)
+
+  async function read<Content>(id: string): Promise<Draft<Content> | null> {
+    await draftWriter.flush()
+    const found = await device.drafts.get(id)
+    return found !== undefined && found.accountId === owner.value.accountId ? (found as Draft<Content>) : null
+  }
+
+  return {
+    drafts,
+    ready,
+    read,
+    write: (id, of, content) => { draftWriter.write({ id, kind: of, content, ...owner.value }) },
+    flush: () => draftWriter.flush(),
+    remove: (id) => draftWriter.remove(id),
+  }
+}
+
+async function listDrafts(accountId: string, farmId: string, kind: DraftKind | undefined): Promise<Draft[]> {
+  const found = await device.drafts.where({ accountId, farmId }).toArray()
+  return found
+    .filter((draft) => kind === undefined || draft.kind === kind)
+    .sort((one, other) => other.updatedAt.localeCompare(one.updatedAt))
+}

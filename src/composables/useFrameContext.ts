@@ -1,0 +1,47 @@
+import { computed, ref, type Ref } from 'vue'
+import { useI18n } from 'vue-i18n'
+import type { FrameContext } from '../components/page/frameContext.ts'
+import type { SyncState } from '../components/marks/syncState.ts'
+import { useOutbox } from '../stores/outbox.ts'
+import { useSession } from '../stores/session.ts'
+import { useFarm } from './useFarm.ts'
+
+/** What every page's head shows, from the session, the farm and the outbox; with the two sheets it can open. */
+export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>; moreOpen: Ref<boolean> } {
+  const session = useSession()
+  const outbox = useOutbox()
+  const farm = useFarm(() => session.farmId)
+  const { t } = useI18n()
+  const keptOpen = ref(false)
+  const moreOpen = ref(false)
+
+  const sync = computed<SyncState>(() => {
+    const [kept, waiting, sending] = [outbox.kept.length, outbox.needsYou.length, outbox.sendingCount]
+    if (waiting > 0) return { kind: 'needsYou', count: waiting }
+    if (sending > 0) return { kind: 'sending', count: sending, of: Math.max(kept, sending) }
+    if (kept > 0 || !outbox.online) return { kind: 'kept', count: kept, online: outbox.online }
+    return { kind: 'sent', at: outbox.lastSentAt === null ? null : timeOfDay(outbox.lastSentAt) }
+  })
+
+  const frame: FrameContext = {
+    farmName: computed(() => session.membership?.farmName ?? ''),
+    season: computed(() => farm.data.value?.currentSeason ?? null),
+    farms: computed(() => session.memberships.map((each) => ({ id: each.farmId, name: each.farmName }))),
+    farmId: computed(() => session.farmId),
+    sync,
+    person: computed(() =>
+      session.user === null || session.role === null
+        ? ''
+        : t('frame.person', { name: session.user.name, role: t(`farm.role.${session.role}`).toLowerCase() }),
+    ),
+    chooseFarm: session.chooseFarm,
+    openKept: () => { keptOpen.value = true },
+    openMore: () => { moreOpen.value = true },
+  }
+  return { frame, keptOpen, moreOpen }
+}
+
+/** "06:41" on this device's clock. */
+function timeOfDay(instant: string): string {
+  return new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }).format(new Date(instant))
+}

@@ -1,0 +1,28 @@
+import { computed, type ComputedRef } from 'vue'
+import { useI18n } from 'vue-i18n'
+import type { Place } from '../components/page/places.ts'
+import { useSession } from '../stores/session.ts'
+
+const OF_FARM: Omit<Place, 'words'>[] = [
+  { name: 'today', to: '/', icon: 'today' },
+  { name: 'blocks', to: '/blocks', icon: 'blocks' },
+  { name: 'register', to: '/register', icon: 'register' },
+  { name: 'inputs', to: '/inputs', icon: 'inputs' },
+  { name: 'farm', to: '/farm', icon: 'farm' },
+]
+const OF_CERTIFIER: Omit<Place, 'words'>[] = [
+  { name: 'my-farms', to: '/farms', icon: 'farms' },
+  { name: 'blocks', to: '/blocks', icon: 'blocks' },
+  { name: 'register', to: '/register', icon: 'register' },
+  { name: 'inputs', to: '/inputs', icon: 'inputs' },
+]
+
+/** The places of the spine for the role on the open farm. */
+export function usePlaces(): ComputedRef<Place[]> {
+  const session = useSession()
+  const { t } = useI18n()
+  return computed(() => {
+    const places = session.role === 'certifier' ? OF_CERTIFIER : OF_FARM
+    return places.map((place) => ({ ...place, words: t(`frame.places.${place.name}`) }))
+  })
+}

@@ -1,0 +1,41 @@
+import { computed, type ComputedRef, type Ref } from 'vue'
+import { recordChecks } from '../../shared/checks/recordChecks.ts'
+import { tallyChecks, type Tally } from '../../shared/checks/tallyChecks.ts'
+import type { Check } from '../../shared/contract/record.ts'
+import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
+import { contentOf, weatherOf } from './recordContent.ts'
+import type { RecordDraft } from './recordDraft.ts'
+import { useClock } from './useClock.ts'
+import type { RecordStock } from './useRecordStock.ts'
+
+/** The checks of what is typed, by the same function that judges it again when it is signed. */
+export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>, sheet: Ref<RecordSheet>): {
+  checks: ComputedRef<Check[]>
+  tally: ComputedRef<Tally>
+  stops: ComputedRef<Check[]>
+} {
+  const { time } = useClock()
+  const checks = computed(() => {
+    const zone = stock.value.farm?.zone ?? 'UTC'
+    const { method, lines } = contentOf(draft.value, { zone, sheet: sheet.value, happened: draft.value.step === 2 })
+    return recordChecks({
+      content: {
+        method,
+        lines: lines.map(({ blockId, startedAt, endedAt, amount }) => ({ blockId, startedAt: startedAt ?? null, endedAt: endedAt ?? null, amount: amount ?? null })),
+        components: draft.value.components.map(({ materialId, lotId }) => ({ materialId, lotId: lotId === '' ? null : lotId })),
+        weather: weatherOf(draft.value),
+      },
+      sheet: sheet.value,
+      blocks: stock.value.blocks,
+      materials: stock.value.materials,
+      lots: stock.value.lots,
+      zone,
+      now: time.value.toISOString(),
+    })
+  })
+  return {
+    checks,
+    tally: computed(() => tallyChecks(checks.value)),
+    stops: computed(() => checks.value.filter(({ verdict }) => verdict === 'stop')),
+  }
+}

@@ -1,0 +1,50 @@
+import { reactive, ref, type Ref } from 'vue'
+import { useI18n } from 'vue-i18n'
+import { ApiError } from '../api/errors.ts'
+import { usePreferences } from '../stores/preferences.ts'
+import { useSession } from '../stores/session.ts'
+import { useMessages } from './useMessages.ts'
+
+/** Signing in from a form: what is missing at its fields, what was refused above them. */
+export interface SignIn {
+  errors: { email: string; password: string }
+  refusal: Ref<string>
+  busy: Ref<boolean>
+  /** Answers whether the person is signed in. */
+  signIn: (email: string, password: string) => Promise<boolean>
+}
+
+/** @param wrongWords what to say when e-mail and password do not match. */
+export function useSignIn(wrongWords: () => string): SignIn {
+  const session = useSession()
+  const preferences = usePreferences()
+  const messages = useMessages()
+  const { t } = useI18n()
+  const errors = reactive({ email: '', password: '' })
+  const refusal = ref('')
+  const busy = ref(false)
+
+  async function signIn(email: string, password: string): Promise<boolean> {
+    errors.email = email.trim() === '' ? t('session.emailNeeded') : ''
+    errors.password = password === '' ? t('session.passwordNeeded') : ''
+    refusal.value = ''
+    if (errors.email !== '' || errors.password !== '' || busy.value) return false
+    busy.value = true
+    try {
+      await session.signIn(email.trim(), password)
+      if (session.user !== null) preferences.offerLanguage(session.user.language)
+      return true
+    } catch (error) {
+      refusal.value = isWrong(error) ? wrongWords() : messages.problem(error)
+      return false
+    } finally {
+      busy.value = false
+    }
+  }
+
+  return { errors, refusal, busy, signIn }
+}
+
+function isWrong(error: unknown): boolean {
+  return error instanceof ApiError && [401, 422].includes(error.problem.status)
+}

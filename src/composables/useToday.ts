@@ -1,0 +1,86 @@
+import { computed, type ComputedRef } from 'vue'
+import { dayLine, type DaySentence } from '../../shared/today/dayLine.ts'
+import { formatDay } from '../../shared/messages/formatDay.ts'
+import type { Boundary } from '../../shared/contract/block.ts'
+import type { RegisterRow } from '../../shared/contract/record.ts'
+import type { RegisterLine } from '../../shared/register/registerLine.ts'
+import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
+import { usePreferences } from '../stores/preferences.ts'
+import { useSession } from '../stores/session.ts'
+import { useInputs, type Inputs } from './useInputs.ts'
+import type { LotLine } from './useLotWords.ts'
+import { useRecords } from './useRecords.ts'
+import { useRegisterLines } from './useRegisterLines.ts'
+
+/** Lots that end this soon are named in the day line. */
+const LINE_DAYS = 7
+
+export interface Today {
+  /** "Tuesday 16 June" at the farm; empty until the farm is read. */
+  title: ComputedRef<string>
+  sentences: ComputedRef<DaySentence[]>
+  openLines: ComputedRef<RegisterLine[]>
+  startedLines: ComputedRef<RegisterLine[]>
+  doneLines: ComputedRef<{ line: RegisterLine; signedAt: string }[]>
+  endingLots: ComputedRef<LotLine[]>
+  outlines: ComputedRef<ReadonlyMap<string, Boundary>>
+  inputs: Inputs
+  started: ReturnType<typeof useRecords>
+  newest: ReturnType<typeof useRecords>
+  /** Everything the day line speaks of has been read. */
+  ready: ComputedRef<boolean>
+}
+
+/** What the day holds on the open farm: begun, signed today, ending. */
+export function useToday(): Today {
+  const session = useSession()
+  const preferences = usePreferences()
+  const farmId = computed(() => session.farmId)
+  const started = useRecords(farmId, { state: 'started', limit: 50 })
+  const newest = useRecords(farmId, { limit: 200 })
+  const inputs = useInputs()
+  const { place, draftLines, present, outlines } = useRegisterLines()
+  const { today } = inputs
+
+  const rowsOf = (read: ReturnType<typeof useRecords>): RegisterRow[] => read.data.value?.pages.flatMap(({ items }) => items) ?? []
+  const startedLines = computed(() => present(rowsOf(started).filter(({ state }) => state === 'started')))
+  const doneLines = computed(() => {
+    const zone = place.value?.zone
+    if (zone === undefined || today.value === null) return []
+    const signed = rowsOf(newest).flatMap((row) => (row.signedAt === null ? [] : [{ row, at: row.signedAt }]))
+    return signed
+      .filter(({ at }) => civilDateIn(zone, at) === today.value)
+      .sort((one, other) => Date.parse(other.at) - Date.parse(one.at))
+      .flatMap(({ row, at }) => present([row]).map((line) => ({ line, signedAt: civilTimeIn(zone, at) })))
+  })
+  const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
+
+  const sentences = computed(() => {
+    const lots = endingLots.value
+    return dayLine({
+      started: startedLines.value.map(({ codes }) => codes),
+      drafts: draftLines.value.length,
+      signedToday: doneLines.value.filter(({ line }) => line.state === 'signed').length,
+      pastLots: lots.filter(({ standing }) => standing.useBy === 'past').map(({ lot }) => lot.code),
+      soonLots: lots.flatMap(({ lot, standing }) =>
+        standing.useBy === 'soon' && (standing.days ?? 0) <= LINE_DAYS && lot.expiresOn !== null
+          ? [{ code: lot.code, day: formatDay(preferences.language, lot.expiresOn, { year: false }) }]
+          : []),
+    })
+  })
+
+  return {
+    title: computed(() => (today.value === null ? '' : capital(formatDay(preferences.language, today.value, { weekday: true, year: false })))),
+    sentences,
+    openLines: computed(() => [...startedLines.value, ...draftLines.value]),
+    startedLines, doneLines, endingLots, outlines, inputs, started, newest,
+    ready: computed(() => place.value !== null && newest.data.value !== undefined && inputs.ready.value),
+  }
+}
+
+/** Lots that hold something and are past their use, near it, or nearly empty. */
+function isEnding({ useBy, stock }: LotLine['standing']): boolean {
+  return stock !== 'empty' && (useBy === 'past' || useBy === 'soon' || stock === 'low')
+}
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)

@@ -1,0 +1,31 @@
+import Dexie, { type Table } from 'dexie'
+import type { Draft } from '../stores/draftTypes.ts'
+import type { KeptCommand } from '../stores/keptCommand.ts'
+
+/** The last answer of one read, so that a form opens without signal. */
+export interface KeptRead {
+  /** `${farmId}/${name}`, or a name alone for what belongs to no farm. */
+  key: string
+  accountId: string
+  answer: unknown
+  readAt: string
+}
+
+/** What the device keeps: drafts, commands not yet sent, and the last reads. */
+export class DeviceDatabase extends Dexie {
+  drafts!: Table<Draft, string>
+  outbox!: Table<KeptCommand, string>
+  reads!: Table<KeptRead, string>
+
+  constructor() {
+    super('drenchleaf')
+    this.version(1).stores({
+      drafts: 'id, [accountId+farmId], updatedAt',
+      outbox: 'key, accountId, keptAt',
+      reads: 'key, accountId',
+    })
+  }
+}
+
+/** The one database of this device. */
+export const device = new DeviceDatabase()

@@ -1,0 +1,14 @@
+import { QueryClient } from '@tanstack/vue-query'
+import { ApiError, NetworkError } from '../api/errors.ts'
+
+/** What the server owns, kept while it is fresh. A refusal is never asked again by itself. */
+export const queryClient = new QueryClient({
+  defaultOptions: {
+    queries: {
+      staleTime: 30_000,
+      // Without signal the read still runs: it answers from this device.
+      networkMode: 'always',
+      retry: (failures, error) => !(error instanceof ApiError) && !(error instanceof NetworkError) && failures < 1,
+    },
+  },
+})

@@ -1,0 +1,36 @@
+import type { RouteRecordRaw } from 'vue-router'
+import type { Role } from '../../shared/contract/session.ts'
+
+declare module 'vue-router' {
+  interface RouteMeta {
+    /** Opens without signing in. */
+    open?: boolean
+    /** Who may open it; everyone on a farm when not said. */
+    roles?: Role[]
+    /** The place of the spine it belongs to. */
+    place?: string
+    /** The page has its own row of actions where the phone's bar stands. */
+    ownFoot?: boolean
+  }
+}
+
+const FARM_PEOPLE: Role[] = ['owner', 'manager', 'applicator']
+const MANAGERS: Role[] = ['owner', 'manager']
+
+/** Every address; views are read when they are first opened. */
+export const routes: RouteRecordRaw[] = [
+  { path: '/signin', name: 'sign-in', component: () => import('../views/sign-in/SignInView.vue'), meta: { open: true } },
+  { path: '/welcome/:token?', name: 'welcome', component: () => import('../views/welcome/WelcomeView.vue'), props: true, meta: { open: true } },
+  { path: '/check/:code?', name: 'check', component: () => import('../views/check/CheckView.vue'), props: true, meta: { open: true } },
+  { path: '/', name: 'today', component: () => import('../views/today/TodayView.vue'), meta: { place: 'today', roles: FARM_PEOPLE } },
+  { path: '/blocks', name: 'blocks', component: () => import('../views/blocks/BlocksView.vue'), meta: { place: 'blocks' } },
+  { path: '/blocks/new', name: 'block-new', component: () => import('../views/blocks/BlockNewView.vue'), meta: { place: 'blocks', roles: MANAGERS } },
+  { path: '/blocks/:id', name: 'block', component: () => import('../views/blocks/BlockPageView.vue'), props: true, meta: { place: 'blocks' } },
+  { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), meta: { place: 'register' } },
+  { path: '/register/new', name: 'record-new', component: () => import('../views/register/RecordFormView.vue'), meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
+  { path: '/register/:id', name: 'record', component: () => import('../views/register/RecordView.vue'), props: true, meta: { place: 'register' } },
+  { path: '/inputs', name: 'inputs', component: () => import('../views/inputs/InputsView.vue'), meta: { place: 'inputs' } },
+  { path: '/farm', name: 'farm', component: () => import('../views/farm/FarmView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/farms', name: 'my-farms', component: () => import('../views/my-farms/MyFarmsView.vue'), meta: { place: 'my-farms', roles: ['certifier'] } },
+  { path: '/:rest(.*)*', name: 'not-found', component: () => import('../views/not-found/NotFoundView.vue') },
+]

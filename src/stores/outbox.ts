@@ -1,0 +1,145 @@
+import { defineStore } from 'pinia'
+import { computed, ref, shallowRef } from 'vue'
+import { sendCommand } from '../api/commandApi.ts'
+import type { Command, CommandAnswers, CommandKind } from '../api/commandTypes.ts'
+import { ApiError, NetworkError } from '../api/errors.ts'
+import { now } from '../plugins/clock.ts'
+import { device } from '../plugins/device.ts'
+import { refreshAfter } from './refreshAfter.ts'
+import type { KeptCommand } from './keptCommand.ts'
+import { useSession } from './session.ts'
+
+/** What became of a command: answered, or kept on this device until there is signal. */
+export type Submitted<Answer> = { state: 'sent'; answer: Answer } | { state: 'kept' }
+
+const RETRY_MS = 30_000
+
+/** The one write path: every command is on this device before it is sent, and leaves it when it is answered. */
+export const useOutbox = defineStore('outbox', () => {
+  const session = useSession()
+  const items = shallowRef<KeptCommand[]>([])
+  const lastSentAt = ref<string | null>(null)
+  const online = ref(navigator.onLine)
+  const sendingCount = ref(0)
+  let flushing: Promise<void> | null = null
+
+  const mine = computed(() => items.value.filter((item) => item.accountId === session.user?.id))
+  const kept = computed(() => mine.value.filter((item) => item.state !== 'needsYou'))
+  const needsYou = computed(() => mine.value.filter((item) => item.state === 'needsYou'))
+
+  async function refresh(): Promise<void> {
+    items.value = await device.outbox.orderBy('keptAt').toArray().catch(() => [])
+  }
+
+  /**
+   * Writes the command down, sends it, and forgets it when it is answered.
+   * @throws {ApiError} when the server refused it, {NetworkError} for a signature that could not be sent.
+   */
+  async function submit<Kind extends CommandKind>(command: Command<Kind>): Promise<Submitted<CommandAnswers[Kind]>> {
+    // A password is never written to the device.
+    if (command.kind === 'record.sign') return { state: 'sent', answer: await sendAndSettle(command) }
+    const item = keep(command)
+    await device.outbox.put(item)
+    await refresh()
+    if (await waitsBehindAnother(item)) return { state: 'kept' }
+    try {
+      const answer = await sendAndSettle(command)
+      await device.outbox.delete(item.key)
+      return { state: 'sent', answer }
+    } catch (error) {
+      if (mustWait(error)) return { state: 'kept' }
+      await device.outbox.delete(item.key)
+      throw error
+    } finally {
+      await refresh()
+    }
+  }
+
+  /** A command about the same thing is still here: it goes first. */
+  async function waitsBehindAnother(item: KeptCommand): Promise<boolean> {
+    const before = kept.value.filter((each) => each.key !== item.key && each.command.id === item.command.id)
+    if (before.length === 0) return false
+    await flush()
+    return kept.value.some((each) => each.key !== item.key && each.command.id === item.command.id)
+  }
+
+  function keep(command: object): KeptCommand {
+    const plain = JSON.parse(JSON.stringify(command)) as Command
+    return {
+      key: keyOf(plain),
+      accountId: session.user?.id ?? '',
+      command: plain,
+      keptAt: now().toISOString(),
+      state: 'kept',
+      problem: null,
+    }
+  }
+
+  async function sendAndSettle<Kind extends CommandKind>(command: Command<Kind>): Promise<CommandAnswers[Kind]> {
+    sendingCount.value += 1
+    try {
+      const answer = await sendCommand(command)
+      lastSentAt.value = now().toISOString()
+      refreshAfter(command)
+      return answer
+    } finally {
+      sendingCount.value -= 1
+    }
+  }
+
+  /** Sends what is kept, oldest first; stops at the first that finds no signal. */
+  function flush(): Promise<void> {
+    flushing ??= sendKept().finally(() => { flushing = null })
+    return flushing
+  }
+
+  async function sendKept(): Promise<void> {
+    await refresh()
+    for (const item of kept.value) {
+      try {
+        await sendAndSettle(item.command)
+        await device.outbox.delete(item.key)
+      } catch (error) {
+        if (mustWait(error)) break
+        if (!(error instanceof ApiError)) throw error
+        await device.outbox.update(item.key, { state: 'needsYou', problem: error.problem })
+      }
+    }
+    await refresh()
+  }
+
+  /** Gives up one command: a person said so. */
+  async function discard(key: string): Promise<void> {
+    await device.outbox.delete(key)
+    await refresh()
+  }
+
+  /** Puts a refused command back in line. */
+  async function retry(key: string): Promise<void> {
+    await device.outbox.update(key, { state: 'kept', problem: null })
+    await flush()
+  }
+
+  /** Begins to watch for signal; call once, when the app starts. */
+  function start(): void {
+    const attempt = (): void => { online.value = navigator.onLine; if (kept.value.length > 0) void flush() }
+    window.addEventListener('online', attempt)
+    window.addEventListener('offline', attempt)
+    window.addEventListener('focus', attempt)
+    window.setInterval(attempt, RETRY_MS)
+    void refresh().then(attempt)
+  }
+
+  return { items: mine, kept, needsYou, sendingCount, lastSentAt, online, submit, flush, discard, retry, start }
+})
+
+/** A second write of the same thing replaces the first that was not sent; two counts of a lot are two. */
+function keyOf(command: Command): string {
+  return `${command.kind}:${command.kind === 'lot.count' ? command.body.id : command.id}`
+}
+
+/** No signal, no session, too many or a server in trouble: nothing was decided, so it stays. */
+function mustWait(error: unknown): boolean {
+  if (error instanceof NetworkError) return true
+  return error instanceof ApiError && (error.problem.status >= 500 || [401, 429].includes(error.problem.status))
+}

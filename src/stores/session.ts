@@ -1,0 +1,76 @@
+import { defineStore } from 'pinia'
+import { computed, ref, shallowRef } from 'vue'
+import type { Membership, Role, Session } from '../../shared/contract/session.ts'
+import { ApiError, NetworkError } from '../api/errors.ts'
+import { sessionApi } from '../api/sessionApi.ts'
+import { queryClient } from '../plugins/queryClient.ts'
+import { forgetReads, keptSession, keepSession } from './reads.ts'
+import { readSetting, writeSetting } from './settings.ts'
+
+/** Who is signed in, on which farms, and which farm is open. */
+export const useSession = defineStore('session', () => {
+  const session = shallowRef<Session | null>(null)
+  const loaded = ref(false)
+  const chosenFarmId = ref(readSetting('farm'))
+
+  const user = computed(() => session.value?.user ?? null)
+  const memberships = computed<Membership[]>(() => session.value?.memberships ?? [])
+  const membership = computed<Membership | null>(
+    () => memberships.value.find((each) => each.farmId === chosenFarmId.value) ?? memberships.value[0] ?? null,
+  )
+  /** Empty while no farm is open. */
+  const farmId = computed(() => membership.value?.farmId ?? '')
+  const role = computed<Role | null>(() => membership.value?.role ?? null)
+  /** May add blocks, inputs and sprayers. */
+  const canManage = computed(() => role.value === 'owner' || role.value === 'manager')
+  /** May write records. */
+  const canRecord = computed(() => role.value !== null && role.value !== 'certifier')
+
+  /** Asks once who is signed in; without signal, whoever was last. */
+  async function load(): Promise<void> {
+    if (loaded.value) return
+    try {
+      accept(await sessionApi.read())
+    } catch (error) {
+      if (error instanceof NetworkError) session.value = await keptSession()
+      else if (!(error instanceof ApiError)) throw error
+    }
+    loaded.value = true
+  }
+
+  async function signIn(email: string, password: string): Promise<void> {
+    const answer = await sessionApi.signIn(email, password)
+    if (user.value !== null && user.value.id !== answer.user.id) queryClient.clear()
+    accept(answer)
+    loaded.value = true
+  }
+
+  /** Leaves: what the server gave is wiped, drafts and kept commands stay for their account. */
+  async function signOut(): Promise<void> {
+    await sessionApi.signOut()
+    await forget()
+  }
+
+  /** Nobody is signed in any more: the session ended on the server. */
+  async function forget(): Promise<void> {
+    session.value = null
+    queryClient.clear()
+    await forgetReads()
+  }
+
+  /** A session made elsewhere: a welcome link accepted. */
+  function accept(answer: Session): void {
+    session.value = answer
+    void keepSession(answer)
+  }
+
+  function chooseFarm(id: string): void {
+    chosenFarmId.value = id
+    writeSetting('farm', id)
+  }
+
+  return {
+    session, loaded, user, memberships, membership, farmId, role, canManage, canRecord,
+    load, signIn, signOut, forget, accept, chooseFarm,
+  }
+})

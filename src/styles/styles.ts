@@ -1,0 +1,8 @@
+import './tokens.css'
+import './element-theme.css'
+import './base.css'
+import './frame.css'
+import './phone.css'
+import './ledger.css'
+import './forms.css'
+import './checks.css'

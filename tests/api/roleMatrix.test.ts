@@ -1,0 +1,138 @@
+import { readFileSync } from 'node:fs'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { v7 as uuidV7 } from 'uuid'
+import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from '../../server/demo/buildThings.ts'
+import type { Route } from '../../server/routes/defineRoute.ts'
+import { ROUTES } from '../../server/routes/routes.ts'
+import { openHouse, PASSWORD, type Agent, type TestFarm, type TestHouse } from '../support/openHouse.ts'
+import { seedThings, type SeededThings } from '../support/seedThings.ts'
+
+const UNKNOWN = '00000000-0000-7000-8000-000000000000'
+const ACTORS = ['nobody', 'owner', 'manager', 'applicator', 'certifier', 'outsider', 'expired'] as const
+type Actor = (typeof ACTORS)[number]
+
+interface World {
+  farm: TestFarm
+  things: SeededThings
+  recordId: string
+}
+
+let house: TestHouse
+let mine: World
+let neighbour: World
+let agents: Record<Exclude<Actor, 'nobody'>, Agent>
+
+beforeAll(async () => {
+  house = await openHouse()
+  mine = await makeWorld()
+  neighbour = await makeWorld()
+  const ended = await house.makeFarm({ endsOn: '2026-06-01' })
+  agents = {
+    owner: await house.as(mine.farm.accounts.owner),
+    manager: await house.as(mine.farm.accounts.manager),
+    applicator: await house.as(mine.farm.accounts.applicator),
+    certifier: await house.as(mine.farm.accounts.certifier),
+    outsider: await house.as(neighbour.farm.accounts.owner),
+    expired: await house.as(ended.accounts.certifier),
+  }
+})
+afterAll(() => house.close())
+
+async function makeWorld(): Promise<World> {
+  const farm = await house.makeFarm()
+  const things = await seedThings(house, farm)
+  const applicator = await house.as(farm.accounts.applicator)
+  const input = buildRecord(things)
+  await applicator.post(`/api/farms/${farm.id}/records`).send(input).expect(201)
+  await applicator.post(`/api/farms/${farm.id}/records/${input.id}/sign`).send({ password: PASSWORD }).expect(200)
+  return { farm, things, recordId: input.id }
+}
+
+/** A body that the route takes, made anew for each call, so that only rights can refuse it. */
+function bodyFor(route: Route, world: World, place: number): object | undefined {
+  const { things } = world
+  const tag = uuidV7().slice(-8)
+  const bodies: Record<string, () => object> = {
+    'post /farms/:farmId/blocks': () => buildBlock({ code: tag, geometry: squareAt(place) }),
+    'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
+    'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
+    'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
+    'post /farms/:farmId/sprayers': () => ({ id: uuidV7(), code: tag, name: 'Drencher', tankL: '400' }),
+    'post /farms/:farmId/records': () => buildRecord(things),
+    'put /farms/:farmId/records/:id': () => ({ ...buildRecord(things), id: undefined, revision: 1 }),
+    'post /farms/:farmId/records/:id/sign': () => ({ password: PASSWORD }),
+  }
+  const make = bodies[`${route.method} ${route.path}`]
+  if (!make && route.body) throw new Error(`The matrix has no body for ${route.method} ${route.path}`)
+  return make?.()
+}
+
+function addressOf(route: Route, world: World, things: SeededThings | null): string {
+  const id = things === null ? UNKNOWN : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
+  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
+}
+
+let place = 10
+
+async function call(actor: Actor, route: Route, address: string, body: object | undefined): Promise<{ status: number; body: Record<string, unknown> }> {
+  const { default: supertest } = await import('supertest')
+  const agent = actor === 'nobody' ? supertest(house.app) : agents[actor]
+  const request = agent[route.method](address).set('X-Requested-With', 'drenchleaf')
+  const response = await (body ? request.send(body) : request)
+  return { status: response.status, body: response.body as Record<string, unknown> }
+}
+
+const farmRoutes = ROUTES.filter((route) => Array.isArray(route.roles))
+
+describe('role × route × own, neighbour, unknown', () => {
+  it.each(farmRoutes.flatMap((route) => ACTORS.map((actor) => ({ route, actor, name: `${route.method} ${route.path}` }))))(
+    '$name as $actor',
+    async ({ route, actor }) => {
+      const own = await call(actor, route, addressOf(route, mine, mine.things), bodyFor(route, mine, (place += 1)))
+      if (actor === 'nobody') expect(own.status).toBe(401)
+      else if (actor === 'outsider' || actor === 'expired') expect(own.status).toBe(404)
+      else if (!route.roles.includes(actor)) expect(own.status).toBe(403)
+      else expect([200, 201, 409]).toContain(own.status)
+      if (actor === 'outsider') return
+      const foreign = await call(actor, route, addressOf(route, neighbour, neighbour.things), bodyFor(route, neighbour, (place += 1)))
+      expect(foreign.status).toBe(actor === 'nobody' ? 401 : 404)
+      expect(JSON.stringify(foreign.body)).not.toContain(neighbour.farm.id)
+      if (!route.path.includes(':id')) return
+      const unknown = await call(actor, route, addressOf(route, mine, null), bodyFor(route, mine, (place += 1)))
+      expect(unknown.status).toBe(actor === 'nobody' ? 401 : own.status === 403 ? 403 : 404)
+      if (foreign.status === 404 && unknown.status === 404) {
+        expect({ ...foreign.body, requestId: '' }).toEqual({ ...unknown.body, requestId: '' })
+      }
+    },
+  )
+})
+
+describe('routes outside a farm', () => {
+  it.each(ROUTES.filter((route) => route.roles === 'account').map((route) => ({ route, name: `${route.method} ${route.path}` })))(
+    '$name asks for a session',
+    async ({ route }) => {
+      const address = `/api${route.path.replace(':z/:x/:y', '1/0/0')}`
+      expect((await call('nobody', route, address, route.body ? {} : undefined)).status).toBe(401)
+    },
+  )
+
+  it('are only these without any session', () => {
+    expect(ROUTES.filter((route) => route.roles === 'everybody').map((route) => `${route.method} ${route.path}`)).toEqual([
+      'get /health', 'get /config', 'get /check/:code', 'get /welcome/:token', 'post /welcome', 'post /session',
+    ])
+  })
+
+  it('are all described to the outside', async () => {
+    const { default: supertest } = await import('supertest')
+    const { body } = await supertest(house.app).get('/api/openapi.json').expect(200)
+    const described = Object.entries(body.paths as Record<string, object>).flatMap(([path, methods]) => Object.keys(methods).map((method) => `${method} ${path}`))
+    expect(described.sort()).toEqual(ROUTES.map((route) => `${route.method} ${route.path.replace(/:(\w+)/g, '{$1}')}`).sort())
+    const page = await supertest(house.app).get('/api/docs').expect(200)
+    expect(page.text).toContain('POST /api/farms/{farmId}/records')
+  })
+
+  it('leave no other door: every router of the server is made from the list', () => {
+    const app = readFileSync('server/app.ts', 'utf8')
+    expect([...app.matchAll(/\bapi\.(get|post|put|delete)\('([^']+)'/g)].map((match) => match[2])).toEqual(['/openapi.json', '/docs', '/docs.css'])
+  })
+})

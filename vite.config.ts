@@ -1,0 +1,25 @@
+import vue from '@vitejs/plugin-vue'
+import { defineConfig } from 'vite'
+
+/** Where the server answers while the client is served by Vite. */
+const apiUrl = process.env['API_URL'] ?? 'http://127.0.0.1:3000'
+
+export default defineConfig({
+  plugins: [vue()],
+  // vue-i18n: messages are compiled to data, not with `new Function`, which the content security policy refuses.
+  define: {
+    __VUE_I18N_FULL_INSTALL__: false,
+    __VUE_I18N_LEGACY_API__: false,
+    __INTLIFY_JIT_COMPILATION__: true,
+    __INTLIFY_DROP_MESSAGE_COMPILER__: false,
+    __INTLIFY_PROD_DEVTOOLS__: false,
+  },
+  build: {
+    outDir: 'dist/client',
+    emptyOutDir: true,
+    // Nothing becomes a data: address, which the content security policy refuses.
+    assetsInlineLimit: 0,
+  },
+  server: { proxy: { '/api': apiUrl, '/dev': apiUrl } },
+  preview: { proxy: { '/api': apiUrl, '/dev': apiUrl } },
+})

@@ -1,0 +1,43 @@
+import vue from '@vitejs/plugin-vue'
+import { defineConfig } from 'vitest/config'
+
+export default defineConfig({
+  test: {
+    // One word for each kind of test: `npm test -- --only …` names them.
+    projects: [
+      {
+        test: {
+          name: 'unit',
+          environment: 'node',
+          include: ['tests/{unit,reference,house,cli}/**/*.test.ts'],
+          exclude: ['tests/unit/client/**'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        plugins: [vue()],
+        test: {
+          name: 'client',
+          environment: 'jsdom',
+          include: ['tests/unit/client/**/*.test.ts'],
+          // its modules import their own .css, which Node.js cannot
+          server: { deps: { inline: ['element-plus'] } },
+          testTimeout: 30_000,
+        },
+      },
+      {
+        test: {
+          name: 'api',
+          environment: 'node',
+          include: ['tests/api/**/*.test.ts'],
+          globalSetup: ['tests/support/globalSetup.ts'],
+          maxWorkers: 2,
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+    ],
+    allowOnly: false,
+  },
+})
