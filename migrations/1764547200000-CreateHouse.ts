@@ -38,8 +38,9 @@ export class CreateHouse1764547200000 implements MigrationInterface {
   async down(db: QueryRunner): Promise<void> {
     await db.query('DROP FUNCTION find_check_code(text)')
     await db.query('DROP FUNCTION account_access(uuid, timestamptz)')
-    for (const table of [...SEASON_TABLES].reverse()) await db.query(`DROP TABLE ${table}`)
-    for (const table of ['lot_entries', 'lots', 'materials', 'sprayers', 'blocks', 'journal', 'grants', 'people', 'season_counters', 'farm_heads', 'farms', 'account_tokens', 'accounts', 'sessions']) {
+    await db.query('DROP TABLE lot_entries')
+    for (const table of ['record_versions', 'record_components', 'record_lines', 'application_records']) await db.query(`DROP TABLE ${table}`)
+    for (const table of ['lots', 'materials', 'sprayers', 'blocks', 'journal', 'grants', 'people', 'season_counters', 'farm_heads', 'farms', 'account_tokens', 'accounts', 'sessions']) {
       await db.query(`DROP TABLE ${table}`)
     }
     await db.query('DROP FUNCTION refuse_change()')

@@ -21,7 +21,7 @@ function fromIssue(issue: core.$ZodIssue): FieldError[] {
     case 'too_big':
       return [{ path, code: 'field.too_big', params: { maximum: Number(issue.maximum) } }]
     case 'invalid_type':
-      return [{ path, code: issue.input === undefined ? 'field.required' : 'field.type', params: { expected: issue.expected } }]
+      return [{ path, code: issue.message.endsWith('received undefined') ? 'field.required' : 'field.type', params: { expected: issue.expected } }]
     default:
       return [{ path, code: 'field.format' }]
   }

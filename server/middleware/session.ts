@@ -10,8 +10,20 @@ const DAY_MS = 86_400_000
 /** A session ends after this long, whatever happens; a phone in the rows is not asked every morning. */
 const ABSOLUTE_MS = 30 * DAY_MS
 
+const makeAuthenticator = () => new passport.Passport()
+type Authenticator = ReturnType<typeof makeAuthenticator>
+
+/** Each server's own passport, so that two in one process never answer for each other. */
+const AUTHENTICATORS = new WeakMap<Services, Authenticator>()
+
+/** The passport that judges sign-ins of these services. @throws {Error} before `useSessions`. */
+export function authenticatorOf(services: Services): Authenticator {
+  const authenticator = AUTHENTICATORS.get(services)
+  if (!authenticator) throw new Error('Sessions are not set up')
+  return authenticator
+}
+
 declare global {
-  // eslint has no say in how Express lets a session's user be named.
   namespace Express {
     interface User {
       accountId: string
@@ -34,7 +46,9 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
     errorLog: (...words: unknown[]) => services.logger.warn({ words }, 'sessions'),
   })
   const secure = services.config.publicUrl?.startsWith('https:') ?? false
-  passport.use(
+  const authenticator = makeAuthenticator()
+  AUTHENTICATORS.set(services, authenticator)
+  authenticator.use(
     new LocalStrategy({ usernameField: 'email' }, (email, password, done) => {
       signIn(services, { email, password }).then(
         (account) => done(null, account ? { accountId: account.id } : false),
@@ -42,8 +56,8 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
       )
     }),
   )
-  passport.serializeUser((user, done) => done(null, user.accountId))
-  passport.deserializeUser((accountId: string, done) => done(null, { accountId }))
+  authenticator.serializeUser((user, done) => done(null, user.accountId))
+  authenticator.deserializeUser((accountId: string, done) => done(null, { accountId }))
   const handlers = [
     session({
       name: 'drenchleaf.sid',
@@ -54,8 +68,8 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
       proxy: secure,
       cookie: { httpOnly: true, sameSite: 'lax', secure, maxAge: ABSOLUTE_MS, path: '/' },
     }),
-    passport.initialize(),
-    passport.session(),
+    authenticator.initialize(),
+    authenticator.session(),
   ]
   return { handlers, close: () => store.close() }
 }

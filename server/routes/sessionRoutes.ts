@@ -1,7 +1,7 @@
-import passport from 'passport'
 import { z } from 'zod'
 import { sessionSchema, signInSchema } from '../../shared/contract/session.ts'
 import { AppError } from '../errors.ts'
+import { authenticatorOf } from '../middleware/session.ts'
 import { describeSession } from '../services/describeSession.ts'
 import { DEVICE_COOKIE, markDevice } from '../services/knownDevice.ts'
 import { defineRoute, type RouteCall } from './defineRoute.ts'
@@ -55,9 +55,9 @@ const deleteSession = defineRoute({
 export const sessionRoutes = [postSession, getSession, deleteSession]
 
 /** Lets passport judge the e-mail and password, and renew the session. */
-function authenticate({ request, response }: Pick<RouteCall<unknown, unknown, unknown, unknown>, 'request' | 'response'>): Promise<string> {
+function authenticate({ request, response, services }: Pick<RouteCall<unknown, unknown, unknown, unknown>, 'request' | 'response' | 'services'>): Promise<string> {
   return new Promise((resolve, reject) => {
-    const judge = passport.authenticate('local', (error: unknown, user: Express.User | false) => {
+    const judge = authenticatorOf(services).authenticate('local', (error: unknown, user: Express.User | false) => {
       if (error) return reject(error as Error)
       if (!user) return reject(new AppError('unauthenticated', 'session.wrong'))
       request.logIn(user, (fault: unknown) => (fault ? reject(fault as Error) : resolve(user.accountId)))

@@ -58,8 +58,8 @@ function findOutside(ring: readonly (readonly [number, number])[], path: string)
   if ((excess[worst] ?? 0) <= 0) return []
   const [lon = 0, lat = 0] = ring[worst] ?? []
   const isProjected = Math.abs(lon) > PROJECTED || Math.abs(lat) > PROJECTED
-  const params = isProjected ? { lon, lat, hint: 'degreesNeeded' } : { lon, lat }
-  const outside: GeometryFinding = { code: 'geometry.out_of_range', params, path: `${path}.${worst}` }
+  const code = isProjected ? 'geometry.degrees_needed' : 'geometry.out_of_range'
+  const outside: GeometryFinding = { code, params: { lon, lat }, path: `${path}.${worst}` }
   const runsOn = ring.every(([east, north]) => Math.abs(east) <= 360 && Math.abs(north) <= 90)
   return runsOn && ring.some(([east]) => Math.abs(east) < 180)
     ? [outside, { code: 'geometry.crosses_antimeridian', params: {}, path }]

@@ -15,13 +15,13 @@ export const MAX_POINTS = 5_000
  */
 export function readRings(geometry: unknown): ReadRings | { type: null; findings: GeometryFinding[] } {
   if (!isObject(geometry)) return refuse('geometry.type', { type: nameOf(geometry) })
-  if ('crs' in geometry) return refuse('geometry.crs', { hint: 'degreesNeeded' })
+  if ('crs' in geometry) return refuse('geometry.crs', {})
   const { type, coordinates } = geometry
   if (type !== 'Polygon' && type !== 'MultiPolygon') return refuse('geometry.type', { type: nameOf(type) })
   const nested: unknown = type === 'Polygon' ? [coordinates] : coordinates
   if (!isList(nested)) return refuse('geometry.coordinates', {}, 'coordinates')
   const count = countPoints(nested)
-  if (count > MAX_POINTS) return refuse('geometry.too_many_points', { points: count, max: MAX_POINTS })
+  if (count > MAX_POINTS) return refuse('geometry.too_many_points', { points: count, maximum: MAX_POINTS })
   const polygons: ReadRings['polygons'] = []
   for (const [part, rings] of nested.entries()) {
     const path = type === 'Polygon' ? 'coordinates' : `coordinates.${part}`

@@ -1,4 +1,4 @@
-import { createCoreContext, translate as coreTranslate } from '@intlify/core-base'
+import { compile, createCoreContext, registerMessageCompiler, registerMessageResolver, resolveValue, translate as coreTranslate } from '@intlify/core-base'
 import { en } from './en.ts'
 import { es } from './es.ts'
 
@@ -6,9 +6,13 @@ import { es } from './es.ts'
 export const LANGUAGES = ['en', 'es'] as const
 export type Language = (typeof LANGUAGES)[number]
 
+registerMessageCompiler(compile)
+registerMessageResolver(resolveValue)
+
+const common = { missingWarn: false, fallbackWarn: false }
 const contexts = {
-  en: createCoreContext({ locale: 'en', messages: { en }, missingWarn: false, fallbackWarn: false }),
-  es: createCoreContext({ locale: 'es', messages: { es }, missingWarn: false, fallbackWarn: false }),
+  en: createCoreContext({ ...common, locale: 'en', messages: { en } }),
+  es: createCoreContext({ ...common, locale: 'es', messages: { es } }),
 }
 
 /**

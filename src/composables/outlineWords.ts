@@ -8,7 +8,7 @@ const OWN_WORDS: Partial<Record<string, string>> = {
 }
 /** Codes whose words the refusals hold already. */
 const KNOWN = new Set([
-  'geometry.type', 'geometry.out_of_range', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
+  'geometry.type', 'geometry.out_of_range', 'geometry.degrees_needed', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
   'geometry.area_zero', 'geometry.spike', 'geometry.too_many_points', 'geometry.crosses_antimeridian',
 ])
 
@@ -17,9 +17,8 @@ export function outlineWords(language: Language, finding: GeometryFinding): stri
   const { code, params } = finding
   const own = OWN_WORDS[code]
   if (own !== undefined) return renderMessage(language, { id: own, params })
-  if (params['hint'] !== undefined) return translate(language, 'problems.geometry.degrees_needed')
   if (!KNOWN.has(code)) return translate(language, 'blocks.geometry.other')
-  return renderMessage(language, { id: `problems.${code}`, params: code === 'geometry.too_many_points' ? { maximum: 5000, ...params } : params })
+  return renderMessage(language, { id: `problems.${code}`, params })
 }
 
 /** Numbers (from 0) of the edges that cross, as found. */

@@ -14,13 +14,15 @@ interface GapFacts {
   zone: string
 }
 
-/** Fields that hold something that is no number; an empty field is not one of them. */
-function unreadable({ weather, amount }: RecordDraft): Gaps {
+/** Fields that hold something that is no number; an empty field is not one of them. Shown as one types. */
+export function unreadable({ weather, amount, water, components }: RecordDraft): Gaps {
   const isBad = (text: string, signed = false): boolean => text.trim() !== '' && !parseQuantityText(text, { signed }).ok
   return {
     ...(isBad(weather.wind.value) && { 'weather.wind': 'records.gap.number' }),
     ...(isBad(weather.air.value, true) && { 'weather.air': 'records.gap.number' }),
     ...(isBad(weather.humidity.value) && { 'weather.humidity': 'records.gap.number' }),
+    ...(isBad(water.value) && { water: 'records.gap.number' }),
+    ...Object.fromEntries(components.flatMap(({ value }, index) => (isBad(value) ? [[`components.${index}.basis`, 'records.gap.number' as const]] : []))),
     ...(amount.known !== 'workedOut' && isBad(amount.value) && { 'lines.0.amount': 'records.gap.number' }),
   }
 }

@@ -37,7 +37,9 @@ export function useBlockWork({ farmId, by, language, others, farmPlace }: Around
   const draft = useBlockDraft(farmId, by)
   const { content } = draft
   const outline = useOutline(content)
-  const typed = useTypedPoints(() => content.value.typed, language)
+  // Words of the form change the content too; only what was typed here is read again.
+  const text = computed(() => content.value.typed)
+  const typed = useTypedPoints(() => text.value, language)
 
   watch(typed.points, (points) => {
     if (content.value.by === 'points') outline.replace(points)
@@ -48,8 +50,8 @@ export function useBlockWork({ farmId, by, language, others, farmPlace }: Around
   function setBy(next: OutlineBy): void {
     if (next === content.value.by) return
     const isUntyped = content.value.typed.trim() === ''
-    const text = next === 'points' && (isUntyped || typed.errors.value.length === 0) ? formatPoints(content.value.points) : content.value.typed
-    content.value = { ...content.value, by: next, typed: text }
+    const fromMap = next === 'points' && (isUntyped || typed.errors.value.length === 0)
+    content.value = { ...content.value, by: next, typed: fromMap ? formatPoints(content.value.points) : content.value.typed }
   }
 
   return {

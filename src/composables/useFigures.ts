@@ -20,6 +20,8 @@ export function useFigures(): {
   language: ComputedRef<Language>
   /** An amount of an account: 791.3, 37.50, 0.800. */
   amount: (value: Figure) => string
+  /** The same with its litres: "791.3 L". */
+  litres: (value: Figure) => string
   /** At most four significant digits. */
   rate: (value: Figure) => string
   /** As exact as it is written, at most four decimals. */
@@ -35,9 +37,11 @@ export function useFigures(): {
   const language = computed(() => preferences.language)
   const unless = (value: Figure, words: (known: string | number) => string): string => (value === null || value === '' ? '' : words(value))
   const unit = (code: string): string => t(`units.${code}`)
+  const amount = (value: Figure): string => unless(value, (known) => formatNumber(known, { digits: digitsOf(known) }, language.value))
   return {
     language,
-    amount: (value) => unless(value, (known) => formatNumber(known, { digits: digitsOf(known) }, language.value)),
+    amount,
+    litres: (value) => unless(value, (known) => `${amount(known)}\u00A0${unit('L')}`),
     rate: (value) => unless(value, (known) => formatRate(known, language.value)),
     plain: (value) => unless(value, (known) => formatNumber(known, {}, language.value)),
     hectares: (areaM2) => unless(areaM2, (known) => formatHectares(known, language.value)),

@@ -29,8 +29,9 @@ export interface Outline {
 export function useOutline(content: Ref<BlockDraftContent>): Outline {
   const cross = ref<Position | null>(null) as Ref<Position | null>
   const steps = useSteps(content)
+  const corners = computed(() => content.value.points)
   const check = computed(() => {
-    const outline = outlineOf(content.value.points)
+    const outline = outlineOf(corners.value)
     return outline === null ? { geometry: null, findings: [] } : checkBoundary(outline)
   })
   const geometry = computed(() => check.value.geometry)

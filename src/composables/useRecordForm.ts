@@ -1,8 +1,9 @@
 import { onScopeDispose, ref, shallowRef, watch, type Ref } from 'vue'
 import { recordSheet } from '../../shared/mix/recordSheet.ts'
-import { ApiError, NetworkError } from '../api/errors.ts'
+import { NetworkError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
 import { now } from '../plugins/clock.ts'
+import { isNotFound } from './isNotFound.ts'
 import { contentOf, sheetInputOf } from './recordContent.ts'
 import { draftLike, draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
 import { useDrafts } from './useDrafts.ts'
@@ -66,7 +67,7 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
       const record = await recordApi.read(farmId, id)
       return record.state === 'started' || record.state === 'draft' ? draftOfRecord(record, farm?.zone ?? 'UTC') : 'signed'
     } catch (error) {
-      if (error instanceof NetworkError || (error instanceof ApiError && error.problem.status === 404)) return null
+      if (error instanceof NetworkError || isNotFound(error)) return null
       throw error
     }
   }

@@ -47,12 +47,11 @@ export function useRegister(): Register {
 
   const sums = computed(() => sumRegisterRows(items.value))
   const sumWords = computed(() => {
-    const { signed, withdrawn, unsigned, areaHa, totalL } = sums.value
+    const { signed, withdrawn, areaHa, totalL } = sums.value
     if (items.value.length === 0) return null
     const number = (count: number): string => formatNumber(count, { digits: 0 }, preferences.language)
     const parts = [t('register.sum.signed', { number: number(signed) }, signed)]
     if (withdrawn > 0) parts.push(t('register.sum.withdrawn', { number: number(withdrawn) }, withdrawn))
-    if (unsigned > 0) parts.push(t('register.sum.unsigned', { number: number(unsigned) }, unsigned))
     return {
       words: parts.join(', '),
       hectares: formatNumber(areaHa, { digits: 2 }, preferences.language),

@@ -27,7 +27,7 @@ export function useRowKeys({ ids, chosen, choose, open }: RowKeys): void {
   function onKey(event: KeyboardEvent): void {
     if (event.defaultPrevented || event.ctrlKey || event.metaKey || event.altKey) return
     const target = event.target instanceof Element ? event.target : null
-    if (target?.closest(TYPING) || document.querySelector('[role="dialog"][aria-modal="true"]')) return
+    if (target?.closest(TYPING) || isDialogOpen()) return
     const key = event.key.toLowerCase()
     if (key === 'j' || key === 'k') {
       event.preventDefault()
@@ -43,4 +43,9 @@ export function useRowKeys({ ids, chosen, choose, open }: RowKeys): void {
 
   onMounted(() => { window.addEventListener('keydown', onKey) })
   onBeforeUnmount(() => { window.removeEventListener('keydown', onKey) })
+}
+
+/** Closed dialogs may stay in the page without a box. */
+function isDialogOpen(): boolean {
+  return [...document.querySelectorAll('[role="dialog"]')].some((dialog) => dialog.getClientRects().length > 0)
 }

@@ -1,12 +1,14 @@
 import { computed, type ComputedRef } from 'vue'
 import { dayLine, type DaySentence } from '../../shared/today/dayLine.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
-import type { Boundary } from '../../shared/contract/block.ts'
-import type { RegisterRow } from '../../shared/contract/record.ts'
+import type { Block, Boundary } from '../../shared/contract/block.ts'
+import type { Method, RegisterRow } from '../../shared/contract/record.ts'
+import { lastOnBlocks } from '../../shared/register/lastOnBlocks.ts'
 import type { RegisterLine } from '../../shared/register/registerLine.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
+import { useBlocks } from './useBlocks.ts'
 import { useInputs, type Inputs } from './useInputs.ts'
 import type { LotLine } from './useLotWords.ts'
 import { useRecords } from './useRecords.ts'
@@ -14,6 +16,12 @@ import { useRegisterLines } from './useRegisterLines.ts'
 
 /** Lots that end this soon are named in the day line. */
 const LINE_DAYS = 7
+
+/** One block with the last work on it in words. */
+export interface BlockLine {
+  block: Block
+  last: { method: Method; preparation: string; day: string } | null
+}
 
 export interface Today {
   /** "Tuesday 16 June" at the farm; empty until the farm is read. */
@@ -23,6 +31,10 @@ export interface Today {
   startedLines: ComputedRef<RegisterLine[]>
   doneLines: ComputedRef<{ line: RegisterLine; signedAt: string }[]>
   endingLots: ComputedRef<LotLine[]>
+  /** The last work on each block among the rows that were read, longest ago first. */
+  blockLines: ComputedRef<BlockLine[]>
+  /** How many rows that was. */
+  rowsRead: ComputedRef<number>
   outlines: ComputedRef<ReadonlyMap<string, Boundary>>
   inputs: Inputs
   started: ReturnType<typeof useRecords>
@@ -41,6 +53,7 @@ export function useToday(): Today {
   const inputs = useInputs()
   const { place, draftLines, present, outlines } = useRegisterLines()
   const { today } = inputs
+  const { data: blocks } = useBlocks(farmId)
 
   const rowsOf = (read: ReturnType<typeof useRecords>): RegisterRow[] => read.data.value?.pages.flatMap(({ items }) => items) ?? []
   const startedLines = computed(() => present(rowsOf(started).filter(({ state }) => state === 'started')))
@@ -54,6 +67,11 @@ export function useToday(): Today {
       .flatMap(({ row, at }) => present([row]).map((line) => ({ line, signedAt: civilTimeIn(zone, at) })))
   })
   const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
+
+  const blockLines = computed(() => lastOnBlocks(blocks.value ?? [], rowsOf(newest)).map(({ block, row }) => {
+    const [line] = row === null ? [] : present([row])
+    return { block, last: line?.method == null ? null : { method: line.method, preparation: line.preparation, day: line.day } }
+  }))
 
   const sentences = computed(() => {
     const lots = endingLots.value
@@ -73,7 +91,8 @@ export function useToday(): Today {
     title: computed(() => (today.value === null ? '' : capital(formatDay(preferences.language, today.value, { weekday: true, year: false })))),
     sentences,
     openLines: computed(() => [...startedLines.value, ...draftLines.value]),
-    startedLines, doneLines, endingLots, outlines, inputs, started, newest,
+    startedLines, doneLines, endingLots, blockLines, outlines, inputs, started, newest,
+    rowsRead: computed(() => rowsOf(newest).length),
     ready: computed(() => place.value !== null && newest.data.value !== undefined && inputs.ready.value),
   }
 }

@@ -44,6 +44,8 @@ function makeWritable(folder) {
     return realpathSync(folder)
   } catch (error) {
     const code = /** @type {NodeJS.ErrnoException} */ (error).code
+    // Node.js says ENOENT where a folder above is on a read-only disk
+    if (code === 'ENOENT') throw new OneLine(`${folder} cannot be made: the folder above it takes no new ones. Choose another folder with DATA_DIR.`)
     if (code === 'EEXIST' || code === 'ENOTDIR') throw new OneLine(`${folder} cannot be made: a file stands in its way. Choose another folder with DATA_DIR.`)
     const line = fileProblem(Object.assign(new Error(), { code, path: folder }))
     throw line === undefined ? error : new OneLine(line)
@@ -52,8 +54,10 @@ function makeWritable(folder) {
 
 /** Root makes a folder in another user's checkout for that user. @param {string} folder */
 function makeForItsOwner(folder) {
-  const made = mkdirSync(folder, { recursive: true, mode: 0o700 })
-  if (made !== folder || process.getuid?.() !== 0) return
+  if (existsSync(folder)) return
+  mkdirSync(dirname(folder), { recursive: true })
+  mkdirSync(folder, { mode: 0o700 })
+  if (process.getuid?.() !== 0) return
   const { uid, gid } = statSync(dirname(folder))
   if (uid !== 0) chownSync(folder, uid, gid)
 }

@@ -28,7 +28,7 @@ const isThere = {
 export async function ensureSystemPackages(names, context) {
   const missing = names.filter((name) => !isThere[name]())
   if (missing.length === 0) return
-  const command = `apt-get install -y --no-install-recommends ${missing.join(' ')}`
+  const command = `apt-get update && apt-get install -y --no-install-recommends ${missing.join(' ')}`
   if (!existsSync('/usr/bin/apt-get')) throw new OneLine(`Missing on this machine: ${missing.join(', ')}. Install them as this system does it.`)
   if (process.getuid?.() !== 0) throw new OneLine(`Missing on this machine: ${missing.join(', ')}. As root, run: ${command}`)
   const startedAt = performance.now()

@@ -22,7 +22,7 @@ export interface BlockPlan {
 }
 
 const CODE: TextStyle = { size: 12, leading: 14, weight: 'bold', color: ELDER }
-const SMALL_CODES = [{ ...CODE, size: 8.5, leading: 10 }, { ...CODE, size: 6, leading: 7 }] as const
+const SMALL_CODES = [{ ...CODE, size: 8.5, leading: 10 }, { ...CODE, size: 6.5, leading: 7.5 }, { ...CODE, size: 5, leading: 6 }] as const
 const NAME: TextStyle = { size: 7.5, leading: 9, weight: 'italic', color: '#000000' }
 const NEIGHBOUR: TextStyle = { size: 7.5, leading: 9, weight: 'regular', color: '#555555' }
 
@@ -43,7 +43,7 @@ export function drawBlockPlan(canvas: Canvas, parent: Element, { plan, frame }: 
     drawSurroundings(drawing, plan)
     nameSurroundings(drawing, plan)
     drawBlocks(drawing, plan)
-    for (const block of plan.blocks) writeBlock(drawing, block)
+    for (const block of plan.blocks) writeBlock(drawing, block, { isAlone: plan.blocks.length === 1 })
     doc.restore()
     doc.lineWidth(0.6).rect(frame.x, frame.y, frame.width, frame.height).stroke('#000000')
     const words = { scale: plan.words.scale(view.denominator), north: plan.words.north }
@@ -142,8 +142,8 @@ function writeSiteName(drawing: Drawing, name: string, geometry: PlanSite['geome
   return true
 }
 
-/** Code and area inside the block where there is room, else the code in the largest size that fits, else beside it. */
-function writeBlock({ canvas, frame, ...place }: Drawing, { code, note, geometry }: BlockPlan['blocks'][number]): void {
+/** Code and area inside the block where there is room, else the code in the largest size that fits; a lone one beside it. */
+function writeBlock({ canvas, frame, ...place }: Drawing, { code, note, geometry }: BlockPlan['blocks'][number], { isAlone }: { isAlone: boolean }): void {
   const rings = toPageRings(geometry, place)
   const full: Label = [{ text: code, style: CODE }, { text: note, style: STYLES.small }]
   const labels: Label[] = [full, ...SMALL_CODES.map((style) => [{ text: code, style }])]
@@ -151,8 +151,10 @@ function writeBlock({ canvas, frame, ...place }: Drawing, { code, note, geometry
     const height = label.reduce((sum, { style }) => sum + style.leading, 0)
     const width = Math.max(...label.map(({ text, style }) => measureText(canvas, text, style)))
     const room = findLabelPlace(rings, frame, height)
-    if (room && room.width > width + 4) return writeAt(canvas, room, label)
+    if (room && room.width > width + 3) return writeAt(canvas, room, label)
   }
+  // Beside one of several it might stand in another's ground; the table names them all.
+  if (!isAlone) return
   const style = SMALL_CODES[0]
   const right = Math.max(...rings.flat().map(([x]) => x))
   const ys = rings.flat().map(([, y]) => y)

@@ -24,6 +24,8 @@ export interface TableRow {
   opensGroup?: boolean
   /** Stands on the same page as the row after it. */
   keepsWithNext?: boolean
+  /** Words that stand again in the first cell where a page begins with this row, in the middle of a group. */
+  continued?: readonly Span[]
   /** Drawn over the cell at this column by readers by eye alone. */
   mark?: { column: number; draw: (at: { x: number; y: number }) => void }
 }
@@ -56,6 +58,7 @@ export function drawLedgerTable(flow: Flow, parent: Element, table: Table): void
     if (!isKept && keptHeight(rows, index) > roomLeft(flow) && index > 0) {
       turnPage(flow)
       flow.y += drawHeads(flow, table, { heads, head: null })
+      drawContinued(flow, table, set.row)
     }
     drawRow(flow, table, { set, parent: body })
   })
@@ -157,6 +160,13 @@ function drawRow(flow: Flow, table: Table, { set, parent }: { set: SetRow; paren
   drawAccountLines(canvas, table, { top: y, bottom: y + height - (row.isTotal ? 2.5 : 0) })
   drawRowRules(canvas, table, { row, top: y, bottom: y + height })
   flow.y += height
+}
+
+function drawContinued({ canvas, y }: Flow, table: Table, { continued }: TableRow): void {
+  if (!continued) return
+  const box = innerBox(table, 0)
+  const lines = wrapText(canvas, continued, box.width)
+  drawArtifact(canvas, () => drawLines(canvas, lines, { ...box, y: y + table.padding, leading: table.leading }), 'Pagination')
 }
 
 function drawRowRules(canvas: Canvas, table: Table, { row, top, bottom }: { row: TableRow; top: number; bottom: number }): void {

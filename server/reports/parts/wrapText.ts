@@ -93,8 +93,10 @@ function cutWord(canvas: Canvas, spans: readonly Span[], { lines, width }: { lin
   }
 }
 
+/** A line's width is that of what is seen; the space it ends in stays, so that who copies or hears it does not run words together. */
 function trimLine(canvas: Canvas, { spans }: Line): Line {
-  const last = spans.at(-1)
-  if (last) last.text = last.text.replace(/ +$/, '')
-  return { spans, width: widthOf(canvas, spans) }
+  const seen = spans.map(({ text, style }, index) => ({ text: index === spans.length - 1 ? text.replace(/ +$/, '') : text, style }))
+  const ends = spans.at(-1)
+  if (ends) ends.text = ends.text.replace(/ +$/, ' ')
+  return { spans, width: widthOf(canvas, seen) }
 }

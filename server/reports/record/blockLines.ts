@@ -58,13 +58,13 @@ export function blockLinesTable({ signed, figures, words, isWide, place }: Lines
 
 function columns({ words: { say }, isWide, width }: { words: ReportWords; isWide: boolean; width: number }): Column[] {
   const fixed: Column[] = [
-    { head: say('lines.hectares'), width: isWide ? 50 : 42, align: 'right' },
+    { head: say('lines.hectares'), width: isWide ? 46 : 42, align: 'right' },
     { head: say('lines.start'), width: isWide ? 48 : 38, align: 'right', opensAccount: true },
     { head: say('lines.end'), width: isWide ? 46 : 36, align: 'right' },
     { head: say('lines.litres'), width: isWide ? 68 : 50, align: 'right', opensAccount: true },
-    { head: say('lines.known'), width: isWide ? 68 : 60 },
+    { head: say('lines.known'), width: 60 },
   ]
-  const extra: Column[] = isWide ? [{ head: say('facts.crop'), width: 92 }, { head: say('lines.boundary'), width: 52 }] : []
+  const extra: Column[] = isWide ? [{ head: say('facts.crop'), width: 92 }, { head: say('lines.boundary'), width: 50 }] : []
   const used = [...fixed, ...extra].reduce((sum, column) => sum + column.width, 0)
   return [{ head: say('lines.block'), width: width - used }, ...extra, ...fixed]
 }

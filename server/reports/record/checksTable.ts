@@ -5,6 +5,7 @@ import { drawVerdictMark } from '../parts/drawMarks.ts'
 import type { Table, TableRow } from '../parts/ledgerTable.ts'
 import { measureText } from '../parts/setText.ts'
 import { STYLES } from '../parts/styles.ts'
+import type { Span } from '../parts/wrapText.ts'
 import type { ReportWords } from './reportWords.ts'
 
 /** Checks by what they rest on, the worst first in each; equal ones keep their order. */
@@ -43,6 +44,7 @@ export function checksTable({ canvas, checks, words, place }: ChecksInput): Tabl
       opensGroup: opensGroup && index > 0,
       keepsWithNext: opensGroup && !isSecond && grouped[index + 1]?.rests === check.rests,
       mark: { column: 1, draw: ({ x, y }) => drawVerdictMark(canvas, check.verdict, { x, y: y + 0.8, size: 9 }) },
+      ...(!opensGroup && { continued: restsSpans(check, words) }),
       cells: cellsOf(check, { words, showsRests: opensGroup }),
     }
   })
@@ -64,7 +66,7 @@ function cellsOf(check: Check, { words, showsRests }: { words: ReportWords; show
   const { say, language } = words
   const { title, figure, text, source } = check
   return [
-    showsRests ? [{ text: say(`checks.rests.${check.rests}`), style: STYLES.smallBold }] : [],
+    showsRests ? restsSpans(check, words) : [],
     [],
     [{ text: say(`checks.verdict.${check.verdict}`), style: STYLES.smallSemibold }],
     [{ text: renderMessage(language, title), style: STYLES.small }],
@@ -72,4 +74,8 @@ function cellsOf(check: Check, { words, showsRests }: { words: ReportWords; show
     [{ text: renderMessage(language, text), style: STYLES.small }],
     source ? [{ text: say('checks.source', { source: renderMessage(language, source) }), style: STYLES.note }] : [],
   ]
+}
+
+function restsSpans({ rests }: Check, { say }: ReportWords): Span[] {
+  return [{ text: say(`checks.rests.${rests}`), style: STYLES.smallBold }]
 }

@@ -30,11 +30,11 @@ export function mixAside({ content }: SignedRecord, { say, typed, unit }: Report
 
 function columns({ say }: ReportWords, width: number): Column[] {
   const fixed: Column[] = [
-    { head: say('mix.lot'), width: 78 },
-    { head: say('mix.measure'), width: 74 },
+    { head: say('mix.lot'), width: 74 },
+    { head: say('mix.measure'), width: 78 },
     { head: say('mix.known'), width: 60 },
     { head: say('mix.inAll'), width: 62, align: 'right', opensAccount: true },
-    { head: say('mix.perHa'), width: 46, align: 'right' },
+    { head: say('mix.perHa'), width: 50, align: 'right' },
     { head: say('mix.fullLoad'), width: 44, align: 'right' },
     { head: say('mix.lastLoad'), width: 44, align: 'right' },
   ]

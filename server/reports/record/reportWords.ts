@@ -57,6 +57,7 @@ export function openWords(language: Language, zone: string): ReportWords {
 }
 
 function roundingOf(value: number): { digits: number } | { significant: number } {
+  if (value >= 10_000) return { digits: 0 }
   if (value >= 100 || value === 0) return { digits: 1 }
   return value >= 1 ? { digits: 2 } : { significant: 3 }
 }

@@ -51,7 +51,7 @@ export const farm = {
     open: 'Open the register',
     isOpen: 'open now',
     checksTitle: 'What you see',
-    outside: { title: 'Outside the grant', text: 'Other seasons of these farms, and what was never written down, are not shown.' },
+    outside: 'Other seasons of these farms, and what was never written down, are not shown.',
     foot: 'A record shown here says what was written and signed. It says nothing about whether it is true.',
     none: 'No farm has granted you a season yet.',
     noneText: 'The owner of a farm grants it to your e-mail.',

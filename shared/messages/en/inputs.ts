@@ -6,7 +6,7 @@ export const inputs = {
   readOnly: 'The manager writes these down.',
   newMaterial: 'New material',
   receiveLot: 'Receive a lot',
-  count: 'Correct the count',
+  count: 'Correct count',
   cancel: 'Cancel',
   nothing: '–',
   kept: 'Kept on this device. It is sent as soon as there is signal.',

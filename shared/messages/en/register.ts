@@ -57,13 +57,13 @@ export const register = {
     draft: 'On this device',
   },
   sum: {
-    signed: '{number} signed record of the rows shown | {number} signed records of the rows shown',
-    withdrawn: '{number} withdrawn and not counted',
-    unsigned: '{number} not signed and not counted',
+    signed: '{number} signed | {number} signed',
+    withdrawn: '{number} withdrawn and not counted | {number} withdrawn and not counted',
   },
   foot: {
-    rows: 'Rows 1 to {last}.',
+    rows: 'Rows 1 to {last}; the totals are of these rows.',
     rowsAll: 'Rows 1 to {last}, all there are.',
+    unsigned: '{number} not signed, in no total.',
     walk: '{j} and {k} walk the rows, {enter} opens.',
     late: 'entered more than 24 h after it was done: {late} of {signed} shown',
   },
@@ -86,6 +86,7 @@ export const register = {
     code: 'Check code',
     codeText: 'Entry {seq} of the log. While the code agrees, nothing was changed since; it does not show that it is true.',
     none: 'Nothing was judged.',
+    empty: 'Without a record there is nothing to check.',
     peek: 'Checks of {number}',
   },
 }

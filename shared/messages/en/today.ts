@@ -47,6 +47,11 @@ export const today = {
     failed: 'The lots did not come.',
     low: 'nearly empty',
   },
+  blocks: {
+    title: 'Last work on each block',
+    more: 'longest ago first, of the last {number} record | longest ago first, of the last {number} records',
+    none: 'none in these records',
+  },
   checks: {
     title: 'What needs eyes',
     none: 'No lot is past its last day, and what is on the shelf says what its status rests on.',

@@ -51,7 +51,7 @@ export const farm = {
     open: 'Abrir el registro',
     isOpen: 'abierta ahora',
     checksTitle: 'Lo que usted ve',
-    outside: { title: 'Fuera de la concesión', text: 'Otras campañas de estas fincas, y lo que nunca se escribió, no se muestran.' },
+    outside: 'Otras campañas de estas fincas, y lo que nunca se escribió, no se muestran.',
     foot: 'Un registro mostrado aquí dice lo que se escribió y firmó. No dice si es verdad.',
     none: 'Ninguna finca le ha concedido una campaña todavía.',
     noneText: 'Quien es titular de una finca la concede a su correo.',

@@ -6,7 +6,7 @@ export const inputs = {
   readOnly: 'Los anota quien dirige la temporada.',
   newMaterial: 'Nuevo material',
   receiveLot: 'Recibir un lote',
-  count: 'Corregir el recuento',
+  count: 'Corregir',
   cancel: 'Cancelar',
   nothing: '–',
   kept: 'Guardado en este dispositivo. Se envía en cuanto haya señal.',
@@ -98,7 +98,7 @@ export const inputs = {
     all: 'Lo que pide atención en todos los insumos',
     peek: 'Lo que pide atención',
   },
-  choose: 'Mostrar {name} en la columna de controles',
+  choose: 'Mostrar {name} en la columna de comprobaciones',
   form: {
     materialTitle: 'Anotar un material',
     materialSave: 'Anotar',

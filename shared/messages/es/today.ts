@@ -1,6 +1,6 @@
 /** Words of today. */
 export const today = {
-  newRecord: 'Nueva anotación',
+  newRecord: 'Nuevo registro',
   goOn: 'Seguir',
   goOnWith: 'Seguir con {codes}',
   goOnName: 'Seguir con {what}',
@@ -8,10 +8,10 @@ export const today = {
   failed: 'El día de hoy no llegó.',
   title: 'Hoy',
   line: {
-    startedOne: '{codes}: empezada y sin firmar.',
-    startedMany: '{figure} anotaciones están empezadas y sin firmar.',
+    startedOne: '{codes}: empezado y sin firmar.',
+    startedMany: '{figure} registros están empezados y sin firmar.',
     drafts: '{figure} borrador espera en este dispositivo. | {figure} borradores esperan en este dispositivo.',
-    signed: '{figure} anotación firmada hoy. | {figure} anotaciones firmadas hoy.',
+    signed: '{figure} registro firmado hoy. | {figure} registros firmados hoy.',
     noneSigned: 'Hoy aún no se ha firmado nada.',
     pastOne: 'El lote {figure} ha pasado su uso.',
     pastMany: '{figure} lotes han pasado su uso.',
@@ -21,15 +21,15 @@ export const today = {
   },
   open: {
     title: 'Aún sin firmar',
-    more: '{number} empezadas',
+    more: '{number} empezados',
     empty: 'Nada espera una firma.',
-    emptyText: 'Un borrador aparece aquí desde la primera tecla; una anotación empezada, hasta que se firma.',
-    failed: 'Las anotaciones empezadas no llegaron.',
+    emptyText: 'Un borrador aparece aquí desde la primera tecla; un registro empezado, hasta que se firma.',
+    failed: 'Los registros empezados no llegaron.',
     failedKept: 'Los borradores de este dispositivo están aquí.',
     draft: 'borrador',
-    started: 'empezada',
+    started: 'empezado',
     since: 'empezado el {day} {time}',
-    startedAt: 'empezada el {day} {time}',
+    startedAt: 'empezado el {day} {time}',
   },
   done: {
     title: 'Hoy hasta ahora',
@@ -37,7 +37,7 @@ export const today = {
     empty: 'Hoy aún no se ha firmado nada.',
     failed: 'Lo firmado hoy no llegó.',
     row: '{codes}, {preparation}, por {name}',
-    at: 'firmada a las {time}',
+    at: 'firmado a las {time}',
   },
   ends: {
     title: 'Se acaba o caduca',
@@ -46,6 +46,11 @@ export const today = {
     noLots: 'Aún no hay lotes anotados.',
     failed: 'Los lotes no llegaron.',
     low: 'casi vacío',
+  },
+  blocks: {
+    title: 'Último trabajo en cada parcela',
+    more: 'lo más lejano primero, del último registro | lo más lejano primero, de los últimos {number} registros',
+    none: 'ninguno en estos registros',
   },
   checks: {
     title: 'Lo que pide atención',

@@ -23,8 +23,8 @@ export interface FarmMap {
   /** Ground tiles under everything, or bare paper where there are none. */
   setTiles(url: string | null): void
   setView(view: MapView): void
-  /** Shows all of these positions with a margin in pixels. */
-  fit(positions: readonly Position[], marginPx: number): void
+  /** Shows all of these positions with a margin in pixels, another one below. */
+  fit(positions: readonly Position[], marginPx: number, bottomPx: number): void
   /** Moves as little as brings the position into view. */
   bringIntoView(position: Position): void
   pan(dx: number, dy: number): void
@@ -47,7 +47,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
   const map = makeMap(host)
   const renderer = svg({ padding: 0.5 })
   const blocks = createBlockLayer(map, renderer, events.chosen)
-  const draft = createDraftLayer(map, renderer)
+  const draft = createDraftLayer(map)
   const labels = createLabelLayer(map)
   let shown: { blocks: readonly MapBlock[]; chosenId: string | null } = { blocks: [], chosenId: null }
   let tiles: ReturnType<typeof tileLayer> | null = null
@@ -82,7 +82,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
       tiles = url === null ? null : tileLayer(url, { maxZoom: MOST_ZOOM, className: 'map-ground' }).addTo(map)
     },
     setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),
-    fit: (positions, marginPx) => move(() => fitTo(map, positions, marginPx)),
+    fit: (positions, marginPx, bottomPx) => move(() => fitTo(map, positions, [marginPx, marginPx], [marginPx, bottomPx])),
     bringIntoView: (position) => move(() => map.panInside(toLatLng(position), { padding: EDGE_PX, animate: false })),
     pan: (dx, dy) => move(() => map.panBy([dx, dy], { animate: false })),
     view: () => viewOf(map),
@@ -101,10 +101,10 @@ function makeMap(host: HTMLElement): LeafletMap {
   }).setView(toLatLng(WORLD.centre), WORLD.zoom)
 }
 
-function fitTo(map: LeafletMap, positions: readonly Position[], marginPx: number): void {
+function fitTo(map: LeafletMap, positions: readonly Position[], topLeft: [number, number], bottomRight: [number, number]): void {
   if (positions.length === 0) return
   const bounds = latLngBounds(positions.map(toLatLng))
-  map.fitBounds(bounds, { padding: [marginPx, marginPx], maxZoom: MOST_FIT_ZOOM, animate: false })
+  map.fitBounds(bounds, { paddingTopLeft: topLeft, paddingBottomRight: bottomRight, maxZoom: MOST_FIT_ZOOM, animate: false })
 }
 
 function viewOf(map: LeafletMap): MapView {

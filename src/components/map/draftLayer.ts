@@ -1,4 +1,4 @@
-import { divIcon, layerGroup, marker, polygon, polyline, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Renderer } from 'leaflet'
+import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Renderer } from 'leaflet'
 import { handleMarker } from './handleMarker.ts'
 import { toLatLng } from './leafletGeometry.ts'
 import type { MapDraft } from '../../composables/mapTypes.ts'
@@ -11,7 +11,13 @@ export interface DraftLayer {
   show(draft: MapDraft | null): void
 }
 
-export function createDraftLayer(map: LeafletMap, renderer: Renderer): DraftLayer {
+/** Over the blocks, under the labels. */
+const PANE = 'draft'
+const PANE_LAYER = '450'
+
+export function createDraftLayer(map: LeafletMap): DraftLayer {
+  map.createPane(PANE).style.zIndex = PANE_LAYER
+  const renderer = svg({ padding: 0.5, pane: PANE })
   const group = layerGroup().addTo(map)
   return {
     show(draft) {

@@ -6,5 +6,6 @@ export function handleMarker(at: LatLngTuple, className: string): Marker {
     icon: divIcon({ className, iconSize: [8, 8] }),
     interactive: false,
     keyboard: false,
+    zIndexOffset: 600,
   })
 }

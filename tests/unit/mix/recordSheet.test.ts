@@ -32,7 +32,7 @@ describe('recordSheet from water', () => {
     }))
     expect(components[0]?.amount).toEqual({ value: '60', unit: 'flozUS' })
     expect(components[0]?.inL).toBe('1.77441177375')
-    expect(components[1]?.inKg).toBe('4.04685642240001')
+    expect(components[1]?.inKg).toBe('4.0468564224')
     expect(totalL).toBe(601.77441177375)
   })
 

@@ -1,0 +1,109 @@
+import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import { useI18n } from 'vue-i18n'
+import { workingLines } from '../../shared/checks/workingLines.ts'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import { now } from '../plugins/clock.ts'
+import { fieldErrors } from './fieldErrors.ts'
+import { contentOf } from './recordContent.ts'
+import { momentAt } from './recordDraft.ts'
+import { signGaps, startGap, unreadable, type Gaps } from './recordGaps.ts'
+import { useFigures } from './useFigures.ts'
+import { useMessages } from './useMessages.ts'
+import { useMixRows } from './useMixRows.ts'
+import { useRecordChecks } from './useRecordChecks.ts'
+import { useRecordForm } from './useRecordForm.ts'
+import { useRecordSend } from './useRecordSend.ts'
+import { useRecordSheet } from './useRecordSheet.ts'
+import { useRecordStock } from './useRecordStock.ts'
+import { useSigning } from './useSigning.ts'
+import { useTask } from './useTask.ts'
+
+/** A refusal speaks of `components.0.basis.kind`; the form has one field for it. */
+function fieldOf(path: string): string {
+  const depth = path.startsWith('weather') ? 2 : 3
+  return path.split('.').slice(0, depth).join('.')
+}
+
+/** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
+export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string }) {
+  const { t } = useI18n()
+  const { language } = useFigures()
+  const { problem } = useMessages()
+  const { stock, ready: stockReady, error: stockError, again } = useRecordStock()
+  const form = useRecordForm({ ...options, stock, stockReady })
+  const { draft } = form
+  const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
+  const { sheet, block, sprayer } = useRecordSheet(draft, stock)
+  const checking = useRecordChecks(draft, stock, sheet)
+  const mix = useMixRows({ draft, sheet, stock })
+  const signed = ref<ApplicationRecord | null>(null)
+  const tried = ref(false)
+
+  const send = useRecordSend({
+    id: options.id, draft, farmId: () => stock.value.farmId,
+    content: () => contentOf(draft.value, { zone: zone.value, sheet: sheet.value, happened: draft.value.step === 2 }),
+  })
+  const facts = (): { draft: typeof draft.value; sheet: typeof sheet.value; zone: string } => ({ draft: draft.value, sheet: sheet.value, zone: zone.value })
+  const gaps = computed(() => signGaps({ ...facts(), hasStops: checking.stops.value.length > 0 }))
+
+  const starting = useTask(async () => {
+    const before = draft.value.start
+    draft.value.start = momentAt(zone.value, now().toISOString())
+    try {
+      const outcome = await send.save()
+      draft.value.step = 2
+      return outcome
+    } catch (error) {
+      draft.value.start = before
+      throw error
+    }
+  })
+  const signing = useSigning({ draft, stops: checking.stops, sign: send.sign })
+
+  async function sign(): Promise<void> {
+    tried.value = true
+    if (Object.keys(gaps.value).length > 0 || signing.password.value === '') return
+    const answer = await signing.run()
+    if (answer === undefined || answer === 'kept') return
+    signed.value = answer
+    await form.discard()
+  }
+
+  return {
+    ...form, ...checking, ...mix, stock, stockError, again, zone, sheet, block, sprayer, signed, signing, sign,
+    start: (): Promise<unknown> => (starting.running.value ? Promise.resolve() : starting.run()),
+    starting: starting.running,
+    startFailed: computed(() => (starting.error.value === null ? '' : t('records.sign.notStarted', { reason: problem(starting.error.value) }))),
+    startGap: computed(() => { const gap = startGap(facts()); return gap === null ? '' : t(gap) }),
+    signError: computed(() => {
+      if (!tried.value) return ''
+      if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
+      return signing.words.value || (signing.password.value === '' ? t('records.sign.needPassword') : '')
+    }),
+    errors: formErrors({ gaps, live: computed(() => unreadable(draft.value)), tried, refusals: [starting.error, signing.error] }),
+    working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),
+    keepOut: computed(() => {
+      const hold = checking.checks.value.find(({ code }) => code === 'label.reEntry')
+      return hold?.figure ? renderMessage(language.value, hold.figure) : ''
+    }),
+  }
+}
+
+interface ErrorSources {
+  gaps: Ref<Gaps>
+  live: Ref<Gaps>
+  tried: Ref<boolean>
+  refusals: Ref<unknown>[]
+}
+
+/** The sentence of each field: what is no number as one types, what is missing once signing was tried, what the server refused. */
+function formErrors({ gaps, live, tried, refusals }: ErrorSources): ComputedRef<Record<string, string>> {
+  const { t } = useI18n()
+  return computed(() => {
+    const found = Object.entries({ ...live.value, ...(tried.value && gaps.value) })
+    const said = found.flatMap(([path, id]) => (id === undefined ? [] : [[path, t(id)] as const]))
+    const refused = refusals.flatMap((refusal) => Object.entries(fieldErrors(refusal.value)).map(([path, words]) => [fieldOf(path), words] as const))
+    return Object.fromEntries([...refused, ...said])
+  })
+}

@@ -1,0 +1,43 @@
+import { describe, expect, it } from 'vitest'
+import { labelSpot } from '../../../../src/components/map/labelSpot.ts'
+import type { Pixel } from '../../../../src/composables/mapTypes.ts'
+
+const box = (x: number, y: number, width: number, height: number): Pixel[] => [
+  [x, y], [x + width, y], [x + width, y + height], [x, y + height],
+]
+
+describe('labelSpot', () => {
+  it.each([
+    { form: 'full', width: 120, height: 80 },
+    { form: 'narrow', width: 34, height: 110 },
+    { form: 'slip', width: 130, height: 26 },
+    { form: 'code', width: 28, height: 24 },
+    { form: 'outside', width: 12, height: 60 },
+  ])('gives a block of $width × $height the form $form', ({ form, width, height }) => {
+    expect(labelSpot([box(0, 0, width, height)]).form).toBe(form)
+  })
+
+  it('stands near the middle of a plain block', () => {
+    const { at } = labelSpot([box(0, 0, 200, 100)])
+    expect(Math.abs(at[0] - 100)).toBeLessThan(15)
+    expect(Math.abs(at[1] - 50)).toBeLessThan(10)
+  })
+
+  it('keeps clear of a hole', () => {
+    const { form, at } = labelSpot([box(0, 0, 100, 160), box(30, 60, 40, 40)])
+    expect(form).toBe('full')
+    expect(at[1] < 60 || at[1] > 100).toBe(true)
+  })
+
+  it('stands over the top where nothing fits', () => {
+    expect(labelSpot([box(10, 50, 8, 40)]).at).toEqual([14, 41])
+  })
+
+  it('answers for a ring with thousands of points', () => {
+    const ring = Array.from({ length: 5000 }, (_, index): Pixel => {
+      const angle = (index / 5000) * 2 * Math.PI
+      return [200 * Math.cos(angle), 200 * Math.sin(angle)]
+    })
+    expect(labelSpot([ring]).form).toBe('full')
+  })
+})

@@ -1,0 +1,40 @@
+import { describe, expect, it } from 'vitest'
+import { ref } from 'vue'
+import { useTypedPoints } from '../../../../src/composables/useTypedPoints.ts'
+
+const read = (text: string) => useTypedPoints(() => text, () => 'en')
+
+describe('useTypedPoints', () => {
+  it('reads latitude first and gives longitude first', () => {
+    const { points, errors } = read('44.6, -123.3\n44.7, -123.3\n44.7, -123.2')
+    expect(points.value).toEqual([[-123.3, 44.6], [-123.3, 44.7], [-123.2, 44.7]])
+    expect(errors.value).toEqual([])
+  })
+
+  it('drops a last point that repeats the first', () => {
+    expect(read('1, 2\n1, 3\n2, 3\n1, 2').points.value).toHaveLength(3)
+  })
+
+  it('says what is wrong line by line', () => {
+    const { errors } = read('44.6, -123.3\nhere\n95, 3\n4941000, 475000')
+    expect(errors.value).toEqual([
+      'Line 2: not read. Write latitude, a comma, longitude.',
+      'Line 3: latitude runs from −90 to 90, longitude from −180 to 180.',
+      'Line 4: these look like metres. Degrees are needed.',
+    ])
+  })
+
+  it('shows five lines and counts the rest', () => {
+    const { errors } = read(Array.from({ length: 9 }, () => 'x').join('\n'))
+    expect(errors.value).toHaveLength(6)
+    expect(errors.value.at(-1)).toBe('and 4 more lines')
+  })
+
+  it('reads again as the text changes', () => {
+    const text = ref('1, 2')
+    const { points } = useTypedPoints(() => text.value, () => 'es')
+    expect(points.value).toHaveLength(1)
+    text.value = '1, 2\n3, 4'
+    expect(points.value).toHaveLength(2)
+  })
+})

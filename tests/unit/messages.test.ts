@@ -1,0 +1,46 @@
+import { execFileSync } from 'node:child_process'
+import { readFileSync } from 'node:fs'
+import { describe, expect, it } from 'vitest'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import { translate } from '../../shared/messages/translate.ts'
+
+describe('translate', () => {
+  it('speaks both languages', () => {
+    expect(translate('en', 'problems.not_found')).toBe('Nothing here under that number.')
+    expect(translate('es', 'problems.not_found')).toBe('No hay nada aquí con ese número.')
+  })
+
+  it('refuses a message that is not there', () => {
+    expect(() => translate('en', 'problems.not_there')).toThrow(RangeError)
+  })
+})
+
+describe('renderMessage', () => {
+  it('gives numbers the marks of the language and leaves text alone', () => {
+    const message = { id: 'problems.lot.short', params: { code: '26-018', left: 1234.5, needed: 2000, unit: 'L' } }
+    expect(renderMessage('en', message)).toContain('26-018 has 1\u00a0234.5')
+    expect(renderMessage('es', message)).toContain('1\u00a0234,5')
+  })
+})
+
+describe('refusals', () => {
+  it('have words for every code that the server or the shared checks can give', () => {
+    const files = execFileSync('git', ['ls-files', 'server', 'shared'], { encoding: 'utf8' }).trim().split('\n').filter((file) => file.endsWith('.ts') && !/\/(messages|checks|mix)\/|parsePoint/.test(file))
+    const codes = new Set<string>()
+    for (const file of files) {
+      const text = readFileSync(file, 'utf8')
+      for (const match of text.matchAll(/(?:error|code): '((?:[a-z_]+\.)+[a-z_]+)'/g)) if (match[1]) codes.add(match[1])
+    }
+    expect(codes.size).toBeGreaterThan(40)
+    const wordless = [...codes].filter((code) => {
+      try {
+        translate('en', `problems.${code}`)
+        translate('es', `problems.${code}`)
+        return false
+      } catch {
+        return true
+      }
+    })
+    expect(wordless).toEqual([])
+  })
+})
