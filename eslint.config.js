@@ -20,7 +20,7 @@ export default tseslint.config(
   ...tseslint.configs.recommended,
   ...vue.configs['flat/recommended'].map((config) => ({ ...config, files: ['**/*.vue'] })),
   {
-    files: ['**/*.{ts,mjs,js,vue}'],
+    files: ['**/*.{ts,mjs,cjs,js,vue}'],
     languageOptions: { globals: { ...globals.node, ...globals.browser } },
     linterOptions: { reportUnusedDisableDirectives: 'error' },
   },
@@ -43,11 +43,12 @@ export default tseslint.config(
     files: ['**/*.{ts,vue}'],
     rules: {
       '@typescript-eslint/no-explicit-any': 'error',
-      '@typescript-eslint/consistent-type-imports': 'error',
+      '@typescript-eslint/consistent-type-imports': ['error', { disallowTypeAnnotations: false }],
+      '@typescript-eslint/no-namespace': ['error', { allowDeclarations: true }],
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
       '@typescript-eslint/ban-ts-comment': ['error', { 'ts-expect-error': false, 'ts-ignore': true, 'ts-nocheck': true }],
       'no-warning-comments': ['error', { terms: ['todo', 'fixme', 'xxx', 'hack'] }],
-      eqeqeq: 'error',
+      eqeqeq: ['error', 'always', { null: 'ignore' }],
       'no-console': 'error',
       // TypeScript knows what is defined.
       'no-undef': 'off',
@@ -61,6 +62,9 @@ export default tseslint.config(
       'no-restricted-syntax': ['error', ...clock],
     },
   },
+  // Words a person typed are searched for control characters: that is what it is for.
+  { files: ['shared/contract/text.ts'], rules: { 'no-control-regex': 'off' } },
+  { files: ['**/*.cjs'], languageOptions: { sourceType: 'commonjs' } },
   { files: ['src/plugins/clock.ts', 'server/clock.ts', 'server/cli/**'], rules: { 'no-restricted-syntax': 'off', 'no-console': 'off' } },
   // A setup function of a store or a composable is a list of short functions, not one long one.
   { files: ['src/stores/**/*.ts', 'src/composables/**/*.ts'], rules: { 'max-lines-per-function': ['error', { max: 120, skipBlankLines: true, skipComments: true }] } },
@@ -100,6 +104,8 @@ export default tseslint.config(
       'vue/singleline-html-element-content-newline': 'off',
       'vue/first-attribute-linebreak': 'off',
       'vue/html-closing-bracket-newline': 'off',
+      'vue/html-closing-bracket-spacing': 'off',
+      'vue/multiline-html-element-content-newline': 'off',
       'vue/html-indent': 'off',
       'vue/attributes-order': 'off',
       'vue/require-default-prop': 'off',

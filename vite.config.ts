@@ -20,6 +20,10 @@ export default defineConfig({
     // Nothing becomes a data: address, which the content security policy refuses.
     assetsInlineLimit: 0,
   },
-  server: { proxy: { '/api': apiUrl, '/dev': apiUrl } },
+  server: {
+    proxy: { '/api': apiUrl, '/dev': apiUrl },
+    // A build or the database beside it is no change of the client.
+    watch: { ignored: ['**/dist/**', '**/.data/**', '**/test-results/**'] },
+  },
   preview: { proxy: { '/api': apiUrl, '/dev': apiUrl } },
 })

@@ -144,6 +144,8 @@ const TABLES = [
       (season IS NOT NULL AND number IS NOT NULL AND seq IS NOT NULL AND digest IS NOT NULL
         AND signed_by_id IS NOT NULL AND signed_at IS NOT NULL)))`,
   'CREATE INDEX application_records_register_idx ON application_records (farm_id, sort_at DESC, id DESC)',
+  `CREATE INDEX application_records_unsigned_idx ON application_records (farm_id, state, sort_at DESC, id DESC)
+    WHERE state IN ('draft', 'started')`,
   `CREATE TABLE record_lines (
     farm_id uuid NOT NULL, record_id uuid NOT NULL, position integer NOT NULL, block_id uuid NOT NULL,
     season integer, sort_at timestamptz NOT NULL,

@@ -1,25 +1,5 @@
-import { VueQueryPlugin } from '@tanstack/vue-query'
-import { createPinia } from 'pinia'
-import { createApp } from 'vue'
-import App from './App.vue'
-import { onSessionEnd } from './api/http.ts'
-import { i18n } from './plugins/i18n.ts'
-import { queryClient } from './plugins/queryClient.ts'
-import { router } from './router/router.ts'
-import { useOutbox } from './stores/outbox.ts'
-import { usePreferences } from './stores/preferences.ts'
-import { useReentry } from './stores/reentry.ts'
-import { useSession } from './stores/session.ts'
-import './styles/fonts.ts'
-import './styles/element.ts'
-import './styles/styles.ts'
+// Before any schema is made: zod then never tries `new Function`, which the content security policy refuses and reports.
+Object.assign(globalThis, { __zod_globalConfig: { jitless: true } })
 
-const app = createApp(App)
-app.use(createPinia()).use(i18n).use(VueQueryPlugin, { queryClient })
-
-usePreferences()
-useOutbox().start()
-// A session that ends while nobody is signed in here is no question to anyone.
-onSessionEnd(() => (useSession().user === null ? Promise.resolve(false) : useReentry().ask()))
-
-app.use(router).mount('#app')
+// A static import would be evaluated first.
+void import('./start.ts')

@@ -8,8 +8,8 @@ export const DEMO_MATERIALS: Record<string, { material: MaterialFacts; lots: { c
   nettle: {
     material: { name: 'Nettle ferment', kind: 'ferment', measuredIn: 'volume', organicStatus: 'allowed', statusBasis: 'System plan, line 3' },
     lots: [
-      { code: 'NF-31', origin: 'made', litres: '420', daysAgo: 60, keepsDays: 90, source: 'Brew house, vat 2' },
-      { code: 'NF-24', origin: 'made', litres: '600', daysAgo: 190, keepsDays: 185, source: 'Brew house, vat 1' },
+      { code: 'NF-31', origin: 'made', litres: '640', daysAgo: 60, keepsDays: 90, source: 'Brew house, vat 2' },
+      { code: 'NF-24', origin: 'made', litres: '120', daysAgo: 190, keepsDays: 185, source: 'Brew house, vat 1' },
     ],
   },
   soap: {

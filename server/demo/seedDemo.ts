@@ -14,13 +14,13 @@ import { createSprayer } from '../services/farms/sprayers.ts'
 import { hashPassword } from '../services/passwords.ts'
 import type { Services } from '../services/services.ts'
 import { buildBlock } from './buildThings.ts'
+import { DEMO_ZONE } from './demoZone.ts'
 import { makeAccount, makeGrant, makePerson } from './makeAccount.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
 import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
 
 const DAY_MS = 86_400_000
-export const DEMO_ZONE = 'America/Los_Angeles'
 /** History begins this long before the demo is opened. */
 const HISTORY_DAYS = 200
 

@@ -6,11 +6,12 @@ import { receiveLot } from '../services/inputs/receiveLot.ts'
 import { createRecord } from '../services/records/createRecord.ts'
 import { sealRecord } from '../services/records/sealRecord.ts'
 import type { Services } from '../services/services.ts'
+import { DEMO_ZONE } from './demoZone.ts'
 import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from './buildThings.ts'
 
 /** A second farm that nobody of the first may see: a block, a material, a lot and a signed record. @returns its id. */
 export async function seedNeighbour(services: Services, accountId: string): Promise<string> {
-  const { farm } = await createFarm(services, accountId, { id: uuidV7(), name: 'Skerrow Bottom', zone: 'America/Los_Angeles', seasonStart: '03-01' })
+  const { farm } = await createFarm(services, accountId, { id: uuidV7(), name: 'Skerrow Bottom', zone: DEMO_ZONE, seasonStart: '03-01' })
   const actor = (await services.database.listAccess(accountId, services.clock.now())).find(({ farmId }) => farmId === farm.id)
   if (!actor) throw new Error('The neighbour has no way into the neighbour farm')
   const { block } = await createBlock(services, actor, buildBlock({ code: 'K1', name: 'Kiln Field', geometry: squareAt(8) }))

@@ -1,10 +1,13 @@
 import { v7 as uuidV7 } from 'uuid'
 import { createRecordSchema } from '../../shared/contract/record.ts'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import { toInstant } from '../../shared/time/toInstant.ts'
 import { fixedClock } from '../clock.ts'
 import type { FarmActor } from '../database/actor.ts'
 import { createRecord } from '../services/records/createRecord.ts'
 import { sealRecord } from '../services/records/sealRecord.ts'
 import type { Services } from '../services/services.ts'
+import { DEMO_ZONE } from './demoZone.ts'
 import { DEMO_WORK, type DemoWork } from './demoWork.ts'
 import type { DemoLots } from './seedInputs.ts'
 
@@ -30,7 +33,7 @@ interface Task {
   windMs: string
 }
 
-/** Twelve weeks of work up to this morning, one spray begun and not signed, and one that went on in too much wind. */
+/** Twelve weeks of work up to this morning, one spray begun and not signed, and one that went on too strong. */
 export async function seedRecords(services: Services, ground: Ground): Promise<void> {
   const tasks = DEMO_WORK.flatMap((work, row) => listTasks(work, row, services.clock.now())).sort((a, b) => a.startedAt.getTime() - b.startedAt.getTime())
   for (const task of tasks) await recordTask(services, ground, task, true)
@@ -45,14 +48,23 @@ function listTasks(work: DemoWork, row: number, now: Date): Task[] {
   const rounds = Math.floor(HISTORY_DAYS / work.everyDays)
   return Array.from({ length: rounds }, (_, round) =>
     work.blocks.map((block, place) => {
-      // Work of one round goes from block to block of a morning; rounds end one to six days ago, the tunnels this morning.
-      const daysAgo = round * work.everyDays + (row === 4 ? 0 : 1 + row)
-      const startedAt = new Date(now.getTime() - daysAgo * DAY_MS - (190 - place * (work.minutes + 9)) * MINUTE_MS)
+      const daysAgo = round * work.everyDays + work.lastDaysAgo
+      const startedAt = new Date(morning(now, daysAgo, work.from).getTime() + place * (work.minutes + 9) * MINUTE_MS)
       const late = row === 2 && round === 1 && place === 0
-      const gusty = work.purpose.startsWith('Aphids') && round === 0
-      return { work, block, startedAt, signedAfterH: late ? 31 : 0.5, windMs: gusty ? '4.4' : (1.4 + ((round * 7 + place * 3) % 16) / 10).toFixed(1) }
+      const strong = work.strongOnce !== undefined && round === 0
+      const windMs = strong ? '3.4' : (1.4 + ((round * 7 + place * 3) % 16) / 10).toFixed(1)
+      const components = strong ? work.components.map((component) => ({ ...component, basis: { kind: 'ratio' as const, parts: work.strongOnce ?? '' } })) : work.components
+      return { work: { ...work, components }, block, startedAt, signedAfterH: late ? 31 : 0.5, windMs }
     }),
-  ).flat()
+  ).flat().filter(({ startedAt }) => startedAt.getTime() + work.minutes * MINUTE_MS < now.getTime())
+}
+
+/** A clock time of the farm's civil day so many days ago. */
+function morning(now: Date, daysAgo: number, time: string): Date {
+  const date = civilDateIn(DEMO_ZONE, new Date(now.getTime() - daysAgo * DAY_MS).toISOString())
+  const found = toInstant({ date, time, zone: DEMO_ZONE })
+  if (!found.ok) throw new Error(`The demo farm has no ${time} on ${date}`)
+  return new Date(found.instant)
 }
 
 async function recordTask(services: Services, ground: Ground, task: Task, sign: boolean): Promise<void> {
@@ -80,7 +92,7 @@ async function recordTask(services: Services, ground: Ground, task: Task, sign: 
   })
   const { record } = await createRecord(then, actor, input)
   if (!sign) return
-  const acknowledged = [{ code: 'record.stop', reason: 'A gust came up in the last rows. Mirel Achter told the same day.' }]
+  const acknowledged = [{ code: 'record.stop', reason: 'The soap was measured twice into one load. Mirel Achter told the same day; the leaves were rinsed.' }]
   const stopped = record.checks.some(({ verdict }) => verdict === 'stop')
   await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, stopped ? acknowledged : []))
 }

@@ -6,6 +6,7 @@ import type { Check as RecordCheck, Computed, RecordContent, RegisterRow } from 
 @Entity({ name: 'application_records' })
 @Unique('application_records_farm_id_season_number_key', ['farmId', 'season', 'number'])
 @Index('application_records_register_idx', { synchronize: false })
+@Index('application_records_unsigned_idx', { synchronize: false })
 @ForeignKey('Farm', ['farmId'], ['id'], { name: 'application_records_farm_fkey' })
 @ForeignKey('Person', ['farmId', 'doneById'], ['farmId', 'id'], { name: 'application_records_done_by_fkey' })
 @ForeignKey('Person', ['farmId', 'enteredById'], ['farmId', 'id'], { name: 'application_records_entered_by_fkey' })

@@ -67,6 +67,7 @@ function isHttpFault(error: unknown): error is HttpFault {
 }
 
 function fromHttpFault(fault: HttpFault): AppError {
+  if (fault.status === 404) return new AppError('not-found', 'not_found')
   if (fault.status === 413) return new AppError('too-large', 'too_large')
   if (fault.status === 415) return new AppError('wrong-type', 'wrong_type')
   return new AppError('bad-request', 'unreadable')

@@ -79,7 +79,7 @@ class ReportPool implements ReportProcess {
     if (!order) return
     if (order.stream.destroyed) return this.next()
     slot.order = order
-    slot.timer = setTimeout(() => this.giveUp(slot), this.options.limitMs)
+    this.startTimer(slot)
     const child = slot.child ?? this.startIn(slot)
     child.send({ id: order.id, job: order.job } satisfies WorkerOrder, (error) => {
       if (error) this.lose(slot, child, error.message)
@@ -88,7 +88,9 @@ class ReportPool implements ReportProcess {
 
   private hear(slot: Slot, answer: WorkerAnswer): void {
     const { order } = slot
-    if (answer.kind === 'ready' || order?.id !== answer.id) return
+    // A process that had to start first gets its job's whole time from here.
+    if (answer.kind === 'ready') return this.startTimer(slot)
+    if (order?.id !== answer.id) return
     if (answer.kind === 'chunk') {
       if (!order.stream.destroyed) order.stream.push(answer.bytes)
       return
@@ -97,6 +99,11 @@ class ReportPool implements ReportProcess {
     if (answer.kind === 'failed') order.stream.destroy(new Error(`The document could not be drawn: ${answer.message}`))
     else if (!order.stream.destroyed) order.stream.push(null)
     this.next()
+  }
+
+  private startTimer(slot: Slot): void {
+    if (slot.timer) clearTimeout(slot.timer)
+    slot.timer = slot.order && setTimeout(() => this.giveUp(slot), this.options.limitMs)
   }
 
   private lose(slot: Slot, child: ChildProcess, why: string): void {

@@ -1,4 +1,3 @@
-import { z } from 'zod'
 import { farmParamsSchema, pageOf, pageQuerySchema } from '../../shared/contract/common.ts'
 import { createFarmSchema, createSprayerSchema, farmSchema, personSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
@@ -23,8 +22,8 @@ export const farmRoutes = [
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/people', summary: 'People of the farm.', roles: FARM_PEOPLE,
-    params: farmParamsSchema, answer: z.object({ items: z.array(personSchema), next: z.null() }),
-    run: async ({ services, actor }) => ({ body: await listPeople(services, actor) }),
+    params: farmParamsSchema, query: pageQuerySchema, answer: pageOf(personSchema),
+    run: async ({ services, actor, query }) => ({ body: await listPeople(services, actor, query) }),
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/sprayers', summary: 'Sprayers and drenchers, by code.', roles: EVERY_ROLE,

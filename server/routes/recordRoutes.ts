@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { farmParamsSchema, idSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
-import { createRecordSchema, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import { createRecordSchema, RECORD_STATES, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
 import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
 import { collectRecordReport } from '../services/records/collectRecordReport.ts'
 import { createRecord } from '../services/records/createRecord.ts'
@@ -11,6 +11,8 @@ import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE, FARM_PEOPLE } from './roleGroups.ts'
 import { sendReport } from './sendReport.ts'
 
+const registerQuerySchema = pageQuerySchema.extend({ block: idSchema.optional(), state: z.enum(RECORD_STATES).optional() })
+
 const versionsSchema = z.object({
   items: z.array(z.object({ version: z.number().int(), digest: z.string(), canonicalText: z.string(), signed: signedRecordSchema })),
   next: z.null(),
@@ -19,7 +21,7 @@ const versionsSchema = z.object({
 export const recordRoutes = [
   defineRoute({
     method: 'get', path: '/farms/:farmId/records', summary: 'The register, newest work first.', roles: EVERY_ROLE,
-    params: farmParamsSchema, query: pageQuerySchema.extend({ block: idSchema.optional() }), answer: pageOf(registerRowSchema),
+    params: farmParamsSchema, query: registerQuerySchema, answer: pageOf(registerRowSchema),
     run: async ({ services, actor, query }) => ({ body: await listRecords(services, actor, query) }),
   }),
   defineRoute({

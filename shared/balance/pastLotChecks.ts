@@ -1,4 +1,5 @@
 import { buildCheck, words } from '../checks/buildCheck.ts'
+import { roundForReader } from '../checks/roundForReader.ts'
 import type { Lot, Material } from '../contract/input.ts'
 import type { Check } from '../contract/record.ts'
 import { lotStanding } from './lotStanding.ts'
@@ -20,7 +21,7 @@ export function pastLotChecks(lots: readonly Lot[], materials: readonly Material
         rests: labelled ? 'label' : 'house',
         title: words('inputs.pastTitle', { code: lot.code }),
         text: words(labelled ? 'inputs.pastByLabel' : 'inputs.pastByFarm', { name: lot.materialName, lastOn: lot.expiresOn }),
-        figure: words('inputs.leftFigure', { value: Number(lot.left.value), unit: lot.left.unit }),
+        figure: words('inputs.leftFigure', { value: roundForReader(lot.left.value), unit: lot.left.unit }),
         about: `lot:${lot.id}`,
       }),
     ]

@@ -27,7 +27,6 @@ export function judgeLotUse(facts: RecordFacts, lot: FactLot, material: FactMate
     rests,
     title: words('checks.lotUse.title', { lot: lot.code }),
     text: words(isPast ? 'checks.lotUse.past' : 'checks.lotUse.within', { material: material.name, expiresOn: lot.expiresOn }),
-    figure: words('checks.figure.date', { dayOn: lot.expiresOn }),
     source: rests === 'label' ? labelSource(material) : null,
     about,
   })

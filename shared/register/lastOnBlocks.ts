@@ -26,5 +26,6 @@ export function lastOnBlocks(blocks: readonly Block[], rows: readonly RegisterRo
 }
 
 function startOf(row: RegisterRow | null): number {
-  return row?.startedAt == null ? Number.NEGATIVE_INFINITY : Date.parse(row.startedAt)
+  const at = row?.startedAt ?? null
+  return at === null ? Number.NEGATIVE_INFINITY : Date.parse(at)
 }

@@ -48,11 +48,14 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zo
   const content = draftSchema.catch({ method: null, lines: [], components: [], water: null, sprayerId: null }).parse(draft.content)
   const blocks = content.lines.flatMap(({ blockId }) => stock.blocks.find(({ id }) => id === blockId) ?? [])
   const sheet = blocks.length === 0 ? null : sheetOf(content, blocks, stock)
+  const totalL = sheet?.totalL ?? null
   const at = content.lines[0]?.startedAt ?? draft.begunAt
   return {
     id: draft.id,
     state: 'draft',
     number: null,
+    fullNumber: null,
+    onDevice: true,
     version: 1,
     method: content.method,
     blockIds: blocks.map(({ id }) => id),
@@ -62,7 +65,7 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zo
     day: formatDayShort(language, civilDateIn(zone, at)),
     start: civilTimeIn(zone, at),
     hectares: sheet === null ? '' : formatHectares(sheet.areaM2, language),
-    litres: sheet?.totalL == null ? '' : formatVolumeL(sheet.totalL, language),
+    litres: totalL === null ? '' : formatVolumeL(totalL, language),
     rate: presentRate(language, sheet?.sprayLPerHa ?? null),
     by: draft.by,
     lateHours: null,

@@ -13,6 +13,9 @@ export interface RegisterPlace {
   season: number
 }
 
+/** Rates from here up are read without decimals. */
+const WHOLE_FROM = 100
+
 /** A row of the register in words: times in the farm's zone, figures rounded for display. */
 export function presentRow(row: RegisterRow, { language, zone, season }: RegisterPlace): RegisterLine {
   const at = row.startedAt
@@ -20,6 +23,8 @@ export function presentRow(row: RegisterRow, { language, zone, season }: Registe
     id: row.id,
     state: row.state,
     number: row.number === null ? null : row.season === season ? shortNumber(row.number) : row.number,
+    fullNumber: row.number,
+    onDevice: false,
     version: row.version,
     method: row.method,
     blockIds: row.blocks.map(({ id }) => id),
@@ -37,10 +42,11 @@ export function presentRow(row: RegisterRow, { language, zone, season }: Registe
   }
 }
 
-/** Litres a hectare with their unit, three digits of it; empty where there is no rate. */
+/** Litres a hectare with their unit, whole from 100 up, else three digits of it; empty where there is no rate. */
 export function presentRate(language: Language, sprayLPerHa: string | number | null): string {
   if (sprayLPerHa === null) return ''
-  return translate(language, 'register.rate', { value: formatRate(sprayLPerHa, language, 3) })
+  const value = Number(sprayLPerHa) >= WHOLE_FROM ? formatNumber(sprayLPerHa, { digits: 0 }, language) : formatRate(sprayLPerHa, language, 3)
+  return translate(language, 'register.rate', { value })
 }
 
 /** "0143" of "2026-0143". */

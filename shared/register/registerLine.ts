@@ -6,6 +6,10 @@ export interface RegisterLine {
   state: 'draft' | 'started' | 'signed' | 'withdrawn'
   /** Number as the ledger prints it, short inside its own season; null before signing. */
   number: string | null
+  /** The same with its year. */
+  fullNumber: string | null
+  /** A draft that only this device has. */
+  onDevice: boolean
   version: number
   method: Method | null
   blockIds: string[]

@@ -2,6 +2,9 @@ import type { z } from 'zod'
 import { problemSchema } from '../../shared/contract/problem.ts'
 import { ApiError, NetworkError } from './errors.ts'
 
+/** An answer that takes longer is no answer: in the field a half signal is worse than none. */
+const PATIENCE_MS = 30_000
+
 type Query = Record<string, string | number | null | undefined>
 type Method = 'GET' | 'POST' | 'PUT' | 'DELETE'
 
@@ -43,7 +46,7 @@ async function send(method: Method, path: string, body: unknown): Promise<Respon
   const headers: Record<string, string> = { Accept: 'application/json' }
   if (method !== 'GET') headers['X-Requested-With'] = 'drenchleaf'
   if (body !== undefined) headers['Content-Type'] = 'application/json'
-  const init: RequestInit = { method, headers, credentials: 'same-origin' }
+  const init: RequestInit = { method, headers, credentials: 'same-origin', signal: AbortSignal.timeout(PATIENCE_MS) }
   if (body !== undefined) init.body = JSON.stringify(body)
   try {
     return await fetch(`/api${path}`, init)

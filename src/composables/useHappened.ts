@@ -26,6 +26,8 @@ export function useHappened(draft: Ref<RecordDraft>, zone: Ref<string>): {
   const { t } = useI18n()
   const read = computed(() => ({ start: instantOf(draft.value.start, zone.value), end: instantOf(draft.value.end, zone.value) }))
 
+  // Work is written down on its day more often than not.
+  if (draft.value.start.date === '') draft.value.start.date = momentAt(zone.value, now().toISOString()).date
   // The end has no date of its own to choose: it is the day of the start, or the night after it.
   watch(() => [draft.value.start.date, draft.value.start.time, draft.value.end.time] as const, () => {
     const date = endDate(draft.value.start, draft.value.end.time)

@@ -26,7 +26,7 @@ export function useLotWords(lots: Ref<readonly Lot[]>, today: Ref<string>): Comp
   const preferences = usePreferences()
 
   const amount = ({ value, unit }: { value: string; unit: string }): string =>
-    t('inputs.amount', { value: formatNumber(value, {}, preferences.language), unit: t(`units.${unit}`) })
+    t('inputs.amount', { value: formatNumber(value, { significant: 4 }, preferences.language), unit: t(`units.${unit}`) })
 
   function useByWords(lot: Lot, { useBy, days }: LotStanding): string {
     if (lot.expiresOn === null || days === null) return t('inputs.useBy.none')

@@ -33,7 +33,7 @@ interface MixRowsOptions {
 /** The ingredients of a mix in the person's language, each with its lots ranked. */
 export function useMixRows({ draft, sheet, stock }: MixRowsOptions): { rows: ComputedRef<MixRow[]>; waterMeasure: ComputedRef<string> } {
   const { t } = useI18n()
-  const { amount, plain, unit } = useFigures()
+  const { amount, rate, unit } = useFigures()
 
   function measureOf({ kind, value, unit: code }: ComponentDraft): string {
     if (value.trim() === '') return t('records.mix.noMeasure')
@@ -50,7 +50,7 @@ export function useMixRows({ draft, sheet, stock }: MixRowsOptions): { rows: Com
       key: component.key,
       name: material?.name ?? t('records.mix.unnamed', { number: index + 1 }),
       lot: lot ? t('records.mix.lot', { code: lot.code }) : t('records.mix.noLot'),
-      has: lot ? t('records.mix.has', { left: plain(lot.left.value), unit: unit(lot.left.unit) }) : '',
+      has: lot ? t('records.mix.has', { left: rate(lot.left.value), unit: unit(lot.left.unit) }) : '',
       measure: measureOf(component),
       inAll: amount(figures?.amount?.value ?? null),
       fullLoad: amount(figures?.perFullLoad ?? null),

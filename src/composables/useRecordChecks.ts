@@ -12,7 +12,10 @@ import type { RecordStock } from './useRecordStock.ts'
 export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>, sheet: Ref<RecordSheet>): {
   checks: ComputedRef<Check[]>
   tally: ComputedRef<Tally>
-  stops: ComputedRef<Check[]>
+  /** Stops that are signed with a reason: all but a lot that is short, whose count has to be put right. */
+  reasoned: ComputedRef<Check[]>
+  /** Components whose lot is short, by the path of the lot. */
+  shortLots: ComputedRef<Record<string, 'records.sign.lotShort'>>
 } {
   const { time } = useClock()
   const checks = computed(() => {
@@ -36,6 +39,10 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
   return {
     checks,
     tally: computed(() => tallyChecks(checks.value)),
-    stops: computed(() => checks.value.filter(({ verdict }) => verdict === 'stop')),
+    reasoned: computed(() => checks.value.filter(({ verdict, code }) => verdict === 'stop' && code !== 'lot.left')),
+    shortLots: computed(() => {
+      const short = checks.value.filter(({ verdict, code }) => verdict === 'stop' && code === 'lot.left')
+      return Object.fromEntries(short.map(({ about }) => [`${(about ?? '').replace(':', 's.')}.lotId`, 'records.sign.lotShort' as const]))
+    }),
   }
 }

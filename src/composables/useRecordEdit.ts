@@ -28,7 +28,7 @@ function fieldOf(path: string): string {
 /** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
 export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string }) {
   const { t } = useI18n()
-  const { language } = useFigures()
+  const { language, plain, dayShort } = useFigures()
   const { problem } = useMessages()
   const { stock, ready: stockReady, error: stockError, again } = useRecordStock()
   const form = useRecordForm({ ...options, stock, stockReady })
@@ -45,7 +45,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
     content: () => contentOf(draft.value, { zone: zone.value, sheet: sheet.value, happened: draft.value.step === 2 }),
   })
   const facts = (): { draft: typeof draft.value; sheet: typeof sheet.value; zone: string } => ({ draft: draft.value, sheet: sheet.value, zone: zone.value })
-  const gaps = computed(() => signGaps({ ...facts(), hasStops: checking.stops.value.length > 0 }))
+  const gaps = computed(() => signGaps({ ...facts(), hasStops: checking.reasoned.value.length > 0 }))
 
   const starting = useTask(async () => {
     const before = draft.value.start
@@ -59,7 +59,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
       throw error
     }
   })
-  const signing = useSigning({ draft, stops: checking.stops, sign: send.sign })
+  const signing = useSigning({ draft, stops: checking.reasoned, sign: send.sign })
 
   async function sign(): Promise<void> {
     tried.value = true
@@ -81,11 +81,14 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
       if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
       return signing.words.value || (signing.password.value === '' ? t('records.sign.needPassword') : '')
     }),
-    errors: formErrors({ gaps, live: computed(() => unreadable(draft.value)), tried, refusals: [starting.error, signing.error] }),
+    errors: formErrors({ gaps, live: computed(() => ({ ...unreadable(draft.value), ...checking.shortLots.value })), tried, refusals: [starting.error, signing.error] }),
     working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),
     keepOut: computed(() => {
       const hold = checking.checks.value.find(({ code }) => code === 'label.reEntry')
-      return hold?.figure ? renderMessage(language.value, hold.figure) : ''
+      if (!hold) return ''
+      const { untilOn, untilTime } = hold.text.params
+      if (untilTime === undefined) return t('records.happened.afterEnd', { hours: plain(hold.title.params['hours'] ?? '') })
+      return untilOn === draft.value.end.date ? String(untilTime) : `${dayShort(String(untilOn))} ${untilTime}`
     }),
   }
 }

@@ -29,7 +29,8 @@ export function useRecordStock(): { stock: ComputedRef<RecordStock>; ready: Comp
     farm: useFarm(farmId), blocks: useBlocks(farmId), materials: useMaterials(farmId),
     lots: useLots(farmId), sprayers: useSprayers(farmId), people: usePeople(farmId),
   }
-  const all = Object.values(reads)
+  // A record can be written without the list of people: it is then the writer's own work.
+  const needed = [reads.farm, reads.blocks, reads.materials, reads.lots, reads.sprayers]
   return {
     stock: computed(() => ({
       farmId: farmId.value,
@@ -40,8 +41,8 @@ export function useRecordStock(): { stock: ComputedRef<RecordStock>; ready: Comp
       sprayers: reads.sprayers.data.value ?? [],
       people: reads.people.data.value ?? [],
     })),
-    ready: computed(() => all.every((read) => read.data.value !== undefined)),
-    error: computed(() => all.map((read) => (read.data.value === undefined ? read.error.value : null)).find((error) => error !== null) ?? null),
-    again: () => { for (const read of all) void read.refetch() },
+    ready: computed(() => needed.every((read) => read.data.value !== undefined)),
+    error: computed(() => needed.map((read) => (read.data.value === undefined ? read.error.value : null)).find((error) => error !== null) ?? null),
+    again: () => { for (const read of Object.values(reads)) void read.refetch() },
   }
 }

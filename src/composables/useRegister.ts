@@ -7,7 +7,7 @@ import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { useRecord } from './useRecord.ts'
 import { useRecords } from './useRecords.ts'
-import { useRegisterLines, type RegisterWords } from './useRegisterLines.ts'
+import { unsentDrafts, useRegisterLines, type RegisterWords } from './useRegisterLines.ts'
 
 export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   rows: ReturnType<typeof useRecords>
@@ -35,10 +35,10 @@ export function useRegister(): Register {
   const { place, draftLines, present, outlines } = useRegisterLines()
 
   const items = computed(() => rows.data.value?.pages.flatMap((page) => page.items) ?? [])
-  const lines = computed(() => [...draftLines.value, ...present(items.value)])
+  const lines = computed(() => [...unsentDrafts(draftLines.value, items.value), ...present(items.value)])
   const chosenId = ref<string | null>(null)
   const chosen = computed(() => lines.value.find(({ id }) => id === chosenId.value) ?? null)
-  const record = useRecord(farmId, () => (chosen.value === null || chosen.value.state === 'draft' ? '' : chosen.value.id))
+  const record = useRecord(farmId, () => (chosen.value === null || chosen.value.onDevice ? '' : chosen.value.id))
   const ready = computed(() => rows.data.value !== undefined && place.value !== null)
 
   watch(ready, (isReady) => {
@@ -72,6 +72,6 @@ function firstOf(lines: readonly RegisterLine[]): string | null {
 }
 
 function headOf(line: RegisterLine | null): string {
-  if (line === null || line.state === 'draft') return 'register.checks.head'
-  return line.state === 'started' ? 'register.checks.asOfNow' : 'register.checks.asSigned'
+  if (line === null || line.onDevice) return 'register.checks.head'
+  return line.state === 'draft' || line.state === 'started' ? 'register.checks.asOfNow' : 'register.checks.asSigned'
 }

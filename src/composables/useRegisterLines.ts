@@ -23,6 +23,12 @@ export interface RegisterWords {
   outlines: ComputedRef<ReadonlyMap<string, Boundary>>
 }
 
+/** Drafts that the server has not got yet: those it has are among its rows. */
+export function unsentDrafts(drafts: readonly RegisterLine[], rows: readonly Pick<RegisterRow, 'id'>[]): RegisterLine[] {
+  const known = new Set(rows.map(({ id }) => id))
+  return drafts.filter(({ id }) => !known.has(id))
+}
+
 /** Rows of the register and drafts of this device as lines in the reader's language and the farm's time. */
 export function useRegisterLines(): RegisterWords {
   const session = useSession()

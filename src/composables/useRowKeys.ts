@@ -18,7 +18,7 @@ export function useRowKeys({ ids, chosen, choose, open }: RowKeys): void {
     if (next === undefined) return
     choose(next)
     void nextTick(() => {
-      const row = document.querySelector<HTMLElement>(`[data-row="${CSS.escape(next)}"]`)
+      const row = [...document.querySelectorAll<HTMLElement>('[data-row]')].find((each) => each.dataset['row'] === next)
       row?.scrollIntoView({ block: 'nearest' })
       row?.querySelector<HTMLElement>('a')?.focus({ preventScroll: true })
     })

@@ -12,7 +12,7 @@ import { useBlocks } from './useBlocks.ts'
 import { useInputs, type Inputs } from './useInputs.ts'
 import type { LotLine } from './useLotWords.ts'
 import { useRecords } from './useRecords.ts'
-import { useRegisterLines } from './useRegisterLines.ts'
+import { unsentDrafts, useRegisterLines } from './useRegisterLines.ts'
 
 /** Lots that end this soon are named in the day line. */
 const LINE_DAYS = 7
@@ -37,7 +37,6 @@ export interface Today {
   rowsRead: ComputedRef<number>
   outlines: ComputedRef<ReadonlyMap<string, Boundary>>
   inputs: Inputs
-  started: ReturnType<typeof useRecords>
   newest: ReturnType<typeof useRecords>
   /** Everything the day line speaks of has been read. */
   ready: ComputedRef<boolean>
@@ -48,7 +47,6 @@ export function useToday(): Today {
   const session = useSession()
   const preferences = usePreferences()
   const farmId = computed(() => session.farmId)
-  const started = useRecords(farmId, { state: 'started', limit: 50 })
   const newest = useRecords(farmId, { limit: 200 })
   const inputs = useInputs()
   const { place, draftLines, present, outlines } = useRegisterLines()
@@ -56,7 +54,7 @@ export function useToday(): Today {
   const { data: blocks } = useBlocks(farmId)
 
   const rowsOf = (read: ReturnType<typeof useRecords>): RegisterRow[] => read.data.value?.pages.flatMap(({ items }) => items) ?? []
-  const startedLines = computed(() => present(rowsOf(started).filter(({ state }) => state === 'started')))
+  const startedLines = computed(() => present(rowsOf(newest).filter(({ state }) => state === 'started' || state === 'draft')))
   const doneLines = computed(() => {
     const zone = place.value?.zone
     if (zone === undefined || today.value === null) return []
@@ -68,16 +66,18 @@ export function useToday(): Today {
   })
   const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
 
+  const deviceLines = computed(() => unsentDrafts(draftLines.value, rowsOf(newest)))
   const blockLines = computed(() => lastOnBlocks(blocks.value ?? [], rowsOf(newest)).map(({ block, row }) => {
     const [line] = row === null ? [] : present([row])
-    return { block, last: line?.method == null ? null : { method: line.method, preparation: line.preparation, day: line.day } }
+    if (row === null || line === undefined) return { block, last: null }
+    return { block, last: { method: row.method, preparation: line.preparation, day: line.day } }
   }))
 
   const sentences = computed(() => {
     const lots = endingLots.value
     return dayLine({
       started: startedLines.value.map(({ codes }) => codes),
-      drafts: draftLines.value.length,
+      drafts: deviceLines.value.length,
       signedToday: doneLines.value.filter(({ line }) => line.state === 'signed').length,
       pastLots: lots.filter(({ standing }) => standing.useBy === 'past').map(({ lot }) => lot.code),
       soonLots: lots.flatMap(({ lot, standing }) =>
@@ -90,8 +90,8 @@ export function useToday(): Today {
   return {
     title: computed(() => (today.value === null ? '' : capital(formatDay(preferences.language, today.value, { weekday: true, year: false })))),
     sentences,
-    openLines: computed(() => [...startedLines.value, ...draftLines.value]),
-    startedLines, doneLines, endingLots, blockLines, outlines, inputs, started, newest,
+    openLines: computed(() => [...startedLines.value, ...deviceLines.value]),
+    startedLines, doneLines, endingLots, blockLines, outlines, inputs, newest,
     rowsRead: computed(() => rowsOf(newest).length),
     ready: computed(() => place.value !== null && newest.data.value !== undefined && inputs.ready.value),
   }

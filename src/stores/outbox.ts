@@ -22,6 +22,8 @@ export const useOutbox = defineStore('outbox', () => {
   const online = ref(navigator.onLine)
   const sendingCount = ref(0)
   let flushing: Promise<void> | null = null
+  /** Keys that are being sent at this moment: a retry in between leaves them alone. */
+  const inHand = new Set<string>()
 
   const mine = computed(() => items.value.filter((item) => item.accountId === session.user?.id))
   const kept = computed(() => mine.value.filter((item) => item.state !== 'needsYou'))
@@ -39,10 +41,11 @@ export const useOutbox = defineStore('outbox', () => {
     // A password is never written to the device.
     if (command.kind === 'record.sign') return { state: 'sent', answer: await sendAndSettle(command) }
     const item = keep(command)
-    await device.outbox.put(item)
-    await refresh()
-    if (await waitsBehindAnother(item)) return { state: 'kept' }
+    inHand.add(item.key)
     try {
+      await device.outbox.put(item)
+      await refresh()
+      if (await waitsBehindAnother(item)) return { state: 'kept' }
       const answer = await sendAndSettle(command)
       await device.outbox.delete(item.key)
       return { state: 'sent', answer }
@@ -51,6 +54,7 @@ export const useOutbox = defineStore('outbox', () => {
       await device.outbox.delete(item.key)
       throw error
     } finally {
+      inHand.delete(item.key)
       await refresh()
     }
   }
@@ -95,7 +99,8 @@ export const useOutbox = defineStore('outbox', () => {
 
   async function sendKept(): Promise<void> {
     await refresh()
-    for (const item of kept.value) {
+    for (const item of kept.value.filter((each) => !inHand.has(each.key))) {
+      inHand.add(item.key)
       try {
         await sendAndSettle(item.command)
         await device.outbox.delete(item.key)
@@ -103,6 +108,8 @@ export const useOutbox = defineStore('outbox', () => {
         if (mustWait(error)) break
         if (!(error instanceof ApiError)) throw error
         await device.outbox.update(item.key, { state: 'needsYou', problem: error.problem })
+      } finally {
+        inHand.delete(item.key)
       }
     }
     await refresh()

@@ -235,6 +235,13 @@ describe('the register', () => {
     expect(second.body.next).toBeNull()
   })
 
+  it('finds what is begun and not signed', async () => {
+    const { body } = await manager.get(address('?state=started&limit=200'))
+    expect(body.items.length).toBeGreaterThan(0)
+    expect(body.items.every(({ state }: { state: string }) => state === 'started')).toBe(true)
+    expect((await manager.get(address('?state=old'))).status).toBe(422)
+  })
+
   it('finds the records of one block', async () => {
     const { block } = await createBlock(house.services, await farm.actor('owner'), buildBlock({ code: 'Z9', geometry: squareAt(30) }))
     const input = buildRecord({ ...things, blockId: block.id })

@@ -47,10 +47,11 @@ export async function ensurePackages({ lifecycle, say }) {
   if (isInstalled()) return
   const startedAt = performance.now()
   say('Packages', 'installing, a minute or two')
+  const problem = await networkProblem(lifecycle)
   for (;;) {
-    const done = await underLock([...npmCommand(), 'ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error', '--fetch-retry-mintimeout=2000', '--fetch-retry-maxtimeout=10000'], lifecycle)
+    const done = await underLock([...npmCommand(), 'ci', '--include=dev', '--no-audit', '--no-fund', ...quickRetries, ...(problem ? ['--offline'] : [])], lifecycle)
     if (done.code === 0) break
-    if (done.code !== lockTaken) throw new OneLine(explainNpm(done.output))
+    if (done.code !== lockTaken) throw new OneLine(explainNpm(problem ?? done.output))
     say('Packages', 'another command is installing them, waiting for it')
     await runCommand('flock', [inCheckout('package-lock.json'), 'true'], { lifecycle })
     if (isInstalled()) break
@@ -59,6 +60,20 @@ export async function ensurePackages({ lifecycle, say }) {
 }
 
 const lockTaken = 75
+const quickRetries = ['--loglevel=error', '--fetch-retry-mintimeout=1000', '--fetch-retry-maxtimeout=10000']
+const networkCodes = /ENOTFOUND|EAI_AGAIN|ECONNREFUSED|ECONNRESET|ETIMEDOUT|ENETUNREACH|EHOSTUNREACH|ERR_SOCKET_TIMEOUT/
+
+/**
+ * Without a network npm tries every package for minutes; one question tells beforehand. What npm has kept from earlier
+ * may then still be enough.
+ * @param {import('./lifecycle.mjs').Lifecycle} lifecycle
+ * @returns {Promise<string | undefined>} what npm said, where the network does not answer
+ */
+async function networkProblem(lifecycle) {
+  const [command = 'npm', ...args] = [...npmCommand(), 'ping', ...quickRetries, '--fetch-timeout=20000']
+  const asked = await runCommand(command, args, { cwd: checkoutFolder, env: npmEnvironment(), lifecycle })
+  return asked.code !== 0 && networkCodes.test(asked.output) ? asked.output : undefined
+}
 
 /** @param {readonly string[]} command @param {import('./lifecycle.mjs').Lifecycle} lifecycle */
 function underLock(command, lifecycle) {
@@ -82,7 +97,7 @@ function npmEnvironment() {
 function explainNpm(output) {
   if (/ENOSPC|EDQUOT|no space left/i.test(output)) return 'Packages: the disk is full: free some space.'
   if (/EACCES|EPERM|EROFS/.test(output)) return `Packages: this user may not write in ${checkoutFolder}: give it the folder, or install them with npm ci as its owner.`
-  const network = /ENOTFOUND|EAI_AGAIN|ECONNREFUSED|ECONNRESET|ETIMEDOUT|ENETUNREACH|EHOSTUNREACH|ERR_SOCKET_TIMEOUT|network/.exec(output)
+  const network = networkCodes.exec(output)
   if (network !== null) return `Packages could not be fetched (${network[0]}): connect this machine to the network and start again.`
   const first = output.split('\n').find((line) => /\S/.test(line)) ?? 'npm said nothing.'
   return `Packages could not be installed: ${first.trim()} Run npm ci to see all of it.`

@@ -71,9 +71,10 @@ async function runBrowser(context, database) {
  * @returns {NodeJS.ProcessEnv}
  */
 function testEnvironment(database) {
-  const kept = Object.entries(process.env).filter(([name]) => !/^(NODE_ENV|PG.*|DATABASE_URL|DATABASE_OWNER_URL|FIXED_CLOCK|PUBLIC_URL)$/.test(name))
+  const kept = Object.entries(process.env).filter(([name]) => !/^(NODE_ENV|NO_COLOR|FORCE_COLOR|PG.*|DATABASE_URL|DATABASE_OWNER_URL|FIXED_CLOCK|PUBLIC_URL)$/.test(name))
   return {
     ...Object.fromEntries(kept),
+    ...(process.stdout.isTTY ? { FORCE_COLOR: '1' } : { NO_COLOR: '1' }), // the runners write to a pipe of ours
     ...(database && {
       TEST_DATABASE_ADMIN_URL: database.adminUrl,
       TEST_OWNER_PASSWORD: database.secrets.ownerPassword,
@@ -86,7 +87,7 @@ function testEnvironment(database) {
 function report(results, shown) {
   for (const { name, counts, output } of results) {
     if (counts.failed > 0 && !shown) process.stdout.write(`\n${output.trimEnd()}\n\n`)
-    say(`Tests, ${name}`, `${countsLine(counts)}; ${secondsSince(0)} in`)
+    say(`Tests, ${name}`, `${countsLine(counts)} (${secondsSince(0)} after the start)`)
   }
   return results
 }

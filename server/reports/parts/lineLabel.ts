@@ -27,9 +27,8 @@ export function findLineLabel(lines: readonly PagePoint[][], frame: PlanBox, wid
 
 function longestStretch(lines: readonly PagePoint[][], frame: PlanBox): PagePoint[] {
   let best: PagePoint[] = []
-  let current: PagePoint[] = []
   for (const line of lines) {
-    current = []
+    let current: PagePoint[] = []
     for (const point of walk(line, frame)) {
       if (point === null) current = []
       else current.push(point)

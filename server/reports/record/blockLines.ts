@@ -27,7 +27,7 @@ export function blockLinesTable({ signed, figures, words, isWide, place }: Lines
   const { say } = words
   const pairs = pairBlocks(signed)
   // What was measured on the land need not add up to what the mix gives: only shares of it do.
-  const isShared = figures.agrees && pairs.every(({ line }) => line.amount === null)
+  const isShared = figures.agrees && pairs.every(({ line }) => line.amount === null || line.amount.known === 'workedOut')
   const rows: TableRow[] = pairs.map(({ line, block }, index) => {
     const { litres, known } = lineAmount(line, { figures, index, words })
     return {
@@ -77,13 +77,17 @@ function nameOf({ code, name }: Block, { words, isWide }: { words: ReportWords; 
 function lineAmount(
   { amount }: BlockLine, { figures, index, words }: { figures: RecordFigures; index: number; words: ReportWords },
 ): { litres: string; known: string } {
+  const { say } = words
   const line = figures.sheet.lines[index]
   if (amount) {
-    const litres = amount.unit === 'L' ? words.typed(amount.value) : words.quantity(amount.value, amount.unit)
-    return { litres, known: words.say(`known.${amount.known}`) }
+    // What was worked out is the share of the mix, written out at signing: rounded for reading like every such figure.
+    const value = amount.known === 'workedOut' ? words.amount(amount.value) : words.typed(amount.value)
+    const withUnit = amount.known === 'workedOut' ? words.worked(amount.value, amount.unit) : words.quantity(amount.value, amount.unit)
+    const litres = amount.unit === 'L' ? value : withUnit
+    return { litres, known: say(`known.${amount.known}`) }
   }
-  if (!figures.agrees || !line?.shareL) return { litres: words.say('lines.none'), known: words.say('lines.none') }
-  return { litres: words.amount(line.shareL), known: words.say('known.workedOut') }
+  if (!figures.agrees || !line?.shareL) return { litres: say('lines.none'), known: say('lines.none') }
+  return { litres: words.amount(line.shareL), known: say('known.workedOut') }
 }
 
 function lineTime(instant: string | null, { times }: SignedRecord, words: ReportWords): string {

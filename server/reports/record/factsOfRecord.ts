@@ -63,16 +63,18 @@ const LATE = 24 * 60 * MINUTE
 export function peopleFacts({ signed, names }: RecordReportData, words: ReportWords): Fact[] {
   const { say, moment } = words
   const { times } = signed
+  // A name that was blanked leaves the person's digest in the signed text and nothing to print.
+  const nameOf = (name: string): string => (name === '' ? say('people.noName') : name)
   const worked = words.isSameDay(times.startedAt, times.endedAt)
     ? say('stamp.sameDay', { day: words.day(times.startedAt), start: words.time(times.startedAt), end: words.time(times.endedAt) })
     : say('stamp.days', { day: words.day(times.startedAt), start: words.time(times.startedAt), endDay: words.day(times.endedAt), end: words.time(times.endedAt) })
   return [
-    { label: say('people.doneBy'), spans: plain(names.doneBy) },
-    { label: say('people.enteredBy'), spans: enteredBy(names.enteredBy, times, words) },
+    { label: say('people.doneBy'), spans: plain(nameOf(names.doneBy)) },
+    { label: say('people.enteredBy'), spans: enteredBy(nameOf(names.enteredBy), times, words) },
     { label: say('people.worked'), spans: plain(worked) },
     { label: say('people.device'), spans: deviceClock(times, words) },
     { label: say('people.server'), spans: plain(moment(times.receivedAt, { seconds: true })) },
-    { label: say('people.signed'), spans: [...bold(moment(times.signedAt, { seconds: true })), ...plain(say('people.signedBy', { name: names.signedBy }))] },
+    { label: say('people.signed'), spans: [...bold(moment(times.signedAt, { seconds: true })), ...plain(say('people.signedBy', { name: nameOf(names.signedBy) }))] },
   ]
 }
 

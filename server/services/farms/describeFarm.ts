@@ -6,6 +6,7 @@ import { Account } from '../../entities/Account.ts'
 import { Block } from '../../entities/Block.ts'
 import { Person } from '../../entities/Person.ts'
 import { In } from 'typeorm'
+import { listByKey } from '../listByKey.ts'
 import type { Services } from '../services.ts'
 
 /** The farm as its people see it; its place is a corner of its first block. */
@@ -24,16 +25,20 @@ export async function describeFarm(services: Services, actor: FarmActor): Promis
   }
 }
 
-/** People of the farm by name, with the e-mail of those who have an account. */
-export async function listPeople(services: Services, actor: FarmActor): Promise<{ items: PersonAnswer[]; next: null }> {
+/** A page of the farm's people by name, with the e-mail of those who have an account. */
+export async function listPeople(
+  services: Services,
+  actor: FarmActor,
+  page: { limit: number; cursor?: string | undefined },
+): Promise<{ items: PersonAnswer[]; next: string | null }> {
   return services.database.inFarm(actor, async (manager) => {
-    const people = await manager.find(Person, { where: { farmId: actor.farmId }, order: { name: 'ASC', id: 'ASC' } })
-    const ids = people.flatMap(({ accountId }) => (accountId === null ? [] : [accountId]))
+    const people = await listByKey(manager, Person, page, actor.farmId, { key: 'name', present: (person) => person })
+    const ids = people.items.flatMap(({ accountId }) => (accountId === null ? [] : [accountId]))
     const accounts = await manager.find(Account, { select: { id: true, email: true }, where: { id: In(ids) } })
     const emails = new Map(accounts.map(({ id, email }) => [id, email]))
     return {
-      items: people.map(({ id, name, role, active, accountId }) => ({ id, name, role, active, email: emails.get(accountId ?? '') ?? null })),
-      next: null,
+      items: people.items.map(({ id, name, role, active, accountId }) => ({ id, name, role, active, email: emails.get(accountId ?? '') ?? null })),
+      next: people.next,
     }
   })
 }

@@ -15,11 +15,11 @@ interface ListedRow {
   sort_at: Date
 }
 
-/** A page of the register, newest work first; with `block`, only records that have a line on it. */
+/** A page of the register, newest work first; with `block`, only records that have a line on it, with `state` only those. */
 export async function listRecords(
   services: Services,
   actor: FarmActor,
-  page: { limit: number; cursor?: string | undefined; block?: string | undefined },
+  page: { limit: number; cursor?: string | undefined; block?: string | undefined; state?: RegisterRow['state'] | undefined },
 ): Promise<{ items: RegisterRow[]; next: string | null }> {
   const after = decodeCursor(page.cursor)
   const params: unknown[] = [actor.farmId, page.limit + 1]
@@ -28,10 +28,11 @@ export async function listRecords(
   const order = page.block === undefined ? 'r.sort_at DESC, r.id DESC' : 'l.sort_at DESC, l.record_id DESC'
   const key = page.block === undefined ? '(r.sort_at, r.id)' : '(l.sort_at, l.record_id)'
   const from = after ? `AND ${key} < (${add(after.key)}::timestamptz, ${add(after.id)}::uuid)` : ''
+  const inState = page.state === undefined ? '' : `AND r.state = ${add(page.state)}`
   const rows: ListedRow[] = await services.database.inFarm(actor, (manager) =>
     manager.query(
       `SELECT r.id, r.state, r.register_row, r.sort_at FROM application_records r ${onBlock}
-       WHERE r.farm_id = $1 ${from} ORDER BY ${order} LIMIT $2`,
+       WHERE r.farm_id = $1 ${inState} ${from} ORDER BY ${order} LIMIT $2`,
       params,
     ),
   )

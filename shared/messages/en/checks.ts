@@ -8,7 +8,7 @@ export const checks = {
   },
   source: {
     label: '{material}, label',
-    labelPart: '{material}, label, {part}',
+    labelPart: '{material}, {part}',
   },
   law: {
     title: 'Law',
@@ -77,6 +77,6 @@ export const checks = {
     under: '{value} {unit}, under {low} to {high} (3 to 8 mph): still air may carry mist far.',
     over: '{value} {unit}, over {low} to {high} (3 to 8 mph): the spray drifts.',
     within: '{low} to {high} {unit} (3 to 8 mph).',
-    source: 'common practice, 3 to 8 mph; a label wins over it',
+    source: 'common practice, 3 to 8 mph',
   },
 }

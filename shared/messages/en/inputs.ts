@@ -8,7 +8,6 @@ export const inputs = {
   receiveLot: 'Receive a lot',
   count: 'Correct count',
   cancel: 'Cancel',
-  nothing: '–',
   kept: 'Kept on this device. It is sent as soon as there is signal.',
   materials: 'Materials',
   materialCount: '{number} material | {number} materials',

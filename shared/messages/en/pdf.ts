@@ -32,7 +32,6 @@ export const pdf = {
   lines: {
     title: 'Blocks',
     block: 'Block line',
-    named: '{code} {name}',
     boundary: 'Boundary',
     whole: 'whole',
     hectares: 'ha',
@@ -78,7 +77,6 @@ export const pdf = {
     sprayLast: 'Spray, one load of {last} L',
     fullOne: 'one load',
     fullMany: '{count} loads',
-    nothing: 'Nothing was mixed in.',
     differs: 'Worked out again today, a figure differs. Printed is what was signed; what follows from it is left out.',
   },
   weather: {
@@ -101,6 +99,7 @@ export const pdf = {
   people: {
     title: 'People and times',
     doneBy: 'Done by',
+    noName: 'name no longer kept',
     enteredBy: 'Entered by',
     signed: 'Signed',
     signedBy: ', {name}, by password',
@@ -133,6 +132,8 @@ export const pdf = {
   reasons: {
     title: 'Signed all the same, and why',
     what: 'What',
+    stop: 'Done with a stop',
+    late: 'Entered late',
     why: 'Reason given',
   },
   notes: { title: 'Notes' },

@@ -5,7 +5,6 @@ export const today = {
   goOnWith: 'Go on with {codes}',
   goOnName: 'Go on with {what}',
   loading: 'Reading today',
-  failed: 'Today did not come.',
   title: 'Today',
   line: {
     startedOne: '{codes}: started and not signed.',

@@ -8,7 +8,7 @@ export const checks = {
   },
   source: {
     label: '{material}, etiqueta',
-    labelPart: '{material}, etiqueta, {part}',
+    labelPart: '{material}, {part}',
   },
   law: {
     title: 'Ley',
@@ -77,6 +77,6 @@ export const checks = {
     under: '{value} {unit}, por debajo de {low} a {high} (de 3 a 8 mph): el aire quieto puede llevar lejos la niebla.',
     over: '{value} {unit}, por encima de {low} a {high} (de 3 a 8 mph): el caldo deriva.',
     within: 'De {low} a {high} {unit} (de 3 a 8 mph).',
-    source: 'práctica común, de 3 a 8 mph; la etiqueta manda sobre ella',
+    source: 'práctica común, de 3 a 8 mph',
   },
 }

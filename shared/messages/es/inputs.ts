@@ -8,7 +8,6 @@ export const inputs = {
   receiveLot: 'Recibir un lote',
   count: 'Corregir',
   cancel: 'Cancelar',
-  nothing: '–',
   kept: 'Guardado en este dispositivo. Se envía en cuanto haya señal.',
   materials: 'Materiales',
   materialCount: '{number} material | {number} materiales',

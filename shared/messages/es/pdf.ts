@@ -32,7 +32,6 @@ export const pdf = {
   lines: {
     title: 'Parcelas',
     block: 'Parcela',
-    named: '{code} {name}',
     boundary: 'Lindero',
     whole: 'entera',
     hectares: 'ha',
@@ -78,7 +77,6 @@ export const pdf = {
     sprayLast: 'Caldo, una carga de {last} L',
     fullOne: 'una carga',
     fullMany: '{count} cargas',
-    nothing: 'No se mezcló nada.',
     differs: 'Calculada hoy de nuevo, una cifra difiere. Se imprime lo firmado; lo que se deriva de ello se omite.',
   },
   weather: {
@@ -101,6 +99,7 @@ export const pdf = {
   people: {
     title: 'Personas y horas',
     doneBy: 'Hecho por',
+    noName: 'nombre ya no conservado',
     enteredBy: 'Anotado por',
     signed: 'Firmado',
     signedBy: ', {name}, con contraseña',
@@ -133,6 +132,8 @@ export const pdf = {
   reasons: {
     title: 'Firmado aun así, y por qué',
     what: 'Qué',
+    stop: 'Hecho con un alto',
+    late: 'Anotado tarde',
     why: 'Razón dada',
   },
   notes: { title: 'Notas' },

@@ -5,7 +5,6 @@ export const today = {
   goOnWith: 'Seguir con {codes}',
   goOnName: 'Seguir con {what}',
   loading: 'Leyendo el día de hoy',
-  failed: 'El día de hoy no llegó.',
   title: 'Hoy',
   line: {
     startedOne: '{codes}: empezado y sin firmar.',

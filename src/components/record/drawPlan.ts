@@ -8,13 +8,15 @@ export interface PlanDrawing {
   /** Where the block's label stands, pixels. */
   x: number
   y: number
-  neighbours: { code: string; path: string; x: number; y: number }[]
+  neighbours: { code: string; path: string; x: number; y: number; isNamed: boolean }[]
   /** Scale bar: metres and the pixels they take. */
   barM: number
   barPx: number
 }
 
 const MARGIN_PX = 20
+/** Room a neighbour's code needs to the frame, and the scale bar below it. */
+const LABEL_PX = 14
 
 /** Blocks laid on one sheet, north up, so that the first fills it; the others as far as they show. */
 export function drawPlan(block: Pick<Block, 'code' | 'geometry'>, neighbours: readonly Pick<Block, 'code' | 'geometry'>[], { width, height }: Frame): PlanDrawing {
@@ -31,7 +33,10 @@ export function drawPlan(block: Pick<Block, 'code' | 'geometry'>, neighbours: re
   const barM = niceScaleBar((width * 0.4) / scale)
   return {
     ...lay(block.geometry),
-    neighbours: neighbours.map(({ code, geometry }) => ({ code, ...lay(geometry) })).filter(({ x, y }) => x > -width && x < 2 * width && y > -height && y < 2 * height),
+    neighbours: neighbours
+      .map(({ code, geometry }) => ({ code, ...lay(geometry) }))
+      .filter(({ x, y }) => x > -width && x < 2 * width && y > -height && y < 2 * height)
+      .map((one) => ({ ...one, isNamed: one.x > LABEL_PX && one.x < width - LABEL_PX && one.y > LABEL_PX && one.y < height - 2 * LABEL_PX })),
     barM,
     barPx: barM * scale,
   }

@@ -60,6 +60,13 @@ describe('peopleFacts', () => {
 })
 
 describe('facts', () => {
+  it('says so where a name was blanked', () => {
+    const facts = peopleFacts(buildRecordReportData({ names: { doneBy: '', enteredBy: 'Oda Verrill', signedBy: '' } }), words)
+    expect(read(facts, 'Done by')).toBe('name no longer kept')
+    expect(read(facts, 'Signed')).toBe('16 June 2026, 09:12:40, name no longer kept, by password')
+  })
+
+
   it('says so where nothing was read or written', () => {
     const signed = buildSignedRecord({ sprayer: null, content: { ...base.content, weather: null, purpose: null } })
     const facts = [...weatherFacts(buildRecordReportData({ signed }), words), ...placeFacts(buildRecordReportData({ signed }), words)]

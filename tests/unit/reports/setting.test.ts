@@ -56,7 +56,7 @@ describe('wrapText', () => {
   })
 
   it('keeps a word whole over two styles', () => {
-    const lines = wrapText(canvas, [{ text: 'long words A3', style: STYLES.bodyBold }, { text: ', then', style: STYLES.body }], 66)
+    const lines = wrapText(canvas, [{ text: 'long words A3', style: STYLES.bodyBold }, { text: ', then', style: STYLES.body }], 60)
     expect(lines.map(({ spans }) => spans.map(({ text }) => text).join(''))).toEqual(['long words ', 'A3, then'])
   })
 

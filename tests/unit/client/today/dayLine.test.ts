@@ -1,0 +1,44 @@
+import { describe, expect, it } from 'vitest'
+import { dayLine, type DayFacts } from '../../../../shared/today/dayLine.ts'
+import { translate } from '../../../../shared/messages/translate.ts'
+
+const quiet: DayFacts = { started: [], drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
+const ids = (facts: Partial<DayFacts>): string[] => dayLine({ ...quiet, ...facts }).map(({ id }) => id)
+
+describe('dayLine', () => {
+  it('says that nothing waits on a quiet day, and that nothing is signed', () => {
+    expect(ids({})).toEqual(['today.line.quiet', 'today.line.noneSigned'])
+  })
+
+  it('puts started work before lots, drafts and what was signed', () => {
+    expect(ids({ started: ['V2'], drafts: 1, signedToday: 3, pastLots: ['27'] })).toEqual([
+      'today.line.startedOne', 'today.line.pastOne', 'today.line.drafts', 'today.line.signed',
+    ])
+  })
+
+  it('names the one and counts the many', () => {
+    expect(dayLine({ ...quiet, started: ['V2', 'S1'] })[0]).toMatchObject({ id: 'today.line.startedMany', figures: { figure: { text: '2', ink: 'wel' } } })
+    expect(dayLine({ ...quiet, soonLots: [{ code: '31', day: '26 June' }] })[0]?.figures).toEqual({
+      code: { text: '31', ink: 'plain' }, figure: { text: '26 June', ink: 'wel' },
+    })
+    expect(dayLine({ ...quiet, pastLots: ['27', '28'] })[0]).toMatchObject({ id: 'today.line.pastMany', count: 2 })
+  })
+
+  it('lets lots past their use speak before lots that end soon', () => {
+    expect(ids({ pastLots: ['27'], soonLots: [{ code: '31', day: '26 June' }] })).toEqual(['today.line.pastOne', 'today.line.noneSigned'])
+  })
+
+  it.each(['en', 'es'] as const)('has the words of every sentence in %s', (language) => {
+    const all = [
+      ...dayLine(quiet),
+      ...dayLine({ started: ['V2'], drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
+      ...dayLine({ started: ['V2', 'S1'], drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
+    ]
+    for (const { id, figures } of all) {
+      const params = Object.fromEntries(Object.entries(figures).map(([name, { text }]) => [name, text]))
+      const words = translate(language, id, params)
+      for (const text of Object.values(params)) expect(words).toContain(text)
+    }
+    expect(all.length).toBeGreaterThan(8)
+  })
+})
