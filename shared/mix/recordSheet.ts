@@ -31,6 +31,7 @@ export function recordSheet(input: SheetInput): RecordSheet {
   const spray: SprayFigures = {
     areaM2: sheet.areaM2, areaHa, waterL: solved.waterL, totalL: solved.totalL, tankL: sheet.tankL, loads,
   }
+  const lines = presentLines(input, sheet.lineAreasM2, totalL && sheet.areaM2 ? totalL : null, findings)
   return {
     areaM2: round(writtenM2),
     areaHa: round(writtenM2.div(M2_PER_HA)),
@@ -39,8 +40,9 @@ export function recordSheet(input: SheetInput): RecordSheet {
     sprayLPerHa: solved.totalL && areaHa && round(solved.totalL.div(areaHa)),
     loads: presentLoads(spray),
     components: sheet.bases.map((basis) => componentFigures(basis, spray)),
-    water: perLoad(solved.waterL, spray),
-    lines: presentLines(input, sheet.lineAreasM2, totalL && sheet.areaM2 ? totalL : null, findings),
+    water: { perHa: solved.waterL && areaHa && writeDecimal(solved.waterL.div(areaHa)), ...perLoad(solved.waterL, spray) },
+    appliedL: sumAmounts(lines),
+    lines,
     findings,
   }
 }
@@ -70,6 +72,16 @@ function presentLines(
     shareL: shares?.[index]?.toFixed() ?? null,
     amountL: readAmountL(input.lines[index]?.amount, `lines.${index}.amount`, findings),
   }))
+}
+
+function sumAmounts(lines: readonly SheetLine[]): string | null {
+  if (lines.length === 0) return null
+  let sum = ZERO
+  for (const { amountL } of lines) {
+    if (amountL === null) return null
+    sum = sum.plus(amountL)
+  }
+  return writeDecimal(sum)
 }
 
 function readAmountL(amount: SheetInput['lines'][number]['amount'], path: string, findings: SheetFinding[]): string | null {

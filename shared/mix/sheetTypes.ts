@@ -67,8 +67,10 @@ export interface RecordSheet {
   sprayLPerHa: number | null
   loads: SheetLoads | null
   components: SheetComponent[]
-  /** Carrier water of a full load and of the last part load, litres. */
-  water: { perFullLoad: string | null; perLastLoad: string | null }
+  /** Carrier water on a hectare, in a full load and in the last part load, litres. */
+  water: { perHa: string | null; perFullLoad: string | null; perLastLoad: string | null }
+  /** Sum of the amounts written down on the lines, litres; null until each line says one by volume. */
+  appliedL: string | null
   lines: SheetLine[]
   findings: SheetFinding[]
 }

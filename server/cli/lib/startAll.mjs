@@ -67,8 +67,8 @@ async function installAndBuild(context) {
  * @returns {Promise<number>}
  */
 async function stayUntilOneEnds({ server, database, isReady, logFile, folder }) {
-  const databaseGone = database.ended?.then(() => `The database stopped by itself; ${join(folder, 'postgres.log')} says why.`)
-  const serverGone = server.ended.then((how) => (isReady ? `The server stopped by itself (${how}); ${logFile} says why.` : undefined))
+  const databaseGone = database.ended?.then(() => `The database stopped by itself; its log is ${join(folder, 'postgres.log')}.`)
+  const serverGone = server.ended.then((how) => (isReady ? `The server stopped by itself (${how}); its log is ${logFile}.` : undefined))
   const line = await Promise.race([serverGone, ...(databaseGone ? [databaseGone] : [])])
   if (line !== undefined) throw new OneLine(line)
   return 1 // it said itself why it could not start

@@ -26,8 +26,6 @@ interface LinesInput { signed: SignedRecord; figures: RecordFigures; words: Repo
 export function blockLinesTable({ signed, figures, words, isWide, place }: LinesInput): Table {
   const { say } = words
   const pairs = pairBlocks(signed)
-  // What was measured on the land need not add up to what the mix gives: only shares of it do.
-  const isShared = figures.agrees && pairs.every(({ line }) => line.amount === null || line.amount.known === 'workedOut')
   const rows: TableRow[] = pairs.map(({ line, block }, index) => {
     const { litres, known } = lineAmount(line, { figures, index, words })
     return {
@@ -48,7 +46,7 @@ export function blockLinesTable({ signed, figures, words, isWide, place }: Lines
     cells: [
       bold(say('lines.total')), ...(isWide ? [[], []] : []),
       bold(words.hectares(signed.computed.areaM2)), [], [],
-      isShared && signed.computed.totalL !== null ? bold(words.amount(signed.computed.totalL)) : [], [],
+      figures.sheet.appliedL === null ? [] : bold(words.amount(figures.sheet.appliedL)), [],
     ],
   })
   const last = rows.at(-2)

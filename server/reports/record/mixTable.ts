@@ -56,7 +56,7 @@ function waterRow({ signed, figures, words }: RowInput): TableRow {
       plain(water === null ? say('lines.none') : words.quantity(water.value, water.unit)),
       plain(water === null ? say('lines.none') : say(water.sizedFrom === 'water' ? 'known.typed' : 'known.workedOut')),
       bold(waterL === null ? say('lines.none') : words.worked(waterL, 'L')),
-      plain(say('lines.none')),
+      plain(derived(words, agrees ? sheet.water.perHa : null)),
       plain(derived(words, agrees ? sheet.water.perFullLoad : null)),
       plain(derived(words, agrees ? sheet.water.perLastLoad : null)),
     ],

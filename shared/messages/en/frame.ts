@@ -36,7 +36,9 @@ export const frame = {
     sending: 'Sending {count} of {of}',
     kept: '{count} kept, not sent yet',
     noSignal: 'No signal, {count} kept',
+    noSignalNone: 'No signal',
     needsYou: '{count} needs you',
+    needYou: '{count} need you',
   },
   moreSheet: {
     title: 'More',

@@ -169,7 +169,7 @@ export const records = {
     told: 'Whom you tell',
     done: 'What was done about it',
     needed: 'Write this: the record carries it.',
-    reason: 'Why: {why} Told: {told} Done: {done}',
+    reason: 'Why: {why}; told: {told}; done: {done}',
   },
   unlikely: {
     title: 'Something in it is unlikely',
@@ -195,6 +195,7 @@ export const records = {
   },
   sign: {
     password: 'Your password',
+    passwordShort: 'Password',
     sign: 'Sign',
     asItHappened: 'Sign as it happened',
     needPassword: 'Give your password to sign.',

@@ -36,7 +36,9 @@ export const frame = {
     sending: 'Enviando {count} de {of}',
     kept: '{count} sin enviar todavía',
     noSignal: 'Sin señal, {count} guardados',
+    noSignalNone: 'Sin señal',
     needsYou: '{count} le espera',
+    needYou: '{count} le esperan',
   },
   moreSheet: {
     title: 'Más',

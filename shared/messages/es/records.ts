@@ -169,7 +169,7 @@ export const records = {
     told: 'A quién avisas',
     done: 'Qué se hizo al respecto',
     needed: 'Escribe esto: el registro lo lleva.',
-    reason: 'Por qué: {why} Avisado: {told} Hecho: {done}',
+    reason: 'Por qué: {why}; avisado: {told}; hecho: {done}',
   },
   unlikely: {
     title: 'Algo en él es poco probable',
@@ -195,6 +195,7 @@ export const records = {
   },
   sign: {
     password: 'Tu contraseña',
+    passwordShort: 'Contraseña',
     sign: 'Firmar',
     asItHappened: 'Firmar como pasó',
     needPassword: 'Pon tu contraseña para firmar.',

@@ -22,7 +22,7 @@ describe('recordSheet from water', () => {
       perFullLoad: '6.45161290322581', perLastLoad: '0.645161290322581',
       measure: { id: 'sheet.measure.ratio', params: { parts: 30, waterL: 600 } },
     })
-    expect(sheet.water).toEqual({ perFullLoad: '193.548387096774', perLastLoad: '19.3548387096774' })
+    expect(sheet.water).toEqual({ perHa: '300', perFullLoad: '193.548387096774', perLastLoad: '19.3548387096774' })
   })
 
   it('adds a rate over the area, in the unit of its amount', () => {
@@ -92,7 +92,7 @@ describe('recordSheet of a half-typed draft', () => {
   it('knows nothing of an empty one, and says what it needs', () => {
     expect(recordSheet({ lines: [], water: null, tankL: null, components: [] })).toEqual({
       areaM2: 0, areaHa: 0, waterL: null, totalL: null, sprayLPerHa: null, loads: null, components: [],
-      water: { perFullLoad: null, perLastLoad: null }, lines: [],
+      water: { perHa: null, perFullLoad: null, perLastLoad: null }, appliedL: null, lines: [],
       findings: [{ code: 'sheet.no_area', params: {} }, { code: 'sheet.no_water', params: {}, path: 'water' }],
     })
   })

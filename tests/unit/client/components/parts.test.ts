@@ -30,7 +30,11 @@ describe('SyncBadge', () => {
     [{ kind: 'sending', count: 2, of: 5 }, 'Sending 2 of 5'],
     [{ kind: 'kept', count: 5, online: false }, 'No signal, 5 kept'],
     [{ kind: 'needsYou', count: 1 }, '1 needs you'],
-  ])('%o reads %o', (state, words) => { expect(mountWithWords(SyncBadge, { state }).text()).toBe(words) })
+  ])('%o reads %o', (state, words) => {
+    const badge = mountWithWords(SyncBadge, { state })
+    expect(badge.get('button').text()).toBe(words)
+    expect(badge.get('[role="status"]').text()).toBe(words)
+  })
 })
 
 describe('LateMark', () => {
