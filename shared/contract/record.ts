@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { acknowledgedSchema, idSchema, instantSchema, messageSchema } from './common.ts'
 import {
-  amountSchema, amountUnit, decimalText, knownAmountSchema, positiveDecimal, rateUnit,
+  amountUnit, decimalText, knownAmountSchema, positiveDecimal, rateUnit,
   signedDecimal, SPEED_UNITS, TEMPERATURE_UNITS, volumeRateUnit, volumeUnit,
 } from './quantity.ts'
 import { passwordSchema } from './session.ts'
@@ -174,7 +174,6 @@ export const registerRowSchema = z.object({
   tally: z.object({ stop: z.number().int(), caution: z.number().int(), unknown: z.number().int() }),
 })
 export type RegisterRow = z.infer<typeof registerRowSchema>
-export type CheckCodeAnswer = z.infer<typeof checkCodeAnswerSchema>
 
 /** What an outsider learns from a check code: that the entry stands, and nothing of what it says. */
 export const checkCodeAnswerSchema = z.object({
@@ -185,5 +184,4 @@ export const checkCodeAnswerSchema = z.object({
   signedAt: z.string().nullable(),
   digest: z.string().nullable(),
 })
-
-export type AmountInput = z.infer<typeof amountSchema>
+export type CheckCodeAnswer = z.infer<typeof checkCodeAnswerSchema>

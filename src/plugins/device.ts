@@ -3,7 +3,7 @@ import type { Draft } from '../stores/draftTypes.ts'
 import type { KeptCommand } from '../stores/keptCommand.ts'
 
 /** The last answer of one read, so that a form opens without signal. */
-export interface KeptRead {
+interface KeptRead {
   /** `${farmId}/${name}`, or a name alone for what belongs to no farm. */
   key: string
   accountId: string
@@ -12,7 +12,7 @@ export interface KeptRead {
 }
 
 /** What the device keeps: drafts, commands not yet sent, and the last reads. */
-export class DeviceDatabase extends Dexie {
+class DeviceDatabase extends Dexie {
   drafts!: Table<Draft, string>
   outbox!: Table<KeptCommand, string>
   reads!: Table<KeptRead, string>

@@ -1,5 +1,5 @@
 import pg from 'pg'
-import { DataSource } from 'typeorm'
+import type { DataSource } from 'typeorm'
 import { afterAll, beforeAll, expect, it } from 'vitest'
 import { createOwnerSource } from '../../server/database/dataSource.ts'
 import { openHouse, type TestHouse } from '../support/openHouse.ts'

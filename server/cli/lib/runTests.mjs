@@ -31,7 +31,11 @@ export async function runTests({ lifecycle, wish: { kinds, rest } }) {
     needsDatabase ? buildIfStale({ lifecycle, say }) : undefined,
   ])
   const context = { lifecycle, folder, rest, shown: kinds.length === 1, env: testEnvironment(database) }
-  const show = async (/** @type {() => Promise<RunnerResult[]>} */ runKind) => report(await runKind(), context.shown)
+  const show = async (/** @type {() => Promise<RunnerResult[]>} */ runKind) => {
+    const results = await runKind()
+    lifecycle.assertGoing() // what was interrupted has no result
+    return report(results, context.shown)
+  }
   // What reads the source keeps one core busy while the database tests, which mostly wait, use the other.
   const [ofSource, ofCode] = await Promise.all([
     wants('static') ? show(() => runStatic(context)) : [],

@@ -2,7 +2,6 @@ import { spawn } from 'node:child_process'
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { createInterface } from 'node:readline'
-import { fileURLToPath, pathToFileURL } from 'node:url'
 import { checkoutFolder } from './checkout.mjs'
 import { endProcess, identityOf, isAlive } from './processes.mjs'
 
@@ -15,7 +14,8 @@ import { endProcess, identityOf, isAlive } from './processes.mjs'
  */
 
 const stopSteps = /** @type {const} */ ([['SIGTERM', 15_000], ['SIGKILL', 5000]])
-const stopWithParent = pathToFileURL(fileURLToPath(new URL('./stopWithParent.mjs', import.meta.url))).href
+/** What makes a Node.js process close when this one is gone. */
+export const followParent = ['--import', new URL('./stopWithParent.mjs', import.meta.url).href]
 
 /**
  * Starts the server. Its stdout comes line by line; its stderr, where it says in one line why it cannot start, is ours.
@@ -24,7 +24,7 @@ const stopWithParent = pathToFileURL(fileURLToPath(new URL('./stopWithParent.mjs
  */
 export function startServer({ entry, env, pidFile, lifecycle, onLine }) {
   lifecycle.assertGoing()
-  const child = spawn(process.execPath, ['--import', stopWithParent, entry], { cwd: checkoutFolder, env, detached: true, stdio: ['ignore', 'pipe', 'inherit'] })
+  const child = spawn(process.execPath, [...followParent, entry], { cwd: checkoutFolder, env, detached: true, stdio: ['ignore', 'pipe', 'inherit'] })
   const self = identityOf(child.pid ?? 0)
   writeFileSync(pidFile, JSON.stringify(self), { mode: 0o600 })
   const ended = new Promise((/** @type {(how: string) => void} */ resolve) => {

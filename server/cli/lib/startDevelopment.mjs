@@ -11,7 +11,7 @@ import { endProcess, identityOf } from './processes.mjs'
 import { removeRunFile, writeRunFile } from './runFile.mjs'
 import { say } from './say.mjs'
 import { serverEnvironment } from './serverEnvironment.mjs'
-import { leftServerFile, stopLeftServer } from './serverProcess.mjs'
+import { followParent, leftServerFile, stopLeftServer } from './serverProcess.mjs'
 
 const usualApiPort = 4310
 const usualClientPort = 5173
@@ -55,7 +55,7 @@ export async function startDevelopment({ lifecycle, env = process.env }) {
  */
 function runPart(name, args, env, lifecycle) {
   lifecycle.assertGoing()
-  const child = spawn(process.execPath, args, { cwd: checkoutFolder, env, detached: true, stdio: ['ignore', 'inherit', 'inherit'] })
+  const child = spawn(process.execPath, [...followParent, ...args], { cwd: checkoutFolder, env, detached: true, stdio: ['ignore', 'inherit', 'inherit'] })
   const self = identityOf(child.pid ?? 0)
   lifecycle.add(async () => void (await endProcess(self, [['SIGTERM', 10_000], ['SIGKILL', 5000]])))
   return new Promise((resolve, reject) => {

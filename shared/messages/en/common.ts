@@ -1,16 +1,10 @@
 /** Words that every place uses. */
 export const common = {
-  save: 'Save',
   cancel: 'Cancel',
   close: 'Close',
-  add: 'Add',
-  open: 'Open',
-  back: 'Back',
   tryAgain: 'Try again',
   choose: 'Choose',
   noDate: 'No date',
-  none: 'none',
-  optional: 'optional',
   reading: 'Reading',
   nothingHere: 'Nothing here yet',
   nothingMatches: 'Nothing matches',

@@ -16,7 +16,6 @@ export const session = {
   emailNeeded: 'Write your e-mail.',
   passwordNeeded: 'Write your password.',
   wrong: 'E-mail and password do not match. Check both and try again.',
-  ended: 'Your session has ended. Sign in again to go on.',
   reentry: {
     title: 'Write your password to go on',
     text: 'The session has ended. Nothing you typed is lost.',

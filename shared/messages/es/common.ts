@@ -1,16 +1,10 @@
 /** Words that every place uses, in Spanish. */
 export const common = {
-  save: 'Guardar',
   cancel: 'Cancelar',
   close: 'Cerrar',
-  add: 'Añadir',
-  open: 'Abrir',
-  back: 'Volver',
   tryAgain: 'Intentar de nuevo',
   choose: 'Elegir',
   noDate: 'Sin fecha',
-  none: 'ninguno',
-  optional: 'opcional',
   reading: 'Leyendo',
   nothingHere: 'Aquí no hay nada todavía',
   nothingMatches: 'Nada coincide',

@@ -16,7 +16,6 @@ export const session = {
   emailNeeded: 'Escriba su correo electrónico.',
   passwordNeeded: 'Escriba su contraseña.',
   wrong: 'El correo y la contraseña no concuerdan. Revise los dos e inténtelo de nuevo.',
-  ended: 'Su sesión ha terminado. Entre otra vez para seguir.',
   reentry: {
     title: 'Escriba su contraseña para seguir',
     text: 'La sesión ha terminado. Nada de lo que escribió se ha perdido.',
