@@ -16,9 +16,9 @@ module.exports = {
     rule('one-door-to-the-data', { path: '^(server/(?!database/)|src/)' }, { path: '^server/database/(dataSource|entities)\\.ts$' }, 'Use inFarm or inHouse.'),
     rule('components-get-props', { path: '^src/components/' }, { path: '^src/(stores|api|router|views)/' }),
     rule('views-use-composables', { path: '^src/views/' }, { path: '^src/api/' }),
-    rule('nobody-imports-views', { path: '^src/(?!router/|views/)' }, { path: '^src/views/' }),
+    rule('nobody-imports-views', { path: '^src/(?!App\\.vue$|router/|views/)' }, { path: '^src/views/' }),
     rule('api-is-lowest', { path: '^src/api/' }, { path: '^src/(stores|composables|components|views|router)/' }),
-    rule('composables-know-no-components', { path: '^src/composables/' }, { path: '^src/(components|views)/' }),
+    rule('composables-know-no-components', { path: '^src/composables/' }, { path: '^src/(components/.*\\.vue$|views/)' }, 'A composable may know the shape of what a part takes, never the part.'),
     rule('nobody-imports-tests', { path: '^(src|server|shared|migrations)/' }, { path: '^tests/' }),
   ],
   options: {

@@ -55,7 +55,7 @@ const TABLES = [
     CONSTRAINT accounts_email_key UNIQUE (email),
     CONSTRAINT accounts_language_check CHECK (language IN ('en', 'es')))`,
   `CREATE TABLE account_tokens (
-    token_hash text NOT NULL, account_id uuid NOT NULL, purpose text NOT NULL,
+    token_hash text NOT NULL, account_id uuid NOT NULL, kind text NOT NULL,
     created_at timestamptz NOT NULL, expires_at timestamptz NOT NULL, used_at timestamptz,
     CONSTRAINT account_tokens_pkey PRIMARY KEY (token_hash),
     CONSTRAINT account_tokens_account_fkey FOREIGN KEY (account_id) REFERENCES accounts (id))`,

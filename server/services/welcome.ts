@@ -24,7 +24,7 @@ export async function inviteOwner(services: Parts, email: string): Promise<{ tok
     if (!known) {
       await manager.insert(Account, { id: accountId, email: email.toLowerCase(), name: email, passwordHash: null, language: 'en', createdAt, deactivatedAt: null })
     }
-    await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, purpose: 'welcome', createdAt, expiresAt, usedAt: null })
+    await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, kind: 'welcome', createdAt, expiresAt, usedAt: null })
   })
   return { token, expiresAt }
 }

@@ -3,8 +3,15 @@ import type { RecordSheet, SheetComponent } from '../mix/sheetTypes.ts'
 import { settle } from './settle.ts'
 import { words } from './buildCheck.ts'
 
-/** Six digits: enough that the sums on the page add up when done again by hand. */
-const shown = (value: string | number): number => settle(value).toSignificantDigits(6).toNumber()
+const DIGITS = 6
+const MOST_DECIMALS = 4
+
+/** Six digits, rounded once: enough that the sums on the page add up when done again by hand. */
+function shown(value: string | number): number {
+  const exact = settle(value)
+  const whole = exact.trunc().isZero() ? 0 : exact.trunc().toFixed().length
+  return exact.toDecimalPlaces(Math.min(MOST_DECIMALS, Math.max(0, DIGITS - whole))).toNumber()
+}
 
 function componentWorking(component: SheetComponent, name: string): Message | null {
   const { amount, measure } = component

@@ -24,5 +24,5 @@ function words(max: number) {
 export const lineText = (max: number) =>
   words(max).refine((text) => !BREAKS.test(text), { error: 'text.line_break' })
 
-/** Words that may run over several lines: a note, a reason, a purpose. */
+/** Words that may run over several lines: a note, a reason. */
 export const noteText = (max: number) => words(max)

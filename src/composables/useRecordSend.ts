@@ -19,7 +19,7 @@ async function revisionMet(error: unknown, read: () => Promise<ApplicationRecord
   if (!(error instanceof ApiError)) return null
   // The id was sent from here before with less in it, and the answer never came.
   if (error.problem.errors.some(({ code }) => code === 'idempotency.mismatch')) return (await read()).revision
-  const current = recordSchema.pick({ revision: true }).safeParse(error.problem.current)
+  const current = recordSchema.pick({ revision: true }).strip().safeParse(error.problem.current)
   return error.problem.code === 'stale' && current.success ? current.data.revision : null
 }
 

@@ -1,13 +1,14 @@
 import type { NavigationGuardReturn, RouteLocationNormalized } from 'vue-router'
 import { useSession } from '../stores/session.ts'
 
-/** Who is not signed in goes to the cover and comes back; a certifier starts at My farms; a wrong role finds nothing. */
+/** Who is not signed in goes to the cover and comes back; a certifier starts at My farms; a wrong role finds nothing; who has no farm makes one. */
 export async function guard(to: RouteLocationNormalized): Promise<NavigationGuardReturn> {
   const session = useSession()
   await session.load()
   if (to.meta.open === true) return true
   if (session.user === null) return { name: 'sign-in', query: to.fullPath === '/' ? {} : { next: to.fullPath } }
+  if (session.role === null) return to.name === 'farm-new' ? true : { name: 'farm-new' }
   const roles = to.meta.roles
-  if (roles === undefined || session.role === null || roles.includes(session.role)) return true
+  if (roles === undefined || roles.includes(session.role)) return true
   return to.name === 'today' ? { name: 'my-farms' } : { name: 'not-found', params: { rest: to.path.slice(1).split('/') } }
 }

@@ -5,6 +5,8 @@ declare module 'vue-router' {
   interface RouteMeta {
     /** Opens without signing in. */
     open?: boolean
+    /** Stands on the cover, without spine. */
+    cover?: boolean
     /** Who may open it; everyone on a farm when not said. */
     roles?: Role[]
     /** The place of the spine it belongs to. */
@@ -31,6 +33,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/register/:id', name: 'record', component: () => import('../views/register/RecordView.vue'), props: true, meta: { place: 'register' } },
   { path: '/inputs', name: 'inputs', component: () => import('../views/inputs/InputsView.vue'), meta: { place: 'inputs' } },
   { path: '/farm', name: 'farm', component: () => import('../views/farm/FarmView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/farms/new', name: 'farm-new', component: () => import('../views/farm-new/FarmNewView.vue'), meta: { cover: true } },
   { path: '/farms', name: 'my-farms', component: () => import('../views/my-farms/MyFarmsView.vue'), meta: { place: 'my-farms', roles: ['certifier'] } },
   { path: '/:rest(.*)*', name: 'not-found', component: () => import('../views/not-found/NotFoundView.vue') },
 ]

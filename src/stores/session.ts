@@ -64,6 +64,12 @@ export const useSession = defineStore('session', () => {
     void keepSession(answer)
   }
 
+  /** Reads the memberships again and opens one of them: a farm just made. */
+  async function open(id: string): Promise<void> {
+    accept(await sessionApi.read())
+    chooseFarm(id)
+  }
+
   function chooseFarm(id: string): void {
     chosenFarmId.value = id
     writeSetting('farm', id)
@@ -71,6 +77,6 @@ export const useSession = defineStore('session', () => {
 
   return {
     session, loaded, user, memberships, membership, farmId, role, canManage, canRecord,
-    load, signIn, signOut, forget, accept, chooseFarm,
+    load, signIn, signOut, forget, accept, open, chooseFarm,
   }
 })

@@ -4,6 +4,7 @@ import { basename, dirname, join } from 'node:path'
 import { OneLine } from './OneLine.mjs'
 import { cleanEnvironment } from './cleanEnvironment.mjs'
 import { freePort } from './freePort.mjs'
+import { giveTo } from './giveTo.mjs'
 import { stopLeftCluster, stopSteps } from './leftCluster.mjs'
 import { endProcess, identityOf, waitUntil } from './processes.mjs'
 import { runCommand } from './runCommand.mjs'
@@ -29,6 +30,7 @@ const largestLog = 10_000_000
 export async function startCluster(wish) {
   if (!existsSync(join(wish.folder, 'PG_VERSION'))) await makeCluster(wish)
   await stopLeftCluster(wish.folder)
+  giveTo(wish.user, wish.folder)
   for (let left = 3; ; left--) {
     const cluster = await tryStart(wish, await freePort())
     if (typeof cluster === 'object') return cluster

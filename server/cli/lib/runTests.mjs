@@ -4,7 +4,7 @@ import { ensurePackages } from './packages.mjs'
 import { say, secondsSince } from './say.mjs'
 import { ensureSystemPackages } from './systemPackages.mjs'
 import { addCounts, countsLine } from './testCounts.mjs'
-import { runPlaywright, runStatic, runVitest } from './testRunners.mjs'
+import { runPlaywright, runVitest, staticRuns } from './testRunners.mjs'
 import { makeThrowAwayFolder } from './throwAwayFolder.mjs'
 import { startThrowAwayDatabase } from './throwAwayDatabase.mjs'
 
@@ -38,7 +38,7 @@ export async function runTests({ lifecycle, wish: { kinds, rest } }) {
   }
   // What reads the source keeps one core busy while the database tests, which mostly wait, use the other.
   const [ofSource, ofCode] = await Promise.all([
-    wants('static') ? show(() => runStatic(context)) : [],
+    inOrder(wants('static') ? staticRuns(context).map((run) => () => show(run)) : []),
     inOrder([
       ...(wants('unit') ? [() => show(() => runVitest('unit', ['unit', 'client'], context))] : []),
       ...(wants('api') ? [() => show(() => runVitest('api', ['api'], context))] : []),

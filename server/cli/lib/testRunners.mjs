@@ -24,16 +24,14 @@ const staticChecks = /** @type {const} */ ([
 
 /**
  * @param {RunnerContext} context
- * @returns {Promise<RunnerResult[]>} one for each check
+ * @returns {(() => Promise<RunnerResult[]>)[]} a run for each check
  */
-export async function runStatic({ lifecycle, env, shown }) {
-  const results = []
-  for (const [name, program, args] of staticChecks) {
+export function staticRuns({ lifecycle, env, shown }) {
+  return staticChecks.map(([name, program, args]) => async () => {
     const done = await runCommand(process.execPath, [inCheckout('node_modules', program), ...args], { cwd: checkoutFolder, env, lifecycle, shown, limitMs: 10 * minuteMs })
     const passed = done.code === 0
-    results.push({ name, counts: { passed: passed ? 1 : 0, failed: passed ? 0 : 1, skipped: 0 }, output: done.output })
-  }
-  return results
+    return [{ name, counts: { passed: passed ? 1 : 0, failed: passed ? 0 : 1, skipped: 0 }, output: done.output }]
+  })
 }
 
 /**

@@ -37,6 +37,17 @@ export const farm = {
     sprayer: { title: 'Sprayer', text: 'None yet. Without one a mix is not split into loads.' },
   },
   readFailed: 'The farm could not be read.',
+  make: {
+    title: 'Your farm',
+    text: 'You become its owner. Blocks, inputs and people follow.',
+    name: 'Name of the farm',
+    zone: 'Time zone of the land',
+    zoneHint: 'Times of records, holds and seasons follow it.',
+    seasonStart: 'The season begins on',
+    seasonHint: 'A season is named by the year it begins in.',
+    save: 'Make the farm',
+    none: 'No farm is open to you yet. Make your own, or ask the owner of one to let you in.',
+  },
   myFarms: {
     title: 'My farms',
     intro: 'Farms and seasons you were granted. You read; nothing you do here changes a record.',

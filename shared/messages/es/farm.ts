@@ -37,6 +37,17 @@ export const farm = {
     sprayer: { title: 'Pulverizador', text: 'Todavía ninguno. Sin él, la mezcla no se reparte en cargas.' },
   },
   readFailed: 'No se pudo leer la finca.',
+  make: {
+    title: 'Su finca',
+    text: 'Usted pasa a ser su titular. Después vienen parcelas, insumos y personas.',
+    name: 'Nombre de la finca',
+    zone: 'Zona horaria del terreno',
+    zoneHint: 'La siguen las horas de los registros, las esperas y las campañas.',
+    seasonStart: 'La campaña empieza el',
+    seasonHint: 'Una campaña lleva el nombre del año en que empieza.',
+    save: 'Crear la finca',
+    none: 'Ninguna finca está abierta para usted. Cree la suya, o pida a quien lleva una que le dé entrada.',
+  },
   myFarms: {
     title: 'Mis fincas',
     intro: 'Fincas y campañas que le concedieron. Usted lee; nada de lo que haga aquí cambia un registro.',

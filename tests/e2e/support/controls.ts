@@ -1,0 +1,26 @@
+import type { Locator, Page } from '@playwright/test'
+import { expect } from '@playwright/test'
+
+type Place = Page | Locator
+
+const pageOf = (place: Place): Page => ('page' in place ? place.page() : place)
+
+/** Chooses one of a list by its words; types them where the list can be searched. */
+export async function choose(place: Place, label: string, option: string): Promise<void> {
+  const box = place.getByRole('combobox', { name: label, exact: true })
+  await box.click()
+  if (await box.isEditable()) await box.fill(option)
+  const wanted = pageOf(place).getByRole('option', { name: option }).filter({ visible: true })
+  await wanted.click()
+  await expect(wanted).toBeHidden()
+}
+
+/** Chooses one of a group of radio buttons: the button itself lies unseen under its words. */
+export async function segment(place: Place, name: string | RegExp): Promise<void> {
+  const radio = place.getByRole('radio', typeof name === 'string' ? { name, exact: true } : { name })
+  await place.locator('label').filter({ has: radio }).click()
+  await expect(radio).toBeChecked()
+}
+
+/** A field by its label. */
+export const field = (place: Place, label: string): Locator => place.getByRole('textbox', { name: label, exact: true })

@@ -1,0 +1,125 @@
+import type { Locator, Page } from '@playwright/test'
+import { expect } from '@playwright/test'
+import type { Block } from '../../../shared/contract/block.ts'
+import { choose, field, segment } from './controls.ts'
+import { PASSWORD } from './demoFarm.ts'
+import type { Things } from './things.ts'
+import { say, saying } from './words.ts'
+
+/** The form of a record, on desk and phone alike: acted on by what a person reads. */
+export class RecordForm {
+  readonly page: Page
+  readonly main: Locator
+  private readonly isPhone: boolean
+
+  constructor(page: Page, isPhone: boolean) {
+    this.page = page
+    this.isPhone = isPhone
+    this.main = page.getByRole('main', { name: say('records.newTitle') })
+  }
+
+  async open(query = ''): Promise<void> {
+    await this.page.goto(`/register/new${query}`)
+    await expect(this.step(1)).toHaveAttribute('aria-current', 'step')
+  }
+
+  step(number: 1 | 2): Locator {
+    return this.main.getByRole('button', { name: new RegExp(`^${number}\\s*${say(number === 1 ? 'records.steps.ready' : 'records.steps.happened').replace('?', '\\?')}`) })
+  }
+
+  /** The line of the mix that opens the fields of one ingredient, or of the water. */
+  mixLine(name: string): Locator {
+    const label = this.isPhone ? new RegExp(`^${name}`) : say('records.mix.change', { name })
+    return this.main.getByRole('button', { name: label, exact: !this.isPhone })
+  }
+
+  chooseBlock({ code, name }: Block): Promise<void> {
+    return choose(this.main, say('records.where.block'), `${code} ${name}`)
+  }
+
+  async setWater(litres: string): Promise<void> {
+    await this.openLine(say('records.mix.carrier'))
+    await field(this.main, say('records.mix.carrierAmount')).fill(litres)
+  }
+
+  async setComponent(shown: string, wanted: { material: string; lot: string; kind: 'ratio' | 'perArea' | 'perTank'; value: string }): Promise<void> {
+    await this.openLine(shown)
+    await choose(this.main, say('records.mix.material'), wanted.material)
+    await segment(this.main, say(`records.mix.${wanted.kind}`))
+    await field(this.main, say(`records.mix.${{ ratio: 'parts', perArea: 'rate', perTank: 'eachTank' }[wanted.kind]}`)).fill(wanted.value)
+    await segment(this.main, new RegExp(`^${wanted.lot}`))
+  }
+
+  async addComponent(): Promise<void> {
+    await this.main.getByRole('button', { name: say('records.mix.add') }).click()
+  }
+
+  async chooseSprayer(code: string): Promise<void> {
+    await choose(this.main, say('records.sprayer.label'), code)
+  }
+
+  private async openLine(name: string): Promise<void> {
+    const line = this.mixLine(name)
+    if ((await line.getAttribute('aria-expanded')) !== 'true') await line.click()
+    await expect(line).toHaveAttribute('aria-expanded', 'true')
+  }
+
+  /** A soil drench of one ingredient, 1 part to 20 of 200 L: whole, ready to start. */
+  async fillDrench({ block, first, sprayer }: Things): Promise<void> {
+    await segment(this.main, say('records.method.drench'))
+    await this.chooseBlock(block)
+    await this.setComponent(say('records.mix.unnamed', { number: 1 }), { material: first.material.name, lot: first.lot.code, kind: 'ratio', value: '20' })
+    await this.setWater('200')
+    await this.chooseSprayer(sprayer.code)
+  }
+
+  get startButton(): Locator {
+    return this.main.getByRole('button', { name: new RegExp(`^${say('records.ready.start')}`) })
+  }
+
+  async start(): Promise<void> {
+    await expect(this.startButton).toBeEnabled()
+    await this.startButton.click()
+    await expect(this.step(2)).toHaveAttribute('aria-current', 'step')
+  }
+
+  async endNow(): Promise<void> {
+    await this.main.getByRole('button', { name: `${say('records.happened.end')}: ${say('records.happened.now')}` }).click()
+    await expect(field(this.main, say('records.happened.end'))).toHaveValue(/^\d\d:\d\d$/)
+  }
+
+  get password(): Locator {
+    return field(this.main, say('records.sign.password'))
+  }
+
+  get signButton(): Locator {
+    return this.main.getByRole('button', { name: new RegExp(`^(${say('records.sign.sign')}|${say('records.sign.asItHappened')})$`) })
+  }
+
+  async sign(password = PASSWORD): Promise<void> {
+    await this.password.fill(password)
+    await this.signButton.click()
+  }
+
+  /** The number it got. */
+  async signedNumber(): Promise<string> {
+    const said = this.main.getByText(saying('records.signed.title'))
+    await expect(said).toBeVisible()
+    return /\d{4}-\d{4}/.exec(await said.innerText())?.[0] ?? ''
+  }
+
+  /** The checks: beside the page, or the sheet the peek opens. */
+  async checks(): Promise<Locator> {
+    if (!this.isPhone) return this.page.getByRole('complementary', { name: say('frame.checks') })
+    await this.page.getByRole('region', { name: say('frame.checks') }).getByRole('button').click()
+    const sheet = this.page.getByRole('dialog', { name: say('frame.checks') })
+    await expect(sheet).toBeVisible()
+    return sheet
+  }
+
+  async closeChecks(): Promise<void> {
+    if (!this.isPhone) return
+    await this.page.keyboard.press('Escape')
+    await expect(this.page.getByRole('dialog', { name: say('frame.checks') })).toBeHidden()
+  }
+}

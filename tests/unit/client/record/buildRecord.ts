@@ -1,0 +1,33 @@
+import type { Block } from '../../../../shared/contract/block.ts'
+import type { ApplicationRecord } from '../../../../shared/contract/record.ts'
+import { emptyRecord, type RecordDraft } from '../../../../src/composables/recordDraft.ts'
+
+/** A block of about a hectare, with its outline. */
+export const buildBlock = (over: Partial<Block> = {}): Block => ({
+  id: 'b1', code: 'A3', name: 'Long Bank 3', crop: null, areaM2: 10_000, perimeterM: 400, version: 1, revision: 1, createdAt: '2026-01-01T00:00:00Z',
+  geometry: { type: 'Polygon', coordinates: [[[-121, 38], [-120.9989, 38], [-120.9989, 38.0009], [-121, 38.0009], [-121, 38]]] }, ...over,
+})
+
+/** A form filled in far enough to be started: 750 L of water, one ingredient 1 to 20. */
+export const buildDraft = (over: Partial<RecordDraft> = {}): RecordDraft => ({
+  ...emptyRecord(),
+  blockId: 'b1',
+  components: [{ key: 'k1', materialId: 'm1', lotId: 'l1', kind: 'ratio', value: '20', unit: 'L' }],
+  water: { sizedFrom: 'water', value: '750', unit: 'L', source: '' },
+  ...over,
+})
+
+/** A record started on another device. */
+export const buildRecord = (over: Partial<ApplicationRecord> = {}): ApplicationRecord => ({
+  id: 'r1', state: 'started', number: null, season: null, version: 0, revision: 3, digest: null, seq: null,
+  method: 'drench', purpose: 'roots', notes: 'wet', sprayerId: 's1', doneById: null,
+  lines: [{ blockId: 'b1', part: { kind: 'whole' }, startedAt: '2026-06-16T13:50:00Z', endedAt: null, amount: null }],
+  components: [
+    { materialId: 'm1', lotId: 'l1', basis: { kind: 'ratio', parts: '20' } },
+    { materialId: 'm2', lotId: null, basis: { kind: 'perArea', value: '4', unit: 'kg/ha' } },
+  ],
+  water: { sizedFrom: 'sprayRate', value: '400', unit: 'L/ha', source: null },
+  weather: { wind: { value: '1.6', unit: 'ms', kind: 'felt' }, windFrom: 'NW', air: null, humidity: null },
+  computed: { areaM2: 10_000, totalL: 400, waterL: 380, sprayLPerHa: 400, loads: null, components: [] },
+  checks: [], acknowledged: [], doneBy: null, enteredBy: null, signedBy: null, signedAt: null, deviceAt: null, receivedAt: '2026-06-16T13:51:00Z', ...over,
+})
