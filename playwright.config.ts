@@ -1,19 +1,17 @@
-import { availableParallelism } from 'node:os'
 import { defineConfig } from '@playwright/test'
-
-/** The database, the server and the browser share the machine. */
-const workers = Math.max(1, Math.min(2, availableParallelism() - 1))
 
 export default defineConfig({
   testDir: 'tests/e2e',
   outputDir: 'test-results/e2e',
   forbidOnly: true,
   fullyParallel: false,
-  workers,
+  // One after the other: the newest row of the register is then the test's own, and a busy machine stays in time.
+  workers: 1,
   timeout: 90_000,
   expect: { timeout: 15_000 },
   use: {
     baseURL: process.env['E2E_URL'] ?? 'http://127.0.0.1:4310',
+    actionTimeout: 15_000,
     locale: 'en-US',
     timezoneId: 'America/Los_Angeles',
     screenshot: 'only-on-failure',

@@ -1,4 +1,3 @@
-import { z } from 'zod'
 import { pageOf } from '../../shared/contract/common.ts'
 import { recordSchema, registerRowSchema, type ApplicationRecord, type RegisterRow } from '../../shared/contract/record.ts'
 import { http } from './http.ts'
@@ -6,14 +5,8 @@ import { http } from './http.ts'
 /** Which rows of the register to read. */
 export interface RegisterQuery {
   limit?: number
-  season?: number
   block?: string
-  method?: string
-  material?: string
-  person?: string
-  state?: string
-  q?: string
-  sort?: string
+  state?: RegisterRow['state']
 }
 
 export interface RegisterPage {
@@ -27,6 +20,4 @@ export const recordApi = {
     http.get(`/farms/${farmId}/records`, pageOf(registerRowSchema), { ...query, cursor }),
   read: (farmId: string, id: string): Promise<ApplicationRecord> =>
     http.get(`/farms/${farmId}/records/${id}`, recordSchema),
-  versions: async (farmId: string, id: string): Promise<ApplicationRecord[]> =>
-    (await http.get(`/farms/${farmId}/records/${id}/versions`, z.object({ items: z.array(recordSchema) }))).items,
 }

@@ -5,6 +5,7 @@ import type { RegisterLine } from '../../shared/register/registerLine.ts'
 import { formatNumber, formatVolumeL } from '../../shared/units/formatQuantity.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
+import { useBlocks } from './useBlocks.ts'
 import { useRecord } from './useRecord.ts'
 import { useRecords } from './useRecords.ts'
 import { unsentDrafts, useRegisterLines, type RegisterWords } from './useRegisterLines.ts'
@@ -15,6 +16,8 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   /** Drafts first, then what the server has, newest first. */
   lines: ComputedRef<RegisterLine[]>
   ready: ComputedRef<boolean>
+  /** Code of the one block whose records are shown, or null. */
+  onlyBlock: ComputedRef<string | null>
   /** Rows of the server that are shown. */
   shown: ComputedRef<number>
   chosenId: Ref<string | null>
@@ -25,21 +28,24 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   headWords: ComputedRef<string>
 }
 
-/** The register page: its rows page by page, the chosen one with its checks, and the totals of what is shown. */
-export function useRegister(): Register {
+/** The register page: its rows page by page, of one block where asked, the chosen one with its checks, and the totals of what is shown. */
+export function useRegister(blockId: () => string | null): Register {
   const { t } = useI18n()
   const session = useSession()
   const preferences = usePreferences()
   const farmId = computed(() => session.farmId)
-  const rows = useRecords(farmId, { limit: 50 })
+  const rows = useRecords(farmId, () => (blockId() === null ? { limit: 50 } : { limit: 50, block: blockId() ?? '' }))
+  const { data: blocks } = useBlocks(farmId)
   const { place, draftLines, present, outlines } = useRegisterLines()
 
   const items = computed(() => rows.data.value?.pages.flatMap((page) => page.items) ?? [])
-  const lines = computed(() => [...unsentDrafts(draftLines.value, items.value), ...present(items.value)])
+  const lines = computed(() => [...(blockId() === null ? unsentDrafts(draftLines.value, items.value) : []), ...present(items.value)])
   const chosenId = ref<string | null>(null)
   const chosen = computed(() => lines.value.find(({ id }) => id === chosenId.value) ?? null)
   const record = useRecord(farmId, () => (chosen.value === null || chosen.value.onDevice ? '' : chosen.value.id))
   const ready = computed(() => rows.data.value !== undefined && place.value !== null)
+
+  const onlyBlock = computed(() => blocks.value?.find(({ id }) => id === blockId())?.code ?? null)
 
   watch(ready, (isReady) => {
     if (isReady) chosenId.value ??= firstOf(lines.value)
@@ -60,7 +66,7 @@ export function useRegister(): Register {
   })
 
   return {
-    rows, record, lines, ready, place, outlines, chosenId, chosen, sums, sumWords,
+    rows, record, lines, ready, onlyBlock, place, outlines, chosenId, chosen, sums, sumWords,
     shown: computed(() => items.value.length),
     headWords: computed(() => headOf(chosen.value)),
   }

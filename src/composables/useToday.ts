@@ -48,13 +48,14 @@ export function useToday(): Today {
   const preferences = usePreferences()
   const farmId = computed(() => session.farmId)
   const newest = useRecords(farmId, { limit: 200 })
+  const started = useRecords(farmId, { limit: 50, state: 'started' })
   const inputs = useInputs()
   const { place, draftLines, present, outlines } = useRegisterLines()
   const { today } = inputs
   const { data: blocks } = useBlocks(farmId)
 
   const rowsOf = (read: ReturnType<typeof useRecords>): RegisterRow[] => read.data.value?.pages.flatMap(({ items }) => items) ?? []
-  const startedLines = computed(() => present(rowsOf(newest).filter(({ state }) => state === 'started' || state === 'draft')))
+  const startedLines = computed(() => present(rowsOf(started)))
   const doneLines = computed(() => {
     const zone = place.value?.zone
     if (zone === undefined || today.value === null) return []
@@ -66,7 +67,7 @@ export function useToday(): Today {
   })
   const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
 
-  const deviceLines = computed(() => unsentDrafts(draftLines.value, rowsOf(newest)))
+  const deviceLines = computed(() => unsentDrafts(draftLines.value, [...rowsOf(started), ...rowsOf(newest)]))
   const blockLines = computed(() => lastOnBlocks(blocks.value ?? [], rowsOf(newest)).map(({ block, row }) => {
     const [line] = row === null ? [] : present([row])
     if (row === null || line === undefined) return { block, last: null }
@@ -93,7 +94,7 @@ export function useToday(): Today {
     openLines: computed(() => [...startedLines.value, ...deviceLines.value]),
     startedLines, doneLines, endingLots, blockLines, outlines, inputs, newest,
     rowsRead: computed(() => rowsOf(newest).length),
-    ready: computed(() => place.value !== null && newest.data.value !== undefined && inputs.ready.value),
+    ready: computed(() => place.value !== null && newest.data.value !== undefined && started.data.value !== undefined && inputs.ready.value),
   }
 }
 

@@ -8,6 +8,8 @@ export const register = {
   emptyTitle: 'No record yet.',
   emptyText: 'A spray or drench stands here once it is started; signing gives it its number.',
   emptyRead: 'Records stand here once the farm signs one in a season granted to you.',
+  onlyBlock: 'Only records of {code}.',
+  allBlocks: 'All blocks',
   newestFirst: 'newest first',
   caption: 'Records of the farm, newest first',
   draft: 'draft',

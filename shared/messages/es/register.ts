@@ -8,6 +8,8 @@ export const register = {
   emptyTitle: 'Aún no hay registros.',
   emptyText: 'Una pulverización o un riego al suelo aparece aquí cuando se empieza; al firmarla recibe su número.',
   emptyRead: 'Los registros aparecen aquí cuando la finca firma uno en una campaña que usted puede leer.',
+  onlyBlock: 'Solo registros de {code}.',
+  allBlocks: 'Todas las parcelas',
   newestFirst: 'los últimos primero',
   caption: 'Registros de la finca, los últimos primero',
   draft: 'borrador',

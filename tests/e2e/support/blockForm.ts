@@ -25,7 +25,8 @@ export class BlockForm {
 
   async open(by: 'draw' | 'points'): Promise<void> {
     await this.page.goto(`/blocks/new?by=${by}`)
-    if (by === 'draw') await expect(this.map).toBeVisible()
+    // Once the ground is there, the cross stands in the middle of what is drawn.
+    if (by === 'draw') await expect(this.map.locator('path.leaflet-interactive').nth(23)).toBeAttached()
     else await expect(this.points).toBeVisible()
   }
 

@@ -8,7 +8,8 @@ const pageOf = (place: Place): Page => ('page' in place ? place.page() : place)
 /** Chooses one of a list by its words; types them where the list can be searched. */
 export async function choose(place: Place, label: string, option: string): Promise<void> {
   const box = place.getByRole('combobox', { name: label, exact: true })
-  await box.click()
+  // The words of the choice lie over the box itself.
+  await box.click({ force: true })
   if (await box.isEditable()) await box.fill(option)
   const wanted = pageOf(place).getByRole('option', { name: option }).filter({ visible: true })
   await wanted.click()
@@ -17,8 +18,8 @@ export async function choose(place: Place, label: string, option: string): Promi
 
 /** Chooses one of a group of radio buttons: the button itself lies unseen under its words. */
 export async function segment(place: Place, name: string | RegExp): Promise<void> {
-  const radio = place.getByRole('radio', typeof name === 'string' ? { name, exact: true } : { name })
-  await place.locator('label').filter({ has: radio }).click()
+  const radio = pageOf(place).getByRole('radio', typeof name === 'string' ? { name, exact: true } : { name })
+  await place.locator('label').filter({ has: radio }).filter({ visible: true }).click()
   await expect(radio).toBeChecked()
 }
 
