@@ -30,7 +30,7 @@ export class RecordForm {
   /** The line of the mix that opens the fields of one ingredient, or of the water. */
   mixLine(name: string): Locator {
     const label = this.isPhone ? new RegExp(`^${name}`) : say('records.mix.change', { name })
-    return this.main.getByRole('button', { name: label, exact: !this.isPhone })
+    return this.page.getByRole('button', { name: label, exact: !this.isPhone })
   }
 
   chooseBlock({ code, name }: Block): Promise<void> {
