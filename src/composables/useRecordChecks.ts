@@ -12,7 +12,7 @@ import type { RecordStock } from './useRecordStock.ts'
 export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>, sheet: Ref<RecordSheet>): {
   checks: ComputedRef<Check[]>
   tally: ComputedRef<Tally>
-  /** Stops that are signed with a reason: all but a lot that is short, whose count has to be put right. */
+  /** Stops that are signed with a reason. */
   reasoned: ComputedRef<Check[]>
   /** Components whose lot is short, by the path of the lot. */
   shortLots: ComputedRef<Record<string, 'records.sign.lotShort'>>
@@ -39,7 +39,7 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
   return {
     checks,
     tally: computed(() => tallyChecks(checks.value)),
-    reasoned: computed(() => checks.value.filter(({ verdict, code }) => verdict === 'stop' && code !== 'lot.left')),
+    reasoned: computed(() => checks.value.filter(({ verdict }) => verdict === 'stop')),
     shortLots: computed(() => {
       const short = checks.value.filter(({ verdict, code }) => verdict === 'stop' && code === 'lot.left')
       return Object.fromEntries(short.map(({ about }) => [`${(about ?? '').replace(':', 's.')}.lotId`, 'records.sign.lotShort' as const]))

@@ -218,6 +218,24 @@ describe('the log and the lots under twenty hands', () => {
   })
 })
 
+describe('a lot that holds less than was used', () => {
+  it('is emptied when the reason is given, and its ledger says why', async () => {
+    const own = await house.makeFarm()
+    const seeded = await seedThings(house, own, { lot: { quantity: { value: '15', unit: 'L' } } })
+    const agent = await house.as(own.accounts.applicator)
+    const input = buildRecord(seeded)
+    await agent.post(`/api/farms/${own.id}/records`).send(input).expect(201)
+    const signing = (acknowledged: object[]) => agent.post(`/api/farms/${own.id}/records/${input.id}/sign`).send({ password: PASSWORD, acknowledged })
+    expect(await signing([])).toMatchObject({ status: 422, body: { acknowledgeable: true, errors: [{ code: 'lot.short', params: { left: 15, needed: 20 } }] } })
+    const done = await signing([{ code: 'lot.short', reason: 'The jar held more than the book' }])
+    expect(done).toMatchObject({ status: 200, body: { state: 'signed', computed: { components: [{ amount: { value: '20' } }] } } })
+    expect((await agent.get(`/api/farms/${own.id}/lots`)).body.items[0].left.value).toBe('0')
+    const ledger = await house.services.database.inFarm({ farmId: own.id, seasons: null }, (tx) =>
+      tx.query("SELECT amount, left_after, reason FROM lot_entries WHERE kind = 'drawn'"))
+    expect(ledger).toEqual([{ amount: '-15', left_after: '0', reason: 'The jar held more than the book' }])
+  })
+})
+
 describe('the register', () => {
   it('is paged newest first without gaps while records keep coming', async () => {
     const own = await house.makeFarm()

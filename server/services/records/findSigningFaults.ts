@@ -31,7 +31,8 @@ export function findMissing(content: RecordContent, sheet: RecordSheet): FieldEr
 export function findUnlikely(content: RecordContent, checks: Check[], acknowledged: Acknowledged, now: Date): FieldError[] {
   const given = new Set(acknowledged.map(({ code }) => code))
   const stops = checks
-    .filter(({ verdict, code }) => verdict === 'stop' && !given.has('record.stop') && !given.has(code))
+    // A lot that is short is asked for by the draw itself, with its figures.
+    .filter(({ verdict, code }) => verdict === 'stop' && code !== 'lot.left' && !given.has('record.stop') && !given.has(code))
     .map(({ code, about, title }) => ({ path: about ?? '', code: 'record.stop', params: { checkCode: code }, about: title }))
   const end = lastEnd(content)
   const days = end === null ? 0 : Math.floor((now.getTime() - Date.parse(end)) / DAY_MS)

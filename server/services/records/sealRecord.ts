@@ -13,6 +13,7 @@ import { findRecordFaults } from './findRecordFaults.ts'
 import { findMissing, findUnlikely } from './findSigningFaults.ts'
 import { judgeRecord, type JudgedRecord } from './judgeRecord.ts'
 import { loadRecordGround, type RecordGround } from './loadRecordGround.ts'
+import { planDraws, type Draw } from './planDraws.ts'
 import { presentRecord } from './presentRecord.ts'
 import { writeVersion } from './writeVersion.ts'
 
@@ -39,12 +40,13 @@ export async function sealRecord(
   const now = services.clock.now()
   const ground = await loadRecordGround(manager, actor, record.content, true)
   const judged = judgeRecord(record.content, ground, actor.zone, now)
-  const faults = [...findRecordFaults(record.content, ground, now), ...findMissing(record.content, judged.sheet)]
-  if (faults.length > 0) throw invalid(faults)
   const content = writeOutAmounts(record.content, judged.sheet)
-  await drawLots(manager, listDraws(content, ground, judged), { recordId: id, personId: personOf(actor), at: now })
-  const doubts = findUnlikely(content, judged.checks, acknowledged, now)
+  const draws = planDraws(listDraws(content, ground, judged), acknowledged)
+  const faults = [...findRecordFaults(content, ground, now), ...findMissing(content, judged.sheet), ...draws.faults]
+  if (faults.length > 0) throw invalid(faults)
+  const doubts = [...draws.doubts, ...findUnlikely(content, judged.checks, acknowledged, now)]
   if (doubts.length > 0) throw unlikely(doubts)
+  await drawLots(manager, draws.entries, { recordId: id, personId: personOf(actor), at: now })
   return presentRecord(manager, await writeVersion(services, manager, actor, { record, content, ground, judged, acknowledged, now }))
 }
 
@@ -58,7 +60,7 @@ function writeOutAmounts(content: RecordContent, sheet: RecordSheet): RecordCont
   return { ...content, lines }
 }
 
-function listDraws(content: RecordContent, { lots }: RecordGround, { computed }: JudgedRecord) {
+function listDraws(content: RecordContent, { lots }: RecordGround, { computed }: JudgedRecord): Draw[] {
   return content.components.flatMap(({ lotId }, index) => {
     const lot = lots.find(({ id }) => id === lotId)
     const amount = computed.components[index]?.amount

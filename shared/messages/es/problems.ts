@@ -95,7 +95,7 @@ export const problems = {
     unknown: 'No hay tal lote en esta finca.',
     other_material: 'El lote {code} es de otro material.',
     missing: '¿De qué lote salió?',
-    short: 'Al lote {code} le quedan {left} {unit}; esto pide {needed} {unit}. Corrija el recuento del lote o lo que entró.',
+    short: 'Al lote {code} le quedan {left} {unit}; esto pide {needed} {unit}. Corrija su recuento o lo que entró, o diga por qué: el lote queda vacío.',
     dimension: 'El lote {code} se cuenta en {unit}; esta cantidad no se puede sacar de él.',
     expires_before: 'La caducidad es anterior al día en que se recibió.',
   },

@@ -2,7 +2,7 @@
 import { createServer } from 'node:http'
 
 const { PORT, HOST, SEED_DEMO, DEMO_PASSWORD } = process.env
-const server = createServer((request, response) => response.end('{"status":"ok"}'))
+const server = createServer((_request, response) => response.end('{"status":"ok"}'))
 server.listen(Number(PORT), HOST, () => {
   console.log(`READY ${JSON.stringify({ url: `http://${HOST}:${PORT}`, seeds: SEED_DEMO === '1', password: DEMO_PASSWORD })}`)
 })
