@@ -5,7 +5,7 @@ import { drawFirstFoot, drawLaterFoot, footHeights, type PageFoot } from './part
 import { startFlow } from './parts/pageFlow.ts'
 import { drawRunningHead, type RunningHead } from './parts/runningHead.ts'
 import { drawStampHead, type StampHead } from './parts/stampHead.ts'
-import { drawChecks, drawMix, drawNotes, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
+import { drawChecks, drawMix, drawLongWords, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
 import { recordFigures } from './record/recordFigures.ts'
 import { openWords, type ReportWords } from './record/reportWords.ts'
 import type { RecordReportData } from './recordReportData.ts'
@@ -31,7 +31,7 @@ export function recordReport(data: RecordReportData, stream: Writable): void {
   drawWeatherAndPeople(page)
   drawChecks(page)
   drawReasons(page)
-  drawNotes(page)
+  drawLongWords(page)
   drawFrames(canvas, { head: headOf(data, words), foot, pages: flow.pages })
   canvas.doc.end()
 }

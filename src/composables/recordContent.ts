@@ -4,6 +4,7 @@ import { toInstant, type InstantResult } from '../../shared/time/toInstant.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
 import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
 import type { ComponentDraft, MomentDraft, ReadingDraft, RecordDraft } from './recordDraft.ts'
+import { mapPlainFields } from '../../shared/records/plainFields.ts'
 
 /** The plain number of a text, or empty where it is none yet. */
 function numberOf(text: string, signed = false): string {
@@ -87,8 +88,7 @@ export function contentOf(draft: RecordDraft, { zone, sheet, happened }: { zone:
       : { sizedFrom: draft.water.sizedFrom, value: numberOf(draft.water.value), unit: draft.water.unit, source: orNull(draft.water.source) },
     sprayerId: orNull(draft.sprayerId),
     weather: weatherOf(draft),
-    purpose: orNull(draft.purpose),
-    notes: orNull(draft.notes),
+    ...mapPlainFields(({ name }) => orNull(draft.plain[name])),
     doneById: orNull(draft.doneById),
   }
   return content as RecordContentInput

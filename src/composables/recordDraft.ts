@@ -2,6 +2,7 @@ import type { ApplicationRecord, Basis, Method, Weather, WIND_POINTS, WEATHER_KI
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { toInstant } from '../../shared/time/toInstant.ts'
 import { newId } from './newId.ts'
+import { mapPlainFields, type PlainName } from '../../shared/records/plainFields.ts'
 
 /** Everything below is as typed: numbers are text, and what is not chosen yet is empty. */
 export interface ComponentDraft {
@@ -32,8 +33,7 @@ export interface RecordDraft {
   step: 1 | 2
   method: Method
   blockId: string
-  purpose: string
-  notes: string
+  plain: Record<PlainName, string>
   /** Empty: the person who writes. */
   doneById: string
   sprayerId: string
@@ -57,7 +57,7 @@ const emptyMoment = (): MomentDraft => ({ date: '', time: '', offset: '' })
 export const emptyRecord = (): RecordDraft => ({
   step: 1,
   method: 'foliar',
-  blockId: '', purpose: '', notes: '', doneById: '', sprayerId: '',
+  blockId: '', plain: mapPlainFields(() => ''), doneById: '', sprayerId: '',
   components: [emptyComponent()],
   water: { sizedFrom: 'water', value: '', unit: 'L', source: '' },
   weather: {
@@ -86,13 +86,13 @@ function draftOfBasis(basis: Basis): Pick<ComponentDraft, 'kind' | 'value' | 'un
   return basis.kind === 'ratio' ? { kind: 'ratio', value: basis.parts, unit: 'L' } : basis
 }
 
-/** A new form with the mix, method, sprayer and purpose of a record, for another block or another day. */
+/** A new form with the mix, method, sprayer and those words of a record that carry over, for another block or another day. */
 export function draftLike(record: ApplicationRecord): RecordDraft {
   const empty = emptyRecord()
   return {
     ...empty,
     method: record.method,
-    purpose: record.purpose ?? '',
+    plain: mapPlainFields(({ name, carriesOver }) => (carriesOver ? (record[name] ?? '') : '')),
     sprayerId: record.sprayerId ?? '',
     components: record.components.map(({ materialId, lotId, basis }) => ({ key: newId(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis) })),
     water: record.water === null ? empty.water : { ...record.water, source: record.water.source ?? '' },
@@ -112,7 +112,7 @@ export function draftOfRecord(record: ApplicationRecord, zone: string): RecordDr
     ...like,
     step: record.state === 'started' ? 2 : 1,
     blockId: line?.blockId ?? '',
-    notes: record.notes ?? '',
+    plain: mapPlainFields(({ name }) => record[name] ?? ''),
     doneById: record.doneById ?? '',
     weather: record.weather === null ? like.weather : draftOfWeather(record.weather),
     start: line?.startedAt ? momentAt(zone, line.startedAt) : like.start,

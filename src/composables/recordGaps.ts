@@ -4,6 +4,7 @@ import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
 import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
 import { contentOf, instantOf } from './recordContent.ts'
 import type { RecordDraft } from './recordDraft.ts'
+import { PLAIN_FIELDS } from '../../shared/records/plainFields.ts'
 
 /** What is missing or cannot be read, by the path of the field in the record. */
 export type Gaps = Partial<Record<string, MessageId>>
@@ -27,11 +28,13 @@ export function unreadable({ weather, amount, water, components }: RecordDraft):
   }
 }
 
+const WORDS_AND_WEATHER = new Set<string>(['weather', ...PLAIN_FIELDS.map(({ name }) => name)])
+
 /** What the contract itself refuses of the weather and the words: a humidity over 100, a note too long. */
 function refused({ draft, sheet, zone }: GapFacts): Gaps {
   const read = recordContentSchema.safeParse(contentOf(draft, { zone, sheet, happened: draft.step === 2 }))
   if (read.success) return {}
-  const issues = read.error.issues.filter(({ path }) => ['weather', 'purpose', 'notes'].includes(String(path[0])))
+  const issues = read.error.issues.filter(({ path }) => WORDS_AND_WEATHER.has(String(path[0])))
   return Object.fromEntries(issues.map(({ path }) => [path.slice(0, 2).join('.'), 'records.gap.unfit' as const]))
 }
 

@@ -1,6 +1,7 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import type { ApplicationRecord, Basis } from '../../shared/contract/record.ts'
+import { PLAIN_FIELDS, type PlainName } from '../../shared/records/plainFields.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { useFigures } from './useFigures.ts'
 import type { RecordStock } from './useRecordStock.ts'
@@ -10,6 +11,15 @@ export interface ReadRow {
   lot: string
   measure: string
   inAll: string
+}
+
+/** A plain field of the record: its label and its words, or what is said where none were written. */
+export interface ReadWords {
+  name: PlainName
+  label: string
+  words: string
+  isLong: boolean
+  isGiven: boolean
 }
 
 export interface ReadFact {
@@ -26,6 +36,7 @@ export interface RecordReading {
   total: string
   over: string
   loads: string
+  plain: ReadWords[]
   times: ReadFact[]
   people: ReadFact[]
   weather: ReadFact[]
@@ -101,6 +112,9 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, stock: R
       total: figures.litres(totalL),
       over: sprayLPerHa === null ? '' : t('records.mix.sprayOver', { rate: figures.plain(Math.round(sprayLPerHa)), hectares: figures.hectares(areaM2) }),
       loads: loadsOf(one.computed),
+      plain: PLAIN_FIELDS.map(({ name, isLong }) => ({
+        name, isLong, label: t(`records.plain.${name}.label`), words: one[name] ?? t(`records.plain.${name}.none`), isGiven: one[name] !== null,
+      })),
       times: timesOf(one),
       people: [
         { name: t('records.happened.doneBy'), value: unknown(one.doneBy?.name ?? '') },

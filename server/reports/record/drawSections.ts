@@ -15,6 +15,7 @@ import { planOf } from './planOf.ts'
 import { reasonsTable } from './reasonsTable.ts'
 import type { RecordFigures } from './recordFigures.ts'
 import { plain, type ReportWords } from './reportWords.ts'
+import { PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 
 /** What the parts of the record's PDF are drawn from and into. */
 export interface Page {
@@ -97,12 +98,14 @@ export function drawReasons(page: Page): void {
   drawLedgerTable(flow, part, table)
 }
 
-export function drawNotes(page: Page): void {
+/** The long plain words of the record, each under its own head. */
+export function drawLongWords(page: Page): void {
   const { data, words } = page
-  const { notes } = data.signed.content
-  if (notes !== null) {
-    startSection(page, words.say('notes.title'), { needs: 3 * STYLES.body.leading })
-    for (const paragraph of notes.split(/\r\n|[\n\r\u2028\u2029]/)) drawParagraph(page, paragraph)
+  for (const { name } of PLAIN_FIELDS.filter(({ isLong }) => isLong)) {
+    const text = data.signed.content[name]
+    if (text === null) continue
+    startSection(page, words.plainLabel(name), { needs: 3 * STYLES.body.leading })
+    for (const paragraph of text.split(/\r\n|[\n\r\u2028\u2029]/)) drawParagraph(page, paragraph)
   }
   if (page.canvas.hasReplaced) {
     page.flow.y += 6

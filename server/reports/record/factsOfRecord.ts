@@ -3,6 +3,7 @@ import type { Fact } from '../parts/factsList.ts'
 import type { RecordReportData } from '../recordReportData.ts'
 import { LINES_BESIDE_PLAN, pairBlocks } from './blockLines.ts'
 import { bold, plain, type ReportWords } from './reportWords.ts'
+import { PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 
 /** What was treated, and for what. */
 export function placeFacts({ signed }: RecordReportData, words: ReportWords): Fact[] {
@@ -18,7 +19,9 @@ export function placeFacts({ signed }: RecordReportData, words: ReportWords): Fa
   return [
     { label: say('facts.blocks'), spans: isMany ? plain(say('facts.manyBlocks', { count: blocks.length })) : named },
     ...(isMany ? [] : [{ label: say('facts.crop'), spans: plain(words.join(crops)) }]),
-    { label: say('facts.purpose'), spans: plain(signed.content.purpose ?? say('facts.noPurpose')) },
+    ...PLAIN_FIELDS.filter(({ isLong }) => !isLong).map(({ name }) => ({
+      label: words.plainLabel(name), spans: plain(signed.content[name] ?? words.plainNone(name)),
+    })),
     { label: say('facts.boundaries'), spans: plain(isMany ? say('facts.manyBoundaries') : versions) },
     { label: say('facts.zone'), spans: plain(signed.farm.zone.replaceAll('_', ' ')) },
     ...(signed.reason === null ? [] : [{ label: say('facts.reason'), spans: plain(signed.reason) }]),

@@ -4,6 +4,7 @@ import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import { formatHectares, formatNumber } from '../../../shared/units/formatQuantity.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { Span } from '../parts/wrapText.ts'
+import type { PlainName } from '../../../shared/records/plainFields.ts'
 
 /** Under this an area needs four decimals of a hectare, square metres. */
 const SMALL_AREA_M2 = 1000
@@ -14,6 +15,9 @@ export interface ReportWords {
   /** A message of the PDF by its id under `pdf`. */
   say(id: string, params?: Record<string, string | number>): string
   unit(code: string): string
+  /** The label of a plain field of the record, and what is said where nothing was written. */
+  plainLabel(name: PlainName): string
+  plainNone(name: PlainName): string
   hectares(areaM2: string | number): string
   /** A figure worked out, with as many decimals as its size asks for. */
   amount(value: string): string
@@ -44,7 +48,10 @@ export function openWords(language: Language, zone: string): ReportWords {
   const day: ReportWords['day'] = (instant, options = {}) => formatDay(language, civilDateIn(zone, instant), options)
   const time = (instant: string): string => civilTimeIn(zone, instant)
   return {
-    language, say, unit, typed, amount, day, time,
+    language, say, unit,
+    plainLabel: (name) => translate(language, `records.plain.${name}.label`),
+    plainNone: (name) => translate(language, `records.plain.${name}.none`),
+    typed, amount, day, time,
     hectares: (areaM2) => formatHectares(areaM2, language, Number(areaM2) < SMALL_AREA_M2 ? 4 : 2),
     short: (value) => formatNumber(value, {}, language),
     quantity: (value, code) => withUnit(typed(value), code),

@@ -21,8 +21,6 @@ export const pdf = {
     manyBlocks: '{count} blocks, listed below',
     crop: 'Crop',
     noCrop: 'not written down',
-    purpose: 'For',
-    noPurpose: 'no purpose written down',
     boundaries: 'Boundaries',
     boundary: '{code} version {version}',
     manyBoundaries: 'as drawn then, versions below',
@@ -136,7 +134,6 @@ export const pdf = {
     late: 'Entered late',
     why: 'Reason given',
   },
-  notes: { title: 'Notes' },
   foot: {
     code: 'Check code',
     codeText: '{code}, entry {seq} of the log; look it up at {page}',

@@ -31,10 +31,12 @@ export const records = {
     known: 'How known',
     expected: 'expected',
     oneLine: '1 block line',
-    purpose: 'For',
-    purposeHint: 'aphids on shoot tips',
     plan: '{code}, {hectares} ha, drawn to scale',
     scale: '{metres} m',
+  },
+  plain: {
+    purpose: { label: 'For', hint: 'aphids on shoot tips', none: 'not written down' },
+    notes: { label: 'Notes', hint: 'What a reader should know.', none: 'no notes' },
   },
   mix: {
     head: 'Mix',
@@ -158,8 +160,6 @@ export const records = {
     myself: '{name}, myself',
     reviewedBy: 'Reviewed by',
     notReviewed: 'not yet; it changes nothing',
-    notes: 'Notes',
-    notesHint: 'What a reader should know.',
     oneSignature: 'One signature. The number comes with it.',
   },
   stop: {
@@ -259,8 +259,6 @@ export const records = {
     total: 'Spray',
     sprayer: 'Sprayer',
     loads: 'Loads',
-    purpose: 'For',
-    notes: 'Notes',
     weather: 'Weather',
     windFrom: 'from {point}',
     people: 'People',

@@ -21,8 +21,6 @@ export const pdf = {
     manyBlocks: '{count} parcelas, en la lista de abajo',
     crop: 'Cultivo',
     noCrop: 'sin anotar',
-    purpose: 'Para',
-    noPurpose: 'sin motivo anotado',
     boundaries: 'Linderos',
     boundary: '{code} versión {version}',
     manyBoundaries: 'como estaban dibujados; versiones abajo',
@@ -136,7 +134,6 @@ export const pdf = {
     late: 'Anotado tarde',
     why: 'Razón dada',
   },
-  notes: { title: 'Notas' },
   foot: {
     code: 'Código de control',
     codeText: '{code}, entrada {seq} del diario; búsquelo en {page}',

@@ -31,10 +31,12 @@ export const records = {
     known: 'Cómo se sabe',
     expected: 'previsto',
     oneLine: '1 línea de parcela',
-    purpose: 'Para',
-    purposeHint: 'pulgón en los brotes',
     plan: '{code}, {hectares} ha, dibujada a escala',
     scale: '{metres} m',
+  },
+  plain: {
+    purpose: { label: 'Para', hint: 'pulgón en los brotes', none: 'no se anotó' },
+    notes: { label: 'Notas', hint: 'Lo que debe saber quien lo lea.', none: 'sin notas' },
   },
   mix: {
     head: 'Mezcla',
@@ -158,8 +160,6 @@ export const records = {
     myself: '{name}, yo',
     reviewedBy: 'Revisado por',
     notReviewed: 'aún no; no cambia nada',
-    notes: 'Notas',
-    notesHint: 'Lo que debe saber quien lo lea.',
     oneSignature: 'Una firma. Con ella llega el número.',
   },
   stop: {
@@ -259,8 +259,6 @@ export const records = {
     total: 'Caldo',
     sprayer: 'Equipo',
     loads: 'Cargas',
-    purpose: 'Para',
-    notes: 'Notas',
     weather: 'Tiempo',
     windFrom: 'desde {point}',
     people: 'Personas',

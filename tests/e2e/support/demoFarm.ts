@@ -14,8 +14,8 @@ export const OURS = { 'X-Requested-With': 'drenchleaf' }
 export const emailOf = (who: Who): string => `${who}@demo.test`
 
 /** Signs a request context in; a page of the same browser context is signed in with it. */
-export async function signInTo(request: APIRequestContext, who: Who): Promise<Session> {
-  const answer = await request.post('/api/session', { headers: OURS, data: { email: emailOf(who), password: PASSWORD } })
+export async function signInTo(request: APIRequestContext, who: Who, password = PASSWORD): Promise<Session> {
+  const answer = await request.post('/api/session', { headers: OURS, data: { email: emailOf(who), password } })
   expect(answer.status(), `signing in as ${who}`).toBe(200)
   return sessionSchema.parse(await answer.json())
 }

@@ -71,7 +71,7 @@ describe('facts', () => {
     const signed = buildSignedRecord({ sprayer: null, content: { ...base.content, weather: null, purpose: null } })
     const facts = [...weatherFacts(buildRecordReportData({ signed }), words), ...placeFacts(buildRecordReportData({ signed }), words)]
     expect(['Sprayer', 'Wind', 'Air', 'Humidity', 'For'].map((label) => read(facts, label)))
-      .toEqual(['none named', 'not read', 'not read', 'not read', 'no purpose written down'])
+      .toEqual(['none named', 'not read', 'not read', 'not read', 'not written down'])
   })
 
   it('keeps the digits that were typed', () => {

@@ -10,7 +10,7 @@ const zone = 'America/Los_Angeles'
 const sheetOf = (draft: RecordDraft) => recordSheet(sheetInputOf(draft, { areaM2: 10_000, tankL: '400' }))
 const contentFor = (draft: RecordDraft, happened = true) => contentOf(draft, { zone, sheet: sheetOf(draft), happened })
 const full = (): RecordDraft => {
-  const draft = buildDraft({ blockId: ID, sprayerId: ID, purpose: ' aphids ' })
+  const draft = buildDraft({ blockId: ID, sprayerId: ID, plain: { purpose: ' aphids ', notes: '' } })
   draft.components = draft.components.map((component) => ({ ...component, materialId: ID, lotId: ID }))
   draft.start = { date: '2026-06-16', time: '06:50', offset: '' }
   draft.end = { date: '2026-06-16', time: '07:36', offset: '' }

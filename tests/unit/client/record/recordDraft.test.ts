@@ -8,7 +8,7 @@ describe('a record gone on with', () => {
   it('comes back as it was written, in step 2 once it was started', () => {
     const draft = draftOfRecord(buildRecord(), 'America/Los_Angeles')
     expect(draft).toMatchObject({
-      step: 2, method: 'drench', blockId: 'b1', notes: 'wet', revision: 3,
+      step: 2, method: 'drench', blockId: 'b1', plain: { notes: 'wet' }, revision: 3,
       start: { date: '2026-06-16', time: '06:50', offset: '' }, end: { date: '', time: '' },
       weather: { wind: { value: '1.6', unit: 'ms', kind: 'felt' }, windFrom: 'NW', air: { value: '' } },
       water: { sizedFrom: 'sprayRate', value: '400', unit: 'L/ha', source: '' },
@@ -24,7 +24,7 @@ describe('a record gone on with', () => {
 describe('a record like another', () => {
   it('takes the mix, the sprayer and the purpose, and nothing of when and where', () => {
     expect(draftLike(buildRecord())).toMatchObject({
-      step: 1, blockId: '', purpose: 'roots', sprayerId: 's1', notes: '', revision: null, start: { date: '' }, weather: { wind: { value: '' } },
+      step: 1, blockId: '', plain: { purpose: 'roots', notes: '' }, sprayerId: 's1', revision: null, start: { date: '' }, weather: { wind: { value: '' } },
     })
   })
 })

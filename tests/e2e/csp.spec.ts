@@ -1,0 +1,70 @@
+import type { Page } from '@playwright/test'
+import { segment } from './support/controls.ts'
+import { signInTo } from './support/demoFarm.ts'
+import { RecordForm } from './support/recordForm.ts'
+import { listScreens, openScreen } from './support/screens.ts'
+import { expect, test } from './support/test.ts'
+import { makeThings } from './support/things.ts'
+import { watchPages } from './support/watchPage.ts'
+import { say } from './support/words.ts'
+
+test('opens every screen without one violation of the policy, error or lost file', async ({ page, context, manager }) => {
+  const found = await watchPages(context)
+  let who: string | null = null
+  for (const screen of await listScreens(manager)) {
+    if (screen.who !== null && screen.who !== who) await signInTo(context.request, screen.who)
+    who = screen.who
+    await openScreen(page, screen.path)
+  }
+  expect(found).toEqual([])
+})
+
+test('opens dialogs, lists, calendars and sheets without one violation', async ({ page, context, isPhone, signInAs, manager }) => {
+  const found = await watchPages(context)
+  await signInAs('manager')
+  await openScreen(page, '/inputs')
+  await page.getByRole('button', { name: say('inputs.newMaterial') }).click()
+  await openList(page, say('inputs.form.kind'))
+  await closeDialog(page, say('inputs.form.materialTitle'))
+  await page.getByRole('main').getByRole('button', { name: say('inputs.receiveLot') }).first().click()
+  await page.getByRole('combobox', { name: say('inputs.form.receivedOn') }).click()
+  await expect(page.getByRole('grid').filter({ visible: true })).toBeVisible()
+  await page.keyboard.press('Escape')
+  await closeDialog(page, say('inputs.form.lotTitle'))
+  await page.getByRole('button', { name: say('inputs.count') }).first().click()
+  await page.keyboard.press('Escape')
+  await openScreen(page, '/farm')
+  await page.getByRole('button', { name: say('farm.addSprayer') }).click()
+  await closeDialog(page, say('farm.addSprayer'))
+  await page.getByRole('button', { name: isPhone ? say('frame.more') : /, manager$/ }).click()
+  const more = page.getByRole('dialog', { name: say('frame.moreSheet.title') })
+  await segment(more, say('frame.moreSheet.dawn'))
+  await closeDialog(page, say('frame.moreSheet.title'))
+
+  await openScreen(page, '/blocks')
+  if (isPhone) await segment(page, say('blocks.map.show'))
+  await page.getByRole('button', { name: say('blocks.map.zoomIn') }).click()
+  await page.getByRole('button', { name: say('blocks.map.all') }).click()
+
+  const form = new RecordForm(page, isPhone)
+  await form.open()
+  await form.fillDrench(await makeThings(manager))
+  await form.checks()
+  await form.closeChecks()
+  await form.step(2).click()
+  await expect(form.password).toBeVisible()
+  expect(found).toEqual([])
+})
+
+async function openList(page: Page, label: string): Promise<void> {
+  await page.getByRole('combobox', { name: label, exact: true }).click({ force: true })
+  await expect(page.getByRole('option').filter({ visible: true }).first()).toBeVisible()
+  await page.keyboard.press('Escape')
+}
+
+async function closeDialog(page: Page, name: string): Promise<void> {
+  const dialog = page.getByRole('dialog', { name })
+  await expect(dialog).toBeVisible()
+  await page.keyboard.press('Escape')
+  await expect(dialog).toBeHidden()
+}

@@ -1,0 +1,50 @@
+import type { Page } from '@playwright/test'
+import { expect } from '@playwright/test'
+import type { ApplicationRecord } from '../../../shared/contract/record.ts'
+import type { FarmApi, Who } from './demoFarm.ts'
+import { makeSignedRecord, makeThings } from './things.ts'
+
+/** A screen, who looks at it, and its address. */
+export interface Screen {
+  name: string
+  who: Who | null
+  path: string
+}
+
+/** Every screen of the product; of a block and of a record, one made for it. */
+export async function listScreens(manager: FarmApi): Promise<Screen[]> {
+  const things = await makeThings(manager)
+  const record: ApplicationRecord = await makeSignedRecord(manager, things)
+  const open = [
+    { name: 'sign-in', path: '/signin' },
+    { name: 'welcome', path: '/welcome' },
+    { name: 'check a code', path: '/check' },
+    { name: 'a code that agrees', path: `/check/${record.digest?.slice(0, 20) ?? ''}` },
+  ]
+  const ofManager = [
+    { name: 'today', path: '/' },
+    { name: 'blocks', path: '/blocks' },
+    { name: 'block', path: `/blocks/${things.block.id}` },
+    { name: 'draw a block', path: '/blocks/new?by=draw' },
+    { name: 'type a block', path: '/blocks/new?by=points' },
+    { name: 'register', path: '/register' },
+    { name: 'record', path: `/register/${record.id}` },
+    { name: 'new record', path: '/register/new' },
+    { name: 'inputs', path: '/inputs' },
+    { name: 'farm', path: '/farm' },
+    { name: 'nothing there', path: '/nothing-there' },
+  ]
+  return [
+    ...open.map((screen) => ({ ...screen, who: null })),
+    ...ofManager.map((screen) => ({ ...screen, who: 'manager' as const })),
+    { name: 'my farms', who: 'certifier', path: '/farms' },
+  ]
+}
+
+/** Opens a screen and waits until all it reads has come. */
+export async function openScreen(page: Page, path: string): Promise<void> {
+  await page.goto(path)
+  await expect(page.getByRole('main')).toBeVisible()
+  await page.waitForLoadState('networkidle')
+  await expect(page.locator('[aria-busy="true"]')).toHaveCount(0)
+}
