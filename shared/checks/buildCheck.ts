@@ -15,10 +15,11 @@ export interface CheckParts {
   text: Message
   figure?: Message
   source?: Message | null
+  band?: Check['band']
   about?: string
 }
 
 /** One check with its empty parts written as null, as the contract has them. */
-export function buildCheck({ figure, source, about, ...parts }: CheckParts): Check {
-  return { ...parts, figure: figure ?? null, source: source ?? null, about: about ?? null }
+export function buildCheck({ figure, source, band, about, ...parts }: CheckParts): Check {
+  return { ...parts, figure: figure ?? null, source: source ?? null, band: band ?? null, about: about ?? null }
 }

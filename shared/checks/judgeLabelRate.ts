@@ -41,5 +41,6 @@ export function judgeLabelRate(material: FactMaterial, component: SheetComponent
     verdict: isOver ? 'stop' : 'pass',
     text: words(isOver ? 'checks.labelRate.over' : 'checks.labelRate.within', params),
     figure: words('checks.figure.amount', { value: params.value, unit: limit.unit }),
+    band: { low: null, high: params.limit, value: params.value, unit: limit.unit },
   })
 }

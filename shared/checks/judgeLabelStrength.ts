@@ -53,5 +53,6 @@ export function judgeLabelStrength(material: FactMaterial, component: SheetCompo
     verdict: VERDICTS[position],
     text: words(id, { ...limits, ...sum, value }),
     figure: words('checks.figure.percent', { value }),
+    band: { low: low === null ? null : Number(low), high: high === null ? null : Number(high), value, unit: '%' },
   })
 }

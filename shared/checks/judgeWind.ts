@@ -29,5 +29,6 @@ export function judgeWind({ method, weather }: RecordFacts['content']): Check | 
     verdict: isUnder || isOver ? 'caution' : 'pass',
     text: words(isUnder || isOver ? outside : 'checks.wind.within', { ...limits, value }),
     figure: words('checks.figure.amount', { value, unit: 'ms' }),
+    band: { low: limits.low, high: limits.high, value, unit: 'ms' },
   })
 }

@@ -109,6 +109,8 @@ export const checkSchema = z.object({
   text: messageSchema,
   figure: messageSchema.nullable(),
   source: messageSchema.nullable(),
+  /** Where the value stands against its limits, to be drawn; null ends are open. All in one unit. */
+  band: z.object({ low: z.number().nullable(), high: z.number().nullable(), value: z.number(), unit: z.string() }).nullable(),
   /** The thing on the page this check is about: "line:0", "component:1", "water", "sprayer", "wind". */
   about: z.string().nullable(),
 })

@@ -13,6 +13,7 @@ export function blockAllows(code: string): Check[] {
     text: { id: `blocks.allows.${name}.text`, params: { code } },
     figure: null,
     source: null,
+    band: null,
     about,
   })
   return [

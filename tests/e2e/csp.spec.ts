@@ -25,7 +25,7 @@ test('opens dialogs, lists, calendars and sheets without one violation', async (
   await openScreen(page, '/inputs')
   await page.getByRole('button', { name: say('inputs.newMaterial') }).click()
   await openList(page, say('inputs.form.kind'))
-  await closeDialog(page, say('inputs.form.materialTitle'))
+  await page.getByRole('dialog', { name: say('inputs.form.materialTitle') }).getByRole('button', { name: say('inputs.cancel') }).click()
   await page.getByRole('main').getByRole('button', { name: say('inputs.receiveLot') }).first().click()
   await page.getByRole('combobox', { name: say('inputs.form.receivedOn') }).click()
   await expect(page.getByRole('grid').filter({ visible: true })).toBeVisible()
@@ -44,7 +44,7 @@ test('opens dialogs, lists, calendars and sheets without one violation', async (
   await openScreen(page, '/blocks')
   if (isPhone) await segment(page, say('blocks.map.show'))
   await page.getByRole('button', { name: say('blocks.map.zoomIn') }).click()
-  await page.getByRole('button', { name: say('blocks.map.all') }).click()
+  await page.getByRole('button', { name: say('blocks.map.all'), exact: true }).click()
 
   const form = new RecordForm(page, isPhone)
   await form.open()

@@ -41,6 +41,7 @@ export function buildCheck(overrides: Partial<Check> = {}): Check {
     text: { id: 'checks.wind.within', params: { low: 1.3, high: 3.6, unit: 'ms' } },
     figure: { id: 'checks.figure.amount', params: { value: 1.9, unit: 'ms' } },
     source: { id: 'checks.wind.source', params: {} },
+    band: null,
     ...overrides,
   }
 }

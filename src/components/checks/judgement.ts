@@ -17,9 +17,3 @@ export function groupChecks(checks: readonly Check[]): CheckGroup[] {
 export function worstFirst(checks: readonly Check[]): Check[] {
   return [...checks].sort((one, other) => ORDER.indexOf(one.verdict) - ORDER.indexOf(other.verdict))
 }
-
-/** How many stops, cautions and not knowns; passes are never counted. */
-export function tallyOf(checks: readonly Check[]): { stop: number; caution: number; unknown: number } {
-  const count = (verdict: Verdict): number => checks.filter((check) => check.verdict === verdict).length
-  return { stop: count('stop'), caution: count('caution'), unknown: count('unknown') }
-}

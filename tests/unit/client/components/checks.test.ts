@@ -1,10 +1,10 @@
 import { describe, expect, it } from 'vitest'
 import { chooseTies, type Tie } from '../../../../src/components/checks/chooseTies.ts'
-import { groupChecks, tallyOf, worstFirst } from '../../../../src/components/checks/judgement.ts'
+import { groupChecks, worstFirst } from '../../../../src/components/checks/judgement.ts'
 import type { Check } from '../../../../shared/contract/record.ts'
 
 const check = (code: string, rests: Check['rests'], verdict: Check['verdict']): Check => ({
-  code, rests, verdict, about: null, figure: null, source: null,
+  code, rests, verdict, about: null, figure: null, source: null, band: null,
   title: { id: 'frame.draft', params: {} }, text: { id: 'frame.draft', params: {} },
 })
 const tie = (about: string, verdict: Tie['verdict'], fromY: number, toY: number): Tie => ({ about, verdict, fromX: 0, fromY, toY })
@@ -18,19 +18,6 @@ describe('groupChecks', () => {
   it('has the worst first inside a group and keeps the order of equals', () => {
     const group = groupChecks(['pass', 'unknown', 'caution', 'stop', 'stop'].map((verdict, index) => check(`${index}`, 'label', verdict as Check['verdict'])))[0]
     expect(group?.checks.map((each) => each.code)).toEqual(['3', '4', '2', '1', '0'])
-  })
-})
-
-describe('tallyOf', () => {
-  it('counts stops, cautions and not knowns, never passes', () => {
-    expect(tallyOf([check('a', 'law', 'pass'), check('b', 'law', 'stop'), check('c', 'law', 'unknown'), check('d', 'law', 'unknown')]))
-      .toEqual({ stop: 1, caution: 0, unknown: 2 })
-  })
-
-  it('does not reorder what it is given', () => {
-    const checks = [check('a', 'law', 'pass'), check('b', 'law', 'stop')]
-    worstFirst(checks)
-    expect(checks.map((each) => each.code)).toEqual(['a', 'b'])
   })
 })
 

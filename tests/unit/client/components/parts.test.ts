@@ -55,7 +55,7 @@ describe('AppSpine', () => {
 
 describe('CheckColumn', () => {
   const check = (code: string, verdict: Check['verdict'], rests: Check['rests'], source: string | null): Check => ({
-    code, verdict, rests, about: code, figure: null,
+    code, verdict, rests, about: code, figure: null, band: null,
     title: { id: 'frame.checks', params: {} }, text: { id: 'frame.draft', params: {} }, source: source === null ? null : { id: source, params: {} },
   })
   const checks = [check('rate', 'caution', 'house', null), check('soap', 'stop', 'label', 'frame.spine'), check('strength', 'pass', 'label', 'frame.spine')]
