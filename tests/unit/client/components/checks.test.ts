@@ -21,6 +21,14 @@ describe('groupChecks', () => {
   })
 })
 
+describe('worstFirst', () => {
+  it('does not reorder what it is given', () => {
+    const checks = [check('a', 'law', 'pass'), check('b', 'law', 'stop')]
+    expect(worstFirst(checks).map((each) => each.code)).toEqual(['b', 'a'])
+    expect(checks.map((each) => each.code)).toEqual(['a', 'b'])
+  })
+})
+
 describe('chooseTies', () => {
   it('drops the lesser of two that cross', () => {
     expect(chooseTies([tie('wind', 'caution', 10, 90), tie('line:0', 'stop', 50, 20)]).map((each) => each.about)).toEqual(['line:0'])
