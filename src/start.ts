@@ -5,6 +5,7 @@ import App from './App.vue'
 import { onSessionEnd } from './api/http.ts'
 import { i18n } from './plugins/i18n.ts'
 import { queryClient } from './plugins/queryClient.ts'
+import { readViewsWhenIdle } from './router/readViews.ts'
 import { router } from './router/router.ts'
 import { useOutbox } from './stores/outbox.ts'
 import { usePreferences } from './stores/preferences.ts'
@@ -22,4 +23,5 @@ useOutbox().start()
 // A session that ends while nobody is signed in here is no question to anyone.
 onSessionEnd(() => (useSession().user === null ? Promise.resolve(false) : useReentry().ask()))
 
+readViewsWhenIdle(router)
 app.use(router).mount('#app')

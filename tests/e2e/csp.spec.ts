@@ -21,6 +21,7 @@ test('opens every screen without one violation of the policy, error or lost file
 
 test('opens dialogs, lists, calendars and sheets without one violation', async ({ page, context, isPhone, signInAs, manager }) => {
   const found = await watchPages(context)
+  const things = await makeThings(manager)
   await signInAs('manager')
   await openScreen(page, '/inputs')
   await page.getByRole('button', { name: say('inputs.newMaterial') }).click()
@@ -48,7 +49,7 @@ test('opens dialogs, lists, calendars and sheets without one violation', async (
 
   const form = new RecordForm(page, isPhone)
   await form.open()
-  await form.fillDrench(await makeThings(manager))
+  await form.fillDrench(things)
   await form.checks()
   await form.closeChecks()
   await form.step(2).click()

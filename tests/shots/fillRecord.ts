@@ -1,4 +1,4 @@
-import type { Page } from '@playwright/test'
+import type { Locator, Page } from '@playwright/test'
 import { choose, field, segment } from '../e2e/support/controls.ts'
 import { RecordForm } from '../e2e/support/recordForm.ts'
 import { say } from '../e2e/support/words.ts'
@@ -13,7 +13,11 @@ async function fillWeather({ main }: RecordForm): Promise<void> {
 async function closeLines({ main }: RecordForm): Promise<void> {
   const done = main.getByRole('button', { name: say('records.mix.done'), exact: true })
   if (await done.isVisible()) await done.click()
-  await main.evaluate((page) => { page.querySelector('.body')?.scrollTo({ top: 0 }) })
+}
+
+/** Puts the top of something at the top of the page, as a thumb would. */
+async function scrollTo(thing: Locator): Promise<void> {
+  await thing.evaluate((element) => { element.scrollIntoView({ block: 'start' }) })
 }
 
 /** On the desk: nettle ferment and potash soap on A3, the soap over its label, so that a stop bars Start. */
@@ -22,7 +26,7 @@ export async function fillSpray(page: Page): Promise<RecordForm> {
   const { main } = form
   await form.open()
   await choose(main, say('records.where.block'), 'A3')
-  await field(main, say('records.where.purpose')).fill('aphids on shoot tips')
+  await field(main, say('records.plain.purpose.label')).fill('aphids on shoot tips')
   await form.setComponent(say('records.mix.unnamed', { number: 1 }), { material: 'Nettle ferment', lot: 'NF-31', kind: 'ratio', value: '20' })
   await form.addComponent()
   await form.setComponent(say('records.mix.unnamed', { number: 2 }), { material: 'Potash soap', lot: '26-018', kind: 'ratio', value: '40' })
@@ -31,6 +35,7 @@ export async function fillSpray(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('M2')
   await fillWeather(form)
   await closeLines(form)
+  await scrollTo(form.step(1))
   return form
 }
 
@@ -46,6 +51,7 @@ export async function fillDrench(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('D1')
   await fillWeather(form)
   await closeLines(form)
+  await scrollTo(main.getByText('Middle Piece', { exact: true }).last())
   return form
 }
 

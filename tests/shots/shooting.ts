@@ -40,7 +40,11 @@ export async function withPage({ browser, url, password }: Shooting, { size, who
 /** Writes the picture once fonts, requests and tiles are there; nothing blinks in it. */
 export async function shoot(page: Page, folder: string, name: string): Promise<void> {
   await page.waitForLoadState('networkidle')
-  await page.evaluate(() => document.fonts.ready)
+  await page.mouse.move(0, 0)
+  await page.evaluate(async () => {
+    if (document.activeElement instanceof HTMLElement) document.activeElement.blur()
+    await document.fonts.ready
+  })
   await page.screenshot({ path: join(folder, `${name}.png`), animations: 'disabled', caret: 'hide' })
   process.stdout.write(`${name}.png\n`)
 }

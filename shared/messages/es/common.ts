@@ -6,7 +6,7 @@ export const common = {
   choose: 'Elegir',
   noDate: 'Sin fecha',
   reading: 'Leyendo',
-  nothingHere: 'Aquí no hay nada todavía',
+  nothingHere: 'Aún no hay nada aquí',
   nothingMatches: 'Nada coincide',
   showPassword: 'Mostrar la contraseña',
   understoodAs: '{value} {unit}',

@@ -1,7 +1,7 @@
 /** Words of the frame: spine, page head, checks, marks, in Spanish. */
 export const frame = {
   skip: 'Saltar a la página',
-  spine: 'Lomo',
+  spine: 'Navegación',
   home: 'Drenchleaf, primera página',
   placesLabel: 'Lugares',
   places: {
@@ -26,16 +26,16 @@ export const frame = {
   versionOf: 'versión {version}',
   lateShort: '{hours} h',
   lateLong: 'anotado {hours} horas después de hacerlo',
-  method: { foliar: 'Pulverización foliar', drench: 'Riego al suelo' },
-  verdict: { stop: 'Alto', caution: 'Atención', unknown: 'No se sabe', pass: 'Pasa' },
-  tally: { stop: 'Alto {count}', caution: 'Atención {count}', unknown: 'No se sabe {count}', noStop: 'Ningún alto encontrado' },
+  method: { foliar: 'Aplicación foliar', drench: 'Aplicación al suelo' },
+  verdict: { stop: 'Alto', caution: 'Cuidado', unknown: 'No se sabe', pass: 'En regla' },
+  tally: { stop: 'Alto {count}', caution: 'Cuidado {count}', unknown: 'No se sabe {count}', noStop: 'Ningún alto encontrado' },
   rests: { law: 'Ley', label: 'Etiqueta', certifier: 'Certificadora', house: 'Regla de la casa', recipe: 'Receta' },
   sync: {
     allSent: 'Todo enviado',
     allSentAt: 'Todo enviado {at}',
     sending: 'Enviando {count} de {of}',
-    kept: '{count} sin enviar todavía',
-    noSignal: 'Sin señal, {count} guardados',
+    kept: '{count} por enviar',
+    noSignal: 'Sin señal, {count} por enviar',
     noSignalNone: 'Sin señal',
     needsYou: '{count} le espera',
     needYou: '{count} le esperan',
@@ -45,7 +45,7 @@ export const frame = {
     farm: 'Finca',
     language: 'Idioma',
     light: 'Luz',
-    lightNow: 'Luz: {light}. Cambiarla',
+    lightNow: 'Luz: {light}. Cambiar',
     day: 'Día',
     dawn: 'Alba',
     english: 'English',
@@ -63,9 +63,9 @@ export const frame = {
   },
   kept: {
     title: 'Guardado en este dispositivo',
-    allSent: 'Nada espera. Todo lo escrito ha llegado.',
+    allSent: 'Nada por enviar. Todo lo escrito ha llegado.',
     noSignal: 'Sin señal. Siga trabajando: lo guardado sale solo cuando vuelva la señal.',
-    waiting: 'El servidor no ha respondido todavía. Lo guardado sale solo.',
+    waiting: 'El servidor aún no ha respondido. Lo guardado sale solo.',
     toSend: 'Por enviar',
     needsYou: 'Le espera',
     since: 'guardado {at}',
@@ -85,8 +85,8 @@ export const frame = {
     named: '{what}, {name}',
   },
   notFound: {
-    title: 'No hay nada con ese número.',
-    text: 'No existe, o no está entre lo que usted puede ver.',
+    title: 'No hay nada aquí con ese número.',
+    text: 'No existe o no está entre lo que usted puede ver.',
     start: 'Ir a la primera página',
   },
 }

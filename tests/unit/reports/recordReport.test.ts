@@ -96,7 +96,7 @@ describe('what it says', () => {
   it('speaks Spanish with Spanish marks', async () => {
     const { text, plain } = readPdf(await drawRecord(buildRecordReportData({ language: 'es', runBy: 'Cooperativa Marl' })))
     expect(plain).toMatch(/\/Lang \(es\)/)
-    for (const words of ['Pulverización foliar', '37,50', 'Carga llena', 'Cooperativa Marl lleva este servidor.', 'página 1 de']) expect(text.replace(/\s+/g, ' ')).toContain(words)
+    for (const words of ['Aplicación foliar', '37,50', 'Carga llena', 'Cooperativa Marl lleva este servidor.', 'página 1 de']) expect(text.replace(/\s+/g, ' ')).toContain(words)
   })
 
   it('tells the three clocks as they were and marks what is late', async () => {

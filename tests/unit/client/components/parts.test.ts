@@ -72,6 +72,6 @@ describe('CheckColumn', () => {
   })
   it('speaks the words of the verdict, not its colour', () => {
     const rows = mountWithWords(CheckColumn, { checks, language: 'es' }).findAll('[role="listitem"] em')
-    expect(rows.map((row) => row.text())).toEqual(['Alto', 'Pasa', 'Atención'])
+    expect(rows.map((row) => row.text())).toEqual(['Alto', 'En regla', 'Cuidado'])
   })
 })

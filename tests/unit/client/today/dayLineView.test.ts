@@ -17,7 +17,7 @@ describe('DayLine', () => {
   })
 
   it('reads as sentences in Spanish', () => {
-    expect(textIn('es')).toBe('V2: empezado y sin firmar. 2 lotes han pasado su uso. 1 borrador espera en este dispositivo. 3 registros firmados hoy.')
+    expect(textIn('es')).toBe('V2: empezado y sin firmar. 2 lotes están pasados de fecha. 1 borrador espera en este dispositivo. 3 registros firmados hoy.')
   })
 
   it('sets the figures in their ink', () => {
