@@ -4,7 +4,9 @@ const FARM = `nullif(current_setting('app.farm_id', true), '')::uuid`
 /** Seasons a certifier may read, '{2025,2026}'; unset for the farm's own people. */
 const SEASONS = `nullif(current_setting('app.seasons', true), '')::integer[]`
 
-const FARM_TABLES = ['farm_heads', 'season_counters', 'people', 'grants', 'blocks', 'materials', 'lots', 'lot_entries', 'sprayers', 'journal']
+const FARM_TABLES = ['farm_heads', 'season_counters', 'people', 'blocks', 'materials', 'lots', 'lot_entries', 'sprayers']
+/** Not for a certifier's eyes, whatever a route does. */
+const OWN_PEOPLE_TABLES = ['grants', 'journal']
 const SEASON_TABLES = ['application_records', 'record_lines', 'record_components', 'record_versions']
 const EVIDENCE = ['record_versions', 'lot_entries', 'journal']
 /** Tables that the two looking-over functions read on behalf of the owner role. */
@@ -15,6 +17,7 @@ export class CreateHouse1764547200000 implements MigrationInterface {
   async up(db: QueryRunner): Promise<void> {
     for (const statement of [...TABLES, ...GUARDS, ...FUNCTIONS]) await db.query(statement)
     for (const table of FARM_TABLES) await this.protect(db, table, `farm_id = ${FARM}`)
+    for (const table of OWN_PEOPLE_TABLES) await this.protect(db, table, `farm_id = ${FARM} AND ${SEASONS} IS NULL`)
     for (const table of SEASON_TABLES) {
       await this.protect(db, table, `farm_id = ${FARM} AND (${SEASONS} IS NULL OR season = ANY (${SEASONS}))`)
     }
@@ -40,10 +43,10 @@ export class CreateHouse1764547200000 implements MigrationInterface {
     await db.query('DROP FUNCTION account_access(uuid, timestamptz)')
     await db.query('DROP TABLE lot_entries')
     for (const table of ['record_versions', 'record_components', 'record_lines', 'application_records']) await db.query(`DROP TABLE ${table}`)
-    for (const table of ['lots', 'materials', 'sprayers', 'blocks', 'journal', 'grants', 'people', 'season_counters', 'farm_heads', 'farms', 'account_tokens', 'accounts', 'sessions']) {
+    for (const table of ['lots', 'materials', 'sprayers', 'blocks', 'journal', 'grants', 'people', 'season_counters', 'farm_heads', 'farms', 'account_tokens', 'accounts', 'sessions', 'demo_seed']) {
       await db.query(`DROP TABLE ${table}`)
     }
-    await db.query('DROP FUNCTION refuse_change()')
+    for (const name of ['refuse_change', 'guard_signed', 'guard_log']) await db.query(`DROP FUNCTION ${name}()`)
   }
 }
 
@@ -63,6 +66,8 @@ const TABLES = [
     sid text NOT NULL, sess json NOT NULL, expire timestamptz NOT NULL,
     CONSTRAINT sessions_pkey PRIMARY KEY (sid))`,
   'CREATE INDEX sessions_expire_idx ON sessions (expire)',
+  // Written last when the demo farm is made: without it a seeding broke off.
+  'CREATE TABLE demo_seed (demo_farm_id uuid NOT NULL, demo_neighbour_id uuid NOT NULL, CONSTRAINT demo_seed_pkey PRIMARY KEY (demo_farm_id))',
   `CREATE TABLE farms (
     id uuid NOT NULL, name text NOT NULL, zone text NOT NULL, season_start text NOT NULL,
     revision integer NOT NULL DEFAULT 1, creation_digest text NOT NULL, created_at timestamptz NOT NULL,
@@ -97,35 +102,35 @@ const TABLES = [
     version integer NOT NULL DEFAULT 1, revision integer NOT NULL DEFAULT 1,
     acknowledged jsonb NOT NULL DEFAULT '[]', creation_digest text NOT NULL, created_at timestamptz NOT NULL,
     CONSTRAINT blocks_pkey PRIMARY KEY (farm_id, id),
-    CONSTRAINT blocks_farm_id_code_key UNIQUE (farm_id, code),
     CONSTRAINT blocks_farm_fkey FOREIGN KEY (farm_id) REFERENCES farms (id),
     CONSTRAINT blocks_area_check CHECK (area_m2 > 0 AND area_m2 < 1e12))`,
+  'CREATE UNIQUE INDEX blocks_farm_id_code_key ON blocks (farm_id, lower(code))',
   `CREATE TABLE materials (
     farm_id uuid NOT NULL, id uuid NOT NULL, name text NOT NULL, kind text NOT NULL, measured_in text NOT NULL,
     organic_status text NOT NULL, status_basis text, label jsonb,
     revision integer NOT NULL DEFAULT 1, creation_digest text NOT NULL, created_at timestamptz NOT NULL,
     CONSTRAINT materials_pkey PRIMARY KEY (farm_id, id),
-    CONSTRAINT materials_farm_id_name_key UNIQUE (farm_id, name),
     CONSTRAINT materials_farm_fkey FOREIGN KEY (farm_id) REFERENCES farms (id),
     CONSTRAINT materials_measured_in_check CHECK (measured_in IN ('volume', 'mass')))`,
+  'CREATE UNIQUE INDEX materials_farm_id_name_key ON materials (farm_id, lower(name))',
   `CREATE TABLE lots (
     farm_id uuid NOT NULL, id uuid NOT NULL, material_id uuid NOT NULL, code text NOT NULL, origin text NOT NULL,
     source text, received_on date NOT NULL, quantity numeric NOT NULL, unit text NOT NULL,
     left_quantity numeric NOT NULL, expires_on date,
     revision integer NOT NULL DEFAULT 1, creation_digest text NOT NULL, created_at timestamptz NOT NULL,
     CONSTRAINT lots_pkey PRIMARY KEY (farm_id, id),
-    CONSTRAINT lots_farm_id_code_key UNIQUE (farm_id, code),
     CONSTRAINT lots_material_fkey FOREIGN KEY (farm_id, material_id) REFERENCES materials (farm_id, id),
     CONSTRAINT lots_quantity_check CHECK (quantity > 0 AND quantity < 1e9),
     CONSTRAINT lots_left_check CHECK (left_quantity >= 0 AND left_quantity < 1e9))`,
+  'CREATE UNIQUE INDEX lots_farm_id_code_key ON lots (farm_id, lower(code))',
   'CREATE INDEX lots_farm_id_material_id_idx ON lots (farm_id, material_id)',
   `CREATE TABLE sprayers (
     farm_id uuid NOT NULL, id uuid NOT NULL, code text NOT NULL, name text NOT NULL, tank_l numeric NOT NULL,
     revision integer NOT NULL DEFAULT 1, creation_digest text NOT NULL, created_at timestamptz NOT NULL,
     CONSTRAINT sprayers_pkey PRIMARY KEY (farm_id, id),
-    CONSTRAINT sprayers_farm_id_code_key UNIQUE (farm_id, code),
     CONSTRAINT sprayers_farm_fkey FOREIGN KEY (farm_id) REFERENCES farms (id),
     CONSTRAINT sprayers_tank_check CHECK (tank_l > 0 AND tank_l < 1e7))`,
+  'CREATE UNIQUE INDEX sprayers_farm_id_code_key ON sprayers (farm_id, lower(code))',
   `CREATE TABLE application_records (
     farm_id uuid NOT NULL, id uuid NOT NULL, state text NOT NULL, content jsonb NOT NULL, computed jsonb NOT NULL,
     checks jsonb NOT NULL, acknowledged jsonb NOT NULL DEFAULT '[]', register_row jsonb NOT NULL,
@@ -190,6 +195,25 @@ const TABLES = [
 const GUARDS = [
   `CREATE FUNCTION refuse_change() RETURNS trigger LANGUAGE plpgsql AS $$
     BEGIN RAISE EXCEPTION '% keeps what was written: % refused', TG_TABLE_NAME, TG_OP USING ERRCODE = '42501'; END $$`,
+  `CREATE FUNCTION guard_signed() RETURNS trigger LANGUAGE plpgsql AS $$
+    BEGIN
+      IF OLD.state IN ('signed', 'withdrawn') AND NOT (
+        (NEW.state = OLD.state OR NEW.state = 'withdrawn') AND NEW.season = OLD.season AND NEW.number = OLD.number
+        AND NEW.version >= OLD.version AND (NEW.version > OLD.version OR
+          (NEW.content, NEW.digest, NEW.seq, NEW.signed_at, NEW.signed_by_id) IS NOT DISTINCT FROM
+          (OLD.content, OLD.digest, OLD.seq, OLD.signed_at, OLD.signed_by_id)))
+      THEN RAISE EXCEPTION 'a signed record changes by a new version only' USING ERRCODE = '42501'; END IF;
+      RETURN NEW;
+    END $$`,
+  'CREATE TRIGGER application_records_signed_stand BEFORE UPDATE ON application_records FOR EACH ROW EXECUTE FUNCTION guard_signed()',
+  'ALTER TABLE application_records ENABLE ALWAYS TRIGGER application_records_signed_stand',
+  `CREATE FUNCTION guard_log() RETURNS trigger LANGUAGE plpgsql AS $$
+    BEGIN
+      IF NEW.last_seq <> OLD.last_seq + 1 THEN RAISE EXCEPTION 'the log goes on by one' USING ERRCODE = '42501'; END IF;
+      RETURN NEW;
+    END $$`,
+  'CREATE TRIGGER farm_heads_go_on BEFORE UPDATE ON farm_heads FOR EACH ROW EXECUTE FUNCTION guard_log()',
+  'ALTER TABLE farm_heads ENABLE ALWAYS TRIGGER farm_heads_go_on',
   ...EVIDENCE.flatMap((table) => [
     `CREATE TRIGGER ${table}_rows_stand BEFORE UPDATE OR DELETE ON ${table} FOR EACH ROW EXECUTE FUNCTION refuse_change()`,
     `CREATE TRIGGER ${table}_table_stands BEFORE TRUNCATE ON ${table} FOR EACH STATEMENT EXECUTE FUNCTION refuse_change()`,
@@ -203,11 +227,12 @@ const FUNCTIONS = [
     RETURNS TABLE (farm_id uuid, farm_name text, zone text, season_start text, role text, person_id uuid, person_name text, seasons integer[])
     LANGUAGE sql STABLE SECURITY DEFINER SET search_path = pg_catalog, public, pg_temp AS $$
       SELECT f.id, f.name, f.zone, f.season_start, p.role, p.id, p.name, NULL::integer[]
-        FROM public.people p JOIN public.farms f ON f.id = p.farm_id
-        WHERE p.account_id = account AND p.active
+        FROM public.people p JOIN public.farms f ON f.id = p.farm_id JOIN public.accounts a ON a.id = p.account_id
+        WHERE p.account_id = account AND p.active AND a.deactivated_at IS NULL
       UNION ALL
       SELECT f.id, f.name, f.zone, f.season_start, 'certifier', NULL, NULL, array_agg(DISTINCT s.season ORDER BY s.season)
-        FROM public.grants g JOIN public.farms f ON f.id = g.farm_id CROSS JOIN LATERAL unnest(g.seasons) AS s (season)
+        FROM public.grants g JOIN public.farms f ON f.id = g.farm_id
+          JOIN public.accounts a ON a.id = g.account_id AND a.deactivated_at IS NULL CROSS JOIN LATERAL unnest(g.seasons) AS s (season)
         WHERE g.account_id = account AND (at AT TIME ZONE f.zone)::date <= g.ends_on
           AND NOT EXISTS (SELECT 1 FROM public.people p WHERE p.farm_id = g.farm_id AND p.account_id = account AND p.active)
         GROUP BY f.id, f.name, f.zone, f.season_start

@@ -2,9 +2,10 @@ import { randomUUID } from 'node:crypto'
 import compression from 'compression'
 import express, { type Express, type RequestHandler } from 'express'
 import { pinoHttp } from 'pino-http'
-import { AppError } from './errors.ts'
+import { AppError, notFound } from './errors.ts'
 import { handleErrors } from './middleware/handleErrors.ts'
 import { limitPasswords } from './middleware/limitPasswords.ts'
+import { readJson } from './middleware/readJson.ts'
 import { refuseForeign } from './middleware/refuseForeign.ts'
 import { serveClient } from './middleware/serveClient.ts'
 import { useSessions } from './middleware/session.ts'
@@ -24,13 +25,23 @@ export function createApp(services: Services, clientFolder: string | null): { ap
   const sessions = useSessions(services)
   app.disable('x-powered-by')
   app.set('etag', false)
+  // With a public address a proxy on this machine stands in front, and says who asks.
+  if (services.config.publicUrl !== null) app.set('trust proxy', 'loopback')
   app.use(pinoHttp({ logger: services.logger, genReqId: () => randomUUID(), autoLogging: false }))
   app.use(setHeaders(services.config.publicUrl?.startsWith('https:') ?? false))
   app.use(compression())
   app.use('/api', createApi(services, sessions.handlers))
   if (clientFolder !== null) app.use(serveClient(clientFolder))
+  app.use(refuseElsewhere)
   app.use(handleErrors(services))
   return { app, close: sessions.close }
+}
+
+/** Outside the API there are pages to read and nothing else. */
+const refuseElsewhere: RequestHandler = (request, response) => {
+  if (request.method === 'GET' || request.method === 'HEAD') throw notFound()
+  response.set('Allow', 'GET, HEAD')
+  throw new AppError('wrong-method', 'wrong_method')
 }
 
 function createApi(services: Services, sessionHandlers: RequestHandler[]): express.Router {
@@ -46,7 +57,7 @@ function createApi(services: Services, sessionHandlers: RequestHandler[]): expre
   api.get('/docs', (_request, response) => void response.type('html').send(page))
   api.get('/docs.css', (_request, response) => void response.type('css').send(API_PAGE_STYLE))
   api.use(refuseForeign)
-  api.use(express.json({ limit: BODY_LIMIT, inflate: true }))
+  api.use(...readJson(BODY_LIMIT))
   api.use(...sessionHandlers)
   api.use(mountRoutes(ROUTES, services, limits))
   api.use(() => {

@@ -26,7 +26,8 @@ export type Refusal = keyof typeof STATUSES
 
 /**
  * A refusal that the caller can act on. `code` names the message in `problems`, `errors` the fields,
- * `acknowledgeable` that it is unlikely, not impossible, `current` the other side of a stale write.
+ * `acknowledgeable` that it is unlikely, not impossible, `current` the other side of a stale write,
+ * `countsAsGuess` that a secret was tried in vain.
  */
 export class AppError extends Error {
   readonly status: number
@@ -35,11 +36,13 @@ export class AppError extends Error {
   readonly errors: FieldError[]
   readonly acknowledgeable: boolean
   readonly current: unknown
+  /** A password or a one-time secret was tried and did not fit. */
+  readonly countsAsGuess: boolean
 
   constructor(
     refusal: Refusal,
     code: string,
-    more: { errors?: FieldError[]; acknowledgeable?: boolean; current?: unknown } = {},
+    more: { errors?: FieldError[]; acknowledgeable?: boolean; current?: unknown; countsAsGuess?: boolean } = {},
   ) {
     super(code)
     this.status = STATUSES[refusal]
@@ -48,6 +51,7 @@ export class AppError extends Error {
     this.errors = more.errors ?? []
     this.acknowledgeable = more.acknowledgeable ?? false
     this.current = more.current
+    this.countsAsGuess = more.countsAsGuess ?? false
   }
 }
 

@@ -5,6 +5,7 @@ import { fixedClock, systemClock } from './clock.ts'
 import type { Config } from './config.ts'
 import { openDatabase } from './database/database.ts'
 import { prepareDatabase } from './database/prepareDatabase.ts'
+import { clearHalfSeeded } from './demo/clearHalfSeeded.ts'
 import { createLogger } from './logger.ts'
 import { DEMO_FOLDER } from './projectFolders.ts'
 import { createReportProcess } from './reports/reportProcess.ts'
@@ -13,6 +14,7 @@ import type { Services } from './services/services.ts'
 /** Brings the database up to date and makes everything that use cases reach. */
 export async function startServices(config: Config): Promise<Services> {
   const logger = createLogger(config.logFile)
+  if (config.demo !== null) await clearHalfSeeded(config.databaseOwnerUrl)
   await prepareDatabase(config.databaseOwnerUrl, decodeURIComponent(new URL(config.databaseUrl).username))
   return {
     config,

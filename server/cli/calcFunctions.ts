@@ -6,7 +6,9 @@ import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
 import { calibrateSprayer } from '../../shared/mix/calibrateSprayer.ts'
 import { dilute } from '../../shared/mix/dilute.ts'
 import { splitLoads } from '../../shared/mix/splitLoads.ts'
-import { convertQuantity } from '../../shared/units/convertQuantity.ts'
+import { convertQuantity, type Quantity } from '../../shared/units/convertQuantity.ts'
+import { dimensionOf } from '../../shared/units/dimensionOf.ts'
+import { isWithin } from '../../shared/units/isWithin.ts'
 import { UNITS, type UnitCode } from '../../shared/units/unitTable.ts'
 import { plainDecimal } from './plainDecimal.ts'
 
@@ -18,13 +20,15 @@ export interface CalcFunction {
   run: (args: unknown) => unknown
 }
 
+/** From absolute zero up. */
+const ABOVE_ZERO = { low: -273.15, high: Infinity, unit: 'degC' } as const
 const unitCode = z.enum(Object.keys(UNITS) as [UnitCode, ...UnitCode[]])
 const positionSchema = z.array(z.number()).min(2)
-const ringsSchema = z.array(z.array(positionSchema))
+const ringsSchema = z.array(z.array(positionSchema).min(1)).min(1)
 /** Degrees beyond 180 and heights are read: the arithmetic is tried here, not whether a boundary may stand. */
 const geometrySchema = z.union([
   z.looseObject({ type: z.literal('Polygon'), coordinates: ringsSchema }),
-  z.looseObject({ type: z.literal('MultiPolygon'), coordinates: z.array(ringsSchema) }),
+  z.looseObject({ type: z.literal('MultiPolygon'), coordinates: z.array(ringsSchema).min(1) }),
 ])
 
 function define<Args extends z.ZodType>(
@@ -43,7 +47,11 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
   convert: define(
     { args: '{value, from, to}', answer: 'number in the unit `to`' },
     z.strictObject({ value: z.number(), from: unitCode, to: unitCode }),
-    ({ value, from, to }) => Number(convertQuantity({ value: plainDecimal(value), unit: from }, to)),
+    ({ value, from, to }) => {
+      const given = { value: plainDecimal(value), unit: from }
+      assertExists(given)
+      return Number(convertQuantity(given, to))
+    },
   ),
   dilute: define(
     { args: '{total: {value, unit}, n, reading: "to" | "in"}', answer: '{product, water} in the unit of total' },
@@ -82,6 +90,11 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
       return { text, sha256: sha256Hex(text) }
     },
   ),
+}
+
+function assertExists(quantity: Quantity): void {
+  if (dimensionOf(quantity.unit) !== 'temperature') return
+  if (!isWithin(quantity, ABOVE_ZERO)) throw new RangeError(`${quantity.value} ${quantity.unit} lies below absolute zero`)
 }
 
 function toBoundary(geometry: z.output<typeof geometrySchema>): Boundary {

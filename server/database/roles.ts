@@ -21,6 +21,7 @@ export const APP_RIGHTS: Record<string, string> = {
   record_components: 'SELECT, INSERT, DELETE',
   record_versions: 'SELECT, INSERT',
   journal: 'SELECT, INSERT',
+  demo_seed: 'SELECT, INSERT',
 }
 
 /** Functions the app role may call that look over farm borders; each answers only what its name says. */

@@ -6,7 +6,6 @@ import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { seasonOf } from '../../shared/time/seasonOf.ts'
 import { fixedClock } from '../clock.ts'
 import type { FarmActor } from '../database/actor.ts'
-import { Account } from '../entities/Account.ts'
 import { DEMO_FOLDER } from '../projectFolders.ts'
 import { createBlock } from '../services/blocks/createBlock.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
@@ -56,19 +55,13 @@ export async function seedDemo(services: Services, password: string): Promise<De
   const lots = await seedInputs(services, manager)
   await seedRecords(services, { manager, applicator: await actorOf(services, ids.applicator, farm.id), ruanId, blocks, sprayers, lots })
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
+  await services.database.inHouse((tx) => tx.query('INSERT INTO demo_seed (demo_farm_id, demo_neighbour_id) VALUES ($1, $2)', [farm.id, neighbourFarmId]))
   return { password, accounts, farmId: farm.id, neighbourFarmId }
 }
 
 async function findDemo(services: Services): Promise<{ farmId: string; neighbourFarmId: string } | null> {
-  const farmOf = async (email: string): Promise<string | null> => {
-    const account = await services.database.inHouse((manager) => manager.findOneBy(Account, { email }))
-    if (!account) return null
-    const [access] = await services.database.listAccess(account.id, services.clock.now())
-    return access?.farmId ?? null
-  }
-  const farmId = await farmOf(ACCOUNTS.owner.email)
-  const neighbourFarmId = await farmOf(ACCOUNTS.neighbour.email)
-  return farmId !== null && neighbourFarmId !== null ? { farmId, neighbourFarmId } : null
+  const [found]: { demo_farm_id: string; demo_neighbour_id: string }[] = await services.database.inHouse((tx) => tx.query('SELECT demo_farm_id, demo_neighbour_id FROM demo_seed'))
+  return found ? { farmId: found.demo_farm_id, neighbourFarmId: found.demo_neighbour_id } : null
 }
 
 async function makeAccounts(services: Services, password: string, createdAt: Date): Promise<Record<AccountName, string>> {

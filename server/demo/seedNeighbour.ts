@@ -22,6 +22,6 @@ export async function seedNeighbour(services: Services, accountId: string): Prom
   const { record } = await createRecord(services, actor, buildRecord({
     blockId: block.id, materialId: material.id, lotId: lot.id, startedAt: startedAt.toISOString(), endedAt: endedAt.toISOString(), purpose: 'Soil life',
   }))
-  await services.database.inFarm(actor, (manager) => sealRecord(services, manager, actor, record.id, [{ code: 'record.stop', reason: 'First use; written down as it happened.' }]))
+  await services.database.inFarm(actor, (manager) => sealRecord(services, manager, actor, record.id, { acknowledged: [] }))
   return farm.id
 }

@@ -94,7 +94,7 @@ async function recordTask(services: Services, ground: Ground, task: Task, sign: 
   if (!sign) return
   const acknowledged = [{ code: 'record.stop', reason: 'The soap was measured twice into one load. Mirel Achter told the same day; the leaves were rinsed.' }]
   const stopped = record.checks.some(({ verdict }) => verdict === 'stop')
-  await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, stopped ? acknowledged : []))
+  await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, { acknowledged: stopped ? acknowledged : [] }))
 }
 
 /** The lot in use on a day: the newest that had been received. */

@@ -1,9 +1,9 @@
-import { Check, Column, Entity, ForeignKey, PrimaryColumn, Unique } from 'typeorm'
+import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 import type { Boundary } from '../../shared/contract/block.ts'
 import type { Acknowledged } from '../../shared/contract/common.ts'
 
 @Entity({ name: 'blocks' })
-@Unique('blocks_farm_id_code_key', ['farmId', 'code'])
+@Index('blocks_farm_id_code_key', { synchronize: false })
 @ForeignKey('Farm', ['farmId'], ['id'], { name: 'blocks_farm_fkey' })
 @Check('blocks_area_check', `area_m2 > 0 AND area_m2 < 1e12`)
 export class Block {

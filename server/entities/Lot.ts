@@ -1,9 +1,9 @@
-import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn, Unique } from 'typeorm'
+import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 import type { LotOrigin } from '../../shared/contract/input.ts'
 import type { AmountUnit } from '../../shared/contract/quantity.ts'
 
 @Entity({ name: 'lots' })
-@Unique('lots_farm_id_code_key', ['farmId', 'code'])
+@Index('lots_farm_id_code_key', { synchronize: false })
 @Index('lots_farm_id_material_id_idx', ['farmId', 'materialId'])
 @ForeignKey('Material', ['farmId', 'materialId'], ['farmId', 'id'], { name: 'lots_material_fkey' })
 @Check('lots_quantity_check', `quantity > 0 AND quantity < 1e9`)

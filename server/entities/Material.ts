@@ -1,8 +1,8 @@
-import { Check, Column, Entity, ForeignKey, PrimaryColumn, Unique } from 'typeorm'
+import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 import type { LabelLimits, MaterialKind, OrganicStatus } from '../../shared/contract/input.ts'
 
 @Entity({ name: 'materials' })
-@Unique('materials_farm_id_name_key', ['farmId', 'name'])
+@Index('materials_farm_id_name_key', { synchronize: false })
 @ForeignKey('Farm', ['farmId'], ['id'], { name: 'materials_farm_fkey' })
 @Check('materials_measured_in_check', `measured_in IN ('volume', 'mass')`)
 export class Material {

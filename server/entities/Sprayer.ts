@@ -1,7 +1,7 @@
-import { Check, Column, Entity, ForeignKey, PrimaryColumn, Unique } from 'typeorm'
+import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 
 @Entity({ name: 'sprayers' })
-@Unique('sprayers_farm_id_code_key', ['farmId', 'code'])
+@Index('sprayers_farm_id_code_key', { synchronize: false })
 @ForeignKey('Farm', ['farmId'], ['id'], { name: 'sprayers_farm_fkey' })
 @Check('sprayers_tank_check', `tank_l > 0 AND tank_l < 1e7`)
 export class Sprayer {

@@ -1,19 +1,21 @@
 import type { ErrorRequestHandler } from 'express'
 import { AppError } from '../errors.ts'
 import type { Services } from '../services/services.ts'
-import { WRONG_PASSWORD } from './limitPasswords.ts'
+import { countGuess } from './limitPasswords.ts'
 import { presentProblem, presentUnforeseen } from './presentProblem.ts'
 import { readLanguage } from './readLanguage.ts'
 
 /** Every refusal and fault leaves here as problem JSON; what nobody foresaw is logged once, with its stack. */
 export function handleErrors(services: Services): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
+    // Whoever closes a page while a report is still being sent breaks it off; nobody has to act.
+    if (isBrokenOff(error)) return
     if (response.headersSent) {
       services.logger.error({ err: error, requestId: request.id }, 'answer broke off')
       next(error)
       return
     }
-    if (error instanceof AppError && error.code.startsWith('session.wrong')) response.locals[WRONG_PASSWORD] = true
+    if (error instanceof AppError && error.countsAsGuess) countGuess(response)
     const language = readLanguage(request)
     const requestId = String(request.id)
     const problem = presentProblem(error, language, requestId)
@@ -21,4 +23,8 @@ export function handleErrors(services: Services): ErrorRequestHandler {
     const answer = problem ?? presentUnforeseen(language, requestId)
     response.status(answer.status).type('application/problem+json').send(JSON.stringify(answer))
   }
+}
+
+function isBrokenOff(error: unknown): boolean {
+  return error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE'
 }

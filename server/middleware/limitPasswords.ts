@@ -1,50 +1,72 @@
-import { ipKeyGenerator, rateLimit, type Options } from 'express-rate-limit'
-import type { Request, RequestHandler } from 'express'
+import type { Request, RequestHandler, Response } from 'express'
+import { RateLimiterMemory } from 'rate-limiter-flexible'
 import { AppError } from '../errors.ts'
+import { findKnownDevice } from '../services/knownDevice.ts'
 import type { Services } from '../services/services.ts'
-import { isKnownDevice } from '../services/knownDevice.ts'
 
-/** Set on an answer that refused a password; other refusals are no guess. */
-export const WRONG_PASSWORD = 'wrongPassword'
-
-const WINDOW_MS = 15 * 60_000
+const WINDOW_S = 15 * 60
 const PER_ACCOUNT_AND_ADDRESS = 5
 const PER_ADDRESS = 20
+/** Signing asks the password of a live session; whoever holds it in wet gloves mistypes. */
+const PER_SESSION = 10
+
+/** A limiter and the key that this request is counted under. */
+interface Count {
+  limiter: RateLimiterMemory
+  key: string
+}
 
 /**
- * Failed passwords are counted by account and address together, and by address: who guesses at a worker's account
- * from elsewhere does not shut the worker out, and a device that has signed that account in before counts alone.
+ * Guards what a password or a one-time secret is tried at. Only wrong ones count, after they were judged. Signing in is
+ * counted by address and by account and address together: who guesses at a worker's account from elsewhere does not shut
+ * the worker out, and a device that has signed that account in before is counted on its own. Signing a record is counted by
+ * session alone.
  */
-export function limitPasswords(services: Services): RequestHandler[] {
-  const common: Partial<Options> = {
-    windowMs: WINDOW_MS,
-    skipSuccessfulRequests: true,
-    requestWasSuccessful: (_request, response) => response.locals[WRONG_PASSWORD] !== true,
-    standardHeaders: 'draft-8',
-    legacyHeaders: false,
-    handler: (_request, response) => {
-      const seconds = Number(response.get('Retry-After') ?? WINDOW_MS / 1000)
-      throw new AppError('too-many', 'too_many', { errors: [{ path: 'password', code: 'too_many', params: { minutes: Math.ceil(seconds / 60) } }] })
-    },
+export function limitPasswords(services: Services): RequestHandler {
+  const limiter = (points: number) => new RateLimiterMemory({ points, duration: WINDOW_S })
+  const byAddress = limiter(PER_ADDRESS)
+  const byAccount = limiter(PER_ACCOUNT_AND_ADDRESS)
+  const bySession = limiter(PER_SESSION)
+
+  function countsOf(request: Request): Count[] {
+    if (request.user && emailOf(request) === '') return [{ limiter: bySession, key: `${request.user.accountId} ${request.sessionID}` }]
+    const email = emailOf(request)
+    const address = request.ip ?? 'unknown'
+    const device = findKnownDevice(services.config.sessionSecret, request.get('Cookie'), email)
+    if (device !== null) return [{ limiter: byAccount, key: `device ${device}` }]
+    return [{ limiter: byAddress, key: address }, { limiter: byAccount, key: `${email} ${address}` }]
   }
-  const known = (request: Request) => isKnownDevice(services.config.sessionSecret, request.get('Cookie'), nameOf(request))
-  return [
-    rateLimit({
-      ...common,
-      limit: PER_ACCOUNT_AND_ADDRESS,
-      keyGenerator: (request) => `${nameOf(request)} ${known(request) ? 'known device' : addressOf(request)}`,
-    }),
-    rateLimit({ ...common, limit: PER_ADDRESS, keyGenerator: addressOf, skip: known }),
-  ]
+
+  return async (request, response, next) => {
+    const counts = countsOf(request)
+    for (const { limiter: each, key } of counts) {
+      const state = await each.get(key)
+      if (state !== null && state.consumedPoints >= each.points) return next(tooMany(response, state.msBeforeNext))
+    }
+    response.locals[COUNT_GUESS] = () => {
+      for (const { limiter: each, key } of counts) void each.penalty(key)
+    }
+    next()
+  }
 }
 
-function addressOf(request: Request): string {
-  return ipKeyGenerator(request.ip ?? 'unknown')
+const COUNT_GUESS = 'countGuess'
+
+/** Counts the wrong answer that is being sent, where one was guarded. */
+export function countGuess(response: Response): void {
+  const count: unknown = response.locals[COUNT_GUESS]
+  if (typeof count === 'function') count()
 }
 
-/** The account a password is tried for: the e-mail typed, or the one signed in. */
-function nameOf(request: Request): string {
+function tooMany(response: Response, msBeforeNext: number): AppError {
+  const seconds = Math.ceil(msBeforeNext / 1000)
+  response.set('Retry-After', String(seconds))
+  return new AppError('too-many', 'too_many', { errors: [{ path: 'password', code: 'too_many', params: { minutes: Math.ceil(seconds / 60) } }] })
+}
+
+/** The e-mail that was typed; empty where the body names none, as with a one-time link. */
+function emailOf(request: Request): string {
   const body: unknown = request.body
   const email = typeof body === 'object' && body !== null && 'email' in body ? body.email : undefined
-  return request.user?.accountId ?? (typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : '')
+  return typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : ''
 }

@@ -1,5 +1,6 @@
 import { join } from 'node:path'
 import express, { Router } from 'express'
+import { notFound } from '../errors.ts'
 
 /** The built client: hashed files for ever, its one page for every place; unknown files are 404, never the page. */
 export function serveClient(folder: string): Router {
@@ -10,7 +11,9 @@ export function serveClient(folder: string): Router {
   router.get('/', sendPage)
   return router
 
-  function sendPage(_request: express.Request, response: express.Response): void {
+  function sendPage(request: express.Request, response: express.Response): void {
+    const last = request.path.slice(request.path.lastIndexOf('/') + 1)
+    if (last.includes('.')) throw notFound()
     response.set('Cache-Control', 'no-cache').sendFile(join(folder, 'index.html'))
   }
 }

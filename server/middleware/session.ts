@@ -3,7 +3,7 @@ import session from 'express-session'
 import type { RequestHandler } from 'express'
 import passport from 'passport'
 import { Strategy as LocalStrategy } from 'passport-local'
-import { signIn } from '../services/signIn.ts'
+import { isOpenAccount, signIn } from '../services/signIn.ts'
 import type { Services } from '../services/services.ts'
 
 const DAY_MS = 86_400_000
@@ -23,6 +23,9 @@ export function authenticatorOf(services: Services): Authenticator {
   return authenticator
 }
 
+/** The session store keeps connections of its own, beside the pool that serves. */
+const SESSION_CONNECTIONS = 2
+
 declare global {
   namespace Express {
     interface User {
@@ -38,7 +41,7 @@ declare global {
 export function useSessions(services: Services): { handlers: RequestHandler[]; close(): void } {
   const Store = connectPgSimple(session)
   const store = new Store({
-    conString: services.config.databaseUrl,
+    conObject: { connectionString: services.config.databaseUrl, max: SESSION_CONNECTIONS },
     tableName: 'sessions',
     createTableIfMissing: false,
     disableTouch: true,
@@ -57,7 +60,9 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
     }),
   )
   authenticator.serializeUser((user, done) => done(null, user.accountId))
-  authenticator.deserializeUser((accountId: string, done) => done(null, { accountId }))
+  authenticator.deserializeUser((accountId: string, done) => {
+    isOpenAccount(services, accountId).then((isOpen) => done(null, isOpen ? { accountId } : false), done)
+  })
   const handlers = [
     session({
       name: 'drenchleaf.sid',

@@ -6,7 +6,7 @@ export function renderApiPage(api: OpenApi): string {
     Object.entries(operations).map(([method, operation]) => {
       const roles = typeof operation['x-roles'] === 'string' ? operation['x-roles'] : operation['x-roles'].join(', ')
       return `<section><h2><code>${method.toUpperCase()} /api${escape(path)}</code></h2><p>${escape(operation.summary)}</p>
-<p>For: ${escape(roles)}</p>${show('Parameters', operation.parameters)}${show('Takes', operation.requestBody)}${show('Gives', operation.responses['2XX'])}</section>`
+<p>For: ${escape(roles)}</p>${show('Parameters', operation.parameters)}${show('Takes', operation.requestBody)}${show('Gives', giving(operation.responses))}</section>`
     }),
   )
   return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width">
@@ -18,6 +18,10 @@ problems are RFC 9457; lists answer <code>{items, next}</code>.</p>${routes.join
 export const API_PAGE_STYLE = `body{background:#F7F4EC;color:#26302F;font:15px/22px system-ui,sans-serif;margin:0}
 main{max-width:940px;margin:0 auto;padding:32px 24px}h1{font-size:30px;line-height:36px}h2{font-size:15px;margin:0 0 4px;padding-top:8px;border-top:3px double #26302F}
 section{margin:24px 0}p{margin:4px 0}a{color:#2B6A8F}summary{color:#5A4A3C;cursor:pointer}pre{background:#EFEADC;padding:12px;overflow:auto;font-size:13px;line-height:18px}`
+
+function giving(responses: Record<string, object>): object {
+  return Object.fromEntries(Object.entries(responses).filter(([status]) => status.startsWith('2')))
+}
 
 function show(title: string, value: unknown): string {
   if (value === undefined || (Array.isArray(value) && value.length === 0)) return ''

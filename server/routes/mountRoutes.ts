@@ -10,10 +10,10 @@ import type { Route } from './defineRoute.ts'
  * The router of all routes. The order of refusals is the same everywhere: no session 401, not your world 404,
  * not your job 403, then what was sent 422. A method that a path does not have is 405.
  */
-export function mountRoutes(routes: Route[], services: Services, limitPasswords: RequestHandler[]): Router {
+export function mountRoutes(routes: Route[], services: Services, limitPasswords: RequestHandler): Router {
   const router = Router({ caseSensitive: true })
   for (const route of routes) {
-    const guards = route.guardsPassword ? limitPasswords : []
+    const guards = route.guardsPassword ? [limitPasswords] : []
     router[route.method](route.path, ...guards, (request: Request, response: Response) => serve(route, services, request, response))
   }
   for (const path of new Set(routes.map((route) => route.path))) {
@@ -58,7 +58,7 @@ function parsePath(schema: z.ZodType | undefined, params: unknown): unknown {
 }
 
 function refuseQuery(query: object): Record<string, never> {
-  const errors = Object.keys(query).map((path) => ({ path, code: 'unknown_field' }))
+  const errors = Object.keys(query).map((name) => ({ path: name.slice(0, 80), code: 'unknown_field' }))
   if (errors.length > 0) throw new AppError('invalid-input', 'invalid', { errors })
   return {}
 }

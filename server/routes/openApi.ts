@@ -1,11 +1,15 @@
-import { z } from 'zod'
+import type { z } from 'zod'
 import { problemSchema } from '../../shared/contract/problem.ts'
 import type { Route } from './defineRoute.ts'
+import { describeAnswers, describeRefusals } from './openApiResponses.ts'
+import { schemaOf } from './openApiSchema.ts'
 
 interface Operation {
   summary: string
   operationId: string
   'x-roles': string | readonly string[]
+  /** Empty where nobody need be signed in. */
+  security: Record<string, string[]>[]
   parameters: object[]
   requestBody?: object
   responses: Record<string, object>
@@ -17,6 +21,9 @@ export interface OpenApi {
   paths: Record<string, Record<string, Operation>>
   components: object
 }
+
+/** A page of another site cannot set it. */
+const OWN_PAGES = { name: 'X-Requested-With', in: 'header', required: true, schema: { type: 'string', enum: ['drenchleaf'] } }
 
 /** The API as OpenAPI 3.1, from the routes themselves. */
 export function describeApi(routes: Route[], version: string): OpenApi {
@@ -34,7 +41,11 @@ export function describeApi(routes: Route[], version: string): OpenApi {
     },
     servers: [{ url: '/api' }],
     paths,
-    components: { schemas: { Problem: schemaOf(problemSchema, 'output') } },
+    components: {
+      schemas: { Problem: schemaOf(problemSchema, 'output') },
+      parameters: { OwnPages: OWN_PAGES },
+      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'drenchleaf.sid' } },
+    },
   }
 }
 
@@ -43,12 +54,14 @@ function describeRoute(route: Route): Operation {
     summary: route.summary,
     operationId: `${route.method}${route.path.replace(/[/:]+(\w)/g, (_match, letter: string) => letter.toUpperCase())}`,
     'x-roles': route.roles,
-    parameters: [...describeParameters(route.params, 'path'), ...describeParameters(route.query, 'query')],
+    security: route.roles === 'everybody' ? [] : [{ session: [] }],
+    parameters: [
+      ...describeParameters(route.params, 'path'),
+      ...describeParameters(route.query, 'query'),
+      ...(route.method === 'get' ? [] : [{ $ref: '#/components/parameters/OwnPages' }]),
+    ],
     ...(route.body && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(route.body, 'input') } } } }),
-    responses: {
-      '2XX': { description: 'Done.', content: { [route.contentType ?? 'application/json']: { schema: schemaOf(route.answer, 'output') } } },
-      default: { description: 'Refused.', content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } },
-    },
+    responses: { ...describeAnswers(route), ...describeRefusals(route) },
   }
 }
 
@@ -56,9 +69,4 @@ function describeParameters(schema: z.ZodType | undefined, place: 'path' | 'quer
   if (!schema) return []
   const { properties = {}, required = [] } = schemaOf(schema, 'input') as { properties?: Record<string, object>; required?: string[] }
   return Object.entries(properties).map(([name, shape]) => ({ name, in: place, required: place === 'path' || required.includes(name), schema: shape }))
-}
-
-function schemaOf(schema: z.ZodType, io: 'input' | 'output'): object {
-  const { $schema: _dialect, ...shape } = z.toJSONSchema(schema, { io, unrepresentable: 'any' })
-  return shape
 }

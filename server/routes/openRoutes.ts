@@ -7,11 +7,8 @@ import { findCheckCode } from '../services/findCheckCode.ts'
 import { acceptWelcome, readWelcome } from '../services/welcome.ts'
 import { defineRoute } from './defineRoute.ts'
 
-const tileParams = z.strictObject({
-  z: z.coerce.number().int().min(0).max(22),
-  x: z.coerce.number().int().min(0).max(2 ** 22 - 1),
-  y: z.coerce.number().int().min(0).max(2 ** 22 - 1),
-})
+const wholeNumber = (max: number) => z.string().regex(/^\d{1,7}$/).transform(Number).pipe(z.number().max(max))
+const tileParams = z.strictObject({ z: wholeNumber(22), x: wholeNumber(2 ** 22 - 1), y: wholeNumber(2 ** 22 - 1) })
 const DAY_S = 86_400
 
 export const openRoutes = [

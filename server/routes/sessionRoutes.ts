@@ -3,7 +3,7 @@ import { sessionSchema, signInSchema } from '../../shared/contract/session.ts'
 import { AppError } from '../errors.ts'
 import { authenticatorOf } from '../middleware/session.ts'
 import { describeSession } from '../services/describeSession.ts'
-import { DEVICE_COOKIE, markDevice } from '../services/knownDevice.ts'
+import { deviceCookieName, markDevice } from '../services/knownDevice.ts'
 import { defineRoute, type RouteCall } from './defineRoute.ts'
 
 const YEAR_MS = 365 * 86_400_000
@@ -19,7 +19,7 @@ const postSession = defineRoute({
   run: async (call) => {
     const accountId = await authenticate(call)
     const { config } = call.services
-    call.response.cookie(DEVICE_COOKIE, markDevice(config.sessionSecret, call.body.email), {
+    call.response.cookie(deviceCookieName(config.sessionSecret, call.body.email), markDevice(config.sessionSecret, call.body.email), {
       httpOnly: true,
       sameSite: 'lax',
       secure: config.publicUrl?.startsWith('https:') ?? false,
@@ -59,7 +59,7 @@ function authenticate({ request, response, services }: Pick<RouteCall<unknown, u
   return new Promise((resolve, reject) => {
     const judge = authenticatorOf(services).authenticate('local', (error: unknown, user: Express.User | false) => {
       if (error) return reject(error as Error)
-      if (!user) return reject(new AppError('unauthenticated', 'session.wrong'))
+      if (!user) return reject(new AppError('unauthenticated', 'session.wrong', { countsAsGuess: true }))
       request.logIn(user, (fault: unknown) => (fault ? reject(fault as Error) : resolve(user.accountId)))
     }) as (request: unknown, response: unknown, next: (error: unknown) => void) => void
     judge(request, response, reject)

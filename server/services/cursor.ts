@@ -1,18 +1,19 @@
 import { z } from 'zod'
 import { invalid } from '../errors.ts'
 
-const keySchema = z.tuple([z.string().max(200), z.guid()])
-
 /** Where a list goes on: the sort key and id of the last row shown. */
 export function encodeCursor(key: string, id: string): string {
   return Buffer.from(JSON.stringify([key, id])).toString('base64url')
 }
 
-/** @returns null at the start of the list. @throws {AppError} if the text is no cursor of ours. */
-export function decodeCursor(text: string | undefined): { key: string; id: string } | null {
+/**
+ * Where a list goes on from. @param keySchema what the sort key of this list can be: anybody can write a cursor.
+ * @returns null at the start of the list. @throws {AppError} if the text is no cursor of ours.
+ */
+export function decodeCursor(text: string | undefined, keySchema: z.ZodType<string>): { key: string; id: string } | null {
   if (text === undefined) return null
   try {
-    const [key, id] = keySchema.parse(JSON.parse(Buffer.from(text, 'base64url').toString('utf8')))
+    const [key, id] = z.tuple([keySchema, z.guid()]).parse(JSON.parse(Buffer.from(text, 'base64url').toString('utf8')))
     return { key, id }
   } catch {
     throw invalid([{ path: 'cursor', code: 'cursor.invalid' }])

@@ -1,4 +1,4 @@
-import type { EntityManager, EntityTarget, ObjectLiteral } from 'typeorm'
+import type { EntityManager, EntityTarget, FindOptionsWhere, ObjectLiteral } from 'typeorm'
 import { canonicalText } from '../../shared/evidence/canonicalText.ts'
 import { sha256Hex } from '../../shared/evidence/sha256Hex.ts'
 import { AppError, invalid, type FieldError } from '../errors.ts'
@@ -15,8 +15,24 @@ export function digestOf(command: unknown): string {
 }
 
 /**
+ * The thing that the same command made before, or null for a new id. Asked first, so that a repeat is answered as it was
+ * then, whatever has changed around it since.
+ * @throws {AppError} `idempotency.mismatch` if the id holds other content.
+ */
+export async function findRepeat<Row extends Creatable>(
+  manager: EntityManager,
+  target: EntityTarget<Row>,
+  command: Pick<Creatable, 'farmId' | 'id' | 'creationDigest'>,
+): Promise<Row | null> {
+  const { farmId, id, creationDigest } = command
+  const present = await manager.findOneBy(target, { farmId, id } as FindOptionsWhere<Row>)
+  if (present !== null && present.creationDigest !== creationDigest) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
+  return present
+}
+
+/**
  * Inserts a thing under the id its maker gave it.
- * @returns true when it is new, false when the same command was already carried out.
+ * @returns the thing as it is stored, and whether this call made it or the same command had been carried out already.
  * @throws {AppError} `idempotency.mismatch` if the id holds other content, `conflict` with `taken` if another thing
  *   of the farm has its code or name.
  */
@@ -25,13 +41,10 @@ export async function insertOnce<Row extends Creatable>(
   target: EntityTarget<Row>,
   row: Row,
   taken: FieldError,
-): Promise<boolean> {
+): Promise<{ made: boolean; stored: Row }> {
   const result = await manager.createQueryBuilder().insert().into(target).values(row as never).orIgnore().returning('id').execute()
-  if ((result.raw as unknown[]).length > 0) return true
-  const [present] = await manager.getRepository(target).createQueryBuilder('thing')
-    .where('thing.farmId = :farmId AND thing.id = :id', { farmId: row.farmId, id: row.id })
-    .getMany()
+  if ((result.raw as unknown[]).length > 0) return { made: true, stored: row }
+  const present = await findRepeat(manager, target, row)
   if (!present) throw new AppError('conflict', 'conflict', { errors: [taken] })
-  if (present.creationDigest !== row.creationDigest) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
-  return false
+  return { made: false, stored: present }
 }

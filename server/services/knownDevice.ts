@@ -1,17 +1,33 @@
-import { createHmac, timingSafeEqual } from 'node:crypto'
+import { createHmac, randomBytes, timingSafeEqual } from 'node:crypto'
 
-export const DEVICE_COOKIE = 'drenchleaf.device'
+const DEVICE = /^[\w-]{22}$/
 
-/** The mark left on a device that has signed an account in; it opens nothing, it only counts failures apart. */
-export function markDevice(secret: string, email: string): string {
-  return createHmac('sha256', secret).update(`device ${email.trim().toLowerCase()}`).digest('base64url')
+/** The name of the cookie that marks a device for one account; a shared phone holds one for each. */
+export function deviceCookieName(secret: string, email: string): string {
+  return `drenchleaf.device.${seal(secret, `name ${fold(email)}`).slice(0, 10)}`
 }
 
-/** Whether the cookies hold the mark for this account. */
-export function isKnownDevice(secret: string, cookies: string | undefined, email: string): boolean {
-  const found = cookies?.split('; ').find((cookie) => cookie.startsWith(`${DEVICE_COOKIE}=`))
-  if (!found) return false
-  const given = Buffer.from(found.slice(DEVICE_COOKIE.length + 1))
-  const wanted = Buffer.from(markDevice(secret, email))
-  return given.length === wanted.length && timingSafeEqual(given, wanted)
+/** A mark for a device that has signed an account in; it opens nothing, failures of that device only count apart. */
+export function markDevice(secret: string, email: string): string {
+  const device = randomBytes(16).toString('base64url')
+  return `${device}.${seal(secret, `device ${device} ${fold(email)}`)}`
+}
+
+/** The device that the cookies name for this account, or null where none has signed it in before. */
+export function findKnownDevice(secret: string, cookies: string | undefined, email: string): string | null {
+  const name = deviceCookieName(secret, email)
+  const value = cookies?.split('; ').find((cookie) => cookie.startsWith(`${name}=`))?.slice(name.length + 1)
+  const [device = '', given = ''] = value?.split('.') ?? []
+  if (!DEVICE.test(device)) return null
+  const wanted = Buffer.from(seal(secret, `device ${device} ${fold(email)}`))
+  const found = Buffer.from(given)
+  return found.length === wanted.length && timingSafeEqual(found, wanted) ? device : null
+}
+
+function seal(secret: string, text: string): string {
+  return createHmac('sha256', secret).update(text).digest('base64url')
+}
+
+function fold(email: string): string {
+  return email.trim().toLowerCase()
 }

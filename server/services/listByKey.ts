@@ -1,5 +1,9 @@
+import { z } from 'zod'
 import type { EntityManager, EntityTarget, ObjectLiteral } from 'typeorm'
 import { cutPage, decodeCursor } from './cursor.ts'
+
+/** Names and codes as the database can compare them: whole characters, no NUL. */
+const nameKey = z.string().max(200).refine((text) => text.isWellFormed() && !text.includes('\u0000'))
 
 /** A page of a farm's things in the order of one text column; ids break ties. */
 export async function listByKey<Row extends ObjectLiteral & { id: string }, Item>(
@@ -9,7 +13,7 @@ export async function listByKey<Row extends ObjectLiteral & { id: string }, Item
   farmId: string,
   shape: { key: 'code' | 'name'; where?: Partial<Record<string, string>>; present: (row: Row) => Item },
 ): Promise<{ items: Item[]; next: string | null }> {
-  const after = decodeCursor(page.cursor)
+  const after = decodeCursor(page.cursor, nameKey)
   const query = manager.getRepository(target).createQueryBuilder('thing').where('thing.farmId = :farmId', { farmId })
   for (const [column, value] of Object.entries(shape.where ?? {})) {
     query.andWhere(`thing.${column} = :${column}`, { [column]: value })

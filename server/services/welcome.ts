@@ -37,15 +37,19 @@ export async function readWelcome(services: Parts, token: string): Promise<{ ema
   })
 }
 
-/** Spends a link: the account takes its name and password. @returns the account's id. */
+/** Spends a link: the account takes its name and password; its other links and its sessions end. @returns the account's id. */
 export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<string> {
+  const { accountId } = await services.database.inHouse((manager) => findToken(services, manager, input.token))
   assertGoodPassword(input.password)
   const passwordHash = await hashPassword(input.password)
   return services.database.inHouse(async (manager) => {
-    const { accountId, tokenHash } = await findToken(services, manager, input.token)
-    const spent = await manager.update(AccountToken, { tokenHash, usedAt: IsNull() }, { usedAt: services.clock.now() })
+    const { tokenHash } = await findToken(services, manager, input.token)
+    const usedAt = services.clock.now()
+    const spent = await manager.update(AccountToken, { tokenHash, usedAt: IsNull() }, { usedAt })
     if (spent.affected !== 1) throw usedUp()
+    await manager.update(AccountToken, { accountId, usedAt: IsNull() }, { usedAt })
     await manager.update(Account, { id: accountId }, { name: input.name, passwordHash })
+    await manager.query("DELETE FROM sessions WHERE sess #>> '{passport,user}' = $1", [accountId])
     return accountId
   })
 }
@@ -53,6 +57,8 @@ export async function acceptWelcome(services: Parts, input: { token: string; nam
 async function findToken(services: Parts, manager: EntityManager, token: string): Promise<AccountToken> {
   const found = await manager.findOneBy(AccountToken, { tokenHash: hashToken(token), usedAt: IsNull(), expiresAt: MoreThan(services.clock.now()) })
   if (!found) throw usedUp()
+  const isOpen = await manager.existsBy(Account, { id: found.accountId, deactivatedAt: IsNull() })
+  if (!isOpen) throw usedUp()
   return found
 }
 
@@ -66,5 +72,5 @@ function hashToken(token: string): string {
 }
 
 function usedUp(): AppError {
-  return new AppError('bad-request', 'welcome.used_up')
+  return new AppError('bad-request', 'welcome.used_up', { countsAsGuess: true })
 }

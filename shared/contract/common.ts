@@ -1,17 +1,25 @@
 import { z } from 'zod'
+import { parseInstant } from '../time/parseInstant.ts'
 import { noteText } from './text.ts'
 
-/** Made by whoever made the thing; the product's own clients make UUIDv7. */
-export const idSchema = z.guid({ error: 'id.format' })
+const YEARS = /^(19[7-9]\d|20\d\d|21\d\d)-/
 
-/** An instant: RFC 3339 with an offset, seconds given, year 1970 to 2199. */
-export const instantSchema = z.iso
-  .datetime({ offset: true, error: 'time.zone_needed' })
-  .refine((text) => /^(19[7-9]\d|20\d\d|21\d\d)-/.test(text), { error: 'time.range' })
-  .refine((text) => !Number.isNaN(Date.parse(text)), { error: 'time.invalid' })
+/** Made by whoever made the thing; the product's own clients make UUIDv7. One spelling, lower case. */
+export const idSchema = z.guid({ error: 'id.format' }).toLowerCase()
 
-/** A civil date of the calendar, YYYY-MM-DD. */
-export const civilDateSchema = z.iso.date({ error: 'date.invalid' })
+/** An instant as it was sent: RFC 3339 with an offset, seconds given, at most nine decimals, year 1970 to 2199. */
+export const instantSchema = z
+  .string()
+  .superRefine((text, context) => {
+    const parsed = parseInstant(text)
+    if (!parsed.ok) context.addIssue({ code: 'custom', message: parsed.problem.id })
+  })
+  .meta({ format: 'date-time' })
+
+/** A civil date of the calendar, YYYY-MM-DD, year 1970 to 2199. */
+export const civilDateSchema = z.iso
+  .date({ error: 'date.invalid', abort: true })
+  .refine((text) => YEARS.test(text), { error: 'date.invalid' })
 
 /** What was unlikely and sent all the same, with the reason given. */
 export const acknowledgedSchema = z
@@ -27,9 +35,16 @@ export const messageSchema = z.object({
 })
 export type Message = z.infer<typeof messageSchema>
 
+const limitSchema = z
+  .string()
+  .regex(/^\d{1,3}$/)
+  .transform(Number)
+  .pipe(z.number().min(1).max(200))
+  .meta({ type: 'integer', minimum: 1, maximum: 200 })
+
 /** Query of every list. */
 export const pageQuerySchema = z.strictObject({
-  limit: z.coerce.number().int().min(1).max(200).default(50),
+  limit: limitSchema.default(50),
   cursor: z.string().max(400).optional(),
 })
 

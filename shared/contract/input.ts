@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { dimensionOf } from '../units/dimensionOf.ts'
 import { civilDateSchema, idSchema } from './common.ts'
 import { amountSchema, amountUnit, decimalText, positiveDecimal, rateUnit } from './quantity.ts'
 import { lineText, noteText } from './text.ts'
@@ -24,7 +25,7 @@ export type LabelLimits = z.infer<typeof labelLimitsSchema>
 export type MaterialKind = (typeof MATERIAL_KINDS)[number]
 export type OrganicStatus = (typeof ORGANIC_STATUSES)[number]
 
-export const createMaterialSchema = z.strictObject({
+const materialFacts = z.strictObject({
   id: idSchema,
   name: lineText(80),
   kind: z.enum(MATERIAL_KINDS),
@@ -34,9 +35,23 @@ export const createMaterialSchema = z.strictObject({
   statusBasis: noteText(300).nullable().default(null),
   label: labelLimitsSchema.nullable().default(null),
 })
+/** Refuses a label that contradicts itself: another measure than the material's, over 100 %, least over most. */
+export const createMaterialSchema = materialFacts.superRefine(({ measuredIn, label }, context) => {
+  if (!label) return
+  const refuse = (path: keyof LabelLimits, message: string, ...more: string[]) =>
+    context.addIssue({ code: 'custom', path: ['label', path, ...more], message })
+  if (label.maxRate && dimensionOf(label.maxRate.unit) !== `${measuredIn}PerArea`) {
+    refuse('maxRate', measuredIn === 'volume' ? 'unit.needs_volume' : 'unit.needs_mass', 'unit')
+  }
+  const least = Number(label.minStrengthPct ?? 0)
+  const most = Number(label.maxStrengthPct ?? 100)
+  if (least > 100) refuse('minStrengthPct', 'number.percent')
+  if (most > 100) refuse('maxStrengthPct', 'number.percent')
+  else if (least <= 100 && least > most) refuse('maxStrengthPct', 'label.most_below_least')
+})
 export type CreateMaterial = z.infer<typeof createMaterialSchema>
 
-export const materialSchema = createMaterialSchema.extend({ revision: z.number().int(), createdAt: z.string() })
+export const materialSchema = materialFacts.extend({ revision: z.number().int(), createdAt: z.string() })
 export type Material = z.infer<typeof materialSchema>
 
 export const LOT_ORIGINS = ['bought', 'gathered', 'made'] as const

@@ -9,14 +9,14 @@ export const MASS_RATE_UNITS = ['kg/ha', 'lb/acre'] as const
 export const SPEED_UNITS = ['kmh', 'mph', 'ms', 'knot'] as const
 export const TEMPERATURE_UNITS = ['degC', 'degF'] as const
 
-/** A decimal as typed: no sign, no exponent, at most 7 digits before the point and 4 after it. */
-export const decimalText = z.string().regex(/^\d{1,7}(\.\d{1,4})?$/, { error: 'number.format' })
+/** A decimal as typed: no sign, no exponent, no leading zero, at most 7 digits before the point and 4 after it. */
+export const decimalText = z.string().regex(/^(0|[1-9]\d{0,6})(\.\d{1,4})?$/, { error: 'number.format' })
 
 /** A decimal above zero. */
 export const positiveDecimal = decimalText.refine((text) => /[1-9]/.test(text), { error: 'number.above_zero' })
 
 /** A decimal that may be below zero, for temperatures. */
-export const signedDecimal = z.string().regex(/^-?\d{1,3}(\.\d{1,4})?$/, { error: 'number.format' })
+export const signedDecimal = z.string().regex(/^-?(0|[1-9]\d{0,2})(\.\d{1,4})?$/, { error: 'number.format' })
 
 export const amountUnit = z.enum([...VOLUME_UNITS, ...MASS_UNITS], { error: 'unit.not_allowed' })
 export const volumeUnit = z.enum(VOLUME_UNITS, { error: 'unit.not_allowed' })

@@ -1,10 +1,13 @@
 import canonicalize from 'canonicalize'
 
+/** Deeper than anything that is signed; reading and hashing it never runs out of stack. */
+const MAX_DEPTH = 100
+
 /**
  * The one text of a JSON value, which is signed and hashed: keys sorted by UTF-16 units, numbers as ECMAScript writes them, no
  * spaces. Only what JSON can hold goes in, so that the text read back is the value.
  * @throws {RangeError} naming the place, for NaN, an infinity, undefined, a function, a symbol, a bigint, a lone surrogate, an
- * object that is not plain (a Date, a Map), a circle.
+ * object that is not plain (a Date, a Map), a circle, more than 100 lists and objects inside each other.
  * @source RFC 8785 (JSON Canonicalization Scheme).
  */
 export function canonicalText(value: unknown): string {
@@ -23,6 +26,7 @@ function assertJson(value: unknown, path: string, above: Set<object>): void {
   }
   if (typeof value !== 'object') throw new RangeError(`${path} is ${typeof value}`)
   if (above.has(value)) throw new RangeError(`${path} is a circle`)
+  if (above.size >= MAX_DEPTH) throw new RangeError(`${path.slice(0, 80)}… lies more than ${MAX_DEPTH} levels deep`)
   above.add(value)
   if (Array.isArray(value)) assertItems(value, path, above)
   else assertMembers(value, path, above)

@@ -1,4 +1,5 @@
 import { bbox, feature, featureCollection, intersect } from '@turf/turf'
+import { areTooFine } from './edgeMeetings.ts'
 import type { Boundary, Position, Ring } from './geometryTypes.ts'
 import { measurePolygon } from './measurePolygon.ts'
 
@@ -17,15 +18,20 @@ export interface Overlap {
 const SLIVER_M2 = 1
 
 /**
- * Ground that two valid boundaries share, square metres on the ellipsoid; 0 where they only touch.
+ * Ground that two valid boundaries share, square metres on the ellipsoid; 0 where they only touch or are too fine to clip.
  */
 export function overlapShare(a: Boundary, b: Boundary): number {
-  if (!doBoxesMeet(a, b)) return 0
+  if (!doBoxesMeet(a, b) || areTooFine(a, b)) return 0
   const shared = intersect(featureCollection([feature(a), feature(b)]))
   return shared === null ? 0 : measurePolygon(toBoundary(shared.geometry)).areaM2
 }
 
-/** The boundaries that share more than 1 m² with one, largest shared ground first. */
+/** The boundaries whose ground shared with one cannot be worked out in good time; see `areTooFine`. */
+export function findTooFine(geometry: Boundary, others: readonly NamedBoundary[]): NamedBoundary[] {
+  return others.filter((other) => doBoxesMeet(geometry, other.geometry) && areTooFine(geometry, other.geometry))
+}
+
+/** The boundaries that share more than 1 m² with one, largest shared ground first; those of `findTooFine` are left out. */
 export function findOverlaps(geometry: Boundary, others: readonly NamedBoundary[]): Overlap[] {
   const ownM2 = measurePolygon(geometry).areaM2
   return others

@@ -57,13 +57,18 @@ function findOutside(ring: readonly (readonly [number, number])[], path: string)
   const worst = excess.reduce((best, value, index) => (value > (excess[best] ?? 0) ? index : best), 0)
   if ((excess[worst] ?? 0) <= 0) return []
   const [lon = 0, lat = 0] = ring[worst] ?? []
-  const isProjected = Math.abs(lon) > PROJECTED || Math.abs(lat) > PROJECTED
-  const code = isProjected ? 'geometry.degrees_needed' : 'geometry.out_of_range'
-  const outside: GeometryFinding = { code, params: { lon, lat }, path: `${path}.${worst}` }
+  const outside: GeometryFinding = { code: nameOutside(ring, lon, lat), params: { lon, lat }, path: `${path}.${worst}` }
   const runsOn = ring.every(([east, north]) => Math.abs(east) <= 360 && Math.abs(north) <= 90)
   return runsOn && ring.some(([east]) => Math.abs(east) < 180)
     ? [outside, { code: 'geometry.crosses_antimeridian', params: {}, path }]
     : [outside]
+}
+
+/** What a position outside the globe is: metres, latitude and longitude exchanged all round the ring, or plainly outside. */
+function nameOutside(ring: readonly (readonly [number, number])[], lon: number, lat: number): string {
+  if (Math.abs(lon) > PROJECTED || Math.abs(lat) > PROJECTED) return 'geometry.degrees_needed'
+  const isExchanged = ring.every(([east, north]) => Math.abs(east) <= 90 && Math.abs(north) > 90 && Math.abs(north) <= 180)
+  return isExchanged ? 'geometry.maybe_swapped' : 'geometry.out_of_range'
 }
 
 function isFlat({ x, y }: GridRing): boolean {

@@ -8,7 +8,7 @@ const OWN_WORDS: Partial<Record<string, string>> = {
 }
 /** Codes whose words the refusals hold already. */
 const KNOWN = new Set([
-  'geometry.type', 'geometry.out_of_range', 'geometry.degrees_needed', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
+  'geometry.type', 'geometry.out_of_range', 'geometry.maybe_swapped', 'geometry.degrees_needed', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
   'geometry.area_zero', 'geometry.spike', 'geometry.too_many_points', 'geometry.crosses_antimeridian',
 ])
 

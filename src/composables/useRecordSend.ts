@@ -65,7 +65,7 @@ export function useRecordSend({ id, farmId, draft, content }: RecordSendOptions)
   }
 
   async function signOnly(password: string, acknowledged: Acknowledged): Promise<{ answer: ApplicationRecord }> {
-    const outcome = await submit({ kind: 'record.sign', farmId: farmId(), id, body: { password, acknowledged } })
+    const outcome = await submit({ kind: 'record.sign', farmId: farmId(), id, body: { password, acknowledged, ...(draft.value.revision !== null && { revision: draft.value.revision }) } })
     if (outcome.state === 'kept') throw new TypeError('A signature is never kept')
     return outcome
   }

@@ -36,6 +36,15 @@ describe('drawing a block', () => {
     expect(other.body.errors[0].code).toBe('idempotency.mismatch')
   })
 
+  it('answers a repeat as it was then, whatever was drawn over it since', async () => {
+    const first = buildBlock({ code: 'R1', geometry: squareAt(40) })
+    const made = await post(first)
+    await post(buildBlock({ code: 'R2', geometry: squareAt(40.1), acknowledged: [{ code: 'geometry.overlap', reason: 'Two tiers' }] })).expect(201)
+    const repeat = await post(first)
+    expect(repeat.status).toBe(200)
+    expect(repeat.body).toEqual(made.body)
+  })
+
   it('keeps a code for one block', async () => {
     const response = await post(buildBlock({ code: 'A1', geometry: squareAt(2) }))
     expect(response.status).toBe(409)
@@ -94,6 +103,24 @@ describe('an unlikely boundary passes when acknowledged', () => {
     expect(['geometry.far_from_farm', 'geometry.swapped']).toContain(response.body.errors[0].code)
   })
 })
+
+describe('outlines laced into each other', () => {
+  it('are not clipped but asked about', async () => {
+    const comb = buildBlock({ code: 'K1', geometry: combAt(60, false) })
+    await post(comb).expect(201)
+    const crossed = await post(buildBlock({ code: 'K2', geometry: combAt(60, true) }))
+    expect(crossed).toMatchObject({ status: 422, body: { acknowledgeable: true, errors: [{ code: 'geometry.overlap_unknown', params: { code: 'K1' } }] } })
+  })
+})
+
+/** A comb of a hundred teeth, upright or lying, over the same square. */
+function combAt(place: number, lying: boolean): { type: 'Polygon'; coordinates: number[][][] } {
+  const teeth = 100
+  const tip: [number, number][] = Array.from({ length: teeth }, (_, index): [number, number][] => [[index / teeth, 1], [(index + 0.5) / teeth, 1], [(index + 0.5) / teeth, 0.1], [(index + 1) / teeth, 0.1]]).flat()
+  const ring = [[0, 0], [1, 0], ...tip.reverse(), [0, 0]].map(([x = 0, y = 0]) => (lying ? [y, x] : [x, y]))
+  const [west, south] = [-123.31 + place * 0.002, 44.61]
+  return { type: 'Polygon', coordinates: [ring.map(([x = 0, y = 0]) => [Number((west + x * 0.001).toFixed(7)), Number((south + y * 0.001).toFixed(7))])] }
+}
 
 describe('what is sent is held against the contract', () => {
   it.each([

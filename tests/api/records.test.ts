@@ -66,8 +66,8 @@ describe('a draft', () => {
     { name: 'a start in the future', line: { startedAt: '2026-06-16T16:00:00Z' }, path: 'lines.0.startedAt', code: 'time.future' },
     { name: 'thirty hours', line: { startedAt: '2026-06-14T13:00:00Z', endedAt: '2026-06-15T19:00:00Z' }, path: 'lines.0.endedAt', code: 'time.too_long' },
     { name: 'a time without its zone', line: { startedAt: '2026-06-16T13:00:00' }, path: 'lines.0.startedAt', code: 'time.zone_needed' },
-    { name: 'the 30th of February', line: { startedAt: '2026-02-30T13:00:00Z' }, path: 'lines.0.startedAt', code: 'time.zone_needed' },
-    { name: 'tomorrow', line: { startedAt: 'tomorrow' }, path: 'lines.0.startedAt', code: 'time.zone_needed' },
+    { name: 'the 30th of February', line: { startedAt: '2026-02-30T13:00:00Z' }, path: 'lines.0.startedAt', code: 'time.invalid' },
+    { name: 'tomorrow', line: { startedAt: 'tomorrow' }, path: 'lines.0.startedAt', code: 'time.invalid' },
   ])('is refused with $name', async ({ line, path, code }) => {
     const response = await applicator.post(address()).send({ id: uuidV7(), method: 'drench', lines: [{ blockId: things.blockId, ...line }] })
     expect(response.status).toBe(422)
@@ -89,6 +89,20 @@ describe('a draft', () => {
     const response = await applicator.post(address()).send({ ...buildRecord(things), ...change })
     expect(response.status).toBe(422)
     expect(response.body.errors).toMatchObject([{ code: 'unknown_field' }])
+  })
+
+  it('keeps who did the work when somebody else writes it anew', async () => {
+    const input = buildRecord(things)
+    await applicator.post(address()).send(input).expect(201)
+    const { id, ...content } = input
+    const mended = await manager.put(address(`/${id}`)).send({ ...content, purpose: 'A slip mended', revision: 1 })
+    expect(mended.body).toMatchObject({ purpose: 'A slip mended', doneBy: { id: farm.personIds.applicator } })
+  })
+
+  it('takes no mass for what went on a line', async () => {
+    const input = buildRecord(things)
+    const lines = input.lines.map((line) => ({ ...line, amount: { value: '5', unit: 'kg', known: 'measured' } }))
+    expect(await applicator.post(address()).send({ ...input, lines })).toMatchObject({ status: 422, body: { errors: [{ path: 'lines.0.amount.unit' }] } })
   })
 
   it('records an applicator’s own work only', async () => {
@@ -140,6 +154,25 @@ describe('signing', () => {
     const { id: _id, ...content } = buildRecord(things)
     const response = await applicator.put(address(`/${id}`)).send({ ...content, revision: 2 })
     expect(response).toMatchObject({ status: 409, body: { code: 'record.signed' } })
+  })
+
+  it('is of the text that the signer saw', async () => {
+    const input = buildRecord(things)
+    await applicator.post(address()).send(input).expect(201)
+    const { id, ...content } = input
+    await manager.put(address(`/${id}`)).send({ ...content, purpose: 'Changed meanwhile', revision: 1 }).expect(200)
+    const blind = await applicator.post(address(`/${id}/sign`)).send({ password: PASSWORD, revision: 1 })
+    expect(blind).toMatchObject({ status: 409, body: { code: 'stale', current: { purpose: 'Changed meanwhile' } } })
+    await applicator.post(address(`/${id}/sign`)).send({ password: PASSWORD, revision: 2 }).expect(200)
+  })
+
+  it('asks why when more went on the land than the mix makes', async () => {
+    const input = buildRecord(things)
+    const lines = input.lines.map((line) => ({ ...line, amount: { value: '500', unit: 'L', known: 'measured' } }))
+    await applicator.post(address()).send({ ...input, lines }).expect(201)
+    expect(await sign(applicator, input.id)).toMatchObject({ status: 422, body: { acknowledgeable: true, errors: [{ code: 'total.inconsistent', params: { applied: 500, total: 420 } }] } })
+    const done = await sign(applicator, input.id, [{ code: 'total.inconsistent', reason: 'Topped up with rain' }, { code: 'nonsense', reason: 'Not asked for' }])
+    expect(done.body.acknowledged).toEqual([{ code: 'total.inconsistent', reason: 'Topped up with rain' }])
   })
 
   it('asks for everything that happened', async () => {
@@ -205,7 +238,7 @@ describe('the log and the lots under twenty hands', () => {
       ids.push(input.id)
     }
     const results = await Promise.allSettled(ids.map((id) =>
-      house.services.database.inFarm(actor, (tx) => sealRecord(house.services, tx, actor, id, []))))
+      house.services.database.inFarm(actor, (tx) => sealRecord(house.services, tx, actor, id, { acknowledged: [] }))))
     const kept = results.flatMap((result) => (result.status === 'fulfilled' ? [result.value] : []))
     expect(kept).toHaveLength(10)
     expect(kept.map(({ seq }) => seq).sort((a, b) => Number(a) - Number(b))).toEqual([1, 2, 3, 4, 5, 6, 7, 8, 9, 10])
@@ -277,6 +310,8 @@ describe('a lot', () => {
     const response = await manager.post(`/api/farms/${farm.id}/lots/${lot.id}/count`).send(counted)
     expect(response.body).toMatchObject({ left: { value: '95', unit: 'L' }, revision: 2 })
     expect((await manager.post(`/api/farms/${farm.id}/lots/${lot.id}/count`).send(counted)).body).toMatchObject({ revision: 2 })
+    const other = await manager.post(`/api/farms/${farm.id}/lots/${lot.id}/count`).send({ ...counted, left: { value: '1', unit: 'L' } })
+    expect(other).toMatchObject({ status: 422, body: { errors: [{ code: 'idempotency.mismatch' }] } })
     const late = await manager.post(`/api/farms/${farm.id}/lots/${lot.id}/count`).send({ ...counted, id: uuidV7() })
     expect(late).toMatchObject({ status: 409, body: { code: 'stale', current: { revision: 2 } } })
   })

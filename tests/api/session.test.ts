@@ -71,6 +71,8 @@ describe('signing in', () => {
     const agent = await house.as(other.accounts.manager)
     await house.services.database.inHouse((manager) => manager.query('UPDATE accounts SET deactivated_at = now() WHERE id = $1', [other.accounts.manager.id]))
     expect((await agent.get('/api/session')).status).toBe(401)
+    expect((await agent.get(`/api/farms/${other.id}/records`)).status).toBe(401)
+    expect((await agent.post('/api/farms').send({})).status).toBe(401)
   })
 
   it('leaves the farm at the next request when the person is no longer active on it', async () => {
@@ -102,7 +104,7 @@ describe('guessing', () => {
     const { port } = server.address() as AddressInfo
     const from = (localAddress: string, password: string, cookie = '') => post({ port, localAddress, email, password, cookie })
     const known = await from('127.0.0.1', PASSWORD)
-    const device = known.cookies.find((cookie) => cookie.startsWith('drenchleaf.device=')) ?? ''
+    const device = known.cookies.find((cookie) => cookie.startsWith('drenchleaf.device.')) ?? ''
     const guesses = []
     for (let guess = 0; guess < 7; guess += 1) guesses.push(await from('127.0.0.2', `guess number ${guess}`))
     expect(guesses.map(({ status }) => status)).toEqual([401, 401, 401, 401, 401, 429, 429])
@@ -111,6 +113,24 @@ describe('guessing', () => {
     expect((await from('127.0.0.3', PASSWORD)).status).toBe(200)
     expect((await from('127.0.0.2', PASSWORD, device)).status).toBe(200)
     server.close()
+    await guarded.close()
+  })
+})
+
+describe('signing', () => {
+  it('is stopped by nobody else’s guesses, and by ten wrong passwords of its own session', async () => {
+    const guarded = await openHouse()
+    const guardedFarm = await guarded.makeFarm()
+    const worker = await guarded.as(guardedFarm.accounts.applicator)
+    const { default: request } = await import('supertest')
+    for (let guess = 0; guess < 25; guess += 1) {
+      await request(guarded.app).post('/api/session').set('X-Requested-With', 'drenchleaf').send({ email: `x${guess}@farm.example`, password: 'a guess' })
+    }
+    const address = `/api/farms/${guardedFarm.id}/records/01900000-0000-7000-8000-000000000001/sign`
+    expect((await worker.post(address).send({ password: PASSWORD })).status).toBe(404)
+    const wrong = []
+    for (let slip = 0; slip < 11; slip += 1) wrong.push((await worker.post(address).send({ password: 'a slip' })).status)
+    expect(wrong).toEqual([...Array<number>(10).fill(422), 429])
     await guarded.close()
   })
 })

@@ -59,6 +59,25 @@ describe('evidence', () => {
   })
 })
 
+describe('a signed record', () => {
+  it('cannot be unsigned or rewritten by the app role, nor its log wound back', async () => {
+    const owner = await house.as(mine.accounts.owner)
+    const input = buildRecord(things)
+    await owner.post(`/api/farms/${mine.id}/records`).send(input).expect(201)
+    await owner.post(`/api/farms/${mine.id}/records/${input.id}/sign`).send({ password: PASSWORD }).expect(200)
+    const attempts = [
+      "UPDATE application_records SET state = 'draft', season = NULL, number = NULL, seq = NULL, digest = NULL, signed_at = NULL, signed_by_id = NULL",
+      "UPDATE application_records SET content = '{}'",
+      "UPDATE application_records SET digest = repeat('0', 64)",
+      'UPDATE farm_heads SET last_seq = 0',
+    ]
+    for (const attempt of attempts) {
+      const change = house.services.database.inFarm({ farmId: mine.id, seasons: null }, (manager) => manager.query(`${attempt} WHERE farm_id = $1`, [mine.id]))
+      await expect(change).rejects.toMatchObject({ code: '42501' })
+    }
+  })
+})
+
 describe('another farm', () => {
   it('answers like what does not exist, save the request id', async () => {
     const manager = await house.as(mine.accounts.manager)

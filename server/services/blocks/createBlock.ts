@@ -2,7 +2,7 @@ import type { Acknowledged } from '../../../shared/contract/common.ts'
 import type { Block as BlockAnswer, CreateBlock } from '../../../shared/contract/block.ts'
 import { checkBoundary } from '../../../shared/geo/checkBoundary.ts'
 import { distanceKm } from '../../../shared/geo/distanceKm.ts'
-import { findOverlaps, type NamedBoundary } from '../../../shared/geo/findOverlaps.ts'
+import { findOverlaps, findTooFine, type NamedBoundary } from '../../../shared/geo/findOverlaps.ts'
 import type { Boundary } from '../../../shared/geo/geometryTypes.ts'
 import { FAR_KM } from '../../../shared/geo/isFarFrom.ts'
 import { looksSwapped } from '../../../shared/geo/looksSwapped.ts'
@@ -11,7 +11,7 @@ import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
 import { invalid, unlikely, type FieldError } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
-import { digestOf, insertOnce } from '../insertOnce.ts'
+import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { presentBlock } from './presentBlock.ts'
 
@@ -29,9 +29,12 @@ export async function createBlock(services: Services, actor: FarmActor, input: C
     throw invalid(findings.map(({ code, params, path }) => ({ path: path ? `geometry.${path}` : 'geometry', code, params })))
   }
   const measure = measurePolygon(geometry)
+  const creationDigest = digestOf({ ...input, geometry })
   return services.database.inFarm(actor, async (manager) => {
+    const repeated = await findRepeat(manager, Block, { farmId: actor.farmId, id: input.id, creationDigest })
+    if (repeated) return { made: false, block: presentBlock(repeated) }
     const others = await manager.find(Block, { select: { id: true, code: true, geometry: true }, where: { farmId: actor.farmId } })
-    assertLikely(geometry, others.filter((other) => other.id !== input.id), input.acknowledged)
+    assertLikely(geometry, others, input.acknowledged)
     const row: Block = {
       farmId: actor.farmId,
       id: input.id,
@@ -44,19 +47,18 @@ export async function createBlock(services: Services, actor: FarmActor, input: C
       version: 1,
       revision: 1,
       acknowledged: input.acknowledged,
-      creationDigest: digestOf(input),
+      creationDigest,
       createdAt: services.clock.now(),
     }
-    const made = await insertOnce(manager, Block, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
+    const { made, stored } = await insertOnce(manager, Block, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
     if (made) await appendJournal(services, manager, actor, { action: 'block.created', subjectId: input.id, detail: { code: input.code } })
-    const stored = made ? row : await manager.findOneByOrFail(Block, { farmId: actor.farmId, id: input.id })
     return { made, block: presentBlock(stored) }
   })
 }
 
 function assertLikely(geometry: Boundary, others: NamedBoundary[], acknowledged: Acknowledged): void {
   const passed = new Set(acknowledged.map(({ code }) => code))
-  const doubts = [...findOverlapDoubts(geometry, others), ...findFarDoubts(geometry, others)].filter(({ code }) => !passed.has(code))
+  const doubts = [...findOverlapDoubts(geometry, others), ...findFineDoubts(geometry, others), ...findFarDoubts(geometry, others)].filter(({ code }) => !passed.has(code))
   if (doubts.length > 0) throw unlikely(doubts)
 }
 
@@ -68,6 +70,10 @@ function findOverlapDoubts(geometry: Boundary, others: NamedBoundary[]): FieldEr
       code: 'geometry.overlap',
       params: { code, areaHa: Number((areaM2 / HECTARE_M2).toFixed(2)) },
     }))
+}
+
+function findFineDoubts(geometry: Boundary, others: NamedBoundary[]): FieldError[] {
+  return findTooFine(geometry, others).map(({ code }) => ({ path: 'geometry', code: 'geometry.overlap_unknown', params: { code } }))
 }
 
 function findFarDoubts(geometry: Boundary, others: NamedBoundary[]): FieldError[] {

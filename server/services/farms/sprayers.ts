@@ -16,9 +16,8 @@ export function listSprayers(services: Services, actor: FarmActor, page: { limit
 export async function createSprayer(services: Services, actor: FarmActor, input: z.output<typeof createSprayerSchema>): Promise<{ made: boolean; sprayer: SprayerAnswer }> {
   return services.database.inFarm(actor, async (manager) => {
     const row: Sprayer = { ...input, farmId: actor.farmId, revision: 1, creationDigest: digestOf(input), createdAt: services.clock.now() }
-    const made = await insertOnce(manager, Sprayer, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
+    const { made, stored } = await insertOnce(manager, Sprayer, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
     if (made) await appendJournal(services, manager, actor, { action: 'sprayer.created', subjectId: input.id, detail: { code: input.code } })
-    const stored = made ? row : await manager.findOneByOrFail(Sprayer, { farmId: actor.farmId, id: input.id })
     return { made, sprayer: present(stored) }
   })
 }

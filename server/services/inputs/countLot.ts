@@ -23,7 +23,7 @@ export async function countLot(services: Services, actor: FarmActor, lotId: stri
     const material = await manager.findOneByOrFail(Material, { farmId: actor.farmId, id: lot.materialId })
     const repeated = await manager.findOneBy(LotEntry, { farmId: actor.farmId, id: input.id })
     if (repeated) {
-      if (repeated.lotId !== lotId || repeated.kind !== 'counted') throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
+      if (!isSameCount(repeated, lot, input)) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
       return presentLot(lot, material.name)
     }
     if (lot.revision !== input.revision) throw stale(presentLot(lot, material.name))
@@ -40,4 +40,9 @@ export async function countLot(services: Services, actor: FarmActor, lotId: stri
     await appendJournal(services, manager, actor, { action: 'lot.counted', subjectId: lotId, detail: { code: lot.code, left } })
     return presentLot(counted, material.name)
   })
+}
+
+function isSameCount(entry: LotEntry, lot: Lot, { left, reason }: CountLot): boolean {
+  if (entry.lotId !== lot.id || entry.kind !== 'counted' || entry.reason !== reason) return false
+  return dimensionOf(left.unit) === dimensionOf(lot.unit) && Number(entry.leftAfter) === Number(convertQuantity(left, lot.unit))
 }

@@ -16,9 +16,8 @@ export async function createMaterial(services: Services, actor: FarmActor, input
       creationDigest: digestOf(input),
       createdAt: services.clock.now(),
     }
-    const made = await insertOnce(manager, Material, row, { path: 'name', code: 'name.taken', params: { name: input.name } })
+    const { made, stored } = await insertOnce(manager, Material, row, { path: 'name', code: 'name.taken', params: { name: input.name } })
     if (made) await appendJournal(services, manager, actor, { action: 'material.created', subjectId: input.id, detail: { name: input.name } })
-    const stored = made ? row : await manager.findOneByOrFail(Material, { farmId: actor.farmId, id: input.id })
     return { made, material: presentMaterial(stored) }
   })
 }

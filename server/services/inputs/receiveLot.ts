@@ -1,6 +1,7 @@
 import { v7 as uuidV7 } from 'uuid'
 import type { EntityManager } from 'typeorm'
 import type { CreateLot, Lot as LotAnswer } from '../../../shared/contract/input.ts'
+import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import { Lot } from '../../entities/Lot.ts'
@@ -12,9 +13,13 @@ import { digestOf, insertOnce } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { presentLot } from './presentInputs.ts'
 
-/** Receives a lot of a material; its first ledger entry says how much. @returns the lot, and whether this call made it. */
+/**
+ * Receives a lot of a material; its first ledger entry says how much. @returns the lot, and whether this call made it.
+ * @throws {AppError} `time.future` for a day that has not come on the farm, `material.unknown`, a unit that does not fit.
+ */
 export async function receiveLot(services: Services, actor: FarmActor, input: CreateLot): Promise<{ made: boolean; lot: LotAnswer }> {
   return services.database.inFarm(actor, async (manager) => {
+    assertArrived(services, actor, input)
     const material = await findFittingMaterial(manager, actor, input)
     const { quantity, ...facts } = input
     const row: Lot = {
@@ -27,7 +32,7 @@ export async function receiveLot(services: Services, actor: FarmActor, input: Cr
       creationDigest: digestOf(input),
       createdAt: services.clock.now(),
     }
-    const made = await insertOnce(manager, Lot, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
+    const { made, stored } = await insertOnce(manager, Lot, row, { path: 'code', code: 'code.taken', params: { code: input.code } })
     if (made) {
       await manager.insert(LotEntry, {
         farmId: actor.farmId, id: uuidV7(), lotId: input.id, kind: 'received', amount: quantity.value, leftAfter: quantity.value,
@@ -35,9 +40,13 @@ export async function receiveLot(services: Services, actor: FarmActor, input: Cr
       })
       await appendJournal(services, manager, actor, { action: 'lot.received', subjectId: input.id, detail: { code: input.code } })
     }
-    const stored = made ? row : await manager.findOneByOrFail(Lot, { farmId: actor.farmId, id: input.id })
     return { made, lot: presentLot(stored, material.name) }
   })
+}
+
+function assertArrived({ clock }: Services, { zone }: FarmActor, { receivedOn }: CreateLot): void {
+  const today = civilDateIn(zone, clock.now().toISOString())
+  if (receivedOn > today) throw invalid([{ path: 'receivedOn', code: 'time.future' }])
 }
 
 async function findFittingMaterial(manager: EntityManager, actor: FarmActor, input: CreateLot): Promise<Material> {

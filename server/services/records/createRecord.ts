@@ -2,7 +2,7 @@ import type { ApplicationRecord as RecordAnswer, CreateRecord } from '../../../s
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { appendJournal } from '../appendJournal.ts'
-import { digestOf, insertOnce } from '../insertOnce.ts'
+import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { draftRecord } from './draftRecord.ts'
 import { presentRecord } from './presentRecord.ts'
@@ -14,6 +14,8 @@ export async function createRecord(services: Services, actor: FarmActor, input: 
   return services.database.inFarm(actor, async (manager) => {
     const { id, deviceAt, ...content } = input
     const creationDigest = digestOf({ ...content, id })
+    const repeated = await findRepeat(manager, ApplicationRecord, { farmId: actor.farmId, id, creationDigest })
+    if (repeated) return { made: false, record: await presentRecord(manager, repeated) }
     const row: ApplicationRecord = {
       ...(await draftRecord(manager, actor, content, now)),
       farmId: actor.farmId,
@@ -32,10 +34,8 @@ export async function createRecord(services: Services, actor: FarmActor, input: 
       signedAt: null,
       creationDigest,
     }
-    const made = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
-    if (!made) {
-      return { made, record: await presentRecord(manager, await manager.findOneByOrFail(ApplicationRecord, { farmId: actor.farmId, id })) }
-    }
+    const { made, stored } = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
+    if (!made) return { made, record: await presentRecord(manager, stored) }
     await storeProjections(manager, row, false)
     await appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id })
     return { made, record: await presentRecord(manager, row) }

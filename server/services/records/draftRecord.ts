@@ -13,11 +13,13 @@ import { loadRecordGround } from './loadRecordGround.ts'
 export type DraftColumns = Pick<ApplicationRecord, 'state' | 'content' | 'computed' | 'checks' | 'registerRow' | 'sortAt' | 'doneById'>
 
 /** Judges an unsigned record. @throws {AppError} invalid-input with everything impossible in it. */
-export async function draftRecord(manager: EntityManager, actor: FarmActor, content: RecordContent, now: Date): Promise<DraftColumns> {
-  const ground = await loadRecordGround(manager, actor, content)
-  const faults = findRecordFaults(content, ground, now)
+export async function draftRecord(manager: EntityManager, actor: FarmActor, written: RecordContent, now: Date): Promise<DraftColumns> {
+  const ground = await loadRecordGround(manager, actor, written)
+  const faults = findRecordFaults(written, ground, now)
   if (faults.length > 0) throw invalid(faults)
-  const doer = await findDoer(manager, actor, content)
+  const doer = await findDoer(manager, actor, written)
+  // From here on the doer is named: who writes the draft anew later does not become the doer.
+  const content = { ...written, doneById: doer.id }
   const { sheet, computed, checks } = judgeRecord(content, ground, actor.zone, now)
   const startedAt = firstStart(content)
   return {

@@ -9,7 +9,7 @@ const LONGEST_LINE_MS = 24 * 3_600_000
 /** What is impossible in a record, at whatever stage; nothing that is merely not written yet. */
 export function findRecordFaults(content: RecordContent, ground: RecordGround, now: Date): FieldError[] {
   return [
-    ...content.lines.flatMap((line, index) => findTimeFaults(line, `lines.${index}`, now)),
+    ...content.lines.flatMap((line, index) => [...findTimeFaults(line, `lines.${index}`, now), ...findAmountFaults(line, `lines.${index}`)]),
     ...findRepeatedBlocks(content),
     ...content.components.flatMap((_, index) => findComponentFaults(content, ground, index)),
   ]
@@ -28,6 +28,11 @@ function findTimeFaults({ startedAt, endedAt }: RecordContent['lines'][number], 
   }
   if (lengthMs > LONGEST_LINE_MS) faults.push({ path: `${path}.endedAt`, code: 'time.too_long' })
   return faults
+}
+
+/** Sprays and drenches are measured out by volume. */
+function findAmountFaults({ amount }: RecordContent['lines'][number], path: string): FieldError[] {
+  return amount !== null && dimensionOf(amount.unit) !== 'volume' ? [{ path: `${path}.amount.unit`, code: 'unit.not_allowed' }] : []
 }
 
 function findRepeatedBlocks({ lines }: RecordContent): FieldError[] {

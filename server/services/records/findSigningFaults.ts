@@ -2,11 +2,14 @@ import type { Acknowledged } from '../../../shared/contract/common.ts'
 import type { Check, RecordContent } from '../../../shared/contract/record.ts'
 import { lastEnd } from '../../../shared/records/registerRow.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
+import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
 import type { FieldError } from '../../errors.ts'
 
 const DAY_MS = 86_400_000
 /** A record entered later than this needs a reason. */
 const LATE_DAYS = 30
+/** More than this part beyond the mix cannot have come out of it. */
+const MOST_OVER = 0.02
 
 /** What a record lacks before it can be signed: what happened must be said whole. */
 export function findMissing(content: RecordContent, sheet: RecordSheet): FieldError[] {
@@ -25,10 +28,15 @@ export function findMissing(content: RecordContent, sheet: RecordSheet): FieldEr
 }
 
 /**
- * What is unlikely about signing this: each stop, and a very late entry. A reason for `record.stop` covers every
+ * What is unlikely about signing this: each stop, more on the land than was in the mix, and a very late entry. A reason for `record.stop` covers every
  * stop, a reason for a check's own code that one.
  */
-export function findUnlikely(content: RecordContent, checks: Check[], acknowledged: Acknowledged, now: Date): FieldError[] {
+export function findUnlikely(
+  content: RecordContent,
+  { sheet, checks }: { sheet: RecordSheet; checks: Check[] },
+  acknowledged: Acknowledged,
+  now: Date,
+): FieldError[] {
   const given = new Set(acknowledged.map(({ code }) => code))
   const stops = checks
     // A lot that is short is asked for by the draw itself, with its figures.
@@ -37,5 +45,10 @@ export function findUnlikely(content: RecordContent, checks: Check[], acknowledg
   const end = lastEnd(content)
   const days = end === null ? 0 : Math.floor((now.getTime() - Date.parse(end)) / DAY_MS)
   const late = days > LATE_DAYS && !given.has('record.late') ? [{ path: 'lines', code: 'record.late', params: { days } }] : []
-  return [...stops, ...late]
+  return [...stops, ...findTooMuch(sheet).filter(({ code }) => !given.has(code)), ...late]
+}
+
+function findTooMuch({ appliedL, totalL }: RecordSheet): FieldError[] {
+  if (appliedL === null || totalL === null || Number(appliedL) <= totalL * (1 + MOST_OVER)) return []
+  return [{ path: 'lines', code: 'total.inconsistent', params: { applied: Number(roundDecimal(appliedL, 1)), total: Number(roundDecimal(String(totalL), 1)) } }]
 }

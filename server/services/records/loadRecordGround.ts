@@ -35,7 +35,13 @@ export async function loadRecordGround(
     ...(forSigning && { lock: { mode: 'pessimistic_write' as const } }),
   })
   const sprayer = content.sprayerId === null ? null : await manager.findOneBy(Sprayer, { farmId, id: content.sprayerId })
-  const ground = { blocks, materials, lots, sprayer }
+  const inOrder = <Thing extends { id: string }>(things: Thing[], ids: (string | null)[]) => things.sort((a, b) => ids.indexOf(a.id) - ids.indexOf(b.id))
+  const ground = {
+    blocks: inOrder(blocks, content.lines.map(({ blockId }) => blockId)),
+    materials: inOrder(materials, content.components.map(({ materialId }) => materialId)),
+    lots: inOrder(lots, content.components.map(({ lotId }) => lotId)),
+    sprayer,
+  }
   const errors = findUnknown(content, ground)
   if (errors.length > 0) throw invalid(errors)
   return ground

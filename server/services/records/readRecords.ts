@@ -1,3 +1,4 @@
+import { z } from 'zod'
 import type { ApplicationRecord as RecordAnswer, RegisterRow } from '../../../shared/contract/record.ts'
 import { signedRecordSchema, type SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import type { FarmActor } from '../../database/actor.ts'
@@ -7,6 +8,9 @@ import { notFound } from '../../errors.ts'
 import { cutPage, decodeCursor } from '../cursor.ts'
 import type { Services } from '../services.ts'
 import { presentRecord } from './presentRecord.ts'
+
+/** Times as this list writes them, in years that the database reads. */
+const timeKey = z.iso.datetime({ precision: 3, abort: true }).refine((text) => /^(?:19|2\d)/.test(text))
 
 interface ListedRow {
   id: string
@@ -21,7 +25,7 @@ export async function listRecords(
   actor: FarmActor,
   page: { limit: number; cursor?: string | undefined; block?: string | undefined; state?: RegisterRow['state'] | undefined },
 ): Promise<{ items: RegisterRow[]; next: string | null }> {
-  const after = decodeCursor(page.cursor)
+  const after = decodeCursor(page.cursor, timeKey)
   const params: unknown[] = [actor.farmId, page.limit + 1]
   const add = (value: unknown) => `$${params.push(value)}`
   const onBlock = page.block === undefined ? '' : `JOIN record_lines l ON l.farm_id = r.farm_id AND l.record_id = r.id AND l.block_id = ${add(page.block)}`

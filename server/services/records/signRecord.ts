@@ -8,7 +8,9 @@ import { sealRecord } from './sealRecord.ts'
 /** Signs a record with the signer's password; see `sealRecord`. @throws {AppError} `session.wrong_password`. */
 export async function signRecord(services: Services, actor: FarmActor, id: string, input: SignRecord): Promise<RecordAnswer> {
   if (!(await isPasswordOf(services, actor.accountId, input.password))) {
-    throw new AppError('invalid-input', 'session.wrong_password', { errors: [{ path: 'password', code: 'session.wrong_password' }] })
+    throw new AppError('invalid-input', 'session.wrong_password', {
+      countsAsGuess: true, errors: [{ path: 'password', code: 'session.wrong_password' }],
+    })
   }
-  return services.database.inFarm(actor, (manager) => sealRecord(services, manager, actor, id, input.acknowledged))
+  return services.database.inFarm(actor, (manager) => sealRecord(services, manager, actor, id, input))
 }

@@ -20,7 +20,9 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     const record = await manager.findOne(ApplicationRecord, { where: { farmId: actor.farmId, id }, lock: { mode: 'pessimistic_write' } })
     if (!record) throw notFound()
     assertMayWrite(actor, record)
-    const { revision, deviceAt, ...content } = input
+    const { revision, deviceAt, ...sent } = input
+    // Nobody named means nobody changed: the doer stays who it was.
+    const content = { ...sent, doneById: sent.doneById ?? record.doneById }
     if (record.state === 'signed' || record.state === 'withdrawn') throw new AppError('conflict', 'record.signed', { current: await presentRecord(manager, record) })
     if (record.revision !== revision) {
       const current = await presentRecord(manager, record)

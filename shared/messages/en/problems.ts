@@ -2,6 +2,8 @@
 export const problems = {
   bad_request: 'This request could not be read.',
   unreadable: 'This request could not be read. Send JSON in UTF-8.',
+  json_too_deep: 'There are too many lists and objects inside each other: at most 64.',
+  json_duplicate_key: 'One object in it has the same key twice. Send each key once.',
   unauthenticated: 'Sign in first.',
   forbidden: 'Your role on this farm does not do this. Ask its owner or manager.',
   foreign_request: 'This request did not come from the register’s own pages. Open it there.',
@@ -30,11 +32,13 @@ export const problems = {
     control: 'There is a character in it that cannot be shown. Type it again.',
     bidi_control: 'There is a hidden direction mark in it. Type it again.',
     line_break: 'Keep this on one line.',
+    too_many_lines: 'There are too many lines in it: at most 200 line breaks.',
   },
   number: {
     format: 'Give a plain number, such as 12.5, with at most 4 decimals.',
     above_zero: 'Give a number above 0.',
     percent: 'Give a percentage from 0 to 100.',
+    range: 'This is beyond what is measured: air −60 to 60 °C, wind 0 to 75 m/s.',
   },
   unit: {
     not_allowed: 'This unit does not fit here.',
@@ -45,6 +49,7 @@ export const problems = {
   id: { format: 'Give a UUID.' },
   cursor: { invalid: 'This list cannot be continued from there. Start it again.' },
   idempotency: { mismatch: 'This id was used for something else. Make a new one.' },
+  label: { most_below_least: 'The most that is allowed lies below the least.' },
   date: { invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.' },
   time: {
     zone_needed: 'Give the time with its offset, such as 2026-06-16T06:50:00-07:00.',
@@ -71,6 +76,7 @@ export const problems = {
   geometry: {
     type: 'A block is a polygon.',
     out_of_range: 'A point lies outside the globe: longitude {lon}, latitude {lat}.',
+    maybe_swapped: 'A point lies outside the globe. Latitude and longitude look swapped.',
     degrees_needed: 'These look like metres. Give longitude and latitude in degrees.',
     crs: 'Leave the reference system out: longitude and latitude on WGS84 are meant.',
     coordinates: 'Each point is longitude, then latitude.',
@@ -86,6 +92,7 @@ export const problems = {
     crosses_antimeridian: 'The outline runs across longitude 180. Cut it there into two parts.',
     area_range: 'A block has between 1 m² and 50 000 ha; this is {areaM2} m².',
     overlap: '{areaHa} ha of it lie inside {code}.',
+    overlap_unknown: 'It is laced so finely with {code} that the ground they share cannot be worked out.',
     far_from_farm: 'It lies {km} km from the rest of the farm.',
     swapped: 'It lies {km} km from the rest of the farm. Are latitude and longitude swapped?',
   },
@@ -99,6 +106,7 @@ export const problems = {
     dimension: 'Lot {code} is counted in {unit}; this amount cannot be taken from it.',
     expires_before: 'The use-by date lies before the day it was received.',
   },
+  total: { inconsistent: '{applied} L went on the land, and the mix makes {total} L. Correct one of them, or say why.' },
   sprayer: { unknown: 'There is no such sprayer on this farm.', needed: 'An amount per tank needs the sprayer.' },
   person: { unknown: 'There is no such person on this farm.', only_yourself: 'Record your own work; a manager records for others.' },
   record: {

@@ -2,6 +2,8 @@
 export const problems = {
   bad_request: 'No se pudo leer esta petición.',
   unreadable: 'No se pudo leer esta petición. Envíe JSON en UTF-8.',
+  json_too_deep: 'Hay demasiadas listas y objetos unos dentro de otros: 64 como máximo.',
+  json_duplicate_key: 'Un objeto repite la misma clave. Envíe cada clave una sola vez.',
   unauthenticated: 'Primero abra su sesión.',
   forbidden: 'Su función en esta finca no permite esto. Pídalo al titular o a un responsable.',
   foreign_request: 'Esta petición no salió de las páginas del libro de registros. Ábralo allí.',
@@ -30,11 +32,13 @@ export const problems = {
     control: 'Contiene un carácter que no se puede mostrar. Escríbalo de nuevo.',
     bidi_control: 'Contiene una marca de dirección oculta. Escríbalo de nuevo.',
     line_break: 'Déjelo en una sola línea.',
+    too_many_lines: 'Tiene demasiadas líneas: 200 saltos de línea como máximo.',
   },
   number: {
     format: 'Indique un número sencillo, como 12.5, con 4 decimales como máximo.',
     above_zero: 'Indique un número mayor que 0.',
     percent: 'Indique un porcentaje de 0 a 100.',
+    range: 'Esto queda fuera de lo que se mide: aire de −60 a 60 °C, viento de 0 a 75 m/s.',
   },
   unit: {
     not_allowed: 'Esta unidad no sirve aquí.',
@@ -45,6 +49,7 @@ export const problems = {
   id: { format: 'Indique un UUID.' },
   cursor: { invalid: 'La lista no puede seguir desde ahí. Empiécela de nuevo.' },
   idempotency: { mismatch: 'Este identificador ya se usó para otra cosa. Cree uno nuevo.' },
+  label: { most_below_least: 'El máximo permitido queda por debajo del mínimo.' },
   date: { invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.' },
   time: {
     zone_needed: 'Indique la hora con su desfase, como 2026-06-16T06:50:00-07:00.',
@@ -71,6 +76,7 @@ export const problems = {
   geometry: {
     type: 'Una parcela es un polígono.',
     out_of_range: 'Un punto queda fuera del globo: longitud {lon}, latitud {lat}.',
+    maybe_swapped: 'Un punto queda fuera del globo. Latitud y longitud parecen cambiadas.',
     degrees_needed: 'Parecen metros. Indique longitud y latitud en grados.',
     crs: 'Quite el sistema de referencia: se entiende longitud y latitud en WGS84.',
     coordinates: 'Cada punto es longitud y luego latitud.',
@@ -86,6 +92,7 @@ export const problems = {
     crosses_antimeridian: 'El contorno cruza la longitud 180. Córtelo allí en dos partes.',
     area_range: 'Una parcela tiene entre 1 m² y 50 000 ha; esta tiene {areaM2} m².',
     overlap: '{areaHa} ha quedan dentro de {code}.',
+    overlap_unknown: 'Se entrelaza tan finamente con {code} que no se puede calcular el terreno que comparten.',
     far_from_farm: 'Está a {km} km del resto de la finca.',
     swapped: 'Está a {km} km del resto de la finca. ¿Están cambiadas latitud y longitud?',
   },
@@ -99,6 +106,7 @@ export const problems = {
     dimension: 'El lote {code} se cuenta en {unit}; esta cantidad no se puede sacar de él.',
     expires_before: 'La fecha límite es anterior al día en que se recibió.',
   },
+  total: { inconsistent: 'Se aplicaron {applied} L, y la mezcla da {total} L. Corrija uno de los dos, o diga por qué.' },
   sprayer: { unknown: 'Ese pulverizador no existe en esta finca.', needed: 'Una cantidad por tanque necesita el pulverizador.' },
   person: { unknown: 'Esa persona no existe en esta finca.', only_yourself: 'Anote su propio trabajo; el de otros lo anota un responsable.' },
   record: {

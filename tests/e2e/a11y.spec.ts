@@ -1,0 +1,88 @@
+import type { Page } from '@playwright/test'
+import { signInTo } from './support/demoFarm.ts'
+import { findFaults } from './support/axe.ts'
+import { RecordForm } from './support/recordForm.ts'
+import { listScreens, openScreen } from './support/screens.ts'
+import { expect, test } from './support/test.ts'
+import { makeThings } from './support/things.ts'
+import { say } from './support/words.ts'
+
+const WIDE = [{ width: 1440, height: 900 }, { width: 1024, height: 768 }]
+const PHONE = { width: 390, height: 844 }
+
+async function setLight(page: Page, light: 'day' | 'dawn'): Promise<void> {
+  await page.evaluate((chosen) => { document.documentElement.dataset['light'] = chosen }, light)
+}
+
+test('axe finds nothing on any screen, by day and at dawn', async ({ page, context, isPhone, manager }) => {
+  test.slow()
+  const found: string[] = []
+  for (const { name, who, path } of await listScreens(manager)) {
+    if (who !== null) await signInTo(context.request, who)
+    await openScreen(page, path)
+    for (const size of isPhone ? [PHONE] : WIDE) {
+      await page.setViewportSize(size)
+      const note = (fault: string): void => { found.push(`${name}, ${size.width}: ${fault}`) }
+      for (const fault of await findFaults(page)) note(fault)
+      await setLight(page, 'dawn')
+      for (const fault of await findFaults(page, 'color-contrast')) note(`dawn: ${fault}`)
+      await setLight(page, 'day')
+    }
+  }
+  expect(found).toEqual([])
+})
+
+test('axe finds nothing in a record being written, nor in the dialogs', async ({ page, isPhone, signInAs, manager }) => {
+  const things = await makeThings(manager)
+  await signInAs('manager')
+  const form = new RecordForm(page, isPhone)
+  await form.open()
+  await form.fillDrench(things)
+  const found = [...await findFaults(page)]
+  await form.checks()
+  found.push(...await findFaults(page))
+  await form.closeChecks()
+  await form.step(2).click()
+  await expect(form.password).toBeVisible()
+  found.push(...await findFaults(page))
+  for (const [path, button, dialog] of [
+    ['/inputs', 'inputs.newMaterial', 'inputs.form.materialTitle'], ['/inputs', 'inputs.receiveLot', 'inputs.form.lotTitle'], ['/farm', 'farm.addSprayer', 'farm.addSprayer'],
+  ] as const) {
+    await openScreen(page, path)
+    await page.getByRole('main').getByRole('button', { name: say(button) }).first().click()
+    await expect(page.getByRole('dialog', { name: say(dialog) })).toBeVisible()
+    found.push(...(await findFaults(page)).map((fault) => `${say(dialog)}: ${fault}`))
+  }
+  expect(found).toEqual([])
+})
+
+test('the keyboard goes everywhere: skip link, F6, J, K, Enter, and shows where it is', async ({ page, isPhone, signInAs }) => {
+  await signInAs('manager')
+  await openScreen(page, '/register')
+  await page.keyboard.press('Tab')
+  const skip = page.getByRole('link', { name: say('frame.skip') })
+  await expect(skip).toBeFocused()
+  await expect(skip).toBeInViewport()
+  await page.keyboard.press('Enter')
+  await expect(page.getByRole('main')).toBeFocused()
+  await page.keyboard.press('Tab')
+  const ring = await page.evaluate(() => {
+    const { outlineStyle, outlineWidth, boxShadow } = getComputedStyle(document.activeElement ?? document.body)
+    return { outlineStyle, outlineWidth: Number.parseFloat(outlineWidth), boxShadow }
+  })
+  expect(ring.boxShadow !== 'none' || (ring.outlineStyle !== 'none' && ring.outlineWidth >= 2)).toBe(true)
+  const parts = isPhone ? ['spine', 'page'] : ['checks', 'spine', 'page']
+  for (const part of parts) {
+    await page.keyboard.press('F6')
+    await expect(page.locator(`[data-part="${part}"]`)).toBeFocused()
+  }
+  if (isPhone) return
+  const chosen = page.locator('tr[aria-current="true"]')
+  const before = await chosen.getAttribute('data-row')
+  await page.keyboard.press('j')
+  await expect(chosen).not.toHaveAttribute('data-row', before ?? '')
+  await page.keyboard.press('k')
+  await expect(chosen).toHaveAttribute('data-row', before ?? '')
+  await page.keyboard.press('Enter')
+  await expect(page).toHaveURL(new RegExp(`${before}$`))
+})
