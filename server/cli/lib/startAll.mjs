@@ -68,7 +68,8 @@ async function installAndBuild(context) {
  */
 async function stayUntilOneEnds({ server, database, isReady, logFile, folder }) {
   const databaseGone = database.ended?.then(() => `The database stopped by itself; its log is ${join(folder, 'postgres.log')}.`)
-  const serverGone = server.ended.then((how) => (isReady ? `The server stopped by itself (${how}); its log is ${logFile}.` : undefined))
+  // A server that ends with a code before it is ready has said itself why; one that a signal ended has not.
+  const serverGone = server.ended.then((how) => (isReady || !how.startsWith('exit ') ? `The server stopped by itself (${how}); its log is ${logFile}.` : undefined))
   const line = await Promise.race([serverGone, ...(databaseGone ? [databaseGone] : [])])
   if (line !== undefined) throw new OneLine(line)
   return 1 // it said itself why it could not start
