@@ -40,7 +40,7 @@ const limitSchema = z
   .regex(/^\d{1,3}$/)
   .transform(Number)
   .pipe(z.number().min(1).max(200))
-  .meta({ type: 'integer', minimum: 1, maximum: 200 })
+  .meta({ type: 'integer', minimum: 1, maximum: 200, default: 50 })
 
 /** Query of every list. */
 export const pageQuerySchema = z.strictObject({

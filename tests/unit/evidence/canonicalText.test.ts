@@ -27,6 +27,13 @@ describe('canonicalText', () => {
     expect(() => canonicalText(value)).toThrow(new RangeError(place))
   })
 
+  it('goes 100 levels deep and says where it stops', () => {
+    const nest = (levels: number): unknown => JSON.parse(`${'['.repeat(levels)}${']'.repeat(levels)}`)
+    expect(canonicalText(nest(100))).toHaveLength(200)
+    expect(() => canonicalText(nest(101))).toThrow(/^\$(\[0\])+.*more than 100 levels deep$/)
+    expect(() => canonicalText(nest(100_000))).toThrow(/100 levels deep/)
+  })
+
   it('takes the same object twice, pairs of surrogates and any key', () => {
     const twice = { b: 1 }
     expect(canonicalText({ y: twice, x: twice, '👩‍🌾': 'Süd' })).toBe('{"x":{"b":1},"y":{"b":1},"👩‍🌾":"Süd"}')

@@ -80,7 +80,7 @@ describe('checkBoundary refuses', () => {
     { what: 'numbers as text', geometry: { type: 'Polygon', coordinates: [[['10', '45'], ['11', '45'], ['11', '46'], ['10', '45']]] }, code: 'geometry.coordinates' },
     { what: 'an infinity', geometry: buildPolygon([[1 / 0, 45], ...square.slice(1)]), code: 'geometry.coordinates' },
     { what: 'a crs member', geometry: { ...buildPolygon(square), crs: { type: 'name' } }, code: 'geometry.crs' },
-    { what: 'latitude 91', geometry: buildPolygon(buildSquare(10, 90.5)), code: 'geometry.out_of_range' },
+    { what: 'a corner beyond the pole', geometry: buildPolygon(buildSquare(10, 89.9995)), code: 'geometry.out_of_range' },
     { what: 'longitude −181', geometry: buildPolygon(buildSquare(-181, 45)), code: 'geometry.out_of_range' },
     { what: 'an open ring', geometry: buildPolygon(square.slice(0, -1)), code: 'geometry.not_closed' },
     { what: 'three positions', geometry: buildPolygon([[10, 45], [10.001, 45], [10, 45]]), code: 'geometry.too_few_points' },
@@ -124,7 +124,9 @@ describe('checkBoundary refuses', () => {
   })
 
   it('swapped axes only where they leave the globe', () => {
-    expect(codes(buildPolygon(swapAxes(buildSquare(-155, 20))))).toEqual(['geometry.out_of_range'])
+    expect(codes(buildPolygon(swapAxes(buildSquare(-155, 20))))).toEqual(['geometry.maybe_swapped'])
+    expect(codes(buildPolygon(buildSquare(-155, 170)))).toEqual(['geometry.out_of_range'])
+    expect(codes(buildPolygon(buildSquare(20, 181)))).toEqual(['geometry.out_of_range'])
     expect(codes(buildPolygon(swapAxes(square)))).toEqual([])
   })
 })

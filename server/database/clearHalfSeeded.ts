@@ -1,4 +1,4 @@
-import { createOwnerSource } from '../database/dataSource.ts'
+import { createOwnerSource } from './dataSource.ts'
 
 /**
  * Empties a demo database whose first filling broke off half way, so that it is filled again from the start. It looks for
