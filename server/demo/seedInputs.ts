@@ -1,5 +1,6 @@
 import { v7 as uuidV7 } from 'uuid'
 import { createMaterialSchema } from '../../shared/contract/input.ts'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { fixedClock } from '../clock.ts'
 import type { FarmActor } from '../database/actor.ts'
 import { createMaterial } from '../services/inputs/createMaterial.ts'
@@ -7,6 +8,7 @@ import { receiveLot } from '../services/inputs/receiveLot.ts'
 import type { Services } from '../services/services.ts'
 import { buildLot } from './buildThings.ts'
 import { DEMO_MATERIALS } from './demoInputs.ts'
+import { DEMO_ZONE } from './demoZone.ts'
 
 const DAY_MS = 86_400_000
 
@@ -25,10 +27,10 @@ export async function seedInputs(services: Services, actor: FarmActor): Promise<
     const received: DemoLots['lots'] = []
     for (const { code, origin, litres, daysAgo, keepsDays, source } of lots) {
       const receivedAt = new Date(now - daysAgo * DAY_MS)
-      const expiresOn = keepsDays === null ? null : new Date(now + (keepsDays - daysAgo) * DAY_MS).toISOString().slice(0, 10)
+      const expiresOn = keepsDays === null ? null : civilDateIn(DEMO_ZONE, new Date(now + (keepsDays - daysAgo) * DAY_MS).toISOString())
       const then = { ...services, clock: fixedClock(receivedAt.toISOString()) }
       const { lot } = await receiveLot(then, actor, buildLot({
-        materialId: made.id, code, origin, source, expiresOn, receivedOn: receivedAt.toISOString().slice(0, 10), quantity: { value: litres, unit: 'L' },
+        materialId: made.id, code, origin, source, expiresOn, receivedOn: civilDateIn(DEMO_ZONE, receivedAt.toISOString()), quantity: { value: litres, unit: 'L' },
       }))
       received.push({ id: lot.id, receivedAt })
     }

@@ -1,4 +1,5 @@
 import { v7 as uuidV7 } from 'uuid'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { createBlock } from '../services/blocks/createBlock.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
 import { createMaterial } from '../services/inputs/createMaterial.ts'
@@ -18,7 +19,7 @@ export async function seedNeighbour(services: Services, accountId: string): Prom
   const { material } = await createMaterial(services, actor, buildMaterial({ name: 'Whey' , kind: 'other' }))
   const endedAt = services.clock.now()
   const startedAt = new Date(endedAt.getTime() - 3_600_000)
-  const { lot } = await receiveLot(services, actor, buildLot({ materialId: material.id, code: 'W-1', receivedOn: startedAt.toISOString().slice(0, 10) }))
+  const { lot } = await receiveLot(services, actor, buildLot({ materialId: material.id, code: 'W-1', receivedOn: civilDateIn(DEMO_ZONE, startedAt.toISOString()) }))
   const { record } = await createRecord(services, actor, buildRecord({
     blockId: block.id, materialId: material.id, lotId: lot.id, startedAt: startedAt.toISOString(), endedAt: endedAt.toISOString(), purpose: 'Soil life',
   }))

@@ -73,7 +73,7 @@ describe('days and times', () => {
     const seeded = await seedThings(house, east)
     const agent = await house.as(east.accounts.manager)
     const lot = buildLot({ materialId: seeded.materialId, code: 'K-2', receivedOn: '2026-06-17' })
-    await agent.post(`/api/farms/${east.id}/lots`).send(lot).expect(201)
+    expect((await agent.post(`/api/farms/${east.id}/lots`).send(lot)).status).toBe(201)
   })
 
   it('takes nine decimals of a second and not thirteen', async () => {

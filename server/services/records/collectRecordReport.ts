@@ -1,5 +1,5 @@
 import { In, type EntityManager } from 'typeorm'
-import { signedRecordSchema, type SignedRecord } from '../../../shared/contract/signedRecord.ts'
+import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import { distanceKm } from '../../../shared/geo/distanceKm.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
 import type { FarmActor } from '../../database/actor.ts'
@@ -11,6 +11,7 @@ import { AppError, notFound } from '../../errors.ts'
 import type { RecordReportData } from '../../reports/recordReportData.ts'
 import { publicAddress } from '../publicAddress.ts'
 import type { Services } from '../services.ts'
+import { readSigned } from './readSigned.ts'
 
 /** Blocks whose middle lies further away are not drawn as neighbours. */
 const NEIGHBOUR_KM = 1
@@ -22,7 +23,7 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
     if (!record) throw notFound()
     if (record.state !== 'signed' && record.state !== 'withdrawn') throw new AppError('conflict', 'record.not_signed')
     const version = await manager.findOneOrFail(RecordVersion, { where: { farmId: actor.farmId, recordId: id }, order: { version: 'DESC' } })
-    const signed = signedRecordSchema.parse(JSON.parse(version.canonicalText))
+    const signed = readSigned(version)
     const checkPage = `${publicAddress(services.config)}/check`
     return {
       signed,

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import type { ApplicationRecord as RecordAnswer, RegisterRow } from '../../../shared/contract/record.ts'
-import { signedRecordSchema, type SignedRecord } from '../../../shared/contract/signedRecord.ts'
+import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { RecordVersion } from '../../entities/RecordVersion.ts'
@@ -8,6 +8,7 @@ import { notFound } from '../../errors.ts'
 import { cutPage, decodeCursor } from '../cursor.ts'
 import type { Services } from '../services.ts'
 import { presentRecord } from './presentRecord.ts'
+import { readSigned } from './readSigned.ts'
 
 /** Times as this list writes them, in years that the database reads. */
 const timeKey = z.iso.datetime({ precision: 3, abort: true }).refine((text) => /^(?:19|2\d)/.test(text))
@@ -68,9 +69,7 @@ export async function listRecordVersions(
     if (!record) throw notFound()
     const versions = await manager.find(RecordVersion, { where: { farmId: actor.farmId, recordId: id }, order: { version: 'ASC' } })
     return {
-      items: versions.map(({ version, digest, canonicalText }) => ({
-        version, digest, canonicalText, signed: signedRecordSchema.parse(JSON.parse(canonicalText)),
-      })),
+      items: versions.map((row) => ({ version: row.version, digest: row.digest, canonicalText: row.canonicalText, signed: readSigned(row) })),
       next: null,
     }
   })

@@ -1,0 +1,33 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { seedDemo } from '../../server/demo/seedDemo.ts'
+import { openHouse, type TestHouse } from '../support/openHouse.ts'
+
+/** Evening at the farm while it is tomorrow in UTC, and the night the clocks go forward. */
+const HOURS = ['2026-06-17T02:00:00.000Z', '2026-03-08T10:30:00.000Z']
+
+describe.each(HOURS)('the demo farm made at %s', (instant) => {
+  let house: TestHouse
+
+  beforeAll(async () => {
+    house = await openHouse()
+    house.setNow(instant)
+  })
+  afterAll(() => house.close())
+
+  it('is whole, and found again instead of made twice', async () => {
+    const made = await seedDemo(house.services, 'a demo password')
+    expect(await seedDemo(house.services, 'a demo password')).toEqual(made)
+    const count = (table: string): Promise<{ count: string }[]> =>
+      house.services.database.inFarm({ farmId: made.farmId, seasons: null }, (manager) => manager.query(`SELECT count(*) FROM ${table}`))
+    expect(await count('blocks')).toEqual([{ count: '24' }])
+    const [records] = await count("application_records WHERE state = 'signed'")
+    expect(Number(records?.count)).toBeGreaterThan(60)
+    const [begun] = await count("application_records WHERE state = 'started'")
+    expect(begun?.count).toBe('1')
+    const [stopped] = await count("application_records WHERE acknowledged <> '[]'")
+    expect(Number(stopped?.count)).toBeGreaterThan(0)
+    const neighbours = await house.services.database.inFarm({ farmId: made.neighbourFarmId, seasons: null }, (manager) =>
+      manager.query("SELECT count(*) FROM application_records WHERE state = 'signed'"))
+    expect(neighbours).toEqual([{ count: '1' }])
+  })
+})
