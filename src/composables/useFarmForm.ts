@@ -4,7 +4,7 @@ import { createFarmSchema } from '../../shared/contract/farm.ts'
 import { useSession } from '../stores/session.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
-import { useBodyErrors } from './useBodyErrors.ts'
+import { useSchemaErrors } from './useSchemaErrors.ts'
 import { useMessages } from './useMessages.ts'
 import { useSubmit } from './useSubmit.ts'
 
@@ -29,7 +29,7 @@ export function useFarmForm(): {
   const session = useSession()
   const { submit } = useSubmit()
   const messages = useMessages()
-  const bodyErrors = useBodyErrors()
+  const bodyErrors = useSchemaErrors()
   const id = newId()
   const draft = reactive<FarmDraft>({ name: '', zone: Intl.DateTimeFormat().resolvedOptions().timeZone, seasonStart: '01-01' })
   const errors = ref<Record<string, string>>({})

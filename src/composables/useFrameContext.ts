@@ -2,6 +2,7 @@ import { computed, ref, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import type { FrameContext } from '../components/page/frameContext.ts'
 import type { SyncState } from '../components/marks/syncState.ts'
+import { civilTimeIn } from '../../shared/time/civilDate.ts'
 import { useOutbox } from '../stores/outbox.ts'
 import { useSession } from '../stores/session.ts'
 import { useFarm } from './useFarm.ts'
@@ -20,7 +21,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
     if (waiting > 0) return { kind: 'needsYou', count: waiting }
     if (sending > 0) return { kind: 'sending', count: sending, of: Math.max(kept, sending) }
     if (kept > 0 || !outbox.online) return { kind: 'kept', count: kept, online: outbox.online }
-    return { kind: 'sent', at: outbox.lastSentAt === null ? null : timeOfDay(outbox.lastSentAt) }
+    return { kind: 'sent', at: outbox.lastSentAt === null ? null : civilTimeIn(farm.data.value?.zone ?? 'UTC', outbox.lastSentAt) }
   })
 
   const frame: FrameContext = {
@@ -39,9 +40,4 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
     openMore: () => { moreOpen.value = true },
   }
   return { frame, keptOpen, moreOpen }
-}
-
-/** "06:41" on this device's clock. */
-function timeOfDay(instant: string): string {
-  return new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }).format(new Date(instant))
 }

@@ -6,7 +6,7 @@ import { ApiError } from '../api/errors.ts'
 import { useSession } from '../stores/session.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
-import { useBodyErrors } from './useBodyErrors.ts'
+import { useSchemaErrors } from './useSchemaErrors.ts'
 import { useMessages } from './useMessages.ts'
 import { useSubmit } from './useSubmit.ts'
 import { useTask } from './useTask.ts'
@@ -41,7 +41,7 @@ export function useInputForm<Kind extends InputKind>(options: InputFormOptions<K
   const session = useSession()
   const { submit } = useSubmit()
   const { problem } = useMessages()
-  const check = useBodyErrors()
+  const check = useSchemaErrors()
   const toast = useToast()
   const id = newId()
   const own = ref<Record<string, string>>({})

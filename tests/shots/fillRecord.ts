@@ -35,7 +35,7 @@ export async function fillSpray(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('M2')
   await fillWeather(form)
   await closeLines(form)
-  await scrollTo(form.step(1))
+  await scrollTo(main.getByRole('heading', { level: 1 }))
   return form
 }
 
@@ -51,7 +51,7 @@ export async function fillDrench(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('D1')
   await fillWeather(form)
   await closeLines(form)
-  await scrollTo(main.getByText('Middle Piece', { exact: true }).last())
+  await scrollTo(main.getByText('V2', { exact: true }).last())
   return form
 }
 

@@ -21,6 +21,7 @@ export const problems = {
   field: {
     required: 'This is missing.',
     type: 'This must be {expected}.',
+    choose: 'Choose one.',
     choice: 'Choose one of: {options}.',
     too_small: 'Give at least {minimum}.',
     too_big: 'Give at most {maximum}.',
@@ -35,7 +36,7 @@ export const problems = {
     too_many_lines: 'There are too many lines in it: at most 200 line breaks.',
   },
   number: {
-    format: 'Give a plain number, such as 12.5, with at most 4 decimals.',
+    format: 'Give a plain number under 10 000 000, such as 12.5, with at most 4 decimals.',
     above_zero: 'Give a number above 0.',
     percent: 'Give a percentage from 0 to 100.',
     range: 'This is beyond what is measured: air −60 to 60 °C, wind 0 to 75 m/s.',

@@ -21,6 +21,7 @@ export const problems = {
   field: {
     required: 'Falta este dato.',
     type: 'Esto debe ser {expected}.',
+    choose: 'Elija uno.',
     choice: 'Elija uno de estos: {options}.',
     too_small: 'Indique al menos {minimum}.',
     too_big: 'Indique {maximum} como máximo.',
@@ -35,7 +36,7 @@ export const problems = {
     too_many_lines: 'Tiene demasiadas líneas: 200 saltos de línea como máximo.',
   },
   number: {
-    format: 'Indique un número sencillo, como 12.5, con 4 decimales como máximo.',
+    format: 'Indique un número sencillo menor de 10 000 000, como 12.5, con 4 decimales como máximo.',
     above_zero: 'Indique un número mayor que 0.',
     percent: 'Indique un porcentaje de 0 a 100.',
     range: 'Esto queda fuera de lo que se mide: aire de −60 a 60 °C, viento de 0 a 75 m/s.',
