@@ -47,7 +47,8 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
     caution.sentences.map((each) => (typeof each === 'string' ? each : render(each)))
   const wordsOf = (error: FieldError): string => ('words' in error ? error.words : translate(language.value, error.id))
 
-  watch(outline.geometry, () => { saving.forget() })
+  const impossible = computed(() => outline.findings.value.map((finding) => outlineWords(language.value, finding)))
+  watch([outline.geometry, outline.findings, () => content.value.by, () => content.value.closed], () => { saving.forget() })
 
   const figures = computed(() => {
     const measure = outline.measure.value
@@ -58,12 +59,20 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
     }
   })
 
+  /** Why the outline cannot be saved as it stands; null where it can. */
+  function faultOf(): FieldError | null {
+    const { by: how, points, closed } = content.value
+    const said = [...(how === 'points' ? work.typed.errors.value : []), ...impossible.value]
+    if (said.length > 0) return { words: said.join('\n') }
+    if (points.length > 0 && points.length < 3) return { id: 'blocks.geometry.few' }
+    return outline.geometry.value === null || !closed ? { id: 'blocks.form.outlineNeeded' } : null
+  }
+
   async function save(): ReturnType<BlockNew['save']> {
     const geometry = outline.geometry.value
-    if (geometry === null || !content.value.closed) {
-      saving.errors.value = { geometry: { id: 'blocks.form.outlineNeeded' } }
-      return undefined
-    }
+    const fault = faultOf()
+    if (fault !== null) saving.errors.value = { geometry: fault }
+    if (fault !== null || geometry === null) return undefined
     const { code } = content.value
     const { area } = figures.value
     const outcome = await saving.save({
@@ -76,7 +85,7 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
   }
 
   return {
-    work, saving, figures, save,
+    work, saving, figures, impossible, save,
     mapDraft: computed(() => ({
       points: content.value.points,
       closed: content.value.closed,
@@ -84,7 +93,6 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
       cross: work.isDrawing.value ? outline.cross.value : null,
     })),
     banner: computed(() => bannerText(language.value, figures.value, content.value.points.length)),
-    impossible: computed(() => outline.findings.value.map((finding) => outlineWords(language.value, finding))),
     unlikely: computed(() => work.cautions.value.flatMap(sentencesOf)),
     asked: computed(() => saving.asked.value.map((caution) => ({ code: caution.code, sentences: sentencesOf(caution) }))),
     errors: computed(() => Object.fromEntries(Object.entries(saving.errors.value).map(([path, error]) => [path, wordsOf(error)]))),

@@ -18,6 +18,8 @@ export interface BlockWork {
   by: ComputedRef<OutlineBy>
   setBy: (by: OutlineBy) => void
   setTyped: (text: string) => void
+  /** Exchanges latitude and longitude in every typed line, where longitude seems to come first. */
+  swap: () => void
   cautions: ComputedRef<readonly Caution[]>
   /** Numbers (from 0) of the edges that cross. */
   crossing: ComputedRef<readonly number[]>
@@ -54,10 +56,14 @@ export function useBlockWork({ farmId, by, language, others, farmPlace }: Around
     content.value = { ...content.value, by: next, typed: fromMap ? formatPoints(content.value.points) : content.value.typed }
   }
 
+  function setTyped(text: string): void {
+    content.value = { ...content.value, typed: text }
+  }
+
   return {
-    draft, outline, typed, setBy,
+    draft, outline, typed, setBy, setTyped,
+    swap: () => { if (typed.swapped.value !== null) setTyped(typed.swapped.value) },
     by: computed(() => content.value.by),
-    setTyped: (text) => { content.value = { ...content.value, typed: text } },
     cautions: computed(() => {
       const geometry = outline.geometry.value
       return geometry === null ? [] : findCautions(geometry, others(), farmPlace())

@@ -12,11 +12,13 @@ export interface Drafts {
   ready: Readonly<Ref<boolean>>
   /** The draft of that id if it is this account's, else null. */
   read: <Content>(id: string) => Promise<Draft<Content> | null>
-  /** Keeps the whole content as it stands; call at every keystroke, it is written within 150 ms. */
+  /** Keeps the whole content as it stands; call at every keystroke, a copy is made at once and the database has it within 150 ms. */
   write: (id: string, kind: DraftKind, content: unknown) => void
   /** Writes what still waits. */
   flush: () => Promise<void>
   remove: (id: string) => Promise<void>
+  /** Calls back with the draft of that id when another tab has written it and nothing typed here waits; ends with the scope. */
+  onTakenOver: <Content>(id: string, take: (draft: Draft<Content>) => void) => void
 }
 
 /** Drafts survive a reload and signing out; they leave only by `remove`. */
@@ -27,22 +29,41 @@ export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): D
   const owner = computed(() => ({ accountId: session.user?.id ?? '', farmId: toValue(farmId) }))
 
   const stop = watch(owner, ({ accountId, farmId: farm }, _before, onCleanup) => {
-    const watching = liveQuery(() => listDrafts(accountId, farm, kind)).subscribe({
-      next: (found) => { drafts.value = found; ready.value = true },
-      error: () => { drafts.value = []; ready.value = true },
-    })
-    onCleanup(() => { watching.unsubscribe() })
+    let watching: { unsubscribe: () => void } | null = null
+    let isOver = false
+    function begin(): void {
+      if (isOver) return
+      watching = liveQuery(() => listDrafts(accountId, farm, kind)).subscribe({
+        next: (found) => { drafts.value = found; ready.value = true },
+        error: () => { drafts.value = []; ready.value = true },
+      })
+    }
+    // What was typed last before a reload is listed too.
+    draftWriter.recover().then(begin, begin)
+    onCleanup(() => { isOver = true; watching?.unsubscribe() })
   }, { immediate: true })
   onScopeDispose(stop)
 
   async function read<Content>(id: string): Promise<Draft<Content> | null> {
     await draftWriter.flush()
+    await draftWriter.recover()
     const found = await device.drafts.get(id)
+    if (found !== undefined) draftWriter.saw(found)
     return found !== undefined && found.accountId === owner.value.accountId ? (found as Draft<Content>) : null
+  }
+
+  function onTakenOver<Content>(id: string, take: (draft: Draft<Content>) => void): void {
+    async function takeOver(): Promise<void> {
+      if (draftWriter.isWaiting(id)) return
+      const found = await read<Content>(id)
+      if (found !== null && !draftWriter.isWaiting(id)) take(found)
+    }
+    onScopeDispose(draftWriter.listen((written) => { if (written.id === id) void takeOver() }))
   }
 
   return {
     drafts,
+    onTakenOver,
     ready,
     read,
     write: (id, of, content) => { draftWriter.write({ id, kind: of, content, ...owner.value }) },
@@ -53,6 +74,7 @@ export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): D
 
 async function listDrafts(accountId: string, farmId: string, kind: DraftKind | undefined): Promise<Draft[]> {
   const found = await device.drafts.where({ accountId, farmId }).toArray()
+  found.forEach(draftWriter.saw)
   return found
     .filter((draft) => kind === undefined || draft.kind === kind)
     .sort((one, other) => other.updatedAt.localeCompare(one.updatedAt))

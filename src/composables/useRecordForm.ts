@@ -1,11 +1,13 @@
 import { onScopeDispose, ref, shallowRef, watch, type Ref } from 'vue'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { recordSheet } from '../../shared/mix/recordSheet.ts'
-import { NetworkError } from '../api/errors.ts'
+import { ApiError, NetworkError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
 import { now } from '../plugins/clock.ts'
 import { isNotFound } from './isNotFound.ts'
 import { contentOf, sheetInputOf } from './recordContent.ts'
 import { draftLike, draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
+import type { Draft } from '../stores/draftTypes.ts'
 import { useDrafts } from './useDrafts.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
@@ -42,6 +44,8 @@ function firstDraft({ sprayers }: RecordStock): RecordDraft {
   return { ...emptyRecord(), sprayerId: only !== undefined && others.length === 0 ? only.id : '' }
 }
 
+const isOpen = ({ state }: ApplicationRecord): boolean => state === 'started' || state === 'draft'
+
 /** The form of a record: found on the device, else at the server, else empty; kept at every keystroke. */
 export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFormOptions): RecordForm {
   const drafts = useDrafts(() => stock.value.farmId, 'record')
@@ -49,6 +53,9 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
   const state = ref<'loading' | 'ready' | 'signed'>('loading')
   const begunAt = shallowRef<string | null>(null)
   let stopKeeping: (() => void) | null = null
+  /** The form as the device has it: what another tab typed is not written back. */
+  let keptText = ''
+  let isDiscarded = false
 
   async function find(): Promise<RecordDraft | 'signed'> {
     const kept = await drafts.read<KeptContent>(id)
@@ -60,12 +67,23 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
     return (await findAtServer()) ?? firstDraft(stock.value)
   }
 
+  /** Whether the server says that a record it knows is open no more; without an answer the draft stays as it is. */
+  async function isSigned({ revision }: RecordDraft): Promise<boolean> {
+    if (revision === null) return false
+    try {
+      return !isOpen(await recordApi.read(stock.value.farmId, id))
+    } catch (error) {
+      if (error instanceof NetworkError || error instanceof ApiError) return false
+      throw error
+    }
+  }
+
   async function findAtServer(): Promise<RecordDraft | 'signed' | null> {
     const { farmId, farm } = stock.value
     try {
       if (fresh) return draftLike(await recordApi.read(farmId, likeId))
       const record = await recordApi.read(farmId, id)
-      return record.state === 'started' || record.state === 'draft' ? draftOfRecord(record, farm?.zone ?? 'UTC') : 'signed'
+      return isOpen(record) ? draftOfRecord(record, farm?.zone ?? 'UTC') : 'signed'
     } catch (error) {
       if (error instanceof NetworkError || isNotFound(error)) return null
       throw error
@@ -75,6 +93,9 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
   function keep(): void {
     const { farm, blocks, sprayers } = stock.value
     const typed = draft.value
+    const text = JSON.stringify(typed)
+    if (text === keptText) return
+    keptText = text
     const sheet = recordSheet(sheetInputOf(typed, {
       areaM2: blocks.find((block) => block.id === typed.blockId)?.areaM2 ?? null,
       tankL: sprayers.find((sprayer) => sprayer.id === typed.sprayerId)?.tankL ?? null,
@@ -86,17 +107,45 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
   async function load(): Promise<void> {
     const found = await find()
     if (found === 'signed') { state.value = 'signed'; return }
-    draft.value = found
+    show(found)
     state.value = 'ready'
     stopKeeping = watch(draft, keep, { deep: true })
+    if (begunAt.value !== null) await leaveSigned()
   }
 
+  /** A weak signal does not hold up the form: it is open already, and is left when the answer says that the record is signed. */
+  async function leaveSigned(): Promise<void> {
+    if (!(await isSigned(draft.value)) || isDiscarded) return
+    await discard()
+    state.value = 'signed'
+  }
+
+  async function discard(): Promise<void> {
+    stopKeeping?.()
+    isDiscarded = true
+    await drafts.remove(id)
+  }
+
+  function show(found: RecordDraft): void {
+    keptText = JSON.stringify(found)
+    draft.value = found
+  }
+
+  /** Another tab has typed in the same draft: its words are shown here at once. */
+  function takeOver({ content, begunAt: begun }: Draft<KeptContent>): void {
+    const typed = { ...emptyRecord(), ...content.typed }
+    if (isDiscarded || state.value !== 'ready' || JSON.stringify(typed) === keptText) return
+    begunAt.value = begun
+    show(typed)
+  }
+
+  drafts.onTakenOver<KeptContent>(id, takeOver)
   const stopWaiting = watch(stockReady, (ready) => { if (ready && state.value === 'loading') void load() }, { immediate: true })
   onScopeDispose(stopWaiting)
 
   return {
     draft, state, begunAt,
     flush: () => drafts.flush(),
-    discard: async () => { stopKeeping?.(); await drafts.remove(id) },
+    discard,
   }
 }

@@ -5,12 +5,15 @@ import { parsePoints } from '../../shared/geo/parsePoints.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { translate, type Language } from '../../shared/messages/translate.ts'
 import { isSameCorner } from './isSameCorner.ts'
+import { isLatitudeOut, swapLines } from './swapLines.ts'
 
 /** Typed points, read line by line. */
 export interface TypedPoints {
   points: ComputedRef<readonly Position[]>
-  /** What could not be read, one sentence a line; at most five, then how many more. */
+  /** What could not be read, one sentence a line; at most five, then how many more. Exchanged axes are said once. */
   errors: ComputedRef<readonly string[]>
+  /** The text with latitude and longitude exchanged in every line; null unless longitude seems to come first. */
+  swapped: ComputedRef<string | null>
 }
 
 const MOST_SHOWN = 5
@@ -26,16 +29,21 @@ const MOST_DEGREES = 360
 /** Reads typed points as they are typed; a last line that repeats the first closes the ring and is dropped. */
 export function useTypedPoints(text: () => string, language: () => Language): TypedPoints {
   const read = computed(() => parsePoints(text()))
+  const swapped = computed(() => swapLines(text(), read.value.findings))
   return {
+    swapped,
     points: computed(() => withoutClosing(read.value.points)),
     errors: computed(() => {
-      const found = read.value.findings
+      const isSwapped = swapped.value !== null
+      const found = read.value.findings.filter((finding) => !isSwapped || !isLatitudeOut(finding))
+      const order = isSwapped ? [translate(language(), 'blocks.points.lonFirst')] : []
       const shown = found.slice(0, MOST_SHOWN).map((finding) => {
         const words = translate(language(), wordsFor(finding))
         return renderMessage(language(), { id: 'blocks.points.line', params: { line: finding.line, words } })
       })
       const rest = found.length - shown.length
-      return rest > 0 ? [...shown, renderMessage(language(), { id: 'blocks.points.more', params: { count: rest } })] : shown
+      const more = rest > 0 ? [renderMessage(language(), { id: 'blocks.points.more', params: { count: rest } })] : []
+      return [...order, ...shown, ...more]
     }),
   }
 }

@@ -17,7 +17,9 @@ interface DraftWriter {
   remove: (id: string) => Promise<void>
   /** Whether something typed here is not in the database yet. */
   isWaiting: (id: string) => boolean
-  /** Calls back when the device has a newer version than this tab wrote or heard of; returns how to stop. */
+  /** Notes the version of a draft found on the device: what is typed from now on is later, whatever the clock says. */
+  saw: (found: DraftWritten) => void
+  /** Calls back when the device has a version that was not typed in this tab; returns how to stop. */
   listen: (heard: Heard) => () => void
 }
 
@@ -29,7 +31,9 @@ const DELAY_MS = 120
  */
 export function createDraftWriter(openChannel: () => DraftChannel = openDraftChannel): DraftWriter {
   const waiting = new Map<string, Draft>()
+  /** The latest version known of each draft, and the latest typed here. */
   const versions = new Map<string, string>()
+  const typedHere = new Map<string, string>()
   const listeners = new Set<Heard>()
   let timer: number | undefined
   let writing: Promise<void> = Promise.resolve()
@@ -39,6 +43,7 @@ export function createDraftWriter(openChannel: () => DraftChannel = openDraftCha
     const updatedAt = laterThan(versions.get(typed.id) ?? before?.updatedAt)
     const draft = { ...typed, content: JSON.parse(JSON.stringify(typed.content)) as unknown, begunAt: before?.begunAt ?? updatedAt, updatedAt }
     versions.set(typed.id, updatedAt)
+    typedHere.set(typed.id, updatedAt)
     draftCopies.put(draft)
     waiting.set(typed.id, draft)
     timer ??= window.setTimeout(() => void flush(), DELAY_MS)
@@ -86,21 +91,23 @@ export function createDraftWriter(openChannel: () => DraftChannel = openDraftCha
     })
   }
 
+  function saw({ id, updatedAt }: DraftWritten): void {
+    if ((versions.get(id) ?? '') < updatedAt) versions.set(id, updatedAt)
+  }
+
   function listen(heard: Heard): () => void {
     const channel = openChannel()
     listeners.add(heard)
     channel.onmessage = ({ data }: MessageEvent<DraftWritten>) => {
       // What this tab told comes back to it as well.
-      if ((versions.get(data.id) ?? '') >= data.updatedAt) return
-      versions.set(data.id, data.updatedAt)
-      heard(data)
+      if ((typedHere.get(data.id) ?? '') < data.updatedAt) heard(data)
     }
     return () => { listeners.delete(heard); channel.close() }
   }
 
   window.addEventListener('pagehide', () => void flush())
   document.addEventListener('visibilitychange', () => { if (document.hidden) void flush() })
-  return { write, flush, recover, remove, isWaiting: (id) => waiting.has(id), listen }
+  return { write, flush, recover, remove, isWaiting: (id) => waiting.has(id), saw, listen }
 }
 
 /** This moment, or just after `before` where the device's clock stands still or was put back. */

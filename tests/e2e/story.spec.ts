@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs'
-import type { Locator } from '@playwright/test'
+import type { Locator, Page } from '@playwright/test'
 import { recordSheet } from '../../shared/mix/recordSheet.ts'
 import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
@@ -20,6 +20,11 @@ const demoCodes = drawing.features.map(({ properties }) => properties.code)
 function litres(value: number | string | null): string {
   const size = Number(value)
   return formatNumber(value ?? '', { digits: size >= 100 ? 1 : size >= 1 ? 2 : 3 }, 'en')
+}
+
+/** What the page says of an outline of four corners; area in hectares, perimeter in metres. */
+function figuresOf({ area, perimeter }: { area: string; perimeter: string }): string {
+  return say('blocks.draw.figures', { area: say('blocks.hectares', { figure: area }), perimeter: say('blocks.page.metres', { figure: perimeter }), points: 4 })
 }
 
 test('signs in as the manager and sees the 24 blocks over the ground plan', async ({ page, isPhone }) => {
@@ -57,7 +62,7 @@ test('draws a block by keyboard, with its live area, and saves it', async ({ pag
     await form.step(arrow, 5)
     await page.keyboard.press('Space')
   }
-  const figures = form.main.getByText(/^New block: 0\.25 ha, perimeter 200 m, 4 points$/).filter({ visible: true })
+  const figures = form.main.getByText(figuresOf({ area: '0.25', perimeter: '200' })).filter({ visible: true })
   await expect(figures.first()).toBeVisible()
   await page.keyboard.press('Enter')
   await expect(form.main.getByText(say('blocks.draw.finished')).or(field(form.main, say('blocks.form.code')))).not.toHaveCount(0)
@@ -80,7 +85,7 @@ test('types the points of a block, with its live area, and saves it', async ({ p
   const [left, top] = [west, south - 0.0003]
   await form.points.fill(typedPoints([[left, top], [left + 0.001, top], [left + 0.001, top - 0.0005], [left, top - 0.0005]]))
   // 0.001° by 0.0005° at 44.6° N: 79.4 m by 55.6 m.
-  await expect(form.main.getByText(/^New block: 0\.44 ha, perimeter 270 m, 4 points$/).filter({ visible: true }).first()).toBeVisible()
+  await expect(form.main.getByText(figuresOf({ area: '0.44', perimeter: '270' })).filter({ visible: true }).first()).toBeVisible()
   const code = unique('P')
   await form.name(code)
   await form.saveButton.click()
@@ -167,7 +172,7 @@ test('records a drench: sheet, reload, start, end, signature, lots, PDF, registe
 })
 
 /** The newest signed line of the register. */
-function firstRow(page: import('@playwright/test').Page, isPhone: boolean): Locator {
+function firstRow(page: Page, isPhone: boolean): Locator {
   const rows = isPhone ? page.getByRole('list', { name: say('register.caption') }).getByRole('listitem') : page.getByRole('table', { name: say('register.caption') }).getByRole('row')
   return rows.filter({ hasNotText: say('register.draft') }).filter({ hasNotText: say('register.started') }).filter({ hasNotText: say('register.column.preparation') }).first()
 }

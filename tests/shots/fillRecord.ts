@@ -15,9 +15,9 @@ async function closeLines({ main }: RecordForm): Promise<void> {
   if (await done.isVisible()) await done.click()
 }
 
-/** Puts the top of something at the top of the page, as a thumb would. */
-async function scrollTo(thing: Locator): Promise<void> {
-  await thing.evaluate((element) => { element.scrollIntoView({ block: 'start' }) })
+/** Scrolls something to the top of the page, or to its middle, as a thumb would. */
+async function scrollTo(thing: Locator, block: 'start' | 'center'): Promise<void> {
+  await thing.evaluate((element, place) => { element.scrollIntoView({ block: place }) }, block)
 }
 
 /** On the desk: nettle ferment and potash soap on A3, the soap over its label, so that a stop bars Start. */
@@ -35,7 +35,7 @@ export async function fillSpray(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('M2')
   await fillWeather(form)
   await closeLines(form)
-  await scrollTo(main.getByRole('heading', { level: 1 }))
+  await scrollTo(main.getByRole('heading', { level: 1 }), 'center')
   return form
 }
 
@@ -51,7 +51,7 @@ export async function fillDrench(page: Page): Promise<RecordForm> {
   await form.chooseSprayer('D1')
   await fillWeather(form)
   await closeLines(form)
-  await scrollTo(main.getByText('V2', { exact: true }).last())
+  await scrollTo(main.getByText('V2', { exact: true }).last(), 'start')
   return form
 }
 

@@ -132,6 +132,8 @@ export const blocks = {
     unreadable: 'not read. Write latitude, a comma, longitude.',
     outOfRange: 'latitude runs from −90 to 90, longitude from −180 to 180.',
     degreesNeeded: 'these look like metres. Degrees are needed.',
+    lonFirst: 'Longitude seems to come first. Latitude stands first here.',
+    swap: 'Swap all lines',
     minutes: 'minutes and seconds stay under 60.',
     tooMany: 'more than 5 000 points. Thin them first.',
     more: 'and {count} more lines',

@@ -132,6 +132,8 @@ export const blocks = {
     unreadable: 'no se pudo leer. Escriba latitud, coma, longitud.',
     outOfRange: 'la latitud va de −90 a 90; la longitud, de −180 a 180.',
     degreesNeeded: 'parecen metros. Hacen falta grados.',
+    lonFirst: 'Parece que la longitud va delante. Aquí la latitud va primero.',
+    swap: 'Intercambiar todas las líneas',
     minutes: 'los minutos y los segundos no llegan a 60.',
     tooMany: 'más de 5 000 puntos. Redúzcalos antes.',
     more: 'y {count} líneas más',

@@ -1,7 +1,9 @@
 import { divIcon, layerGroup, marker, point, type LayerGroup, type Map as LeafletMap } from 'leaflet'
-import { freeSpot, type LabelBox } from './freeSpot.ts'
+import { freeSpot } from './freeSpot.ts'
 import { labelSpot, type LabelForm } from './labelSpot.ts'
 import { pixelRings } from './leafletGeometry.ts'
+import { boxOf, type PixelBox } from './pixelRing.ts'
+import { thinRing } from './thinRing.ts'
 import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
 
 /** Codes and areas on the map; each block shows as much as has room in it at this zoom. */
@@ -16,13 +18,22 @@ interface Labels {
   group: LayerGroup
   middles: Map<string, Pixel>
   /** Ground that labels already cover. */
-  taken: LabelBox[]
+  taken: PixelBox[]
+  /** The polygons of every block in pixels. */
+  shapes: readonly Shape[]
 }
+
+/** One polygon of a block. */
+interface Shape { id: string; rings: readonly (readonly Pixel[])[]; box: PixelBox }
 
 /** Width and height in pixels that a label of each form covers. */
 const SIZES: Record<LabelForm, readonly [number, number]> = {
-  full: [50, 37], narrow: [27, 35], slip: [50, 19], code: [20, 17], outside: [18, 12],
+  full: [50, 37], narrow: [27, 35], slip: [50, 19], code: [20, 17], small: [18, 12], outside: [18, 12],
 }
+/** Room in pixels that each small letter of a code needs. */
+const LETTER = 8
+/** No label is set farther from its block, so blocks beyond are not looked at. */
+const REACH = 40
 /** Below this width in pixels a farm is a dot and labels would lie on each other. */
 const LEAST_BOX = 4
 
@@ -33,7 +44,8 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
     show(blocks, chosenId) {
       group.clearLayers()
       middles = new Map()
-      const labels: Labels = { map, group, middles, taken: [] }
+      const shapes = blocks.flatMap(({ id, geometry }) => pixelRings(map, geometry).map((rings) => shapeOf(id, rings)))
+      const labels: Labels = { map, group, middles, taken: [], shapes }
       // Those with room of their own first, then the tiny ones between them.
       const largestFirst = [...blocks].sort((a, b) => b.areaM2 - a.areaM2)
       for (const block of largestFirst) addLabel(labels, block, block.id === chosenId)
@@ -42,13 +54,22 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
   }
 }
 
-function addLabel({ map, group, middles, taken }: Labels, block: MapBlock, isChosen: boolean): void {
-  const largest = largestPolygon(pixelRings(map, block.geometry))
+function addLabel({ map, group, middles, taken, shapes }: Labels, block: MapBlock, isChosen: boolean): void {
+  const largest = largestShape(shapes.filter(({ id }) => id === block.id))
   if (largest === null) return
-  const { form, at: middle } = labelSpot(largest.rings)
+  const near = shapes.filter(({ id, box }) => id !== block.id && isWithin(box, largest.box, REACH))
+  const beside = near.filter(({ box }) => isWithin(box, largest.box, 0)).flatMap(({ rings }) => rings)
+  const { form, at: middle, orAt } = labelSpot(largest.rings, beside, smallWidth(block.code))
   middles.set(block.id, middle)
-  if (form === 'outside' && largest.width < LEAST_BOX && !isChosen) return
-  const at = freeSpot(taken, middle, SIZES[form], form === 'outside') ?? (isChosen ? middle : null)
+  const isOutside = form === 'outside'
+  if (isOutside && widthOf(largest) < LEAST_BOX && !isChosen) return
+  const [width, height] = SIZES[form]
+  const size = [isOutside || form === 'small' ? smallWidth(block.code) : width, height] as const
+  const blocks = isOutside ? [...near.map(({ rings }) => rings), largest.rings] : []
+  const find = (labels: PixelBox[]): Pixel | null =>
+    freeSpot({ labels, blocks }, middle, size, isOutside) ?? (orAt === null ? null : freeSpot({ labels, blocks }, orAt, size, isOutside))
+  // The chosen one may lie on other labels, yet on no other block.
+  const at = find(taken) ?? (isChosen ? find([]) : null)
   if (at === null) return
   const className = `map-label is-${form}${isChosen ? ' is-chosen' : ''}`
   group.addLayer(
@@ -66,7 +87,7 @@ function labelElement(block: MapBlock, form: LabelForm): HTMLElement {
   const code = document.createElement('b')
   code.textContent = block.code
   label.append(code)
-  if (form !== 'outside' && form !== 'code') {
+  if (form !== 'outside' && form !== 'code' && form !== 'small') {
     const area = document.createElement('i')
     area.textContent = form === 'full' ? block.areaText : block.areaFigure
     label.append(area)
@@ -74,12 +95,22 @@ function labelElement(block: MapBlock, form: LabelForm): HTMLElement {
   return label
 }
 
-function largestPolygon(polygons: Pixel[][][]): { rings: Pixel[][]; width: number } | null {
-  let largest: { rings: Pixel[][]; width: number } | null = null
-  for (const rings of polygons) {
-    const xs = (rings[0] ?? []).map(([x]) => x)
-    const width = xs.reduce((most, x) => Math.max(most, x), -Infinity) - xs.reduce((least, x) => Math.min(least, x), Infinity)
-    if (largest === null || width > largest.width) largest = { rings, width }
-  }
-  return largest
+function smallWidth(code: string): number {
+  return code.length * LETTER + 2
+}
+
+function shapeOf(id: string, rings: readonly (readonly Pixel[])[]): Shape {
+  return { id, rings: rings.map(thinRing), box: boxOf(rings[0] ?? []) }
+}
+
+function isWithin(a: PixelBox, b: PixelBox, reach: number): boolean {
+  return a.minX < b.maxX + reach && b.minX < a.maxX + reach && a.minY < b.maxY + reach && b.minY < a.maxY + reach
+}
+
+function widthOf({ box }: Shape): number {
+  return box.maxX - box.minX
+}
+
+function largestShape(shapes: readonly Shape[]): Shape | null {
+  return shapes.reduce<Shape | null>((largest, shape) => (largest === null || widthOf(shape) > widthOf(largest) ? shape : largest), null)
 }

@@ -1,10 +1,17 @@
 import type { Pixel } from '../../composables/mapTypes.ts'
+import { boxOf, eachEdge } from './pixelRing.ts'
+import { hasEdgeIn, isInside } from './ringsAtBox.ts'
+import { thinRing } from './thinRing.ts'
+
+type Rings = readonly (readonly Pixel[])[]
 
 /** How much of a label has room in its block. */
-export type LabelForm = 'full' | 'narrow' | 'slip' | 'code' | 'outside'
+export type LabelForm = 'full' | 'narrow' | 'slip' | 'code' | 'small' | 'outside'
 export interface LabelSpot {
   form: LabelForm
   at: Pixel
+  /** Where else it may stand: under the block, for a label outside. */
+  orAt: Pixel | null
 }
 
 /** Width and height in pixels that each form needs, best form first. */
@@ -15,26 +22,32 @@ const FORMS: readonly (readonly [LabelForm, number, number])[] = [
   ['code', 22, 18],
 ]
 const GRID = 17
-const MOST_POINTS = 240
+/** Height in pixels of a code in small letters. */
+const SMALL_HEIGHT = 13
 const OUTSIDE_GAP = 9
 
 /**
  * Where in a block its label stands, and in which form.
  * @param rings the rings of one polygon in pixels, outer first; holes are kept clear.
- * @returns the roomiest point for the first form that fits, or a point over the block's top where none does.
+ * @param others rings of other blocks in pixels; a label in its block keeps clear of their edges too.
+ * @param smallWidth width in pixels of the code in small letters.
+ * @returns the roomiest point for the first form that fits, or points over the block's top and under its foot where none does.
  */
-export function labelSpot(rings: readonly (readonly Pixel[])[]): LabelSpot {
-  const thinned = rings.map(thin)
+export function labelSpot(rings: Rings, others: Rings = [], smallWidth = 18): LabelSpot {
+  const thinned = rings.map(thinRing)
+  const keepClear = [...thinned, ...others]
   const spots = roomySpots(thinned)
-  for (const [form, width, height] of FORMS) {
-    const at = spots.find((spot) => rectangleFits(thinned, spot, width / 2, height / 2))
-    if (at !== undefined) return { form, at }
+  for (const [form, width, height] of [...FORMS, ['small', smallWidth, SMALL_HEIGHT] as const]) {
+    const at = spots.find((spot) => rectangleFits(keepClear, spot, width / 2, height / 2))
+    if (at !== undefined) return { form, at, orAt: null }
   }
-  return { form: 'outside', at: overTheTop(thinned[0] ?? []) }
+  const { minX, minY, maxX, maxY } = boxOf(thinned[0] ?? [])
+  const middle = (minX + maxX) / 2
+  return { form: 'outside', at: [middle, minY - OUTSIDE_GAP], orAt: [middle, maxY + OUTSIDE_GAP] }
 }
 
 /** Candidate points inside, the ones farthest from any edge first. */
-function roomySpots(rings: readonly (readonly Pixel[])[]): Pixel[] {
+function roomySpots(rings: Rings): Pixel[] {
   const { minX, minY, maxX, maxY } = boxOf(rings[0] ?? [])
   const middle: Pixel = [(minX + maxX) / 2, (minY + maxY) / 2]
   const found: { at: Pixel; room: number }[] = []
@@ -50,7 +63,7 @@ function roomySpots(rings: readonly (readonly Pixel[])[]): Pixel[] {
 }
 
 /** Distance to the nearest edge; sideways counts less, for labels are wider than high. */
-function roomAt(rings: readonly (readonly Pixel[])[], [x, y]: Pixel): number {
+function roomAt(rings: Rings, [x, y]: Pixel): number {
   let least = Number.POSITIVE_INFINITY
   eachEdge(rings, (from, to) => {
     const [ax, ay, bx, by] = [(from[0] - x) * 0.7, from[1] - y, (to[0] - x) * 0.7, to[1] - y]
@@ -61,69 +74,6 @@ function roomAt(rings: readonly (readonly Pixel[])[], [x, y]: Pixel): number {
   return least
 }
 
-function rectangleFits(rings: readonly (readonly Pixel[])[], [x, y]: Pixel, halfWidth: number, halfHeight: number): boolean {
-  let free = true
-  eachEdge(rings, (from, to) => {
-    if (free && crossesBox(from, to, x - halfWidth, y - halfHeight, x + halfWidth, y + halfHeight)) free = false
-  })
-  return free
-}
-
-/** Whether a segment touches a box (clipping the segment by each side in turn). */
-function crossesBox(from: Pixel, to: Pixel, minX: number, minY: number, maxX: number, maxY: number): boolean {
-  let enter = 0
-  let leave = 1
-  const steps = [to[0] - from[0], to[1] - from[1]] as const
-  const bounds = [[minX, maxX, from[0], steps[0]], [minY, maxY, from[1], steps[1]]] as const
-  for (const [low, high, start, step] of bounds) {
-    if (step === 0) {
-      if (start < low || start > high) return false
-      continue
-    }
-    const first = (low - start) / step
-    const second = (high - start) / step
-    enter = Math.max(enter, Math.min(first, second))
-    leave = Math.min(leave, Math.max(first, second))
-    if (enter > leave) return false
-  }
-  return true
-}
-
-function isInside(rings: readonly (readonly Pixel[])[], [x, y]: Pixel): boolean {
-  let inside = false
-  eachEdge(rings, (from, to) => {
-    const straddles = from[1] > y !== to[1] > y
-    if (straddles && x < from[0] + ((y - from[1]) / (to[1] - from[1])) * (to[0] - from[0])) inside = !inside
-  })
-  return inside
-}
-
-function eachEdge(rings: readonly (readonly Pixel[])[], visit: (from: Pixel, to: Pixel) => void): void {
-  for (const ring of rings) {
-    ring.forEach((from, index) => {
-      const to = ring[(index + 1) % ring.length]
-      if (to !== undefined) visit(from, to)
-    })
-  }
-}
-
-function overTheTop(ring: readonly Pixel[]): Pixel {
-  const { minX, minY, maxX } = boxOf(ring)
-  return [(minX + maxX) / 2, minY - OUTSIDE_GAP]
-}
-
-function boxOf(ring: readonly Pixel[]): { minX: number; minY: number; maxX: number; maxY: number } {
-  let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity]
-  for (const [x, y] of ring) {
-    minX = Math.min(minX, x)
-    minY = Math.min(minY, y)
-    maxX = Math.max(maxX, x)
-    maxY = Math.max(maxY, y)
-  }
-  return { minX, minY, maxX, maxY }
-}
-
-function thin(ring: readonly Pixel[]): readonly Pixel[] {
-  const step = Math.ceil(ring.length / MOST_POINTS)
-  return step <= 1 ? ring : ring.filter((_, index) => index % step === 0)
+function rectangleFits(rings: Rings, [x, y]: Pixel, halfWidth: number, halfHeight: number): boolean {
+  return !hasEdgeIn(rings, { minX: x - halfWidth, minY: y - halfHeight, maxX: x + halfWidth, maxY: y + halfHeight })
 }

@@ -12,6 +12,7 @@ describe('labelSpot', () => {
     { form: 'narrow', width: 34, height: 110 },
     { form: 'slip', width: 130, height: 26 },
     { form: 'code', width: 28, height: 24 },
+    { form: 'small', width: 22, height: 60 },
     { form: 'outside', width: 12, height: 60 },
   ])('gives a block of $width × $height the form $form', ({ form, width, height }) => {
     expect(labelSpot([box(0, 0, width, height)]).form).toBe(form)
@@ -29,8 +30,14 @@ describe('labelSpot', () => {
     expect(at[1] < 60 || at[1] > 100).toBe(true)
   })
 
-  it('stands over the top where nothing fits', () => {
-    expect(labelSpot([box(10, 50, 8, 40)]).at).toEqual([14, 41])
+  it('keeps clear of the edges of a block that overlaps', () => {
+    const { form, at } = labelSpot([box(0, 0, 160, 100)], [box(70, -20, 200, 200)])
+    expect(form).toBe('full')
+    expect(at[0] + 29 <= 70 || at[0] - 29 >= 70).toBe(true)
+  })
+
+  it('stands over the top where nothing fits, or under the foot', () => {
+    expect(labelSpot([box(10, 50, 8, 40)])).toEqual({ form: 'outside', at: [14, 41], orAt: [14, 99] })
   })
 
   it('answers for a ring with thousands of points', () => {

@@ -30,6 +30,20 @@ describe('useTypedPoints', () => {
     expect(errors.value.at(-1)).toBe('and 4 more lines')
   })
 
+  it('says once that longitude comes first, and exchanges every line', () => {
+    const { errors, swapped } = read('-123.3, 44.6\n-123.3; 44.7\n\n-123,2 44,7\nhere\n44°42′N 123°12′W')
+    expect(errors.value).toEqual([
+      'Longitude seems to come first. Latitude stands first here.',
+      'Line 5: not read. Write latitude, a comma, longitude.',
+    ])
+    expect(swapped.value).toBe('44.6, -123.3\n44.7; -123.3\n\n44,7; -123,2\nhere\n44°42′N 123°12′W')
+    expect(read(swapped.value ?? '').points.value).toEqual([[-123.3, 44.6], [-123.3, 44.7], [-123.2, 44.7], [-123.2, 44.7]])
+  })
+
+  it.each(['44.6, -123.3\n95, 3', '44.6, 12.5', '-123.3, 200', ''])('offers no exchange for %j', (text) => {
+    expect(read(text).swapped.value).toBeNull()
+  })
+
   it('reads again as the text changes', () => {
     const text = ref('1, 2')
     const { points } = useTypedPoints(() => text.value, () => 'es')

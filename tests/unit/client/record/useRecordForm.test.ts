@@ -1,0 +1,74 @@
+import { flushPromises } from '@vue/test-utils'
+import { beforeEach, describe, expect, it, vi } from 'vitest'
+import { effectScope, ref } from 'vue'
+import { NetworkError } from '../../../../src/api/errors.ts'
+import { recordApi } from '../../../../src/api/recordApi.ts'
+import type { RecordDraft } from '../../../../src/composables/recordDraft.ts'
+import { useRecordForm } from '../../../../src/composables/useRecordForm.ts'
+import type { RecordStock } from '../../../../src/composables/useRecordStock.ts'
+import { buildDraft, buildRecord } from './buildRecord.ts'
+
+type Kept = { begunAt: string; content: { typed: RecordDraft } }
+const drafts = vi.hoisted(() => ({ read: vi.fn(), write: vi.fn(), flush: vi.fn(), remove: vi.fn(), onTakenOver: vi.fn() }))
+vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => drafts }))
+
+const stock: RecordStock = { farmId: 'f1', farm: null, blocks: [], sprayers: [], materials: [], lots: [], people: [] }
+const kept = (over: Partial<RecordDraft>): Kept => ({ begunAt: '2026-06-16T06:00:00.000Z', content: { typed: buildDraft(over) } })
+
+async function open() {
+  const form = effectScope().run(() => useRecordForm({ id: 'r1', fresh: false, likeId: '', stock: ref(stock), stockReady: ref(true) }))
+  if (form === undefined) throw new TypeError('The form did not open')
+  await flushPromises()
+  return form
+}
+
+beforeEach(() => { vi.resetAllMocks() })
+
+describe('opening a draft', () => {
+  it.each(['signed', 'withdrawn'] as const)('drops it where its record is %s', async (state) => {
+    drafts.read.mockResolvedValue(kept({ revision: 3 }))
+    vi.spyOn(recordApi, 'read').mockResolvedValue(buildRecord({ state }))
+    const { state: shown } = await open()
+    expect(shown.value).toBe('signed')
+    expect(drafts.remove).toHaveBeenCalledWith('r1')
+  })
+
+  it('opens it as it is without signal', async () => {
+    drafts.read.mockResolvedValue(kept({ revision: 3 }))
+    vi.spyOn(recordApi, 'read').mockRejectedValue(new NetworkError())
+    const { state, draft } = await open()
+    expect([state.value, draft.value.water.value]).toEqual(['ready', '750'])
+    expect(drafts.remove).not.toHaveBeenCalled()
+  })
+
+  it('asks nobody about a record the server never had', async () => {
+    drafts.read.mockResolvedValue(kept({}))
+    const read = vi.spyOn(recordApi, 'read')
+    expect((await open()).state.value).toBe('ready')
+    expect(read).not.toHaveBeenCalled()
+  })
+})
+
+describe('a draft that another tab types in', () => {
+  it('is shown as it was typed there, and not written back', async () => {
+    drafts.read.mockResolvedValue(kept({}))
+    const { draft } = await open()
+    const take = drafts.onTakenOver.mock.calls[0]?.[1] as (found: Kept) => void
+    take(kept({ blockId: 'b2' }))
+    await flushPromises()
+    expect(draft.value.blockId).toBe('b2')
+    expect(drafts.write).not.toHaveBeenCalled()
+    draft.value.blockId = 'b3'
+    await flushPromises()
+    expect(drafts.write.mock.calls[0]).toMatchObject(['r1', 'record', { typed: { blockId: 'b3' } }])
+  })
+
+  it('is left alone once it is signed here', async () => {
+    drafts.read.mockResolvedValue(kept({}))
+    const { draft, discard } = await open()
+    await discard()
+    const take = drafts.onTakenOver.mock.calls[0]?.[1] as (found: Kept) => void
+    take(kept({ blockId: 'b2' }))
+    expect(draft.value.blockId).toBe('b1')
+  })
+})
