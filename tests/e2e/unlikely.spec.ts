@@ -37,7 +37,7 @@ test('an outline that crosses itself is refused in words', async ({ page, signIn
   const code = unique('X')
   await form.name(code)
   await form.saveButton.click()
-  await expect(form.main.getByRole('alert').filter({ hasText: say('blocks.form.outlineNeeded') }).first()).toBeVisible()
+  await expect(form.main.getByRole('alert').filter({ hasText: saying('blocks.draw.crossing') })).toHaveCount(2)
   expect((await listBlocks(manager)).some((block) => block.code === code)).toBe(false)
 })
 
