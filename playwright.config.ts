@@ -7,11 +7,11 @@ export default defineConfig({
   fullyParallel: false,
   // One after the other: the newest row of the register is then the test's own, and a busy machine stays in time.
   workers: 1,
-  timeout: 90_000,
-  expect: { timeout: 15_000 },
+  timeout: 120_000,
+  expect: { timeout: 20_000 },
   use: {
     baseURL: process.env['E2E_URL'] ?? 'http://127.0.0.1:4310',
-    actionTimeout: 15_000,
+    actionTimeout: 30_000,
     locale: 'en-US',
     timezoneId: 'America/Los_Angeles',
     screenshot: 'only-on-failure',
