@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { EntityManager, EntityTarget, ObjectLiteral } from 'typeorm'
+import type { Page } from '../../shared/contract/common.ts'
 import { cutPage, decodeCursor } from './cursor.ts'
 
 /** Names and codes as the database can compare them: whole characters, no NUL. */
@@ -9,7 +10,7 @@ const nameKey = z.string().max(200).refine((text) => text.isWellFormed() && !tex
 export async function listByKey<Row extends ObjectLiteral & { id: string }, Item>(
   manager: EntityManager,
   target: EntityTarget<Row>,
-  page: { limit: number; cursor?: string | undefined },
+  page: Page,
   farmId: string,
   shape: { key: 'code' | 'name'; where?: Partial<Record<string, string>>; present: (row: Row) => Item },
 ): Promise<{ items: Item[]; next: string | null }> {

@@ -48,6 +48,9 @@ export const pageQuerySchema = z.strictObject({
   cursor: z.string().max(400).optional(),
 })
 
+/** Which part of a list is asked for. */
+export type Page = z.output<typeof pageQuerySchema>
+
 /** Answer of every list. */
 export const pageOf = <Item extends z.ZodType>(item: Item) =>
   z.object({ items: z.array(item), next: z.string().nullable() })

@@ -17,31 +17,35 @@ export interface Overlap {
 /** Shared ground below this is the sliver of a common edge. */
 const SLIVER_M2 = 1
 
-/**
- * Ground that two valid boundaries share, square metres on the ellipsoid; 0 where they only touch or are too fine to clip.
- */
-export function overlapShare(a: Boundary, b: Boundary): number {
-  if (!doBoxesMeet(a, b) || areTooFine(a, b)) return 0
-  const shared = intersect(featureCollection([feature(a), feature(b)]))
-  return shared === null ? 0 : measurePolygon(toBoundary(shared.geometry)).areaM2
+/** What a boundary has in common with others. */
+export interface SharedGround {
+  /** Those that share more than 1 m² with it, largest shared ground first. */
+  overlaps: Overlap[]
+  /** Those whose shared ground cannot be worked out in good time; see `areTooFine`. */
+  tooFine: NamedBoundary[]
 }
 
-/** The boundaries whose ground shared with one cannot be worked out in good time; see `areTooFine`. */
-export function findTooFine(geometry: Boundary, others: readonly NamedBoundary[]): NamedBoundary[] {
-  return others.filter((other) => doBoxesMeet(geometry, other.geometry) && areTooFine(geometry, other.geometry))
-}
-
-/** The boundaries that share more than 1 m² with one, largest shared ground first; those of `findTooFine` are left out. */
-export function findOverlaps(geometry: Boundary, others: readonly NamedBoundary[]): Overlap[] {
+/** The ground that a valid boundary shares with others, each compared once. */
+export function findOverlaps(geometry: Boundary, others: readonly NamedBoundary[]): SharedGround {
+  const near = others.filter((other) => doBoxesMeet(geometry, other.geometry))
+  const tooFine = near.filter((other) => areTooFine(geometry, other.geometry))
   const ownM2 = measurePolygon(geometry).areaM2
-  return others
-    .map((other) => ({ other, areaM2: overlapShare(geometry, other.geometry) }))
+  const overlaps = near
+    .filter((other) => !tooFine.includes(other))
+    .map((other) => ({ other, areaM2: sharedM2(geometry, other.geometry) }))
     .filter(({ areaM2 }) => areaM2 > SLIVER_M2)
     .map(({ other, areaM2 }) => {
       const smallerM2 = Math.min(ownM2, measurePolygon(other.geometry).areaM2)
       return { id: other.id, code: other.code, areaM2, share: Math.min(1, areaM2 / smallerM2) }
     })
     .sort((a, b) => b.areaM2 - a.areaM2 || (a.id < b.id ? -1 : 1))
+  return { overlaps, tooFine }
+}
+
+/** Ground that two boundaries share, square metres on the ellipsoid; 0 where they only touch. */
+function sharedM2(a: Boundary, b: Boundary): number {
+  const shared = intersect(featureCollection([feature(a), feature(b)]))
+  return shared === null ? 0 : measurePolygon(toBoundary(shared.geometry)).areaM2
 }
 
 function doBoxesMeet(a: Boundary, b: Boundary): boolean {

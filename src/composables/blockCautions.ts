@@ -21,7 +21,7 @@ const LEAST_SHARE = 0.05
  */
 export function findCautions(geometry: Boundary, others: readonly NamedBoundary[], farmPlace: Position | null): Caution[] {
   const cautions: Caution[] = []
-  const overlaps = findOverlaps(geometry, others).filter(({ share }) => share > LEAST_SHARE)
+  const overlaps = findOverlaps(geometry, others).overlaps.filter(({ share }) => share > LEAST_SHARE)
   if (overlaps.length > 0) {
     cautions.push({
       code: 'geometry.overlap',

@@ -1,8 +1,9 @@
 import type { Acknowledged } from '../../../shared/contract/common.ts'
 import type { Block as BlockAnswer, CreateBlock } from '../../../shared/contract/block.ts'
 import { checkBoundary } from '../../../shared/geo/checkBoundary.ts'
+import { firstCorner } from '../../../shared/geo/boundaryParts.ts'
 import { distanceKm } from '../../../shared/geo/distanceKm.ts'
-import { findOverlaps, findTooFine, type NamedBoundary } from '../../../shared/geo/findOverlaps.ts'
+import { findOverlaps, type NamedBoundary } from '../../../shared/geo/findOverlaps.ts'
 import type { Boundary } from '../../../shared/geo/geometryTypes.ts'
 import { FAR_KM } from '../../../shared/geo/isFarFrom.ts'
 import { looksSwapped } from '../../../shared/geo/looksSwapped.ts'
@@ -58,32 +59,24 @@ export async function createBlock(services: Services, actor: FarmActor, input: C
 
 function assertLikely(geometry: Boundary, others: NamedBoundary[], acknowledged: Acknowledged): void {
   const passed = new Set(acknowledged.map(({ code }) => code))
-  const doubts = [...findOverlapDoubts(geometry, others), ...findFineDoubts(geometry, others), ...findFarDoubts(geometry, others)].filter(({ code }) => !passed.has(code))
+  const doubts = [...findOverlapDoubts(geometry, others), ...findFarDoubts(geometry, others)].filter(({ code }) => !passed.has(code))
   if (doubts.length > 0) throw unlikely(doubts)
 }
 
 function findOverlapDoubts(geometry: Boundary, others: NamedBoundary[]): FieldError[] {
-  return findOverlaps(geometry, others)
-    .filter(({ share }) => share > OVERLAP_SHARE)
-    .map(({ code, areaM2 }) => ({
-      path: 'geometry',
-      code: 'geometry.overlap',
-      params: { code, areaHa: Number((areaM2 / HECTARE_M2).toFixed(2)) },
-    }))
-}
-
-function findFineDoubts(geometry: Boundary, others: NamedBoundary[]): FieldError[] {
-  return findTooFine(geometry, others).map(({ code }) => ({ path: 'geometry', code: 'geometry.overlap_unknown', params: { code } }))
+  const { overlaps, tooFine } = findOverlaps(geometry, others)
+  const shared = overlaps.filter(({ share }) => share > OVERLAP_SHARE).map(({ code, areaM2 }) => ({
+    path: 'geometry',
+    code: 'geometry.overlap',
+    params: { code, areaHa: Number((areaM2 / HECTARE_M2).toFixed(2)) },
+  }))
+  return [...shared, ...tooFine.map(({ code }) => ({ path: 'geometry', code: 'geometry.overlap_unknown', params: { code } }))]
 }
 
 function findFarDoubts(geometry: Boundary, others: NamedBoundary[]): FieldError[] {
   const nearest = others.map((other) => ({ other, km: distanceKm(geometry, other.geometry) })).sort((a, b) => a.km - b.km)[0]
   if (!nearest || nearest.km <= FAR_KM) return []
-  const place = placeOf(nearest.other.geometry)
+  const place = firstCorner(nearest.other.geometry)
   const code = place && looksSwapped(geometry, place) ? 'geometry.swapped' : 'geometry.far_from_farm'
   return [{ path: 'geometry', code, params: { km: Math.round(nearest.km) } }]
-}
-
-function placeOf(boundary: Boundary): [number, number] | undefined {
-  return boundary.type === 'Polygon' ? boundary.coordinates[0]?.[0] : boundary.coordinates[0]?.[0]?.[0]
 }

@@ -1,4 +1,5 @@
 import type { Block as BlockAnswer } from '../../../shared/contract/block.ts'
+import type { Page } from '../../../shared/contract/common.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
 import { notFound } from '../../errors.ts'
@@ -7,7 +8,7 @@ import type { Services } from '../services.ts'
 import { presentBlock } from './presentBlock.ts'
 
 /** A page of the farm's blocks by code. */
-export function listBlocks(services: Services, actor: FarmActor, page: { limit: number; cursor?: string | undefined }): Promise<{ items: BlockAnswer[]; next: string | null }> {
+export function listBlocks(services: Services, actor: FarmActor, page: Page): Promise<{ items: BlockAnswer[]; next: string | null }> {
   return services.database.inFarm(actor, (manager) => listByKey(manager, Block, page, actor.farmId, { key: 'code', present: presentBlock }))
 }
 

@@ -1,4 +1,6 @@
+import type { Page } from '../../../shared/contract/common.ts'
 import type { Farm as FarmAnswer, Person as PersonAnswer } from '../../../shared/contract/farm.ts'
+import { firstCorner } from '../../../shared/geo/boundaryParts.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { seasonOf } from '../../../shared/time/seasonOf.ts'
 import type { FarmActor } from '../../database/actor.ts'
@@ -14,14 +16,13 @@ export async function describeFarm(services: Services, actor: FarmActor): Promis
   const [first] = await services.database.inFarm(actor, (manager) =>
     manager.find(Block, { select: { geometry: true }, where: { farmId: actor.farmId }, order: { createdAt: 'ASC', id: 'ASC' }, take: 1 }),
   )
-  const ring = first?.geometry.type === 'Polygon' ? first.geometry.coordinates[0] : first?.geometry.coordinates[0]?.[0]
   return {
     id: actor.farmId,
     name: actor.farmName,
     zone: actor.zone,
     seasonStart: actor.seasonStart,
     currentSeason: seasonOf(civilDateIn(actor.zone, services.clock.now().toISOString()), actor.seasonStart),
-    place: ring?.[0] ?? null,
+    place: first ? (firstCorner(first.geometry) ?? null) : null,
   }
 }
 
@@ -29,7 +30,7 @@ export async function describeFarm(services: Services, actor: FarmActor): Promis
 export async function listPeople(
   services: Services,
   actor: FarmActor,
-  page: { limit: number; cursor?: string | undefined },
+  page: Page,
 ): Promise<{ items: PersonAnswer[]; next: string | null }> {
   return services.database.inFarm(actor, async (manager) => {
     const people = await listByKey(manager, Person, page, actor.farmId, { key: 'name', present: (person) => person })

@@ -1,4 +1,5 @@
 import type { z } from 'zod'
+import type { Page } from '../../../shared/contract/common.ts'
 import type { createSprayerSchema, Sprayer as SprayerAnswer } from '../../../shared/contract/farm.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Sprayer } from '../../entities/Sprayer.ts'
@@ -8,7 +9,7 @@ import { listByKey } from '../listByKey.ts'
 import type { Services } from '../services.ts'
 
 /** A page of the farm's sprayers and drenchers by code. */
-export function listSprayers(services: Services, actor: FarmActor, page: { limit: number; cursor?: string | undefined }): Promise<{ items: SprayerAnswer[]; next: string | null }> {
+export function listSprayers(services: Services, actor: FarmActor, page: Page): Promise<{ items: SprayerAnswer[]; next: string | null }> {
   return services.database.inFarm(actor, (manager) => listByKey(manager, Sprayer, page, actor.farmId, { key: 'code', present }))
 }
 

@@ -1,4 +1,5 @@
 import { In } from 'typeorm'
+import type { Page } from '../../../shared/contract/common.ts'
 import type { Lot as LotAnswer, Material as MaterialAnswer } from '../../../shared/contract/input.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Lot } from '../../entities/Lot.ts'
@@ -6,11 +7,6 @@ import { Material } from '../../entities/Material.ts'
 import { listByKey } from '../listByKey.ts'
 import type { Services } from '../services.ts'
 import { presentLot, presentMaterial } from './presentInputs.ts'
-
-interface Page {
-  limit: number
-  cursor?: string | undefined
-}
 
 /** A page of the farm's materials by name. */
 export function listMaterials(services: Services, actor: FarmActor, page: Page): Promise<{ items: MaterialAnswer[]; next: string | null }> {

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import type { Page } from '../../../shared/contract/common.ts'
 import type { ApplicationRecord as RecordAnswer, RegisterRow } from '../../../shared/contract/record.ts'
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import type { FarmActor } from '../../database/actor.ts'
@@ -24,7 +25,7 @@ interface ListedRow {
 export async function listRecords(
   services: Services,
   actor: FarmActor,
-  page: { limit: number; cursor?: string | undefined; block?: string | undefined; state?: RegisterRow['state'] | undefined },
+  page: Page & { block?: string | undefined; state?: RegisterRow['state'] | undefined },
 ): Promise<{ items: RegisterRow[]; next: string | null }> {
   const after = decodeCursor(page.cursor, timeKey)
   const params: unknown[] = [actor.farmId, page.limit + 1]

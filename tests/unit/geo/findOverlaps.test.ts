@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { distanceKm } from '../../../shared/geo/distanceKm.ts'
-import { findOverlaps, overlapShare } from '../../../shared/geo/findOverlaps.ts'
+import { findOverlaps } from '../../../shared/geo/findOverlaps.ts'
+import type { Boundary } from '../../../shared/geo/geometryTypes.ts'
 import { isFarFrom } from '../../../shared/geo/isFarFrom.ts'
 import { looksSwapped } from '../../../shared/geo/looksSwapped.ts'
 import { measurePolygon } from '../../../shared/geo/measurePolygon.ts'
@@ -8,27 +9,29 @@ import { buildMultiPolygon, buildPolygon, buildSquare } from './buildRing.ts'
 
 const block = buildPolygon(buildSquare(10, 45, 0.002))
 const named = (id: string, lon: number, lat: number, side: number) => ({ id, code: id.toUpperCase(), geometry: buildPolygon(buildSquare(lon, lat, side)) })
+const sharedM2 = (a: Boundary, b: Boundary) => findOverlaps(a, [{ id: 'b', code: 'B', geometry: b }]).overlaps[0]?.areaM2 ?? 0
 
 describe('findOverlaps', () => {
   it('gives shared ground and its share of the smaller one, largest first', () => {
-    const overlaps = findOverlaps(block, [
+    const { overlaps, tooFine } = findOverlaps(block, [
       named('far', 11, 45, 0.002), named('beside', 10.002, 45, 0.002), named('corner', 10.0015, 45.0015, 0.002), named('inside', 10.0002, 45.0002, 0.001),
     ])
     expect(overlaps.map(({ id, code }) => [id, code])).toEqual([['inside', 'INSIDE'], ['corner', 'CORNER']])
+    expect(tooFine).toEqual([])
     expect(overlaps[0]?.share).toBeCloseTo(1, 9)
     expect(overlaps[1]?.share).toBeCloseTo(1 / 16, 3)
   })
 
   it('measures the same ground either way round', () => {
     const other = buildMultiPolygon([buildSquare(10.001, 45.001, 0.002)], [buildSquare(9.9995, 44.9995, 0.001)])
-    expect(overlapShare(block, other)).toBeCloseTo(overlapShare(other, block), 6)
+    expect(sharedM2(block, other)).toBeCloseTo(sharedM2(other, block), 6)
     const expected = measurePolygon(buildMultiPolygon([buildSquare(10.001, 45.001)], [buildSquare(10, 45, 0.0005)])).areaM2
-    expect(overlapShare(block, other)).toBeCloseTo(expected, 3)
+    expect(sharedM2(block, other)).toBeCloseTo(expected, 3)
   })
 
   it('leaves the hole of a block to others', () => {
     const withPond = buildPolygon(buildSquare(10, 45, 0.002), buildSquare(10.0005, 45.0005, 0.001))
-    expect(overlapShare(withPond, buildPolygon(buildSquare(10.0006, 45.0006, 0.0005)))).toBe(0)
+    expect(sharedM2(withPond, buildPolygon(buildSquare(10.0006, 45.0006, 0.0005)))).toBe(0)
   })
 })
 
