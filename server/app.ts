@@ -8,7 +8,7 @@ import { limitPasswords } from './middleware/limitPasswords.ts'
 import { readJson } from './middleware/readJson.ts'
 import { refuseForeign } from './middleware/refuseForeign.ts'
 import { serveClient } from './middleware/serveClient.ts'
-import { useSessions } from './middleware/session.ts'
+import { useSessions, type Sessions } from './middleware/session.ts'
 import { setHeaders } from './middleware/setHeaders.ts'
 import { API_PAGE_STYLE, renderApiPage } from './routes/apiPage.ts'
 import { mountRoutes } from './routes/mountRoutes.ts'
@@ -28,9 +28,9 @@ export function createApp(services: Services, clientFolder: string | null): { ap
   // With a public address a proxy on this machine stands in front, and says who asks.
   if (services.config.publicUrl !== null) app.set('trust proxy', 'loopback')
   app.use(pinoHttp({ logger: services.logger, genReqId: () => randomUUID(), autoLogging: false }))
-  app.use(setHeaders(services.config.publicUrl?.startsWith('https:') ?? false))
+  app.use(setHeaders(services.config.cookies.secure))
   app.use(compression())
-  app.use('/api', createApi(services, sessions.handlers))
+  app.use('/api', createApi(services, sessions))
   if (clientFolder !== null) app.use(serveClient(clientFolder))
   app.use(refuseElsewhere)
   app.use(handleErrors(services))
@@ -44,11 +44,10 @@ const refuseElsewhere: RequestHandler = (request, response) => {
   throw new AppError('wrong-method', 'wrong_method')
 }
 
-function createApi(services: Services, sessionHandlers: RequestHandler[]): express.Router {
+function createApi(services: Services, sessions: Sessions): express.Router {
   const api = express.Router()
-  const description = describeApi(ROUTES, VERSION)
+  const description = describeApi(ROUTES, { version: VERSION, sessionCookie: services.config.cookies.sessionName })
   const page = renderApiPage(description)
-  const limits = limitPasswords(services)
   api.use((_request, response, next) => {
     response.set('Cache-Control', 'no-store')
     next()
@@ -58,8 +57,8 @@ function createApi(services: Services, sessionHandlers: RequestHandler[]): expre
   api.get('/docs.css', (_request, response) => void response.type('css').send(API_PAGE_STYLE))
   api.use(refuseForeign)
   api.use(...readJson(BODY_LIMIT))
-  api.use(...sessionHandlers)
-  api.use(mountRoutes(ROUTES, services, limits))
+  api.use(...sessions.handlers)
+  api.use(mountRoutes(ROUTES, { services, limitPasswords: limitPasswords(services), authenticate: sessions.authenticate }))
   api.use(() => {
     throw new AppError('not-found', 'not_found')
   })

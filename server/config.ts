@@ -8,6 +8,7 @@ const environment = z.object({
   DATABASE_POOL: z.coerce.number().int().min(1).max(200).default(10),
   SESSION_SECRET: z.string().min(32, 'must have at least 32 characters'),
   PUBLIC_URL: z.url('must be the address people open, https://…').optional(),
+  FARMS_PER_ACCOUNT: z.coerce.number().int().min(1).max(10_000).default(20),
   LOG_FILE: z.string().optional(),
   SEED_DEMO: z.enum(['0', '1']).default('0'),
   DEMO_PASSWORD: z.string().min(8).optional(),
@@ -22,9 +23,34 @@ export interface Config {
   databasePool: number
   sessionSecret: string
   publicUrl: string | null
+  cookies: CookieConfig
+  /** Farms that one account may own. */
+  farmsPerAccount: number
   logFile: string | null
   demo: { password: string } | null
   fixedClock: string | null
+}
+
+/** How cookies are named and kept. */
+export interface CookieConfig {
+  /** Whether people reach the server by https alone. */
+  secure: boolean
+  sessionName: string
+  /** What the name of a device's mark begins with. */
+  devicePrefix: string
+}
+
+/**
+ * Cookies for an address. By https their names carry the prefixes that a browser takes from this very host (`__Host-`) or by
+ * https (`__Secure-`) alone; by plain http it would refuse such names.
+ */
+export function cookiesOf(publicUrl: string | null): CookieConfig {
+  const secure = publicUrl?.startsWith('https:') ?? false
+  return {
+    secure,
+    sessionName: secure ? '__Host-drenchleaf.sid' : 'drenchleaf.sid',
+    devicePrefix: secure ? '__Secure-drenchleaf.device.' : 'drenchleaf.device.',
+  }
 }
 
 /**
@@ -38,6 +64,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     throw new Error(`The environment is not right: ${faults.join('; ')}`)
   }
   const values = result.data
+  const publicUrl = values.PUBLIC_URL?.replace(/\/$/, '') ?? null
   return {
     port: values.PORT,
     host: values.HOST,
@@ -45,7 +72,9 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     databaseOwnerUrl: values.DATABASE_OWNER_URL,
     databasePool: values.DATABASE_POOL,
     sessionSecret: values.SESSION_SECRET,
-    publicUrl: values.PUBLIC_URL?.replace(/\/$/, '') ?? null,
+    publicUrl,
+    cookies: cookiesOf(publicUrl),
+    farmsPerAccount: values.FARMS_PER_ACCOUNT,
     logFile: values.LOG_FILE ?? null,
     demo: values.SEED_DEMO === '1' && values.DEMO_PASSWORD ? { password: values.DEMO_PASSWORD } : null,
     fixedClock: values.FIXED_CLOCK ?? null,

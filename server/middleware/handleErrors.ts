@@ -2,6 +2,7 @@ import type { ErrorRequestHandler } from 'express'
 import { AppError } from '../errors.ts'
 import type { Services } from '../services/services.ts'
 import { countGuess } from './limitPasswords.ts'
+import { logSecurity, securityEventOf } from './logSecurity.ts'
 import { presentProblem, presentUnforeseen } from './presentProblem.ts'
 import { readLanguage } from './readLanguage.ts'
 
@@ -15,7 +16,11 @@ export function handleErrors(services: Services): ErrorRequestHandler {
       next(error)
       return
     }
-    if (error instanceof AppError && error.countsAsGuess) countGuess(response)
+    if (error instanceof AppError) {
+      if (error.countsAsGuess) countGuess(response)
+      const event = securityEventOf(error)
+      if (event !== null) logSecurity(services, request, event, { code: error.code })
+    }
     const language = readLanguage(request)
     const requestId = String(request.id)
     const problem = presentProblem(error, language, requestId)

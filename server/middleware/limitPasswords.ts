@@ -32,7 +32,7 @@ export function limitPasswords(services: Services): RequestHandler {
     if (request.user && emailOf(request) === '') return [{ limiter: bySession, key: `${request.user.accountId} ${request.sessionID}` }]
     const email = emailOf(request)
     const address = request.ip ?? 'unknown'
-    const device = findKnownDevice(services.config.sessionSecret, request.get('Cookie'), email)
+    const device = findKnownDevice(services.config, request.get('Cookie'), email)
     if (device !== null) return [{ limiter: byAccount, key: `device ${device}` }]
     return [{ limiter: byAddress, key: address }, { limiter: byAccount, key: `${email} ${address}` }]
   }
@@ -65,7 +65,7 @@ function tooMany(response: Response, msBeforeNext: number): AppError {
 }
 
 /** The e-mail that was typed; empty where the body names none, as with a one-time link. */
-function emailOf(request: Request): string {
+export function emailOf(request: Request): string {
   const body: unknown = request.body
   const email = typeof body === 'object' && body !== null && 'email' in body ? body.email : undefined
   return typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : ''

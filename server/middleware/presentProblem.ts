@@ -5,6 +5,8 @@ import { translate, type Language } from '../../shared/messages/translate.ts'
 import { AppError, type FieldError } from '../errors.ts'
 import { findFieldErrors } from './findFieldErrors.ts'
 
+const MOST_ERRORS = 20
+
 /** What a parser of the framework reports about a request it could not read. */
 interface HttpFault {
   status: number
@@ -38,7 +40,7 @@ export function presentUnforeseen(language: Language, requestId: string): Proble
 }
 
 function build(error: AppError, language: Language, requestId: string): Problem {
-  const errors = error.errors.map((field) => presentField(field, language))
+  const errors = cutShort(error).map((field) => presentField(field, language))
   const title = translate(language, `problems.${error.code}`)
   return {
     type: 'about:blank',
@@ -51,6 +53,12 @@ function build(error: AppError, language: Language, requestId: string): Problem 
     ...(error.current !== undefined && { current: error.current }),
     requestId,
   }
+}
+
+/** The first faults and how many more there are: nobody reads a thousand. Doubts stand whole, each is answered by its code. */
+function cutShort({ errors, acknowledgeable }: AppError): FieldError[] {
+  if (acknowledgeable || errors.length <= MOST_ERRORS) return errors
+  return [...errors.slice(0, MOST_ERRORS), { path: '', code: 'more', params: { count: errors.length - MOST_ERRORS } }]
 }
 
 function presentField({ path, code, params, about }: FieldError, language: Language): Problem['errors'][number] {

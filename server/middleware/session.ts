@@ -1,6 +1,6 @@
 import connectPgSimple from 'connect-pg-simple'
 import session from 'express-session'
-import type { RequestHandler } from 'express'
+import type { Request, RequestHandler, Response } from 'express'
 import passport from 'passport'
 import { Strategy as LocalStrategy } from 'passport-local'
 import { isOpenAccount, signIn } from '../services/signIn.ts'
@@ -10,18 +10,8 @@ const DAY_MS = 86_400_000
 /** A session ends after this long, whatever happens; a phone in the rows is not asked every morning. */
 const ABSOLUTE_MS = 30 * DAY_MS
 
-const makeAuthenticator = () => new passport.Passport()
-type Authenticator = ReturnType<typeof makeAuthenticator>
-
-/** Each server's own passport, so that two in one process never answer for each other. */
-const AUTHENTICATORS = new WeakMap<Services, Authenticator>()
-
-/** The passport that judges sign-ins of these services. @throws {Error} before `useSessions`. */
-export function authenticatorOf(services: Services): Authenticator {
-  const authenticator = AUTHENTICATORS.get(services)
-  if (!authenticator) throw new Error('Sessions are not set up')
-  return authenticator
-}
+/** Judges a sign-in and opens its session. @returns the account's id, or null where e-mail and password do not match. */
+export type Authenticate = (request: Request, response: Response) => Promise<string | null>
 
 /** The session store keeps connections of its own, beside the pool that serves. */
 const SESSION_CONNECTIONS = 2
@@ -34,11 +24,18 @@ declare global {
   }
 }
 
+/** What a server keeps of its sessions. */
+export interface Sessions {
+  handlers: RequestHandler[]
+  authenticate: Authenticate
+  close(): void
+}
+
 /**
- * Sessions in PostgreSQL and passport over them. Passport renews the session id on sign-in; what an account may
+ * Sessions in PostgreSQL and passport over them, each server its own. Passport renews the session id on sign-in; what an account may
  * do is read per request, never kept in the session.
  */
-export function useSessions(services: Services): { handlers: RequestHandler[]; close(): void } {
+export function useSessions(services: Services): Sessions {
   const Store = connectPgSimple(session)
   const store = new Store({
     conObject: { connectionString: services.config.databaseUrl, max: SESSION_CONNECTIONS },
@@ -48,9 +45,8 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
     pruneSessionInterval: 900,
     errorLog: (...words: unknown[]) => services.logger.warn({ words }, 'sessions'),
   })
-  const secure = services.config.publicUrl?.startsWith('https:') ?? false
-  const authenticator = makeAuthenticator()
-  AUTHENTICATORS.set(services, authenticator)
+  const { secure, sessionName } = services.config.cookies
+  const authenticator = new passport.Passport()
   authenticator.use(
     new LocalStrategy({ usernameField: 'email' }, (email, password, done) => {
       signIn(services, { email, password }).then(
@@ -65,7 +61,7 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
   })
   const handlers = [
     session({
-      name: 'drenchleaf.sid',
+      name: sessionName,
       secret: services.config.sessionSecret,
       store,
       resave: false,
@@ -76,5 +72,18 @@ export function useSessions(services: Services): { handlers: RequestHandler[]; c
     authenticator.initialize(),
     authenticator.session(),
   ]
-  return { handlers, close: () => store.close() }
+  return { handlers, authenticate: authenticateWith(authenticator), close: () => store.close() }
+}
+
+/** Lets passport judge the e-mail and password of a request, and renew the session. */
+function authenticateWith(authenticator: InstanceType<typeof passport.Passport>): Authenticate {
+  return (request, response) =>
+    new Promise((resolve, reject) => {
+      const judge = authenticator.authenticate('local', (error: unknown, user: Express.User | false) => {
+        if (error) return reject(error as Error)
+        if (!user) return resolve(null)
+        request.logIn(user, (fault: unknown) => (fault ? reject(fault as Error) : resolve(user.accountId)))
+      }) as RequestHandler
+      void judge(request, response, reject)
+    })
 }

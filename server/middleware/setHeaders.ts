@@ -23,6 +23,7 @@ export function setHeaders(secure: boolean) {
         'frame-ancestors': ["'none'"],
       },
     },
+    xFrameOptions: { action: 'deny' },
     strictTransportSecurity: secure,
     referrerPolicy: { policy: 'same-origin' },
   })

@@ -19,6 +19,8 @@ export interface RouteCall<Params, Query, Body, Actor> {
   accountId: string
   language: Language
   services: Services
+  /** Judges the e-mail and password in the body and opens a session; the account's id, or null. */
+  authenticate(): Promise<string | null>
   request: Request
   response: Response
 }

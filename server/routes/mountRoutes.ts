@@ -2,19 +2,27 @@ import { Router, type Request, type RequestHandler, type Response } from 'expres
 import type { z } from 'zod'
 import { AppError, forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from '../database/actor.ts'
+import type { Authenticate } from '../middleware/session.ts'
 import { readLanguage } from '../middleware/readLanguage.ts'
 import type { Services } from '../services/services.ts'
 import type { Route } from './defineRoute.ts'
+
+/** What the routes stand on. */
+interface House {
+  services: Services
+  limitPasswords: RequestHandler
+  authenticate: Authenticate
+}
 
 /**
  * The router of all routes. The order of refusals is the same everywhere: no session 401, not your world 404,
  * not your job 403, then what was sent 422. A method that a path does not have is 405.
  */
-export function mountRoutes(routes: Route[], services: Services, limitPasswords: RequestHandler): Router {
+export function mountRoutes(routes: Route[], house: House): Router {
   const router = Router({ caseSensitive: true })
   for (const route of routes) {
-    const guards = route.guardsPassword ? [limitPasswords] : []
-    router[route.method](route.path, ...guards, (request: Request, response: Response) => serve(route, services, request, response))
+    const guards = route.guardsPassword ? [house.limitPasswords] : []
+    router[route.method](route.path, ...guards, (request: Request, response: Response) => serve(route, house, request, response))
   }
   for (const path of new Set(routes.map((route) => route.path))) {
     router.all(path, (_request: Request, response: Response) => {
@@ -26,7 +34,7 @@ export function mountRoutes(routes: Route[], services: Services, limitPasswords:
   return router
 }
 
-async function serve(route: Route, services: Services, request: Request, response: Response): Promise<void> {
+async function serve(route: Route, { services, authenticate }: House, request: Request, response: Response): Promise<void> {
   const accountId = request.user?.accountId ?? ''
   if (route.roles !== 'everybody' && accountId === '') throw new AppError('unauthenticated', 'unauthenticated')
   const params = parsePath(route.params, request.params)
@@ -39,6 +47,7 @@ async function serve(route: Route, services: Services, request: Request, respons
     accountId,
     language: readLanguage(request),
     services,
+    authenticate: () => authenticate(request, response),
     request,
     response,
   })

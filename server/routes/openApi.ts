@@ -26,7 +26,7 @@ export interface OpenApi {
 const OWN_PAGES = { name: 'X-Requested-With', in: 'header', required: true, schema: { type: 'string', enum: ['drenchleaf'] } }
 
 /** The API as OpenAPI 3.1, from the routes themselves. */
-export function describeApi(routes: Route[], version: string): OpenApi {
+export function describeApi(routes: Route[], { version, sessionCookie }: { version: string; sessionCookie: string }): OpenApi {
   const paths: OpenApi['paths'] = {}
   for (const route of routes) {
     const path = route.path.replace(/:(\w+)/g, '{$1}')
@@ -44,7 +44,7 @@ export function describeApi(routes: Route[], version: string): OpenApi {
     components: {
       schemas: { Problem: schemaOf(problemSchema, 'output') },
       parameters: { OwnPages: OWN_PAGES },
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'drenchleaf.sid' } },
+      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: sessionCookie } },
     },
   }
 }

@@ -3,6 +3,7 @@ import { checkCodeAnswerSchema } from '../../shared/contract/record.ts'
 import { passwordSchema } from '../../shared/contract/session.ts'
 import { lineText } from '../../shared/contract/text.ts'
 import { notFound } from '../errors.ts'
+import { logSecurity } from '../middleware/logSecurity.ts'
 import { findCheckCode } from '../services/findCheckCode.ts'
 import { acceptWelcome, readWelcome } from '../services/welcome.ts'
 import { defineRoute } from './defineRoute.ts'
@@ -36,8 +37,9 @@ export const openRoutes = [
     method: 'post', path: '/welcome', summary: 'Spend a one-time link: take a name and a password.', roles: 'everybody',
     guardsPassword: true, body: z.strictObject({ token: z.string().max(80), name: lineText(120), password: passwordSchema }),
     answer: z.null(),
-    run: async ({ services, body }) => {
-      await acceptWelcome(services, body)
+    run: async ({ services, body, request }) => {
+      const accountId = await acceptWelcome(services, body)
+      logSecurity(services, request, 'password.changed', { accountId })
       return { status: 204, body: null }
     },
   }),

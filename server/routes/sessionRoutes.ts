@@ -1,10 +1,10 @@
 import { z } from 'zod'
 import { sessionSchema, signInSchema } from '../../shared/contract/session.ts'
 import { AppError } from '../errors.ts'
-import { authenticatorOf } from '../middleware/session.ts'
+import { logSecurity } from '../middleware/logSecurity.ts'
 import { describeSession } from '../services/describeSession.ts'
 import { deviceCookieName, markDevice } from '../services/knownDevice.ts'
-import { defineRoute, type RouteCall } from './defineRoute.ts'
+import { defineRoute } from './defineRoute.ts'
 
 const YEAR_MS = 365 * 86_400_000
 
@@ -17,12 +17,14 @@ const postSession = defineRoute({
   body: signInSchema,
   answer: sessionSchema,
   run: async (call) => {
-    const accountId = await authenticate(call)
+    const accountId = await call.authenticate()
+    if (accountId === null) throw new AppError('unauthenticated', 'session.wrong', { countsAsGuess: true })
     const { config } = call.services
-    call.response.cookie(deviceCookieName(config.sessionSecret, call.body.email), markDevice(config.sessionSecret, call.body.email), {
+    logSecurity(call.services, call.request, 'sign-in.ok', { accountId })
+    call.response.cookie(deviceCookieName(config, call.body.email), markDevice(config.sessionSecret, call.body.email), {
       httpOnly: true,
       sameSite: 'lax',
-      secure: config.publicUrl?.startsWith('https:') ?? false,
+      secure: config.cookies.secure,
       maxAge: YEAR_MS,
       path: '/api/session',
     })
@@ -45,23 +47,11 @@ const deleteSession = defineRoute({
   summary: 'Sign out.',
   roles: 'account',
   answer: z.null(),
-  run: async ({ request, response }) => {
+  run: async ({ request, response, services }) => {
     await new Promise<void>((resolve, reject) => request.session.destroy((error) => (error ? reject(error as Error) : resolve())))
-    response.clearCookie('drenchleaf.sid', { path: '/' })
+    response.clearCookie(services.config.cookies.sessionName, { path: '/', secure: services.config.cookies.secure })
     return { status: 204, body: null }
   },
 })
 
 export const sessionRoutes = [postSession, getSession, deleteSession]
-
-/** Lets passport judge the e-mail and password, and renew the session. */
-function authenticate({ request, response, services }: Pick<RouteCall<unknown, unknown, unknown, unknown>, 'request' | 'response' | 'services'>): Promise<string> {
-  return new Promise((resolve, reject) => {
-    const judge = authenticatorOf(services).authenticate('local', (error: unknown, user: Express.User | false) => {
-      if (error) return reject(error as Error)
-      if (!user) return reject(new AppError('unauthenticated', 'session.wrong', { countsAsGuess: true }))
-      request.logIn(user, (fault: unknown) => (fault ? reject(fault as Error) : resolve(user.accountId)))
-    }) as (request: unknown, response: unknown, next: (error: unknown) => void) => void
-    judge(request, response, reject)
-  })
-}

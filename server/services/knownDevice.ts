@@ -1,10 +1,11 @@
 import { createHmac, randomBytes, timingSafeEqual } from 'node:crypto'
+import type { Config } from '../config.ts'
 
 const DEVICE = /^[\w-]{22}$/
 
 /** The name of the cookie that marks a device for one account; a shared phone holds one for each. */
-export function deviceCookieName(secret: string, email: string): string {
-  return `drenchleaf.device.${seal(secret, `name ${fold(email)}`).slice(0, 10)}`
+export function deviceCookieName({ cookies, sessionSecret }: Pick<Config, 'cookies' | 'sessionSecret'>, email: string): string {
+  return `${cookies.devicePrefix}${seal(sessionSecret, `name ${fold(email)}`).slice(0, 10)}`
 }
 
 /** A mark for a device that has signed an account in; it opens nothing, failures of that device only count apart. */
@@ -14,12 +15,12 @@ export function markDevice(secret: string, email: string): string {
 }
 
 /** The device that the cookies name for this account, or null where none has signed it in before. */
-export function findKnownDevice(secret: string, cookies: string | undefined, email: string): string | null {
-  const name = deviceCookieName(secret, email)
-  const value = cookies?.split('; ').find((cookie) => cookie.startsWith(`${name}=`))?.slice(name.length + 1)
+export function findKnownDevice(config: Pick<Config, 'cookies' | 'sessionSecret'>, sent: string | undefined, email: string): string | null {
+  const name = deviceCookieName(config, email)
+  const value = sent?.split('; ').find((cookie) => cookie.startsWith(`${name}=`))?.slice(name.length + 1)
   const [device = '', given = ''] = value?.split('.') ?? []
   if (!DEVICE.test(device)) return null
-  const wanted = Buffer.from(seal(secret, `device ${device} ${fold(email)}`))
+  const wanted = Buffer.from(seal(config.sessionSecret, `device ${device} ${fold(email)}`))
   const found = Buffer.from(given)
   return found.length === wanted.length && timingSafeEqual(found, wanted) ? device : null
 }

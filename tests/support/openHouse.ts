@@ -1,12 +1,12 @@
 import { randomBytes } from 'node:crypto'
 import type { Express } from 'express'
 import pg from 'pg'
-import pino from 'pino'
+import pino, { type Logger } from 'pino'
 import supertest from 'supertest'
 import { v7 as uuidV7 } from 'uuid'
 import { createGroundTiles } from '../../server/adapters/tiles/groundTiles.ts'
 import { createApp } from '../../server/app.ts'
-import type { Config } from '../../server/config.ts'
+import { cookiesOf, type Config } from '../../server/config.ts'
 import type { FarmActor } from '../../server/database/actor.ts'
 import { openDatabase } from '../../server/database/database.ts'
 import { makeAccount, makeGrant, makePerson } from '../../server/demo/makeAccount.ts'
@@ -45,7 +45,7 @@ export interface TestHouse {
 let passwordHash: Promise<string> | undefined
 
 /** Opens a house for one test file. */
-export async function openHouse(changes: { config?: Partial<Config> } = {}): Promise<TestHouse> {
+export async function openHouse(changes: { config?: Partial<Config>; logger?: Logger } = {}): Promise<TestHouse> {
   const cluster = readTestCluster()
   const name = `test_${randomBytes(8).toString('hex')}`
   await onAdmin(cluster.adminUrl, `CREATE DATABASE ${name} TEMPLATE ${TEMPLATE} OWNER drenchleaf_owner`)
@@ -53,12 +53,13 @@ export async function openHouse(changes: { config?: Partial<Config> } = {}): Pro
   const config: Config = {
     port: 4310, host: '127.0.0.1', databasePool: 5, logFile: null, demo: null, fixedClock: null, publicUrl: null,
     databaseUrl: databaseUrl(cluster, 'app', name), databaseOwnerUrl: databaseUrl(cluster, 'owner', name),
-    sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    farmsPerAccount: 20, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    cookies: cookiesOf(changes.config?.publicUrl ?? null),
   }
   const services: Services = {
     config,
     clock: { now: () => new Date(now) },
-    logger: pino({ level: 'error' }, pino.destination(2)),
+    logger: changes.logger ?? pino({ level: 'error' }, pino.destination(2)),
     database: await openDatabase(config.databaseUrl, config.databasePool, () => undefined),
     reports: createReportProcess(),
     tiles: createGroundTiles({ type: 'FeatureCollection', features: [] }),

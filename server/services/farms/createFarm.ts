@@ -1,5 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import { v7 as uuidV7 } from 'uuid'
+import type { EntityManager } from 'typeorm'
 import type { z } from 'zod'
 import type { createFarmSchema, Farm as FarmAnswer } from '../../../shared/contract/farm.ts'
 import { isZone } from '../../../shared/time/isZone.ts'
@@ -14,7 +15,10 @@ import { digestOf } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { describeFarm } from './describeFarm.ts'
 
-/** Makes a farm whose owner is the caller. @returns the farm, and whether this call made it. */
+/**
+ * Makes a farm whose owner is the caller. @returns the farm, and whether this call made it.
+ * @throws {AppError} `farm.zone`, `farm.too_many` for an account that owns as many as it may.
+ */
 export async function createFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>): Promise<{ made: boolean; farm: FarmAnswer }> {
   if (!isZone(input.zone)) throw invalid([{ path: 'zone', code: 'farm.zone' }])
   const creationDigest = digestOf(input)
@@ -38,7 +42,9 @@ async function findOpen(services: Services, accountId: string, farmId: string): 
 async function insertFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>, creationDigest: string): Promise<void> {
   const createdAt = services.clock.now()
   await services.database.inFarm({ farmId: input.id, seasons: null }, async (manager) => {
-    const account = await manager.findOneByOrFail(Account, { id: accountId })
+    // Locked, so that farms made at the same moment are counted one after the other.
+    const account = await manager.findOneOrFail(Account, { where: { id: accountId }, lock: { mode: 'pessimistic_write' } })
+    await assertRoomForOne(services, manager, accountId)
     const taken = await manager.createQueryBuilder().insert().into(Farm)
       .values({ ...input, revision: 1, creationDigest, createdAt }).orIgnore().returning('id').execute()
     // An id of somebody else's farm is answered like one's own repeated with other content: nothing is learned.
@@ -51,4 +57,12 @@ async function insertFarm(services: Services, accountId: string, input: z.output
     })
     await appendJournal(services, manager, { farmId: input.id, personId, accountId }, { action: 'farm.created', subjectId: input.id, detail: { name: input.name } })
   })
+}
+
+async function assertRoomForOne({ config, clock }: Services, manager: EntityManager, accountId: string): Promise<void> {
+  const [{ owned }]: [{ owned: number }] = await manager.query(
+    "SELECT count(*)::integer AS owned FROM account_access($1, $2) WHERE role = 'owner'",
+    [accountId, clock.now()],
+  )
+  if (owned >= config.farmsPerAccount) throw invalid([{ path: 'id', code: 'farm.too_many', params: { maximum: config.farmsPerAccount } }])
 }

@@ -18,6 +18,7 @@ export const problems = {
   conflict: 'This is already there.',
   internal: 'Something failed here, not with you. Try again; if it stays, tell whoever runs this server the number below.',
   unknown_field: 'This field is not known here. Leave it out.',
+  more: 'And {count} more.',
   field: {
     required: 'This is missing.',
     type: 'This must be {expected}.',
@@ -70,6 +71,7 @@ export const problems = {
   },
   farm: {
     zone: 'Give a time zone by its place, such as America/Los_Angeles.',
+    too_many: 'One account owns at most {maximum} farms here. Ask whoever runs this server for more.',
   },
   welcome: { used_up: 'This link does not work any more. Ask for a new one.', password_short: 'Use at least 12 characters.', password_known: 'This is one of the first passwords anybody tries. Choose another.' },
   code: { taken: '{code} is already used on this farm. Choose another.' },

@@ -18,6 +18,7 @@ export const problems = {
   conflict: 'Esto ya existe.',
   internal: 'Algo falló aquí, no en su lado. Inténtelo de nuevo; si sigue, dé el número de abajo a quien lleva este servidor.',
   unknown_field: 'Este campo no se conoce aquí. Quítelo.',
+  more: 'Y {count} más.',
   field: {
     required: 'Falta este dato.',
     type: 'Esto debe ser {expected}.',
@@ -70,6 +71,7 @@ export const problems = {
   },
   farm: {
     zone: 'Indique una zona horaria por su lugar, como America/Los_Angeles.',
+    too_many: 'Una cuenta es dueña aquí de {maximum} fincas como máximo. Pida más a quien administra este servidor.',
   },
   welcome: { used_up: 'Este enlace ya no sirve. Pida uno nuevo.', password_short: 'Use al menos 12 caracteres.', password_known: 'Es una de las primeras contraseñas que prueba cualquiera. Elija otra.' },
   code: { taken: '{code} ya se usa en esta finca. Elija otro.' },

@@ -4,7 +4,7 @@ import { buildBlock, buildLot, buildMaterial, buildRecord } from '../../../serve
 import { describeApi } from '../../../server/routes/openApi.ts'
 import { ROUTES } from '../../../server/routes/routes.ts'
 
-const api = JSON.parse(JSON.stringify(describeApi(ROUTES, '1'))) as ReturnType<typeof describeApi> & { components: Record<string, Record<string, unknown>> }
+const api = JSON.parse(JSON.stringify(describeApi(ROUTES, { version: '1', sessionCookie: 'sid' }))) as ReturnType<typeof describeApi> & { components: Record<string, Record<string, unknown>> }
 const operations = Object.entries(api.paths).flatMap(([path, methods]) => Object.entries(methods).map(([method, operation]) => ({ name: `${method} ${path}`, method, operation })))
 const statuses = (name: string) => Object.keys(operations.find((entry) => entry.name === name)?.operation.responses ?? {})
 const ids = { materialId: uuidV7(), blockId: uuidV7(), lotId: uuidV7() }
