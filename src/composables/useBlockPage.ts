@@ -1,5 +1,6 @@
 import { computed, type ComputedRef } from 'vue'
 import type { Check } from '../../shared/contract/record.ts'
+import { countCorners } from '../../shared/geo/countCorners.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
@@ -35,7 +36,7 @@ export function useBlockPage(id: () => string, { farmId, farm, blocks, language 
   return {
     block,
     records,
-    corners: computed(() => formatNumber(cornersOf(block.value), { digits: 0 }, language.value)),
+    corners: computed(() => formatNumber(block.value === null ? 0 : countCorners(block.value.geometry), { digits: 0 }, language.value)),
     drawnOn: computed(() => (block.value === null ? '' : dayOf(block.value.createdAt))),
     lines: computed(() => rows.value.map((row) => blockRecordLine(language.value, zone.value, row))),
     lastOn: computed(() => {
@@ -44,12 +45,4 @@ export function useBlockPage(id: () => string, { farmId, farm, blocks, language 
     }),
     checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code))),
   }
-}
-
-/** Corners of every ring; the last position of a ring repeats its first. */
-function cornersOf(block: BlockWords | null): number {
-  if (block === null) return 0
-  const { geometry } = block
-  const rings = geometry.type === 'Polygon' ? geometry.coordinates : geometry.coordinates.flat()
-  return rings.reduce((sum, ring) => sum + ring.length - 1, 0)
 }

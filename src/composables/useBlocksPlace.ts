@@ -1,6 +1,7 @@
 import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import type { Block } from '../../shared/contract/block.ts'
 import type { Farm } from '../../shared/contract/farm.ts'
+import { totalAreaM2 } from '../../shared/geo/totalAreaM2.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { MapView } from './mapTypes.ts'
@@ -43,7 +44,7 @@ export function useBlocksPlace(): BlocksPlace {
   const farm = useFarm(farmId)
   const config = useConfig()
   const all = computed<readonly Block[]>(() => query.data.value ?? [])
-  const area = computed(() => hectaresText(language.value, all.value.reduce((sum, { areaM2 }) => sum + areaM2, 0)))
+  const area = computed(() => hectaresText(language.value, totalAreaM2(all.value)))
 
   function startView(): MapView | null {
     const last = lastViews.get(farmId.value)

@@ -3,7 +3,7 @@ import { checkBoundary } from '../../shared/geo/checkBoundary.ts'
 import type { Boundary, GeometryFinding, Position } from '../../shared/geo/geometryTypes.ts'
 import { measurePolygon, type PolygonMeasure } from '../../shared/geo/measurePolygon.ts'
 import { outlineOf, type BlockDraftContent } from './blockDraftContent.ts'
-import { isSameCorner } from './isSameCorner.ts'
+import { isSameCorner } from '../../shared/geo/isSameCorner.ts'
 
 /** An outline in the making: its corners, the way back and forth, and what it measures. */
 export interface Outline {

@@ -4,7 +4,7 @@ import type { PointProblem } from '../../shared/geo/parsePointLine.ts'
 import { parsePoints } from '../../shared/geo/parsePoints.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { translate, type Language } from '../../shared/messages/translate.ts'
-import { isSameCorner } from './isSameCorner.ts'
+import { isSameCorner } from '../../shared/geo/isSameCorner.ts'
 import { isLatitudeOut, swapLines } from './swapLines.ts'
 
 /** Typed points, read line by line. */

@@ -4,8 +4,9 @@ import { useSession } from '../stores/session.ts'
 /** Who is not signed in goes to the cover and comes back; a certifier starts at My farms; a wrong role finds nothing; who has no farm makes one. */
 export async function guard(to: RouteLocationNormalized): Promise<NavigationGuardReturn> {
   const session = useSession()
-  await session.load()
+  // Pages for anyone ask nothing: the server would answer that nobody is signed in.
   if (to.meta.open === true) return true
+  await session.load()
   if (session.user === null) return { name: 'sign-in', query: to.fullPath === '/' ? {} : { next: to.fullPath } }
   if (session.role === null) return to.name === 'farm-new' ? true : { name: 'farm-new' }
   const roles = to.meta.roles

@@ -23,8 +23,10 @@ export const useSession = defineStore('session', () => {
   const role = computed<Role | null>(() => membership.value?.role ?? null)
   /** May add blocks, inputs and sprayers. */
   const canManage = computed(() => role.value === 'owner' || role.value === 'manager')
+  /** Works on the farm: no outsider. */
+  const isOfFarm = computed(() => role.value !== null && role.value !== 'certifier')
   /** May write records. */
-  const canRecord = computed(() => role.value !== null && role.value !== 'certifier')
+  const canRecord = isOfFarm
 
   /** Asks once who is signed in; without signal, whoever was last. */
   async function load(): Promise<void> {
@@ -42,7 +44,6 @@ export const useSession = defineStore('session', () => {
     const answer = await sessionApi.signIn(email, password)
     if (user.value !== null && user.value.id !== answer.user.id) queryClient.clear()
     accept(answer)
-    loaded.value = true
   }
 
   /** Leaves: what the server gave is wiped, drafts and kept commands stay for their account. */
@@ -61,6 +62,7 @@ export const useSession = defineStore('session', () => {
   /** A session made elsewhere: a welcome link accepted. */
   function accept(answer: Session): void {
     session.value = answer
+    loaded.value = true
     void keepSession(answer)
   }
 
@@ -76,7 +78,7 @@ export const useSession = defineStore('session', () => {
   }
 
   return {
-    session, loaded, user, memberships, membership, farmId, role, canManage, canRecord,
+    session, loaded, user, memberships, membership, farmId, role, canManage, isOfFarm, canRecord,
     load, signIn, signOut, forget, accept, open, chooseFarm,
   }
 })

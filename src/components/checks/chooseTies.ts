@@ -1,3 +1,4 @@
+import { byVerdict } from '../../../shared/checks/worstFirst.ts'
 import type { Verdict } from '../../../shared/contract/record.ts'
 
 /** A thread that could be drawn: from a height on the page to a height in the checks column. */
@@ -10,12 +11,11 @@ export interface Tie {
 }
 
 const MOST = 6
-const RANK: Record<Verdict, number> = { stop: 0, caution: 1, unknown: 2, pass: 3 }
 
 /** The threads to draw: worst first, one a thing, six at most, and never two that cross: the lesser is dropped. */
 export function chooseTies(ties: readonly Tie[]): Tie[] {
   const chosen: Tie[] = []
-  for (const tie of [...ties].sort((one, other) => RANK[one.verdict] - RANK[other.verdict])) {
+  for (const tie of ties.toSorted(byVerdict)) {
     if (chosen.length === MOST) break
     const fits = chosen.every((other) => other.about !== tie.about && !cross(tie, other))
     if (fits) chosen.push(tie)

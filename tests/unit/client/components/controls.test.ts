@@ -3,6 +3,7 @@ import { nextTick } from 'vue'
 import AppButton from '../../../../src/components/app/AppButton.vue'
 import AppMeasure from '../../../../src/components/app/AppMeasure.vue'
 import AppSegment from '../../../../src/components/app/AppSegment.vue'
+import AppSelect from '../../../../src/components/app/AppSelect.vue'
 import AppText from '../../../../src/components/app/AppText.vue'
 import AppTime from '../../../../src/components/app/AppTime.vue'
 import { mountWithWords } from '../mountWithWords.ts'
@@ -85,6 +86,24 @@ describe('AppSegment', () => {
     expect(segment.get('legend').text()).toBe('Light')
     await segment.get('input[value="dawn"]').setValue(true)
     expect(segment.emitted('update:modelValue')).toEqual([['dawn']])
+  })
+})
+
+describe('AppSelect', () => {
+  it('keeps Escape for its list while that is open, and leaves it to the dialog around it when closed', async () => {
+    const heard: string[] = []
+    const hear = (event: KeyboardEvent): void => { heard.push(event.key) }
+    document.addEventListener('keydown', hear)
+    const select = mountWithWords(AppSelect, { modelValue: null, label: 'Kind', options: [{ value: 'soap', label: 'Soap' }] })
+    const box = select.get('[role="combobox"]')
+    await box.trigger('keydown', { key: 'Escape', code: 'Escape' })
+    expect(heard).toEqual(['Escape'])
+    await box.trigger('click')
+    expect(box.attributes('aria-expanded')).toBe('true')
+    await box.trigger('keydown', { key: 'Escape', code: 'Escape' })
+    expect(heard).toEqual(['Escape'])
+    expect(box.attributes('aria-expanded')).toBe('false')
+    document.removeEventListener('keydown', hear)
   })
 })
 

@@ -1,5 +1,5 @@
-import { metresPerDegree } from '../../../shared/geo/ellipsoid.ts'
-import type { Position } from '../../../shared/geo/geometryTypes.ts'
+import { metresPerDegree } from './ellipsoid.ts'
+import type { Position } from './geometryTypes.ts'
 
 /** Nearer to a pole a metre east means nothing. */
 const MOST_LATITUDE = 89

@@ -1,8 +1,8 @@
 import geodesic from 'geographiclib-geodesic'
 import { describe, expect, it } from 'vitest'
-import { movePosition } from '../../../../src/components/map/movePosition.ts'
-import { isSameCorner } from '../../../../src/composables/isSameCorner.ts'
-import type { Position } from '../../../../shared/geo/geometryTypes.ts'
+import { movePosition } from '../../../shared/geo/movePosition.ts'
+import { isSameCorner } from '../../../shared/geo/isSameCorner.ts'
+import type { Position } from '../../../shared/geo/geometryTypes.ts'
 
 /** Metres between two positions by Karney's inverse solution (2013) on WGS84. */
 function metresBetween(a: Position, b: Position): number {

@@ -1,4 +1,4 @@
-import type { Position } from '../../shared/geo/geometryTypes.ts'
+import type { Position } from './geometryTypes.ts'
 
 /** 0.2 m along a meridian, in degrees. */
 const NEAR_DEGREES = 1.8e-6
