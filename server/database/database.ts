@@ -1,5 +1,6 @@
-import type { DataSource, EntityManager } from 'typeorm'
+import { QueryFailedError, type DataSource, type EntityManager } from 'typeorm'
 import type { Role } from '../../shared/contract/session.ts'
+import { forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from './actor.ts'
 import { createAppSource } from './dataSource.ts'
 
@@ -14,13 +15,17 @@ interface AccessRow {
   seasons: number[] | null
 }
 
+/** Who acts, where; seeding and the making of a farm know no role. */
+type Scope = Pick<FarmActor, 'farmId' | 'seasons'> & Partial<Pick<FarmActor, 'role'>>
+
 /** The only way to the data: by farm (`inFarm`), or to what belongs to no farm (`inHouse`). */
 export interface Database {
   /**
    * One transaction on one farm. Its first statement names the farm and, for a certifier, the seasons;
-   * row-level security shows nothing else.
+   * row-level security shows nothing else. The journal asks once more, in the same transaction, whether the doer still has the role.
+   * @throws {AppError} not-found or forbidden if the role has ended or changed since the actor was read.
    */
-  inFarm<T>(actor: Pick<FarmActor, 'farmId' | 'seasons'>, work: (manager: EntityManager) => Promise<T>): Promise<T>
+  inFarm<T>(actor: Scope, work: (manager: EntityManager) => Promise<T>): Promise<T>
   /** Accounts, one-time links: what belongs to no farm. Farm tables show no row here. */
   inHouse<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>
   /** The farms open to an account at an instant, read anew each time. */
@@ -42,14 +47,28 @@ export async function openDatabase(url: string, poolSize: number, onFault: (erro
 
 async function inFarm<T>(
   source: DataSource,
-  actor: Pick<FarmActor, 'farmId' | 'seasons'>,
+  { farmId, seasons, role }: Scope,
   work: (manager: EntityManager) => Promise<T>,
 ): Promise<T> {
-  return source.transaction(async (manager) => {
-    const seasons = actor.seasons === null ? '' : `{${actor.seasons.join(',')}}`
-    await manager.query("SELECT set_config('app.farm_id', $1, true), set_config('app.seasons', $2, true)", [actor.farmId, seasons])
-    return work(manager)
-  })
+  try {
+    return await source.transaction(async (manager) => {
+      const granted = seasons === null ? '' : `{${seasons.join(',')}}`
+      await manager.query(
+        "SELECT set_config('app.farm_id', $1, true), set_config('app.seasons', $2, true), set_config('app.role', $3, true)",
+        [farmId, granted, role ?? ''],
+      )
+      return work(manager)
+    })
+  } catch (error) {
+    throw refusalOf(error) ?? error
+  }
+}
+
+/** What the journal's guard says of a doer, as the refusal that anybody without the role gets; null for anything else. */
+function refusalOf(error: unknown): Error | null {
+  const code = error instanceof QueryFailedError ? (error.driverError as { code?: unknown }).code : undefined
+  if (code === 'FA404') return notFound()
+  return code === 'FA403' ? forbidden() : null
 }
 
 async function listAccess(source: DataSource, accountId: string, at: Date): Promise<FarmActor[]> {

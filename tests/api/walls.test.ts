@@ -1,7 +1,12 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import pg from 'pg'
-import { buildRecord } from '../../server/demo/buildThings.ts'
+import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from '../../server/demo/buildThings.ts'
 import { Block } from '../../server/entities/Block.ts'
+import { LotEntry } from '../../server/entities/LotEntry.ts'
+import { SeasonCounter } from '../../server/entities/SeasonCounter.ts'
+import { appendJournal } from '../../server/services/appendJournal.ts'
+import { createBlock } from '../../server/services/blocks/createBlock.ts'
+import { createMaterial } from '../../server/services/inputs/createMaterial.ts'
 import { openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 import { seedThings, type SeededThings } from '../support/seedThings.ts'
 
@@ -129,5 +134,81 @@ describe('a certifier', () => {
     const late = await certifier.get(`/api/farms/${farm.id}/records`)
     house.setNow('2026-06-16T14:00:00Z')
     expect(late.status).toBe(404)
+  })
+
+  it('sees the blocks, lots and ledgers that stand in granted records, and no others', async () => {
+    const farm = await house.makeFarm({ seasons: [2026] })
+    const used = await seedThings(house, farm)
+    const owner = await house.as(farm.accounts.owner)
+    const make = async (kind: string, body: { id: string }) => {
+      await owner.post(`/api/farms/${farm.id}/${kind}`).send(body).expect(201)
+      return body.id
+    }
+    const olderBlock = await make('blocks', buildBlock({ code: 'OLD', geometry: squareAt(2) }))
+    const olderLot = await make('lots', buildLot({ materialId: used.materialId, code: 'OLD' }))
+    await make('blocks', buildBlock({ code: 'NEVER', geometry: squareAt(4) }))
+    await make('lots', buildLot({ materialId: used.materialId, code: 'NEVER' }))
+    const draftedBlock = await make('blocks', buildBlock({ code: 'DRAFT', geometry: squareAt(6) }))
+    await make('records', buildRecord({ ...used, blockId: draftedBlock }))
+    const older = { ...used, blockId: olderBlock, lotId: olderLot, startedAt: '2026-02-20T13:00:00Z', endedAt: '2026-02-20T14:00:00Z' }
+    for (const input of [buildRecord(used), buildRecord(older)]) {
+      await make('records', input)
+      await owner.post(`/api/farms/${farm.id}/records/${input.id}/sign`)
+        .send({ password: PASSWORD, acknowledged: [{ code: 'record.late', reason: 'Found in the notebook.' }] }).expect(200)
+    }
+    const certifier = await house.as(farm.accounts.certifier)
+    const codesOf = async (kind: string) => (await certifier.get(`/api/farms/${farm.id}/${kind}`).expect(200)).body.items.map(({ id }: { id: string }) => id)
+    expect(await codesOf('blocks')).toEqual([used.blockId])
+    expect(await codesOf('lots')).toEqual([used.lotId])
+    expect(await codesOf('materials')).toEqual([used.materialId])
+    expect((await certifier.get(`/api/farms/${farm.id}/blocks/${olderBlock}`)).status).toBe(404)
+    const [ledger, counters] = await house.services.database.inFarm({ farmId: farm.id, seasons: [2026] }, async (manager) => [
+      await manager.find(LotEntry, { select: { lotId: true } }),
+      await manager.find(SeasonCounter, { select: { season: true } }),
+    ] as const)
+    expect([...new Set(ledger.map(({ lotId }) => lotId))]).toEqual([used.lotId])
+    expect(counters.map(({ season }) => season)).toEqual([2026])
+    const all = await owner.get(`/api/farms/${farm.id}/blocks`).expect(200)
+    expect(all.body.items).toHaveLength(4)
+  })
+})
+
+describe('a role that ended after its request was let in', () => {
+  const change = (farm: TestFarm, sql: string) =>
+    house.services.database.inFarm({ farmId: farm.id, seasons: null }, (manager) => manager.query(`UPDATE people SET ${sql} WHERE id = $1`, [farm.personIds.manager]))
+
+  it.each([
+    { what: 'the person is out', sql: 'active = false', refusal: 'not-found' },
+    { what: 'the role is another', sql: "role = 'applicator'", refusal: 'forbidden' },
+  ])('finishes nothing: $what', async ({ sql, refusal }) => {
+    const farm = await house.makeFarm()
+    const actor = await farm.actor('manager')
+    await change(farm, sql)
+    const input = { ...buildBlock(), crop: null, acknowledged: [] }
+    await expect(createBlock(house.services, actor, input)).rejects.toMatchObject({ refusal })
+    const blocks = await house.services.database.inFarm({ farmId: farm.id, seasons: null }, (manager) => manager.count(Block))
+    expect(blocks).toBe(0)
+  })
+
+  it('finishes nothing: the account is closed', async () => {
+    const farm = await house.makeFarm()
+    const actor = await farm.actor('manager')
+    await house.services.database.inHouse((manager) => manager.query('UPDATE accounts SET deactivated_at = now() WHERE id = $1', [actor.accountId]))
+    await expect(createMaterial(house.services, actor, buildMaterial())).rejects.toMatchObject({ refusal: 'not-found' })
+  })
+
+  it('waits where the deed came first', async () => {
+    const farm = await house.makeFarm()
+    const actor = await farm.actor('manager')
+    await house.services.database.inFarm(actor, async (manager) => {
+      await appendJournal(house.services, manager, actor, { action: 'test.deed', subjectId: farm.id })
+      const ending = house.services.database.inFarm({ farmId: farm.id, seasons: null }, async (other) => {
+        await other.query("SET LOCAL lock_timeout = '200ms'")
+        await other.query('UPDATE people SET active = false WHERE id = $1', [farm.personIds.manager])
+      })
+      await expect(ending).rejects.toMatchObject({ code: '55P03' })
+    })
+    await change(farm, 'active = false')
+    expect(await house.services.database.listAccess(actor.accountId, new Date())).toEqual([])
   })
 })
