@@ -11,6 +11,7 @@ export default defineConfig({
           environment: 'node',
           include: ['tests/{unit,reference,house,cli}/**/*.test.ts'],
           exclude: ['tests/unit/client/**'],
+          setupFiles: ['shared/messages/everyLanguage.ts'],
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },
@@ -21,6 +22,7 @@ export default defineConfig({
           name: 'client',
           environment: 'jsdom',
           include: ['tests/unit/client/**/*.test.ts'],
+          setupFiles: ['tests/unit/client/readLanguages.ts'],
           // its modules import their own .css, which Node.js cannot
           server: { deps: { inline: ['element-plus'] } },
           testTimeout: 30_000,
@@ -32,6 +34,7 @@ export default defineConfig({
           environment: 'node',
           include: ['tests/api/**/*.test.ts'],
           globalSetup: ['tests/support/globalSetup.ts'],
+          setupFiles: ['shared/messages/everyLanguage.ts'],
           maxWorkers: 2,
           testTimeout: 30_000,
           hookTimeout: 60_000,

@@ -18,10 +18,13 @@ import './styles/styles.ts'
 const app = createApp(App)
 app.use(createPinia()).use(i18n).use(VueQueryPlugin, { queryClient })
 
-usePreferences()
+const words = usePreferences().start()
 useOutbox().start()
 // A session that ends while nobody is signed in here is no question to anyone.
 onSessionEnd(() => (useSession().user === null ? Promise.resolve(false) : useReentry().ask()))
 
 readViewsWhenIdle(router)
-app.use(router).mount('#app')
+// The first page is on its way while the words are read.
+app.use(router)
+await words
+app.mount('#app')

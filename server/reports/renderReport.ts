@@ -1,5 +1,6 @@
 import type { Writable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
+import '../../shared/messages/everyLanguage.ts'
 import { gatherChunks } from './parts/gatherChunks.ts'
 import { recordReport } from './recordReport.ts'
 import type { RecordReportData } from './recordReportData.ts'

@@ -12,13 +12,17 @@ import { session } from './en/session.ts'
 import { today } from './en/today.ts'
 import { units } from './en/units.ts'
 
-/** Every word a person reads, in English; `{name}` stands for a parameter. The shape of every other language. */
-export const en = {
-  blocks, checks, common, farm, frame, inputs, pdf, problems, records, register, session, today, units,
+/** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
+export const screens = {
+  blocks, checks, common, farm, frame, inputs, problems, records, register, session, today, units,
 }
+
+/** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */
+export const en = { ...screens, pdf }
 
 /** The same tree with any words in its leaves. */
 export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }
+export type Screens = WordsLike<typeof screens>
 export type Messages = WordsLike<typeof en>
 
 type Path<Tree> = {

@@ -1,4 +1,4 @@
-import type { Messages } from './en.ts'
+import type { Messages, Screens } from './en.ts'
 import { blocks } from './es/blocks.ts'
 import { checks } from './es/checks.ts'
 import { common } from './es/common.ts'
@@ -14,8 +14,10 @@ import { today } from './es/today.ts'
 import { units } from './es/units.ts'
 
 
-
-/** Every word a person reads, in Spanish. A missing key does not compile. */
-export const es: Messages = {
-  blocks, checks, common, farm, frame, inputs, pdf, problems, records, register, session, today, units,
+/** What the screens say, in Spanish. A missing key does not compile. */
+export const screens: Screens = {
+  blocks, checks, common, farm, frame, inputs, problems, records, register, session, today, units,
 }
+
+/** Every word a person reads, in Spanish. */
+export const es: Messages = { ...screens, pdf }

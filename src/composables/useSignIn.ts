@@ -32,7 +32,7 @@ export function useSignIn(wrongWords: () => string): SignIn {
     busy.value = true
     try {
       await session.signIn(email.trim(), password)
-      if (session.user !== null) preferences.offerLanguage(session.user.language)
+      if (session.user !== null) await preferences.offerLanguage(session.user.language)
       return true
     } catch (error) {
       refusal.value = isWrong(error) ? wrongWords() : messages.problem(error)

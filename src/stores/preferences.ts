@@ -1,7 +1,7 @@
 import { defineStore } from 'pinia'
 import { ref, watch } from 'vue'
 import type { Language } from '../../shared/messages/translate.ts'
-import { i18n } from '../plugins/i18n.ts'
+import { readLanguage, showLanguage } from '../plugins/i18n.ts'
 import { readSetting, writeSetting } from './settings.ts'
 
 /** Day, or dark for the cab before sunrise. */
@@ -14,7 +14,7 @@ export const usePreferences = defineStore('preferences', () => {
 
   watch(language, (value) => {
     writeSetting('language', value)
-    i18n.global.locale.value = value
+    showLanguage(value)
     document.documentElement.lang = value
   }, { immediate: true })
 
@@ -23,17 +23,35 @@ export const usePreferences = defineStore('preferences', () => {
     document.documentElement.dataset['light'] = value
   }, { immediate: true })
 
-  /** The account's own language, unless this device has been told another. */
-  function offerLanguage(value: Language): void {
-    if (readSetting('language.chosen', ['yes']) === null) language.value = value
+  /** The account's own language, unless this device has been told another or cannot read it now. */
+  async function offerLanguage(value: Language): Promise<void> {
+    if (readSetting('language.chosen', ['yes']) !== null) return
+    try {
+      await takeLanguage(value)
+    } catch { /* It stays as it was; the choice is in the frame. */ }
   }
 
-  function chooseLanguage(value: Language): void {
+  /** @throws where the words cannot be read, as without signal; the language then stays as it was. */
+  async function chooseLanguage(value: Language): Promise<void> {
+    await takeLanguage(value)
     writeSetting('language.chosen', 'yes')
-    language.value = value
   }
 
-  return { language, light, offerLanguage, chooseLanguage }
+  let asked: Language = language.value
+  /** Of two choices the later one stands, whichever was read first. */
+  async function takeLanguage(value: Language): Promise<void> {
+    asked = value
+    await readLanguage(value)
+    if (asked === value) language.value = value
+  }
+
+  /** Reads the words before anything is shown. */
+  async function start(): Promise<void> {
+    await readLanguage(language.value)
+    showLanguage(language.value)
+  }
+
+  return { language, light, offerLanguage, chooseLanguage, start }
 })
 
 function languageOfDevice(): Language {

@@ -1,6 +1,5 @@
 import 'element-plus/es/components/base/style/css'
 import 'element-plus/es/components/button/style/css'
-import 'element-plus/es/components/date-picker/style/css'
 import 'element-plus/es/components/dialog/style/css'
 import 'element-plus/es/components/drawer/style/css'
 import 'element-plus/es/components/input/style/css'

@@ -1,6 +1,8 @@
 import { execFileSync } from 'node:child_process'
 import { readFileSync } from 'node:fs'
+import type { MessageContext } from '@intlify/core-base'
 import { describe, expect, it } from 'vitest'
+import { compileWords } from '../../shared/messages/compileWords.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { translate } from '../../shared/messages/translate.ts'
 
@@ -8,6 +10,10 @@ describe('translate', () => {
   it('speaks both languages', () => {
     expect(translate('en', 'problems.not_found')).toBe('Nothing here under that number.')
     expect(translate('es', 'problems.not_found')).toBe('No hay nada aquí con ese número.')
+  })
+
+  it('knows no language that it was not taught', () => {
+    expect(() => translate('fr' as 'en', 'problems.not_found')).toThrow(RangeError)
   })
 
   it('refuses a message that is not there', () => {
@@ -42,5 +48,32 @@ describe('refusals', () => {
       }
     })
     expect(wordless).toEqual([])
+  })
+})
+
+describe('compileWords', () => {
+  const context = (type: string, params: Record<string, unknown>, chosen = 0) => ({
+    type, values: params, named: (name: string) => params[name], plural: <Form>(forms: Form[]) => forms[chosen],
+  }) as unknown as MessageContext
+  const at = { locale: 'en', key: '', onCacheKey: (text: string) => text }
+
+  it('puts parameters where they stand, and nothing where one is missing', () => {
+    const ready = compileWords('{first} and {last}.', at)
+    expect(ready(context('text', { first: 'V1', last: 2 }))).toBe('V1 and 2.')
+    expect(ready(context('text', { first: 'V1' }))).toBe('V1 and .')
+  })
+
+  it('leaves what is in a parameter as it is', () => {
+    expect(compileWords('Of {name}', at)(context('text', { name: '{other} | @:x' }))).toBe('Of {other} | @:x')
+  })
+
+  it('chooses the form for one or several', () => {
+    const ready = compileWords('{number} lot | {number} lots', at)
+    expect(ready(context('text', { number: 1 }, 0))).toBe('1 lot')
+    expect(ready(context('text', { number: 4 }, 1))).toBe('4 lots')
+  })
+
+  it('keeps the pieces apart for a component that puts elements between words', () => {
+    expect(compileWords('{figure} waits', at)(context('vnode', { figure: ['b'] }))).toEqual(['', ['b'], ' waits'])
   })
 })

@@ -4,7 +4,6 @@ export const common = {
   close: 'Close',
   tryAgain: 'Try again',
   choose: 'Choose',
-  noDate: 'No date',
   reading: 'Reading',
   nothingHere: 'Nothing here yet',
   nothingMatches: 'Nothing matches',

@@ -4,7 +4,6 @@ export const common = {
   close: 'Cerrar',
   tryAgain: 'Intentar de nuevo',
   choose: 'Elegir',
-  noDate: 'Sin fecha',
   reading: 'Leyendo',
   nothingHere: 'Aún no hay nada aquí',
   nothingMatches: 'Nada coincide',

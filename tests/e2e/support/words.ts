@@ -1,4 +1,5 @@
 import { en } from '../../../shared/messages/en.ts'
+import '../../../shared/messages/everyLanguage.ts'
 import { translate } from '../../../shared/messages/translate.ts'
 
 /** The words a message has on the screen, so that a test finds a control by what a person reads. @throws {RangeError} for no such message. */
