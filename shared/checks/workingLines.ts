@@ -25,7 +25,7 @@ function componentWorking(component: SheetComponent, name: string): Message | nu
     case 'sheet.measure.perArea':
       return words('records.working.perArea', { ...sum, rate: known('value'), rateUnit: String(params['unit']), hectares: known('areaHa'), unit: amount.unit })
     case 'sheet.measure.perTank':
-      return words('records.working.perTank', { ...sum, value: known('value'), unit: amount.unit, loads: known('loads') })
+      return words('records.working.perTank', { ...sum, value: known('value'), unit: amount.unit, count: known('loads') })
     default:
       return null
   }

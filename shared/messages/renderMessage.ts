@@ -5,11 +5,13 @@ import { translate, type Language } from './translate.ts'
 
 /**
  * A verdict, finding or label in words. Numbers take the language's marks, params whose name ends in `On` are
- * civil dates, `unit` is the code of a unit; every other string stands as it is.
+ * civil dates, `unit` is the code of a unit; every other string stands as it is. A number named `count` chooses between
+ * the forms for one and for several.
  * @throws {RangeError} if there is no message of that id.
  */
 export function renderMessage(language: Language, message: Message): string {
-  return translate(language, message.id, localiseParams(language, message.params))
+  const { count } = message.params
+  return translate(language, message.id, localiseParams(language, message.params), typeof count === 'number' ? count : undefined)
 }
 
 /** The params of a message as words of a language; see `renderMessage`. */

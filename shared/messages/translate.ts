@@ -22,10 +22,10 @@ export function teachWords(language: Language, words: Messages | Screens): void 
  * The words of one message, for mail, PDF and problems (screens use vue-i18n over the same messages).
  * @throws {RangeError} if there is no message of that id, so that a missing one cannot reach a reader, or if the language was not taught.
  */
-export function translate(language: Language, id: string, params: Record<string, string | number> = {}): string {
+export function translate(language: Language, id: string, params: Record<string, string | number> = {}, plural?: number): string {
   const context = contexts.get(language)
   if (context === undefined) throw new RangeError(`No words of "${language}" yet`)
-  const words = coreTranslate(context, id, params)
+  const words = plural === undefined ? coreTranslate(context, id, params) : coreTranslate(context, id, params, plural)
   if (typeof words !== 'string' || words === id) throw new RangeError(`No message "${id}"`)
   return words
 }

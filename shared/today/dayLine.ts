@@ -8,8 +8,10 @@ export interface DaySentence {
 }
 
 export interface DayFacts {
-  /** Block codes of each record that is started and not signed. */
+  /** Block codes of each record of the reader's own that is started and not signed. */
   started: readonly string[]
+  /** The same of others, with whose work it is. */
+  startedByOthers: readonly { codes: string; name: string }[]
   drafts: number
   signedToday: number
   /** Codes of lots past their last day that still hold something. */
@@ -19,12 +21,12 @@ export interface DayFacts {
 }
 
 /**
- * What the day comes to, most urgent first: started work, the lots that are past or end soon (the worse of both), drafts, what was signed.
+ * What the day comes to, most urgent first: started work, the reader's own before that of others, the lots that are past or end soon (the worse of both), drafts, what was signed.
  * @returns at least one sentence; a day with nothing in it says so.
  */
 export function dayLine(facts: DayFacts): DaySentence[] {
   const ending = facts.pastLots.length > 0 ? pastSentence(facts) : soonSentence(facts)
-  const waiting = [...startedSentence(facts), ...ending, ...draftSentence(facts)]
+  const waiting = [...startedSentence(facts), ...othersSentence(facts), ...ending, ...draftSentence(facts)]
   if (waiting.length === 0) waiting.push({ id: 'today.line.quiet', count: 0, figures: {} })
   return [...waiting, ...signedSentence(facts)]
 }
@@ -34,6 +36,14 @@ function startedSentence({ started }: DayFacts): DaySentence[] {
   if (only === undefined) return []
   if (started.length === 1) return [{ id: 'today.line.startedOne', count: 1, figures: { codes: { text: only, ink: 'wel' } } }]
   return [{ id: 'today.line.startedMany', count: started.length, figures: { figure: { text: String(started.length), ink: 'wel' } } }]
+}
+
+function othersSentence({ startedByOthers }: DayFacts): DaySentence[] {
+  const [only] = startedByOthers
+  const count = startedByOthers.length
+  if (only === undefined) return []
+  if (count > 1) return [{ id: 'today.line.othersMany', count, figures: { figure: { text: String(count), ink: 'wel' } } }]
+  return [{ id: 'today.line.othersOne', count, figures: { codes: { text: only.codes, ink: 'wel' }, name: { text: only.name, ink: 'plain' } } }]
 }
 
 function draftSentence({ drafts }: DayFacts): DaySentence[] {

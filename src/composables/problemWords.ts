@@ -12,5 +12,5 @@ export function problemWords(language: Language, error: unknown): string {
 function tooMany(language: Language, seconds: number | null): string {
   if (seconds === null) return translate(language, 'common.tooMany')
   const minutes = Math.ceil(seconds / 60)
-  return translate(language, minutes <= 1 ? 'common.tooManyMinute' : 'common.tooManyMinutes', { minutes })
+  return translate(language, 'common.tooManyMinutes', { count: Math.max(1, minutes) })
 }

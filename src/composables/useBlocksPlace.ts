@@ -69,5 +69,5 @@ export function useBlocksPlace(): BlocksPlace {
 
 function countWords(language: Language, count: number, area: string): string {
   if (count === 0) return ''
-  return renderMessage(language, { id: count === 1 ? 'blocks.countOne' : 'blocks.count', params: { count, area } })
+  return renderMessage(language, { id: 'blocks.count', params: { count, area } })
 }

@@ -34,7 +34,7 @@ export function useLotWords(lots: Ref<readonly Lot[]>, today: Ref<string>): Comp
     const day = formatDay(preferences.language, lot.expiresOn, { year })
     if (useBy === 'past') return t('inputs.useBy.past', { day })
     if (useBy === 'later') return t('inputs.useBy.byDay', { day })
-    const when = days === 0 ? t('inputs.useBy.today') : t('inputs.useBy.inDays', { number: days }, days)
+    const when = days === 0 ? t('inputs.useBy.today') : t('inputs.useBy.inDays', { count: days })
     return t('inputs.useBy.soon', { day, when })
   }
 

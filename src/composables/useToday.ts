@@ -1,5 +1,6 @@
 import { computed, type ComputedRef } from 'vue'
 import { dayLine, type DaySentence } from '../../shared/today/dayLine.ts'
+import { partOpenWork, type OpenWork } from '../../shared/today/openWork.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
 import type { Block, Boundary } from '../../shared/contract/block.ts'
 import type { Method, RegisterRow } from '../../shared/contract/record.ts'
@@ -11,6 +12,7 @@ import { useSession } from '../stores/session.ts'
 import { useBlocks } from './useBlocks.ts'
 import { useInputs, type Inputs } from './useInputs.ts'
 import type { LotLine } from './useLotWords.ts'
+import { usePeople } from './usePeople.ts'
 import { useRecords } from './useRecords.ts'
 import { unsentDrafts, useRegisterLines } from './useRegisterLines.ts'
 
@@ -27,8 +29,9 @@ export interface Today {
   /** "Tuesday 16 June" at the farm; empty until the farm is read. */
   title: ComputedRef<string>
   sentences: ComputedRef<DaySentence[]>
-  openLines: ComputedRef<RegisterLine[]>
-  startedLines: ComputedRef<RegisterLine[]>
+  /** Started records and drafts of this device, the reader's own apart from those of others. */
+  open: ComputedRef<OpenWork>
+  openCount: ComputedRef<number>
   doneLines: ComputedRef<{ line: RegisterLine; signedAt: string }[]>
   endingLots: ComputedRef<LotLine[]>
   /** The last work on each block among the rows that were read, longest ago first. */
@@ -53,6 +56,7 @@ export function useToday(): Today {
   const { place, draftLines, present, outlines } = useRegisterLines()
   const { today } = inputs
   const { data: blocks } = useBlocks(farmId)
+  const { data: people } = usePeople(farmId)
 
   const rowsOf = (read: ReturnType<typeof useRecords>): RegisterRow[] => read.data.value?.pages.flatMap(({ items }) => items) ?? []
   const startedLines = computed(() => present(rowsOf(started)))
@@ -67,7 +71,10 @@ export function useToday(): Today {
   })
   const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
 
+  /** As it stands in records; the account's own name until the people are read. */
+  const ownName = computed(() => people.value?.find(({ id }) => id === session.membership?.personId)?.name ?? session.user?.name ?? '')
   const deviceLines = computed(() => unsentDrafts(draftLines.value, [...rowsOf(started), ...rowsOf(newest)]))
+  const open = computed(() => partOpenWork([...startedLines.value, ...deviceLines.value], ownName.value))
   const blockLines = computed(() => lastOnBlocks(blocks.value ?? [], rowsOf(newest)).map(({ block, row }) => {
     const [line] = row === null ? [] : present([row])
     if (row === null || line === undefined) return { block, last: null }
@@ -77,7 +84,8 @@ export function useToday(): Today {
   const sentences = computed(() => {
     const lots = endingLots.value
     return dayLine({
-      started: startedLines.value.map(({ codes }) => codes),
+      started: open.value.own.filter(({ onDevice }) => !onDevice).map(({ codes }) => codes),
+      startedByOthers: open.value.others.map(({ codes, by }) => ({ codes, name: by })),
       drafts: deviceLines.value.length,
       signedToday: doneLines.value.filter(({ line }) => line.state === 'signed').length,
       pastLots: lots.filter(({ standing }) => standing.useBy === 'past').map(({ lot }) => lot.code),
@@ -91,8 +99,9 @@ export function useToday(): Today {
   return {
     title: computed(() => (today.value === null ? '' : capital(formatDay(preferences.language, today.value, { weekday: true, year: false })))),
     sentences,
-    openLines: computed(() => [...startedLines.value, ...deviceLines.value]),
-    startedLines, doneLines, endingLots, blockLines, outlines, inputs, newest,
+    open,
+    openCount: computed(() => open.value.own.length + open.value.others.length),
+    doneLines, endingLots, blockLines, outlines, inputs, newest,
     rowsRead: computed(() => rowsOf(newest).length),
     ready: computed(() => place.value !== null && newest.data.value !== undefined && started.data.value !== undefined && inputs.ready.value),
   }

@@ -26,6 +26,14 @@ describe('messages', () => {
     expect(found).toEqual([])
   })
 
+  it('say one and several apart where a count stands before what is counted', () => {
+    // Words that stay as they are whatever the count, and messages of several alone.
+    const counted = /\{count\} (?!(?:not|kept|more|begun|min|of|por|sin|más|de)\b)\p{L}{3,}/u
+    const oneForm = [...english, ...spanish].filter(([id, words]) => counted.test(words) && !words.includes(' | ') && !/many/i.test(id))
+    expect(oneForm).toEqual([])
+    expect(english.filter(([, words]) => counted.test(words)).length).toBeGreaterThan(10)
+  })
+
   it('use only marks that the font has', () => {
     const missing = /[≥≤→←↑↓≈✓✕■●◆⅓⅔⅛₂\u202F]/
     expect([...english, ...spanish].filter(([, words]) => missing.test(words))).toEqual([])

@@ -1,8 +1,7 @@
 /** Words of the Blocks place. */
 export const blocks = {
   title: 'Blocks',
-  count: '{count} blocks, {area} ha',
-  countOne: '1 block, {area} ha',
+  count: '{count} block, {area} ha | {count} blocks, {area} ha',
   hectares: '{figure} ha',
   spoken: '{code}, {name}, {area} ha',
   loading: 'Reading the blocks',
@@ -40,7 +39,7 @@ export const blocks = {
     total: 'In all',
     noCrop: 'no crop written',
     draft: 'A block in the making',
-    draftText: '{corners} corners set, kept on this device.',
+    draftText: '{count} corner set, kept on this device. | {count} corners set, kept on this device.',
     resume: 'Go on drawing',
   },
   empty: {
@@ -136,7 +135,7 @@ export const blocks = {
     swap: 'Swap all lines',
     minutes: 'minutes and seconds stay under 60.',
     tooMany: 'more than 5 000 points. Thin them first.',
-    more: 'and {count} more lines',
+    more: 'and {count} more line | and {count} more lines',
   },
   form: {
     about: 'Code and name',

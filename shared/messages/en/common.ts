@@ -17,6 +17,5 @@ export const common = {
   noAnswer: 'No answer from the server. What you typed is still here.',
   unexpected: 'Something failed here. What you typed is still here; try again.',
   tooMany: 'Too many tries. Wait a little, then try again.',
-  tooManyMinute: 'Too many tries. Try again in a minute.',
-  tooManyMinutes: 'Too many tries. Try again in {minutes} minutes.',
+  tooManyMinutes: 'Too many tries. Try again in {count} minute. | Too many tries. Try again in {count} minutes.',
 }

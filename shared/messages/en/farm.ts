@@ -10,7 +10,7 @@ export const farm = {
   seasonStart: 'Begins each year on',
   seasonNote: 'A season is named by the year it begins in.',
   people: 'People',
-  peopleCount: '{count} people',
+  peopleCount: '{count} person | {count} people',
   personName: 'Name',
   personRole: 'Role',
   personAccount: 'Account',
@@ -61,6 +61,6 @@ export const farm = {
     foot: 'A record shown here says what was written and signed. It says nothing about whether it is true.',
     none: 'No farm has granted you a season yet.',
     noneText: 'The owner of a farm grants it to your e-mail.',
-    count: '{count} farms',
+    count: '{count} farm | {count} farms',
   },
 }

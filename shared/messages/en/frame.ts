@@ -37,8 +37,7 @@ export const frame = {
     kept: '{count} kept, not sent yet',
     noSignal: 'No signal, {count} kept',
     noSignalNone: 'No signal',
-    needsYou: '{count} needs you',
-    needYou: '{count} need you',
+    needsYou: '{count} needs you | {count} need you',
   },
   moreSheet: {
     title: 'More',
@@ -55,8 +54,7 @@ export const frame = {
   },
   leave: {
     title: 'Sign out with work kept here?',
-    keptOne: 'This device keeps 1 thing not sent yet. It stays here and goes when {name} signs in again on this device.',
-    kept: 'This device keeps {count} things not sent yet. They stay here and go when {name} signs in again on this device.',
+    kept: 'This device keeps {count} thing not sent yet. It stays here and goes when {name} signs in again on this device. | This device keeps {count} things not sent yet. They stay here and go when {name} signs in again on this device.',
     drafts: 'Drafts stay on this device for {name}.',
     stay: 'Stay',
     noSignal: 'Not signed out: no answer from the server.',

@@ -234,7 +234,7 @@ export const records = {
     head: 'How it was worked out',
     ratio: '{name}: {water} L ÷ {parts} = {amount} L',
     perArea: '{name}: {rate} {rateUnit} × {hectares} ha = {amount} {unit}',
-    perTank: '{name}: {value} {unit} × {loads} tanks = {amount} {unit}',
+    perTank: '{name}: {value} {unit} × {count} tank = {amount} {unit} | {name}: {value} {unit} × {count} tanks = {amount} {unit}',
     total: 'Spray: {water} L + {liquids} L = {total} L',
     sprayRate: 'On a hectare: {total} L ÷ {hectares} ha = {rate} L/ha',
     fromRate: 'Spray: {rate} L/ha × {hectares} ha = {total} L',

@@ -41,8 +41,7 @@ export const register = {
     checks: 'Checks',
   },
   tally: {
-    stop: 'Stop, signed',
-    stops: '{number} stops, signed',
+    stop: 'Stop, signed | {count} stops, signed',
     caution: 'Caution {number}',
     unknown: 'No stop; {number} not known',
     none: 'No stop',

@@ -3,12 +3,17 @@ export const today = {
   newRecord: 'New record',
   goOn: 'Go on',
   goOnWith: 'Go on with {codes}',
+  goOnWithOf: 'Go on with {codes}, {name}',
   goOnName: 'Go on with {what}',
+  read: 'Open',
+  readName: 'Open {what}, begun by {name}',
   loading: 'Reading today',
   title: 'Today',
   line: {
     startedOne: '{codes}: started and not signed.',
-    startedMany: '{figure} records are started and not signed.',
+    startedMany: '{figure} records of yours are started and not signed.',
+    othersOne: '{codes}, {name}: started and not signed.',
+    othersMany: '{figure} records of others are started and not signed.',
     drafts: '{figure} draft waits on this device. | {figure} drafts wait on this device.',
     signed: '{figure} record signed today. | {figure} records signed today.',
     noneSigned: 'Nothing is signed today yet.',
@@ -20,7 +25,7 @@ export const today = {
   },
   open: {
     title: 'Not signed yet',
-    more: '{number} begun',
+    more: '{count} begun',
     empty: 'Nothing waits for a signature.',
     emptyText: 'A draft stands here from its first keystroke, a started record until it is signed.',
     failed: 'Started records did not come.',
@@ -29,6 +34,7 @@ export const today = {
     started: 'started',
     since: 'begun {day} {time}',
     startedAt: 'started {day} {time}',
+    startedBy: 'started {day} {time}, {name}',
   },
   done: {
     title: 'So far today',
@@ -48,7 +54,7 @@ export const today = {
   },
   blocks: {
     title: 'Last work on each block',
-    more: 'longest ago first, of the last {number} record | longest ago first, of the last {number} records',
+    more: 'longest ago first, of the last {count} record | longest ago first, of the last {count} records',
     none: 'none in these records',
   },
   checks: {

@@ -1,8 +1,7 @@
 /** Words of the Blocks place. */
 export const blocks = {
   title: 'Parcelas',
-  count: '{count} parcelas, {area} ha',
-  countOne: '1 parcela, {area} ha',
+  count: '{count} parcela, {area} ha | {count} parcelas, {area} ha',
   hectares: '{figure} ha',
   spoken: '{code}, {name}, {area} ha',
   loading: 'Leyendo las parcelas',
@@ -40,7 +39,7 @@ export const blocks = {
     total: 'En total',
     noCrop: 'sin cultivo anotado',
     draft: 'Una parcela a medio hacer',
-    draftText: '{corners} esquinas puestas, guardadas en este dispositivo.',
+    draftText: '{count} esquina puesta, guardada en este dispositivo. | {count} esquinas puestas, guardadas en este dispositivo.',
     resume: 'Seguir dibujando',
   },
   empty: {
@@ -136,7 +135,7 @@ export const blocks = {
     swap: 'Intercambiar todas las líneas',
     minutes: 'los minutos y los segundos no llegan a 60.',
     tooMany: 'más de 5 000 puntos. Redúzcalos antes.',
-    more: 'y {count} líneas más',
+    more: 'y {count} línea más | y {count} líneas más',
   },
   form: {
     about: 'Código y nombre',

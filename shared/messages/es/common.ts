@@ -17,6 +17,5 @@ export const common = {
   noAnswer: 'El servidor no responde. Lo que escribió sigue aquí.',
   unexpected: 'Algo falló aquí. Lo que escribió sigue aquí; inténtelo de nuevo.',
   tooMany: 'Demasiados intentos. Espere un poco e inténtelo de nuevo.',
-  tooManyMinute: 'Demasiados intentos. Inténtelo de nuevo dentro de un minuto.',
-  tooManyMinutes: 'Demasiados intentos. Inténtelo de nuevo dentro de {minutes} minutos.',
+  tooManyMinutes: 'Demasiados intentos. Inténtelo de nuevo dentro de {count} minuto. | Demasiados intentos. Inténtelo de nuevo dentro de {count} minutos.',
 }

@@ -10,7 +10,7 @@ export const farm = {
   seasonStart: 'Empieza cada año el',
   seasonNote: 'Una campaña lleva el nombre del año en que empieza.',
   people: 'Personas',
-  peopleCount: '{count} personas',
+  peopleCount: '{count} persona | {count} personas',
   personName: 'Nombre',
   personRole: 'Función',
   personAccount: 'Cuenta',
@@ -61,6 +61,6 @@ export const farm = {
     foot: 'Un registro mostrado aquí dice lo que se anotó y se firmó. No dice si es verdad.',
     none: 'Aún ninguna finca le ha concedido una campaña.',
     noneText: 'El titular de una finca la concede a su correo electrónico.',
-    count: '{count} fincas',
+    count: '{count} finca | {count} fincas',
   },
 }

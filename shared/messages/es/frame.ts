@@ -37,8 +37,7 @@ export const frame = {
     kept: '{count} por enviar',
     noSignal: 'Sin señal, {count} por enviar',
     noSignalNone: 'Sin señal',
-    needsYou: '{count} le espera',
-    needYou: '{count} le esperan',
+    needsYou: '{count} le espera | {count} le esperan',
   },
   moreSheet: {
     title: 'Más',
@@ -55,8 +54,7 @@ export const frame = {
   },
   leave: {
     title: '¿Cerrar la sesión con trabajo guardado aquí?',
-    keptOne: 'Este dispositivo guarda 1 cosa sin enviar. Se queda aquí y sale cuando {name} vuelva a entrar en este dispositivo.',
-    kept: 'Este dispositivo guarda {count} cosas sin enviar. Se quedan aquí y salen cuando {name} vuelva a entrar en este dispositivo.',
+    kept: 'Este dispositivo guarda {count} cosa sin enviar. Se queda aquí y sale cuando {name} vuelva a entrar en este dispositivo. | Este dispositivo guarda {count} cosas sin enviar. Se quedan aquí y salen cuando {name} vuelva a entrar en este dispositivo.',
     drafts: 'Los borradores se quedan en este dispositivo para {name}.',
     stay: 'Quedarse',
     noSignal: 'La sesión sigue abierta: el servidor no responde.',

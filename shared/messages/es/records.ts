@@ -234,7 +234,7 @@ export const records = {
     head: 'Cómo se calculó',
     ratio: '{name}: {water} L ÷ {parts} = {amount} L',
     perArea: '{name}: {rate} {rateUnit} × {hectares} ha = {amount} {unit}',
-    perTank: '{name}: {value} {unit} × {loads} tanques = {amount} {unit}',
+    perTank: '{name}: {value} {unit} × {count} tanque = {amount} {unit} | {name}: {value} {unit} × {count} tanques = {amount} {unit}',
     total: 'Caldo: {water} L + {liquids} L = {total} L',
     sprayRate: 'Por hectárea: {total} L ÷ {hectares} ha = {rate} L/ha',
     fromRate: 'Caldo: {rate} L/ha × {hectares} ha = {total} L',

@@ -41,8 +41,7 @@ export const register = {
     checks: 'Comprobaciones',
   },
   tally: {
-    stop: 'Alto, firmado',
-    stops: '{number} altos, firmado',
+    stop: 'Alto, firmado | {count} altos, firmado',
     caution: 'Cuidado {number}',
     unknown: 'Ningún alto; no se sabe: {number}',
     none: 'Ningún alto',

@@ -3,12 +3,17 @@ export const today = {
   newRecord: 'Registro nuevo',
   goOn: 'Seguir',
   goOnWith: 'Seguir con {codes}',
+  goOnWithOf: 'Seguir con {codes}, {name}',
   goOnName: 'Seguir con {what}',
+  read: 'Abrir',
+  readName: 'Abrir {what}, empezado por {name}',
   loading: 'Leyendo el día de hoy',
   title: 'Hoy',
   line: {
     startedOne: '{codes}: empezado y sin firmar.',
-    startedMany: '{figure} registros están empezados y sin firmar.',
+    startedMany: '{figure} registros suyos están empezados y sin firmar.',
+    othersOne: '{codes}, {name}: empezado y sin firmar.',
+    othersMany: '{figure} registros de otras personas están empezados y sin firmar.',
     drafts: '{figure} borrador espera en este dispositivo. | {figure} borradores esperan en este dispositivo.',
     signed: '{figure} registro firmado hoy. | {figure} registros firmados hoy.',
     noneSigned: 'Hoy aún no se ha firmado nada.',
@@ -20,7 +25,7 @@ export const today = {
   },
   open: {
     title: 'Aún sin firmar',
-    more: '{number} empezados',
+    more: '{count} empezado | {count} empezados',
     empty: 'No hay nada por firmar.',
     emptyText: 'Un borrador aparece aquí desde la primera tecla; un registro empezado, hasta que se firma.',
     failed: 'Los registros empezados no llegaron.',
@@ -29,6 +34,7 @@ export const today = {
     started: 'empezado',
     since: 'desde el {day} {time}',
     startedAt: 'empezado el {day} {time}',
+    startedBy: 'empezado el {day} {time}, {name}',
   },
   done: {
     title: 'Hoy hasta ahora',
@@ -48,7 +54,7 @@ export const today = {
   },
   blocks: {
     title: 'Último trabajo en cada parcela',
-    more: 'primero lo más antiguo, de {number} registro reciente | primero lo más antiguo, de los últimos {number} registros',
+    more: 'primero lo más antiguo, de {count} registro reciente | primero lo más antiguo, de los últimos {count} registros',
     none: 'ninguno en estos registros',
   },
   checks: {

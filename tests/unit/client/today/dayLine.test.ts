@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { dayLine, type DayFacts } from '../../../../shared/today/dayLine.ts'
 import { translate } from '../../../../shared/messages/translate.ts'
 
-const quiet: DayFacts = { started: [], drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
+const quiet: DayFacts = { started: [], startedByOthers: [], drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
 const ids = (facts: Partial<DayFacts>): string[] => dayLine({ ...quiet, ...facts }).map(({ id }) => id)
 
 describe('dayLine', () => {
@@ -14,6 +14,13 @@ describe('dayLine', () => {
     expect(ids({ started: ['V2'], drafts: 1, signedToday: 3, pastLots: ['27'] })).toEqual([
       'today.line.startedOne', 'today.line.pastOne', 'today.line.drafts', 'today.line.signed',
     ])
+  })
+
+  it("puts the reader's own work before that of others, and says whose that is", () => {
+    const facts = { started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }] }
+    expect(ids(facts).slice(0, 2)).toEqual(['today.line.startedOne', 'today.line.othersOne'])
+    expect(dayLine({ ...quiet, ...facts })[1]?.figures).toEqual({ codes: { text: 'A3', ink: 'wel' }, name: { text: 'Ruan Teal', ink: 'plain' } })
+    expect(ids({ startedByOthers: [...facts.startedByOthers, { codes: 'A4', name: 'Tam Lisk' }] })[0]).toBe('today.line.othersMany')
   })
 
   it('names the one and counts the many', () => {
@@ -31,8 +38,8 @@ describe('dayLine', () => {
   it.each(['en', 'es'] as const)('has the words of every sentence in %s', (language) => {
     const all = [
       ...dayLine(quiet),
-      ...dayLine({ started: ['V2'], drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
-      ...dayLine({ started: ['V2', 'S1'], drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
+      ...dayLine({ started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }], drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
+      ...dayLine({ started: ['V2', 'S1'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }, { codes: 'A4', name: 'Tam Lisk' }], drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
     ]
     for (const { id, figures } of all) {
       const params = Object.fromEntries(Object.entries(figures).map(([name, { text }]) => [name, text]))
