@@ -1,4 +1,5 @@
 import { ref, shallowRef, watch, type Ref, type ShallowRef } from 'vue'
+import type { Draft } from '../stores/draftTypes.ts'
 import { emptyBlockDraft, isBlockDraftBegun, type BlockDraftContent, type OutlineBy } from './blockDraftContent.ts'
 import { newId } from './newId.ts'
 import { useDrafts } from './useDrafts.ts'
@@ -10,41 +11,68 @@ export interface BlockDraft {
   content: ShallowRef<BlockDraftContent>
   /** False until the device has said whether a draft was kept. */
   ready: Ref<boolean>
-  /** True when this is one begun earlier. */
+  /** True when this is one begun earlier, or in another tab. */
   resumed: Ref<boolean>
   /** Forgets the draft and begins anew. */
   discard: () => Promise<void>
 }
 
-/** A block's draft, kept on the device at every change; it survives a reload and leaves when the block is sent. */
+/**
+ * A block's draft, kept on the device at every change; it survives a reload and leaves when the block is sent.
+ * Tabs of one device work on the same draft: what one types the others show, and when one is done with it all begin anew.
+ */
 export function useBlockDraft(farmId: Ref<string>, by: OutlineBy): BlockDraft {
   const drafts = useDrafts(farmId, 'block')
   const id = ref(newId())
   const content = shallowRef(emptyBlockDraft(by))
   const ready = ref(false)
   const resumed = ref(false)
+  /** The content as the device has it: what another tab typed is not written back. */
+  let keptText = ''
+  /** Whether the device listed the draft as it was last typed here. */
+  let isListed = false
+
+  function show(shown: BlockDraftContent): void {
+    keptText = JSON.stringify(shown)
+    content.value = shown
+  }
+  function resume(found: Draft<BlockDraftContent>): void {
+    id.value = found.id
+    resumed.value = true
+    show({ ...emptyBlockDraft(by), ...found.content })
+  }
+  function beginAnew(): void {
+    id.value = newId()
+    resumed.value = false
+    isListed = false
+    show(emptyBlockDraft(content.value.by))
+  }
 
   watch([drafts.ready, drafts.drafts], ([isReady, kept]) => {
-    if (!isReady || ready.value) return
+    if (!isReady) return
     const newest = kept[0]
-    if (newest !== undefined && !isBlockDraftBegun(content.value)) {
-      id.value = newest.id
-      content.value = { ...emptyBlockDraft(by), ...(newest.content as BlockDraftContent) }
-      resumed.value = true
-    }
+    const isHere = (): boolean => kept.some((draft) => draft.id === id.value)
+    if (newest !== undefined && !isHere() && !isBlockDraftBegun(content.value)) resume(newest as Draft<BlockDraftContent>)
+    else if (!isHere() && isListed) beginAnew()
+    isListed = isHere()
     ready.value = true
   }, { immediate: true })
+
   watch(content, (value) => {
-    if (!ready.value) return
+    const text = JSON.stringify(value)
+    if (!ready.value || text === keptText) return
+    keptText = text
+    isListed = false
     if (isBlockDraftBegun(value)) drafts.write(id.value, 'block', value)
     else void drafts.remove(id.value)
   })
 
+  drafts.onTakenOver<BlockDraftContent>(id, ({ content: typed }) => { show({ ...emptyBlockDraft(by), ...typed }) })
+
   async function discard(): Promise<void> {
+    isListed = false
     await drafts.remove(id.value)
-    id.value = newId()
-    content.value = emptyBlockDraft(content.value.by)
-    resumed.value = false
+    beginAnew()
   }
 
   return { id, content, ready, resumed, discard }

@@ -18,7 +18,7 @@ export interface Drafts {
   flush: () => Promise<void>
   remove: (id: string) => Promise<void>
   /** Calls back with the draft of that id when another tab has written it and nothing typed here waits; ends with the scope. */
-  onTakenOver: <Content>(id: string, take: (draft: Draft<Content>) => void) => void
+  onTakenOver: <Content>(id: MaybeRefOrGetter<string>, take: (draft: Draft<Content>) => void) => void
 }
 
 /** Drafts survive a reload and signing out; they leave only by `remove`. */
@@ -52,13 +52,13 @@ export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): D
     return found !== undefined && found.accountId === owner.value.accountId ? (found as Draft<Content>) : null
   }
 
-  function onTakenOver<Content>(id: string, take: (draft: Draft<Content>) => void): void {
-    async function takeOver(): Promise<void> {
+  function onTakenOver<Content>(followed: MaybeRefOrGetter<string>, take: (draft: Draft<Content>) => void): void {
+    async function takeOver(id: string): Promise<void> {
       if (draftWriter.isWaiting(id)) return
       const found = await read<Content>(id)
-      if (found !== null && !draftWriter.isWaiting(id)) take(found)
+      if (found !== null && !draftWriter.isWaiting(id) && id === toValue(followed)) take(found)
     }
-    onScopeDispose(draftWriter.listen((written) => { if (written.id === id) void takeOver() }))
+    onScopeDispose(draftWriter.listen((written) => { if (written.id === toValue(followed)) void takeOver(written.id) }))
   }
 
   return {

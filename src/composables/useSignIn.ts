@@ -1,9 +1,10 @@
 import { reactive, ref, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
-import { ApiError } from '../api/errors.ts'
+import { ApiError, NetworkError } from '../api/errors.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { useMessages } from './useMessages.ts'
+import { useSignalBack } from './useSignalBack.ts'
 
 /** Signing in from a form: what is missing at its fields, what was refused above them. */
 export interface SignIn {
@@ -23,11 +24,13 @@ export function useSignIn(wrongWords: () => string): SignIn {
   const errors = reactive({ email: '', password: '' })
   const refusal = ref('')
   const busy = ref(false)
+  let lacksSignal = false
 
   async function signIn(email: string, password: string): Promise<boolean> {
     errors.email = email.trim() === '' ? t('session.emailNeeded') : ''
     errors.password = password === '' ? t('session.passwordNeeded') : ''
     refusal.value = ''
+    lacksSignal = false
     if (errors.email !== '' || errors.password !== '' || busy.value) return false
     busy.value = true
     try {
@@ -35,6 +38,7 @@ export function useSignIn(wrongWords: () => string): SignIn {
       if (session.user !== null) await preferences.offerLanguage(session.user.language)
       return true
     } catch (error) {
+      lacksSignal = error instanceof NetworkError
       refusal.value = isWrong(error) ? wrongWords() : messages.problem(error)
       return false
     } finally {
@@ -42,6 +46,7 @@ export function useSignIn(wrongWords: () => string): SignIn {
     }
   }
 
+  useSignalBack(() => { if (lacksSignal) refusal.value = '' })
   return { errors, refusal, busy, signIn }
 }
 

@@ -1,10 +1,12 @@
-import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import type { Acknowledged } from '../../shared/contract/common.ts'
 import type { ApplicationRecord, Check } from '../../shared/contract/record.ts'
 import { ApiError } from '../api/errors.ts'
+import { useOutbox } from '../stores/outbox.ts'
 import type { RecordDraft } from './recordDraft.ts'
 import { useMessages } from './useMessages.ts'
+import { useSignalBack } from './useSignalBack.ts'
 import { useTask } from './useTask.ts'
 
 /** Something the server finds unlikely and takes when a reason is given. */
@@ -61,6 +63,14 @@ export function useSigning({ draft, stops, sign }: SigningOptions): Signing {
       throw error
     }
   })
+
+  // "No signal" is said as long as it is so.
+  function forgetKept(): void {
+    if (task.result.value === 'kept') task.result.value = undefined
+  }
+  const outbox = useOutbox()
+  useSignalBack(forgetKept)
+  watch(() => outbox.lastSentAt, forgetKept)
 
   const words = computed(() => {
     const error = task.error.value

@@ -1,4 +1,6 @@
 import { ref, shallowRef, type Ref, type ShallowRef } from 'vue'
+import { NetworkError } from '../api/errors.ts'
+import { useSignalBack } from './useSignalBack.ts'
 
 /** One piece of work and how it stands. */
 export interface Task<Args extends unknown[], Answer> {
@@ -8,7 +10,7 @@ export interface Task<Args extends unknown[], Answer> {
   result: ShallowRef<Answer | undefined>
 }
 
-/** Runs `task` and keeps its answer or its error; an overtaken run may no longer write. `run` never throws. */
+/** Runs `task` and keeps its answer or its error; an overtaken run may no longer write. `run` never throws. A lack of signal is no error any more once it is back. */
 export function useTask<Args extends unknown[], Answer>(task: (...args: Args) => Promise<Answer>): Task<Args, Answer> {
   const running = ref(false)
   const error = shallowRef<unknown>(null)
@@ -32,5 +34,6 @@ export function useTask<Args extends unknown[], Answer>(task: (...args: Args) =>
     }
   }
 
+  useSignalBack(() => { if (error.value instanceof NetworkError) error.value = null })
   return { run, running, error, result }
 }

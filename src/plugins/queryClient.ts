@@ -8,6 +8,8 @@ export const queryClient = new QueryClient({
       staleTime: 30_000,
       // Without signal the read still runs: it answers from this device.
       networkMode: 'always',
+      // What did not come for want of signal is asked for again when it is back.
+      refetchOnReconnect: true,
       retry: (failures, error) => !(error instanceof ApiError) && !(error instanceof NetworkError) && failures < 1,
     },
   },

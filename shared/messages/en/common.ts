@@ -17,5 +17,5 @@ export const common = {
   noAnswer: 'No answer from the server. What you typed is still here.',
   unexpected: 'Something failed here. What you typed is still here; try again.',
   tooMany: 'Too many tries. Wait a little, then try again.',
-  tooManyMinutes: 'Too many tries. Try again in {count} minute. | Too many tries. Try again in {count} minutes.',
+  tooManyMinutes: 'Too many tries. Try again in a minute. | Too many tries. Try again in {count} minutes.',
 }

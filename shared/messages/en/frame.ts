@@ -14,6 +14,7 @@ export const frame = {
   },
   more: 'More',
   back: 'Back',
+  pageTitle: '{page} – {brand}',
   season: 'Season {season}',
   farmSwitch: 'Open farm',
   readOnly: 'read only',

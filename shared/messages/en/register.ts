@@ -6,7 +6,7 @@ export const register = {
   failed: 'The register did not come.',
   tryAgain: 'Try again',
   emptyTitle: 'No record yet.',
-  emptyText: 'A spray or drench stands here once it is started; signing gives it its number.',
+  emptyText: 'A record stands here once it is started; signing gives it its number.',
   emptyRead: 'Records stand here once the farm signs one in a season granted to you.',
   onlyBlock: 'Only records of {code}.',
   allBlocks: 'All blocks',

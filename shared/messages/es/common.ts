@@ -17,5 +17,5 @@ export const common = {
   noAnswer: 'El servidor no responde. Lo que escribió sigue aquí.',
   unexpected: 'Algo falló aquí. Lo que escribió sigue aquí; inténtelo de nuevo.',
   tooMany: 'Demasiados intentos. Espere un poco e inténtelo de nuevo.',
-  tooManyMinutes: 'Demasiados intentos. Inténtelo de nuevo dentro de {count} minuto. | Demasiados intentos. Inténtelo de nuevo dentro de {count} minutos.',
+  tooManyMinutes: 'Demasiados intentos. Inténtelo de nuevo dentro de un minuto. | Demasiados intentos. Inténtelo de nuevo dentro de {count} minutos.',
 }

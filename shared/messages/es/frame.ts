@@ -14,6 +14,7 @@ export const frame = {
   },
   more: 'Más',
   back: 'Volver',
+  pageTitle: '{page} – {brand}',
   season: 'Campaña {season}',
   farmSwitch: 'Finca abierta',
   readOnly: 'solo lectura',

@@ -6,7 +6,7 @@ export const register = {
   failed: 'El libro de registros no llegó.',
   tryAgain: 'Intentar de nuevo',
   emptyTitle: 'Aún no hay registros.',
-  emptyText: 'Una aplicación foliar o al suelo aparece aquí cuando se empieza; al firmarla recibe su número.',
+  emptyText: 'Un registro aparece aquí cuando se empieza; al firmarlo recibe su número.',
   emptyRead: 'Los registros aparecen aquí cuando la finca firma uno en una campaña que se le ha concedido.',
   onlyBlock: 'Solo registros de {code}.',
   allBlocks: 'Todas las parcelas',

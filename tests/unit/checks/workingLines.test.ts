@@ -18,7 +18,7 @@ describe('how a sheet was worked out', () => {
       'Nettle ferment: 750 L ÷ 20 = 37.5 L',
       // (750 + 37.5) ÷ (1 − 1.9 ÷ 400) is 791.258 L, so 1.97815 tanks.
       'Potash soap: 1.9 L × 1.9781 tanks = 3.7585 L',
-      'Spray: 750 L + 41.2585 L = 791.258 L',
+      'Mix: 750 L + 41.2585 L = 791.258 L',
       'On a hectare: 791.258 L ÷ 1.97 ha = 401.654 L/ha',
       'Loads: 791.258 L ÷ 400 L = 1 full, 391.258 L left',
     ])
@@ -26,7 +26,7 @@ describe('how a sheet was worked out', () => {
 
   it('begins with the rate where the water is sized from it', () => {
     expect(spoken({ components: [{ basis: { kind: 'perArea', value: '2', unit: 'L/ha' } }] }, 'sprayRate')).toEqual([
-      'Spray: 400 L/ha × 1.97 ha = 788 L',
+      'Mix: 400 L/ha × 1.97 ha = 788 L',
       'Carrier water: 788 L − 3.94 L = 784.06 L',
       'Nettle ferment: 2 L/ha × 1.97 ha = 3.94 L',
       'Loads: 788 L ÷ 400 L = 1 full, 388 L left',

@@ -40,6 +40,13 @@ describe('useTask', () => {
     expect(task.running.value).toBe(false)
   })
 
+  it('forgets a lack of signal once the signal is back, and nothing else', async () => {
+    const failing = [new NetworkError(), refusal(422)].map((error) => useTask(() => Promise.reject(error)))
+    for (const task of failing) await task.run()
+    window.dispatchEvent(new Event('online'))
+    expect(failing.map(({ error }) => error.value === null)).toEqual([true, false])
+  })
+
   it('keeps its error and never throws', async () => {
     const task = useTask(() => Promise.reject(new NetworkError()))
     expect(await task.run()).toBeUndefined()
