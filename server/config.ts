@@ -1,4 +1,6 @@
+import { join } from 'node:path'
 import { z } from 'zod'
+import type { Bucket } from './adapters/files/bucketFiles.ts'
 
 const environment = z.object({
   PORT: z.coerce.number().int().min(0).max(65535).default(4310),
@@ -13,6 +15,19 @@ const environment = z.object({
   SEED_DEMO: z.enum(['0', '1']).default('0'),
   DEMO_PASSWORD: z.string().min(8).optional(),
   FIXED_CLOCK: z.iso.datetime({ offset: true }).optional(),
+  DATA_DIR: z.string().min(1).default('.data'),
+  FILES_FOLDER: z.string().min(1).optional(),
+  FILES_QUOTA_MB: z.coerce.number().int().min(1).default(5_000),
+  S3_BUCKET: z.string().min(1).optional(),
+  S3_ENDPOINT: z.url('must be the address of the store, https://…').optional(),
+  S3_REGION: z.string().min(1).default('us-east-1'),
+  S3_KEY_ID: z.string().min(1).optional(),
+  S3_SECRET: z.string().min(1).optional(),
+}).superRefine((values, context) => {
+  if (values.S3_BUCKET === undefined) return
+  for (const name of ['S3_KEY_ID', 'S3_SECRET'] as const) {
+    if (values[name] === undefined) context.addIssue({ code: 'custom', path: [name], message: 'must be given with S3_BUCKET' })
+  }
 })
 
 export interface Config {
@@ -29,6 +44,7 @@ export interface Config {
   logFile: string | null
   demo: { password: string } | null
   fixedClock: string | null
+  files: FilesConfig
 }
 
 /** How cookies are named and kept. */
@@ -52,6 +68,17 @@ export function cookiesOf(publicUrl: string | null): CookieConfig {
     devicePrefix: secure ? '__Secure-drenchleaf.device.' : 'drenchleaf.device.',
   }
 }
+
+/** Where photos and papers are kept. */
+export interface FilesConfig {
+  /** On this machine; not used with a bucket. */
+  folder: string
+  bucket: Bucket | null
+  /** Most that one farm may keep, bytes. */
+  quotaBytes: number
+}
+
+const BYTES_PER_MB = 1_000_000
 
 /**
  * The environment, read once.
@@ -78,5 +105,16 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     logFile: values.LOG_FILE ?? null,
     demo: values.SEED_DEMO === '1' && values.DEMO_PASSWORD ? { password: values.DEMO_PASSWORD } : null,
     fixedClock: values.FIXED_CLOCK ?? null,
+    files: readFiles(values),
+  }
+}
+
+function readFiles(values: z.output<typeof environment>): FilesConfig {
+  const { S3_BUCKET: name, S3_KEY_ID: keyId, S3_SECRET: secret } = values
+  const isWhole = name !== undefined && keyId !== undefined && secret !== undefined
+  return {
+    folder: values.FILES_FOLDER ?? join(values.DATA_DIR, 'files'),
+    bucket: isWhole ? { name, keyId, secret, endpoint: values.S3_ENDPOINT ?? null, region: values.S3_REGION } : null,
+    quotaBytes: values.FILES_QUOTA_MB * BYTES_PER_MB,
   }
 }

@@ -19,6 +19,7 @@ const STATUSES = {
   'wrong-type': 415,
   'invalid-input': 422,
   'too-many': 429,
+  unavailable: 503,
 } as const
 
 /** What kind of refusal it is; decides the status. */

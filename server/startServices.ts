@@ -1,8 +1,10 @@
 import { readFile } from 'node:fs/promises'
 import { join } from 'node:path'
+import { createFolderFiles } from './adapters/files/folderFiles.ts'
+import type { FileStore } from './adapters/files/fileStore.ts'
 import { createGroundTiles } from './adapters/tiles/groundTiles.ts'
 import { fixedClock, systemClock } from './clock.ts'
-import type { Config } from './config.ts'
+import type { Config, FilesConfig } from './config.ts'
 import { clearHalfSeeded } from './database/clearHalfSeeded.ts'
 import { openDatabase } from './database/database.ts'
 import { prepareDatabase } from './database/prepareDatabase.ts'
@@ -22,7 +24,15 @@ export async function startServices(config: Config): Promise<Services> {
     clock: config.fixedClock === null ? systemClock : fixedClock(config.fixedClock),
     database: await openDatabase(config.databaseUrl, config.databasePool, (error) => logger.warn({ err: error }, 'idle database connection broke')),
     reports: createReportProcess(),
+    files: await openFiles(config.files),
     tiles: config.demo === null ? null : createGroundTiles(JSON.parse(await readFile(join(DEMO_FOLDER, 'demoGround.geojson'), 'utf8'))),
     checkAnswers: false,
   }
+}
+
+/** The client of the bucket is loaded only where there is one. */
+async function openFiles({ folder, bucket }: FilesConfig): Promise<FileStore> {
+  if (bucket === null) return createFolderFiles(folder)
+  const { createBucketFiles } = await import('./adapters/files/bucketFiles.ts')
+  return createBucketFiles(bucket)
 }

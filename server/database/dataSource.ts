@@ -2,6 +2,7 @@ import 'reflect-metadata'
 import pg from 'pg'
 import { DataSource } from 'typeorm'
 import { CreateHouse1764547200000 } from '../../migrations/1764547200000-CreateHouse.ts'
+import { AddAttachments1764601000000 } from '../../migrations/1764601000000-AddAttachments.ts'
 import { NarrowAccess1764603000000 } from '../../migrations/1764603000000-NarrowAccess.ts'
 import { ENTITIES } from './entities.ts'
 
@@ -31,7 +32,7 @@ export function createOwnerSource(url: string): DataSource {
     ...common,
     url,
     poolSize: 1,
-    migrations: [CreateHouse1764547200000, NarrowAccess1764603000000],
+    migrations: [CreateHouse1764547200000, AddAttachments1764601000000, NarrowAccess1764603000000],
     migrationsTransactionMode: 'each',
   })
 }

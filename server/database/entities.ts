@@ -1,6 +1,7 @@
 import { Account } from '../entities/Account.ts'
 import { AccountToken } from '../entities/AccountToken.ts'
 import { ApplicationRecord } from '../entities/ApplicationRecord.ts'
+import { Attachment } from '../entities/Attachment.ts'
 import { Block } from '../entities/Block.ts'
 import { Farm } from '../entities/Farm.ts'
 import { FarmHead } from '../entities/FarmHead.ts'
@@ -21,6 +22,7 @@ export const ENTITIES = [
   Account,
   AccountToken,
   ApplicationRecord,
+  Attachment,
   Block,
   Farm,
   FarmHead,

@@ -20,6 +20,7 @@ export const APP_RIGHTS: Record<string, string> = {
   record_lines: 'SELECT, INSERT, DELETE',
   record_components: 'SELECT, INSERT, DELETE',
   record_versions: 'SELECT, INSERT',
+  attachments: 'SELECT, INSERT, UPDATE (season, signed_version, removed_at)',
   journal: 'SELECT, INSERT',
   demo_seed: 'SELECT, INSERT',
 }

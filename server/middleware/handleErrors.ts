@@ -6,6 +6,9 @@ import { logSecurity, securityEventOf } from './logSecurity.ts'
 import { presentProblem, presentUnforeseen } from './presentProblem.ts'
 import { readLanguage } from './readLanguage.ts'
 
+/** Seconds until what is full or out of reach is worth another try. */
+const TRY_AGAIN_S = '60'
+
 /** Every refusal and fault leaves here as problem JSON; what nobody foresaw is logged once, with its stack. */
 export function handleErrors(services: Services): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
@@ -25,6 +28,7 @@ export function handleErrors(services: Services): ErrorRequestHandler {
     const requestId = String(request.id)
     const problem = presentProblem(error, language, requestId)
     if (!problem) services.logger.error({ err: error, requestId }, 'unforeseen')
+    if (problem?.status === 503) response.set('Retry-After', TRY_AGAIN_S)
     const answer = problem ?? presentUnforeseen(language, requestId)
     response.status(answer.status).type('application/problem+json').send(JSON.stringify(answer))
   }

@@ -3,6 +3,7 @@ import type { z } from 'zod'
 import type { Role } from '../../shared/contract/session.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { FarmActor } from '../database/actor.ts'
+import type { UploadedFile } from '../services/files/judgeFile.ts'
 import type { Services } from '../services/services.ts'
 
 /** Who may call: everybody, any signed-in account, or those roles on the farm named in the path. */
@@ -11,11 +12,13 @@ export type RouteRoles = 'everybody' | 'account' | readonly Role[]
 type Parsed<Schema> = Schema extends z.ZodType ? z.output<Schema> : Record<string, never>
 type ActorOf<Roles> = Roles extends readonly Role[] ? FarmActor : null
 
-export interface RouteCall<Params, Query, Body, Actor> {
+export interface RouteCall<Params, Query, Body, Actor, File = null> {
   params: Params
   query: Query
   body: Body
   actor: Actor
+  /** The file beside the fields, on a route that takes one. */
+  file: File
   accountId: string
   language: Language
   services: Services
@@ -34,6 +37,7 @@ export interface RouteDefinition<
   Query extends z.ZodType | undefined,
   Body extends z.ZodType | undefined,
   Answer extends z.ZodType,
+  Upload extends boolean,
 > {
   method: 'get' | 'post' | 'put' | 'delete'
   path: string
@@ -48,7 +52,9 @@ export interface RouteDefinition<
   contentType?: string
   /** A password is tried here: attempts are limited. */
   guardsPassword?: boolean
-  run(call: RouteCall<Parsed<Params>, Parsed<Query>, Parsed<Body>, ActorOf<Roles>>): Promise<RouteAnswer<z.input<Answer>>>
+  /** Takes multipart/form-data: one file, and the fields of `body` beside it. It is read once the rights are known. */
+  upload?: Upload
+  run(call: RouteCall<Parsed<Params>, Parsed<Query>, Parsed<Body>, ActorOf<Roles>, Upload extends true ? UploadedFile : null>): Promise<RouteAnswer<z.input<Answer>>>
 }
 
 /** A route after its types have done their work; router, OpenAPI and the role matrix are made from it. */
@@ -63,7 +69,8 @@ export interface Route {
   answer: z.ZodType
   contentType: string | undefined
   guardsPassword: boolean
-  run(call: RouteCall<unknown, unknown, unknown, FarmActor | null>): Promise<RouteAnswer<unknown>>
+  upload: boolean
+  run(call: RouteCall<unknown, unknown, unknown, FarmActor | null, UploadedFile | null>): Promise<RouteAnswer<unknown>>
 }
 
 /**
@@ -76,7 +83,8 @@ export function defineRoute<
   Params extends z.ZodType | undefined = undefined,
   Query extends z.ZodType | undefined = undefined,
   Body extends z.ZodType | undefined = undefined,
->(definition: RouteDefinition<Roles, Params, Query, Body, Answer>): Route {
+  const Upload extends boolean = false,
+>(definition: RouteDefinition<Roles, Params, Query, Body, Answer, Upload>): Route {
   const { roles, path } = definition
   const onFarm = path.startsWith('/farms/:farmId')
   if (!roles || roles.length === 0) throw new Error(`Route ${path} names no roles`)
@@ -92,6 +100,7 @@ export function defineRoute<
     answer: definition.answer,
     contentType: definition.contentType,
     guardsPassword: definition.guardsPassword ?? false,
+    upload: definition.upload ?? false,
     // The parsers above have made each part what `run` says it takes.
     run: definition.run as Route['run'],
   }

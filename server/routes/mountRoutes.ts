@@ -4,6 +4,8 @@ import { AppError, forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from '../database/actor.ts'
 import type { Authenticate } from '../middleware/session.ts'
 import { readLanguage } from '../middleware/readLanguage.ts'
+import { readUpload } from '../middleware/readUpload.ts'
+import type { UploadedFile } from '../services/files/judgeFile.ts'
 import type { Services } from '../services/services.ts'
 import type { Route } from './defineRoute.ts'
 
@@ -35,14 +37,18 @@ export function mountRoutes(routes: Route[], house: House): Router {
 }
 
 async function serve(route: Route, { services, authenticate }: House, request: Request, response: Response): Promise<void> {
+  if (!route.upload && request.is('multipart/form-data')) throw new AppError('wrong-type', 'wrong_type')
   const accountId = request.user?.accountId ?? ''
   if (route.roles !== 'everybody' && accountId === '') throw new AppError('unauthenticated', 'unauthenticated')
   const params = parsePath(route.params, request.params)
   const actor = Array.isArray(route.roles) ? await authorise(route, services, accountId, params) : null
+  const query = route.query ? route.query.parse(request.query) : refuseQuery(request.query)
+  const { fields, file } = await readBody(route, request, response)
   const answer = await route.run({
     params,
-    query: route.query ? route.query.parse(request.query) : refuseQuery(request.query),
-    body: route.body ? route.body.parse(request.body ?? {}) : {},
+    query,
+    body: route.body ? route.body.parse(fields) : {},
+    file,
     actor,
     accountId,
     language: readLanguage(request),
@@ -56,6 +62,11 @@ async function serve(route: Route, { services, authenticate }: House, request: R
   response.status(answer.status ?? 200)
   if (answer.body === null) response.end()
   else response.json(answer.body)
+}
+
+/** What was sent: read already where it is JSON, and only now where it is a file. */
+async function readBody(route: Route, request: Request, response: Response): Promise<{ fields: unknown; file: UploadedFile | null }> {
+  return route.upload ? readUpload(request, response) : { fields: request.body ?? {}, file: null }
 }
 
 /** A path that names nothing readable names nothing that is there. */

@@ -60,9 +60,16 @@ function describeRoute(route: Route): Operation {
       ...describeParameters(route.query, 'query'),
       ...(route.method === 'get' ? [] : [{ $ref: '#/components/parameters/OwnPages' }]),
     ],
-    ...(route.body && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(route.body, 'input') } } } }),
+    ...(route.body && { requestBody: { required: true, content: describeBody(route, schemaOf(route.body, 'input')) } }),
     responses: { ...describeAnswers(route), ...describeRefusals(route) },
   }
+}
+
+function describeBody({ upload }: Route, schema: { properties?: object; required?: string[] }): object {
+  if (!upload) return { 'application/json': { schema } }
+  const file = { type: 'string', contentMediaType: 'application/octet-stream' }
+  const withFile = { ...schema, properties: { ...schema.properties, file }, required: [...(schema.required ?? []), 'file'] }
+  return { 'multipart/form-data': { schema: withFile } }
 }
 
 function describeParameters(schema: z.ZodType | undefined, place: 'path' | 'query'): object[] {

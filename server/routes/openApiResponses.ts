@@ -9,9 +9,10 @@ const REFUSALS = {
   404: 'Nothing is here for this account.',
   409: 'It is there already, or it changed since it was read.',
   413: 'Too large.',
-  415: 'Not application/json.',
+  415: 'Not application/json, or not a file that is taken.',
   422: 'Something in it cannot be taken, or is unlikely and not acknowledged.',
   429: 'Too many attempts with a password.',
+  503: 'The file store is full or out of reach. Try again later.',
   default: 'Refused, or failed here.',
 } as const
 
@@ -40,6 +41,7 @@ export function describeRefusals(route: Route): Record<string, object> {
     415: route.body !== undefined,
     422: true,
     429: route.guardsPassword,
+    503: route.path.includes('/files'),
     default: true,
   }
   const content = { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } }
@@ -47,7 +49,8 @@ export function describeRefusals(route: Route): Record<string, object> {
 }
 
 /** Things are made under an id of the maker's, so that a repeat makes no second one. */
-function isMaking({ method, path, body }: Route): boolean {
+function isMaking({ method, path, body, upload }: Route): boolean {
+  if (upload) return true
   if (method !== 'post' || !body || path.includes('/:id')) return false
   const { properties = {} } = schemaOf(body, 'input') as { properties?: object }
   return 'id' in properties

@@ -1,10 +1,11 @@
 import { blockRoutes } from './blockRoutes.ts'
 import type { Route } from './defineRoute.ts'
 import { farmRoutes } from './farmRoutes.ts'
+import { fileRoutes } from './fileRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes]
+export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes, ...fileRoutes]

@@ -2,6 +2,7 @@ import type { Logger } from 'pino'
 import type { Clock } from '../clock.ts'
 import type { Config } from '../config.ts'
 import type { Database } from '../database/database.ts'
+import type { FileStore } from '../adapters/files/fileStore.ts'
 import type { TileSource } from '../adapters/tiles/tileSource.ts'
 import type { ReportProcess } from '../reports/reportProcess.ts'
 
@@ -12,6 +13,7 @@ export interface Services {
   database: Database
   logger: Logger
   reports: ReportProcess
+  files: FileStore
   /** Null where no map ground is set up. */
   tiles: TileSource | null
   /** Holds every answer against its schema before it is sent; on in tests. */

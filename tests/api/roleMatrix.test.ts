@@ -4,6 +4,7 @@ import { v7 as uuidV7 } from 'uuid'
 import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from '../../server/demo/buildThings.ts'
 import type { Route } from '../../server/routes/defineRoute.ts'
 import { ROUTES } from '../../server/routes/routes.ts'
+import { buildPicture } from '../support/buildFiles.ts'
 import { openHouse, PASSWORD, type Agent, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 import { seedThings, type SeededThings } from '../support/seedThings.ts'
 
@@ -15,7 +16,10 @@ interface World {
   farm: TestFarm
   things: SeededThings
   recordId: string
+  fileId: string
 }
+
+const PICTURE = await buildPicture('png')
 
 let house: TestHouse
 let mine: World
@@ -44,8 +48,10 @@ async function makeWorld(): Promise<World> {
   const applicator = await house.as(farm.accounts.applicator)
   const input = buildRecord(things)
   await applicator.post(`/api/farms/${farm.id}/records`).send(input).expect(201)
+  const fileId = uuidV7()
+  await applicator.post(`/api/farms/${farm.id}/records/${input.id}/files`).field({ id: fileId, kind: 'photo' }).attach('file', PICTURE, 'a.png').expect(201)
   await applicator.post(`/api/farms/${farm.id}/records/${input.id}/sign`).send({ password: PASSWORD }).expect(200)
-  return { farm, things, recordId: input.id }
+  return { farm, things, recordId: input.id, fileId }
 }
 
 /** A body that the route takes, made anew for each call, so that only rights can refuse it. */
@@ -61,6 +67,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/records': () => buildRecord(things),
     'put /farms/:farmId/records/:id': () => ({ ...buildRecord(things), id: undefined, revision: 1 }),
     'post /farms/:farmId/records/:id/sign': () => ({ password: PASSWORD }),
+    'post /farms/:farmId/records/:id/files': () => ({ id: uuidV7(), kind: 'photo' }),
   }
   const make = bodies[`${route.method} ${route.path}`]
   if (!make && route.body) throw new Error(`The matrix has no body for ${route.method} ${route.path}`)
@@ -68,7 +75,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 }
 
 function addressOf(route: Route, world: World, things: SeededThings | null): string {
-  const id = things === null ? UNKNOWN : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
+  const id = things === null ? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
   return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
 }
 
@@ -78,7 +85,8 @@ async function call(actor: Actor, route: Route, address: string, body: object | 
   const { default: supertest } = await import('supertest')
   const agent = actor === 'nobody' ? supertest(house.app) : agents[actor]
   const request = agent[route.method](address).set('X-Requested-With', 'drenchleaf')
-  const response = await (body ? request.send(body) : request)
+  if (route.upload) request.field((body ?? {}) as Record<string, string>).attach('file', PICTURE, 'a.png')
+  const response = await (body && !route.upload ? request.send(body) : request)
   return { status: response.status, body: response.body as Record<string, unknown> }
 }
 

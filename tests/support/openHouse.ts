@@ -1,9 +1,13 @@
 import { randomBytes } from 'node:crypto'
+import { mkdtemp, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
 import type { Express } from 'express'
 import pg from 'pg'
 import pino, { type Logger } from 'pino'
 import supertest from 'supertest'
 import { v7 as uuidV7 } from 'uuid'
+import { createFolderFiles } from '../../server/adapters/files/folderFiles.ts'
 import { createGroundTiles } from '../../server/adapters/tiles/groundTiles.ts'
 import { createApp } from '../../server/app.ts'
 import { cookiesOf, type Config } from '../../server/config.ts'
@@ -50,10 +54,11 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
   const name = `test_${randomBytes(8).toString('hex')}`
   await onAdmin(cluster.adminUrl, `CREATE DATABASE ${name} TEMPLATE ${TEMPLATE} OWNER drenchleaf_owner`)
   let now = new Date(NOW)
+  const folder = await mkdtemp(join(tmpdir(), 'drenchleaf-files-'))
   const config: Config = {
     port: 4310, host: '127.0.0.1', databasePool: 5, logFile: null, demo: null, fixedClock: null, publicUrl: null,
     databaseUrl: databaseUrl(cluster, 'app', name), databaseOwnerUrl: databaseUrl(cluster, 'owner', name),
-    farmsPerAccount: 20, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
     cookies: cookiesOf(changes.config?.publicUrl ?? null),
   }
   const services: Services = {
@@ -62,6 +67,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
     logger: changes.logger ?? pino({ level: 'error' }, pino.destination(2)),
     database: await openDatabase(config.databaseUrl, config.databasePool, () => undefined),
     reports: createReportProcess(),
+    files: createFolderFiles(config.files.folder),
     tiles: createGroundTiles({ type: 'FeatureCollection', features: [] }),
     checkAnswers: true,
   }
@@ -77,6 +83,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
       close()
       await services.reports.close()
       await services.database.close()
+      await rm(folder, { recursive: true, force: true })
       await onAdmin(cluster.adminUrl, `DROP DATABASE ${name} WITH (FORCE)`)
     },
   }

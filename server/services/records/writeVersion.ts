@@ -11,6 +11,7 @@ import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Person } from '../../entities/Person.ts'
 import { RecordVersion } from '../../entities/RecordVersion.ts'
 import { appendJournal } from '../appendJournal.ts'
+import { holdFiles } from '../files/holdFiles.ts'
 import type { Services } from '../services.ts'
 import { buildSignedRecord, type SignedPeople } from './buildSignedRecord.ts'
 import type { JudgedRecord } from './judgeRecord.ts'
@@ -41,6 +42,7 @@ export async function writeVersion(
   const season = seasonOf(civilDateIn(actor.zone, firstStart(content) ?? ''), actor.seasonStart)
   const { number, seq } = await takeNumber(manager, actor.farmId, season)
   const stamp = { id: record.id, number: formatRecordNumber(season, number), season, version: 1, seq }
+  await holdFiles(manager, record, stamp)
   const text = canonicalText(
     buildSignedRecord({
       actor, content, ground, people, acknowledged, record: stamp, sheet: judged.sheet, checks: judged.checks, reason: null,

@@ -17,6 +17,11 @@ export const problems = {
   stale: 'Somebody changed this since you opened it. Both sides are kept: look at theirs, then save again.',
   conflict: 'This is already there.',
   internal: 'Something failed here, not with you. Try again; if it stays, tell whoever runs this server the number below.',
+  unreadable_upload: 'This upload could not be read to its end. Send it again.',
+  multipart: 'Send multipart/form-data: the file as `file`, with its fields.',
+  too_many_parts: 'There are too many parts in this upload. Send one file at a time.',
+  file_store: 'Photos and papers cannot be kept or fetched just now. Try again later; nothing else was lost.',
+  quota: 'This farm’s room for photos and papers, {megabytes} MB, is used up. The record itself is kept.',
   unknown_field: 'This field is not known here. Leave it out.',
   more: 'And {count} more.',
   field: {
@@ -76,6 +81,21 @@ export const problems = {
   welcome: { used_up: 'This link does not work any more. Ask for a new one.', password_short: 'Use at least 12 characters.', password_known: 'This is one of the first passwords anybody tries. Choose another.' },
   code: { taken: '{code} is already used on this farm. Choose another.' },
   name: { taken: '{name} is already there. Choose another name.' },
+  file: {
+    empty: 'This file is empty. Choose it again.',
+    too_large: 'This file is larger than 10 MB. Choose a smaller one, or take the photo at a lower size.',
+    type: 'This is no photo or paper that is taken here. Choose a JPEG, PNG or WebP picture, or for a paper a PDF.',
+    camera_only: 'This is a camera’s own kind of picture. Choose JPEG: on the phone set the camera to “most compatible”, or send it as JPEG.',
+    name_differs: 'The name or the announced type says something else than what the file is. Give it its right ending.',
+    photo_type: 'A PDF is a paper, not a photo. Add it as a paper.',
+    too_many: 'A record takes {maximum} photos and papers. Take one back first.',
+    signed: 'A signed version names this file, so it stays.',
+    original: 'The original may say where somebody was. The owner, a manager or whoever added it can open it.',
+  },
+  image: {
+    pixels: 'This picture has {megapixels} megapixels; at most {maximum} are taken. Choose a smaller one.',
+    broken: 'This picture is damaged or cut off. Choose it again, or take it anew.',
+  },
   geometry: {
     type: 'A block is a polygon.',
     out_of_range: 'A point lies outside the globe: longitude {lon}, latitude {lat}.',

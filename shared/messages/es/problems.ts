@@ -17,6 +17,11 @@ export const problems = {
   stale: 'Alguien cambió esto desde que usted lo abrió. Se guardan ambas versiones: mire la otra y guarde de nuevo.',
   conflict: 'Esto ya existe.',
   internal: 'Algo falló aquí, no en su lado. Inténtelo de nuevo; si sigue, dé el número de abajo a quien lleva este servidor.',
+  unreadable_upload: 'Este envío no se pudo leer hasta el final. Envíelo de nuevo.',
+  multipart: 'Envíe multipart/form-data: el archivo como `file`, con sus campos.',
+  too_many_parts: 'Este envío tiene demasiadas partes. Envíe un archivo cada vez.',
+  file_store: 'Ahora mismo no se pueden guardar ni traer fotos y papeles. Inténtelo más tarde; no se perdió nada más.',
+  quota: 'El espacio de esta finca para fotos y papeles, {megabytes} MB, está lleno. El registro mismo queda guardado.',
   unknown_field: 'Este campo no se conoce aquí. Quítelo.',
   more: 'Y {count} más.',
   field: {
@@ -76,6 +81,21 @@ export const problems = {
   welcome: { used_up: 'Este enlace ya no sirve. Pida uno nuevo.', password_short: 'Use al menos 12 caracteres.', password_known: 'Es una de las primeras contraseñas que prueba cualquiera. Elija otra.' },
   code: { taken: '{code} ya se usa en esta finca. Elija otro.' },
   name: { taken: '{name} ya existe. Elija otro nombre.' },
+  file: {
+    empty: 'Este archivo está vacío. Elíjalo de nuevo.',
+    too_large: 'Este archivo pasa de 10 MB. Elija uno más pequeño, o haga la foto con menos tamaño.',
+    type: 'Esto no es una foto ni un papel que se acepte aquí. Elija una imagen JPEG, PNG o WebP, o para un papel un PDF.',
+    camera_only: 'Es un formato propio de la cámara. Elija JPEG: en el teléfono ponga la cámara en “más compatible”, o envíela como JPEG.',
+    name_differs: 'El nombre o el tipo anunciado dice otra cosa que lo que el archivo es. Déle su terminación correcta.',
+    photo_type: 'Un PDF es un papel, no una foto. Añádalo como papel.',
+    too_many: 'Un registro admite {maximum} fotos y papeles. Quite antes uno.',
+    signed: 'Una versión firmada nombra este archivo, así que se queda.',
+    original: 'El original puede decir dónde estaba alguien. Lo pueden abrir el titular, un responsable o quien lo añadió.',
+  },
+  image: {
+    pixels: 'Esta imagen tiene {megapixels} megapíxeles; se admiten {maximum} como máximo. Elija una más pequeña.',
+    broken: 'Esta imagen está dañada o cortada. Elíjala de nuevo, o haga otra.',
+  },
   geometry: {
     type: 'Una parcela es un polígono.',
     out_of_range: 'Un punto queda fuera del globo: longitud {lon}, latitud {lat}.',

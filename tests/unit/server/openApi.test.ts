@@ -39,6 +39,12 @@ describe('the description of the API', () => {
     expect(pdf).toMatchObject({ content: { 'application/pdf': { schema: { type: 'string', format: 'binary' } } } })
   })
 
+  it('describes an upload as a file beside its fields', () => {
+    const upload = operations.find(({ name }) => name === 'post /farms/{farmId}/records/{id}/files')?.operation.requestBody
+    expect(upload).toMatchObject({ content: { 'multipart/form-data': { schema: { properties: { file: {}, id: {}, kind: {} }, required: ['id', 'kind', 'file'] } } } })
+    expect(statuses('post /farms/{farmId}/records/{id}/files')).toEqual(['200', '201', '400', '401', '403', '404', '409', '413', '415', '422', '503', 'default'])
+  })
+
   it.each([
     { path: '/farms/:farmId/blocks', body: buildBlock() },
     { path: '/farms/:farmId/materials', body: buildMaterial() },
