@@ -13,7 +13,10 @@ import { Material } from '../entities/Material.ts'
 import { Person } from '../entities/Person.ts'
 import { RecordComponent } from '../entities/RecordComponent.ts'
 import { RecordLine } from '../entities/RecordLine.ts'
+import { RecordTerm } from '../entities/RecordTerm.ts'
 import { RecordVersion } from '../entities/RecordVersion.ts'
+import { RegisterEntry } from '../entities/RegisterEntry.ts'
+import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
 import { Sprayer } from '../entities/Sprayer.ts'
 
@@ -34,7 +37,10 @@ export const ENTITIES = [
   Person,
   RecordComponent,
   RecordLine,
+  RecordTerm,
   RecordVersion,
+  RegisterEntry,
+  SavedFilter,
   SeasonCounter,
   Sprayer,
 ]

@@ -1,17 +1,17 @@
 import { z } from 'zod'
-import { farmParamsSchema, idSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
-import { createRecordSchema, RECORD_STATES, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import { farmParamsSchema, pageOf, thingParamsSchema } from '../../shared/contract/common.ts'
+import { createRecordSchema, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import { registerQuerySchema } from '../../shared/contract/register.ts'
 import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
 import { collectRecordReport } from '../services/records/collectRecordReport.ts'
 import { createRecord } from '../services/records/createRecord.ts'
-import { getRecord, listRecords, listRecordVersions } from '../services/records/readRecords.ts'
+import { getRecord, listRecordVersions } from '../services/records/readRecords.ts'
+import { listRegister } from '../services/register/listRegister.ts'
 import { signRecord } from '../services/records/signRecord.ts'
 import { updateRecord } from '../services/records/updateRecord.ts'
 import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE, FARM_PEOPLE } from './roleGroups.ts'
 import { sendReport } from './sendReport.ts'
-
-const registerQuerySchema = pageQuerySchema.extend({ block: idSchema.optional(), state: z.enum(RECORD_STATES).optional() })
 
 const versionsSchema = z.object({
   items: z.array(z.object({ version: z.number().int(), digest: z.string(), canonicalText: z.string(), signed: signedRecordSchema })),
@@ -20,9 +20,9 @@ const versionsSchema = z.object({
 
 export const recordRoutes = [
   defineRoute({
-    method: 'get', path: '/farms/:farmId/records', summary: 'The register, newest work first.', roles: EVERY_ROLE,
+    method: 'get', path: '/farms/:farmId/records', summary: 'The register by filter, newest work first unless another order is asked for.', roles: EVERY_ROLE,
     params: farmParamsSchema, query: registerQuerySchema, answer: pageOf(registerRowSchema),
-    run: async ({ services, actor, query }) => ({ body: await listRecords(services, actor, query) }),
+    run: async ({ services, actor, query }) => ({ body: await listRegister(services, actor, query) }),
   }),
   defineRoute({
     method: 'post', path: '/farms/:farmId/records', summary: 'Take in a draft or a started record.', roles: FARM_PEOPLE,

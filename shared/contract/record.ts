@@ -139,6 +139,7 @@ export const computedSchema = z.object({
 export type Computed = z.infer<typeof computedSchema>
 
 export const RECORD_STATES = ['draft', 'started', 'signed', 'withdrawn'] as const
+export type RecordState = (typeof RECORD_STATES)[number]
 const personRef = z.object({ id: z.string(), name: z.string() })
 
 export const recordSchema = recordContentSchema.extend({

@@ -40,6 +40,7 @@ export const problems = {
     bidi_control: 'There is a hidden direction mark in it. Type it again.',
     line_break: 'Keep this on one line.',
     too_many_lines: 'There are too many lines in it: at most 200 line breaks.',
+    too_many_words: 'At most 8 words at a time.',
   },
   number: {
     format: 'Give a plain number under 10 000 000, such as 12.5, with at most 4 decimals.',

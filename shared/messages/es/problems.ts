@@ -40,6 +40,7 @@ export const problems = {
     bidi_control: 'Contiene una marca de dirección oculta. Escríbalo de nuevo.',
     line_break: 'Déjelo en una sola línea.',
     too_many_lines: 'Tiene demasiadas líneas: 200 saltos de línea como máximo.',
+    too_many_words: 'Ocho palabras a la vez como máximo.',
   },
   number: {
     format: 'Indique un número sencillo menor de 10 000 000, como 12.5, con 4 decimales como máximo.',

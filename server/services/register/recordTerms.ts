@@ -1,0 +1,27 @@
+import type { RecordState } from '../../../shared/contract/record.ts'
+import { wordsToFindBy } from '../../../shared/register/foldWords.ts'
+import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
+
+/** What a record can be found by exactly; a word also by how it begins. The doer's name is looked up among the people. */
+export const TERM = {
+  block: (id: string) => `b:${id}`,
+  material: (id: string) => `i:${id}`,
+  person: (id: string) => `p:${id}`,
+  method: (method: string) => `m:${method}`,
+  state: (state: RecordState) => `s:${state}`,
+  word: (word: string) => `w:${word}`,
+}
+
+/** Every term of a record. @param blockNames names of its blocks as they stand now. */
+export function recordTerms(record: Pick<ApplicationRecord, 'state' | 'content' | 'doneById' | 'registerRow'>, blockNames: readonly string[]): string[] {
+  const { content, registerRow: row } = record
+  const written = [row.number, content.purpose, content.notes, ...row.blocks.map(({ code }) => code), ...blockNames, ...row.preparations, ...row.lots]
+  return [...new Set([
+    TERM.state(record.state),
+    TERM.method(content.method),
+    TERM.person(record.doneById),
+    ...content.lines.map(({ blockId }) => TERM.block(blockId)),
+    ...content.components.map(({ materialId }) => TERM.material(materialId)),
+    ...written.flatMap((text) => (text === null ? [] : wordsToFindBy(text).map(TERM.word))),
+  ])]
+}

@@ -1,0 +1,64 @@
+import { z } from 'zod'
+import { idSchema, pageQuerySchema } from './common.ts'
+import { METHODS, methodSchema, RECORD_STATES } from './record.ts'
+import { foldWords } from '../register/foldWords.ts'
+import { lineText } from './text.ts'
+
+/** How the register is ordered: by first start (newest first unless said otherwise), number or area; `-` is downwards. */
+export const REGISTER_SORTS = ['-when', 'when', '-number', 'number', '-area', 'area'] as const
+export type RegisterSort = (typeof REGISTER_SORTS)[number]
+
+const MOST_WORDS = 8
+
+/** Words that each stand in a record, whole or by their beginning. */
+const searchText = lineText(100)
+  .refine((text) => foldWords(text).length > 0, { error: 'text.required' })
+  .refine((text) => foldWords(text).length <= MOST_WORDS, { error: 'text.too_many_words' })
+
+const seasonYear = z.number().int().min(1970).max(2199)
+
+/** What the register is filtered by; every part given must fit. */
+export const registerFilterSchema = z.strictObject({
+  /** Named by the year it starts in. What is not signed counts to the season its work lies in. */
+  season: seasonYear.optional(),
+  block: idSchema.optional(),
+  method: methodSchema.optional(),
+  material: idSchema.optional(),
+  /** Who did the work. */
+  person: idSchema.optional(),
+  state: z.enum(RECORD_STATES).optional(),
+  q: searchText.optional(),
+})
+export type RegisterFilter = z.infer<typeof registerFilterSchema>
+
+/** The same as it stands in an address. */
+export const filterQuerySchema = registerFilterSchema.extend({
+  season: z.string().regex(/^\d{4}$/).transform(Number).pipe(seasonYear).meta({ type: 'integer', minimum: 1970, maximum: 2199 }).optional(),
+})
+const sortSchema = z.enum(REGISTER_SORTS).default('-when')
+
+export const sortedQuerySchema = filterQuerySchema.extend({ sort: sortSchema })
+export const registerQuerySchema = pageQuerySchema.extend(sortedQuerySchema.shape)
+
+const decimal = z.string()
+const sumsSchema = z.object({
+  records: z.number().int(),
+  areaHa: decimal,
+  /** Litres of the records that have litres. */
+  totalL: decimal,
+  /** Kilograms of what was measured by mass. */
+  totalKg: decimal,
+})
+
+/** What the records of a filter add up to: signed ones only. */
+export const registerTotalsSchema = sumsSchema.extend({
+  /** Every record that fits, counted in the sums or not. */
+  found: z.number().int(),
+  withdrawn: z.number().int(),
+  /** Drafts and started ones. */
+  unsigned: z.number().int(),
+  /** Signed ones that were entered more than 24 h after the work. */
+  late: z.number().int(),
+  byMethod: z.partialRecord(z.enum(METHODS), sumsSchema),
+})
+export type RegisterTotals = z.infer<typeof registerTotalsSchema>
