@@ -33,8 +33,10 @@ export function judgeLotLeft(lot: FactLot, components: readonly SheetComponent[]
   if (typeof taken === 'string') return buildCheck({ ...base, verdict: 'unknown', text: words(`checks.lotLeft.${taken}`, left) })
   const rest = new ExactDecimal(lot.left.value).minus(settle(taken))
   const params = { ...left, taken: roundForReader(taken.toFixed(), [lot.left.value]) }
+  // Of the figures as they are read: a reader who adds them up finds no gap.
+  const apart = new ExactDecimal(params.left).minus(params.taken).abs().toNumber()
   const figure = words('checks.figure.amount', { value: params.taken, unit: lot.left.unit })
   return rest.lt(0)
-    ? buildCheck({ ...base, figure, verdict: 'stop', text: words('checks.lotLeft.short', { ...params, short: roundForReader(rest.neg().toFixed()) }) })
-    : buildCheck({ ...base, figure, verdict: 'pass', text: words('checks.lotLeft.enough', { ...params, rest: roundForReader(rest.toFixed()) }) })
+    ? buildCheck({ ...base, figure, verdict: 'stop', text: words('checks.lotLeft.short', { ...params, short: apart }) })
+    : buildCheck({ ...base, figure, verdict: 'pass', text: words('checks.lotLeft.enough', { ...params, rest: apart }) })
 }

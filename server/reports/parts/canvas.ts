@@ -1,7 +1,8 @@
 import type { Writable } from 'node:stream'
 import PDFDocument from 'pdfkit'
 import type { Language } from '../../../shared/messages/translate.ts'
-import { openFonts, type Fonts, type Weight } from './openFonts.ts'
+import type { Weight } from './fontFiles.ts'
+import { openFonts, type Fonts } from './openFonts.ts'
 import { splitRuns, type Run } from './splitRuns.ts'
 
 export type Element = PDFKit.PDFStructureElement
@@ -12,7 +13,7 @@ export interface TextStyle { size: number; leading: number; weight: Weight; colo
 export interface Canvas {
   doc: PDFKit.PDFDocument
   root: Element
-  /** True once a letter had to be drawn as a replacement mark. */
+  /** True once a letter had to be drawn as a box. */
   hasReplaced: boolean
   runsOf(text: string, weight: Weight): Run[]
 }

@@ -18,8 +18,8 @@ export interface TableRow {
   isTotal?: boolean
   /** The first cell is the head of the row. */
   hasHead?: boolean
-  /** How many columns the first cell's words may run over; the cells under them are empty. */
-  firstSpans?: number
+  /** A cell whose words may run over so many columns, its own counted; the cells under them are empty. */
+  runsOver?: { column: number; columns: number }
   /** A firm line over the row. */
   opensGroup?: boolean
   /** Stands on the same page as the row after it. */
@@ -105,10 +105,10 @@ function innerBox({ x, columns }: Table, index: number): { x: number; width: num
   return { x: left + before, width: width - before - after }
 }
 
-function cellBox(table: Table, { firstSpans = 1 }: TableRow, index: number): { x: number; width: number } {
+function cellBox(table: Table, { runsOver }: TableRow, index: number): { x: number; width: number } {
   const box = innerBox(table, index)
-  if (index > 0) return box
-  const last = innerBox(table, firstSpans - 1)
+  if (index !== runsOver?.column) return box
+  const last = innerBox(table, index + runsOver.columns - 1)
   return { x: box.x, width: last.x + last.width - box.x }
 }
 

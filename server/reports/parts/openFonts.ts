@@ -1,25 +1,22 @@
 import { readFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
 import { create, type Font } from 'fontkit'
+import { fallbackFiles, plainFiles, type FontFile, type Weight } from './fontFiles.ts'
 import { unpackWoff } from './unpackWoff.ts'
 
-export type Weight = 'regular' | 'semibold' | 'bold' | 'black' | 'italic'
-
-/** In the order in which they are asked for a letter. */
-const SUBSETS = ['latin', 'latin-ext', 'greek', 'cyrillic', 'vietnamese', 'greek-ext', 'cyrillic-ext'] as const
-const FILES: Record<Weight, string> = {
-  regular: '400-normal', semibold: '600-normal', bold: '700-normal', black: '800-normal', italic: '400-italic',
-}
-
-interface FontFile { bytes: Buffer; codePoints: Set<number> }
-const files = new Map<string, FontFile>()
+interface ReadFont { bytes: Buffer; codePoints: Set<number> }
+const read = new Map<string, ReadFont>()
 const { resolve } = createRequire(import.meta.url)
 
 /** The fonts of one document, by face ("bold-latin"). */
 export interface Fonts {
-  /** The face that holds every one of the characters, or null. */
+  /** The face of Noto Sans that holds every one of the characters, or null. */
   findFace(weight: Weight, characters: string): string | null
-  /** Opens a face for this document; the second time it is the same Font. */
+  /** The same among the fonts of other alphabets. */
+  findFallback(weight: Weight, characters: string): string | null
+  /** Whether the font library can lay the letters out: over rare marks it trips. */
+  canSet(face: string, letters: string): boolean
+  /** Opens a face that was found, for this document; the second time it is the same Font. */
   open(face: string): Font
 }
 
@@ -29,27 +26,43 @@ export interface Fonts {
  */
 export function openFonts(): Fonts {
   const opened = new Map<string, Font>()
+  const open = (face: string): Font => {
+    const known = opened.get(face) ?? create(bytesOf(face))
+    opened.set(face, known)
+    return known
+  }
   return {
-    findFace(weight, characters) {
-      const wanted = Array.from(characters, (character) => character.codePointAt(0) ?? 0)
-      const subset = SUBSETS.find((name) => wanted.every((point) => readFont(`${weight}-${name}`).codePoints.has(point)))
-      return subset === undefined ? null : `${weight}-${subset}`
-    },
-    open(face) {
-      const font = opened.get(face) ?? create(readFont(face).bytes)
-      opened.set(face, font)
-      return font
+    open,
+    findFace: (weight, characters) => findIn(plainFiles(weight), characters),
+    findFallback: (weight, characters) => findIn(fallbackFiles(weight), characters),
+    canSet(face, letters) {
+      try {
+        open(face).layout(letters)
+        return true
+      } catch {
+        // Its only answer is to throw.
+        return false
+      }
     },
   }
 }
 
-function readFont(face: string): FontFile {
-  const known = files.get(face)
+function findIn(files: FontFile[], characters: string): string | null {
+  const wanted = Array.from(characters, (character) => character.codePointAt(0) ?? 0)
+  return files.find((file) => wanted.every((point) => readFont(file).codePoints.has(point)))?.face ?? null
+}
+
+function readFont({ face, path }: FontFile): ReadFont {
+  const known = read.get(face)
   if (known) return known
-  const [weight = '', ...subset] = face.split('-')
-  const path = resolve(`@fontsource/noto-sans/files/noto-sans-${subset.join('-')}-${FILES[weight as Weight]}.woff`)
-  const bytes = unpackWoff(readFileSync(path))
-  const file = { bytes, codePoints: new Set(create(bytes).characterSet) }
-  files.set(face, file)
-  return file
+  const bytes = unpackWoff(readFileSync(resolve(path)))
+  const font = { bytes, codePoints: new Set(create(bytes).characterSet) }
+  read.set(face, font)
+  return font
+}
+
+function bytesOf(face: string): Buffer {
+  const font = read.get(face)
+  if (!font) throw new Error(`Nobody found the face ${face}`)
+  return font.bytes
 }

@@ -1,6 +1,7 @@
 import { drawArtifact, type Canvas } from './canvas.ts'
 import { drawLogo } from './drawMarks.ts'
 import { drawRule } from './drawRules.ts'
+import { isolate } from './placeRuns.ts'
 import { FRAME, FRAME_WIDTH } from './pageFlow.ts'
 import { drawText, measureText } from './setText.ts'
 import { STYLES } from './styles.ts'
@@ -18,7 +19,7 @@ export function drawRunningHead(canvas: Canvas, { farm, register, document }: Ru
     const right = measureText(canvas, document, STYLES.running)
     drawText(canvas, document, { x: FRAME.right - right, y }, STYLES.running)
     const x = FRAME.left + LOGO + 5
-    const spans = [{ text: farm, style: STYLES.runningBold }, { text: `, ${register}`, style: STYLES.running }]
+    const spans = [{ text: isolate(farm), style: STYLES.runningBold }, { text: `, ${register}`, style: STYLES.running }]
     const room = FRAME.right - right - 12 - x
     drawLines(canvas, wrapText(canvas, spans, room).slice(0, 1), { x, y, width: room, leading: STYLES.running.leading })
   }, 'Pagination')

@@ -1,22 +1,29 @@
 import type { Canvas, TextStyle } from './canvas.ts'
-import { drawText, measureText } from './setText.ts'
+import { isRightToLeft } from './placeRuns.ts'
+import { drawSpans, measureText } from './setText.ts'
 import { toLetters } from './splitRuns.ts'
 
 /** Words set in one style. */
 export interface Span { text: string; style: TextStyle }
-export interface Line { spans: Span[]; width: number }
+export interface Line {
+  spans: Span[]
+  width: number
+  /** The paragraph it belongs to reads from right to left. */
+  fromRight: boolean
+}
 
 /** Words of several styles on lines no wider than `width` points; a word wider than that is cut between letters. */
 export function wrapText(canvas: Canvas, spans: readonly Span[], width: number): Line[] {
-  const lines: Line[] = [{ spans: [], width: 0 }]
+  const fromRight = isRightToLeft(spans.map(({ text }) => text).join(''))
+  const lines: Line[] = [openLine(fromRight)]
   for (const word of toWords(spans)) {
     if (word.breaksLine) {
-      lines.push({ spans: [], width: 0 })
+      lines.push(openLine(fromRight))
       continue
     }
     const bare = word.spans.map(({ text, style }) => ({ text: text.replace(/ +$/, ''), style }))
     const line = lines.at(-1)
-    if (line && line.width + widthOf(canvas, bare) > width && line.spans.length > 0) lines.push({ spans: [], width: 0 })
+    if (line && line.width + widthOf(canvas, bare) > width && line.spans.length > 0) lines.push(openLine(fromRight))
     if (widthOf(canvas, bare) > width) cutWord(canvas, word.spans, { lines, width })
     else appendWord(canvas, lines, word.spans)
   }
@@ -33,12 +40,13 @@ export interface LineBox { x: number; y: number; width: number; leading: number;
 /** Draws lines one under the other. */
 export function drawLines(canvas: Canvas, lines: readonly Line[], box: LineBox): void {
   lines.forEach((line, index) => {
-    let x = box.align === 'right' ? box.x + box.width - line.width : box.x
-    for (const { text, style } of line.spans) {
-      drawText(canvas, text, { x, y: box.y + index * box.leading }, { ...style, leading: box.leading })
-      x += measureText(canvas, text, style)
-    }
+    const x = box.align === 'right' ? box.x + box.width - line.width : box.x
+    drawSpans(canvas, line.spans, { x, y: box.y + index * box.leading, leading: box.leading, fromRight: line.fromRight })
   })
+}
+
+function openLine(fromRight: boolean): Line {
+  return { spans: [], width: 0, fromRight }
 }
 
 interface Word { spans: Span[]; breaksLine: boolean }
@@ -82,7 +90,7 @@ function cutWord(canvas: Canvas, spans: readonly Span[], { lines, width }: { lin
       const letterWidth = measureText(canvas, letter, style)
       if (letterWidth > room && room < width) {
         appendWord(canvas, lines, piece === '' ? [] : [{ text: piece, style }])
-        lines.push({ spans: [], width: 0 })
+        lines.push(openLine(lines[0]?.fromRight ?? false))
         piece = ''
         room = width
       }
@@ -94,9 +102,9 @@ function cutWord(canvas: Canvas, spans: readonly Span[], { lines, width }: { lin
 }
 
 /** A line's width is that of what is seen; the space it ends in stays, so that who copies or hears it does not run words together. */
-function trimLine(canvas: Canvas, { spans }: Line): Line {
+function trimLine(canvas: Canvas, { spans, fromRight }: Line): Line {
   const seen = spans.map(({ text, style }, index) => ({ text: index === spans.length - 1 ? text.replace(/ +$/, '') : text, style }))
   const ends = spans.at(-1)
   if (ends) ends.text = ends.text.replace(/ +$/, ' ')
-  return { spans, width: widthOf(canvas, seen) }
+  return { spans, width: widthOf(canvas, seen), fromRight }
 }

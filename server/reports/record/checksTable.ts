@@ -23,18 +23,27 @@ export function checksTally(checks: readonly Check[], { say }: ReportWords): str
   return unknown === 0 ? stop : say('checks.stopUnknown', { stop, unknown })
 }
 
+/** White at both sides of a cell's words, points. */
+const SIDES = 9.5
+/** Its words run on where no source stands beside them. */
+const TEXT_COLUMN = 5
+
 interface ChecksInput { canvas: Canvas; checks: readonly Check[]; words: ReportWords; place: { x: number; width: number } }
 
 /** The table of checks as they stood at signing. */
 export function checksTable({ canvas, checks, words, place }: ChecksInput): Table {
-  const { say } = words
+  const { say, language } = words
   const grouped = groupChecks(checks)
   const widest = (ids: string[], style: TextStyle): number => Math.max(...ids.map((id) => measureText(canvas, say(id), style)))
+  const fitting = (texts: (string | null)[], style: TextStyle, most: number): number =>
+    Math.min(most, Math.max(0, ...texts.map((text) => measureText(canvas, text ?? '', style))) + SIDES)
   const widths = {
     rests: widest(RESTS.map((rests) => `checks.rests.${rests}`), STYLES.smallBold) + 7,
     mark: 14,
     verdict: widest(VERDICTS.map((verdict) => `checks.verdict.${verdict}`), STYLES.smallSemibold) + 10,
-    title: 76, figure: 62, source: 88,
+    title: fitting(grouped.map(({ title }) => renderMessage(language, title)), STYLES.small, 92),
+    figure: fitting(grouped.map(({ figure }) => figure && renderMessage(language, figure)), STYLES.smallSemibold, 76),
+    source: fitting(grouped.map((check) => sourceOf(check, words)), STYLES.note, 96),
   }
   const text = place.width - Object.values(widths).reduce((sum, width) => sum + width, 0)
   const rows = grouped.map((check, index): TableRow => {
@@ -44,6 +53,7 @@ export function checksTable({ canvas, checks, words, place }: ChecksInput): Tabl
       opensGroup: opensGroup && index > 0,
       keepsWithNext: opensGroup && !isSecond && grouped[index + 1]?.rests === check.rests,
       mark: { column: 1, draw: ({ x, y }) => drawVerdictMark(canvas, check.verdict, { x, y: y + 0.8, size: 9 }) },
+      ...(!check.source && { runsOver: { column: TEXT_COLUMN, columns: 2 } }),
       ...(!opensGroup && { continued: restsSpans(check, words) }),
       cells: cellsOf(check, { words, showsRests: opensGroup }),
     }
@@ -72,8 +82,12 @@ function cellsOf(check: Check, { words, showsRests }: { words: ReportWords; show
     [{ text: renderMessage(language, title), style: STYLES.small }],
     figure ? [{ text: renderMessage(language, figure), style: STYLES.smallSemibold }] : [],
     [{ text: renderMessage(language, text), style: STYLES.small }],
-    source ? [{ text: say('checks.source', { source: renderMessage(language, source) }), style: STYLES.note }] : [],
+    source ? [{ text: sourceOf(check, words), style: STYLES.note }] : [],
   ]
+}
+
+function sourceOf({ source }: Check, { say, language }: ReportWords): string {
+  return source ? say('checks.source', { source: renderMessage(language, source) }) : ''
 }
 
 function restsSpans({ rests }: Check, { say }: ReportWords): Span[] {

@@ -143,7 +143,7 @@ function drawParagraph({ canvas, flow, part }: Page, text: string): void {
     }
     const now: Line[] = lines.slice(0, fitting)
     const { y } = flow
-    element.add(() => drawLines(canvas, now, { ...WHOLE, y, leading }))
+    element.add(() => drawLines(canvas, now, { ...WHOLE, y, leading, align: now[0]?.fromRight ? 'right' : 'left' }))
     flow.y += now.length * leading
     lines = lines.slice(fitting)
   }

@@ -93,7 +93,7 @@ function sprayRow({ signed, words }: Omit<RowInput, 'figures'>): TableRow {
   const none = say('lines.none')
   const hasLast = loads !== null && Number(loads.lastL) > 0
   return {
-    isTotal: true, hasHead: true, firstSpans: 4,
+    isTotal: true, hasHead: true, runsOver: { column: 0, columns: 4 },
     cells: [
       bold(sprayName(loads, words)), [], [], [],
       bold(totalL === null ? none : words.worked(totalL, 'L')),

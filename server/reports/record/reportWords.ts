@@ -2,6 +2,7 @@ import { formatDay } from '../../../shared/messages/formatDay.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import { formatHectares, formatNumber } from '../../../shared/units/formatQuantity.ts'
+import { isolate } from '../parts/placeRuns.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { Span } from '../parts/wrapText.ts'
 import type { PlainName } from '../../../shared/records/plainFields.ts'
@@ -38,7 +39,8 @@ export interface ReportWords {
 }
 
 export function openWords(language: Language, zone: string): ReportWords {
-  const say: ReportWords['say'] = (id, params = {}) => translate(language, `pdf.${id}`, params)
+  const say: ReportWords['say'] = (id, params = {}) =>
+    translate(language, `pdf.${id}`, Object.fromEntries(Object.entries(params).map(([name, value]) => [name, typeof value === 'string' ? isolate(value) : value])))
   const unit = (code: string): string => translate(language, `units.${code}`)
   const typed = (value: string): string => formatNumber(value, { digits: value.split('.')[1]?.length ?? 0 }, language)
   const amount = (value: string): string => formatNumber(value, roundingOf(Number(value)), language)

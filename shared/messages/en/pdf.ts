@@ -143,7 +143,7 @@ export const pdf = {
     runByOther: '{name} runs this server.',
     printed: 'Printed {moment}',
     qrAlt: 'QR code of {url}',
-    replaced: '\uFFFD stands for a character that this print has no letter for; the record keeps it as it was typed.',
+    replaced: 'A box with U+ and a number stands for a character that this print has no letter for; the record keeps it as it was typed.',
   },
   moment: '{day}, {time}',
 }

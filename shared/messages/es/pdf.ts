@@ -143,7 +143,7 @@ export const pdf = {
     runByOther: '{name} lleva este servidor.',
     printed: 'Impreso el {moment}',
     qrAlt: 'Código QR de {url}',
-    replaced: '\uFFFD ocupa el lugar de un carácter para el que esta impresión no tiene letra; el registro lo guarda como se escribió.',
+    replaced: 'Un recuadro con U+ y un número ocupa el lugar de un carácter para el que esta impresión no tiene letra; el registro lo guarda como se escribió.',
   },
   moment: '{day}, {time}',
 }

@@ -57,6 +57,12 @@ describe('what a lot holds', () => {
     expect(left('11.4', [{ value: '11400', unit: 'mL' }])).toMatchObject({ verdict: 'pass', text: { params: { rest: 0 } } })
   })
 
+  it.each([['37.5', '0.81234567'], ['80.952380952381', '19.047619'], ['1234.5678', '0.0049999'], ['0.5', '3.14159265']])('gives figures of %s and %s that add up as they are read', (held, takes) => {
+    const { text } = left(held, [{ value: takes, unit: 'L' }])
+    const { left: has, taken, rest, short } = text.params as Record<string, number>
+    expect(Number(((has ?? 0) - (taken ?? 0)).toFixed(9))).toBe(rest ?? -(short ?? 0))
+  })
+
   it('stops when short, all components together, and says by how much', () => {
     expect(left('5', [{ value: '3', unit: 'L' }, { value: '2500', unit: 'mL' }])).toMatchObject({
       verdict: 'stop', rests: 'house', text: { id: 'checks.lotLeft.short', params: { taken: 5.5, left: 5, short: 0.5 } },

@@ -157,19 +157,23 @@ describe('long and odd records', () => {
     expect(pdf.text).toContain('The end.')
   })
 
-  it('shows every letter it has, marks the others, and loses none', async () => {
+  it('B-59, B-60: shows every letter it has, boxes the others, and loses none', async () => {
     const signed = buildSignedRecord({
       farm: { ...base.farm, name: '<b>&"Wenn" 農場' },
-      content: { ...base.content, purpose: ') Tj /OpenAction << /S /JavaScript', notes: `≥ 5 1⁄2 Δ ₂ ${'W'.repeat(4000)}` },
+      content: { ...base.content, purpose: ') Tj /OpenAction << /S /JavaScript', notes: `≥ 5 1⁄2 Δ ₂ 천혜녹즙\nالمزرعة الشمالية\nשלום ${'W'.repeat(4000)}` },
     })
     const names = { doneBy: '👩‍🌾 Ōda عمر', enteredBy: 'Олена Ґ', signedBy: 'Nguyễn Thị Ệ' }
     const pdf = readPdf(await drawRecord(buildRecordReportData({ signed, names })))
     expect(pdf.check).toContain('No syntax or stream encoding errors found')
-    for (const words of ['<b>&"Wenn"', '農場', 'Ōda', 'Олена Ґ, 35 min', 'Nguyễn Thị Ệ', '👩‍🌾', '≥', ') Tj /OpenAction << /S /JavaScript']) {
+    for (const words of ['<b>&"Wenn"', '農場', 'Ōda', 'Олена Ґ, 35 min', 'Nguyễn Thị Ệ', '👩‍🌾', '≥ 5', '₂', '천혜녹즙', ') Tj /OpenAction << /S /JavaScript']) {
       expect(pdf.text).toContain(words)
     }
-    // Read from right to left: the reader gives its letters in the order in which they are drawn.
-    for (const letter of 'عمر') expect(pdf.text).toContain(letter)
+    // An independent reader gives words from the right as they were typed, between its own marks of direction.
+    for (const word of ['عمر', 'المزرعة', 'الشمالية', 'שלום']) expect(pdf.text).toContain(word)
+    for (const font of ['NotoSansSC', 'NotoSansKR', 'Vazirmatn', 'NotoEmoji', 'NotoSansHebrew']) {
+      expect(pdf.fonts.filter((line) => line.includes(font)).every((line) => /yes yes yes/.test(line))).toBe(true)
+      expect(pdf.fonts.join('\n')).toContain(font)
+    }
     expect(pdf.text.match(/W/g)?.length).toBeGreaterThanOrEqual(4001)
     expect(pdf.text).toContain('stands for a character that this print has no letter for')
     expect(pdf.plain).not.toContain('OpenAction')

@@ -2,7 +2,9 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { PassThrough } from 'node:stream'
 import { openCanvas, type Canvas } from '../../../server/reports/parts/canvas.ts'
+import { measureRun } from '../../../server/reports/parts/measureRun.ts'
 import { openFonts } from '../../../server/reports/parts/openFonts.ts'
+import { isRightToLeft, placeRuns } from '../../../server/reports/parts/placeRuns.ts'
 import { splitRuns, toLetters } from '../../../server/reports/parts/splitRuns.ts'
 import { STYLES } from '../../../server/reports/parts/styles.ts'
 import { unpackWoff } from '../../../server/reports/parts/unpackWoff.ts'
@@ -29,9 +31,25 @@ describe('splitRuns', () => {
     expect(splitRuns(text, 'regular', fonts).map((run) => [run.face, run.text])).toEqual(runs)
   })
 
-  it.each([['≥', 1], ['日本', 2], ['👩‍🌾', 1], ['عمر', 3]])('marks what no face holds and keeps it: %s', (text, marks) => {
-    const runs = splitRuns(text, 'bold', fonts)
-    expect(runs).toEqual([{ face: 'bold-latin', text: '\uFFFD'.repeat(marks), standsFor: text }])
+  it.each([
+    ['≥ 5', ['bold-signs', 'semibold-latin']], ['日本語のメモ', ['bold-han']], ['천혜녹즙', ['bold-hangul']], ['👩‍🌾', ['bold-emoji']],
+    ['👍🏽1️⃣', ['bold-emoji']], ['عمر', ['bold-arabic']], ['שָׁלוֹם', ['bold-hebrew']],
+  ])('B-59, B-60: asks the fonts of other alphabets for %s', (text, faces) => {
+    const runs = splitRuns(text, 'semibold', fonts)
+    expect(runs.map(({ face }) => face)).toEqual(faces)
+    expect(runs.map(({ typed }) => typed).join('')).toBe(text)
+    expect(runs.some(({ isBox }) => isBox)).toBe(false)
+  })
+
+  it('keeps the joiner that decides on a letter’s shape', () => {
+    expect(splitRuns('می‌خواهم', 'regular', fonts)).toEqual([{ face: 'regular-arabic', text: 'می‌خواهم', typed: 'می‌خواهم', isBox: false }])
+  })
+
+  it('boxes what no face holds, with its code points, and keeps it', () => {
+    expect(splitRuns('ไท', 'bold', fonts)).toEqual([
+      { face: 'regular-latin', text: 'U+0E44', typed: 'ไ', isBox: true }, { face: 'regular-latin', text: 'U+0E17', typed: 'ท', isBox: true },
+    ])
+    expect(splitRuns('ญี่', 'bold', fonts).map(({ text }) => text)).toEqual(['U+0E0D+0E35…'])
   })
 
   it('draws only letters that its face holds, whatever is typed', () => {
@@ -41,6 +59,47 @@ describe('splitRuns', () => {
         for (const letter of run.text) expect(held).toContain(letter.codePointAt(0))
       }
     }), { numRuns: 200, seed: 7 })
+  })
+})
+
+describe('placeRuns', () => {
+  const canvas = openTestCanvas()
+  const styles = { a: STYLES.body, b: STYLES.bodyBold }
+  const place = (spans: [keyof typeof styles, string][]) => {
+    const fromRight = isRightToLeft(spans.map(([, text]) => text).join(''))
+    return placeRuns(canvas, spans.map(([style, text]) => ({ text, style: styles[style] })), fromRight)
+  }
+  /** As a reader sees it, from the left. */
+  const seen = (spans: [keyof typeof styles, string][]) =>
+    [...place(spans)].sort((x, y) => x.left - y.left).map(({ run }) => run.text).join('')
+
+  it.each([
+    ['plain', [['a', 'Lot N-24']], 'Lot N-24'],
+    // The cases of UAX #9 in small: words from the right, numbers in them from the left, signs mirrored.
+    ['words', [['a', 'عمر الخطيب']], 'الخطيب عمر'],
+    ['a number in them', [['a', 'عمر 12:30 صباح']], 'صباح 12:30 عمر'],
+    ['brackets', [['a', 'عمر (صباح)']], '(صباح) عمر'],
+    ['in a sentence', [['a', 'By עמר שלום, late']], 'By שלום עמר, late'],
+    ['isolated before a number', [['a', '\u2068עמר\u2069, 12:30']], 'עמר, 12:30'],
+    ['over two styles', [['b', 'שלום'], ['a', ' עמר']], 'עמר שלום'],
+    ['a full stop at the end of what reads from the right', [['a', 'שלום.']], '.שלום'],
+  ] as [string, [keyof typeof styles, string][], string][])('orders %s as a reader sees it', (_name, spans, expected) => {
+    expect(seen(spans)).toBe(expected)
+  })
+
+  it('gives runs in the order of reading, so that who copies or hears them gets them in it', () => {
+    const placed = place([['a', 'عمر (صباح) 5']])
+    expect(placed.map(({ run, spoken }) => spoken ?? run.typed).join('')).toBe('عمر (صباح) 5')
+    expect(placed.filter(({ isReversed }) => isReversed).map(({ run }) => run.typed)).toEqual(['عمر', 'صباح'])
+  })
+
+  it('leaves no gap and no overlap', () => {
+    const [first, ...rest] = [...place([['a', 'A שלום 12 עמר ไ z']])].sort((x, y) => x.left - y.left)
+    let end = first ? first.left + measureRun(canvas, first.run, first.style.size) : 0
+    for (const { run, style, left } of rest) {
+      expect(left).toBeCloseTo(end, 6)
+      end = left + measureRun(canvas, run, style.size)
+    }
   })
 })
 

@@ -39,7 +39,7 @@ describe('pastLotChecks', () => {
 describe('labelWords', () => {
   it('says each limit that is set and nothing of the others', () => {
     expect(labelWords(label).map((message) => renderMessage('en', message))).toEqual([
-      'at most 2.5 L/ha', 'at most 2 % in the tank', 'keep out 12 h', 'do not pick for 7 d',
+      'at most 2.5 L/ha', 'at most 2\u00A0% in the tank', 'keep out 12 h', 'do not pick for 7 d',
     ])
     expect(labelWords(labelLimitsSchema.parse({}))).toEqual([])
   })
@@ -47,7 +47,7 @@ describe('labelWords', () => {
   it('joins both ends of a strength and says when no days are to be waited', () => {
     const both = labelLimitsSchema.parse({ minStrengthPct: '0.5', maxStrengthPct: '2', preHarvestDays: 0 })
     expect(labelWords(both).map((message) => renderMessage('es', message))).toEqual([
-      'de 0,5 a 2 % en el tanque', 'sin días de espera antes de la cosecha',
+      'de 0,5 a 2\u00A0% en el tanque', 'sin días de espera antes de la cosecha',
     ])
   })
 })
