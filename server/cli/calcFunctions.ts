@@ -10,6 +10,7 @@ import { convertQuantity, type Quantity } from '../../shared/units/convertQuanti
 import { dimensionOf } from '../../shared/units/dimensionOf.ts'
 import { isWithin } from '../../shared/units/isWithin.ts'
 import { UNITS, type UnitCode } from '../../shared/units/unitTable.ts'
+import { airFigures } from '../../shared/weather/airFigures.ts'
 import { plainDecimal } from './plainDecimal.ts'
 
 /** A function of `calc`: the shape of its arguments in words, and what it answers. */
@@ -81,6 +82,11 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
       z.strictObject({ kind: z.literal('speed'), distanceM: z.number(), seconds: z.number() }),
     ]),
     calibrateSprayer,
+  ),
+  air: define(
+    { args: '{tempC, rh, altitudeM?}', answer: '{wetBulbC, deltaTC, dewPointC, vpdKPa, method}; at a height the wet bulb is a psychrometer\'s, else by the sea-level formula' },
+    z.strictObject({ tempC: z.number(), rh: z.number(), altitudeM: z.number().optional() }),
+    airFigures,
   ),
   canonical: define(
     { args: '{value: any JSON}', answer: '{text, sha256}' },

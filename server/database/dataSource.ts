@@ -2,6 +2,7 @@ import 'reflect-metadata'
 import pg from 'pg'
 import { DataSource } from 'typeorm'
 import { CreateHouse1764547200000 } from '../../migrations/1764547200000-CreateHouse.ts'
+import { WholeRecords1764600000000 } from '../../migrations/1764600000000-WholeRecords.ts'
 import { AddAttachments1764601000000 } from '../../migrations/1764601000000-AddAttachments.ts'
 import { FindInRegister1764602000000 } from '../../migrations/1764602000000-FindInRegister.ts'
 import { NarrowAccess1764603000000 } from '../../migrations/1764603000000-NarrowAccess.ts'
@@ -33,7 +34,13 @@ export function createOwnerSource(url: string): DataSource {
     ...common,
     url,
     poolSize: 1,
-    migrations: [CreateHouse1764547200000, AddAttachments1764601000000, FindInRegister1764602000000, NarrowAccess1764603000000],
+    migrations: [
+      CreateHouse1764547200000,
+      WholeRecords1764600000000,
+      AddAttachments1764601000000,
+      FindInRegister1764602000000,
+      NarrowAccess1764603000000,
+    ],
     migrationsTransactionMode: 'each',
   })
 }

@@ -13,6 +13,7 @@ import { Material } from '../entities/Material.ts'
 import { Person } from '../entities/Person.ts'
 import { RecordComponent } from '../entities/RecordComponent.ts'
 import { RecordLine } from '../entities/RecordLine.ts'
+import { RecordReview } from '../entities/RecordReview.ts'
 import { RecordTerm } from '../entities/RecordTerm.ts'
 import { RecordVersion } from '../entities/RecordVersion.ts'
 import { RegisterEntry } from '../entities/RegisterEntry.ts'
@@ -37,6 +38,7 @@ export const ENTITIES = [
   Person,
   RecordComponent,
   RecordLine,
+  RecordReview,
   RecordTerm,
   RecordVersion,
   RegisterEntry,

@@ -1,5 +1,6 @@
 /**
  * What the app role may do with each table. Evidence tables take inserts and nothing else; no table is deleted
+ * from, save the projections of a record, which are rewritten with it, drafts (a trigger keeps what was signed), and sessions.
  * from, save the projections of a record, which are rewritten with it, a person's own saved filters, and sessions.
  */
 export const APP_RIGHTS: Record<string, string> = {
@@ -16,12 +17,13 @@ export const APP_RIGHTS: Record<string, string> = {
   lots: 'SELECT, INSERT, UPDATE',
   lot_entries: 'SELECT, INSERT',
   sprayers: 'SELECT, INSERT, UPDATE',
-  application_records: 'SELECT, INSERT, UPDATE',
+  application_records: 'SELECT, INSERT, UPDATE, DELETE',
   record_lines: 'SELECT, INSERT, DELETE',
   record_components: 'SELECT, INSERT, DELETE',
   register_entries: 'SELECT, INSERT, DELETE',
   record_terms: 'SELECT, INSERT, DELETE',
   record_versions: 'SELECT, INSERT',
+  record_reviews: 'SELECT, INSERT',
   attachments: 'SELECT, INSERT, UPDATE (season, signed_version, removed_at)',
   saved_filters: 'SELECT, INSERT, DELETE',
   journal: 'SELECT, INSERT',

@@ -1,7 +1,8 @@
 import { v7 as uuidV7 } from 'uuid'
 import { createBlockSchema, type CreateBlock } from '../../shared/contract/block.ts'
 import { createLotSchema, createMaterialSchema, type CreateLot, type CreateMaterial } from '../../shared/contract/input.ts'
-import { createRecordSchema, type CreateRecord, type RecordContentInput } from '../../shared/contract/record.ts'
+import { createRecordSchema, type CreateRecord } from '../../shared/contract/recordChanges.ts'
+import { type RecordContentInput } from '../../shared/contract/recordContent.ts'
 import type { z } from 'zod'
 
 /** A hundred metres square near 44.6° N, moved east by its number so that none overlap. */

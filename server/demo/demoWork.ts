@@ -1,9 +1,9 @@
-import type { RecordContentInput } from '../../shared/contract/record.ts'
+import type { Method, RecordContentInput } from '../../shared/contract/recordContent.ts'
 
 /** One kind of work that the demo farm repeats: which blocks, what goes in, how it is sized. */
 export interface DemoWork {
   blocks: string[]
-  method: 'foliar' | 'drench'
+  method: Method
   everyDays: number
   sprayer: string
   purpose: string

@@ -108,8 +108,8 @@ async function seedBlocks(services: Services, actor: FarmActor): Promise<Map<str
 
 async function seedSprayers(services: Services, actor: FarmActor): Promise<Map<string, string>> {
   const ids = new Map<string, string>()
-  for (const [code, name, tankL] of [['M2', 'Mist sprayer', '400'], ['D1', 'Drencher', '400'], ['K1', 'Knapsack', '15']] as const) {
-    const { sprayer } = await createSprayer(services, actor, { id: uuidV7(), code, name, tankL })
+  for (const [code, name, tankL, flowLPerMin] of [['M2', 'Mist sprayer', '400', '12.2'], ['D1', 'Drencher', '400', '24'], ['K1', 'Knapsack', '15', null]] as const) {
+    const { sprayer } = await createSprayer(services, actor, { id: uuidV7(), code, name, tankL, flowLPerMin })
     ids.set(code, sprayer.id)
   }
   return ids

@@ -1,5 +1,5 @@
 import { v7 as uuidV7 } from 'uuid'
-import { createRecordSchema } from '../../shared/contract/record.ts'
+import { createRecordSchema } from '../../shared/contract/recordChanges.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { toInstant } from '../../shared/time/toInstant.ts'
 import { fixedClock } from '../clock.ts'

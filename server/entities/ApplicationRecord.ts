@@ -1,6 +1,7 @@
 import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn, Unique } from 'typeorm'
 import type { Acknowledged } from '../../shared/contract/common.ts'
-import type { Check as RecordCheck, Computed, RecordContent, RegisterRow } from '../../shared/contract/record.ts'
+import type { Check as RecordCheck, Computed, RegisterRow } from '../../shared/contract/record.ts'
+import type { RecordContent } from '../../shared/contract/recordContent.ts'
 
 /** An application record as it stands now; what was signed stands in record_versions. */
 @Entity({ name: 'application_records' })

@@ -6,12 +6,12 @@ import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm
 @ForeignKey('Lot', ['farmId', 'lotId'], ['farmId', 'id'], { name: 'lot_entries_lot_fkey' })
 @ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'lot_entries_record_fkey' })
 @ForeignKey('Person', ['farmId', 'personId'], ['farmId', 'id'], { name: 'lot_entries_person_fkey' })
-@Check('lot_entries_kind_check', `kind IN ('received', 'drawn', 'counted')`)
+@Check('lot_entries_kind_check', `kind IN ('received', 'drawn', 'counted', 'returned')`)
 export class LotEntry {
   @PrimaryColumn({ name: 'farm_id', type: 'uuid', primaryKeyConstraintName: 'lot_entries_pkey' }) farmId!: string
   @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'lot_entries_pkey' }) id!: string
   @Column({ name: 'lot_id', type: 'uuid' }) lotId!: string
-  @Column({ type: 'text' }) kind!: 'received' | 'drawn' | 'counted'
+  @Column({ type: 'text' }) kind!: 'received' | 'drawn' | 'counted' | 'returned'
   /** Signed, in the unit of the lot. */
   @Column({ type: 'numeric' }) amount!: string
   @Column({ name: 'left_after', type: 'numeric' }) leftAfter!: string

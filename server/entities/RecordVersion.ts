@@ -1,8 +1,9 @@
-import { Column, Entity, ForeignKey, Index, PrimaryColumn, Unique } from 'typeorm'
+import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn, Unique } from 'typeorm'
 
 /** One signed version; written once. */
 @Entity({ name: 'record_versions' })
 @Unique('record_versions_farm_id_seq_key', ['farmId', 'seq'])
+@Check('record_versions_entry_check', `entry IN ('signed', 'amended', 'withdrawn')`)
 @Index('record_versions_check_code_idx', ['checkCode'])
 @ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'record_versions_record_fkey' })
 @ForeignKey('Person', ['farmId', 'signedById'], ['farmId', 'id'], { name: 'record_versions_signed_by_fkey' })
@@ -14,6 +15,8 @@ export class RecordVersion {
   @Column({ type: 'integer' }) seq!: number
   @Column({ type: 'integer' }) season!: number
   @Column({ type: 'text' }) number!: string
+  /** What this version did. */
+  @Column({ type: 'text', default: 'signed' }) entry!: 'signed' | 'amended' | 'withdrawn'
   /** RFC 8785 text of the SignedRecord; what the digest is over. */
   @Column({ name: 'canonical_text', type: 'text' }) canonicalText!: string
   @Column({ type: 'text' }) digest!: string

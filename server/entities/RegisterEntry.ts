@@ -1,5 +1,6 @@
 import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
-import type { Method, RecordState } from '../../shared/contract/record.ts'
+import type { RecordState } from '../../shared/contract/record.ts'
+import type { Method } from '../../shared/contract/recordContent.ts'
 
 /** Projection of a record that the register is sorted and added up by, rewritten with it. */
 @Entity({ name: 'register_entries' })

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { farmParamsSchema, pageOf, thingParamsSchema } from '../../shared/contract/common.ts'
-import { createRecordSchema, recordSchema, registerRowSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import { recordSchema, registerRowSchema } from '../../shared/contract/record.ts'
+import { createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/recordChanges.ts'
 import { registerQuerySchema } from '../../shared/contract/register.ts'
 import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
 import { collectRecordReport } from '../services/records/collectRecordReport.ts'

@@ -1,24 +1,10 @@
-import { Temporal } from 'temporal-polyfill'
 import type { Check } from '../contract/record.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
-import { ExactDecimal } from '../units/exactDecimal.ts'
 import { buildCheck, words } from './buildCheck.ts'
+import { enterAgainAt, pickAgainOn, preHarvestHold, reEntryHold } from './labelHolds.ts'
 import { labelSource } from './labelSource.ts'
 import type { FactMaterial, RecordFacts } from './recordFacts.ts'
 import { roundForReader } from './roundForReader.ts'
-
-const HOUR_MS = 3_600_000
-
-/** The material whose label sets the longest of one interval, with that interval; null where none sets any. */
-function longest(materials: readonly FactMaterial[], read: (material: FactMaterial) => string | null): { material: FactMaterial; length: string } | null {
-  let best: { material: FactMaterial; length: string } | null = null
-  for (const material of materials) {
-    const length = read(material)
-    if (length === null || new ExactDecimal(length).lte(0)) continue
-    if (best === null || new ExactDecimal(length).gt(best.length)) best = { material, length }
-  }
-  return best
-}
 
 /** When the last of the block lines ended; null while one of them has no end. */
 function lastEnd({ content }: RecordFacts): string | null {
@@ -35,7 +21,7 @@ const codesOf = ({ content, blocks }: RecordFacts): string =>
  * No label, no hold: an input with no interval has none by default.
  */
 export function judgeReEntry(facts: RecordFacts, materials: readonly FactMaterial[]): Check | null {
-  const hold = longest(materials, (material) => material.label?.reEntryHours ?? null)
+  const hold = reEntryHold(materials)
   if (hold === null) return null
   const hours = roundForReader(hold.length)
   const base = {
@@ -44,9 +30,7 @@ export function judgeReEntry(facts: RecordFacts, materials: readonly FactMateria
   } as const
   const endedAt = lastEnd(facts)
   if (endedAt === null) return buildCheck({ ...base, text: words('checks.reEntry.fromEnd', { hours, material: hold.material.name }) })
-  const until = Temporal.Instant.fromEpochMilliseconds(Date.parse(endedAt))
-    .add({ milliseconds: new ExactDecimal(hold.length).mul(HOUR_MS).ceil().toNumber() })
-    .toString()
+  const until = enterAgainAt(endedAt, hold.length)
   const when = { untilOn: civilDateIn(facts.zone, until), untilTime: civilTimeIn(facts.zone, until) }
   return buildCheck({
     ...base,
@@ -57,7 +41,7 @@ export function judgeReEntry(facts: RecordFacts, materials: readonly FactMateria
 
 /** How long nothing may be picked: the longest pre-harvest interval, whole days after the civil day the work ended. */
 export function judgePreHarvest(facts: RecordFacts, materials: readonly FactMaterial[]): Check | null {
-  const hold = longest(materials, (material) => material.label?.preHarvestDays?.toString() ?? null)
+  const hold = preHarvestHold(materials)
   if (hold === null) return null
   const days = Number(hold.length)
   const base = {
@@ -66,7 +50,7 @@ export function judgePreHarvest(facts: RecordFacts, materials: readonly FactMate
   } as const
   const endedAt = lastEnd(facts)
   if (endedAt === null) return buildCheck({ ...base, text: words('checks.preHarvest.fromEnd', { days, material: hold.material.name }) })
-  const pickOn = Temporal.PlainDate.from(civilDateIn(facts.zone, endedAt)).add({ days }).toString()
+  const pickOn = pickAgainOn(endedAt, hold.length, facts.zone)
   return buildCheck({
     ...base,
     text: words('checks.preHarvest.before', { pickOn, blocks: codesOf(facts) }),

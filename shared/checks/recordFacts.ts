@@ -1,6 +1,7 @@
 import type { Lot, Material } from '../contract/input.ts'
 import type { KnownAmount } from '../contract/quantity.ts'
-import type { Method, Weather } from '../contract/record.ts'
+import type { Method } from '../contract/recordContent.ts'
+import type { Weather } from '../contract/weather.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
 
 export interface FactLine {

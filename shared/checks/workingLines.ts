@@ -1,4 +1,5 @@
 import type { Message } from '../contract/common.ts'
+import type { Water } from '../contract/recordContent.ts'
 import type { RecordSheet, SheetComponent } from '../mix/sheetTypes.ts'
 import { settle } from './settle.ts'
 import { words } from './buildCheck.ts'
@@ -24,6 +25,12 @@ function componentWorking(component: SheetComponent, name: string): Message | nu
       return words('records.working.ratio', { ...sum, water: known('waterL'), parts: known('parts') })
     case 'sheet.measure.perArea':
       return words('records.working.perArea', { ...sum, rate: known('value'), rateUnit: String(params['unit']), hectares: known('areaHa'), unit: amount.unit })
+    case 'sheet.measure.ratioIn':
+      return words('records.working.ratioIn', { ...sum, total: known('totalL'), parts: known('parts') })
+    case 'sheet.measure.perEach':
+      return words('records.working.perEach', { ...sum, value: known('value'), unit: amount.unit, count: known('count'), each: String(params['each']) })
+    case 'sheet.measure.total':
+      return words('records.working.inAll', { ...sum, unit: amount.unit })
     case 'sheet.measure.perTank':
       return words('records.working.perTank', { ...sum, value: known('value'), unit: amount.unit, count: known('loads') })
     default:
@@ -31,13 +38,24 @@ function componentWorking(component: SheetComponent, name: string): Message | nu
   }
 }
 
-function totalWorking({ totalL, waterL, sprayLPerHa, areaHa }: RecordSheet, sizedFrom: 'water' | 'sprayRate'): Message[] {
+function totalWorking({ totalL, waterL, sprayLPerHa, sprayPerEach, counts, areaHa }: RecordSheet, sizedFrom: Water['sizedFrom']): Message[] {
   if (totalL === null || waterL === null || sprayLPerHa === null) return []
   const liquids = settle(totalL).minus(settle(waterL))
   const figures = { water: shown(waterL), liquids: shown(liquids.toFixed()), total: shown(totalL), hectares: shown(areaHa), rate: shown(sprayLPerHa) }
-  return sizedFrom === 'water'
+  if (sprayPerEach) {
+    const { each, litres } = sprayPerEach
+    const byEach = { ...figures, each, litres: shown(litres), count: shown(counts[each] ?? 0) }
+    return [words('records.working.perEachTotal', byEach), words('records.working.waterLeft', figures)]
+  }
+  return sizedFrom !== 'sprayRate'
     ? [words('records.working.total', figures), words('records.working.sprayRate', figures)]
     : [words('records.working.fromRate', figures), words('records.working.waterLeft', figures)]
+}
+
+function massWorking({ totalKg, kgPerHa, areaHa }: RecordSheet): Message[] {
+  if (totalKg === null) return []
+  const figures = { total: shown(totalKg), hectares: shown(areaHa), rate: shown(kgPerHa ?? 0) }
+  return [words('records.working.totalKg', figures), ...(kgPerHa === null ? [] : [words('records.working.kgPerHa', figures)])]
 }
 
 function loadsWorking({ loads, totalL }: RecordSheet): Message[] {
@@ -49,10 +67,11 @@ function loadsWorking({ loads, totalL }: RecordSheet): Message[] {
  * How the figures of a sheet were worked out, one sum a line, in the order they follow from each other.
  * @param names of the components, in the sheet's order.
  */
-export function workingLines(sheet: RecordSheet, { names, sizedFrom }: { names: readonly string[]; sizedFrom: 'water' | 'sprayRate' }): Message[] {
+export function workingLines(sheet: RecordSheet, { names, sizedFrom }: { names: readonly string[]; sizedFrom: Water['sizedFrom'] }): Message[] {
   const components = sheet.components
     .map((component, index) => componentWorking(component, names[index] ?? ''))
     .filter((line) => line !== null)
   const total = totalWorking(sheet, sizedFrom)
-  return [...(sizedFrom === 'water' ? [...components, ...total] : [...total, ...components]), ...loadsWorking(sheet)]
+  const isTotalFirst = sizedFrom === 'sprayRate' || sizedFrom === 'perEach'
+  return [...(isTotalFirst ? [...total, ...components] : [...components, ...total]), ...massWorking(sheet), ...loadsWorking(sheet)]
 }

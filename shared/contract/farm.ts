@@ -45,12 +45,15 @@ export const createSprayerSchema = z.strictObject({
   name: lineText(80),
   /** Usable tank volume, litres. */
   tankL: positiveDecimal,
+  /** What it puts out while spraying, litres a minute, where it was measured. */
+  flowLPerMin: positiveDecimal.nullable().default(null),
 })
 export const sprayerSchema = z.object({
   id: z.string(),
   code: z.string(),
   name: z.string(),
   tankL: z.string(),
+  flowLPerMin: z.string().nullable(),
   revision: z.number().int(),
 })
 export type Sprayer = z.infer<typeof sprayerSchema>

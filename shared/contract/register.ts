@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { idSchema, pageQuerySchema } from './common.ts'
-import { METHODS, methodSchema, RECORD_STATES } from './record.ts'
+import { RECORD_STATES } from './record.ts'
+import { METHODS, methodSchema } from './recordContent.ts'
 import { foldWords } from '../register/foldWords.ts'
 import { lineText } from './text.ts'
 

@@ -2,20 +2,29 @@ import { z } from 'zod'
 import { boundarySchema } from './block.ts'
 import { acknowledgedSchema } from './common.ts'
 import { labelLimitsSchema, LOT_ORIGINS, MATERIAL_KINDS, ORGANIC_STATUSES } from './input.ts'
-import { checkSchema, recordContentSchema } from './record.ts'
+import { eachSchema } from './each.ts'
 import { amountUnit } from './quantity.ts'
+import { checkSchema } from './record.ts'
+import { countsSchema, recordContentSchema } from './recordContent.ts'
 
 /** A person stands in signed text by id and salted digest; the name lives in a table that can be blanked. */
 const signedPerson = z.object({ id: z.string(), digest: z.string() })
 
 const decimal = z.string()
 
+export const ENTRIES = ['signed', 'amended', 'withdrawn'] as const
+
 /**
  * What is signed: one version of a record with everything it rests on, as it stood then.
- * Its RFC 8785 text is stored and hashed; decimals are strings. A new field means a new `schemaVersion`.
+ * Its RFC 8785 text is stored and hashed; decimals are strings. A new field means a new `schemaVersion`; what an older one
+ * lacks is filled in by `upgradeSigned` when it is read.
  */
 export const signedRecordSchema = z.object({
-  schemaVersion: z.literal(1),
+  schemaVersion: z.literal(2),
+  /** What this entry does: signs a record, amends it, or takes it back. */
+  entry: z.enum(ENTRIES),
+  /** Digest of the version before; null for the first. */
+  replaces: z.string().nullable(),
   farm: z.object({ id: z.string(), name: z.string(), zone: z.string(), seasonStart: z.string() }),
   record: z.object({
     id: z.string(),
@@ -57,17 +66,27 @@ export const signedRecordSchema = z.object({
       expiresOn: z.string().nullable(),
     }),
   ),
-  sprayer: z.object({ id: z.string(), code: z.string(), name: z.string(), tankL: decimal }).nullable(),
+  sprayer: z.object({ id: z.string(), code: z.string(), name: z.string(), tankL: decimal, flowLPerMin: decimal.nullable() }).nullable(),
   computed: z.object({
     areaM2: decimal,
+    counts: countsSchema,
     totalL: decimal.nullable(),
+    totalKg: decimal.nullable(),
     waterL: decimal.nullable(),
     sprayLPerHa: decimal.nullable(),
+    kgPerHa: decimal.nullable(),
+    sprayPerEach: z.object({ each: eachSchema, litres: decimal }).nullable(),
     loads: z
-      .object({ full: z.number().int(), tankL: decimal, lastL: decimal, lastAreaHa: decimal })
+      .object({ full: z.number().int(), tankL: decimal, lastL: decimal, lastAreaHa: decimal, fullMinutes: decimal.nullable(), lastMinutes: decimal.nullable() })
       .nullable(),
     components: z.array(z.object({ amount: z.object({ value: decimal, unit: amountUnit }) })),
+    lines: z.array(z.object({
+      areaM2: decimal, shareL: decimal.nullable(), shareKg: decimal.nullable(), reEntryUntil: z.string().nullable(), pickFrom: z.string().nullable(),
+    })),
+    air: z.object({ wetBulbC: decimal, deltaTC: decimal, dewPointC: decimal, vpdKPa: decimal, method: z.enum(['stull', 'psychrometer']) }).nullable(),
   }),
+  /** Photos and papers that were with the record at this signature. */
+  files: z.array(z.object({ id: z.string(), label: z.string(), type: z.string(), bytes: z.number().int(), digest: z.string() })),
   checks: z.array(checkSchema),
   acknowledged: acknowledgedSchema,
   people: z.object({ doneBy: signedPerson, enteredBy: signedPerson, signedBy: signedPerson }),

@@ -2,12 +2,14 @@ import { writeDecimal, type ExactDecimal } from '../units/exactDecimal.ts'
 import { siValue } from '../units/siValue.ts'
 import type { UnitCode } from '../units/unitTable.ts'
 import type { ReadBasis } from './readBasis.ts'
+import type { ReadSheet } from './readSheet.ts'
 import type { SheetComponent, SheetMessage } from './sheetTypes.ts'
 
 /** What the figures of a component rest on; null where not known. */
 export interface SprayFigures {
   areaM2: ExactDecimal | null
   areaHa: ExactDecimal | null
+  counts: ReadSheet['counts']
   waterL: ExactDecimal | null
   totalL: ExactDecimal | null
   tankL: ExactDecimal | null
@@ -53,12 +55,20 @@ const NOTHING_KNOWN: SheetComponent = {
   measure: { id: 'sheet.measure.unknown', params: {} },
 }
 
-function amountOf(basis: ReadBasis, { areaM2, waterL, totalL, tankL }: SprayFigures): ExactDecimal | null {
+function amountOf(basis: ReadBasis, { areaM2, counts, waterL, totalL, tankL }: SprayFigures): ExactDecimal | null {
   switch (basis.kind) {
-    case 'ratio':
-      return waterL && waterL.div(basis.parts)
+    case 'ratio': {
+      const whole = basis.reading === 'to' ? waterL : totalL
+      return whole && whole.div(basis.parts)
+    }
     case 'perArea':
       return areaM2 && basis.value.times(areaM2).div(basis.groundM2)
+    case 'perEach': {
+      const count = counts[basis.each]
+      return count && basis.value.times(count)
+    }
+    case 'total':
+      return basis.value
     case 'perTank':
       return totalL && tankL && basis.value.times(totalL).div(tankL)
     case 'unknown':
@@ -66,7 +76,10 @@ function amountOf(basis: ReadBasis, { areaM2, waterL, totalL, tankL }: SprayFigu
   }
 }
 
-function measureOf(basis: ReadBasis, { areaHa, waterL, totalL, tankL }: SprayFigures): SheetMessage {
+function measureOf(basis: ReadBasis, { areaHa, counts, waterL, totalL, tankL }: SprayFigures): SheetMessage {
+  if (basis.kind === 'ratio' && basis.reading === 'in' && totalL) {
+    return { id: 'sheet.measure.ratioIn', params: { parts: round(basis.parts), totalL: round(totalL) } }
+  }
   if (basis.kind === 'ratio' && waterL) {
     return { id: 'sheet.measure.ratio', params: { parts: round(basis.parts), waterL: round(waterL) } }
   }
@@ -76,6 +89,11 @@ function measureOf(basis: ReadBasis, { areaHa, waterL, totalL, tankL }: SprayFig
   if (basis.kind === 'perTank' && totalL && tankL) {
     return { id: 'sheet.measure.perTank', params: { value: round(basis.value), unit: basis.unit, loads: round(totalL.div(tankL)) } }
   }
+  if (basis.kind === 'perEach') {
+    const count = counts[basis.each]
+    if (count) return { id: 'sheet.measure.perEach', params: { value: round(basis.value), unit: basis.unit, each: basis.each, count: round(count) } }
+  }
+  if (basis.kind === 'total') return { id: 'sheet.measure.total', params: { value: round(basis.value), unit: basis.unit } }
   return NOTHING_KNOWN.measure
 }
 

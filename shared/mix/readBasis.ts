@@ -1,3 +1,4 @@
+import type { Each } from '../contract/each.ts'
 import { dimensionOf } from '../units/dimensionOf.ts'
 import type { ExactDecimal } from '../units/exactDecimal.ts'
 import { UNITS, type UnitCode } from '../units/unitTable.ts'
@@ -6,9 +7,10 @@ import type { SheetBasis, SheetFinding } from './sheetTypes.ts'
 
 /** A basis with exact figures. `perArea` holds the amount's unit and the ground its rate is over. */
 export type ReadBasis =
-  | { kind: 'ratio'; parts: ExactDecimal; isLiquid: true }
+  | { kind: 'ratio'; parts: ExactDecimal; reading: 'to' | 'in'; isLiquid: true }
   | { kind: 'perArea'; value: ExactDecimal; rateUnit: UnitCode; unit: UnitCode; groundM2: string; isLiquid: boolean }
-  | { kind: 'perTank'; value: ExactDecimal; unit: UnitCode; isLiquid: boolean }
+  | { kind: 'perEach'; value: ExactDecimal; unit: UnitCode; each: Each; isLiquid: boolean }
+  | { kind: 'perTank' | 'total'; value: ExactDecimal; unit: UnitCode; isLiquid: boolean }
   | { kind: 'unknown'; isLiquid: boolean }
 
 /** Units of a rate: the unit of its amount and the square metres it is over. */
@@ -30,7 +32,9 @@ const RATES: Readonly<Record<string, readonly [unit: UnitCode, groundM2: string]
 export function readBasis(basis: SheetBasis, path: string, findings: SheetFinding[]): ReadBasis {
   if (basis.kind === 'ratio') {
     const parts = readPositive(basis.parts)
-    return parts ? { kind: 'ratio', parts, isLiquid: true } : incomplete(true, path, findings)
+    const reading = basis.reading ?? 'to'
+    const isRead = parts !== null && (reading === 'to' || parts.gte(1))
+    return isRead ? { kind: 'ratio', parts, reading, isLiquid: true } : incomplete(true, path, findings)
   }
   const rate = Object.hasOwn(RATES, basis.unit) ? RATES[basis.unit] : undefined
   const unit = basis.kind === 'perArea' ? rate?.[0] : amountUnit(basis.unit)
@@ -41,9 +45,9 @@ export function readBasis(basis: SheetBasis, path: string, findings: SheetFindin
   const isLiquid = dimensionOf(unit) === 'volume'
   const value = readPositive(basis.value)
   if (value === null) return incomplete(isLiquid, path, findings)
-  return rate && basis.kind === 'perArea'
-    ? { kind: 'perArea', value, rateUnit: basis.unit as UnitCode, unit, groundM2: rate[1], isLiquid }
-    : { kind: 'perTank', value, unit, isLiquid }
+  if (basis.kind === 'perEach') return { kind: 'perEach', value, unit, each: basis.each, isLiquid }
+  if (basis.kind !== 'perArea') return { kind: basis.kind, value, unit, isLiquid }
+  return rate ? { kind: 'perArea', value, rateUnit: basis.unit as UnitCode, unit, groundM2: rate[1], isLiquid } : { kind: 'unknown', isLiquid }
 }
 
 function amountUnit(unit: string): UnitCode | undefined {

@@ -1,4 +1,4 @@
-import type { RecordContent } from '../contract/record.ts'
+import type { RecordContent } from '../contract/recordContent.ts'
 
 /** A field of a record that is plain words. */
 interface PlainField {
@@ -14,6 +14,7 @@ interface PlainField {
 /** The plain fields of a record. Form, page and PDF walk this list; their words stand under `records.plain`. */
 export const PLAIN_FIELDS = [
   { name: 'purpose', step: 'ready', isLong: false, carriesOver: true },
+  { name: 'licence', step: 'happened', isLong: false, carriesOver: true },
   { name: 'notes', step: 'happened', isLong: true, carriesOver: false },
 ] as const satisfies readonly PlainField[]
 

@@ -1,4 +1,4 @@
-import type { Method } from '../contract/record.ts'
+import type { Method } from '../contract/recordContent.ts'
 
 /** What a line of the register shows, in words of a language; empty text where there is nothing to show. */
 export interface RegisterLine {

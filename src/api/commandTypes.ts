@@ -2,7 +2,8 @@ import type { z } from 'zod'
 import type { Block, createBlockSchema } from '../../shared/contract/block.ts'
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../../shared/contract/farm.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
-import type { ApplicationRecord, createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/record.ts'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import type { createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/recordChanges.ts'
 
 /** What each kind of command carries. */
 export interface CommandBodies {

@@ -1,4 +1,5 @@
-import type { Method, RegisterRow } from '../../shared/contract/record.ts'
+import type { RegisterRow } from '../../shared/contract/record.ts'
+import type { Method } from '../../shared/contract/recordContent.ts'
 import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
 import { translate, type Language } from '../../shared/messages/translate.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'

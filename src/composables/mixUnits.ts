@@ -1,6 +1,6 @@
 import type { Material } from '../../shared/contract/input.ts'
 import { MASS_RATE_UNITS, MASS_UNITS, VOLUME_RATE_UNITS, VOLUME_UNITS } from '../../shared/contract/quantity.ts'
-import type { Basis } from '../../shared/contract/record.ts'
+import type { Basis } from '../../shared/contract/recordContent.ts'
 
 /** How a material may be measured out: by weight there are no parts of water. */
 export function basisKinds(material: Pick<Material, 'measuredIn'> | null): Basis['kind'][] {

@@ -1,4 +1,5 @@
-import type { RecordContentInput, Weather } from '../../shared/contract/record.ts'
+import type { RecordContentInput } from '../../shared/contract/recordContent.ts'
+import type { Weather } from '../../shared/contract/weather.ts'
 import type { RecordSheet, SheetInput } from '../../shared/mix/sheetTypes.ts'
 import { toInstant, type InstantResult } from '../../shared/time/toInstant.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
@@ -23,8 +24,30 @@ function instantText(moment: MomentDraft, zone: string): string | null {
   return read?.ok ? read.instant : null
 }
 
-function basisOf({ kind, value, unit }: ComponentDraft): SheetInput['components'][number]['basis'] {
-  return kind === 'ratio' ? { kind, parts: numberOf(value) } : { kind, value: numberOf(value), unit }
+function basisOf({ kind, value, unit, each, reading }: ComponentDraft): SheetInput['components'][number]['basis'] {
+  if (kind === 'ratio') return { kind, parts: numberOf(value), reading }
+  return kind === 'perEach' ? { kind, value: numberOf(value), unit, each } : { kind, value: numberOf(value), unit }
+}
+
+function waterOf({ water }: RecordDraft): NonNullable<SheetInput['water']> {
+  const typed = { value: numberOf(water.value), unit: water.unit }
+  switch (water.sizedFrom) {
+    case 'none':
+      return { sizedFrom: 'none' }
+    case 'perEach':
+      return { sizedFrom: 'perEach', ...typed, each: water.each }
+    case 'jar':
+      return { sizedFrom: 'jar', ...typed, component: water.component }
+    default:
+      return { sizedFrom: water.sizedFrom, ...typed }
+  }
+}
+
+function writtenWater(draft: RecordDraft): SheetInput['water'] | (SheetInput['water'] & { source: string | null }) {
+  const water = waterOf(draft)
+  if (draft.method === 'solid') return null
+  if (water.sizedFrom === 'none') return water
+  return water.value === '' ? null : { ...water, source: orNull(draft.water.source) }
 }
 
 function writtenAmount({ amount }: RecordDraft): { value: string; unit: string } | null {
@@ -36,7 +59,8 @@ function writtenAmount({ amount }: RecordDraft): { value: string; unit: string }
 export function sheetInputOf(draft: RecordDraft, { areaM2, tankL }: { areaM2: number | null; tankL: string | null }): SheetInput {
   return {
     lines: areaM2 === null ? [] : [{ areaM2, amount: writtenAmount(draft) }],
-    water: { sizedFrom: draft.water.sizedFrom, value: numberOf(draft.water.value), unit: draft.water.unit },
+    isDry: draft.method === 'solid',
+    water: waterOf(draft),
     tankL,
     components: draft.components.map((component) => ({ basis: basisOf(component) })),
   }
@@ -83,9 +107,7 @@ export function contentOf(draft: RecordDraft, { zone, sheet, happened }: { zone:
       amount: happened ? amountOf(draft, sheet) : null,
     }],
     components: draft.components.map((component) => ({ materialId: component.materialId, lotId: orNull(component.lotId), basis: basisOf(component) })),
-    water: numberOf(draft.water.value) === ''
-      ? null
-      : { sizedFrom: draft.water.sizedFrom, value: numberOf(draft.water.value), unit: draft.water.unit, source: orNull(draft.water.source) },
+    water: writtenWater(draft),
     sprayerId: orNull(draft.sprayerId),
     weather: weatherOf(draft),
     ...mapPlainFields(({ name }) => orNull(draft.plain[name])),

@@ -1,4 +1,7 @@
-import type { ApplicationRecord, Basis, Method, Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/record.ts'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import type { Basis, Method, Water } from '../../shared/contract/recordContent.ts'
+import type { Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/weather.ts'
+import type { Each } from '../../shared/contract/each.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { toInstant } from '../../shared/time/toInstant.ts'
 import { newId } from './newId.ts'
@@ -13,6 +16,10 @@ export interface ComponentDraft {
   value: string
   /** Not read for a ratio. */
   unit: string
+  /** Read for a rate by count. */
+  each: Each
+  /** Read for a ratio. */
+  reading: 'to' | 'in'
 }
 
 export interface ReadingDraft {
@@ -38,7 +45,7 @@ export interface RecordDraft {
   doneById: string
   sprayerId: string
   components: ComponentDraft[]
-  water: { sizedFrom: 'water' | 'sprayRate'; value: string; unit: string; source: string }
+  water: { sizedFrom: Water['sizedFrom']; value: string; unit: string; source: string; each: Each; component: number }
   weather: { wind: ReadingDraft; windFrom: (typeof WIND_POINTS)[number] | ''; air: ReadingDraft; humidity: ReadingDraft }
   start: MomentDraft
   end: MomentDraft
@@ -50,7 +57,7 @@ export interface RecordDraft {
   revision: number | null
 }
 
-export const emptyComponent = (): ComponentDraft => ({ key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L' })
+export const emptyComponent = (): ComponentDraft => ({ key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L', each: 'plant', reading: 'to' })
 const emptyMoment = (): MomentDraft => ({ date: '', time: '', offset: '' })
 
 /** A form with nothing in it yet. */
@@ -59,7 +66,7 @@ export const emptyRecord = (): RecordDraft => ({
   method: 'foliar',
   blockId: '', plain: mapPlainFields(() => ''), doneById: '', sprayerId: '',
   components: [emptyComponent()],
-  water: { sizedFrom: 'water', value: '', unit: 'L', source: '' },
+  water: { sizedFrom: 'water', value: '', unit: 'L', source: '', each: 'plant', component: 0 },
   weather: {
     wind: { value: '', unit: 'ms', kind: 'readHere' },
     windFrom: '',
@@ -82,8 +89,15 @@ export function momentAt(zone: string, instant: string): MomentDraft {
   return { ...moment, offset: near?.offset ?? '' }
 }
 
-function draftOfBasis(basis: Basis): Pick<ComponentDraft, 'kind' | 'value' | 'unit'> {
-  return basis.kind === 'ratio' ? { kind: 'ratio', value: basis.parts, unit: 'L' } : basis
+function draftOfBasis(basis: Basis): Pick<ComponentDraft, 'kind' | 'value' | 'unit' | 'each' | 'reading'> {
+  const blank = { each: 'plant', reading: 'to' } as const
+  return basis.kind === 'ratio' ? { ...blank, kind: 'ratio', value: basis.parts, unit: 'L', reading: basis.reading } : { ...blank, ...basis }
+}
+
+function draftOfWater(water: Water | null): RecordDraft['water'] {
+  const { water: empty } = emptyRecord()
+  if (water === null) return empty
+  return water.sizedFrom === 'none' ? { ...empty, sizedFrom: 'none' } : { ...empty, ...water, source: water.source ?? '' }
 }
 
 /** A new form with the mix, method, sprayer and those words of a record that carry over, for another block or another day. */
@@ -95,7 +109,7 @@ export function draftLike(record: ApplicationRecord): RecordDraft {
     plain: mapPlainFields(({ name, carriesOver }) => (carriesOver ? (record[name] ?? '') : '')),
     sprayerId: record.sprayerId ?? '',
     components: record.components.map(({ materialId, lotId, basis }) => ({ key: newId(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis) })),
-    water: record.water === null ? empty.water : { ...record.water, source: record.water.source ?? '' },
+    water: draftOfWater(record.water),
   }
 }
 

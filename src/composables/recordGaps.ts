@@ -1,4 +1,4 @@
-import { recordContentSchema } from '../../shared/contract/record.ts'
+import { recordContentSchema } from '../../shared/contract/recordContent.ts'
 import type { MessageId } from '../../shared/messages/en.ts'
 import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
 import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'

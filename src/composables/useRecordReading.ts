@@ -1,6 +1,7 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
-import type { ApplicationRecord, Basis } from '../../shared/contract/record.ts'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import type { Basis } from '../../shared/contract/recordContent.ts'
 import { PLAIN_FIELDS, type PlainName } from '../../shared/records/plainFields.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { useFigures } from './useFigures.ts'
@@ -70,6 +71,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, stock: R
 
   function waterOf({ water, computed: { waterL } }: ApplicationRecord): RecordReading['water'] {
     if (water === null) return { source: '', measure: t('records.read.unknown'), inAll: '' }
+    if (water.sizedFrom === 'none') return { source: '', measure: t('records.mix.none'), inAll: '' }
     const measure = water.sizedFrom === 'water' ? t('records.mix.typed') : t('records.mix.fromRate', { rate: figures.plain(water.value), unit: figures.unit(water.unit) })
     return { source: water.source ?? '', measure, inAll: figures.litres(waterL) }
   }

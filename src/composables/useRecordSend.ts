@@ -1,6 +1,7 @@
 import type { Ref } from 'vue'
 import type { Acknowledged } from '../../shared/contract/common.ts'
-import { recordSchema, type ApplicationRecord, type RecordContentInput } from '../../shared/contract/record.ts'
+import { recordSchema, type ApplicationRecord } from '../../shared/contract/record.ts'
+import { type RecordContentInput } from '../../shared/contract/recordContent.ts'
 import { ApiError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
 import { now } from '../plugins/clock.ts'

@@ -121,7 +121,7 @@ describe('signing', () => {
     const [version] = versions.body.items as [{ canonicalText: string; digest: string; signed: Record<string, unknown> }]
     expect(createHash('sha256').update(version.canonicalText, 'utf8').digest('hex')).toBe(body['digest'])
     expect(version.signed).toMatchObject({
-      schemaVersion: 1, content: { purpose: 'Soil life' }, blocks: [{ code: 'B1', version: 1 }], materials: [{ name: 'Nettle ferment' }],
+      schemaVersion: 2, content: { purpose: 'Soil life' }, blocks: [{ code: 'B1', version: 1 }], materials: [{ name: 'Nettle ferment' }],
       computed: { waterL: '400', totalL: '420', components: [{ amount: { value: '20', unit: 'L' } }] },
     })
     expect(version.canonicalText).not.toContain(farm.accounts.applicator.email)

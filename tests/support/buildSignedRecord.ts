@@ -1,7 +1,8 @@
-import { amountUnit } from '../../shared/contract/quantity.ts'
 import type { Check } from '../../shared/contract/record.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
-import { recordSheet } from '../../shared/mix/recordSheet.ts'
+import { presentComputed } from '../../shared/records/presentComputed.ts'
+import { sheetOf } from '../../shared/records/sheetOf.ts'
+import { signFigures } from '../../shared/records/signFigures.ts'
 
 const id = (last: number): string => `01890000-0000-7000-8000-${String(last).padStart(12, '0')}`
 
@@ -86,26 +87,31 @@ export function buildChecks(): Check[] {
 const content: SignedRecord['content'] = {
   method: 'foliar',
   lines: [
-    { blockId: id(3), part: { kind: 'whole' }, startedAt: '2026-06-16T13:50:00Z', endedAt: '2026-06-16T14:36:00Z', amount: { value: '372.0', unit: 'L', known: 'measured' } },
-    { blockId: id(2), part: { kind: 'whole' }, startedAt: '2026-06-16T14:44:00Z', endedAt: '2026-06-16T15:37:00Z', amount: { value: '419.3', unit: 'L', known: 'measured' } },
+    { blockId: id(3), part: { kind: 'whole' }, counts: {}, stage: null, bbch: null, startedAt: '2026-06-16T13:50:00Z', endedAt: '2026-06-16T14:36:00Z', amount: { value: '372.0', unit: 'L', known: 'measured' } },
+    { blockId: id(2), part: { kind: 'whole' }, counts: {}, stage: null, bbch: null, startedAt: '2026-06-16T14:44:00Z', endedAt: '2026-06-16T15:37:00Z', amount: { value: '419.3', unit: 'L', known: 'measured' } },
   ],
   components: [
-    { materialId: id(11), lotId: id(21), basis: { kind: 'ratio', parts: '20' } },
-    { materialId: id(12), lotId: id(22), basis: { kind: 'perTank', value: '1.9', unit: 'L' } },
+    { materialId: id(11), lotId: id(21), basis: { kind: 'ratio', parts: '20', reading: 'to' }, used: null },
+    { materialId: id(12), lotId: id(22), basis: { kind: 'perTank', value: '1.9', unit: 'L' }, used: null },
   ],
   water: { sizedFrom: 'water', value: '750', unit: 'L', source: 'Rain tank 2' },
   sprayerId: id(31),
+  workedInOn: null,
   weather: {
     wind: { value: '1.9', unit: 'ms', kind: 'readHere' }, windFrom: 'NW',
     air: { value: '14.5', unit: 'degC', kind: 'station' }, humidity: { value: '74', unit: '%', kind: 'station' },
   },
+  protection: ['gloves', 'eyes'],
   purpose: 'Aphids on shoot tips',
+  licence: null,
   notes: null,
   doneById: id(41),
 }
 
 const base: Omit<SignedRecord, 'computed'> = {
-  schemaVersion: 1,
+  schemaVersion: 2,
+  entry: 'signed',
+  replaces: null,
   farm: { id: id(1), name: 'Wennick Hollow', zone: 'America/Los_Angeles', seasonStart: '01-01' },
   record: { id: id(5), number: '2026-0143', season: 2026, version: 1, seq: 1844 },
   content,
@@ -121,7 +127,7 @@ const base: Omit<SignedRecord, 'computed'> = {
     { id: id(21), code: 'NF-31', materialId: id(11), origin: 'made', source: null, expiresOn: '2026-06-26' },
     { id: id(22), code: '26-018', materialId: id(12), origin: 'bought', source: 'Marl Supply', expiresOn: null },
   ],
-  sprayer: { id: id(31), code: 'M2', name: 'mist sprayer', tankL: '400' },
+  sprayer: { id: id(31), code: 'M2', name: 'mist sprayer', tankL: '400', flowLPerMin: null },
   checks: buildChecks(),
   acknowledged: [],
   people: { doneBy: { id: id(41), digest: 'a' }, enteredBy: { id: id(41), digest: 'a' }, signedBy: { id: id(41), digest: 'a' } },
@@ -129,6 +135,7 @@ const base: Omit<SignedRecord, 'computed'> = {
     startedAt: '2026-06-16T13:50:00Z', endedAt: '2026-06-16T15:37:00Z', deviceAt: '2026-06-16T16:11:58Z',
     receivedAt: '2026-06-16T16:12:04Z', signedAt: '2026-06-16T16:12:40Z',
   },
+  files: [],
   reason: null,
 }
 
@@ -138,19 +145,7 @@ export function buildSignedRecord(overrides: Partial<SignedRecord> = {}): Signed
   return { ...signed, computed: overrides.computed ?? computeSigned(signed) }
 }
 
-function computeSigned({ content: { lines, water, components }, blocks, sprayer }: Omit<SignedRecord, 'computed'>): SignedRecord['computed'] {
-  const sheet = recordSheet({
-    lines: lines.map(({ blockId, amount }) => ({ areaM2: Number(blocks.find((block) => block.id === blockId)?.areaM2), amount })),
-    water, components, tankL: sprayer?.tankL ?? null,
-  })
-  const text = (value: number | null): string | null => (value === null ? null : String(value))
-  return {
-    areaM2: String(sheet.areaM2),
-    totalL: text(sheet.totalL), waterL: text(sheet.waterL), sprayLPerHa: text(sheet.sprayLPerHa),
-    loads: sheet.loads && {
-      full: sheet.loads.full, tankL: String(sheet.loads.tankL), lastL: String(sheet.loads.lastL), lastAreaHa: String(sheet.loads.lastAreaHa),
-    },
-    components: sheet.components.flatMap(({ amount }) =>
-      amount ? [{ amount: { value: amount.value, unit: amountUnit.parse(amount.unit) } }] : []),
-  }
+function computeSigned({ content, blocks, sprayer, materials, farm }: Omit<SignedRecord, 'computed'>): SignedRecord['computed'] {
+  const sheet = sheetOf(content, { blocks, sprayer })
+  return signFigures(presentComputed({ content, sheet, materials, zone: farm.zone }))
 }

@@ -1,3 +1,4 @@
+import type { Method } from '../../../shared/contract/recordContent.ts'
 import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
 import { toPlan } from '../../../shared/geo/projectToPlan.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
@@ -15,7 +16,7 @@ export interface BlockPlan {
   blocks: readonly { code: string; note: string; geometry: Boundary }[]
   neighbours: readonly { code: string; geometry: Boundary }[]
   sites: readonly PlanSite[]
-  method: 'foliar' | 'drench'
+  method: Method
   language: Language
   /** Words around it; the scale's are made of its number. */
   words: { north: string; scale: (denominator: number) => string; alt: (denominator: number) => string }

@@ -1,3 +1,4 @@
+import type { Method } from '../../../shared/contract/recordContent.ts'
 import type { Verdict } from '../../../shared/contract/record.ts'
 import type { Canvas } from './canvas.ts'
 import { ELDER } from './styles.ts'
@@ -24,7 +25,7 @@ export function drawVerdictMark({ doc }: Canvas, verdict: Verdict, { x, y, size 
 }
 
 /** Foliar spray: a filled disc. Soil drench: an outlined drop. */
-export function drawMethodMark({ doc }: Canvas, method: 'foliar' | 'drench', { x, y, size }: MarkBox): void {
+export function drawMethodMark({ doc }: Canvas, method: Method, { x, y, size }: MarkBox): void {
   doc.save().translate(x, y).scale(size / 14)
   if (method === 'foliar') doc.circle(7, 7, 6).fill(ELDER)
   else doc.lineWidth(1.5).path('M7 1C8.6 4.2 11.8 6.9 11.8 9.5A4.8 3.7 0 0 1 2.2 9.5C2.2 6.9 5.4 4.2 7 1Z').stroke('#000000')

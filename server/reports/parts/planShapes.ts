@@ -1,3 +1,4 @@
+import type { Method } from '../../../shared/contract/recordContent.ts'
 import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
 import { toPlan } from '../../../shared/geo/projectToPlan.ts'
 import type { PlanSite } from '../recordReportData.ts'
@@ -29,7 +30,7 @@ export function tracePath({ doc }: Canvas, lines: readonly PagePoint[][], { clos
 const LATTICE = 6.75
 
 /** Dots (a spray) or upright lines (a drench) over the part of the frame inside the rings. */
-export function fillTreated(canvas: Canvas, rings: readonly PagePoint[][], { frame, method }: { frame: PlanBox; method: 'foliar' | 'drench' }): void {
+export function fillTreated(canvas: Canvas, rings: readonly PagePoint[][], { frame, method }: { frame: PlanBox; method: Method }): void {
   const { doc } = canvas
   doc.save()
   tracePath(canvas, rings, { closes: true })

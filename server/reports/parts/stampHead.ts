@@ -1,3 +1,4 @@
+import type { Method } from '../../../shared/contract/recordContent.ts'
 import { addElement, drawArtifact, type Canvas, type Element, type TextStyle } from './canvas.ts'
 import { drawDoubleRule } from './drawRules.ts'
 import { drawMethodMark } from './drawMarks.ts'
@@ -14,7 +15,7 @@ export interface StampHead {
   /** "version 2", "Withdrawn"; empty where there is none. */
   version: string
   withdrawn: string
-  method: { kind: 'foliar' | 'drench'; word: string }
+  method: { kind: Method; word: string }
   when: string
 }
 

@@ -1,4 +1,4 @@
-import type { Weather } from '../../../shared/contract/record.ts'
+import type { Weather } from '../../../shared/contract/weather.ts'
 import type { Fact } from '../parts/factsList.ts'
 import type { RecordReportData } from '../recordReportData.ts'
 import { LINES_BESIDE_PLAN, pairBlocks } from './blockLines.ts'

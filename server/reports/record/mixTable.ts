@@ -1,5 +1,5 @@
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
-import type { Basis } from '../../../shared/contract/record.ts'
+import type { Basis } from '../../../shared/contract/recordContent.ts'
 import type { Column, Table, TableRow } from '../parts/ledgerTable.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { RecordFigures } from './recordFigures.ts'
@@ -22,7 +22,7 @@ export function mixTable({ signed, figures, words, place }: MixInput): Table {
 /** What stands beside the head: what the mix was sized from and how a ratio reads. */
 export function mixAside({ content }: SignedRecord, { say, typed, unit }: ReportWords): string {
   const { water } = content
-  const sized = water === null ? []
+  const sized = water === null || water.sizedFrom === 'none' ? []
     : [water.sizedFrom === 'water' ? say('mix.sizedWater') : say('mix.sizedRate', { value: typed(water.value), unit: unit(water.unit) })]
   const ratio = content.components.some(({ basis }) => basis.kind === 'ratio') ? [say('mix.ratioMeans')] : []
   return [...sized, ...ratio].join('; ')
@@ -45,7 +45,7 @@ type RowInput = Omit<MixInput, 'place'>
 
 function waterRow({ signed, figures, words }: RowInput): TableRow {
   const { say } = words
-  const { water } = signed.content
+  const water = signed.content.water?.sizedFrom === 'none' ? null : signed.content.water
   const { sheet, agrees } = figures
   const { waterL } = signed.computed
   return {

@@ -23,6 +23,6 @@ export async function createSprayer(services: Services, actor: FarmActor, input:
   })
 }
 
-function present({ id, code, name, tankL, revision }: Sprayer): SprayerAnswer {
-  return { id, code, name, tankL, revision }
+function present({ id, code, name, tankL, flowLPerMin, revision }: Sprayer): SprayerAnswer {
+  return { id, code, name, tankL, flowLPerMin, revision }
 }

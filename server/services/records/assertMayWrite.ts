@@ -1,5 +1,5 @@
 import type { EntityManager } from 'typeorm'
-import type { RecordContent } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Person } from '../../entities/Person.ts'

@@ -1,4 +1,5 @@
-import type { ApplicationRecord as RecordAnswer, CreateRecord } from '../../../shared/contract/record.ts'
+import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
+import type { CreateRecord } from '../../../shared/contract/recordChanges.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { appendJournal } from '../appendJournal.ts'

@@ -1,5 +1,5 @@
 import type { EntityManager } from 'typeorm'
-import type { RecordContent } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { firstStart, registerRow } from '../../../shared/records/registerRow.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'

@@ -1,16 +1,20 @@
-import type { RecordContent } from '../../../shared/contract/record.ts'
+import type { Method, RecordContent } from '../../../shared/contract/recordContent.ts'
+import { firstStart } from '../../../shared/records/registerRow.ts'
 import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
 import type { FieldError } from '../../errors.ts'
+import { findPartFaults } from './findPartFaults.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 
 const FUTURE_TOLERANCE_MS = 10 * 60_000
-const LONGEST_LINE_MS = 24 * 3_600_000
+const DAY_MS = 86_400_000
+const LONGEST_LINE_MS = DAY_MS
 
 /** What is impossible in a record, at whatever stage; nothing that is merely not written yet. */
 export function findRecordFaults(content: RecordContent, ground: RecordGround, now: Date): FieldError[] {
   return [
-    ...content.lines.flatMap((line, index) => [...findTimeFaults(line, `lines.${index}`, now), ...findAmountFaults(line, `lines.${index}`)]),
-    ...findRepeatedBlocks(content),
+    ...content.lines.flatMap((line, index) => [...findTimeFaults(line, `lines.${index}`, now), ...findAmountFaults(content.method, line, `lines.${index}`)]),
+    ...findPartFaults(content, ground),
+    ...findMethodFaults(content, now),
     ...content.components.flatMap((_, index) => findComponentFaults(content, ground, index)),
   ]
 }
@@ -30,15 +34,25 @@ function findTimeFaults({ startedAt, endedAt }: RecordContent['lines'][number], 
   return faults
 }
 
-/** Sprays and drenches are measured out by volume. */
-function findAmountFaults({ amount }: RecordContent['lines'][number], path: string): FieldError[] {
-  return amount !== null && dimensionOf(amount.unit) !== 'volume' ? [{ path: `${path}.amount.unit`, code: 'unit.not_allowed' }] : []
+/** Sprays and drenches are measured out by volume, what is spread by mass or volume. */
+function findAmountFaults(method: Method, { amount }: RecordContent['lines'][number], path: string): FieldError[] {
+  return amount !== null && method !== 'solid' && dimensionOf(amount.unit) !== 'volume' ? [{ path: `${path}.amount.unit`, code: 'unit.not_allowed' }] : []
 }
 
-function findRepeatedBlocks({ lines }: RecordContent): FieldError[] {
-  return lines.flatMap(({ blockId }, index) =>
-    lines.findIndex((other) => other.blockId === blockId) < index ? [{ path: `lines.${index}.blockId`, code: 'record.same_block' }] : [],
-  )
+/** What belongs to one way of applying only. A solid is worked in on its first day or after, and not in the days to come. */
+function findMethodFaults(content: RecordContent, now: Date): FieldError[] {
+  const { method, water, workedInOn } = content
+  const isSolid = method === 'solid'
+  const faults: FieldError[] = []
+  if (isSolid && water !== null) faults.push({ path: 'water', code: 'water.not_for_solid' })
+  if (!isSolid && workedInOn !== null) faults.push({ path: 'workedInOn', code: 'worked_in.only_solid' })
+  const start = firstStart(content)
+  if (workedInOn === null || !isSolid) return faults
+  // A civil day is the farm's: a day either side of the instants leaves room for its zone.
+  const on = Date.parse(`${workedInOn}T12:00:00Z`)
+  if (start !== null && on < Date.parse(start) - DAY_MS) faults.push({ path: 'workedInOn', code: 'worked_in.before_start' })
+  if (on > now.getTime() + DAY_MS) faults.push({ path: 'workedInOn', code: 'time.future' })
+  return faults
 }
 
 function findComponentFaults(content: RecordContent, { materials, lots }: RecordGround, index: number): FieldError[] {
@@ -47,11 +61,12 @@ function findComponentFaults(content: RecordContent, { materials, lots }: Record
   if (!component || !material) return []
   const path = `components.${index}`
   const faults: FieldError[] = []
-  const { basis } = component
+  const { basis, used } = component
   if (basis.kind === 'ratio' && material.measuredIn === 'mass') faults.push({ path: `${path}.basis.kind`, code: 'unit.not_volume' })
   if (basis.kind !== 'ratio' && measureOf(basis.unit) !== material.measuredIn) {
     faults.push({ path: `${path}.basis.unit`, code: `unit.needs_${material.measuredIn}` })
   }
+  if (used !== null && measureOf(used.unit) !== material.measuredIn) faults.push({ path: `${path}.used.unit`, code: `unit.needs_${material.measuredIn}` })
   const lot = lots.find(({ id }) => id === component.lotId)
   if (lot && lot.materialId !== material.id) faults.push({ path: `${path}.lotId`, code: 'lot.other_material', params: { code: lot.code } })
   return faults

@@ -1,5 +1,6 @@
 import type { Acknowledged } from '../../../shared/contract/common.ts'
-import type { Check, RecordContent } from '../../../shared/contract/record.ts'
+import type { Check } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { lastEnd } from '../../../shared/records/registerRow.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
 import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
@@ -20,10 +21,10 @@ export function findMissing(content: RecordContent, sheet: RecordSheet): FieldEr
     ]),
     ...(content.components.length === 0 ? [{ path: 'components', code: 'record.component_missing' }] : []),
     ...content.components.flatMap(({ lotId }, index) => (lotId === null ? [{ path: `components.${index}.lotId`, code: 'lot.missing' }] : [])),
-    ...(content.water === null ? [{ path: 'water', code: 'record.water_missing' }] : []),
+    ...(content.water === null && content.method !== 'solid' ? [{ path: 'water', code: 'record.water_missing' }] : []),
     ...(content.sprayerId === null && content.components.some(({ basis }) => basis.kind === 'perTank') ? [{ path: 'sprayerId', code: 'sprayer.needed' }] : []),
   ]
-  const blank = sheet.totalL === null || sheet.components.some(({ amount }) => amount === null)
+  const blank = (sheet.totalL === null && sheet.totalKg === null) || sheet.components.some(({ amount }) => amount === null)
   return missing.length === 0 && blank ? [{ path: 'components', code: 'record.figures_missing' }] : missing
 }
 
@@ -48,7 +49,11 @@ export function findUnlikely(
   return [...stops, ...findTooMuch(sheet).filter(({ code }) => !given.has(code)), ...late]
 }
 
-function findTooMuch({ appliedL, totalL }: RecordSheet): FieldError[] {
-  if (appliedL === null || totalL === null || Number(appliedL) <= totalL * (1 + MOST_OVER)) return []
-  return [{ path: 'lines', code: 'total.inconsistent', params: { applied: Number(roundDecimal(appliedL, 1)), total: Number(roundDecimal(String(totalL), 1)) } }]
+function findTooMuch({ appliedL, totalL, appliedKg, totalKg }: RecordSheet): FieldError[] {
+  return [...compare(appliedL, totalL), ...(totalL === null ? compare(appliedKg, totalKg) : [])]
+}
+
+function compare(applied: string | null, total: number | null): FieldError[] {
+  if (applied === null || total === null || Number(applied) <= total * (1 + MOST_OVER)) return []
+  return [{ path: 'lines', code: 'total.inconsistent', params: { applied: Number(roundDecimal(applied, 1)), total: Number(roundDecimal(String(total), 1)) } }]
 }

@@ -1,7 +1,9 @@
 import { recordChecks } from '../../../shared/checks/recordChecks.ts'
-import type { Check, Computed, RecordContent } from '../../../shared/contract/record.ts'
-import { recordSheet } from '../../../shared/mix/recordSheet.ts'
+import type { Check, Computed } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
+import { presentComputed } from '../../../shared/records/presentComputed.ts'
+import { sheetOf } from '../../../shared/records/sheetOf.ts'
 import { presentLot } from '../inputs/presentInputs.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 
@@ -13,15 +15,7 @@ export interface JudgedRecord {
 
 /** The figures and checks of a record over what it rests on, at an instant. */
 export function judgeRecord(content: RecordContent, ground: RecordGround, zone: string, now: Date): JudgedRecord {
-  const sheet = recordSheet({
-    lines: content.lines.map(({ blockId, amount }) => ({
-      areaM2: Number(ground.blocks.find(({ id }) => id === blockId)?.areaM2 ?? 0),
-      amount,
-    })),
-    water: content.water,
-    tankL: ground.sprayer?.tankL ?? null,
-    components: content.components,
-  })
+  const sheet = sheetOf(content, ground)
   const checks = recordChecks({
     content,
     sheet,
@@ -31,21 +25,5 @@ export function judgeRecord(content: RecordContent, ground: RecordGround, zone: 
     zone,
     now: now.toISOString(),
   })
-  return { sheet, computed: presentComputed(sheet), checks }
-}
-
-function presentComputed(sheet: RecordSheet): Computed {
-  return {
-    areaM2: sheet.areaM2,
-    totalL: sheet.totalL,
-    waterL: sheet.waterL,
-    sprayLPerHa: sheet.sprayLPerHa,
-    loads: sheet.loads && {
-      full: sheet.loads.full,
-      tankL: sheet.loads.tankL,
-      lastL: sheet.loads.lastL,
-      lastAreaHa: sheet.loads.lastAreaHa,
-    },
-    components: sheet.components.map(({ amount }) => ({ amount: amount as Computed['components'][number]['amount'] })),
-  }
+  return { sheet, computed: presentComputed({ content, sheet, materials: ground.materials, zone }), checks }
 }

@@ -1,5 +1,5 @@
 import { In, type EntityManager } from 'typeorm'
-import type { RecordContent } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
 import { Lot } from '../../entities/Lot.ts'

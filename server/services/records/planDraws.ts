@@ -1,10 +1,13 @@
 import type { Acknowledged } from '../../../shared/contract/common.ts'
 import type { AmountUnit } from '../../../shared/contract/quantity.ts'
+import type { Computed } from '../../../shared/contract/record.ts'
+import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { convertQuantity } from '../../../shared/units/convertQuantity.ts'
 import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
 import { subtractDecimals } from '../../../shared/units/subtractDecimals.ts'
 import type { Lot } from '../../entities/Lot.ts'
 import type { FieldError } from '../../errors.ts'
+import type { RecordGround } from './loadRecordGround.ts'
 
 /** A component's amount and the lot it came from. */
 export interface Draw {
@@ -32,6 +35,15 @@ export interface DrawPlan {
 
 /** Codes whose reason also covers a lot that is short. */
 const SHORT_CODES = ['lot.short', 'lot.left', 'record.stop']
+
+/** What each component takes of its lot: what was really used where that is written, else what the sheet says. */
+export function listDraws({ components }: RecordContent, { lots }: Pick<RecordGround, 'lots'>, computed: Computed): Draw[] {
+  return components.flatMap(({ lotId, used }, index) => {
+    const lot = lots.find(({ id }) => id === lotId)
+    const amount = used ?? computed.components[index]?.amount
+    return lot && amount ? [{ lot, amount: { value: amount.value, unit: amount.unit }, path: `components.${index}.lotId` }] : []
+  })
+}
 
 /** What a record takes out of its lots, in the order of its components; pure. */
 export function planDraws(draws: Draw[], acknowledged: Acknowledged): DrawPlan {

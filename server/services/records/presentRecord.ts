@@ -1,15 +1,20 @@
 import { In, type EntityManager } from 'typeorm'
 import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
+import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Person } from '../../entities/Person.ts'
+import { RecordReview } from '../../entities/RecordReview.ts'
+import { RecordVersion } from '../../entities/RecordVersion.ts'
+import { formatRecordNumber } from './formatRecordNumber.ts'
 
 /** A record as the contract shows it, with the names of its people as they stand now. */
 export async function presentRecord(manager: EntityManager, record: ApplicationRecord): Promise<RecordAnswer> {
-  const ids = [record.doneById, record.enteredById, record.signedById].filter((id) => id !== null)
+  const { reason, reviews } = await readVersionFacts(manager, record)
+  const ids = [record.doneById, record.enteredById, record.signedById, ...reviews.map(({ reviewedById }) => reviewedById)].filter((id) => id !== null)
   const people = await manager.find(Person, { select: { id: true, name: true }, where: { farmId: record.farmId, id: In(ids) } })
   const person = (id: string | null) => people.find((candidate) => candidate.id === id) ?? null
   return {
-    ...record.content,
+    ...fillContent(record.content),
     id: record.id,
     state: record.state,
     number: record.season === null || record.number === null ? null : formatRecordNumber(record.season, record.number),
@@ -18,7 +23,7 @@ export async function presentRecord(manager: EntityManager, record: ApplicationR
     revision: record.revision,
     digest: record.digest,
     seq: record.seq,
-    computed: record.computed,
+    computed: fillComputed(record.computed),
     checks: record.checks,
     acknowledged: record.acknowledged,
     doneBy: person(record.doneById),
@@ -27,10 +32,16 @@ export async function presentRecord(manager: EntityManager, record: ApplicationR
     signedAt: record.signedAt?.toISOString() ?? null,
     deviceAt: record.deviceAt?.toISOString() ?? null,
     receivedAt: record.receivedAt.toISOString(),
+    reason,
+    reviews: reviews.map(({ version, reviewedById, at, note }) => ({ version, by: person(reviewedById), at: at.toISOString(), note })),
   }
 }
 
-/** `2026-0143`: the season and the number in it, at least four digits. */
-export function formatRecordNumber(season: number, number: number): string {
-  return `${season}-${String(number).padStart(4, '0')}`
+async function readVersionFacts(
+  manager: EntityManager, { farmId, id, version }: ApplicationRecord,
+): Promise<{ reason: string | null; reviews: RecordReview[] }> {
+  if (version === 0) return { reason: null, reviews: [] }
+  const newest = await manager.findOne(RecordVersion, { select: { reason: true, version: true }, where: { farmId, recordId: id, version } })
+  const reviews = await manager.find(RecordReview, { where: { farmId, recordId: id }, order: { at: 'ASC', id: 'ASC' } })
+  return { reason: newest?.reason ?? null, reviews }
 }

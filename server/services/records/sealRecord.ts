@@ -1,8 +1,8 @@
 import type { EntityManager } from 'typeorm'
 import type { Acknowledged } from '../../../shared/contract/common.ts'
-import type { ApplicationRecord as RecordAnswer, Check, RecordContent, SignRecord } from '../../../shared/contract/record.ts'
-import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
-import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
+import type { ApplicationRecord as RecordAnswer, Check } from '../../../shared/contract/record.ts'
+import type { SignRecord } from '../../../shared/contract/recordChanges.ts'
+import { fillContent } from '../../../shared/records/fillStored.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, invalid, notFound, stale, unlikely, type FieldError } from '../../errors.ts'
@@ -11,14 +11,12 @@ import { assertMayWrite } from './assertMayWrite.ts'
 import { drawLots } from './drawLots.ts'
 import { findRecordFaults } from './findRecordFaults.ts'
 import { findMissing, findUnlikely } from './findSigningFaults.ts'
-import { judgeRecord, type JudgedRecord } from './judgeRecord.ts'
-import { loadRecordGround, type RecordGround } from './loadRecordGround.ts'
-import { planDraws, type Draw } from './planDraws.ts'
+import { judgeRecord } from './judgeRecord.ts'
+import { loadRecordGround } from './loadRecordGround.ts'
+import { listDraws, planDraws } from './planDraws.ts'
 import { presentRecord } from './presentRecord.ts'
+import { writeOutAmounts } from './writeOutAmounts.ts'
 import { writeVersion } from './writeVersion.ts'
-
-/** A worked-out amount is written to a tenth of a millilitre. */
-const AMOUNT_DECIMALS = 4
 
 /**
  * Signs a record: judges it as it stands, draws its lots down, gives it its number and its entry in the log.
@@ -40,10 +38,11 @@ export async function sealRecord(
   if (record.state === 'withdrawn') throw new AppError('conflict', 'record.signed')
   if (input.revision !== undefined && input.revision !== record.revision) throw stale(await presentRecord(manager, record))
   const now = services.clock.now()
-  const ground = await loadRecordGround(manager, actor, record.content, true)
-  const judged = judgeRecord(record.content, ground, actor.zone, now)
-  const content = writeOutAmounts(record.content, judged.sheet)
-  const asked = listDraws(content, ground, judged)
+  const stored = fillContent(record.content)
+  const ground = await loadRecordGround(manager, actor, stored, true)
+  const judged = judgeRecord(stored, ground, actor.zone, now)
+  const content = writeOutAmounts(stored, judged.sheet)
+  const asked = listDraws(content, ground, judged.computed)
   const acknowledged = keepAsked(input.acknowledged, [...planDraws(asked, []).doubts, ...findUnlikely(content, judged, [], now)], judged.checks)
   const draws = planDraws(asked, acknowledged)
   const faults = [...findRecordFaults(content, ground, now), ...findMissing(content, judged.sheet), ...draws.faults]
@@ -51,7 +50,9 @@ export async function sealRecord(
   const doubts = [...draws.doubts, ...findUnlikely(content, judged, acknowledged, now)]
   if (doubts.length > 0) throw unlikely(doubts)
   await drawLots(manager, draws.entries, { recordId: id, personId: personOf(actor), at: now })
-  return presentRecord(manager, await writeVersion(services, manager, actor, { record, content, ground, judged, acknowledged, now }))
+  return presentRecord(manager, await writeVersion(services, manager, actor, {
+    record, entry: 'signed', reason: null, content, ground, judged, acknowledged, deviceAt: record.deviceAt, now,
+  }))
 }
 
 /** Reasons that something in the record asks for; others do not belong into what is signed. */
@@ -59,22 +60,4 @@ function keepAsked(given: Acknowledged, doubts: FieldError[], checks: Check[]): 
   const stops = checks.filter(({ verdict }) => verdict === 'stop').map(({ code }) => code)
   const codes = new Set([...doubts.map(({ code }) => code), ...stops, ...(stops.length > 0 ? ['record.stop'] : [])])
   return given.filter(({ code }) => codes.has(code))
-}
-
-/** Where no amount was written for a line, its share of the total stands there, said to be worked out. */
-function writeOutAmounts(content: RecordContent, sheet: RecordSheet): RecordContent {
-  const lines = content.lines.map((line, index) => {
-    const share = sheet.lines[index]?.shareL ?? null
-    if (line.amount !== null || share === null) return line
-    return { ...line, amount: { value: roundDecimal(share, AMOUNT_DECIMALS), unit: 'L' as const, known: 'workedOut' as const } }
-  })
-  return { ...content, lines }
-}
-
-function listDraws(content: RecordContent, { lots }: RecordGround, { computed }: JudgedRecord): Draw[] {
-  return content.components.flatMap(({ lotId }, index) => {
-    const lot = lots.find(({ id }) => id === lotId)
-    const amount = computed.components[index]?.amount
-    return lot && amount ? [{ lot, amount, path: `components.${index}.lotId` }] : []
-  })
 }

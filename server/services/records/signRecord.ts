@@ -1,4 +1,5 @@
-import type { ApplicationRecord as RecordAnswer, SignRecord } from '../../../shared/contract/record.ts'
+import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
+import type { SignRecord } from '../../../shared/contract/recordChanges.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { AppError } from '../../errors.ts'
 import type { Services } from '../services.ts'

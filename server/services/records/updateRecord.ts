@@ -1,4 +1,5 @@
-import type { ApplicationRecord as RecordAnswer, UpdateRecord } from '../../../shared/contract/record.ts'
+import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
+import type { UpdateRecord } from '../../../shared/contract/recordChanges.ts'
 import { canonicalText } from '../../../shared/evidence/canonicalText.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'

@@ -27,7 +27,7 @@ export const frame = {
   versionOf: 'version {version}',
   lateShort: '{hours} h',
   lateLong: 'entered {hours} hours after it was done',
-  method: { foliar: 'Foliar spray', drench: 'Soil drench' },
+  method: { foliar: 'Foliar spray', drench: 'Soil drench', injected: 'Injected drench', solid: 'Solid spread' },
   verdict: { stop: 'Stop', caution: 'Caution', unknown: 'Not known', pass: 'Pass' },
   tally: { stop: 'Stop {count}', caution: 'Caution {count}', unknown: 'Not known {count}', noStop: 'No stop found' },
   rests: { law: 'Law', label: 'Label', certifier: 'Certifier', house: 'House rule', recipe: 'Recipe' },

@@ -44,6 +44,7 @@ export const problems = {
   },
   number: {
     format: 'Give a plain number under 10 000 000, such as 12.5, with at most 4 decimals.',
+    whole: 'Give a whole number.',
     above_zero: 'Give a number above 0.',
     percent: 'Give a percentage from 0 to 100.',
     range: 'This is beyond what is measured: air −60 to 60 °C, wind 0 to 75 m/s.',
@@ -122,6 +123,16 @@ export const problems = {
   },
   block: { unknown: 'There is no such block on this farm.' },
   material: { unknown: 'There is no such material on this farm.' },
+  part: {
+    fraction: 'Give a part above 0 and at most 1, such as 0.5.',
+    span: 'From comes first, and both lie within how many there are.',
+    outside_block: 'Part of this lies outside block {code}. Draw it inside.',
+    more_than_block: 'The lines on block {code} add up to more than the block.',
+  },
+  ratio: { in_below_one: '1 part in N parts of the mix needs an N of at least 1.' },
+  bbch: { format: 'A BBCH code has two or three digits, such as 65.' },
+  water: { not_for_solid: 'A solid is spread dry. Take the water out, or choose a drench.' },
+  worked_in: { only_solid: 'Only what was spread as a solid is worked in.', before_start: 'It cannot have been worked in before it was spread.' },
   lot: {
     unknown: 'There is no such lot on this farm.',
     other_material: 'Lot {code} holds another material.',

@@ -38,6 +38,11 @@ export const units = {
   in: 'in',
   bar: 'bar',
   psi: 'psi',
+  plant: 'plant',
+  tree: 'tree',
+  rowM: 'm of row',
+  bed: 'bed',
+  pot: 'pot',
   h: 'h',
   d: 'd',
 }

@@ -27,7 +27,7 @@ export const frame = {
   versionOf: 'versión {version}',
   lateShort: '{hours} h',
   lateLong: 'anotado {hours} horas después de hacerlo',
-  method: { foliar: 'Aplicación foliar', drench: 'Aplicación al suelo' },
+  method: { foliar: 'Aplicación foliar', drench: 'Aplicación al suelo', injected: 'Inyección en el suelo', solid: 'Esparcido en sólido' },
   verdict: { stop: 'Alto', caution: 'Cuidado', unknown: 'No se sabe', pass: 'En regla' },
   tally: { stop: 'Alto {count}', caution: 'Cuidado {count}', unknown: 'No se sabe {count}', noStop: 'Ningún alto encontrado' },
   rests: { law: 'Ley', label: 'Etiqueta', certifier: 'Certificadora', house: 'Regla de la casa', recipe: 'Receta' },

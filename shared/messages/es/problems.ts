@@ -44,6 +44,7 @@ export const problems = {
   },
   number: {
     format: 'Indique un número sencillo menor de 10 000 000, como 12.5, con 4 decimales como máximo.',
+    whole: 'Indique un número entero.',
     above_zero: 'Indique un número mayor que 0.',
     percent: 'Indique un porcentaje de 0 a 100.',
     range: 'Esto queda fuera de lo que se mide: aire de −60 a 60 °C, viento de 0 a 75 m/s.',
@@ -122,6 +123,16 @@ export const problems = {
   },
   block: { unknown: 'Esa parcela no existe en esta finca.' },
   material: { unknown: 'Ese material no existe en esta finca.' },
+  part: {
+    fraction: 'Indique una parte mayor que 0 y como máximo 1, como 0.5.',
+    span: 'El primero va antes, y los dos caben en los que hay.',
+    outside_block: 'Una parte queda fuera de la parcela {code}. Dibújela dentro.',
+    more_than_block: 'Las líneas de la parcela {code} suman más que la parcela.',
+  },
+  ratio: { in_below_one: '1 parte en N partes de la mezcla pide un N de al menos 1.' },
+  bbch: { format: 'Un código BBCH tiene dos o tres cifras, como 65.' },
+  water: { not_for_solid: 'Un sólido se esparce en seco. Quite el agua o elija un riego al suelo.' },
+  worked_in: { only_solid: 'Solo se incorpora lo que se esparció como sólido.', before_start: 'No pudo incorporarse antes de esparcirlo.' },
   lot: {
     unknown: 'Ese lote no existe en esta finca.',
     other_material: 'El lote {code} es de otro material.',

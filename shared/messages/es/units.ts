@@ -38,6 +38,11 @@ export const units = {
   in: 'in',
   bar: 'bar',
   psi: 'psi',
+  plant: 'planta',
+  tree: 'árbol',
+  rowM: 'm de hilera',
+  bed: 'bancal',
+  pot: 'maceta',
   h: 'h',
   d: 'd',
 }

@@ -1,6 +1,10 @@
 /** Names of the icons that the sprite holds. */
 export type IconName =
   | 'today'
+  | 'injected'
+  | 'injected-planned'
+  | 'solid'
+  | 'solid-planned'
   | 'blocks'
   | 'register'
   | 'batches'

@@ -71,6 +71,6 @@ describe('calc', { timeout: 60_000 }, () => {
   it('lists its functions with --help and reads nothing', () => {
     const { lines, status } = calc('', '--help')
     expect(status).toBe(0)
-    expect(lines.map((line) => line.split(' ')[0])).toEqual(['area', 'convert', 'dilute', 'loads', 'calibrate', 'canonical'])
+    expect(lines.map((line) => line.split(' ')[0])).toEqual(['area', 'convert', 'dilute', 'loads', 'calibrate', 'air', 'canonical'])
   })
 })

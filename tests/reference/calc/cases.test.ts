@@ -4,11 +4,13 @@ import { CALIBRATION_CASES } from '../mix/calibrationCases.ts'
 import { DILUTION_CASES } from '../mix/dilutionCases.ts'
 import { altered } from '../referenceCase.ts'
 import { PRINTED_CONSTANTS } from '../units/constantCases.ts'
+import { AIR_CASES } from '../weather/airCases.ts'
 
 describe.each([
   { name: 'constants', cases: PRINTED_CONSTANTS },
   { name: 'calibration', cases: CALIBRATION_CASES },
   { name: 'dilution', cases: DILUTION_CASES },
+  { name: 'air', cases: AIR_CASES },
 ])('published values: $name', ({ cases }) => {
   const errorOf = (fn: string, args: unknown, read: (answer: never) => number, expected: number): number =>
     Math.abs(read(CALC_FUNCTIONS[fn]?.run(args) as never) - expected)

@@ -21,8 +21,8 @@ export const buildSheetComponent = (over: Partial<SheetComponent> = {}): SheetCo
 })
 
 export const buildSheet = (over: Partial<RecordSheet> = {}): RecordSheet => ({
-  areaM2: 7500, areaHa: 0.75, waterL: 746.25, totalL: 750, sprayLPerHa: 1000, loads: null,
-  components: [buildSheetComponent()], water: { perHa: null, perFullLoad: null, perLastLoad: null }, appliedL: null, lines: [{ areaHa: 0.75, shareL: '750', amountL: null }], findings: [], ...over,
+  areaM2: 7500, areaHa: 0.75, counts: {}, waterL: 746.25, totalL: 750, totalKg: null, sprayLPerHa: 1000, kgPerHa: null, sprayPerEach: null, loads: null,
+  components: [buildSheetComponent()], water: { perHa: null, perFullLoad: null, perLastLoad: null }, appliedL: null, appliedKg: null, lines: [{ areaHa: 0.75, shareL: '750', shareKg: null, amountL: null, amountKg: null }], findings: [], ...over,
 })
 
 /** A foliar record of one block and one component, judged at noon UTC on 16 June 2026 on a farm in New York's zone. */

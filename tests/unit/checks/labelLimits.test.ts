@@ -101,7 +101,7 @@ describe('share of the mix that went onto the land', () => {
         ...buildFacts().content,
         lines: amountsL.map((amountL) => ({ blockId: 'b1', startedAt: null, endedAt: null, amount: amountL === null ? null : { known } })),
       },
-      sheet: buildSheet({ lines: amountsL.map((amountL) => ({ areaHa: 1, shareL: null, amountL })), totalL }),
+      sheet: buildSheet({ lines: amountsL.map((amountL) => ({ areaHa: 1, shareL: null, shareKg: null, amountL, amountKg: null })), totalL }),
     })
 
   it.each([

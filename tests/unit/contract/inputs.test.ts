@@ -4,7 +4,7 @@ import { v7 as uuidV7 } from 'uuid'
 import { civilDateSchema, idSchema, instantSchema, pageQuerySchema } from '../../../shared/contract/common.ts'
 import { createMaterialSchema } from '../../../shared/contract/input.ts'
 import { decimalText, signedDecimal } from '../../../shared/contract/quantity.ts'
-import { weatherSchema } from '../../../shared/contract/record.ts'
+import { weatherSchema } from '../../../shared/contract/weather.ts'
 import { lineText, noteText } from '../../../shared/contract/text.ts'
 
 const faults = (schema: z.ZodType, value: unknown) =>

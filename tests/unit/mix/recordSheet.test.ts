@@ -16,7 +16,7 @@ describe('recordSheet from water', () => {
   it('adds a ratio to its water: 1 part to 30 parts of 600 L is 20 L', () => {
     const sheet = recordSheet(buildInput({ components: [component({ kind: 'ratio', parts: '30' })] }))
     expect(sheet).toMatchObject({ areaHa: 2, waterL: 600, totalL: 620, sprayLPerHa: 310, findings: [] })
-    expect(sheet.loads).toEqual({ full: 3, count: 4, tankL: 200, lastL: 20, lastAreaHa: 0.0645161290322581 })
+    expect(sheet.loads).toEqual({ full: 3, count: 4, tankL: 200, lastL: 20, lastAreaHa: 0.0645161290322581, fullMinutes: null, lastMinutes: null })
     expect(sheet.components[0]).toEqual({
       amount: { value: '20', unit: 'L' }, inL: '20', inKg: null, perHa: '10',
       perFullLoad: '6.45161290322581', perLastLoad: '0.645161290322581',
@@ -91,8 +91,8 @@ describe('recordSheet from a spray rate', () => {
 describe('recordSheet of a half-typed draft', () => {
   it('knows nothing of an empty one, and says what it needs', () => {
     expect(recordSheet({ lines: [], water: null, tankL: null, components: [] })).toEqual({
-      areaM2: 0, areaHa: 0, waterL: null, totalL: null, sprayLPerHa: null, loads: null, components: [],
-      water: { perHa: null, perFullLoad: null, perLastLoad: null }, appliedL: null, lines: [],
+      areaM2: 0, areaHa: 0, counts: {}, waterL: null, totalL: null, totalKg: null, sprayLPerHa: null, kgPerHa: null, sprayPerEach: null, loads: null, components: [],
+      water: { perHa: null, perFullLoad: null, perLastLoad: null }, appliedL: null, appliedKg: null, lines: [],
       findings: [{ code: 'sheet.no_area', params: {} }, { code: 'sheet.no_water', params: {}, path: 'water' }],
     })
   })
@@ -136,13 +136,79 @@ describe('recordSheet by block line', () => {
   it('shares the total by area and reads what was written down', () => {
     const sheet = recordSheet(buildInput({ lines: [{ areaM2: 10_000, amount: { value: '50', unit: 'galUS' } }, { areaM2: 5_000 }, { areaM2: 15_000, amount: null }] }))
     expect(sheet.lines).toEqual([
-      { areaHa: 1, shareL: '200', amountL: '189.2705892' }, { areaHa: 0.5, shareL: '100', amountL: null }, { areaHa: 1.5, shareL: '300', amountL: null },
+      { areaHa: 1, shareL: '200', shareKg: null, amountL: '189.2705892', amountKg: null },
+      { areaHa: 0.5, shareL: '100', shareKg: null, amountL: null, amountKg: null },
+      { areaHa: 1.5, shareL: '300', shareKg: null, amountL: null, amountKg: null },
     ])
   })
 
-  it('refuses an amount that is no volume', () => {
-    expect(recordSheet(buildInput({ lines: [{ areaM2: 1, amount: { value: '5', unit: 'kg' } }] })).findings).toEqual([
-      { code: 'unit.not_allowed', params: { unit: 'kg' }, path: 'lines.0.amount' },
+  it('refuses an amount that is neither volume nor mass', () => {
+    expect(recordSheet(buildInput({ lines: [{ areaM2: 1, amount: { value: '5', unit: 'm' } }] })).findings).toEqual([
+      { code: 'unit.not_allowed', params: { unit: 'm' }, path: 'lines.0.amount' },
     ])
+  })
+})
+
+describe('recordSheet by count', () => {
+  const beds = (counts: { plant?: string; bed?: string }[]) => counts.map((one) => ({ areaM2: 100, counts: one }))
+
+  it('sizes a drench of half a litre a plant and shares it by plants, not by area', () => {
+    const sheet = recordSheet(buildInput({
+      lines: beds([{ plant: '120' }, { plant: '80' }]), water: { sizedFrom: 'perEach', value: '0.5', unit: 'L', each: 'plant' }, components: [],
+    }))
+    expect(sheet).toMatchObject({ totalL: 100, waterL: 100, counts: { plant: '200' }, sprayPerEach: { each: 'plant', litres: 0.5 } })
+    expect(sheet.lines.map(({ shareL }) => shareL)).toEqual(['60', '40'])
+  })
+
+  it('says which line lacks the count it is sized by', () => {
+    const sheet = recordSheet(buildInput({ lines: beds([{ bed: '4' }, {}]), components: [component({ kind: 'perEach', value: '2', unit: 'L', each: 'bed' })] }))
+    expect(sheet.findings).toEqual([{ code: 'sheet.count_needed', params: { each: 'bed' }, path: 'lines.1.counts' }])
+    expect(sheet.components[0]?.amount).toBeNull()
+  })
+
+  it('adds a rate for each and an amount in all to the mix', () => {
+    const sheet = recordSheet(buildInput({
+      lines: beds([{ bed: '4' }]), water: { sizedFrom: 'water', value: '50', unit: 'L' },
+      components: [component({ kind: 'perEach', value: '250', unit: 'mL', each: 'bed' }), component({ kind: 'total', value: '2', unit: 'L' })],
+    }))
+    expect(sheet).toMatchObject({ totalL: 53, waterL: 50 })
+    expect(sheet.components.map(({ amount }) => amount)).toEqual([{ value: '1000', unit: 'mL' }, { value: '2', unit: 'L' }])
+  })
+})
+
+describe('recordSheet read the other way round', () => {
+  it('takes 1 part in N parts of the mix: 100 L at 1 in 20 is 5 L and 95 L of water', () => {
+    const sheet = recordSheet(buildInput({ lines: [{ areaM2: 10_000 }], water: { sizedFrom: 'sprayRate', value: '100', unit: 'L/ha' }, components: [component({ kind: 'ratio', parts: '20', reading: 'in' })] }))
+    expect(sheet).toMatchObject({ totalL: 100, waterL: 95 })
+    expect(sheet.components[0]?.amount).toEqual({ value: '5', unit: 'L' })
+  })
+
+  it('sizes the mix by the scarcest jar: 3 L at 1 to 30 is 90 L of water', () => {
+    const sheet = recordSheet(buildInput({ water: { sizedFrom: 'jar', component: 0, value: '3', unit: 'L' }, components: [component({ kind: 'ratio', parts: '30' })] }))
+    expect(sheet).toMatchObject({ waterL: 90, totalL: 93 })
+  })
+
+  it('says that a jar measured by area sizes no water', () => {
+    const sheet = recordSheet(buildInput({ water: { sizedFrom: 'jar', component: 0, value: '3', unit: 'L' }, components: [component({ kind: 'perArea', value: '3', unit: 'L/ha' })] }))
+    expect(sheet).toMatchObject({ waterL: null, totalL: null, findings: [{ code: 'sheet.jar_fixed', path: 'water' }] })
+  })
+
+  it('puts a brew on as it is: no water, no ratio to it', () => {
+    const brew = component({ kind: 'perArea', value: '40', unit: 'L/ha' })
+    expect(recordSheet(buildInput({ lines: [{ areaM2: 5_000 }], water: { sizedFrom: 'none' }, components: [brew] }))).toMatchObject({ waterL: 0, totalL: 20, findings: [] })
+    expect(recordSheet(buildInput({ water: { sizedFrom: 'none' }, components: [component({ kind: 'ratio', parts: '20' })] }))).toMatchObject({
+      totalL: null, findings: [{ code: 'sheet.ratio_needs_water', path: 'components.0' }],
+    })
+  })
+
+  it('spreads a solid dry and shares it by area', () => {
+    const sheet = recordSheet({ lines: [{ areaM2: 7_500 }, { areaM2: 2_500 }], isDry: true, water: null, tankL: '400', components: [component({ kind: 'perArea', value: '800', unit: 'kg/ha' })] })
+    expect(sheet).toMatchObject({ totalL: null, waterL: null, totalKg: 800, kgPerHa: 800, loads: null, findings: [] })
+    expect(sheet.lines.map(({ shareKg }) => shareKg)).toEqual(['600', '200'])
+  })
+
+  it('tells the minutes of a load where the flow is known', () => {
+    const sheet = recordSheet(buildInput({ water: { sizedFrom: 'water', value: '500', unit: 'L' }, components: [], flowLPerMin: '10' }))
+    expect(sheet.loads).toMatchObject({ full: 2, fullMinutes: 20, lastL: 100, lastMinutes: 10 })
   })
 })

@@ -8,16 +8,20 @@ import { convertQuantity } from '../../../shared/units/convertQuantity.ts'
 const RUNS = { seed: 20_260_616, numRuns: 400 }
 const decimal = (min: number, max: number) => fc.integer({ min, max }).map((count) => new Decimal(count).div(1_000).toFixed())
 const basis: fc.Arbitrary<SheetBasis> = fc.oneof(
-  decimal(5_000, 2_000_000).map((parts) => ({ kind: 'ratio' as const, parts })),
+  fc.record({ kind: fc.constant('ratio' as const), parts: decimal(7_000, 2_000_000), reading: fc.constantFrom('to' as const, 'in' as const) }),
+  fc.record({ kind: fc.constant('perEach' as const), value: decimal(1, 20), unit: fc.constantFrom('mL', 'flozUS', 'g', 'oz'), each: fc.constantFrom('plant' as const, 'rowM' as const) }),
+  fc.record({ kind: fc.constant('total' as const), value: decimal(1, 2_000), unit: fc.constantFrom('L', 'kg', 'galUS') }),
   fc.record({ kind: fc.constant('perArea' as const), value: decimal(1, 5_000), unit: fc.constantFrom('L/ha', 'mL/ha', 'flozUS/acre', 'ptUS/acre', 'kg/ha', 'lb/acre') }),
   fc.record({ kind: fc.constant('perTank' as const), value: decimal(1, 2_000), unit: fc.constantFrom('L', 'mL', 'flozUS', 'tspUS', 'kg', 'oz') }),
 )
-const water: fc.Arbitrary<NonNullable<SheetInput['water']>> = fc.oneof(
+type SizedByVolume = { sizedFrom: 'water' | 'sprayRate'; value: string; unit: string }
+const water: fc.Arbitrary<SizedByVolume> = fc.oneof(
   fc.record({ sizedFrom: fc.constant('water' as const), value: decimal(10_000, 5_000_000), unit: fc.constantFrom('L', 'galUS', 'galImp') }),
   fc.record({ sizedFrom: fc.constant('sprayRate' as const), value: decimal(200_000, 1_000_000), unit: fc.constantFrom('L/ha', 'galUS/acre') }),
 )
-const sheetInput: fc.Arbitrary<SheetInput & { water: NonNullable<SheetInput['water']> }> = fc.record({
-  lines: fc.array(fc.integer({ min: 100_000, max: 900_000_000 }).map((count) => ({ areaM2: count / 1_000 })), { minLength: 1, maxLength: 8 }),
+const counts = fc.record({ plant: fc.integer({ min: 1, max: 400 }).map(String), rowM: decimal(1_000, 300_000) })
+const sheetInput: fc.Arbitrary<SheetInput & { water: SizedByVolume }> = fc.record({
+  lines: fc.array(fc.integer({ min: 100_000, max: 900_000_000 }).chain((count) => counts.map((counted) => ({ areaM2: count / 1_000, counts: counted }))), { minLength: 1, maxLength: 8 }),
   water,
   tankL: decimal(100_000, 3_000_000),
   components: fc.array(basis.map((one) => ({ basis: one })), { maxLength: 6 }),
@@ -82,8 +86,31 @@ describe('identities of the sheet', () => {
     fc.assert(fc.property(sheetInput, (input) => {
       const to = input.water.sizedFrom === 'water' ? 'flozImp' : 'mL/ha'
       const typed = input.water as { value: string; unit: 'L' }
-      const other = recordSheet({ ...input, water: { ...input.water, value: convertQuantity(typed, to as 'L'), unit: to } })
+      const other = recordSheet({ ...input, water: { sizedFrom: input.water.sizedFrom, value: convertQuantity(typed, to as 'L'), unit: to } })
       expect(off(other.totalL ?? 0, known(input).totalL)).toBeLessThan(1e-13)
+    }), RUNS)
+  })
+
+  it('a mix sized from one jar takes just that jar', () => {
+    fc.assert(fc.property(sheetInput, fc.constantFrom('ratio' as const, 'perTank' as const), (input, kind) => {
+      const component = input.components.findIndex(({ basis }) => basis.kind === kind && !['kg', 'oz'].includes('unit' in basis ? basis.unit : 'L'))
+      fc.pre(component >= 0)
+      const sheet = known(input)
+      const jar = sheet.components[component]?.inL ?? '0'
+      const other = recordSheet({ ...input, water: { sizedFrom: 'jar', component, value: jar, unit: 'L' } })
+      fc.pre(/^\d+(\.\d{1,20})?$/.test(jar))
+      expect(off(other.components[component]?.inL ?? 0, jar)).toBeLessThan(1e-13)
+      expect(off(other.totalL ?? 0, sheet.totalL)).toBeLessThan(1e-12)
+    }), RUNS)
+  })
+
+  it('what is weighed adds up, and so do its shares', () => {
+    fc.assert(fc.property(sheetInput, (input) => {
+      const sheet = known(input)
+      const weighed = sheet.components.filter(({ inKg }) => inKg !== null)
+      fc.pre(weighed.length > 0)
+      expect(off(sum(weighed.map(({ inKg }) => inKg)), sheet.totalKg ?? 0)).toBeLessThan(1e-13)
+      expect(sum(sheet.lines.map(({ shareKg }) => shareKg)).toNumber()).toBe(sheet.totalKg)
     }), RUNS)
   })
 

@@ -12,7 +12,7 @@ function buildLongRecord() {
     materials,
     content: {
       ...base.content,
-      components: materials.map(({ id }) => ({ materialId: id, lotId: null, basis: { kind: 'ratio', parts: '500' } })),
+      components: materials.map(({ id }) => ({ materialId: id, lotId: null, basis: { kind: 'ratio', parts: '500', reading: 'to' }, used: null })),
       notes: paragraph.repeat(70).slice(0, 3990) + ' The end.',
     },
     checks: Array.from({ length: 5 }, () => buildChecks()).flat(),

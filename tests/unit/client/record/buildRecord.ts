@@ -12,22 +12,25 @@ export const buildBlock = (over: Partial<Block> = {}): Block => ({
 export const buildDraft = (over: Partial<RecordDraft> = {}): RecordDraft => ({
   ...emptyRecord(),
   blockId: 'b1',
-  components: [{ key: 'k1', materialId: 'm1', lotId: 'l1', kind: 'ratio', value: '20', unit: 'L' }],
-  water: { sizedFrom: 'water', value: '750', unit: 'L', source: '' },
+  components: [{ key: 'k1', materialId: 'm1', lotId: 'l1', kind: 'ratio', value: '20', unit: 'L', each: 'plant', reading: 'to' }],
+  water: { sizedFrom: 'water', value: '750', unit: 'L', source: '', each: 'plant', component: 0 },
   ...over,
 })
 
 /** A record started on another device. */
 export const buildRecord = (over: Partial<ApplicationRecord> = {}): ApplicationRecord => ({
   id: 'r1', state: 'started', number: null, season: null, version: 0, revision: 3, digest: null, seq: null,
-  method: 'drench', purpose: 'roots', notes: 'wet', sprayerId: 's1', doneById: null,
-  lines: [{ blockId: 'b1', part: { kind: 'whole' }, startedAt: '2026-06-16T13:50:00Z', endedAt: null, amount: null }],
+  method: 'drench', purpose: 'roots', licence: null, notes: 'wet', workedInOn: null, protection: [], sprayerId: 's1', doneById: null,
+  lines: [{ blockId: 'b1', part: { kind: 'whole' }, counts: {}, stage: null, bbch: null, startedAt: '2026-06-16T13:50:00Z', endedAt: null, amount: null }],
   components: [
-    { materialId: 'm1', lotId: 'l1', basis: { kind: 'ratio', parts: '20' } },
-    { materialId: 'm2', lotId: null, basis: { kind: 'perArea', value: '4', unit: 'kg/ha' } },
+    { materialId: 'm1', lotId: 'l1', basis: { kind: 'ratio', parts: '20', reading: 'to' }, used: null },
+    { materialId: 'm2', lotId: null, basis: { kind: 'perArea', value: '4', unit: 'kg/ha' }, used: null },
   ],
   water: { sizedFrom: 'sprayRate', value: '400', unit: 'L/ha', source: null },
   weather: { wind: { value: '1.6', unit: 'ms', kind: 'felt' }, windFrom: 'NW', air: null, humidity: null },
-  computed: { areaM2: 10_000, totalL: 400, waterL: 380, sprayLPerHa: 400, loads: null, components: [] },
+  computed: {
+    areaM2: 10_000, counts: {}, totalL: 400, totalKg: null, waterL: 380, sprayLPerHa: 400, kgPerHa: null, sprayPerEach: null, loads: null, components: [], lines: [], air: null,
+  },
+  reason: null, reviews: [],
   checks: [], acknowledged: [], doneBy: null, enteredBy: null, signedBy: null, signedAt: null, deviceAt: null, receivedAt: '2026-06-16T13:51:00Z', ...over,
 })

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { recordContentSchema } from '../../../../shared/contract/record.ts'
+import { recordContentSchema } from '../../../../shared/contract/recordContent.ts'
 import { recordSheet } from '../../../../shared/mix/recordSheet.ts'
 import { contentOf, sheetInputOf, weatherOf } from '../../../../src/composables/recordContent.ts'
 import type { RecordDraft } from '../../../../src/composables/recordDraft.ts'
@@ -10,7 +10,7 @@ const zone = 'America/Los_Angeles'
 const sheetOf = (draft: RecordDraft) => recordSheet(sheetInputOf(draft, { areaM2: 10_000, tankL: '400' }))
 const contentFor = (draft: RecordDraft, happened = true) => contentOf(draft, { zone, sheet: sheetOf(draft), happened })
 const full = (): RecordDraft => {
-  const draft = buildDraft({ blockId: ID, sprayerId: ID, plain: { purpose: ' aphids ', notes: '' } })
+  const draft = buildDraft({ blockId: ID, sprayerId: ID, plain: { purpose: ' aphids ', licence: '', notes: '' } })
   draft.components = draft.components.map((component) => ({ ...component, materialId: ID, lotId: ID }))
   draft.start = { date: '2026-06-16', time: '06:50', offset: '' }
   draft.end = { date: '2026-06-16', time: '07:36', offset: '' }
@@ -32,10 +32,10 @@ describe('a form as the record it is sent as', () => {
   it('reads numbers as people type them', () => {
     const draft = full()
     draft.water.value = '1 200,5'
-    draft.components[0] = { ...draft.components[0]!, kind: 'perTank', value: '1 1/2', unit: 'qtUS' }
+    draft.components[0] = { ...draft.components[0]!, kind: 'perTank', value: '1 1/2', unit: 'qtUS', each: 'plant', reading: 'to' }
     const content = recordContentSchema.parse(contentFor(draft))
-    expect(content.water?.value).toBe('1200.5')
-    expect(content.components[0]?.basis).toEqual({ kind: 'perTank', value: '1.5', unit: 'qtUS' })
+    expect(content.water).toMatchObject({ value: '1200.5' })
+    expect(content.components[0]?.basis).toEqual({ kind: 'perTank', value: '1.5', unit: 'qtUS', each: 'plant', reading: 'to' })
   })
 
   it('sends the sheet’s own total where the amount was worked out, and what was measured where it was', () => {
@@ -70,7 +70,7 @@ describe('weather', () => {
 
 describe('the sheet of a half-typed form', () => {
   it('never throws and knows no total', () => {
-    const draft = buildDraft({ water: { sizedFrom: 'water', value: '7x', unit: 'L', source: '' } })
+    const draft = buildDraft({ water: { sizedFrom: 'water', value: '7x', unit: 'L', source: '', each: 'plant', component: 0 } })
     expect(recordSheet(sheetInputOf(draft, { areaM2: null, tankL: null })).totalL).toBeNull()
   })
 

@@ -15,9 +15,9 @@ describe('what keeps a record from being started', () => {
   it.each([
     { name: 'no block', draft: emptyRecord(), gap: 'records.ready.needBlock' },
     { name: 'nothing that goes in', draft: buildDraft({ components: [] }), gap: 'records.ready.needMaterial' },
-    { name: 'no water', draft: buildDraft({ water: { sizedFrom: 'water', value: '', unit: 'L', source: '' } }), gap: 'records.ready.needMix' },
-    { name: 'a rate per tank without a tank', draft: buildDraft({ components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'perTank', value: '2', unit: 'L' }] }), gap: 'records.ready.needMix' },
-    { name: 'nothing: a lot may follow', draft: buildDraft({ components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'ratio', value: '20', unit: 'L' }] }), gap: null },
+    { name: 'no water', draft: buildDraft({ water: { sizedFrom: 'water', value: '', unit: 'L', source: '', each: 'plant', component: 0 } }), gap: 'records.ready.needMix' },
+    { name: 'a rate per tank without a tank', draft: buildDraft({ components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'perTank', value: '2', unit: 'L', each: 'plant', reading: 'to' }] }), gap: 'records.ready.needMix' },
+    { name: 'nothing: a lot may follow', draft: buildDraft({ components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'ratio', value: '20', unit: 'L', each: 'plant', reading: 'to' }] }), gap: null },
   ])('$name', ({ draft, gap }) => {
     expect(startGap(factsOf(draft))).toBe(gap)
   })
@@ -49,7 +49,7 @@ describe('what keeps a record from being signed', () => {
     { name: 'an end before the start', over: { end: { date: '2026-06-16', time: '06:00', offset: '' } }, gap: { 'lines.0.endedAt': 'records.sign.endBeforeStart' } },
     { name: 'a time the clock skipped', over: { start: { date: '2026-03-08', time: '02:30', offset: '' } }, gap: { 'lines.0.startedAt': 'records.gap.time' } },
     { name: 'an amount measured and not written', over: { amount: { value: '', unit: 'L', known: 'measured' as const } }, gap: { 'lines.0.amount': 'records.sign.needAmount' } },
-    { name: 'no lot', over: { components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'ratio' as const, value: '20', unit: 'L' }] }, gap: { 'components.0.lotId': 'records.sign.needLot' } },
+    { name: 'no lot', over: { components: [{ key: 'k', materialId: 'm1', lotId: '', kind: 'ratio' as const, value: '20', unit: 'L', each: 'plant' as const, reading: 'to' as const }] }, gap: { 'components.0.lotId': 'records.sign.needLot' } },
   ])('$name', ({ over, gap }) => {
     expect(signGaps({ ...factsOf(happened(over)), hasStops: false })).toEqual(gap)
   })
@@ -57,8 +57,8 @@ describe('what keeps a record from being signed', () => {
 
 describe('what is no number', () => {
   it('is said of its field as one types, and an empty field is none of it', () => {
-    const draft = buildDraft({ water: { sizedFrom: 'water', value: '7x', unit: 'L', source: '' } })
-    draft.components.push({ key: 'k2', materialId: '', lotId: '', kind: 'ratio', value: '1:20', unit: 'L' })
+    const draft = buildDraft({ water: { sizedFrom: 'water', value: '7x', unit: 'L', source: '', each: 'plant', component: 0 } })
+    draft.components.push({ key: 'k2', materialId: '', lotId: '', kind: 'ratio', value: '1:20', unit: 'L', each: 'plant', reading: 'to' })
     draft.weather.air.value = '-3'
     expect(unreadable(draft)).toEqual({ water: 'records.gap.number', 'components.1.basis': 'records.gap.number' })
     expect(unreadable(emptyRecord())).toEqual({})

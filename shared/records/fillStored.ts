@@ -1,0 +1,29 @@
+import type { Computed } from '../contract/record.ts'
+import type { RecordContent } from '../contract/recordContent.ts'
+
+const BLANK_CONTENT = { components: [], water: null, sprayerId: null, workedInOn: null, weather: null, protection: [], purpose: null, licence: null, notes: null, doneById: null }
+const BLANK_LINE = { part: { kind: 'whole' as const }, counts: {}, stage: null, bbch: null }
+const BLANK_COMPUTED = { counts: {}, totalKg: null, kgPerHa: null, sprayPerEach: null, lines: [], air: null }
+
+/** A record's content as it was stored, with the fields that were not asked for then. */
+export function fillContent(stored: RecordContent): RecordContent {
+  return {
+    ...BLANK_CONTENT,
+    ...stored,
+    lines: stored.lines.map((line) => ({ ...BLANK_LINE, ...line })),
+    components: stored.components.map((component) => ({
+      ...component,
+      used: (component.used as typeof component.used | undefined) ?? null,
+      basis: component.basis.kind === 'ratio' ? { ...component.basis, reading: (component.basis.reading as 'to' | 'in' | undefined) ?? 'to' } : component.basis,
+    })),
+  }
+}
+
+/** Figures as they were stored, likewise. */
+export function fillComputed(stored: Computed): Computed {
+  return {
+    ...BLANK_COMPUTED,
+    ...stored,
+    loads: stored.loads && { ...{ fullMinutes: null, lastMinutes: null }, ...stored.loads },
+  }
+}
