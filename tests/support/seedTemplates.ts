@@ -70,18 +70,22 @@ function buildTemplate({ blocks, materials, lots, people }: SeedGround, zone: st
   const isFoliar = turn % 5 < 3
   const content: RecordContent = {
     method: isFoliar ? 'foliar' : 'drench',
-    lines: onBlocks.map(({ id }) => ({ blockId: id, part: { kind: 'whole' }, startedAt: START, endedAt: END, amount: null })),
+    lines: onBlocks.map(({ id }) => ({ blockId: id, part: { kind: 'whole' }, counts: {}, stage: null, bbch: null, startedAt: START, endedAt: END, amount: null })),
     components: mixed.map(({ id, measuredIn }) => ({
       materialId: id,
       lotId: pick(lots.filter(({ materialId }) => materialId === id), turn).id,
-      basis: measuredIn === 'mass' ? { kind: 'perArea', value: '120', unit: 'kg/ha' } : { kind: 'ratio', parts: String(20 + (turn % 9) * 10) },
+      basis: measuredIn === 'mass' ? { kind: 'perArea', value: '120', unit: 'kg/ha' } : { kind: 'ratio', parts: String(20 + (turn % 9) * 10), reading: 'to' },
+      used: null,
     })),
     water: isFoliar
       ? { sizedFrom: 'sprayRate', value: String(300 + (turn % 7) * 50), unit: 'L/ha', source: 'Rain tank 2' }
       : { sizedFrom: 'water', value: String(400 + (turn % 11) * 130), unit: 'L', source: null },
     sprayerId: null,
+    workedInOn: null,
+    protection: [],
     weather: { wind: { value: '1.9', unit: 'ms', kind: 'readHere' }, windFrom: 'NW', air: { value: '14.5', unit: 'degC', kind: 'readHere' }, humidity: null },
     purpose: pick(PURPOSES, turn),
+    licence: null,
     notes: pick(NOTES, turn + 3),
     doneById: person.id,
   }
