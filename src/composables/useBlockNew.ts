@@ -69,6 +69,7 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
   }
 
   async function save(): ReturnType<BlockNew['save']> {
+    if (saving.saving.value) return undefined
     const geometry = outline.geometry.value
     const fault = faultOf()
     if (fault !== null) saving.errors.value = { geometry: fault }

@@ -1,6 +1,10 @@
 import { createRouter, createWebHistory } from 'vue-router'
+import { overlaysSettled, watchOverlays } from '../plugins/overlayHistory.ts'
 import { guard } from './guard.ts'
 import { routes } from './routes.ts'
+
+// Before the history is made: it listens first to what is taken back.
+watchOverlays()
 
 /** The places of the client and their addresses. */
 export const router = createRouter({
@@ -9,4 +13,5 @@ export const router = createRouter({
   scrollBehavior: (_to, _from, saved) => saved ?? { top: 0 },
 })
 
+router.beforeEach(overlaysSettled)
 router.beforeEach(guard)

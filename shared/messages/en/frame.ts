@@ -69,6 +69,7 @@ export const frame = {
     needsYou: 'Needs you',
     since: 'kept {at}',
     drop: 'Drop it',
+    keepIt: 'Keep it',
     dropSure: 'Drop for good',
     dropWarning: 'What was written here is then gone.',
     sendNow: 'Send now',

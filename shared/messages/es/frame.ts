@@ -69,6 +69,7 @@ export const frame = {
     needsYou: 'Le espera',
     since: 'guardado {at}',
     drop: 'Descartar',
+    keepIt: 'Conservar',
     dropSure: 'Descartar del todo',
     dropWarning: 'Lo que se escribió aquí se pierde.',
     sendNow: 'Enviar ahora',
