@@ -1,6 +1,6 @@
 import { divIcon, layerGroup, marker, point, type LayerGroup, type Map as LeafletMap } from 'leaflet'
 import { freeSpot } from './freeSpot.ts'
-import { labelSpot, type LabelForm } from './labelSpot.ts'
+import { labelSpot, type CodeWidth, type LabelForm } from './labelSpot.ts'
 import { pixelRings } from './leafletGeometry.ts'
 import { boxOf, type PixelBox } from './pixelRing.ts'
 import { thinRing } from './thinRing.ts'
@@ -32,6 +32,8 @@ const SIZES: Record<LabelForm, readonly [number, number]> = {
 }
 /** Room in pixels that each small letter of a code needs. */
 const LETTER = 8
+/** The same in the letters of a label with room in its block. */
+const LARGE_LETTER = 9.5
 /** No label is set farther from its block, so blocks beyond are not looked at. */
 const REACH = 40
 /** Below this width in pixels a farm is a dot and labels would lie on each other. */
@@ -57,14 +59,15 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
 function addLabel({ map, group, middles, taken, shapes }: Labels, block: MapBlock, isChosen: boolean): void {
   const largest = largestShape(shapes.filter(({ id }) => id === block.id))
   if (largest === null) return
+  const code = codeWidth(block.code)
   const near = shapes.filter(({ id, box }) => id !== block.id && isWithin(box, largest.box, REACH))
   const beside = near.filter(({ box }) => isWithin(box, largest.box, 0)).flatMap(({ rings }) => rings)
-  const { form, at: middle, orAt } = labelSpot(largest.rings, beside, smallWidth(block.code))
+  const { form, at: middle, orAt } = labelSpot(largest.rings, beside, code)
   middles.set(block.id, middle)
   const isOutside = form === 'outside'
   if (isOutside && widthOf(largest) < LEAST_BOX && !isChosen) return
   const [width, height] = SIZES[form]
-  const size = [isOutside || form === 'small' ? smallWidth(block.code) : width, height] as const
+  const size = [isOutside || form === 'small' ? code.small : Math.max(width, code.large), height] as const
   const blocks = isOutside ? [...near.map(({ rings }) => rings), largest.rings] : []
   const find = (labels: PixelBox[]): Pixel | null =>
     freeSpot({ labels, blocks }, middle, size, isOutside) ?? (orAt === null ? null : freeSpot({ labels, blocks }, orAt, size, isOutside))
@@ -95,8 +98,8 @@ function labelElement(block: MapBlock, form: LabelForm): HTMLElement {
   return label
 }
 
-function smallWidth(code: string): number {
-  return code.length * LETTER + 2
+function codeWidth({ length }: string): CodeWidth {
+  return { large: length * LARGE_LETTER, small: length * LETTER + 2 }
 }
 
 function shapeOf(id: string, rings: readonly (readonly Pixel[])[]): Shape {

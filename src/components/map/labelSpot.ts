@@ -14,12 +14,15 @@ export interface LabelSpot {
   orAt: Pixel | null
 }
 
-/** Width and height in pixels that each form needs, best form first. */
-const FORMS: readonly (readonly [LabelForm, number, number])[] = [
-  ['full', 58, 40],
-  ['narrow', 27, 36],
-  ['slip', 50, 20],
-  ['code', 22, 18],
+/** Width in pixels of a code, in the letters of a label inside its block and in the small ones. */
+export interface CodeWidth { large: number; small: number }
+
+/** Width and height in pixels that each form needs at least, best form first, and what it needs beside the code. */
+const FORMS: readonly (readonly [form: LabelForm, width: number, height: number, beside: number])[] = [
+  ['full', 58, 40, 3],
+  ['narrow', 27, 36, 3],
+  ['slip', 50, 20, 31],
+  ['code', 22, 18, 3],
 ]
 const GRID = 17
 /** Height in pixels of a code in small letters. */
@@ -30,14 +33,15 @@ const OUTSIDE_GAP = 9
  * Where in a block its label stands, and in which form.
  * @param rings the rings of one polygon in pixels, outer first; holes are kept clear.
  * @param others rings of other blocks in pixels; a label in its block keeps clear of their edges too.
- * @param smallWidth width in pixels of the code in small letters.
+ * @param code width in pixels of the code in large and in small letters.
  * @returns the roomiest point for the first form that fits, or points over the block's top and under its foot where none does.
  */
-export function labelSpot(rings: Rings, others: Rings = [], smallWidth = 18): LabelSpot {
+export function labelSpot(rings: Rings, others: Rings = [], code: CodeWidth = { large: 19, small: 18 }): LabelSpot {
   const thinned = rings.map(thinRing)
   const keepClear = [...thinned, ...others]
   const spots = roomySpots(thinned)
-  for (const [form, width, height] of [...FORMS, ['small', smallWidth, SMALL_HEIGHT] as const]) {
+  for (const [form, least, height, beside] of [...FORMS, ['small', code.small, SMALL_HEIGHT, 0] as const]) {
+    const width = form === 'small' ? least : Math.max(least, code.large + beside)
     const at = spots.find((spot) => rectangleFits(keepClear, spot, width / 2, height / 2))
     if (at !== undefined) return { form, at, orAt: null }
   }

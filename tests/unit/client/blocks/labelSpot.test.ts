@@ -18,6 +18,12 @@ describe('labelSpot', () => {
     expect(labelSpot([box(0, 0, width, height)]).form).toBe(form)
   })
 
+  it.each([
+    { form: 'full', width: 76 }, { form: 'small', width: 62 }, { form: 'outside', width: 54 },
+  ])('gives a code of seven letters in a block of $width the form $form', ({ form, width }) => {
+    expect(labelSpot([box(0, 0, width, 60)], [], { large: 66, small: 58 }).form).toBe(form)
+  })
+
   it('stands near the middle of a plain block', () => {
     const { at } = labelSpot([box(0, 0, 200, 100)])
     expect(Math.abs(at[0] - 100)).toBeLessThan(15)
