@@ -7,6 +7,7 @@ import { i18n } from './plugins/i18n.ts'
 import { queryClient } from './plugins/queryClient.ts'
 import { readViewsWhenIdle } from './router/readViews.ts'
 import { router } from './router/router.ts'
+import { useFileQueue } from './stores/fileQueue.ts'
 import { useOutbox } from './stores/outbox.ts'
 import { usePreferences } from './stores/preferences.ts'
 import { useReentry } from './stores/reentry.ts'
@@ -20,6 +21,7 @@ app.use(createPinia()).use(i18n).use(VueQueryPlugin, { queryClient })
 
 const words = usePreferences().start()
 useOutbox().start()
+useFileQueue().start()
 // A session that ends while nobody is signed in here is no question to anyone.
 onSessionEnd(() => (useSession().user === null ? Promise.resolve(false) : useReentry().ask()))
 

@@ -8,9 +8,10 @@ import { createRecord } from '../services/records/createRecord.ts'
 import { sealRecord } from '../services/records/sealRecord.ts'
 import type { Services } from '../services/services.ts'
 import { DEMO_ZONE } from './demoZone.ts'
+import { seedNeighbourPaper } from './seedFiles.ts'
 import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from './buildThings.ts'
 
-/** A second farm that nobody of the first may see: a block, a material, a lot and a signed record. @returns its id. */
+/** A second farm that nobody of the first may see: a block, a material, a lot and a signed record with a paper. @returns its id. */
 export async function seedNeighbour(services: Services, accountId: string): Promise<string> {
   const { farm } = await createFarm(services, accountId, { id: uuidV7(), name: 'Skerrow Bottom', zone: DEMO_ZONE, seasonStart: '03-01' })
   const actor = (await services.database.listAccess(accountId, services.clock.now())).find(({ farmId }) => farmId === farm.id)
@@ -23,6 +24,7 @@ export async function seedNeighbour(services: Services, accountId: string): Prom
   const { record } = await createRecord(services, actor, buildRecord({
     blockId: block.id, materialId: material.id, lotId: lot.id, startedAt: startedAt.toISOString(), endedAt: endedAt.toISOString(), purpose: 'Soil life',
   }))
+  await seedNeighbourPaper(services, actor, record.id)
   await services.database.inFarm(actor, (manager) => sealRecord(services, manager, actor, record.id, { acknowledged: [] }))
   return farm.id
 }

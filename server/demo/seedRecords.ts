@@ -9,6 +9,7 @@ import { sealRecord } from '../services/records/sealRecord.ts'
 import type { Services } from '../services/services.ts'
 import { DEMO_ZONE } from './demoZone.ts'
 import { DEMO_WORK, type DemoWork } from './demoWork.ts'
+import { seedBegunPhoto, seedLatePhoto, seedStoppedFiles } from './seedFiles.ts'
 import type { DemoLots } from './seedInputs.ts'
 
 const DAY_MS = 86_400_000
@@ -91,10 +92,14 @@ async function recordTask(services: Services, ground: Ground, task: Task, sign: 
     deviceAt: enteredAt.toISOString(),
   })
   const { record } = await createRecord(then, actor, input)
-  if (!sign) return
+  if (!sign) return seedBegunPhoto(then, actor, record.id)
   const acknowledged = [{ code: 'record.stop', reason: 'The soap was measured twice into one load. Mirel Achter told the same day; the leaves were rinsed.' }]
   const stopped = record.checks.some(({ verdict }) => verdict === 'stop')
+  if (stopped) await seedStoppedFiles(then, actor, record.id)
   await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, { acknowledged: stopped ? acknowledged : [] }))
+  if (!stopped) return
+  const dayLater = fixedClock(new Date(Math.min(enteredAt.getTime() + DAY_MS, services.clock.now().getTime())).toISOString())
+  await seedLatePhoto({ ...services, clock: dayLater }, actor, record.id)
 }
 
 /** The lot in use on a day: the newest that had been received. */

@@ -2,6 +2,7 @@ import { blocks } from './en/blocks.ts'
 import { checks } from './en/checks.ts'
 import { common } from './en/common.ts'
 import { farm } from './en/farm.ts'
+import { files } from './en/files.ts'
 import { frame } from './en/frame.ts'
 import { inputs } from './en/inputs.ts'
 import { pdf } from './en/pdf.ts'
@@ -14,7 +15,7 @@ import { units } from './en/units.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, frame, inputs, problems, records, register, session, today, units,
+  blocks, checks, common, farm, files, frame, inputs, problems, records, register, session, today, units,
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */

@@ -3,6 +3,7 @@ import { blocks } from './es/blocks.ts'
 import { checks } from './es/checks.ts'
 import { common } from './es/common.ts'
 import { farm } from './es/farm.ts'
+import { files } from './es/files.ts'
 import { frame } from './es/frame.ts'
 import { inputs } from './es/inputs.ts'
 import { pdf } from './es/pdf.ts'
@@ -16,7 +17,7 @@ import { units } from './es/units.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, frame, inputs, problems, records, register, session, today, units,
+  blocks, checks, common, farm, files, frame, inputs, problems, records, register, session, today, units,
 }
 
 /** Every word a person reads, in Spanish. */

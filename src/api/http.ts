@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 import { problemSchema } from '../../shared/contract/problem.ts'
 import { ApiError, NetworkError } from './errors.ts'
+import { sendForm } from './sendForm.ts'
 
 /** An answer that takes longer is no answer: in the field a half signal is worse than none. */
 const PATIENCE_MS = 30_000
@@ -26,15 +27,21 @@ export const http = {
     request('GET', `${path}${queryText(query)}`, undefined, schema),
   post: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('POST', path, body, schema),
   put: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('PUT', path, body, schema),
+  /** Sends a form with a file in it; `onProgress` hears which share of it has gone. */
+  upload: <Schema extends z.ZodType>(path: string, form: FormData, schema: Schema, onProgress: (share: number) => void) =>
+    answered(path, schema, () => sendForm(path, form, onProgress)),
   del: <Schema extends z.ZodType>(path: string, schema: Schema) => request('DELETE', path, undefined, schema),
 }
 
-async function request<Schema extends z.ZodType>(
-  method: Method, path: string, body: unknown, schema: Schema,
-): Promise<z.output<Schema>> {
-  let response = await send(method, path, body)
+function request<Schema extends z.ZodType>(method: Method, path: string, body: unknown, schema: Schema): Promise<z.output<Schema>> {
+  return answered(path, schema, () => send(method, path, body))
+}
+
+/** The answer of what is sent; sent once more where the session had ended and the person signed in again. */
+async function answered<Schema extends z.ZodType>(path: string, schema: Schema, sendIt: () => Promise<Response>): Promise<z.output<Schema>> {
+  let response = await sendIt()
   const sessionEnded = response.status === 401 && !path.startsWith('/session')
-  if (sessionEnded && signInAgain !== null && (await signInAgain())) response = await send(method, path, body)
+  if (sessionEnded && signInAgain !== null && (await signInAgain())) response = await sendIt()
   if (!response.ok) throw await refusalOf(response)
   const answer: unknown = response.status === 204 ? undefined : await jsonOf(response)
   const read = schema.safeParse(answer)

@@ -3,6 +3,7 @@ import { useI18n } from 'vue-i18n'
 import type { FrameContext } from '../components/page/frameContext.ts'
 import type { SyncState } from '../components/marks/syncState.ts'
 import { civilTimeIn } from '../../shared/time/civilDate.ts'
+import { useFileQueue } from '../stores/fileQueue.ts'
 import { useOutbox } from '../stores/outbox.ts'
 import { useSession } from '../stores/session.ts'
 import { useFarm } from './useFarm.ts'
@@ -11,13 +12,14 @@ import { useFarm } from './useFarm.ts'
 export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>; moreOpen: Ref<boolean> } {
   const session = useSession()
   const outbox = useOutbox()
+  const files = useFileQueue()
   const farm = useFarm(() => session.farmId)
   const { t } = useI18n()
   const keptOpen = ref(false)
   const moreOpen = ref(false)
 
   const sync = computed<SyncState>(() => {
-    const [kept, waiting, sending] = [outbox.kept.length, outbox.needsYou.length, outbox.sendingCount]
+    const [kept, waiting, sending] = [outbox.kept.length + files.kept.length, outbox.needsYou.length + files.needsYou.length, outbox.sendingCount + files.sendingCount]
     if (waiting > 0) return { kind: 'needsYou', count: waiting }
     if (sending > 0) return { kind: 'sending', count: sending, of: Math.max(kept, sending) }
     if (kept > 0 || !outbox.online) return { kind: 'kept', count: kept, online: outbox.online }

@@ -4,6 +4,7 @@ import { workingLines } from '../../shared/checks/workingLines.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { now } from '../plugins/clock.ts'
+import { useFileQueue } from '../stores/fileQueue.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { contentOf } from './recordContent.ts'
 import { momentAt } from './recordDraft.ts'
@@ -40,8 +41,9 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
   const signed = ref<ApplicationRecord | null>(null)
   const tried = ref(false)
 
+  const files = useFileQueue()
   const send = useRecordSend({
-    id: options.id, draft, farmId: () => stock.value.farmId,
+    id: options.id, draft, farmId: () => stock.value.farmId, sendFiles: () => files.sendOf(options.id),
     content: () => contentOf(draft.value, { zone: zone.value, sheet: sheet.value, happened: draft.value.step === 2 }),
   })
   const facts = (): { draft: typeof draft.value; sheet: typeof sheet.value; zone: string } => ({ draft: draft.value, sheet: sheet.value, zone: zone.value })

@@ -5,6 +5,7 @@ import { type RecordContentInput } from '../../shared/contract/recordContent.ts'
 import { ApiError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
 import { now } from '../plugins/clock.ts'
+import { FilesLeft } from './filesLeft.ts'
 import type { RecordDraft } from './recordDraft.ts'
 import { useSubmit } from './useSubmit.ts'
 
@@ -13,6 +14,8 @@ interface RecordSendOptions {
   farmId: () => string
   draft: Ref<RecordDraft>
   content: () => RecordContentInput
+  /** Sends the photos and papers of the record; answers how many are left. */
+  sendFiles?: () => Promise<number>
 }
 
 /** The revision that a refused write met at the server; null where it was refused for something else. */
@@ -25,7 +28,7 @@ async function revisionMet(error: unknown, read: () => Promise<ApplicationRecord
 }
 
 /** Sends a record and signs it; the same record however often it is pressed, since its id was made with the form. */
-export function useRecordSend({ id, farmId, draft, content }: RecordSendOptions): {
+export function useRecordSend({ id, farmId, draft, content, sendFiles = () => Promise.resolve(0) }: RecordSendOptions): {
   save: () => Promise<'sent' | 'kept'>
   sign: (password: string, acknowledged: Acknowledged) => Promise<ApplicationRecord | 'kept'>
 } {
@@ -61,8 +64,18 @@ export function useRecordSend({ id, farmId, draft, content }: RecordSendOptions)
   /** Writes it down as it happened, then signs it; `kept` where there was no signal for the first. */
   async function sign(password: string, acknowledged: Acknowledged): Promise<ApplicationRecord | 'kept'> {
     if ((await save()) === 'kept') return 'kept'
+    await sendFilesFirst()
     const { answer } = await signOnly(password, acknowledged)
     return answer
+  }
+
+  let toldOf = 0
+  /** What was added before the signature belongs into it; who was told and signs again signs without. */
+  async function sendFilesFirst(): Promise<void> {
+    const left = await sendFiles()
+    if (left === 0 || left === toldOf) return
+    toldOf = left
+    throw new FilesLeft(left)
   }
 
   async function signOnly(password: string, acknowledged: Acknowledged): Promise<{ answer: ApplicationRecord }> {

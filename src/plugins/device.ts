@@ -1,6 +1,7 @@
 import Dexie, { type Table } from 'dexie'
 import type { Draft } from '../stores/draftTypes.ts'
 import type { KeptCommand } from '../stores/keptCommand.ts'
+import type { KeptFile } from '../stores/keptFile.ts'
 
 /** The last answer of one read, so that a form opens without signal. */
 interface KeptRead {
@@ -11,11 +12,12 @@ interface KeptRead {
   readAt: string
 }
 
-/** What the device keeps: drafts, commands not yet sent, and the last reads. */
+/** What the device keeps: drafts, commands and files not yet sent, and the last reads. */
 class DeviceDatabase extends Dexie {
   drafts!: Table<Draft, string>
   outbox!: Table<KeptCommand, string>
   reads!: Table<KeptRead, string>
+  files!: Table<KeptFile, string>
 
   constructor() {
     super('drenchleaf')
@@ -24,6 +26,7 @@ class DeviceDatabase extends Dexie {
       outbox: 'key, accountId, keptAt',
       reads: 'key, accountId',
     })
+    this.version(2).stores({ files: 'id, recordId, accountId, keptAt' })
   }
 }
 

@@ -19,6 +19,8 @@ export const useOutbox = defineStore('outbox', () => {
   const session = useSession()
   const items = shallowRef<KeptCommand[]>([])
   const lastSentAt = ref<string | null>(null)
+  /** What was answered last: others may wait for it. */
+  const lastSent = shallowRef<Pick<Command, 'kind' | 'id'> | null>(null)
   const online = ref(navigator.onLine)
   const sendingCount = ref(0)
   let flushing: Promise<void> | null = null
@@ -84,6 +86,7 @@ export const useOutbox = defineStore('outbox', () => {
     try {
       const answer = await sendCommand(command)
       lastSentAt.value = now().toISOString()
+      lastSent.value = { kind: command.kind, id: command.id }
       refreshAfter(command)
       return answer
     } finally {
@@ -137,7 +140,7 @@ export const useOutbox = defineStore('outbox', () => {
     void refresh().then(attempt)
   }
 
-  return { items: mine, kept, needsYou, sendingCount, lastSentAt, online, submit, flush, discard, retry, start }
+  return { items: mine, kept, needsYou, sendingCount, lastSentAt, lastSent, online, submit, flush, discard, retry, start }
 })
 
 /** A second write of the same thing replaces the first that was not sent; two counts of a lot are two. */
@@ -146,7 +149,7 @@ function keyOf(command: Command): string {
 }
 
 /** No signal, no session, too many or a server in trouble: nothing was decided, so it stays. */
-function mustWait(error: unknown): boolean {
+export function mustWait(error: unknown): boolean {
   if (error instanceof NetworkError) return true
   return error instanceof ApiError && (error.problem.status >= 500 || [401, 429].includes(error.problem.status))
 }

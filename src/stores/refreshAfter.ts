@@ -11,7 +11,7 @@ const STALE: Record<CommandKind, string[]> = {
   'sprayer.create': ['sprayers'],
   'record.create': ['records'],
   'record.update': ['records'],
-  'record.sign': ['records', 'lots'],
+  'record.sign': ['records', 'files', 'lots'],
 }
 
 /** Reads again, in the background, what a command has changed. */

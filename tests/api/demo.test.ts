@@ -29,5 +29,12 @@ describe.each(HOURS)('the demo farm made at %s', (instant) => {
     const neighbours = await house.services.database.inFarm({ farmId: made.neighbourFarmId, seasons: null }, (manager) =>
       manager.query("SELECT count(*) FROM application_records WHERE state = 'signed'"))
     expect(neighbours).toEqual([{ count: '1' }])
-  })
+    const files = await house.services.database.inFarm({ farmId: made.farmId, seasons: null }, (manager) =>
+      manager.query('SELECT kind, signed_version FROM attachments ORDER BY uploaded_at, id'))
+    expect(files).toEqual([
+      { kind: 'photo', signed_version: 1 }, { kind: 'paper', signed_version: 1 }, { kind: 'photo', signed_version: null }, { kind: 'photo', signed_version: null },
+    ])
+    const theirs = await house.services.database.inFarm({ farmId: made.neighbourFarmId, seasons: null }, (manager) => manager.query('SELECT label FROM attachments'))
+    expect(theirs).toEqual([{ label: 'Delivery note.pdf' }])
+  }, 120_000)
 })
