@@ -24,7 +24,7 @@ export class RegisterEntry {
   @Column({ name: 'area_sort', type: 'double precision' }) areaSort!: number
   @Column({ name: 'area_ha', type: 'numeric' }) areaHa!: string
   @Column({ name: 'total_l', type: 'numeric', nullable: true }) totalL!: string | null
-  /** Kilograms of what was measured by mass. */
+  /** Kilograms of all components by mass; 0 where there are none. */
   @Column({ name: 'total_kg', type: 'numeric' }) totalKg!: string
   @Column({ type: 'boolean' }) late!: boolean
 }

@@ -1,5 +1,5 @@
 import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
-import type { RegisterFilter } from '../../shared/contract/register.ts'
+import type { SavedQuery } from '../../shared/contract/savedFilter.ts'
 
 /** A filter of the register that an account keeps under a name. */
 @Entity({ name: 'saved_filters' })
@@ -11,7 +11,7 @@ export class SavedFilter {
   @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'saved_filters_pkey' }) id!: string
   @Column({ name: 'account_id', type: 'uuid' }) accountId!: string
   @Column({ type: 'text' }) name!: string
-  @Column({ type: 'jsonb' }) query!: RegisterFilter
+  @Column({ type: 'jsonb' }) query!: SavedQuery
   /** Digest of the command that made it; tells a repeat from other content under the same id. */
   @Column({ name: 'creation_digest', type: 'text' }) creationDigest!: string
   @Column({ name: 'created_at', type: 'timestamptz' }) createdAt!: Date

@@ -4,9 +4,11 @@ import '../../shared/messages/everyLanguage.ts'
 import { gatherChunks } from './parts/gatherChunks.ts'
 import { recordReport } from './recordReport.ts'
 import type { RecordReportData } from './recordReportData.ts'
+import { registerReport } from './registerReport.ts'
+import type { RegisterReportData } from './registerReportData.ts'
 
 /** Everything the server can print; a new document is a new kind. */
-export interface ReportJob { kind: 'record'; data: RecordReportData }
+export type ReportJob = { kind: 'record'; data: RecordReportData } | { kind: 'register'; data: RegisterReportData }
 
 /**
  * Draws a document into a stream; resolves when the stream has taken all of it.
@@ -16,7 +18,8 @@ export async function renderReport(job: ReportJob, stream: Writable): Promise<vo
   const chunks = gatherChunks()
   const taken = pipeline(chunks, stream)
   try {
-    recordReport(job.data, chunks)
+    if (job.kind === 'record') recordReport(job.data, chunks)
+    else registerReport(job.data, chunks)
   } catch (error) {
     chunks.destroy(error instanceof Error ? error : new Error(String(error)))
   }

@@ -13,6 +13,9 @@ export interface ReportProcess {
   close(): Promise<void>
 }
 
+/** A volume of a register has up to 150 pages, on a machine that has other work. */
+const PATIENCE: Record<ReportJob['kind'], number> = { record: 1, register: 6 }
+
 interface Options { workers?: number; limitMs?: number; start?: () => ChildProcess }
 interface Order { id: number; job: ReportJob; stream: Readable }
 interface Slot { child: ChildProcess | null; order: Order | null; timer: NodeJS.Timeout | null }
@@ -20,7 +23,7 @@ interface Slot { child: ChildProcess | null; order: Order | null; timer: NodeJS.
 /**
  * A pool of drawing processes, each with one job at a time, so that one that dies or hangs takes no other job with it. The first is
  * started at once and kept warm, the second when both are needed, and a lost one with the next job; jobs beyond that wait in turn.
- * @param limitMs milliseconds a job may take once it is being drawn.
+ * @param limitMs milliseconds a record may take once it is being drawn; a register may take six times as long.
  */
 export function createReportProcess({ workers = 2, limitMs = 30_000, start = startWorker }: Options = {}): ReportProcess {
   return new ReportPool({ workers, limitMs, start })
@@ -103,7 +106,11 @@ class ReportPool implements ReportProcess {
 
   private startTimer(slot: Slot): void {
     if (slot.timer) clearTimeout(slot.timer)
-    slot.timer = slot.order && setTimeout(() => this.giveUp(slot), this.options.limitMs)
+    slot.timer = slot.order && setTimeout(() => this.giveUp(slot), this.limitOf(slot.order))
+  }
+
+  private limitOf(order: Order | null): number {
+    return this.options.limitMs * (order === null ? 1 : PATIENCE[order.job.kind])
   }
 
   private lose(slot: Slot, child: ChildProcess, why: string): void {
@@ -114,9 +121,9 @@ class ReportPool implements ReportProcess {
   }
 
   private giveUp(slot: Slot): void {
-    const { child } = slot
+    const { child, order } = slot
     slot.child = null
-    release(slot)?.stream.destroy(new Error(`The document took longer than ${this.options.limitMs / 1000} s.`))
+    release(slot)?.stream.destroy(new Error(`The document took longer than ${this.limitOf(order) / 1000} s.`))
     child?.kill('SIGKILL')
     this.next()
   }

@@ -1,13 +1,11 @@
 import { z } from 'zod'
-import { farmParamsSchema, pageOf, thingParamsSchema } from '../../shared/contract/common.ts'
-import { recordSchema, registerRowSchema } from '../../shared/contract/record.ts'
+import { farmParamsSchema, thingParamsSchema } from '../../shared/contract/common.ts'
+import { recordSchema } from '../../shared/contract/record.ts'
 import { createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/recordChanges.ts'
-import { registerQuerySchema } from '../../shared/contract/register.ts'
 import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
 import { collectRecordReport } from '../services/records/collectRecordReport.ts'
 import { createRecord } from '../services/records/createRecord.ts'
 import { getRecord, listRecordVersions } from '../services/records/readRecords.ts'
-import { listRegister } from '../services/register/listRegister.ts'
 import { signRecord } from '../services/records/signRecord.ts'
 import { updateRecord } from '../services/records/updateRecord.ts'
 import { defineRoute } from './defineRoute.ts'
@@ -20,11 +18,6 @@ const versionsSchema = z.object({
 })
 
 export const recordRoutes = [
-  defineRoute({
-    method: 'get', path: '/farms/:farmId/records', summary: 'The register by filter, newest work first unless another order is asked for.', roles: EVERY_ROLE,
-    params: farmParamsSchema, query: registerQuerySchema, answer: pageOf(registerRowSchema),
-    run: async ({ services, actor, query }) => ({ body: await listRegister(services, actor, query) }),
-  }),
   defineRoute({
     method: 'post', path: '/farms/:farmId/records', summary: 'Take in a draft or a started record.', roles: FARM_PEOPLE,
     params: farmParamsSchema, body: createRecordSchema, answer: recordSchema,

@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { invalid } from '../errors.ts'
 
 /** Where a list goes on: the sort key and id of the last row shown, and which list it was where one address has several. */
-function encodeCursor(...place: readonly string[]): string {
+export function encodeCursor(...place: readonly string[]): string {
   return Buffer.from(JSON.stringify(place)).toString('base64url')
 }
 

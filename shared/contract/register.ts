@@ -38,8 +38,13 @@ export const filterQuerySchema = registerFilterSchema.extend({
 })
 const sortSchema = z.enum(REGISTER_SORTS).default('-when')
 
-export const sortedQuerySchema = filterQuerySchema.extend({ sort: sortSchema })
+const sortedQuerySchema = filterQuerySchema.extend({ sort: sortSchema })
 export const registerQuerySchema = pageQuerySchema.extend(sortedQuerySchema.shape)
+/** The same for what goes out as a file. */
+export const printQuerySchema = sortedQuerySchema.extend({ language: z.enum(['en', 'es']).optional() })
+export const volumeQuerySchema = printQuerySchema.extend({
+  volume: z.string().regex(/^[1-9]\d{0,3}$/).transform(Number).meta({ type: 'integer', minimum: 1, default: 1 }).default(1),
+})
 
 const decimal = z.string()
 const sumsSchema = z.object({
@@ -63,3 +68,11 @@ export const registerTotalsSchema = sumsSchema.extend({
   byMethod: z.partialRecord(z.enum(METHODS), sumsSchema),
 })
 export type RegisterTotals = z.infer<typeof registerTotalsSchema>
+
+/** Into how many volumes the printed register of a filter goes, and the records of each. */
+export const registerVolumesSchema = z.object({
+  volumes: z.number().int(),
+  records: z.number().int(),
+  items: z.array(z.object({ records: z.number().int() })),
+})
+export type RegisterVolumes = z.infer<typeof registerVolumesSchema>

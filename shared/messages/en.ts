@@ -9,6 +9,7 @@ import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
 import { records } from './en/records.ts'
 import { register } from './en/register.ts'
+import { registerPrint } from './en/registerPrint.ts'
 import { session } from './en/session.ts'
 import { today } from './en/today.ts'
 import { units } from './en/units.ts'
@@ -19,7 +20,7 @@ export const screens = {
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */
-export const en = { ...screens, pdf }
+export const en = { ...screens, pdf, registerPrint }
 
 /** The same tree with any words in its leaves. */
 export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }

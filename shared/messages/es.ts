@@ -10,6 +10,7 @@ import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
 import { records } from './es/records.ts'
 import { register } from './es/register.ts'
+import { registerPrint } from './es/registerPrint.ts'
 import { session } from './es/session.ts'
 import { today } from './es/today.ts'
 import { units } from './es/units.ts'
@@ -21,4 +22,4 @@ export const screens: Screens = {
 }
 
 /** Every word a person reads, in Spanish. */
-export const es: Messages = { ...screens, pdf }
+export const es: Messages = { ...screens, pdf, registerPrint }

@@ -174,5 +174,5 @@ describe('records from before the register could be searched', () => {
     await source.destroy()
     expect((after[1] as unknown[]).length).toBeGreaterThan(RECORDS * 10)
     expect(after).toEqual(before)
-  })
+  }, 120_000)
 })

@@ -25,6 +25,8 @@ let house: TestHouse
 let mine: World
 let neighbour: World
 let agents: Record<Exclude<Actor, 'nobody'>, Agent>
+/** A filter that each actor keeps on the first farm. */
+let filterIds: Partial<Record<Actor, string>>
 
 beforeAll(async () => {
   house = await openHouse()
@@ -38,6 +40,12 @@ beforeAll(async () => {
     certifier: await house.as(mine.farm.accounts.certifier),
     outsider: await house.as(neighbour.farm.accounts.owner),
     expired: await house.as(ended.accounts.certifier),
+  }
+  filterIds = {}
+  for (const actor of ['owner', 'manager', 'applicator', 'certifier'] as const) {
+    const id = uuidV7()
+    await agents[actor].post(`/api/farms/${mine.farm.id}/saved-filters`).send({ id, name: 'Kept', query: {} }).expect(201)
+    filterIds[actor] = id
   }
 })
 afterAll(() => house.close())
@@ -65,6 +73,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
     'post /farms/:farmId/sprayers': () => ({ id: uuidV7(), code: tag, name: 'Drencher', tankL: '400' }),
     'post /farms/:farmId/records': () => buildRecord(things),
+    'post /farms/:farmId/saved-filters': () => ({ id: uuidV7(), name: tag, query: { method: 'drench', sort: 'number' } }),
     'put /farms/:farmId/records/:id': () => ({ ...buildRecord(things), id: undefined, revision: 1 }),
     'post /farms/:farmId/records/:id/sign': () => ({ password: PASSWORD }),
     'post /farms/:farmId/records/:id/files': () => ({ id: uuidV7(), kind: 'photo' }),
@@ -74,8 +83,8 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
   return make?.()
 }
 
-function addressOf(route: Route, world: World, things: SeededThings | null): string {
-  const id = things === null ? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
+function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
+  const id = things === null ? UNKNOWN : route.path.includes('/saved-filters') ? filterIds[actor] ?? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
   return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
 }
 
@@ -96,17 +105,17 @@ describe('role × route × own, neighbour, unknown', () => {
   it.each(farmRoutes.flatMap((route) => ACTORS.map((actor) => ({ route, actor, name: `${route.method} ${route.path}` }))))(
     '$name as $actor',
     async ({ route, actor }) => {
-      const own = await call(actor, route, addressOf(route, mine, mine.things), bodyFor(route, mine, (place += 1)))
+      const own = await call(actor, route, addressOf(route, mine, mine.things, actor), bodyFor(route, mine, (place += 1)))
       if (actor === 'nobody') expect(own.status).toBe(401)
       else if (actor === 'outsider' || actor === 'expired') expect(own.status).toBe(404)
       else if (!route.roles.includes(actor)) expect(own.status).toBe(403)
-      else expect([200, 201, 409]).toContain(own.status)
+      else expect([200, 201, 204, 409]).toContain(own.status)
       if (actor === 'outsider') return
-      const foreign = await call(actor, route, addressOf(route, neighbour, neighbour.things), bodyFor(route, neighbour, (place += 1)))
+      const foreign = await call(actor, route, addressOf(route, neighbour, neighbour.things, actor), bodyFor(route, neighbour, (place += 1)))
       expect(foreign.status).toBe(actor === 'nobody' ? 401 : 404)
       expect(JSON.stringify(foreign.body)).not.toContain(neighbour.farm.id)
       if (!route.path.includes(':id')) return
-      const unknown = await call(actor, route, addressOf(route, mine, null), bodyFor(route, mine, (place += 1)))
+      const unknown = await call(actor, route, addressOf(route, mine, null, actor), bodyFor(route, mine, (place += 1)))
       expect(unknown.status).toBe(actor === 'nobody' ? 401 : own.status === 403 ? 403 : 404)
       if (foreign.status === 404 && unknown.status === 404) {
         expect({ ...foreign.body, requestId: '' }).toEqual({ ...unknown.body, requestId: '' })

@@ -3,7 +3,7 @@ import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { Writable } from 'node:stream'
-import { renderReport } from '../../server/reports/renderReport.ts'
+import { renderReport, type ReportJob } from '../../server/reports/renderReport.ts'
 import type { RecordReportData } from '../../server/reports/recordReportData.ts'
 
 /** What independent readers say of a PDF. */
@@ -26,9 +26,12 @@ export interface ReadPdf {
 }
 
 /** The bytes of a record's PDF, drawn in this process. */
-export async function drawRecord(data: RecordReportData): Promise<Buffer> {
+export const drawRecord = (data: RecordReportData): Promise<Buffer> => drawReport({ kind: 'record', data })
+
+/** The bytes of any document, drawn in this process. */
+export async function drawReport(job: ReportJob): Promise<Buffer> {
   const chunks: Buffer[] = []
-  await renderReport({ kind: 'record', data }, new Writable({
+  await renderReport(job, new Writable({
     write(chunk: Buffer, _encoding, done) {
       chunks.push(chunk)
       done()

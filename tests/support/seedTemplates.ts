@@ -3,10 +3,9 @@ import type { Block } from '../../server/entities/Block.ts'
 import type { Lot } from '../../server/entities/Lot.ts'
 import type { Material } from '../../server/entities/Material.ts'
 import { judgeRecord } from '../../server/services/records/judgeRecord.ts'
-import { buildRegisterEntry } from '../../server/services/register/buildRegisterEntry.ts'
 import { recordTerms } from '../../server/services/register/recordTerms.ts'
 import type { Check, Computed, RegisterRow } from '../../shared/contract/record.ts'
-import type { RecordContent } from '../../shared/contract/recordContent.ts'
+import { recordContentSchema, type RecordContent } from '../../shared/contract/recordContent.ts'
 import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
 import { registerRow } from '../../shared/records/registerRow.ts'
 
@@ -68,7 +67,7 @@ function buildTemplate({ blocks, materials, lots, people }: SeedGround, zone: st
   const onBlocks = Array.from({ length: [1, 1, 2, 1, 3, 1, 1, 8][turn % 8] ?? 1 }, (_, more) => pick(blocks, turn * 5 + more))
   const mixed = Array.from({ length: [1, 2, 1, 3][turn % 4] ?? 1 }, (_, more) => pick(materials, turn * 3 + more))
   const isFoliar = turn % 5 < 3
-  const content: RecordContent = {
+  const content = recordContentSchema.parse({
     method: isFoliar ? 'foliar' : 'drench',
     lines: onBlocks.map(({ id }) => ({ blockId: id, part: { kind: 'whole' }, counts: {}, stage: null, bbch: null, startedAt: START, endedAt: END, amount: null })),
     components: mixed.map(({ id, measuredIn }) => ({
@@ -88,16 +87,15 @@ function buildTemplate({ blocks, materials, lots, people }: SeedGround, zone: st
     licence: null,
     notes: pick(NOTES, turn + 3),
     doneById: person.id,
-  }
+  })
   const stock = { blocks: onBlocks, materials: mixed, lots: lots.filter(({ id }) => content.components.some(({ lotId }) => lotId === id)), sprayer: null }
   const { sheet, computed, checks } = judgeRecord(content, stock, zone, new Date(END))
   const row = registerRow({ content, sheet, checks, ...stock, doneBy: person.name, signed: null })
   const record = { state: 'started' as const, content, computed, doneById: person.id, registerRow: row }
-  const entry = buildRegisterEntry({ ...record, farmId: '', id: '', season: null, number: null, sortAt: new Date(START) }, 0)
   return {
     content, computed, checks, row,
     terms: recordTerms(record, onBlocks.map(({ name }) => name)).filter((term) => !term.startsWith('s:')),
-    kg: entry.totalKg,
+    kg: row.totalKg ?? '0',
     doneById: person.id,
     blockIds: onBlocks.map(({ id }) => id),
     components: content.components.map(({ materialId, lotId }, place) => {

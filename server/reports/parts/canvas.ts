@@ -12,21 +12,37 @@ export interface TextStyle { size: number; leading: number; weight: Weight; colo
 /** One PDF being made: the document, its fonts, its structure. */
 export interface Canvas {
   doc: PDFKit.PDFDocument
+  frame: Frame
   root: Element
   /** True once a letter had to be drawn as a box. */
   hasReplaced: boolean
   runsOf(text: string, weight: Weight): Run[]
 }
 
-interface CanvasOptions { title: string; keywords: string; subject: string; createdAt: string; language: Language }
+/** The edges that the text keeps to, and the running head and the page's foot, points from the page's top left. */
+export interface Frame { left: number; right: number; top: number; bottom: number; width: number }
+
+interface CanvasOptions {
+  title: string; keywords: string; subject: string; createdAt: string; language: Language
+  /** The page lies on its long side. */
+  isLying?: boolean
+}
 
 /** A4 in points. */
 export const PAGE = { width: 595.28, height: 841.89 }
+const MM = 72 / 25.4
+
+/** The frame of a page of that size: 16 mm left, 14 mm right, 12 mm above and below. */
+export function frameOf({ width, height }: { width: number; height: number }): Frame {
+  const [left, right] = [16 * MM, width - 14 * MM]
+  return { left, right, top: 12 * MM, bottom: height - 12 * MM, width: right - left }
+}
 
 /** Opens a tagged A4 document that flows into the stream; the same words at the same `createdAt` make the same bytes. */
 export function openCanvas(options: CanvasOptions, stream: Writable): Canvas {
+  const size = options.isLying ? { width: PAGE.height, height: PAGE.width } : PAGE
   const settings = {
-    size: [PAGE.width, PAGE.height], margin: 0, pdfVersion: '1.7' as const, tagged: true, displayTitle: true,
+    size: [size.width, size.height], margin: 0, pdfVersion: '1.7' as const, tagged: true, displayTitle: true,
     // No font of its own: the library's default one would stand in the file without being embedded.
     font: '',
     lang: options.language, autoFirstPage: false, bufferPages: true, subset: 'PDF/UA',
@@ -42,7 +58,7 @@ export function openCanvas(options: CanvasOptions, stream: Writable): Canvas {
   doc.on('error', (error: Error) => stream.destroy(error))
   const root = doc.struct('Document')
   doc.addStructure(root)
-  return { doc, root, hasReplaced: false, runsOf: rememberRuns(doc, openFonts()) }
+  return { doc, root, frame: frameOf(size), hasReplaced: false, runsOf: rememberRuns(doc, openFonts()) }
 }
 
 function rememberRuns(doc: PDFKit.PDFDocument, fonts: Fonts): Canvas['runsOf'] {

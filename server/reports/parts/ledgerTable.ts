@@ -1,7 +1,7 @@
 import { addElement, drawArtifact, type Canvas, type Element } from './canvas.ts'
 import { drawAccountLine, drawDoubleRule, drawRule } from './drawRules.ts'
 import { ensureRoom, roomLeft, turnPage, type Flow } from './pageFlow.ts'
-import { RULES, STYLES } from './styles.ts'
+import { MADDER, RULES, STYLES } from './styles.ts'
 import { drawLines, wrapText, type Line, type Span } from './wrapText.ts'
 
 export interface Column {
@@ -11,6 +11,8 @@ export interface Column {
   align?: 'left' | 'right'
   /** The columns of an account begin here, behind a double line. */
   opensAccount?: boolean
+  /** Points left free before the words of a row, for its mark. */
+  indent?: number
 }
 export interface TableRow {
   cells: readonly (readonly Span[])[]
@@ -20,6 +22,8 @@ export interface TableRow {
   hasHead?: boolean
   /** A cell whose words may run over so many columns, its own counted; the cells under them are empty. */
   runsOver?: { column: number; columns: number }
+  /** A line through every word of the row: taken back, and still to be read. */
+  isStruck?: boolean
   /** A firm line over the row. */
   opensGroup?: boolean
   /** Stands on the same page as the row after it. */
@@ -106,7 +110,9 @@ function innerBox({ x, columns }: Table, index: number): { x: number; width: num
 }
 
 function cellBox(table: Table, { runsOver }: TableRow, index: number): { x: number; width: number } {
-  const box = innerBox(table, index)
+  const indent = table.columns[index]?.indent ?? 0
+  const inner = innerBox(table, index)
+  const box = { x: inner.x + indent, width: inner.width - indent }
   if (index !== runsOver?.column) return box
   const last = innerBox(table, index + runsOver.columns - 1)
   return { x: box.x, width: last.x + last.width - box.x }
@@ -155,11 +161,21 @@ function drawRow(flow: Flow, table: Table, { set, parent }: { set: SetRow; paren
     })
     addElement(canvas, element, isHead ? 'TH' : 'TD', hasWords ? draw : undefined, isHead ? { scope: 'Row' } : {})
   })
+  if (row.isStruck) cells.forEach((lines, index) => strikeLines(canvas, table, { lines, index, row, y }))
   const { mark } = row
   if (mark) drawArtifact(canvas, () => mark.draw({ x: innerBox(table, mark.column).x, y: y + table.padding }))
   drawAccountLines(canvas, table, { top: y, bottom: y + height - (row.isTotal ? 2.5 : 0) })
   drawRowRules(canvas, table, { row, top: y, bottom: y + height })
   flow.y += height
+}
+
+function strikeLines(canvas: Canvas, table: Table, { lines, index, row, y }: { lines: Line[]; index: number; row: TableRow; y: number }): void {
+  const box = cellBox(table, row, index)
+  lines.forEach(({ width }, line) => {
+    if (width === 0) return
+    const x = table.columns[index]?.align === 'right' ? box.x + box.width - width : box.x
+    drawRule(canvas, { x: x - 1, y: y + table.padding + (line + 0.54) * table.leading, width: width + 2 }, 0.9, MADDER)
+  })
 }
 
 function drawContinued({ canvas, y }: Flow, table: Table, { continued }: TableRow): void {

@@ -1,9 +1,8 @@
-import { PAGE, type Canvas } from './canvas.ts'
+import { frameOf, PAGE, type Canvas } from './canvas.ts'
 
-const MM = 72 / 25.4
-/** Left and right edge of the text, and how far the running head and the page's foot keep from the paper's edge, points. */
-export const FRAME = { left: 16 * MM, right: PAGE.width - 14 * MM, top: 12 * MM, bottom: PAGE.height - 12 * MM }
-export const FRAME_WIDTH = FRAME.right - FRAME.left
+/** The frame of an upright page. */
+export const FRAME = frameOf(PAGE)
+export const FRAME_WIDTH = FRAME.width
 /** Running head with its rule and the white under it. */
 const HEAD_HEIGHT = 26
 
@@ -20,12 +19,12 @@ export function startFlow(canvas: Canvas, footHeights: Flow['footHeights']): Flo
 export function turnPage(flow: Flow): void {
   flow.canvas.doc.addPage()
   flow.pages += 1
-  flow.y = FRAME.top + HEAD_HEIGHT
+  flow.y = flow.canvas.frame.top + HEAD_HEIGHT
 }
 
 /** What is left of the page, points. */
-export function roomLeft({ pages, footHeights, y }: Flow): number {
-  return FRAME.bottom - (pages === 1 ? footHeights.first : footHeights.later) - y
+export function roomLeft({ canvas, pages, footHeights, y }: Flow): number {
+  return canvas.frame.bottom - (pages === 1 ? footHeights.first : footHeights.later) - y
 }
 
 /**
@@ -34,7 +33,7 @@ export function roomLeft({ pages, footHeights, y }: Flow): number {
  */
 export function ensureRoom(flow: Flow, height: number): boolean {
   if (height <= roomLeft(flow)) return false
-  if (flow.y <= FRAME.top + HEAD_HEIGHT) return false
+  if (flow.y <= flow.canvas.frame.top + HEAD_HEIGHT) return false
   turnPage(flow)
   return true
 }

@@ -20,6 +20,9 @@ export interface PageFoot {
   pageWord: (page: number, pages: number) => string
 }
 
+/** What the foot of a later page says. */
+export type LaterFoot = Pick<PageFoot, 'codeLabel' | 'codeShort' | 'printed' | 'pageWord'>
+
 /** 17 mm. */
 const QR_SIZE = (17 * 72) / 25.4
 const GAP = 12
@@ -51,15 +54,16 @@ export function drawFirstFoot(canvas: Canvas, parent: Element, { foot, pages }: 
 }
 
 /** Draws the foot of a later page: code, time of printing and page on one line. */
-export function drawLaterFoot(canvas: Canvas, { foot, page, pages }: { foot: PageFoot; page: number; pages: number }): void {
-  const y = FRAME.bottom - STYLES.running.leading
-  drawRule(canvas, { x: FRAME.left, y: y - PADDING, width: FRAME_WIDTH }, 0.6)
+export function drawLaterFoot(canvas: Canvas, { foot, page, pages }: { foot: LaterFoot; page: number; pages: number }): void {
+  const { left, bottom, width } = canvas.frame
+  const y = bottom - STYLES.running.leading
+  drawRule(canvas, { x: left, y: y - PADDING, width }, 0.6)
   drawArtifact(canvas, () => {
     const right = `${foot.printed}, ${foot.pageWord(page, pages)}`
     drawAtRight(canvas, right, y)
-    const room = FRAME_WIDTH - measureText(canvas, right, STYLES.running) - GAP
+    const room = width - measureText(canvas, right, STYLES.running) - GAP
     const words = wrapText(canvas, codeSpans(foot.codeLabel, foot.codeShort), room).slice(0, 1)
-    drawLines(canvas, words, { x: FRAME.left, y, width: room, leading: STYLES.running.leading })
+    drawLines(canvas, words, { x: left, y, width: room, leading: STYLES.running.leading })
   }, 'Pagination')
 }
 
@@ -74,11 +78,11 @@ function setWords(canvas: Canvas, foot: PageFoot): { code: Line[]; shows: Line[]
 }
 
 function codeSpans(label: string, text: string): Span[] {
-  return [{ text: `${label} `, style: STYLES.runningBold }, { text, style: STYLES.running }]
+  return [...(label === '' ? [] : [{ text: `${label} `, style: STYLES.runningBold }]), { text, style: STYLES.running }]
 }
 
 function drawAtRight(canvas: Canvas, text: string, y: number): void {
-  drawText(canvas, text, { x: FRAME.right - measureText(canvas, text, STYLES.running), y }, STYLES.running)
+  drawText(canvas, text, { x: canvas.frame.right - measureText(canvas, text, STYLES.running), y }, STYLES.running)
 }
 
 /** A QR code of middle correction as one path; runs of dark modules are drawn as one rectangle each. */

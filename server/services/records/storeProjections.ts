@@ -16,7 +16,7 @@ import { recordTerms } from '../register/recordTerms.ts'
  */
 export async function storeProjections(manager: EntityManager, record: ApplicationRecord, anew: boolean): Promise<void> {
   const key = { farmId: record.farmId, recordId: record.id }
-  if (anew) for (const projection of [RecordLine, RecordComponent, RegisterEntry, RecordTerm]) await manager.delete(projection, key)
+  if (anew) await dropProjections(manager, key)
   const { season, sortAt, content, computed } = record
   await manager.insert(RecordLine, content.lines.map(({ blockId }, position) => ({ ...key, position, blockId, season, sortAt })))
   if (content.components.length > 0) {
@@ -32,6 +32,11 @@ export async function storeProjections(manager: EntityManager, record: Applicati
      SELECT $1, $2, term, $3, $4, $5 FROM unnest($6::text[]) AS term`,
     [record.farmId, record.id, season, workSeason, sortAt, recordTerms(record, blockNames)],
   )
+}
+
+/** Takes away all that finds a record, as before a draft goes. */
+export async function dropProjections(manager: EntityManager, key: { farmId: string; recordId: string }): Promise<void> {
+  for (const projection of [RecordLine, RecordComponent, RegisterEntry, RecordTerm]) await manager.delete(projection, key)
 }
 
 async function readGround(manager: EntityManager, { farmId, season, sortAt, content }: ApplicationRecord): Promise<{ blockNames: string[]; workSeason: number }> {

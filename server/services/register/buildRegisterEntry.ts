@@ -1,7 +1,3 @@
-import { convertQuantity } from '../../../shared/units/convertQuantity.ts'
-import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
-import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
-import type { Computed } from '../../../shared/contract/record.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import type { RegisterEntry } from '../../entities/RegisterEntry.ts'
 
@@ -10,7 +6,7 @@ const SEASON_STEP = 10_000_000
 /** After every number that can be given. */
 export const NO_NUMBER_YET = '9000000000000000'
 
-type Entered = Pick<ApplicationRecord, 'farmId' | 'id' | 'state' | 'season' | 'number' | 'sortAt' | 'computed' | 'registerRow'>
+type Entered = Pick<ApplicationRecord, 'farmId' | 'id' | 'state' | 'season' | 'number' | 'sortAt' | 'registerRow'>
 
 /** What the register sorts a record by and adds up of it; its figures are those of its row. */
 export function buildRegisterEntry(record: Entered, workSeason: number): RegisterEntry {
@@ -27,15 +23,7 @@ export function buildRegisterEntry(record: Entered, workSeason: number): Registe
     areaSort: Number(row.areaHa),
     areaHa: row.areaHa,
     totalL: row.totalL,
-    totalKg: massOf(record.computed),
+    totalKg: row.totalKg ?? '0',
     late: row.lateHours !== null,
   }
-}
-
-/** Kilograms of the components that were measured by mass, as plain decimal text. */
-function massOf({ components }: Computed): string {
-  return components
-    .flatMap(({ amount }) => (amount !== null && dimensionOf(amount.unit) === 'mass' ? [convertQuantity(amount, 'kg')] : []))
-    .reduce((sum, kg) => sum.plus(kg), new ExactDecimal(0))
-    .toFixed()
 }

@@ -3,7 +3,7 @@ import { z } from 'zod'
 import type { RegisterRow } from '../../../shared/contract/record.ts'
 import type { RegisterFilter, RegisterSort } from '../../../shared/contract/register.ts'
 import type { FarmActor } from '../../database/actor.ts'
-import { cutPage, decodeCursor } from '../cursor.ts'
+import { cutPage, decodeCursor, encodeCursor } from '../cursor.ts'
 import { digestOf } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { findTerms } from './findTerms.ts'
@@ -17,7 +17,7 @@ const KEY_SCHEMAS = {
 }
 
 export interface RegisterPlaceQuery { filter: RegisterFilter; sort: RegisterSort }
-interface KeyedRow { record_id: string; key: Date | string | number }
+export interface KeyedRow { record_id: string; key: Date | string | number }
 interface ListedRow extends KeyedRow { state: RegisterRow['state']; register_row: Omit<RegisterRow, 'id' | 'state'> }
 
 /** A page of the register. @throws {AppError} invalid-input for a cursor of another filter or order. */
@@ -39,11 +39,21 @@ export async function readRegisterPage<Row extends KeyedRow>(
   { filter, sort }: RegisterPlaceQuery,
   { limit, cursor, columns, joins = '' }: { limit: number; cursor?: string | undefined; columns: string; joins?: string },
 ): Promise<{ items: Row[]; next: string | null }> {
-  const list = digestOf({ filter, sort }).slice(0, 16)
+  const list = nameOfList({ filter, sort })
   const after = decodeCursor(cursor, KEY_SCHEMAS[keyOfSort(sort)], list)
   const search = await findTerms(manager, actor, filter)
   if (search.isEmpty) return { items: [], next: null }
   const { sql, params } = pageStatement(actor.farmId, search, { sort, after, limit: limit + 1, columns, joins })
   const rows: Row[] = await manager.query(sql, params)
-  return cutPage(rows, limit, (row) => row, ({ key, record_id }) => [key instanceof Date ? key.toISOString() : String(key), record_id, list])
+  return cutPage(rows, limit, (row) => row, (row) => placeOf(row, list))
 }
+
+/** The cursor with which the list goes on after a row of it. */
+export function cursorAfter(place: RegisterPlaceQuery, row: KeyedRow): string {
+  return encodeCursor(...placeOf(row, nameOfList(place)))
+}
+
+/** Tells the lists of this address apart, so that a cursor of one is none of another. */
+const nameOfList = ({ filter, sort }: RegisterPlaceQuery): string => digestOf({ filter, sort }).slice(0, 16)
+const placeOf = ({ key, record_id }: KeyedRow, list: string): [key: string, id: string, list: string] =>
+  [key instanceof Date ? key.toISOString() : String(key), record_id, list]

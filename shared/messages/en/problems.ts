@@ -57,6 +57,7 @@ export const problems = {
   },
   id: { format: 'Give a UUID.' },
   cursor: { invalid: 'This list cannot be continued from there. Start it again.' },
+  filters: { full: 'You keep {maximum} filters already. Forget one first.' },
   idempotency: { mismatch: 'This id was used for something else. Make a new one.' },
   label: { most_below_least: 'The most that is allowed lies below the least.' },
   date: { invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.' },

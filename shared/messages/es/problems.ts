@@ -57,6 +57,7 @@ export const problems = {
   },
   id: { format: 'Indique un UUID.' },
   cursor: { invalid: 'La lista no puede seguir desde ahí. Empiécela de nuevo.' },
+  filters: { full: 'Ya guarda {maximum} filtros. Olvide uno antes.' },
   idempotency: { mismatch: 'Este identificador ya se usó para otra cosa. Cree uno nuevo.' },
   label: { most_below_least: 'El máximo permitido queda por debajo del mínimo.' },
   date: { invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.' },

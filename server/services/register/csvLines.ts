@@ -1,0 +1,106 @@
+import { EACH } from '../../../shared/contract/each.ts'
+import type { Computed, RecordState, RegisterRow } from '../../../shared/contract/record.ts'
+import type { BlockLine, Part, RecordComponent, RecordContent } from '../../../shared/contract/recordContent.ts'
+import { translate, type Language } from '../../../shared/messages/translate.ts'
+import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
+import { isoInZone } from '../../../shared/time/isoInZone.ts'
+import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
+import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
+import type { KeyedRow } from './listRegister.ts'
+
+/** The columns of the register as CSV, in their order; their heads stand under `registerPrint.csv`. */
+export const CSV_COLUMNS = [
+  'record', 'version', 'state', 'season', 'method', 'block', 'part', 'areaHa', 'counts', 'stage', 'bbch', 'start', 'end', 'zone', 'amount', 'unit', 'known',
+  'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'totalL', 'totalKg', 'litresPerHa', 'kgPerHa', 'purpose', 'doneBy', 'licence',
+  'signedAt', 'lateHours', 'stops', 'unknowns', 'checkCode',
+] as const
+type CsvLine = Record<(typeof CSV_COLUMNS)[number], string>
+
+export interface CsvRecord extends KeyedRow {
+  state: RecordState
+  register_row: Omit<RegisterRow, 'id' | 'state'>
+  content: RecordContent
+  computed: Computed
+  digest: string | null
+}
+interface CsvPlace { language: Language; zone: string }
+
+const DECIMALS = 4
+const CODE_LENGTH = 20
+const M2_PER_HA = 10_000
+
+/** The lines of one record: one for each of its block lines, in their order. */
+export function csvLines({ state, register_row: row, content: stored, computed: storedFigures, digest }: CsvRecord, place: CsvPlace): CsvLine[] {
+  const content = fillContent(stored)
+  const computed = fillComputed(storedFigures)
+  const say = (id: string, params = {}) => translate(place.language, `registerPrint.${id}`, params)
+  const whole = {
+    record: row.number ?? '',
+    version: row.version === 0 ? '' : String(row.version),
+    state: say(`state.${state}`),
+    season: row.season === null ? '' : String(row.season),
+    method: say(`method.${row.method}`),
+    zone: place.zone,
+    preparations: content.components.map((component, index) => preparationWords(component, row.preparations[index] ?? '', computed.components[index]?.amount ?? null, place)).join('; '),
+    lots: lotsInOrder(content.components, row.lots, say('noLot')).join('; '),
+    water: content.water !== null && 'source' in content.water ? content.water.source ?? '' : '',
+    totalL: figure(row.totalL),
+    totalKg: figure(row.totalKg),
+    litresPerHa: figure(row.sprayLPerHa),
+    kgPerHa: figure(row.kgPerHa),
+    purpose: content.purpose ?? '',
+    doneBy: row.by,
+    licence: content.licence ?? '',
+    signedAt: instant(row.signedAt, place),
+    lateHours: row.lateHours === null ? '' : String(row.lateHours),
+    stops: String(row.tally.stop),
+    unknowns: String(row.tally.unknown),
+    checkCode: digest === null ? '' : digest.slice(0, CODE_LENGTH),
+  }
+  return content.lines.map((line, index) => ({ ...whole, ...lineCells(line, { row, computed, index }, place) }))
+}
+
+function lineCells(line: BlockLine, { row, computed, index }: { row: CsvRecord['register_row']; computed: Computed; index: number }, place: CsvPlace) {
+  const share = computed.lines[index] as Computed['lines'][number] | undefined
+  return {
+    block: row.blocks[index]?.code ?? '',
+    part: partWords(line.part, place),
+    areaHa: share === undefined ? (computed.lines.length === 0 && row.blocks.length === 1 ? figure(row.areaHa) : '') : figure(new ExactDecimal(share.areaM2).div(M2_PER_HA).toFixed()),
+    counts: EACH.flatMap((each) => (line.counts[each] === undefined ? [] : [`${line.counts[each]} ${translate(place.language, `registerPrint.each.${each}`)}`])).join('; '),
+    stage: line.stage ?? '',
+    bbch: line.bbch ?? '',
+    start: instant(line.startedAt, place),
+    end: instant(line.endedAt, place),
+    amount: line.amount?.value ?? '',
+    unit: line.amount?.unit ?? '',
+    known: line.amount === null ? '' : translate(place.language, `registerPrint.known.${line.amount.known}`),
+    keepOutUntil: instant(share?.reEntryUntil ?? null, place),
+    pickFrom: share?.pickFrom ?? '',
+  }
+}
+
+function partWords(part: Part, { language }: CsvPlace): string {
+  const say = (params: Record<string, string | number> = {}) => translate(language, `registerPrint.part.${part.kind}`, params)
+  if (part.kind === 'fraction') return say({ percent: new ExactDecimal(part.fraction).times(100).toFixed() })
+  return part.kind === 'rows' || part.kind === 'beds' ? say({ from: part.from, to: part.to, of: part.of }) : say()
+}
+
+function preparationWords({ used }: RecordComponent, name: string, amount: { value: string; unit: string } | null, { language }: CsvPlace): string {
+  const say = (id: string, params: Record<string, string>) => translate(language, `registerPrint.${id}`, params)
+  const words = (one: { value: string; unit: string }) => say('quantity', { value: figure(one.value), unit: translate(language, `units.${one.unit}`) })
+  const measure = amount === null ? '–' : words(amount)
+  return used === null ? say('preparation', { name, measure }) : say('preparationUsed', { name, measure, amount: words(used) })
+}
+
+/** The register row names lots alone; a component without one keeps its place. */
+function lotsInOrder(components: readonly RecordComponent[], lots: readonly string[], none: string): string[] {
+  let next = 0
+  return components.map(({ lotId }) => {
+    if (lotId === null) return none
+    next += 1
+    return lots[next - 1] ?? none
+  })
+}
+
+const figure = (value: string | null): string => (value === null ? '' : roundDecimal(value, DECIMALS))
+const instant = (at: string | null, { zone }: CsvPlace): string => (at === null ? '' : isoInZone(zone, at))

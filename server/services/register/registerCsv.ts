@@ -1,0 +1,33 @@
+import { stringify } from 'csv-stringify'
+import { pipeline, Readable, type Transform } from 'node:stream'
+import type { Language } from '../../../shared/messages/translate.ts'
+import { translate } from '../../../shared/messages/translate.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import type { Services } from '../services.ts'
+import { CSV_COLUMNS, csvLines, type CsvRecord } from './csvLines.ts'
+import type { RegisterPlaceQuery } from './listRegister.ts'
+import { readRegisterRows } from './readRegisterRows.ts'
+
+const COLUMNS = 'd.state, d.register_row, d.content, d.computed, d.digest'
+
+/**
+ * The register as CSV (RFC 4180, UTF-8 with its mark, CRLF), streamed. One line is one block of one record, which is what a certifier asks
+ * by: what was on this block, when, how much. What belongs to the whole record (its preparations, lots and totals) is repeated on each
+ * of its lines and must not be added up over them. Figures are those of the record, with a point and without grouping in every language, to
+ * four decimals; instants carry the farm's offset. A cell that a spreadsheet would take for a formula begins with an apostrophe.
+ */
+export function registerCsv(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language): Transform {
+  const table = stringify({
+    bom: true, record_delimiter: '\r\n', header: true, escape_formulas: true,
+    columns: CSV_COLUMNS.map((key) => ({ key, header: translate(language, `registerPrint.csv.${key}`) })),
+  })
+  // What breaks one end off, ends the other with it.
+  pipeline(Readable.from(lines(services, actor, place, language)), table, () => undefined)
+  return table
+}
+
+async function* lines(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language): AsyncGenerator<Record<string, string>> {
+  for await (const row of readRegisterRows<CsvRecord>(services, actor, place, { columns: COLUMNS })) {
+    yield* csvLines(row, { language, zone: actor.zone })
+  }
+}
