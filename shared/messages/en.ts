@@ -7,6 +7,7 @@ import { frame } from './en/frame.ts'
 import { inputs } from './en/inputs.ts'
 import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
+import { recordForm } from './en/recordForm.ts'
 import { records } from './en/records.ts'
 import { register } from './en/register.ts'
 import { registerPrint } from './en/registerPrint.ts'
@@ -16,7 +17,7 @@ import { units } from './en/units.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, files, frame, inputs, problems, records, register, session, today, units,
+  blocks, checks, common, farm, files, frame, inputs, problems, recordForm, records, register, session, today, units,
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */

@@ -8,6 +8,7 @@ import { frame } from './es/frame.ts'
 import { inputs } from './es/inputs.ts'
 import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
+import { recordForm } from './es/recordForm.ts'
 import { records } from './es/records.ts'
 import { register } from './es/register.ts'
 import { registerPrint } from './es/registerPrint.ts'
@@ -18,7 +19,7 @@ import { units } from './es/units.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, inputs, problems, records, register, session, today, units,
+  blocks, checks, common, farm, files, frame, inputs, problems, recordForm, records, register, session, today, units,
 }
 
 /** Every word a person reads, in Spanish. */

@@ -5,7 +5,8 @@ import { decimalTextOf } from '../units/decimalTextOf.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
 
 const HOUR_MS = 3_600_000
-const LATE_HOURS = 24
+/** Entered later than this after the work ended, a record carries how late. */
+export const LATE_HOURS = 24
 
 export interface RowSource {
   content: RecordContent

@@ -1,17 +1,23 @@
-import type { RecordContentInput } from '../../shared/contract/recordContent.ts'
+import { EACH } from '../../shared/contract/each.ts'
+import { partSchema, type Counts, type Part, type RecordContentInput } from '../../shared/contract/recordContent.ts'
 import type { Weather } from '../../shared/contract/weather.ts'
-import type { RecordSheet, SheetInput } from '../../shared/mix/sheetTypes.ts'
-import { toInstant, type InstantResult } from '../../shared/time/toInstant.ts'
-import { formatNumber } from '../../shared/units/formatQuantity.ts'
-import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
-import type { ComponentDraft, MomentDraft, ReadingDraft, RecordDraft } from './recordDraft.ts'
+import { partArea } from '../../shared/geo/partArea.ts'
+import type { SheetInput } from '../../shared/mix/sheetTypes.ts'
+import { lineCounts } from '../../shared/records/lineCounts.ts'
 import { mapPlainFields } from '../../shared/records/plainFields.ts'
+import type { SheetGround } from '../../shared/records/sheetOf.ts'
+import { toInstant, type InstantResult } from '../../shared/time/toInstant.ts'
+import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
+import { endMoment, type AmountDraft, type LineDraft, type MomentDraft, type PartDraft } from './lineDraft.ts'
+import { writtenLines, type ComponentDraft, type ReadingDraft, type RecordDraft } from './recordDraft.ts'
 
 /** The plain number of a text, or empty where it is none yet. */
-function numberOf(text: string, signed = false): string {
+export function numberOf(text: string, signed = false): string {
   const read = parseQuantityText(text, { signed })
   return read.ok ? read.value : ''
 }
+
+const orNull = (text: string): string | null => (text.trim() === '' ? null : text.trim())
 
 /** The instant of a time on the farm's clock; null while it is not written whole. */
 export function instantOf({ date, time, offset }: MomentDraft, zone: string): InstantResult | null {
@@ -22,6 +28,30 @@ export function instantOf({ date, time, offset }: MomentDraft, zone: string): In
 function instantText(moment: MomentDraft, zone: string): string | null {
   const read = instantOf(moment, zone)
   return read?.ok ? read.instant : null
+}
+
+const typedPart = ({ kind, fraction, from, to, of, geometry }: PartDraft): unknown => {
+  switch (kind) {
+    case 'whole':
+      return { kind }
+    case 'fraction':
+      return { kind, fraction: numberOf(fraction) }
+    case 'drawn':
+      return { kind, geometry }
+    default:
+      return { kind, from: Number(numberOf(from)), to: Number(numberOf(to)), of: Number(numberOf(of)) }
+  }
+}
+
+/** The part of a line once it is written whole, else null. */
+export function partOf({ part }: Pick<LineDraft, 'part'>): Part | null {
+  const read = partSchema.safeParse(typedPart(part))
+  return read.success ? read.data : null
+}
+
+/** What is counted on a line, as far as it is written. */
+export function countsOf({ counts }: Pick<LineDraft, 'counts'>): Counts {
+  return Object.fromEntries(EACH.flatMap((each) => { const count = numberOf(counts[each]); return count === '' ? [] : [[each, count]] }))
 }
 
 function basisOf({ kind, value, unit, each, reading }: ComponentDraft): SheetInput['components'][number]['basis'] {
@@ -43,25 +73,35 @@ function waterOf({ water }: RecordDraft): NonNullable<SheetInput['water']> {
   }
 }
 
-function writtenWater(draft: RecordDraft): SheetInput['water'] | (SheetInput['water'] & { source: string | null }) {
+function writtenWater(draft: RecordDraft): unknown {
   const water = waterOf(draft)
   if (draft.method === 'solid') return null
   if (water.sizedFrom === 'none') return water
   return water.value === '' ? null : { ...water, source: orNull(draft.water.source) }
 }
 
-function writtenAmount({ amount }: RecordDraft): { value: string; unit: string } | null {
-  const value = numberOf(amount.value)
-  return amount.known === 'workedOut' || value === '' ? null : { value, unit: amount.unit }
+/** An amount that was measured or counted; null where the sheet's stands. */
+function writtenAmount({ value, unit, known }: AmountDraft): AmountDraft | null {
+  const read = numberOf(value)
+  return known === 'workedOut' || read === '' ? null : { value: read, unit, known }
 }
 
 /** What the sheet is worked out from, as far as it is typed. */
-export function sheetInputOf(draft: RecordDraft, { areaM2, tankL }: { areaM2: number | null; tankL: string | null }): SheetInput {
+export function sheetInputOf(draft: RecordDraft, { blocks, sprayer }: SheetGround): SheetInput {
   return {
-    lines: areaM2 === null ? [] : [{ areaM2, amount: writtenAmount(draft) }],
+    lines: writtenLines(draft).map((line) => {
+      const part = partOf(line)
+      const blockM2 = Number(blocks.find(({ id }) => id === line.blockId)?.areaM2 ?? 0)
+      return {
+        areaM2: part === null || blockM2 === 0 ? 0 : partArea(part, blockM2),
+        counts: lineCounts({ counts: countsOf(line), part: part ?? { kind: 'whole' } }),
+        amount: writtenAmount(line.amount),
+      }
+    }),
     isDry: draft.method === 'solid',
     water: waterOf(draft),
-    tankL,
+    tankL: sprayer?.tankL ?? null,
+    flowLPerMin: sprayer?.flowLPerMin ?? null,
     components: draft.components.map((component) => ({ basis: basisOf(component) })),
   }
 }
@@ -72,7 +112,7 @@ function readingOf<Unit extends string>({ value, unit, kind }: ReadingDraft, sig
 }
 
 /** What was read of the weather; null where nothing was. */
-export function weatherOf({ weather }: RecordDraft): Weather | null {
+export function weatherOf({ weather }: Pick<RecordDraft, 'weather'>): Weather | null {
   const written: Weather = {
     wind: readingOf(weather.wind),
     windFrom: weather.windFrom === '' ? null : weather.windFrom,
@@ -82,34 +122,32 @@ export function weatherOf({ weather }: RecordDraft): Weather | null {
   return Object.values(written).every((value) => value === null) ? null : written
 }
 
-function amountOf(draft: RecordDraft, sheet: RecordSheet): { value: string; unit: string; known: string } | null {
-  const written = writtenAmount(draft)
-  if (written) return { ...written, known: draft.amount.known }
-  if (draft.amount.known !== 'workedOut' || sheet.totalL === null) return null
-  return { value: formatNumber(sheet.totalL, {}, 'en').replaceAll('\u00A0', ''), unit: 'L', known: 'workedOut' }
-}
-
-const orNull = (text: string): string | null => (text.trim() === '' ? null : text.trim())
-
 /**
  * The record as it would be sent, with whatever is missing left empty. The contract decides if it may be: parse it with
- * `recordContentSchema`.
- * @param happened whether the end and the amount belong in it: they are what happened, not what is planned.
+ * `recordContentSchema`. An amount that is worked out is left to the server's sheet.
+ * @param happened whether the ends and the amounts belong in it: they are what happened, not what is planned.
  */
-export function contentOf(draft: RecordDraft, { zone, sheet, happened }: { zone: string; sheet: RecordSheet; happened: boolean }): RecordContentInput {
+export function contentOf(draft: RecordDraft, { zone, happened }: { zone: string; happened: boolean }): RecordContentInput {
   const content = {
     method: draft.method,
-    lines: [{
-      blockId: draft.blockId,
-      part: { kind: 'whole' },
-      startedAt: instantText(draft.start, zone),
-      endedAt: happened ? instantText(draft.end, zone) : null,
-      amount: happened ? amountOf(draft, sheet) : null,
-    }],
-    components: draft.components.map((component) => ({ materialId: component.materialId, lotId: orNull(component.lotId), basis: basisOf(component) })),
+    lines: writtenLines(draft).map((line) => ({
+      blockId: line.blockId,
+      part: typedPart(line.part),
+      counts: countsOf(line),
+      stage: orNull(line.stage),
+      bbch: orNull(line.bbch),
+      startedAt: instantText(line.start, zone),
+      endedAt: happened ? instantText(endMoment(line), zone) : null,
+      amount: happened ? writtenAmount(line.amount) : null,
+    })),
+    components: draft.components.map((component) => ({
+      materialId: component.materialId, lotId: orNull(component.lotId), basis: basisOf(component), used: happened ? writtenAmount(component.used) : null,
+    })),
     water: writtenWater(draft),
-    sprayerId: orNull(draft.sprayerId),
+    sprayerId: draft.method === 'solid' ? null : orNull(draft.sprayerId),
+    workedInOn: draft.method === 'solid' ? orNull(draft.workedInOn) : null,
     weather: weatherOf(draft),
+    protection: draft.protection,
     ...mapPlainFields(({ name }) => orNull(draft.plain[name])),
     doneById: orNull(draft.doneById),
   }

@@ -1,11 +1,10 @@
-import type { ApplicationRecord } from '../../shared/contract/record.ts'
-import type { Basis, Method, Water } from '../../shared/contract/recordContent.ts'
-import type { Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/weather.ts'
 import type { Each } from '../../shared/contract/each.ts'
-import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
-import { toInstant } from '../../shared/time/toInstant.ts'
-import { newId } from './newId.ts'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import type { Basis, Method, PROTECTION, RecordComponent, Water } from '../../shared/contract/recordContent.ts'
+import type { Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/weather.ts'
 import { mapPlainFields, type PlainName } from '../../shared/records/plainFields.ts'
+import { draftOfLine, emptyAmount, type AmountDraft, type LineDraft } from './lineDraft.ts'
+import { newId } from './newId.ts'
 
 /** Everything below is as typed: numbers are text, and what is not chosen yet is empty. */
 export interface ComponentDraft {
@@ -20,6 +19,8 @@ export interface ComponentDraft {
   each: Each
   /** Read for a ratio. */
   reading: 'to' | 'in'
+  /** What was really taken, where it is not what the sheet says. */
+  used: AmountDraft
 }
 
 export interface ReadingDraft {
@@ -28,71 +29,62 @@ export interface ReadingDraft {
   kind: (typeof WEATHER_KINDS)[number]
 }
 
-/** A time of the farm's clock; `offset` is chosen only where the clock shows it twice. */
-export interface MomentDraft {
-  date: string
-  time: string
-  offset: string
-}
-
-/** What the form of a record holds. */
+/** What the form of a record holds. A change of its shape is a new `version`, and `readKeptDraft` reads the older ones. */
 export interface RecordDraft {
+  version: 2
   step: 1 | 2
   method: Method
-  blockId: string
+  lines: LineDraft[]
   plain: Record<PlainName, string>
+  protection: (typeof PROTECTION)[number][]
   /** Empty: the person who writes. */
   doneById: string
   sprayerId: string
   components: ComponentDraft[]
   water: { sizedFrom: Water['sizedFrom']; value: string; unit: string; source: string; each: Each; component: number }
+  /** Read for a solid spread. */
+  workedInOn: string
   weather: { wind: ReadingDraft; windFrom: (typeof WIND_POINTS)[number] | ''; air: ReadingDraft; humidity: ReadingDraft }
-  start: MomentDraft
-  end: MomentDraft
-  /** `value` is read only where it was measured or counted; worked out, it is the sheet's. */
-  amount: { value: string; unit: string; known: 'measured' | 'counted' | 'workedOut' }
   /** Said of every stop that was sprayed all the same. */
   stop: { why: string; told: string; done: string }
   /** The revision the server gave last; null before it has the record. */
   revision: number | null
 }
 
-export const emptyComponent = (): ComponentDraft => ({ key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L', each: 'plant', reading: 'to' })
-const emptyMoment = (): MomentDraft => ({ date: '', time: '', offset: '' })
+export const emptyComponent = (): ComponentDraft => ({
+  key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L', each: 'plant', reading: 'to', used: emptyAmount(),
+})
 
 /** A form with nothing in it yet. */
 export const emptyRecord = (): RecordDraft => ({
+  version: 2,
   step: 1,
   method: 'foliar',
-  blockId: '', plain: mapPlainFields(() => ''), doneById: '', sprayerId: '',
+  lines: [], plain: mapPlainFields(() => ''), protection: [], doneById: '', sprayerId: '',
   components: [emptyComponent()],
   water: { sizedFrom: 'water', value: '', unit: 'L', source: '', each: 'plant', component: 0 },
+  workedInOn: '',
   weather: {
     wind: { value: '', unit: 'ms', kind: 'readHere' },
     windFrom: '',
     air: { value: '', unit: 'degC', kind: 'readHere' },
     humidity: { value: '', unit: '%', kind: 'readHere' },
   },
-  start: emptyMoment(),
-  end: emptyMoment(),
-  amount: { value: '', unit: 'L', known: 'workedOut' },
   stop: { why: '', told: '', done: '' },
   revision: null,
 })
 
-/** The farm's clock at an instant. */
-export function momentAt(zone: string, instant: string): MomentDraft {
-  const moment = { date: civilDateIn(zone, instant), time: civilTimeIn(zone, instant) }
-  const read = toInstant({ ...moment, zone })
-  if (read.ok || read.problem.id !== 'time.ambiguous') return { ...moment, offset: '' }
-  const near = read.candidates.findLast((one) => Date.parse(one.instant) <= Date.parse(instant))
-  return { ...moment, offset: near?.offset ?? '' }
-}
+/** The lines that go into the record, in their order: those that were not left out. */
+export const writtenLines = ({ lines }: Pick<RecordDraft, 'lines'>): LineDraft[] => lines.filter(({ skipped }) => !skipped)
 
 function draftOfBasis(basis: Basis): Pick<ComponentDraft, 'kind' | 'value' | 'unit' | 'each' | 'reading'> {
   const blank = { each: 'plant', reading: 'to' } as const
   return basis.kind === 'ratio' ? { ...blank, kind: 'ratio', value: basis.parts, unit: 'L', reading: basis.reading } : { ...blank, ...basis }
 }
+
+const draftOfComponent = ({ materialId, lotId, basis }: RecordComponent): ComponentDraft => ({
+  ...emptyComponent(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis),
+})
 
 function draftOfWater(water: Water | null): RecordDraft['water'] {
   const { water: empty } = emptyRecord()
@@ -102,13 +94,13 @@ function draftOfWater(water: Water | null): RecordDraft['water'] {
 
 /** A new form with the mix, method, sprayer and those words of a record that carry over, for another block or another day. */
 export function draftLike(record: ApplicationRecord): RecordDraft {
-  const empty = emptyRecord()
   return {
-    ...empty,
+    ...emptyRecord(),
     method: record.method,
     plain: mapPlainFields(({ name, carriesOver }) => (carriesOver ? (record[name] ?? '') : '')),
+    protection: [...record.protection],
     sprayerId: record.sprayerId ?? '',
-    components: record.components.map(({ materialId, lotId, basis }) => ({ key: newId(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis) })),
+    components: record.components.map(draftOfComponent),
     water: draftOfWater(record.water),
   }
 }
@@ -120,18 +112,16 @@ function draftOfWeather(weather: Weather): RecordDraft['weather'] {
 
 /** The form of a record that was started: on this device or on another. */
 export function draftOfRecord(record: ApplicationRecord, zone: string): RecordDraft {
-  const line = record.lines[0]
   const like = draftLike(record)
   return {
     ...like,
     step: record.state === 'started' ? 2 : 1,
-    blockId: line?.blockId ?? '',
+    lines: record.lines.map((line) => draftOfLine(line, zone)),
     plain: mapPlainFields(({ name }) => record[name] ?? ''),
+    components: record.components.map((component) => ({ ...draftOfComponent(component), used: component.used ?? emptyAmount() })),
+    workedInOn: record.workedInOn ?? '',
     doneById: record.doneById ?? '',
     weather: record.weather === null ? like.weather : draftOfWeather(record.weather),
-    start: line?.startedAt ? momentAt(zone, line.startedAt) : like.start,
-    end: line?.endedAt ? momentAt(zone, line.endedAt) : like.end,
-    amount: line?.amount ?? like.amount,
     revision: record.revision,
   }
 }

@@ -26,6 +26,8 @@ export function useFigures(): {
   rate: (value: Figure) => string
   /** As exact as it is written, at most four decimals. */
   plain: (value: Figure) => string
+  /** With so many decimals. */
+  fixed: (value: Figure, digits: number) => string
   hectares: (areaM2: Figure) => string
   unit: (code: string) => string
   units: (codes: readonly string[]) => { value: string; label: string }[]
@@ -44,6 +46,7 @@ export function useFigures(): {
     litres: (value) => unless(value, (known) => `${amount(known)}\u00A0${unit('L')}`),
     rate: (value) => unless(value, (known) => formatRate(known, language.value)),
     plain: (value) => unless(value, (known) => formatNumber(known, {}, language.value)),
+    fixed: (value, digits) => unless(value, (known) => formatNumber(known, { digits }, language.value)),
     hectares: (areaM2) => unless(areaM2, (known) => formatHectares(known, language.value)),
     unit,
     units: (codes) => codes.map((value) => ({ value, label: unit(value) })),

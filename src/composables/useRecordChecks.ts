@@ -20,7 +20,7 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
   const { time } = useClock()
   const checks = computed(() => {
     const zone = stock.value.farm?.zone ?? 'UTC'
-    const { method, lines } = contentOf(draft.value, { zone, sheet: sheet.value, happened: draft.value.step === 2 })
+    const { method, lines } = contentOf(draft.value, { zone, happened: draft.value.step === 2 })
     return recordChecks({
       content: {
         method,

@@ -1,15 +1,20 @@
 import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import { workingLines } from '../../shared/checks/workingLines.ts'
+import { EACH, type Each } from '../../shared/contract/each.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { now } from '../plugins/clock.ts'
 import { useFileQueue } from '../stores/fileQueue.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { contentOf } from './recordContent.ts'
-import { momentAt } from './recordDraft.ts'
+import { momentAt } from './lineDraft.ts'
+import { writtenLines, type RecordDraft } from './recordDraft.ts'
 import { signGaps, startGap, unreadable, type Gaps } from './recordGaps.ts'
 import { useFigures } from './useFigures.ts'
+import { useJars } from './useJars.ts'
+import { useLateEntry } from './useLateEntry.ts'
+import { useLineRows } from './useLineRows.ts'
 import { useMessages } from './useMessages.ts'
 import { useMixRows } from './useMixRows.ts'
 import { useRecordChecks } from './useRecordChecks.ts'
@@ -20,22 +25,30 @@ import { useRecordStock } from './useRecordStock.ts'
 import { useSigning } from './useSigning.ts'
 import { useTask } from './useTask.ts'
 
+/** What the mix is sized or measured by, counted on each line. */
+function askedFor({ method, water, components }: RecordDraft): Each[] {
+  const isSizedBy = (each: Each): boolean => (method !== 'solid' && water.sizedFrom === 'perEach' && water.each === each) || components.some((one) => one.kind === 'perEach' && one.each === each)
+  return EACH.filter(isSizedBy)
+}
+
 /** A refusal speaks of `components.0.basis.kind`; the form has one field for it. */
 function fieldOf(path: string): string {
-  const depth = path.startsWith('weather') ? 2 : 3
+  if (path.startsWith('water')) return 'water'
+  const counted = path.includes('.counts') ? 4 : 3
+  const depth = path.startsWith('weather') ? 2 : counted
   return path.split('.').slice(0, depth).join('.')
 }
 
 /** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
-export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string }) {
+export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string; blockIds: readonly string[] }) {
   const { t } = useI18n()
-  const { language, plain, dayShort } = useFigures()
+  const { language } = useFigures()
   const { problem } = useMessages()
   const { stock, ready: stockReady, error: stockError, again } = useRecordStock()
   const form = useRecordForm({ ...options, stock, stockReady })
   const { draft } = form
   const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
-  const { sheet, block, sprayer } = useRecordSheet(draft, stock)
+  const sheet = useRecordSheet(draft, stock)
   const checking = useRecordChecks(draft, stock, sheet)
   const mix = useMixRows({ draft, sheet, stock })
   const signed = ref<ApplicationRecord | null>(null)
@@ -44,20 +57,23 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
   const files = useFileQueue()
   const send = useRecordSend({
     id: options.id, draft, farmId: () => stock.value.farmId, sendFiles: () => files.sendOf(options.id),
-    content: () => contentOf(draft.value, { zone: zone.value, sheet: sheet.value, happened: draft.value.step === 2 }),
+    content: () => contentOf(draft.value, { zone: zone.value, happened: draft.value.step === 2 }),
   })
   const facts = (): { draft: typeof draft.value; sheet: typeof sheet.value; zone: string } => ({ draft: draft.value, sheet: sheet.value, zone: zone.value })
   const gaps = computed(() => signGaps({ ...facts(), hasStops: checking.reasoned.value.length > 0 }))
 
+  /** The block that Start begins with: the first that was not begun. */
+  const nextLine = computed(() => writtenLines(draft.value).find(({ start, end }) => start.time === '' && end.time === '') ?? null)
   const starting = useTask(async () => {
-    const before = draft.value.start
-    draft.value.start = momentAt(zone.value, now().toISOString())
+    const line = nextLine.value
+    const before = line?.start
+    if (line) line.start = momentAt(zone.value, now().toISOString())
     try {
       const outcome = await send.save()
       draft.value.step = 2
       return outcome
     } catch (error) {
-      draft.value.start = before
+      if (line && before) line.start = before
       throw error
     }
   })
@@ -72,8 +88,17 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
     await form.discard()
   }
 
+  const errors = formErrors({
+    gaps, live: computed(() => ({ ...unreadable(draft.value), ...checking.shortLots.value })), tried, refusals: [starting.error, signing.error],
+  })
+
   return {
-    ...form, ...checking, ...mix, stock, stockError, again, zone, sheet, block, sprayer, signed, signing, sign,
+    ...form, ...checking, ...mix, stock, stockError, again, zone, sheet, signed, signing, sign, errors,
+    lines: useLineRows({ draft, sheet, stock, zone, errors }),
+    jars: useJars({ draft, stock, rows: mix.rows }),
+    asked: computed(() => askedFor(draft.value)),
+    late: useLateEntry({ draft, zone }),
+    startCode: computed(() => stock.value.blocks.find(({ id }) => id === nextLine.value?.blockId)?.code ?? ''),
     start: (): Promise<unknown> => (starting.running.value ? Promise.resolve() : starting.run()),
     starting: starting.running,
     startFailed: computed(() => (starting.error.value === null ? '' : t('records.sign.notStarted', { reason: problem(starting.error.value) }))),
@@ -83,15 +108,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
       if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
       return signing.words.value || (signing.password.value === '' ? t('records.sign.needPassword') : '')
     }),
-    errors: formErrors({ gaps, live: computed(() => ({ ...unreadable(draft.value), ...checking.shortLots.value })), tried, refusals: [starting.error, signing.error] }),
     working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),
-    keepOut: computed(() => {
-      const hold = checking.checks.value.find(({ code }) => code === 'label.reEntry')
-      if (!hold) return ''
-      const { untilOn, untilTime } = hold.text.params
-      if (untilTime === undefined) return t('records.happened.afterEnd', { hours: plain(hold.title.params['hours'] ?? '') })
-      return untilOn === draft.value.end.date ? String(untilTime) : `${dayShort(String(untilOn))} ${untilTime}`
-    }),
   }
 }
 

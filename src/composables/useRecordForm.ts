@@ -1,11 +1,12 @@
 import { onScopeDispose, ref, shallowRef, watch, type Ref } from 'vue'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
-import { recordSheet } from '../../shared/mix/recordSheet.ts'
 import { ApiError, NetworkError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
 import { now } from '../plugins/clock.ts'
 import { isNotFound } from './isNotFound.ts'
-import { contentOf, sheetInputOf } from './recordContent.ts'
+import { emptyLine } from './lineDraft.ts'
+import { readKeptDraft } from './readKeptDraft.ts'
+import { contentOf } from './recordContent.ts'
 import { draftLike, draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
 import type { Draft } from '../stores/draftTypes.ts'
 import { useDrafts } from './useDrafts.ts'
@@ -13,7 +14,8 @@ import type { RecordStock } from './useRecordStock.ts'
 
 /** On the device: the record as far as it is written, for the lists, and the form as it was typed. */
 interface KeptContent {
-  typed: RecordDraft
+  /** Of whichever version of the program wrote it. */
+  typed: unknown
 }
 
 interface RecordFormOptions {
@@ -23,6 +25,8 @@ interface RecordFormOptions {
   fresh: boolean
   /** A record whose mix is taken over; empty for none. */
   likeId: string
+  /** Blocks that a new record starts with. */
+  blockIds: readonly string[]
   stock: Ref<RecordStock>
   stockReady: Ref<boolean>
 }
@@ -38,16 +42,17 @@ export interface RecordForm {
   discard: () => Promise<void>
 }
 
-/** An empty form; the only sprayer of a farm is chosen already. */
-function firstDraft({ sprayers }: RecordStock): RecordDraft {
+/** An empty form on the blocks it was opened for; the only sprayer of a farm is chosen already. */
+function firstDraft({ sprayers, blocks }: RecordStock, blockIds: readonly string[]): RecordDraft {
   const [only, ...others] = sprayers
-  return { ...emptyRecord(), sprayerId: only !== undefined && others.length === 0 ? only.id : '' }
+  const lines = blockIds.filter((wanted) => blocks.some(({ id }) => id === wanted)).map(emptyLine)
+  return { ...emptyRecord(), lines, sprayerId: only !== undefined && others.length === 0 ? only.id : '' }
 }
 
 const isOpen = ({ state }: ApplicationRecord): boolean => state === 'started' || state === 'draft'
 
 /** The form of a record: found on the device, else at the server, else empty; kept at every keystroke. */
-export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFormOptions): RecordForm {
+export function useRecordForm({ id, fresh, likeId, blockIds, stock, stockReady }: RecordFormOptions): RecordForm {
   const drafts = useDrafts(() => stock.value.farmId, 'record')
   const draft = ref<RecordDraft>(emptyRecord())
   const state = ref<'loading' | 'ready' | 'signed'>('loading')
@@ -61,10 +66,10 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
     const kept = await drafts.read<KeptContent>(id)
     if (kept) {
       begunAt.value = kept.begunAt
-      return { ...emptyRecord(), ...kept.content.typed }
+      return readKeptDraft(kept.content.typed)
     }
-    if (fresh && likeId === '') return firstDraft(stock.value)
-    return (await findAtServer()) ?? firstDraft(stock.value)
+    if (fresh && likeId === '') return firstDraft(stock.value, blockIds)
+    return (await findAtServer()) ?? firstDraft(stock.value, blockIds)
   }
 
   /** Whether the server says that a record it knows is open no more; without an answer the draft stays as it is. */
@@ -91,16 +96,12 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
   }
 
   function keep(): void {
-    const { farm, blocks, sprayers } = stock.value
+    const { farm } = stock.value
     const typed = draft.value
     const text = JSON.stringify(typed)
     if (text === keptText) return
     keptText = text
-    const sheet = recordSheet(sheetInputOf(typed, {
-      areaM2: blocks.find((block) => block.id === typed.blockId)?.areaM2 ?? null,
-      tankL: sprayers.find((sprayer) => sprayer.id === typed.sprayerId)?.tankL ?? null,
-    }))
-    drafts.write(id, 'record', { ...contentOf(typed, { zone: farm?.zone ?? 'UTC', sheet, happened: true }), typed })
+    drafts.write(id, 'record', { ...contentOf(typed, { zone: farm?.zone ?? 'UTC', happened: true }), typed })
     begunAt.value ??= now().toISOString()
   }
 
@@ -133,7 +134,7 @@ export function useRecordForm({ id, fresh, likeId, stock, stockReady }: RecordFo
 
   /** Another tab has typed in the same draft: its words are shown here at once. */
   function takeOver({ content, begunAt: begun }: Draft<KeptContent>): void {
-    const typed = { ...emptyRecord(), ...content.typed }
+    const typed = readKeptDraft(content.typed)
     if (isDiscarded || state.value !== 'ready' || JSON.stringify(typed) === keptText) return
     begunAt.value = begun
     show(typed)

@@ -10,7 +10,8 @@ export function useRecordSince({ draft, begunAt, zone }: { draft: Ref<RecordDraf
   const { t } = useI18n()
   const { day } = useFigures()
   return computed(() => {
-    if (draft.value.revision !== null && draft.value.start.time !== '') return t('records.startedSince', { time: draft.value.start.time })
+    const started = draft.value.lines.find(({ start }) => start.time !== '')?.start.time
+    if (draft.value.revision !== null && started !== undefined) return t('records.startedSince', { time: started })
     if (begunAt.value === null) return t('records.draftNew')
     const begunOn = civilDateIn(zone.value, begunAt.value)
     const time = civilTimeIn(zone.value, begunAt.value)

@@ -1,13 +1,22 @@
 import { defineStore } from 'pinia'
 import { ref, watch } from 'vue'
+import { z } from 'zod'
+import { amountUnit, positiveDecimal } from '../../shared/contract/quantity.ts'
+import { lineText } from '../../shared/contract/text.ts'
 import type { Language } from '../../shared/messages/translate.ts'
+import type { Measure } from '../../shared/units/inMeasures.ts'
 import { readLanguage, showLanguage } from '../plugins/i18n.ts'
 import { readSetting, writeSetting } from './settings.ts'
 
 /** Day, or dark for the cab before sunrise. */
 export type Light = 'day' | 'dawn'
 
-/** What a person chose for this device: language and light. */
+const measuresSchema = z.array(z.strictObject({ name: lineText(24).nullable(), value: positiveDecimal, unit: amountUnit })).max(20)
+const one = (unit: Measure['unit'], value = '1'): Measure => ({ name: null, value, unit })
+/** What stands in most mixing sheds and kitchens, until a person says otherwise. */
+const USUAL_MEASURES: Measure[] = [one('galUS'), one('qtUS'), one('cupUS'), one('tbspUS'), one('tspUS'), one('lb'), one('oz')]
+
+/** What a person chose for this device: language, light, and the measures at hand. */
 export const usePreferences = defineStore('preferences', () => {
   const language = ref<Language>(readSetting('language', ['en', 'es']) ?? languageOfDevice())
   const light = ref<Light>(readSetting('light', ['day', 'dawn']) ?? 'day')
@@ -51,9 +60,28 @@ export const usePreferences = defineStore('preferences', () => {
     showLanguage(language.value)
   }
 
-  return { language, light, offerLanguage, chooseLanguage, start }
+  const measures = ref<Record<string, Measure[]>>({})
+  /** The measures that this account has at hand. */
+  function measuresOf(accountId: string): Measure[] {
+    return measures.value[accountId] ?? readMeasures(accountId) ?? USUAL_MEASURES
+  }
+  function keepMeasures(accountId: string, chosen: Measure[]): void {
+    measures.value = { ...measures.value, [accountId]: chosen }
+    writeSetting(`measures.${accountId}`, JSON.stringify(chosen))
+  }
+
+  return { language, light, offerLanguage, chooseLanguage, start, measuresOf, keepMeasures }
 })
 
 function languageOfDevice(): Language {
   return navigator.language.toLowerCase().startsWith('es') ? 'es' : 'en'
+}
+
+function readMeasures(accountId: string): Measure[] | null {
+  try {
+    const read = measuresSchema.safeParse(JSON.parse(readSetting(`measures.${accountId}`) ?? 'null'))
+    return read.success ? read.data : null
+  } catch {
+    return null
+  }
 }

@@ -1,12 +1,10 @@
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { checkBoundary } from '../../../shared/geo/checkBoundary.ts'
-import { outsideShare } from '../../../shared/geo/outsideShare.ts'
+import { MOST_OUTSIDE, outsideShare } from '../../../shared/geo/outsideShare.ts'
 import { partArea } from '../../../shared/geo/partArea.ts'
 import type { FieldError } from '../../errors.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 
-/** A drawn part may lie this share beyond its block: a shaky finger, not another field. */
-const MOST_OUTSIDE = 0.02
 /** Parts of one block together, over its area: room for rounding alone. */
 const MOST_TOGETHER = 1.001
 

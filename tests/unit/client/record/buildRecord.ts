@@ -1,6 +1,7 @@
 import type { Block } from '../../../../shared/contract/block.ts'
 import type { ApplicationRecord } from '../../../../shared/contract/record.ts'
-import { emptyRecord, type RecordDraft } from '../../../../src/composables/recordDraft.ts'
+import { emptyLine, type LineDraft } from '../../../../src/composables/lineDraft.ts'
+import { emptyComponent, emptyRecord, type ComponentDraft, type RecordDraft } from '../../../../src/composables/recordDraft.ts'
 
 /** A block of about a hectare, with its outline. */
 export const buildBlock = (over: Partial<Block> = {}): Block => ({
@@ -8,11 +9,19 @@ export const buildBlock = (over: Partial<Block> = {}): Block => ({
   geometry: { type: 'Polygon', coordinates: [[[-121, 38], [-120.9989, 38], [-120.9989, 38.0009], [-121, 38.0009], [-121, 38]]] }, ...over,
 })
 
+/** A line on the block of `buildBlock`, worked from 06:50 to 07:36. */
+export const buildLine = (over: Partial<LineDraft> = {}): LineDraft => ({
+  ...emptyLine('b1'), start: { date: '2026-06-16', time: '06:50', offset: '' }, end: { time: '07:36', offset: '', nextDay: false }, ...over,
+})
+
+/** One ingredient, 1 part to 20. */
+export const buildComponent = (over: Partial<ComponentDraft> = {}): ComponentDraft => ({ ...emptyComponent(), key: 'k1', materialId: 'm1', lotId: 'l1', value: '20', ...over })
+
 /** A form filled in far enough to be started: 750 L of water, one ingredient 1 to 20. */
 export const buildDraft = (over: Partial<RecordDraft> = {}): RecordDraft => ({
   ...emptyRecord(),
-  blockId: 'b1',
-  components: [{ key: 'k1', materialId: 'm1', lotId: 'l1', kind: 'ratio', value: '20', unit: 'L', each: 'plant', reading: 'to' }],
+  lines: [emptyLine('b1')],
+  components: [buildComponent()],
   water: { sizedFrom: 'water', value: '750', unit: 'L', source: '', each: 'plant', component: 0 },
   ...over,
 })

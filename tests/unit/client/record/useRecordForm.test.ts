@@ -16,7 +16,7 @@ const stock: RecordStock = { farmId: 'f1', farm: null, blocks: [], sprayers: [],
 const kept = (over: Partial<RecordDraft>): Kept => ({ begunAt: '2026-06-16T06:00:00.000Z', content: { typed: buildDraft(over) } })
 
 async function open() {
-  const form = effectScope().run(() => useRecordForm({ id: 'r1', fresh: false, likeId: '', stock: ref(stock), stockReady: ref(true) }))
+  const form = effectScope().run(() => useRecordForm({ id: 'r1', fresh: false, likeId: '', blockIds: [], stock: ref(stock), stockReady: ref(true) }))
   if (form === undefined) throw new TypeError('The form did not open')
   await flushPromises()
   return form
@@ -54,13 +54,13 @@ describe('a draft that another tab types in', () => {
     drafts.read.mockResolvedValue(kept({}))
     const { draft } = await open()
     const take = drafts.onTakenOver.mock.calls[0]?.[1] as (found: Kept) => void
-    take(kept({ blockId: 'b2' }))
+    take(kept({ sprayerId: 's2' }))
     await flushPromises()
-    expect(draft.value.blockId).toBe('b2')
+    expect(draft.value.sprayerId).toBe('s2')
     expect(drafts.write).not.toHaveBeenCalled()
-    draft.value.blockId = 'b3'
+    draft.value.sprayerId = 's3'
     await flushPromises()
-    expect(drafts.write.mock.calls[0]).toMatchObject(['r1', 'record', { typed: { blockId: 'b3' } }])
+    expect(drafts.write.mock.calls[0]).toMatchObject(['r1', 'record', { typed: { sprayerId: 's3' } }])
   })
 
   it('is left alone once it is signed here', async () => {
@@ -68,7 +68,7 @@ describe('a draft that another tab types in', () => {
     const { draft, discard } = await open()
     await discard()
     const take = drafts.onTakenOver.mock.calls[0]?.[1] as (found: Kept) => void
-    take(kept({ blockId: 'b2' }))
-    expect(draft.value.blockId).toBe('b1')
+    take(kept({ sprayerId: 's2' }))
+    expect(draft.value.sprayerId).toBe('')
   })
 })
