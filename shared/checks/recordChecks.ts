@@ -1,6 +1,8 @@
 import type { Check } from '../contract/record.ts'
 import { appliedShare } from './appliedShare.ts'
 import { buildCheck, words } from './buildCheck.ts'
+import { judgeCounts } from './judgeCounts.ts'
+import { judgeDeltaT } from './judgeDeltaT.ts'
 import { judgePreHarvest, judgeReEntry } from './judgeHolds.ts'
 import { judgeLabelRate } from './judgeLabelRate.ts'
 import { judgeLabelStrength } from './judgeLabelStrength.ts'
@@ -60,6 +62,8 @@ export function recordChecks(facts: RecordFacts): Check[] {
     judgeReEntry(facts, materials),
     judgePreHarvest(facts, materials),
     judgeWind(facts.content),
+    judgeDeltaT(facts.content),
+    ...judgeCounts(facts),
     ...checksOfLots(facts),
   ]
   return sortChecks(found.filter((check) => check !== null))

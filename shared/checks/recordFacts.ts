@@ -18,7 +18,7 @@ export interface FactContent {
   lines: readonly FactLine[]
   /** In the order of `sheet.components`. */
   components: readonly { materialId: string; lotId: string | null }[]
-  weather: Pick<Weather, 'wind'> | null
+  weather: Pick<Weather, 'wind' | 'air' | 'humidity'> | null
 }
 
 export type FactMaterial = Pick<Material, 'id' | 'name' | 'organicStatus' | 'statusBasis' | 'label'>

@@ -2,10 +2,12 @@ import { z } from 'zod'
 import type { Block } from '../contract/block.ts'
 import type { Lot, Material } from '../contract/input.ts'
 import type { Sprayer } from '../contract/farm.ts'
-import { basisSchema, methodSchema, waterSchema } from '../contract/recordContent.ts'
+import { basisSchema, countsSchema, methodSchema, partSchema, waterSchema } from '../contract/recordContent.ts'
+import { partArea } from '../geo/partArea.ts'
 import { formatDayShort } from '../messages/formatDayShort.ts'
 import { recordSheet } from '../mix/recordSheet.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
+import { lineCounts } from '../records/lineCounts.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { formatHectares, formatVolumeL } from '../units/formatQuantity.ts'
 import { presentRate, type RegisterPlace } from './presentRow.ts'
@@ -14,7 +16,14 @@ import type { RegisterLine } from './registerLine.ts'
 /** Half-typed content of a record: whatever does not read is left out of the line. */
 const draftSchema = z.object({
   method: methodSchema.nullable().catch(null),
-  lines: z.array(z.object({ blockId: z.string().nullable().catch(null), startedAt: z.string().nullable().catch(null) })).catch([]),
+  lines: z
+    .array(z.object({
+      blockId: z.string().nullable().catch(null),
+      part: partSchema.catch({ kind: 'whole' }),
+      counts: countsSchema.catch({}),
+      startedAt: z.string().nullable().catch(null),
+    }))
+    .catch([]),
   components: z
     .array(z.object({
       materialId: z.string().nullable().catch(null),
@@ -47,7 +56,7 @@ export interface FarmStock {
 export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zone }: RegisterPlace): RegisterLine {
   const content = draftSchema.catch({ method: null, lines: [], components: [], water: null, sprayerId: null }).parse(draft.content)
   const blocks = content.lines.flatMap(({ blockId }) => stock.blocks.find(({ id }) => id === blockId) ?? [])
-  const sheet = blocks.length === 0 ? null : sheetOf(content, blocks, stock)
+  const sheet = blocks.length === 0 ? null : sheetOf(content, stock)
   const totalL = sheet?.totalL ?? null
   const at = content.lines[0]?.startedAt ?? draft.begunAt
   return {
@@ -73,9 +82,13 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zo
   }
 }
 
-function sheetOf(content: DraftContent, blocks: readonly Block[], stock: FarmStock): RecordSheet {
+function sheetOf(content: DraftContent, stock: FarmStock): RecordSheet {
   return recordSheet({
-    lines: blocks.map(({ areaM2 }) => ({ areaM2 })),
+    lines: content.lines.flatMap((line) => {
+      const block = stock.blocks.find(({ id }) => id === line.blockId)
+      return block ? [{ areaM2: partArea(line.part, block.areaM2), counts: lineCounts(line) }] : []
+    }),
+    isDry: content.method === 'solid',
     water: content.water,
     tankL: stock.sprayers.find(({ id }) => id === content.sprayerId)?.tankL ?? null,
     components: content.components.flatMap(({ basis }) => (basis === null ? [] : [{ basis }])),

@@ -58,7 +58,7 @@ test('a stop bars Start and never the signature: why, whom you tell, what was do
 
   await form.main.getByRole('button', { name: say('records.ready.alreadyDrench') }).click()
   await expect(form.step(2)).toHaveAttribute('aria-current', 'step')
-  const [start, end] = [field(form.main, say('records.happened.start')), field(form.main, say('records.happened.end'))]
+  const [start, end] = [form.time('start', things.block.code), form.time('end', things.block.code)]
   await start.fill('00:10')
   await end.fill('00:40')
   await field(form.main, say('records.sign.password')).fill('not looked at yet')

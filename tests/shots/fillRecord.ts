@@ -20,12 +20,20 @@ async function scrollTo(thing: Locator, block: 'start' | 'center'): Promise<void
   await thing.evaluate((element, place) => { element.scrollIntoView({ block: place }) }, block)
 }
 
+/** Ticks blocks of the demo farm by their codes. */
+async function pickBlocks({ page, main }: RecordForm, ...codes: string[]): Promise<void> {
+  await main.getByRole('button', { name: say('recordForm.pick.open') }).click()
+  const list = page.getByRole('dialog', { name: say('recordForm.pick.title') })
+  for (const code of codes) await list.getByRole('checkbox', { name: new RegExp(`^${code} `) }).check()
+  await list.getByRole('button', { name: /^Add \d/ }).click()
+}
+
 /** On the desk: nettle ferment and potash soap on A3, the soap over its label, so that a stop bars Start. */
 export async function fillSpray(page: Page): Promise<RecordForm> {
   const form = new RecordForm(page, false)
   const { main } = form
   await form.open()
-  await choose(main, say('records.where.block'), 'A3')
+  await pickBlocks(form, 'A3', 'A2')
   await field(main, say('records.plain.purpose.label')).fill('aphids on shoot tips')
   await form.setComponent(say('records.mix.unnamed', { number: 1 }), { material: 'Nettle ferment', lot: 'NF-31', kind: 'ratio', value: '20' })
   await form.addComponent()
@@ -45,7 +53,7 @@ export async function fillDrench(page: Page): Promise<RecordForm> {
   const { main } = form
   await form.open()
   await segment(main, say('records.method.drench'))
-  await choose(main, say('records.where.block'), 'V2')
+  await pickBlocks(form, 'V2')
   await form.setComponent(say('records.mix.unnamed', { number: 1 }), { material: 'Leaf-mould extract', lot: 'LM-12', kind: 'ratio', value: '20' })
   await form.setWater('456')
   await form.chooseSprayer('D1')
@@ -55,15 +63,19 @@ export async function fillDrench(page: Page): Promise<RecordForm> {
   return form
 }
 
-/** What happened, this morning, with what was measured and the password typed. */
-export async function fillHappened(form: RecordForm, { start, end, litres }: { start: string; end: string; litres: string }): Promise<void> {
+interface Happened { code: string; start: string; end: string; litres: string }
+
+/** What happened, this morning, block after block, with what was measured and the password typed. */
+export async function fillHappened(form: RecordForm, lines: readonly Happened[]): Promise<void> {
   const { main } = form
   await form.step(2).click()
-  await field(main, say('records.happened.start')).fill(start)
-  await field(main, say('records.happened.end')).fill(end)
-  await segment(main, say('records.known.measured'))
-  await field(main, say('records.happened.amount')).fill(litres)
+  for (const { code, start, end, litres } of lines) {
+    await form.time('start', code).fill(start)
+    await form.time('end', code).fill(end)
+    await form.amount(code).fill(litres)
+  }
   await form.password.fill('ten letters')
+  await main.getByRole('heading', { level: 1 }).scrollIntoViewIfNeeded()
 }
 
 /** What is said of a stop that was sprayed all the same. */

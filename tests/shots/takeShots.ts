@@ -66,7 +66,7 @@ async function shootRecords(shooting: Shooting): Promise<void> {
     await withPage(shooting, { size, who: 'manager' }, async (page) => {
       const form = await fillSpray(page)
       await shoot(page, shooting.folder, size === 'desk' ? 'd-03-record-ready' : 't-record-ready')
-      await fillHappened(form, { start: '05:50', end: '06:36', litres: '745' })
+      await fillHappened(form, [{ code: 'A3', start: '05:50', end: '06:36', litres: '374' }, { code: 'A2', start: '06:44', end: '07:37', litres: '412' }])
       await fillStop(form)
       await shoot(page, shooting.folder, size === 'desk' ? 'd-09-record-happened' : 't-record-happened')
     })
@@ -74,7 +74,7 @@ async function shootRecords(shooting: Shooting): Promise<void> {
   await withPage(shooting, { size: 'phone', who: 'applicator' }, async (page) => {
     const form = await fillDrench(page)
     await shoot(page, shooting.folder, 'm-02-record-mix')
-    await fillHappened(form, { start: '05:38', end: '06:12', litres: '474' })
+    await fillHappened(form, [{ code: 'V2', start: '05:38', end: '06:12', litres: '474' }])
     await shoot(page, shooting.folder, 'm-06-happened')
   })
 }

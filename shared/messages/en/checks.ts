@@ -79,4 +79,16 @@ export const checks = {
     within: '{low} to {high}\u00A0{unit} (3 to 8\u00A0mph).',
     source: 'common practice, 3 to 8\u00A0mph',
   },
+  deltaT: {
+    title: 'Delta T',
+    notKnown: 'Air and humidity were not both read. The house rule is {low} to {high} {unit}.',
+    under: '{value} {unit}, under {low} to {high}: drops hang in damp air and carry far.',
+    over: '{value} {unit}, over {low} to {high}: drops dry before they wet a leaf.',
+    within: '{low} to {high} {unit}. Worked out from air and humidity, Stull 2011.',
+    source: 'common practice, 2 to 8 °C',
+  },
+  counts: {
+    title: 'How many on {code}',
+    text: 'The mix is measured by count, and this line has none.',
+  },
 }

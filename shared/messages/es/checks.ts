@@ -79,4 +79,16 @@ export const checks = {
     within: 'De {low} a {high}\u00A0{unit} (de 3 a 8\u00A0mph).',
     source: 'práctica común, de 3 a 8\u00A0mph',
   },
+  deltaT: {
+    title: 'Delta T',
+    notKnown: 'No se leyeron aire y humedad a la vez. La norma de la casa es de {low} a {high} {unit}.',
+    under: '{value} {unit}, por debajo de {low} a {high}: las gotas quedan en el aire húmedo y llegan lejos.',
+    over: '{value} {unit}, por encima de {low} a {high}: las gotas se secan antes de mojar la hoja.',
+    within: 'De {low} a {high} {unit}. Calculado con aire y humedad, Stull 2011.',
+    source: 'práctica común, de 2 a 8 °C',
+  },
+  counts: {
+    title: 'Cuántos en {code}',
+    text: 'La mezcla se mide por recuento, y esta línea no lo tiene.',
+  },
 }

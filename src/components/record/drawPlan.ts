@@ -8,6 +8,8 @@ export interface PlanDrawing {
   /** Where the block's label stands, pixels. */
   x: number
   y: number
+  /** Further blocks that are treated in the same work. */
+  also: { code: string; path: string; x: number; y: number }[]
   neighbours: { code: string; path: string; x: number; y: number; isNamed: boolean }[]
   /** Scale bar: metres and the pixels they take. */
   barM: number
@@ -18,12 +20,18 @@ const MARGIN_PX = 20
 /** Room a neighbour's code needs to the frame, and the scale bar below it. */
 const LABEL_PX = 14
 
-/** Blocks laid on one sheet, north up, so that the first fills it; the others as far as they show. */
-export function drawPlan(block: Pick<Block, 'code' | 'geometry'>, neighbours: readonly Pick<Block, 'code' | 'geometry'>[], { width, height }: Frame): PlanDrawing {
+type Outlined = Pick<Block, 'code' | 'geometry'>
+
+/** Blocks laid on one sheet, north up, so that those treated fill it; the others as far as they show. */
+export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { width, height }: Frame, also: readonly Outlined[] = []): PlanDrawing {
   const plan = toPlan({ geometry: block.geometry })
-  const scale = Math.min((width - 2 * MARGIN_PX) / plan.widthM, (height - 2 * MARGIN_PX) / plan.heightM)
-  const middleX = plan.minX + plan.widthM / 2
-  const middleY = plan.minY + plan.heightM / 2
+  const treated = [plan, ...also.map(({ geometry }) => toPlan({ geometry, origin: plan.origin }))]
+  const [minX, minY] = [Math.min(...treated.map((one) => one.minX)), Math.min(...treated.map((one) => one.minY))]
+  const widthM = Math.max(...treated.map((one) => one.minX + one.widthM)) - minX
+  const heightM = Math.max(...treated.map((one) => one.minY + one.heightM)) - minY
+  const scale = Math.min((width - 2 * MARGIN_PX) / widthM, (height - 2 * MARGIN_PX) / heightM)
+  const middleX = minX + widthM / 2
+  const middleY = minY + heightM / 2
   const place = (x: number, y: number): [number, number] => [width / 2 + (x - middleX) * scale, height / 2 - (y - middleY) * scale]
   const lay = (geometry: Boundary): { path: string; x: number; y: number } => {
     const laid = toPlan({ geometry, origin: plan.origin })
@@ -33,6 +41,7 @@ export function drawPlan(block: Pick<Block, 'code' | 'geometry'>, neighbours: re
   const barM = niceScaleBar((width * 0.4) / scale)
   return {
     ...lay(block.geometry),
+    also: also.map(({ code, geometry }) => ({ code, ...lay(geometry) })),
     neighbours: neighbours
       .map(({ code, geometry }) => ({ code, ...lay(geometry) }))
       .filter(({ x, y }) => x > -width && x < 2 * width && y > -height && y < 2 * height)

@@ -33,20 +33,26 @@ export class RecordForm {
     return this.page.getByRole('button', { name: label, exact: !this.isPhone })
   }
 
-  chooseBlock({ code, name }: Block): Promise<void> {
-    return choose(this.main, say('records.where.block'), `${code} ${name}`)
+  /** Ticks blocks in the list and adds them, in that order. */
+  async chooseBlocks(...blocks: readonly Block[]): Promise<void> {
+    await this.main.getByRole('button', { name: new RegExp(`^(${say('recordForm.pick.open')}|${say('recordForm.pick.more')})$`) }).click()
+    const list = this.page.getByRole('dialog', { name: say('recordForm.pick.title') })
+    for (const { code, name } of blocks) await list.getByRole('checkbox', { name: new RegExp(`^${code} ${name}`) }).check()
+    await list.getByRole('button', { name: /^Add \d/ }).click()
+    await expect(list).toBeHidden()
   }
 
   async setWater(litres: string): Promise<void> {
-    await this.openLine(say('records.mix.carrier'))
+    if (!this.isPhone) await this.openLine(say('records.mix.carrier'))
     await field(this.main, say('records.mix.carrierAmount')).fill(litres)
   }
 
   async setComponent(shown: string, wanted: { material: string; lot: string; kind: 'ratio' | 'perArea' | 'perTank'; value: string }): Promise<void> {
     await this.openLine(shown)
     await choose(this.main, say('records.mix.material'), wanted.material)
-    await segment(this.main, say(`records.mix.${wanted.kind}`))
-    await field(this.main, say(`records.mix.${{ ratio: 'parts', perArea: 'rate', perTank: 'eachTank' }[wanted.kind]}`)).fill(wanted.value)
+    await choose(this.main, say('records.mix.basis'), say(`recordForm.mix.choice.${wanted.kind === 'ratio' ? 'ratioTo' : wanted.kind}`))
+    const labels = { ratio: 'records.mix.parts', perArea: 'records.mix.rate', perTank: 'recordForm.mix.label.perTank' } as const
+    await field(this.main, say(labels[wanted.kind])).fill(wanted.value)
     await segment(this.main, new RegExp(`^${wanted.lot}`))
   }
 
@@ -67,7 +73,7 @@ export class RecordForm {
   /** A soil drench of one ingredient, 1 part to 20 of 200 L: whole, ready to start. */
   async fillDrench({ block, first, sprayer }: Things): Promise<void> {
     await segment(this.main, say('records.method.drench'))
-    await this.chooseBlock(block)
+    await this.chooseBlocks(block)
     await this.setComponent(say('records.mix.unnamed', { number: 1 }), { material: first.material.name, lot: first.lot.code, kind: 'ratio', value: '20' })
     await this.setWater('200')
     await this.chooseSprayer(sprayer.code)
@@ -84,8 +90,26 @@ export class RecordForm {
   }
 
   async endNow(): Promise<void> {
-    await this.main.getByRole('button', { name: `${say('records.happened.end')}: ${say('records.happened.now')}` }).click()
-    await expect(field(this.main, say('records.happened.end'))).toHaveValue(/^\d\d:\d\d$/)
+    if (this.isPhone) {
+      await this.main.getByRole('button', { name: /^Finish / }).click()
+    } else {
+      await this.main.getByRole('button', { name: new RegExp(`, end: ${say('records.happened.now')}$`) }).first().click()
+    }
+  }
+
+  /** Start or end of a line. On a phone only the open line has fields. */
+  time(at: 'start' | 'end', code: string): Locator {
+    return field(this.main, this.isPhone ? say(`records.happened.${at}`) : say(`recordForm.line.${at}Of`, { code }))
+  }
+
+  /** The day of the work, YYYY-MM-DD. */
+  async setDay(day: string): Promise<void> {
+    await this.main.getByLabel(say('records.happened.day'), { exact: true }).fill(day)
+  }
+
+  /** The amount of a line, likewise. */
+  amount(code: string): Locator {
+    return field(this.main, this.isPhone ? say('records.happened.amount') : say('recordForm.line.amountOf', { code }))
   }
 
   get password(): Locator {
@@ -93,7 +117,7 @@ export class RecordForm {
   }
 
   get signButton(): Locator {
-    return this.main.getByRole('button', { name: new RegExp(`^(${say('records.sign.sign')}|${say('records.sign.asItHappened')})$`) })
+    return this.main.getByRole('button', { name: new RegExp(`^(${say('records.sign.sign')}|${say('records.sign.asItHappened')}|Sign \\d+ block lines)$`) })
   }
 
   async sign(password = PASSWORD): Promise<void> {

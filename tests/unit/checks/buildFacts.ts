@@ -31,7 +31,9 @@ export const buildFacts = (over: Partial<RecordFacts> = {}): RecordFacts => ({
     method: 'foliar',
     lines: [{ blockId: 'b1', startedAt: null, endedAt: null, amount: null }],
     components: [{ materialId: 'm1', lotId: 'l1' }],
-    weather: { wind: { value: '2', unit: 'ms', kind: 'readHere' } },
+    weather: {
+      wind: { value: '2', unit: 'ms', kind: 'readHere' }, air: { value: '20', unit: 'degC', kind: 'station' }, humidity: { value: '50', unit: '%', kind: 'station' },
+    },
   },
   sheet: buildSheet(),
   blocks: [{ id: 'b1', code: 'A3' }, { id: 'b2', code: 'A2' }],

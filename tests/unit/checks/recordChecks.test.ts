@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { judgeDeltaT } from '../../../shared/checks/judgeDeltaT.ts'
 import { judgeWind } from '../../../shared/checks/judgeWind.ts'
 import { recordChecks } from '../../../shared/checks/recordChecks.ts'
 import { tallyChecks } from '../../../shared/checks/tallyChecks.ts'
@@ -12,7 +13,7 @@ const ofCode = (facts: Parameters<typeof recordChecks>[0], code: string) => reco
 
 describe('wind', () => {
   const wind = (value: string, unit: 'ms' | 'mph' | 'kmh' | 'knot', method: 'foliar' | 'drench' = 'foliar') =>
-    judgeWind({ ...buildFacts().content, method, weather: { wind: { value, unit, kind: 'readHere' } } })
+    judgeWind({ ...buildFacts().content, method, weather: { wind: { value, unit, kind: 'readHere' }, air: null, humidity: null } })
 
   // 3 mph is 1.34112 m/s and 8 mph 3.57632 m/s exactly (mile 1609.344 m).
   it.each([
@@ -31,11 +32,43 @@ describe('wind', () => {
 
   it('not read is not known', () => {
     expect(judgeWind({ ...buildFacts().content, weather: null })?.verdict).toBe('unknown')
-    expect(judgeWind({ ...buildFacts().content, weather: { wind: null } })).toMatchObject({ verdict: 'unknown', text: { id: 'checks.wind.notRead' } })
+    expect(judgeWind({ ...buildFacts().content, weather: { wind: null, air: null, humidity: null } })).toMatchObject({ verdict: 'unknown', text: { id: 'checks.wind.notRead' } })
   })
 
   it('does not judge a drench', () => {
     expect(wind('9', 'ms', 'drench')).toBeNull()
+  })
+})
+
+describe('delta T', () => {
+  const air = (value: string, unit: 'degC' | 'degF', humidity: string, method: 'foliar' | 'drench' | 'injected' = 'foliar') =>
+    judgeDeltaT({ ...buildFacts().content, method, weather: { wind: null, air: { value, unit, kind: 'readHere' }, humidity: { value: humidity, unit: '%', kind: 'readHere' } } })
+
+  // Wet bulbs by Stull 2011: 20 °C and 50 % give 13.699 °C (NCAR, wetbulb_stull, example 1); the advised band is 2 to 8 °C (T. Wolf; GRDC).
+  it.each([
+    { value: '20', unit: 'degC', humidity: '50', verdict: 'pass', id: 'within', figure: 6.3 },
+    { value: '68', unit: 'degF', humidity: '50', verdict: 'pass', id: 'within', figure: 6.3 },
+    { value: '25', unit: 'degC', humidity: '40', verdict: 'caution', id: 'over', figure: 8.6 },
+    { value: '10', unit: 'degC', humidity: '90', verdict: 'caution', id: 'under', figure: 1.1 },
+  ] as const)('$value $unit at $humidity % is $verdict', ({ value, unit, humidity, verdict, id, figure }) => {
+    expect(air(value, unit, humidity)).toMatchObject({ code: 'house.deltaT', rests: 'house', verdict, about: 'air', text: { id: `checks.deltaT.${id}` }, figure: { params: { value: figure } } })
+  })
+
+  it('of air or humidity that was not read, or out of the formula’s range, is not known', () => {
+    expect(judgeDeltaT({ ...buildFacts().content, weather: null })?.verdict).toBe('unknown')
+    expect(air('20', 'degC', '100')?.verdict).toBe('unknown')
+  })
+
+  it.each(['drench', 'injected'] as const)('does not judge: %s', (method) => {
+    expect(air('30', 'degC', '20', method)).toBeNull()
+  })
+})
+
+describe('counts that a mix is measured by', () => {
+  it('are not known on each line that lacks them', () => {
+    const facts = buildFacts({ sheet: buildSheet({ findings: [{ code: 'sheet.count_needed', params: { each: 'plant' }, path: 'lines.0.counts' }] }) })
+    expect(ofCode(facts, 'mix.counts')).toEqual([expect.objectContaining({ verdict: 'unknown', about: 'line:0', title: { id: 'checks.counts.title', params: { code: 'A3' } } })])
+    expect(ofCode(buildFacts(), 'mix.counts')).toEqual([])
   })
 })
 
@@ -54,6 +87,7 @@ describe('all checks of a record', () => {
       'label pass label.strength',
       'certifier pass certifier.status',
       'house pass house.wind',
+      'house pass house.deltaT',
       'house pass lot.left',
     ])
     expect(tallyChecks(checks)).toEqual({ stop: 1, caution: 2, unknown: 1 })
