@@ -141,6 +141,7 @@ export const recordForm = {
   },
   worn: {
     label: 'Worn',
+    none: 'none noted', change: 'Change',
     gloves: 'gloves', eyes: 'goggles', breathing: 'mask', coverall: 'coverall', apron: 'apron', boots: 'boots', longSleeves: 'long sleeves', hat: 'hat',
   },
   sign: { lines: 'Sign {count} block lines', oneForAll: 'One signature for {count} lines. The number comes with it.' },

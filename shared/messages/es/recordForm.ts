@@ -141,6 +141,7 @@ export const recordForm = {
   },
   worn: {
     label: 'Protección puesta',
+    none: 'sin anotar', change: 'Cambiar',
     gloves: 'guantes', eyes: 'gafas', breathing: 'mascarilla', coverall: 'mono', apron: 'delantal', boots: 'botas', longSleeves: 'manga larga', hat: 'sombrero',
   },
   sign: { lines: 'Firmar {count} líneas', oneForAll: 'Una firma para {count} líneas. El número llega con ella.' },

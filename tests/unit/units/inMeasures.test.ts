@@ -23,7 +23,7 @@ describe('an amount in the measures at hand', () => {
     { name: 'says how far under it is', value: '750', code: 'mL' as const, measures: [unit('cupUS')], wanted: { scoops: ['3 cupUS'], errorPct: -5.36 } },
     { name: 'counts a vessel by what it holds', value: '46', code: 'L' as const, measures: [bucket, jug], wanted: { scoops: ['2 bucket', '12 jug'], errorPct: 0 } },
     { name: 'takes fewer scoops within half a percent', value: '20.05', code: 'L' as const, measures: [bucket, jug, unit('tspUS')], wanted: { scoops: ['1 bucket'], errorPct: -0.25 } },
-    { name: 'weighs what is weighed', value: '1', code: 'kg' as const, measures: [unit('lb'), unit('oz'), unit('cupUS')], wanted: { scoops: ['2 lb', '3 oz'], errorPct: -0.77 } },
+    { name: 'weighs what is weighed', value: '1', code: 'kg' as const, measures: [unit('lb'), unit('oz'), unit('cupUS')], wanted: { scoops: ['2 lb', '3 oz'], errorPct: -0.78 } },
     { name: 'is silent without a measure of its kind', value: '1', code: 'kg' as const, measures: kitchen, wanted: null },
     { name: 'is silent where nobody would count so far', value: '900', code: 'L' as const, measures: [unit('tspUS')], wanted: null },
     { name: 'is silent where nothing comes near', value: '1', code: 'mL' as const, measures: [bucket], wanted: null },
