@@ -14,7 +14,7 @@ export interface Measure {
 /** So many of one measure. */
 export interface Scoop { measure: Measure; count: number }
 
-export interface InMeasures {
+interface InMeasures {
   scoops: Scoop[]
   /** What the measures hold less what was asked, percent of what was asked: below 0 is under. */
   errorPct: number

@@ -2,7 +2,7 @@
 export const FELT_WINDS = ['calm', 'light', 'leaves', 'branches'] as const
 export type FeltWind = (typeof FELT_WINDS)[number]
 
-export interface FeltRange {
+interface FeltRange {
   /** Beaufort numbers it covers. */
   beaufort: readonly [from: number, to: number]
   /** Metres a second at 10 m over open ground, both ends taken in. */

@@ -7,7 +7,7 @@ import type { ComponentDraft } from './recordDraft.ts'
 type Measured = Pick<Material, 'measuredIn'> | null
 
 /** One way to measure an ingredient out, as it is chosen from a list: the kind of its basis, how a ratio is read, what is counted. */
-export type BasisChoice = 'ratioTo' | 'ratioIn' | 'perArea' | Each | 'perTank' | 'total'
+type BasisChoice = 'ratioTo' | 'ratioIn' | 'perArea' | Each | 'perTank' | 'total'
 
 /** How a material may be measured out: by weight there are no parts of water, and what is spread dry has neither water nor tank. */
 export function basisChoices(material: Measured, method: Method): BasisChoice[] {

@@ -14,7 +14,7 @@ import { useFigures } from './useFigures.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
 /** How far the work on a line is. */
-export type LineState = 'waiting' | 'going' | 'done' | 'skipped'
+type LineState = 'waiting' | 'going' | 'done' | 'skipped'
 
 /** One block line as the form shows it; empty texts where nothing is known yet. */
 export interface LineRow {
@@ -59,7 +59,7 @@ function errorsOf(errors: Record<string, string>, index: number): Record<string,
 }
 
 /** What part of a block was treated, in words. */
-export function usePartWords(): (part: Part) => string {
+function usePartWords(): (part: Part) => string {
   const { t } = useI18n()
   const { plain } = useFigures()
   return (part) => {

@@ -5,19 +5,26 @@ import { endAt, endMoment, momentAt, type LineDraft, type MomentDraft } from './
 import { instantOf } from './recordContent.ts'
 
 /** A clock time that was shown twice, with the two offsets to choose from. */
-export interface TwiceShown {
+interface TwiceShown {
   at: 'start' | 'end'
   words: string
   options: { value: string; label: string }[]
 }
 
-export interface LineTimes {
+interface LineTimes {
   setNow: (at: 'start' | 'end') => void
   /** The end shows an earlier time than the start, and nobody has said which day it was. */
   asksNextDay: ComputedRef<boolean>
   saidNextDay: () => void
   twice: ComputedRef<TwiceShown[]>
   nonexistent: ComputedRef<{ start: string; end: string }>
+}
+
+/** Writes this moment as the start or the end of a line; the day comes with it. */
+export function setLineNow(line: LineDraft, at: 'start' | 'end', zone: string): void {
+  const instant = now().toISOString()
+  if (at === 'start') line.start = momentAt(zone, instant)
+  else line.end = endAt(zone, instant, line.start.date)
 }
 
 /** When the work on one line happened, on the farm's clock: what is doubtful about a time is asked in words, never guessed. */
@@ -39,11 +46,6 @@ export function useLineTimes(line: Ref<LineDraft>, zone: Ref<string>): LineTimes
     })
   }
 
-  function setNow(at: 'start' | 'end'): void {
-    const instant = now().toISOString()
-    if (at === 'start') line.value.start = momentAt(zone.value, instant)
-    else line.value.end = endAt(zone.value, instant, line.value.start.date)
-  }
 
   const nonexistentWords = (moment: MomentDraft): string => {
     const read = instantOf(moment, zone.value)
@@ -51,7 +53,7 @@ export function useLineTimes(line: Ref<LineDraft>, zone: Ref<string>): LineTimes
   }
 
   return {
-    setNow,
+    setNow: (at) => { setLineNow(line.value, at, zone.value) },
     asksNextDay: computed(() => {
       const { start, end } = line.value
       return start.time !== '' && end.time !== '' && end.time < start.time && !end.nextDay

@@ -14,7 +14,7 @@ import { useFigures } from './useFigures.ts'
 import { useOutline, type Outline } from './useOutline.ts'
 import { useTypedPoints, type TypedPoints } from './useTypedPoints.ts'
 
-export interface PartDrawing {
+interface PartDrawing {
   content: Ref<BlockDraftContent>
   outline: Outline
   typed: TypedPoints

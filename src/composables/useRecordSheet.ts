@@ -6,7 +6,7 @@ import type { RecordDraft } from './recordDraft.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
 /** The sheet of what is typed over what the farm has. */
-export function sheetOfDraft(draft: RecordDraft, { blocks, sprayers }: Pick<RecordStock, 'blocks' | 'sprayers'>): RecordSheet {
+function sheetOfDraft(draft: RecordDraft, { blocks, sprayers }: Pick<RecordStock, 'blocks' | 'sprayers'>): RecordSheet {
   return recordSheet(sheetInputOf(draft, { blocks, sprayer: sprayers.find(({ id }) => id === draft.sprayerId) ?? null }))
 }
 
