@@ -15,7 +15,8 @@ export class RecordForm {
   constructor(page: Page, isPhone: boolean) {
     this.page = page
     this.isPhone = isPhone
-    this.main = page.getByRole('main', { name: say('records.newTitle') })
+    // Once it is signed, the page is named by its number.
+    this.main = page.getByRole('main', { name: new RegExp(`^(${say('records.newTitle')}|${say('records.title')} )`) })
   }
 
   async open(query = ''): Promise<void> {
