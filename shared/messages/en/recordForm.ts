@@ -30,6 +30,7 @@ export const recordForm = {
     drawTitle: 'Draw the part of {code}',
     drawMore: 'Set at least three corners, then take it.',
     measures: '{hectares} ha of the {of} ha of {code}, as drawn',
+    finished: 'Outline finished.',
     take: 'Take this part',
   },
   count: {

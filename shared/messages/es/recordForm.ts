@@ -30,6 +30,7 @@ export const recordForm = {
     drawTitle: 'Dibujar la parte de {code}',
     drawMore: 'Ponga al menos tres esquinas y acéptela.',
     measures: '{hectares} ha de las {of} ha de {code}, según el dibujo',
+    finished: 'Contorno terminado.',
     take: 'Usar esta parte',
   },
   count: {

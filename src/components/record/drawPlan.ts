@@ -10,6 +10,8 @@ export interface PlanDrawing {
   y: number
   /** Further blocks that are treated in the same work. */
   also: { code: string; path: string; x: number; y: number }[]
+  /** Outlines of what was treated. */
+  fills: string[]
   neighbours: { code: string; path: string; x: number; y: number; isNamed: boolean }[]
   /** Scale bar: metres and the pixels they take. */
   barM: number
@@ -23,7 +25,7 @@ const LABEL_PX = 14
 type Outlined = Pick<Block, 'code' | 'geometry'>
 
 /** Blocks laid on one sheet, north up, so that those treated fill it; the others as far as they show. */
-export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { width, height }: Frame, also: readonly Outlined[] = []): PlanDrawing {
+export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { width, height }: Frame, { also = [], fills }: { also?: readonly Outlined[]; fills?: readonly Boundary[] } = {}): PlanDrawing {
   const plan = toPlan({ geometry: block.geometry })
   const treated = [plan, ...also.map(({ geometry }) => toPlan({ geometry, origin: plan.origin }))]
   const [minX, minY] = [Math.min(...treated.map((one) => one.minX)), Math.min(...treated.map((one) => one.minY))]
@@ -41,6 +43,7 @@ export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { wid
   const barM = niceScaleBar((width * 0.4) / scale)
   return {
     ...lay(block.geometry),
+    fills: (fills ?? [block, ...also].map(({ geometry }) => geometry)).map((geometry) => lay(geometry).path),
     also: also.map(({ code, geometry }) => ({ code, ...lay(geometry) })),
     neighbours: neighbours
       .map(({ code, geometry }) => ({ code, ...lay(geometry) }))
