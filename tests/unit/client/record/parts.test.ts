@@ -33,6 +33,26 @@ describe('the block to scale', () => {
   })
 })
 
+describe('several blocks to scale', () => {
+  const east = buildBlock({ id: 'b2', code: 'A4', geometry: { type: 'Polygon', coordinates: [[[-120.9988, 38], [-120.9977, 38], [-120.9977, 38.0009], [-120.9988, 38.0009], [-120.9988, 38]]] } })
+  const frame = { width: 214, height: 182 }
+  const xs = (path: string): number[] => (path.match(/-?[\d.]+/g) ?? []).map(Number).filter((_, index) => index % 2 === 0)
+
+  it('fit the frame together, side by side', () => {
+    const { path, also } = drawPlan(buildBlock(), [], frame, { also: [east] })
+    expect(Math.min(...xs(path))).toBeCloseTo(20, 0)
+    expect(Math.max(...xs(also[0]?.path ?? ''))).toBeCloseTo(194, 0)
+    expect(Math.min(...xs(also[0]?.path ?? ''))).toBeGreaterThan(Math.max(...xs(path)))
+  })
+
+  it('are filled whole, and where only a part was treated, by that part', () => {
+    expect(drawPlan(buildBlock(), [], frame, { also: [east] }).fills).toHaveLength(2)
+    const [half, ...more] = drawPlan(buildBlock(), [], frame, { fills: [{ type: 'Polygon', coordinates: [[[-121, 38], [-120.99945, 38], [-120.99945, 38.0009], [-121, 38.0009], [-121, 38]]] }] }).fills
+    expect(more).toEqual([])
+    expect(Math.max(...xs(half ?? ''))).toBeCloseTo(107, 0)
+  })
+})
+
 describe('tank loads', () => {
   const names = (loads: { full: number; count: number; tankL: number; lastL: number }) =>
     mountWithWords(TankLoads, { loads: { ...loads, lastAreaHa: 0 } }).findAll('svg').map((vessel) => vessel.attributes('aria-label'))
