@@ -5,7 +5,7 @@ import { drawFirstFoot, drawLaterFoot, footHeights, type PageFoot } from './part
 import { startFlow } from './parts/pageFlow.ts'
 import { drawRunningHead, type RunningHead } from './parts/runningHead.ts'
 import { drawStampHead, type StampHead } from './parts/stampHead.ts'
-import { drawChecks, drawMix, drawLongWords, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
+import { drawChecks, drawFiles, drawLongWords, drawMix, drawNotices, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
 import { recordFigures } from './record/recordFigures.ts'
 import { openWords, type ReportWords } from './record/reportWords.ts'
 import type { RecordReportData } from './recordReportData.ts'
@@ -26,11 +26,13 @@ export function recordReport(data: RecordReportData, stream: Writable): void {
   const part = addElement(canvas, canvas.root, 'Sect')
   const page: Page = { canvas, flow, part, data, words, figures: recordFigures(data.signed) }
   drawStampHead(flow, part, stampOf(data, words))
+  drawNotices(page)
   drawPlace(page)
   drawMix(page)
   drawWeatherAndPeople(page)
   drawChecks(page)
   drawReasons(page)
+  drawFiles(page)
   drawLongWords(page)
   drawFrames(canvas, { head: headOf(data, words), foot, pages: flow.pages })
   canvas.doc.end()

@@ -19,6 +19,10 @@ export interface RecordReportData {
   /** SHA-256 of the signed text, hex. */
   digest: string
   names: { doneBy: string; enteredBy: string; signedBy: string }
+  /** Reviews of this version, oldest first; a name that was blanked is empty. */
+  reviews: readonly { by: string; at: string; note: string | null }[]
+  /** The record's newest version; another than the one printed where an older one is asked for. */
+  newest: { version: number; digest: string }
   neighbours: readonly { code: string; geometry: Boundary }[]
   sites: readonly PlanSite[]
   state: 'signed' | 'withdrawn'

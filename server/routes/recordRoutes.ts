@@ -12,6 +12,9 @@ import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE, FARM_PEOPLE } from './roleGroups.ts'
 import { sendReport } from './sendReport.ts'
 
+/** An older version prints as it was signed; without one, the newest. */
+const printQuerySchema = z.strictObject({ language: z.enum(['en', 'es']).optional(), version: z.coerce.number().int().min(1).max(9999).optional() })
+
 const versionsSchema = z.object({
   items: z.array(z.object({ version: z.number().int(), digest: z.string(), canonicalText: z.string(), signed: signedRecordSchema })),
   next: z.null(),
@@ -48,11 +51,12 @@ export const recordRoutes = [
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/records/:id/pdf', summary: 'The application record as PDF.', roles: EVERY_ROLE,
-    params: thingParamsSchema, query: z.strictObject({ language: z.enum(['en', 'es']).optional() }), answer: z.null(), contentType: 'application/pdf',
+    params: thingParamsSchema, query: printQuerySchema, answer: z.null(), contentType: 'application/pdf',
     run: async (call) => {
-      const language = call.query.language ?? call.language
-      const data = await collectRecordReport(call.services, call.actor, call.params.id, language)
-      await sendReport(call, { kind: 'record', data }, `record-${data.signed.record.number}.pdf`)
+      const { language = call.language, version } = call.query
+      const data = await collectRecordReport(call.services, call.actor, call.params.id, { language, version })
+      const name = version === undefined ? data.signed.record.number : `${data.signed.record.number}-version-${version}`
+      await sendReport(call, { kind: 'record', data }, `record-${name}.pdf`)
       return 'sent'
     },
   }),

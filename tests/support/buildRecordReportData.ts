@@ -8,6 +8,8 @@ export function buildRecordReportData(overrides: Partial<RecordReportData> = {})
   return {
     signed: buildSignedRecord(),
     digest: CODE.padEnd(64, '0'),
+    reviews: [],
+    newest: { version: (overrides.signed ?? buildSignedRecord()).record.version, digest: CODE.padEnd(64, '0') },
     names: { doneBy: 'Oda Verrill', enteredBy: 'Oda Verrill', signedBy: 'Oda Verrill' },
     neighbours: [
       { code: 'A1', geometry: { type: 'Polygon', coordinates: [[[-123.3140420, 44.6103557], [-123.3139, 44.6111], [-123.3158, 44.6112], [-123.3158377, 44.6104370], [-123.314042, 44.6103557]]] } },

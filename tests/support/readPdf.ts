@@ -40,6 +40,11 @@ export async function drawReport(job: ReportJob): Promise<Buffer> {
   return Buffer.concat(chunks)
 }
 
+/** The text of a PDF, white space folded, as poppler reads it. */
+export function readText(bytes: Buffer): string {
+  return execFileSync('pdftotext', ['-raw', '-', '-'], { input: bytes, encoding: 'utf8' }).replace(/\s+/g, ' ')
+}
+
 /** Reads a PDF with qpdf and poppler. */
 export function readPdf(bytes: Buffer): ReadPdf {
   const folder = mkdtempSync(join(tmpdir(), 'pdf-'))

@@ -24,10 +24,12 @@ export function drawVerdictMark({ doc }: Canvas, verdict: Verdict, { x, y, size 
   doc.restore()
 }
 
-/** Foliar spray: a filled disc. Soil drench: an outlined drop. */
+/** Foliar spray: a filled disc. Soil drench: an outlined drop. Injected drench: an arrow down. Solid spread: a filled heap. */
 export function drawMethodMark({ doc }: Canvas, method: Method, { x, y, size }: MarkBox): void {
   doc.save().translate(x, y).scale(size / 14)
   if (method === 'foliar') doc.circle(7, 7, 6).fill(ELDER)
+  else if (method === 'solid') doc.path('M0.6 12.8C2.2 6.6 4.2 2.8 7 2.8S11.8 6.6 13.4 12.8Z').fill(ELDER)
+  else if (method === 'injected') doc.lineWidth(2.2).path('M7 1V12.4M3.4 8.2 7 12.6 10.6 8.2').stroke('#000000')
   else doc.lineWidth(1.5).path('M7 1C8.6 4.2 11.8 6.9 11.8 9.5A4.8 3.7 0 0 1 2.2 9.5C2.2 6.9 5.4 4.2 7 1Z').stroke('#000000')
   doc.restore()
 }

@@ -41,7 +41,6 @@ function drawBeside(canvas: Canvas, parent: Element, { x, y, stamp }: { x: numbe
   const withdrawn: TextStyle = { ...STYLES.method, color: MADDER }
   if (stamp.withdrawn !== '') {
     addElement(canvas, parent, 'P', () => drawText(canvas, stamp.withdrawn, { x, y: y + 11 }, withdrawn))
-    strikeThrough(canvas, { x: x - 1, y: y + 19.1, width: measureText(canvas, stamp.withdrawn, withdrawn) + 2 })
   }
   if (stamp.version !== '') addElement(canvas, parent, 'P', () => drawText(canvas, stamp.version, { x, y: y + 27 }, STYLES.body))
 }

@@ -1,124 +1,98 @@
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
-import type { Basis } from '../../../shared/contract/recordContent.ts'
-import type { Column, Table, TableRow } from '../parts/ledgerTable.ts'
+import type { Table, TableRow } from '../parts/ledgerTable.ts'
 import { STYLES } from '../parts/styles.ts'
+import { measureWords, mixName, waterMeasure } from './mixWords.ts'
+import { mixColumns, type MixColumns } from './mixColumns.ts'
 import type { RecordFigures } from './recordFigures.ts'
 import { bold, plain, type ReportWords } from './reportWords.ts'
+import { usedRow } from './usedRow.ts'
 
-interface MixInput { signed: SignedRecord; figures: RecordFigures; words: ReportWords; place: { x: number; width: number } }
+export interface MixInput { signed: SignedRecord; figures: RecordFigures; words: ReportWords; place: { x: number; width: number } }
 
-/** The table of what the mix holds: water, each ingredient with its lot, and the spray in all. */
-export function mixTable({ signed, figures, words, place }: MixInput): Table {
+export interface MixTable {
+  table: Table
+  /** False where the rounded figures of a column do not come to the total that is printed. */
+  addsUp: boolean
+}
+
+/** The table of what the mix holds: water, each ingredient with its lot and what was used of it, and all of it. */
+export function mixTable({ signed, figures, words, place }: MixInput): MixTable {
+  const context: Context = { signed, figures, words, columns: mixColumns({ signed, figures, words }) }
   const rows: TableRow[] = [
-    waterRow({ signed, figures, words }),
-    ...signed.content.components.map((_component, index) => componentRow({ signed, figures, words }, index)),
-    sprayRow({ signed, words }),
+    ...(signed.computed.waterL === null || Number(signed.computed.waterL) === 0 ? [] : [waterRow(context)]),
+    ...signed.content.components.flatMap((_component, index) => componentRows(context, index)),
+    ...totalRows(context),
   ]
   const last = rows.at(-2)
   if (last) last.keepsWithNext = true
-  return { x: place.x, columns: columns(words, place.width), rows, leading: STYLES.body.leading, padding: 2.4, showsHeads: true }
+  return {
+    addsUp: context.columns.addsUp,
+    table: { x: place.x, columns: context.columns.heads(place.width), rows, leading: STYLES.body.leading, padding: 2.4, showsHeads: true },
+  }
 }
 
-/** What stands beside the head: what the mix was sized from and how a ratio reads. */
-export function mixAside({ content }: SignedRecord, { say, typed, unit }: ReportWords): string {
-  const { water } = content
-  const sized = water === null || water.sizedFrom === 'none' ? []
-    : [water.sizedFrom === 'water' ? say('mix.sizedWater') : say('mix.sizedRate', { value: typed(water.value), unit: unit(water.unit) })]
-  const ratio = content.components.some(({ basis }) => basis.kind === 'ratio') ? [say('mix.ratioMeans')] : []
-  return [...sized, ...ratio].join('; ')
-}
+interface Context { signed: SignedRecord; figures: RecordFigures; words: ReportWords; columns: MixColumns }
 
-function columns({ say }: ReportWords, width: number): Column[] {
-  const fixed: Column[] = [
-    { head: say('mix.lot'), width: 74 },
-    { head: say('mix.measure'), width: 78 },
-    { head: say('mix.known'), width: 60 },
-    { head: say('mix.inAll'), width: 62, align: 'right', opensAccount: true },
-    { head: say('mix.perHa'), width: 50, align: 'right' },
-    { head: say('mix.fullLoad'), width: 44, align: 'right' },
-    { head: say('mix.lastLoad'), width: 44, align: 'right' },
-  ]
-  return [{ head: say('mix.ingredient'), width: width - fixed.reduce((sum, column) => sum + column.width, 0) }, ...fixed]
-}
-
-type RowInput = Omit<MixInput, 'place'>
-
-function waterRow({ signed, figures, words }: RowInput): TableRow {
+function waterRow({ signed, figures, words, columns }: Context): TableRow {
   const { say } = words
-  const water = signed.content.water?.sizedFrom === 'none' ? null : signed.content.water
+  const { water } = signed.content
   const { sheet, agrees } = figures
-  const { waterL } = signed.computed
+  const isTyped = water?.sizedFrom === 'water'
   return {
     hasHead: true,
     cells: [
       plain(say('mix.water')),
-      plain(water?.source ?? say('lines.none')),
-      plain(water === null ? say('lines.none') : words.quantity(water.value, water.unit)),
-      plain(water === null ? say('lines.none') : say(water.sizedFrom === 'water' ? 'known.typed' : 'known.workedOut')),
-      bold(waterL === null ? say('lines.none') : words.worked(waterL, 'L')),
-      plain(derived(words, agrees ? sheet.water.perHa : null)),
-      plain(derived(words, agrees ? sheet.water.perFullLoad : null)),
-      plain(derived(words, agrees ? sheet.water.perLastLoad : null)),
+      plain(water !== null && water.sizedFrom !== 'none' && water.source !== null ? water.source : say('lines.none')),
+      plain(waterMeasure(signed, words)),
+      plain(say(isTyped ? 'known.typed' : 'known.workedOut')),
+      bold(columns.inAll(signed.computed.waterL, 'L')),
+      plain(columns.perHa(agrees ? sheet.water.perHa : null)),
+      ...columns.loadCells(agrees ? sheet.water : null),
     ],
   }
 }
 
-function componentRow({ signed, figures, words }: RowInput, index: number): TableRow {
+function componentRows({ signed, figures, words, columns }: Context, index: number): TableRow[] {
   const { say } = words
   const component = signed.content.components[index]
   const material = signed.materials.find(({ id }) => id === component?.materialId)
   const lot = signed.lots.find(({ id }) => id === component?.lotId)
   if (!component || !material) throw new RangeError(`the record does not hold the material of component ${index}`)
-  const worked = figures.agrees ? figures.sheet.components[index] : undefined
+  const worked = figures.agrees ? (figures.sheet.components[index] ?? null) : null
   const amount = signed.computed.components[index]?.amount
-  const perHa = worked?.perHa ?? null
-  return {
+  const inAll = amount ? columns.inAll(amount.value, amount.unit) : say('lines.none')
+  const row: TableRow = {
     hasHead: true,
     cells: [
       plain(material.name),
       plain(lot ? say('mix.lotCode', { code: lot.code }) : say('mix.noLot')),
-      plain(measureOf(component.basis, words)),
+      plain(measureWords(component.basis, words)),
       plain(say('known.workedOut')),
-      bold(amount ? words.worked(amount.value, amount.unit) : say('lines.none')),
-      plain(perHa === null || amount?.unit === 'L' ? derived(words, perHa) : words.worked(perHa, worked?.inKg === null ? 'L' : 'kg')),
-      plain(derived(words, worked?.perFullLoad ?? null)),
-      plain(derived(words, worked?.perLastLoad ?? null)),
+      component.used === null ? bold(inAll) : plain(inAll),
+      plain(worked?.inKg == null ? columns.perHa(worked?.perHa ?? null) : words.worked(worked.perHa ?? '0', 'kg')),
+      ...columns.loadCells(worked, amount?.unit === 'L' ? undefined : amount?.unit),
     ],
   }
+  if (component.used === null || !amount) return [row]
+  return [{ ...row, keepsWithNext: true }, usedRow({ used: component.used, planned: amount, columns: columns.count }, words)]
 }
 
-function sprayRow({ signed, words }: Omit<RowInput, 'figures'>): TableRow {
-  const { say } = words
-  const { totalL, sprayLPerHa, loads } = signed.computed
-  const none = say('lines.none')
-  const hasLast = loads !== null && Number(loads.lastL) > 0
-  return {
+/** All of the mix by volume, and what is weighed where nothing else says its sum. */
+function totalRows({ signed, words, columns }: Context): TableRow[] {
+  const { totalL, totalKg, sprayLPerHa, kgPerHa, loads, components } = signed.computed
+  const weighed = components.filter(({ amount }) => ['kg', 'g', 'lb', 'oz'].includes(amount.unit)).length
+  const row = (name: string, cells: string[]): TableRow => ({
     isTotal: true, hasHead: true, runsOver: { column: 0, columns: 4 },
-    cells: [
-      bold(sprayName(loads, words)), [], [], [],
-      bold(totalL === null ? none : words.worked(totalL, 'L')),
-      bold(sprayLPerHa === null ? none : words.amount(sprayLPerHa)),
-      bold(loads && loads.full > 0 ? words.amount(loads.tankL) : none),
-      bold(loads && hasLast ? words.amount(loads.lastL) : none),
-    ],
+    cells: [bold(name), [], [], [], ...cells.map((cell) => bold(cell))],
+  })
+  const rows: TableRow[] = []
+  if (totalL !== null) {
+    const perHa = sprayLPerHa === null ? words.say('lines.none') : words.amount(sprayLPerHa)
+    rows.push(row(mixName(signed, words, columns.lastLoad), [words.worked(totalL, 'L'), perHa, ...columns.loadTotals(loads)]))
   }
-}
-
-function sprayName(loads: SignedRecord['computed']['loads'], words: ReportWords): string {
-  const { say } = words
-  if (!loads) return say('mix.spray')
-  const full = loads.full === 1 ? say('mix.fullOne') : say('mix.fullMany', { count: loads.full })
-  const params = { full, tank: words.amount(loads.tankL), last: words.amount(loads.lastL) }
-  if (loads.full === 0) return say('mix.sprayLast', params)
-  return say(Number(loads.lastL) > 0 ? 'mix.sprayFullLast' : 'mix.sprayFull', params)
-}
-
-function measureOf(basis: Basis, words: ReportWords): string {
-  if (basis.kind === 'ratio') return words.say('mix.ratio', { parts: words.typed(basis.parts) })
-  if (basis.kind === 'perArea') return words.quantity(basis.value, basis.unit)
-  return words.say('mix.perTank', { value: words.typed(basis.value), unit: words.unit(basis.unit) })
-}
-
-function derived(words: ReportWords, value: string | null): string {
-  return value === null ? words.say('lines.none') : words.amount(value)
+  if (totalKg !== null && (totalL === null || weighed > 1)) {
+    const perHa = kgPerHa === null ? words.say('lines.none') : words.worked(kgPerHa, 'kg')
+    rows.push(row(words.say('mix.weighed'), [words.worked(totalKg, 'kg'), perHa, ...(loads ? ['', ''] : [])]))
+  }
+  return rows
 }

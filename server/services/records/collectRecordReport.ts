@@ -6,6 +6,7 @@ import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Block } from '../../entities/Block.ts'
 import { Person } from '../../entities/Person.ts'
+import { RecordReview } from '../../entities/RecordReview.ts'
 import { RecordVersion } from '../../entities/RecordVersion.ts'
 import { AppError, notFound } from '../../errors.ts'
 import type { RecordReportData } from '../../reports/recordReportData.ts'
@@ -16,24 +17,33 @@ import { readSigned } from './readSigned.ts'
 /** Blocks whose middle lies further away are not drawn as neighbours. */
 const NEIGHBOUR_KM = 1
 
-/** Everything the PDF of a record shows, from its newest signed version. @throws {AppError} not-found, `record.not_signed`. */
-export async function collectRecordReport(services: Services, actor: FarmActor, id: string, language: Language): Promise<RecordReportData> {
+interface Asked {
+  language: Language
+  /** The newest where none is asked for. */
+  version?: number | undefined
+}
+
+/** Everything the PDF of a record shows, from one of its signed versions. @throws {AppError} not-found, `record.not_signed`. */
+export async function collectRecordReport(services: Services, actor: FarmActor, id: string, { language, version }: Asked): Promise<RecordReportData> {
   return services.database.inFarm(actor, async (manager) => {
     const record = await manager.findOneBy(ApplicationRecord, { farmId: actor.farmId, id })
     if (!record) throw notFound()
     if (record.state !== 'signed' && record.state !== 'withdrawn') throw new AppError('conflict', 'record.not_signed')
-    const version = await manager.findOneOrFail(RecordVersion, { where: { farmId: actor.farmId, recordId: id }, order: { version: 'DESC' } })
-    const signed = readSigned(version)
+    const newest = await manager.findOneByOrFail(RecordVersion, { farmId: actor.farmId, recordId: id, version: record.version })
+    const printed = version === undefined ? newest : await manager.findOneBy(RecordVersion, { farmId: actor.farmId, recordId: id, version })
+    if (!printed) throw notFound()
+    const signed = readSigned(printed)
     const checkPage = `${publicAddress(services.config)}/check`
     return {
       signed,
-      digest: version.digest,
-      names: await nameThem(manager, signed),
+      digest: printed.digest,
+      ...(await namePeople(manager, signed)),
+      newest: { version: newest.version, digest: newest.digest },
       neighbours: await findNeighbours(manager, signed),
       sites: [],
       state: record.state,
       printedAt: services.clock.now().toISOString(),
-      checkUrl: `${checkPage}/${version.checkCode}`,
+      checkUrl: `${checkPage}/${printed.checkCode}`,
       checkPage: checkPage.replace(/^https?:\/\//, ''),
       runBy: 'farm',
       language,
@@ -41,11 +51,18 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
   })
 }
 
-async function nameThem(manager: EntityManager, { farm, people }: SignedRecord): Promise<RecordReportData['names']> {
-  const ids = [people.doneBy.id, people.enteredBy.id, people.signedBy.id]
+/** The names of those who stand in the version, and who reviewed it; a name that was blanked is empty. */
+async function namePeople(manager: EntityManager, { farm, people, record }: SignedRecord): Promise<Pick<RecordReportData, 'names' | 'reviews'>> {
+  const reviews = await manager.find(RecordReview, {
+    where: { farmId: farm.id, recordId: record.id, version: record.version }, order: { at: 'ASC', id: 'ASC' },
+  })
+  const ids = [people.doneBy.id, people.enteredBy.id, people.signedBy.id, ...reviews.map(({ reviewedById }) => reviewedById)]
   const found = await manager.find(Person, { select: { id: true, name: true }, where: { farmId: farm.id, id: In(ids) } })
   const name = (id: string) => found.find((person) => person.id === id)?.name ?? ''
-  return { doneBy: name(people.doneBy.id), enteredBy: name(people.enteredBy.id), signedBy: name(people.signedBy.id) }
+  return {
+    names: { doneBy: name(people.doneBy.id), enteredBy: name(people.enteredBy.id), signedBy: name(people.signedBy.id) },
+    reviews: reviews.map(({ reviewedById, at, note }) => ({ by: name(reviewedById), at: at.toISOString(), note })),
+  }
 }
 
 async function findNeighbours(manager: EntityManager, { farm, blocks }: SignedRecord): Promise<RecordReportData['neighbours']> {

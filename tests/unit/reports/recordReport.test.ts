@@ -84,8 +84,8 @@ describe('what it says', () => {
     const flat = text.replace(/\s+/g, ' ')
     for (const words of [
       'Wennick Hollow, register of season 2026', '2026-0143', 'Foliar spray', '16 June 2026, 06:50 to 08:37', 'A3 Long Bank 3 and A2 Long Bank 2',
-      'Aphids on shoot tips', 'A3 version 3 and A2 version 2', 'A3 whole 0.88 06:50 07:36 372.0 measured', 'As drawn 1.88',
-      'Lot NF-31 1:20 worked out 37.50 L 19.99 18.96 18.54', 'Mix, one load of 400.0 L and one of 391.3 L 791.3 L 421.8 400.0 391.3',
+      'Aphids on shoot tips', 'A3 version 3 and A2 version 2', 'A3 whole 0.882 06:50 07:36 372.0 L measured', 'As drawn 1.88 791.3 L',
+      'Lot NF-31 1:20 worked out 37.50 L 19.99 18.96 18.54', 'Spray: one load of 400.0 L and one of 391.3 L 791.3 L 421.8 400.0 391.3',
       '1.9 m/s, read here; from NW', 'Oda Verrill, 35 min after the end', '16 June 2026, 09:12:40, Oda Verrill, by password',
       'No stop found; 1 not known', 'Check code 41D7 0B9E 6A2F C853 19E4, entry 1 844 of the log', 'look it up at drenchleaf.example/check',
       'The farm runs this server itself.', 'Printed 16 June 2026, 09:15', 'page 1 of 1',
@@ -108,11 +108,11 @@ describe('what it says', () => {
   })
 
   it('strikes a withdrawn record and says so on every page', async () => {
-    const signed = { ...buildLongRecord(), record: { ...base.record, version: 3 }, reason: 'Wrong block.' }
+    const signed = { ...buildLongRecord(), record: { ...base.record, version: 3 }, entry: 'withdrawn' as const, replaces: 'c0de'.repeat(16), reason: 'Wrong block.' }
     const pdf = readPdf(await drawRecord(buildRecordReportData({ state: 'withdrawn', signed })))
     expect(pdf.pages.length).toBeGreaterThan(1)
     for (const page of pdf.pages) expect(page).toContain('Record 2026-0143, version 3, withdrawn')
-    expect(pdf.text).toContain('Wrong block.')
+    expect(pdf.text.replace(/\s+/g, ' ')).toContain('Because: Wrong block. It stays in the register and counts nowhere. It replaces version 2, check code C0DE C0DE C0DE C0DE C0DE.')
     expect(contentOf(pdf).join('\n')).toMatch(/1\.5 w\n\/DeviceRGB CS\n0\.68\d* 0\.22\d* 0\.17\d* SCN\n[\d.]+ ([\d.]+) m\n[\d.]+ \1 l\nS/)
   })
 
@@ -128,8 +128,8 @@ describe('what it says', () => {
   it('adds up what was written for the lines', async () => {
     const lines = base.content.lines.map((line, index) => ({ ...line, amount: { value: index ? '419.2983' : '371.9517', unit: 'L' as const, known: 'workedOut' as const } }))
     const shared = readPdf(await drawRecord(buildRecordReportData({ signed: buildSignedRecord({ content: { ...base.content, lines } }) })))
-    expect(shared.text).toContain('A3 whole 0.88 06:50 07:36 372.0 worked out')
-    expect(shared.text).toContain('As drawn 1.88 791.3')
+    expect(shared.text).toContain('A3 whole 0.882 06:50 07:36 372.0 L worked out')
+    expect(shared.text).toContain('As drawn 1.88 791.3 L')
     const measured = readPdf(await drawRecord(buildRecordReportData()))
     expect(measured.text).toMatch(/As drawn 1\.88 \d+\.\d/)
   })
@@ -184,6 +184,6 @@ describe('long and odd records', () => {
     const lines = blocks.map(({ id }) => ({ ...base.content.lines[0]!, blockId: id, amount: null }))
     const pdf = readPdf(await drawRecord(buildRecordReportData({ signed: buildSignedRecord({ blocks, content: { ...base.content, lines } }) })))
     expect(pdf.text).toContain('60 blocks, listed below')
-    expect(pdf.text.match(/K\d+ Kitchen strip \d+/g)).toHaveLength(60)
+    expect(pdf.text.match(/K\d+ Kitchen strip \d+, whole/g)).toHaveLength(60)
   })
 })

@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { checksTally, groupChecks } from '../../../server/reports/record/checksTable.ts'
-import { peopleFacts, placeFacts, weatherFacts } from '../../../server/reports/record/factsOfRecord.ts'
+import { peopleFacts } from '../../../server/reports/record/peopleFacts.ts'
+import { placeFacts } from '../../../server/reports/record/placeFacts.ts'
+import { weatherFacts } from '../../../server/reports/record/weatherFacts.ts'
 import type { Fact } from '../../../server/reports/parts/factsList.ts'
 import { recordFigures } from '../../../server/reports/record/recordFigures.ts'
 import { openWords } from '../../../server/reports/record/reportWords.ts'
@@ -68,7 +70,7 @@ describe('facts', () => {
 
 
   it('says so where nothing was read or written', () => {
-    const signed = buildSignedRecord({ sprayer: null, content: { ...base.content, weather: null, purpose: null } })
+    const signed = buildSignedRecord({ sprayer: null, computed: { ...base.computed, air: null }, content: { ...base.content, weather: null, purpose: null } })
     const facts = [...weatherFacts(buildRecordReportData({ signed }), words), ...placeFacts(buildRecordReportData({ signed }), words)]
     expect(['Sprayer', 'Wind', 'Air', 'Humidity', 'For'].map((label) => read(facts, label)))
       .toEqual(['none named', 'not read', 'not read', 'not read', 'not written down'])
