@@ -1,6 +1,7 @@
 import type { Writable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import '../../shared/messages/everyLanguage.ts'
+import { blankRecordReport, type BlankRecordData } from './blankRecordReport.ts'
 import { gatherChunks } from './parts/gatherChunks.ts'
 import { recordReport } from './recordReport.ts'
 import type { RecordReportData } from './recordReportData.ts'
@@ -8,7 +9,10 @@ import { registerReport } from './registerReport.ts'
 import type { RegisterReportData } from './registerReportData.ts'
 
 /** Everything the server can print; a new document is a new kind. */
-export type ReportJob = { kind: 'record'; data: RecordReportData } | { kind: 'register'; data: RegisterReportData }
+export type ReportJob =
+  | { kind: 'record'; data: RecordReportData }
+  | { kind: 'register'; data: RegisterReportData }
+  | { kind: 'blankRecord'; data: BlankRecordData }
 
 /**
  * Draws a document into a stream; resolves when the stream has taken all of it.
@@ -19,7 +23,8 @@ export async function renderReport(job: ReportJob, stream: Writable): Promise<vo
   const taken = pipeline(chunks, stream)
   try {
     if (job.kind === 'record') recordReport(job.data, chunks)
-    else registerReport(job.data, chunks)
+    else if (job.kind === 'register') registerReport(job.data, chunks)
+    else blankRecordReport(job.data, chunks)
   } catch (error) {
     chunks.destroy(error instanceof Error ? error : new Error(String(error)))
   }

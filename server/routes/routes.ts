@@ -6,7 +6,8 @@ import { inputRoutes } from './inputRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
 import { registerRoutes } from './registerRoutes.ts'
+import { reportRoutes } from './reportRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes, ...registerRoutes, ...fileRoutes]
+export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]
