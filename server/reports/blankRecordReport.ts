@@ -2,6 +2,7 @@ import type { Writable } from 'node:stream'
 import { EACH } from '../../shared/contract/each.ts'
 import { METHODS, PROTECTION } from '../../shared/contract/recordContent.ts'
 import { WEATHER_KINDS } from '../../shared/contract/weather.ts'
+import { PLAIN_FIELDS } from '../../shared/records/plainFields.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import { drawWriteLines, type WriteLine } from './parts/writeLines.ts'
 import { addElement, drawArtifact, openCanvas, type Canvas } from './parts/canvas.ts'
@@ -39,7 +40,7 @@ export function blankRecordReport({ farm, printedAt, language }: BlankRecordData
   const flow = startFlow(canvas, { first: 26, later: 26 })
   const page: Page = { canvas, flow, words, part: addElement(canvas, canvas.root, 'Sect') }
   drawHead(page)
-  drawWriteLines(flow, page.part, fieldsOf(words, ['day', 'crop', 'stage', 'for', 'sprayer', 'workedIn']))
+  drawWriteLines(flow, page.part, [...fieldsOf(words, ['day', 'crop', 'stage']), ...plainLines(words, 'ready'), ...fieldsOf(words, ['sprayer', 'workedIn'])])
   drawBlocks(page)
   drawMix(page)
   drawWeather(page)
@@ -63,6 +64,11 @@ function drawHead({ canvas, flow, part, words }: Page): void {
 
 function fieldsOf({ say }: ReportWords, names: readonly string[]): WriteLine[] {
   return names.map((name) => ({ label: say(`blank.${name}`) }))
+}
+
+/** The plain fields of a record as lines to write on; a long one takes the whole width. */
+function plainLines(words: ReportWords, step: (typeof PLAIN_FIELDS)[number]['step']): WriteLine[] {
+  return PLAIN_FIELDS.filter((field) => field.step === step).map(({ name, isLong }) => ({ label: words.plainLabel(name), isWide: isLong }))
 }
 
 function drawBlocks(page: Page): void {
@@ -102,7 +108,7 @@ function drawPeople(page: Page): void {
   const { say } = words
   startSection(page, say('people.title'), '')
   drawTicks(flow, part, { label: say('people.worn'), ticks: PROTECTION.map((item) => ({ word: say(`protection.${item}`) })) })
-  drawWriteLines(flow, part, [...fieldsOf(words, ['doneBy', 'licence', 'signedOn', 'enteredBy']), { label: words.plainLabel('notes'), isWide: true }, { label: '', isWide: true }])
+  drawWriteLines(flow, part, [...fieldsOf(words, ['doneBy', 'writtenOn', 'enteredBy']), ...plainLines(words, 'happened'), { label: '', isWide: true }])
   const lines = wrapText(canvas, [{ text: say('blank.caution'), style: STYLES.note }], FRAME_WIDTH)
   const { y } = flow
   addElement(canvas, part, 'P', () => drawLines(canvas, lines, { x: FRAME.left, y: y + 4, width: FRAME_WIDTH, leading: STYLES.note.leading }))
