@@ -1,13 +1,14 @@
-import type { z } from 'zod'
+import { z } from 'zod'
 import { blockSchema } from '../../shared/contract/block.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
+import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
 import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
 
 interface Door {
-  method: 'post' | 'put'
+  method: 'post' | 'put' | 'del'
   path: (farmId: string, id: string) => string
   answer: z.ZodType
 }
@@ -22,6 +23,8 @@ const DOORS: Record<CommandKind, Door> = {
   'record.create': { method: 'post', path: (farmId) => `/farms/${farmId}/records`, answer: recordSchema },
   'record.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/records/${id}`, answer: recordSchema },
   'record.sign': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/sign`, answer: recordSchema },
+  'filter.keep': { method: 'post', path: (farmId) => `/farms/${farmId}/saved-filters`, answer: savedFilterSchema },
+  'filter.forget': { method: 'del', path: (farmId, id) => `/farms/${farmId}/saved-filters/${id}`, answer: z.undefined() },
 }
 
 /**
@@ -30,6 +33,7 @@ const DOORS: Record<CommandKind, Door> = {
  */
 export async function sendCommand<Kind extends CommandKind>(command: Command<Kind>): Promise<CommandAnswers[Kind]> {
   const door = DOORS[command.kind]
-  const answer = await http[door.method](door.path(command.farmId, command.id), command.body, door.answer)
+  const path = door.path(command.farmId, command.id)
+  const answer = await (door.method === 'del' ? http.del(path, door.answer) : http[door.method](path, command.body, door.answer))
   return answer as CommandAnswers[Kind]
 }

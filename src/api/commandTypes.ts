@@ -4,6 +4,7 @@ import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../..
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import type { createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/recordChanges.ts'
+import type { createSavedFilterSchema, SavedFilter } from '../../shared/contract/savedFilter.ts'
 
 /** What each kind of command carries. */
 export interface CommandBodies {
@@ -16,6 +17,8 @@ export interface CommandBodies {
   'record.create': z.input<typeof createRecordSchema>
   'record.update': z.input<typeof updateRecordSchema>
   'record.sign': z.input<typeof signRecordSchema>
+  'filter.keep': z.input<typeof createSavedFilterSchema>
+  'filter.forget': Record<string, never>
 }
 
 /** What the server answers to each. */
@@ -29,6 +32,8 @@ export interface CommandAnswers {
   'record.create': ApplicationRecord
   'record.update': ApplicationRecord
   'record.sign': ApplicationRecord
+  'filter.keep': SavedFilter
+  'filter.forget': undefined
 }
 
 export type CommandKind = keyof CommandBodies

@@ -1,12 +1,12 @@
 import { pageOf } from '../../shared/contract/common.ts'
 import { recordSchema, registerRowSchema, type ApplicationRecord, type RegisterRow } from '../../shared/contract/record.ts'
+import type { RegisterFilter, RegisterSort } from '../../shared/contract/register.ts'
 import { http } from './http.ts'
 
-/** Which rows of the register to read. */
-export interface RegisterQuery {
+/** Which rows of the register to read, in which order. */
+export interface RegisterQuery extends RegisterFilter {
   limit?: number
-  block?: string
-  state?: RegisterRow['state']
+  sort?: RegisterSort
 }
 
 export interface RegisterPage {

@@ -5,9 +5,10 @@ import type { RegisterLine } from '../../shared/register/registerLine.ts'
 import { formatNumber, formatVolumeL } from '../../shared/units/formatQuantity.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
-import { useBlocks } from './useBlocks.ts'
+import { countChosen, type RegisterChoice } from './registerAddress.ts'
 import { useRecord } from './useRecord.ts'
 import { useRecords } from './useRecords.ts'
+import { useRegisterTotals } from './useRegisterTotals.ts'
 import { unsentDrafts, useRegisterLines, type RegisterWords } from './useRegisterLines.ts'
 
 export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
@@ -16,8 +17,8 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   /** Drafts first, then what the server has, newest first. */
   lines: ComputedRef<RegisterLine[]>
   ready: ComputedRef<boolean>
-  /** Code of the one block whose records are shown, or null. */
-  onlyBlock: ComputedRef<string | null>
+  /** Records that fit, shown or not; null until they are counted. */
+  found: ComputedRef<number | null>
   /** Rows of the server that are shown. */
   shown: ComputedRef<number>
   chosenId: Ref<string | null>
@@ -28,30 +29,33 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   headWords: ComputedRef<string>
 }
 
-/** The register page: its rows page by page, of one block where asked, the chosen one with its checks, and the totals of what is shown. */
-export function useRegister(blockId: () => string | null): Register {
+/** The register page: the rows of a choice page by page, the chosen one with its checks, and the totals of all that was found. */
+export function useRegister(choice: () => RegisterChoice): Register {
   const { t } = useI18n()
   const session = useSession()
   const preferences = usePreferences()
   const farmId = computed(() => session.farmId)
-  const rows = useRecords(farmId, () => (blockId() === null ? { limit: 50 } : { limit: 50, block: blockId() ?? '' }))
-  const { data: blocks } = useBlocks(farmId)
+  const rows = useRecords(farmId, () => ({ ...choice().filter, sort: choice().sort, limit: 50 }))
+  const totals = useRegisterTotals(farmId, () => choice().filter)
+  const isWhole = computed(() => countChosen(choice().filter) === 0 && choice().sort === '-when')
   const { place, draftLines, present, outlines } = useRegisterLines()
 
   const items = computed(() => rows.data.value?.pages.flatMap((page) => page.items) ?? [])
-  const lines = computed(() => [...(blockId() === null ? unsentDrafts(draftLines.value, items.value) : []), ...present(items.value)])
+  const lines = computed(() => [...(isWhole.value ? unsentDrafts(draftLines.value, items.value) : []), ...present(items.value)])
   const chosenId = ref<string | null>(null)
   const chosen = computed(() => lines.value.find(({ id }) => id === chosenId.value) ?? null)
   const record = useRecord(farmId, () => (chosen.value === null || chosen.value.onDevice ? '' : chosen.value.id))
   const ready = computed(() => rows.data.value !== undefined && place.value !== null)
 
-  const onlyBlock = computed(() => blocks.value?.find(({ id }) => id === blockId())?.code ?? null)
-
-  watch(ready, (isReady) => {
-    if (isReady) chosenId.value ??= firstOf(lines.value)
+  watch([ready, lines], () => {
+    if (ready.value && chosen.value === null) chosenId.value = firstOf(lines.value)
   }, { immediate: true })
 
-  const sums = computed(() => sumRegisterRows(items.value))
+  /** Of everything found; until that is known, of the rows that were read. */
+  const sums = computed(() => {
+    const all = totals.data.value
+    return all === undefined ? sumRegisterRows(items.value) : { ...all, signed: all.records }
+  })
   const sumWords = computed(() => {
     const { signed, withdrawn, areaHa, totalL } = sums.value
     if (items.value.length === 0) return null
@@ -66,7 +70,7 @@ export function useRegister(blockId: () => string | null): Register {
   })
 
   return {
-    rows, record, lines, ready, onlyBlock, place, outlines, chosenId, chosen, sums, sumWords,
+    rows, record, lines, ready, found: computed(() => totals.data.value?.found ?? null), place, outlines, chosenId, chosen, sums, sumWords,
     shown: computed(() => items.value.length),
     headWords: computed(() => headOf(chosen.value)),
   }

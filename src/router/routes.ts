@@ -28,7 +28,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/blocks', name: 'blocks', component: () => import('../views/blocks/BlocksView.vue'), meta: { place: 'blocks' } },
   { path: '/blocks/new', name: 'block-new', component: () => import('../views/blocks/BlockNewView.vue'), meta: { place: 'blocks', roles: MANAGERS } },
   { path: '/blocks/:id', name: 'block', component: () => import('../views/blocks/BlockPageView.vue'), props: true, meta: { place: 'blocks' } },
-  { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), props: ({ query }) => ({ block: typeof query['block'] === 'string' ? query['block'] : null }), meta: { place: 'register' } },
+  { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), meta: { place: 'register' } },
   { path: '/register/new', name: 'record-new', component: () => import('../views/register/RecordFormView.vue'), meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
   { path: '/register/:id', name: 'record', component: () => import('../views/register/RecordView.vue'), props: true, meta: { place: 'register' } },
   { path: '/inputs', name: 'inputs', component: () => import('../views/inputs/InputsView.vue'), meta: { place: 'inputs' } },

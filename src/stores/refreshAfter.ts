@@ -12,6 +12,8 @@ const STALE: Record<CommandKind, string[]> = {
   'record.create': ['records'],
   'record.update': ['records'],
   'record.sign': ['records', 'files', 'lots'],
+  'filter.keep': ['filters'],
+  'filter.forget': ['filters'],
 }
 
 /** Reads again, in the background, what a command has changed. */

@@ -1,6 +1,7 @@
 import { mount, type VueWrapper } from '@vue/test-utils'
 import { beforeEach, describe, expect, it } from 'vitest'
 import type { RegisterRow } from '../../../../shared/contract/record.ts'
+import type { RegisterSort } from '../../../../shared/contract/register.ts'
 import { presentRow } from '../../../../shared/register/presentRow.ts'
 import type { RegisterLine } from '../../../../shared/register/registerLine.ts'
 import RegisterFoot from '../../../../src/components/register/RegisterFoot.vue'
@@ -13,10 +14,10 @@ const place = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as c
 const line = (overrides: Partial<RegisterRow> = {}): RegisterLine => presentRow(buildRow(overrides), place)
 const global = { plugins: [i18n] }
 
-function mountTable(lines: RegisterLine[], chosenId: string | null = null): VueWrapper {
+function mountTable(lines: RegisterLine[], chosenId: string | null = null, sort: RegisterSort = '-when'): VueWrapper {
   return mount(RegisterTable, {
     global,
-    props: { lines, outlines: new Map(), chosenId, sums: { words: '2 signed', hectares: '1.25', litres: '983' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
+    props: { lines, outlines: new Map(), chosenId, sort, sums: { words: '2 signed', hectares: '1.25', litres: '983' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
   })
 }
 
@@ -49,8 +50,21 @@ describe('RegisterTable', () => {
 
   it('shows a dash for what is not there, never 0', () => {
     const row = mountTable([line({ id: 'x', totalL: null, sprayLPerHa: null })]).get('[data-row="x"]')
-    expect(row.get('.c-litres').text()).toBe('–')
+    expect(row.get('.c-litres .line-if').text()).toBe('–')
     expect(row.get('.c-rate').text()).toBe('–')
+  })
+
+  it('is put in order by its heads: downwards first, then upwards, and says which way', async () => {
+    const table = mountTable([line()], null, '-when')
+    const heads = table.findAll('thead th')
+    expect(heads.filter((head) => head.attributes('aria-sort') !== undefined).map((head) => [head.text(), head.attributes('aria-sort')])).toEqual([['Day↓', 'descending']])
+    for (const name of ['Record', 'Day', 'ha']) await heads.find((head) => head.text().startsWith(name))?.get('button').trigger('click')
+    expect(table.emitted('sort')).toEqual([['-number'], ['when'], ['-area']])
+  })
+
+  it('says under a neighbour what a narrow page has no column for', () => {
+    const row = mountTable([line({ id: 'n' })]).get('[data-row="n"]')
+    expect(row.findAll('.under').map((each) => each.text().replaceAll('\u00a0', ' '))).toEqual(['05:05', 'Brew 34', '2 470 L/ha', '0.14 ha', 'Ruan Abel'])
   })
 
   it('ends in the totals it was given', () => {
@@ -76,11 +90,11 @@ describe('RowTally', () => {
 })
 
 describe('RegisterFoot', () => {
-  const props = { shown: 50, hasMore: true, reading: false, failed: false, unsigned: 1, late: 4, signed: 48, keys: true }
+  const props = { shown: 50, found: 143, hasMore: true, reading: false, failed: false, unsigned: 1, late: 4, signed: 48, keys: true }
 
   it('says which rows are shown and offers more', async () => {
     const foot = mount(RegisterFoot, { global, props })
-    expect(foot.text()).toContain('Rows 1 to 50')
+    expect(foot.text()).toContain('Rows 1 to 50 of 143; the totals are of all of them.')
     expect(foot.text()).toContain('4 of 48')
     await foot.get('button').trigger('click')
     expect(foot.emitted('more')).toHaveLength(1)
