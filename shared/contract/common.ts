@@ -42,6 +42,9 @@ const limitSchema = z
   .pipe(z.number().min(1).max(200))
   .meta({ type: 'integer', minimum: 1, maximum: 200, default: 50 })
 
+/** Which state of an unsigned thing a writer saw; what no column could hold is refused. */
+export const revisionSchema = z.number().int().min(1).max(2_147_483_647)
+
 /** Query of every list. */
 export const pageQuerySchema = z.strictObject({
   limit: limitSchema.default(50),

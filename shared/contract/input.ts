@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { dimensionOf } from '../units/dimensionOf.ts'
-import { civilDateSchema, idSchema } from './common.ts'
+import { civilDateSchema, idSchema, revisionSchema } from './common.ts'
 import { amountSchema, amountUnit, decimalText, positiveDecimal, rateUnit } from './quantity.ts'
 import { lineText, noteText } from './text.ts'
 
@@ -83,7 +83,7 @@ export type Lot = z.infer<typeof lotSchema>
 /** A count of what is really there, with the reason the book was wrong. */
 export const countLotSchema = z.strictObject({
   id: idSchema,
-  revision: z.number().int().min(1),
+  revision: revisionSchema,
   left: z.strictObject({ value: decimalText, unit: amountUnit }),
   reason: noteText(500),
 })

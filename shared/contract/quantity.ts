@@ -10,7 +10,7 @@ export const SPEED_UNITS = ['kmh', 'mph', 'ms', 'knot'] as const
 export const TEMPERATURE_UNITS = ['degC', 'degF'] as const
 
 /** A decimal as typed: no sign, no exponent, no leading zero, at most 7 digits before the point and 4 after it. */
-export const decimalText = z.string().regex(/^(0|[1-9]\d{0,6})(\.\d{1,4})?$/, { error: 'number.format' })
+export const decimalText = z.string().regex(/^(0|[1-9]\d{0,6})(\.\d{1,4})?$/, { error: 'number.format', abort: true })
 
 /** A decimal above zero. */
 export const positiveDecimal = decimalText.refine((text) => /[1-9]/.test(text), { error: 'number.above_zero' })
