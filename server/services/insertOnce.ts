@@ -1,4 +1,5 @@
 import type { EntityManager, EntityTarget, FindOptionsWhere, ObjectLiteral } from 'typeorm'
+import type { QueryDeepPartialEntity } from 'typeorm/query-builder/QueryPartialEntity.js'
 import { canonicalText } from '../../shared/evidence/canonicalText.ts'
 import { sha256Hex } from '../../shared/evidence/sha256Hex.ts'
 import { AppError, invalid, type FieldError } from '../errors.ts'
@@ -42,7 +43,7 @@ export async function insertOnce<Row extends Creatable>(
   row: Row,
   taken: FieldError,
 ): Promise<{ made: boolean; stored: Row }> {
-  const result = await manager.createQueryBuilder().insert().into(target).values(row as never).orIgnore().returning('id').execute()
+  const result = await manager.createQueryBuilder().insert().into(target).values(row as QueryDeepPartialEntity<Row>).orIgnore().returning('id').execute()
   if ((result.raw as unknown[]).length > 0) return { made: true, stored: row }
   const present = await findRepeat(manager, target, row)
   if (!present) throw new AppError('conflict', 'conflict', { errors: [taken] })

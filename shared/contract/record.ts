@@ -88,6 +88,8 @@ export const recordSchema = recordContentSchema.extend({
   signedAt: z.string().nullable(),
   deviceAt: z.string().nullable(),
   receivedAt: z.string(),
+  /** How far the device's clock ran ahead of the server's when the record was first sent, minutes; null where it told none. */
+  clockSkewMinutes: z.number().int().nullable(),
   /** Why the version that stands now was made: an amendment's reason, or a withdrawal's; null for the first. */
   reason: z.string().nullable(),
   reviews: z.array(z.object({ version: z.number().int(), by: personRef.nullable(), at: z.string(), note: z.string().nullable() })),

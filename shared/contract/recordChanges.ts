@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { acknowledgedSchema, idSchema, instantSchema } from './common.ts'
+import { acknowledgedSchema, idSchema, instantSchema, revisionSchema } from './common.ts'
 import { problemSchema } from './problem.ts'
 import { recordContentSchema } from './recordContent.ts'
 import { passwordSchema } from './session.ts'
@@ -13,7 +13,7 @@ export const createRecordSchema = recordContentSchema.extend({
 export type CreateRecord = z.infer<typeof createRecordSchema>
 
 export const updateRecordSchema = recordContentSchema.extend({
-  revision: z.number().int().min(1),
+  revision: revisionSchema,
   deviceAt: instantSchema.nullable().default(null),
 })
 export type UpdateRecord = z.infer<typeof updateRecordSchema>
@@ -21,7 +21,7 @@ export type UpdateRecord = z.infer<typeof updateRecordSchema>
 export const signRecordSchema = z.strictObject({
   password: passwordSchema,
   /** The revision that the signer saw; anything else is `stale`. */
-  revision: z.number().int().min(1).optional(),
+  revision: revisionSchema.optional(),
   acknowledged: acknowledgedSchema.default([]),
 })
 export type SignRecord = z.infer<typeof signRecordSchema>
@@ -48,7 +48,7 @@ export const amendRecordSchema = z.strictObject({
   reason: noteText(500),
   /** Judged where it is sent; our own clients ask for it. */
   password: passwordSchema.optional(),
-  revision: z.number().int().min(1).optional(),
+  revision: revisionSchema.optional(),
   deviceAt: instantSchema.nullable().default(null),
   acknowledged: acknowledgedSchema.default([]),
 })
@@ -57,7 +57,7 @@ export type AmendRecord = z.infer<typeof amendRecordSchema>
 export const withdrawRecordSchema = z.strictObject({
   reason: noteText(500),
   password: passwordSchema.optional(),
-  revision: z.number().int().min(1).optional(),
+  revision: revisionSchema.optional(),
 })
 export type WithdrawRecord = z.infer<typeof withdrawRecordSchema>
 

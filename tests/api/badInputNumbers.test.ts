@@ -76,6 +76,22 @@ describe('units and figures that do not fit', () => {
     { what: 'B-36 air of 900 °C', path: '/records', body: weather({ air: { value: '900', unit: 'degC', kind: 'felt' } }), errors: ['weather.air.value number.range'] },
   ])('$what', (row) => expectRefused(house, farm, manager, row))
 
+  it('B-31 more than ten times the label’s most is asked about on its own: a unit may be mixed up', async () => {
+    const sign = async (value: string, codes: string[]) => {
+      const record = { ...buildRecord(things), components: [{ materialId: things.materialId, lotId: things.lotId, basis: { kind: 'perArea', value, unit: 'L/ha' } }] }
+      await manager.post(`/api/farms/${farm.id}/records`).send(record).expect(201)
+      const acknowledged = codes.map((code) => ({ code, reason: 'Read off the jar twice.' }))
+      return manager.post(`/api/farms/${farm.id}/records/${record.id}/sign`).send({ password: PASSWORD, acknowledged })
+    }
+    const asked = await sign('26', ['record.stop', 'lot.short'])
+    expect(asked.body).toMatchObject({ status: 422, acknowledgeable: true, errors: [{ path: 'component:0', code: 'dose.unit_suspect', params: { times: 10.4 } }] })
+    const signed = await sign('26', ['record.stop', 'lot.short', 'dose.unit_suspect'])
+    expect(signed.status).toBe(200)
+    expect(signed.body.acknowledged.map(({ code }: { code: string }) => code)).toContain('dose.unit_suspect')
+    const over = await sign('25', [])
+    expect(over.body.errors.map(({ code }: { code: string }) => code)).toEqual(['record.stop'])
+  })
+
   it('B-33 more on the land than the mix makes is asked about', async () => {
     const record = buildRecord(things)
     const lines = record.lines.map((line) => ({ ...line, amount: { value: '440', unit: 'L', known: 'measured' } }))
@@ -96,5 +112,10 @@ describe('what only the server says', () => {
     const body = { id: uuidV7(), revision: 2_147_483_648, left: { value: '5', unit: 'L' }, reason: 'Counted.' }
     const counted = await manager.post(`/api/farms/${farm.id}/lots/${things.lotId}/count`).send(body).expect(422)
     expect(faultsOf(counted.body)).toEqual(['revision field.too_big'])
+    const record = buildRecord(things)
+    await manager.post(`/api/farms/${farm.id}/records`).send(record).expect(201)
+    const { id, ...content } = record
+    const written = await manager.put(`/api/farms/${farm.id}/records/${id}`).send({ ...content, revision: 2_147_483_648 }).expect(422)
+    expect(faultsOf(written.body)).toEqual(['revision field.too_big'])
   })
 })

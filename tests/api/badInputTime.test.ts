@@ -14,7 +14,7 @@ let manager: Agent
 beforeAll(async () => {
   house = await openHouse()
   farm = await house.makeFarm()
-  things = await seedThings(house, farm)
+  things = await seedThings(house, farm, { lot: { quantity: { value: '10000', unit: 'L' } } })
   manager = await house.as(farm.accounts.manager)
 })
 afterAll(() => house.close())
@@ -59,7 +59,8 @@ describe('is refused, and nothing is stored', () => {
 
 describe('nearly now', () => {
   it('B-39 ten minutes ahead are a clock that runs fast', async () => {
-    await manager.post(`/api/farms/${farm.id}/records`).send(line('2026-06-16T13:00:00Z', '2026-06-16T14:10:00Z')()).expect(201)
+    const { status } = await manager.post(`/api/farms/${farm.id}/records`).send(line('2026-06-16T13:00:00Z', '2026-06-16T14:10:00Z')())
+    expect(status).toBe(201)
   })
 
   it('B-49, B-52 on purpose the season is that of the day on the farm, never asked for', async () => {
@@ -79,5 +80,34 @@ describe('nearly now', () => {
     const asked = await manager.post(`/api/farms/${farm.id}/records/${record.id}/sign`).send({ password: PASSWORD })
     expect(asked.body).toMatchObject({ status: 422, acknowledgeable: true, errors: [{ code: 'record.late', params: { days: 243 } }] })
     await manager.post(`/api/farms/${farm.id}/records/${record.id}/sign`).send({ password: PASSWORD, acknowledged: [{ code: 'record.late', reason: 'Found it.' }] }).expect(200)
+  })
+})
+
+describe('the clock of the device', () => {
+  const send = async (deviceAt: string | null) => {
+    const record = { ...buildRecord(things), deviceAt }
+    const made = await manager.post(`/api/farms/${farm.id}/records`).send(record).expect(201)
+    const sign = (acknowledged: object[] = []) => manager.post(`/api/farms/${farm.id}/records/${record.id}/sign`).send({ password: PASSWORD, acknowledged })
+    return { made: made.body as Record<string, unknown>, sign }
+  }
+
+  it.each([
+    { what: 'B-47 three days ahead', deviceAt: '2026-06-19T14:00:00Z', minutes: 3 * 24 * 60 },
+    { what: 'right', deviceAt: '2026-06-16T14:00:20Z', minutes: 0 },
+    { what: 'twenty minutes behind', deviceAt: '2026-06-16T13:40:00Z', minutes: -20 },
+    { what: 'not told', deviceAt: null, minutes: null },
+  ])('$what is told beside the server’s and bars nothing', async ({ deviceAt, minutes }) => {
+    const { made, sign } = await send(deviceAt)
+    expect([made.deviceAt, made.receivedAt, made.clockSkewMinutes]).toEqual([deviceAt?.replace('Z', '.000Z') ?? null, '2026-06-16T14:00:00.000Z', minutes])
+    expect((await sign().expect(200)).body.clockSkewMinutes).toBe(minutes)
+  })
+
+  it('B-48 in 1970 is taken, and the days of the work have to be confirmed', async () => {
+    const { made, sign } = await send('1970-01-02T00:00:00Z')
+    expect(made.clockSkewMinutes).toBeLessThan(-20_000_000)
+    const asked = await sign()
+    expect(asked.body).toMatchObject({ status: 422, acknowledgeable: true, errors: [{ path: 'lines', code: 'time.device_clock' }] })
+    const signed = await sign([{ code: 'time.device_clock', reason: 'It was this morning.' }])
+    expect([signed.status, signed.body.acknowledged]).toEqual([200, [{ code: 'time.device_clock', reason: 'It was this morning.' }]])
   })
 })

@@ -1,5 +1,6 @@
 import { In, type EntityManager } from 'typeorm'
 import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
+import { clockSkewMinutes } from '../../../shared/records/clockSkewMinutes.ts'
 import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Person } from '../../entities/Person.ts'
@@ -32,6 +33,7 @@ export async function presentRecord(manager: EntityManager, record: ApplicationR
     signedAt: record.signedAt?.toISOString() ?? null,
     deviceAt: record.deviceAt?.toISOString() ?? null,
     receivedAt: record.receivedAt.toISOString(),
+    clockSkewMinutes: clockSkewMinutes(record.deviceAt, record.receivedAt),
     reason,
     reviews: reviews.map(({ version, reviewedById, at, note }) => ({ version, by: person(reviewedById), at: at.toISOString(), note })),
   }

@@ -11,6 +11,7 @@ import { assertMayWrite } from './assertMayWrite.ts'
 import { drawLots } from './drawLots.ts'
 import { findRecordFaults } from './findRecordFaults.ts'
 import { findMissing, findUnlikely } from './findSigningFaults.ts'
+import { findClockDoubts, findSuspectDoses } from './findSuspect.ts'
 import { judgeRecord } from './judgeRecord.ts'
 import { loadRecordGround } from './loadRecordGround.ts'
 import { listDraws, planDraws } from './planDraws.ts'
@@ -22,7 +23,7 @@ import { writeVersion } from './writeVersion.ts'
  * Signs a record: judges it as it stands, draws its lots down, gives it its number and its entry in the log.
  * Signing again what is signed answers with it. All of it happens, or nothing.
  * @throws {AppError} not-found, forbidden, `stale` if it is not the revision that the signer saw, invalid-input, or
- *   `unlikely` while a stop, a short lot or a late entry has no reason.
+ *   `unlikely` while a stop, a short lot, a late entry, a dose or a clock that cannot be right has no reason.
  */
 export async function sealRecord(
   services: Pick<Services, 'clock'>,
@@ -43,11 +44,13 @@ export async function sealRecord(
   const judged = judgeRecord(stored, ground, actor.zone, now)
   const content = writeOutAmounts(stored, judged.sheet)
   const asked = listDraws(content, ground, judged.computed)
-  const acknowledged = keepAsked(input.acknowledged, [...planDraws(asked, []).doubts, ...findUnlikely(content, judged, [], now)], judged.checks)
+  const suspects = [...findSuspectDoses(judged.checks), ...findClockDoubts(record)]
+  const acknowledged = keepAsked(input.acknowledged, [...planDraws(asked, []).doubts, ...findUnlikely(content, judged, [], now), ...suspects], judged.checks)
   const draws = planDraws(asked, acknowledged)
   const faults = [...findRecordFaults(content, ground, now), ...findMissing(content, judged.sheet), ...draws.faults]
   if (faults.length > 0) throw invalid(faults)
-  const doubts = [...draws.doubts, ...findUnlikely(content, judged, acknowledged, now)]
+  const given = new Set(acknowledged.map(({ code }) => code))
+  const doubts = [...draws.doubts, ...findUnlikely(content, judged, acknowledged, now), ...suspects.filter(({ code }) => !given.has(code))]
   if (doubts.length > 0) throw unlikely(doubts)
   await drawLots(manager, draws.entries, { recordId: id, personId: personOf(actor), at: now })
   return presentRecord(manager, await writeVersion(services, manager, actor, {

@@ -6,6 +6,7 @@ import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import type { Services } from '../services.ts'
+import { updateRow } from '../updateRow.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
 import { draftRecord } from './draftRecord.ts'
 import { presentRecord } from './presentRecord.ts'
@@ -21,7 +22,8 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     const record = await manager.findOne(ApplicationRecord, { where: { farmId: actor.farmId, id }, lock: { mode: 'pessimistic_write' } })
     if (!record) throw notFound()
     assertMayWrite(actor, record)
-    const { revision, deviceAt, ...sent } = input
+    // Both clocks are those of the first sending: a later one beside them would look like a clock that is wrong.
+    const { revision, deviceAt: _later, ...sent } = input
     // Nobody named means nobody changed: the doer stays who it was.
     const content = { ...sent, doneById: sent.doneById ?? record.doneById }
     if (record.state === 'signed' || record.state === 'withdrawn') throw new AppError('conflict', 'record.signed', { current: await presentRecord(manager, record) })
@@ -31,8 +33,8 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
       throw stale(current)
     }
     const columns = await draftRecord(manager, actor, content, now)
-    const changes = { ...columns, revision: revision + 1, deviceAt: deviceAt === null ? record.deviceAt : new Date(deviceAt) }
-    await manager.update(ApplicationRecord, { farmId: actor.farmId, id }, changes as never)
+    const changes = { ...columns, revision: revision + 1 }
+    await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id }, changes)
     const written = { ...record, ...changes }
     await storeProjections(manager, written, true)
     await appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } })

@@ -16,6 +16,7 @@ import { RecordVersion } from '../../entities/RecordVersion.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { holdFiles } from '../files/holdFiles.ts'
 import type { Services } from '../services.ts'
+import { updateRow } from '../updateRow.ts'
 import { buildSignedRecord, type SignedPeople } from './buildSignedRecord.ts'
 import { formatRecordNumber } from './formatRecordNumber.ts'
 import type { RecordGround } from './loadRecordGround.ts'
@@ -64,7 +65,7 @@ export async function writeVersion(
     sortAt: new Date(firstStart(content) ?? record.sortAt), doneById: people.doneBy.id,
     version: stamp.version, revision: record.revision + 1, signedById: people.signedBy.id, signedAt: now,
   }
-  await manager.update(ApplicationRecord, { farmId: actor.farmId, id: record.id }, changes as never)
+  await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id: record.id }, changes)
   const written = { ...record, ...changes }
   await storeProjections(manager, written, true)
   await manager.insert(RecordVersion, {
