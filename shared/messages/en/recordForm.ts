@@ -145,7 +145,7 @@ export const recordForm = {
     none: 'none noted', change: 'Change',
     gloves: 'gloves', eyes: 'goggles', breathing: 'mask', coverall: 'coverall', apron: 'apron', boots: 'boots', longSleeves: 'long sleeves', hat: 'hat',
   },
-  sign: { lines: 'Sign {count} block lines', oneForAll: 'One signature for {count} lines. The number comes with it.' },
+  sign: { lines: 'Sign 1 block line | Sign {count} block lines', oneForAll: 'One signature for the line. The number comes with it. | One signature for {count} lines. The number comes with it.' },
   ready: { needPart: 'Start: say which part', needCounts: 'Start: write the counts' },
   gap: {
     aboveZero: 'Give a number above 0.',

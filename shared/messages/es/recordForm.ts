@@ -145,7 +145,7 @@ export const recordForm = {
     none: 'sin anotar', change: 'Cambiar',
     gloves: 'guantes', eyes: 'gafas', breathing: 'mascarilla', coverall: 'mono', apron: 'delantal', boots: 'botas', longSleeves: 'manga larga', hat: 'sombrero',
   },
-  sign: { lines: 'Firmar {count} líneas', oneForAll: 'Una firma para {count} líneas. El número llega con ella.' },
+  sign: { lines: 'Firmar 1 línea | Firmar {count} líneas', oneForAll: 'Una firma para la línea. El número llega con ella. | Una firma para {count} líneas. El número llega con ella.' },
   ready: { needPart: 'Empezar: diga qué parte', needCounts: 'Empezar: anote los recuentos' },
   gap: {
     aboveZero: 'Dé un número mayor que 0.',
