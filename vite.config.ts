@@ -1,11 +1,12 @@
 import vue from '@vitejs/plugin-vue'
 import { defineConfig } from 'vite'
+import { leaveOut } from './vite/leaveOut.ts'
 
 /** Where the server answers while the client is served by Vite. */
 const apiUrl = process.env['API_URL'] ?? 'http://127.0.0.1:3000'
 
 export default defineConfig({
-  plugins: [vue()],
+  plugins: [vue(), leaveOut()],
   // vue-i18n: messages are made ready by compileWords; its own compiler stays out. Nothing of ours uses the options API.
   define: {
     __VUE_OPTIONS_API__: false,

@@ -1,4 +1,5 @@
-import { Temporal } from 'temporal-polyfill'
+import * as Instant from 'temporal-polyfill/fns/Instant'
+import { addDays } from '../time/calendar.ts'
 import { civilDateIn } from '../time/civilDate.ts'
 import { ExactDecimal } from '../units/exactDecimal.ts'
 import type { FactMaterial } from './recordFacts.ts'
@@ -30,14 +31,13 @@ export function preHarvestHold(materials: readonly FactMaterial[]): Longest | nu
 
 /** The instant from which one may go in again. @param hours plain decimal text. */
 export function enterAgainAt(endedAt: string, hours: string): string {
-  return Temporal.Instant.fromEpochMilliseconds(Date.parse(endedAt))
-    .add({ milliseconds: new ExactDecimal(hours).mul(HOUR_MS).ceil().toNumber() })
-    .toString()
+  const heldMs = new ExactDecimal(hours).mul(HOUR_MS).ceil().toNumber()
+  return Instant.toString(Instant.fromEpochMilliseconds(Date.parse(endedAt) + heldMs))
 }
 
 /** First civil day of the farm's zone for picking. */
 export function pickAgainOn(endedAt: string, days: string, zone: string): string {
-  return Temporal.PlainDate.from(civilDateIn(zone, endedAt)).add({ days: Number(days) }).toString()
+  return addDays(civilDateIn(zone, endedAt), Number(days))
 }
 
 /** The holds that follow on one line; null where no label sets one or the work has not ended. */

@@ -1,4 +1,4 @@
-import { Temporal } from 'temporal-polyfill'
+import * as Instant from 'temporal-polyfill/fns/Instant'
 
 export type ParsedInstant =
   | { ok: true; instant: string }
@@ -18,7 +18,7 @@ export function parseInstant(text: string): ParsedInstant {
   if (year < 1970 || year > 2199) return { ok: false, problem: { id: 'time.range', params } }
   if (shape[4] === undefined) return { ok: false, problem: { id: 'time.zone_needed', params } }
   try {
-    return { ok: true, instant: Temporal.Instant.from(text).toString() }
+    return { ok: true, instant: Instant.toString(Instant.fromString(text)) }
   } catch {
     // No such day in the calendar: the reader's only answer is to throw.
     return { ok: false, problem: { id: 'time.invalid', params } }

@@ -1,4 +1,5 @@
-import { Temporal } from 'temporal-polyfill'
+import * as PlainDate from 'temporal-polyfill/fns/PlainDate'
+import { readDate } from './calendar.ts'
 
 /**
  * The season of a civil date, named by the year it starts in.
@@ -9,9 +10,9 @@ import { Temporal } from 'temporal-polyfill'
 export function seasonOf(civilDate: string, seasonStart: string): number {
   if (!/^\d{4}-\d{2}-\d{2}$/.test(civilDate)) throw new RangeError(`not a civil date: ${civilDate.slice(0, 80)}`)
   if (!/^\d{2}-\d{2}$/.test(seasonStart)) throw new RangeError(`not a month and day: ${seasonStart.slice(0, 80)}`)
-  const date = Temporal.PlainDate.from(civilDate)
+  const date = readDate(civilDate)
   // 2023 is no leap year: 29 February throws here.
-  const { month, day } = Temporal.PlainDate.from(`2023-${seasonStart}`)
-  const start = Temporal.PlainDate.from({ year: date.year, month, day })
-  return Temporal.PlainDate.compare(date, start) < 0 ? date.year - 1 : date.year
+  const { month, day } = readDate(`2023-${seasonStart}`)
+  const start = PlainDate.create(date.year, month, day)
+  return PlainDate.compare(date, start) < 0 ? date.year - 1 : date.year
 }

@@ -1,4 +1,7 @@
-import { Temporal } from 'temporal-polyfill'
+import { getISO } from 'temporal-polyfill/fns/Calendar'
+import * as Instant from 'temporal-polyfill/fns/Instant'
+import * as PlainDateTime from 'temporal-polyfill/fns/PlainDateTime'
+import * as ZonedDateTime from 'temporal-polyfill/fns/ZonedDateTime'
 import { isZone } from './isZone.ts'
 
 export interface CivilMoment {
@@ -42,10 +45,10 @@ export function toInstant({ date, time, zone, offset }: CivilMoment): InstantRes
   return { ok: false, problem: { id: 'time.ambiguous', params: { ...params, earlier: earlier.offset, later: later.offset } }, candidates }
 }
 
-function readLocal(date: string, time: string): Temporal.PlainDateTime | null {
+function readLocal(date: string, time: string): PlainDateTime.Record | null {
   if (!/^\d{4}-\d{2}-\d{2}$/.test(date) || !/^([01]\d|2[0-3]):[0-5]\d(:[0-5]\d)?$/.test(time)) return null
   try {
-    return Temporal.PlainDateTime.from(`${date}T${time}`)
+    return PlainDateTime.fromString(`${date}T${time}`, getISO)
   } catch {
     // 30 February: the reader's only answer is to throw.
     return null
@@ -53,11 +56,11 @@ function readLocal(date: string, time: string): Temporal.PlainDateTime | null {
 }
 
 /** No instant where the clock skips the time, one as a rule, two where it shows it twice. */
-function candidatesOf(local: Temporal.PlainDateTime, zone: string): InstantCandidate[] {
-  const both = [local.toZonedDateTime(zone, { disambiguation: 'earlier' }), local.toZonedDateTime(zone, { disambiguation: 'later' })]
-  const real = both.filter((moment) => moment.toPlainDateTime().equals(local))
+function candidatesOf(local: PlainDateTime.Record, zone: string): InstantCandidate[] {
+  const both = (['earlier', 'later'] as const).map((disambiguation) => PlainDateTime.toZonedDateTime(local, zone, { disambiguation }))
+  const real = both.filter((moment) => PlainDateTime.equals(ZonedDateTime.toPlainDateTime(moment), local))
   const distinct = real.filter((moment, index) => index === 0 || moment.epochMilliseconds !== real[0]?.epochMilliseconds)
-  return distinct.map((moment) => ({ instant: moment.toInstant().toString(), offset: moment.offset }))
+  return distinct.map((moment) => ({ instant: Instant.toString(ZonedDateTime.toInstant(moment)), offset: ZonedDateTime.offset(moment) }))
 }
 
 function refuse(id: 'time.nonexistent' | 'time.invalid', params: Record<string, string | number>): InstantResult {

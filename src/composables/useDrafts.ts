@@ -1,6 +1,5 @@
-import { liveQuery } from 'dexie'
 import { computed, onScopeDispose, ref, shallowRef, toValue, watch, type MaybeRefOrGetter, type Ref, type ShallowRef } from 'vue'
-import { device } from '../plugins/device.ts'
+import { device, watchDrafts } from '../plugins/device.ts'
 import type { Draft, DraftKind } from '../stores/draftTypes.ts'
 import { draftWriter } from '../stores/draftWriter.ts'
 import { useSession } from '../stores/session.ts'
@@ -29,18 +28,19 @@ export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): D
   const owner = computed(() => ({ accountId: session.user?.id ?? '', farmId: toValue(farmId) }))
 
   const stop = watch(owner, ({ accountId, farmId: farm }, _before, onCleanup) => {
-    let watching: { unsubscribe: () => void } | null = null
+    let latest = 0
     let isOver = false
-    function begin(): void {
-      if (isOver) return
-      watching = liveQuery(() => listDrafts(accountId, farm, kind)).subscribe({
-        next: (found) => { drafts.value = found; ready.value = true },
-        error: () => { drafts.value = []; ready.value = true },
-      })
+    async function list(): Promise<void> {
+      const mine = ++latest
+      const found = await listDrafts(accountId, farm, kind).catch(() => [])
+      if (isOver || mine !== latest) return
+      drafts.value = found
+      ready.value = true
     }
+    const stopWatching = watchDrafts(() => void list())
     // What was typed last before a reload is listed too.
-    draftWriter.recover().then(begin, begin)
-    onCleanup(() => { isOver = true; watching?.unsubscribe() })
+    draftWriter.recover().then(list, list)
+    onCleanup(() => { isOver = true; stopWatching() })
   }, { immediate: true })
   onScopeDispose(stop)
 
@@ -73,7 +73,8 @@ export function useDrafts(farmId: MaybeRefOrGetter<string>, kind?: DraftKind): D
 }
 
 async function listDrafts(accountId: string, farmId: string, kind: DraftKind | undefined): Promise<Draft[]> {
-  const found = await device.drafts.where({ accountId, farmId }).toArray()
+  const kept = await device.drafts.all()
+  const found = kept.filter((draft) => draft.accountId === accountId && draft.farmId === farmId)
   found.forEach(draftWriter.saw)
   return found
     .filter((draft) => kind === undefined || draft.kind === kind)

@@ -1,10 +1,11 @@
 import type { Router } from 'vue-router'
+import { LATER_PARTS } from '../views/frame/laterParts.ts'
 import { routes } from './routes.ts'
 
 /** Where a browser has no idle callback: after the first page has settled. */
 const WAIT_MS = 2_000
 
-/** Once somebody's first page stands, reads the other views too: without signal, a place never opened before would not open. */
+/** Once somebody's first page stands, reads the other views and sheets too: without signal, a place never opened before would not open. */
 export function readViewsWhenIdle(router: Router): void {
   const stop = router.afterEach((to) => {
     if (to.meta.open === true) return
@@ -15,8 +16,7 @@ export function readViewsWhenIdle(router: Router): void {
 }
 
 function readViews(): void {
-  for (const { component } of routes) {
-    // A view that does not come now comes when it is opened.
-    if (typeof component === 'function') void (component as () => Promise<unknown>)().catch(() => undefined)
-  }
+  const views = routes.flatMap(({ component }) => (typeof component === 'function' ? [component as () => Promise<unknown>] : []))
+  // What does not come now comes when it is opened.
+  for (const read of [...views, ...Object.values(LATER_PARTS)]) void read().catch(() => undefined)
 }

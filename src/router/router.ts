@@ -1,5 +1,9 @@
 import { createRouter, createWebHistory } from 'vue-router'
+<<<<<<< HEAD
 import { overlaysSettled, watchOverlays } from '../plugins/overlayHistory.ts'
+=======
+import { openNewBuild } from '../stores/newBuild.ts'
+>>>>>>> d83a0af (Lighten the first pages; open anew where a new build replaced the files)
 import { guard } from './guard.ts'
 import { routes } from './routes.ts'
 
@@ -15,3 +19,4 @@ export const router = createRouter({
 
 router.beforeEach(overlaysSettled)
 router.beforeEach(guard)
+router.onError((_error, to) => { void openNewBuild(to.fullPath) })

@@ -117,17 +117,14 @@ function laterThan(before: string | undefined): string {
 }
 
 /** Puts each draft unless the database has a newer one; gives what the database has then. */
-async function putNewer(typed: Draft[]): Promise<DraftWritten[]> {
-  const kept: DraftWritten[] = []
-  await device.transaction('rw', device.drafts, async () => {
-    for (const draft of typed) {
-      const before = await device.drafts.get(draft.id)
+function putNewer(typed: Draft[]): Promise<DraftWritten[]> {
+  return Promise.all(typed.map(async (draft) => {
+    const held = await device.drafts.change(draft.id, (before) => {
       const isNewer = before === undefined || before.updatedAt <= draft.updatedAt
-      if (isNewer) await device.drafts.put({ ...draft, begunAt: before?.begunAt ?? draft.begunAt })
-      kept.push({ id: draft.id, updatedAt: isNewer ? draft.updatedAt : before.updatedAt })
-    }
-  })
-  return kept
+      return isNewer ? { ...draft, begunAt: before?.begunAt ?? draft.begunAt } : undefined
+    })
+    return { id: draft.id, updatedAt: held?.updatedAt ?? draft.updatedAt }
+  }))
 }
 
 /** The one writer of this page. */

@@ -36,7 +36,8 @@ export const useFileQueue = defineStore('fileQueue', () => {
   const sendingCount = computed(() => Object.keys(progress.value).length)
 
   async function refresh(): Promise<void> {
-    const found = await device.files.orderBy('keptAt').toArray().catch(() => [])
+    const found = await device.files.all().catch(() => [])
+    found.sort((one, other) => one.keptAt.localeCompare(other.keptAt))
     items.value = [...found, ...unkept.values()]
   }
 

@@ -32,7 +32,8 @@ export const useOutbox = defineStore('outbox', () => {
   const needsYou = computed(() => mine.value.filter((item) => item.state === 'needsYou'))
 
   async function refresh(): Promise<void> {
-    items.value = await device.outbox.orderBy('keptAt').toArray().catch(() => [])
+    const kept = await device.outbox.all().catch(() => [])
+    items.value = kept.sort((one, other) => one.keptAt.localeCompare(other.keptAt))
   }
 
   /**
@@ -110,7 +111,7 @@ export const useOutbox = defineStore('outbox', () => {
       } catch (error) {
         if (mustWait(error)) break
         if (!(error instanceof ApiError)) throw error
-        await device.outbox.update(item.key, { state: 'needsYou', problem: error.problem })
+        await turn(item.key, { state: 'needsYou', problem: error.problem })
       } finally {
         inHand.delete(item.key)
       }
@@ -126,7 +127,7 @@ export const useOutbox = defineStore('outbox', () => {
 
   /** Puts a refused command back in line. */
   async function retry(key: string): Promise<void> {
-    await device.outbox.update(key, { state: 'kept', problem: null })
+    await turn(key, { state: 'kept', problem: null })
     await flush()
   }
 
@@ -146,6 +147,10 @@ export const useOutbox = defineStore('outbox', () => {
 /** A second write of the same thing replaces the first that was not sent; two counts of a lot are two. */
 function keyOf(command: Command): string {
   return `${command.kind}:${command.kind === 'lot.count' ? command.body.id : command.id}`
+}
+
+async function turn(key: string, change: Pick<KeptCommand, 'state' | 'problem'>): Promise<void> {
+  await device.outbox.change(key, (before) => before && { ...before, ...change })
 }
 
 /** No signal, no session, too many or a server in trouble: nothing was decided, so it stays. */

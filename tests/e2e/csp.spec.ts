@@ -19,7 +19,7 @@ test('opens every screen without one violation of the policy, error or lost file
   expect(found).toEqual([])
 })
 
-test('opens dialogs, lists, calendars and sheets without one violation', async ({ page, context, isPhone, signInAs, manager }) => {
+test('opens dialogs, lists and sheets without one violation', async ({ page, context, isPhone, signInAs, manager }) => {
   const found = await watchPages(context)
   const things = await makeThings(manager)
   await signInAs('manager')
@@ -28,9 +28,7 @@ test('opens dialogs, lists, calendars and sheets without one violation', async (
   await openList(page, say('inputs.form.kind'))
   await page.getByRole('dialog', { name: say('inputs.form.materialTitle') }).getByRole('button', { name: say('inputs.cancel') }).click()
   await page.getByRole('main').getByRole('button', { name: say('inputs.receiveLot') }).first().click()
-  await page.getByRole('combobox', { name: say('inputs.form.receivedOn') }).click()
-  await expect(page.getByRole('grid').filter({ visible: true })).toBeVisible()
-  await page.keyboard.press('Escape')
+  await page.getByLabel(say('inputs.form.receivedOn')).fill('2026-05-04')
   await closeDialog(page, say('inputs.form.lotTitle'))
   await page.getByRole('button', { name: say('inputs.count') }).first().click()
   await page.keyboard.press('Escape')

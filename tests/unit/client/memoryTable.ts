@@ -1,4 +1,4 @@
-/** A table of the device kept in memory, with as much of Dexie as the stores use. */
+/** A table of the device kept in memory, with as much of it as the stores use. */
 export class MemoryTable<Row extends object> {
   readonly rows = new Map<string, Row>()
   /** Every key that was ever put: what once lay on the device. */
@@ -29,13 +29,18 @@ export class MemoryTable<Row extends object> {
     return Promise.resolve()
   }
 
-  update(key: string, change: Partial<Row>): Promise<void> {
-    const row = this.rows.get(key)
-    if (row !== undefined) this.rows.set(key, { ...row, ...change })
-    return Promise.resolve()
+  async change(key: string, turn: (before: Row | undefined) => Row | undefined): Promise<Row | undefined> {
+    const before = this.rows.get(key)
+    const after = turn(before)
+    if (after !== undefined) await this.put(after)
+    return after ?? before
   }
 
-  orderBy(field: keyof Row): { toArray: () => Promise<Row[]> } {
-    return { toArray: () => Promise.resolve([...this.rows.values()].sort((a, b) => String(a[field]).localeCompare(String(b[field])))) }
+  all(): Promise<Row[]> {
+    return Promise.resolve([...this.rows.values()])
+  }
+
+  count(): Promise<number> {
+    return Promise.resolve(this.rows.size)
   }
 }

@@ -4,7 +4,7 @@ import type { DraftChannel } from '../../../../src/stores/draftChannel.ts'
 import { createDraftWriter } from '../../../../src/stores/draftWriter.ts'
 import { MemoryTable } from '../memoryTable.ts'
 
-const here = vi.hoisted(() => ({ device: {} as { drafts: unknown; transaction: unknown } }))
+const here = vi.hoisted(() => ({ device: {} as { drafts: unknown } }))
 vi.mock('../../../../src/plugins/device.ts', () => ({ device: here.device }))
 
 const typed = (content: object) => ({ id: 'd1', kind: 'record' as const, farmId: 'f', accountId: 'oda', content })
@@ -34,7 +34,6 @@ beforeEach(() => {
   draftWriter = createDraftWriter(openChannel)
   drafts = new MemoryTable<Draft>('id')
   here.device.drafts = drafts
-  here.device.transaction = (_mode: string, _table: unknown, work: () => Promise<void>) => work()
 })
 afterEach(() => { vi.useRealTimers() })
 
