@@ -2,7 +2,6 @@ import { openDB, type DBSchema, type IDBPDatabase, type StoreNames } from 'idb'
 import type { Draft } from '../stores/draftTypes.ts'
 import type { KeptCommand } from '../stores/keptCommand.ts'
 import type { KeptFile } from '../stores/keptFile.ts'
-import type { KeptFile } from '../stores/keptFile.ts'
 
 /** The last answer of one read, so that a form opens without signal. */
 interface KeptRead {
@@ -13,23 +12,6 @@ interface KeptRead {
   readAt: string
 }
 
-<<<<<<< HEAD
-/** What the device keeps: drafts, commands and files not yet sent, and the last reads. */
-class DeviceDatabase extends Dexie {
-  drafts!: Table<Draft, string>
-  outbox!: Table<KeptCommand, string>
-  reads!: Table<KeptRead, string>
-  files!: Table<KeptFile, string>
-
-  constructor() {
-    super('drenchleaf')
-    this.version(1).stores({
-      drafts: 'id, [accountId+farmId], updatedAt',
-      outbox: 'key, accountId, keptAt',
-      reads: 'key, accountId',
-    })
-    this.version(2).stores({ files: 'id, recordId, accountId, keptAt' })
-=======
 interface DeviceShape extends DBSchema {
   drafts: { key: string; value: Draft }
   outbox: { key: string; value: KeptCommand }
@@ -80,7 +62,6 @@ function tableOf<Name extends StoreNames<DeviceShape>>(name: Name, changed: () =
       if (after !== undefined) changed()
       return after ?? before
     },
->>>>>>> d83a0af (Lighten the first pages; open anew where a new build replaced the files)
   }
 }
 

@@ -1,9 +1,6 @@
 import { createRouter, createWebHistory } from 'vue-router'
-<<<<<<< HEAD
 import { overlaysSettled, watchOverlays } from '../plugins/overlayHistory.ts'
-=======
 import { openNewBuild } from '../stores/newBuild.ts'
->>>>>>> d83a0af (Lighten the first pages; open anew where a new build replaced the files)
 import { guard } from './guard.ts'
 import { routes } from './routes.ts'
 
