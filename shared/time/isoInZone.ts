@@ -1,4 +1,5 @@
-import { Temporal } from 'temporal-polyfill'
+import * as Instant from 'temporal-polyfill/fns/Instant'
+import * as ZonedDateTime from 'temporal-polyfill/fns/ZonedDateTime'
 
 /**
  * An instant as RFC 3339 with the offset that clocks in a zone had then, to the second.
@@ -6,5 +7,6 @@ import { Temporal } from 'temporal-polyfill'
  * @example isoInZone('America/Los_Angeles', '2026-06-16T13:05:00Z') // '2026-06-16T06:05:00-07:00'
  */
 export function isoInZone(zone: string, instantIso: string): string {
-  return Temporal.Instant.from(instantIso).toZonedDateTimeISO(zone).toString({ timeZoneName: 'never', smallestUnit: 'second' })
+  const moment = Instant.toZonedDateTimeISO(Instant.fromString(instantIso), zone)
+  return ZonedDateTime.toString(moment, { timeZoneName: 'never', smallestUnit: 'second' })
 }

@@ -1,8 +1,8 @@
-import { Temporal } from 'temporal-polyfill'
 import type { Boundary } from '../../shared/contract/block.ts'
 import { EACH, type Each } from '../../shared/contract/each.ts'
 import type { KnownAmount } from '../../shared/contract/quantity.ts'
 import type { BlockLine, Part } from '../../shared/contract/recordContent.ts'
+import { addDays } from '../../shared/time/calendar.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { toInstant } from '../../shared/time/toInstant.ts'
 import { newId } from './newId.ts'
@@ -56,12 +56,9 @@ export const emptyLine = (blockId: string): LineDraft => ({
   start: { date: '', time: '', offset: '' }, end: { time: '', offset: '', nextDay: false }, amount: emptyAmount(), skipped: false,
 })
 
-/** The civil day after. */
-const dayAfter = (date: string): string => Temporal.PlainDate.from(date).add({ days: 1 }).toString()
-
 /** The end of a line with its day; no day while the start has none. */
 export function endMoment({ start, end }: Pick<LineDraft, 'start' | 'end'>): MomentDraft {
-  const date = end.nextDay && start.date !== '' ? dayAfter(start.date) : start.date
+  const date = end.nextDay && start.date !== '' ? addDays(start.date, 1) : start.date
   return { date, time: end.time, offset: end.offset }
 }
 
