@@ -5,7 +5,7 @@ import { buildBlock, buildLot, buildMaterial, buildRecord } from '../../server/d
 import { createBlock } from '../../server/services/blocks/createBlock.ts'
 import { createMaterial } from '../../server/services/inputs/createMaterial.ts'
 import { receiveLot } from '../../server/services/inputs/receiveLot.ts'
-import type { CreateRecord } from '../../shared/contract/record.ts'
+import type { CreateRecord } from '../../shared/contract/recordChanges.ts'
 import setUp from '../support/globalSetup.ts'
 import { NOW, openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 import { seedAsOwner } from '../support/seedManyRecords.ts'
