@@ -3,18 +3,28 @@ import type { Computed, RecordState, RegisterRow } from '../../../shared/contrac
 import type { BlockLine, Part, RecordComponent, RecordContent } from '../../../shared/contract/recordContent.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
 import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
+import { mapPlainFields, PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 import { isoInZone } from '../../../shared/time/isoInZone.ts'
 import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
 import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
 import type { KeyedRow } from './listRegister.ts'
 
-/** The columns of the register as CSV, in their order; their heads stand under `registerPrint.csv`. */
-export const CSV_COLUMNS = [
+const FIGURES = [
   'record', 'version', 'state', 'season', 'method', 'block', 'part', 'areaHa', 'counts', 'stage', 'bbch', 'start', 'end', 'zone', 'amount', 'unit', 'known',
-  'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'totalL', 'totalKg', 'litresPerHa', 'kgPerHa', 'purpose', 'doneBy', 'licence',
+  'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'totalL', 'totalKg', 'litresPerHa', 'kgPerHa', 'doneBy',
   'signedAt', 'lateHours', 'stops', 'unknowns', 'checkCode',
 ] as const
-type CsvLine = Record<(typeof CSV_COLUMNS)[number], string>
+const WORDS = PLAIN_FIELDS.map(({ name }) => name)
+/** The columns of the register as CSV, in their order; what was written in words stands last. */
+export const CSV_COLUMNS = [...FIGURES, ...WORDS]
+type CsvColumn = (typeof CSV_COLUMNS)[number]
+type CsvLine = Record<CsvColumn, string>
+
+/** The head of a column. */
+export function csvHead(column: CsvColumn, language: Language): string {
+  const isWords = WORDS.some((name) => name === column)
+  return translate(language, isWords ? `records.plain.${column}.label` : `registerPrint.csv.${column}`)
+}
 
 export interface CsvRecord extends KeyedRow {
   state: RecordState
@@ -35,6 +45,7 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
   const computed = fillComputed(storedFigures)
   const say = (id: string, params = {}) => translate(place.language, `registerPrint.${id}`, params)
   const whole = {
+    ...mapPlainFields(({ name }) => content[name] ?? ''),
     record: row.number ?? '',
     version: row.version === 0 ? '' : String(row.version),
     state: say(`state.${state}`),
@@ -48,9 +59,7 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
     totalKg: figure(row.totalKg),
     litresPerHa: figure(row.sprayLPerHa),
     kgPerHa: figure(row.kgPerHa),
-    purpose: content.purpose ?? '',
     doneBy: row.by,
-    licence: content.licence ?? '',
     signedAt: instant(row.signedAt, place),
     lateHours: row.lateHours === null ? '' : String(row.lateHours),
     stops: String(row.tally.stop),

@@ -1,4 +1,5 @@
 import type { RecordState } from '../../../shared/contract/record.ts'
+import { PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 import { wordsToFindBy } from '../../../shared/register/foldWords.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 
@@ -15,7 +16,7 @@ export const TERM = {
 /** Every term of a record. @param blockNames names of its blocks as they stand now. */
 export function recordTerms(record: Pick<ApplicationRecord, 'state' | 'content' | 'doneById' | 'registerRow'>, blockNames: readonly string[]): string[] {
   const { content, registerRow: row } = record
-  const written = [row.number, content.purpose, content.notes, ...row.blocks.map(({ code }) => code), ...blockNames, ...row.preparations, ...row.lots]
+  const written = [row.number, ...PLAIN_FIELDS.map(({ name }) => content[name]), ...row.blocks.map(({ code }) => code), ...blockNames, ...row.preparations, ...row.lots]
   return [...new Set([
     TERM.state(record.state),
     TERM.method(content.method),

@@ -1,10 +1,9 @@
 import { stringify } from 'csv-stringify'
 import { pipeline, Readable, type Transform } from 'node:stream'
 import type { Language } from '../../../shared/messages/translate.ts'
-import { translate } from '../../../shared/messages/translate.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import type { Services } from '../services.ts'
-import { CSV_COLUMNS, csvLines, type CsvRecord } from './csvLines.ts'
+import { CSV_COLUMNS, csvHead, csvLines, type CsvRecord } from './csvLines.ts'
 import type { RegisterPlaceQuery } from './listRegister.ts'
 import { readRegisterRows } from './readRegisterRows.ts'
 
@@ -19,7 +18,7 @@ const COLUMNS = 'd.state, d.register_row, d.content, d.computed, d.digest'
 export function registerCsv(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language): Transform {
   const table = stringify({
     bom: true, record_delimiter: '\r\n', header: true, escape_formulas: true,
-    columns: CSV_COLUMNS.map((key) => ({ key, header: translate(language, `registerPrint.csv.${key}`) })),
+    columns: CSV_COLUMNS.map((key) => ({ key, header: csvHead(key, language) })),
   })
   // What breaks one end off, ends the other with it.
   pipeline(Readable.from(lines(services, actor, place, language)), table, () => undefined)

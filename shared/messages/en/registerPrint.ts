@@ -16,8 +16,8 @@ export const registerPrint = {
     record: 'Record', version: 'Version', state: 'State', season: 'Season', method: 'Method', block: 'Block', part: 'Part treated', areaHa: 'Area treated, ha',
     counts: 'Counted', stage: 'Growth stage', bbch: 'BBCH', start: 'Start', end: 'End', zone: 'Time zone', amount: 'Amount on this block', unit: 'Unit',
     known: 'How known', keepOutUntil: 'Keep out until', pickFrom: 'Pick from', preparations: 'Preparations of the record', lots: 'Lots, in the same order',
-    water: 'Carrier water from', totalL: 'Mix of the record, L', totalKg: 'By mass in the record, kg', litresPerHa: 'L/ha', kgPerHa: 'kg/ha', purpose: 'Purpose',
-    doneBy: 'Done by', licence: 'Licence', signedAt: 'Signed', lateHours: 'Hours late', stops: 'Stops', unknowns: 'Not known', checkCode: 'Check code',
+    water: 'Carrier water from', totalL: 'Mix of the record, L', totalKg: 'By mass in the record, kg', litresPerHa: 'L/ha', kgPerHa: 'kg/ha',
+    doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late', stops: 'Stops', unknowns: 'Not known', checkCode: 'Check code',
   },
   pdf: {
     title: 'Register',
