@@ -6,6 +6,7 @@ import { WholeRecords1764600000000 } from '../../migrations/1764600000000-WholeR
 import { AddAttachments1764601000000 } from '../../migrations/1764601000000-AddAttachments.ts'
 import { FindInRegister1764602000000 } from '../../migrations/1764602000000-FindInRegister.ts'
 import { NarrowAccess1764603000000 } from '../../migrations/1764603000000-NarrowAccess.ts'
+import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindBySubject.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -40,6 +41,7 @@ export function createOwnerSource(url: string): DataSource {
       AddAttachments1764601000000,
       FindInRegister1764602000000,
       NarrowAccess1764603000000,
+      FindBySubject1764604000000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -3,7 +3,6 @@ import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm
 /** A photo or paper of a record. Its bytes lie in the file store under the farm and their digest. */
 @Entity({ name: 'attachments' })
 @Index('attachments_record_idx', ['farmId', 'recordId', 'uploadedAt', 'id'])
-@ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'attachments_record_fkey' })
 @ForeignKey('Person', ['farmId', 'uploadedById'], ['farmId', 'id'], { name: 'attachments_uploaded_by_fkey' })
 @Check('attachments_kind_check', `kind IN ('photo', 'paper')`)
 @Check('attachments_bytes_check', 'bytes > 0')
@@ -11,6 +10,7 @@ import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm
 export class Attachment {
   @PrimaryColumn({ name: 'farm_id', type: 'uuid', primaryKeyConstraintName: 'attachments_pkey' }) farmId!: string
   @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'attachments_pkey' }) id!: string
+  /** A record, or one that was discarded before it was signed: no key binds it. */
   @Column({ name: 'record_id', type: 'uuid' }) recordId!: string
   @Column({ type: 'text' }) kind!: 'photo' | 'paper'
   @Column({ type: 'text' }) label!: string

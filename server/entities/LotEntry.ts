@@ -3,6 +3,7 @@ import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm
 /** One movement of a lot; written once. */
 @Entity({ name: 'lot_entries' })
 @Index('lot_entries_lot_idx', ['farmId', 'lotId', 'at'])
+@Index('lot_entries_record_idx', ['farmId', 'recordId'])
 @ForeignKey('Lot', ['farmId', 'lotId'], ['farmId', 'id'], { name: 'lot_entries_lot_fkey' })
 @ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'lot_entries_record_fkey' })
 @ForeignKey('Person', ['farmId', 'personId'], ['farmId', 'id'], { name: 'lot_entries_person_fkey' })

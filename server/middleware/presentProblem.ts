@@ -18,11 +18,11 @@ interface HttpFault {
  * @returns null for what nobody foresaw: that is logged and answered as `internal`.
  */
 export function presentProblem(error: unknown, language: Language, requestId: string): Problem | null {
-  if (error instanceof AppError) return build(error, language, requestId)
+  if (error instanceof AppError) return presentRefusal(error, language, requestId)
   if (isZodError(error)) {
-    return build(new AppError('invalid-input', 'invalid', { errors: findFieldErrors(error) }), language, requestId)
+    return presentRefusal(new AppError('invalid-input', 'invalid', { errors: findFieldErrors(error) }), language, requestId)
   }
-  if (isHttpFault(error)) return build(fromHttpFault(error), language, requestId)
+  if (isHttpFault(error)) return presentRefusal(fromHttpFault(error), language, requestId)
   return null
 }
 
@@ -39,7 +39,8 @@ export function presentUnforeseen(language: Language, requestId: string): Proble
   }
 }
 
-function build(error: AppError, language: Language, requestId: string): Problem {
+/** The problem of a refusal, as it is answered or stands in an answer about several things. */
+export function presentRefusal(error: AppError, language: Language, requestId: string): Problem {
   const errors = cutShort(error).map((field) => presentField(field, language))
   const title = translate(language, `problems.${error.code}`)
   return {

@@ -2,10 +2,11 @@ import { z } from 'zod'
 import { farmParamsSchema, thingParamsSchema } from '../../shared/contract/common.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
 import { createRecordSchema, signRecordSchema, updateRecordSchema } from '../../shared/contract/recordChanges.ts'
-import { signedRecordSchema } from '../../shared/contract/signedRecord.ts'
+import { recordVersionsSchema } from '../../shared/contract/recordVersions.ts'
 import { collectRecordReport } from '../services/records/collectRecordReport.ts'
 import { createRecord } from '../services/records/createRecord.ts'
-import { getRecord, listRecordVersions } from '../services/records/readRecords.ts'
+import { listRecordVersions } from '../services/records/listRecordVersions.ts'
+import { getRecord } from '../services/records/readRecords.ts'
 import { signRecord } from '../services/records/signRecord.ts'
 import { updateRecord } from '../services/records/updateRecord.ts'
 import { defineRoute } from './defineRoute.ts'
@@ -14,11 +15,6 @@ import { sendReport } from './sendReport.ts'
 
 /** An older version prints as it was signed; without one, the newest. */
 const printQuerySchema = z.strictObject({ language: z.enum(['en', 'es']).optional(), version: z.coerce.number().int().min(1).max(9999).optional() })
-
-const versionsSchema = z.object({
-  items: z.array(z.object({ version: z.number().int(), digest: z.string(), canonicalText: z.string(), signed: signedRecordSchema })),
-  next: z.null(),
-})
 
 export const recordRoutes = [
   defineRoute({
@@ -45,12 +41,12 @@ export const recordRoutes = [
     run: async ({ services, actor, params, body }) => ({ body: await signRecord(services, actor, params.id, body) }),
   }),
   defineRoute({
-    method: 'get', path: '/farms/:farmId/records/:id/versions', summary: 'Signed versions with the text their digests are over.', roles: EVERY_ROLE,
-    params: thingParamsSchema, answer: versionsSchema,
+    method: 'get', path: '/farms/:farmId/records/:id/versions', summary: 'Signed versions with the text their digests are over, and what changed from one to the next.', roles: EVERY_ROLE,
+    params: thingParamsSchema, answer: recordVersionsSchema,
     run: async ({ services, actor, params }) => ({ body: await listRecordVersions(services, actor, params.id) }),
   }),
   defineRoute({
-    method: 'get', path: '/farms/:farmId/records/:id/pdf', summary: 'The application record as PDF.', roles: EVERY_ROLE,
+    method: 'get', path: '/farms/:farmId/records/:id/pdf', summary: 'The application record as PDF, as it stands or as an older version said it.', roles: EVERY_ROLE,
     params: thingParamsSchema, query: printQuerySchema, answer: z.null(), contentType: 'application/pdf',
     run: async (call) => {
       const { language = call.language, version } = call.query

@@ -4,10 +4,11 @@ import { farmRoutes } from './farmRoutes.ts'
 import { fileRoutes } from './fileRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
+import { recordLifeRoutes } from './recordLifeRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
 import { registerRoutes } from './registerRoutes.ts'
 import { reportRoutes } from './reportRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]
+export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]

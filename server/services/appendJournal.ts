@@ -9,7 +9,7 @@ export async function appendJournal(
   services: Pick<Services, 'clock'>,
   manager: EntityManager,
   actor: Pick<FarmActor, 'farmId' | 'personId' | 'accountId'>,
-  entry: { action: string; subjectId: string; detail?: Record<string, string | number> },
+  entry: { action: string; subjectId: string; detail?: object },
 ): Promise<void> {
   await manager.insert(JournalEntry, {
     farmId: actor.farmId,

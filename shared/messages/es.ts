@@ -15,11 +15,12 @@ import { registerPrint } from './es/registerPrint.ts'
 import { session } from './es/session.ts'
 import { today } from './es/today.ts'
 import { units } from './es/units.ts'
+import { versions } from './es/versions.ts'
 
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, inputs, problems, recordForm, records, register, session, today, units,
+  blocks, checks, common, farm, files, frame, inputs, problems, recordForm, records, register, session, today, units, versions,
 }
 
 /** Every word a person reads, in Spanish. */

@@ -16,7 +16,7 @@ export interface RowSource {
   materials: readonly { id: string; name: string }[]
   lots: readonly { id: string; code: string }[]
   doneBy: string
-  signed: { number: string; season: number; version: number; at: string } | null
+  signed: { number: string; season: number; version: number; at: string; firstAt: string } | null
 }
 
 /** First start of the work, RFC 3339, or null before one is written. */
@@ -41,7 +41,7 @@ const textOf = (value: number | null): string | null => (value === null ? null :
 export function registerRow(source: RowSource): Omit<RegisterRow, 'id' | 'state'> {
   const { content, sheet, signed } = source
   const endedAt = lastEnd(content)
-  const lateHours = signed && endedAt ? Math.floor((Date.parse(signed.at) - Date.parse(endedAt)) / HOUR_MS) : 0
+  const lateHours = signed && endedAt ? Math.floor((Date.parse(signed.firstAt) - Date.parse(endedAt)) / HOUR_MS) : 0
   const nameOf = <Thing extends { id: string }>(things: readonly Thing[], id: string | null) => things.filter((thing) => thing.id === id)
   return {
     number: signed?.number ?? null,

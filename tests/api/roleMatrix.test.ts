@@ -77,6 +77,11 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'put /farms/:farmId/records/:id': () => ({ ...buildRecord(things), id: undefined, revision: 1 }),
     'post /farms/:farmId/records/:id/sign': () => ({ password: PASSWORD }),
     'post /farms/:farmId/records/:id/files': () => ({ id: uuidV7(), kind: 'photo' }),
+    'post /farms/:farmId/records/sign': () => ({ password: PASSWORD, ids: [world.recordId] }),
+    'post /farms/:farmId/records/:id/amend': () => ({ password: PASSWORD, reason: 'A slip', purpose: tag }),
+    'post /farms/:farmId/records/:id/withdraw': () => ({ password: PASSWORD, reason: 'Written twice' }),
+    'post /farms/:farmId/records/:id/review': () => ({}),
+    'post /farms/:farmId/records/:id/discard': () => ({}),
   }
   const make = bodies[`${route.method} ${route.path}`]
   if (!make && route.body) throw new Error(`The matrix has no body for ${route.method} ${route.path}`)

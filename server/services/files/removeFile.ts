@@ -18,7 +18,8 @@ export async function removeFile(services: Services, actor: FarmActor, id: strin
     const found = await manager.findOneBy(Attachment, { farmId, id })
     if (!found) throw notFound()
     // A signature takes the same lock first, then names the files.
-    const record = await manager.findOneOrFail(ApplicationRecord, { where: { farmId, id: found.recordId }, lock: { mode: 'pessimistic_read' } })
+    const record = await manager.findOne(ApplicationRecord, { where: { farmId, id: found.recordId }, lock: { mode: 'pessimistic_read' } })
+    if (!record) throw notFound()
     assertMayWrite(actor, record)
     const row = await manager.findOneOrFail(Attachment, { where: { farmId, id }, lock: { mode: 'pessimistic_write' } })
     if (row.signedVersion !== null) throw new AppError('conflict', 'file.signed')

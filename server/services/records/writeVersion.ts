@@ -35,6 +35,8 @@ export interface Signature {
   judged: { sheet: RecordSheet; computed: Computed; checks: Check[] }
   acknowledged: Acknowledged
   deviceAt: Date | null
+  /** When its first version was signed; how late an entry is does not change with an amendment. */
+  firstSignedAt: Date
   now: Date
 }
 
@@ -54,14 +56,14 @@ export async function writeVersion(
     buildSignedRecord({
       actor, entry, content, ground, people, acknowledged, files, reason, record: stamp, computed: judged.computed, checks: judged.checks,
       replaces: record.digest,
-      times: { deviceAt: signature.deviceAt?.toISOString() ?? null, receivedAt: record.receivedAt.toISOString(), signedAt: now.toISOString() },
+      times: { deviceAt: signature.deviceAt?.toISOString() ?? null, receivedAt: (entry === 'signed' ? record.receivedAt : now).toISOString(), signedAt: now.toISOString() },
     }),
   )
   const digest = sha256Hex(text)
   const changes = {
     state: entry === 'withdrawn' ? 'withdrawn' as const : 'signed' as const,
     content, computed: judged.computed, checks: judged.checks, acknowledged, season, number, seq, digest,
-    registerRow: registerRow({ content, ...judged, ...ground, doneBy: people.doneBy.name, signed: { ...stamp, at: now.toISOString() } }),
+    registerRow: registerRow({ content, ...judged, ...ground, doneBy: people.doneBy.name, signed: { ...stamp, at: now.toISOString(), firstAt: signature.firstSignedAt.toISOString() } }),
     sortAt: new Date(firstStart(content) ?? record.sortAt), doneById: people.doneBy.id,
     version: stamp.version, revision: record.revision + 1, signedById: people.signedBy.id, signedAt: now,
   }

@@ -130,10 +130,11 @@ export const records = {
     air: 'Air',
     humidity: 'Humidity',
     kindOf: 'How it is known: {name}',
-    kind: { readHere: 'read here', felt: 'felt', station: 'station' },
+    kind: { readHere: 'read here', felt: 'felt', station: 'station', model: 'model' },
     never: 'never read',
     compass: { N: 'N', NE: 'NE', E: 'E', SE: 'SE', S: 'S', SW: 'SW', W: 'W', NW: 'NW' },
   },
+  protection: { gloves: 'gloves', eyes: 'eye protection', breathing: 'breathing protection', coverall: 'coverall', apron: 'apron', boots: 'boots', longSleeves: 'long sleeves', hat: 'hat' },
   known: { measured: 'measured', counted: 'counted', workedOut: 'worked out' },
   happened: {
     head: 'What went on each block',

@@ -130,10 +130,11 @@ export const records = {
     air: 'Aire',
     humidity: 'Humedad',
     kindOf: 'Cómo se sabe: {name}',
-    kind: { readHere: 'leído aquí', felt: 'percibido', station: 'estación' },
+    kind: { readHere: 'leído aquí', felt: 'percibido', station: 'estación', model: 'modelo' },
     never: 'nunca leído',
     compass: { N: 'N', NE: 'NE', E: 'E', SE: 'SE', S: 'S', SW: 'SO', W: 'O', NW: 'NO' },
   },
+  protection: { gloves: 'guantes', eyes: 'protección de los ojos', breathing: 'protección respiratoria', coverall: 'mono', apron: 'delantal', boots: 'botas', longSleeves: 'manga larga', hat: 'sombrero' },
   known: { measured: 'medido', counted: 'contado', workedOut: 'calculado' },
   happened: {
     head: 'Qué se aplicó en cada parcela',

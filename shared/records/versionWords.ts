@@ -1,0 +1,83 @@
+import { Temporal } from 'temporal-polyfill'
+import { words } from '../checks/buildCheck.ts'
+import type { Message } from '../contract/common.ts'
+import { EACH } from '../contract/each.ts'
+import type { Basis, Counts, Part, RecordContent, Water } from '../contract/recordContent.ts'
+import type { SignedRecord } from '../contract/signedRecord.ts'
+import { canonicalText } from '../evidence/canonicalText.ts'
+import { sha256Hex } from '../evidence/sha256Hex.ts'
+import { measurePolygon } from '../geo/measurePolygon.ts'
+import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
+import { roundDecimal } from '../units/roundDecimal.ts'
+
+const OUTLINE_DIGITS = 6
+const M2_PER_HA = 10_000
+
+/** What somebody wrote, as it stands. */
+export const plainWords = (text: string | null): Message[] => (text === null || text === '' ? [] : [words('versions.text', { text })])
+
+/** Decimal text as a number where that says the same, so that it takes the reader's marks. */
+export const shownDecimal = (text: string): string | number => (String(Number(text)) === text ? Number(text) : text)
+
+export const amountWords = (amount: { value: string; unit: string } | null): Message[] =>
+  (amount === null ? [] : [words('versions.amount', { value: shownDecimal(amount.value), unit: amount.unit })])
+
+/** A figure that was worked out, to four decimals. */
+export const figureWords = (value: string | null, unit: string): Message[] => amountWords(value === null ? null : { value: roundDecimal(value, 4), unit })
+
+export const knownWords = (amount: { value: string; unit: string; known: 'measured' | 'counted' | 'workedOut' } | null): Message[] =>
+  (amount === null ? [] : [...amountWords(amount), words(`records.known.${amount.known}`)])
+
+/** An instant on the farm's clock, seconds only where there are some. */
+export function momentWords(instant: string | null, zone: string): Message[] {
+  if (instant === null) return []
+  const { second, millisecond, microsecond, nanosecond } = Temporal.Instant.from(instant).toZonedDateTimeISO('UTC')
+  const rest = [millisecond, microsecond, nanosecond].map((part) => String(part).padStart(3, '0')).join('').replace(/0+$/, '')
+  const seconds = second === 0 && rest === '' ? '' : `:${String(second).padStart(2, '0')}${rest === '' ? '' : `.${rest}`}`
+  return [words('versions.moment', { dayOn: civilDateIn(zone, instant), time: `${civilTimeIn(zone, instant)}${seconds}` })]
+}
+
+/** A drawn part is told apart by its area, its corners, and the first digits of its outline's digest. */
+export function partWords(part: Part): Message[] {
+  switch (part.kind) {
+    case 'whole': return [words('versions.part.whole')]
+    case 'fraction': return [words('versions.part.fraction', { fraction: shownDecimal(part.fraction) })]
+    case 'drawn': {
+      const hectares = Number(roundDecimal(String(measurePolygon(part.geometry).areaM2 / M2_PER_HA), 4))
+      return [words('versions.part.drawn', { hectares, outline: sha256Hex(canonicalText(part.geometry)).slice(0, OUTLINE_DIGITS) })]
+    }
+    default: return [words(`versions.part.${part.kind}`, { from: part.from, to: part.to, of: part.of })]
+  }
+}
+
+export const countsWords = (counts: Counts): Message[] =>
+  EACH.flatMap((each) => { const count = counts[each]; return count === undefined ? [] : [words(`versions.count.${each}`, { count: shownDecimal(count) })] })
+
+export function basisWords(basis: Basis): Message[] {
+  if (basis.kind === 'ratio') return [words(`versions.ratio.${basis.reading}`, { parts: shownDecimal(basis.parts) })]
+  const amount = amountWords(basis)
+  if (basis.kind === 'perEach') return [...amount, words(`versions.forEach.${basis.each}`)]
+  return basis.kind === 'perArea' ? amount : [...amount, words(`versions.basis.${basis.kind}`)]
+}
+
+export function waterWords(water: Water | null, { components }: RecordContent, names: (materialId: string) => string): Message[] {
+  if (water === null) return []
+  if (water.sizedFrom === 'none') return [words('records.mix.none')]
+  const [amount, source] = [amountWords(water), plainWords(water.source)]
+  if (water.sizedFrom === 'perEach') return [...amount, words('versions.sized.perEach'), words(`versions.forEach.${water.each}`), ...source]
+  if (water.sizedFrom === 'jar') {
+    const name = names(components[water.component]?.materialId ?? '')
+    return [...amount, words('versions.sized.jar', { number: water.component + 1, name }), ...source]
+  }
+  return [...amount, words(`versions.sized.${water.sizedFrom}`), ...source]
+}
+
+/** What stood under an id in the signed text itself; empty where nothing did. */
+export function nameIn(signed: SignedRecord) {
+  const find = <Thing extends { id: string }>(things: readonly Thing[], id: string | null) => things.find((thing) => thing.id === id)
+  return {
+    block: (id: string) => find(signed.blocks, id)?.code ?? '',
+    material: (id: string) => find(signed.materials, id)?.name ?? '',
+    lot: (id: string | null) => find(signed.lots, id)?.code ?? '',
+  }
+}
