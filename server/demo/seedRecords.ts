@@ -11,6 +11,7 @@ import { DEMO_ZONE } from './demoZone.ts'
 import { DEMO_WORK, type DemoWork } from './demoWork.ts'
 import { seedBegunPhoto, seedLatePhoto, seedStoppedFiles } from './seedFiles.ts'
 import type { DemoLots } from './seedInputs.ts'
+import { seedLife, type SignedWork } from './seedLife.ts'
 
 const DAY_MS = 86_400_000
 const MINUTE_MS = 60_000
@@ -34,10 +35,14 @@ interface Task {
   windMs: string
 }
 
-/** Twelve weeks of work up to this morning, one spray begun and not signed, and one that went on too strong. */
+/** Twelve weeks of work up to this morning, one spray begun and not signed, one that went on too strong, one amended, one taken back. */
 export async function seedRecords(services: Services, ground: Ground): Promise<void> {
   const tasks = DEMO_WORK.flatMap((work, row) => listTasks(work, row, services.clock.now())).sort((a, b) => a.startedAt.getTime() - b.startedAt.getTime())
-  for (const task of tasks) await recordTask(services, ground, task, true)
+  const works: SignedWork[] = []
+  for (const task of tasks) works.push({ id: await recordTask(services, ground, task, true), block: task.block, by: task.work.by, signedAt: task.startedAt })
+  const last = tasks.findLast(({ block }) => block === 'A5')
+  const double = last ? await recordTask(services, ground, { ...last, signedAfterH: HISTORY_DAYS * 24 }, true) : null
+  await seedLife(services, ground.manager, { works, double })
   const [apples] = DEMO_WORK
   if (apples) {
     const startedAt = new Date(services.clock.now().getTime() - 25 * MINUTE_MS)
@@ -68,7 +73,7 @@ function morning(now: Date, daysAgo: number, time: string): Date {
   return new Date(found.instant)
 }
 
-async function recordTask(services: Services, ground: Ground, task: Task, sign: boolean): Promise<void> {
+async function recordTask(services: Services, ground: Ground, task: Task, sign: boolean): Promise<string> {
   const { work, startedAt } = task
   const endedAt = new Date(startedAt.getTime() + work.minutes * MINUTE_MS)
   const enteredAt = sign ? new Date(Math.min(endedAt.getTime() + task.signedAfterH * 3_600_000, services.clock.now().getTime())) : startedAt
@@ -92,14 +97,18 @@ async function recordTask(services: Services, ground: Ground, task: Task, sign: 
     deviceAt: enteredAt.toISOString(),
   })
   const { record } = await createRecord(then, actor, input)
-  if (!sign) return seedBegunPhoto(then, actor, record.id)
+  if (!sign) {
+    await seedBegunPhoto(then, actor, record.id)
+    return record.id
+  }
   const acknowledged = [{ code: 'record.stop', reason: 'The soap was measured twice into one load. Mirel Achter told the same day; the leaves were rinsed.' }]
   const stopped = record.checks.some(({ verdict }) => verdict === 'stop')
   if (stopped) await seedStoppedFiles(then, actor, record.id)
   await services.database.inFarm(actor, (manager) => sealRecord(then, manager, actor, record.id, { acknowledged: stopped ? acknowledged : [] }))
-  if (!stopped) return
+  if (!stopped) return record.id
   const dayLater = fixedClock(new Date(Math.min(enteredAt.getTime() + DAY_MS, services.clock.now().getTime())).toISOString())
   await seedLatePhoto({ ...services, clock: dayLater }, actor, record.id)
+  return record.id
 }
 
 /** The lot in use on a day: the newest that had been received. */

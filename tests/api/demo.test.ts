@@ -26,6 +26,10 @@ describe.each(HOURS)('the demo farm made at %s', (instant) => {
     expect(begun?.count).toBe('1')
     const [stopped] = await count("application_records WHERE acknowledged <> '[]'")
     expect(Number(stopped?.count)).toBeGreaterThan(0)
+    expect(await count("application_records WHERE state = 'withdrawn'")).toEqual([{ count: '1' }])
+    expect(await count("record_versions WHERE entry = 'amended'")).toEqual([{ count: '1' }])
+    const [reviews] = await count('record_reviews')
+    expect(Number(reviews?.count)).toBeGreaterThan(20)
     const neighbours = await house.services.database.inFarm({ farmId: made.neighbourFarmId, seasons: null }, (manager) =>
       manager.query("SELECT count(*) FROM application_records WHERE state = 'signed'"))
     expect(neighbours).toEqual([{ count: '1' }])
@@ -36,5 +40,5 @@ describe.each(HOURS)('the demo farm made at %s', (instant) => {
     ])
     const theirs = await house.services.database.inFarm({ farmId: made.neighbourFarmId, seasons: null }, (manager) => manager.query('SELECT label FROM attachments'))
     expect(theirs).toEqual([{ label: 'Delivery note.pdf' }])
-  }, 120_000)
+  }, 180_000)
 })
