@@ -3,6 +3,7 @@ import { blockSchema } from '../../shared/contract/block.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
+import { signManyAnswerSchema } from '../../shared/contract/recordChanges.ts'
 import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
 import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
@@ -23,6 +24,11 @@ const DOORS: Record<CommandKind, Door> = {
   'record.create': { method: 'post', path: (farmId) => `/farms/${farmId}/records`, answer: recordSchema },
   'record.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/records/${id}`, answer: recordSchema },
   'record.sign': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/sign`, answer: recordSchema },
+  'record.signMany': { method: 'post', path: (farmId) => `/farms/${farmId}/records/sign`, answer: signManyAnswerSchema },
+  'record.amend': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/amend`, answer: recordSchema },
+  'record.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/withdraw`, answer: recordSchema },
+  'record.review': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/review`, answer: recordSchema },
+  'record.discard': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/discard`, answer: z.undefined() },
   'filter.keep': { method: 'post', path: (farmId) => `/farms/${farmId}/saved-filters`, answer: savedFilterSchema },
   'filter.forget': { method: 'del', path: (farmId, id) => `/farms/${farmId}/saved-filters/${id}`, answer: z.undefined() },
 }

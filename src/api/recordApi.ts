@@ -1,6 +1,7 @@
 import { pageOf } from '../../shared/contract/common.ts'
 import { recordSchema, registerRowSchema, type ApplicationRecord, type RegisterRow } from '../../shared/contract/record.ts'
 import type { RegisterFilter, RegisterSort } from '../../shared/contract/register.ts'
+import { recordVersionsSchema, type RecordVersions } from '../../shared/contract/recordVersions.ts'
 import { http } from './http.ts'
 
 /** Which rows of the register to read, in which order. */
@@ -20,4 +21,6 @@ export const recordApi = {
     http.get(`/farms/${farmId}/records`, pageOf(registerRowSchema), { ...query, cursor }),
   read: (farmId: string, id: string): Promise<ApplicationRecord> =>
     http.get(`/farms/${farmId}/records/${id}`, recordSchema),
+  versions: (farmId: string, id: string): Promise<RecordVersions> =>
+    http.get(`/farms/${farmId}/records/${id}/versions`, recordVersionsSchema),
 }

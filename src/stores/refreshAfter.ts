@@ -14,6 +14,11 @@ const STALE: Record<CommandKind, string[]> = {
   'record.sign': ['records', 'files', 'lots'],
   'filter.keep': ['filters'],
   'filter.forget': ['filters'],
+  'record.signMany': ['records', 'files', 'lots'],
+  'record.amend': ['records', 'files', 'lots'],
+  'record.withdraw': ['records', 'files', 'lots'],
+  'record.review': ['records'],
+  'record.discard': ['records'],
 }
 
 /** Reads again, in the background, what a command has changed. */

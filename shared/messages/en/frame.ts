@@ -80,7 +80,7 @@ export const frame = {
       material: { create: 'New material' },
       lot: { create: 'New lot', count: 'Count of a lot' },
       sprayer: { create: 'New sprayer' },
-      record: { create: 'New record', update: 'Changes to a record', sign: 'Signature' },
+      record: { create: 'New record', update: 'Changes to a record', sign: 'Signature', signMany: 'Signatures', amend: 'Amendment', withdraw: 'Withdrawal', review: 'Review', discard: 'Discarded draft' },
     },
     named: '{what}, {name}',
   },

@@ -80,7 +80,7 @@ export const frame = {
       material: { create: 'Material nuevo' },
       lot: { create: 'Lote nuevo', count: 'Recuento de un lote' },
       sprayer: { create: 'Pulverizador nuevo' },
-      record: { create: 'Registro nuevo', update: 'Cambios en un registro', sign: 'Firma' },
+      record: { create: 'Registro nuevo', update: 'Cambios en un registro', sign: 'Firma', signMany: 'Firmas', amend: 'Enmienda', withdraw: 'Retirada', review: 'Revisión', discard: 'Borrador descartado' },
     },
     named: '{what}, {name}',
   },
