@@ -2,14 +2,13 @@ import type { DiscardRecord } from '../../../shared/contract/recordChanges.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { JournalEntry } from '../../entities/JournalEntry.ts'
-import { RecordComponent } from '../../entities/RecordComponent.ts'
-import { RecordLine } from '../../entities/RecordLine.ts'
 import { AppError, notFound } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { forgetUnheld, orUnavailable } from '../files/farmFiles.ts'
 import { leaveFiles } from '../files/holdFiles.ts'
 import type { Services } from '../services.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
+import { dropProjections } from './storeProjections.ts'
 
 const ACTION = 'record.discarded'
 
@@ -30,8 +29,7 @@ export async function discardRecord(services: Services, actor: FarmActor, id: st
     if (record.version > 0) throw new AppError('conflict', 'record.signed')
     const isBegun = record.state === 'started'
     const files = await leaveFiles(manager, record, { keep: isBegun, at: services.clock.now() })
-    await manager.delete(RecordLine, { farmId, recordId: id })
-    await manager.delete(RecordComponent, { farmId, recordId: id })
+    await dropProjections(manager, { farmId, recordId: id })
     await manager.delete(ApplicationRecord, { farmId, id })
     const { state, content, doneById, enteredById, receivedAt } = record
     const whole = isBegun ? { content, doneById, enteredById, receivedAt: receivedAt.toISOString(), files: files.kept } : {}
