@@ -1,17 +1,40 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
+import type { Boundary } from '../../shared/contract/block.ts'
+import type { Message } from '../../shared/contract/common.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
-import type { Basis } from '../../shared/contract/recordContent.ts'
 import { PLAIN_FIELDS, type PlainName } from '../../shared/records/plainFields.ts'
+import { basisWords, countsWords, knownWords, momentWords, partWords, waterWords } from '../../shared/records/versionWords.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
+import { convertQuantity, type Quantity } from '../../shared/units/convertQuantity.ts'
+import { formatNumber } from '../../shared/units/formatQuantity.ts'
+import { subtractDecimals } from '../../shared/units/subtractDecimals.ts'
+import type { RecordGround } from './recordGround.ts'
 import { useFigures } from './useFigures.ts'
-import type { RecordStock } from './useRecordStock.ts'
+import { useMessages } from './useMessages.ts'
 
 export interface ReadRow {
   name: string
   lot: string
   measure: string
   inAll: string
+  /** What was really taken, and by how much it was another amount; empty where it was what the sheet says. */
+  used: string
+}
+
+/** One block of a record. */
+export interface ReadLine {
+  code: string
+  name: string
+  geometry: Boundary | null
+  part: string
+  area: string
+  counts: string
+  stage: string
+  when: string
+  amount: string
+  keepOut: string
+  pickFrom: string
 }
 
 /** A plain field of the record: its label and its words, or what is said where none were written. */
@@ -32,8 +55,10 @@ export interface ReadFact {
 
 /** A record as a reader finds it: lines of text in the person's language and the farm's time; what is missing says so. */
 export interface RecordReading {
+  lines: ReadLine[]
   rows: ReadRow[]
-  water: { source: string; measure: string; inAll: string }
+  /** Null for a solid, which is spread dry. */
+  water: { measure: string; inAll: string } | null
   total: string
   over: string
   loads: string
@@ -44,86 +69,129 @@ export interface RecordReading {
 }
 
 /** The texts of one record's page. */
-export function useRecordReading(record: Ref<ApplicationRecord | null>, stock: Ref<RecordStock>): ComputedRef<RecordReading | null> {
+export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: Ref<RecordGround>): ComputedRef<RecordReading | null> {
   const { t } = useI18n()
   const figures = useFigures()
+  const { render } = useMessages()
+  const said = (messages: readonly Message[]): string => messages.map(render).join(', ')
   const unknown = (text: string): string => text || t('records.read.unknown')
-  const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
-  const when = (instant: string | null): string => (instant === null ? '' : `${figures.day(civilDateIn(zone.value, instant))}, ${civilTimeIn(zone.value, instant)}`)
+  const zone = computed(() => ground.value.zone)
+  const time = (instant: string): string => civilTimeIn(zone.value, instant)
+  const day = (instant: string): string => figures.day(civilDateIn(zone.value, instant))
+  const when = (instant: string | null): string => (instant === null ? '' : `${day(instant)}, ${time(instant)}`)
 
-  function measureOf(basis: Basis): string {
-    if (basis.kind === 'ratio') return t('records.mix.ratioSays', { parts: figures.plain(basis.parts) })
-    return t(`records.mix.${basis.kind}Says`, { value: figures.plain(basis.value), unit: figures.unit(basis.unit) })
+  /** A span of the farm's clock; the day is named again where it ends on another. */
+  function span(startedAt: string | null, endedAt: string | null): string {
+    if (startedAt === null) return ''
+    if (endedAt === null) return when(startedAt)
+    return `${when(startedAt)} – ${day(startedAt) === day(endedAt) ? time(endedAt) : when(endedAt)}`
   }
 
-  function rowsOf({ components, computed: sums }: ApplicationRecord): ReadRow[] {
-    return components.map(({ materialId, lotId, basis }, index) => {
-      const amount = sums.components[index]?.amount
-      const lot = stock.value.lots.find(({ id }) => id === lotId)
+  function linesOf({ lines, computed: sums }: ApplicationRecord): ReadLine[] {
+    return lines.map((line, index) => {
+      const block = ground.value.blocks.find(({ id }) => id === line.blockId)
+      const share = sums.lines[index]
       return {
-        name: unknown(stock.value.materials.find(({ id }) => id === materialId)?.name ?? ''),
-        lot: lot ? t('records.mix.lot', { code: lot.code }) : t('records.lots.none'),
-        measure: measureOf(basis),
-        inAll: amount ? `${figures.amount(amount.value)} ${figures.unit(amount.unit)}` : '',
+        code: block?.code ?? '', name: block?.name ?? '', geometry: block?.geometry ?? null,
+        part: said(partWords(line.part)),
+        area: figures.hectares(share?.areaM2 ?? (line.part.kind === 'whole' ? (block?.areaM2 ?? null) : null)),
+        counts: said(countsWords(line.counts)),
+        stage: [line.stage ?? '', line.bbch === null ? '' : `BBCH ${line.bbch}`].filter((words) => words !== '').join(', '),
+        when: unknown(span(line.startedAt, line.endedAt)),
+        amount: unknown(said(knownWords(line.amount))),
+        keepOut: said(momentWords(share?.reEntryUntil ?? null, zone.value)),
+        pickFrom: share?.pickFrom ? figures.day(share.pickFrom) : '',
       }
     })
   }
 
-  function waterOf({ water, computed: { waterL } }: ApplicationRecord): RecordReading['water'] {
-    if (water === null) return { source: '', measure: t('records.read.unknown'), inAll: '' }
-    if (water.sizedFrom === 'none') return { source: '', measure: t('records.mix.none'), inAll: '' }
-    const measure = water.sizedFrom === 'water' ? t('records.mix.typed') : t('records.mix.fromRate', { rate: figures.plain(water.value), unit: figures.unit(water.unit) })
-    return { source: water.source ?? '', measure, inAll: figures.litres(waterL) }
+  function rowsOf({ components, computed: sums }: ApplicationRecord): ReadRow[] {
+    return components.map(({ materialId, lotId, basis, used }, index) => {
+      const amount = sums.components[index]?.amount ?? null
+      const lot = ground.value.lots.find(({ id }) => id === lotId)
+      return {
+        name: unknown(ground.value.materials.find(({ id }) => id === materialId)?.name ?? ''),
+        lot: lot ? t('records.mix.lot', { code: lot.code }) : t('records.lots.none'),
+        measure: said(basisWords(basis)),
+        inAll: amount ? `${figures.amount(amount.value)} ${figures.unit(amount.unit)}` : '',
+        used: used === null ? '' : `${said(knownWords(used))}${amount ? differenceOf(used, amount) : ''}`,
+      }
+    })
+  }
+
+  function differenceOf(used: Quantity, planned: Quantity): string {
+    const more = subtractDecimals(convertQuantity(used, planned.unit), planned.value)
+    return Number(more) === 0 ? '' : ` (${more.startsWith('-') ? '' : '+'}${figures.plain(more)} ${figures.unit(planned.unit)})`
+  }
+
+  function waterOf(one: ApplicationRecord): RecordReading['water'] {
+    if (one.method === 'solid') return null
+    const name = (id: string): string => ground.value.materials.find((material) => material.id === id)?.name ?? ''
+    return { measure: unknown(said(waterWords(one.water, one, name))), inAll: figures.litres(one.computed.waterL) }
+  }
+
+  function totalOf({ totalL, totalKg }: ApplicationRecord['computed']): string {
+    const mass = totalKg === null ? '' : `${figures.amount(totalKg)}\u00A0${figures.unit('kg')}`
+    return [figures.litres(totalL), mass].filter((words) => words !== '').join(', ')
+  }
+
+  function overOf({ sprayLPerHa, kgPerHa, sprayPerEach, areaM2 }: ApplicationRecord['computed']): string {
+    const rate = (value: number, unit: string): string => t('versions.read.over', { rate: figures.rate(value), unit: figures.unit(unit), hectares: figures.hectares(areaM2) })
+    if (sprayPerEach) return `${figures.rate(sprayPerEach.litres)} ${figures.unit('L')} ${t(`versions.forEach.${sprayPerEach.each}`)}`
+    return sprayLPerHa !== null ? rate(sprayLPerHa, 'L/ha') : kgPerHa !== null ? rate(kgPerHa, 'kg/ha') : ''
   }
 
   function loadsOf({ loads }: ApplicationRecord['computed']): string {
     if (loads === null) return ''
     const last = figures.amount(loads.lastL)
+    const minutes = loads.fullMinutes === null ? '' : `, ${t('versions.read.minutes', { minutes: figures.plain(Math.round(loads.fullMinutes)) })}`
     if (loads.full === 0) return t('records.sprayer.loadsPart', { last })
-    return t(loads.lastL > 0 ? 'records.sprayer.loadsFullAndPart' : 'records.sprayer.loadsFull', { count: loads.full, last }, loads.full)
+    return `${t(loads.lastL > 0 ? 'records.sprayer.loadsFullAndPart' : 'records.sprayer.loadsFull', { count: loads.full, last }, loads.full)}${minutes}`
   }
 
-  function timesOf({ lines, deviceAt, receivedAt, signedAt }: ApplicationRecord): ReadFact[] {
-    const line = lines[0]
-    const worked = line?.startedAt ? `${when(line.startedAt)}${line.endedAt ? ` – ${civilTimeIn(zone.value, line.endedAt)}` : ''}` : ''
+  function timesOf({ lines, deviceAt, receivedAt, signedAt, workedInOn }: ApplicationRecord): ReadFact[] {
+    const starts = lines.flatMap(({ startedAt }) => startedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
+    const ends = lines.flatMap(({ endedAt }) => endedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
     return [
-      { name: t('records.read.worked'), value: unknown(worked), note: t('records.read.zone', { zone: zone.value }) },
+      { name: t('records.read.worked'), value: unknown(span(starts[0] ?? null, ends.at(-1) ?? null)), note: t('records.read.zone', { zone: zone.value }) },
+      ...(workedInOn === null ? [] : [{ name: t('versions.label.workedInOn'), value: figures.day(workedInOn) }]),
       { name: t('records.read.device'), value: unknown(when(deviceAt)) },
       { name: t('records.read.server'), value: when(receivedAt) },
       { name: t('records.read.signed'), value: unknown(when(signedAt)) },
     ]
   }
 
-  function weatherOf({ weather }: ApplicationRecord): ReadFact[] {
+  function weatherOf({ weather, computed: { air } }: ApplicationRecord): ReadFact[] {
     const read = (name: 'wind' | 'air' | 'humidity', more = ''): ReadFact => {
       const value = weather?.[name]
       const kind = value ? { note: t(`records.weather.kind.${value.kind}`) } : {}
       return { name: t(`records.weather.${name}`), value: value ? `${figures.plain(value.value)} ${figures.unit(value.unit)}${more}` : t('records.weather.never'), ...kind }
     }
     const from = weather?.windFrom ? `, ${t('records.read.windFrom', { point: t(`records.weather.compass.${weather.windFrom}`) })}` : ''
-    return [read('wind', from), read('air'), read('humidity')]
+    const derived = (name: 'wetBulbC' | 'deltaTC' | 'dewPointC', method: 'stull' | 'psychrometer'): ReadFact =>
+      ({ name: t(`versions.read.${name}`), value: `${formatNumber(air?.[name] ?? 0, { digits: 1 }, figures.language.value)} ${figures.unit('degC')}`, note: t(`versions.read.${method}`) })
+    return [read('wind', from), read('air'), read('humidity'), ...(air ? (['wetBulbC', 'deltaTC', 'dewPointC'] as const).map((name) => derived(name, air.method)) : [])]
+  }
+
+  function peopleOf({ doneBy, enteredBy, signedBy, protection }: ApplicationRecord): ReadFact[] {
+    return [
+      { name: t('records.happened.doneBy'), value: unknown(doneBy?.name ?? '') },
+      { name: t('records.happened.enteredBy'), value: unknown(enteredBy?.name ?? '') },
+      { name: t('records.read.signed'), value: unknown(signedBy?.name ?? '') },
+      { name: t('versions.label.protection'), value: unknown(protection.map((piece) => t(`records.protection.${piece}`)).join(', ')) },
+    ]
   }
 
   return computed(() => {
     const one = record.value
     if (one === null) return null
-    const { totalL, sprayLPerHa, areaM2 } = one.computed
     return {
-      rows: rowsOf(one),
-      water: waterOf(one),
-      total: figures.litres(totalL),
-      over: sprayLPerHa === null ? '' : t('records.mix.sprayOver', { rate: figures.plain(Math.round(sprayLPerHa)), hectares: figures.hectares(areaM2) }),
-      loads: loadsOf(one.computed),
+      lines: linesOf(one), rows: rowsOf(one), water: waterOf(one),
+      total: totalOf(one.computed), over: overOf(one.computed), loads: loadsOf(one.computed),
       plain: PLAIN_FIELDS.map(({ name, isLong }) => ({
         name, isLong, label: t(`records.plain.${name}.label`), words: one[name] ?? t(`records.plain.${name}.none`), isGiven: one[name] !== null,
       })),
-      times: timesOf(one),
-      people: [
-        { name: t('records.happened.doneBy'), value: unknown(one.doneBy?.name ?? '') },
-        { name: t('records.happened.enteredBy'), value: unknown(one.enteredBy?.name ?? '') },
-        { name: t('records.read.signed'), value: unknown(one.signedBy?.name ?? '') },
-      ],
-      weather: weatherOf(one),
+      times: timesOf(one), people: peopleOf(one), weather: weatherOf(one),
     }
   })
 }

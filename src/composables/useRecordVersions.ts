@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/vue-query'
 import { computed, toValue, type ComputedRef, type MaybeRefOrGetter } from 'vue'
 import type { Message } from '../../shared/contract/common.ts'
 import type { RecordVersions } from '../../shared/contract/recordVersions.ts'
+import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
 import { pairVersions } from '../../shared/records/compareVersions.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { recordApi } from '../api/recordApi.ts'
@@ -18,6 +19,8 @@ export interface ReadVersion {
   reason: string
   by: string
   at: string
+  /** RFC 3339. */
+  signedAt: string
   digest: string
   /** Against the version before; empty for the first. */
   rows: ComparedRow[]
@@ -27,7 +30,7 @@ export interface ReadVersion {
 /** The signed versions of a record, newest first, each beside the one before it. */
 export function useRecordVersions(
   farmId: MaybeRefOrGetter<string>, recordId: MaybeRefOrGetter<string>, isSigned: MaybeRefOrGetter<boolean>,
-): { versions: ComputedRef<ReadVersion[]>; signerIds: ComputedRef<string[]> } {
+): { versions: ComputedRef<ReadVersion[]>; signed: ComputedRef<SignedRecord | null>; signerIds: ComputedRef<string[]> } {
   const [farm, id] = [computed(() => toValue(farmId)), computed(() => toValue(recordId))]
   const figures = useFigures()
   const { render } = useMessages()
@@ -39,6 +42,8 @@ export function useRecordVersions(
   const said = (messages: readonly Message[]): string => messages.map(render).join(', ')
 
   return {
+    /** What the newest version says; null while it is read. */
+    signed: computed(() => query.data.value?.items.at(-1)?.signed ?? null),
     signerIds: computed(() => (query.data.value?.items ?? []).flatMap(({ signedBy }) => signedBy?.id ?? [])),
     versions: computed(() => {
       const { items = [], people = [] } = query.data.value ?? {}
@@ -47,7 +52,7 @@ export function useRecordVersions(
         const before = items[index - 1]?.signed
         const { zone } = signed.farm
         return {
-          version, entry, reason: reason ?? '', by: signedBy?.name ?? '', digest,
+          version, entry, reason: reason ?? '', by: signedBy?.name ?? '', digest, signedAt,
           at: `${figures.day(civilDateIn(zone, signedAt))}, ${civilTimeIn(zone, signedAt)}`,
           rows: before ? pairVersions(before, signed, nameOf).map((row) => ({ path: row.path, label: said(row.label), before: said(row.before), after: said(row.after), isChanged: row.isChanged })) : [],
           changedCount: changes.length,

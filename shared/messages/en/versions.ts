@@ -24,6 +24,18 @@ export const versions = {
   amendedNotice: 'Amended: this is version {version}.',
   withdrawnNotice: 'Withdrawn. It stays in the register with a line through it and counts nowhere.',
   becauseOf: 'Because: {reason}',
+  read: {
+    over: '{rate} {unit} over {hectares} ha',
+    minutes: 'about {minutes} min a full load',
+    wetBulbC: 'Wet bulb',
+    deltaTC: 'Delta T',
+    dewPointC: 'Dew point',
+    stull: 'worked out after Stull, sea-level air',
+    psychrometer: 'worked out by the psychrometer equation',
+    used: 'Used',
+    asPlanned: 'as planned',
+    late: 'Signed {hours} h after the work ended.',
+  },
   act: {
     amend: 'Amend',
     withdraw: 'Withdraw',

@@ -27,6 +27,18 @@ export const versions: WordsLike<typeof words> = {
   amendedNotice: 'Enmendado: esta es la versión {version}.',
   withdrawnNotice: 'Retirado. Queda en el libro de registros tachado y no cuenta en ninguna parte.',
   becauseOf: 'Porque: {reason}',
+  read: {
+    over: '{rate} {unit} en {hectares} ha',
+    minutes: 'unos {minutes} min por carga llena',
+    wetBulbC: 'Bulbo húmedo',
+    deltaTC: 'Delta T',
+    dewPointC: 'Punto de rocío',
+    stull: 'calculado según Stull, aire a nivel del mar',
+    psychrometer: 'calculado con la ecuación psicrométrica',
+    used: 'Usado',
+    asPlanned: 'según lo previsto',
+    late: 'Firmado {hours} h después de terminar el trabajo.',
+  },
   act: {
     amend: 'Enmendar',
     withdraw: 'Retirar',
