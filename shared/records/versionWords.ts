@@ -55,21 +55,20 @@ export const countsWords = (counts: Counts): Message[] =>
 
 export function basisWords(basis: Basis): Message[] {
   if (basis.kind === 'ratio') return [words(`versions.ratio.${basis.reading}`, { parts: shownDecimal(basis.parts) })]
-  const amount = amountWords(basis)
-  if (basis.kind === 'perEach') return [...amount, words(`versions.forEach.${basis.each}`)]
-  return basis.kind === 'perArea' ? amount : [...amount, words(`versions.basis.${basis.kind}`)]
+  const amount = { value: shownDecimal(basis.value), unit: basis.unit }
+  return [basis.kind === 'perEach' ? words(`versions.forEach.${basis.each}`, amount) : words(`versions.basis.${basis.kind}`, amount)]
 }
 
-export function waterWords(water: Water | null, { components }: RecordContent, names: (materialId: string) => string): Message[] {
+export function waterWords(water: Water | null, { components }: Pick<RecordContent, 'components'>, names: (materialId: string) => string): Message[] {
   if (water === null) return []
   if (water.sizedFrom === 'none') return [words('records.mix.none')]
-  const [amount, source] = [amountWords(water), plainWords(water.source)]
-  if (water.sizedFrom === 'perEach') return [...amount, words('versions.sized.perEach'), words(`versions.forEach.${water.each}`), ...source]
+  const [amount, source] = [{ value: shownDecimal(water.value), unit: water.unit }, plainWords(water.source)]
+  if (water.sizedFrom === 'perEach') return [words(`versions.forEach.${water.each}`, amount), ...source]
   if (water.sizedFrom === 'jar') {
     const name = names(components[water.component]?.materialId ?? '')
-    return [...amount, words('versions.sized.jar', { number: water.component + 1, name }), ...source]
+    return [words('versions.sized.jar', { ...amount, number: water.component + 1, name }), ...source]
   }
-  return [...amount, words(`versions.sized.${water.sizedFrom}`), ...source]
+  return [words(`versions.sized.${water.sizedFrom}`, amount), ...source]
 }
 
 /** What stood under an id in the signed text itself; empty where nothing did. */

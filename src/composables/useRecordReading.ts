@@ -98,7 +98,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
         counts: said(countsWords(line.counts)),
         stage: [line.stage ?? '', line.bbch === null ? '' : `BBCH ${line.bbch}`].filter((words) => words !== '').join(', '),
         when: unknown(span(line.startedAt, line.endedAt)),
-        amount: unknown(said(knownWords(line.amount))),
+        amount: line.amount === null ? t('records.read.unknown') : `${figures.amount(line.amount.value)} ${figures.unit(line.amount.unit)}, ${t(`records.known.${line.amount.known}`)}`,
         keepOut: said(momentWords(share?.reEntryUntil ?? null, zone.value)),
         pickFrom: share?.pickFrom ? figures.day(share.pickFrom) : '',
       }
@@ -137,7 +137,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
 
   function overOf({ sprayLPerHa, kgPerHa, sprayPerEach, areaM2 }: ApplicationRecord['computed']): string {
     const rate = (value: number, unit: string): string => t('versions.read.over', { rate: figures.rate(value), unit: figures.unit(unit), hectares: figures.hectares(areaM2) })
-    if (sprayPerEach) return `${figures.rate(sprayPerEach.litres)} ${figures.unit('L')} ${t(`versions.forEach.${sprayPerEach.each}`)}`
+    if (sprayPerEach) return t(`versions.forEach.${sprayPerEach.each}`, { value: figures.rate(sprayPerEach.litres), unit: figures.unit('L') })
     return sprayLPerHa !== null ? rate(sprayLPerHa, 'L/ha') : kgPerHa !== null ? rate(kgPerHa, 'kg/ha') : ''
   }
 

@@ -82,8 +82,8 @@ describe('amending', () => {
     expect(items[1].changes).toContainEqual({
       path: 'content.water',
       label: [{ id: 'versions.label.water', params: {} }],
-      before: expect.arrayContaining([{ id: 'versions.amount', params: { value: 400, unit: 'L' } }, { id: 'versions.text', params: { text: 'Rain tank 2' } }]),
-      after: expect.arrayContaining([{ id: 'versions.amount', params: { value: 300, unit: 'L' } }]),
+      before: expect.arrayContaining([{ id: 'versions.sized.water', params: { value: 400, unit: 'L' } }, { id: 'versions.text', params: { text: 'Rain tank 2' } }]),
+      after: expect.arrayContaining([{ id: 'versions.sized.water', params: { value: 300, unit: 'L' } }]),
     })
     expect(await book(lotId)).toEqual({
       left: 85,

@@ -81,10 +81,12 @@ export const versions = {
     beds: 'beds {from} to {to} of {of}',
   },
   count: { plant: '{count} plants', tree: '{count} trees', rowM: '{count} m of row', bed: '{count} beds', pot: '{count} pots' },
-  forEach: { plant: 'for each plant', tree: 'for each tree', rowM: 'for each metre of row', bed: 'for each bed', pot: 'for each pot' },
+  forEach: {
+    plant: '{value} {unit} for each plant', tree: '{value} {unit} for each tree', rowM: '{value} {unit} for each metre of row', bed: '{value} {unit} for each bed', pot: '{value} {unit} for each pot',
+  },
   ratio: { to: '1 part to {parts} parts of water', in: '1 part in {parts} parts of the mix' },
-  basis: { perTank: 'in each full tank', total: 'in all' },
-  sized: { water: 'of carrier water', sprayRate: 'of the mix', perEach: 'of the mix', jar: 'of ingredient {number}, {name}' },
+  basis: { perArea: '{value} {unit}', perTank: '{value} {unit} in each full tank', total: '{value} {unit} in all' },
+  sized: { water: '{value} {unit} of carrier water', sprayRate: '{value} {unit} of the mix', jar: '{value} {unit} of ingredient {number}, {name}' },
   label: {
     method: 'Method', blocks: 'Blocks', part: 'Part', counts: 'Counted', stage: 'Growth stage', bbch: 'BBCH', startedAt: 'Start', endedAt: 'End', amount: 'Amount',
     components: 'Ingredients', lot: 'Lot', basis: 'Measure', used: 'Used', inAll: 'In all', water: 'Sized from', sprayer: 'Sprayer', workedInOn: 'Worked in',

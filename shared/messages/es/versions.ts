@@ -84,10 +84,12 @@ export const versions: WordsLike<typeof words> = {
     beds: 'bancales {from} a {to} de {of}',
   },
   count: { plant: '{count} plantas', tree: '{count} árboles', rowM: '{count} m de hilera', bed: '{count} bancales', pot: '{count} macetas' },
-  forEach: { plant: 'por cada planta', tree: 'por cada árbol', rowM: 'por cada metro de hilera', bed: 'por cada bancal', pot: 'por cada maceta' },
-  ratio: { to: '1 parte en {parts} partes de agua', in: '1 parte en {parts} partes de la mezcla' },
-  basis: { perTank: 'en cada tanque lleno', total: 'en total' },
-  sized: { water: 'de agua de mezcla', sprayRate: 'de la mezcla', perEach: 'de la mezcla', jar: 'del ingrediente {number}, {name}' },
+  forEach: {
+    plant: '{value} {unit} por cada planta', tree: '{value} {unit} por cada árbol', rowM: '{value} {unit} por cada metro de hilera', bed: '{value} {unit} por cada bancal', pot: '{value} {unit} por cada maceta',
+  },
+  ratio: { to: '1 parte por {parts} partes de agua', in: '1 parte en {parts} partes de la mezcla' },
+  basis: { perArea: '{value} {unit}', perTank: '{value} {unit} en cada tanque lleno', total: '{value} {unit} en total' },
+  sized: { water: '{value} {unit} de agua de mezcla', sprayRate: '{value} {unit} de la mezcla', jar: '{value} {unit} del ingrediente {number}, {name}' },
   label: {
     method: 'Método', blocks: 'Parcelas', part: 'Parte', counts: 'Contado', stage: 'Estado de crecimiento', bbch: 'BBCH', startedAt: 'Inicio', endedAt: 'Fin', amount: 'Cantidad',
     components: 'Ingredientes', lot: 'Lote', basis: 'Medida', used: 'Usado', inAll: 'En total', water: 'Según', sprayer: 'Pulverizador', workedInOn: 'Incorporado',
