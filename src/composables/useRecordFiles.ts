@@ -72,8 +72,10 @@ export function useRecordFiles({ farmId, recordId, zone, isThere, isSigned }: Re
   async function remove(line: FileLine): Promise<void> {
     faults.value = []
     try {
-      if (line.state === 'there') await fileApi.remove(farmId(), line.id)
-      else await queue.discard(line.id)
+      // It may have arrived since it was drawn here: asked for as it stands now.
+      const isComing = queue.items.some(({ id }) => id === line.id)
+      if (isComing) await queue.discard(line.id)
+      if (!isComing || list.data.value?.some(({ id }) => id === line.id)) await fileApi.remove(farmId(), line.id)
       said.value = t('files.removed', { name: line.label })
     } catch (error) {
       faults.value = [`${line.label}: ${problem(error)}`]
