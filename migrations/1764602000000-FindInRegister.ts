@@ -98,7 +98,8 @@ const TERMS = `WITH record AS MATERIALIZED (
     FROM application_records r JOIN farms f ON f.id = r.farm_id WHERE r.farm_id = ${FARM}),
   line AS MATERIALIZED (SELECT l.record_id, l.block_id, b.name FROM record_lines l JOIN blocks b ON b.farm_id = l.farm_id AND b.id = l.block_id WHERE l.farm_id = ${FARM}),
   written AS MATERIALIZED (
-    SELECT id, register_row->>'number' AS text FROM record UNION SELECT id, content->>'purpose' FROM record UNION SELECT id, content->>'notes' FROM record
+    SELECT id, register_row->>'number' AS text FROM record UNION SELECT id, t.value FROM record, jsonb_each_text(content) AS t
+      WHERE jsonb_typeof(content->t.key) = 'string' AND t.key NOT IN ('method', 'sprayerId', 'doneById', 'workedInOn')
     UNION SELECT id, jsonb_array_elements(register_row->'blocks')->>'code' FROM record UNION SELECT record_id, name FROM line
     UNION SELECT id, jsonb_array_elements_text(register_row->'preparations') FROM record UNION SELECT id, jsonb_array_elements_text(register_row->'lots') FROM record),
   words AS MATERIALIZED (SELECT t.text, w.word FROM (SELECT DISTINCT text FROM written) AS t, pg_temp.register_words(t.text) AS w (word)),

@@ -1,7 +1,8 @@
 import type { Computed } from '../contract/record.ts'
 import type { RecordContent } from '../contract/recordContent.ts'
+import { mapPlainFields } from './plainFields.ts'
 
-const BLANK_CONTENT = { components: [], water: null, sprayerId: null, workedInOn: null, weather: null, protection: [], purpose: null, licence: null, notes: null, doneById: null }
+const BLANK_CONTENT = { components: [], water: null, sprayerId: null, workedInOn: null, weather: null, protection: [], ...mapPlainFields(() => null), doneById: null }
 const BLANK_LINE = { part: { kind: 'whole' as const }, counts: {}, stage: null, bbch: null }
 const BLANK_COMPUTED = { counts: {}, totalKg: null, kgPerHa: null, sprayPerEach: null, lines: [], air: null }
 
