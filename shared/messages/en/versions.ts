@@ -80,7 +80,7 @@ export const versions = {
     rows: 'rows {from} to {to} of {of}',
     beds: 'beds {from} to {to} of {of}',
   },
-  count: { plant: '{count} plants', tree: '{count} trees', rowM: '{count} m of row', bed: '{count} beds', pot: '{count} pots' },
+  count: { plant: '{count} plant | {count} plants', tree: '{count} tree | {count} trees', rowM: '{count} m of row', bed: '{count} bed | {count} beds', pot: '{count} pot | {count} pots' },
   forEach: {
     plant: '{value} {unit} for each plant', tree: '{value} {unit} for each tree', rowM: '{value} {unit} for each metre of row', bed: '{value} {unit} for each bed', pot: '{value} {unit} for each pot',
   },

@@ -83,7 +83,7 @@ export const versions: WordsLike<typeof words> = {
     rows: 'hileras {from} a {to} de {of}',
     beds: 'bancales {from} a {to} de {of}',
   },
-  count: { plant: '{count} plantas', tree: '{count} árboles', rowM: '{count} m de hilera', bed: '{count} bancales', pot: '{count} macetas' },
+  count: { plant: '{count} planta | {count} plantas', tree: '{count} árbol | {count} árboles', rowM: '{count} m de hilera', bed: '{count} bancal | {count} bancales', pot: '{count} maceta | {count} macetas' },
   forEach: {
     plant: '{value} {unit} por cada planta', tree: '{value} {unit} por cada árbol', rowM: '{value} {unit} por cada metro de hilera', bed: '{value} {unit} por cada bancal', pot: '{value} {unit} por cada maceta',
   },
