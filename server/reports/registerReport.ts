@@ -9,6 +9,7 @@ import { drawLaterFoot, type LaterFoot } from './parts/pageFoot.ts'
 import { drawRunningHead } from './parts/runningHead.ts'
 import { drawRegisterCover } from './register/registerCover.ts'
 import { registerTable } from './register/registerTable.ts'
+import type { Say } from './register/say.ts'
 import type { RegisterReportData } from './registerReportData.ts'
 
 /** The rule, the white over it and one line. */
@@ -27,8 +28,6 @@ export function registerReport(data: RegisterReportData, stream: Writable): void
   drawFrames(canvas, data, { say, pages: flow.pages })
   canvas.doc.end()
 }
-
-export type Say = (id: string, params?: Record<string, string | number>, plural?: number) => string
 
 function seasonWords({ filter }: RegisterReportData, say: Say): string {
   return filter.season === undefined ? say('allSeasons') : say('season', { season: filter.season })

@@ -7,8 +7,8 @@ import type { Flow } from '../parts/pageFlow.ts'
 import { drawText, measureText } from '../parts/setText.ts'
 import { ELDER, STYLES } from '../parts/styles.ts'
 import { drawLines, heightOf, wrapText } from '../parts/wrapText.ts'
-import type { Say } from '../registerReport.ts'
 import type { RegisterReportData } from '../registerReportData.ts'
+import type { Say } from './say.ts'
 
 interface CoverWords { data: RegisterReportData; say: Say; seasons: string }
 

@@ -2,10 +2,10 @@ import type { Canvas, TextStyle } from '../parts/canvas.ts'
 import { drawMethodMark } from '../parts/drawMarks.ts'
 import type { Table } from '../parts/ledgerTable.ts'
 import { STYLES } from '../parts/styles.ts'
-import type { Say } from '../registerReport.ts'
 import type { PrintedRow, RegisterReportData } from '../registerReportData.ts'
 import { MARK_ROOM, REGISTER_COLUMNS, registerCells } from './registerCells.ts'
 import { ROW_SETTING } from './rowHeight.ts'
+import type { Say } from './say.ts'
 
 const regular: TextStyle = { ...STYLES.small, size: ROW_SETTING.size, leading: ROW_SETTING.leading }
 const bold: TextStyle = { ...regular, weight: 'bold' }
