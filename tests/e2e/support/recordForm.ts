@@ -103,6 +103,11 @@ export class RecordForm {
     return field(this.main, this.isPhone ? say(`records.happened.${at}`) : say(`recordForm.line.${at}Of`, { code }))
   }
 
+  /** On a phone: the row of a block, which opens its line. */
+  row(code: string): Locator {
+    return this.main.getByRole('button', { name: new RegExp(`^${code} `) })
+  }
+
   /** The day of the work, YYYY-MM-DD. */
   async setDay(day: string): Promise<void> {
     await this.main.getByLabel(say('records.happened.day'), { exact: true }).fill(day)
