@@ -53,7 +53,7 @@ test('a stop bars Start and never the signature: why, whom you tell, what was do
   await expect(form.startButton).toBeDisabled()
   await expect(form.startButton).toHaveText(say('records.ready.clear', { count: 1 }))
   const checks = await form.checks()
-  await expect(checks.getByText(/10 L in 210 L is 4\.76\d* %\. The label allows at most 2 %\./)).toBeVisible()
+  await expect(checks.getByText(/10\sL in 210\sL is 4\.76\d*\s%\. The label allows at most 2\s%\./)).toBeVisible()
   await form.closeChecks()
 
   await form.main.getByRole('button', { name: say('records.ready.alreadyDrench') }).click()
