@@ -1,4 +1,4 @@
-import { Temporal } from 'temporal-polyfill'
+import * as Instant from 'temporal-polyfill/fns/Instant'
 import { words } from '../checks/buildCheck.ts'
 import type { Message } from '../contract/common.ts'
 import type { SignedRecord } from '../contract/signedRecord.ts'
@@ -31,7 +31,7 @@ const field = (path: string, name: FieldName, words: Message[], value: unknown, 
   ({ key, path, label: [label(name)], words, value: canonicalText(value ?? null) })
 
 /** The instant itself, however it was spelled. */
-const instantOf = (text: string | null): string | null => (text === null ? null : Temporal.Instant.from(text).toString())
+const instantOf = (text: string | null): string | null => (text === null ? null : Instant.toString(Instant.fromString(text)))
 
 /** Everything that a version says, in the order of the page: what was written, then what follows from it. */
 export function versionFields(signed: SignedRecord, personName: PersonName): VersionField[] {

@@ -1,4 +1,4 @@
-import { Temporal } from 'temporal-polyfill'
+import * as Instant from 'temporal-polyfill/fns/Instant'
 import { words } from '../checks/buildCheck.ts'
 import type { Message } from '../contract/common.ts'
 import { EACH } from '../contract/each.ts'
@@ -31,9 +31,9 @@ export const knownWords = (amount: { value: string; unit: string; known: 'measur
 /** An instant on the farm's clock, seconds only where there are some. */
 export function momentWords(instant: string | null, zone: string): Message[] {
   if (instant === null) return []
-  const { second, millisecond, microsecond, nanosecond } = Temporal.Instant.from(instant).toZonedDateTimeISO('UTC')
-  const rest = [millisecond, microsecond, nanosecond].map((part) => String(part).padStart(3, '0')).join('').replace(/0+$/, '')
-  const seconds = second === 0 && rest === '' ? '' : `:${String(second).padStart(2, '0')}${rest === '' ? '' : `.${rest}`}`
+  // Written out in UTC, the seconds stand between the second colon and the Z, with no zeros at the end of their parts.
+  const [, , last = ''] = Instant.toString(Instant.fromString(instant)).replace('Z', '').split(':')
+  const seconds = /^0*$/.test(last) ? '' : `:${last}`
   return [words('versions.moment', { dayOn: civilDateIn(zone, instant), time: `${civilTimeIn(zone, instant)}${seconds}` })]
 }
 

@@ -1,16 +1,16 @@
-import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import { computed, ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import { workingLines } from '../../shared/checks/workingLines.ts'
-import { EACH, type Each } from '../../shared/contract/each.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { now } from '../plugins/clock.ts'
 import { useFileQueue } from '../stores/fileQueue.ts'
-import { fieldErrors } from './fieldErrors.ts'
+import { askedFor } from './askedFor.ts'
+import { formErrors } from './formErrors.ts'
 import { contentOf } from './recordContent.ts'
 import { momentAt } from './lineDraft.ts'
-import { writtenLines, type RecordDraft } from './recordDraft.ts'
-import { signGaps, startGap, unreadable, type Gaps } from './recordGaps.ts'
+import { writtenLines } from './recordDraft.ts'
+import { signGaps, startGap, unreadable } from './recordGaps.ts'
 import { useFigures } from './useFigures.ts'
 import { useJars } from './useJars.ts'
 import { useLateEntry } from './useLateEntry.ts'
@@ -24,20 +24,6 @@ import { useRecordSheet } from './useRecordSheet.ts'
 import { useRecordStock } from './useRecordStock.ts'
 import { useSigning } from './useSigning.ts'
 import { useTask } from './useTask.ts'
-
-/** What the mix is sized or measured by, counted on each line. */
-function askedFor({ method, water, components }: RecordDraft): Each[] {
-  const isSizedBy = (each: Each): boolean => (method !== 'solid' && water.sizedFrom === 'perEach' && water.each === each) || components.some((one) => one.kind === 'perEach' && one.each === each)
-  return EACH.filter(isSizedBy)
-}
-
-/** A refusal speaks of `components.0.basis.kind`; the form has one field for it. */
-function fieldOf(path: string): string {
-  if (path.startsWith('water')) return 'water'
-  const counted = path.includes('.counts') ? 4 : 3
-  const depth = path.startsWith('weather') ? 2 : counted
-  return path.split('.').slice(0, depth).join('.')
-}
 
 /** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
 export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string; blockIds: readonly string[] }) {
@@ -110,22 +96,4 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
     }),
     working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),
   }
-}
-
-interface ErrorSources {
-  gaps: Ref<Gaps>
-  live: Ref<Gaps>
-  tried: Ref<boolean>
-  refusals: Ref<unknown>[]
-}
-
-/** The sentence of each field: what is no number as one types, what is missing once signing was tried, what the server refused. */
-function formErrors({ gaps, live, tried, refusals }: ErrorSources): ComputedRef<Record<string, string>> {
-  const { t } = useI18n()
-  return computed(() => {
-    const found = Object.entries({ ...live.value, ...(tried.value && gaps.value) })
-    const said = found.flatMap(([path, id]) => (id === undefined ? [] : [[path, t(id)] as const]))
-    const refused = refusals.flatMap((refusal) => Object.entries(fieldErrors(refusal.value)).map(([path, words]) => [fieldOf(path), words] as const))
-    return Object.fromEntries([...refused, ...said])
-  })
 }

@@ -30,6 +30,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/blocks/:id', name: 'block', component: () => import('../views/blocks/BlockPageView.vue'), props: true, meta: { place: 'blocks' } },
   { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), meta: { place: 'register' } },
   { path: '/register/new', name: 'record-new', component: () => import('../views/register/RecordFormView.vue'), meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
+  { path: '/register/:id/amend', name: 'record-amend', component: () => import('../views/register/RecordAmendView.vue'), props: true, meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
   { path: '/register/:id', name: 'record', component: () => import('../views/register/RecordView.vue'), props: true, meta: { place: 'register' } },
   { path: '/inputs', name: 'inputs', component: () => import('../views/inputs/InputsView.vue'), meta: { place: 'inputs' } },
   { path: '/farm', name: 'farm', component: () => import('../views/farm/FarmView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },

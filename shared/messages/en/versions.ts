@@ -60,6 +60,13 @@ export const versions = {
     stale: 'Somebody changed it since you opened it. Look at it again, then decide.',
     done: { withdraw: 'Withdrawn.', review: 'Reviewed.', discard: 'Discarded.' },
   },
+  amend: {
+    title: 'Amend record {number}',
+    text: 'What you change becomes a new version with its own signature. The version before stays readable.',
+    reason: 'Why it is amended',
+    hint: 'The certifier reads this.',
+    needReason: 'Say why it is amended.',
+  },
   many: {
     open: 'Sign several',
     title: 'Sign several records',

@@ -63,6 +63,13 @@ export const versions: WordsLike<typeof words> = {
     stale: 'Alguien lo cambió desde que usted lo abrió. Mírelo de nuevo y decida.',
     done: { withdraw: 'Retirado.', review: 'Revisado.', discard: 'Descartado.' },
   },
+  amend: {
+    title: 'Enmendar el registro {number}',
+    text: 'Lo que cambie es una versión nueva con su propia firma. La versión anterior sigue legible.',
+    reason: 'Por qué se enmienda',
+    hint: 'El certificador lee esto.',
+    needReason: 'Diga por qué se enmienda.',
+  },
   many: {
     open: 'Firmar varios',
     title: 'Firmar varios registros',

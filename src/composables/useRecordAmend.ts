@@ -1,0 +1,98 @@
+import { computed, ref, watch } from 'vue'
+import { useI18n } from 'vue-i18n'
+import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import { addDecimals } from '../../shared/units/addDecimals.ts'
+import { convertQuantity } from '../../shared/units/convertQuantity.ts'
+import { dimensionOf } from '../../shared/units/dimensionOf.ts'
+import { now } from '../plugins/clock.ts'
+import { useSession } from '../stores/session.ts'
+import { contentOf } from './recordContent.ts'
+import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
+import { signGaps } from './recordGaps.ts'
+import { formErrors } from './formErrors.ts'
+import { askedFor } from './askedFor.ts'
+import { useJars } from './useJars.ts'
+import { useLineRows } from './useLineRows.ts'
+import { useMixRows } from './useMixRows.ts'
+import { useRecord } from './useRecord.ts'
+import { useRecordChecks } from './useRecordChecks.ts'
+import { useRecordSheet } from './useRecordSheet.ts'
+import { useRecordStock, type RecordStock } from './useRecordStock.ts'
+import { useSigning } from './useSigning.ts'
+import { useSubmit } from './useSubmit.ts'
+
+/** What a lot holds for this amendment: what is left of it, and what the record itself took. */
+function withOwnDraws(stock: RecordStock, record: ApplicationRecord | null): RecordStock {
+  if (record === null) return stock
+  const lots = stock.lots.map((lot) => record.components.reduce((kept, { lotId, used }, index) => {
+    const taken = used ?? record.computed.components[index]?.amount ?? null
+    if (lotId !== lot.id || taken === null || dimensionOf(taken.unit) !== dimensionOf(lot.left.unit)) return kept
+    return { ...kept, left: { ...kept.left, value: addDecimals(kept.left.value, convertQuantity(taken, lot.left.unit)) } }
+  }, lot))
+  return { ...stock, lots }
+}
+
+/** The form of a signed record, filled with what stands: a new version is signed over it, with the reason. */
+export function useRecordAmend(id: string) {
+  const { t } = useI18n()
+  const session = useSession()
+  const { submit } = useSubmit()
+  const { stock: farmStock, ready: stockReady, error: stockError, again } = useRecordStock()
+  const read = useRecord(() => session.farmId, id)
+  const record = computed(() => read.data.value ?? null)
+  const standing = ref<ApplicationRecord | null>(null)
+  const stock = computed(() => withOwnDraws(farmStock.value, standing.value))
+  const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
+  const draft = ref<RecordDraft>(emptyRecord())
+  const reason = ref('')
+  const tried = ref(false)
+  const amended = ref<ApplicationRecord | null>(null)
+
+  // Filled once: what is typed is not written over by what comes from elsewhere; the server then says that it is stale.
+  watch([record, stockReady], ([one, ready]) => {
+    if (one === null || !ready || standing.value !== null) return
+    standing.value = one
+    draft.value = { ...draftOfRecord(one, zone.value), step: 2 }
+  }, { immediate: true })
+
+  const sheet = useRecordSheet(draft, stock)
+  const checking = useRecordChecks(draft, stock, sheet)
+  const mix = useMixRows({ draft, sheet, stock })
+  const known = computed(() => new Set(standing.value?.acknowledged.map(({ code }) => code) ?? []))
+  /** A stop that was explained at the signature before asks no second time. */
+  const stops = computed(() => checking.reasoned.value.filter(({ code }) => !known.value.has(code) && !known.value.has('record.stop')))
+  const gaps = computed(() => signGaps({ draft: draft.value, sheet: sheet.value, zone: zone.value, hasStops: stops.value.length > 0 }))
+
+  const signing = useSigning({
+    draft, stops,
+    sign: async (password, acknowledged) => {
+      const body = { ...contentOf(draft.value, { zone: zone.value, happened: true }), reason: reason.value.trim(), password, acknowledged, deviceAt: now().toISOString(), revision: standing.value?.revision ?? 1 }
+      const outcome = await submit({ kind: 'record.amend', farmId: session.farmId, id, body })
+      return outcome.state === 'sent' ? outcome.answer : 'kept'
+    },
+  })
+  const errors = formErrors({
+    gaps, live: computed(() => checking.shortLots.value), tried, refusals: [signing.error],
+  })
+
+  async function sign(): Promise<void> {
+    tried.value = true
+    if (Object.keys(gaps.value).length > 0 || signing.password.value === '' || reason.value.trim() === '') return
+    const answer = await signing.run()
+    if (answer !== undefined && answer !== 'kept') amended.value = answer
+  }
+
+  return {
+    ...checking, ...mix, read, record: standing, stock, stockError, again, zone, draft, reason, sheet, errors, signing, sign, amended, stops,
+    lines: useLineRows({ draft, sheet, stock, zone, errors }),
+    jars: useJars({ draft, stock, rows: mix.rows }),
+    asked: computed(() => askedFor(draft.value)),
+    ready: computed(() => standing.value !== null && stockReady.value),
+    signError: computed(() => {
+      if (!tried.value) return ''
+      if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
+      if (reason.value.trim() === '') return t('versions.amend.needReason')
+      return signing.words.value || (signing.password.value === '' ? t('versions.act.needPassword') : '')
+    }),
+  }
+}
