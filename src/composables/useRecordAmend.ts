@@ -8,6 +8,7 @@ import { now } from '../plugins/clock.ts'
 import { useSession } from '../stores/session.ts'
 import { contentOf } from './recordContent.ts'
 import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
+import { keepSeconds } from './keepSeconds.ts'
 import { signGaps } from './recordGaps.ts'
 import { formErrors } from './formErrors.ts'
 import { askedFor } from './askedFor.ts'
@@ -66,7 +67,8 @@ export function useRecordAmend(id: string) {
   const signing = useSigning({
     draft, stops,
     sign: async (password, acknowledged) => {
-      const body = { ...contentOf(draft.value, { zone: zone.value, happened: true }), reason: reason.value.trim(), password, acknowledged, deviceAt: now().toISOString(), revision: standing.value?.revision ?? 1 }
+      const content = keepSeconds(contentOf(draft.value, { zone: zone.value, happened: true }), standing.value?.lines ?? [])
+      const body = { ...content, reason: reason.value.trim(), password, acknowledged, deviceAt: now().toISOString(), revision: standing.value?.revision ?? 1 }
       const outcome = await submit({ kind: 'record.amend', farmId: session.farmId, id, body })
       return outcome.state === 'sent' ? outcome.answer : 'kept'
     },
