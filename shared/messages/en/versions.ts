@@ -66,6 +66,8 @@ export const versions = {
     reason: 'Why it is amended',
     hint: 'The certifier reads this.',
     needReason: 'Say why it is amended.',
+    stays: 'Number and season stay. The signature is of this version.',
+    sign: 'Sign amendment',
   },
   many: {
     open: 'Sign several',

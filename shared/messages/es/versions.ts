@@ -69,6 +69,8 @@ export const versions: WordsLike<typeof words> = {
     reason: 'Por qué se enmienda',
     hint: 'El certificador lee esto.',
     needReason: 'Diga por qué se enmienda.',
+    stays: 'El número y la temporada quedan. La firma es de esta versión.',
+    sign: 'Firmar la enmienda',
   },
   many: {
     open: 'Firmar varios',
