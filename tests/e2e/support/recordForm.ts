@@ -133,7 +133,7 @@ export class RecordForm {
 
   /** The number it got. */
   async signedNumber(): Promise<string> {
-    const said = this.main.getByText(/^Signed as \d{4}-\d{4}\.$/)
+    const said = this.page.getByRole('main').getByText(/^Signed as \d{4}-\d{4}\.$/)
     await expect(said).toBeVisible()
     return /\d{4}-\d{4}/.exec(await said.innerText())?.[0] ?? ''
   }
