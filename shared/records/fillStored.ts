@@ -4,7 +4,9 @@ import { mapPlainFields } from './plainFields.ts'
 
 const BLANK_CONTENT = { components: [], water: null, sprayerId: null, workedInOn: null, weather: null, protection: [], ...mapPlainFields(() => null), doneById: null }
 const BLANK_LINE = { part: { kind: 'whole' as const }, counts: {}, stage: null, bbch: null }
-const BLANK_COMPUTED = { counts: {}, totalKg: null, kgPerHa: null, sprayPerEach: null, lines: [], air: null }
+/** Figures that the first schema did not have, and those of its loads: not said. */
+export const BLANK_COMPUTED = { counts: {}, totalKg: null, kgPerHa: null, sprayPerEach: null, lines: [], air: null }
+export const BLANK_LOADS = { fullMinutes: null, lastMinutes: null }
 
 /** A record's content as it was stored, with the fields that were not asked for then. */
 export function fillContent(stored: RecordContent): RecordContent {
@@ -25,6 +27,6 @@ export function fillComputed(stored: Computed): Computed {
   return {
     ...BLANK_COMPUTED,
     ...stored,
-    loads: stored.loads && { ...{ fullMinutes: null, lastMinutes: null }, ...stored.loads },
+    loads: stored.loads && { ...BLANK_LOADS, ...stored.loads },
   }
 }

@@ -1,10 +1,8 @@
 import type { SignedRecord } from '../contract/signedRecord.ts'
-import { fillContent } from './fillStored.ts'
+import { BLANK_COMPUTED, BLANK_LOADS, fillContent } from './fillStored.ts'
 
 /** Signed text of the first schema: what the second one added is not in it. */
 type FirstSigned = Omit<SignedRecord, 'schemaVersion' | 'entry' | 'replaces' | 'files'> & { schemaVersion: 1 }
-
-const NEWER = { counts: {}, totalKg: null, kgPerHa: null, sprayPerEach: null, lines: [], air: null }
 
 /**
  * A signed text of any schema that was ever written, with what it lacks filled in as "not said".
@@ -21,7 +19,7 @@ export function upgradeSigned(signed: SignedRecord | FirstSigned): SignedRecord 
     replaces: null,
     files: [],
     content: fillContent(signed.content),
-    computed: { ...NEWER, ...computed, loads: computed.loads && { ...{ fullMinutes: null, lastMinutes: null }, ...computed.loads } },
+    computed: { ...BLANK_COMPUTED, ...computed, loads: computed.loads && { ...BLANK_LOADS, ...computed.loads } },
     sprayer: sprayer && { ...{ flowLPerMin: null }, ...sprayer },
   }
 }

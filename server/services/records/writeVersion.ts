@@ -4,6 +4,7 @@ import type { Check, Computed } from '../../../shared/contract/record.ts'
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import { canonicalText } from '../../../shared/evidence/canonicalText.ts'
+import { cutCheckCode } from '../../../shared/evidence/checkCode.ts'
 import { sha256Hex } from '../../../shared/evidence/sha256Hex.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
 import { firstStart, registerRow } from '../../../shared/records/registerRow.ts'
@@ -22,8 +23,6 @@ import { formatRecordNumber } from './formatRecordNumber.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 import { storeProjections } from './storeProjections.ts'
 import { takeNumber, takeSeq } from './takeNumber.ts'
-
-const CHECK_CODE_LENGTH = 20
 
 export interface Signature {
   record: ApplicationRecord
@@ -72,7 +71,7 @@ export async function writeVersion(
   await storeProjections(manager, written, true)
   await manager.insert(RecordVersion, {
     farmId: actor.farmId, recordId: record.id, version: stamp.version, entry, seq, season, number: stamp.number, canonicalText: text, digest,
-    checkCode: digest.slice(0, CHECK_CODE_LENGTH), signedById: people.signedBy.id, signedAt: now, reason,
+    checkCode: cutCheckCode(digest), signedById: people.signedBy.id, signedAt: now, reason,
   })
   await appendJournal(services, manager, actor, { action: `record.${entry}`, subjectId: record.id, detail: { number: stamp.number, version: stamp.version, seq } })
   return written

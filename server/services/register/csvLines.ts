@@ -1,6 +1,7 @@
 import { EACH } from '../../../shared/contract/each.ts'
 import type { Computed, RecordState, RegisterRow } from '../../../shared/contract/record.ts'
 import type { BlockLine, Part, RecordComponent, RecordContent } from '../../../shared/contract/recordContent.ts'
+import { cutCheckCode } from '../../../shared/evidence/checkCode.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
 import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
 import { mapPlainFields, PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
@@ -36,7 +37,6 @@ export interface CsvRecord extends KeyedRow {
 interface CsvPlace { language: Language; zone: string }
 
 const DECIMALS = 4
-const CODE_LENGTH = 20
 const M2_PER_HA = 10_000
 
 /** The lines of one record: one for each of its block lines, in their order. */
@@ -64,7 +64,7 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
     lateHours: row.lateHours === null ? '' : String(row.lateHours),
     stops: String(row.tally.stop),
     unknowns: String(row.tally.unknown),
-    checkCode: digest === null ? '' : digest.slice(0, CODE_LENGTH),
+    checkCode: digest === null ? '' : cutCheckCode(digest),
   }
   return content.lines.map((line, index) => ({ ...whole, ...lineCells(line, { row, computed, index }, place) }))
 }
