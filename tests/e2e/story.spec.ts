@@ -147,7 +147,7 @@ test('records a drench: sheet, reload, start, end, signature, lots, PDF, registe
   await form.endNow()
   await form.sign('not the password')
   await expect(form.main.getByRole('alert').filter({ hasText: say('records.sign.wrongPassword') })).toBeVisible()
-  await expect(form.main.getByText(block.code)).toBeVisible()
+  await expect(form.main.getByText(block.code, { exact: true })).toBeVisible()
   await form.sign()
   const number = await form.signedNumber()
   expect(number).toMatch(/^\d{4}-\d{4}$/)
