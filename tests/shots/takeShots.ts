@@ -9,6 +9,7 @@ import { sessionSchema } from '../../shared/contract/session.ts'
 import { field } from '../e2e/support/controls.ts'
 import { emailOf } from '../e2e/support/demoFarm.ts'
 import { say } from '../e2e/support/words.ts'
+import { findChromium } from '../../server/cli/lib/chromium.mjs'
 import { fillDrench, fillHappened, fillSpray, fillStop } from './fillRecord.ts'
 import { LATER_SCREENS } from './laterScreens.ts'
 import { shoot, withPage, type Shooting, type Size } from './shooting.ts'
@@ -115,7 +116,7 @@ async function shootPaper(shooting: Shooting): Promise<void> {
 const [url, password, folder] = process.argv.slice(2)
 if (url === undefined || password === undefined || folder === undefined) throw new Error('Usage: takeShots.ts URL PASSWORD DIR')
 await mkdir(folder, { recursive: true })
-const browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: ['--disable-quic', '--disable-background-networking', '--disable-component-update', '--disable-sync', '--no-first-run'] })
+const browser = await chromium.launch({ executablePath: findChromium() ?? '', args: ['--disable-quic', '--disable-background-networking', '--disable-component-update', '--disable-sync', '--no-first-run'] })
 const shooting = { browser, url, password, folder }
 try {
   await shootCover(shooting, 'desk', 'd-08-signin')

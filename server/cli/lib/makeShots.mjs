@@ -20,7 +20,7 @@ const fixedClock = '2026-06-16T13:42:00Z'
 export async function makeShots({ lifecycle, target }) {
   if (target === undefined) throw new OneLine('Say where they go: npm run shots -- DIR')
   await ensurePackages({ lifecycle, say })
-  await ensureSystemPackages(['postgresql', 'chromium', 'poppler-utils', 'fonts-noto-core'], { lifecycle, say })
+  await ensureSystemPackages(['postgresql', 'chromium-headless-shell', 'poppler-utils', 'fonts-noto-core'], { lifecycle, say })
   const folder = await makeThrowAwayFolder(lifecycle)
   const [{ database }] = await Promise.all([startThrowAwayDatabase({ folder, lifecycle, say }), buildIfStale({ lifecycle, say })])
   const { url, password } = await startDemoServer({ folder, database, lifecycle, env: { FIXED_CLOCK: fixedClock } })

@@ -1,19 +1,20 @@
 import { existsSync, mkdirSync, rmSync, writeFileSync } from 'node:fs'
 import { OneLine } from './OneLine.mjs'
 import { cleanEnvironment } from './cleanEnvironment.mjs'
+import { findChromium } from './chromium.mjs'
 import { findPostgres } from './postgresBinaries.mjs'
 import { runCommand } from './runCommand.mjs'
 import { secondsSince } from './say.mjs'
 
 /**
- * @typedef {'postgresql' | 'chromium' | 'qpdf' | 'poppler-utils' | 'fonts-noto-core'} SystemPackage
+ * @typedef {'postgresql' | 'chromium-headless-shell' | 'qpdf' | 'poppler-utils' | 'fonts-noto-core'} SystemPackage
  * @typedef {{ lifecycle: import('./lifecycle.mjs').Lifecycle, say: import('./say.mjs').Say }} Context
  */
 
 /** @type {Record<SystemPackage, () => boolean>} */
 const isThere = {
   postgresql: () => findPostgres() !== undefined,
-  chromium: () => existsSync('/usr/bin/chromium'),
+  'chromium-headless-shell': () => findChromium() !== undefined,
   qpdf: () => existsSync('/usr/bin/qpdf'),
   'poppler-utils': () => existsSync('/usr/bin/pdftotext'),
   'fonts-noto-core': () => existsSync('/usr/share/fonts/truetype/noto/NotoSans-Regular.ttf'),
