@@ -39,7 +39,7 @@ export interface RouteDefinition<
   Answer extends z.ZodType,
   Upload extends boolean,
 > {
-  method: 'get' | 'post' | 'put' | 'delete'
+  method: 'get' | 'post' | 'put' | 'patch' | 'delete'
   path: string
   /** One sentence for the API's page. */
   summary: string
@@ -59,7 +59,7 @@ export interface RouteDefinition<
 
 /** A route after its types have done their work; router, OpenAPI and the role matrix are made from it. */
 export interface Route {
-  method: 'get' | 'post' | 'put' | 'delete'
+  method: 'get' | 'post' | 'put' | 'patch' | 'delete'
   path: string
   summary: string
   roles: RouteRoles

@@ -9,7 +9,7 @@ import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
 
 interface Door {
-  method: 'post' | 'put' | 'del'
+  method: 'post' | 'put' | 'patch' | 'del'
   path: (farmId: string, id: string) => string
   answer: z.ZodType
 }

@@ -7,7 +7,7 @@ import { sendForm } from './sendForm.ts'
 const PATIENCE_MS = 30_000
 
 type Query = Record<string, string | number | null | undefined>
-type Method = 'GET' | 'POST' | 'PUT' | 'DELETE'
+type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
 
 /** Asks the person to sign in again; answers whether they did. */
 type SignInAgain = () => Promise<boolean>
@@ -27,6 +27,7 @@ export const http = {
     request('GET', `${path}${queryText(query)}`, undefined, schema),
   post: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('POST', path, body, schema),
   put: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('PUT', path, body, schema),
+  patch: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => request('PATCH', path, body, schema),
   /** Sends a form with a file in it; `onProgress` hears which share of it has gone. */
   upload: <Schema extends z.ZodType>(path: string, form: FormData, schema: Schema, onProgress: (share: number) => void) =>
     answered(path, schema, () => sendForm(path, form, onProgress)),

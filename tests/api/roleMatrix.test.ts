@@ -155,6 +155,6 @@ describe('routes outside a farm', () => {
 
   it('leave no other door: every router of the server is made from the list', () => {
     const app = readFileSync('server/app.ts', 'utf8')
-    expect([...app.matchAll(/\bapi\.(get|post|put|delete)\('([^']+)'/g)].map((match) => match[2])).toEqual(['/openapi.json', '/docs', '/docs.css'])
+    expect([...app.matchAll(/\bapi\.(get|post|put|patch|delete)\('([^']+)'/g)].map((match) => match[2])).toEqual(['/openapi.json', '/docs', '/docs.css'])
   })
 })
