@@ -6,6 +6,7 @@ import { Block } from '../entities/Block.ts'
 import { Farm } from '../entities/Farm.ts'
 import { FarmHead } from '../entities/FarmHead.ts'
 import { Grant } from '../entities/Grant.ts'
+import { GroundFeature } from '../entities/GroundFeature.ts'
 import { JournalEntry } from '../entities/JournalEntry.ts'
 import { Lot } from '../entities/Lot.ts'
 import { LotEntry } from '../entities/LotEntry.ts'
@@ -19,6 +20,7 @@ import { RecordVersion } from '../entities/RecordVersion.ts'
 import { RegisterEntry } from '../entities/RegisterEntry.ts'
 import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
+import { Site } from '../entities/Site.ts'
 import { Sprayer } from '../entities/Sprayer.ts'
 
 /** Every entity of the house. */
@@ -31,6 +33,7 @@ export const ENTITIES = [
   Farm,
   FarmHead,
   Grant,
+  GroundFeature,
   JournalEntry,
   Lot,
   LotEntry,
@@ -44,5 +47,6 @@ export const ENTITIES = [
   RegisterEntry,
   SavedFilter,
   SeasonCounter,
+  Site,
   Sprayer,
 ]

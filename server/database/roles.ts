@@ -13,6 +13,8 @@ export const APP_RIGHTS: Record<string, string> = {
   people: 'SELECT, INSERT, UPDATE',
   grants: 'SELECT, INSERT, UPDATE',
   blocks: 'SELECT, INSERT, UPDATE',
+  sites: 'SELECT, INSERT, UPDATE',
+  ground_features: 'SELECT, INSERT, UPDATE',
   materials: 'SELECT, INSERT, UPDATE',
   lots: 'SELECT, INSERT, UPDATE',
   lot_entries: 'SELECT, INSERT',

@@ -1,6 +1,7 @@
 import { v7 as uuidV7 } from 'uuid'
 import { createBlockSchema, type CreateBlock } from '../../shared/contract/block.ts'
 import { createLotSchema, createMaterialSchema, type CreateLot, type CreateMaterial } from '../../shared/contract/input.ts'
+import { createGroundSchema, createSiteSchema, type CreateGround, type CreateSite } from '../../shared/contract/ground.ts'
 import { createRecordSchema, type CreateRecord } from '../../shared/contract/recordChanges.ts'
 import { type RecordContentInput } from '../../shared/contract/recordContent.ts'
 import type { z } from 'zod'
@@ -47,4 +48,14 @@ export function buildRecord(
     water: { sizedFrom: 'water', value: '400', unit: 'L', source: 'Rain tank 2' },
     ...rest,
   })
+}
+
+/** A well with 30 m round it. */
+export function buildSite(overrides: Partial<z.input<typeof createSiteSchema>> = {}): CreateSite {
+  return createSiteSchema.parse({ id: uuidV7(), kind: 'well', name: 'Yard well', geometry: { type: 'Point', coordinates: [-123.3133517, 44.6076692] }, keepClearM: '30', ...overrides })
+}
+
+/** A hedge of some 110 m. */
+export function buildGround(overrides: Partial<z.input<typeof createGroundSchema>> = {}): CreateGround {
+  return createGroundSchema.parse({ id: uuidV7(), kind: 'hedge', geometry: { type: 'LineString', coordinates: [[-123.3123, 44.607], [-123.3123, 44.608]] }, ...overrides })
 }

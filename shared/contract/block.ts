@@ -3,7 +3,7 @@ import { acknowledgedSchema, idSchema } from './common.ts'
 import { lineText } from './text.ts'
 
 /** GeoJSON geometry as it comes in, whatever it is: shared/geo/checkBoundary judges it and says what is wrong in words. */
-const geometryInput = z.looseObject({ type: z.string().max(40), coordinates: z.unknown().optional() })
+export const geometryInput = z.looseObject({ type: z.string().max(40), coordinates: z.unknown().optional() })
 
 const position = z.tuple([z.number(), z.number()])
 const polygonSchema = z.object({ type: z.literal('Polygon'), coordinates: z.array(z.array(position)) })

@@ -12,3 +12,9 @@ export interface GeometryFinding {
   /** Where in the coordinates, "coordinates.0.3". */
   path?: string
 }
+
+/** Something on the ground that need not have an area. */
+export type PlaceGeometry =
+  | { type: 'Point'; coordinates: Position }
+  | { type: 'LineString'; coordinates: Position[] }
+  | Polygon

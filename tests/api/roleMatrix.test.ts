@@ -1,9 +1,11 @@
 import { readFileSync } from 'node:fs'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { v7 as uuidV7 } from 'uuid'
-import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from '../../server/demo/buildThings.ts'
+import { buildBlock, buildGround, buildLot, buildMaterial, buildRecord, buildSite, squareAt } from '../../server/demo/buildThings.ts'
 import type { Route } from '../../server/routes/defineRoute.ts'
 import { ROUTES } from '../../server/routes/routes.ts'
+import { createGround } from '../../server/services/ground/groundFeatures.ts'
+import { createSite } from '../../server/services/ground/sites.ts'
 import { buildPicture } from '../support/buildFiles.ts'
 import { openHouse, PASSWORD, type Agent, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 import { seedThings, type SeededThings } from '../support/seedThings.ts'
@@ -17,6 +19,8 @@ interface World {
   things: SeededThings
   recordId: string
   fileId: string
+  siteId: string
+  groundId: string
 }
 
 const PICTURE = await buildPicture('png')
@@ -59,7 +63,10 @@ async function makeWorld(): Promise<World> {
   const fileId = uuidV7()
   await applicator.post(`/api/farms/${farm.id}/records/${input.id}/files`).field({ id: fileId, kind: 'photo' }).attach('file', PICTURE, 'a.png').expect(201)
   await applicator.post(`/api/farms/${farm.id}/records/${input.id}/sign`).send({ password: PASSWORD }).expect(200)
-  return { farm, things, recordId: input.id, fileId }
+  const owner = await farm.actor('owner')
+  const { site } = await createSite(house.services, owner, buildSite())
+  const { feature } = await createGround(house.services, owner, buildGround())
+  return { farm, things, recordId: input.id, fileId, siteId: site.id, groundId: feature.id }
 }
 
 /** A body that the route takes, made anew for each call, so that only rights can refuse it. */
@@ -68,6 +75,10 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
   const tag = uuidV7().slice(-8)
   const bodies: Record<string, () => object> = {
     'post /farms/:farmId/blocks': () => buildBlock({ code: tag, geometry: squareAt(place) }),
+    'post /farms/:farmId/sites': () => buildSite(),
+    'patch /farms/:farmId/sites/:id': () => ({ revision: 1, keepClearM: '25' }),
+    'post /farms/:farmId/ground': () => buildGround(),
+    'patch /farms/:farmId/ground/:id': () => ({ revision: 1, name: tag }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
@@ -89,7 +100,8 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 }
 
 function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
-  const id = things === null ? UNKNOWN : route.path.includes('/saved-filters') ? filterIds[actor] ?? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
+  const own = route.path.includes('/sites') ? world.siteId : route.path.includes('/ground') ? world.groundId : null
+  const id = things === null ? UNKNOWN : own !== null ? own : route.path.includes('/saved-filters') ? filterIds[actor] ?? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
   return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
 }
 

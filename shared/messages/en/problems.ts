@@ -43,6 +43,7 @@ export const problems = {
     too_many_words: 'At most 8 words at a time.',
   },
   number: {
+    metres: 'Give metres above 0, at most 5 000.',
     format: 'Give a plain number under 10 000 000, such as 12.5, with at most 4 decimals.',
     whole: 'Give a whole number.',
     above_zero: 'Give a number above 0.',
@@ -100,7 +101,14 @@ export const problems = {
     pixels: 'This picture has {megapixels} megapixels; at most {maximum} are taken. Choose a smaller one.',
     broken: 'This picture is damaged or cut off. Choose it again, or take it anew.',
   },
+  ground: {
+    needs_outline: 'A building has an outline. Draw at least three corners.',
+    needs_line: 'Draw a line or an outline of it: one point does not show how it runs.',
+    width_of_line: 'Only a line has a width. Leave it out where an outline is drawn.',
+  },
   geometry: {
+    place_type: 'Give a point, a line or an outline.',
+    line_short: 'A line has two different points at least.',
     type: 'A block is a polygon.',
     out_of_range: 'A point lies outside the globe: longitude {lon}, latitude {lat}.',
     maybe_swapped: 'A point lies outside the globe. Latitude and longitude look swapped.',

@@ -43,6 +43,7 @@ export const problems = {
     too_many_words: 'Ocho palabras a la vez como máximo.',
   },
   number: {
+    metres: 'Indique metros, más de 0 y como mucho 5 000.',
     format: 'Indique un número sencillo menor de 10 000 000, como 12.5, con 4 decimales como máximo.',
     whole: 'Indique un número entero.',
     above_zero: 'Indique un número mayor que 0.',
@@ -100,7 +101,14 @@ export const problems = {
     pixels: 'Esta imagen tiene {megapixels} megapíxeles; se admiten {maximum} como máximo. Elija una más pequeña.',
     broken: 'Esta imagen está dañada o cortada. Elíjala de nuevo, o haga otra.',
   },
+  ground: {
+    needs_outline: 'Un edificio tiene contorno. Dibuje al menos tres esquinas.',
+    needs_line: 'Dibuje su línea o su contorno: un solo punto no dice por dónde va.',
+    width_of_line: 'Solo una línea tiene anchura. Déjela vacía donde hay un contorno.',
+  },
   geometry: {
+    place_type: 'Indique un punto, una línea o un contorno.',
+    line_short: 'Una línea tiene al menos dos puntos distintos.',
     type: 'Una parcela es un polígono.',
     out_of_range: 'Un punto queda fuera del globo: longitud {lon}, latitud {lat}.',
     maybe_swapped: 'Un punto queda fuera del globo. Latitud y longitud parecen cambiadas.',
