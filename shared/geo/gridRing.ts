@@ -77,7 +77,8 @@ function isFlat({ x, y }: GridRing): boolean {
   return x.every((value, index) => (x1 - x0) * ((y[index] ?? 0) - y0) === (y1 - y0) * (value - x0))
 }
 
-function signedArea({ x, y }: GridRing): number {
+/** Twice the area of a ring, grid units squared; above 0 where it runs counter-clockwise. */
+export function signedArea({ x, y }: GridRing): number {
   const [x0 = 0] = x
   const [y0 = 0] = y
   let sum = 0

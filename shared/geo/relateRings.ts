@@ -33,7 +33,7 @@ function countSides(ring: GridRing, other: GridRing): { inside: number; outside:
 }
 
 /** Above 0 inside, below 0 outside, 0 on the ring. */
-function placeOf({ x, y }: GridRing, px: number, py: number): number {
+export function placeOf({ x, y }: GridRing, px: number, py: number): number {
   let isInside = false
   for (let index = 0, before = x.length - 1; index < x.length; before = index, index += 1) {
     const ay = y[before] ?? 0

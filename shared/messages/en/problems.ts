@@ -125,6 +125,7 @@ export const problems = {
     hole_outside: 'A hole lies outside its outline or crosses it.',
     too_many_points: 'That is {points} points; at most {maximum} are kept. Thin it first.',
     crosses_antimeridian: 'The outline runs across longitude 180. Cut it there into two parts.',
+    too_fine: 'The outlines are laced so finely that they cannot be joined. Thin them first.',
     area_range: 'A block has between 1 m² and 50 000 ha; this is {areaM2} m².',
     overlap: '{areaHa} ha of it lie inside {code}.',
     overlap_unknown: 'It is laced so finely with {code} that the ground they share cannot be worked out.',

@@ -125,6 +125,7 @@ export const problems = {
     hole_outside: 'Un hueco queda fuera de su contorno o lo cruza.',
     too_many_points: 'Son {points} puntos; se guardan {maximum} como máximo. Redúzcalos antes.',
     crosses_antimeridian: 'El contorno cruza la longitud 180. Córtelo allí en dos partes.',
+    too_fine: 'Los contornos están tan entrelazados que no se pueden unir. Simplifíquelos primero.',
     area_range: 'Una parcela tiene entre 1 m² y 50 000 ha; esta tiene {areaM2} m².',
     overlap: '{areaHa} ha quedan dentro de {code}.',
     overlap_unknown: 'Se entrelaza tan finamente con {code} que no se puede calcular el terreno que comparten.',
