@@ -7,6 +7,7 @@ import { AddAttachments1764601000000 } from '../../migrations/1764601000000-AddA
 import { FindInRegister1764602000000 } from '../../migrations/1764602000000-FindInRegister.ts'
 import { NarrowAccess1764603000000 } from '../../migrations/1764603000000-NarrowAccess.ts'
 import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindBySubject.ts'
+import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBlocks.ts'
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
 import { ENTITIES } from './entities.ts'
 
@@ -43,6 +44,7 @@ export function createOwnerSource(url: string): DataSource {
       FindInRegister1764602000000,
       NarrowAccess1764603000000,
       FindBySubject1764604000000,
+      WholeBlocks1764610000000,
       AddGround1764620000000,
     ],
     migrationsTransactionMode: 'each',

@@ -2,8 +2,12 @@ import { Account } from '../entities/Account.ts'
 import { AccountToken } from '../entities/AccountToken.ts'
 import { ApplicationRecord } from '../entities/ApplicationRecord.ts'
 import { Attachment } from '../entities/Attachment.ts'
+import { Bed } from '../entities/Bed.ts'
 import { Block } from '../entities/Block.ts'
+import { BlockBoundary } from '../entities/BlockBoundary.ts'
 import { Farm } from '../entities/Farm.ts'
+import { FarmEvent } from '../entities/FarmEvent.ts'
+import { FarmEventBlock } from '../entities/FarmEventBlock.ts'
 import { FarmHead } from '../entities/FarmHead.ts'
 import { Grant } from '../entities/Grant.ts'
 import { GroundFeature } from '../entities/GroundFeature.ts'
@@ -12,6 +16,7 @@ import { Lot } from '../entities/Lot.ts'
 import { LotEntry } from '../entities/LotEntry.ts'
 import { Material } from '../entities/Material.ts'
 import { Person } from '../entities/Person.ts'
+import { Planting } from '../entities/Planting.ts'
 import { RecordComponent } from '../entities/RecordComponent.ts'
 import { RecordLine } from '../entities/RecordLine.ts'
 import { RecordReview } from '../entities/RecordReview.ts'
@@ -29,8 +34,12 @@ export const ENTITIES = [
   AccountToken,
   ApplicationRecord,
   Attachment,
+  Bed,
   Block,
+  BlockBoundary,
   Farm,
+  FarmEvent,
+  FarmEventBlock,
   FarmHead,
   Grant,
   GroundFeature,
@@ -39,6 +48,7 @@ export const ENTITIES = [
   LotEntry,
   Material,
   Person,
+  Planting,
   RecordComponent,
   RecordLine,
   RecordReview,

@@ -3,6 +3,7 @@ import type { Route } from './defineRoute.ts'
 import { farmRoutes } from './farmRoutes.ts'
 import { fileRoutes } from './fileRoutes.ts'
 import { groundRoutes } from './groundRoutes.ts'
+import { growingRoutes } from './growingRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { recordLifeRoutes } from './recordLifeRoutes.ts'
@@ -12,4 +13,4 @@ import { reportRoutes } from './reportRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...groundRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]
+export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]

@@ -6,18 +6,22 @@ import { cutPage, decodeCursor } from './cursor.ts'
 /** Names and codes as the database can compare them: whole characters, no NUL. */
 const nameKey = z.string().max(200).refine((text) => text.isWellFormed() && !text.includes('\u0000'))
 
-/** A page of a farm's things in the order of one text column; ids break ties. */
+/**
+ * A page of a farm's things in the order of one text column, or of their ids, which are in the order of their making.
+ * Ids break ties. `where` takes columns as they must be, null for what must not be there.
+ */
 export async function listByKey<Row extends ObjectLiteral & { id: string }, Item>(
   manager: EntityManager,
   target: EntityTarget<Row>,
   page: Page,
   farmId: string,
-  shape: { key: 'code' | 'name'; where?: Partial<Record<string, string>>; present: (row: Row) => Item },
+  shape: { key: 'code' | 'name' | 'id'; where?: Partial<Record<string, string | null>>; present: (row: Row) => Item },
 ): Promise<{ items: Item[]; next: string | null }> {
-  const after = decodeCursor(page.cursor, nameKey)
+  const after = decodeCursor(page.cursor, shape.key === 'id' ? z.guid() : nameKey)
   const query = manager.getRepository(target).createQueryBuilder('thing').where('thing.farmId = :farmId', { farmId })
   for (const [column, value] of Object.entries(shape.where ?? {})) {
-    query.andWhere(`thing.${column} = :${column}`, { [column]: value })
+    if (value === null) query.andWhere(`thing.${column} IS NULL`)
+    else query.andWhere(`thing.${column} = :${column}`, { [column]: value })
   }
   if (after) query.andWhere(`(thing.${shape.key}, thing.id) > (:key, :id)`, { key: after.key, id: after.id })
   const rows = await query.orderBy(`thing.${shape.key}`).addOrderBy('thing.id').limit(page.limit + 1).getMany()

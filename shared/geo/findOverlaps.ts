@@ -42,8 +42,8 @@ export function findOverlaps(geometry: Boundary, others: readonly NamedBoundary[
   return { overlaps, tooFine }
 }
 
-/** Ground that two boundaries share, square metres on the ellipsoid; 0 where they only touch. */
-function sharedM2(a: Boundary, b: Boundary): number {
+/** Ground that two valid boundaries share, square metres on the ellipsoid; 0 where they only touch. Not for those that `areTooFine`. */
+export function sharedM2(a: Boundary, b: Boundary): number {
   const shared = intersect(featureCollection([feature(a), feature(b)]))
   return shared === null ? 0 : measurePolygon(toBoundary(shared.geometry)).areaM2
 }

@@ -21,6 +21,10 @@ interface World {
   fileId: string
   siteId: string
   groundId: string
+  otherBlockId: string
+  plantingId: string
+  bedId: string
+  eventId: string
 }
 
 const PICTURE = await buildPicture('png')
@@ -63,10 +67,16 @@ async function makeWorld(): Promise<World> {
   const fileId = uuidV7()
   await applicator.post(`/api/farms/${farm.id}/records/${input.id}/files`).field({ id: fileId, kind: 'photo' }).attach('file', PICTURE, 'a.png').expect(201)
   await applicator.post(`/api/farms/${farm.id}/records/${input.id}/sign`).send({ password: PASSWORD }).expect(200)
-  const owner = await farm.actor('owner')
-  const { site } = await createSite(house.services, owner, buildSite())
-  const { feature } = await createGround(house.services, owner, buildGround())
-  return { farm, things, recordId: input.id, fileId, siteId: site.id, groundId: feature.id }
+  const ownerActor = await farm.actor('owner')
+  const { site } = await createSite(house.services, ownerActor, buildSite())
+  const { feature } = await createGround(house.services, ownerActor, buildGround())
+  const owner = await house.as(farm.accounts.owner)
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7() }
+  await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
+  await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
+  await applicator.post(`/api/farms/${farm.id}/farm-events`).send({ id: ids.eventId, kind: 'mown', blockIds: [things.blockId], on: '2026-06-15' }).expect(201)
+  return { farm, things, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
 }
 
 /** A body that the route takes, made anew for each call, so that only rights can refuse it. */
@@ -79,6 +89,18 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'patch /farms/:farmId/sites/:id': () => ({ revision: 1, keepClearM: '25' }),
     'post /farms/:farmId/ground': () => buildGround(),
     'patch /farms/:farmId/ground/:id': () => ({ revision: 1, name: tag }),
+    // Over a revision that nobody saw: rights alone are asked here, and the block stands for the routes that come after.
+    'patch /farms/:farmId/blocks/:id': () => ({ revision: 9, name: tag }),
+    'put /farms/:farmId/blocks/:id/land': () => ({ revision: 9, status: 'certified' }),
+    'post /farms/:farmId/blocks/:id/split': () => ({ revision: 9, parts: [{ id: uuidV7(), code: `${tag}a`, name: tag, geometry: squareAt(place) }, { id: uuidV7(), code: `${tag}b`, name: tag, geometry: squareAt(place + 0.5) }] }),
+    'post /farms/:farmId/blocks/:id/reopen': () => ({ revision: 9 }),
+    'post /farms/:farmId/blocks/merge': () => ({ blocks: [{ id: things.blockId, revision: 9 }, { id: world.otherBlockId, revision: 9 }], block: { id: uuidV7(), code: tag, name: tag } }),
+    'post /farms/:farmId/plantings': () => ({ id: uuidV7(), blockId: things.blockId, crop: 'Apple' }),
+    'patch /farms/:farmId/plantings/:id': () => ({ revision: 1, crop: tag }),
+    'post /farms/:farmId/beds': () => ({ id: uuidV7(), blockId: things.blockId, kind: 'bed', name: tag, count: 2 }),
+    'patch /farms/:farmId/beds/:id': () => ({ revision: 1, kind: 'bed', name: tag, count: 2 }),
+    'post /farms/:farmId/farm-events': () => ({ id: uuidV7(), kind: 'mulched', blockIds: [things.blockId], on: '2026-06-16' }),
+    'post /farms/:farmId/farm-events/:id/withdraw': () => ({ reason: 'A slip' }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
@@ -100,8 +122,12 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 }
 
 function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
-  const own = route.path.includes('/sites') ? world.siteId : route.path.includes('/ground') ? world.groundId : null
-  const id = things === null ? UNKNOWN : own !== null ? own : route.path.includes('/saved-filters') ? filterIds[actor] ?? UNKNOWN : route.path.startsWith('/farms/:farmId/files') ? world.fileId : route.path.includes('/blocks') ? things.blockId : route.path.includes('/lots') ? things.lotId : world.recordId
+  const ids: [path: string, id: string | undefined][] = [
+    ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
+  ]
+  const found = ids.find(([path]) => route.path.includes(path))
+  const id = things === null ? UNKNOWN : found === undefined ? world.recordId : found[1] ?? UNKNOWN
   return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
 }
 

@@ -42,7 +42,7 @@ export function buildGround(farmId: string, people: SeedGround['people']): SeedG
     const geometry = squareAt(100 + place) as Block['geometry']
     const { areaM2, perimeterM } = measurePolygon(geometry)
     const { id, crop, code, name } = buildBlock({ code: `S${place + 1}`, name: `${BLOCK_NAMES[place % BLOCK_NAMES.length]} ${place + 1}`, crop: 'Apple' })
-    return { ...common, id, code, name, crop, geometry, areaM2: String(areaM2), perimeterM: String(perimeterM), version: 1, acknowledged: [] }
+    return { ...common, id, code, name, crop, geometry, areaM2: String(areaM2), perimeterM: String(perimeterM), version: 1, endedOn: null, endedBy: null, fromIds: [], intoIds: [], land: null, acknowledged: [] }
   })
   const materials = MATERIALS.map((name, place): Material => {
     const isMass = name === 'Basalt meal'

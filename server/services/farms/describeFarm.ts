@@ -7,14 +7,14 @@ import type { FarmActor } from '../../database/actor.ts'
 import { Account } from '../../entities/Account.ts'
 import { Block } from '../../entities/Block.ts'
 import { Person } from '../../entities/Person.ts'
-import { In } from 'typeorm'
+import { In, IsNull } from 'typeorm'
 import { listByKey } from '../listByKey.ts'
 import type { Services } from '../services.ts'
 
 /** The farm as its people see it; its place is a corner of its first block. */
 export async function describeFarm(services: Services, actor: FarmActor): Promise<FarmAnswer> {
   const [first] = await services.database.inFarm(actor, (manager) =>
-    manager.find(Block, { select: { geometry: true }, where: { farmId: actor.farmId }, order: { createdAt: 'ASC', id: 'ASC' }, take: 1 }),
+    manager.find(Block, { select: { geometry: true }, where: { farmId: actor.farmId, endedOn: IsNull() }, order: { createdAt: 'ASC', id: 'ASC' }, take: 1 }),
   )
   return {
     id: actor.farmId,

@@ -1,4 +1,4 @@
-import { In, type EntityManager } from 'typeorm'
+import { In, IsNull, type EntityManager } from 'typeorm'
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import { distanceKm } from '../../../shared/geo/distanceKm.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
@@ -67,8 +67,8 @@ async function namePeople(manager: EntityManager, { farm, people, record }: Sign
 
 async function findNeighbours(manager: EntityManager, { farm, blocks }: SignedRecord): Promise<RecordReportData['neighbours']> {
   const own = new Set(blocks.map(({ id }) => id))
-  const others = await manager.find(Block, { select: { id: true, code: true, geometry: true }, where: { farmId: farm.id } })
+  const others = await manager.find(Block, { select: { id: true, code: true, geometry: true, fromIds: true }, where: { farmId: farm.id, endedOn: IsNull() } })
   return others
-    .filter(({ id, geometry }) => !own.has(id) && blocks.some((block) => distanceKm(block.geometry, geometry) < NEIGHBOUR_KM))
+    .filter(({ id, geometry, fromIds }) => !own.has(id) && !fromIds.some((from) => own.has(from)) && blocks.some((block) => distanceKm(block.geometry, geometry) < NEIGHBOUR_KM))
     .map(({ code, geometry }) => ({ code, geometry }))
 }

@@ -32,7 +32,7 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
       if (canonicalText(record.content) === canonicalText(content)) return current
       throw stale(current)
     }
-    const columns = await draftRecord(manager, actor, content, now)
+    const columns = await draftRecord(manager, actor, content, now, record.content.lines.map(({ blockId }) => blockId))
     const changes = { ...columns, revision: revision + 1 }
     await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id }, changes)
     const written = { ...record, ...changes }
