@@ -41,7 +41,7 @@ export async function reopenBlock(services: Services, actor: FarmActor, id: stri
 async function assertUntouched(manager: EntityManager, farmId: string, blocks: readonly Block[]): Promise<void> {
   const blockId = In(blocks.map(({ id }) => id))
   const changed = blocks.find(({ revision, endedOn }) => revision > 1 || endedOn !== null)
-  const [inUse] = await Promise.all([RecordLine, Planting, Bed, FarmEventBlock].map((entity) => manager.existsBy(entity, { farmId, blockId })))
-    .then((found) => found.filter(Boolean))
-  if (changed || inUse) throw new AppError('conflict', 'block.reopen_used', { errors: [{ path: 'id', code: 'block.reopen_used' }] })
+  let isUsed = changed !== undefined
+  for (const entity of [RecordLine, Planting, Bed, FarmEventBlock]) isUsed ||= await manager.existsBy(entity, { farmId, blockId })
+  if (isUsed) throw new AppError('conflict', 'block.reopen_used', { errors: [{ path: 'id', code: 'block.reopen_used' }] })
 }
