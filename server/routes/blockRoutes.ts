@@ -1,11 +1,12 @@
 import { blockSchema, createBlockSchema } from '../../shared/contract/block.ts'
 import {
-  blockQuerySchema, blocksChangedSchema, boundaryVersionsSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema,
+  blockQuerySchema, blocksChangedSchema, boundaryVersionsSchema, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema,
 } from '../../shared/contract/blockChanges.ts'
 import { farmParamsSchema, pageOf, thingParamsSchema } from '../../shared/contract/common.ts'
 import { putLandSchema } from '../../shared/contract/land.ts'
 import { createBlock } from '../services/blocks/createBlock.ts'
 import { listBoundaries } from '../services/blocks/listBoundaries.ts'
+import { mergeBlocks } from '../services/blocks/mergeBlocks.ts'
 import { putLand } from '../services/blocks/putLand.ts'
 import { getBlock, listBlocks } from '../services/blocks/readBlocks.ts'
 import { reopenBlock } from '../services/blocks/reopenBlock.ts'
@@ -27,6 +28,11 @@ export const blockRoutes = [
       const { made, block } = await createBlock(services, actor, body)
       return { status: made ? 201 : 200, body: block }
     },
+  }),
+  defineRoute({
+    method: 'post', path: '/farms/:farmId/blocks/merge', summary: 'Put blocks together: they end, one begins, all or nothing.', roles: LEADERS,
+    params: farmParamsSchema, body: mergeBlocksSchema, answer: blocksChangedSchema,
+    run: async ({ services, actor, body }) => ({ body: await mergeBlocks(services, actor, body) }),
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/blocks/:id', summary: 'One block.', roles: EVERY_ROLE,

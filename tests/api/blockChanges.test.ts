@@ -182,7 +182,8 @@ describe('a block that has ended', () => {
     await manager.post(at('records')).send({ id, ...input }).expect(201)
     await manager.post(at(`blocks/${block.id}/split`)).send({ revision: 1, parts: partsOf(block) }).expect(200)
     await manager.put(at(`records/${id}`)).send({ ...input, revision: 1, purpose: 'Soil life' }).expect(200)
-    await manager.post(at(`records/${id}/sign`)).send({ password: PASSWORD }).expect(200)
+    const signed = await manager.post(at(`records/${id}/sign`)).send({ password: PASSWORD })
+    expect(signed.body).toMatchObject({ state: 'signed', purpose: 'Soil life' })
   })
 })
 
@@ -210,6 +211,47 @@ describe('undoing a cut', () => {
     await use(parts[1]?.id ?? '')
     expect((await manager.post(at(`blocks/${block.id}/reopen`)).send({ revision: 2 })).body).toMatchObject({ status: 409, code: 'block.reopen_used' })
     expect(await read(block.id)).toMatchObject({ endedBy: 'split' })
+  })
+})
+
+describe('putting blocks together', () => {
+  const merge = (blocks: { id: string; revision: number }[], block: object = {}, more: object = {}) =>
+    manager.post(at('blocks/merge')).send({ blocks: blocks.map(({ id, revision }) => ({ id, revision })), block: { id: uuidV7(), code: `M${(place += 1)}`, name: 'Joined', ...block }, ...more })
+
+  it('gives back what was cut, to the corner, and can be undone', async () => {
+    const block = await draw('M1')
+    const cut = await manager.post(at(`blocks/${block.id}/split`)).send({ revision: 1, parts: partsOf(block, halves(block, 0.37)) }).expect(200)
+    const joined = (await merge(cut.body.open, { code: 'M1' }).expect(200)).body
+    expect(joined.open).toMatchObject([{ code: 'M1', crop: block.crop, fromIds: cut.body.open.map(({ id }: { id: string }) => id), geometry: { type: 'Polygon' } }])
+    expect(new Set(ringOf(joined.open[0]).map(String))).toEqual(new Set(ringOf(block).map(String)))
+    expect(Math.abs(joined.open[0].areaM2 / block.areaM2 - 1)).toBeLessThan(1e-6)
+    expect(joined.ended).toMatchObject([{ endedBy: 'merge', intoIds: [joined.open[0].id] }, { endedBy: 'merge' }])
+    const undone = await manager.post(at(`blocks/${joined.ended[1].id}/reopen`)).send({ revision: joined.ended[1].revision }).expect(200)
+    expect(undone.body.open.map(({ code }: { code: string }) => code)).toEqual(['M1a', 'M1b'])
+    expect(undone.body.ended).toMatchObject([{ id: joined.open[0].id, endedBy: 'undone' }])
+  })
+
+  it('asks about pieces that touch nowhere, and is done once', async () => {
+    const [one, two] = [await draw('M2'), await draw('M3')]
+    const asked = await merge([one, two])
+    expect(asked.body).toMatchObject({ status: 422, acknowledgeable: true, errors: [{ path: 'blocks', code: 'geometry.apart' }] })
+    expect(await read(one.id)).toEqual(one)
+    const block = { id: uuidV7(), code: 'M23', name: 'Two pieces' }
+    const more = { acknowledged: [{ code: 'geometry.apart', reason: 'The lane runs between' }] }
+    const { body } = await merge([one, two], block, more).expect(200)
+    expect(body.open).toMatchObject([{ geometry: { type: 'MultiPolygon' } }])
+    expect(body.open[0].areaM2).toBeCloseTo(one.areaM2 + two.areaM2, 3)
+    expect((await merge([one, two], block, more).expect(200)).body).toEqual(body)
+  })
+
+  it('refuses all of it where one of them is stale, unknown, named twice or the code is taken', async () => {
+    const [one, two] = [await draw('M4'), await draw('M5')]
+    const more = { acknowledged: [{ code: 'geometry.apart', reason: 'One field' }] }
+    expect((await merge([one, { ...two, revision: 4 }], {}, more)).body).toMatchObject({ status: 409, code: 'stale', current: { id: two.id } })
+    expect((await merge([one, { id: uuidV7(), revision: 1 }], {}, more)).body.errors).toMatchObject([{ path: 'blocks.1.id', code: 'block.unknown' }])
+    expect((await merge([one, one], {}, more)).body.errors).toMatchObject([{ path: 'blocks', code: 'merge.twice' }])
+    expect((await merge([one, two], { code: 'C2' }, more)).body).toMatchObject({ status: 409, errors: [{ path: 'block.code', code: 'code.taken' }] })
+    expect([await read(one.id), await read(two.id)]).toEqual([one, two])
   })
 })
 

@@ -117,7 +117,6 @@ export const problems = {
     coordinates: 'Each point is longitude, then latitude.',
     holes_overlap: 'Hole {hole} runs into another hole.',
     apart: 'Some of these blocks touch nowhere. Joined, they are one block in several pieces.',
-    too_fine: 'These outlines are laced too finely to be joined in good time.',
     parts_overlap: 'Part {part} runs into another part.',
     not_closed: 'The ring is open. Its last point must repeat the first.',
     too_few_points: 'A ring needs at least three corners.',

@@ -117,7 +117,6 @@ export const problems = {
     coordinates: 'Cada punto es longitud y luego latitud.',
     holes_overlap: 'El hueco {hole} entra en otro hueco.',
     apart: 'Algunas de estas parcelas no se tocan. Unidas, son una sola parcela en varios pedazos.',
-    too_fine: 'Estos contornos están trenzados demasiado fino para unirlos a tiempo.',
     parts_overlap: 'La parte {part} entra en otra parte.',
     not_closed: 'El anillo está abierto. Su último punto debe repetir el primero.',
     too_few_points: 'Un anillo necesita al menos tres esquinas.',
