@@ -1,5 +1,5 @@
 import { checkBoundary } from './checkBoundary.ts'
-import { setCorners, type NewCorners } from './cornersOnEdges.ts'
+import { setCorners, type EdgeToCut, type NewCorner } from './cornersOnEdges.ts'
 import type { Boundary, GeometryFinding, Position } from './geometryTypes.ts'
 import { fromGridParts, isSamePoint, toGridParts, toGridPoint, type GridPoint } from './gridPoints.ts'
 import { crossesProperly } from './gridSegments.ts'
@@ -49,7 +49,7 @@ function lineFault(parts: readonly GridPoint[][][], points: readonly GridPoint[]
   return within === -1 ? null : { code: 'split.ends_inside', params: { end: within + 1 } }
 }
 
-/** Less than all that may be off: corners of one edge are set one after another. */
+/** Less than all that may be off: the corners of one edge are set one after another. */
 const SHARE_OF_ERROR = 0.4
 
 function splitPart(rings: GridPoint[][], stretches: readonly Stretch[], toleranceM2: number): GridPoint[][][] {
@@ -57,11 +57,13 @@ function splitPart(rings: GridPoint[][], stretches: readonly Stretch[], toleranc
   const onEdges = [...new Set(stretches.flatMap(({ from, to }) => [from, to]))].filter(({ isCorner }) => !isCorner).sort(inOrder(rings))
   const corners = placeCorners(rings, onEdges, toleranceM2)
   const cut = rings.map((ring, number) => ring.flatMap((corner, edge) => [
-    corner, ...onEdges.filter((meeting) => meeting.ring === number && meeting.edge === edge).flatMap((meeting) => corners.get(meeting) ?? []),
+    corner, ...onEdges.filter((meeting) => meeting.ring === number && meeting.edge === edge).flatMap((meeting) => allOf(corners.get(meeting))),
   ]))
-  const pointOf = (meeting: Meeting): GridPoint => corners.get(meeting)?.[0] ?? meeting.near
+  const pointOf = (meeting: Meeting): GridPoint => corners.get(meeting)?.at ?? meeting.near
   return traceFaces(cut, stretches.map(({ from, to, between }) => [pointOf(from), ...between, pointOf(to)]))
 }
+
+const allOf = (corner: NewCorner | undefined): GridPoint[] => (corner === undefined ? [] : [...corner.before, corner.at, ...corner.after])
 
 const inOrder = (rings: GridPoint[][]) => (a: Meeting, b: Meeting): number => a.ring - b.ring || a.edge - b.edge || farFrom(rings, a) - farFrom(rings, b)
 
@@ -71,21 +73,23 @@ function farFrom(rings: GridPoint[][], { ring, edge, near }: Meeting): number {
 }
 
 /** Corners for the meetings on edges. Of several on one edge each is set on what the one before has left of it. */
-function placeCorners(rings: GridPoint[][], meetings: readonly Meeting[], toleranceM2: number): Map<Meeting, NewCorners> {
-  const placed = new Map<Meeting, NewCorners>()
-  const endsOf = ({ ring, edge, near }: Meeting) => ({ a: rings[ring]?.[edge] ?? near, b: rings[ring]?.[(edge + 1) % (rings[ring]?.length ?? 1)] ?? near })
-  const isFirst = (meeting: Meeting, index: number): boolean => {
+function placeCorners(rings: GridPoint[][], meetings: readonly Meeting[], toleranceM2: number): Map<Meeting, NewCorner> {
+  const placed = new Map<Meeting, NewCorner>()
+  const isOnSame = (one: Meeting | undefined, other: Meeting): boolean => one?.ring === other.ring && one.edge === other.edge
+  const edgeOf = (meeting: Meeting, index: number): EdgeToCut => {
+    const { ring, edge, near } = meeting
     const before = meetings[index - 1]
-    return before === undefined || before.ring !== meeting.ring || before.edge !== meeting.edge
+    const corners = rings[ring] ?? []
+    const a = isOnSame(before, meeting) && before !== undefined ? placed.get(before)?.at : corners[edge]
+    return { a: a ?? near, b: corners[(edge + 1) % corners.length] ?? near, near, more: isOnSame(meetings[index + 1], meeting) }
   }
-  const first = meetings.filter(isFirst)
-  const corners = setCorners(first.map((meeting) => ({ ...endsOf(meeting), near: meeting.near })), toleranceM2)
-  first.forEach((meeting, index) => { const set = corners[index]; if (set !== undefined) placed.set(meeting, set) })
+  const first = meetings.filter((meeting, index) => !isOnSame(meetings[index - 1], meeting))
+  const corners = setCorners(first.map((meeting) => edgeOf(meeting, meetings.indexOf(meeting))), toleranceM2)
+  first.forEach((meeting, index) => { const corner = corners[index]; if (corner !== undefined) placed.set(meeting, corner) })
   meetings.forEach((meeting, index) => {
-    const before = meetings[index - 1]
-    if (isFirst(meeting, index) || before === undefined) return
-    const [set] = setCorners([{ a: placed.get(before)?.at(-1) ?? before.near, b: endsOf(meeting).b, near: meeting.near }], toleranceM2)
-    if (set !== undefined) placed.set(meeting, set)
+    if (placed.has(meeting)) return
+    const [corner] = setCorners([edgeOf(meeting, index)], toleranceM2)
+    if (corner !== undefined) placed.set(meeting, corner)
   })
   return placed
 }

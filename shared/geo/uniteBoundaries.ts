@@ -4,16 +4,13 @@ import { areTooFine } from './edgeMeetings.ts'
 import { offsetFromEdge } from './edgeOffset.ts'
 import type { Boundary } from './geometryTypes.ts'
 import { closeRing, fromGridParts, fromGridPoint, toGridParts, type GridPoint } from './gridPoints.ts'
-import { nearestOf, takeCorners } from './jointCorners.ts'
-import { gridDistanceM, gridScaleAt } from './localPlane.ts'
+import { takeCorners } from './jointCorners.ts'
 import { measurePolygon } from './measurePolygon.ts'
 
 /** Outlines that come this near, metres, are drawn as touching: two units of the coordinates kept. */
 const TOUCH_M = 0.025
-/** A corner that `setCorners` set on an edge lies within a grid unit of it. */
-const ON_EDGE_UNITS = 1.02
-/** Where it set two, they stand this near, metres. */
-const BESIDE_M = 0.15
+/** A corner that a split set on an edge lies within a grid unit of it; beside another that does, within two. */
+const BESIDE_UNITS = 2.05
 /** Dropping corners may change the area by no more than this share. */
 const MOST_CHANGE = 1e-6
 
@@ -83,43 +80,45 @@ function uniteParts(inputs: readonly Parts[]): Parts {
 const keyOf = ([x, y]: GridPoint): string => `${x} ${y}`
 
 /** Corners that belong to more than one outline. */
-function jointsOf(inputs: readonly Parts[]): GridPoint[] {
-  const seen = new Map<string, { corner: GridPoint; count: number }>()
-  for (const parts of inputs) {
-    for (const [key, corner] of new Map(cornersOf(parts).map((each) => [keyOf(each), each]))) {
-      seen.set(key, { corner, count: (seen.get(key)?.count ?? 0) + 1 })
-    }
-  }
-  return [...seen.values()].filter(({ count }) => count > 1).map(({ corner }) => corner)
+function jointsOf(inputs: readonly Parts[]): ReadonlySet<string> {
+  const seen = new Map<string, number>()
+  for (const parts of inputs) for (const key of new Set(cornersOf(parts).map(keyOf))) seen.set(key, (seen.get(key) ?? 0) + 1)
+  return new Set([...seen].filter(([, count]) => count > 1).map(([key]) => key))
 }
+
+/** Corners that a split may have set beside its own on an edge, to either side. */
+const MOST_BESIDE = 2
 
 /**
- * A ring without the corners at joints that lie on the line between the corners around them: within the grid unit that a corner set
- * on an edge may be off, or within two where two stand side by side.
+ * A ring without the corners at joints, and those next to them, that lie within the grid units of the edge from the corner before to
+ * the corner after that a split sets its corners in (see `setCorners`).
  */
-function dropJoints(ring: readonly GridPoint[], joints: readonly GridPoint[]): GridPoint[] {
-  const atJoint = ring.map((corner) => nearestOf(corner, joints, BESIDE_M) !== undefined)
-  const scale = gridScaleAt(ring[0] ?? [0, 0])
-  /** The nearest corner before or after that does not stand beside this one, and how many stand between. */
-  const beyond = (from: number, step: 1 | -1): { corner: GridPoint; beside: number } => {
-    const corner = ring[from] ?? [0, 0]
-    for (let gone = 1; gone < ring.length; gone += 1) {
-      const other = ring[(from + gone * step + ring.length * gone) % ring.length] ?? corner
-      if (gridDistanceM(corner, other, scale) > BESIDE_M) return { corner: other, beside: gone - 1 }
-    }
-    return { corner, beside: 0 }
-  }
-  return ring.filter((corner, index) => {
-    const [before, after] = [beyond(index, -1), beyond(index, 1)]
-    const off = before.beside + after.beside > 0 ? 2 * ON_EDGE_UNITS : ON_EDGE_UNITS
-    return !atJoint[index] || !isOnLine(before.corner, corner, after.corner, off)
+function dropJoints(ring: readonly GridPoint[], joints: ReadonlySet<string>): GridPoint[] {
+  const at = (index: number): GridPoint => ring[(index + ring.length) % ring.length] ?? [0, 0]
+  const dropped = new Set<number>()
+  const spans = [...Array(MOST_BESIDE + 1).keys()].flatMap((before) => [...Array(MOST_BESIDE + 1).keys()].map((after) => [before + 1, after + 1] as const))
+  const longestFirst = spans.sort(([a, b], [c, d]) => c + d - a - b)
+  ring.forEach((corner, index) => {
+    if (!joints.has(keyOf(corner)) || dropped.has(index)) return
+    const span = longestFirst.find(([before, after]) => before + after < ring.length && isStraight(at, index - before, index + after))
+    if (span === undefined) return
+    for (let place = index - span[0] + 1; place < index + span[1]; place += 1) dropped.add((place + ring.length) % ring.length)
   })
+  return ring.filter((_, index) => !dropped.has(index))
 }
 
-function isOnLine(before: GridPoint, corner: GridPoint, after: GridPoint, offUnits: number): boolean {
-  const [dx, dy] = [after[0] - before[0], after[1] - before[1]]
-  const isBetween = (corner[0] - before[0]) * dx + (corner[1] - before[1]) * dy > 0 && (after[0] - corner[0]) * dx + (after[1] - corner[1]) * dy > 0
-  return isBetween && Math.abs(offsetFromEdge(before, after, corner)) <= offUnits
+/** Whether all corners between two of a ring lie on the edge from one to the other, in order, as near as the grid allows. */
+function isStraight(at: (index: number) => GridPoint, from: number, to: number): boolean {
+  const [a, b] = [at(from), at(to)]
+  const [dx, dy] = [b[0] - a[0], b[1] - a[1]]
+  let reached = 0
+  for (let index = from + 1; index < to; index += 1) {
+    const corner = at(index)
+    const along = ((corner[0] - a[0]) * dx + (corner[1] - a[1]) * dy) / (dx * dx + dy * dy || 1)
+    if (along <= reached || along >= 1 || Math.abs(offsetFromEdge(a, b, corner)) > BESIDE_UNITS) return false
+    reached = along
+  }
+  return true
 }
 
 /** Whether the parts of the union hang together through none of the outlines. */

@@ -35,6 +35,18 @@ export const anyBoundary: fc.Arbitrary<AnyBoundary> = fc
   })
   .filter((made) => made !== null)
 
+/** Rectangles whose edges lie along the grid or all but along it: there the grid has fewest points near an edge. */
+export const anyRectangle: fc.Arbitrary<AnyBoundary> = fc
+  .record({
+    lon: fc.integer({ min: -1_700_000_000, max: 1_700_000_000 }), lat: fc.integer({ min: -660_000_000, max: 660_000_000 }),
+    wide: fc.integer({ min: 1_500, max: 60_000 }), high: fc.integer({ min: 1_500, max: 60_000 }), skew: fc.integer({ min: -30, max: 30 }),
+  })
+  .map(({ lon, lat, wide, high, skew }) => {
+    const at = (x: number, y: number): Position => [(lon + x) / 1e7, (lat + y) / 1e7]
+    const ring = [at(0, 0), at(wide, skew), at(wide - skew, high + skew), at(-skew, high), at(0, 0)]
+    return { middle: at(wide / 2, high / 2), reachM: Math.hypot(wide, high) * 0.0056, geometry: { type: 'Polygon', coordinates: [ring] } }
+  })
+
 /** A line across a boundary: through a place near its middle, in any direction, ending outside. */
 export const anyLine = fc.record({
   off: fc.double({ min: -0.35, max: 0.35, noNaN: true }),

@@ -6,7 +6,7 @@ import { measurePolygon } from '../../../shared/geo/measurePolygon.ts'
 import { findOverlaps } from '../../../shared/geo/findOverlaps.ts'
 import { splitBoundary } from '../../../shared/geo/splitBoundary.ts'
 import { uniteBoundaries } from '../../../shared/geo/uniteBoundaries.ts'
-import { anyBoundary, anyLine, lineAcross, RUNS } from './anyBoundary.ts'
+import { anyBoundary, anyLine, anyRectangle, lineAcross, RUNS } from './anyBoundary.ts'
 import { buildMultiPolygon, buildPolygon, buildSquare } from './buildRing.ts'
 
 const square = buildPolygon(buildSquare(10, 45))
@@ -88,28 +88,30 @@ describe('splitBoundary says', () => {
 })
 
 describe('splitBoundary on any outline', () => {
-  it('pieces sum to the whole within 1 ppm, share no ground, and unite to what was split', () => {
-    const refused: string[] = []
-    let unlike = 0
-    fc.assert(fc.property(anyBoundary, anyLine, (made, line) => {
-      const { pieces, findings } = splitBoundary(made.geometry, lineAcross(made, line))
-      refused.push(...findings.map(({ code }) => code))
-      if (findings.length > 0) return
-      expect(pieces.length).toBeGreaterThan(1)
-      expect(ppm(sumM2(pieces), areaM2(made.geometry))).toBeLessThan(1)
-      pieces.forEach((piece, index) => {
-        expect(checkBoundary(piece)).toEqual({ geometry: piece, findings: [] })
-        expect(findOverlaps(piece, pieces.slice(0, index).map((geometry) => ({ id: '', code: '', geometry }))).overlaps).toEqual([])
-      })
-      const united = uniteBoundaries(pieces)
-      expect(united.isApart).toBe(false)
-      expect(ppm(areaM2(united.geometry ?? made.geometry), areaM2(made.geometry))).toBeLessThan(1)
-      if (`${cornersOf(united.geometry)}` !== `${cornersOf(made.geometry)}`) unlike += 1
-    }), RUNS)
-    // A line that meets the outline all but at a corner may leave a piece too small to stand; the rest is split.
-    expect(unlike).toBe(0)
-    expect(refused.length).toBeLessThan(RUNS.numRuns / 50)
-  })
+  it.each([{ name: 'bent', any: anyBoundary }, { name: 'along the grid', any: anyRectangle }])(
+    '$name: pieces sum to the whole within 1 ppm, share no ground, and unite to what was split', ({ any }) => {
+      const refused: string[] = []
+      let unlike = 0
+      fc.assert(fc.property(any, anyLine, (made, line) => {
+        const { pieces, findings } = splitBoundary(made.geometry, lineAcross(made, line))
+        refused.push(...findings.map(({ code }) => code).filter((code) => code !== 'split.misses'))
+        if (findings.length > 0) return
+        expect(pieces.length).toBeGreaterThan(1)
+        expect(ppm(sumM2(pieces), areaM2(made.geometry))).toBeLessThan(1)
+        pieces.forEach((piece, index) => {
+          expect(checkBoundary(piece)).toEqual({ geometry: piece, findings: [] })
+          expect(findOverlaps(piece, pieces.slice(0, index).map((geometry) => ({ id: '', code: '', geometry }))).overlaps).toEqual([])
+        })
+        const united = uniteBoundaries(pieces)
+        expect(united.isApart).toBe(false)
+        expect(ppm(areaM2(united.geometry ?? made.geometry), areaM2(made.geometry))).toBeLessThan(1)
+        if (`${cornersOf(united.geometry)}` !== `${cornersOf(made.geometry)}`) unlike += 1
+      }), RUNS)
+      // Pieces too small to stand, or edges too short to make up on; corners of the outline itself on a line with their neighbours.
+      expect(refused.length).toBeLessThan(RUNS.numRuns / 100)
+      expect(unlike).toBeLessThan(RUNS.numRuns / 100)
+    },
+  )
 })
 
 /** Corners without regard to where a ring starts. */
