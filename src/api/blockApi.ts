@@ -1,4 +1,5 @@
 import { blockSchema, type Block } from '../../shared/contract/block.ts'
+import { boundaryVersionsSchema, type BoundaryVersion } from '../../shared/contract/blockChanges.ts'
 import { allPages } from './allPages.ts'
 import { http } from './http.ts'
 
@@ -6,4 +7,5 @@ import { http } from './http.ts'
 export const blockApi = {
   list: (farmId: string): Promise<Block[]> => allPages(`/farms/${farmId}/blocks`, blockSchema),
   read: (farmId: string, id: string): Promise<Block> => http.get(`/farms/${farmId}/blocks/${id}`, blockSchema),
+  boundaries: async (farmId: string, id: string): Promise<BoundaryVersion[]> => (await http.get(`/farms/${farmId}/blocks/${id}/boundaries`, boundaryVersionsSchema)).items,
 }

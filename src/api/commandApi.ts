@@ -1,7 +1,11 @@
 import { z } from 'zod'
+import { bedSchema } from '../../shared/contract/bed.ts'
 import { blockSchema } from '../../shared/contract/block.ts'
+import { blocksChangedSchema } from '../../shared/contract/blockChanges.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
+import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
+import { plantingSchema } from '../../shared/contract/planting.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
 import { signManyAnswerSchema } from '../../shared/contract/recordChanges.ts'
 import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
@@ -17,6 +21,17 @@ interface Door {
 const DOORS: Record<CommandKind, Door> = {
   'farm.create': { method: 'post', path: () => '/farms', answer: farmSchema },
   'block.create': { method: 'post', path: (farmId) => `/farms/${farmId}/blocks`, answer: blockSchema },
+  'block.update': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/blocks/${id}`, answer: blockSchema },
+  'block.split': { method: 'post', path: (farmId, id) => `/farms/${farmId}/blocks/${id}/split`, answer: blocksChangedSchema },
+  'block.merge': { method: 'post', path: (farmId) => `/farms/${farmId}/blocks/merge`, answer: blocksChangedSchema },
+  'block.reopen': { method: 'post', path: (farmId, id) => `/farms/${farmId}/blocks/${id}/reopen`, answer: blocksChangedSchema },
+  'block.land': { method: 'put', path: (farmId, id) => `/farms/${farmId}/blocks/${id}/land`, answer: blockSchema },
+  'planting.create': { method: 'post', path: (farmId) => `/farms/${farmId}/plantings`, answer: plantingSchema },
+  'planting.update': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/plantings/${id}`, answer: plantingSchema },
+  'bed.create': { method: 'post', path: (farmId) => `/farms/${farmId}/beds`, answer: bedSchema },
+  'bed.update': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/beds/${id}`, answer: bedSchema },
+  'event.create': { method: 'post', path: (farmId) => `/farms/${farmId}/farm-events`, answer: farmEventSchema },
+  'event.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/farm-events/${id}/withdraw`, answer: farmEventSchema },
   'material.create': { method: 'post', path: (farmId) => `/farms/${farmId}/materials`, answer: materialSchema },
   'lot.create': { method: 'post', path: (farmId) => `/farms/${farmId}/lots`, answer: lotSchema },
   'lot.count': { method: 'post', path: (farmId, id) => `/farms/${farmId}/lots/${id}/count`, answer: lotSchema },

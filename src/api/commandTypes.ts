@@ -1,7 +1,12 @@
 import type { z } from 'zod'
+import type { Bed, createBedSchema, updateBedSchema } from '../../shared/contract/bed.ts'
 import type { Block, createBlockSchema } from '../../shared/contract/block.ts'
+import type { BlocksChanged, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema } from '../../shared/contract/blockChanges.ts'
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../../shared/contract/farm.ts'
+import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
+import type { putLandSchema } from '../../shared/contract/land.ts'
+import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import type {
   amendRecordSchema, createRecordSchema, discardRecordSchema, reviewRecordSchema, SignManyAnswer, signManySchema, signRecordSchema, updateRecordSchema, withdrawRecordSchema,
@@ -12,6 +17,17 @@ import type { createSavedFilterSchema, SavedFilter } from '../../shared/contract
 export interface CommandBodies {
   'farm.create': z.input<typeof createFarmSchema>
   'block.create': z.input<typeof createBlockSchema>
+  'block.update': z.input<typeof updateBlockSchema>
+  'block.split': z.input<typeof splitBlockSchema>
+  'block.merge': z.input<typeof mergeBlocksSchema>
+  'block.reopen': z.input<typeof reopenBlockSchema>
+  'block.land': z.input<typeof putLandSchema>
+  'planting.create': z.input<typeof createPlantingSchema>
+  'planting.update': z.input<typeof updatePlantingSchema>
+  'bed.create': z.input<typeof createBedSchema>
+  'bed.update': z.input<typeof updateBedSchema>
+  'event.create': z.input<typeof createFarmEventSchema>
+  'event.withdraw': z.input<typeof withdrawFarmEventSchema>
   'material.create': z.input<typeof createMaterialSchema>
   'lot.create': z.input<typeof createLotSchema>
   'lot.count': z.input<typeof countLotSchema>
@@ -32,6 +48,17 @@ export interface CommandBodies {
 export interface CommandAnswers {
   'farm.create': Farm
   'block.create': Block
+  'block.update': Block
+  'block.split': BlocksChanged
+  'block.merge': BlocksChanged
+  'block.reopen': BlocksChanged
+  'block.land': Block
+  'planting.create': Planting
+  'planting.update': Planting
+  'bed.create': Bed
+  'bed.update': Bed
+  'event.create': FarmEvent
+  'event.withdraw': FarmEvent
   'material.create': Material
   'lot.create': Lot
   'lot.count': Lot
