@@ -1,6 +1,15 @@
 import { join } from 'node:path'
 import { z } from 'zod'
+import { lineText } from '../shared/contract/text.ts'
 import type { Bucket } from './adapters/files/bucketFiles.ts'
+import type { TileService } from './adapters/tiles/proxyTiles.ts'
+
+/** A fixed host, and each of the three numbers behind it. */
+function isTileTemplate(text: string): boolean {
+  const host = /^https?:\/\/[^/?#{}@]+\/(.+)$/.exec(text)
+  const names = [...(host?.[1] ?? '').matchAll(/\{([^}]*)\}/g)].map(([, name]) => name)
+  return URL.canParse(text) && ['z', 'x', 'y'].every((name) => names.includes(name)) && names.every((name) => ['z', 'x', 'y'].includes(name ?? ''))
+}
 
 const environment = z.object({
   PORT: z.coerce.number().int().min(0).max(65535).default(4310),
@@ -23,7 +32,13 @@ const environment = z.object({
   S3_REGION: z.string().min(1).default('us-east-1'),
   S3_KEY_ID: z.string().min(1).optional(),
   S3_SECRET: z.string().min(1).optional(),
+  TILE_URL: z.string().refine(isTileTemplate, 'must be the address of a tile, https://… with {z}, {x} and {y} after the host').optional(),
+  TILE_ATTRIBUTION: lineText(200).optional(),
+  TILE_MAX_ZOOM: z.coerce.number().int().min(1).max(22).default(19),
 }).superRefine((values, context) => {
+  if (values.TILE_URL !== undefined && values.TILE_ATTRIBUTION === undefined) {
+    context.addIssue({ code: 'custom', path: ['TILE_ATTRIBUTION'], message: 'must be given with TILE_URL: whose pictures they are' })
+  }
   if (values.S3_BUCKET === undefined) return
   for (const name of ['S3_KEY_ID', 'S3_SECRET'] as const) {
     if (values[name] === undefined) context.addIssue({ code: 'custom', path: [name], message: 'must be given with S3_BUCKET' })
@@ -45,6 +60,8 @@ export interface Config {
   demo: { password: string } | null
   fixedClock: string | null
   files: FilesConfig
+  /** Null where no tile service is named: nothing is then asked from outside. */
+  tiles: TileService | null
 }
 
 /** How cookies are named and kept. */
@@ -106,6 +123,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     demo: values.SEED_DEMO === '1' && values.DEMO_PASSWORD ? { password: values.DEMO_PASSWORD } : null,
     fixedClock: values.FIXED_CLOCK ?? null,
     files: readFiles(values),
+    tiles: readTiles(values),
   }
 }
 
@@ -117,4 +135,8 @@ function readFiles(values: z.output<typeof environment>): FilesConfig {
     bucket: isWhole ? { name, keyId, secret, endpoint: values.S3_ENDPOINT ?? null, region: values.S3_REGION } : null,
     quotaBytes: values.FILES_QUOTA_MB * BYTES_PER_MB,
   }
+}
+
+function readTiles({ TILE_URL: template, TILE_ATTRIBUTION: attribution, TILE_MAX_ZOOM: maxZoom }: z.output<typeof environment>): TileService | null {
+  return template === undefined || attribution === undefined ? null : { template, attribution, maxZoom }
 }

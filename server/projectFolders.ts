@@ -13,7 +13,7 @@ function findProject(): string {
 }
 
 const PROJECT = findProject()
-/** The demo farm's drawings, read at seeding and by the ground-plan tiles. */
+/** The demo farm's drawings, read at seeding. */
 export const DEMO_FOLDER = join(PROJECT, 'server', 'demo')
 /** The built client. */
 export const CLIENT_FOLDER = join(PROJECT, 'dist', 'client')

@@ -1,15 +1,12 @@
-import { readFile } from 'node:fs/promises'
-import { join } from 'node:path'
 import { createFolderFiles } from './adapters/files/folderFiles.ts'
 import type { FileStore } from './adapters/files/fileStore.ts'
-import { createGroundTiles } from './adapters/tiles/groundTiles.ts'
+import { createProxyTiles } from './adapters/tiles/proxyTiles.ts'
 import { fixedClock, systemClock } from './clock.ts'
 import type { Config, FilesConfig } from './config.ts'
 import { clearHalfSeeded } from './database/clearHalfSeeded.ts'
 import { openDatabase } from './database/database.ts'
 import { prepareDatabase } from './database/prepareDatabase.ts'
 import { createLogger } from './logger.ts'
-import { DEMO_FOLDER } from './projectFolders.ts'
 import { createReportProcess } from './reports/reportProcess.ts'
 import type { Services } from './services/services.ts'
 
@@ -25,7 +22,7 @@ export async function startServices(config: Config): Promise<Services> {
     database: await openDatabase(config.databaseUrl, config.databasePool, (error) => logger.warn({ err: error }, 'idle database connection broke')),
     reports: createReportProcess(),
     files: await openFiles(config.files),
-    tiles: config.demo === null ? null : createGroundTiles(JSON.parse(await readFile(join(DEMO_FOLDER, 'demoGround.geojson'), 'utf8'))),
+    tiles: config.tiles === null ? null : createProxyTiles(config.tiles),
     checkAnswers: false,
   }
 }

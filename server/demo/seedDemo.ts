@@ -15,6 +15,7 @@ import type { Services } from '../services/services.ts'
 import { buildBlock } from './buildThings.ts'
 import { DEMO_ZONE } from './demoZone.ts'
 import { makeAccount, makeGrant, makePerson } from './makeAccount.ts'
+import { seedGround } from './seedGround.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
 import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
@@ -51,6 +52,7 @@ export async function seedDemo(services: Services, password: string): Promise<De
   const ruanId = await makePeople(services, farm.id, ids, beginning.now())
   const manager = await actorOf(services, ids.manager, farm.id)
   const blocks = await seedBlocks(past, manager)
+  await seedGround(past, manager)
   const sprayers = await seedSprayers(past, manager)
   const lots = await seedInputs(services, manager)
   await seedRecords(services, { manager, applicator: await actorOf(services, ids.applicator, farm.id), ruanId, blocks, sprayers, lots })

@@ -8,6 +8,7 @@ import { createRecord } from '../services/records/createRecord.ts'
 import { sealRecord } from '../services/records/sealRecord.ts'
 import type { Services } from '../services/services.ts'
 import { DEMO_ZONE } from './demoZone.ts'
+import { seedNeighbourGround } from './seedGround.ts'
 import { seedNeighbourPaper } from './seedFiles.ts'
 import { buildBlock, buildLot, buildMaterial, buildRecord, squareAt } from './buildThings.ts'
 
@@ -17,6 +18,7 @@ export async function seedNeighbour(services: Services, accountId: string): Prom
   const actor = (await services.database.listAccess(accountId, services.clock.now())).find(({ farmId }) => farmId === farm.id)
   if (!actor) throw new Error('The neighbour has no way into the neighbour farm')
   const { block } = await createBlock(services, actor, buildBlock({ code: 'K1', name: 'Kiln Field', geometry: squareAt(8) }))
+  await seedNeighbourGround(services, actor)
   const { material } = await createMaterial(services, actor, buildMaterial({ name: 'Whey' , kind: 'other' }))
   const endedAt = services.clock.now()
   const startedAt = new Date(endedAt.getTime() - 3_600_000)

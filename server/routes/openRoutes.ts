@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { configSchema } from '../../shared/contract/config.ts'
 import { checkCodeAnswerSchema } from '../../shared/contract/record.ts'
 import { passwordSchema } from '../../shared/contract/session.ts'
 import { lineText } from '../../shared/contract/text.ts'
@@ -20,8 +21,8 @@ export const openRoutes = [
   }),
   defineRoute({
     method: 'get', path: '/config', summary: 'What this server offers to its pages.', roles: 'everybody',
-    answer: z.object({ tiles: z.boolean(), demo: z.boolean() }),
-    run: async ({ services }) => ({ body: { tiles: services.tiles !== null, demo: services.config.demo !== null } }),
+    answer: configSchema,
+    run: async ({ services }) => ({ body: { imagery: services.tiles && { attribution: services.tiles.attribution, maxZoom: services.tiles.maxZoom }, demo: services.config.demo !== null } }),
   }),
   defineRoute({
     method: 'get', path: '/check/:code', summary: 'Whether a signed entry stands under a check code.', roles: 'everybody',
@@ -44,10 +45,10 @@ export const openRoutes = [
     },
   }),
   defineRoute({
-    method: 'get', path: '/tiles/:z/:x/:y', summary: 'A square of the ground plan.', roles: 'account',
-    params: tileParams, answer: z.null(), contentType: 'image/svg+xml',
+    method: 'get', path: '/tiles/:z/:x/:y', summary: 'A square of the imagery that this server is set up with.', roles: 'account',
+    params: tileParams, answer: z.null(), contentType: 'image/*',
     run: async ({ services, params, response }) => {
-      if (!services.tiles || Math.max(params.x, params.y) >= 2 ** params.z) throw notFound()
+      if (!services.tiles) throw notFound()
       const tile = await services.tiles.read(params.z, params.x, params.y)
       response.type(tile.contentType).set('Cache-Control', `private, max-age=${DAY_S}`).send(tile.bytes)
       return 'sent'

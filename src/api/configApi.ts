@@ -1,8 +1,5 @@
-import { z } from 'zod'
+import { configSchema, type ClientConfig } from '../../shared/contract/config.ts'
 import { http } from './http.ts'
-
-const configSchema = z.object({ tiles: z.boolean(), demo: z.boolean() })
-export type ClientConfig = z.infer<typeof configSchema>
 
 /** What this server offers. */
 export const configApi = {

@@ -25,6 +25,14 @@ export interface MapDraft {
   cross: Position | null
 }
 
+/** Pictures of the ground by a tile service. */
+export interface MapImagery {
+  /** Address of a square with {z}, {x} and {y} in it. */
+  url: string
+  /** Closer than this its squares are drawn larger. */
+  maxZoom: number
+}
+
 /** Where the map looks. */
 export interface MapView {
   centre: Position

@@ -9,7 +9,6 @@ import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { blockWords, hectaresText, type BlockWords } from './blockWords.ts'
 import { useBlocks } from './useBlocks.ts'
-import { useConfig } from './useConfig.ts'
 import { useFarm } from './useFarm.ts'
 
 /** What all pages of Blocks share: the blocks in words, the ground, and where the map looked last. */
@@ -25,7 +24,6 @@ export interface BlocksPlace {
   count: ComputedRef<string>
   /** "23.82". */
   area: ComputedRef<string>
-  tilesUrl: ComputedRef<string | null>
   startAt: ComputedRef<MapView | null>
   remember: (view: MapView) => void
   chosenId: Ref<string | null>
@@ -42,7 +40,6 @@ export function useBlocksPlace(): BlocksPlace {
   const language = computed(() => preferences.language)
   const query = useBlocks(farmId)
   const farm = useFarm(farmId)
-  const config = useConfig()
   const all = computed<readonly Block[]>(() => query.data.value ?? [])
   const area = computed(() => hectaresText(language.value, totalAreaM2(all.value)))
 
@@ -60,7 +57,6 @@ export function useBlocksPlace(): BlocksPlace {
     canRecord: computed(() => session.canRecord),
     blocks: computed(() => all.value.map((block) => blockWords(language.value, block))),
     count: computed(() => countWords(language.value, all.value.length, area.value)),
-    tilesUrl: computed(() => (config.data.value?.tiles === true ? '/api/tiles/{z}/{x}/{y}' : null)),
     startAt: computed(startView),
     remember: (view) => { lastViews.set(farmId.value, view) },
     chosenId: ref<string | null>(null),

@@ -9,7 +9,6 @@ import { usePreferences } from '../stores/preferences.ts'
 import { emptyBlockDraft, type BlockDraftContent, type OutlineBy } from './blockDraftContent.ts'
 import { blockWords, type BlockWords } from './blockWords.ts'
 import { crossingEdges, outlineWords } from './outlineWords.ts'
-import { useConfig } from './useConfig.ts'
 import { useFigures } from './useFigures.ts'
 import { useOutline, type Outline } from './useOutline.ts'
 import { useTypedPoints, type TypedPoints } from './useTypedPoints.ts'
@@ -27,7 +26,6 @@ interface PartDrawing {
   isOpen: ComputedRef<boolean>
   crossing: ComputedRef<readonly number[]>
   language: ComputedRef<Language>
-  tilesUrl: ComputedRef<string | null>
   setBy: (by: OutlineBy) => void
   setTyped: (text: string) => void
   swap: () => void
@@ -46,7 +44,6 @@ export function usePartDrawing(block: Block, drawn: Boundary | null): PartDrawin
   const { t } = useI18n()
   const { hectares } = useFigures()
   const preferences = usePreferences()
-  const config = useConfig()
   const language = computed(() => preferences.language)
   const points = cornersOf(drawn)
   const content = ref<BlockDraftContent>({ ...emptyBlockDraft('draw'), points, closed: points.length > 2 })
@@ -69,7 +66,6 @@ export function usePartDrawing(block: Block, drawn: Boundary | null): PartDrawin
     summary: computed(() => (outline.measure.value === null ? '' : t('recordForm.part.measures', { hectares: hectares(outline.measure.value.areaM2), of: hectares(block.areaM2), code: block.code }))),
     isOpen: computed(() => content.value.by === 'draw' && !content.value.closed),
     crossing: computed(() => crossingEdges(outline.findings.value)),
-    tilesUrl: computed(() => (config.data.value?.tiles === true ? '/api/tiles/{z}/{x}/{y}' : null)),
     setBy: (by) => { content.value = { ...content.value, by, typed: by === 'points' ? formatPoints(content.value.points) : content.value.typed } },
     setTyped: (text) => { content.value = { ...content.value, typed: text } },
     swap: () => { if (typed.swapped.value !== null) content.value = { ...content.value, typed: typed.swapped.value } },

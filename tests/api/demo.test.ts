@@ -20,6 +20,8 @@ describe.each(HOURS)('the demo farm made at %s', (instant) => {
     const count = (table: string): Promise<{ count: string }[]> =>
       house.services.database.inFarm({ farmId: made.farmId, seasons: null }, (manager) => manager.query(`SELECT count(*) FROM ${table}`))
     expect(await count('blocks')).toEqual([{ count: '24' }])
+    expect(await count("sites WHERE keep_clear_m > 0")).toEqual([{ count: '5' }])
+    expect(await count('ground_features')).toEqual([{ count: '12' }])
     const [records] = await count("application_records WHERE state = 'signed'")
     expect(Number(records?.count)).toBeGreaterThan(60)
     const [begun] = await count("application_records WHERE state = 'started'")

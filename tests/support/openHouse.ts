@@ -8,7 +8,6 @@ import pino, { type Logger } from 'pino'
 import supertest from 'supertest'
 import { v7 as uuidV7 } from 'uuid'
 import { createFolderFiles } from '../../server/adapters/files/folderFiles.ts'
-import { createGroundTiles } from '../../server/adapters/tiles/groundTiles.ts'
 import { createApp } from '../../server/app.ts'
 import { cookiesOf, type Config } from '../../server/config.ts'
 import type { FarmActor } from '../../server/database/actor.ts'
@@ -58,7 +57,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
   const config: Config = {
     port: 4310, host: '127.0.0.1', databasePool: 5, logFile: null, demo: null, fixedClock: null, publicUrl: null,
     databaseUrl: databaseUrl(cluster, 'app', name), databaseOwnerUrl: databaseUrl(cluster, 'owner', name),
-    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, tiles: null, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
     cookies: cookiesOf(changes.config?.publicUrl ?? null),
   }
   const services: Services = {
@@ -68,7 +67,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
     database: await openDatabase(config.databaseUrl, config.databasePool, () => undefined),
     reports: createReportProcess(),
     files: createFolderFiles(config.files.folder),
-    tiles: createGroundTiles({ type: 'FeatureCollection', features: [] }),
+    tiles: null,
     checkAnswers: true,
   }
   const { app, close } = createApp(services, null)

@@ -1,7 +1,7 @@
+import { findLineLabel } from '../../../shared/geo/findLineLabel.ts'
 import type { PlanSite } from '../recordReportData.ts'
 import type { Canvas, TextStyle } from './canvas.ts'
 import { findLabelPlace, type Stretch } from './labelPlace.ts'
-import { findLineLabel } from './lineLabel.ts'
 import { toPageLines, toPageRings } from './planShapes.ts'
 import type { BlockPlan, Drawing, PlanBlock } from './planTypes.ts'
 import { drawText, measureText } from './setText.ts'

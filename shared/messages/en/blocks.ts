@@ -30,6 +30,7 @@ export const blocks = {
     draft: 'being drawn',
     closing: 'edge to come',
     crossing: 'edges that cross',
+    keepClear: 'keep clear',
   },
   list: {
     caption: 'Blocks of the farm, with their areas as drawn',

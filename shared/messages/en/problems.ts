@@ -21,6 +21,7 @@ export const problems = {
   multipart: 'Send multipart/form-data: the file as `file`, with its fields.',
   too_many_parts: 'There are too many parts in this upload. Send one file at a time.',
   file_store: 'Photos and papers cannot be kept or fetched just now. Try again later; nothing else was lost.',
+  tiles: 'The imagery cannot be fetched just now. The ground plan is still there.',
   quota: 'This farm’s room for photos and papers, {megabytes} MB, is used up. The record itself is kept.',
   unknown_field: 'This field is not known here. Leave it out.',
   more: 'And {count} more.',

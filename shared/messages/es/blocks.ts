@@ -30,6 +30,7 @@ export const blocks = {
     draft: 'en dibujo',
     closing: 'lado por venir',
     crossing: 'lados que se cruzan',
+    keepClear: 'no acercarse',
   },
   list: {
     caption: 'Parcelas de la finca, con su superficie según el dibujo',

@@ -21,6 +21,7 @@ export const problems = {
   multipart: 'Envíe multipart/form-data: el archivo como `file`, con sus campos.',
   too_many_parts: 'Este envío tiene demasiadas partes. Envíe un archivo cada vez.',
   file_store: 'Ahora mismo no se pueden guardar ni traer fotos y papeles. Inténtelo más tarde; no se perdió nada más.',
+  tiles: 'Las imágenes no se pueden traer ahora mismo. El plano del terreno sigue ahí.',
   quota: 'El espacio de esta finca para fotos y papeles, {megabytes} MB, está lleno. El registro mismo queda guardado.',
   unknown_field: 'Este campo no se conoce aquí. Quítelo.',
   more: 'Y {count} más.',

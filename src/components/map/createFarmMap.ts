@@ -2,9 +2,11 @@ import { latLngBounds, map as leafletMap, svg, tileLayer, type Map as LeafletMap
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
 import { createBlockLayer } from './blockLayer.ts'
 import { createDraftLayer } from './draftLayer.ts'
+import { createGroundView } from './groundView.ts'
 import { createLabelLayer } from './labelLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'
-import type { MapBlock, MapDraft, MapView, Pixel } from '../../composables/mapTypes.ts'
+import type { MapGround } from '../../composables/mapGround.ts'
+import type { MapBlock, MapDraft, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
 
 /** What the map tells its component. */
 export interface FarmMapEvents {
@@ -20,8 +22,10 @@ export interface FarmMap {
   showBlocks(blocks: readonly MapBlock[], chosenId: string | null): void
   showDraft(draft: MapDraft | null): void
   setDrawing(isDrawing: boolean): void
-  /** Ground tiles under everything, or bare paper where there are none. */
-  setTiles(url: string | null): void
+  /** What lies under and round the blocks. */
+  showGround(ground: MapGround): void
+  /** Imagery under everything, or paper with the farm's own ground where there is none. */
+  setImagery(imagery: MapImagery | null): void
   setView(view: MapView): void
   /** Shows all of these positions with a margin in pixels, another one below. */
   fit(positions: readonly Position[], marginPx: number, bottomPx: number): void
@@ -45,6 +49,7 @@ const EDGE_PX: [number, number] = [56, 56]
 export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap {
   let ownMove = false
   const map = makeMap(host)
+  const ground = createGroundView(map, () => metresPerPixel(map))
   const renderer = svg({ padding: 0.5 })
   const blocks = createBlockLayer(map, renderer, events.chosen)
   const draft = createDraftLayer(map)
@@ -71,15 +76,17 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
       shown = { blocks: list, chosenId }
       blocks.show(list, chosenId)
       labels.show(list, chosenId)
+      ground.setBlocks(list)
     },
     showDraft: draft.show,
     setDrawing(isDrawing) {
       if (isDrawing) map.doubleClickZoom.disable()
       else map.doubleClickZoom.enable()
     },
-    setTiles(url) {
+    showGround: ground.show,
+    setImagery(imagery) {
       tiles?.remove()
-      tiles = url === null ? null : tileLayer(url, { maxZoom: MOST_ZOOM, className: 'map-ground' }).addTo(map)
+      tiles = imagery === null ? null : tileLayer(imagery.url, { maxZoom: MOST_ZOOM, maxNativeZoom: imagery.maxZoom }).addTo(map)
     },
     setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),
     fit: (positions, marginPx, bottomPx) => move(() => fitTo(map, positions, [marginPx, marginPx], [marginPx, bottomPx])),

@@ -1,5 +1,6 @@
-import type { PagePoint } from './labelPlace.ts'
-import type { PlanBox } from './planScale.ts'
+/** A point of a page or a map, x right and y down, in points or pixels. */
+type FlatPoint = readonly [number, number]
+interface FlatBox { x: number; y: number; width: number; height: number }
 
 /** Middle of a label that runs along a line, and how far it is turned, degrees clockwise, never upside down. */
 export interface LineLabel { x: number; y: number; turn: number }
@@ -10,10 +11,10 @@ const SHARE = 0.8
 
 /**
  * Where the name of a line stands on its longest stretch inside the frame.
- * @param width of the name, points.
+ * @param width of the name, in the same unit as the points.
  * @returns null if no stretch in the frame is long enough for it.
  */
-export function findLineLabel(lines: readonly PagePoint[][], frame: PlanBox, width: number): LineLabel | null {
+export function findLineLabel(lines: readonly FlatPoint[][], frame: FlatBox, width: number): LineLabel | null {
   const stretch = longestStretch(lines, frame)
   const needed = Math.ceil(width / STEP)
   if (stretch.length < needed * 1.3) return null
@@ -25,10 +26,10 @@ export function findLineLabel(lines: readonly PagePoint[][], frame: PlanBox, wid
   return { x: (from[0] + to[0]) / 2, y: (from[1] + to[1]) / 2, turn: turn > 90 ? turn - 180 : turn <= -90 ? turn + 180 : turn }
 }
 
-function longestStretch(lines: readonly PagePoint[][], frame: PlanBox): PagePoint[] {
-  let best: PagePoint[] = []
+function longestStretch(lines: readonly FlatPoint[][], frame: FlatBox): FlatPoint[] {
+  let best: FlatPoint[] = []
   for (const line of lines) {
-    let current: PagePoint[] = []
+    let current: FlatPoint[] = []
     for (const point of walk(line, frame)) {
       if (point === null) current = []
       else current.push(point)
@@ -39,7 +40,7 @@ function longestStretch(lines: readonly PagePoint[][], frame: PlanBox): PagePoin
 }
 
 /** Points every few points along a line; null where it leaves the frame. */
-function* walk(line: readonly PagePoint[], frame: PlanBox): Generator<PagePoint | null> {
+function* walk(line: readonly FlatPoint[], frame: FlatBox): Generator<FlatPoint | null> {
   for (let index = 0; index + 1 < line.length; index += 1) {
     const [x, y] = line[index] ?? [0, 0]
     const [toX, toY] = line[index + 1] ?? [x, y]
@@ -49,13 +50,13 @@ function* walk(line: readonly PagePoint[], frame: PlanBox): Generator<PagePoint 
     }
     const steps = Math.max(1, Math.min(20_000, Math.ceil(Math.hypot(toX - x, toY - y) / STEP)))
     for (let step = 0; step < steps; step += 1) {
-      const point: PagePoint = [x + ((toX - x) * step) / steps, y + ((toY - y) * step) / steps]
+      const point: FlatPoint = [x + ((toX - x) * step) / steps, y + ((toY - y) * step) / steps]
       yield touches(frame, point, point) ? point : null
     }
   }
 }
 
-function touches(frame: PlanBox, [left, top]: PagePoint, [right, bottom]: PagePoint): boolean {
+function touches(frame: FlatBox, [left, top]: FlatPoint, [right, bottom]: FlatPoint): boolean {
   const inset = 5
   return right >= frame.x + inset && left <= frame.x + frame.width - inset
     && bottom >= frame.y + inset && top <= frame.y + frame.height - inset
