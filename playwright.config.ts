@@ -6,13 +6,15 @@ export default defineConfig({
   outputDir: 'test-results/e2e',
   forbidOnly: true,
   fullyParallel: false,
-  // One after the other: the newest row of the register is then the test's own, and a busy machine stays in time.
-  workers: 1,
+  // Two at a time, a file each: no test may lean on what another makes or leaves.
+  workers: 2,
   timeout: 120_000,
   expect: { timeout: 20_000 },
   use: {
     baseURL: process.env['E2E_URL'] ?? 'http://127.0.0.1:4310',
     actionTimeout: 30_000,
+    // Nothing moves by itself: a colour measured half-way between two lights is neither.
+    contextOptions: { reducedMotion: 'reduce' },
     locale: 'en-US',
     timezoneId: 'America/Los_Angeles',
     screenshot: 'only-on-failure',

@@ -22,7 +22,7 @@ export default defineConfig({
           name: 'client',
           environment: 'jsdom',
           include: ['tests/unit/client/**/*.test.ts'],
-          setupFiles: ['tests/unit/client/readLanguages.ts'],
+          setupFiles: ['tests/unit/client/setup.ts'],
           // its modules import their own .css, which Node.js cannot
           server: { deps: { inline: ['element-plus'] } },
           testTimeout: 30_000,

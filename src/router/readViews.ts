@@ -1,4 +1,5 @@
 import type { Router } from 'vue-router'
+import { LATER_COMPONENTS } from '../components/laterPart.ts'
 import { LATER_PARTS } from '../views/frame/laterParts.ts'
 import { routes } from './routes.ts'
 
@@ -18,5 +19,5 @@ export function readViewsWhenIdle(router: Router): void {
 function readViews(): void {
   const views = routes.flatMap(({ component }) => (typeof component === 'function' ? [component as () => Promise<unknown>] : []))
   // What does not come now comes when it is opened.
-  for (const read of [...views, ...Object.values(LATER_PARTS)]) void read().catch(() => undefined)
+  for (const read of [...views, ...Object.values(LATER_COMPONENTS), ...Object.values(LATER_PARTS)]) void read().catch(() => undefined)
 }

@@ -1,5 +1,4 @@
 import { readFileSync } from 'node:fs'
-import type { Locator, Page } from '@playwright/test'
 import { recordSheet } from '../../shared/mix/recordSheet.ts'
 import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
@@ -11,6 +10,7 @@ import { RecordForm } from './support/recordForm.ts'
 import { expect, test } from './support/test.ts'
 import { listBlocks, listLots, makeThings } from './support/things.ts'
 import { unique } from './support/unique.ts'
+import { registerRow } from './support/registerRow.ts'
 import { say, saying } from './support/words.ts'
 
 const drawing = JSON.parse(readFileSync('server/demo/demoBlocks.geojson', 'utf8')) as { features: { properties: { code: string } }[] }
@@ -161,8 +161,7 @@ test('records a drench: sheet, reload, start, end, signature, lots, PDF, registe
   for (const words of [number, block.code, first.material.name, first.lot.code, second.lot.code, sprayer.code, litres(sheet.totalL), '10']) expect(text).toContain(words)
 
   await form.main.getByRole('button', { name: say('records.signed.register') }).click()
-  await expect(firstRow(page, isPhone)).toContainText(number.slice(-4))
-  await expect(firstRow(page, isPhone)).toContainText(block.code)
+  await expect(registerRow(page, isPhone, number.slice(-4))).toContainText(block.code)
 
   const drawn = sheet.components.map(({ amount }) => 100 - Number(amount?.value))
   const left = await Promise.all([first, second].map(async ({ material }) => Number((await listLots(manager, material.id))[0]?.left.value)))
@@ -170,12 +169,6 @@ test('records a drench: sheet, reload, start, end, signature, lots, PDF, registe
   await page.goto('/inputs')
   await expect(page.getByRole('row').filter({ hasText: first.lot.code })).toContainText('90 L')
 })
-
-/** The newest signed line of the register. */
-function firstRow(page: Page, isPhone: boolean): Locator {
-  const rows = isPhone ? page.getByRole('list', { name: say('register.caption') }).getByRole('listitem') : page.getByRole('table', { name: say('register.caption') }).getByRole('row')
-  return rows.filter({ hasNotText: say('register.draft') }).filter({ hasNotText: say('register.started') }).filter({ hasNotText: say('register.column.preparation') }).first()
-}
 
 /** Every figure of the mix stands on the page as the sheet has it. */
 async function expectSheet(form: RecordForm, isPhone: boolean, sheet: RecordSheet, names: string[]): Promise<void> {

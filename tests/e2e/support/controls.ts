@@ -8,6 +8,11 @@ const pageOf = (place: Place): Page => ('page' in place ? place.page() : place)
 /** Chooses one of a list by its words; types them where the list can be searched. */
 export async function choose(place: Place, label: string, option: string): Promise<void> {
   const box = place.getByRole('combobox', { name: label, exact: true })
+  if (await box.evaluate((element) => element.tagName === 'SELECT')) {
+    const words = await box.getByRole('option', { includeHidden: true }).filter({ hasText: option }).first().textContent()
+    await box.selectOption({ label: words?.trim() ?? '' })
+    return
+  }
   // The words of the choice lie over the box itself.
   await box.click({ force: true })
   if (await box.isEditable()) await box.fill(option)

@@ -61,15 +61,20 @@ export async function makeThings(manager: FarmApi): Promise<Things> {
   return { block: await makeBlock(manager), first: await input(), second: await input(), sprayer: await makeSprayer(manager) }
 }
 
-/** A drench that ended a minute ago, signed over the API. */
-export async function makeSignedRecord(api: FarmApi, { block, first, sprayer }: Things): Promise<ApplicationRecord> {
+/** A drench that ended a minute ago and waits for its signature. */
+export async function makeEndedRecord(api: FarmApi, { block, first, sprayer }: Things): Promise<ApplicationRecord> {
   const at = (minutesAgo: number): string => new Date(Date.now() - minutesAgo * 60_000).toISOString()
-  const record = await api.post('/records', {
+  return api.post('/records', {
     id: randomUUID(), method: 'drench', lines: [{ blockId: block.id, startedAt: at(31), endedAt: at(1) }],
     components: [{ materialId: first.material.id, lotId: first.lot.id, basis: { kind: 'ratio', parts: '20' } }],
     water: { sizedFrom: 'water', value: '200', unit: 'L' }, sprayerId: sprayer.id,
   }, recordSchema)
-  return api.post(`/records/${record.id}/sign`, { password: PASSWORD }, recordSchema)
+}
+
+/** The same, signed over the API. */
+export async function makeSignedRecord(api: FarmApi, things: Things): Promise<ApplicationRecord> {
+  const { id } = await makeEndedRecord(api, things)
+  return api.post(`/records/${id}/sign`, { password: PASSWORD }, recordSchema)
 }
 
 /** Every block of the farm. */

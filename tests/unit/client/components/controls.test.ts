@@ -1,10 +1,11 @@
-import { afterEach, describe, expect, it } from 'vitest'
+import { afterEach, describe, expect, it, vi } from 'vitest'
 import { nextTick } from 'vue'
 import AppButton from '../../../../src/components/app/AppButton.vue'
 import AppMeasure from '../../../../src/components/app/AppMeasure.vue'
 import AppSegment from '../../../../src/components/app/AppSegment.vue'
 import AppSelect from '../../../../src/components/app/AppSelect.vue'
 import AppText from '../../../../src/components/app/AppText.vue'
+import SelectList from '../../../../src/components/app/SelectList.vue'
 import AppTime from '../../../../src/components/app/AppTime.vue'
 import { mountWithWords } from '../mountWithWords.ts'
 
@@ -94,7 +95,7 @@ describe('AppSelect', () => {
     const heard: string[] = []
     const hear = (event: KeyboardEvent): void => { heard.push(event.key) }
     document.addEventListener('keydown', hear)
-    const select = mountWithWords(AppSelect, { modelValue: null, label: 'Kind', options: [{ value: 'soap', label: 'Soap' }] })
+    const select = mountWithWords(SelectList, { modelValue: null, id: 'kind', label: 'Kind', placeholder: 'choose', options: [{ value: 'soap', label: 'Soap' }] })
     const box = select.get('[role="combobox"]')
     await box.trigger('keydown', { key: 'Escape', code: 'Escape' })
     expect(heard).toEqual(['Escape'])
@@ -104,6 +105,19 @@ describe('AppSelect', () => {
     expect(heard).toEqual(['Escape'])
     expect(box.attributes('aria-expanded')).toBe('false')
     document.removeEventListener('keydown', hear)
+  })
+
+  it('is the list of the device itself under a finger, by its label, and says none as null', async () => {
+    vi.stubGlobal('matchMedia', () => ({ matches: true, addEventListener: () => undefined, removeEventListener: () => undefined }))
+    const select = mountWithWords(AppSelect, { modelValue: null, label: 'Kind', clearable: true, error: 'Choose one', options: [{ value: 'soap', label: 'Soap', note: '2 L left' }] })
+    const box = select.get('select')
+    expect(select.get('label').attributes('for')).toBe(box.attributes('id'))
+    expect(box.attributes()).toMatchObject({ 'aria-invalid': 'true', 'aria-describedby': `${box.attributes('id') ?? ''}-note` })
+    expect(box.findAll('option').map((option) => option.text())).toEqual(['Choose', 'Soap – 2 L left'])
+    await box.setValue('soap')
+    await box.setValue('')
+    expect(select.emitted('update:modelValue')).toEqual([['soap'], [null]])
+    vi.unstubAllGlobals()
   })
 })
 

@@ -1,4 +1,4 @@
-import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import { afterEach, describe, expect, it } from 'vitest'
 import RecordFiles from '../../../../src/components/files/RecordFiles.vue'
 import type { FileLine } from '../../../../src/composables/fileLine.ts'
 import { mountWithWords } from '../mountWithWords.ts'
@@ -9,8 +9,7 @@ const line = (overrides: Partial<FileLine> = {}): FileLine => ({
 })
 const props = (overrides: Record<string, unknown> = {}) => ({ lines: [], faults: [], said: '', listFault: '', canAdd: true, ...overrides })
 
-beforeEach(() => { vi.stubGlobal('matchMedia', () => ({ matches: false, addEventListener: () => undefined, removeEventListener: () => undefined })) })
-afterEach(() => { document.body.innerHTML = ''; vi.unstubAllGlobals() })
+afterEach(() => { document.body.innerHTML = '' })
 
 describe('RecordFiles', () => {
   it('gives chosen files with their kind, and takes the same file twice', async () => {

@@ -1,5 +1,5 @@
 import { createPinia, setActivePinia } from 'pinia'
-import { beforeEach, describe, expect, it, vi } from 'vitest'
+import { beforeEach, describe, expect, it } from 'vitest'
 import { effectScope, nextTick, ref } from 'vue'
 import LineAmount from '../../../../src/components/record/LineAmount.vue'
 import LineTimes from '../../../../src/components/record/LineTimes.vue'
@@ -10,7 +10,6 @@ import { buildDraft, buildLine } from './buildRecord.ts'
 
 setActivePinia(createPinia())
 // The desk: no query of a narrower window matches.
-vi.stubGlobal('matchMedia', () => ({ matches: false, addEventListener: () => undefined, removeEventListener: () => undefined }))
 const zone = 'America/Los_Angeles'
 
 describe('the times of a line', () => {

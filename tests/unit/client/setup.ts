@@ -1,0 +1,7 @@
+import { readLanguage, showLanguage } from '../../../src/plugins/i18n.ts'
+
+await Promise.all([readLanguage('en'), readLanguage('es')])
+showLanguage('en')
+
+// jsdom has no media queries: a desk with a pointer, unless a test says otherwise.
+window.matchMedia ??= (media) => ({ media, matches: false, onchange: null, addEventListener: () => undefined, removeEventListener: () => undefined, addListener: () => undefined, removeListener: () => undefined, dispatchEvent: () => false })
