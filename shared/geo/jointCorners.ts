@@ -3,22 +3,33 @@ import { gridDistanceM, gridScaleAt, placeAlong } from './localPlane.ts'
 
 /**
  * A ring whose corners lie on the others' corners where they come within a distance, and whose edges have a corner wherever one of
- * the others' comes that near: edges that run along each other then do so corner by corner.
- * @param ring corners in order, the first not repeated. @param others corners of the others. @param nearM metres.
+ * the others' comes that near: edges that run along each other then do so corner by corner. An edge that is one of theirs already, and
+ * corners as near to an end of the edge, are left alone.
+ * @param ring corners in order, the first not repeated. @param others rings of the others. @param nearM metres.
  */
-export function takeCorners(ring: readonly GridPoint[], others: readonly GridPoint[], nearM: number): GridPoint[] {
+export function takeCorners(ring: readonly GridPoint[], others: readonly (readonly GridPoint[])[], nearM: number): GridPoint[] {
   const scale = gridScaleAt(ring[0] ?? [0, 0])
-  const moved = ring.map((corner) => nearestOf(corner, others, nearM) ?? corner)
+  const corners = others.flat()
+  const edges = edgeKeys(others)
+  const moved = ring.map((corner) => nearestOf(corner, corners, nearM) ?? corner)
   const whole = moved.flatMap((from, index) => {
     const to = moved[(index + 1) % moved.length] ?? from
-    const between = others
+    if (edges.has(edgeKey(from, to))) return [from]
+    const between = corners
       .filter((corner) => isInBox(from, to, corner, [nearM / scale.east, nearM / scale.north]))
       .map((corner) => ({ corner, ...placeAlong(from, to, corner, scale) }))
-      .filter(({ along, offM }) => offM <= nearM && along > 0 && along < 1)
+      .filter(({ corner, offM }) => offM <= nearM && gridDistanceM(corner, from, scale) > nearM && gridDistanceM(corner, to, scale) > nearM)
       .sort((a, b) => a.along - b.along)
     return [from, ...between.map(({ corner }) => corner)]
   })
   return withoutReturns(whole)
+}
+
+/** The same either way round. */
+const edgeKey = (a: GridPoint, b: GridPoint): string => (a[0] < b[0] || (a[0] === b[0] && a[1] < b[1]) ? `${a.join(' ')} ${b.join(' ')}` : `${b.join(' ')} ${a.join(' ')}`)
+
+function edgeKeys(rings: readonly (readonly GridPoint[])[]): ReadonlySet<string> {
+  return new Set(rings.flatMap((ring) => ring.map((from, index) => edgeKey(from, ring[(index + 1) % ring.length] ?? from))))
 }
 
 function isInBox(a: GridPoint, b: GridPoint, [x, y]: GridPoint, [reachX, reachY]: readonly [number, number]): boolean {

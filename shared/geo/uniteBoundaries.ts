@@ -58,8 +58,8 @@ const cornersOf = (parts: Parts): GridPoint[] => parts.flat(2)
 /** Each outline with the corners of the others where they touch: first moved onto them, then set into its edges. */
 function joinCorners(inputs: readonly Parts[]): Parts[] {
   const take = (parts: Parts, others: readonly Parts[]): Parts => {
-    const corners = others.flatMap(cornersOf)
-    return parts.map((rings) => rings.map((ring) => takeCorners(ring, corners, TOUCH_M)).filter((ring) => ring.length > 2))
+    const theirs = others.flatMap((each) => each.flat())
+    return parts.map((rings) => rings.map((ring) => takeCorners(ring, theirs, TOUCH_M)).filter((ring) => ring.length > 2))
   }
   const moved: Parts[] = []
   for (const parts of inputs) moved.push(take(parts, moved))
