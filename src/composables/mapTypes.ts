@@ -17,6 +17,8 @@ export interface MapBlock {
 /** An outline being made: its corners in order and, where edges cross, which. */
 export interface MapDraft {
   points: readonly Position[]
+  /** A line or a point: it encloses nothing, so no edge closes it. */
+  isOpen?: boolean
   /** Closed outlines have no dashed last edge and no cross. */
   closed: boolean
   /** Numbers (from 0) of the edges that cross another. */
