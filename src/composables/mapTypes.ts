@@ -1,3 +1,4 @@
+import type { CornerAt } from '../../shared/geo/boundaryCorners.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 
 /** A block as the map draws it; every word is ready to read. */
@@ -33,6 +34,23 @@ export interface MapImagery {
   url: string
   /** Closer than this its squares are drawn larger. */
   maxZoom: number
+}
+
+/** What the map is for: looking, setting corners, or moving those that are there. */
+export type MapMode = 'look' | 'draw' | 'edit'
+
+/** An outline whose corners can be moved. */
+export interface MapEdit {
+  /** Parts, each its outer ring and its holes; corners in order, the first not repeated. */
+  parts: readonly (readonly (readonly Position[])[])[]
+  /** Whether a hand can take hold of corners now. */
+  handles: boolean
+  chosen: CornerAt | null
+  /** Whether the chosen corner goes with the cross. */
+  isHeld: boolean
+  /** Edges that cross, each by the corner it leaves. */
+  crossing: readonly CornerAt[]
+  cross: Position | null
 }
 
 /** Where the map looks. */

@@ -63,7 +63,8 @@ function drawCorners(group: LayerGroup, draft: MapDraft): void {
   })
 }
 
-function crossMarker(at: LatLngTuple) {
+/** The cross that the arrow keys move. */
+export function crossMarker(at: LatLngTuple) {
   const icon = divIcon({ className: 'map-cross', iconSize: [44, 44] })
   return marker(at, { icon, interactive: false, keyboard: false, zIndexOffset: 2000 })
 }
