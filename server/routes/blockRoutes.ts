@@ -1,10 +1,12 @@
 import { blockSchema, createBlockSchema } from '../../shared/contract/block.ts'
+import { blocksImportedSchema, importBlocksSchema } from '../../shared/contract/blockImport.ts'
 import {
   blockQuerySchema, blocksChangedSchema, boundaryVersionsSchema, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema,
 } from '../../shared/contract/blockChanges.ts'
 import { farmParamsSchema, pageOf, thingParamsSchema } from '../../shared/contract/common.ts'
 import { putLandSchema } from '../../shared/contract/land.ts'
 import { createBlock } from '../services/blocks/createBlock.ts'
+import { importBlocks } from '../services/blocks/importBlocks.ts'
 import { listBoundaries } from '../services/blocks/listBoundaries.ts'
 import { mergeBlocks } from '../services/blocks/mergeBlocks.ts'
 import { putLand } from '../services/blocks/putLand.ts'
@@ -33,6 +35,14 @@ export const blockRoutes = [
     method: 'post', path: '/farms/:farmId/blocks/merge', summary: 'Put blocks together: they end, one begins, all or nothing.', roles: LEADERS,
     params: farmParamsSchema, body: mergeBlocksSchema, answer: blocksChangedSchema,
     run: async ({ services, actor, body }) => ({ body: await mergeBlocks(services, actor, body) }),
+  }),
+  defineRoute({
+    method: 'post', path: '/farms/:farmId/blocks/import', summary: 'Draw several blocks, all or none; each is judged after those before it.', roles: LEADERS,
+    params: farmParamsSchema, body: importBlocksSchema, answer: blocksImportedSchema,
+    run: async ({ services, actor, body }) => {
+      const { made, imported } = await importBlocks(services, actor, body)
+      return { status: made ? 201 : 200, body: imported }
+    },
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/blocks/:id', summary: 'One block.', roles: EVERY_ROLE,

@@ -6,6 +6,7 @@ import { farm } from './es/farm.ts'
 import { files } from './es/files.ts'
 import { frame } from './es/frame.ts'
 import { ground } from './es/ground.ts'
+import { importing } from './es/importing.ts'
 import { inputs } from './es/inputs.ts'
 import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
@@ -21,7 +22,7 @@ import { versions } from './es/versions.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, ground, inputs, problems, recordForm, records, register, session, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
 }
 
 /** Every word a person reads, in Spanish. */

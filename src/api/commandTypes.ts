@@ -2,9 +2,9 @@ import type { z } from 'zod'
 import type { Bed, createBedSchema, updateBedSchema } from '../../shared/contract/bed.ts'
 import type { Block, createBlockSchema } from '../../shared/contract/block.ts'
 import type { BlocksChanged, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema } from '../../shared/contract/blockChanges.ts'
+import type { BlocksImported, importBlocksSchema } from '../../shared/contract/blockImport.ts'
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../../shared/contract/farm.ts'
 import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
-import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
 import type { putLandSchema } from '../../shared/contract/land.ts'
 import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
@@ -29,10 +29,7 @@ export interface CommandBodies {
   'bed.update': z.input<typeof updateBedSchema>
   'event.create': z.input<typeof createFarmEventSchema>
   'event.withdraw': z.input<typeof withdrawFarmEventSchema>
-  'site.create': z.input<typeof createSiteSchema>
-  'site.change': z.input<typeof changeSiteSchema>
-  'ground.create': z.input<typeof createGroundSchema>
-  'ground.change': z.input<typeof changeGroundSchema>
+  'block.import': z.input<typeof importBlocksSchema>
   'material.create': z.input<typeof createMaterialSchema>
   'lot.create': z.input<typeof createLotSchema>
   'lot.count': z.input<typeof countLotSchema>
@@ -64,10 +61,7 @@ export interface CommandAnswers {
   'bed.update': Bed
   'event.create': FarmEvent
   'event.withdraw': FarmEvent
-  'site.create': Site
-  'site.change': Site
-  'ground.create': GroundFeature
-  'ground.change': GroundFeature
+  'block.import': BlocksImported
   'material.create': Material
   'lot.create': Lot
   'lot.count': Lot

@@ -85,6 +85,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
   const tag = uuidV7().slice(-8)
   const bodies: Record<string, () => object> = {
     'post /farms/:farmId/blocks': () => buildBlock({ code: tag, geometry: squareAt(place) }),
+    'post /farms/:farmId/blocks/import': () => ({ blocks: [buildBlock({ code: tag, geometry: squareAt(place) })] }),
     'post /farms/:farmId/sites': () => buildSite(),
     'patch /farms/:farmId/sites/:id': () => ({ revision: 1, keepClearM: '25' }),
     'post /farms/:farmId/ground': () => buildGround(),

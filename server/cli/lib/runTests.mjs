@@ -23,6 +23,7 @@ export async function runTests({ lifecycle, wish: { kinds, rest } }) {
   const wants = (/** @type {TestKind} */ kind) => kinds.includes(kind)
   await ensurePackages({ lifecycle, say })
   if (kinds.some((kind) => kind !== 'static')) await ensureSystemPackages(['postgresql', 'qpdf', 'poppler-utils'], { lifecycle, say })
+  if (wants('unit')) await ensureSystemPackages(['gdal-bin'], { lifecycle, say })
   if (wants('e2e')) await ensureSystemPackages(['chromium-headless-shell', 'fonts-noto-core'], { lifecycle, say })
   const folder = await makeThrowAwayFolder(lifecycle)
   const needsDatabase = wants('api') || wants('e2e')

@@ -7,7 +7,7 @@ import { runCommand } from './runCommand.mjs'
 import { secondsSince } from './say.mjs'
 
 /**
- * @typedef {'postgresql' | 'chromium-headless-shell' | 'qpdf' | 'poppler-utils' | 'fonts-noto-core'} SystemPackage
+ * @typedef {'postgresql' | 'chromium-headless-shell' | 'qpdf' | 'poppler-utils' | 'gdal-bin' | 'fonts-noto-core'} SystemPackage
  * @typedef {{ lifecycle: import('./lifecycle.mjs').Lifecycle, say: import('./say.mjs').Say }} Context
  */
 
@@ -17,6 +17,7 @@ const isThere = {
   'chromium-headless-shell': () => findChromium() !== undefined,
   qpdf: () => existsSync('/usr/bin/qpdf'),
   'poppler-utils': () => existsSync('/usr/bin/pdftotext'),
+  'gdal-bin': () => existsSync('/usr/bin/ogrinfo'),
   'fonts-noto-core': () => existsSync('/usr/share/fonts/truetype/noto/NotoSans-Regular.ttf'),
 }
 

@@ -35,7 +35,7 @@ function addBlock(group: LayerGroup, renderer: Renderer, block: MapBlock, isChos
   const chosen = isChosen ? ' is-chosen' : ''
   const common = { renderer, smoothFactor: 0.2, bubblingMouseEvents: false }
   group.addLayer(polygon(rings, { ...common, className: `map-case${chosen}`, interactive: false, fill: false }))
-  const line = polygon(rings, { ...common, className: `map-block${chosen}`, fill: true })
+  const line = polygon(rings, { ...common, className: `map-block${block.isComing === true ? ' is-coming' : ''}${chosen}`, fill: true })
   group.addLayer(line)
   if (isChosen) addHandles(group, rings)
   return line
