@@ -20,8 +20,7 @@ interface Drawn {
 export async function seedGround(services: Services, actor: FarmActor): Promise<void> {
   const drawing = JSON.parse(await readFile(join(DEMO_FOLDER, 'demoGround.geojson'), 'utf8')) as FeatureCollection<LineString | Point | Polygon, Drawn>
   for (const { geometry, properties: { name, ground, site } } of drawing.features) {
-    // What is kept clear of has its name from the site; it would stand twice on the map.
-    if (ground) await createGround(services, actor, buildGround({ ...ground, name: site ? null : name, geometry: { ...geometry } }))
+    if (ground) await createGround(services, actor, buildGround({ ...ground, name, geometry: { ...geometry } }))
     if (site && name !== null) await createSite(services, actor, buildSite({ ...site, name, geometry: { ...geometry } }))
   }
 }

@@ -5,6 +5,7 @@ import { blocksChangedSchema } from '../../shared/contract/blockChanges.ts'
 import { blocksImportedSchema } from '../../shared/contract/blockImport.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
+import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
 import { plantingSchema } from '../../shared/contract/planting.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
@@ -33,6 +34,10 @@ const DOORS: Record<CommandKind, Door> = {
   'bed.update': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/beds/${id}`, answer: bedSchema },
   'event.create': { method: 'post', path: (farmId) => `/farms/${farmId}/farm-events`, answer: farmEventSchema },
   'event.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/farm-events/${id}/withdraw`, answer: farmEventSchema },
+  'site.create': { method: 'post', path: (farmId) => `/farms/${farmId}/sites`, answer: siteSchema },
+  'site.change': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/sites/${id}`, answer: siteSchema },
+  'ground.create': { method: 'post', path: (farmId) => `/farms/${farmId}/ground`, answer: groundSchema },
+  'ground.change': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/ground/${id}`, answer: groundSchema },
   'block.import': { method: 'post', path: (farmId) => `/farms/${farmId}/blocks/import`, answer: blocksImportedSchema },
   'material.create': { method: 'post', path: (farmId) => `/farms/${farmId}/materials`, answer: materialSchema },
   'lot.create': { method: 'post', path: (farmId) => `/farms/${farmId}/lots`, answer: lotSchema },

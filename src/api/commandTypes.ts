@@ -5,6 +5,7 @@ import type { BlocksChanged, mergeBlocksSchema, reopenBlockSchema, splitBlockSch
 import type { BlocksImported, importBlocksSchema } from '../../shared/contract/blockImport.ts'
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../../shared/contract/farm.ts'
 import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
+import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
 import type { putLandSchema } from '../../shared/contract/land.ts'
 import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
@@ -29,6 +30,10 @@ export interface CommandBodies {
   'bed.update': z.input<typeof updateBedSchema>
   'event.create': z.input<typeof createFarmEventSchema>
   'event.withdraw': z.input<typeof withdrawFarmEventSchema>
+  'site.create': z.input<typeof createSiteSchema>
+  'site.change': z.input<typeof changeSiteSchema>
+  'ground.create': z.input<typeof createGroundSchema>
+  'ground.change': z.input<typeof changeGroundSchema>
   'block.import': z.input<typeof importBlocksSchema>
   'material.create': z.input<typeof createMaterialSchema>
   'lot.create': z.input<typeof createLotSchema>
@@ -61,6 +66,10 @@ export interface CommandAnswers {
   'bed.update': Bed
   'event.create': FarmEvent
   'event.withdraw': FarmEvent
+  'site.create': Site
+  'site.change': Site
+  'ground.create': GroundFeature
+  'ground.change': GroundFeature
   'block.import': BlocksImported
   'material.create': Material
   'lot.create': Lot

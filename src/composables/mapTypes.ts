@@ -1,3 +1,4 @@
+import type { CornerAt } from '../../shared/geo/boundaryCorners.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 
 /** A block as the map draws it; every word is ready to read. */
@@ -19,6 +20,8 @@ export interface MapBlock {
 /** An outline being made: its corners in order and, where edges cross, which. */
 export interface MapDraft {
   points: readonly Position[]
+  /** A line or a point: it encloses nothing, so no edge closes it. */
+  isOpen?: boolean
   /** Closed outlines have no dashed last edge and no cross. */
   closed: boolean
   /** Numbers (from 0) of the edges that cross another. */
@@ -33,6 +36,23 @@ export interface MapImagery {
   url: string
   /** Closer than this its squares are drawn larger. */
   maxZoom: number
+}
+
+/** What the map is for: looking, setting corners, or moving those that are there. */
+export type MapMode = 'look' | 'draw' | 'edit'
+
+/** An outline whose corners can be moved. */
+export interface MapEdit {
+  /** Parts, each its outer ring and its holes; corners in order, the first not repeated. */
+  parts: readonly (readonly (readonly Position[])[])[]
+  /** Whether a hand can take hold of corners now. */
+  handles: boolean
+  chosen: CornerAt | null
+  /** Whether the chosen corner goes with the cross. */
+  isHeld: boolean
+  /** Edges that cross, each by the corner it leaves. */
+  crossing: readonly CornerAt[]
+  cross: Position | null
 }
 
 /** Where the map looks. */

@@ -12,6 +12,8 @@ export const blocks = {
     title: 'Map',
     label: 'Map of the farm',
     drawLabel: 'Map of the farm, drawing a block',
+    editLabel: 'Map of the farm, changing an outline',
+    editKeys: 'Arrows move the cross 1 m, with Shift 10 m, with Alt 0.1 m. N and P go to the next corner and back. Space takes up the corner under the cross, or sets one into the edge there; Space again lets go. Delete removes the corner. Enter saves, Escape leaves.',
     keys: 'Arrows go from block to block, with Shift they move the map. Plus and minus change the scale. Enter opens the block.',
     drawKeys: 'Arrows move the cross 1 m, with Shift 10 m, with Alt 0.1 m. Space sets a corner, Backspace takes the last one, Enter finishes, Escape leaves.',
     north: 'North is up',

@@ -12,6 +12,8 @@ export const blocks = {
     title: 'Mapa',
     label: 'Mapa de la finca',
     drawLabel: 'Mapa de la finca, dibujando una parcela',
+    editLabel: 'Mapa de la finca, cambiando un contorno',
+    editKeys: 'Las flechas mueven la cruz 1 m; con Mayús, 10 m; con Alt, 0,1 m. N y P van a la esquina siguiente y a la anterior. Espacio toma la esquina bajo la cruz, o pone una en el lado; otro Espacio la suelta. Supr quita la esquina. Intro guarda, Escape sale.',
     keys: 'Las flechas van de parcela en parcela; con Mayús mueven el mapa. Más y menos cambian la escala. Intro abre la parcela.',
     drawKeys: 'Las flechas mueven la cruz 1 m; con Mayús, 10 m; con Alt, 0,1 m. Espacio pone una esquina, Retroceso quita la última, Intro termina, Escape sale.',
     north: 'El norte está arriba',

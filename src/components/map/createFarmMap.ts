@@ -2,14 +2,15 @@ import { latLngBounds, map as leafletMap, svg, tileLayer, type Map as LeafletMap
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
 import { createBlockLayer } from './blockLayer.ts'
 import { createDraftLayer } from './draftLayer.ts'
+import { createEditLayer, type EditEvents } from './editLayer.ts'
 import { createGroundView } from './groundView.ts'
 import { createLabelLayer } from './labelLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'
 import type { MapGround } from '../../composables/mapGround.ts'
-import type { MapBlock, MapDraft, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
+import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
 
 /** What the map tells its component. */
-export interface FarmMapEvents {
+export interface FarmMapEvents extends EditEvents {
   /** A tap or click on the ground. */
   tapped(position: Position): void
   chosen(blockId: string): void
@@ -21,6 +22,7 @@ export interface FarmMapEvents {
 export interface FarmMap {
   showBlocks(blocks: readonly MapBlock[], chosenId: string | null): void
   showDraft(draft: MapDraft | null): void
+  showEdit(edit: MapEdit | null): void
   setDrawing(isDrawing: boolean): void
   /** What lies under and round the blocks. */
   showGround(ground: MapGround): void
@@ -53,6 +55,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
   const renderer = svg({ padding: 0.5 })
   const blocks = createBlockLayer(map, renderer, events.chosen)
   const draft = createDraftLayer(map)
+  const edit = createEditLayer(map, events)
   const labels = createLabelLayer(map)
   let shown: { blocks: readonly MapBlock[]; chosenId: string | null } = { blocks: [], chosenId: null }
   let tiles: ReturnType<typeof tileLayer> | null = null
@@ -79,6 +82,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
       ground.setBlocks(list)
     },
     showDraft: draft.show,
+    showEdit: edit.show,
     setDrawing(isDrawing) {
       if (isDrawing) map.doubleClickZoom.disable()
       else map.doubleClickZoom.enable()

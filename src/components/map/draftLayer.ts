@@ -36,10 +36,11 @@ function drawOutline(group: LayerGroup, renderer: Renderer, draft: MapDraft): vo
   if (first === undefined || last === undefined || corners.length < 2) return
   const common = { renderer, smoothFactor: 0, interactive: false }
   const open = draft.closed && corners.length > 2 ? [...corners, first] : corners
-  if (corners.length > 2) group.addLayer(polygon(corners, { ...common, className: 'map-draft-ground', stroke: false }))
+  const encloses = corners.length > 2 && draft.isOpen !== true
+  if (encloses) group.addLayer(polygon(corners, { ...common, className: 'map-draft-ground', stroke: false }))
   group.addLayer(polyline(open, { ...common, className: 'map-draft-case' }))
   group.addLayer(polyline(open, { ...common, className: 'map-draft-line' }))
-  if (!draft.closed && corners.length > 2) {
+  if (!draft.closed && encloses) {
     group.addLayer(polyline([last, first], { ...common, className: 'map-draft-closing' }))
   }
   for (const edge of draft.crossingEdges) {
@@ -62,7 +63,8 @@ function drawCorners(group: LayerGroup, draft: MapDraft): void {
   })
 }
 
-function crossMarker(at: LatLngTuple) {
+/** The cross that the arrow keys move. */
+export function crossMarker(at: LatLngTuple) {
   const icon = divIcon({ className: 'map-cross', iconSize: [44, 44] })
   return marker(at, { icon, interactive: false, keyboard: false, zIndexOffset: 2000 })
 }

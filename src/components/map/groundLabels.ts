@@ -96,8 +96,9 @@ function addName(place: Place, named: Named): void {
 /** At the right of a mark, or left, over or under it: where the fewest blocks and the map's edge are least in the way. */
 function besideMark(place: Place, [x, y]: Pixel, width: number): Pixel {
   const aside = MARK_GAP + width / 2
-  const spots: Pixel[] = [[x + aside, y], [x - aside, y], [x, y - MARK_GAP - LINE / 2], [x, y + MARK_GAP + LINE / 2]]
   const size = place.map.getSize()
+  const within = Math.max(FRAME_PX + width / 2, Math.min(size.x - FRAME_PX - width / 2, x))
+  const spots: Pixel[] = [[x + aside, y], [x - aside, y], [within, y - MARK_GAP - LINE / 2], [within, y + MARK_GAP + LINE / 2]]
   const inTheWay = ([midX, midY]: Pixel): number => {
     const isOut = midX - width / 2 < FRAME_PX || midX + width / 2 > size.x - FRAME_PX || midY < FRAME_PX || midY > size.y - FRAME_PX
     return (isOut ? 10 : 0) + SHARES.filter((share) => isOnBlock(place, [midX + width * share, midY])).length
