@@ -75,6 +75,7 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zo
     start: civilTimeIn(zone, at),
     hectares: sheet === null ? '' : formatHectares(sheet.areaM2, language),
     litres: totalL === null ? '' : formatVolumeL(totalL, language),
+    mass: '',
     rate: presentRate(language, sheet?.sprayLPerHa ?? null),
     by: draft.by,
     lateHours: null,

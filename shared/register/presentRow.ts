@@ -35,18 +35,19 @@ export function presentRow(row: RegisterRow, { language, zone, season }: Registe
     start: at === null ? '' : civilTimeIn(zone, at),
     hectares: formatNumber(row.areaHa, { digits: 2 }, language),
     litres: row.totalL === null ? '' : formatVolumeL(row.totalL, language),
-    rate: presentRate(language, row.sprayLPerHa),
+    mass: row.totalKg === null ? '' : translate(language, 'register.kilogramsUnit', { value: formatNumber(row.totalKg, { digits: 1 }, language) }),
+    rate: presentRate(language, row.sprayLPerHa) || presentRate(language, row.kgPerHa, 'register.massRate'),
     by: row.by,
     lateHours: row.lateHours,
     tally: row.tally,
   }
 }
 
-/** Litres a hectare with their unit, whole from 100 up, else three digits of it; empty where there is no rate. */
-export function presentRate(language: Language, sprayLPerHa: string | number | null): string {
-  if (sprayLPerHa === null) return ''
-  const value = Number(sprayLPerHa) >= WHOLE_FROM ? formatNumber(sprayLPerHa, { digits: 0 }, language) : formatRate(sprayLPerHa, language, 3)
-  return translate(language, 'register.rate', { value })
+/** Litres (or, by another message, kilograms) a hectare with their unit, whole from 100 up, else three digits of it; empty where there is no rate. */
+export function presentRate(language: Language, perHa: string | number | null, message: 'register.rate' | 'register.massRate' = 'register.rate'): string {
+  if (perHa === null) return ''
+  const value = Number(perHa) >= WHOLE_FROM ? formatNumber(perHa, { digits: 0 }, language) : formatRate(perHa, language, 3)
+  return translate(language, message, { value })
 }
 
 /** "0143" of "2026-0143". */

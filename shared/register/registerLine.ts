@@ -20,6 +20,8 @@ export interface RegisterLine {
   start: string
   hectares: string
   litres: string
+  /** With its unit: of what was spread solid. */
+  mass: string
   rate: string
   by: string
   lateHours: number | null

@@ -11,11 +11,13 @@ export interface RegisterSums {
   areaHa: string
   /** Litres put on by the signed ones that have litres, exact decimal text. */
   totalL: string
+  /** Kilograms spread by the signed ones that have kilograms, exact decimal text. */
+  totalKg: string
   /** Signed records entered more than 24 h after the work. */
   late: number
 }
 
-type Summed = Pick<RegisterRow, 'state' | 'areaHa' | 'totalL' | 'lateHours'>
+type Summed = Pick<RegisterRow, 'state' | 'areaHa' | 'totalL' | 'totalKg' | 'lateHours'>
 
 /**
  * What the rows of a register that were read add up to; withdrawn and unsigned ones count in no total.
@@ -29,6 +31,7 @@ export function sumRegisterRows(rows: readonly Summed[]): RegisterSums {
     unsigned: rows.filter((row) => row.state === 'started' || row.state === 'draft').length,
     areaHa: sum(signed.map((row) => row.areaHa)),
     totalL: sum(signed.map((row) => row.totalL ?? '0')),
+    totalKg: sum(signed.map((row) => row.totalKg ?? '0')),
     late: signed.filter((row) => row.lateHours !== null).length,
   }
 }

@@ -2,9 +2,12 @@ import type { Block } from '../../shared/contract/block.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
+/** A block as a record has it: as it was signed, or as the farm has it now. */
+export type GroundBlock = Pick<Block, 'id' | 'code' | 'name' | 'geometry' | 'areaM2'>
+
 /** What a record's page needs of the things it names. */
 export interface RecordGround {
-  blocks: readonly Pick<Block, 'id' | 'code' | 'name' | 'geometry' | 'areaM2'>[]
+  blocks: readonly GroundBlock[]
   materials: readonly { id: string; name: string }[]
   lots: readonly { id: string; code: string }[]
   sprayer: { code: string; name: string } | null

@@ -7,7 +7,7 @@ import { dimensionOf } from '../../shared/units/dimensionOf.ts'
 import { now } from '../plugins/clock.ts'
 import { useSession } from '../stores/session.ts'
 import { contentOf } from './recordContent.ts'
-import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
+import { useAmendDraft } from './useAmendDraft.ts'
 import { keepSeconds } from './keepSeconds.ts'
 import { signGaps } from './recordGaps.ts'
 import { formErrors } from './formErrors.ts'
@@ -44,16 +44,17 @@ export function useRecordAmend(id: string) {
   const standing = ref<ApplicationRecord | null>(null)
   const stock = computed(() => withOwnDraws(farmStock.value, standing.value))
   const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
-  const draft = ref<RecordDraft>(emptyRecord())
-  const reason = ref('')
+  const kept = useAmendDraft(id)
+  const { draft, reason } = kept
   const tried = ref(false)
+  const filled = ref(false)
   const amended = ref<ApplicationRecord | null>(null)
 
   // Filled once: what is typed is not written over by what comes from elsewhere; the server then says that it is stale.
   watch([record, stockReady], ([one, ready]) => {
     if (one === null || !ready || standing.value !== null) return
     standing.value = one
-    draft.value = { ...draftOfRecord(one, zone.value), step: 2 }
+    void kept.fill(one, zone.value).finally(() => { filled.value = true })
   }, { immediate: true })
 
   const sheet = useRecordSheet(draft, stock)
@@ -81,15 +82,17 @@ export function useRecordAmend(id: string) {
     tried.value = true
     if (Object.keys(gaps.value).length > 0 || signing.password.value === '' || reason.value.trim() === '') return
     const answer = await signing.run()
-    if (answer !== undefined && answer !== 'kept') amended.value = answer
+    if (answer === undefined || answer === 'kept') return
+    await kept.discard()
+    amended.value = answer
   }
 
   return {
-    ...checking, ...mix, read, record: standing, stock, stockError, again, zone, draft, reason, sheet, errors, signing, sign, amended, stops,
+    ...checking, ...mix, read, record: standing, stock, stockError, again, zone, draft, reason, sheet, errors, signing, sign, amended, stops, discard: kept.discard,
     lines: useLineRows({ draft, sheet, stock, zone, errors }),
     jars: useJars({ draft, stock, rows: mix.rows }),
     asked: computed(() => askedFor(draft.value)),
-    ready: computed(() => standing.value !== null && stockReady.value),
+    ready: computed(() => filled.value && stockReady.value),
     signError: computed(() => {
       if (!tried.value) return ''
       if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')

@@ -149,13 +149,20 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
     return `${t(loads.lastL > 0 ? 'records.sprayer.loadsFullAndPart' : 'records.sprayer.loadsFull', { count: loads.full, last }, loads.full)}${minutes}`
   }
 
-  function timesOf({ lines, deviceAt, receivedAt, signedAt, workedInOn }: ApplicationRecord): ReadFact[] {
+  /** Said where it is more than a message takes to travel. */
+  function skewOf(minutes: number | null): { note?: string } {
+    if (minutes === null || minutes === 0) return {}
+    const apart = figures.plain(Math.abs(minutes))
+    return { note: t(minutes > 0 ? 'records.read.clockAhead' : 'records.read.clockBehind', { minutes: apart }, Math.abs(minutes)) }
+  }
+
+  function timesOf({ lines, deviceAt, receivedAt, signedAt, workedInOn, clockSkewMinutes }: ApplicationRecord): ReadFact[] {
     const starts = lines.flatMap(({ startedAt }) => startedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
     const ends = lines.flatMap(({ endedAt }) => endedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
     return [
       { name: t('records.read.worked'), value: unknown(span(starts[0] ?? null, ends.at(-1) ?? null)), note: t('records.read.zone', { zone: zone.value }) },
       ...(workedInOn === null ? [] : [{ name: t('versions.label.workedInOn'), value: figures.day(workedInOn) }]),
-      { name: t('records.read.device'), value: unknown(when(deviceAt)) },
+      { name: t('records.read.device'), value: unknown(when(deviceAt)), ...skewOf(clockSkewMinutes) },
       { name: t('records.read.server'), value: when(receivedAt) },
       { name: t('records.read.signed'), value: unknown(when(signedAt)) },
     ]

@@ -24,7 +24,7 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   chosenId: Ref<string | null>
   chosen: ComputedRef<RegisterLine | null>
   sums: ComputedRef<RegisterSums>
-  sumWords: ComputedRef<{ words: string; hectares: string; litres: string } | null>
+  sumWords: ComputedRef<{ words: string; hectares: string; litres: string; mass: string } | null>
   /** Message that heads the checks column. */
   headWords: ComputedRef<string>
 }
@@ -57,7 +57,7 @@ export function useRegister(choice: () => RegisterChoice): Register {
     return all === undefined ? sumRegisterRows(items.value) : { ...all, signed: all.records }
   })
   const sumWords = computed(() => {
-    const { signed, withdrawn, areaHa, totalL } = sums.value
+    const { signed, withdrawn, areaHa, totalL, totalKg } = sums.value
     if (items.value.length === 0) return null
     const number = (count: number): string => formatNumber(count, { digits: 0 }, preferences.language)
     const parts = [t('register.sum.signed', { number: number(signed) }, signed)]
@@ -66,6 +66,7 @@ export function useRegister(choice: () => RegisterChoice): Register {
       words: parts.join(', '),
       hectares: formatNumber(areaHa, { digits: 2 }, preferences.language),
       litres: formatVolumeL(totalL, preferences.language, 0),
+      mass: Number(totalKg) === 0 ? '' : t('register.kilogramsUnit', { value: formatNumber(totalKg, { digits: 0 }, preferences.language) }),
     }
   })
 

@@ -260,6 +260,8 @@ export const records = {
     times: 'Times',
     worked: 'Worked',
     device: 'Sent by the device at',
+    clockAhead: 'that clock was {minutes} minute ahead of the server’s | that clock was {minutes} minutes ahead of the server’s',
+    clockBehind: 'that clock was {minutes} minute behind the server’s | that clock was {minutes} minutes behind the server’s',
     server: 'Received by the server at',
     signed: 'Signed',
     zone: 'Clock of {zone}',

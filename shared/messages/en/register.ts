@@ -32,6 +32,8 @@ export const register = {
   draft: 'draft',
   started: 'started',
   rate: '{value} L/ha',
+  massRate: '{value} kg/ha',
+  kilogramsUnit: '{value} kg',
   litresUnit: '{value} L',
   hectaresUnit: '{value} ha',
   nothing: '–',

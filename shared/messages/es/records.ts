@@ -260,6 +260,8 @@ export const records = {
     times: 'Horas',
     worked: 'Trabajo',
     device: 'Enviado por el dispositivo a las',
+    clockAhead: 'ese reloj iba {minutes} minuto por delante del servidor | ese reloj iba {minutes} minutos por delante del servidor',
+    clockBehind: 'ese reloj iba {minutes} minuto por detrás del servidor | ese reloj iba {minutes} minutos por detrás del servidor',
     server: 'Recibido por el servidor a las',
     signed: 'Firmado',
     zone: 'Reloj de {zone}',

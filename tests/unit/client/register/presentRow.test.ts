@@ -36,6 +36,11 @@ describe('presentRow', () => {
     expect(line).toMatchObject({ number: null, day: '', start: '', litres: '', rate: '' })
   })
 
+  it('shows what was spread solid by weight', () => {
+    const line = presentRow(buildRow({ method: 'solid', totalL: null, sprayLPerHa: null, totalKg: '1250.4', kgPerHa: '625.2' }), place)
+    expect(line).toMatchObject({ litres: '', mass: '1\u00a0250.4 kg', rate: '625 kg/ha' })
+  })
+
   it('writes decimals as the language does', () => {
     const line = presentRow(buildRow({ areaHa: '1.25', totalL: '637.5', sprayLPerHa: '510' }), { ...place, language: 'es' })
     expect(line).toMatchObject({ hectares: '1,25', litres: '637,5', rate: '510 L/ha', day: '16\u00a0jun' })

@@ -17,7 +17,7 @@ const global = { plugins: [i18n] }
 function mountTable(lines: RegisterLine[], chosenId: string | null = null, sort: RegisterSort = '-when'): VueWrapper {
   return mount(RegisterTable, {
     global,
-    props: { lines, outlines: new Map(), chosenId, sort, sums: { words: '2 signed', hectares: '1.25', litres: '983' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
+    props: { lines, outlines: new Map(), chosenId, sort, sums: { words: '2 signed', hectares: '1.25', litres: '983', mass: '' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
   })
 }
 
