@@ -17,6 +17,7 @@ import { DEMO_ZONE } from './demoZone.ts'
 import { makeAccount, makeGrant, makePerson } from './makeAccount.ts'
 import { seedGround } from './seedGround.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
+import { seedGrowing, seedRedrawn, type DrawnCrop } from './seedGrowing.ts'
 import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
 
@@ -51,11 +52,15 @@ export async function seedDemo(services: Services, password: string): Promise<De
   const { farm } = await createFarm(past, ids.owner, { id: uuidV7(), name: 'Wennick Hollow', zone: DEMO_ZONE, seasonStart: '03-01' })
   const ruanId = await makePeople(services, farm.id, ids, beginning.now())
   const manager = await actorOf(services, ids.manager, farm.id)
-  const blocks = await seedBlocks(past, manager)
+  const applicator = await actorOf(services, ids.applicator, farm.id)
+  const drawn = await seedBlocks(past, manager)
+  const blocks = new Map(drawn.map(({ code, id }) => [code, id]))
+  await seedGrowing(services, past, { manager, applicator }, drawn)
   await seedGround(past, manager)
   const sprayers = await seedSprayers(past, manager)
   const lots = await seedInputs(services, manager)
-  await seedRecords(services, { manager, applicator: await actorOf(services, ids.applicator, farm.id), ruanId, blocks, sprayers, lots })
+  await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
+  await seedRedrawn(services, manager, blocks.get('L1') ?? '')
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
   await services.database.inHouse((tx) => tx.query('INSERT INTO demo_seed (demo_farm_id, demo_neighbour_id) VALUES ($1, $2)', [farm.id, neighbourFarmId]))
   return { password, accounts, farmId: farm.id, neighbourFarmId }
@@ -97,15 +102,15 @@ async function actorOf(services: Services, accountId: string, farmId: string): P
   return actor
 }
 
-async function seedBlocks(services: Services, actor: FarmActor): Promise<Map<string, string>> {
+async function seedBlocks(services: Services, actor: FarmActor): Promise<DrawnCrop[]> {
   const drawing = JSON.parse(await readFile(join(DEMO_FOLDER, 'demoBlocks.geojson'), 'utf8')) as FeatureCollection<Polygon>
-  const ids = new Map<string, string>()
-  for (const feature of drawing.features as Feature<Polygon, { code: string; name: string; crop: string; variety: string }>[]) {
+  const drawn: DrawnCrop[] = []
+  for (const feature of drawing.features as Feature<Polygon, Omit<DrawnCrop, 'id'> & { name: string }>[]) {
     const { code, name, crop, variety } = feature.properties
     const { block } = await createBlock(services, actor, buildBlock({ code, name, crop: `${crop}, ${variety}`, geometry: { ...feature.geometry } }))
-    ids.set(code, block.id)
+    drawn.push({ id: block.id, code, crop, variety })
   }
-  return ids
+  return drawn
 }
 
 async function seedSprayers(services: Services, actor: FarmActor): Promise<Map<string, string>> {

@@ -5,6 +5,7 @@ import { farm } from './en/farm.ts'
 import { files } from './en/files.ts'
 import { frame } from './en/frame.ts'
 import { ground } from './en/ground.ts'
+import { growing } from './en/growing.ts'
 import { importing } from './en/importing.ts'
 import { inputs } from './en/inputs.ts'
 import { pdf } from './en/pdf.ts'
@@ -20,7 +21,7 @@ import { versions } from './en/versions.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, files, frame, ground, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */

@@ -6,6 +6,7 @@ import { farm } from './es/farm.ts'
 import { files } from './es/files.ts'
 import { frame } from './es/frame.ts'
 import { ground } from './es/ground.ts'
+import { growing } from './es/growing.ts'
 import { importing } from './es/importing.ts'
 import { inputs } from './es/inputs.ts'
 import { pdf } from './es/pdf.ts'
@@ -22,7 +23,7 @@ import { versions } from './es/versions.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, ground, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
 }
 
 /** Every word a person reads, in Spanish. */

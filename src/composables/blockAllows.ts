@@ -1,25 +1,35 @@
+import type { Land } from '../../shared/contract/land.ts'
 import type { Check } from '../../shared/contract/record.ts'
 
 /**
- * What is known of a block as a whole today. Nothing of it is kept yet, and each line says so:
+ * What is known of a block as a whole today. What is not kept yet says so in its line:
  * a rule that is not known is not a rule that passed.
  */
-export function blockAllows(code: string): Check[] {
-  const unknown = (name: string, rests: Check['rests'], about: string | null = null): Check => ({
+export function blockAllows(code: string, land: Land | null): Check[] {
+  const line = (name: string, rests: Check['rests'], more: { about?: string; verdict?: Check['verdict']; text?: string } = {}): Check => ({
     code: `blocks.${name}`,
-    verdict: 'unknown',
+    verdict: more.verdict ?? 'unknown',
     rests,
     title: { id: `blocks.allows.${name}.title`, params: {} },
-    text: { id: `blocks.allows.${name}.text`, params: { code } },
+    text: { id: more.text ?? `blocks.allows.${name}.text`, params: { code } },
     figure: null,
     source: null,
     band: null,
-    about,
+    about: more.about ?? null,
   })
   return [
-    unknown('nearby', 'law', 'area'),
-    unknown('holds', 'label'),
-    unknown('status', 'certifier'),
-    unknown('again', 'house'),
+    line('nearby', 'law', { about: 'area' }),
+    line('holds', 'label'),
+    ...landLines(land).map((more) => line('status', 'certifier', more)),
+    line('again', 'house'),
+  ]
+}
+
+/** Land that is not certified asks for care with its harvest; a last prohibited substance that nobody wrote down is not known. */
+function landLines(land: Land | null): { verdict?: Check['verdict']; text?: string }[] {
+  if (land === null) return [{}]
+  return [
+    ...(land.status === 'certified' ? [] : [{ verdict: 'caution' as const, text: `blocks.allows.status.${land.status}` }]),
+    ...(land.lastProhibited === null ? [{ text: 'blocks.allows.status.prohibited' }] : []),
   ]
 }

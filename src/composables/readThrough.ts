@@ -1,6 +1,9 @@
 import { NetworkError } from '../api/errors.ts'
 import { keepRead, keptRead } from '../stores/reads.ts'
 
+/** Counts the shapes of what is kept: an answer of an older build, which lacks fields, is not read. */
+const SHAPE = 'v2'
+
 /**
  * Reads from the server and keeps the answer; without signal, gives the last answer kept on this device.
  * @throws {NetworkError} when there is no signal and nothing was kept; whatever else `read` throws.
@@ -8,11 +11,11 @@ import { keepRead, keptRead } from '../stores/reads.ts'
 export async function readThrough<Answer>(key: string, accountId: string, read: () => Promise<Answer>): Promise<Answer> {
   try {
     const answer = await read()
-    await keepRead(key, accountId, answer)
+    await keepRead(`${SHAPE}/${key}`, accountId, answer)
     return answer
   } catch (error) {
     if (!(error instanceof NetworkError)) throw error
-    const kept = await keptRead(key, accountId)
+    const kept = await keptRead(`${SHAPE}/${key}`, accountId)
     if (kept === undefined) throw error
     return kept as Answer
   }

@@ -1,22 +1,24 @@
 import { computed, type ComputedRef } from 'vue'
 import type { Check } from '../../shared/contract/record.ts'
-import { countCorners } from '../../shared/geo/countCorners.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
-import { formatNumber } from '../../shared/units/formatQuantity.ts'
+import { blockApi } from '../api/blockApi.ts'
 import { blockAllows } from './blockAllows.ts'
 import { blockRecordLine, type BlockRecordLine } from './blockRecordLine.ts'
-import type { BlockWords } from './blockWords.ts'
+import { blockWords, type BlockWords } from './blockWords.ts'
+import { isNotFound } from './isNotFound.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useBlockRead } from './useBlockRead.ts'
 import { useRecords } from './useRecords.ts'
 
 /** One block's page in words. */
 export interface BlockPage {
+  /** Null where there is none, and until it is read. */
   block: ComputedRef<BlockWords | null>
-  /** Corners of all rings, as a figure. */
-  corners: ComputedRef<string>
-  /** Day the boundary was drawn, in words. */
-  drawnOn: ComputedRef<string>
+  /** True while neither the block nor its absence is known. */
+  isReading: ComputedRef<boolean>
+  isFailed: ComputedRef<boolean>
+  retry: () => void
   records: ReturnType<typeof useRecords>
   lines: ComputedRef<readonly BlockRecordLine[]>
   /** Day of the last work in words; empty while there is none. */
@@ -26,23 +28,28 @@ export interface BlockPage {
 
 const LAST_RECORDS = 5
 
-export function useBlockPage(id: () => string, { farmId, farm, blocks, language }: BlocksPlace): BlockPage {
-  const block = computed(() => blocks.value.find((each) => each.id === id()) ?? null)
+export function useBlockPage(id: () => string, { farmId, farm, query, blocks, language }: BlocksPlace): BlockPage {
+  const listed = computed(() => blocks.value.find((each) => each.id === id()) ?? null)
+  // A block that has ended is in no list any more; its page stays.
+  const single = useBlockRead('block', () => (query.data.value !== undefined && listed.value === null ? id() : ''), blockApi.read)
+  const block = computed(() => listed.value ?? (single.data.value?.id === id() ? blockWords(language.value, single.data.value) : null))
   const records = useRecords(farmId, computed(() => ({ block: id(), limit: LAST_RECORDS })))
   const zone = computed(() => farm.value?.zone ?? 'UTC')
   const rows = computed(() => records.data.value?.pages[0]?.items.slice(0, LAST_RECORDS) ?? [])
   const dayOf = (instant: string): string => formatDay(language.value, civilDateIn(zone.value, instant))
+  const isMissing = computed(() => isNotFound(single.error.value))
 
   return {
     block,
     records,
-    corners: computed(() => formatNumber(block.value === null ? 0 : countCorners(block.value.geometry), { digits: 0 }, language.value)),
-    drawnOn: computed(() => (block.value === null ? '' : dayOf(block.value.createdAt))),
+    isReading: computed(() => block.value === null && !isMissing.value && !query.isError.value && !single.isError.value),
+    isFailed: computed(() => block.value === null && (query.isError.value || (single.isError.value && !isMissing.value))),
+    retry: () => { void (query.isError.value ? query.refetch() : single.refetch()) },
     lines: computed(() => rows.value.map((row) => blockRecordLine(language.value, zone.value, row))),
     lastOn: computed(() => {
       const started = rows.value.find(({ state, startedAt }) => state !== 'withdrawn' && startedAt !== null)?.startedAt
       return started === undefined || started === null ? '' : dayOf(started)
     }),
-    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code))),
+    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land))),
   }
 }

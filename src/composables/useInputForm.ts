@@ -12,7 +12,7 @@ import { useSubmit } from './useSubmit.ts'
 import { useTask } from './useTask.ts'
 import { useToast } from './useToast.ts'
 
-type InputKind = Extract<CommandKind, 'material.create' | 'lot.create' | 'lot.count'>
+type InputKind = Extract<CommandKind, 'material.create' | 'lot.create' | 'lot.count' | 'block.land' | 'planting.create' | 'planting.update' | 'bed.create' | 'bed.update' | 'event.create' | 'event.withdraw'>
 
 export interface InputFormOptions<Kind extends InputKind> {
   kind: Kind
@@ -35,7 +35,7 @@ export interface InputForm {
   save: () => Promise<boolean>
 }
 
-/** One form of the Inputs place: checks the body, sends it under an id made once, puts refusals at their fields. */
+/** One form in a dialog: checks the body, sends it under an id made once, puts refusals at their fields. */
 export function useInputForm<Kind extends InputKind>(options: InputFormOptions<Kind>): InputForm {
   const { t } = useI18n()
   const session = useSession()

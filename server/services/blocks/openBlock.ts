@@ -7,6 +7,6 @@ import { invalid } from '../../errors.ts'
 export async function openBlock(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, id: string, path = 'blockId'): Promise<Block> {
   const block = await manager.findOne(Block, { where: { farmId, id }, lock: { mode: 'pessimistic_read' } })
   if (!block) throw invalid([{ path, code: 'block.unknown' }])
-  if (block.endedOn !== null) throw invalid([{ path, code: 'block.ended', params: { code: block.code, on: block.endedOn } }])
+  if (block.endedOn !== null) throw invalid([{ path, code: 'block.ended', params: { code: block.code, endedOn: block.endedOn } }])
   return block
 }

@@ -12,6 +12,6 @@ export function findEndedFaults({ lines }: RecordContent, { blocks }: Pick<Recor
     const block = blocks.find(({ id }) => id === blockId)
     if (!block || block.endedOn === null || kept.includes(blockId)) return []
     if (startedAt !== null && civilDateIn(zone, startedAt) < block.endedOn) return []
-    return [{ path: `lines.${index}.blockId`, code: 'block.ended', params: { code: block.code, on: block.endedOn } }]
+    return [{ path: `lines.${index}.blockId`, code: 'block.ended', params: { code: block.code, endedOn: block.endedOn } }]
   })
 }

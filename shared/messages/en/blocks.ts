@@ -54,7 +54,6 @@ export const blocks = {
   page: {
     area: 'Area, as drawn',
     perimeter: 'Perimeter',
-    corners: 'Corners',
     metres: '{figure} m',
     all: 'All blocks',
     startRecord: 'New record',
@@ -70,19 +69,12 @@ export const blocks = {
     withdrawn: 'withdrawn',
     noRate: 'no rate',
     rate: '{figure} L/ha',
-    land: 'Land',
-    status: 'Status',
-    statusNotKnown: 'not known',
-    lastProhibited: 'Last prohibited',
-    boundary: 'Boundary',
-    boundaryVersion: 'version {version}, drawn {day}',
     missing: 'Nothing here under that number.',
     missingText: 'The block is not on this farm, or the address is not whole.',
     plan: 'Outline of {code}, north up',
   },
   allows: {
     title: 'What {code} allows today',
-    peek: '{count} not known',
     foot: 'A line you do not know is not a line that passed. A draft record looks at its own mix.',
     nearby: {
       title: 'What lies beside it',
@@ -91,6 +83,10 @@ export const blocks = {
     status: {
       title: 'Land status',
       text: 'Neither its status nor the last prohibited substance on {code} is written down.',
+      transition: '{code} is in transition: what is picked there is kept apart and not sold as certified.',
+      uncertified: '{code} is not certified: what is picked there is kept apart and not sold as certified.',
+      buffer: '{code} is a buffer strip: what is picked there is kept apart and not sold as certified.',
+      prohibited: 'No last prohibited substance on {code} is written down. That nobody wrote one is not proof that there was none.',
     },
     holds: {
       title: 'Keep out, do not pick',

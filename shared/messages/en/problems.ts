@@ -136,7 +136,7 @@ export const problems = {
   },
   block: {
     unknown: 'There is no such block on this farm.',
-    ended: 'Block {code} ended on {on}: take the block that came of it.',
+    ended: 'Block {code} ended on {endedOn}: take the block that came of it.',
     already_ended: 'This block has ended. Look at what came of it.',
     not_ended: 'No cut or join has ended this block, so there is nothing to undo.',
     reopen_used: 'What came of it has changed since, or has records, plantings, beds or events of its own. It stays as it is.',

@@ -54,7 +54,6 @@ export const blocks = {
   page: {
     area: 'Superficie, según el dibujo',
     perimeter: 'Perímetro',
-    corners: 'Esquinas',
     metres: '{figure} m',
     all: 'Todas las parcelas',
     startRecord: 'Registro nuevo',
@@ -70,19 +69,12 @@ export const blocks = {
     withdrawn: 'retirado',
     noRate: 'sin L/ha',
     rate: '{figure} L/ha',
-    land: 'Tierra',
-    status: 'Estado',
-    statusNotKnown: 'no se sabe',
-    lastProhibited: 'Última sustancia prohibida',
-    boundary: 'Lindero',
-    boundaryVersion: 'versión {version}, dibujado el {day}',
     missing: 'No hay nada aquí con ese número.',
     missingText: 'La parcela no es de esta finca o la dirección está incompleta.',
     plan: 'Contorno de {code}, norte arriba',
   },
   allows: {
     title: 'Lo que {code} permite hoy',
-    peek: 'No se sabe: {count}',
     foot: 'Lo que no se sabe no cuenta como en regla. Cada registro en borrador mira su propia mezcla.',
     nearby: {
       title: 'Lo que hay al lado',
@@ -91,6 +83,10 @@ export const blocks = {
     status: {
       title: 'Estado de la tierra',
       text: 'No están anotados ni el estado de {code} ni la última sustancia prohibida que recibió.',
+      transition: '{code} está en transición: lo que se coge allí se guarda aparte y no se vende como certificado.',
+      uncertified: '{code} no está certificada: lo que se coge allí se guarda aparte y no se vende como certificado.',
+      buffer: '{code} es una franja de separación: lo que se coge allí se guarda aparte y no se vende como certificado.',
+      prohibited: 'No hay anotada ninguna última sustancia prohibida en {code}. Que nadie la anotara no prueba que no la hubo.',
     },
     holds: {
       title: 'No entrar, no cosechar',

@@ -136,7 +136,7 @@ export const problems = {
   },
   block: {
     unknown: 'Esa parcela no existe en esta finca.',
-    ended: 'La parcela {code} terminó el {on}: tome la que salió de ella.',
+    ended: 'La parcela {code} terminó el {endedOn}: tome la que salió de ella.',
     already_ended: 'Esta parcela ya terminó. Mire lo que salió de ella.',
     not_ended: 'Ningún corte ni unión terminó esta parcela; no hay nada que deshacer.',
     reopen_used: 'Lo que salió de ella cambió desde entonces, o tiene registros, plantaciones, bancales o labores propias. Se queda como está.',

@@ -6,6 +6,7 @@ import { emptyComponent, emptyRecord, type ComponentDraft, type RecordDraft } fr
 /** A block of about a hectare, with its outline. */
 export const buildBlock = (over: Partial<Block> = {}): Block => ({
   id: 'b1', code: 'A3', name: 'Long Bank 3', crop: null, areaM2: 10_000, perimeterM: 400, version: 1, revision: 1, createdAt: '2026-01-01T00:00:00Z',
+  endedOn: null, endedBy: null, fromIds: [], intoIds: [], land: null, counts: { plants: null, beds: null, rows: null, rowM: null },
   geometry: { type: 'Polygon', coordinates: [[[-121, 38], [-120.9989, 38], [-120.9989, 38.0009], [-121, 38.0009], [-121, 38]]] }, ...over,
 })
 

@@ -5,6 +5,7 @@ import { buildRow } from './buildRow.ts'
 
 const block = (id: string, code: string): Block => ({
   id, code, name: code, crop: null, areaM2: 1, perimeterM: 4, version: 1, revision: 1, createdAt: '2026-03-01T08:00:00Z',
+  endedOn: null, endedBy: null, fromIds: [], intoIds: [], land: null, counts: { plants: null, beds: null, rows: null, rowM: null },
   geometry: { type: 'Polygon', coordinates: [[[0, 0], [1, 0], [1, 1], [0, 0]]] },
 })
 const on = (id: string, startedAt: string, state: 'signed' | 'withdrawn' = 'signed') =>

@@ -5,6 +5,7 @@ const place = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as c
 const stock: FarmStock = {
   blocks: [{
     id: 'b1', code: 'A3', name: 'Long Bank 3', crop: null, areaM2: 9700, perimeterM: 400, version: 1, revision: 1, createdAt: '2026-03-01T08:00:00Z',
+    endedOn: null, endedBy: null, fromIds: [], intoIds: [], land: null, counts: { plants: null, beds: null, rows: null, rowM: null },
     geometry: { type: 'Polygon', coordinates: [[[0, 0], [1, 0], [1, 1], [0, 0]]] },
   }],
   materials: [{

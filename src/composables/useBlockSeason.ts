@@ -1,0 +1,58 @@
+import { computed, type ComputedRef } from 'vue'
+import { useI18n } from 'vue-i18n'
+import type { Method } from '../../shared/contract/recordContent.ts'
+import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
+import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import type { BlockGrowing } from './useBlockGrowing.ts'
+import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useRecords } from './useRecords.ts'
+
+/** Work of a season as a mark on its strip. */
+export interface StripWork { id: string; on: string; method: Method; signed: boolean; words: string }
+export interface StripEvent { id: string; on: string; words: string }
+
+/** One block's season as its strip shows it. */
+export interface BlockSeason {
+  records: ReturnType<typeof useRecords>
+  season: ComputedRef<number | null>
+  span: ComputedRef<SeasonSpan | null>
+  works: ComputedRef<StripWork[]>
+  events: ComputedRef<StripEvent[]>
+  harvests: ComputedRef<{ id: string; from: string; to: string }[]>
+  /** "9 records". */
+  count: ComputedRef<string>
+  /** The strip in one sentence. */
+  spoken: ComputedRef<string>
+}
+
+/** A season holds fewer records of one block than this. */
+const MOST_RECORDS = 200
+
+export function useBlockSeason(id: () => string, code: () => string, { farm, farmId, language }: BlocksPlace, growing: BlockGrowing): BlockSeason {
+  const { t } = useI18n()
+  const season = computed(() => farm.value?.currentSeason ?? null)
+  const span = computed(() => (farm.value === null ? null : seasonSpan(farm.value.currentSeason, farm.value.seasonStart)))
+  const records = useRecords(farmId, computed(() => ({ block: id(), limit: MOST_RECORDS, ...(season.value !== null && { season: season.value }) })))
+  const works = computed(() => (records.data.value?.pages[0]?.items ?? []).flatMap(({ id: recordId, state, method, startedAt, number, preparations }): StripWork[] => {
+    if (state === 'withdrawn' || startedAt === null || farm.value === null) return []
+    const on = civilDateIn(farm.value.zone, startedAt)
+    const words = [number ?? t('blocks.page.started'), formatDayShort(language.value, on), preparations.join(', ')].filter((part) => part !== '').join(', ')
+    return [{ id: recordId, on, method, signed: state === 'signed', words }]
+  }))
+  const inSpan = ({ on }: { on: string }): boolean => span.value !== null && on >= span.value.from && on <= span.value.to
+  const events = computed(() => (growing.events.data.value ?? []).filter((event) => event.withdrawn === null && inSpan(event))
+    .map(({ id: eventId, kind, on }) => ({ id: eventId, on, words: `${t(`growing.events.kindOf.${kind}`)}, ${formatDayShort(language.value, on)}` })))
+  const harvests = computed(() => (growing.plantings.data.value ?? []).filter(({ removedOn }) => removedOn === null)
+    .flatMap((planting) => planting.harvests.map(({ from, to }, index) => ({ id: `${planting.id}-${index}`, from, to })))
+    .filter(({ from, to }) => span.value !== null && to >= span.value.from && from <= span.value.to))
+  const count = computed(() => t('growing.season.records', { count: works.value.length }, works.value.length))
+  return {
+    records, season, span, works, events, harvests, count,
+    spoken: computed(() => t('growing.season.spoken', {
+      season: season.value ?? '', code: code(), records: count.value,
+      events: t('growing.season.events', { count: events.value.length }, events.value.length),
+      harvests: t('growing.season.harvests', { count: harvests.value.length }, harvests.value.length),
+    })),
+  }
+}
