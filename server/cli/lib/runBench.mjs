@@ -15,7 +15,7 @@ import { makeThrowAwayFolder } from './throwAwayFolder.mjs'
  */
 export async function runBench({ lifecycle, wish: { json, only, quick } }) {
   await ensurePackages({ lifecycle, say })
-  await ensureSystemPackages(['postgresql'], { lifecycle, say })
+  await ensureSystemPackages(only.includes('map') ? ['postgresql', 'chromium-headless-shell'] : ['postgresql'], { lifecycle, say })
   const folder = await makeThrowAwayFolder(lifecycle)
   const [{ adminUrl, secrets }] = await Promise.all([startThrowAwayDatabase({ folder, lifecycle, say }), buildIfStale({ lifecycle, say })])
   const kept = Object.entries(process.env).filter(([name]) => !/^(PG.*|DATABASE_URL|DATABASE_OWNER_URL|FIXED_CLOCK|PUBLIC_URL|LOG_FILE)$/.test(name))

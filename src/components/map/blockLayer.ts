@@ -1,6 +1,8 @@
 import { layerGroup, polygon, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Renderer } from 'leaflet'
 import { handleMarker } from './handleMarker.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'
+import { areMany } from './manyBlocks.ts'
+import { createManyLayer } from './manyLayer.ts'
 import type { MapBlock } from '../../composables/mapTypes.ts'
 
 /** Handles on more corners than this would hide the outline. */
@@ -17,9 +19,16 @@ export interface BlockLayer {
  */
 export function createBlockLayer(map: LeafletMap, renderer: Renderer, onChoose: (id: string) => void): BlockLayer {
   const group = layerGroup().addTo(map)
+  const many = createManyLayer(map, onChoose)
   return {
     show(blocks, chosenId) {
       group.clearLayers()
+      if (areMany(blocks)) {
+        many.show(blocks)
+        for (const block of blocks) if (block.id === chosenId) addBlock(group, renderer, block, true).on('click', () => onChoose(block.id))
+        return
+      }
+      many.clear()
       const chosenLast = [...blocks].sort((a, b) => Number(a.id === chosenId) - Number(b.id === chosenId))
       for (const block of chosenLast) {
         addBlock(group, renderer, block, block.id === chosenId).on('click', () => onChoose(block.id))

@@ -6,6 +6,7 @@ import { createEditLayer, type EditEvents } from './editLayer.ts'
 import { createGroundView } from './groundView.ts'
 import { createLabelLayer } from './labelLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'
+import { areMany } from './manyBlocks.ts'
 import type { MapGround } from '../../composables/mapGround.ts'
 import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
 
@@ -66,7 +67,10 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
     ownMove = false
   }
   map.on('move', () => events.moved(viewOf(map), !ownMove))
-  map.on('zoomend', () => labels.show(shown.blocks, shown.chosenId))
+  const label = (): void => labels.show(shown.blocks, shown.chosenId)
+  map.on('zoomend', () => { if (!areMany(shown.blocks)) label() })
+  // Of very many, only those in view are named.
+  map.on('moveend', () => { if (areMany(shown.blocks)) label() })
   map.on('click', ({ latlng, originalEvent }) => {
     // The second click of a double tap would set the same corner twice.
     if (originalEvent.detail > 1) return

@@ -1,7 +1,10 @@
 import { divIcon, layerGroup, marker, point, type LayerGroup, type Map as LeafletMap } from 'leaflet'
+import { codeWidth } from './codeWidth.ts'
 import { freeSpot } from './freeSpot.ts'
-import { labelSpot, type CodeWidth, type LabelForm } from './labelSpot.ts'
+import { labelSpot, type LabelForm } from './labelSpot.ts'
 import { pixelRings } from './leafletGeometry.ts'
+import { areMany } from './manyBlocks.ts'
+import { findManyLabels } from './manyLabels.ts'
 import { boxOf, type PixelBox } from './pixelRing.ts'
 import { thinRing } from './thinRing.ts'
 import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
@@ -30,10 +33,6 @@ interface Shape { id: string; rings: readonly (readonly Pixel[])[]; box: PixelBo
 const SIZES: Record<LabelForm, readonly [number, number]> = {
   full: [50, 37], narrow: [27, 35], slip: [50, 19], code: [20, 17], small: [18, 12], outside: [18, 12],
 }
-/** Room in pixels that each small letter of a code needs. */
-const LETTER = 8
-/** The same in the letters of a label with room in its block. */
-const LARGE_LETTER = 9.5
 /** No label is set farther from its block, so blocks beyond are not looked at. */
 const REACH = 40
 /** Below this width in pixels a farm is a dot and labels would lie on each other. */
@@ -46,6 +45,12 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
     show(blocks, chosenId) {
       group.clearLayers()
       middles = new Map()
+      if (areMany(blocks)) {
+        const found = findManyLabels(map, blocks, chosenId)
+        middles = found.middles
+        for (const { block, at, isInside } of found.labels) setLabel({ map, group }, block, { form: isInside ? 'code' : 'outside', at, isChosen: block.id === chosenId })
+        return
+      }
       const shapes = blocks.flatMap(({ id, geometry }) => pixelRings(map, geometry).map((rings) => shapeOf(id, rings)))
       const labels: Labels = { map, group, middles, taken: [], shapes }
       // Those with room of their own first, then the tiny ones between them.
@@ -74,6 +79,10 @@ function addLabel({ map, group, middles, taken, shapes }: Labels, block: MapBloc
   // The chosen one may lie on other labels, yet on no other block.
   const at = find(taken) ?? (isChosen ? find([]) : null)
   if (at === null) return
+  setLabel({ map, group }, block, { form, at, isChosen })
+}
+
+function setLabel({ map, group }: Pick<Labels, 'map' | 'group'>, block: MapBlock, { form, at, isChosen }: { form: LabelForm; at: Pixel; isChosen: boolean }): void {
   const className = `map-label is-${form}${isChosen ? ' is-chosen' : ''}`
   group.addLayer(
     marker(map.unproject(point(at[0], at[1])), {
@@ -96,10 +105,6 @@ function labelElement(block: MapBlock, form: LabelForm): HTMLElement {
     label.append(area)
   }
   return label
-}
-
-function codeWidth({ length }: string): CodeWidth {
-  return { large: length * LARGE_LETTER, small: length * LETTER + 2 }
 }
 
 function shapeOf(id: string, rings: readonly (readonly Pixel[])[]): Shape {

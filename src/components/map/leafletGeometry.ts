@@ -11,7 +11,7 @@ export function polygonsOf(boundary: Boundary): Ring[][] {
 }
 
 /** The rings of every polygon in the map's own pixels at this zoom. */
-export function pixelRings(map: LeafletMap, boundary: Boundary): Pixel[][][] {
+export function pixelRings(map: Pick<LeafletMap, 'project'>, boundary: Boundary): Pixel[][][] {
   return polygonsOf(boundary).map((rings) =>
     rings.map((ring) =>
       ring.slice(0, -1).map((position): Pixel => {
