@@ -86,8 +86,8 @@ test('what goes out comes in again', async ({ page, context }) => {
   expect(await blocksOf(context, farmId)).toHaveLength(38)
 })
 
-test('a file that would harm is refused in words, and leaving an open one is asked about', async ({ page, context }) => {
-  await openNewFarm(context)
+test('a file that would harm is refused in words, and leaving an open one is asked about', async ({ page, signInAs }) => {
+  await signInAs('manager')
   const form = new ImportForm(page)
   await form.open()
   const bomb = '<!DOCTYPE kml [<!ENTITY a "aaaa"><!ENTITY b SYSTEM "file:///etc/passwd">]><kml><name>&a;&b;</name></kml>'
