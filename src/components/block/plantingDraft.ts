@@ -5,6 +5,8 @@ export interface HarvestDraft { from: string | null; to: string | null; note: st
 
 /** A planting as it is being typed. */
 export interface PlantingDraft {
+  /** An outline inside the block; null for all of it. */
+  part: Planting['part']
   crop: string
   variety: string
   eppo: string
@@ -17,6 +19,7 @@ export interface PlantingDraft {
 }
 
 export const plantingDraft = (planting: Planting | null): PlantingDraft => ({
+  part: planting?.part ?? null,
   crop: planting?.crop ?? '',
   variety: planting?.variety ?? '',
   eppo: planting?.eppo ?? '',
@@ -37,9 +40,9 @@ export function wholeOrNull(text: string): number | string | null {
   return /^\d+$/.test(read) ? Number(read) : read
 }
 
-/** What is sent of a planting. @param part what it has already: it is not typed here. */
-export const plantingBody = (draft: PlantingDraft, part: Planting['part']): Record<string, unknown> => ({
-  part,
+/** What is sent of a planting. */
+export const plantingBody = (draft: PlantingDraft): Record<string, unknown> => ({
+  part: draft.part,
   crop: draft.crop,
   variety: wordsOrNull(draft.variety),
   eppo: wordsOrNull(draft.eppo),

@@ -25,6 +25,7 @@ export interface FarmApi {
   farmId: string
   get: <Schema extends z.ZodType>(path: string, schema: Schema) => Promise<z.output<Schema>>
   post: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => Promise<z.output<Schema>>
+  patch: <Schema extends z.ZodType>(path: string, body: unknown, schema: Schema) => Promise<z.output<Schema>>
 }
 
 /** Signs in and opens the first farm of that person. */
@@ -35,6 +36,7 @@ export async function openFarm(request: APIRequestContext, who: Who): Promise<Fa
   return {
     farmId,
     get: async (rest, schema) => schema.parse(await bodyOf(await request.get(path(rest)), rest)),
+    patch: async (rest, body, schema) => schema.parse(await bodyOf(await request.patch(path(rest), { headers: OURS, data: body }), rest)),
     post: async (rest, body, schema) => schema.parse(await bodyOf(await request.post(path(rest), { headers: OURS, data: body }), rest)),
   }
 }
