@@ -2,6 +2,8 @@ import type { Writable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import '../../shared/messages/everyLanguage.ts'
 import { blankRecordReport, type BlankRecordData } from './blankRecordReport.ts'
+import { farmMapReport } from './farmMapReport.ts'
+import type { FarmMapData } from './farmMapReportData.ts'
 import { gatherChunks } from './parts/gatherChunks.ts'
 import { recordReport } from './recordReport.ts'
 import type { RecordReportData } from './recordReportData.ts'
@@ -12,6 +14,7 @@ import type { RegisterReportData } from './registerReportData.ts'
 export type ReportJob =
   | { kind: 'record'; data: RecordReportData }
   | { kind: 'register'; data: RegisterReportData }
+  | { kind: 'farmMap'; data: FarmMapData }
   | { kind: 'blankRecord'; data: BlankRecordData }
 
 /**
@@ -24,6 +27,7 @@ export async function renderReport(job: ReportJob, stream: Writable): Promise<vo
   try {
     if (job.kind === 'record') recordReport(job.data, chunks)
     else if (job.kind === 'register') registerReport(job.data, chunks)
+    else if (job.kind === 'farmMap') farmMapReport(job.data, chunks)
     else blankRecordReport(job.data, chunks)
   } catch (error) {
     chunks.destroy(error instanceof Error ? error : new Error(String(error)))

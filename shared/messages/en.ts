@@ -8,6 +8,7 @@ import { ground } from './en/ground.ts'
 import { growing } from './en/growing.ts'
 import { importing } from './en/importing.ts'
 import { inputs } from './en/inputs.ts'
+import { mapPrint } from './en/mapPrint.ts'
 import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
 import { recordForm } from './en/recordForm.ts'
@@ -25,7 +26,7 @@ export const screens = {
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */
-export const en = { ...screens, pdf, registerPrint }
+export const en = { ...screens, mapPrint, pdf, registerPrint }
 
 /** The same tree with any words in its leaves. */
 export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }

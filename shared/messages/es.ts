@@ -9,6 +9,7 @@ import { ground } from './es/ground.ts'
 import { growing } from './es/growing.ts'
 import { importing } from './es/importing.ts'
 import { inputs } from './es/inputs.ts'
+import { mapPrint } from './es/mapPrint.ts'
 import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
 import { recordForm } from './es/recordForm.ts'
@@ -27,4 +28,4 @@ export const screens: Screens = {
 }
 
 /** Every word a person reads, in Spanish. */
-export const es: Messages = { ...screens, pdf, registerPrint }
+export const es: Messages = { ...screens, mapPrint, pdf, registerPrint }

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { buildGround, buildSite } from '../../server/demo/buildThings.ts'
 import { openHouse, type Agent, type TestFarm, type TestHouse } from '../support/openHouse.ts'
+import { readText } from '../support/readPdf.ts'
 
 let house: TestHouse
 let farm: TestFarm
@@ -97,5 +98,20 @@ describe('the ground plan', () => {
     const { body } = await manager.post(address('/ground')).send(buildGround({ widthM: '2' })).expect(201)
     const response = await manager.patch(address(`/ground/${body.id}`)).send({ revision: 1, kind: 'building' })
     expect([response.status, ...codes(response.body)]).toEqual([422, 'geometry ground.needs_outline'])
+  })
+})
+
+describe('the printed map', () => {
+  it('is open to everybody of the farm and to the certifier, on each paper, and shows what is there today', async () => {
+    const gone = await manager.post(address('/sites')).send(buildSite({ name: 'Filled-in well', endedOn: '2026-06-16' })).expect(201)
+    expect(gone.body.endedOn).toBe('2026-06-16')
+    for (const [member, paper] of [['applicator', 'a4'], ['certifier', 'letter']] as const) {
+      const agent = await house.as(farm.accounts[member])
+      const { body } = await agent.get(address(`/reports/farm-map?paper=${paper}`)).expect(200).expect('Content-Type', 'application/pdf')
+      const text = readText(Buffer.from(body as Uint8Array))
+      expect(text).toContain('Yard well, 30 m')
+      expect(text).not.toContain('Filled-in well')
+    }
+    await manager.get(address('/reports/farm-map?paper=a0')).expect(422)
   })
 })

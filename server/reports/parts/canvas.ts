@@ -3,6 +3,7 @@ import PDFDocument from 'pdfkit'
 import type { Language } from '../../../shared/messages/translate.ts'
 import type { Weight } from './fontFiles.ts'
 import { openFonts, type Fonts } from './openFonts.ts'
+import { PAPERS, type Paper } from './paper.ts'
 import { splitRuns, type Run } from './splitRuns.ts'
 
 export type Element = PDFKit.PDFStructureElement
@@ -26,10 +27,12 @@ interface CanvasOptions {
   title: string; keywords: string; subject: string; createdAt: string; language: Language
   /** The page lies on its long side. */
   isLying?: boolean
+  /** A4 unless said. */
+  paper?: Paper
 }
 
 /** A4 in points. */
-export const PAGE = { width: 595.28, height: 841.89 }
+export const PAGE = PAPERS.a4
 const MM = 72 / 25.4
 
 /** The frame of a page of that size: 16 mm left, 14 mm right, 12 mm above and below. */
@@ -38,9 +41,10 @@ export function frameOf({ width, height }: { width: number; height: number }): F
   return { left, right, top: 12 * MM, bottom: height - 12 * MM, width: right - left }
 }
 
-/** Opens a tagged A4 document that flows into the stream; the same words at the same `createdAt` make the same bytes. */
+/** Opens a tagged document that flows into the stream; the same words at the same `createdAt` make the same bytes. */
 export function openCanvas(options: CanvasOptions, stream: Writable): Canvas {
-  const size = options.isLying ? { width: PAGE.height, height: PAGE.width } : PAGE
+  const upright = PAPERS[options.paper ?? 'a4']
+  const size = options.isLying ? { width: upright.height, height: upright.width } : upright
   const settings = {
     size: [size.width, size.height], margin: 0, pdfVersion: '1.7' as const, tagged: true, displayTitle: true,
     // No font of its own: the library's default one would stand in the file without being embedded.

@@ -9,11 +9,11 @@ import { ELDER, STYLES } from './styles.ts'
 
 const CODE: TextStyle = { size: 12, leading: 14, weight: 'bold', color: ELDER }
 const SMALL_CODES = [{ ...CODE, size: 8.5, leading: 10 }, { ...CODE, size: 6.5, leading: 7.5 }, { ...CODE, size: 5, leading: 6 }] as const
-const NAME: TextStyle = { size: 7.5, leading: 9, weight: 'italic', color: '#000000' }
+export const NAME: TextStyle = { size: 7.5, leading: 9, weight: 'italic', color: '#000000' }
 const NEIGHBOUR: TextStyle = { size: 7.5, leading: 9, weight: 'regular', color: '#555555' }
 
 /** Names what lies around the blocks, where there is room. */
-export function nameSurroundings(drawing: Drawing, { neighbours, sites }: BlockPlan): void {
+export function nameSurroundings(drawing: Drawing, { neighbours, sites }: Pick<BlockPlan, 'neighbours' | 'sites'>): void {
   const { canvas, frame } = drawing
   for (const { code, geometry } of neighbours) {
     const place = findLabelPlace(toPageRings(geometry, drawing), frame, NEIGHBOUR.leading)
@@ -54,8 +54,9 @@ function writeSiteName(drawing: Drawing, name: string, geometry: PlanSite['geome
 /**
  * Code and notes inside the block where there is room, beside what is hatched of it if they can, else the code in the largest size that
  * fits; a lone one beside the block.
+ * @returns whether there was room for any of it.
  */
-export function writeBlock({ canvas, frame, ...place }: Drawing, { code, notes, geometry, treated }: PlanBlock, { isAlone }: { isAlone: boolean }): void {
+export function writeBlock({ canvas, frame, ...place }: Drawing, { code, notes, geometry, treated }: PlanBlock, { isAlone }: { isAlone: boolean }): boolean {
   const rings = toPageRings(geometry, place)
   const parts = treated === 'whole' ? [] : treated.flatMap((part) => toPageRings(part, place))
   const full: Label = [{ text: code, style: CODE }, ...notes.map((text) => ({ text, style: STYLES.small }))]
@@ -65,22 +66,26 @@ export function writeBlock({ canvas, frame, ...place }: Drawing, { code, notes, 
     const width = Math.max(...label.map(({ text, style }) => measureText(canvas, text, style)))
     for (const ground of parts.length > 0 ? [[...rings, ...parts], rings] : [rings]) {
       const room = findLabelPlace(ground, frame, height)
-      if (room && room.width > width + 3) return writeAt(canvas, room, label)
+      if (room && room.width > width + 3) {
+        writeAt(canvas, room, label)
+        return true
+      }
     }
   }
   // Beside one of several it might stand in another's ground; the table names them all.
-  if (!isAlone) return
+  if (!isAlone) return false
   const style = SMALL_CODES[0]
   const right = Math.max(...rings.flat().map(([x]) => x))
   const ys = rings.flat().map(([, y]) => y)
   const y = (Math.min(...ys) + Math.max(...ys)) / 2
   writeAt(canvas, { x: right + 4 + measureText(canvas, code, style) / 2, y, width: 0 }, [{ text: code, style }])
+  return true
 }
 
 type Label = readonly { text: string; style: TextStyle }[]
 
 /** Words centred on a white ground. */
-function writeAt(canvas: Canvas, { x, y }: Stretch, lines: Label): void {
+export function writeAt(canvas: Canvas, { x, y }: Stretch, lines: Label): void {
   const widths = lines.map(({ text, style }) => measureText(canvas, text, style))
   const height = lines.reduce((sum, { style }) => sum + style.leading, 0)
   const width = Math.max(...widths)
