@@ -73,4 +73,5 @@ export const ground = {
     kept: '{name} is kept on this device and goes out with the next signal.',
   },
   farmMap: 'Farm map (PDF)',
+  paper: { a4: 'A4', a3: 'A3', letter: 'Letter' },
 }

@@ -73,4 +73,5 @@ export const ground = {
     kept: '{name} queda en este dispositivo y sale cuando haya señal.',
   },
   farmMap: 'Mapa de la finca (PDF)',
+  paper: { a4: 'A4', a3: 'A3', letter: 'Carta' },
 }

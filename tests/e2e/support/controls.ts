@@ -5,8 +5,8 @@ type Place = Page | Locator
 
 const pageOf = (place: Place): Page => ('page' in place ? place.page() : place)
 
-/** Chooses one of a list by its words; types them where the list can be searched. */
-export async function choose(place: Place, label: string, option: string): Promise<void> {
+/** Chooses one of a list by its words, all of them where `exact`; types them where the list can be searched. */
+export async function choose(place: Place, label: string, option: string, { exact = false } = {}): Promise<void> {
   const box = place.getByRole('combobox', { name: label, exact: true })
   if (await box.evaluate((element) => element.tagName === 'SELECT')) {
     const words = await box.getByRole('option', { includeHidden: true }).filter({ hasText: option }).first().textContent()
@@ -16,7 +16,7 @@ export async function choose(place: Place, label: string, option: string): Promi
   // The words of the choice lie over the box itself.
   await box.click({ force: true })
   if (await box.isEditable()) await box.fill(option)
-  const wanted = pageOf(place).getByRole('option', { name: option }).filter({ visible: true })
+  const wanted = pageOf(place).getByRole('option', { name: option, exact }).filter({ visible: true })
   await wanted.click()
   await expect(wanted).toBeHidden()
 }
