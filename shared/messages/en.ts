@@ -16,13 +16,14 @@ import { records } from './en/records.ts'
 import { register } from './en/register.ts'
 import { registerPrint } from './en/registerPrint.ts'
 import { session } from './en/session.ts'
+import { shapes } from './en/shapes.ts'
 import { today } from './en/today.ts'
 import { units } from './en/units.ts'
 import { versions } from './en/versions.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, shapes, today, units, versions,
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */

@@ -17,6 +17,7 @@ import { records } from './es/records.ts'
 import { register } from './es/register.ts'
 import { registerPrint } from './es/registerPrint.ts'
 import { session } from './es/session.ts'
+import { shapes } from './es/shapes.ts'
 import { today } from './es/today.ts'
 import { units } from './es/units.ts'
 import { versions } from './es/versions.ts'
@@ -24,7 +25,7 @@ import { versions } from './es/versions.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, shapes, today, units, versions,
 }
 
 /** Every word a person reads, in Spanish. */

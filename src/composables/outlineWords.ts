@@ -5,6 +5,14 @@ import { translate, type Language } from '../../shared/messages/translate.ts'
 const OWN_WORDS: Partial<Record<string, string>> = {
   'geometry.self_intersection': 'blocks.draw.crossing',
   'geometry.area_range': 'blocks.geometry.area_range',
+  'geometry.hole_outside': 'shapes.finding.hole_outside',
+  'geometry.holes_overlap': 'shapes.finding.holes_overlap',
+  'geometry.parts_overlap': 'shapes.finding.parts_overlap',
+  'split.too_short': 'shapes.finding.too_short',
+  'split.crosses_itself': 'shapes.finding.crosses_itself',
+  'split.ends_inside': 'shapes.finding.ends_inside',
+  'split.misses': 'shapes.finding.misses',
+  'split.not_possible': 'shapes.finding.not_possible',
 }
 /** Codes whose words the refusals hold already. */
 const KNOWN = new Set([

@@ -30,6 +30,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/blocks/ground', name: 'ground', component: () => import('../views/blocks/GroundView.vue'), meta: { place: 'blocks' } },
   { path: '/blocks/ground/:id', name: 'ground-form', component: () => import('../views/blocks/GroundFormView.vue'), props: true, meta: { place: 'blocks', roles: MANAGERS } },
   { path: '/blocks/import', name: 'block-import', component: () => import('../views/blocks/BlockImportView.vue'), meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
+  { path: '/blocks/:id/shape', name: 'block-shape', component: () => import('../views/blocks/BlockShapeView.vue'), props: true, meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
   { path: '/blocks/:id', name: 'block', component: () => import('../views/blocks/BlockPageView.vue'), props: true, meta: { place: 'blocks' } },
   { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), meta: { place: 'register' } },
   { path: '/register/new', name: 'record-new', component: () => import('../views/register/RecordFormView.vue'), meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
