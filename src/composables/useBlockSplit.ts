@@ -1,0 +1,142 @@
+import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
+import { useI18n } from 'vue-i18n'
+import type { BlocksChanged } from '../../shared/contract/blockChanges.ts'
+import { lineText } from '../../shared/contract/text.ts'
+import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
+import { lineAtShare } from '../../shared/geo/lineAtShare.ts'
+import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
+import { splitBoundary } from '../../shared/geo/splitBoundary.ts'
+import { uniteBoundaries } from '../../shared/geo/uniteBoundaries.ts'
+import { formatNumber } from '../../shared/units/formatQuantity.ts'
+import type { Submitted } from '../stores/outbox.ts'
+import { hectaresText, type BlockWords } from './blockWords.ts'
+import { newId } from './newId.ts'
+import { outlineWords } from './outlineWords.ts'
+import { cornersOfShape, shapeOf, type ShapeCorner } from './shape.ts'
+import { useAsked, type Asked } from './useAsked.ts'
+import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useMessages } from './useMessages.ts'
+import { useSubmit } from './useSubmit.ts'
+import { useTask } from './useTask.ts'
+
+/** How the line of a cut is given. */
+export type SplitBy = 'line' | 'corners' | 'share'
+/** A piece and the block it becomes; pieces of one code become one block. */
+export interface SplitPiece { geometry: Boundary; code: string; name: string; words: string }
+
+/** The page that cuts a block. */
+export interface BlockSplit {
+  block: ComputedRef<BlockWords | null>
+  by: Ref<SplitBy>
+  /** Points of the drawn line. */
+  drawn: Ref<Position[]>
+  /** Numbers from 0 among the block's corners, and the share in percent as typed. */
+  from: Ref<string>
+  to: Ref<string>
+  edge: Ref<string>
+  share: Ref<string>
+  corners: ComputedRef<readonly ShapeCorner[]>
+  line: ComputedRef<readonly Position[]>
+  pieces: ComputedRef<readonly SplitPiece[]>
+  rename: (index: number, words: { code?: string; name?: string }) => void
+  /** Why there are no pieces, or why they cannot be saved. */
+  fault: ComputedRef<string>
+  errors: Asked['errors']
+  saving: Ref<boolean>
+  save: () => Promise<Submitted<BlocksChanged> | undefined>
+}
+
+const CODE_LENGTH = 12
+const LETTERS = 'abcdefghijklmnopqrstuvwxyz'
+
+export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit {
+  const { blocks, farmId, language } = place
+  const { t } = useI18n()
+  const { problem } = useMessages()
+  const { submit } = useSubmit()
+  const { errors, takeRefusal } = useAsked()
+  const block = computed(() => blocks.value.find((each) => each.id === id()) ?? null)
+  const [by, drawn] = [ref<SplitBy>('line'), ref<Position[]>([])]
+  const [from, to, edge, share] = [ref('0'), ref('2'), ref('0'), ref('50')]
+  const names = ref<{ code?: string; name?: string }[]>([])
+  const ids = new Map<string, string>()
+  const tried = ref('')
+
+  const corners = computed(() => (block.value === null ? [] : cornersOfShape(shapeOf(block.value.geometry))))
+  const line = computed<readonly Position[]>(() => {
+    if (by.value === 'line') return drawn.value
+    if (by.value === 'corners') return [from.value, to.value].flatMap((number) => corners.value[Number(number)]?.position ?? [] as Position[]) as Position[]
+    return lineOfShare(block.value, corners.value[Number(edge.value)], Number(share.value.replace(',', '.')))
+  })
+  const cut = computed(() => (block.value === null || line.value.length < 2 ? { pieces: [], findings: [] } : splitBoundary(block.value.geometry, line.value)))
+  watch(line, () => {
+    errors.value = {}
+    tried.value = ''
+  })
+
+  const pieces = computed(() => cut.value.pieces.map((geometry, index): SplitPiece => {
+    const { areaM2 } = measurePolygon(geometry)
+    const of = block.value
+    const percent = formatNumber((areaM2 / (of?.areaM2 ?? areaM2)) * 100, { digits: 1 }, language.value)
+    return {
+      geometry, code: names.value[index]?.code ?? `${(of?.code ?? '').slice(0, CODE_LENGTH - 1)}${LETTERS[index % LETTERS.length] ?? ''}`, name: names.value[index]?.name ?? of?.name ?? '',
+      words: t('shapes.split.pieceWords', { area: t('blocks.hectares', { figure: hectaresText(language.value, areaM2) }), percent }),
+    }
+  }))
+
+  const task = useTask(async (of: BlockWords, parts: { code: string; name: string; geometry: Boundary }[]): Promise<Submitted<BlocksChanged> | undefined> => {
+    const withIds = parts.map((part) => ({ ...part, id: idOf(part.code) }))
+    try {
+      return await submit({ kind: 'block.split', farmId: farmId.value, id: of.id, body: { revision: of.revision, parts: withIds } })
+    } catch (error) {
+      if (!takeRefusal(error)) throw error
+      return undefined
+    }
+  })
+  /** The same id for the same code, so that sending twice cuts once. */
+  function idOf(code: string): string {
+    const made = ids.get(code) ?? newId()
+    ids.set(code, made)
+    return made
+  }
+
+  async function save(): Promise<Submitted<BlocksChanged> | undefined> {
+    const parts = joinByCode(pieces.value)
+    errors.value = Object.fromEntries(pieces.value.flatMap(({ code, name }, index) => [
+      ...(lineText(CODE_LENGTH).safeParse(code).success ? [] : [[`parts.${index}.code`, { id: 'problems.text.required' }] as const]),
+      ...(lineText(80).safeParse(name).success ? [] : [[`parts.${index}.name`, { id: 'problems.text.required' }] as const]),
+    ]))
+    tried.value = pieces.value.length > 0 && parts.length < 2 ? t('shapes.split.twoNeeded') : ''
+    if (block.value === null || parts.length < 2 || Object.keys(errors.value).length > 0 || task.running.value) return undefined
+    return task.run(block.value, parts)
+  }
+
+  return {
+    block, by, drawn, from, to, edge, share, corners, line, pieces, errors, save,
+    saving: task.running,
+    rename: (index, words) => { names.value = pieces.value.map((piece, each) => ({ code: piece.code, name: piece.name, ...(each === index ? words : {}) })) },
+    fault: computed(() => {
+      const finding = cut.value.findings[0]
+      if (finding !== undefined) return outlineWords(language.value, finding)
+      if (by.value === 'share' && line.value.length === 0) return t('shapes.split.shareWrong')
+      const refused = Object.entries(errors.value).find(([path]) => !path.endsWith('.code') && !path.endsWith('.name'))?.[1]
+      if (refused !== undefined) return 'words' in refused ? refused.words : t(refused.id)
+      return tried.value !== '' ? tried.value : task.error.value === null ? '' : problem(task.error.value)
+    }),
+  }
+}
+
+function lineOfShare(block: BlockWords | null, corner: ShapeCorner | undefined, percent: number): Position[] {
+  if (block === null || corner === undefined || !(percent >= 1 && percent <= 99)) return []
+  return lineAtShare(block.geometry, corner.at, percent / 100)
+}
+
+/** One block a code; pieces that touch are joined again. */
+function joinByCode(pieces: readonly SplitPiece[]): { code: string; name: string; geometry: Boundary }[] {
+  const codes = [...new Set(pieces.map(({ code }) => code.trim()))]
+  return codes.flatMap((code) => {
+    const own = pieces.filter((piece) => piece.code.trim() === code)
+    const geometry = own.length === 1 ? own[0]?.geometry : uniteBoundaries(own.map((piece) => piece.geometry)).geometry
+    return geometry === undefined || geometry === null ? [] : [{ code, name: own[0]?.name ?? '', geometry }]
+  })
+}
