@@ -2,6 +2,7 @@ import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import type { BlocksChanged } from '../../shared/contract/blockChanges.ts'
 import { lineText } from '../../shared/contract/text.ts'
+import { distanceKm } from '../../shared/geo/distanceKm.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 import { lineAtShare } from '../../shared/geo/lineAtShare.ts'
 import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
@@ -69,6 +70,11 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
     return lineOfShare(block.value, corners.value[Number(edge.value)], Number(share.value.replace(',', '.')))
   })
   const cut = computed(() => (block.value === null || line.value.length < 2 ? { pieces: [], findings: [] } : splitBoundary(block.value.geometry, line.value)))
+  // The longest edge is the one that rows run along.
+  watch(corners, (all) => {
+    const lengths = all.map(({ position, next }) => distanceKm(position, next))
+    edge.value = String(Math.max(0, lengths.indexOf(Math.max(...lengths))))
+  }, { immediate: true })
   watch(line, () => {
     errors.value = {}
     tried.value = ''

@@ -12,6 +12,10 @@ export interface ShapeKeys {
   step: (by: 1 | -1) => ShapeCorner | undefined
   choose: (at: CornerAt) => void
   remove: () => void
+  /** The chosen corner moved by metres; without one the whole outline. */
+  move: (eastM: number, northM: number) => void
+  /** A corner halfway from the chosen one to the next. */
+  addAfter: () => void
 }
 
 export function useShapeSaid(work: ShapeWork, shape: () => Shape): ShapeKeys {
@@ -38,6 +42,16 @@ export function useShapeSaid(work: ShapeWork, shape: () => Shape): ShapeKeys {
       const next = corners[index === -1 ? (by === 1 ? 0 : corners.length - 1) : (index + by + corners.length) % corners.length]
       if (next !== undefined) choose(next.at)
       return next
+    },
+    move: (eastM, northM) => {
+      if (work.chosen.value === null) work.moveAll(eastM, northM)
+      else work.moveBy(work.chosen.value, eastM, northM)
+    },
+    addAfter: () => {
+      const corner = cornersOfShape(shape()).find(({ at }) => isSameAt(at, work.chosen.value))
+      if (corner === undefined) return
+      const [[lon, lat], [nextLon, nextLat]] = [corner.position, corner.next]
+      work.insert(corner.at, [(lon + nextLon) / 2, (lat + nextLat) / 2])
     },
     remove: () => {
       if (work.chosen.value === null) return
