@@ -83,6 +83,12 @@ describe('none comes in where one cannot', () => {
   })
 })
 
+it('a zip or a form is not read here: files are opened in the browser (B-17)', async () => {
+  const path = `/api/farms/${farm.id}/blocks/import`
+  expect((await manager.post(path).set('Content-Type', 'application/zip').send('PK')).status).toBe(415)
+  expect((await manager.post(path).attach('file', Buffer.from('PK'), 'blocks.kmz')).status).toBe(415)
+})
+
 describe('what is unlikely', () => {
   it('passes with a reason on its own block alone', async () => {
     const [one, two] = [buildBlock({ code: 'A', geometry: squareAt(0) }), buildBlock({ code: 'B', geometry: squareAt(0.1) })]
