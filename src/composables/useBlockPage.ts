@@ -4,10 +4,12 @@ import { formatDay } from '../../shared/messages/formatDay.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { blockApi } from '../api/blockApi.ts'
 import { blockAllows } from './blockAllows.ts'
+import { blockNearby } from './blockNearby.ts'
 import { blockRecordLine, type BlockRecordLine } from './blockRecordLine.ts'
 import { blockWords, type BlockWords } from './blockWords.ts'
 import { isNotFound } from './isNotFound.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useMapGround } from './useMapGround.ts'
 import { useBlockRead } from './useBlockRead.ts'
 import { useRecords } from './useRecords.ts'
 
@@ -33,6 +35,7 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
   // A block that has ended is in no list any more; its page stays.
   const single = useBlockRead('block', () => (query.data.value !== undefined && listed.value === null ? id() : ''), blockApi.read)
   const block = computed(() => listed.value ?? (single.data.value?.id === id() ? blockWords(language.value, single.data.value) : null))
+  const ground = useMapGround()
   const records = useRecords(farmId, computed(() => ({ block: id(), limit: LAST_RECORDS })))
   const zone = computed(() => farm.value?.zone ?? 'UTC')
   const rows = computed(() => records.data.value?.pages[0]?.items.slice(0, LAST_RECORDS) ?? [])
@@ -50,6 +53,6 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
       const started = rows.value.find(({ state, startedAt }) => state !== 'withdrawn' && startedAt !== null)?.startedAt
       return started === undefined || started === null ? '' : dayOf(started)
     }),
-    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land))),
+    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land, blockNearby(block.value.geometry, ground.value.sites)))),
   }
 }

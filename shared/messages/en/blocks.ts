@@ -78,7 +78,9 @@ export const blocks = {
     foot: 'A line you do not know is not a line that passed. A draft record looks at its own mix.',
     nearby: {
       title: 'What lies beside it',
-      text: 'No water, well, house, hive or neighbour is written down for {code}, so no distance is looked at.',
+      text: 'No site to keep clear of is written down on this farm, so no distance is looked at for {code}.',
+      within: 'The distance kept round {sites} reaches into {code}, as drawn.',
+      clear: 'No distance that is written down reaches into {code}, as drawn. What nobody wrote down may lie there all the same.',
     },
     status: {
       title: 'Land status',

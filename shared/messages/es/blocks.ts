@@ -78,7 +78,9 @@ export const blocks = {
     foot: 'Lo que no se sabe no cuenta como en regla. Cada registro en borrador mira su propia mezcla.',
     nearby: {
       title: 'Lo que hay al lado',
-      text: 'No hay agua, pozo, casa, colmena ni vecino anotado para {code}, así que no se mira ninguna distancia.',
+      text: 'En esta finca no hay anotado ningún lugar del que guardar distancia, así que no se mira ninguna para {code}.',
+      within: 'La distancia que se guarda alrededor de {sites} entra en {code}, según el dibujo.',
+      clear: 'Ninguna distancia anotada entra en {code}, según el dibujo. Lo que nadie anotó puede estar ahí igualmente.',
     },
     status: {
       title: 'Estado de la tierra',
