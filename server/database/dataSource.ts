@@ -6,6 +6,7 @@ import { WholeRecords1764600000000 } from '../../migrations/1764600000000-WholeR
 import { AddAttachments1764601000000 } from '../../migrations/1764601000000-AddAttachments.ts'
 import { FindInRegister1764602000000 } from '../../migrations/1764602000000-FindInRegister.ts'
 import { NarrowAccess1764603000000 } from '../../migrations/1764603000000-NarrowAccess.ts'
+import { SayWhatReplaced1764630000000 } from '../../migrations/1764630000000-SayWhatReplaced.ts'
 import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindBySubject.ts'
 import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBlocks.ts'
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
@@ -46,6 +47,7 @@ export function createOwnerSource(url: string): DataSource {
       FindBySubject1764604000000,
       WholeBlocks1764610000000,
       AddGround1764620000000,
+      SayWhatReplaced1764630000000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -21,10 +21,11 @@ function rateInLabelUnit(component: SheetComponent, share: string, limit: Limit)
   return convertQuantity({ value: writeDecimal(applied), unit: from }, limit.unit)
 }
 /**
- * The most a label allows on a hectare, against what the sheet puts there (`share` of it, once the amount applied is written).
+ * The most a label allows on a hectare, against what the sheet puts there: `share` of it on the line that got most, named by its block's `code`
+ * where the lines differ.
  * @returns null where the label sets no such limit.
  */
-export function judgeLabelRate(material: FactMaterial, component: SheetComponent, share: string, about: string): Check | null {
+export function judgeLabelRate(material: FactMaterial, component: SheetComponent, { share, code }: { share: string; code: string | null }, about: string): Check | null {
   const limit = material.label?.maxRate
   if (!limit) return null
   const base = { code: 'label.rate', rests: 'label', title: words('checks.labelRate.title'), source: labelSource(material), about } as const
@@ -35,11 +36,11 @@ export function judgeLabelRate(material: FactMaterial, component: SheetComponent
     return buildCheck({ ...base, verdict: 'unknown', text: words(id, named) })
   }
   const isOver = settle(value).gt(limit.value)
-  const params = { ...named, value: roundForReader(value, [limit.value]) }
+  const params = { ...named, value: roundForReader(value, [limit.value]), ...(code !== null && { code }) }
   return buildCheck({
     ...base,
     verdict: isOver ? 'stop' : 'pass',
-    text: words(isOver ? 'checks.labelRate.over' : 'checks.labelRate.within', params),
+    text: words(`checks.labelRate.${isOver ? 'over' : 'within'}${code === null ? '' : 'On'}` as const, params),
     figure: words('checks.figure.amount', { value: params.value, unit: limit.unit }),
     band: { low: null, high: params.limit, value: params.value, unit: limit.unit },
   })

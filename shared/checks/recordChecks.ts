@@ -1,5 +1,5 @@
 import type { Check } from '../contract/record.ts'
-import { appliedShare } from './appliedShare.ts'
+import { asUsed } from './asUsed.ts'
 import { buildCheck, words } from './buildCheck.ts'
 import { judgeCounts } from './judgeCounts.ts'
 import { judgeDeltaT } from './judgeDeltaT.ts'
@@ -12,20 +12,24 @@ import { judgeStatus } from './judgeStatus.ts'
 import { judgeWind } from './judgeWind.ts'
 import type { FactMaterial, RecordFacts } from './recordFacts.ts'
 import { sortChecks } from './sortChecks.ts'
+import { unevenShare } from './unevenShare.ts'
 
 /** No rule set is kept yet, so nothing of the law was looked at; that is said, not passed over. */
 const lawNotKnown = (): Check =>
   buildCheck({ code: 'law.rules', verdict: 'unknown', rests: 'law', title: words('checks.law.title'), text: words('checks.law.none') })
 
-function checksOfComponent(facts: RecordFacts, index: number, share: string): (Check | null)[] {
+function checksOfComponent(facts: RecordFacts, index: number): (Check | null)[] {
   const written = facts.content.components[index]
-  const sheet = facts.sheet.components[index]
+  const planned = facts.sheet.components[index]
   const material = facts.materials.find((one) => one.id === written?.materialId)
-  if (!written || !sheet || !material) return []
+  if (!written || !planned || !material) return []
+  const sheet = asUsed(planned, written.used)
+  const most = unevenShare(facts, sheet !== planned)
+  const code = facts.blocks.find(({ id }) => id === most.blockId)?.code ?? null
   const about = `component:${index}`
   const lot = facts.lots.find((one) => one.id === written.lotId)
   return [
-    judgeLabelRate(material, sheet, share, about),
+    judgeLabelRate(material, sheet, { share: most.share, code }, about),
     judgeLabelStrength(material, sheet, facts.sheet, about),
     judgeStatus(material, about),
     lot
@@ -52,13 +56,12 @@ function checksOfLots({ content, sheet, lots }: RecordFacts): Check[] {
  * moment of the judgement is `facts.now`. A half-written record gives "not known" where a figure is missing, never a pass.
  */
 export function recordChecks(facts: RecordFacts): Check[] {
-  const share = appliedShare(facts)
   const materials = facts.content.components
     .map(({ materialId }) => facts.materials.find((one) => one.id === materialId))
     .filter((one): one is FactMaterial => one !== undefined)
   const found = [
     lawNotKnown(),
-    ...facts.content.components.flatMap((_, index) => checksOfComponent(facts, index, share)),
+    ...facts.content.components.flatMap((_, index) => checksOfComponent(facts, index)),
     judgeReEntry(facts, materials),
     judgePreHarvest(facts, materials),
     judgeWind(facts.content),

@@ -17,7 +17,7 @@ export interface FactContent {
   method: Method
   lines: readonly FactLine[]
   /** In the order of `sheet.components`. */
-  components: readonly { materialId: string; lotId: string | null }[]
+  components: readonly { materialId: string; lotId: string | null; used?: Pick<KnownAmount, 'value' | 'unit'> | null }[]
   weather: Pick<Weather, 'wind' | 'air' | 'humidity'> | null
 }
 

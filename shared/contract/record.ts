@@ -130,5 +130,8 @@ export const checkCodeAnswerSchema = z.object({
   version: z.number().int().nullable(),
   signedAt: z.string().nullable(),
   digest: z.string().nullable(),
+  /** The version that stands now, and whether the record was taken back. */
+  latestVersion: z.number().int().nullable(),
+  withdrawn: z.boolean().nullable(),
 })
 export type CheckCodeAnswer = z.infer<typeof checkCodeAnswerSchema>

@@ -1,7 +1,7 @@
 import { ExactDecimal } from './exactDecimal.ts'
 
 export type QuantityProblem = {
-  id: 'number.required' | 'number.format' | 'number.precision' | 'number.range'
+  id: 'number.required' | 'number.ambiguous' | 'number.format' | 'number.precision' | 'number.range'
   params: Record<string, string | number>
 }
 export type ParsedQuantity = { ok: true; value: string } | { ok: false; problem: QuantityProblem }
@@ -15,12 +15,14 @@ const FRACTION_SIGNS: Readonly<Record<string, readonly [number, number]>> = {
 }
 const DECIMAL = /^(\d*)(?:[.,](\d+))?$/
 const GROUPED = /^\d{1,3}(?:[ \u00A0\u202F]\d{3})+(?:[.,]\d+)?$/
+const GROUPED_BY_COMMA = /^[1-9]\d{0,2},\d{3}$/
 const SIGN_FRACTION = /^(\d*) ?([½¼¾⅓⅔⅕⅖⅗⅘⅙⅚⅛⅜⅝⅞])$/
 const TYPED_FRACTION = /^(?:(\d+) )?(\d{1,4}) ?[/\u2044] ?(\d{1,4})$/
 
 /**
  * A number as a person types it, as the plain decimal text that is stored: `1.5`, `1,5`, `½`, `1½`, `1 1/2`, `1 200`.
- * Comma and point both stand for the decimal mark, so one text has one reading in every language; trailing zeros are kept.
+ * Comma and point both stand for the decimal mark, so one text has one reading in every language; trailing zeros are kept. Only a comma before
+ * three last digits (`1,234`) is asked about: in English it is a thousand, and nobody should get a thousandth of a dose or a thousandfold.
  * At most 7 digits before the mark and 4 after; a fraction that needs more (⅓) is refused, not rounded.
  * @param signed true where the number may be below zero (temperatures).
  */
@@ -29,6 +31,7 @@ export function parseQuantityText(text: string, { signed = false }: { signed?: b
   const typed = text.slice(0, 200).replace(/^[\s\u00A0\u202F]+|[\s\u00A0\u202F]+$/g, '')
   if (typed === '') return { ok: false, problem: { id: 'number.required', params: {} } }
   const isNegative = signed && /^[-\u2212]/.test(typed)
+  if (GROUPED_BY_COMMA.test(typed)) return { ok: false, problem: { id: 'number.ambiguous', params: { ...params, whole: typed.replace(',', ''), decimal: typed.replace(',', '.') } } }
   const digits = readUnsigned(isNegative ? typed.slice(1) : typed)
   if (digits === null) return { ok: false, problem: { id: 'number.format', params } }
   const [whole = '', decimals = ''] = digits.split('.')

@@ -23,7 +23,7 @@ const isBad = (text: string, signed = false): boolean => text.trim() !== '' && !
 function positiveGap(text: string, zero: MessageId = 'recordForm.gap.aboveZero'): MessageId | null {
   if (text.trim() === '') return null
   const read = parseQuantityText(text)
-  if (!read.ok) return 'records.gap.number'
+  if (!read.ok) return read.problem.id === 'number.ambiguous' ? 'records.gap.ambiguous' : 'records.gap.number'
   return Number(read.value) > 0 ? null : zero
 }
 
@@ -137,11 +137,6 @@ function lineSignGaps(line: LineDraft, index: number, { sheet, zone }: GapFacts)
   }
 }
 
-function lotGaps({ components }: RecordDraft): Gaps {
-  const missing = components.flatMap(({ lotId }, index) => (lotId === '' ? [`components.${index}.lotId`] : []))
-  return Object.fromEntries(missing.map((path) => [path, 'records.sign.needLot' as const]))
-}
-
 /** What keeps a record from being signed, by field: never what a check says. */
 export function signGaps(facts: GapFacts & { hasStops: boolean }): Gaps {
   const { draft, sheet, hasStops } = facts
@@ -151,7 +146,6 @@ export function signGaps(facts: GapFacts & { hasStops: boolean }): Gaps {
     ...refused(facts),
     ...(lines.length === 0 && { lines: 'records.sign.needBlock' }),
     ...(!hasMix && { components: 'records.sign.needMix' }),
-    ...lotGaps(draft),
     ...countsNeeded(sheet),
     ...Object.assign({}, ...lines.map((line, index) => lineSignGaps(line, index, facts))) as Gaps,
     ...unreadable(draft),

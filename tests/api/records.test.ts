@@ -317,6 +317,16 @@ describe('a lot', () => {
   })
 })
 
+describe('an ingredient of no lot', () => {
+  it('is asked about once and signed with its reason: what was done can be recorded', async () => {
+    const input = buildRecord({ ...things, lotId: null })
+    await applicator.post(address()).send(input).expect(201)
+    expect(await sign(applicator, input.id)).toMatchObject({ status: 422, body: { acknowledgeable: true, errors: [{ path: 'components.0.lotId', code: 'lot.missing' }] } })
+    const done = await sign(applicator, input.id, [{ code: 'lot.missing', reason: 'Given by a neighbour from an unmarked jar' }]).expect(200)
+    expect(done.body).toMatchObject({ state: 'signed', checks: expect.arrayContaining([expect.objectContaining({ code: 'lot.none', verdict: 'unknown' })]) })
+  })
+})
+
 describe('a check code', () => {
   it('tells an outsider that the entry stands, and nothing of what it says', async () => {
     const { body } = await signed(applicator)
@@ -324,7 +334,10 @@ describe('a check code', () => {
     const code = digest.slice(0, 20).replace(/(.{4})/g, '$1 ').trim()
     const { default: supertest } = await import('supertest')
     const found = await supertest(house.app).get(`/api/check/${encodeURIComponent(code)}`)
-    expect(found.body).toEqual({ found: true, number: body['number'], seq: body['seq'], version: 1, signedAt: body['signedAt'], digest })
+    expect(found.body).toEqual({ found: true, number: body['number'], seq: body['seq'], version: 1, signedAt: body['signedAt'], digest, latestVersion: 1, withdrawn: false })
+    await manager.post(address(`/${String(body['id'])}/withdraw`)).send({ reason: 'Entered twice' }).expect(200)
+    const since = await supertest(house.app).get(`/api/check/${encodeURIComponent(code)}`)
+    expect(since.body).toMatchObject({ found: true, version: 1, latestVersion: 2, withdrawn: true })
     const missing = await supertest(house.app).get('/api/check/0000%200000%200000%200000%200000')
     expect(missing.body).toMatchObject({ found: false, number: null })
   })

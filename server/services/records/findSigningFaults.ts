@@ -20,7 +20,6 @@ export function findMissing(content: RecordContent, sheet: RecordSheet): FieldEr
       ...(endedAt === null ? [{ path: `lines.${index}.endedAt`, code: 'time.missing_end' }] : []),
     ]),
     ...(content.components.length === 0 ? [{ path: 'components', code: 'record.component_missing' }] : []),
-    ...content.components.flatMap(({ lotId }, index) => (lotId === null ? [{ path: `components.${index}.lotId`, code: 'lot.missing' }] : [])),
     ...(content.water === null && content.method !== 'solid' ? [{ path: 'water', code: 'record.water_missing' }] : []),
     ...(content.sprayerId === null && content.components.some(({ basis }) => basis.kind === 'perTank') ? [{ path: 'sprayerId', code: 'sprayer.needed' }] : []),
   ]
@@ -29,7 +28,7 @@ export function findMissing(content: RecordContent, sheet: RecordSheet): FieldEr
 }
 
 /**
- * What is unlikely about signing this: each stop, more on the land than was in the mix, and a very late entry. A reason for `record.stop` covers every
+ * What is unlikely about signing this: each stop, an ingredient of no lot, more on the land than was in the mix, and a very late entry. A reason for `record.stop` covers every
  * stop, a reason for a check's own code that one.
  */
 export function findUnlikely(
@@ -46,7 +45,8 @@ export function findUnlikely(
   const end = lastEnd(content)
   const days = end === null ? 0 : Math.floor((now.getTime() - Date.parse(end)) / DAY_MS)
   const late = days > LATE_DAYS && !given.has('record.late') ? [{ path: 'lines', code: 'record.late', params: { days } }] : []
-  return [...stops, ...findTooMuch(sheet).filter(({ code }) => !given.has(code)), ...late]
+  const untraced = given.has('lot.missing') ? [] : content.components.flatMap(({ lotId }, index) => (lotId === null ? [{ path: `components.${index}.lotId`, code: 'lot.missing' }] : []))
+  return [...stops, ...untraced, ...findTooMuch(sheet).filter(({ code }) => !given.has(code)), ...late]
 }
 
 function findTooMuch({ appliedL, totalL, appliedKg, totalKg }: RecordSheet): FieldError[] {

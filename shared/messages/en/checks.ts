@@ -18,6 +18,8 @@ export const checks = {
     title: 'Rate',
     over: '{material}: {value}\u00A0{unit}. The label allows at most {limit}\u00A0{unit}.',
     within: '{material}: {value}\u00A0{unit}. Label: at most {limit}\u00A0{unit}.',
+    overOn: '{material}: {value}\u00A0{unit} on {code}, which got most. The label allows at most {limit}\u00A0{unit}.',
+    withinOn: '{material}: {value}\u00A0{unit} on {code}, which got most. Label: at most {limit}\u00A0{unit}.',
     noAmount: '{material}: no rate yet. Label: at most {limit}\u00A0{unit}.',
     otherMeasure: '{material}: the label allows at most {limit}\u00A0{unit}, and the mix does not measure it that way.',
   },

@@ -169,7 +169,7 @@ export const problems = {
   lot: {
     unknown: 'There is no such lot on this farm.',
     other_material: 'Lot {code} holds another material.',
-    missing: 'Which lot did it come from?',
+    missing: 'An ingredient names no lot: nothing is drawn down, and it cannot be traced. Choose its lot, or say why there is none.',
     short: 'Lot {code} has {left} {unit} left; this takes {needed} {unit}. Correct its count or what went in, or say why: the lot is then empty.',
     dimension: 'Lot {code} is counted in {unit}; this amount cannot be taken from it.',
     expires_before: 'The use-by date lies before the day it was received.',

@@ -208,7 +208,6 @@ export const records = {
     needAmount: 'How much went on?',
     needBlock: 'Which block was it?',
     needMix: 'What went into the tank? Finish the mix under 1.',
-    needLot: 'Which lot did it come from?',
     lotShort: 'It holds less than this takes. Correct its count under Inputs, or choose another lot.',
     mend: 'Not signed: something above is missing. Nothing was lost.',
     wrongPassword: 'Not signed: the password does not match. Nothing was lost.',
@@ -220,6 +219,7 @@ export const records = {
   },
   gap: {
     number: 'Give a plain number, such as 12.5.',
+    ambiguous: 'A comma before three digits can be a thousand or a decimal. Write 1234 or 1.234.',
     unfit: 'This does not fit here.',
     time: 'There is no such time.',
   },

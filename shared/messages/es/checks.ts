@@ -18,6 +18,8 @@ export const checks = {
     title: 'Dosis',
     over: '{material}: {value}\u00A0{unit}. La etiqueta permite como máximo {limit}\u00A0{unit}.',
     within: '{material}: {value}\u00A0{unit}. Etiqueta: como máximo {limit}\u00A0{unit}.',
+    overOn: '{material}: {value}\u00A0{unit} en {code}, que recibió más. La etiqueta permite como máximo {limit}\u00A0{unit}.',
+    withinOn: '{material}: {value}\u00A0{unit} en {code}, que recibió más. Etiqueta: como máximo {limit}\u00A0{unit}.',
     noAmount: '{material}: aún sin dosis. Etiqueta: como máximo {limit}\u00A0{unit}.',
     otherMeasure: '{material}: la etiqueta permite como máximo {limit}\u00A0{unit}, y la mezcla no lo mide así.',
   },

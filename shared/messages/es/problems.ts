@@ -169,7 +169,7 @@ export const problems = {
   lot: {
     unknown: 'Ese lote no existe en esta finca.',
     other_material: 'El lote {code} es de otro material.',
-    missing: '¿De qué lote salió?',
+    missing: 'Un ingrediente no nombra su lote: nada se descuenta y no se puede rastrear. Elija el lote o diga por qué no hay ninguno.',
     short: 'Al lote {code} le quedan {left} {unit} y esto toma {needed} {unit}. Corrija su recuento o lo que entró, o diga por qué: el lote queda entonces vacío.',
     dimension: 'El lote {code} se cuenta en {unit}; esta cantidad no se puede sacar de él.',
     expires_before: 'La fecha límite es anterior al día en que se recibió.',

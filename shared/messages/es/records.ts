@@ -208,7 +208,6 @@ export const records = {
     needAmount: '¿Cuánto se aplicó?',
     needBlock: '¿Qué parcela fue?',
     needMix: '¿Qué entró en el tanque? Termine la mezcla en el paso 1.',
-    needLot: '¿De qué lote salió?',
     lotShort: 'Tiene menos de lo que esto toma. Corrija su recuento en Insumos o elija otro lote.',
     mend: 'Sin firmar: falta algo más arriba. No se ha perdido nada.',
     wrongPassword: 'Sin firmar: la contraseña no coincide. No se ha perdido nada.',
@@ -220,6 +219,7 @@ export const records = {
   },
   gap: {
     number: 'Indique un número sencillo, como 12,5.',
+    ambiguous: 'Una coma ante tres cifras puede ser un millar o un decimal. Escriba 1234 o 1.234.',
     unfit: 'Esto no sirve aquí.',
     time: 'Esa hora no existe.',
   },

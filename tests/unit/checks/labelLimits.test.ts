@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { appliedShare } from '../../../shared/checks/appliedShare.ts'
+import { recordChecks } from '../../../shared/checks/recordChecks.ts'
+import { unevenShare } from '../../../shared/checks/unevenShare.ts'
 import { judgeLabelRate } from '../../../shared/checks/judgeLabelRate.ts'
 import { judgeLabelStrength } from '../../../shared/checks/judgeLabelStrength.ts'
 import { convertQuantity } from '../../../shared/units/convertQuantity.ts'
@@ -11,7 +12,7 @@ const rate = (value: string, unit: 'L/ha' | 'kg/ha' | 'flozUS/acre', perHa: stri
   judgeLabelRate(
     buildMaterial({ label: buildLabel({ maxRate: { value, unit } }) }),
     buildSheetComponent({ perHa, inKg, inL: inKg === null ? '3.75' : null, ...(perHa === null && { amount: null }) }),
-    share, 'component:0',
+    { share, code: null }, 'component:0',
   )
 
 describe('the most a label allows on a hectare', () => {
@@ -37,8 +38,8 @@ describe('the most a label allows on a hectare', () => {
 
   it('says not known without a rate, and nothing where the label is silent', () => {
     expect(rate('5', 'L/ha', null)).toMatchObject({ verdict: 'unknown', text: { id: 'checks.labelRate.noAmount' } })
-    expect(judgeLabelRate(buildMaterial({ label: buildLabel() }), buildSheetComponent(), '1', 'component:0')).toBeNull()
-    expect(judgeLabelRate(buildMaterial(), buildSheetComponent(), '1', 'component:0')).toBeNull()
+    expect(judgeLabelRate(buildMaterial({ label: buildLabel() }), buildSheetComponent(), { share: '1', code: null }, 'component:0')).toBeNull()
+    expect(judgeLabelRate(buildMaterial(), buildSheetComponent(), { share: '1', code: null }, 'component:0')).toBeNull()
   })
 
   it('names the label and its part as the source', () => {
@@ -54,7 +55,7 @@ describe('the most a label allows on a hectare', () => {
       fc.property(fc.integer({ min: 1, max: 9_999_999 }), fc.constantFrom(...VOLUME_RATE_UNITS), (tenThousandths, unit) => {
         const value = `${Math.trunc(tenThousandths / 10_000)}.${String(tenThousandths % 10_000).padStart(4, '0')}`
         const perHa = convertQuantity({ value, unit }, 'L/ha')
-        const check = judgeLabelRate(buildMaterial({ label: buildLabel({ maxRate: { value, unit } }) }), buildSheetComponent({ perHa }), '1', 'x')
+        const check = judgeLabelRate(buildMaterial({ label: buildLabel({ maxRate: { value, unit } }) }), buildSheetComponent({ perHa }), { share: '1', code: null }, 'x')
         expect(check?.verdict).toBe('pass')
       }),
     )
@@ -94,32 +95,46 @@ describe('strength in the finished spray', () => {
   })
 })
 
-describe('share of the mix that went onto the land', () => {
-  const share = (amountsL: (string | null)[], totalL: number | null = 750, known: 'measured' | 'counted' | 'workedOut' = 'measured') =>
-    appliedShare({
-      content: {
-        ...buildFacts().content,
-        lines: amountsL.map((amountL) => ({ blockId: 'b1', startedAt: null, endedAt: null, amount: amountL === null ? null : { known } })),
-      },
-      sheet: buildSheet({ lines: amountsL.map((amountL) => ({ areaHa: 1, shareL: null, shareKg: null, amountL, amountKg: null })), totalL }),
-    })
+describe('the line that got most', () => {
+  const most = (lines: { blockId?: string; shareL: string; amountL: string | null; known?: 'measured' | 'counted' | 'workedOut' }[], isUsedKnown = false) => unevenShare({
+    content: {
+      ...buildFacts().content,
+      lines: lines.map(({ blockId = 'b1', amountL, known = 'measured' }) => ({ blockId, startedAt: null, endedAt: null, amount: amountL === null ? null : { known } })),
+    },
+    sheet: buildSheet({ lines: lines.map(({ shareL, amountL }) => ({ areaHa: 1, shareL, shareKg: null, amountL, amountKg: null })) }),
+  }, isUsedKnown)
 
-  it.each([
-    { name: 'one line', amountsL: ['375'], expected: '0.5' },
-    { name: 'two lines', amountsL: ['300', '75'], expected: '0.5' },
-    { name: 'a line without an amount', amountsL: ['300', null], expected: '1' },
-    { name: 'no line', amountsL: [], expected: '1' },
-  ])('$name gives $expected', ({ amountsL, expected }) => {
-    expect(share(amountsL)).toBe(expected)
+  it('is judged alone where one line got more for its share than another', () => {
+    expect(most([{ shareL: '375', amountL: '705' }, { blockId: 'b2', shareL: '375', amountL: '12.5' }])).toEqual({ share: '1.88', blockId: 'b1' })
   })
 
-  it('does not take a figure of our own, rounded, for something seen', () => {
-    expect(share(['750.04'], 750, 'workedOut')).toBe('1')
-    expect(share(['375'], 750, 'counted')).toBe('0.5')
+  it('names no block where all got alike, or where there is one', () => {
+    expect(most([{ shareL: '750', amountL: '375' }])).toEqual({ share: '0.5', blockId: null })
+    expect(most([{ shareL: '500', amountL: '250' }, { blockId: 'b2', shareL: '250', amountL: '125' }])).toEqual({ share: '0.5', blockId: null })
   })
 
-  it('is whole while the sheet has no total', () => {
-    expect(share(['300'], null)).toBe('1')
-    expect(share(['300'], 0)).toBe('1')
+  it('counts a line without an amount, and a figure of our own, as its share', () => {
+    expect(most([{ shareL: '400', amountL: '300' }, { blockId: 'b2', shareL: '350', amountL: null }])).toEqual({ share: '1', blockId: 'b2' })
+    expect(most([{ shareL: '750', amountL: '750.04', known: 'workedOut' }]).share).toBe('1')
+    expect(most([{ shareL: '750', amountL: '375', known: 'counted' }]).share).toBe('0.5')
+  })
+
+  it('looks only at how it was spread once it is known what went into the tank', () => {
+    expect(most([{ shareL: '750', amountL: '375' }], true).share).toBe('1')
+    expect(most([{ shareL: '100', amountL: '150' }, { blockId: 'b2', shareL: '100', amountL: '50' }], true)).toEqual({ share: '1.5', blockId: 'b1' })
+  })
+
+  it('is whole while nothing has a share', () => {
+    expect(most([])).toEqual({ share: '1', blockId: null })
+  })
+})
+
+describe('what was really used', () => {
+  it('is judged instead of what was planned, on the line that got most', () => {
+    const material = buildMaterial({ label: buildLabel({ maxRate: { value: '6', unit: 'L/ha' }, maxStrengthPct: '2' }) })
+    const content = { ...buildFacts().content, components: [{ materialId: 'm1', lotId: 'l1', used: { value: '7500', unit: 'mL' as const } }] }
+    const found = recordChecks(buildFacts({ content, materials: [material] }))
+    expect(found.find(({ code }) => code === 'label.rate')).toMatchObject({ verdict: 'stop', text: { id: 'checks.labelRate.over', params: { value: 10 } } })
+    expect(found.find(({ code }) => code === 'label.strength')).toMatchObject({ verdict: 'pass', text: { params: { value: 1 } } })
   })
 })

@@ -21,6 +21,12 @@ describe('parseQuantityText', () => {
     expect(parseQuantityText(text)).toEqual({ ok: false, problem: { id: 'number.format', params: { text } } })
   })
 
+  it('asks about a comma before three last digits, and about no other', () => {
+    expect(parseQuantityText('1,234')).toEqual({ ok: false, problem: { id: 'number.ambiguous', params: { text: '1,234', whole: '1234', decimal: '1.234' } } })
+    expect(parseQuantityText('12,500')).toMatchObject({ ok: false, problem: { id: 'number.ambiguous' } })
+    for (const text of ['0,125', '1,23', '1,2345', '1.234', '1234,567']) expect(parseQuantityText(text).ok, text).toBe(true)
+  })
+
   it.each(['', ' ', '\u00A0'])('asks for a number where %o is typed', (text) => {
     expect(parseQuantityText(text)).toEqual({ ok: false, problem: { id: 'number.required', params: {} } })
   })

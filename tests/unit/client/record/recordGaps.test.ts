@@ -53,7 +53,6 @@ describe('what keeps a record from being signed', () => {
     { name: 'an end before the start', line: { end: { time: '06:00', offset: '', nextDay: false } }, gap: { 'lines.0.endedAt': 'records.sign.endBeforeStart' } },
     { name: 'a time the clock skipped', line: { start: { date: '2026-03-08', time: '02:30', offset: '' } }, gap: { 'lines.0.startedAt': 'records.gap.time' } },
     { name: 'an amount measured and not written', line: { amount: { value: '', unit: 'L', known: 'measured' } }, gap: { 'lines.0.amount': 'records.sign.needAmount' } },
-    { name: 'no lot', over: { components: [buildComponent({ lotId: '' })] }, gap: { 'components.0.lotId': 'records.sign.needLot' } },
   ])('$name', ({ line = {}, over = {}, gap }) => {
     expect(signGaps({ ...factsOf(happened(line, over)), hasStops: false })).toEqual(gap)
   })
