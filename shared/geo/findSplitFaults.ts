@@ -7,6 +7,8 @@ import { measurePolygon } from './measurePolygon.ts'
 
 /** What the parts may differ from the whole by, and what two of them may share. */
 const MOST_SHARE = 1e-6
+/** A part may lie beyond the outline by slivers of this width, metres: less than any outline is drawn to. */
+const SLIVER_M = 0.05
 /** A corner this near an edge, in grid units of about a centimetre, was set on it: edges are great circles, the grid is not. */
 const NEAR_UNITS = 4
 
@@ -19,24 +21,29 @@ export interface SplitFault {
 
 /**
  * Whether valid boundaries cut a valid whole into parts: each in it, none over another, and together all of it within 1 ppm.
- * The corners where a cut meets the outline lie on the grid of 1e-7 degrees and so up to a grid step off the edge; the whole is
- * taken with those corners in its edges, so that this step is not counted as land lost or won.
+ * The corners where a cut meets the outline lie on the grid of 1e-7 degrees and so beside the edge; the whole counts as drawn, or
+ * with those corners in its edges, so that a grid step is not counted as land lost or won.
  */
 export function findSplitFaults(whole: Boundary, parts: readonly Boundary[]): SplitFault[] {
   const cut = withCorners(whole, parts.flatMap(listCorners))
-  const wholeM2 = measurePolygon(cut).areaM2
+  const wholeM2 = measurePolygon(whole).areaM2
   const mostM2 = wholeM2 * MOST_SHARE
   if (parts.some((part, index) => areTooFine(part, cut) || parts.slice(index + 1).some((other) => areTooFine(part, other)))) {
     return [{ part: null, code: 'split.too_fine', params: {} }]
   }
-  const areas = parts.map((part) => measurePolygon(part).areaM2)
-  const faults: SplitFault[] = parts.flatMap((part, index): SplitFault[] => [
-    ...((areas[index] ?? 0) - sharedM2(part, cut) > mostM2 ? [{ part: index, code: 'split.outside' as const, params: {} }] : []),
-    ...parts.slice(0, index).flatMap((other, place) => (sharedM2(part, other) > mostM2 ? [{ part: index, code: 'split.overlap' as const, params: { part: place + 1 } }] : [])),
-  ])
+  const measures = parts.map(measurePolygon)
+  const faults: SplitFault[] = parts.flatMap((part, index): SplitFault[] => {
+    const { areaM2 = 0, perimeterM = 0 } = measures[index] ?? {}
+    const outsideM2 = areaM2 - sharedM2(part, cut)
+    return [
+      ...(outsideM2 > mostM2 && outsideM2 > perimeterM * SLIVER_M ? [{ part: index, code: 'split.outside' as const, params: {} }] : []),
+      ...parts.slice(0, index).flatMap((other, place) => (sharedM2(part, other) > mostM2 ? [{ part: index, code: 'split.overlap' as const, params: { part: place + 1 } }] : [])),
+    ]
+  })
   if (faults.length > 0) return faults
-  const missingM2 = wholeM2 - areas.reduce((sum, areaM2) => sum + areaM2, 0)
-  return Math.abs(missingM2) > mostM2 ? [{ part: null, code: 'split.sum', params: { areaM2: Number(missingM2.toFixed(1)) } }] : []
+  const sumM2 = measures.reduce((sum, { areaM2 }) => sum + areaM2, 0)
+  const missingM2 = [wholeM2 - sumM2, measurePolygon(cut).areaM2 - sumM2]
+  return missingM2.every((missing) => Math.abs(missing) > mostM2) ? [{ part: null, code: 'split.sum', params: { areaM2: Number((missingM2[0] ?? 0).toFixed(1)) } }] : []
 }
 
 function listCorners(geometry: Boundary): Position[] {

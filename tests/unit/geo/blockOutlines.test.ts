@@ -1,7 +1,10 @@
+import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { findSplitFaults } from '../../../shared/geo/findSplitFaults.ts'
 import { isSameOutline } from '../../../shared/geo/isSameOutline.ts'
+import { splitBoundary } from '../../../shared/geo/splitBoundary.ts'
 import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
+import { anyBoundary, anyLine, lineAcross, RUNS } from './anyBoundary.ts'
 
 const polygon = (...rings: Position[][]): Boundary => ({ type: 'Polygon', coordinates: rings })
 const box = (west: number, south: number, east: number, north: number): Position[] => [[west, south], [east, south], [east, north], [west, north], [west, south]]
@@ -34,6 +37,13 @@ describe('findSplitFaults', () => {
   const east = polygon([low, b, c, high, low])
 
   it('takes parts whose cut ends off an edge by less than the grid', () => { expect(findSplitFaults(leaning, [west, east])).toEqual([]) })
+  it('takes every cut that the tool of the map makes', () => {
+    fc.assert(fc.property(anyBoundary, anyLine, (boundary, line) => {
+      const { pieces, findings } = splitBoundary(boundary.geometry, lineAcross(boundary, line))
+      fc.pre(findings.length === 0 && pieces.length > 1)
+      expect(findSplitFaults(boundary.geometry, pieces)).toEqual([])
+    }), { ...RUNS, numRuns: 120 })
+  })
   it.each([
     { name: 'a part twice', parts: [west, west, east], code: 'split.overlap' },
     { name: 'a part missing', parts: [west], code: 'split.sum' },
