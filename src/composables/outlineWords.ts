@@ -8,16 +8,12 @@ const OWN_WORDS: Partial<Record<string, string>> = {
   'geometry.hole_outside': 'shapes.finding.hole_outside',
   'geometry.holes_overlap': 'shapes.finding.holes_overlap',
   'geometry.parts_overlap': 'shapes.finding.parts_overlap',
-  'split.too_short': 'shapes.finding.too_short',
-  'split.crosses_itself': 'shapes.finding.crosses_itself',
-  'split.ends_inside': 'shapes.finding.ends_inside',
-  'split.misses': 'shapes.finding.misses',
-  'split.not_possible': 'shapes.finding.not_possible',
 }
 /** Codes whose words the refusals hold already. */
 const KNOWN = new Set([
   'geometry.type', 'geometry.out_of_range', 'geometry.maybe_swapped', 'geometry.degrees_needed', 'geometry.crs', 'geometry.not_closed', 'geometry.too_few_points',
-  'geometry.area_zero', 'geometry.spike', 'geometry.too_many_points', 'geometry.crosses_antimeridian',
+  'geometry.area_zero', 'geometry.spike', 'geometry.too_many_points', 'geometry.crosses_antimeridian', 'geometry.too_fine',
+  'split.too_short', 'split.crosses_itself', 'split.ends_inside', 'split.misses', 'split.not_possible',
 ])
 
 /** What is impossible in an outline, in words. */

@@ -142,6 +142,11 @@ export const problems = {
     reopen_used: 'What came of it has changed since, or has records, plantings, beds or events of its own. It stays as it is.',
   },
   split: {
+    too_short: 'Set at least two points of the line.',
+    crosses_itself: 'The line crosses itself.',
+    ends_inside: 'End {end} of the line lies inside the block. Draw on to beyond its edge.',
+    misses: 'The line does not part the block.',
+    not_possible: 'Along this line the pieces cannot be kept apart exactly. Move it a little.',
     outside: 'Part of this lies outside the block. Cut inside its outline.',
     overlap: 'This lies over part {part}. Give the ground to one of them.',
     sum: 'The parts leave {areaM2} m² of the block over. Give that ground to one of them.',

@@ -121,11 +121,6 @@ export const shapes = {
   undone: 'Undone: {codes} as before.',
   undoFailed: 'It cannot be undone any more: {why}',
   finding: {
-    too_short: 'Set at least two points of the line.',
-    crosses_itself: 'The line crosses itself.',
-    ends_inside: 'End {end} of the line lies inside the block. Draw on to beyond its edge.',
-    misses: 'The line does not part the block.',
-    not_possible: 'Along this line the pieces cannot be kept apart exactly. Move it a little.',
     hole_outside: 'The hole lies outside the outline or crosses it.',
     holes_overlap: 'Two holes run into one another.',
     parts_overlap: 'Two parts run into one another.',

@@ -142,6 +142,11 @@ export const problems = {
     reopen_used: 'Lo que salió de ella cambió desde entonces, o tiene registros, plantaciones, bancales o labores propias. Se queda como está.',
   },
   split: {
+    too_short: 'Ponga al menos dos puntos de la línea.',
+    crosses_itself: 'La línea se cruza consigo misma.',
+    ends_inside: 'El extremo {end} de la línea queda dentro de la parcela. Llévela más allá del borde.',
+    misses: 'La línea no divide la parcela.',
+    not_possible: 'Por esta línea los trozos no se pueden separar con exactitud. Muévala un poco.',
     outside: 'Parte de esto queda fuera de la parcela. Corte dentro de su contorno.',
     overlap: 'Esto queda sobre la parte {part}. Dé el terreno a una sola.',
     sum: 'Las partes dejan {areaM2} m² de la parcela sin repartir. Dé ese terreno a una de ellas.',

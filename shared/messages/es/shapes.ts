@@ -121,11 +121,6 @@ export const shapes = {
   undone: 'Deshecho: {codes}, como antes.',
   undoFailed: 'Ya no se puede deshacer: {why}',
   finding: {
-    too_short: 'Ponga al menos dos puntos de la línea.',
-    crosses_itself: 'La línea se cruza consigo misma.',
-    ends_inside: 'El extremo {end} de la línea queda dentro de la parcela. Llévela más allá del borde.',
-    misses: 'La línea no divide la parcela.',
-    not_possible: 'Por esta línea los trozos no se pueden separar con exactitud. Muévala un poco.',
     hole_outside: 'El hueco queda fuera del contorno o lo cruza.',
     holes_overlap: 'Dos huecos se montan uno en otro.',
     parts_overlap: 'Dos partes se montan una en otra.',
