@@ -13,6 +13,7 @@ export async function openNewFarm(context: BrowserContext): Promise<string> {
   const answer = await context.request.post('/api/farms', {
     headers: OURS, data: { id: randomUUID(), name: 'Import farm', zone: 'America/Los_Angeles', seasonStart: '01-01' },
   })
+  expect(answer.status(), await answer.text()).toBe(201)
   const { id } = farmSchema.parse(await answer.json())
   await context.addInitScript((farmId) => { localStorage.setItem('drenchleaf.farm', farmId) }, id)
   return id
