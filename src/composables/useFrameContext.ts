@@ -6,6 +6,7 @@ import { civilTimeIn } from '../../shared/time/civilDate.ts'
 import { useFileQueue } from '../stores/fileQueue.ts'
 import { useOutbox } from '../stores/outbox.ts'
 import { useSession } from '../stores/session.ts'
+import { useDrafts } from './useDrafts.ts'
 import { useFarm } from './useFarm.ts'
 
 /** What every page's head shows, from the session, the farm and the outbox; with the two sheets it can open. */
@@ -14,6 +15,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
   const outbox = useOutbox()
   const files = useFileQueue()
   const farm = useFarm(() => session.farmId)
+  const { drafts } = useDrafts(() => session.farmId)
   const { t } = useI18n()
   const keptOpen = ref(false)
   const moreOpen = ref(false)
@@ -23,7 +25,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
     if (waiting > 0) return { kind: 'needsYou', count: waiting }
     if (sending > 0) return { kind: 'sending', count: sending, of: Math.max(kept, sending) }
     if (kept > 0 || !outbox.online) return { kind: 'kept', count: kept, online: outbox.online }
-    return { kind: 'sent', at: outbox.lastSentAt === null ? null : civilTimeIn(farm.data.value?.zone ?? 'UTC', outbox.lastSentAt) }
+    return { kind: 'sent', drafts: drafts.value.length, at: outbox.lastSentAt === null ? null : civilTimeIn(farm.data.value?.zone ?? 'UTC', outbox.lastSentAt) }
   })
 
   const frame: FrameContext = {

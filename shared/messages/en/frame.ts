@@ -34,6 +34,7 @@ export const frame = {
   sync: {
     allSent: 'All sent',
     allSentAt: 'All sent {at}',
+    withDrafts: '{sent}, {count} draft here | {sent}, {count} drafts here',
     sending: 'Sending {count} of {of}',
     kept: '{count} kept, not sent yet',
     noSignal: 'No signal, {count} kept',

@@ -34,6 +34,7 @@ export const frame = {
   sync: {
     allSent: 'Todo enviado',
     allSentAt: 'Todo enviado {at}',
+    withDrafts: '{sent}, {count} borrador aquí | {sent}, {count} borradores aquí',
     sending: 'Enviando {count} de {of}',
     kept: '{count} por enviar',
     noSignal: 'Sin señal, {count} por enviar',

@@ -26,7 +26,9 @@ describe('RecordNumber', () => {
 
 describe('SyncBadge', () => {
   it.each([
-    [{ kind: 'sent', at: '06:41' }, 'All sent 06:41'],
+    [{ kind: 'sent', at: '06:41', drafts: 0 }, 'All sent 06:41'],
+    [{ kind: 'sent', at: null, drafts: 1 }, 'All sent, 1 draft here'],
+    [{ kind: 'sent', at: null, drafts: 3 }, 'All sent, 3 drafts here'],
     [{ kind: 'sending', count: 2, of: 5 }, 'Sending 2 of 5'],
     [{ kind: 'kept', count: 5, online: false }, 'No signal, 5 kept'],
     [{ kind: 'needsYou', count: 1 }, '1 needs you'],
