@@ -22,7 +22,6 @@ export const shapes = {
     undo: 'Undo',
     redo: 'Redo',
     toMap: 'Go to the map',
-    moveAll: 'Move the whole block',
   },
   said: {
     held: 'Corner taken up.',

@@ -22,7 +22,6 @@ export const shapes = {
     undo: 'Deshacer',
     redo: 'Rehacer',
     toMap: 'Ir al mapa',
-    moveAll: 'Mover toda la parcela',
   },
   said: {
     held: 'Esquina tomada.',
