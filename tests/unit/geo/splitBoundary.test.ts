@@ -4,6 +4,7 @@ import { checkBoundary } from '../../../shared/geo/checkBoundary.ts'
 import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
 import { measurePolygon } from '../../../shared/geo/measurePolygon.ts'
 import { findOverlaps } from '../../../shared/geo/findOverlaps.ts'
+import { findSplitFaults } from '../../../shared/geo/findSplitFaults.ts'
 import { splitBoundary } from '../../../shared/geo/splitBoundary.ts'
 import { uniteBoundaries } from '../../../shared/geo/uniteBoundaries.ts'
 import { anyBoundary, anyLine, anyRectangle, lineAcross, RUNS } from './anyBoundary.ts'
@@ -98,6 +99,7 @@ describe('splitBoundary on any outline', () => {
         if (findings.length > 0) return
         expect(pieces.length).toBeGreaterThan(1)
         expect(ppm(sumM2(pieces), areaM2(made.geometry))).toBeLessThan(1)
+        expect(findSplitFaults(made.geometry, pieces)).toEqual([])
         pieces.forEach((piece, index) => {
           expect(checkBoundary(piece)).toEqual({ geometry: piece, findings: [] })
           expect(findOverlaps(piece, pieces.slice(0, index).map((geometry) => ({ id: '', code: '', geometry }))).overlaps).toEqual([])
