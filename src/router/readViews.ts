@@ -1,6 +1,5 @@
 import type { Router } from 'vue-router'
-import { LATER_COMPONENTS } from '../components/laterPart.ts'
-import { LATER_PARTS } from '../views/frame/laterParts.ts'
+import { readLaterParts } from '../composables/laterPart.ts'
 import { routes } from './routes.ts'
 
 /** Where a browser has no idle callback: after the first page has settled. */
@@ -11,13 +10,14 @@ export function readViewsWhenIdle(router: Router): void {
   const stop = router.afterEach((to) => {
     if (to.meta.open === true) return
     stop()
-    if ('requestIdleCallback' in window) window.requestIdleCallback(readViews)
-    else setTimeout(readViews, WAIT_MS)
+    if ('requestIdleCallback' in window) window.requestIdleCallback(() => void readViews())
+    else setTimeout(() => void readViews(), WAIT_MS)
   })
 }
 
-function readViews(): void {
+async function readViews(): Promise<void> {
   const views = routes.flatMap(({ component }) => (typeof component === 'function' ? [component as () => Promise<unknown>] : []))
-  // What does not come now comes when it is opened.
-  for (const read of [...views, ...Object.values(LATER_COMPONENTS), ...Object.values(LATER_PARTS)]) void read().catch(() => undefined)
+  // What does not come now comes when it is opened. A view read says which parts of it come later.
+  await Promise.allSettled(views.map((read) => read()))
+  await readLaterParts()
 }
