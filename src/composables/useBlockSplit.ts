@@ -66,7 +66,10 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
   const corners = computed(() => (block.value === null ? [] : cornersOfShape(shapeOf(block.value.geometry))))
   const line = computed<readonly Position[]>(() => {
     if (by.value === 'line') return drawn.value
-    if (by.value === 'corners') return [from.value, to.value].flatMap((number) => corners.value[Number(number)]?.position ?? [] as Position[]) as Position[]
+    if (by.value === 'corners') return [from.value, to.value].flatMap((number) => {
+      const corner = corners.value[Number(number)]
+      return corner ? [corner.position] : []
+    })
     return lineOfShare(block.value, corners.value[Number(edge.value)], Number(share.value.replace(',', '.')))
   })
   const cut = computed(() => (block.value === null || line.value.length < 2 ? { pieces: [], findings: [] } : splitBoundary(block.value.geometry, line.value)))
@@ -91,7 +94,7 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
   }))
 
   const task = useTask(async (of: BlockWords, parts: { code: string; name: string; geometry: Boundary }[]): Promise<Submitted<BlocksChanged> | undefined> => {
-    const withIds = parts.map((part) => ({ ...part, id: idOf(part.code) }))
+    const withIds = parts.map(({ geometry, ...part }) => ({ ...part, id: idOf(part.code), geometry: { ...geometry } }))
     try {
       return await submit({ kind: 'block.split', farmId: farmId.value, id: of.id, body: { revision: of.revision, parts: withIds } })
     } catch (error) {

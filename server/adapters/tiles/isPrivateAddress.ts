@@ -1,6 +1,6 @@
 import { BlockList, isIPv6 } from 'node:net'
 
-/** Networks that no public service answers from. @source IANA special-purpose address registries for IPv4 (RFC 6890) and IPv6. */
+/** Networks that no public service answers from. @source IANA special-use address registries for IPv4 (RFC 6890) and IPv6. */
 const V4 = [
   ['0.0.0.0', 8], ['10.0.0.0', 8], ['100.64.0.0', 10], ['127.0.0.0', 8], ['169.254.0.0', 16], ['172.16.0.0', 12], ['192.0.0.0', 24], ['192.0.2.0', 24],
   ['192.168.0.0', 16], ['198.18.0.0', 15], ['198.51.100.0', 24], ['203.0.113.0', 24], ['224.0.0.0', 4], ['240.0.0.0', 4],
