@@ -67,7 +67,7 @@ export function useBlockReshape(id: () => string, place: BlocksPlace): BlockResh
     try {
       const saved = await submit({
         kind: 'block.update', farmId: farmId.value, id: of.id,
-        body: { revision, geometry, note: note.trim() === '' ? null : note, acknowledged: asked.acknowledged() },
+        body: { revision, geometry: { ...geometry }, note: note.trim() === '' ? null : note, acknowledged: asked.acknowledged() },
       })
       await draft.discard()
       return saved

@@ -57,7 +57,7 @@ async function seedPeople(run: RunSql, farmId: string): Promise<SeedGround['peop
 async function seedGround(run: RunSql, { blocks, materials, lots }: SeedGround): Promise<void> {
   for (const block of blocks) {
     await run(
-      `INSERT INTO blocks (farm_id, id, code, name, crop, geometry, area_m2, perimeter_m, creation_digest, created_at) VALUES ($1, $2, $3, $4, $5, $6, $7, $8, $9, $10)`,
+      `INSERT INTO blocks (farm_id, id, code, name, crop, geometry, area_m2, perimeter_m, creation_digest, created_at, from_ids, into_ids) VALUES ($1, $2, $3, $4, $5, $6, $7, $8, $9, $10, '{}', '{}')`,
       [block.farmId, block.id, block.code, block.name, block.crop, JSON.stringify(block.geometry), block.areaM2, block.perimeterM, block.creationDigest, block.createdAt],
     )
   }

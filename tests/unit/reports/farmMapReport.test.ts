@@ -28,13 +28,13 @@ describe('the map of a farm on paper', () => {
     for (const { code } of buildFarmMap().blocks) expect(map).toMatch(new RegExp(`\\b${code}\\b`))
     for (const words of ['Yard well, 30 m', 'Hives, 18 m', 'Brook Cottage, 20 m', 'Wenn Brook, 15 m', 'Hollow Lane']) expect(unspaced(map)).toContain(unspaced(words))
     const [alt = ''] = pdf.alts
-    expect(alt).toMatch(/^Map of Wennick Hollow at 1 : \d \d{3}, north up\. Blocks: A1 1\.00 ha; /)
+    expect(alt).toMatch(/^Map of Wennick Hollow at 1 : \d\s\d{3}, north up\. Blocks: A1 1\.00 ha; /)
     expect(alt).toContain('Yard well, 30 m')
   })
 
   it('has its scale, its key, north, the day, and tables of blocks and sites', () => {
     const [map = '', ...tables] = pdf.pages.map((text) => text.replaceAll(/\s+/g, ' '))
-    expect(map).toMatch(/1 : \d \d{3} at this size/)
+    expect(map).toMatch(/1 : \d\s\d{3} at this size/)
     for (const words of ['keep clear', 'building', '24 blocks, 23.87 ha as drawn', '16 June 2026']) expect(map).toContain(words)
     expect(tables.join(' ')).toContain('In all 23.87')
     expect(tables.join(' ')).toContain('Neighbour’s land neighbour’s crop not written down')

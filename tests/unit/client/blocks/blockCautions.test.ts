@@ -59,7 +59,7 @@ describe('outlineWords', () => {
   it.each([
     [{ code: 'geometry.self_intersection', params: { lon: 1, lat: 2, edgeA: 1, edgeB: 3 } }, 'Edge 1 crosses edge 3. Take a corner back, or go round another way.'],
     [{ code: 'geometry.area_range', params: { areaM2: 0.5, minM2: 1, maxHa: 50_000 } }, 'A block is between 1 m² and 50 000 ha.'],
-    [{ code: 'geometry.parts_overlap', params: {} }, 'An outline like this cannot be kept.'],
+    [{ code: 'geometry.never_heard_of', params: {} }, 'An outline like this cannot be kept.'],
   ])('says %o', (finding, sentence) => {
     expect(outlineWords('en', finding)).toBe(sentence)
   })
