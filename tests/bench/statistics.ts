@@ -1,8 +1,8 @@
-/** What one round took, in milliseconds: ours, the baseline, and the baseline once more. */
+/** What one round took, in milliseconds or in what they were read as: ours, the baseline, and the baseline once more. */
 export interface Round { ours: number; baseline: number; again: number }
 
 export interface Summary {
-  /** Median of each side, milliseconds. */
+  /** Median of each side. */
   ours: number
   baseline: number
   /** Median of the rounds' ratios of ours to the baseline, with its quartiles. */

@@ -2,7 +2,7 @@ import { parseArgs } from 'node:util'
 import { OneLine } from './OneLine.mjs'
 
 /** Figures in the order in which they are measured. */
-export const figureIds = /** @type {const} */ (['list', 'growth', 'write', 'sign', 'load', 'map'])
+export const figureIds = /** @type {const} */ (['list', 'growth', 'write', 'sign', 'pdf', 'pdfmem', 'load', 'map'])
 
 /**
  * What `npm run bench` is asked for.

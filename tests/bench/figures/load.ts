@@ -10,11 +10,11 @@ const FIELD_PATH = [
   'src/start.ts', 'src/plugins/wordsEs.ts', 'src/views/sign-in/SignInView.vue', 'src/views/today/TodayView.vue', 'src/views/register/RecordFormView.vue',
 ]
 
-/** Bytes of script, packed as the server packs them, of ours and of the least page of the same libraries. Exact: nothing is timed. */
+/** Kilobytes of script, packed as the server packs them, of ours and of the least page of the same libraries. Exact: nothing is timed. */
 export async function measureLoad(): Promise<{ ours: number; baseline: number }> {
   const ours = await buildChunks({ build: { write: false } })
   const bare = await buildChunks({ root: 'tests/bench/baselines/bareApp', configFile: false, plugins: [vue()], build: { write: false } })
-  return { ours: weigh(ours, FIELD_PATH), baseline: weigh(bare, []) }
+  return { ours: weigh(ours, FIELD_PATH) / 1000, baseline: weigh(bare, []) / 1000 }
 }
 
 async function buildChunks(config: Parameters<typeof build>[0]): Promise<Rolldown.OutputChunk[]> {
