@@ -14,6 +14,9 @@ async function main(): Promise<void> {
   const demo = config.demo === null ? null : await seedDemo(services, config.demo.password)
   const { app, close } = createApp(services, CLIENT_FOLDER)
   const server = createServer(app)
+  // Longer than a proxy or a phone keeps an idle connection: neither then sends into one that this side has just closed.
+  server.keepAliveTimeout = 75_000
+  server.headersTimeout = 80_000
   await listen(server, config)
   const stop = () => void shutDown(server, services, close)
   process.once('SIGTERM', stop)

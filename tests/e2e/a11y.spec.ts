@@ -11,7 +11,11 @@ const WIDE = [{ width: 1440, height: 900 }, { width: 1024, height: 768 }]
 const PHONE = { width: 390, height: 844 }
 
 async function setLight(page: Page, light: 'day' | 'dawn'): Promise<void> {
-  await page.evaluate((chosen) => { document.documentElement.dataset['light'] = chosen }, light)
+  await page.evaluate(async (chosen) => {
+    document.documentElement.dataset['light'] = chosen
+    // Every change of colour ends with the second frame, however short it is: until then an element shows neither light.
+    await new Promise((resolve) => { requestAnimationFrame(() => requestAnimationFrame(resolve)) })
+  }, light)
 }
 
 test('axe finds nothing on any screen, by day and at dawn', async ({ page, context, isPhone, manager }) => {
