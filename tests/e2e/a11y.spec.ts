@@ -13,8 +13,11 @@ const PHONE = { width: 390, height: 844 }
 async function setLight(page: Page, light: 'day' | 'dawn'): Promise<void> {
   await page.evaluate(async (chosen) => {
     document.documentElement.dataset['light'] = chosen
-    // Every change of colour ends with the second frame, however short it is: until then an element shows neither light.
-    await new Promise((resolve) => { requestAnimationFrame(() => requestAnimationFrame(resolve)) })
+    // However short, a change of colour takes its frames: until it is over an element shows neither light.
+    const nextFrame = (): Promise<unknown> => new Promise((resolve) => { requestAnimationFrame(resolve) })
+    await nextFrame()
+    while (document.getAnimations().some((animation) => animation instanceof CSSTransition)) await nextFrame()
+    await nextFrame()
   }, light)
 }
 
