@@ -89,7 +89,7 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
     airFigures,
   ),
   canonical: define(
-    { args: '{value: any JSON}', answer: '{text, sha256}' },
+    { args: '{value: JSON}', answer: '{text, sha256}' },
     z.strictObject({ value: z.unknown() }),
     ({ value }) => {
       const text = canonicalText(value)

@@ -1,9 +1,10 @@
-import { computed, ref, shallowRef, type ComputedRef, type Ref } from 'vue'
+import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import { checkBoundary } from '../../shared/geo/checkBoundary.ts'
 import type { Boundary, GeometryFinding, Position } from '../../shared/geo/geometryTypes.ts'
 import { measurePolygon, type PolygonMeasure } from '../../shared/geo/measurePolygon.ts'
 import { outlineOf, type BlockDraftContent } from './blockDraftContent.ts'
 import { isSameCorner } from '../../shared/geo/isSameCorner.ts'
+import { useSteps } from './useSteps.ts'
 
 /** An outline in the making: its corners, the way back and forth, and what it measures. */
 export interface Outline {
@@ -28,7 +29,10 @@ export interface Outline {
 /** Works on the corners of a draft's content; under three corners nothing is measured and nothing is found. */
 export function useOutline(content: Ref<BlockDraftContent>): Outline {
   const cross = ref<Position | null>(null) as Ref<Position | null>
-  const steps = useSteps(content)
+  const steps = useSteps<Pick<BlockDraftContent, 'points' | 'closed'>>(
+    () => ({ points: content.value.points, closed: content.value.closed }),
+    (step) => { content.value = { ...content.value, ...step } },
+  )
   const corners = computed(() => content.value.points)
   const check = computed(() => {
     const outline = outlineOf(corners.value)
@@ -40,61 +44,27 @@ export function useOutline(content: Ref<BlockDraftContent>): Outline {
     const { points, closed } = content.value
     const last = points.at(-1)
     if (closed || (last !== undefined && isSameCorner(last, at))) return
-    steps.go([...points, at], false)
+    steps.go({ points: [...points, at], closed: false })
   }
   function removeLast(): void {
     const { points } = content.value
-    if (points.length > 0) steps.go(points.slice(0, -1), false)
+    if (points.length > 0) steps.go({ points: points.slice(0, -1), closed: false })
   }
   function finish(): void {
     const { points } = content.value
     const [first, last] = [points[0], points.at(-1)]
     if (first === undefined || last === undefined || points.length < 3) return
     // Someone who walked back to the first corner meant to close there.
-    steps.go(isSameCorner(first, last) ? points.slice(0, -1) : points, true)
+    steps.go({ points: isSameCorner(first, last) ? points.slice(0, -1) : points, closed: true })
   }
 
   return {
     cross, add, removeLast, finish,
     undo: steps.undo, redo: steps.redo, canUndo: steps.canUndo, canRedo: steps.canRedo,
     replace: (points) => { content.value = { ...content.value, points: [...points], closed: points.length > 2 } },
-    reopen: () => { steps.go(content.value.points, false) },
+    reopen: () => { steps.go({ points: content.value.points, closed: false }) },
     geometry,
     measure: computed(() => (geometry.value === null ? null : measurePolygon(geometry.value))),
     findings: computed(() => check.value.findings),
-  }
-}
-
-/** The way back and forth over corners set and taken. */
-function useSteps(content: Ref<BlockDraftContent>) {
-  type Step = Pick<BlockDraftContent, 'points' | 'closed'>
-  const past = shallowRef<readonly Step[]>([])
-  const future = shallowRef<readonly Step[]>([])
-  const here = (): Step => ({ points: content.value.points, closed: content.value.closed })
-  const put = (step: Step): void => { content.value = { ...content.value, ...step } }
-
-  function go(points: Position[], closed: boolean): void {
-    past.value = [...past.value, here()]
-    future.value = []
-    put({ points, closed })
-  }
-  function undo(): void {
-    const step = past.value.at(-1)
-    if (step === undefined) return
-    future.value = [...future.value, here()]
-    past.value = past.value.slice(0, -1)
-    put(step)
-  }
-  function redo(): void {
-    const step = future.value.at(-1)
-    if (step === undefined) return
-    past.value = [...past.value, here()]
-    future.value = future.value.slice(0, -1)
-    put(step)
-  }
-  return {
-    go, undo, redo,
-    canUndo: computed(() => past.value.length > 0),
-    canRedo: computed(() => future.value.length > 0),
   }
 }

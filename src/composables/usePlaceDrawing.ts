@@ -5,6 +5,7 @@ import { formatPoints } from '../../shared/geo/formatPoints.ts'
 import type { GeometryFinding, PlaceGeometry, Position } from '../../shared/geo/geometryTypes.ts'
 import { isSameCorner } from '../../shared/geo/isSameCorner.ts'
 import type { Language } from '../../shared/messages/translate.ts'
+import { useSteps } from './useSteps.ts'
 import { useTypedPoints, type TypedPoints } from './useTypedPoints.ts'
 
 /** How something on the ground is drawn. */
@@ -43,29 +44,19 @@ export function usePlaceDrawing(start: { geometry: PlaceGeometry | null; shape: 
   const by = ref<'draw' | 'points'>('draw')
   const text = ref('')
   const typed = useTypedPoints(() => text.value, language)
-  const past = shallowRef<readonly (readonly Position[])[]>([])
-  const future = shallowRef<readonly (readonly Position[])[]>([])
   const changed = ref(false)
+  const steps = useSteps(() => points.value, (next) => { points.value = next })
   const kept = computed(() => (shape.value === 'point' ? points.value.slice(-1) : points.value))
   const check = computed(() => (kept.value.length < LEAST_POINTS[shape.value] ? { geometry: null, findings: [] } : checkPlace(built(shape.value, kept.value))))
+
+  function go(next: readonly Position[]): void {
+    steps.go(next)
+    changed.value = true
+  }
 
   watch(typed.points, (read) => {
     if (by.value === 'points') go([...read])
   })
-
-  function go(next: readonly Position[]): void {
-    past.value = [...past.value, points.value]
-    future.value = []
-    points.value = next
-    changed.value = true
-  }
-  function step(from: ShallowRef<readonly (readonly Position[])[]>, to: ShallowRef<readonly (readonly Position[])[]>): void {
-    const next = from.value.at(-1)
-    if (next === undefined) return
-    from.value = from.value.slice(0, -1)
-    to.value = [...to.value, points.value]
-    points.value = next
-  }
 
   return {
     shape: computed(() => shape.value), points, by, text, typed, cross,
@@ -83,10 +74,7 @@ export function usePlaceDrawing(start: { geometry: PlaceGeometry | null; shape: 
       go(shape.value === 'point' ? [at] : [...points.value, at])
     },
     removeLast: () => { if (points.value.length > 0) go(points.value.slice(0, -1)) },
-    undo: () => { step(past, future) },
-    redo: () => { step(future, past) },
-    canUndo: computed(() => past.value.length > 0),
-    canRedo: computed(() => future.value.length > 0),
+    undo: steps.undo, redo: steps.redo, canUndo: steps.canUndo, canRedo: steps.canRedo,
     swap: () => { if (typed.swapped.value !== null) text.value = typed.swapped.value },
   }
 }

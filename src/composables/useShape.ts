@@ -6,7 +6,7 @@ import { movePosition } from '../../shared/geo/movePosition.ts'
 import { measurePolygon, type PolygonMeasure } from '../../shared/geo/measurePolygon.ts'
 import { findUnder } from './findUnder.ts'
 import { boundaryOf, cornersOfShape, isSameAt, judgeShape, shapeOf, type Shape } from './shape.ts'
-import { useShapeSteps } from './useShapeSteps.ts'
+import { useSteps } from './useSteps.ts'
 
 /** An outline being made or changed: corners set, moved, added and taken, holes cut, and the way back and forth over all of it. */
 export interface ShapeWork {
@@ -54,7 +54,7 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
   const isHeld = ref(false)
   const here = (): Shape => content.value.shape
   const put = (shape: Shape): void => { content.value = { ...content.value, shape } }
-  const steps = useShapeSteps(here, put, letGo)
+  const steps = useSteps(here, put, letGo)
   const check = computed(() => judgeShape(content.value.shape))
 
   function letGo(): void {
