@@ -56,7 +56,7 @@ test('axe finds nothing in a record being written, nor in the dialogs', async ({
   await expect(form.password).toBeVisible()
   found.push(...await findFaults(page))
   for (const [path, button, dialog] of [
-    ['/inputs', 'inputs.newMaterial', 'inputs.form.materialTitle'], ['/inputs', 'inputs.receiveLot', 'inputs.form.lotTitle'], ['/farm', 'farm.addSprayer', 'farm.addSprayer'],
+    ['/inputs', 'inputs.newMaterial', 'inputs.form.materialTitle'], ['/inputs', 'inputs.receiveLot', 'inputs.form.lotTitle'], ['/farm/sprayers', 'farm.addSprayer', 'farm.addSprayer'],
   ] as const) {
     await openScreen(page, path)
     await page.getByRole('main').getByRole('button', { name: say(button) }).first().click()

@@ -32,7 +32,7 @@ test('opens dialogs, lists and sheets without one violation', async ({ page, con
   await closeDialog(page, say('inputs.form.lotTitle'))
   await page.getByRole('button', { name: say('inputs.count') }).first().click()
   await closeDialog(page, saying('inputs.form.countTitle'))
-  await openScreen(page, '/farm')
+  await openScreen(page, '/farm/sprayers')
   await page.getByRole('button', { name: say('farm.addSprayer') }).click()
   await closeDialog(page, say('farm.addSprayer'))
   await page.getByRole('button', { name: isPhone ? say('frame.more') : /, manager$/ }).click()

@@ -35,7 +35,7 @@ test('Back closes what lies over the page and leaves the page where it is', asyn
 
 test('a double tap saves once', async ({ page, signInAs }) => {
   await signInAs('manager')
-  await openScreen(page, '/farm')
+  await openScreen(page, '/farm/sprayers')
   const code = unique('T')
   await page.getByRole('button', { name: say('farm.addSprayer') }).click()
   const dialog = page.getByRole('dialog', { name: say('farm.addSprayer') })

@@ -6,7 +6,7 @@ import { watchPages } from './support/watchPage.ts'
 
 const OPEN = ['/signin', '/check', '/welcome']
 const EVERYBODY = ['/blocks', '/blocks/BLOCK', '/register', '/register/RECORD', '/inputs']
-const OF_FARM = ['/', ...EVERYBODY, '/register/new', '/farm']
+const OF_FARM = ['/', ...EVERYBODY, '/register/new', '/farm', '/farm/people', '/farm/sprayers']
 const OF_LEADERS = [...OF_FARM, '/blocks/new?by=draw', '/blocks/new?by=points', '/blocks/import', '/farms/new']
 const PLACES: Record<Exclude<Who, 'neighbour'>, string[]> = { owner: OF_LEADERS, manager: OF_LEADERS, applicator: OF_FARM, certifier: ['/farms', ...EVERYBODY] }
 

@@ -24,7 +24,7 @@ test('the applicator records and signs, and has nothing to draw or add with', as
 
   for (const [path, words] of [
     ['/blocks', 'blocks.draw.link'], ['/blocks', 'blocks.draw.byDraw'], ['/blocks', 'blocks.draw.byPoints'], ['/inputs', 'inputs.newMaterial'],
-    ['/inputs', 'inputs.receiveLot'], ['/inputs', 'inputs.count'], ['/farm', 'farm.addSprayer'],
+    ['/inputs', 'inputs.receiveLot'], ['/inputs', 'inputs.count'], ['/farm/sprayers', 'farm.addSprayer'],
   ] as const) {
     await openScreen(page, path)
     await expect(page.getByRole('button', { name: say(words), exact: true })).toHaveCount(0)

@@ -40,7 +40,7 @@ test('in Spanish no screen keeps an English word', async ({ page, isPhone, signI
   const look = async (name: string): Promise<void> => { for (const text of await englishOn(page)) found.push(`${name}: ${text}`) }
   await look('sign-in')
   await signInAs('manager')
-  for (const path of ['/check', '/welcome', '/', '/blocks', `/blocks/${things.block.id}`, '/blocks/new?by=draw', '/register', `/register/${record.id}`, '/register/new', '/inputs', '/farm', '/nothing-there']) {
+  for (const path of ['/check', '/welcome', '/', '/blocks', `/blocks/${things.block.id}`, '/blocks/new?by=draw', '/register', `/register/${record.id}`, '/register/new', '/inputs', '/farm', '/farm/people', '/farm/sprayers', '/nothing-there']) {
     await openScreen(page, path)
     await look(path)
   }

@@ -1,6 +1,7 @@
 /** Words of the farm's own page and of My farms. */
 export const farm = {
   title: 'Farm',
+  tabs: 'Parts of the farm',
   role: { owner: 'Owner', manager: 'Manager', applicator: 'Applicator', certifier: 'Certifier' },
   profile: 'Profile',
   name: 'Name',

@@ -1,6 +1,7 @@
 /** Words of the farm's own page and of My farms, in Spanish. */
 export const farm = {
   title: 'Finca',
+  tabs: 'Partes de la finca',
   role: { owner: 'Titular', manager: 'Responsable', applicator: 'Aplicador', certifier: 'Certificadora' },
   profile: 'Datos',
   name: 'Nombre',

@@ -32,6 +32,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'new record', path: '/register/new' },
     { name: 'inputs', path: '/inputs' },
     { name: 'farm', path: '/farm' },
+    { name: 'people of the farm', path: '/farm/people' },
+    { name: 'sprayers', path: '/farm/sprayers' },
     { name: 'nothing there', path: '/nothing-there' },
   ]
   return [
