@@ -15,7 +15,12 @@ export interface FarmActor {
   personName: string | null
   /** Seasons that may be read; null for the farm's own people. */
   seasons: number[] | null
+  /** Where the request came from, as far as it is kept; null for what no request asked for. */
+  origin: Origin | null
 }
+
+/** From where: the network without its last part, and the names of browser and system. */
+export interface Origin { network: string | null; device: string | null }
 
 /** The person id of somebody who writes; a certifier never does. @throws {Error} for a certifier. */
 export function personOf(actor: FarmActor): string {

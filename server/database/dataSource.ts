@@ -10,6 +10,7 @@ import { SayWhatReplaced1764630000000 } from '../../migrations/1764630000000-Say
 import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindBySubject.ts'
 import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBlocks.ts'
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
+import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -48,6 +49,7 @@ export function createOwnerSource(url: string): DataSource {
       WholeBlocks1764610000000,
       AddGround1764620000000,
       SayWhatReplaced1764630000000,
+      WholeGrants1764643000000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -83,5 +83,6 @@ async function listAccess(source: DataSource, accountId: string, at: Date): Prom
     personId: row.person_id,
     personName: row.person_name,
     seasons: row.seasons,
+    origin: null,
   }))
 }

@@ -25,6 +25,7 @@ import { RecordVersion } from '../entities/RecordVersion.ts'
 import { RegisterEntry } from '../entities/RegisterEntry.ts'
 import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
+import { SeasonHead } from '../entities/SeasonHead.ts'
 import { Site } from '../entities/Site.ts'
 import { Sprayer } from '../entities/Sprayer.ts'
 
@@ -57,6 +58,7 @@ export const ENTITIES = [
   RegisterEntry,
   SavedFilter,
   SeasonCounter,
+  SeasonHead,
   Site,
   Sprayer,
 ]

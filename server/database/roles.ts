@@ -34,8 +34,9 @@ export const APP_RIGHTS: Record<string, string> = {
   attachments: 'SELECT, INSERT, UPDATE (season, signed_version, removed_at)',
   saved_filters: 'SELECT, INSERT, DELETE',
   journal: 'SELECT, INSERT',
+  season_heads: 'SELECT, INSERT',
   demo_seed: 'SELECT, INSERT',
 }
 
 /** Functions the app role may call that look over farm borders; each answers only what its name says. */
-export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'find_check_code(text)']
+export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'find_check_code(text)']

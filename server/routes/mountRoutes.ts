@@ -1,5 +1,6 @@
 import { Router, type Request, type RequestHandler, type Response } from 'express'
 import type { z } from 'zod'
+import { deviceWords } from '../../shared/devices/deviceWords.ts'
 import { AppError, forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from '../database/actor.ts'
 import type { Authenticate } from '../middleware/session.ts'
@@ -7,6 +8,7 @@ import { readLanguage } from '../middleware/readLanguage.ts'
 import { readUpload } from '../middleware/readUpload.ts'
 import type { UploadedFile } from '../services/files/judgeFile.ts'
 import type { Services } from '../services/services.ts'
+import { truncateAddress } from '../services/truncateAddress.ts'
 import type { Route } from './defineRoute.ts'
 
 /** What the routes stand on. */
@@ -41,7 +43,7 @@ async function serve(route: Route, { services, authenticate }: House, request: R
   const accountId = request.user?.accountId ?? ''
   if (route.roles !== 'everybody' && accountId === '') throw new AppError('unauthenticated', 'unauthenticated')
   const params = parsePath(route.params, request.params)
-  const actor = Array.isArray(route.roles) ? await authorise(route, services, accountId, params) : null
+  const actor = Array.isArray(route.roles) ? await authorise(route, services, request, params) : null
   const query = route.query ? route.query.parse(request.query) : refuseQuery(request.query)
   const { fields, file } = await readBody(route, request, response)
   const answer = await route.run({
@@ -83,11 +85,12 @@ function refuseQuery(query: object): Record<string, never> {
   return {}
 }
 
-async function authorise(route: Route, services: Services, accountId: string, params: unknown): Promise<FarmActor> {
+async function authorise(route: Route, services: Services, request: Request, params: unknown): Promise<FarmActor> {
+  const accountId = request.user?.accountId ?? ''
   const { farmId } = params as { farmId: string }
   const access = await services.database.listAccess(accountId, services.clock.now())
   const actor = access.find((candidate) => candidate.farmId === farmId.toLowerCase())
   if (!actor) throw notFound()
   if (!route.roles.includes(actor.role)) throw forbidden()
-  return actor
+  return { ...actor, origin: { network: truncateAddress(request.ip), device: deviceWords(request.get('User-Agent')) } }
 }

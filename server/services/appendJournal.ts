@@ -1,5 +1,6 @@
 import { v7 as uuidV7 } from 'uuid'
 import type { EntityManager } from 'typeorm'
+import type { JournalAction } from '../../shared/journal/journalActions.ts'
 import type { FarmActor } from '../database/actor.ts'
 import { JournalEntry } from '../entities/JournalEntry.ts'
 import type { Services } from './services.ts'
@@ -8,8 +9,8 @@ import type { Services } from './services.ts'
 export async function appendJournal(
   services: Pick<Services, 'clock'>,
   manager: EntityManager,
-  actor: Pick<FarmActor, 'farmId' | 'personId' | 'accountId'>,
-  entry: { action: string; subjectId: string; detail?: object },
+  actor: Pick<FarmActor, 'farmId' | 'personId' | 'accountId'> & Partial<Pick<FarmActor, 'origin'>>,
+  entry: { action: JournalAction; subjectId: string; detail?: object },
 ): Promise<void> {
   await manager.insert(JournalEntry, {
     farmId: actor.farmId,
@@ -20,5 +21,7 @@ export async function appendJournal(
     action: entry.action,
     subjectId: entry.subjectId,
     detail: entry.detail ?? {},
+    fromNetwork: actor.origin?.network ?? null,
+    fromDevice: actor.origin?.device ?? null,
   })
 }

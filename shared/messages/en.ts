@@ -8,6 +8,7 @@ import { ground } from './en/ground.ts'
 import { growing } from './en/growing.ts'
 import { importing } from './en/importing.ts'
 import { inputs } from './en/inputs.ts'
+import { journal } from './en/journal.ts'
 import { mapPrint } from './en/mapPrint.ts'
 import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
@@ -23,7 +24,7 @@ import { versions } from './en/versions.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, shapes, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, journal, problems, recordForm, records, register, session, shapes, today, units, versions,
 }
 
 /** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */

@@ -9,6 +9,7 @@ import { ground } from './es/ground.ts'
 import { growing } from './es/growing.ts'
 import { importing } from './es/importing.ts'
 import { inputs } from './es/inputs.ts'
+import { journal } from './es/journal.ts'
 import { mapPrint } from './es/mapPrint.ts'
 import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
@@ -25,7 +26,7 @@ import { versions } from './es/versions.ts'
 
 /** What the screens say, in Spanish. A missing key does not compile. */
 export const screens: Screens = {
-  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, problems, recordForm, records, register, session, shapes, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, journal, problems, recordForm, records, register, session, shapes, today, units, versions,
 }
 
 /** Every word a person reads, in Spanish. */

@@ -66,7 +66,7 @@ it('lets only two functions look over farm borders, each with a fixed search pat
   const functions = await rows(`SELECT p.proname, p.proconfig FROM pg_proc p JOIN pg_namespace n ON n.oid = p.pronamespace
     WHERE n.nspname = 'public' AND p.prosecdef ORDER BY p.proname`)
   const searchPath = ['search_path=pg_catalog, public, pg_temp']
-  expect(functions).toEqual([{ proname: 'account_access', proconfig: searchPath }, { proname: 'find_check_code', proconfig: searchPath }])
+  expect(functions).toEqual([{ proname: 'account_access', proconfig: searchPath }, { proname: 'account_grants', proconfig: searchPath }, { proname: 'find_check_code', proconfig: searchPath }])
 })
 
 it('can be taken back to nothing and made again', async () => {

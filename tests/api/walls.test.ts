@@ -201,7 +201,7 @@ describe('a role that ended after its request was let in', () => {
     const farm = await house.makeFarm()
     const actor = await farm.actor('manager')
     await house.services.database.inFarm(actor, async (manager) => {
-      await appendJournal(house.services, manager, actor, { action: 'test.deed', subjectId: farm.id })
+      await appendJournal(house.services, manager, actor, { action: 'farm.created', subjectId: farm.id })
       const ending = house.services.database.inFarm({ farmId: farm.id, seasons: null }, async (other) => {
         await other.query("SET LOCAL lock_timeout = '200ms'")
         await other.query('UPDATE people SET active = false WHERE id = $1', [farm.personIds.manager])

@@ -1,5 +1,6 @@
 import type { EntityManager, EntityTarget, FindOneOptions } from 'typeorm'
 import { canonicalText } from '../../../shared/evidence/canonicalText.ts'
+import type { JournalAction } from '../../../shared/journal/journalActions.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
@@ -15,7 +16,7 @@ interface Change<Row> {
   revision: number
   /** What is to stand; what is left out stays. */
   changes: Partial<Row>
-  action: string
+  action: JournalAction
   present: (row: Row) => unknown
   /** Refuses what the parts together cannot be. */
   judge?: (row: Row) => void

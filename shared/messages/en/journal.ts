@@ -1,0 +1,27 @@
+/** Words of the farm's journal. Every deed that the server writes down has its words under `action`: kind of thing, then what was done. */
+export const journal = {
+  title: 'Journal',
+  intro: 'Who did what, when and from where. It is written by the deed itself and is never changed.',
+  action: {
+    farm: { created: 'Made the farm' },
+    block: {
+      created: 'Drew a block', updated: 'Changed a block', redrawn: 'Redrew a block', land_set: 'Set the land status of a block',
+      ended_by_split: 'Split a block', ended_by_merge: 'Joined a block to others', ended_by_undone: 'Ended a block whose split or join was undone', reopened: 'Undid a split or a join',
+    },
+    planting: { created: 'Added a planting', updated: 'Changed a planting' },
+    bed: { created: 'Added beds or rows', updated: 'Changed beds or rows' },
+    event: { created: 'Wrote down an event', withdrawn: 'Took an event back' },
+    site: { created: 'Added something to keep clear of', changed: 'Changed something to keep clear of' },
+    ground: { created: 'Drew part of the ground plan', changed: 'Changed part of the ground plan' },
+    material: { created: 'Added a material' },
+    lot: { received: 'Received a lot', counted: 'Counted a lot' },
+    sprayer: { created: 'Added a sprayer' },
+    record: {
+      draft: 'Began a record', started: 'Started a record', updated: 'Changed an unsigned record', signed: 'Signed a record', amended: 'Amended a record',
+      withdrawn: 'Withdrew a record', reviewed: 'Reviewed a record', discarded: 'Discarded an unsigned record',
+    },
+    file: { added: 'Added a photo or paper', removed: 'Took a photo or paper back' },
+    grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
+    report: { downloaded: 'Downloaded a season report' },
+  },
+}

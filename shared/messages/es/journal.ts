@@ -1,0 +1,28 @@
+import type { Messages } from '../en.ts'
+
+export const journal: Messages['journal'] = {
+  title: 'Diario',
+  intro: 'Quién hizo qué, cuándo y desde dónde. Lo escribe el propio acto y nunca se cambia.',
+  action: {
+    farm: { created: 'Creó la finca' },
+    block: {
+      created: 'Dibujó una parcela', updated: 'Cambió una parcela', redrawn: 'Redibujó una parcela', land_set: 'Fijó el estado del terreno de una parcela',
+      ended_by_split: 'Dividió una parcela', ended_by_merge: 'Unió una parcela a otras', ended_by_undone: 'Terminó una parcela cuya división o unión se deshizo', reopened: 'Deshizo una división o una unión',
+    },
+    planting: { created: 'Añadió una plantación', updated: 'Cambió una plantación' },
+    bed: { created: 'Añadió bancales o hileras', updated: 'Cambió bancales o hileras' },
+    event: { created: 'Anotó una labor', withdrawn: 'Retiró una labor' },
+    site: { created: 'Añadió un lugar del que apartarse', changed: 'Cambió un lugar del que apartarse' },
+    ground: { created: 'Dibujó parte del plano del terreno', changed: 'Cambió parte del plano del terreno' },
+    material: { created: 'Añadió un insumo' },
+    lot: { received: 'Recibió un lote', counted: 'Contó un lote' },
+    sprayer: { created: 'Añadió un pulverizador' },
+    record: {
+      draft: 'Empezó un registro', started: 'Inició un registro', updated: 'Cambió un registro sin firmar', signed: 'Firmó un registro', amended: 'Enmendó un registro',
+      withdrawn: 'Retiró un registro', reviewed: 'Revisó un registro', discarded: 'Descartó un registro sin firmar',
+    },
+    file: { added: 'Añadió una foto o un documento', removed: 'Quitó una foto o un documento' },
+    grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión' },
+    report: { downloaded: 'Descargó un informe de campaña' },
+  },
+}
