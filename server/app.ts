@@ -15,6 +15,7 @@ import { API_PAGE_STYLE, renderApiPage } from './routes/apiPage.ts'
 import { mountRoutes } from './routes/mountRoutes.ts'
 import { describeApi } from './routes/openApi.ts'
 import { ROUTES } from './routes/routes.ts'
+import { devMail } from './routes/devMail.ts'
 import type { Services } from './services/services.ts'
 
 const BODY_LIMIT = '1mb'
@@ -32,6 +33,7 @@ export function createApp(services: Services, clientFolder: string | null): { ap
   app.use(setHeaders(services.config.cookies.secure))
   app.use(compression())
   app.use('/api', createApi(services, sessions))
+  app.use('/dev/mail', devMail(services.keptMail))
   if (clientFolder !== null) app.use(serveClient(clientFolder))
   app.use(refuseElsewhere)
   app.use(handleErrors(services))

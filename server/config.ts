@@ -2,6 +2,7 @@ import { join } from 'node:path'
 import { z } from 'zod'
 import { lineText } from '../shared/contract/text.ts'
 import type { Bucket } from './adapters/files/bucketFiles.ts'
+import { readMailbox, type Mailbox } from './adapters/mail/mailbox.ts'
 import type { TileService } from './adapters/tiles/proxyTiles.ts'
 
 /** A fixed host, and each of the three numbers behind it. */
@@ -32,12 +33,17 @@ const environment = z.object({
   S3_REGION: z.string().min(1).default('us-east-1'),
   S3_KEY_ID: z.string().min(1).optional(),
   S3_SECRET: z.string().min(1).optional(),
+  SMTP_URL: z.string().regex(/^smtps?:\/\/[^\s]+$/, 'must be the address of a mail server, smtp://… or smtps://…').optional(),
+  MAIL_FROM: z.string().refine((text) => readMailbox(text) !== null, 'must be an address, or Name <address>').optional(),
   TILE_URL: z.string().refine(isTileTemplate, 'must be the address of a tile, https://… with {z}, {x} and {y} after the host').optional(),
   TILE_ATTRIBUTION: lineText(200).optional(),
   TILE_MAX_ZOOM: z.coerce.number().int().min(1).max(22).default(19),
 }).superRefine((values, context) => {
   if (values.TILE_URL !== undefined && values.TILE_ATTRIBUTION === undefined) {
     context.addIssue({ code: 'custom', path: ['TILE_ATTRIBUTION'], message: 'must be given with TILE_URL: whose pictures they are' })
+  }
+  if (values.SMTP_URL !== undefined && values.MAIL_FROM === undefined) {
+    context.addIssue({ code: 'custom', path: ['MAIL_FROM'], message: 'must be given with SMTP_URL: whom letters come from' })
   }
   if (values.S3_BUCKET === undefined) return
   for (const name of ['S3_KEY_ID', 'S3_SECRET'] as const) {
@@ -60,6 +66,7 @@ export interface Config {
   demo: { password: string } | null
   fixedClock: string | null
   files: FilesConfig
+  mail: MailConfig
   /** Null where no tile service is named: nothing is then asked from outside. */
   tiles: TileService | null
 }
@@ -86,6 +93,15 @@ export function cookiesOf(publicUrl: string | null): CookieConfig {
   }
 }
 
+/** How letters go out. */
+export interface MailConfig {
+  /** Null where none is named: letters are then kept on this machine. */
+  smtpUrl: string | null
+  from: Mailbox
+  /** Where kept letters outlive a restart; null for in memory alone. */
+  keptFile: string | null
+}
+
 /** Where photos and papers are kept. */
 export interface FilesConfig {
   /** On this machine; not used with a bucket. */
@@ -95,6 +111,8 @@ export interface FilesConfig {
   quotaBytes: number
 }
 
+/** Whom kept letters come from; RFC 2606 keeps the name out of the real world. */
+const NOBODY: Mailbox = { name: 'Drenchleaf', address: 'register@drenchleaf.invalid' }
 const BYTES_PER_MB = 1_000_000
 
 /**
@@ -123,8 +141,13 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     demo: values.SEED_DEMO === '1' && values.DEMO_PASSWORD ? { password: values.DEMO_PASSWORD } : null,
     fixedClock: values.FIXED_CLOCK ?? null,
     files: readFiles(values),
+    mail: readMail(values),
     tiles: readTiles(values),
   }
+}
+
+function readMail({ SMTP_URL: smtpUrl, MAIL_FROM: from, DATA_DIR: folder }: z.output<typeof environment>): MailConfig {
+  return { smtpUrl: smtpUrl ?? null, from: readMailbox(from ?? '') ?? NOBODY, keptFile: join(folder, 'mail.jsonl') }
 }
 
 function readFiles(values: z.output<typeof environment>): FilesConfig {

@@ -2,6 +2,7 @@ import { createServer, type Server } from 'node:http'
 import { createApp } from './app.ts'
 import { readConfig, type Config } from './config.ts'
 import { seedDemo } from './demo/seedDemo.ts'
+import { startJobs, type RunningJobs } from './jobs/startJobs.ts'
 import { CLIENT_FOLDER } from './projectFolders.ts'
 import { publicAddress } from './services/publicAddress.ts'
 import type { Services } from './services/services.ts'
@@ -18,7 +19,8 @@ async function main(): Promise<void> {
   server.keepAliveTimeout = 75_000
   server.headersTimeout = 80_000
   await listen(server, config)
-  const stop = () => void shutDown(server, services, close)
+  const jobs = await startJobs(services)
+  const stop = () => void shutDown({ server, services, jobs, close })
   process.once('SIGTERM', stop)
   process.once('SIGINT', stop)
   process.stdout.write(`READY ${JSON.stringify({ url: publicAddress(config), ...demo })}\n`)
@@ -35,9 +37,14 @@ function listen(server: Server, { port, host }: Config): Promise<void> {
   })
 }
 
-async function shutDown(server: Server, services: Services, close: () => void): Promise<void> {
+interface Running { server: Server; services: Services; jobs: RunningJobs; close(): void }
+
+/** Takes no more, finishes what is in hand, and only then lets go of the database. */
+async function shutDown({ server, services, jobs, close }: Running): Promise<void> {
   server.close()
   server.closeIdleConnections()
+  await jobs.stop()
+  await services.mailer.close()
   close()
   await services.reports.close()
   server.closeAllConnections()

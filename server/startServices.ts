@@ -1,5 +1,6 @@
 import { createFolderFiles } from './adapters/files/folderFiles.ts'
 import type { FileStore } from './adapters/files/fileStore.ts'
+import { openMail } from './adapters/mail/openMail.ts'
 import { createProxyTiles } from './adapters/tiles/proxyTiles.ts'
 import { fixedClock, systemClock } from './clock.ts'
 import type { Config, FilesConfig } from './config.ts'
@@ -22,6 +23,7 @@ export async function startServices(config: Config): Promise<Services> {
     database: await openDatabase(config.databaseUrl, config.databasePool, (error) => logger.warn({ err: error }, 'idle database connection broke')),
     reports: createReportProcess(),
     files: await openFiles(config.files),
+    ...(await openMail(config.mail)),
     tiles: config.tiles === null ? null : createProxyTiles(config.tiles),
     checkAnswers: false,
   }

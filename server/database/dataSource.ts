@@ -11,6 +11,7 @@ import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindB
 import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBlocks.ts'
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
+import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -50,6 +51,7 @@ export function createOwnerSource(url: string): DataSource {
       AddGround1764620000000,
       SayWhatReplaced1764630000000,
       WholeGrants1764643000000,
+      AddMail1764640000000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -18,7 +18,17 @@ interface AccessRow {
 /** Who acts, where; seeding and the making of a farm know no role. */
 type Scope = Pick<FarmActor, 'farmId' | 'seasons'> & Partial<Pick<FarmActor, 'role'>>
 
-/** The only way to the data: by farm (`inFarm`), or to what belongs to no farm (`inHouse`). */
+/** A farm as timed work meets it, which has no actor. */
+export interface FarmOnRound {
+  farmId: string
+  farmName: string
+  zone: string
+  /** MM-DD. */
+  seasonStart: string
+  seasons: null
+}
+
+/** The only way to the data: by farm (`inFarm`), to what belongs to no farm (`inHouse`), or to every farm's letters (`inPost`). */
 export interface Database {
   /**
    * One transaction on one farm. Its first statement names the farm and, for a certifier, the seasons;
@@ -28,6 +38,10 @@ export interface Database {
   inFarm<T>(actor: Scope, work: (manager: EntityManager) => Promise<T>): Promise<T>
   /** Accounts, one-time links: what belongs to no farm. Farm tables show no row here. */
   inHouse<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>
+  /** The letters of every farm and of the house, for whoever carries them out; farm tables show no row here. */
+  inPost<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>
+  /** Every farm, for timed work: each is then entered by `inFarm`. */
+  listFarms(): Promise<FarmOnRound[]>
   /** The farms open to an account at an instant, read anew each time. */
   listAccess(accountId: string, at: Date): Promise<FarmActor[]>
   close(): Promise<void>
@@ -40,6 +54,11 @@ export async function openDatabase(url: string, poolSize: number, onFault: (erro
   return {
     inFarm: (actor, work) => inFarm(source, actor, work),
     inHouse: (work) => source.transaction(work),
+    inPost: (work) => source.transaction(async (manager) => {
+      await manager.query("SELECT set_config('app.post', 'on', true)")
+      return work(manager)
+    }),
+    listFarms: () => listFarms(source),
     listAccess: (accountId, at) => listAccess(source, accountId, at),
     close: () => source.destroy(),
   }
@@ -69,6 +88,11 @@ function refusalOf(error: unknown): Error | null {
   const code = error instanceof QueryFailedError ? (error.driverError as { code?: unknown }).code : undefined
   if (code === 'FA404') return notFound()
   return code === 'FA403' ? forbidden() : null
+}
+
+async function listFarms(source: DataSource): Promise<FarmOnRound[]> {
+  const rows: Pick<AccessRow, 'farm_id' | 'farm_name' | 'zone' | 'season_start'>[] = await source.query('SELECT * FROM every_farm()')
+  return rows.map((row) => ({ farmId: row.farm_id, farmName: row.farm_name, zone: row.zone, seasonStart: row.season_start, seasons: null }))
 }
 
 async function listAccess(source: DataSource, accountId: string, at: Date): Promise<FarmActor[]> {

@@ -12,6 +12,7 @@ import { FarmHead } from '../entities/FarmHead.ts'
 import { Grant } from '../entities/Grant.ts'
 import { GroundFeature } from '../entities/GroundFeature.ts'
 import { JournalEntry } from '../entities/JournalEntry.ts'
+import { Letter } from '../entities/Letter.ts'
 import { Lot } from '../entities/Lot.ts'
 import { LotEntry } from '../entities/LotEntry.ts'
 import { Material } from '../entities/Material.ts'
@@ -45,6 +46,7 @@ export const ENTITIES = [
   Grant,
   GroundFeature,
   JournalEntry,
+  Letter,
   Lot,
   LotEntry,
   Material,

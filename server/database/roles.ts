@@ -35,8 +35,9 @@ export const APP_RIGHTS: Record<string, string> = {
   saved_filters: 'SELECT, INSERT, DELETE',
   journal: 'SELECT, INSERT',
   season_heads: 'SELECT, INSERT',
+  letters: 'SELECT, INSERT, UPDATE (params, state, tries, next_try_at, claimed_until, sent_at, last_fault)',
   demo_seed: 'SELECT, INSERT',
 }
 
 /** Functions the app role may call that look over farm borders; each answers only what its name says. */
-export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'find_check_code(text)']
+export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'find_check_code(text)', 'every_farm()']

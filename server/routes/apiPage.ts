@@ -1,3 +1,4 @@
+import { escapeHtml } from '../escapeHtml.ts'
 import type { OpenApi } from './openApi.ts'
 
 /** The API as a page to read: each route with its roles, what it takes and gives. */
@@ -5,8 +6,8 @@ export function renderApiPage(api: OpenApi): string {
   const routes = Object.entries(api.paths).flatMap(([path, operations]) =>
     Object.entries(operations).map(([method, operation]) => {
       const roles = typeof operation['x-roles'] === 'string' ? operation['x-roles'] : operation['x-roles'].join(', ')
-      return `<section><h2><code>${method.toUpperCase()} /api${escape(path)}</code></h2><p>${escape(operation.summary)}</p>
-<p>For: ${escape(roles)}</p>${show('Parameters', operation.parameters)}${show('Takes', operation.requestBody)}${show('Gives', giving(operation.responses))}</section>`
+      return `<section><h2><code>${method.toUpperCase()} /api${escapeHtml(path)}</code></h2><p>${escapeHtml(operation.summary)}</p>
+<p>For: ${escapeHtml(roles)}</p>${show('Parameters', operation.parameters)}${show('Takes', operation.requestBody)}${show('Gives', giving(operation.responses))}</section>`
     }),
   )
   return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width">
@@ -25,9 +26,5 @@ function giving(responses: Record<string, object>): object {
 
 function show(title: string, value: unknown): string {
   if (value === undefined || (Array.isArray(value) && value.length === 0)) return ''
-  return `<details><summary>${title}</summary><pre>${escape(JSON.stringify(value, null, 2))}</pre></details>`
-}
-
-function escape(text: string): string {
-  return text.replace(/[&<>"]/g, (character) => `&#${character.charCodeAt(0)};`)
+  return `<details><summary>${title}</summary><pre>${escapeHtml(JSON.stringify(value, null, 2))}</pre></details>`
 }

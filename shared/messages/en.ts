@@ -9,6 +9,7 @@ import { growing } from './en/growing.ts'
 import { importing } from './en/importing.ts'
 import { inputs } from './en/inputs.ts'
 import { journal } from './en/journal.ts'
+import { mail } from './en/mail.ts'
 import { mapPrint } from './en/mapPrint.ts'
 import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
@@ -27,8 +28,8 @@ export const screens = {
   blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, journal, problems, recordForm, records, register, session, shapes, today, units, versions,
 }
 
-/** Every word a person reads, in English: the screens, and what is printed. The shape of every other language. */
-export const en = { ...screens, mapPrint, pdf, registerPrint }
+/** Every word a person reads, in English: the screens, what is printed and what is mailed. The shape of every other language. */
+export const en = { ...screens, mail, mapPrint, pdf, registerPrint }
 
 /** The same tree with any words in its leaves. */
 export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }

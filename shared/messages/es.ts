@@ -10,6 +10,7 @@ import { growing } from './es/growing.ts'
 import { importing } from './es/importing.ts'
 import { inputs } from './es/inputs.ts'
 import { journal } from './es/journal.ts'
+import { mail } from './es/mail.ts'
 import { mapPrint } from './es/mapPrint.ts'
 import { pdf } from './es/pdf.ts'
 import { problems } from './es/problems.ts'
@@ -30,4 +31,4 @@ export const screens: Screens = {
 }
 
 /** Every word a person reads, in Spanish. */
-export const es: Messages = { ...screens, mapPrint, pdf, registerPrint }
+export const es: Messages = { ...screens, mail, mapPrint, pdf, registerPrint }

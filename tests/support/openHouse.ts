@@ -8,6 +8,8 @@ import pino, { type Logger } from 'pino'
 import supertest from 'supertest'
 import { v7 as uuidV7 } from 'uuid'
 import { createFolderFiles } from '../../server/adapters/files/folderFiles.ts'
+import { openMail } from '../../server/adapters/mail/openMail.ts'
+import type { KeptLetter } from '../../server/adapters/mail/keptMail.ts'
 import { createApp } from '../../server/app.ts'
 import { cookiesOf, type Config } from '../../server/config.ts'
 import type { FarmActor } from '../../server/database/actor.ts'
@@ -15,6 +17,7 @@ import { openDatabase } from '../../server/database/database.ts'
 import { makeAccount, makeGrant, makePerson } from '../../server/demo/makeAccount.ts'
 import { createReportProcess } from '../../server/reports/reportProcess.ts'
 import { createFarm } from '../../server/services/farms/createFarm.ts'
+import { sendDueLetters } from '../../server/services/mail/sendDueLetters.ts'
 import { hashPassword } from '../../server/services/passwords.ts'
 import type { Services } from '../../server/services/services.ts'
 import { databaseUrl, readTestCluster, TEMPLATE } from './testCluster.ts'
@@ -42,6 +45,8 @@ export interface TestHouse {
   makeFarm(overrides?: { zone?: string; seasons?: number[]; endsOn?: string }): Promise<TestFarm>
   /** A signed-in browser of this account. */
   as(account: { email: string }): Promise<Agent>
+  /** Carries out what waits in the outbox. @returns what this address has got so far, newest first. */
+  mailTo(email: string): Promise<KeptLetter[]>
   close(): Promise<void>
 }
 
@@ -57,7 +62,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
   const config: Config = {
     port: 4310, host: '127.0.0.1', databasePool: 5, logFile: null, demo: null, fixedClock: null, publicUrl: null,
     databaseUrl: databaseUrl(cluster, 'app', name), databaseOwnerUrl: databaseUrl(cluster, 'owner', name),
-    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, tiles: null, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, tiles: null, mail: { smtpUrl: null, from: { name: 'Drenchleaf', address: 'register@farm.example' }, keptFile: null }, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
     cookies: cookiesOf(changes.config?.publicUrl ?? null),
   }
   const services: Services = {
@@ -67,6 +72,7 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
     database: await openDatabase(config.databaseUrl, config.databasePool, () => undefined),
     reports: createReportProcess(),
     files: createFolderFiles(config.files.folder),
+    ...(await openMail(config.mail)),
     tiles: null,
     checkAnswers: true,
   }
@@ -78,8 +84,13 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
     setNow: (instant) => { now = new Date(instant) },
     makeFarm: (overrides) => makeFarm(services, overrides),
     as: (account) => signInAs(app, account.email),
+    mailTo: async (email) => {
+      await sendDueLetters(services)
+      return (services.keptMail?.list() ?? []).filter(({ to }) => to.includes(email))
+    },
     close: async () => {
       close()
+      await services.mailer.close()
       await services.reports.close()
       await services.database.close()
       await rm(folder, { recursive: true, force: true })

@@ -1,0 +1,5 @@
+import type { Job } from './job.ts'
+import { sendLetters } from './sendLetters.ts'
+
+/** All timed work. */
+export const JOBS: readonly Job[] = [sendLetters]

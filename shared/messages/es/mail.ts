@@ -1,0 +1,18 @@
+/** Words of letters, in Spanish. */
+export const mail = {
+  greeting: 'Buenos días:',
+  greetingTo: 'Buenos días, {name}:',
+  foot: 'Enviado por el registro en {address}. Guarda registros y hace cuentas; deciden las etiquetas, las normas locales y las personas con licencia.',
+  noReply: 'Nadie lee las respuestas a este mensaje.',
+  invitation: {
+    subject: 'Tiene una invitación a {farm}',
+    text: '{by} le invita a {farm}, a su registro de aplicaciones foliares y al suelo.',
+    owner: 'Sería titular: todo lo de la finca, con sus personas y las funciones de cada una.',
+    manager: 'Llevaría la temporada: parcelas, insumos, rondas, revisiones e informes.',
+    applicator: 'Aplicaría y prepararía caldos: sus registros los hace y los firma usted.',
+    certifier: 'Leería lo que la finca le conceda, sin cambiar nada.',
+    action: 'Aceptar la invitación',
+    until: 'El enlace sirve una sola vez, hasta el {untilOn}.',
+    stranger: 'Si no conoce esta finca, no haga nada: sin usted no ocurre nada.',
+  },
+}
