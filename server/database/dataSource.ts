@@ -12,6 +12,7 @@ import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBl
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
 import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
+import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -52,6 +53,7 @@ export function createOwnerSource(url: string): DataSource {
       SayWhatReplaced1764630000000,
       WholeGrants1764643000000,
       AddMail1764640000000,
+      AddRounds1764644000000,
     ],
     migrationsTransactionMode: 'each',
   })

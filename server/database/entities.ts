@@ -11,12 +11,16 @@ import { FarmEventBlock } from '../entities/FarmEventBlock.ts'
 import { FarmHead } from '../entities/FarmHead.ts'
 import { Grant } from '../entities/Grant.ts'
 import { GroundFeature } from '../entities/GroundFeature.ts'
+import { JobDigest } from '../entities/JobDigest.ts'
 import { JournalEntry } from '../entities/JournalEntry.ts'
 import { Letter } from '../entities/Letter.ts'
 import { Lot } from '../entities/Lot.ts'
 import { LotEntry } from '../entities/LotEntry.ts'
 import { Material } from '../entities/Material.ts'
 import { Person } from '../entities/Person.ts'
+import { PlanJob } from '../entities/PlanJob.ts'
+import { PlanJobRecord } from '../entities/PlanJobRecord.ts'
+import { PlanStep } from '../entities/PlanStep.ts'
 import { Planting } from '../entities/Planting.ts'
 import { RecordComponent } from '../entities/RecordComponent.ts'
 import { RecordLine } from '../entities/RecordLine.ts'
@@ -27,6 +31,7 @@ import { RegisterEntry } from '../entities/RegisterEntry.ts'
 import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
 import { SeasonHead } from '../entities/SeasonHead.ts'
+import { SeasonPlan } from '../entities/SeasonPlan.ts'
 import { Site } from '../entities/Site.ts'
 import { Sprayer } from '../entities/Sprayer.ts'
 
@@ -45,12 +50,16 @@ export const ENTITIES = [
   FarmHead,
   Grant,
   GroundFeature,
+  JobDigest,
   JournalEntry,
   Letter,
   Lot,
   LotEntry,
   Material,
   Person,
+  PlanJob,
+  PlanJobRecord,
+  PlanStep,
   Planting,
   RecordComponent,
   RecordLine,
@@ -61,6 +70,7 @@ export const ENTITIES = [
   SavedFilter,
   SeasonCounter,
   SeasonHead,
+  SeasonPlan,
   Site,
   Sprayer,
 ]

@@ -10,7 +10,8 @@ import { recordLifeRoutes } from './recordLifeRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
 import { registerRoutes } from './registerRoutes.ts'
 import { reportRoutes } from './reportRoutes.ts'
+import { roundRoutes } from './roundRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...fileRoutes]
+export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes]

@@ -1,12 +1,17 @@
 import { z } from 'zod'
 import { acknowledgedSchema, idSchema, instantSchema, revisionSchema } from './common.ts'
+import { jobIdSchema } from './job.ts'
 import { problemSchema } from './problem.ts'
 import { recordContentSchema } from './recordContent.ts'
 import { passwordSchema } from './session.ts'
 import { noteText } from './text.ts'
 
+/** Jobs of season plans that a record was opened from; signed, it does them. */
+const jobsSchema = z.array(jobIdSchema).max(60)
+
 export const createRecordSchema = recordContentSchema.extend({
   id: idSchema,
+  jobs: jobsSchema.default([]),
   /** The device's own clock when it was sent; kept beside the server's, never corrected. */
   deviceAt: instantSchema.nullable().default(null),
 })
@@ -14,6 +19,8 @@ export type CreateRecord = z.infer<typeof createRecordSchema>
 
 export const updateRecordSchema = recordContentSchema.extend({
   revision: revisionSchema,
+  /** Left out, it stays opened from what it was opened from. */
+  jobs: jobsSchema.optional(),
   deviceAt: instantSchema.nullable().default(null),
 })
 export type UpdateRecord = z.infer<typeof updateRecordSchema>

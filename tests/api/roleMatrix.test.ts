@@ -25,6 +25,8 @@ interface World {
   plantingId: string
   bedId: string
   eventId: string
+  planId: string
+  jobId: string
 }
 
 const PICTURE = await buildPicture('png')
@@ -71,13 +73,19 @@ async function makeWorld(): Promise<World> {
   const { site } = await createSite(house.services, ownerActor, buildSite())
   const { feature } = await createGround(house.services, ownerActor, buildGround())
   const owner = await house.as(farm.accounts.owner)
-  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7() }
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7() }
   await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
   await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
   await applicator.post(`/api/farms/${farm.id}/farm-events`).send({ id: ids.eventId, kind: 'mown', blockIds: [things.blockId], on: '2026-06-15' }).expect(201)
-  return { farm, things, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
+  const step = buildStep(things)
+  await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
+  return { farm, things, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
 }
+
+const buildStep = ({ materialId, blockId }: SeededThings) => ({
+  id: uuidV7(), method: 'drench', materialId, basis: { kind: 'ratio', parts: '20' }, blockIds: [blockId], everyDays: 14, firstOn: '2026-07-01', lastOn: '2026-08-31',
+})
 
 /** A body that the route takes, made anew for each call, so that only rights can refuse it. */
 function bodyFor(route: Route, world: World, place: number): object | undefined {
@@ -116,6 +124,13 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/records/:id/withdraw': () => ({ password: PASSWORD, reason: 'Written twice' }),
     'post /farms/:farmId/records/:id/review': () => ({}),
     'post /farms/:farmId/records/:id/discard': () => ({}),
+    'post /farms/:farmId/season-plans': () => ({ id: uuidV7(), name: tag, steps: [buildStep(things)] }),
+    'put /farms/:farmId/season-plans/:id': () => ({ revision: 9, name: tag, steps: [buildStep(things)] }),
+    'post /farms/:farmId/season-plans/:id/end': () => ({ revision: 9, reason: tag }),
+    'post /farms/:farmId/season-plans/:id/reopen': () => ({ revision: 9 }),
+    'post /farms/:farmId/jobs/:id/move': () => ({ revision: 9, to: '2026-07-15' }),
+    'post /farms/:farmId/jobs/:id/skip': () => ({ revision: 9, reason: tag }),
+    'post /farms/:farmId/jobs/:id/unskip': () => ({ revision: 9 }),
   }
   const make = bodies[`${route.method} ${route.path}`]
   if (!make && route.body) throw new Error(`The matrix has no body for ${route.method} ${route.path}`)
@@ -125,11 +140,12 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
-    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))
-  const id = things === null ? UNKNOWN : found === undefined ? world.recordId : found[1] ?? UNKNOWN
-  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}`
+  const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN
+  const id = things === null ? unknown : found === undefined ? world.recordId : found[1] ?? UNKNOWN
+  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}${route.path.endsWith('/season-sheet') ? '?from=2026-06-01&to=2026-06-30' : ''}`
 }
 
 let place = 10

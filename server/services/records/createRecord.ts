@@ -4,6 +4,7 @@ import { personOf, type FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
+import { linkJobs } from '../rounds/jobLinks.ts'
 import type { Services } from '../services.ts'
 import { draftRecord } from './draftRecord.ts'
 import { presentRecord } from './presentRecord.ts'
@@ -13,8 +14,8 @@ import { storeProjections } from './storeProjections.ts'
 export async function createRecord(services: Services, actor: FarmActor, input: CreateRecord): Promise<{ made: boolean; record: RecordAnswer }> {
   const now = services.clock.now()
   return services.database.inFarm(actor, async (manager) => {
-    const { id, deviceAt, ...content } = input
-    const creationDigest = digestOf({ ...content, id })
+    const { id, deviceAt, jobs, ...content } = input
+    const creationDigest = digestOf({ ...content, id, ...(jobs.length > 0 && { jobs }) })
     const repeated = await findRepeat(manager, ApplicationRecord, { farmId: actor.farmId, id, creationDigest })
     if (repeated) return { made: false, record: await presentRecord(manager, repeated) }
     const row: ApplicationRecord = {
@@ -38,6 +39,7 @@ export async function createRecord(services: Services, actor: FarmActor, input: 
     const { made, stored } = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
     if (!made) return { made, record: await presentRecord(manager, stored) }
     await storeProjections(manager, row, false)
+    if (jobs.length > 0) await linkJobs(manager, { farmId: actor.farmId, recordId: id }, jobs)
     await appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id })
     return { made, record: await presentRecord(manager, row) }
   })

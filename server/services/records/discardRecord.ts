@@ -6,6 +6,7 @@ import { AppError, notFound } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { forgetUnheld, orUnavailable } from '../files/farmFiles.ts'
 import { leaveFiles } from '../files/holdFiles.ts'
+import { unlinkJobs } from '../rounds/jobLinks.ts'
 import type { Services } from '../services.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
 import { dropProjections } from './storeProjections.ts'
@@ -30,6 +31,7 @@ export async function discardRecord(services: Services, actor: FarmActor, id: st
     const isBegun = record.state === 'started'
     const files = await leaveFiles(manager, record, { keep: isBegun, at: services.clock.now() })
     await dropProjections(manager, { farmId, recordId: id })
+    await unlinkJobs(manager, { farmId, recordId: id })
     await manager.delete(ApplicationRecord, { farmId, id })
     const { state, content, doneById, enteredById, receivedAt } = record
     const whole = isBegun ? { content, doneById, enteredById, receivedAt: receivedAt.toISOString(), files: files.kept } : {}

@@ -2,6 +2,7 @@ import type { Method, RecordContent } from '../../../shared/contract/recordConte
 import { firstStart } from '../../../shared/records/registerRow.ts'
 import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
 import type { FieldError } from '../../errors.ts'
+import { findBasisFaults, measureOf } from './findBasisFaults.ts'
 import { findPartFaults } from './findPartFaults.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 
@@ -62,19 +63,9 @@ function findComponentFaults(content: RecordContent, { materials, lots }: Record
   const path = `components.${index}`
   const faults: FieldError[] = []
   const { basis, used } = component
-  if (basis.kind === 'ratio' && material.measuredIn === 'mass') faults.push({ path: `${path}.basis.kind`, code: 'unit.not_volume' })
-  if (basis.kind !== 'ratio' && measureOf(basis.unit) !== material.measuredIn) {
-    faults.push({ path: `${path}.basis.unit`, code: `unit.needs_${material.measuredIn}` })
-  }
+  faults.push(...findBasisFaults(basis, material, `${path}.basis`))
   if (used !== null && measureOf(used.unit) !== material.measuredIn) faults.push({ path: `${path}.used.unit`, code: `unit.needs_${material.measuredIn}` })
   const lot = lots.find(({ id }) => id === component.lotId)
   if (lot && lot.materialId !== material.id) faults.push({ path: `${path}.lotId`, code: 'lot.other_material', params: { code: lot.code } })
   return faults
-}
-
-/** Volume or mass, of an amount or of the amount in a rate over land. */
-function measureOf(unit: Exclude<RecordContent['components'][number]['basis'], { kind: 'ratio' }>['unit']): string {
-  const dimension = dimensionOf(unit)
-  if (dimension === 'volume' || dimension === 'volumePerArea') return 'volume'
-  return 'mass'
 }

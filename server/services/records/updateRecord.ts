@@ -5,6 +5,7 @@ import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
+import { linkJobs } from '../rounds/jobLinks.ts'
 import type { Services } from '../services.ts'
 import { updateRow } from '../updateRow.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
@@ -23,7 +24,7 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     if (!record) throw notFound()
     assertMayWrite(actor, record)
     // Both clocks are those of the first sending: a later one beside them would look like a clock that is wrong.
-    const { revision, deviceAt: _later, ...sent } = input
+    const { revision, deviceAt: _later, jobs, ...sent } = input
     // Nobody named means nobody changed: the doer stays who it was.
     const content = { ...sent, doneById: sent.doneById ?? record.doneById }
     if (record.state === 'signed' || record.state === 'withdrawn') throw new AppError('conflict', 'record.signed', { current: await presentRecord(manager, record) })
@@ -37,6 +38,7 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id }, changes)
     const written = { ...record, ...changes }
     await storeProjections(manager, written, true)
+    if (jobs !== undefined) await linkJobs(manager, { farmId: actor.farmId, recordId: id }, jobs)
     await appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } })
     return presentRecord(manager, written)
   })

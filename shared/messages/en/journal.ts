@@ -22,6 +22,8 @@ export const journal = {
     },
     file: { added: 'Added a photo or paper', removed: 'Took a photo or paper back' },
     grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
+    plan: { created: 'Made a season plan', updated: 'Changed a season plan', ended: 'Ended a season plan', reopened: 'Took the end of a season plan back' },
+    job: { moved: 'Moved a job', skipped: 'Skipped a job', unskipped: 'Took the skip of a job back' },
     report: { downloaded: 'Downloaded a season report' },
   },
 }

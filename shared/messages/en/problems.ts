@@ -62,7 +62,7 @@ export const problems = {
   filters: { full: 'You keep {maximum} filters already. Forget one first.' },
   idempotency: { mismatch: 'This id was used for something else. Make a new one.' },
   label: { most_below_least: 'The most that is allowed lies below the least.' },
-  date: { invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.', to_before_from: 'The last day must come after the first.' },
+  date: { invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.', to_before_from: 'The last day must come after the first.', window_too_long: 'Ask about a year at most at once.' },
   time: {
     zone_needed: 'Give the time with its offset, such as 2026-06-16T06:50:00-07:00.',
     range: 'This year is out of range.',
@@ -153,6 +153,20 @@ export const problems = {
     too_fine: 'The cut is laced too finely to be worked out. Draw it with fewer points.',
   },
   merge: { twice: 'One block is named twice.' },
+  plan: {
+    too_long: 'A plan runs for a year at most. Set an earlier last day, or make two plans.',
+    early_days: 'The days before must be fewer than the days between two rounds.',
+    water_jar: 'A plan cannot be sized by a jar: say the water, the spray rate, or leave it open.',
+    step_twice: 'Two steps have the same id. Give each its own.',
+    too_many_jobs: 'This comes to more than {most} jobs. Take fewer blocks, or more days between rounds.',
+  },
+  job: {
+    unknown: 'One of these jobs is not in any plan of this farm. Open the record again from the season sheet.',
+    settled: 'This job was done or skipped already. Look at it again.',
+    not_skipped: 'This job is not skipped.',
+    past_day: 'That day has passed. Choose today, {todayOn}, or a later day; what was done is written as a record.',
+    outside_window: 'That day lies outside the days of this job, {earliestOn} to {latestOn}. Change it, or say why it is right.',
+  },
   planting: { eppo: 'An EPPO code has five or six letters and digits, such as MABSD.' },
   bed: {
     named: 'Give numbers from and to, or a name.',

@@ -23,6 +23,8 @@ export const journal: Messages['journal'] = {
     },
     file: { added: 'Añadió una foto o un documento', removed: 'Quitó una foto o un documento' },
     grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión' },
+    plan: { created: 'Hizo un plan de campaña', updated: 'Cambió un plan de campaña', ended: 'Terminó un plan de campaña', reopened: 'Retiró el fin de un plan de campaña' },
+    job: { moved: 'Movió una tarea', skipped: 'Saltó una tarea', unskipped: 'Retiró el salto de una tarea' },
     report: { downloaded: 'Descargó un informe de campaña' },
   },
 }

@@ -62,7 +62,7 @@ export const problems = {
   filters: { full: 'Ya guarda {maximum} filtros. Olvide uno antes.' },
   idempotency: { mismatch: 'Este identificador ya se usó para otra cosa. Cree uno nuevo.' },
   label: { most_below_least: 'El máximo permitido queda por debajo del mínimo.' },
-  date: { invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.', to_before_from: 'El último día debe ser posterior al primero.' },
+  date: { invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.', to_before_from: 'El último día debe ser posterior al primero.', window_too_long: 'Pida un año como máximo de una vez.' },
   time: {
     zone_needed: 'Indique la hora con su desfase, como 2026-06-16T06:50:00-07:00.',
     range: 'Ese año queda fuera de lo posible.',
@@ -153,6 +153,20 @@ export const problems = {
     too_fine: 'El corte está trenzado demasiado fino para calcularlo. Dibújelo con menos puntos.',
   },
   merge: { twice: 'Una parcela se nombra dos veces.' },
+  plan: {
+    too_long: 'Un plan dura un año como máximo. Ponga un último día anterior o haga dos planes.',
+    early_days: 'Los días de adelanto deben ser menos que los días entre dos rondas.',
+    water_jar: 'Un plan no se puede medir por un frasco: indique el agua o el caldo por hectárea, o déjelo abierto.',
+    step_twice: 'Dos pasos tienen el mismo id. Dé a cada uno el suyo.',
+    too_many_jobs: 'Son más de {most} tareas. Tome menos parcelas o deje más días entre rondas.',
+  },
+  job: {
+    unknown: 'Una de estas tareas no está en ningún plan de esta finca. Abra el registro de nuevo desde la hoja de campaña.',
+    settled: 'Esta tarea ya se hizo o se saltó. Mírela de nuevo.',
+    not_skipped: 'Esta tarea no está saltada.',
+    past_day: 'Ese día ya pasó. Elija hoy, {todayOn}, o un día posterior; lo hecho se anota como registro.',
+    outside_window: 'Ese día queda fuera de los días de esta tarea, del {earliestOn} al {latestOn}. Cámbielo o diga por qué es correcto.',
+  },
   planting: { eppo: 'Un código EPPO tiene cinco o seis letras y cifras, como MABSD.' },
   bed: {
     named: 'Dé números desde y hasta, o un nombre.',
