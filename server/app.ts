@@ -61,7 +61,7 @@ function createApi(services: Services, sessions: Sessions): express.Router {
   api.use(refuseForeign)
   api.use(...readJson(BODY_LIMIT))
   api.use(...sessions.handlers)
-  api.use(mountRoutes(ROUTES, { services, limitPasswords: limitPasswords(services), authenticate: sessions.authenticate }))
+  api.use(mountRoutes(ROUTES, { services, limitPasswords: limitPasswords(services), authenticate: sessions.authenticate, openFor: sessions.openFor }))
   api.use(() => {
     throw new AppError('not-found', 'not_found')
   })

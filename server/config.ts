@@ -20,6 +20,8 @@ const environment = z.object({
   DATABASE_POOL: z.coerce.number().int().min(1).max(200).default(10),
   SESSION_SECRET: z.string().min(32, 'must have at least 32 characters'),
   PUBLIC_URL: z.url('must be the address people open, https://…').optional(),
+  SECOND_FACTOR_SECRET: z.string().min(32, 'must have at least 32 characters').optional(),
+  SESSIONS_PER_ACCOUNT: z.coerce.number().int().min(1).max(10_000).optional(),
   FARMS_PER_ACCOUNT: z.coerce.number().int().min(1).max(10_000).default(20),
   LOG_FILE: z.string().optional(),
   SEED_DEMO: z.enum(['0', '1']).default('0'),
@@ -58,6 +60,10 @@ export interface Config {
   databaseOwnerUrl: string
   databasePool: number
   sessionSecret: string
+  /** What secrets of second factors are sealed with. */
+  factorSecret: string
+  /** Sessions that one account may have at a time. */
+  sessionsPerAccount: number
   publicUrl: string | null
   cookies: CookieConfig
   /** Farms that one account may own. */
@@ -113,6 +119,9 @@ export interface FilesConfig {
 
 /** Whom kept letters come from; RFC 2606 keeps the name out of the real world. */
 const NOBODY: Mailbox = { name: 'Drenchleaf', address: 'register@drenchleaf.invalid' }
+const SESSIONS = 5
+/** Whoever tries the demo signs in with the same few accounts. */
+const DEMO_SESSIONS = 500
 const BYTES_PER_MB = 1_000_000
 
 /**
@@ -134,6 +143,8 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     databaseOwnerUrl: values.DATABASE_OWNER_URL,
     databasePool: values.DATABASE_POOL,
     sessionSecret: values.SESSION_SECRET,
+    factorSecret: values.SECOND_FACTOR_SECRET ?? values.SESSION_SECRET,
+    sessionsPerAccount: values.SESSIONS_PER_ACCOUNT ?? (values.SEED_DEMO === '1' ? DEMO_SESSIONS : SESSIONS),
     publicUrl,
     cookies: cookiesOf(publicUrl),
     farmsPerAccount: values.FARMS_PER_ACCOUNT,

@@ -17,6 +17,10 @@ export interface FarmActor {
   seasons: number[] | null
   /** Where the request came from, as far as it is kept; null for what no request asked for. */
   origin: Origin | null
+  /** What is asked when the account signs something. */
+  signsWith: 'password' | 'pin'
+  /** Whether this role on this farm needs a second factor. */
+  asksFactor: boolean
 }
 
 /** From where: the network without its last part, and the names of browser and system. */

@@ -13,6 +13,7 @@ import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
 import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
+import { WholePeople1764641000000 } from '../../migrations/1764641000000-WholePeople.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -51,8 +52,9 @@ export function createOwnerSource(url: string): DataSource {
       WholeBlocks1764610000000,
       AddGround1764620000000,
       SayWhatReplaced1764630000000,
-      WholeGrants1764643000000,
       AddMail1764640000000,
+      WholePeople1764641000000,
+      WholeGrants1764643000000,
       AddRounds1764644000000,
     ],
     migrationsTransactionMode: 'each',

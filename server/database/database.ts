@@ -13,6 +13,8 @@ interface AccessRow {
   person_id: string | null
   person_name: string | null
   seasons: number[] | null
+  kind: 'email' | 'pin'
+  asks_factor: boolean
 }
 
 /** Who acts, where; seeding and the making of a farm know no role. */
@@ -96,7 +98,10 @@ async function listFarms(source: DataSource): Promise<FarmOnRound[]> {
 }
 
 async function listAccess(source: DataSource, accountId: string, at: Date): Promise<FarmActor[]> {
-  const rows: AccessRow[] = await source.query('SELECT * FROM account_access($1, $2)', [accountId, at])
+  const rows: AccessRow[] = await source.query(
+    'SELECT f.*, a.kind, farm_asks_factor(f.farm_id) AS asks_factor FROM account_access($1, $2) f JOIN accounts a ON a.id = $1 ORDER BY f.farm_name, f.farm_id',
+    [accountId, at],
+  )
   return rows.map((row) => ({
     accountId,
     farmId: row.farm_id,
@@ -108,5 +113,7 @@ async function listAccess(source: DataSource, accountId: string, at: Date): Prom
     personName: row.person_name,
     seasons: row.seasons,
     origin: null,
+    signsWith: row.kind === 'pin' ? 'pin' : 'password',
+    asksFactor: row.asks_factor && row.role !== 'applicator',
   }))
 }

@@ -21,17 +21,20 @@ import { Person } from '../entities/Person.ts'
 import { PlanJob } from '../entities/PlanJob.ts'
 import { PlanJobRecord } from '../entities/PlanJobRecord.ts'
 import { PlanStep } from '../entities/PlanStep.ts'
+import { PersonPaper } from '../entities/PersonPaper.ts'
 import { Planting } from '../entities/Planting.ts'
 import { RecordComponent } from '../entities/RecordComponent.ts'
 import { RecordLine } from '../entities/RecordLine.ts'
 import { RecordReview } from '../entities/RecordReview.ts'
 import { RecordTerm } from '../entities/RecordTerm.ts'
 import { RecordVersion } from '../entities/RecordVersion.ts'
+import { RecoveryCode } from '../entities/RecoveryCode.ts'
 import { RegisterEntry } from '../entities/RegisterEntry.ts'
 import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
 import { SeasonHead } from '../entities/SeasonHead.ts'
 import { SeasonPlan } from '../entities/SeasonPlan.ts'
+import { SharedPhone } from '../entities/SharedPhone.ts'
 import { Site } from '../entities/Site.ts'
 import { Sprayer } from '../entities/Sprayer.ts'
 
@@ -60,17 +63,20 @@ export const ENTITIES = [
   PlanJob,
   PlanJobRecord,
   PlanStep,
+  PersonPaper,
   Planting,
   RecordComponent,
   RecordLine,
   RecordReview,
   RecordTerm,
   RecordVersion,
+  RecoveryCode,
   RegisterEntry,
   SavedFilter,
   SeasonCounter,
   SeasonHead,
   SeasonPlan,
+  SharedPhone,
   Site,
   Sprayer,
 ]

@@ -6,11 +6,14 @@
 export const APP_RIGHTS: Record<string, string> = {
   accounts: 'SELECT, INSERT, UPDATE',
   account_tokens: 'SELECT, INSERT, UPDATE',
+  recovery_codes: 'SELECT, INSERT, UPDATE',
   sessions: 'SELECT, INSERT, UPDATE, DELETE',
   farms: 'SELECT, INSERT, UPDATE',
   farm_heads: 'SELECT, INSERT, UPDATE',
   season_counters: 'SELECT, INSERT, UPDATE',
   people: 'SELECT, INSERT, UPDATE',
+  shared_phones: 'SELECT, INSERT, UPDATE',
+  person_papers: 'SELECT, INSERT, UPDATE',
   grants: 'SELECT, INSERT, UPDATE',
   blocks: 'SELECT, INSERT, UPDATE',
   sites: 'SELECT, INSERT, UPDATE',
@@ -45,4 +48,6 @@ export const APP_RIGHTS: Record<string, string> = {
 }
 
 /** Functions the app role may call that look over farm borders; each answers only what its name says. */
-export const APP_FUNCTIONS = ['account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'find_check_code(text)', 'every_farm()']
+export const APP_FUNCTIONS = [
+  'account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'every_farm()', 'farm_asks_factor(uuid)', 'find_check_code(text)',
+]

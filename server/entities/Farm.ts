@@ -8,6 +8,8 @@ export class Farm {
   @Column({ type: 'text' }) zone!: string
   /** MM-DD. */
   @Column({ name: 'season_start', type: 'text' }) seasonStart!: string
+  /** Whether owner, manager and certifier need a second factor to open it. */
+  @Column({ name: 'asks_second_factor', type: 'boolean', default: false }) asksSecondFactor!: boolean
   /** Optimistic lock: counts writes. */
   @Column({ type: 'integer', default: 1 }) revision!: number
   /** Digest of the command that made it; tells a repeat from other content under the same id. */

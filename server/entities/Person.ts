@@ -17,5 +17,9 @@ export class Person {
   @Column({ name: 'name_salt', type: 'text' }) nameSalt!: string
   @Column({ type: 'text' }) role!: Exclude<Role, 'certifier'>
   @Column({ type: 'boolean', default: true }) active!: boolean
+  /** Optimistic lock: counts writes. */
+  @Column({ type: 'integer', default: 1 }) revision!: number
+  /** Digest of the command that made the person; empty where none did: a farm's first owner, an invitation taken up. */
+  @Column({ name: 'creation_digest', type: 'text', default: '' }) creationDigest!: string
   @Column({ name: 'created_at', type: 'timestamptz' }) createdAt!: Date
 }

@@ -4,8 +4,9 @@ import { emailDigest } from '../services/emailDigest.ts'
 import type { Services } from '../services/services.ts'
 import { emailOf } from './limitPasswords.ts'
 
-export type SecurityEvent = 'sign-in.ok' | 'sign-in.failed' | 'secret.wrong' | 'forbidden' | 'limited' | 'password.changed'
+export type SecurityEvent = 'sign-in.ok' | 'sign-in.failed' | 'secret.wrong' | 'forbidden' | 'limited' | 'password.changed' | 'rights.changed' | 'factor.changed' | 'phone.enrolled'
 
+const REFUSED: ReadonlySet<SecurityEvent> = new Set(['sign-in.failed', 'secret.wrong', 'forbidden', 'limited'])
 const FARM = /^\/api\/farms\/([0-9a-f-]{36})/i
 
 /**
@@ -14,7 +15,7 @@ const FARM = /^\/api\/farms\/([0-9a-f-]{36})/i
  */
 export function logSecurity(services: Pick<Services, 'config' | 'logger'>, request: Request, event: SecurityEvent, more: { accountId?: string; code?: string } = {}): void {
   const email = emailOf(request)
-  const level = event === 'sign-in.ok' || event === 'password.changed' ? 'info' : 'warn'
+  const level = REFUSED.has(event) ? 'warn' : 'info'
   services.logger[level]({
     event,
     requestId: String(request.id),
@@ -31,7 +32,7 @@ export function logSecurity(services: Pick<Services, 'config' | 'logger'>, reque
 
 /** The event that a refusal is, or null where it is none. */
 export function securityEventOf({ status, code, countsAsGuess }: AppError): SecurityEvent | null {
-  if (countsAsGuess) return code === 'session.wrong' ? 'sign-in.failed' : 'secret.wrong'
+  if (countsAsGuess) return code === 'session.wrong' || code === 'pin.wrong' || code === 'session.code_wrong' ? 'sign-in.failed' : 'secret.wrong'
   if (status === 403) return 'forbidden'
   return status === 429 ? 'limited' : null
 }

@@ -3,15 +3,17 @@ import session from 'express-session'
 import type { Request, RequestHandler, Response } from 'express'
 import passport from 'passport'
 import { Strategy as LocalStrategy } from 'passport-local'
-import { isOpenAccount, signIn } from '../services/signIn.ts'
+import { assertSecondStep } from '../services/factor/assertSecondStep.ts'
+import { readOpenSession, type OpenSession } from '../services/sessions/readOpenSession.ts'
+import { recordSession, spanOf, type SessionKind } from '../services/sessions/recordSession.ts'
+import { signIn } from '../services/signIn.ts'
 import type { Services } from '../services/services.ts'
-
-const DAY_MS = 86_400_000
-/** A session ends after this long, whatever happens; a phone in the rows is not asked every morning. */
-const ABSOLUTE_MS = 30 * DAY_MS
 
 /** Judges a sign-in and opens its session. @returns the account's id, or null where e-mail and password do not match. */
 export type Authenticate = (request: Request, response: Response) => Promise<string | null>
+
+/** Opens a session for an account that was judged elsewhere: by PIN on a shared phone. */
+export type OpenFor = (request: Request, accountId: string, kind: SessionKind) => Promise<void>
 
 /** The session store keeps connections of its own, beside the pool that serves. */
 const SESSION_CONNECTIONS = 2
@@ -20,6 +22,8 @@ declare global {
   namespace Express {
     interface User {
       accountId: string
+      /** Null until the session that is being opened is written. */
+      open: OpenSession | null
     }
   }
 }
@@ -28,6 +32,7 @@ declare global {
 export interface Sessions {
   handlers: RequestHandler[]
   authenticate: Authenticate
+  openFor: OpenFor
   close(): void
 }
 
@@ -50,14 +55,14 @@ export function useSessions(services: Services): Sessions {
   authenticator.use(
     new LocalStrategy({ usernameField: 'email' }, (email, password, done) => {
       signIn(services, { email, password }).then(
-        (account) => done(null, account ? { accountId: account.id } : false),
+        (account) => done(null, account ? { accountId: account.id, open: null } : false),
         (error: unknown) => done(error),
       )
     }),
   )
   authenticator.serializeUser((user, done) => done(null, user.accountId))
-  authenticator.deserializeUser((accountId: string, done) => {
-    isOpenAccount(services, accountId).then((isOpen) => done(null, isOpen ? { accountId } : false), done)
+  authenticator.deserializeUser((request: Request, accountId: string, done: (fault: unknown, user?: Express.User | false) => void) => {
+    readOpenSession(services, { sid: request.sessionID, accountId }).then((open) => done(null, open ? { accountId, open } : false), (fault: unknown) => done(fault))
   })
   const handlers = [
     session({
@@ -67,23 +72,38 @@ export function useSessions(services: Services): Sessions {
       resave: false,
       saveUninitialized: false,
       proxy: secure,
-      cookie: { httpOnly: true, sameSite: 'lax', secure, maxAge: ABSOLUTE_MS, path: '/' },
+      cookie: { httpOnly: true, sameSite: 'lax', secure, maxAge: spanOf(null), path: '/' },
     }),
     authenticator.initialize(),
     authenticator.session(),
   ]
-  return { handlers, authenticate: authenticateWith(authenticator), close: () => store.close() }
+  const openFor: OpenFor = (request, accountId, kind) => openSession(services, request, accountId, kind)
+  return { handlers, openFor, authenticate: authenticateWith(services, authenticator), close: () => store.close() }
 }
 
-/** Lets passport judge the e-mail and password of a request, and renew the session. */
-function authenticateWith(authenticator: InstanceType<typeof passport.Passport>): Authenticate {
-  return (request, response) =>
-    new Promise((resolve, reject) => {
-      const judge = authenticator.authenticate('local', (error: unknown, user: Express.User | false) => {
-        if (error) return reject(error as Error)
-        if (!user) return resolve(null)
-        request.logIn(user, (fault: unknown) => (fault ? reject(fault as Error) : resolve(user.accountId)))
-      }) as RequestHandler
+/** Lets passport judge the e-mail and password of a request; then the second factor is asked, where there is one, and the session opens under a new id. */
+function authenticateWith(services: Services, authenticator: InstanceType<typeof passport.Passport>): Authenticate {
+  return async (request, response) => {
+    const user = await new Promise<Express.User | false>((resolve, reject) => {
+      const judge = authenticator.authenticate('local', (error: unknown, found: Express.User | false) => (error ? reject(error as Error) : resolve(found))) as RequestHandler
       void judge(request, response, reject)
     })
+    if (!user) return null
+    await assertSecondStep(services, user.accountId, codeOf(request))
+    await openSession(services, request, user.accountId, null)
+    return user.accountId
+  }
+}
+
+async function openSession(services: Services, request: Request, accountId: string, kind: SessionKind): Promise<void> {
+  await new Promise<void>((resolve, reject) => {
+    request.logIn({ accountId, open: null }, (fault: unknown) => (fault ? reject(fault as Error) : resolve()))
+  })
+  request.session.cookie.maxAge = spanOf(kind)
+  await new Promise<void>((resolve, reject) => request.session.save((fault: unknown) => (fault ? reject(fault as Error) : resolve())))
+  await recordSession(services, { sid: request.sessionID, accountId, agent: request.get('User-Agent') ?? null, kind })
+}
+
+function codeOf({ body }: Request): string | undefined {
+  return typeof body === 'object' && body !== null && 'code' in body && typeof body.code === 'string' ? body.code : undefined
 }

@@ -5,6 +5,7 @@ import type { Language } from '../../shared/messages/translate.ts'
 import type { FarmActor } from '../database/actor.ts'
 import type { UploadedFile } from '../services/files/judgeFile.ts'
 import type { Services } from '../services/services.ts'
+import type { SessionKind } from '../services/sessions/recordSession.ts'
 
 /** Who may call: everybody, any signed-in account, or those roles on the farm named in the path. */
 export type RouteRoles = 'everybody' | 'account' | readonly Role[]
@@ -24,6 +25,8 @@ export interface RouteCall<Params, Query, Body, Actor, File = null> {
   services: Services
   /** Judges the e-mail and password in the body and opens a session; the account's id, or null. */
   authenticate(): Promise<string | null>
+  /** Opens a session for an account that was judged by its PIN. */
+  openFor(accountId: string, kind: SessionKind): Promise<void>
   request: Request
   response: Response
 }

@@ -1,10 +1,10 @@
 import { farmParamsSchema, pageOf, pageQuerySchema } from '../../shared/contract/common.ts'
-import { createFarmSchema, createSprayerSchema, farmSchema, personSchema, sprayerSchema } from '../../shared/contract/farm.ts'
+import { createFarmSchema, createSprayerSchema, farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
-import { describeFarm, listPeople } from '../services/farms/describeFarm.ts'
+import { describeFarm } from '../services/farms/describeFarm.ts'
 import { createSprayer, listSprayers } from '../services/farms/sprayers.ts'
 import { defineRoute } from './defineRoute.ts'
-import { EVERY_ROLE, FARM_PEOPLE, LEADERS } from './roleGroups.ts'
+import { EVERY_ROLE, LEADERS } from './roleGroups.ts'
 
 export const farmRoutes = [
   defineRoute({
@@ -19,11 +19,6 @@ export const farmRoutes = [
     method: 'get', path: '/farms/:farmId', summary: 'The farm: name, zone, season.', roles: EVERY_ROLE,
     params: farmParamsSchema, answer: farmSchema,
     run: async ({ services, actor }) => ({ body: await describeFarm(services, actor) }),
-  }),
-  defineRoute({
-    method: 'get', path: '/farms/:farmId/people', summary: 'People of the farm.', roles: FARM_PEOPLE,
-    params: farmParamsSchema, query: pageQuerySchema, answer: pageOf(personSchema),
-    run: async ({ services, actor, query }) => ({ body: await listPeople(services, actor, query) }),
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/sprayers', summary: 'Sprayers and drenchers, by code.', roles: EVERY_ROLE,

@@ -3,7 +3,7 @@ import type { z } from 'zod'
 import { deviceWords } from '../../shared/devices/deviceWords.ts'
 import { AppError, forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from '../database/actor.ts'
-import type { Authenticate } from '../middleware/session.ts'
+import type { Authenticate, OpenFor } from '../middleware/session.ts'
 import { readLanguage } from '../middleware/readLanguage.ts'
 import { readUpload } from '../middleware/readUpload.ts'
 import type { UploadedFile } from '../services/files/judgeFile.ts'
@@ -16,6 +16,7 @@ interface House {
   services: Services
   limitPasswords: RequestHandler
   authenticate: Authenticate
+  openFor: OpenFor
 }
 
 /**
@@ -38,7 +39,7 @@ export function mountRoutes(routes: Route[], house: House): Router {
   return router
 }
 
-async function serve(route: Route, { services, authenticate }: House, request: Request, response: Response): Promise<void> {
+async function serve(route: Route, { services, authenticate, openFor }: House, request: Request, response: Response): Promise<void> {
   if (!route.upload && request.is('multipart/form-data')) throw new AppError('wrong-type', 'wrong_type')
   const accountId = request.user?.accountId ?? ''
   if (route.roles !== 'everybody' && accountId === '') throw new AppError('unauthenticated', 'unauthenticated')
@@ -56,6 +57,7 @@ async function serve(route: Route, { services, authenticate }: House, request: R
     language: readLanguage(request),
     services,
     authenticate: () => authenticate(request, response),
+    openFor: (account, kind) => openFor(request, account, kind),
     request,
     response,
   })
@@ -86,11 +88,11 @@ function refuseQuery(query: object): Record<string, never> {
 }
 
 async function authorise(route: Route, services: Services, request: Request, params: unknown): Promise<FarmActor> {
-  const accountId = request.user?.accountId ?? ''
   const { farmId } = params as { farmId: string }
-  const access = await services.database.listAccess(accountId, services.clock.now())
+  const access = await services.database.listAccess(request.user?.accountId ?? '', services.clock.now())
   const actor = access.find((candidate) => candidate.farmId === farmId.toLowerCase())
   if (!actor) throw notFound()
   if (!route.roles.includes(actor.role)) throw forbidden()
+  if (actor.asksFactor && request.user?.open?.hasFactor !== true) throw forbidden('session.factor_needed')
   return { ...actor, origin: { network: truncateAddress(request.ip), device: deviceWords(request.get('User-Agent')) } }
 }

@@ -5,7 +5,10 @@ import { fileRoutes } from './fileRoutes.ts'
 import { groundRoutes } from './groundRoutes.ts'
 import { growingRoutes } from './growingRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
+import { meRoutes } from './meRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
+import { peopleRoutes } from './peopleRoutes.ts'
+import { phoneRoutes } from './phoneRoutes.ts'
 import { recordLifeRoutes } from './recordLifeRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
 import { registerRoutes } from './registerRoutes.ts'
@@ -14,4 +17,7 @@ import { roundRoutes } from './roundRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
-export const ROUTES: Route[] = [...openRoutes, ...sessionRoutes, ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes]
+export const ROUTES: Route[] = [
+  ...openRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
+  ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
+]

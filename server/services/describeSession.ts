@@ -12,7 +12,15 @@ export async function describeSession(services: Services, accountId: string): Pr
   if (!account) throw new AppError('unauthenticated', 'unauthenticated')
   const access = await services.database.listAccess(accountId, services.clock.now())
   return {
-    user: { id: account.id, email: account.email, name: account.name, language: account.language },
-    memberships: access.map(({ farmId, farmName, role, personId, seasons }) => ({ farmId, farmName, role, personId, seasons })),
+    user: describeUser(account),
+    memberships: access.map(({ farmId, farmName, role, personId, seasons, asksFactor }) => ({
+      farmId, farmName, role, personId, seasons, factorNeeded: asksFactor && account.totpSecret === null,
+    })),
   }
+}
+
+/** An account as its own person sees it. */
+export function describeUser(account: Account): Session['user'] {
+  const { id, email, name, language, kind, preferences, revision, totpSecret } = account
+  return { id, email, name, language, signsWith: kind === 'pin' ? 'pin' : 'password', hasFactor: totpSecret !== null, preferences, revision }
 }

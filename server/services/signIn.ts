@@ -19,8 +19,3 @@ export async function isPasswordOf(services: Services, accountId: string, passwo
   )
   return verifyPassword(account?.passwordHash ?? null, password)
 }
-
-/** Whether an account exists and is not closed; asked at each request, so that closing it acts at once. */
-export function isOpenAccount(services: Pick<Services, 'database'>, accountId: string): Promise<boolean> {
-  return services.database.inHouse((manager) => manager.existsBy(Account, { id: accountId, deactivatedAt: IsNull() }))
-}

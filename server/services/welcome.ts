@@ -33,7 +33,7 @@ export async function inviteOwner(services: Parts, email: string): Promise<{ tok
 export async function readWelcome(services: Parts, token: string): Promise<{ email: string }> {
   return services.database.inHouse(async (manager) => {
     const found = await findToken(services, manager, token)
-    return { email: (await manager.findOneByOrFail(Account, { id: found.accountId })).email }
+    return { email: (await manager.findOneByOrFail(Account, { id: found.accountId })).email ?? '' }
   })
 }
 

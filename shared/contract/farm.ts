@@ -1,7 +1,6 @@
 import { z } from 'zod'
 import { idSchema } from './common.ts'
 import { positiveDecimal } from './quantity.ts'
-import { roleSchema } from './session.ts'
 import { lineText } from './text.ts'
 
 export const seasonStartSchema = z
@@ -29,15 +28,6 @@ export const farmSchema = z.object({
   place: z.tuple([z.number(), z.number()]).nullable(),
 })
 export type Farm = z.infer<typeof farmSchema>
-
-export const personSchema = z.object({
-  id: z.string(),
-  name: z.string(),
-  role: roleSchema,
-  email: z.string().nullable(),
-  active: z.boolean(),
-})
-export type Person = z.infer<typeof personSchema>
 
 export const createSprayerSchema = z.strictObject({
   id: idSchema,

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { preferencesSchema } from './preferences.ts'
 
 export const ROLES = ['owner', 'manager', 'applicator', 'certifier'] as const
 export const roleSchema = z.enum(ROLES)
@@ -10,6 +11,8 @@ export const passwordSchema = z.string().min(1, { error: 'text.required' }).max(
 export const signInSchema = z.strictObject({
   email: z.string().trim().min(3, { error: 'text.required' }).max(254, { error: 'text.too_long' }),
   password: passwordSchema,
+  /** Of the second factor, where the account has one: the first answer without it is `session.code_needed`. */
+  code: z.string().min(1, { error: 'text.required' }).max(60, { error: 'text.too_long' }).optional(),
 })
 
 export const membershipSchema = z.object({
@@ -19,10 +22,23 @@ export const membershipSchema = z.object({
   personId: z.string().nullable(),
   /** Seasons a certifier may read; null for the farm's own people. */
   seasons: z.array(z.number().int()).nullable(),
+  /** The farm asks a second factor of this role, and the account has none: it opens once there is one. */
+  factorNeeded: z.boolean(),
 })
 
 export const sessionSchema = z.object({
-  user: z.object({ id: z.string(), email: z.string(), name: z.string(), language: z.enum(['en', 'es']) }),
+  user: z.object({
+    id: z.string(),
+    /** Null for who has a PIN. */
+    email: z.string().nullable(),
+    name: z.string(),
+    language: z.enum(['en', 'es']),
+    /** What is asked when something is signed. */
+    signsWith: z.enum(['password', 'pin']),
+    hasFactor: z.boolean(),
+    preferences: preferencesSchema,
+    revision: z.number().int(),
+  }),
   memberships: z.array(membershipSchema),
 })
 export type Session = z.infer<typeof sessionSchema>

@@ -1,4 +1,4 @@
-import { personSchema, type Person } from '../../shared/contract/farm.ts'
+import { personSchema, type Person } from '../../shared/contract/person.ts'
 import { allPages } from './allPages.ts'
 
 /** The people of a farm. */

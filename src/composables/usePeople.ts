@@ -1,6 +1,6 @@
 import type { UseQueryReturnType } from '@tanstack/vue-query'
 import type { MaybeRefOrGetter } from 'vue'
-import type { Person } from '../../shared/contract/farm.ts'
+import type { Person } from '../../shared/contract/person.ts'
 import { peopleApi } from '../api/peopleApi.ts'
 import { useSession } from '../stores/session.ts'
 import { useFarmRead } from './useFarmRead.ts'

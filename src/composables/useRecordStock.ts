@@ -1,6 +1,7 @@
 import { computed, type ComputedRef } from 'vue'
 import type { Block } from '../../shared/contract/block.ts'
-import type { Farm, Person, Sprayer } from '../../shared/contract/farm.ts'
+import type { Farm, Sprayer } from '../../shared/contract/farm.ts'
+import type { Person } from '../../shared/contract/person.ts'
 import type { Lot, Material } from '../../shared/contract/input.ts'
 import { useSession } from '../stores/session.ts'
 import { useBlocks } from './useBlocks.ts'

@@ -27,6 +27,9 @@ interface World {
   eventId: string
   planId: string
   jobId: string
+  /** Somebody with a PIN. */
+  personId: string
+  phoneId: string
 }
 
 const PICTURE = await buildPicture('png')
@@ -73,13 +76,15 @@ async function makeWorld(): Promise<World> {
   const { site } = await createSite(house.services, ownerActor, buildSite())
   const { feature } = await createGround(house.services, ownerActor, buildGround())
   const owner = await house.as(farm.accounts.owner)
-  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7() }
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), personId: uuidV7(), phoneId: uuidV7() }
   await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
   await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
   await applicator.post(`/api/farms/${farm.id}/farm-events`).send({ id: ids.eventId, kind: 'mown', blockIds: [things.blockId], on: '2026-06-15' }).expect(201)
   const step = buildStep(things)
   await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/shared-phones`).send({ id: ids.phoneId, name: 'Barn phone', password: PASSWORD }).expect(201)
   return { farm, things, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
 }
 
@@ -110,6 +115,13 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'patch /farms/:farmId/beds/:id': () => ({ revision: 1, kind: 'bed', name: tag, count: 2 }),
     'post /farms/:farmId/farm-events': () => ({ id: uuidV7(), kind: 'mulched', blockIds: [things.blockId], on: '2026-06-16' }),
     'post /farms/:farmId/farm-events/:id/withdraw': () => ({ reason: 'A slip' }),
+    // The owner lets nobody go here: rights alone are asked, and everybody is still there for the routes that come after.
+    'post /farms/:farmId/people': () => ({ id: uuidV7(), name: tag, pin: '307461', password: PASSWORD }),
+    'patch /farms/:farmId/people/:id': () => ({ revision: 999, name: tag, password: PASSWORD }),
+    'put /farms/:farmId/people/:id/pin': () => ({ revision: 999, pin: '307461', password: PASSWORD }),
+    'post /farms/:farmId/people/:id/end-sessions': () => ({ password: PASSWORD }),
+    'post /farms/:farmId/people/:id/reset-factor': () => ({ password: PASSWORD }),
+    'put /farms/:farmId/second-factor': () => ({ asked: false, password: PASSWORD }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
@@ -140,6 +152,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
+    ['/people', world.personId], ['/shared-phones', world.phoneId],
     ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))

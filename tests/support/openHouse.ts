@@ -62,7 +62,8 @@ export async function openHouse(changes: { config?: Partial<Config>; logger?: Lo
   const config: Config = {
     port: 4310, host: '127.0.0.1', databasePool: 5, logFile: null, demo: null, fixedClock: null, publicUrl: null,
     databaseUrl: databaseUrl(cluster, 'app', name), databaseOwnerUrl: databaseUrl(cluster, 'owner', name),
-    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, tiles: null, mail: { smtpUrl: null, from: { name: 'Drenchleaf', address: 'register@farm.example' }, keptFile: null }, sessionSecret: 'a secret that only tests know, 32+', ...changes.config,
+    farmsPerAccount: 20, files: { folder, bucket: null, quotaBytes: 100_000_000 }, tiles: null, mail: { smtpUrl: null, from: { name: 'Drenchleaf', address: 'register@farm.example' }, keptFile: null }, sessionSecret: 'a secret that only tests know, 32+',
+    factorSecret: 'a secret that only tests know, 32+', sessionsPerAccount: 50, ...changes.config,
     cookies: cookiesOf(changes.config?.publicUrl ?? null),
   }
   const services: Services = {

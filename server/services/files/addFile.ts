@@ -58,7 +58,7 @@ async function prepare(actor: FarmActor, recordId: string, { id, kind }: AddFile
   const shown = type === 'application/pdf' ? null : await encodeImage(file.bytes, actor.zone)
   return {
     row: {
-      farmId: actor.farmId, id, recordId, kind, label, type, bytes: file.bytes.length, digest, ...describeShown(shown),
+      farmId: actor.farmId, id, about: 'record', recordId, kind, label, type, bytes: file.bytes.length, digest, ...describeShown(shown),
       uploadedById: personOf(actor), signedVersion: null, removedAt: null, creationDigest: digestOf({ id, recordId, kind, label, digest }),
     },
     contents: new Map([[digest, file.bytes], ...(shown ? [[digestOfFile(shown.bytes), shown.bytes] as const] : [])]),

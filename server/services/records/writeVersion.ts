@@ -71,7 +71,7 @@ export async function writeVersion(
   await storeProjections(manager, written, true)
   await manager.insert(RecordVersion, {
     farmId: actor.farmId, recordId: record.id, version: stamp.version, entry, seq, season, number: stamp.number, canonicalText: text, digest,
-    checkCode: cutCheckCode(digest), signedById: people.signedBy.id, signedAt: now, reason,
+    checkCode: cutCheckCode(digest), signedById: people.signedBy.id, signedAt: now, signedWith: actor.signsWith, reason,
   })
   await appendJournal(services, manager, actor, { action: `record.${entry}`, subjectId: record.id, detail: { number: stamp.number, version: stamp.version, seq } })
   return written

@@ -3,7 +3,7 @@ export const journal = {
   title: 'Journal',
   intro: 'Who did what, when and from where. It is written by the deed itself and is never changed.',
   action: {
-    farm: { created: 'Made the farm' },
+    farm: { created: 'Made the farm', factor_asked: 'Asked a second factor of who leads and certifies', factor_not_asked: 'Asked no second factor any more' },
     block: {
       created: 'Drew a block', updated: 'Changed a block', redrawn: 'Redrew a block', land_set: 'Set the land status of a block',
       ended_by_split: 'Split a block', ended_by_merge: 'Joined a block to others', ended_by_undone: 'Ended a block whose split or join was undone', reopened: 'Undid a split or a join',
@@ -21,6 +21,10 @@ export const journal = {
       withdrawn: 'Withdrew a record', reviewed: 'Reviewed a record', discarded: 'Discarded an unsigned record',
     },
     file: { added: 'Added a photo or paper', removed: 'Took a photo or paper back' },
+    person: {
+      added: 'Took somebody in', renamed: 'Changed a person’s name', role_changed: 'Changed a person’s role', let_go: 'Let somebody go', taken_back: 'Took somebody in again',
+      pin_set: 'Set a person’s PIN', sessions_ended: 'Ended a person’s sessions', factor_reset: 'Took a person’s second factor away',
+    },
     grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
     plan: { created: 'Made a season plan', updated: 'Changed a season plan', ended: 'Ended a season plan', reopened: 'Took the end of a season plan back' },
     job: { moved: 'Moved a job', skipped: 'Skipped a job', unskipped: 'Took the skip of a job back' },

@@ -79,6 +79,24 @@ export const problems = {
   session: {
     wrong: 'E-mail and password do not match.',
     wrong_password: 'Not signed: the password does not match. Nothing was lost.',
+    wrong_pin: 'Not signed: the PIN does not match. Nothing was lost.',
+    code_needed: 'Write the code of your second factor as well.',
+    code_wrong: 'This code does not match, or it was used already. Wait for the next one.',
+    factor_needed: 'This farm asks a second factor of you. Set it up on your own page first.',
+  },
+  pin: {
+    format: 'A PIN has six figures.',
+    trivial: 'This is one of the first PINs anybody tries. Choose another.',
+    wrong: 'Name and PIN do not match.',
+    role: 'Owner and manager sign in with an e-mail and a password. Invite this person by e-mail.',
+    has_email: 'This person signs in with an e-mail and a password; no PIN is needed.',
+    not_here: 'This phone does not belong to a farm any more. Ask the owner or a manager to sign in on it.',
+  },
+  factor: {
+    own_first: 'Set up your own second factor before you ask it of others.',
+    none: 'There is no second factor on this account.',
+    begin: 'Begin anew: nothing is being set up.',
+    wrong: 'This code does not match. Look at the clock of your phone, and take the newest code.',
   },
   farm: {
     zone: 'Give a time zone by its place, such as America/Los_Angeles.',
@@ -196,7 +214,11 @@ export const problems = {
   dose: { unit_suspect: 'This is {times} times what the label allows at most. Was a unit or a decimal mark mixed up? Correct it, or say why it is right.' },
   total: { inconsistent: '{applied} L went on the land, and the mix makes {total} L. Correct one of them, or say why.' },
   sprayer: { unknown: 'There is no such sprayer on this farm.', needed: 'An amount per tank needs the sprayer.' },
-  person: { unknown: 'There is no such person on this farm.', only_yourself: 'Record your own work; a manager records for others.' },
+  person: { unknown: 'There is no such person on this farm.', only_yourself: 'Record your own work; a manager records for others.',
+    last_owner: 'This is the last owner who can open the farm. Make somebody else an owner first.',
+    no_account: 'This person has never signed in here: there is nothing to end.',
+    on_other_farms: 'This account is on other farms too, so you cannot take its second factor away. A recovery code opens it.',
+  },
   record: {
     signed: 'This record is signed. Amend it instead.',
     not_yours: 'Somebody else wrote this record. A manager can sign it.',

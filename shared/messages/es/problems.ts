@@ -79,6 +79,24 @@ export const problems = {
   session: {
     wrong: 'El correo y la contraseña no coinciden.',
     wrong_password: 'Sin firmar: la contraseña no coincide. No se ha perdido nada.',
+    wrong_pin: 'Sin firmar: el PIN no coincide. No se ha perdido nada.',
+    code_needed: 'Escriba también el código de su segundo factor.',
+    code_wrong: 'Este código no coincide o ya se usó. Espere al siguiente.',
+    factor_needed: 'Esta finca le pide un segundo factor. Póngalo primero en su propia página.',
+  },
+  pin: {
+    format: 'Un PIN tiene seis cifras.',
+    trivial: 'Es uno de los primeros PIN que cualquiera prueba. Elija otro.',
+    wrong: 'El nombre y el PIN no coinciden.',
+    role: 'Quien es titular o responsable entra con correo y contraseña. Invite a esta persona por correo.',
+    has_email: 'Esta persona entra con correo y contraseña; no necesita PIN.',
+    not_here: 'Este teléfono ya no es de ninguna finca. Pida al titular o a un responsable que entre en él.',
+  },
+  factor: {
+    own_first: 'Ponga su propio segundo factor antes de pedirlo a otros.',
+    none: 'Esta cuenta no tiene segundo factor.',
+    begin: 'Empiece de nuevo: no se está poniendo ninguno.',
+    wrong: 'Este código no coincide. Mire el reloj de su teléfono y tome el código más nuevo.',
   },
   farm: {
     zone: 'Indique una zona horaria por su lugar, como America/Los_Angeles.',
@@ -196,7 +214,11 @@ export const problems = {
   dose: { unit_suspect: 'Esto es {times} veces lo máximo que permite la etiqueta. ¿Se confundió una unidad o la coma decimal? Corríjalo o diga por qué está bien.' },
   total: { inconsistent: 'Se aplicaron {applied} L, y la mezcla da {total} L. Corrija uno de los dos, o diga por qué.' },
   sprayer: { unknown: 'Ese pulverizador no existe en esta finca.', needed: 'Una cantidad por tanque necesita el pulverizador.' },
-  person: { unknown: 'Esa persona no existe en esta finca.', only_yourself: 'Anote su propio trabajo; el de otros lo anota un responsable.' },
+  person: { unknown: 'Esa persona no existe en esta finca.', only_yourself: 'Anote su propio trabajo; el de otros lo anota un responsable.',
+    last_owner: 'Es el último titular que puede abrir la finca. Haga antes titular a otra persona.',
+    no_account: 'Esta persona no ha entrado nunca aquí: no hay nada que cerrar.',
+    on_other_farms: 'Esta cuenta está también en otras fincas, así que usted no puede quitarle el segundo factor. La abre un código de recuperación.',
+  },
   record: {
     signed: 'Este registro está firmado. En su lugar, enmiéndelo.',
     not_yours: 'Otra persona escribió este registro. Puede firmarlo un responsable.',

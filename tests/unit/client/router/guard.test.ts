@@ -5,6 +5,7 @@ import type { Role, Session } from '../../../../shared/contract/session.ts'
 import { ApiError, NetworkError } from '../../../../src/api/errors.ts'
 import { guard } from '../../../../src/router/guard.ts'
 import { routes } from '../../../../src/router/routes.ts'
+import { buildUser } from '../buildUser.ts'
 import { MemoryTable } from '../memoryTable.ts'
 
 const here = vi.hoisted(() => ({ device: {} as { reads: unknown }, read: vi.fn() }))
@@ -12,8 +13,8 @@ vi.mock('../../../../src/plugins/device.ts', () => ({ device: here.device }))
 vi.mock('../../../../src/api/sessionApi.ts', () => ({ sessionApi: { read: here.read } }))
 
 const sessionOf = (role: Role): Session => ({
-  user: { id: 'u', email: 'u@demo.test', name: 'U', language: 'en' },
-  memberships: [{ farmId: 'f', farmName: 'F', role, personId: null, seasons: null }],
+  user: buildUser(),
+  memberships: [{ farmId: 'f', farmName: 'F', role, personId: null, seasons: null, factorNeeded: false }],
 })
 const signedOut = new ApiError({ type: 'about:blank', title: 'x', status: 401, code: 'unauthenticated', detail: '', errors: [], requestId: 'r' })
 

@@ -7,6 +7,7 @@ import type { KeptCommand } from '../../../../src/stores/keptCommand.ts'
 import type { KeptFile } from '../../../../src/stores/keptFile.ts'
 import { useOutbox } from '../../../../src/stores/outbox.ts'
 import { useSession } from '../../../../src/stores/session.ts'
+import { buildUser } from '../buildUser.ts'
 import { MemoryTable } from '../memoryTable.ts'
 
 const here = vi.hoisted(() => ({ device: {} as Record<string, unknown>, api: { add: vi.fn(), list: vi.fn(), remove: vi.fn() }, send: vi.fn() }))
@@ -26,7 +27,7 @@ beforeEach(() => {
   for (const call of [here.api.add, here.api.list, here.api.remove, here.send]) call.mockReset()
   here.api.add.mockResolvedValue({ id: 'a' })
   setActivePinia(createPinia())
-  useSession().accept({ user: { id: 'oda', email: 'oda@demo.test', name: 'Oda', language: 'en' }, memberships: [] })
+  useSession().accept({ user: buildUser({ id: 'oda' }), memberships: [] })
 })
 
 describe('a file of a record that the server has', () => {

@@ -4,6 +4,7 @@ import { ApiError, NetworkError } from '../../../../src/api/errors.ts'
 import type { KeptCommand } from '../../../../src/stores/keptCommand.ts'
 import { useOutbox } from '../../../../src/stores/outbox.ts'
 import { useSession } from '../../../../src/stores/session.ts'
+import { buildUser } from '../buildUser.ts'
 import { MemoryTable } from '../memoryTable.ts'
 
 const here = vi.hoisted(() => ({ device: {} as { outbox: unknown; reads: unknown }, send: vi.fn() }))
@@ -16,7 +17,7 @@ const sign = { kind: 'record.sign' as const, farmId: 'f', id: 'r1', body: { pass
 let outboxTable: MemoryTable<KeptCommand>
 
 function signInAs(id: string): void {
-  useSession().accept({ user: { id, email: `${id}@demo.test`, name: id, language: 'en' }, memberships: [] })
+  useSession().accept({ user: buildUser({ id }), memberships: [] })
 }
 
 beforeEach(() => {

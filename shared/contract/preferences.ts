@@ -1,0 +1,18 @@
+import { z } from 'zod'
+import { amountUnit, positiveDecimal } from './quantity.ts'
+import { lineText } from './text.ts'
+
+/** Systems of measure that figures can be read in. */
+export const UNIT_SYSTEMS = ['metric', 'us'] as const
+
+export const measuresSchema = z.array(z.strictObject({ name: lineText(24).nullable(), value: positiveDecimal, unit: amountUnit })).max(20)
+
+/** What follows a person from device to device; a device that was told otherwise keeps its own choice. */
+export const preferencesSchema = z.strictObject({
+  /** Measures at hand. */
+  measures: measuresSchema.optional(),
+  units: z.enum(UNIT_SYSTEMS).optional(),
+  /** Day, or dark for the cab before sunrise. */
+  light: z.enum(['day', 'dawn']).optional(),
+})
+export type Preferences = z.infer<typeof preferencesSchema>
