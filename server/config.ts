@@ -84,6 +84,8 @@ export interface CookieConfig {
   sessionName: string
   /** What the name of a device's mark begins with. */
   devicePrefix: string
+  /** By which a phone is known as a farm's. */
+  phoneName: string
 }
 
 /**
@@ -95,6 +97,7 @@ export function cookiesOf(publicUrl: string | null): CookieConfig {
   return {
     secure,
     sessionName: secure ? '__Host-drenchleaf.sid' : 'drenchleaf.sid',
+    phoneName: secure ? '__Secure-drenchleaf.phone' : 'drenchleaf.phone',
     devicePrefix: secure ? '__Secure-drenchleaf.device.' : 'drenchleaf.device.',
   }
 }

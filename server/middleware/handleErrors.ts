@@ -20,7 +20,7 @@ export function handleErrors(services: Services): ErrorRequestHandler {
       return
     }
     if (error instanceof AppError) {
-      if (error.countsAsGuess) countGuess(response)
+      if (error.countsAsGuess) countGuess(response, error.code)
       const event = securityEventOf(error)
       if (event !== null) logSecurity(services, request, event, { code: error.code })
     }

@@ -18,6 +18,8 @@ export interface RecordReportData {
   signed: SignedRecord
   /** SHA-256 of the signed text, hex. */
   digest: string
+  /** What the signer was asked for. */
+  signedWith: 'password' | 'pin'
   names: { doneBy: string; enteredBy: string; signedBy: string }
   /** Reviews of this version, oldest first; a name that was blanked is empty. */
   reviews: readonly { by: string; at: string; note: string | null }[]

@@ -3,13 +3,12 @@ import { IsNull, MoreThan, type EntityManager } from 'typeorm'
 import { v7 as uuidV7 } from 'uuid'
 import { Account } from '../entities/Account.ts'
 import { AccountToken } from '../entities/AccountToken.ts'
-import { AppError, invalid } from '../errors.ts'
-import { COMMON_PASSWORDS } from './commonPasswords.ts'
+import { AppError } from '../errors.ts'
+import { assertGoodPassword } from './passwordRules.ts'
 import { hashPassword } from './passwords.ts'
 import type { Services } from './services.ts'
 
 const HOURS_VALID = 72
-const SHORTEST_PASSWORD = 12
 
 type Parts = Pick<Services, 'clock' | 'database'>
 
@@ -60,11 +59,6 @@ async function findToken(services: Parts, manager: EntityManager, token: string)
   const isOpen = await manager.existsBy(Account, { id: found.accountId, deactivatedAt: IsNull() })
   if (!isOpen) throw usedUp()
   return found
-}
-
-function assertGoodPassword(password: string): void {
-  if ([...password].length < SHORTEST_PASSWORD) throw invalid([{ path: 'password', code: 'welcome.password_short' }])
-  if (COMMON_PASSWORDS.has(password.toLowerCase())) throw invalid([{ path: 'password', code: 'welcome.password_known' }])
 }
 
 function hashToken(token: string): string {

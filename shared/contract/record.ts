@@ -86,6 +86,8 @@ export const recordSchema = recordContentSchema.extend({
   enteredBy: personRef.nullable(),
   signedBy: personRef.nullable(),
   signedAt: z.string().nullable(),
+  /** What the signer was asked for: a password, or the PIN on a shared phone. */
+  signedWith: z.enum(['password', 'pin']).nullable(),
   deviceAt: z.string().nullable(),
   receivedAt: z.string(),
   /** How far the device's clock ran ahead of the server's when the record was first sent, minutes; null where it told none. */

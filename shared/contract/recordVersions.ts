@@ -23,6 +23,7 @@ export const recordVersionsSchema = z.object({
     reason: z.string().nullable(),
     signedBy: personRef.nullable(),
     signedAt: z.string(),
+    signedWith: z.enum(['password', 'pin']),
     seq: z.number().int(),
     digest: z.string(),
     canonicalText: z.string(),

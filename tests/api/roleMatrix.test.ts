@@ -121,6 +121,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'put /farms/:farmId/people/:id/pin': () => ({ revision: 999, pin: '307461', password: PASSWORD }),
     'post /farms/:farmId/people/:id/end-sessions': () => ({ password: PASSWORD }),
     'post /farms/:farmId/people/:id/reset-factor': () => ({ password: PASSWORD }),
+    'post /farms/:farmId/shared-phones': () => ({ id: uuidV7(), name: tag, password: PASSWORD }),
     'put /farms/:farmId/second-factor': () => ({ asked: false, password: PASSWORD }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
@@ -208,7 +209,7 @@ describe('routes outside a farm', () => {
 
   it('are only these without any session', () => {
     expect(ROUTES.filter((route) => route.roles === 'everybody').map((route) => `${route.method} ${route.path}`)).toEqual([
-      'get /health', 'get /config', 'get /check/:code', 'get /welcome/:token', 'post /welcome', 'post /session',
+      'get /health', 'get /config', 'get /check/:code', 'get /welcome/:token', 'post /welcome', 'post /session', 'get /shared-phone', 'post /shared-phone/session',
     ])
   })
 

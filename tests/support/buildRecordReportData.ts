@@ -7,6 +7,7 @@ const CODE = '41d70b9e6a2fc85319e4'
 export function buildRecordReportData(overrides: Partial<RecordReportData> = {}): RecordReportData {
   return {
     signed: buildSignedRecord(),
+    signedWith: 'password',
     digest: CODE.padEnd(64, '0'),
     reviews: [],
     newest: { version: (overrides.signed ?? buildSignedRecord()).record.version, digest: CODE.padEnd(64, '0') },

@@ -10,7 +10,7 @@ const CLOCK_SLACK = 5 * MINUTE
 const LATE = 24 * 60 * MINUTE
 
 /** Who did, entered, signed and reviewed it, what they wore, and the three clocks: the work's, the device's, the server's; none is corrected. */
-export function peopleFacts({ signed, names, reviews }: RecordReportData, words: ReportWords): Fact[] {
+export function peopleFacts({ signed, signedWith, names, reviews }: RecordReportData, words: ReportWords): Fact[] {
   const { say, moment } = words
   const { times } = signed
   // A name that was blanked leaves the person's digest in the signed text and nothing to print.
@@ -26,7 +26,7 @@ export function peopleFacts({ signed, names, reviews }: RecordReportData, words:
     { label: say('people.worked'), spans: plain(worked) },
     { label: say('people.device'), spans: deviceClock(times, words) },
     { label: say('people.server'), spans: plain(moment(times.receivedAt, { seconds: true })) },
-    { label: say('people.signed'), spans: [...bold(moment(times.signedAt, { seconds: true })), ...plain(say('people.signedBy', { name: nameOf(names.signedBy) }))] },
+    { label: say('people.signed'), spans: [...bold(moment(times.signedAt, { seconds: true })), ...plain(say(signedWith === 'pin' ? 'people.signedByPin' : 'people.signedBy', { name: nameOf(names.signedBy) }))] },
     { label: say('people.reviewed'), spans: plain(reviewedBy(reviews, words)) },
   ]
 }

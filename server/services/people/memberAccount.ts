@@ -1,11 +1,9 @@
 import type { EntityManager } from 'typeorm'
-import { IsNull } from 'typeorm'
 import type { FarmActor } from '../../database/actor.ts'
-import { Account } from '../../entities/Account.ts'
-import { RecoveryCode } from '../../entities/RecoveryCode.ts'
 import { invalid } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { assertPassword } from '../assertPassword.ts'
+import { dropFactor } from '../factor/ownFactor.ts'
 import type { Services } from '../services.ts'
 import { endSessionsOf } from '../sessions/ownSessions.ts'
 import { lockPerson } from './lockPeople.ts'
@@ -27,8 +25,7 @@ export async function resetMemberFactor(services: Services, actor: FarmActor, id
   await onAccount(services, actor, { id, password }, async (manager, accountId) => {
     await assertNobodyElseRests(services, actor, accountId)
     await appendJournal(services, manager, actor, { action: 'person.factor_reset', subjectId: id })
-    await manager.update(Account, { id: accountId }, { totpSecret: null, totpPending: null, totpStep: null, totpSince: null })
-    await manager.update(RecoveryCode, { accountId, usedAt: IsNull() }, { usedAt: services.clock.now() })
+    await dropFactor(manager, accountId, services.clock.now())
     await endSessionsOf(manager, accountId)
   })
 }

@@ -37,6 +37,7 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
     return {
       signed,
       digest: printed.digest,
+      signedWith: printed.signedWith,
       ...(await namePeople(manager, signed)),
       newest: { version: newest.version, digest: newest.digest },
       neighbours: await findNeighbours(manager, signed),

@@ -25,9 +25,9 @@ export async function listRecordVersions(services: Services, actor: FarmActor, i
     return {
       items: versions.map(({ row, signed }, index) => {
         const before = versions[index - 1]?.signed
-        const { version, entry, reason, seq, digest, canonicalText } = row
+        const { version, entry, reason, seq, digest, canonicalText, signedWith } = row
         return {
-          version, entry, reason, seq, digest, canonicalText, signed,
+          version, entry, reason, seq, digest, canonicalText, signed, signedWith,
           signedBy: find(row.signedById) ?? null,
           signedAt: row.signedAt.toISOString(),
           changes: before ? compareVersions(before, signed, (person) => find(person)?.name ?? '') : [],

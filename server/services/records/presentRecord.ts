@@ -10,7 +10,7 @@ import { formatRecordNumber } from './formatRecordNumber.ts'
 
 /** A record as the contract shows it, with the names of its people as they stand now. */
 export async function presentRecord(manager: EntityManager, record: ApplicationRecord): Promise<RecordAnswer> {
-  const { reason, reviews } = await readVersionFacts(manager, record)
+  const { reason, signedWith, reviews } = await readVersionFacts(manager, record)
   const ids = [record.doneById, record.enteredById, record.signedById, ...reviews.map(({ reviewedById }) => reviewedById)].filter((id) => id !== null)
   const people = await manager.find(Person, { select: { id: true, name: true }, where: { farmId: record.farmId, id: In(ids) } })
   const person = (id: string | null) => people.find((candidate) => candidate.id === id) ?? null
@@ -31,6 +31,7 @@ export async function presentRecord(manager: EntityManager, record: ApplicationR
     enteredBy: person(record.enteredById),
     signedBy: person(record.signedById),
     signedAt: record.signedAt?.toISOString() ?? null,
+    signedWith,
     deviceAt: record.deviceAt?.toISOString() ?? null,
     receivedAt: record.receivedAt.toISOString(),
     clockSkewMinutes: clockSkewMinutes(record.deviceAt, record.receivedAt),
@@ -41,9 +42,9 @@ export async function presentRecord(manager: EntityManager, record: ApplicationR
 
 async function readVersionFacts(
   manager: EntityManager, { farmId, id, version }: ApplicationRecord,
-): Promise<{ reason: string | null; reviews: RecordReview[] }> {
-  if (version === 0) return { reason: null, reviews: [] }
-  const newest = await manager.findOne(RecordVersion, { select: { reason: true, version: true }, where: { farmId, recordId: id, version } })
+): Promise<{ reason: string | null; signedWith: RecordVersion['signedWith'] | null; reviews: RecordReview[] }> {
+  if (version === 0) return { reason: null, signedWith: null, reviews: [] }
+  const newest = await manager.findOne(RecordVersion, { select: { reason: true, version: true, signedWith: true }, where: { farmId, recordId: id, version } })
   const reviews = await manager.find(RecordReview, { where: { farmId, recordId: id }, order: { at: 'ASC', id: 'ASC' } })
-  return { reason: newest?.reason ?? null, reviews }
+  return { reason: newest?.reason ?? null, signedWith: newest?.signedWith ?? null, reviews }
 }

@@ -169,6 +169,7 @@ export const pdf = {
     reviewedBy: '{name}, {moment}',
     reviewNote: '{review}: {note}',
     signedBy: ', {name}, by password',
+    signedByPin: ', {name}, by PIN on a phone of the farm',
     worked: 'Worked',
     device: 'Device clock',
     noDevice: 'not told',

@@ -169,6 +169,7 @@ export const pdf = {
     reviewedBy: '{name}, {moment}',
     reviewNote: '{review}: {note}',
     signedBy: ', {name}, con contraseña',
+    signedByPin: ', {name}, con PIN en un teléfono de la finca',
     worked: 'Trabajo',
     device: 'Dispositivo',
     noDevice: 'no consta',

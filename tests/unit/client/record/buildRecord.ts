@@ -42,5 +42,5 @@ export const buildRecord = (over: Partial<ApplicationRecord> = {}): ApplicationR
     areaM2: 10_000, counts: {}, totalL: 400, totalKg: null, waterL: 380, sprayLPerHa: 400, kgPerHa: null, sprayPerEach: null, loads: null, components: [], lines: [], air: null,
   },
   reason: null, reviews: [],
-  checks: [], acknowledged: [], doneBy: null, enteredBy: null, signedBy: null, signedAt: null, deviceAt: null, receivedAt: '2026-06-16T13:51:00Z', clockSkewMinutes: null, ...over,
+  checks: [], acknowledged: [], doneBy: null, enteredBy: null, signedBy: null, signedAt: null, signedWith: null, deviceAt: null, receivedAt: '2026-06-16T13:51:00Z', clockSkewMinutes: null, ...over,
 })
