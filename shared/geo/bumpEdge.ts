@@ -1,7 +1,7 @@
 import { edgeChangeM2 } from './edgeOffset.ts'
 import type { GridPoint } from './gridPoints.ts'
 
-const MOST_TRIES = 12
+const MOST_TRIES = 30
 
 /**
  * One or two corners to set on the edge from a to b, each within a grid unit of it, that change the ground beside it by a small area:
@@ -9,16 +9,17 @@ const MOST_TRIES = 12
  * @param areaM2 to add on the left of a→b, negative to take. @param unitM2 area of one grid unit.
  */
 export function bumpEdge(a: GridPoint, b: GridPoint, areaM2: number, unitM2: number): GridPoint[] {
-  let corners: GridPoint[] = []
+  let best: { corners: GridPoint[]; missing: number } = { corners: [], missing: Infinity }
   let wanted = (2 * areaM2) / unitM2
-  // The edge is measured along the great circle: what the corners change there is worked out and made up for.
-  for (let attempt = 0; attempt < MOST_TRIES; attempt += 1) {
-    corners = flatTriangle(a, b, Math.round(wanted))
+  // The edge is measured along the great circle: what the corners change there is worked out and made up for. The tip of the next
+  // triangle may stand elsewhere on the edge, so that the last one need not be the best.
+  for (let attempt = 0; attempt < MOST_TRIES && Math.abs(best.missing) >= 1; attempt += 1) {
+    const corners = flatTriangle(a, b, Math.round(wanted))
     const missing = (2 * (areaM2 - changeOf(a, b, corners))) / unitM2
-    if (Math.abs(missing) < 1) return corners
+    if (Math.abs(missing) < Math.abs(best.missing)) best = { corners, missing }
     wanted += missing * 0.8
   }
-  return corners
+  return best.corners
 }
 
 function changeOf(a: GridPoint, b: GridPoint, [first, second]: GridPoint[]): number {

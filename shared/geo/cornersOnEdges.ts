@@ -17,23 +17,25 @@ export interface NewCorner { before: GridPoint[]; at: GridPoint; after: GridPoin
  */
 export function setCorners(edges: readonly EdgeToCut[], toleranceM2: number): NewCorner[] {
   const chosen = choosePairs(edges.map(({ a, b, near }) => placesOnGrid(a, b, near)), toleranceM2)
-  const sumM2 = chosen.reduce((total, { areaM2 }) => total + areaM2, 0)
-  const isEnough = Math.abs(sumM2) <= toleranceM2
+  const isEnough = Math.abs(sumM2(chosen)) <= toleranceM2
   return edges.map((edge, index): NewCorner => {
     const { at, areaM2 } = chosen[index] ?? { at: edge.near, areaM2: 0 }
     return isEnough ? { before: [], at, after: [] } : makeUpFor(edge, at, areaM2)
   })
 }
 
+/** For each edge a place; the nearest ones where their changes make up for one another as they are. */
 function choosePairs(choices: readonly GridPlace[][], toleranceM2: number): GridPlace[] {
-  const chosen = choices.map((list) => bestPlace(list, 0))
-  const sum = (): number => chosen.reduce((total, { areaM2 }) => total + areaM2, 0)
+  const nearest = choices.map((list) => bestPlace(list.slice(0, 2), 0))
+  if (Math.abs(sumM2(nearest)) <= toleranceM2) return nearest
+  const chosen = choices.map((list) => bestPlace(list, 0, toleranceM2 / choices.length))
+  const sum = (): number => sumM2(chosen)
   const last = chosen.length - 1
   for (let other = 0; other < last && Math.abs(sum()) > toleranceM2; other += 1) {
     const restM2 = sum() - (chosen[other]?.areaM2 ?? 0) - (chosen[last]?.areaM2 ?? 0)
     const pairs = (choices[other] ?? []).map((first) => {
-      const second = bestPlace(choices[last] ?? [], restM2 + first.areaM2)
-      return { first, second, leftM2: Math.abs(restM2 + first.areaM2 + second.areaM2) }
+      const second = bestPlace(choices[last] ?? [], restM2 + first.areaM2, toleranceM2)
+      return { first, second, leftM2: Math.max(Math.abs(restM2 + first.areaM2 + second.areaM2), toleranceM2) }
     })
     const pair = pairs.reduce((least, each) => (each.leftM2 < least.leftM2 ? each : least))
     chosen[other] = pair.first
@@ -50,4 +52,5 @@ function makeUpFor({ a, b, more }: EdgeToCut, at: GridPoint, areaM2: number): Ne
   return isBefore ? { before: bumpEdge(a, at, -areaM2, unitM2), at, after: [] } : { before: [], at, after: bumpEdge(at, b, -areaM2, unitM2) }
 }
 
+const sumM2 = (places: readonly GridPlace[]): number => places.reduce((total, { areaM2 }) => total + areaM2, 0)
 const lengthOf = (a: GridPoint, b: GridPoint): number => Math.max(Math.abs(b[0] - a[0]), Math.abs(b[1] - a[1]))

@@ -23,9 +23,10 @@ export function placesOnGrid(a: GridPoint, b: GridPoint, near: GridPoint): GridP
   return places.length > 0 ? places : [{ at: [Math.round(near[0]), Math.round(near[1])], areaM2: 0 }]
 }
 
-/** The place that leaves the least beside what is there already; of equals the nearest. */
-export function bestPlace(places: readonly GridPlace[], restM2: number): GridPlace {
-  return places.reduce((least, each) => (Math.abs(restM2 + each.areaM2) < Math.abs(restM2 + least.areaM2) ? each : least))
+/** The place that leaves the least beside what is there already; of equals the nearest. @param enoughM2 less than this is no better. */
+export function bestPlace(places: readonly GridPlace[], restM2: number, enoughM2 = 0): GridPlace {
+  const left = ({ areaM2 }: GridPlace): number => Math.max(Math.abs(restM2 + areaM2), enoughM2)
+  return places.reduce((least, each) => (left(each) < left(least) ? each : least))
 }
 
 /** The grid point within a decimetre of a place on an edge that lies closest to the edge itself. */

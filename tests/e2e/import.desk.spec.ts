@@ -64,13 +64,15 @@ test('a second time the same file is seen as there already; a shape changed in t
   expect((await blocksOf(context, farmId)).map(({ code }) => code)).toContain('Twice')
 })
 
-test('what goes out comes in again', async ({ page, context }) => {
-  await openNewFarm(context)
+test('what goes out comes in again, outline for outline', async ({ page, context }) => {
+  const from = await openNewFarm(context)
   const form = new ImportForm(page)
   await form.open()
   await form.choose('blocks.zip')
   await form.importButton.click()
   await expect(page).toHaveURL(/\/blocks$/)
+  const outlines = async (farmId: string): Promise<unknown> => Object.fromEntries((await blocksOf(context, farmId)).map(({ code, name, geometry }) => [code, { name, geometry }]))
+  const before = await outlines(from)
   const files = [await download(page, 'GeoJSON'), await download(page, 'KML')]
 
   const farmId = await openNewFarm(context)
@@ -84,6 +86,7 @@ test('what goes out comes in again', async ({ page, context }) => {
     }
   }
   expect(await blocksOf(context, farmId)).toHaveLength(38)
+  expect(await outlines(farmId)).toEqual(before)
 })
 
 test('a file that would harm is refused in words, and leaving an open one is asked about', async ({ page, signInAs }) => {

@@ -1,10 +1,10 @@
 import type { Page } from '@playwright/test'
 import { en } from '../../shared/messages/en.ts'
 import { es } from '../../shared/messages/es.ts'
+import type { Who } from './support/demoFarm.ts'
 import { RecordForm } from './support/recordForm.ts'
-import { openScreen } from './support/screens.ts'
+import { listScreens, openScreen } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
-import { makeSignedRecord, makeThings } from './support/things.ts'
 import { say } from './support/words.ts'
 
 /** Words by their id. */
@@ -31,19 +31,21 @@ async function englishOn(page: Page): Promise<string[]> {
 }
 
 test('in Spanish no screen keeps an English word', async ({ page, isPhone, signInAs, manager }) => {
-  const things = await makeThings(manager)
-  const record = await makeSignedRecord(manager, things)
+  const screens = await listScreens(manager)
   await page.goto('/signin')
   await page.getByRole('button', { name: say('frame.moreSheet.spanish') }).click()
   await expect(page.locator('html')).toHaveAttribute('lang', 'es')
   const found: string[] = []
   const look = async (name: string): Promise<void> => { for (const text of await englishOn(page)) found.push(`${name}: ${text}`) }
   await look('sign-in')
-  await signInAs('manager')
-  for (const path of ['/check', '/welcome', '/', '/blocks', `/blocks/${things.block.id}`, '/blocks/new?by=draw', '/register', `/register/${record.id}`, '/register/new', '/inputs', '/farm', '/farm/people', '/farm/sprayers', '/nothing-there']) {
+  let signedIn: Who | null = null
+  for (const { name, who, path } of screens) {
+    if (who !== null && who !== signedIn) await signInAs(who)
+    signedIn = who
     await openScreen(page, path)
-    await look(path)
+    await look(name)
   }
+  await signInAs('manager')
   await page.goto('/register/new')
   await page.getByRole('button', { name: new RegExp(`^2\\s*${spanish.get('records.steps.happened')}`) }).click()
   await expect(new RecordForm(page, isPhone).page.getByRole('textbox', { name: spanish.get('records.sign.password') ?? '' })).toBeVisible()

@@ -31,7 +31,11 @@ export interface FarmApi {
 /** Signs in and opens the first farm of that person. */
 export async function openFarm(request: APIRequestContext, who: Who): Promise<FarmApi> {
   const { memberships } = await signInTo(request, who)
-  const farmId = memberships[0]?.farmId ?? ''
+  return farmApi(request, memberships[0]?.farmId ?? '')
+}
+
+/** The API as whoever is signed in, on one farm. */
+export function farmApi(request: APIRequestContext, farmId: string): FarmApi {
   const path = (rest: string): string => `/api/farms/${farmId}${rest}`
   return {
     farmId,

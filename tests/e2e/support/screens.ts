@@ -1,5 +1,7 @@
 import type { Page } from '@playwright/test'
 import { expect } from '@playwright/test'
+import { pageOf } from '../../../shared/contract/common.ts'
+import { siteSchema } from '../../../shared/contract/ground.ts'
 import type { ApplicationRecord } from '../../../shared/contract/record.ts'
 import type { FarmApi, Who } from './demoFarm.ts'
 import { makeSignedRecord, makeThings } from './things.ts'
@@ -27,6 +29,13 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'block', path: `/blocks/${things.block.id}` },
     { name: 'draw a block', path: '/blocks/new?by=draw' },
     { name: 'type a block', path: '/blocks/new?by=points' },
+    { name: 'reshape a block', path: `/blocks/${things.block.id}/shape` },
+    { name: 'split a block', path: `/blocks/${things.block.id}/split` },
+    { name: 'merge blocks', path: `/blocks/merge?with=${things.block.id}` },
+    { name: 'import blocks', path: '/blocks/import' },
+    { name: 'ground', path: '/blocks/ground' },
+    { name: 'a new hedge', path: '/blocks/ground/new?what=ground' },
+    { name: 'a site', path: `/blocks/ground/${await findSite(manager)}?what=site` },
     { name: 'register', path: '/register' },
     { name: 'record', path: `/register/${record.id}` },
     { name: 'new record', path: '/register/new' },
@@ -41,6 +50,12 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     ...ofManager.map((screen) => ({ ...screen, who: 'manager' as const })),
     { name: 'my farms', who: 'certifier', path: '/farms' },
   ]
+}
+
+/** A site that the demo farm keeps clear of. */
+async function findSite(manager: FarmApi): Promise<string> {
+  const { items } = await manager.get('/sites?limit=1', pageOf(siteSchema))
+  return items[0]?.id ?? ''
 }
 
 /** Opens a screen and waits until all it reads has come. */

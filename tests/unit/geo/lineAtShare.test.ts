@@ -19,6 +19,14 @@ describe('lineAtShare', () => {
     expect(to[0]).toBeGreaterThan(10.001)
   })
 
+  it.each([0.1, 0.25, 0.5, 0.9])('a square cut there has %s of its area on the edge\'s side', (share) => {
+    for (const corner of [0, 1, 2, 3]) {
+      const line = lineAtShare(square, { ...south, corner }, share)
+      const near = splitBoundary(square, line).pieces.find((piece) => isBelow(piece, line))
+      expect((near ? areaM2(near) : 0) / areaM2(square)).toBeCloseTo(share, 4)
+    }
+  })
+
   it.each([0, 1, -0.5, Number.NaN])('refuses a share of %s', (share) => {
     expect(() => lineAtShare(square, south, share)).toThrow(RangeError)
     expect(() => lineAtShare(square, { ...south, corner: 9 }, 0.5)).toThrow(RangeError)
