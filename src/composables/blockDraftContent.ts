@@ -1,4 +1,5 @@
-import type { Boundary, Position, Ring } from '../../shared/geo/geometryTypes.ts'
+import type { Position } from '../../shared/geo/geometryTypes.ts'
+import { countPoints, emptyShape, type Shape } from './shape.ts'
 
 /** How the outline is given. */
 export type OutlineBy = 'draw' | 'points'
@@ -6,10 +7,7 @@ export type OutlineBy = 'draw' | 'points'
 /** A block begun and not yet sent: what the device keeps. */
 export interface BlockDraftContent {
   by: OutlineBy
-  /** Corners in order, the first not repeated. */
-  points: Position[]
-  /** Whether the drawn outline is finished. */
-  closed: boolean
+  shape: Shape
   /** The points as typed. */
   typed: string
   code: string
@@ -17,25 +15,25 @@ export interface BlockDraftContent {
   crop: string
 }
 
-/** A draft with nothing in it. */
+/** What the device kept before an outline could have holes and parts. */
+interface OlderContent extends Partial<Omit<BlockDraftContent, 'shape'>> { points: Position[]; closed: boolean }
+
+/** A draft with nothing in it: its first ring waits for corners. */
 export function emptyBlockDraft(by: OutlineBy): BlockDraftContent {
-  return { by, points: [], closed: false, typed: '', code: '', name: '', crop: '' }
+  return { by, shape: begunShape([]), typed: '', code: '', name: '', crop: '' }
+}
+
+/** An outline of which only these corners are set. */
+export const begunShape = (points: Position[]): Shape => ({ ...emptyShape(), open: { as: 'part', points } })
+
+/** Reads a kept draft, older ones too. */
+export function readBlockDraft(kept: Partial<BlockDraftContent> | OlderContent, by: OutlineBy): BlockDraftContent {
+  if (!('points' in kept)) return { ...emptyBlockDraft(by), ...kept }
+  const { points, closed, ...words } = kept
+  return { ...emptyBlockDraft(by), ...words, shape: closed ? { parts: [[points]], open: null } : begunShape(points) }
 }
 
 /** Whether anything was done that would be missed. */
-export function isBlockDraftBegun(content: BlockDraftContent): boolean {
-  return content.points.length > 0 || [content.typed, content.code, content.name, content.crop].some((words) => words.trim() !== '')
-}
-
-/** The corners as a polygon, its ring closed; null under three corners. */
-export function outlineOf(points: readonly Position[]): Boundary | null {
-  const first = points[0]
-  if (first === undefined || points.length < 3) return null
-  const ring: Ring = [...points, first].map(([lon, lat]) => [roundDegrees(lon), roundDegrees(lat)])
-  return { type: 'Polygon', coordinates: [ring] }
-}
-
-/** Seven decimals, as stored: a centimetre. */
-function roundDegrees(degrees: number): number {
-  return Number(degrees.toFixed(7))
+export function isBlockDraftBegun({ shape, typed, code, name, crop }: BlockDraftContent): boolean {
+  return countPoints(shape) > 0 || [typed, code, name, crop].some((words) => words.trim() !== '')
 }

@@ -45,6 +45,9 @@ export function cornersOfShape({ parts }: Shape): ShapeCorner[] {
   }))))
 }
 
+/** The ring that is typed or drawn first: the outer one of the first part, or the one being set. */
+export const firstRing = ({ parts, open }: Shape): readonly Position[] => parts[0]?.[0] ?? open?.points ?? []
+
 /** How many corners there are, those of the open ring too. */
 export function countPoints(shape: Shape): number {
   return shape.parts.flat().reduce((sum, ring) => sum + ring.length, 0) + (shape.open?.points.length ?? 0)

@@ -1,6 +1,6 @@
 import { ref, shallowRef, watch, type Ref, type ShallowRef } from 'vue'
 import type { Draft } from '../stores/draftTypes.ts'
-import { emptyBlockDraft, isBlockDraftBegun, type BlockDraftContent, type OutlineBy } from './blockDraftContent.ts'
+import { emptyBlockDraft, isBlockDraftBegun, readBlockDraft, type BlockDraftContent, type OutlineBy } from './blockDraftContent.ts'
 import { newId } from './newId.ts'
 import { useDrafts } from './useDrafts.ts'
 
@@ -39,7 +39,7 @@ export function useBlockDraft(farmId: Ref<string>, by: OutlineBy): BlockDraft {
   function resume(found: Draft<BlockDraftContent>): void {
     id.value = found.id
     resumed.value = true
-    show({ ...emptyBlockDraft(by), ...found.content })
+    show(readBlockDraft(found.content, by))
   }
   function beginAnew(): void {
     id.value = newId()
@@ -67,7 +67,7 @@ export function useBlockDraft(farmId: Ref<string>, by: OutlineBy): BlockDraft {
     else void drafts.remove(id.value)
   })
 
-  drafts.onTakenOver<BlockDraftContent>(id, ({ content: typed }) => { show({ ...emptyBlockDraft(by), ...typed }) })
+  drafts.onTakenOver<BlockDraftContent>(id, ({ content: typed }) => { show(readBlockDraft(typed, by)) })
 
   async function discard(): Promise<void> {
     isListed = false

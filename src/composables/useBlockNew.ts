@@ -7,8 +7,8 @@ import type { Submitted } from '../stores/outbox.ts'
 import type { Caution } from './blockCautions.ts'
 import type { OutlineBy } from './blockDraftContent.ts'
 import { hectaresText, metresText } from './blockWords.ts'
-import type { MapDraft } from './mapTypes.ts'
 import { outlineWords } from './outlineWords.ts'
+import { countPoints } from './shape.ts'
 import type { FieldError } from './useAsked.ts'
 import { useBlockSave, type BlockSave } from './useBlockSave.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
@@ -19,9 +19,10 @@ import { useMessages } from './useMessages.ts'
 export interface BlockNew {
   work: BlockWork
   saving: BlockSave
-  mapDraft: ComputedRef<MapDraft>
   /** Figures in words; empty while nothing is enclosed. */
   figures: ComputedRef<{ area: string; perimeter: string; points: string }>
+  /** The figures beside the map; empty ones are not there yet. */
+  facts: ComputedRef<readonly { term: string; figure: string }[]>
   /** "New block: 0.93 ha, perimeter 414 m, 14 points". */
   banner: ComputedRef<string>
   /** What is impossible, in words. */
@@ -31,6 +32,8 @@ export interface BlockNew {
   asked: ComputedRef<readonly { code: string; sentences: string[] }[]>
   errors: ComputedRef<Record<string, string>>
   refusal: ComputedRef<string>
+  /** Closes the outline; says why where it cannot stand. */
+  finish: () => void
   /** Saves; answers what was saved, or undefined where something is still missing. */
   save: () => Promise<{ code: string; area: string; outcome: Submitted<Block> } | undefined>
 }
@@ -49,24 +52,31 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
   const wordsOf = (error: FieldError): string => ('words' in error ? error.words : translate(language.value, error.id))
 
   const impossible = computed(() => outline.findings.value.map((finding) => outlineWords(language.value, finding)))
-  watch([outline.geometry, outline.findings, () => content.value.by, () => content.value.closed], () => { saving.forget() })
+  watch([outline.geometry, outline.findings, () => content.value.by, () => content.value.shape.open === null], () => { saving.forget() })
 
+  const points = computed(() => countPoints(content.value.shape))
   const figures = computed(() => {
     const measure = outline.measure.value
     return {
       area: measure === null ? '' : translate(language.value, 'blocks.hectares', { figure: hectaresText(language.value, measure.areaM2) }),
       perimeter: measure === null ? '' : metresText(language.value, measure.perimeterM),
-      points: formatNumber(content.value.points.length, { digits: 0 }, language.value),
+      points: formatNumber(points.value, { digits: 0 }, language.value),
     }
   })
 
   /** Why the outline cannot be saved as it stands; null where it can. */
   function faultOf(): FieldError | null {
-    const { by: how, points, closed } = content.value
+    const { by: how, shape } = content.value
     const said = [...(how === 'points' ? work.typed.errors.value : []), ...impossible.value]
     if (said.length > 0) return { words: said.join('\n') }
-    if (points.length > 0 && points.length < 3) return { id: 'blocks.geometry.few' }
-    return outline.geometry.value === null || !closed ? { id: 'blocks.form.outlineNeeded' } : null
+    if (points.value > 0 && points.value < 3) return { id: 'blocks.geometry.few' }
+    return outline.geometry.value === null || shape.open !== null ? { id: 'blocks.form.outlineNeeded' } : null
+  }
+
+  function finish(): void {
+    if (outline.finish()) return
+    const words = impossible.value.join('\n')
+    saving.errors.value = { geometry: words === '' ? { id: 'blocks.geometry.few' } : { words } }
   }
 
   async function save(): ReturnType<BlockNew['save']> {
@@ -87,14 +97,11 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
   }
 
   return {
-    work, saving, figures, impossible, save,
-    mapDraft: computed(() => ({
-      points: content.value.points,
-      closed: content.value.closed,
-      crossingEdges: work.crossing.value,
-      cross: work.isDrawing.value ? outline.cross.value : null,
-    })),
-    banner: computed(() => bannerText(language.value, figures.value, content.value.points.length)),
+    work, saving, figures, impossible, save, finish,
+    facts: computed(() => (['area', 'perimeter', 'corners'] as const).map((name) => ({
+      term: translate(language.value, `blocks.while.${name}`), figure: figures.value[name === 'corners' ? 'points' : name],
+    }))),
+    banner: computed(() => bannerText(language.value, figures.value, points.value)),
     unlikely: computed(() => work.cautions.value.flatMap(sentencesOf)),
     asked: computed(() => saving.asked.value.map((caution) => ({ code: caution.code, sentences: sentencesOf(caution) }))),
     errors: computed(() => Object.fromEntries(Object.entries(saving.errors.value).map(([path, error]) => [path, wordsOf(error)]))),

@@ -1,6 +1,6 @@
 import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
-import type { Block } from '../../shared/contract/block.ts'
+import type { Block, Boundary } from '../../shared/contract/block.ts'
 import { cornersOfRing } from '../../shared/geo/boundaryCorners.ts'
 import { boundaryParts } from '../../shared/geo/boundaryParts.ts'
 import { formatPoints } from '../../shared/geo/formatPoints.ts'
@@ -30,17 +30,28 @@ export interface BlockReshape {
   /** The outer ring as typed; null until it is taken to the field. */
   text: Ref<string>
   asked: Asked
-  cautions: ComputedRef<readonly Caution[]>
-  sentencesOf: (caution: Caution) => string[]
+  /** What is unlikely and was asked about, its sentences ready to read. */
+  cautions: ComputedRef<readonly { code: string; sentences: readonly string[] }[]>
+  /** Words by field. */
+  errors: ComputedRef<Record<string, string>>
   impossible: ComputedRef<readonly string[]>
+  /** What is unlikely, as seen from this device. */
+  unlikely: ComputedRef<readonly string[]>
   figures: ComputedRef<{ area: string; perimeter: string; points: string; difference: string }>
+  /** The figures beside what they were. */
+  facts: ComputedRef<readonly { term: string; figure: string }[]>
   banner: ComputedRef<string>
   refusal: ComputedRef<string>
   saving: Ref<boolean>
   save: () => Promise<Submitted<Block> | undefined>
   /** Writes the outer ring into the field of typed points. */
   beginTyping: () => void
+  /** The outline somebody else gave the block meanwhile, beside the one drawn here; null while there is none. */
+  conflict: ComputedRef<OutlineConflict | null>
 }
+
+/** Two outlines of one block, of which one is chosen. */
+export interface OutlineConflict { code: string; theirs: Boundary; theirArea: string; theirVersion: number; mine: Boundary | null; myArea: string }
 
 export function useBlockReshape(id: () => string, place: BlocksPlace): BlockReshape {
   const { blocks, farmId, language, farm } = place
@@ -54,13 +65,14 @@ export function useBlockReshape(id: () => string, place: BlocksPlace): BlockResh
   const fault = ref('')
   const { text, typed, beginTyping } = useTypedRing(work, draft, () => language.value)
 
-  watch([work.geometry, work.findings], () => {
+  watch([work.geometry, work.findings, draft.isStale], () => {
     asked.forget()
     fault.value = ''
   })
   const impossible = computed(() => work.findings.value.map((finding) => outlineWords(language.value, finding)))
   const cautions = computed(() => (work.geometry.value === null ? [] : findCautions(work.geometry.value, blocks.value.filter((other) => other.id !== id()), farm.value?.place ?? null)))
 
+  const sentencesOf = ({ sentences }: Caution): string[] => sentences.map((each) => (typeof each === 'string' ? each : render(each)))
   const task = useTask(async (of: Block, geometry: NonNullable<typeof work.geometry.value>): Promise<Submitted<Block> | undefined> => {
     const { note, revision } = draft.content.value
     if (!asked.hasReasons(cautions.value)) return undefined
@@ -73,9 +85,7 @@ export function useBlockReshape(id: () => string, place: BlocksPlace): BlockResh
       return saved
     } catch (error) {
       if (error instanceof ApiError && error.problem.status === 409) {
-        fault.value = t('shapes.reshape.stale', { code: of.code })
         await place.query.refetch()
-        draft.content.value = { ...draft.content.value, revision: block.value?.revision ?? revision }
         return undefined
       }
       if (!asked.takeRefusal(error)) throw error
@@ -88,17 +98,32 @@ export function useBlockReshape(id: () => string, place: BlocksPlace): BlockResh
     const { value: geometry } = work.geometry
     fault.value = ''
     if (of === null || task.running.value) return undefined
-    if (typed.errors.value.length > 0 && text.value !== '') fault.value = typed.errors.value.join(' ')
+    if (draft.isStale.value) fault.value = t('shapes.conflict.choose')
+    else if (typed.errors.value.length > 0 && text.value !== '') fault.value = typed.errors.value.join(' ')
     else if (geometry === null || draft.content.value.shape.open !== null) fault.value = impossible.value[0] ?? t('shapes.reshape.impossible')
     else if (isSameOutline(geometry, of.geometry)) fault.value = t('shapes.reshape.unchanged')
     return fault.value !== '' || geometry === null ? undefined : task.run(of, geometry)
   }
 
+  const conflict = computed<OutlineConflict | null>(() => (block.value === null || !draft.isStale.value ? null : {
+    code: block.value.code, theirs: block.value.geometry, theirArea: block.value.areaText, theirVersion: block.value.version,
+    mine: boundaryOf(draft.content.value.shape.parts), myArea: figures.value.area,
+  }))
   const figures = computed(() => figuresOf(place, block.value, work, countPoints(draft.content.value.shape)))
   return {
-    block, draft, work, typed, text, asked, cautions, impossible, figures, save, beginTyping,
+    block, draft, work, typed, text, asked, conflict, impossible, figures, save, beginTyping,
     saving: task.running,
-    sentencesOf: (caution) => caution.sentences.map((each) => (typeof each === 'string' ? each : render(each))),
+    cautions: computed(() => asked.asked.value.map((caution) => ({ code: caution.code, sentences: sentencesOf(caution) }))),
+    unlikely: computed(() => cautions.value.flatMap(sentencesOf)),
+    errors: computed(() => Object.fromEntries(Object.entries(asked.errors.value).map(([path, error]) => [path, 'words' in error ? error.words : t(error.id)]))),
+    facts: computed(() => {
+      const { area, perimeter, points, difference } = figures.value
+      const facts = [
+        { term: t('shapes.while.was', { version: block.value?.version ?? 0 }), figure: block.value?.areaText ?? '' }, { term: t('shapes.while.now'), figure: area },
+        { term: t('shapes.while.difference'), figure: difference }, { term: t('blocks.while.perimeter'), figure: perimeter }, { term: t('shapes.while.points'), figure: points },
+      ]
+      return area === '' ? facts.filter(({ figure }, index) => index < 2 || figure !== '') : facts
+    }),
     refusal: computed(() => (fault.value !== '' ? fault.value : task.error.value === null ? '' : problem(task.error.value))),
     banner: computed(() => {
       const { area, perimeter, points } = figures.value
@@ -114,8 +139,7 @@ function useTypedRing(work: ShapeWork, draft: ShapeDraft, language: () => 'en' |
   watch(typed.points, (points) => {
     const { parts } = draft.content.value.shape
     if (text.value === '' || points.length < 3 || formatPoints(points) === formatPoints(parts[0]?.[0] ?? [])) return
-    const next = boundaryOf(parts.with(0, [[...points], ...(parts[0] ?? []).slice(1)]))
-    if (next !== null) work.replace(next)
+    work.typeRing(points)
   })
   return {
     text, typed,

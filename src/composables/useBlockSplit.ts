@@ -1,4 +1,4 @@
-import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
+import { computed, ref, watch, type ComputedRef, type Ref, type WritableComputedRef } from 'vue'
 import { useI18n } from 'vue-i18n'
 import type { BlocksChanged } from '../../shared/contract/blockChanges.ts'
 import { lineText } from '../../shared/contract/text.ts'
@@ -16,6 +16,7 @@ import { outlineWords } from './outlineWords.ts'
 import { cornersOfShape, shapeOf, type ShapeCorner } from './shape.ts'
 import { useAsked, type Asked } from './useAsked.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useKeptForm, type KeptForm } from './useKeptForm.ts'
 import { useMessages } from './useMessages.ts'
 import { useSubmit } from './useSubmit.ts'
 import { useTask } from './useTask.ts'
@@ -25,17 +26,30 @@ export type SplitBy = 'line' | 'corners' | 'share'
 /** A piece and the block it becomes; pieces of one code become one block. */
 export interface SplitPiece { geometry: Boundary; code: string; name: string; words: string }
 
+/** A cut in the making: what the device keeps. */
+export interface SplitContent {
+  by: SplitBy
+  /** Points of the drawn line. */
+  drawn: Position[]
+  /** Numbers from 0 among the block's corners; the longest edge while none is chosen. */
+  from: string
+  to: string
+  edge: string | null
+  /** Percent, as typed. */
+  share: string
+  names: { code?: string; name?: string }[]
+}
+
 /** The page that cuts a block. */
 export interface BlockSplit {
+  kept: KeptForm<SplitContent>
   block: ComputedRef<BlockWords | null>
-  by: Ref<SplitBy>
-  /** Points of the drawn line. */
-  drawn: Ref<Position[]>
-  /** Numbers from 0 among the block's corners, and the share in percent as typed. */
-  from: Ref<string>
-  to: Ref<string>
-  edge: Ref<string>
-  share: Ref<string>
+  by: WritableComputedRef<SplitBy>
+  drawn: WritableComputedRef<Position[]>
+  from: WritableComputedRef<string>
+  to: WritableComputedRef<string>
+  edge: WritableComputedRef<string>
+  share: WritableComputedRef<string>
   corners: ComputedRef<readonly ShapeCorner[]>
   line: ComputedRef<readonly Position[]>
   pieces: ComputedRef<readonly SplitPiece[]>
@@ -48,6 +62,7 @@ export interface BlockSplit {
 }
 
 const CODE_LENGTH = 12
+const NOTHING: SplitContent = { by: 'line', drawn: [], from: '0', to: '2', edge: null, share: '50', names: [] }
 const LETTERS = 'abcdefghijklmnopqrstuvwxyz'
 
 export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit {
@@ -57,13 +72,18 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
   const { submit } = useSubmit()
   const { errors, takeRefusal } = useAsked()
   const block = computed(() => blocks.value.find((each) => each.id === id()) ?? null)
-  const [by, drawn] = [ref<SplitBy>('line'), ref<Position[]>([])]
-  const [from, to, edge, share] = [ref('0'), ref('2'), ref('0'), ref('50')]
-  const names = ref<{ code?: string; name?: string }[]>([])
+  const kept = useKeptForm<SplitContent>(NOTHING, {
+    farmId, kind: 'split', about: () => block.value?.id ?? null, fresh: () => (block.value === null ? null : NOTHING), isBegun: (content) => JSON.stringify(content) !== JSON.stringify(NOTHING),
+  })
+  const part = <Key extends keyof SplitContent>(key: Key): WritableComputedRef<SplitContent[Key]> => computed({
+    get: () => kept.content.value[key], set: (value) => { kept.content.value = { ...kept.content.value, [key]: value } },
+  })
+  const [by, drawn, from, to, share, names] = [part('by'), part('drawn'), part('from'), part('to'), part('share'), part('names')]
   const ids = new Map<string, string>()
   const tried = ref('')
 
   const corners = computed(() => (block.value === null ? [] : cornersOfShape(shapeOf(block.value.geometry))))
+  const edge = computed({ get: () => kept.content.value.edge ?? longestEdge(corners.value), set: (value) => { kept.content.value = { ...kept.content.value, edge: value } } })
   const line = computed<readonly Position[]>(() => {
     if (by.value === 'line') return drawn.value
     if (by.value === 'corners') return [from.value, to.value].flatMap((number) => {
@@ -73,11 +93,6 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
     return lineOfShare(block.value, corners.value[Number(edge.value)], Number(share.value.replace(',', '.')))
   })
   const cut = computed(() => (block.value === null || line.value.length < 2 ? { pieces: [], findings: [] } : splitBoundary(block.value.geometry, line.value)))
-  // The longest edge is the one that rows run along.
-  watch(corners, (all) => {
-    const lengths = all.map(({ position, next }) => distanceKm(position, next))
-    edge.value = String(Math.max(0, lengths.indexOf(Math.max(...lengths))))
-  }, { immediate: true })
   watch(line, () => {
     errors.value = {}
     tried.value = ''
@@ -96,7 +111,9 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
   const task = useTask(async (of: BlockWords, parts: { code: string; name: string; geometry: Boundary }[]): Promise<Submitted<BlocksChanged> | undefined> => {
     const withIds = parts.map(({ geometry, ...part }) => ({ ...part, id: idOf(part.code), geometry: { ...geometry } }))
     try {
-      return await submit({ kind: 'block.split', farmId: farmId.value, id: of.id, body: { revision: of.revision, parts: withIds } })
+      const cutUp = await submit({ kind: 'block.split', farmId: farmId.value, id: of.id, body: { revision: of.revision, parts: withIds } })
+      await kept.discard()
+      return cutUp
     } catch (error) {
       if (!takeRefusal(error)) throw error
       return undefined
@@ -121,7 +138,7 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
   }
 
   return {
-    block, by, drawn, from, to, edge, share, corners, line, pieces, errors, save,
+    kept, block, by, drawn, from, to, edge, share, corners, line, pieces, errors, save,
     saving: task.running,
     rename: (index, words) => { names.value = pieces.value.map((piece, each) => ({ code: piece.code, name: piece.name, ...(each === index ? words : {}) })) },
     fault: computed(() => {
@@ -133,6 +150,12 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
       return tried.value !== '' ? tried.value : task.error.value === null ? '' : problem(task.error.value)
     }),
   }
+}
+
+/** The number of the edge that rows run along. */
+function longestEdge(corners: readonly ShapeCorner[]): string {
+  const lengths = corners.map(({ position, next }) => distanceKm(position, next))
+  return String(Math.max(0, lengths.indexOf(Math.max(...lengths))))
 }
 
 function lineOfShare(block: BlockWords | null, corner: ShapeCorner | undefined, percent: number): Position[] {

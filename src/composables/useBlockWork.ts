@@ -5,15 +5,15 @@ import type { NamedBoundary } from '../../shared/geo/findOverlaps.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import { findCautions, type Caution } from './blockCautions.ts'
 import type { OutlineBy } from './blockDraftContent.ts'
-import { crossingEdges } from './outlineWords.ts'
 import { useBlockDraft, type BlockDraft } from './useBlockDraft.ts'
-import { useOutline, type Outline } from './useOutline.ts'
+import { firstRing } from './shape.ts'
+import { useShape, type ShapeWork } from './useShape.ts'
 import { useTypedPoints, type TypedPoints } from './useTypedPoints.ts'
 
 /** A block in the making: its draft, its outline drawn or typed, and what is unlikely about it. */
 export interface BlockWork {
   draft: BlockDraft
-  outline: Outline
+  outline: ShapeWork
   typed: TypedPoints
   by: ComputedRef<OutlineBy>
   setBy: (by: OutlineBy) => void
@@ -21,8 +21,6 @@ export interface BlockWork {
   /** Exchanges latitude and longitude in every typed line, where longitude seems to come first. */
   swap: () => void
   cautions: ComputedRef<readonly Caution[]>
-  /** Numbers (from 0) of the edges that cross. */
-  crossing: ComputedRef<readonly number[]>
   isDrawing: ComputedRef<boolean>
 }
 
@@ -38,13 +36,13 @@ interface Around {
 export function useBlockWork({ farmId, by, language, others, farmPlace }: Around): BlockWork {
   const draft = useBlockDraft(farmId, by)
   const { content } = draft
-  const outline = useOutline(content)
+  const outline = useShape(content)
   // Words of the form change the content too; only what was typed here is read again.
   const text = computed(() => content.value.typed)
   const typed = useTypedPoints(() => text.value, language)
 
   watch(typed.points, (points) => {
-    if (content.value.by === 'points') outline.replace(points)
+    if (content.value.by === 'points') outline.typeRing(points)
   })
 
   watch(draft.ready, (isReady) => { if (isReady) setBy(by) }, { immediate: true })
@@ -53,7 +51,7 @@ export function useBlockWork({ farmId, by, language, others, farmPlace }: Around
     if (next === content.value.by) return
     const isUntyped = content.value.typed.trim() === ''
     const fromMap = next === 'points' && (isUntyped || typed.errors.value.length === 0)
-    content.value = { ...content.value, by: next, typed: fromMap ? formatPoints(content.value.points) : content.value.typed }
+    content.value = { ...content.value, by: next, typed: fromMap ? formatPoints([...firstRing(content.value.shape)]) : content.value.typed }
   }
 
   function setTyped(text: string): void {
@@ -68,7 +66,6 @@ export function useBlockWork({ farmId, by, language, others, farmPlace }: Around
       const geometry = outline.geometry.value
       return geometry === null ? [] : findCautions(geometry, others(), farmPlace())
     }),
-    crossing: computed(() => crossingEdges(outline.findings.value)),
-    isDrawing: computed(() => content.value.by === 'draw' && !content.value.closed),
+    isDrawing: computed(() => content.value.by === 'draw' && content.value.shape.open !== null),
   }
 }

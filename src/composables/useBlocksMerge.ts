@@ -13,12 +13,23 @@ import { newId } from './newId.ts'
 import { outlineWords } from './outlineWords.ts'
 import { useAsked, type Asked } from './useAsked.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useKeptForm, type KeptForm } from './useKeptForm.ts'
 import { useMessages } from './useMessages.ts'
 import { useSubmit } from './useSubmit.ts'
 import { useTask } from './useTask.ts'
 
+/** A join in the making: what the device keeps. */
+export interface MergeContent {
+  /** The id the block will have, so that sending twice makes one. */
+  id: string
+  ids: readonly string[]
+  code?: string
+  name?: string
+}
+
 /** The page that makes one block of several. */
 export interface BlocksMerge {
+  kept: KeptForm<MergeContent>
   chosen: ComputedRef<readonly BlockWords[]>
   isChosen: (id: string) => boolean
   toggle: (id: string) => void
@@ -33,16 +44,24 @@ export interface BlocksMerge {
   save: () => Promise<Submitted<BlocksChanged> | undefined>
 }
 
-/** @param first blocks chosen to begin with. */
-export function useBlocksMerge(first: readonly string[], { blocks, farmId, language }: BlocksPlace): BlocksMerge {
+/** @param first the block the page was opened for; null for none. */
+export function useBlocksMerge(first: string | null, { blocks, farmId, language }: BlocksPlace): BlocksMerge {
   const { t } = useI18n()
   const { problem } = useMessages()
   const { submit } = useSubmit()
   const asked = useAsked()
-  const ids = ref<readonly string[]>(first)
+  const nothing: MergeContent = { id: newId(), ids: first === null ? [] : [first] }
+  const kept = useKeptForm<MergeContent>(nothing, {
+    farmId, kind: 'merge', about: () => farmId.value, fresh: () => nothing,
+    isBegun: ({ ids: all, code: typedCode, name: typedName }) => all.some((one) => one !== first) || typedCode !== undefined || typedName !== undefined,
+  })
+  const { content } = kept
+  watch(kept.ready, () => {
+    // A join begun earlier takes in the block that the page was opened for.
+    if (first !== null && !content.value.ids.includes(first)) content.value = { ...content.value, ids: [...content.value.ids, first] }
+  })
+  const ids = computed(() => content.value.ids)
   const chosen = computed(() => ids.value.flatMap((id) => blocks.value.find((block) => block.id === id) ?? []))
-  const typed = ref<{ code?: string; name?: string }>({})
-  const id = newId()
   const tried = ref('')
   const result = computed(() => (chosen.value.length < 2 ? null : uniteBoundaries(chosen.value.map(({ geometry }) => geometry))))
   const cautions = computed<Caution[]>(() => (result.value?.isApart === true ? [{ code: 'geometry.apart', sentences: [t('shapes.merge.apart')] }] : []))
@@ -51,16 +70,19 @@ export function useBlocksMerge(first: readonly string[], { blocks, farmId, langu
     tried.value = ''
   })
 
-  const code = computed({ get: () => typed.value.code ?? chosen.value[0]?.code ?? '', set: (words) => { typed.value = { ...typed.value, code: words } } })
-  const name = computed({ get: () => typed.value.name ?? chosen.value[0]?.name ?? '', set: (words) => { typed.value = { ...typed.value, name: words } } })
+  const code = computed({ get: () => content.value.code ?? chosen.value[0]?.code ?? '', set: (words) => { content.value = { ...content.value, code: words } } })
+  const name = computed({ get: () => content.value.name ?? chosen.value[0]?.name ?? '', set: (words) => { content.value = { ...content.value, name: words } } })
 
   const task = useTask(async (): Promise<Submitted<BlocksChanged> | undefined> => {
     if (!asked.hasReasons(cautions.value)) return undefined
+    const { id } = content.value
     try {
-      return await submit({
+      const joined = await submit({
         kind: 'block.merge', farmId: farmId.value, id,
         body: { blocks: chosen.value.map((block) => ({ id: block.id, revision: block.revision })), block: { id, code: code.value, name: name.value }, acknowledged: asked.acknowledged() },
       })
+      await kept.discard()
+      return joined
     } catch (error) {
       if (!asked.takeRefusal(error)) throw error
       return undefined
@@ -80,9 +102,9 @@ export function useBlocksMerge(first: readonly string[], { blocks, farmId, langu
   }
 
   return {
-    chosen, code, name, asked, save,
+    kept, chosen, code, name, asked, save,
     isChosen: (one) => ids.value.includes(one),
-    toggle: (one) => { ids.value = ids.value.includes(one) ? ids.value.filter((each) => each !== one) : [...ids.value, one] },
+    toggle: (one) => { content.value = { ...content.value, ids: ids.value.includes(one) ? ids.value.filter((each) => each !== one) : [...ids.value, one] } },
     united: computed(() => result.value?.geometry ?? null),
     summary: computed(() => {
       const areaM2 = result.value?.geometry ? measurePolygon(result.value.geometry).areaM2 : totalAreaM2(chosen.value)

@@ -26,8 +26,10 @@ export interface ShapeWork {
   remove: (at: CornerAt) => void
   moveBy: (at: CornerAt, eastM: number, northM: number) => void
   moveAll: (eastM: number, northM: number) => void
-  /** Takes another outline in one step, as when it is snapped or typed. */
+  /** Takes another outline in one step, as when it is snapped. */
   replace: (geometry: Boundary) => void
+  /** Takes the outer ring of the first part as typed; all that is typed one after another is one step. */
+  typeRing: (points: readonly Position[]) => void
   /** Begins to set the corners of a hole or another part. */
   open: (as: 'part' | 'hole') => void
   add: (at: Position) => void
@@ -55,9 +57,15 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
   const here = (): Shape => content.value.shape
   const put = (shape: Shape): void => { content.value = { ...content.value, shape } }
   const steps = useSteps(here, put, letGo)
+  let isTyping = false
+  function go(shape: Shape): void {
+    isTyping = false
+    steps.go(shape)
+  }
   const check = computed(() => judgeShape(content.value.shape))
 
   function letGo(): void {
+    isTyping = false
     chosen.value = null
     isHeld.value = false
   }
@@ -67,7 +75,7 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
     const next = boundary === null ? null : make(boundary)
     if (next === null) return
     const shape = { ...here(), parts: shapeOf(next).parts }
-    if (isStep) steps.go(shape)
+    if (isStep) go(shape)
     else put(shape)
   }
 
@@ -92,7 +100,7 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
     if (found === null) return 'nothing'
     if (found.isEdge) insert(found.at, cross.value)
     else {
-      steps.go(here())
+      go(here())
       chosen.value = found.at
       drag(found.at, cross.value, false)
     }
@@ -104,18 +112,30 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
     const { open } = here()
     const last = open?.points.at(-1)
     if (open === null || (last !== undefined && isSameCorner(last, at))) return
-    steps.go({ ...here(), open: { ...open, points: [...open.points, at] } })
+    go({ ...here(), open: { ...open, points: [...open.points, at] } })
   }
   function finish(): boolean {
     const { open } = here()
     const { geometry } = check.value
     if (open === null || open.points.length < 3 || geometry === null) return false
-    steps.go(shapeOf(geometry))
+    go(shapeOf(geometry))
     return true
   }
 
+  function typeRing(points: readonly Position[]): void {
+    const { parts } = here()
+    const holes = (parts[0] ?? []).slice(1)
+    if (points.length < 3 && (holes.length > 0 || parts.length > 1)) return
+    const shape: Shape = points.length < 3
+      ? { parts: [], open: { as: 'part', points: [...points] } }
+      : { parts: [[[...points], ...holes], ...parts.slice(1)], open: null }
+    if (isTyping) put(shape)
+    else go(shape)
+    isTyping = true
+  }
+
   return {
-    cross, chosen, isHeld, moveCross, pick, drag, insert, add, finish,
+    cross, chosen, isHeld, moveCross, pick, drag, insert, add, finish, typeRing,
     remove: (at) => {
       change((boundary) => removeCorner(boundary, at))
       letGo()
@@ -125,16 +145,16 @@ export function useShape<Content extends { shape: Shape }>(content: Ref<Content>
       if (position !== undefined) change((boundary) => moveCorner(boundary, at, movePosition(position, eastM, northM)))
     },
     moveAll: (eastM, northM) => { change((boundary) => moveWhole(boundary, eastM, northM)) },
-    replace: (geometry) => { steps.go(shapeOf(geometry)) },
+    replace: (geometry) => { go(shapeOf(geometry)) },
     open: (as) => {
       letGo()
-      steps.go({ ...here(), open: { as, points: [] } })
+      go({ ...here(), open: { as, points: [] } })
     },
     removeLast: () => {
       const { open } = here()
-      if (open !== null && open.points.length > 0) steps.go({ ...here(), open: { ...open, points: open.points.slice(0, -1) } })
+      if (open !== null && open.points.length > 0) go({ ...here(), open: { ...open, points: open.points.slice(0, -1) } })
     },
-    leave: () => { if (here().open !== null) steps.go({ ...here(), open: null }) },
+    leave: () => { if (here().open !== null) go({ ...here(), open: null }) },
     undo: steps.undo, redo: steps.redo, canUndo: steps.canUndo, canRedo: steps.canRedo,
     geometry: computed(() => check.value.geometry),
     measure: computed(() => (check.value.geometry === null ? null : measurePolygon(check.value.geometry))),

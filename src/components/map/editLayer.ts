@@ -11,6 +11,8 @@ export interface EditEvents {
   /** An edge is taken hold of in its middle: a corner comes in after this one. */
   inserted(after: CornerAt, to: Position): void
   picked(at: CornerAt): void
+  /** How many corners are in sight that have no handle because they are too many; 0 where each has its own. */
+  crowded(corners: number): void
 }
 
 /** An outline whose corners can be moved: ground, edges, a handle at each corner, a smaller one in the middle of each edge. */
@@ -35,11 +37,12 @@ export function createEditLayer(map: LeafletMap, events: EditEvents): EditLayer 
 
   function drawHandles(): void {
     handles.clearLayers()
-    if (shown === null || !shown.handles) return
+    if (shown === null || !shown.handles) return events.crowded(0)
     const bounds = map.getBounds().pad(0.1)
     const corners = ringsOf(shown).flatMap(({ part, ring, points }) => points.map((position, corner) => ({
       at: { part, ring, corner }, position, next: points[(corner + 1) % points.length] ?? position,
     }))).filter(({ position }) => bounds.contains(toLatLng(position)))
+    events.crowded(corners.length > MOST_HANDLES ? corners.length : 0)
     if (corners.length > MOST_HANDLES) return
     for (const { at, position, next } of corners) {
       if (isLong(map, position, next)) handles.addLayer(edgeHandle(at, position, next))

@@ -5,6 +5,7 @@ import type { Position } from '../../../../shared/geo/geometryTypes.ts'
 import { measurePolygon } from '../../../../shared/geo/measurePolygon.ts'
 import { movePosition } from '../../../../shared/geo/movePosition.ts'
 import { cornersOfShape, countPoints, emptyShape, judgeShape, type Shape } from '../../../../src/composables/shape.ts'
+import { crossingEdges } from '../../../../src/composables/outlineWords.ts'
 import { useShape, type ShapeWork } from '../../../../src/composables/useShape.ts'
 
 const A: Position = [-123.312, 44.606]
@@ -131,6 +132,91 @@ describe('useShape', () => {
       while (work.canRedo.value) work.redo()
       expect(content.value.shape).toEqual(after)
     }), { seed: 20_261_201, numRuns: 200 })
+  })
+})
+
+describe('a ring being set', () => {
+  const drawn = (points: Position[] = []) => begin({ ...emptyShape(), open: { as: 'part', points } })
+  const points = ({ content }: ReturnType<typeof begin>): Position[] => content.value.shape.open?.points ?? []
+
+  it('measures nothing under three corners, and while corners are added', () => {
+    const { work } = drawn([A, B])
+    expect([work.geometry.value, work.measure.value, work.findings.value]).toEqual([null, null, []])
+    for (const corner of [C, D]) work.add(corner)
+    // 2/1000° × 1/1000° at 44.6°: 158.7 m by 111.1 m, worked out with the radii of curvature of WGS84.
+    expect(areaOf(work)).toBeGreaterThan(17_600)
+    expect(areaOf(work)).toBeLessThan(17_700)
+    expect(work.measure.value?.perimeterM).toBeCloseTo(2 * (158.73 + 111.11), 0)
+  })
+
+  it('takes a double touch once', () => {
+    const made = drawn()
+    made.work.add(A)
+    made.work.add([A[0] + 1e-7, A[1]])
+    expect(points(made)).toEqual([A])
+  })
+
+  it('goes back and forth', () => {
+    const made = drawn()
+    const { work } = made
+    work.add(A)
+    work.add(B)
+    work.removeLast()
+    expect(points(made)).toEqual([A])
+    work.undo()
+    expect(points(made)).toEqual([A, B])
+    work.undo()
+    work.redo()
+    expect(points(made)).toEqual([A, B])
+    work.undo()
+    work.add(C)
+    expect(work.canRedo.value).toBe(false)
+  })
+
+  it('takes no corner once it is closed, until that is undone', () => {
+    const { content, work } = drawn([A, B, C])
+    expect(work.finish()).toBe(true)
+    work.add(D)
+    expect(countPoints(content.value.shape)).toBe(3)
+    work.undo()
+    work.add(D)
+    expect(content.value.shape.open?.points).toEqual([A, B, C, D])
+  })
+
+  it('drops a last corner on the first', () => {
+    const { content, work } = drawn([A, B, C, D, A])
+    expect(work.finish()).toBe(true)
+    expect(countPoints(content.value.shape)).toBe(4)
+  })
+
+  it('names the two edges that cross, and is not closed like that', () => {
+    const { work } = drawn([A, C, B, D])
+    expect(work.geometry.value).toBeNull()
+    expect(work.findings.value[0]?.code).toBe('geometry.self_intersection')
+    expect(crossingEdges(work.findings.value)).toEqual([0, 2])
+    expect(work.finish()).toBe(false)
+  })
+})
+
+describe('a typed ring', () => {
+  it('is open under three points, closed from there, and one step however it was typed', () => {
+    const { content, work } = begin({ ...emptyShape(), open: { as: 'part', points: [] } })
+    work.typeRing([A, B])
+    expect(content.value.shape).toEqual({ parts: [], open: { as: 'part', points: [A, B] } })
+    work.typeRing([A, B, C])
+    work.typeRing([A, B, C, D])
+    expect(content.value.shape).toEqual({ parts: [[[A, B, C, D]]], open: null })
+    work.undo()
+    expect(countPoints(content.value.shape)).toBe(0)
+  })
+
+  it('keeps holes and other parts, and waits for a third point while there are some', () => {
+    const hole: Position[] = [[-123.3115, 44.6055], [-123.311, 44.6055], [-123.311, 44.6052]]
+    const { content, work } = begin({ parts: [[[D, C, B, A], hole]], open: null })
+    work.typeRing([D, C])
+    expect(content.value.shape.parts[0]?.[0]).toHaveLength(4)
+    work.typeRing([D, C, A])
+    expect(content.value.shape.parts).toEqual([[[D, C, A], hole]])
   })
 })
 
