@@ -9,7 +9,9 @@ import { hectaresText, metresText } from './blockWords.ts'
 import type { MapGround } from './mapGround.ts'
 import type { MapDraft } from './mapTypes.ts'
 import { crossingEdges, outlineWords } from './outlineWords.ts'
+import { useGroundDraft, type GroundContent } from './useGroundDraft.ts'
 import { useGroundForm, type GroundForm, type GroundSubject } from './useGroundForm.ts'
+import type { KeptForm } from './useKeptForm.ts'
 import { usePlaceDrawing, type PlaceDrawing, type PlaceShape } from './usePlaceDrawing.ts'
 import { useRings, type Kept } from './useRings.ts'
 
@@ -17,6 +19,7 @@ import { useRings, type Kept } from './useRings.ts'
 export interface GroundEditor {
   drawing: PlaceDrawing
   form: GroundForm
+  kept: KeptForm<GroundContent>
   /** Ways it may be drawn. */
   shapes: ComputedRef<readonly PlaceShape[]>
   mapDraft: ComputedRef<MapDraft>
@@ -35,13 +38,14 @@ export function useGroundEditor(subject: GroundSubject, language: () => Language
   const isSite = subject.what === 'site'
   const drawing = usePlaceDrawing({ geometry: subject.was?.geometry ?? null, shape: isSite ? 'point' : 'line' }, language)
   const form = useGroundForm(subject, drawing)
+  const kept = useGroundDraft(subject, form, drawing)
   const { shape, points, geometry, by, cross, findings } = drawing
   const metres = computed(() => {
     const read = parseQuantityText(form.draft.metres)
     return read.ok && Number(read.value) > 0 && Number(read.value) <= 5_000 ? Number(read.value) : null
   })
-  const kept = computed<readonly Kept[]>(() => (isSite && geometry.value !== null ? [{ geometry: geometry.value, keepClearM: metres.value }] : []))
-  const rings = useRings(() => kept.value)
+  const keptClear = computed<readonly Kept[]>(() => (isSite && geometry.value !== null ? [{ geometry: geometry.value, keepClearM: metres.value }] : []))
+  const rings = useRings(() => keptClear.value)
 
   watch(() => form.draft.kind, (kind) => {
     const usual = kind === null ? undefined : USUAL[kind]
@@ -58,7 +62,7 @@ export function useGroundEditor(subject: GroundSubject, language: () => Language
   })
 
   return {
-    drawing, form, summary,
+    drawing, form, kept, summary,
     shapes: computed(() => (isSite || form.draft.kind === 'other' ? ['point', 'line', 'area'] : form.draft.kind === 'building' ? ['area'] : ['line', 'area'])),
     fault: computed(() => {
       const [finding] = findings.value

@@ -17,9 +17,12 @@ import { useTask } from './useTask.ts'
 /** What the form is about: a new one, or one that is there. */
 export type GroundSubject = { what: 'site'; was: Site | null } | { what: 'ground'; was: GroundFeature | null }
 
+/** The words of the form; `id` and `revision` are of what is saved. */
+export interface GroundWords { id: string; revision: number; kind: SiteKind | GroundKind | null; name: string; metres: string; note: string; endedOn: string | null }
+
 /** The form of a site or of a piece of the ground plan; `metres` is the distance of the one and the width of the other. */
 export interface GroundForm {
-  draft: { kind: SiteKind | GroundKind | null; name: string; metres: string; note: string; endedOn: string | null }
+  draft: GroundWords
   errors: ComputedRef<Record<string, string>>
   /** Why it was not saved, where no field is to blame. */
   refusal: ComputedRef<string>
@@ -35,9 +38,8 @@ export function useGroundForm(subject: GroundSubject, drawing: PlaceDrawing): Gr
   const { problem } = useMessages()
   const schemaErrors = useSchemaErrors()
   const { what, was } = subject
-  const id = was?.id ?? newId()
-  const draft = reactive<GroundForm['draft']>({
-    kind: was?.kind ?? null, name: was?.name ?? '', metres: (what === 'site' ? subject.was?.keepClearM : subject.was?.widthM) ?? '',
+  const draft = reactive<GroundWords>({
+    id: was?.id ?? newId(), revision: was?.revision ?? 0, kind: was?.kind ?? null, name: was?.name ?? '', metres: (what === 'site' ? subject.was?.keepClearM : subject.was?.widthM) ?? '',
     note: (what === 'site' ? subject.was?.note : null) ?? '', endedOn: was?.endedOn ?? null,
   })
   const own = ref<Record<string, string>>({})
@@ -48,14 +50,14 @@ export function useGroundForm(subject: GroundSubject, drawing: PlaceDrawing): Gr
     const metres = parseQuantityText(draft.metres)
     const given = draft.metres.trim() === '' ? null : metres.ok ? metres.value : draft.metres
     const isLine = drawing.geometry.value?.type === 'LineString'
-    const facts = { kind: draft.kind, geometry: drawing.geometry.value, endedOn: draft.endedOn, ...(was === null ? { id } : { revision: was.revision }) }
+    const facts = { kind: draft.kind, geometry: drawing.geometry.value, endedOn: draft.endedOn, ...(was === null ? { id: draft.id } : { revision: draft.revision }) }
     if (what === 'site') return { ...facts, name: draft.name, keepClearM: given, note: textOf(draft.note) }
     return { ...facts, name: textOf(draft.name), widthM: isLine ? given : null }
   }
 
   function commandOf(body: object): Parameters<typeof submit>[0] {
     const act = was === null ? 'create' : 'change'
-    return { kind: `${what}.${act}`, farmId: session.farmId, id, body } as Parameters<typeof submit>[0]
+    return { kind: `${what}.${act}`, farmId: session.farmId, id: draft.id, body } as Parameters<typeof submit>[0]
   }
 
   /** What the drawing lacks or cannot be, in words; empty where nothing is. */

@@ -32,7 +32,12 @@ export interface PlaceDrawing {
   canUndo: ComputedRef<boolean>
   canRedo: ComputedRef<boolean>
   swap: () => void
+  /** What is drawn and typed, as the device keeps it, and that taken up again. */
+  kept: ComputedRef<KeptDrawing>
+  resume: (kept: KeptDrawing) => void
 }
+
+export interface KeptDrawing { shape: PlaceShape; points: readonly Position[]; by: 'draw' | 'points'; text: string; changed: boolean }
 
 export const LEAST_POINTS: Record<PlaceShape, number> = { point: 1, line: 2, area: 3 }
 const SHAPES = { Point: 'point', LineString: 'line', Polygon: 'area' } as const
@@ -74,6 +79,10 @@ export function usePlaceDrawing(start: { geometry: PlaceGeometry | null; shape: 
       go(shape.value === 'point' ? [at] : [...points.value, at])
     },
     removeLast: () => { if (points.value.length > 0) go(points.value.slice(0, -1)) },
+    kept: computed(() => ({ shape: shape.value, points: points.value, by: by.value, text: text.value, changed: changed.value })),
+    resume: (kept) => {
+      [shape.value, points.value, by.value, text.value, changed.value] = [kept.shape, kept.points, kept.by, kept.text, kept.changed]
+    },
     undo: steps.undo, redo: steps.redo, canUndo: steps.canUndo, canRedo: steps.canRedo,
     swap: () => { if (typed.swapped.value !== null) text.value = typed.swapped.value },
   }

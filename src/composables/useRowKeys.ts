@@ -5,19 +5,21 @@ interface RowKeys {
   chosen: () => string | null
   choose: (id: string) => void
   open: (id: string) => void
+  /** Makes sure that the row is drawn, where a long list draws those in sight only. */
+  draw?: (id: string) => Promise<void>
 }
 
 const TYPING = 'input, textarea, select, [contenteditable="true"], [role="dialog"], [role="listbox"]'
 
 /** J and K walk the rows of a ledger, Enter opens the chosen one; silent while someone types or a dialog is open. */
-export function useRowKeys({ ids, chosen, choose, open }: RowKeys): void {
+export function useRowKeys({ ids, chosen, choose, open, draw = () => nextTick() }: RowKeys): void {
   function walk(step: 1 | -1): void {
     const all = ids()
     const at = all.indexOf(chosen() ?? '')
     const next = all[at === -1 ? (step === 1 ? 0 : all.length - 1) : Math.min(Math.max(at + step, 0), all.length - 1)]
     if (next === undefined) return
     choose(next)
-    void nextTick(() => {
+    void draw(next).then(() => {
       const row = [...document.querySelectorAll<HTMLElement>('[data-row]')].find((each) => each.dataset['row'] === next)
       row?.scrollIntoView({ block: 'nearest' })
       row?.querySelector<HTMLElement>('a')?.focus({ preventScroll: true })
