@@ -10,6 +10,7 @@ import { SayWhatReplaced1764630000000 } from '../../migrations/1764630000000-Say
 import { FindBySubject1764604000000 } from '../../migrations/1764604000000-FindBySubject.ts'
 import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBlocks.ts'
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
+import { WholeFarm1764642000000 } from '../../migrations/1764642000000-WholeFarm.ts'
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
 import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
@@ -54,6 +55,7 @@ export function createOwnerSource(url: string): DataSource {
       SayWhatReplaced1764630000000,
       AddMail1764640000000,
       WholePeople1764641000000,
+      WholeFarm1764642000000,
       WholeGrants1764643000000,
       AddRounds1764644000000,
     ],

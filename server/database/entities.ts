@@ -5,6 +5,7 @@ import { Attachment } from '../entities/Attachment.ts'
 import { Bed } from '../entities/Bed.ts'
 import { Block } from '../entities/Block.ts'
 import { BlockBoundary } from '../entities/BlockBoundary.ts'
+import { Calibration } from '../entities/Calibration.ts'
 import { Farm } from '../entities/Farm.ts'
 import { FarmEvent } from '../entities/FarmEvent.ts'
 import { FarmEventBlock } from '../entities/FarmEventBlock.ts'
@@ -47,6 +48,7 @@ export const ENTITIES = [
   Bed,
   Block,
   BlockBoundary,
+  Calibration,
   Farm,
   FarmEvent,
   FarmEventBlock,

@@ -27,6 +27,7 @@ export const APP_RIGHTS: Record<string, string> = {
   lots: 'SELECT, INSERT, UPDATE',
   lot_entries: 'SELECT, INSERT',
   sprayers: 'SELECT, INSERT, UPDATE',
+  calibrations: 'SELECT, INSERT, UPDATE (withdrawn_at, withdrawn_by_id, withdrawn_reason)',
   application_records: 'SELECT, INSERT, UPDATE, DELETE',
   record_lines: 'SELECT, INSERT, DELETE',
   record_components: 'SELECT, INSERT, DELETE',

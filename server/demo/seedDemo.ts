@@ -1,25 +1,21 @@
-import { readFile } from 'node:fs/promises'
-import { join } from 'node:path'
-import type { Feature, FeatureCollection, Polygon } from 'geojson'
 import { v7 as uuidV7 } from 'uuid'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { seasonOf } from '../../shared/time/seasonOf.ts'
 import { fixedClock } from '../clock.ts'
 import type { FarmActor } from '../database/actor.ts'
-import { DEMO_FOLDER } from '../projectFolders.ts'
-import { createBlock } from '../services/blocks/createBlock.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
-import { createSprayer } from '../services/farms/sprayers.ts'
 import { hashPassword } from '../services/passwords.ts'
 import type { Services } from '../services/services.ts'
-import { buildBlock } from './buildThings.ts'
 import { DEMO_ZONE } from './demoZone.ts'
 import { makeAccount, makeGrant, makePerson } from './makeAccount.ts'
+import { seedBlocks } from './seedBlocks.ts'
+import { seedFarm } from './seedFarm.ts'
 import { seedGround } from './seedGround.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
-import { seedGrowing, seedRedrawn, type DrawnCrop } from './seedGrowing.ts'
+import { seedGrowing, seedRedrawn } from './seedGrowing.ts'
 import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
+import { seedCalibrations, seedSprayers } from './seedSprayers.ts'
 
 const DAY_MS = 86_400_000
 /** History begins this long before the demo is opened. */
@@ -58,6 +54,8 @@ export async function seedDemo(services: Services, password: string): Promise<De
   await seedGrowing(services, past, { manager, applicator }, drawn)
   await seedGround(past, manager)
   const sprayers = await seedSprayers(past, manager)
+  await seedCalibrations(services, manager, sprayers)
+  await seedFarm(services, manager)
   const lots = await seedInputs(services, manager)
   await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
   await seedRedrawn(services, manager, blocks.get('L1') ?? '')
@@ -100,24 +98,4 @@ async function actorOf(services: Services, accountId: string, farmId: string): P
   const actor = access.find((candidate) => candidate.farmId === farmId)
   if (!actor) throw new Error('The demo account has no way into the demo farm')
   return actor
-}
-
-async function seedBlocks(services: Services, actor: FarmActor): Promise<DrawnCrop[]> {
-  const drawing = JSON.parse(await readFile(join(DEMO_FOLDER, 'demoBlocks.geojson'), 'utf8')) as FeatureCollection<Polygon>
-  const drawn: DrawnCrop[] = []
-  for (const feature of drawing.features as Feature<Polygon, Omit<DrawnCrop, 'id'> & { name: string }>[]) {
-    const { code, name, crop, variety } = feature.properties
-    const { block } = await createBlock(services, actor, buildBlock({ code, name, crop: `${crop}, ${variety}`, geometry: { ...feature.geometry } }))
-    drawn.push({ id: block.id, code, crop, variety })
-  }
-  return drawn
-}
-
-async function seedSprayers(services: Services, actor: FarmActor): Promise<Map<string, string>> {
-  const ids = new Map<string, string>()
-  for (const [code, name, tankL, flowLPerMin] of [['M2', 'Mist sprayer', '400', '12.2'], ['D1', 'Drencher', '400', '24'], ['K1', 'Knapsack', '15', null]] as const) {
-    const { sprayer } = await createSprayer(services, actor, { id: uuidV7(), code, name, tankL, flowLPerMin })
-    ids.set(code, sprayer.id)
-  }
-  return ids
 }

@@ -25,6 +25,8 @@ export class Account {
   /** Time step of the code that was used last; it and those before are spent. */
   @Column({ name: 'totp_step', type: 'integer', nullable: true }) totpStep!: number | null
   @Column({ name: 'totp_since', type: 'timestamptz', nullable: true }) totpSince!: Date | null
+  /** The farm it tries things on; never counted among its farms. */
+  @Column({ name: 'practice_farm_id', type: 'uuid', nullable: true }) practiceFarmId!: string | null
   @Column({ name: 'created_at', type: 'timestamptz' }) createdAt!: Date
   @Column({ name: 'deactivated_at', type: 'timestamptz', nullable: true }) deactivatedAt!: Date | null
 }

@@ -1,8 +1,9 @@
-import { farmParamsSchema, pageOf, pageQuerySchema } from '../../shared/contract/common.ts'
-import { createFarmSchema, createSprayerSchema, farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
+import { farmParamsSchema } from '../../shared/contract/common.ts'
+import { createFarmSchema, farmSchema } from '../../shared/contract/farm.ts'
+import { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
 import { describeFarm } from '../services/farms/describeFarm.ts'
-import { createSprayer, listSprayers } from '../services/farms/sprayers.ts'
+import { updateFarm } from '../services/farms/updateFarm.ts'
 import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE, LEADERS } from './roleGroups.ts'
 
@@ -16,21 +17,13 @@ export const farmRoutes = [
     },
   }),
   defineRoute({
-    method: 'get', path: '/farms/:farmId', summary: 'The farm: name, zone, season.', roles: EVERY_ROLE,
+    method: 'get', path: '/farms/:farmId', summary: 'The farm: name, zone, season, certificate, contact.', roles: EVERY_ROLE,
     params: farmParamsSchema, answer: farmSchema,
     run: async ({ services, actor }) => ({ body: await describeFarm(services, actor) }),
   }),
   defineRoute({
-    method: 'get', path: '/farms/:farmId/sprayers', summary: 'Sprayers and drenchers, by code.', roles: EVERY_ROLE,
-    params: farmParamsSchema, query: pageQuerySchema, answer: pageOf(sprayerSchema),
-    run: async ({ services, actor, query }) => ({ body: await listSprayers(services, actor, query) }),
-  }),
-  defineRoute({
-    method: 'post', path: '/farms/:farmId/sprayers', summary: 'Take a sprayer into the list.', roles: LEADERS,
-    params: farmParamsSchema, body: createSprayerSchema, answer: sprayerSchema,
-    run: async ({ services, actor, body }) => {
-      const { made, sprayer } = await createSprayer(services, actor, body)
-      return { status: made ? 201 : 200, body: sprayer }
-    },
+    method: 'patch', path: '/farms/:farmId', summary: 'Change the profile of the farm.', roles: LEADERS,
+    params: farmParamsSchema, body: updateFarmSchema, answer: farmSchema,
+    run: async ({ services, actor, body }) => ({ body: await updateFarm(services, actor, body) }),
   }),
 ]

@@ -15,9 +15,11 @@ import { registerRoutes } from './registerRoutes.ts'
 import { reportRoutes } from './reportRoutes.ts'
 import { roundRoutes } from './roundRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
+import { sprayerRoutes } from './sprayerRoutes.ts'
+import { startRoutes } from './startRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
   ...openRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
-  ...farmRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
+  ...farmRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
 ]

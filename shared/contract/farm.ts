@@ -1,12 +1,10 @@
 import { z } from 'zod'
-import { idSchema } from './common.ts'
+import { fittingSchema, inForceSchema } from './calibration.ts'
+import { idSchema, revisionSchema } from './common.ts'
+import { profileAnswer } from './farmProfile.ts'
 import { positiveDecimal } from './quantity.ts'
+import { seasonStartSchema } from './seasonStart.ts'
 import { lineText } from './text.ts'
-
-export const seasonStartSchema = z
-  .string()
-  .regex(/^(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])$/, { error: 'date.invalid', abort: true })
-  .refine((text) => !Number.isNaN(Date.parse(`2023-${text}T00:00:00Z`)) && new Date(`2023-${text}T00:00:00Z`).toISOString().slice(5, 10) === text, { error: 'date.invalid' })
 
 export const createFarmSchema = z.strictObject({
   id: idSchema,
@@ -24,26 +22,38 @@ export const farmSchema = z.object({
   seasonStart: z.string(),
   /** Season of today in the farm's zone. */
   currentSeason: z.number().int(),
-  /** A point on the farm, [lon, lat], or null before the first block. */
+  /** A point on the farm, [lon, lat]: of the first block, else where the map was set to open; null before either. */
   place: z.tuple([z.number(), z.number()]).nullable(),
+  ...profileAnswer,
 })
 export type Farm = z.infer<typeof farmSchema>
 
-export const createSprayerSchema = z.strictObject({
-  id: idSchema,
+const sprayerFields = {
   code: lineText(12),
   name: lineText(80),
   /** Usable tank volume, litres. */
   tankL: positiveDecimal,
   /** What it puts out while spraying, litres a minute, where it was measured. */
-  flowLPerMin: positiveDecimal.nullable().default(null),
-})
+  flowLPerMin: positiveDecimal.nullable(),
+}
+
+export const createSprayerSchema = z.strictObject({ id: idSchema, ...sprayerFields, flowLPerMin: sprayerFields.flowLPerMin.default(null), fitting: fittingSchema.optional() })
+
+/** What is not sent stays as it is; a fitting is sent whole. */
+export const updateSprayerSchema = z.strictObject({ revision: revisionSchema, ...sprayerFields, fitting: fittingSchema }).partial().required({ revision: true })
+export type UpdateSprayer = z.output<typeof updateSprayerSchema>
+
 export const sprayerSchema = z.object({
   id: z.string(),
   code: z.string(),
   name: z.string(),
   tankL: z.string(),
   flowLPerMin: z.string().nullable(),
+  fitting: fittingSchema,
+  /** Null until somebody measured it. */
+  calibration: inForceSchema.nullable(),
+  /** The civil day on which it was put out of use, and why; null while it is in use. */
+  retired: z.object({ on: z.string(), reason: z.string() }).nullable(),
   revision: z.number().int(),
 })
 export type Sprayer = z.infer<typeof sprayerSchema>

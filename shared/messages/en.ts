@@ -13,19 +13,22 @@ import { mail } from './en/mail.ts'
 import { mapPrint } from './en/mapPrint.ts'
 import { pdf } from './en/pdf.ts'
 import { problems } from './en/problems.ts'
+import { profile } from './en/profile.ts'
 import { recordForm } from './en/recordForm.ts'
 import { records } from './en/records.ts'
 import { register } from './en/register.ts'
 import { registerPrint } from './en/registerPrint.ts'
 import { session } from './en/session.ts'
 import { shapes } from './en/shapes.ts'
+import { sprayers } from './en/sprayers.ts'
+import { start } from './en/start.ts'
 import { today } from './en/today.ts'
 import { units } from './en/units.ts'
 import { versions } from './en/versions.ts'
 
 /** What the screens say, in English; `{name}` stands for a parameter. The client reads this alone. */
 export const screens = {
-  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, journal, problems, recordForm, records, register, session, shapes, today, units, versions,
+  blocks, checks, common, farm, files, frame, ground, growing, importing, inputs, journal, problems, profile, recordForm, records, register, session, shapes, sprayers, start, today, units, versions,
 }
 
 /** Every word a person reads, in English: the screens, what is printed and what is mailed. The shape of every other language. */

@@ -30,8 +30,11 @@ interface World {
   /** Somebody with a PIN. */
   personId: string
   phoneId: string
+  sprayerId: string
+  calibrationId: string
 }
 
+const MEASURED = { on: '2026-06-15', doneBy: 'Ada Rook', measured: { kind: 'plot', volumeL: '1', areaM2: '20' } }
 const PICTURE = await buildPicture('png')
 
 let house: TestHouse
@@ -76,11 +79,13 @@ async function makeWorld(): Promise<World> {
   const { site } = await createSite(house.services, ownerActor, buildSite())
   const { feature } = await createGround(house.services, ownerActor, buildGround())
   const owner = await house.as(farm.accounts.owner)
-  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), personId: uuidV7(), phoneId: uuidV7() }
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), sprayerId: uuidV7(), calibrationId: uuidV7(), personId: uuidV7(), phoneId: uuidV7() }
   await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
   await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
   await applicator.post(`/api/farms/${farm.id}/farm-events`).send({ id: ids.eventId, kind: 'mown', blockIds: [things.blockId], on: '2026-06-15' }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/sprayers`).send({ id: ids.sprayerId, code: 'M1', name: 'Mister', tankL: '400' }).expect(201)
+  await applicator.post(`/api/farms/${farm.id}/calibrations`).send({ id: ids.calibrationId, sprayerId: ids.sprayerId, ...MEASURED }).expect(201)
   const step = buildStep(things)
   await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
   await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
@@ -127,6 +132,12 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
     'post /farms/:farmId/sprayers': () => ({ id: uuidV7(), code: tag, name: 'Drencher', tankL: '400' }),
+    'patch /farms/:farmId/sprayers/:id': () => ({ revision: 9, name: tag }),
+    'post /farms/:farmId/sprayers/:id/retire': () => ({ revision: 9, reason: 'Worn out' }),
+    'post /farms/:farmId/calibrations': () => ({ id: uuidV7(), sprayerId: world.sprayerId, ...MEASURED }),
+    'post /farms/:farmId/calibrations/:id/withdraw': () => ({ reason: 'A slip' }),
+    'patch /farms/:farmId': () => ({ revision: 9, name: tag }),
+    'patch /farms/:farmId/start': () => ({ skipped: [] }),
     'post /farms/:farmId/records': () => buildRecord(things),
     'post /farms/:farmId/saved-filters': () => ({ id: uuidV7(), name: tag, query: { method: 'drench', sort: 'number' } }),
     'put /farms/:farmId/records/:id': () => ({ ...buildRecord(things), id: undefined, revision: 1 }),
@@ -154,7 +165,7 @@ function addressOf(route: Route, world: World, things: SeededThings | null, acto
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
     ['/people', world.personId], ['/shared-phones', world.phoneId],
-    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))
   const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN

@@ -58,7 +58,7 @@ it('gives the app role no power over the house', async () => {
   expect(role).toEqual({ rolsuper: false, rolbypassrls: false, rolcreaterole: false, rolcreatedb: false })
   expect(await rows("SELECT tablename FROM pg_tables WHERE tableowner = 'drenchleaf_app'")).toEqual([])
   const evidence = await rows(`SELECT table_name, privilege_type FROM information_schema.role_table_grants
-    WHERE grantee = 'drenchleaf_app' AND table_name IN ('record_versions', 'journal', 'lot_entries', 'attachments', 'block_boundaries', 'farm_events', 'farm_event_blocks') AND privilege_type NOT IN ('SELECT', 'INSERT')`)
+    WHERE grantee = 'drenchleaf_app' AND table_name IN ('record_versions', 'journal', 'lot_entries', 'attachments', 'block_boundaries', 'farm_events', 'farm_event_blocks', 'calibrations') AND privilege_type NOT IN ('SELECT', 'INSERT')`)
   expect(evidence).toEqual([])
 })
 

@@ -16,10 +16,10 @@ import type { Services } from '../services.ts'
 import { describeFarm } from './describeFarm.ts'
 
 /**
- * Makes a farm whose owner is the caller. @returns the farm, and whether this call made it.
+ * Makes a farm whose owner is the caller; one for practice is not counted. @returns the farm, and whether this call made it.
  * @throws {AppError} `farm.zone`, `farm.too_many` for an account that owns as many as it may.
  */
-export async function createFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>): Promise<{ made: boolean; farm: FarmAnswer }> {
+export async function createFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>, practice = false): Promise<{ made: boolean; farm: FarmAnswer }> {
   if (!isZone(input.zone)) throw invalid([{ path: 'zone', code: 'farm.zone' }])
   const creationDigest = digestOf(input)
   const open = await findOpen(services, accountId, input.id)
@@ -28,7 +28,7 @@ export async function createFarm(services: Services, accountId: string, input: z
     if (stored.creationDigest !== creationDigest) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
     return { made: false, farm: await describeFarm(services, open) }
   }
-  await insertFarm(services, accountId, input, creationDigest)
+  await insertFarm(services, accountId, { ...input, creationDigest, practice })
   const actor = await findOpen(services, accountId, input.id)
   if (!actor) throw new AppError('conflict', 'conflict')
   return { made: true, farm: await describeFarm(services, actor) }
@@ -39,14 +39,14 @@ async function findOpen(services: Services, accountId: string, farmId: string): 
   return access.find((candidate) => candidate.farmId === farmId)
 }
 
-async function insertFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema>, creationDigest: string): Promise<void> {
+async function insertFarm(services: Services, accountId: string, input: z.output<typeof createFarmSchema> & Pick<Farm, 'creationDigest' | 'practice'>): Promise<void> {
   const createdAt = services.clock.now()
   await services.database.inFarm({ farmId: input.id, seasons: null }, async (manager) => {
     // Locked, so that farms made at the same moment are counted one after the other.
     const account = await manager.findOneOrFail(Account, { where: { id: accountId }, lock: { mode: 'pessimistic_write' } })
-    await assertRoomForOne(services, manager, accountId)
+    if (!input.practice) await assertRoomForOne(services, manager, account)
     const taken = await manager.createQueryBuilder().insert().into(Farm)
-      .values({ ...input, revision: 1, creationDigest, createdAt }).orIgnore().returning('id').execute()
+      .values({ ...input, revision: 1, createdAt }).orIgnore().returning('id').execute()
     // An id of somebody else's farm is answered like one's own repeated with other content: nothing is learned.
     if ((taken.raw as unknown[]).length === 0) throw invalid([{ path: 'id', code: 'idempotency.mismatch' }])
     await manager.insert(FarmHead, { farmId: input.id, lastSeq: 0 })
@@ -59,10 +59,10 @@ async function insertFarm(services: Services, accountId: string, input: z.output
   })
 }
 
-async function assertRoomForOne({ config, clock }: Services, manager: EntityManager, accountId: string): Promise<void> {
+async function assertRoomForOne({ config, clock }: Services, manager: EntityManager, { id, practiceFarmId }: Account): Promise<void> {
   const [{ owned }]: [{ owned: number }] = await manager.query(
-    "SELECT count(*)::integer AS owned FROM account_access($1, $2) WHERE role = 'owner'",
-    [accountId, clock.now()],
+    "SELECT count(*)::integer AS owned FROM account_access($1, $2) WHERE role = 'owner' AND farm_id IS DISTINCT FROM $3",
+    [id, clock.now(), practiceFarmId],
   )
   if (owned >= config.farmsPerAccount) throw invalid([{ path: 'id', code: 'farm.too_many', params: { maximum: config.farmsPerAccount } }])
 }

@@ -3,7 +3,9 @@ export const journal = {
   title: 'Journal',
   intro: 'Who did what, when and from where. It is written by the deed itself and is never changed.',
   action: {
-    farm: { created: 'Made the farm', factor_asked: 'Asked a second factor of who leads and certifies', factor_not_asked: 'Asked no second factor any more' },
+    farm: { created: 'Made the farm', factor_asked: 'Asked a second factor of who leads and certifies', factor_not_asked: 'Asked no second factor any more', updated: 'Changed the profile of the farm' },
+    start: { updated: 'Passed a step of the first hour over, or put it away' },
+    practice: { put_away: 'Put the practice farm away' },
     block: {
       created: 'Drew a block', updated: 'Changed a block', redrawn: 'Redrew a block', land_set: 'Set the land status of a block',
       ended_by_split: 'Split a block', ended_by_merge: 'Joined a block to others', ended_by_undone: 'Ended a block whose split or join was undone', reopened: 'Undid a split or a join',
@@ -15,7 +17,8 @@ export const journal = {
     ground: { created: 'Drew part of the ground plan', changed: 'Changed part of the ground plan' },
     material: { created: 'Added a material' },
     lot: { received: 'Received a lot', counted: 'Counted a lot' },
-    sprayer: { created: 'Added a sprayer' },
+    sprayer: { created: 'Added a sprayer', updated: 'Changed a sprayer', retired: 'Put a sprayer out of use' },
+    calibration: { created: 'Calibrated a sprayer', withdrawn: 'Took a calibration back' },
     record: {
       draft: 'Began a record', started: 'Started a record', updated: 'Changed an unsigned record', signed: 'Signed a record', amended: 'Amended a record',
       withdrawn: 'Withdrew a record', reviewed: 'Reviewed a record', discarded: 'Discarded an unsigned record',

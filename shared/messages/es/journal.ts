@@ -4,7 +4,9 @@ export const journal: Messages['journal'] = {
   title: 'Diario',
   intro: 'Quién hizo qué, cuándo y desde dónde. Lo escribe el propio acto y nunca se cambia.',
   action: {
-    farm: { created: 'Creó la finca', factor_asked: 'Pidió un segundo factor a quien dirige y certifica', factor_not_asked: 'Dejó de pedir un segundo factor' },
+    farm: { created: 'Creó la finca', factor_asked: 'Pidió un segundo factor a quien dirige y certifica', factor_not_asked: 'Dejó de pedir un segundo factor', updated: 'Cambió los datos de la finca' },
+    start: { updated: 'Saltó un paso de la primera hora o la guardó' },
+    practice: { put_away: 'Guardó la finca de práctica' },
     block: {
       created: 'Dibujó una parcela', updated: 'Cambió una parcela', redrawn: 'Redibujó una parcela', land_set: 'Fijó el estado del terreno de una parcela',
       ended_by_split: 'Dividió una parcela', ended_by_merge: 'Unió una parcela a otras', ended_by_undone: 'Terminó una parcela cuya división o unión se deshizo', reopened: 'Deshizo una división o una unión',
@@ -16,7 +18,8 @@ export const journal: Messages['journal'] = {
     ground: { created: 'Dibujó parte del plano del terreno', changed: 'Cambió parte del plano del terreno' },
     material: { created: 'Añadió un insumo' },
     lot: { received: 'Recibió un lote', counted: 'Contó un lote' },
-    sprayer: { created: 'Añadió un pulverizador' },
+    sprayer: { created: 'Añadió un pulverizador', updated: 'Cambió un pulverizador', retired: 'Puso fuera de uso un pulverizador' },
+    calibration: { created: 'Calibró un pulverizador', withdrawn: 'Retiró una calibración' },
     record: {
       draft: 'Empezó un registro', started: 'Inició un registro', updated: 'Cambió un registro sin firmar', signed: 'Firmó un registro', amended: 'Enmendó un registro',
       withdrawn: 'Retiró un registro', reviewed: 'Revisó un registro', discarded: 'Descartó un registro sin firmar',

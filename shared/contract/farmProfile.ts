@@ -1,0 +1,70 @@
+import { z } from 'zod'
+import { acknowledgedSchema, civilDateSchema, revisionSchema } from './common.ts'
+import { seasonStartSchema } from './seasonStart.ts'
+import { lineText, noteText } from './text.ts'
+
+/** Which figures a farm reads first. */
+export const FARM_UNITS = ['metric', 'us'] as const
+
+/** Public law that a farm may say it works under; named only, nothing is judged by it yet. Titles and citations stand in the messages. */
+export const RULE_SETS = ['usOrganic', 'usProduceSafety', 'usWorkerProtection', 'euOrganic'] as const
+export type RuleSet = (typeof RULE_SETS)[number]
+
+/** The organic certificate as it is printed. */
+export const certificateSchema = z.strictObject({
+  number: lineText(60),
+  /** Who certifies: the body's own name. */
+  body: lineText(120),
+  /** What it covers, in the certificate's words. */
+  scope: noteText(500).nullable().default(null),
+  issuedOn: civilDateSchema.nullable().default(null),
+  expiresOn: civilDateSchema.nullable().default(null),
+})
+export type Certificate = z.output<typeof certificateSchema>
+
+/** Who is asked about the farm, and how. */
+export const contactSchema = z.strictObject({
+  person: lineText(120).nullable().default(null),
+  address: noteText(300).nullable().default(null),
+  phone: lineText(40).nullable().default(null),
+  email: lineText(254).nullable().default(null),
+})
+export type Contact = z.output<typeof contactSchema>
+
+/** A point on the farm, [lon, lat]. */
+export const placeSchema = z.tuple([z.number().min(-180).max(180), z.number().min(-90).max(90)])
+
+/** Days from one calibration of a sprayer to the next. */
+export const calibrationDaysSchema = z.number().int().min(1).max(1830)
+
+const profileFields = {
+  units: z.enum(FARM_UNITS),
+  certificate: certificateSchema.nullable(),
+  contact: contactSchema.nullable(),
+  ruleSets: z.array(z.enum(RULE_SETS)).max(RULE_SETS.length),
+  calibrationDays: calibrationDaysSchema,
+}
+
+/** What is not sent stays as it is. */
+export const updateFarmSchema = z.strictObject({
+  revision: revisionSchema,
+  name: lineText(120),
+  /** IANA time zone of the land. */
+  zone: z.string().max(60),
+  seasonStart: seasonStartSchema,
+  /** Where the map opens while no block is drawn. */
+  home: placeSchema,
+  ...profileFields,
+  acknowledged: acknowledgedSchema,
+}).partial().required({ revision: true })
+export type UpdateFarm = z.output<typeof updateFarmSchema>
+
+/** The profile as it is answered, beside the farm's name and season. */
+export const profileAnswer = {
+  ...profileFields,
+  /** Where somebody set the map to open; null where nobody did. */
+  home: placeSchema.nullable(),
+  /** Made to try things on: nothing on it is a record of a farm. */
+  practice: z.boolean(),
+  revision: z.number().int(),
+}
