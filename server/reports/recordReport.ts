@@ -2,7 +2,7 @@ import type { Writable } from 'node:stream'
 import { formatCheckCode } from '../../shared/evidence/checkCode.ts'
 import { addElement, openCanvas, type Canvas } from './parts/canvas.ts'
 import { drawFirstFoot, drawLaterFoot, footHeights, type PageFoot } from './parts/pageFoot.ts'
-import { startFlow } from './parts/pageFlow.ts'
+import { startFlow, type Flow } from './parts/pageFlow.ts'
 import { drawRunningHead, type RunningHead } from './parts/runningHead.ts'
 import { drawStampHead, type StampHead } from './parts/stampHead.ts'
 import { drawChecks, drawFiles, drawLongWords, drawMix, drawNotices, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
@@ -21,8 +21,17 @@ export function recordReport(data: RecordReportData, stream: Writable): void {
     createdAt: data.printedAt,
     language: data.language,
   }, stream)
-  const foot = footOf(data, { words, code })
+  const foot = recordFoot(data)
   const flow = startFlow(canvas, footHeights(canvas, foot))
+  drawRecord(flow, data)
+  drawFrames(canvas, { head: recordHead(data), foot, pages: flow.pages })
+  canvas.doc.end()
+}
+
+/** Draws the record from where the flow stands. */
+export function drawRecord(flow: Flow, data: RecordReportData): void {
+  const { canvas } = flow
+  const words = openWords(data.language, data.signed.farm.zone)
   const part = addElement(canvas, canvas.root, 'Sect')
   const page: Page = { canvas, flow, part, data, words, figures: recordFigures(data.signed) }
   drawStampHead(flow, part, stampOf(data, words))
@@ -34,8 +43,6 @@ export function recordReport(data: RecordReportData, stream: Writable): void {
   drawReasons(page)
   drawFiles(page)
   drawLongWords(page)
-  drawFrames(canvas, { head: headOf(data, words), foot, pages: flow.pages })
-  canvas.doc.end()
 }
 
 /** Running heads and feet, drawn last because only then the number of pages is known. */
@@ -49,7 +56,9 @@ function drawFrames(canvas: Canvas, { head, foot, pages }: { head: RunningHead; 
   }
 }
 
-function headOf({ signed, state }: RecordReportData, { say }: ReportWords): RunningHead {
+/** What stands at the head of each of its pages. */
+export function recordHead({ signed, state, language }: RecordReportData): RunningHead {
+  const { say } = openWords(language, signed.farm.zone)
   const { number, version, season } = signed.record
   const document = version === 1 ? say('running.record', { number }) : say('running.recordVersion', { number, version })
   return {
@@ -77,7 +86,10 @@ function stampOf({ signed, state }: RecordReportData, words: ReportWords): Stamp
   }
 }
 
-function footOf(data: RecordReportData, { words, code }: { words: ReportWords; code: string }): PageFoot {
+/** What stands at their foot. */
+export function recordFoot(data: RecordReportData): PageFoot {
+  const words = openWords(data.language, data.signed.farm.zone)
+  const code = formatCheckCode(data.digest)
   const { say } = words
   const runBy = data.runBy === 'farm' ? say('foot.runByFarm') : say('foot.runByOther', { name: data.runBy })
   const seq = words.short(String(data.signed.record.seq))

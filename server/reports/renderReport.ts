@@ -9,11 +9,16 @@ import { recordReport } from './recordReport.ts'
 import type { RecordReportData } from './recordReportData.ts'
 import { registerReport } from './registerReport.ts'
 import type { RegisterReportData } from './registerReportData.ts'
+import { seasonReport } from './seasonReport.ts'
+import type { SeasonReportData, SheetsReportData } from './seasonReportData.ts'
+import { sheetsReport } from './sheetsReport.ts'
 
 /** Everything the server can print; a new document is a new kind. */
 export type ReportJob =
   | { kind: 'record'; data: RecordReportData }
   | { kind: 'register'; data: RegisterReportData }
+  | { kind: 'season'; data: SeasonReportData }
+  | { kind: 'sheets'; data: SheetsReportData }
   | { kind: 'farmMap'; data: FarmMapData }
   | { kind: 'blankRecord'; data: BlankRecordData }
 
@@ -27,6 +32,8 @@ export async function renderReport(job: ReportJob, stream: Writable): Promise<vo
   try {
     if (job.kind === 'record') recordReport(job.data, chunks)
     else if (job.kind === 'register') registerReport(job.data, chunks)
+    else if (job.kind === 'season') seasonReport(job.data, chunks)
+    else if (job.kind === 'sheets') sheetsReport(job.data, chunks)
     else if (job.kind === 'farmMap') farmMapReport(job.data, chunks)
     else blankRecordReport(job.data, chunks)
   } catch (error) {

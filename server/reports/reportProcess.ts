@@ -14,7 +14,7 @@ export interface ReportProcess {
 }
 
 /** A volume of a register has up to 150 pages, on a machine that has other work. */
-const PATIENCE: Record<ReportJob['kind'], number> = { record: 1, register: 6, farmMap: 2, blankRecord: 1 }
+const PATIENCE: Record<ReportJob['kind'], number> = { record: 1, register: 6, season: 6, sheets: 6, farmMap: 2, blankRecord: 1 }
 
 interface Options { workers?: number; limitMs?: number; start?: () => ChildProcess }
 interface Order { id: number; job: ReportJob; stream: Readable }

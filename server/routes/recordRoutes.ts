@@ -9,6 +9,7 @@ import { listRecordVersions } from '../services/records/listRecordVersions.ts'
 import { getRecord } from '../services/records/readRecords.ts'
 import { signRecord } from '../services/records/signRecord.ts'
 import { updateRecord } from '../services/records/updateRecord.ts'
+import { noteForOutsider } from '../services/season/takeAway.ts'
 import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE, FARM_PEOPLE } from './roleGroups.ts'
 import { sendReport } from './sendReport.ts'
@@ -52,7 +53,9 @@ export const recordRoutes = [
       const { language = call.language, version } = call.query
       const data = await collectRecordReport(call.services, call.actor, call.params.id, { language, version })
       const name = version === undefined ? data.signed.record.number : `${data.signed.record.number}-version-${version}`
-      await sendReport(call, { kind: 'record', data }, `record-${name}.pdf`)
+      await sendReport(call, { kind: 'record', data }, {
+        fileName: `record-${name}.pdf`, beforeSending: () => noteForOutsider(call.services, call.actor, { format: 'record', subjectId: call.params.id, number: data.signed.record.number }),
+      })
       return 'sent'
     },
   }),

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { farmParamsSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
+import { translate } from '../../shared/messages/translate.ts'
 import { registerRowSchema } from '../../shared/contract/record.ts'
 import { filterQuerySchema, printQuerySchema, registerQuerySchema, registerTotalsSchema, registerVolumesSchema, volumeQuerySchema } from '../../shared/contract/register.ts'
 import { createSavedFilterSchema, savedFilterSchema } from '../../shared/contract/savedFilter.ts'
@@ -8,6 +9,7 @@ import { listRegister } from '../services/register/listRegister.ts'
 import { registerCsv } from '../services/register/registerCsv.ts'
 import { registerTotals } from '../services/register/registerTotals.ts'
 import { forgetFilter, listSavedFilters, saveFilter } from '../services/register/savedFilters.ts'
+import { noteForOutsider } from '../services/season/takeAway.ts'
 import { defineRoute } from './defineRoute.ts'
 import { EVERY_ROLE } from './roleGroups.ts'
 import { sendCsv } from './sendCsv.ts'
@@ -29,7 +31,8 @@ export const registerRoutes = [
     params: farmParamsSchema, query: printQuerySchema, answer: z.null(), contentType: 'text/csv',
     run: async (call) => {
       const { sort, language = call.language, ...filter } = call.query
-      await sendCsv(call, registerCsv(call.services, call.actor, { filter, sort }, language), language)
+      await noteForOutsider(call.services, call.actor, { format: 'registerCsv' })
+      await sendCsv(call, registerCsv(call.services, call.actor, { filter, sort }, language), translate(language, 'registerPrint.file'))
       return 'sent'
     },
   }),
@@ -44,7 +47,10 @@ export const registerRoutes = [
     run: async (call) => {
       const { sort, volume, language = call.language, ...filter } = call.query
       const data = await collectRegisterReport(call.services, call.actor, { filter, sort }, { volume, language })
-      await sendReport(call, { kind: 'register', data }, data.volumes === 1 ? 'register.pdf' : `register-${volume}-of-${data.volumes}.pdf`)
+      await sendReport(call, { kind: 'register', data }, {
+        fileName: data.volumes === 1 ? 'register.pdf' : `register-${volume}-of-${data.volumes}.pdf`,
+        beforeSending: () => noteForOutsider(call.services, call.actor, { format: 'register', volume: data.volumes === 1 ? null : `${volume}/${data.volumes}` }),
+      })
       return 'sent'
     },
   }),

@@ -13,7 +13,7 @@ export const reportRoutes = [
     answer: z.null(), contentType: 'application/pdf',
     run: async (call) => {
       const { services, actor, query: { paper, language = call.language } } = call
-      await sendReport(call, { kind: 'farmMap', data: await collectFarmMap(services, actor, { paper, language }) }, `${translate(language, 'mapPrint.file')}.pdf`)
+      await sendReport(call, { kind: 'farmMap', data: await collectFarmMap(services, actor, { paper, language }) }, { fileName: `${translate(language, 'mapPrint.file')}.pdf` })
       return 'sent'
     },
   }),
@@ -23,7 +23,7 @@ export const reportRoutes = [
     run: async (call) => {
       const { actor: { farmName: name, zone }, services } = call
       const data = { farm: { name, zone }, printedAt: services.clock.now().toISOString(), language: call.query.language ?? call.language }
-      await sendReport(call, { kind: 'blankRecord', data }, 'blank-record.pdf')
+      await sendReport(call, { kind: 'blankRecord', data }, { fileName: 'blank-record.pdf' })
       return 'sent'
     },
   }),

@@ -2,9 +2,11 @@ import { blockRoutes } from './blockRoutes.ts'
 import type { Route } from './defineRoute.ts'
 import { farmRoutes } from './farmRoutes.ts'
 import { fileRoutes } from './fileRoutes.ts'
+import { grantRoutes } from './grantRoutes.ts'
 import { groundRoutes } from './groundRoutes.ts'
 import { growingRoutes } from './growingRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
+import { journalRoutes } from './journalRoutes.ts'
 import { meRoutes } from './meRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { peopleRoutes } from './peopleRoutes.ts'
@@ -14,6 +16,7 @@ import { recordRoutes } from './recordRoutes.ts'
 import { registerRoutes } from './registerRoutes.ts'
 import { reportRoutes } from './reportRoutes.ts'
 import { roundRoutes } from './roundRoutes.ts'
+import { seasonRoutes } from './seasonRoutes.ts'
 import { sessionRoutes } from './sessionRoutes.ts'
 import { sprayerRoutes } from './sprayerRoutes.ts'
 import { startRoutes } from './startRoutes.ts'
@@ -22,4 +25,5 @@ import { startRoutes } from './startRoutes.ts'
 export const ROUTES: Route[] = [
   ...openRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
   ...farmRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
+  ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

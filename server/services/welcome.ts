@@ -12,20 +12,26 @@ const HOURS_VALID = 72
 
 type Parts = Pick<Services, 'clock' | 'database'>
 
-/** Makes a one-time link's secret for an e-mail, and its account if there is none. Only a digest is kept. */
-export async function inviteOwner(services: Parts, email: string): Promise<{ token: string; expiresAt: Date }> {
+/** Makes the secret of an account's one-time link, in the caller's transaction. Only a digest is kept. @param hours how long it is good. */
+export async function issueWelcome({ clock }: Pick<Services, 'clock'>, manager: EntityManager, accountId: string, hours = HOURS_VALID): Promise<{ token: string; expiresAt: Date }> {
   const token = randomBytes(32).toString('base64url')
+  const createdAt = clock.now()
+  const expiresAt = new Date(createdAt.getTime() + hours * 3_600_000)
+  await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, kind: 'welcome', createdAt, expiresAt, usedAt: null })
+  return { token, expiresAt }
+}
+
+/** Makes a one-time link's secret for an e-mail, and its account if there is none. */
+export async function inviteOwner(services: Parts, email: string): Promise<{ token: string; expiresAt: Date }> {
   const createdAt = services.clock.now()
-  const expiresAt = new Date(createdAt.getTime() + HOURS_VALID * 3_600_000)
-  await services.database.inHouse(async (manager) => {
+  return services.database.inHouse(async (manager) => {
     const known = await manager.findOneBy(Account, { email: email.toLowerCase() })
     const accountId = known?.id ?? uuidV7()
     if (!known) {
       await manager.insert(Account, { id: accountId, email: email.toLowerCase(), name: email, passwordHash: null, language: 'en', createdAt, deactivatedAt: null })
     }
-    await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, kind: 'welcome', createdAt, expiresAt, usedAt: null })
+    return issueWelcome(services, manager, accountId)
   })
-  return { token, expiresAt }
 }
 
 /** Whom a link is for. @throws {AppError} `welcome.used_up` for a link that is spent, late or unknown: one text for all. */

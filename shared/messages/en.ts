@@ -18,6 +18,7 @@ import { recordForm } from './en/recordForm.ts'
 import { records } from './en/records.ts'
 import { register } from './en/register.ts'
 import { registerPrint } from './en/registerPrint.ts'
+import { seasonPrint } from './en/seasonPrint.ts'
 import { session } from './en/session.ts'
 import { shapes } from './en/shapes.ts'
 import { sprayers } from './en/sprayers.ts'
@@ -32,7 +33,7 @@ export const screens = {
 }
 
 /** Every word a person reads, in English: the screens, what is printed and what is mailed. The shape of every other language. */
-export const en = { ...screens, mail, mapPrint, pdf, registerPrint }
+export const en = { ...screens, mail, mapPrint, pdf, registerPrint, seasonPrint }
 
 /** The same tree with any words in its leaves. */
 export type WordsLike<Tree> = { [Key in keyof Tree]: Tree[Key] extends string ? string : WordsLike<Tree[Key]> }

@@ -19,6 +19,7 @@ import { recordForm } from './es/recordForm.ts'
 import { records } from './es/records.ts'
 import { register } from './es/register.ts'
 import { registerPrint } from './es/registerPrint.ts'
+import { seasonPrint } from './es/seasonPrint.ts'
 import { session } from './es/session.ts'
 import { shapes } from './es/shapes.ts'
 import { sprayers } from './es/sprayers.ts'
@@ -34,4 +35,4 @@ export const screens: Screens = {
 }
 
 /** Every word a person reads, in Spanish. */
-export const es: Messages = { ...screens, mail, mapPrint, pdf, registerPrint }
+export const es: Messages = { ...screens, mail, mapPrint, pdf, registerPrint, seasonPrint }

@@ -32,6 +32,7 @@ interface World {
   phoneId: string
   sprayerId: string
   calibrationId: string
+  grantId: string
 }
 
 const MEASURED = { on: '2026-06-15', doneBy: 'Ada Rook', measured: { kind: 'plot', volumeL: '1', areaM2: '20' } }
@@ -90,7 +91,8 @@ async function makeWorld(): Promise<World> {
   await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
   await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
   await owner.post(`/api/farms/${farm.id}/shared-phones`).send({ id: ids.phoneId, name: 'Barn phone', password: PASSWORD }).expect(201)
-  return { farm, things, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
+  const { body: grants } = await owner.get(`/api/farms/${farm.id}/grants`).expect(200)
+  return { farm, things, grantId: grants.items[0].id, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
 }
 
 const buildStep = ({ materialId, blockId }: SeededThings) => ({
@@ -155,6 +157,10 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/jobs/:id/move': () => ({ revision: 9, to: '2026-07-15' }),
     'post /farms/:farmId/jobs/:id/skip': () => ({ revision: 9, reason: tag }),
     'post /farms/:farmId/jobs/:id/unskip': () => ({ revision: 9 }),
+    'post /farms/:farmId/grants': () => ({ id: uuidV7(), certifierEmail: `${tag}@review.example`, organisation: 'Oaklode Review', seasons: [2026], endsOn: '2026-12-31', password: PASSWORD }),
+    // Over a revision that nobody saw, so that the grant stands for the routes that come after.
+    'patch /farms/:farmId/grants/:id': () => ({ revision: 9, endsOn: '2026-12-30', password: PASSWORD }),
+    'post /farms/:farmId/grants/:id/end': () => ({ revision: 9, password: PASSWORD }),
   }
   const make = bodies[`${route.method} ${route.path}`]
   if (!make && route.body) throw new Error(`The matrix has no body for ${route.method} ${route.path}`)
@@ -165,12 +171,12 @@ function addressOf(route: Route, world: World, things: SeededThings | null, acto
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
     ['/people', world.personId], ['/shared-phones', world.phoneId],
-    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))
   const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN
   const id = things === null ? unknown : found === undefined ? world.recordId : found[1] ?? UNKNOWN
-  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id)}${route.path.endsWith('/season-sheet') ? '?from=2026-06-01&to=2026-06-30' : ''}`
+  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id).replace(':season', '2026')}${route.path.endsWith('/season-sheet') ? '?from=2026-06-01&to=2026-06-30' : ''}`
 }
 
 let place = 10

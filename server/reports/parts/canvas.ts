@@ -13,6 +13,7 @@ export interface TextStyle { size: number; leading: number; weight: Weight; colo
 /** One PDF being made: the document, its fonts, its structure. */
 export interface Canvas {
   doc: PDFKit.PDFDocument
+  /** That of the page being drawn. */
   frame: Frame
   root: Element
   /** True once a letter had to be drawn as a box. */

@@ -1,4 +1,4 @@
-import { frameOf, PAGE, type Canvas } from './canvas.ts'
+import { frameOf, PAGE, type Canvas, type Frame } from './canvas.ts'
 
 /** The frame of an upright page. */
 export const FRAME = frameOf(PAGE)
@@ -7,24 +7,54 @@ export const FRAME_WIDTH = FRAME.width
 const HEAD_HEIGHT = 26
 
 /** Where the next thing goes; `y` falls down the page. */
-export interface Flow { canvas: Canvas; y: number; footHeights: { first: number; later: number }; pages: number }
+export interface Flow {
+  canvas: Canvas
+  y: number
+  footHeights: { first: number; later: number }
+  pages: number
+  /** The page that bears the first foot. */
+  firstPage: number
+  /** The frame of each page so far. */
+  frames: Frame[]
+}
 
 /** Starts the first page. Foot heights are in points, measured up from the frame's bottom. */
 export function startFlow(canvas: Canvas, footHeights: Flow['footHeights']): Flow {
-  const flow: Flow = { canvas, y: 0, footHeights, pages: 0 }
+  const flow: Flow = { canvas, y: 0, footHeights, pages: 0, firstPage: 1, frames: [] }
   turnPage(flow)
   return flow
 }
 
 export function turnPage(flow: Flow): void {
   flow.canvas.doc.addPage()
+  enterPage(flow)
+}
+
+/** Turns to a page of A4 that stands or lies; those after it are like it until another is asked for. */
+export function turnTo(flow: Flow, { isLying }: { isLying: boolean }): void {
+  const { canvas } = flow
+  const size = isLying ? { width: PAGE.height, height: PAGE.width } : PAGE
+  canvas.doc.options.size = [size.width, size.height]
+  canvas.doc.addPage()
+  canvas.frame = frameOf(size)
+  enterPage(flow)
+}
+
+/** Goes back to a page to draw what could not be drawn before. */
+export function backTo({ canvas, frames }: Flow, page: number): void {
+  canvas.doc.switchToPage(page - 1)
+  canvas.frame = frames[page - 1] ?? canvas.frame
+}
+
+function enterPage(flow: Flow): void {
   flow.pages += 1
+  flow.frames.push(flow.canvas.frame)
   flow.y = flow.canvas.frame.top + HEAD_HEIGHT
 }
 
 /** What is left of the page, points. */
-export function roomLeft({ canvas, pages, footHeights, y }: Flow): number {
-  return canvas.frame.bottom - (pages === 1 ? footHeights.first : footHeights.later) - y
+export function roomLeft({ canvas, pages, firstPage, footHeights, y }: Flow): number {
+  return canvas.frame.bottom - (pages === firstPage ? footHeights.first : footHeights.later) - y
 }
 
 /**

@@ -4,9 +4,9 @@ import { addElement, type Element } from '../parts/canvas.ts'
 import { drawDoubleRule } from '../parts/drawRules.ts'
 import { drawFacts, type Fact } from '../parts/factsList.ts'
 import type { Flow } from '../parts/pageFlow.ts'
+import { drawParagraph } from '../parts/paragraph.ts'
 import { drawText, measureText } from '../parts/setText.ts'
 import { ELDER, STYLES } from '../parts/styles.ts'
-import { drawLines, heightOf, wrapText } from '../parts/wrapText.ts'
 import type { RegisterReportData } from '../registerReportData.ts'
 import type { Say } from './say.ts'
 
@@ -59,11 +59,3 @@ function sumFacts({ totals, rows, language }: RegisterReportData, say: Say): Fac
 }
 
 const fact = (label: string, text: string): Fact => ({ label, spans: [{ text, style: STYLES.body }] })
-
-function drawParagraph(flow: Flow, part: Element, text: string, style: (typeof STYLES)['note' | 'head']): void {
-  const { canvas } = flow
-  const { left, width } = canvas.frame
-  const lines = wrapText(canvas, [{ text, style }], width)
-  addElement(canvas, part, 'P', () => drawLines(canvas, lines, { x: left, y: flow.y, width, leading: style.leading }))
-  flow.y += heightOf(lines, style.leading)
-}

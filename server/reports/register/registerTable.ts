@@ -12,7 +12,7 @@ const bold: TextStyle = { ...regular, weight: 'bold' }
 const MARK = 7.5
 
 /** The register as a table: a row a record, withdrawn ones struck through, unsigned ones said to be so. */
-export function registerTable(canvas: Canvas, { rows, language, farm }: RegisterReportData, say: Say): Table {
+export function registerTable(canvas: Canvas, { rows, language, farm }: Pick<RegisterReportData, 'rows' | 'language' | 'farm'>, say: Say): Table {
   const place = { language, zone: farm.zone }
   return {
     x: canvas.frame.left, leading: ROW_SETTING.leading, padding: ROW_SETTING.padding, showsHeads: true,

@@ -32,6 +32,21 @@ export async function countVolumes(services: Services, actor: FarmActor, place: 
 export async function collectRegisterReport(
   services: Services, actor: FarmActor, place: RegisterPlaceQuery, { volume, language }: { volume: number; language: Language },
 ): Promise<RegisterReportData> {
+  const { rows, volumes } = await collectVolume(services, actor, place, { volume, language })
+  return {
+    farm: { name: actor.farmName, zone: actor.zone },
+    language, volume, volumes, filter: place.filter, sort: place.sort, rows,
+    names: await services.database.inFarm(actor, (manager) => nameFilter(manager, actor, place.filter)),
+    totals: await registerTotals(services, actor, place.filter),
+    printedAt: services.clock.now().toISOString(),
+    checkPage: `${publicAddress(services.config)}/check`.replace(/^https?:\/\//, ''),
+  }
+}
+
+/** The rows of one volume, and how many volumes there are. @throws {AppError} invalid-input for a volume there is not. */
+export async function collectVolume(
+  services: Services, actor: FarmActor, place: RegisterPlaceQuery, { volume, language }: { volume: number; language: Language },
+): Promise<Pick<RegisterReportData, 'rows' | 'volumes'>> {
   const volumes = await cutVolumes(services, actor, place, language)
   const wanted = volumes[volume - 1]
   if (wanted === undefined) throw invalid([{ path: 'volume', code: 'field.too_big', params: { maximum: volumes.length } }])
@@ -40,14 +55,7 @@ export async function collectRegisterReport(
     const read = readRegisterRows<PrintRow>(services, actor, place, { columns: COLUMNS, cursor: wanted.cursor, limit: wanted.records })
     for await (const { state, register_row, digest } of read) rows.push({ ...register_row, state, digest })
   }
-  return {
-    farm: { name: actor.farmName, zone: actor.zone },
-    language, volume, volumes: volumes.length, filter: place.filter, sort: place.sort, rows,
-    names: await services.database.inFarm(actor, (manager) => nameFilter(manager, actor, place.filter)),
-    totals: await registerTotals(services, actor, place.filter),
-    printedAt: services.clock.now().toISOString(),
-    checkPage: `${publicAddress(services.config)}/check`.replace(/^https?:\/\//, ''),
-  }
+  return { rows, volumes: volumes.length }
 }
 
 /** Reads through the records once; at least one volume, if an empty one. */

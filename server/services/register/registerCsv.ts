@@ -14,19 +14,22 @@ const COLUMNS = 'd.state, d.register_row, d.content, d.computed, d.digest'
  * by: what was on this block, when, how much. What belongs to the whole record (its preparations, lots and totals) is repeated on each
  * of its lines and must not be added up over them. Figures are those of the record, with a point and without grouping in every language, to
  * four decimals; instants carry the farm's offset. A cell that a spreadsheet would take for a formula begins with an apostrophe.
+ * @param mayGoOn asked before each page of records is read, and breaks the table off by throwing.
  */
-export function registerCsv(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language): Transform {
+export function registerCsv(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language, mayGoOn?: () => Promise<void>): Transform {
   const table = stringify({
     bom: true, record_delimiter: '\r\n', header: true, escape_formulas: true,
     columns: CSV_COLUMNS.map((key) => ({ key, header: csvHead(key, language) })),
   })
   // What breaks one end off, ends the other with it.
-  pipeline(Readable.from(lines(services, actor, place, language)), table, () => undefined)
+  pipeline(Readable.from(lines(services, actor, place, { language, mayGoOn })), table, () => undefined)
   return table
 }
 
-async function* lines(services: Services, actor: FarmActor, place: RegisterPlaceQuery, language: Language): AsyncGenerator<Record<string, string>> {
-  for await (const row of readRegisterRows<CsvRecord>(services, actor, place, { columns: COLUMNS })) {
+async function* lines(
+  services: Services, actor: FarmActor, place: RegisterPlaceQuery, { language, mayGoOn }: { language: Language; mayGoOn: (() => Promise<void>) | undefined },
+): AsyncGenerator<Record<string, string>> {
+  for await (const row of readRegisterRows<CsvRecord>(services, actor, place, { columns: COLUMNS, mayGoOn })) {
     yield* csvLines(row, { language, zone: actor.zone })
   }
 }

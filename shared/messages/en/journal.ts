@@ -21,7 +21,7 @@ export const journal = {
     calibration: { created: 'Calibrated a sprayer', withdrawn: 'Took a calibration back' },
     record: {
       draft: 'Began a record', started: 'Started a record', updated: 'Changed an unsigned record', signed: 'Signed a record', amended: 'Amended a record',
-      withdrawn: 'Withdrew a record', reviewed: 'Reviewed a record', discarded: 'Discarded an unsigned record',
+      withdrawn: 'Withdrew a record', reviewed: 'Reviewed a record', discarded: 'Discarded an unsigned record', downloaded: 'Downloaded a record',
     },
     file: { added: 'Added a photo or paper', removed: 'Took a photo or paper back' },
     person: {
@@ -34,4 +34,29 @@ export const journal = {
     job: { moved: 'Moved a job', skipped: 'Skipped a job', unskipped: 'Took the skip of a job back' },
     report: { downloaded: 'Downloaded a season report' },
   },
+  kind: {
+    record: 'Records', file: 'Photos and papers', block: 'Blocks', planting: 'Plantings', bed: 'Beds and rows', event: 'Events', site: 'What is kept clear of', ground: 'Ground plan',
+    material: 'Materials', lot: 'Lots', sprayer: 'Sprayers', farm: 'Farm', grant: 'Grants', report: 'Reports',
+  },
+  fact: {
+    reason: '“{value}”', version: 'version {value}', season: 'season {value}', seasons: 'seasons {value}', endsOn: 'until {value}', format: '{value}', volume: 'volume {value}',
+  },
+  format: { pdf: 'report as PDF', sheets: 'sheets as PDF', csv: 'register as CSV', register: 'register as PDF', registerCsv: 'register as CSV', record: 'PDF' },
+  column: { at: 'When', by: 'Who', action: 'What', subject: 'About', facts: 'More', network: 'From', device: 'With' },
+  file: 'journal',
+  filter: { name: 'Choose deeds', person: 'Who', kind: 'What', day: 'Day', everybody: 'everybody', everything: 'everything', clear: 'Show all' },
+  outsider: 'certifier',
+  server: 'the register itself',
+  blanked: 'name blanked',
+  unknownPlace: 'not kept',
+  ofOne: 'Deeds about one thing.',
+  csv: 'As CSV',
+  more: 'Show older deeds',
+  loading: 'Reading the journal',
+  failed: 'The journal could not be read.',
+  none: 'Nothing was done that fits.',
+  noneText: 'Take another day, person or kind.',
+  checksTitle: 'What it shows',
+  checksText: 'Each entry was written in the same step as the deed. The register takes new entries and lets none be changed or removed.',
+  checksFrom: 'Of the address only the network is kept, of the device its browser and system. Entries older than this column, and what the register did by itself, have neither.',
 }

@@ -4,6 +4,13 @@ export const mail = {
   greetingTo: 'Hello {name},',
   foot: 'Sent by the register at {address}. It keeps records and does arithmetic; labels, local codes and licensed people decide.',
   noReply: 'Nobody reads answers to this letter.',
+  grant: {
+    subject: '{farm} opens its register to you: season {seasons}',
+    text: '{by} lets you read the register of {farm} for {organisation}.',
+    readOnly: 'You read and download; nothing you do there changes a record. What you take away is written into the journal of the farm.',
+    farm: 'Farm', seasons: 'Seasons', endsOn: 'Open until', day: '{endsOn}',
+    open: 'Open my farms', accept: 'Set a password and open it',
+  },
   invitation: {
     subject: 'You are invited to {farm}',
     text: '{by} asks you to join {farm} in its register of foliar sprays and soil drenches.',

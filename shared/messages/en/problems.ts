@@ -78,7 +78,7 @@ export const problems = {
   },
   session: {
     wrong: 'E-mail and password do not match.',
-    wrong_password: 'Not signed: the password does not match. Nothing was lost.',
+    wrong_password: 'The password does not match. Nothing was signed or changed, and nothing was lost.',
     wrong_pin: 'Not signed: the PIN does not match. Nothing was lost.',
     code_needed: 'Write the code of your second factor as well.',
     code_wrong: 'This code does not match, or it was used already. Wait for the next one.',
@@ -122,6 +122,14 @@ export const problems = {
   image: {
     pixels: 'This picture has {megapixels} megapixels; at most {maximum} are taken. Choose a smaller one.',
     broken: 'This picture is damaged or cut off. Choose it again, or take it anew.',
+  },
+  grant: {
+    email: 'Give an e-mail address, such as reviewer@office.example.',
+    no_season: 'Choose at least one season.',
+    own_person: 'This person works on the farm and sees all of it already.',
+    past: 'The last day lies in the past.',
+    too_long: 'Give a last day within {years} years. A grant can be given anew.',
+    ended: 'This grant has ended. Give a new one.',
   },
   ground: {
     needs_outline: 'A building has an outline. Draw at least three corners.',

@@ -22,7 +22,7 @@ export const journal: Messages['journal'] = {
     calibration: { created: 'Calibró un pulverizador', withdrawn: 'Retiró una calibración' },
     record: {
       draft: 'Empezó un registro', started: 'Inició un registro', updated: 'Cambió un registro sin firmar', signed: 'Firmó un registro', amended: 'Enmendó un registro',
-      withdrawn: 'Retiró un registro', reviewed: 'Revisó un registro', discarded: 'Descartó un registro sin firmar',
+      withdrawn: 'Retiró un registro', reviewed: 'Revisó un registro', discarded: 'Descartó un registro sin firmar', downloaded: 'Descargó un registro',
     },
     file: { added: 'Añadió una foto o un documento', removed: 'Quitó una foto o un documento' },
     person: {
@@ -35,4 +35,29 @@ export const journal: Messages['journal'] = {
     job: { moved: 'Movió una tarea', skipped: 'Saltó una tarea', unskipped: 'Retiró el salto de una tarea' },
     report: { downloaded: 'Descargó un informe de campaña' },
   },
+  kind: {
+    record: 'Registros', file: 'Fotos y documentos', block: 'Parcelas', planting: 'Plantaciones', bed: 'Bancales e hileras', event: 'Labores', site: 'De lo que se aparta', ground: 'Plano del terreno',
+    material: 'Insumos', lot: 'Lotes', sprayer: 'Pulverizadores', farm: 'Finca', grant: 'Concesiones', report: 'Informes',
+  },
+  fact: {
+    reason: '«{value}»', version: 'versión {value}', season: 'campaña {value}', seasons: 'campañas {value}', endsOn: 'hasta {value}', format: '{value}', volume: 'volumen {value}',
+  },
+  format: { pdf: 'informe en PDF', sheets: 'hojas en PDF', csv: 'libro en CSV', register: 'libro en PDF', registerCsv: 'libro en CSV', record: 'PDF' },
+  column: { at: 'Cuándo', by: 'Quién', action: 'Qué', subject: 'Sobre qué', facts: 'Además', network: 'Desde', device: 'Con' },
+  file: 'diario',
+  filter: { name: 'Elegir actos', person: 'Quién', kind: 'Qué', day: 'Día', everybody: 'todos', everything: 'todo', clear: 'Mostrar todo' },
+  outsider: 'certificadora',
+  server: 'el propio registro',
+  blanked: 'nombre borrado',
+  unknownPlace: 'no se guardó',
+  ofOne: 'Actos sobre una sola cosa.',
+  csv: 'En CSV',
+  more: 'Mostrar actos anteriores',
+  loading: 'Leyendo el diario',
+  failed: 'No se pudo leer el diario.',
+  none: 'No se hizo nada que coincida.',
+  noneText: 'Tome otro día, otra persona u otra clase.',
+  checksTitle: 'Lo que muestra',
+  checksText: 'Cada entrada se escribió en el mismo paso que el acto. El registro admite entradas nuevas y no deja cambiar ni quitar ninguna.',
+  checksFrom: 'De la dirección solo se guarda la red; del aparato, su navegador y su sistema. Las entradas anteriores a esta columna, y lo que el registro hizo por sí solo, no tienen ninguno.',
 }

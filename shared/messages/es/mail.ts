@@ -4,6 +4,13 @@ export const mail = {
   greetingTo: 'Buenos días, {name}:',
   foot: 'Enviado por el registro en {address}. Guarda registros y hace cuentas; deciden las etiquetas, las normas locales y las personas con licencia.',
   noReply: 'Nadie lee las respuestas a este mensaje.',
+  grant: {
+    subject: '{farm} le abre su libro: campaña {seasons}',
+    text: '{by} le permite leer el libro de registros de {farm} para {organisation}.',
+    readOnly: 'Usted lee y descarga; nada de lo que haga allí cambia un registro. Lo que se lleve queda anotado en el diario de la finca.',
+    farm: 'Finca', seasons: 'Campañas', endsOn: 'Abierto hasta', day: '{endsOn}',
+    open: 'Abrir mis fincas', accept: 'Poner una contraseña y abrirlo',
+  },
   invitation: {
     subject: 'Tiene una invitación a {farm}',
     text: '{by} le invita a {farm}, a su registro de aplicaciones foliares y al suelo.',

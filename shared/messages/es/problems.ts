@@ -78,7 +78,7 @@ export const problems = {
   },
   session: {
     wrong: 'El correo y la contraseña no coinciden.',
-    wrong_password: 'Sin firmar: la contraseña no coincide. No se ha perdido nada.',
+    wrong_password: 'La contraseña no coincide. No se ha firmado ni cambiado nada, y no se ha perdido nada.',
     wrong_pin: 'Sin firmar: el PIN no coincide. No se ha perdido nada.',
     code_needed: 'Escriba también el código de su segundo factor.',
     code_wrong: 'Este código no coincide o ya se usó. Espere al siguiente.',
@@ -122,6 +122,14 @@ export const problems = {
   image: {
     pixels: 'Esta imagen tiene {megapixels} megapíxeles; se admiten {maximum} como máximo. Elija una más pequeña.',
     broken: 'Esta imagen está dañada o cortada. Elíjala de nuevo, o haga otra.',
+  },
+  grant: {
+    email: 'Escriba una dirección de correo, como revision@oficina.example.',
+    no_season: 'Elija al menos una campaña.',
+    own_person: 'Esta persona trabaja en la finca y ya la ve entera.',
+    past: 'El último día ya pasó.',
+    too_long: 'Ponga un último día dentro de {years} años. Una concesión puede darse de nuevo.',
+    ended: 'Esta concesión ha terminado. Dé una nueva.',
   },
   ground: {
     needs_outline: 'Un edificio tiene contorno. Dibuje al menos tres esquinas.',

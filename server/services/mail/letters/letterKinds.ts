@@ -1,8 +1,9 @@
 import type { z } from 'zod'
+import { grant } from './grant.ts'
 import { invitation } from './invitation.ts'
 
 /** Every kind of letter, by the name under which it stands in the outbox. */
-export const LETTER_KINDS = { invitation }
+export const LETTER_KINDS = { grant, invitation }
 
 export type LetterName = keyof typeof LETTER_KINDS
 

@@ -1,0 +1,25 @@
+import type { EntityManager } from 'typeorm'
+import { civilDateIn } from '../../../shared/time/civilDate.ts'
+import type { FarmActor } from '../../database/actor.ts'
+import type { Account } from '../../entities/Account.ts'
+import type { Grant } from '../../entities/Grant.ts'
+import { queueLetter } from '../mail/queueLetter.ts'
+import type { Services } from '../services.ts'
+import { issueWelcome } from '../welcome.ts'
+
+/** A reviewer is not at the desk every day: two weeks. */
+const HOURS_TO_ACCEPT = 14 * 24
+
+/** Tells a certifier by letter what is open to them, in the transaction of the grant; who cannot sign in yet gets a link to make a password. */
+export async function tellOfGrant(services: Pick<Services, 'clock' | 'config'>, manager: EntityManager, actor: FarmActor, { account, grant }: { account: Account; grant: Grant }): Promise<void> {
+  const { farmId, farmName, personName, zone } = actor
+  const link = account.passwordHash === null ? await issueWelcome(services, manager, account.id, HOURS_TO_ACCEPT) : null
+  await queueLetter(services, manager, {
+    farmId, kind: 'grant', language: account.language,
+    to: { email: account.email, name: account.passwordHash === null ? null : account.name },
+    params: {
+      farm: farmName, by: personName ?? '', organisation: grant.organisation, seasons: grant.seasons.join(', '), endsOn: grant.endsOn,
+      token: link?.token ?? '', untilOn: link === null ? '' : civilDateIn(zone, link.expiresAt.toISOString()),
+    },
+  })
+}

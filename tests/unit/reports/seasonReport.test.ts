@@ -1,0 +1,70 @@
+import { beforeAll, describe, expect, it } from 'vitest'
+import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
+import { buildSeasonReportData } from '../../support/buildSeasonReportData.ts'
+import { drawReport, readPdf, type ReadPdf } from '../../support/readPdf.ts'
+
+const draw = (overrides: Parameters<typeof buildSeasonReportData>[0] = {}) => drawReport({ kind: 'season', data: buildSeasonReportData(overrides) })
+const plain = (text: string | undefined) => (text ?? '').replaceAll('\u00a0', ' ').replace(/\s+/g, ' ')
+
+describe('a season on paper', () => {
+  let pdf: ReadPdf
+  beforeAll(async () => { pdf = readPdf(await draw()) })
+
+  it('is a sound, tagged file with its letters in it', () => {
+    expect(pdf.check).toContain('No syntax or stream encoding errors')
+    expect(pdf.info).toMatchObject({ Tagged: 'yes', Title: 'Wennick Hollow, Season report 2026' })
+    expect(pdf.fonts.every((line) => / yes yes yes /.test(line))).toBe(true)
+  })
+
+  it('begins with what was counted, up to which entry, and what the code does not show', () => {
+    const cover = plain(pdf.pages[0])
+    for (const words of [
+      'Season report 2026', '1 March 2026 to 28 February 2027, running on 16 June 2026', '141, numbers 2026-0001 to 2026-0142', '1: 2026-0127',
+      '30.45 ha passed over, 9 220 L', '3F9A 71C0 E2B4 8D16 57EE, up to entry 1 842 of the log', 'none is written down here', 'it does not show that what was entered is true',
+    ]) expect(cover).toContain(words)
+  })
+
+  it('sums up by block, and says each share of how many', () => {
+    const summary = plain(pdf.pages[1])
+    for (const words of ['Summary by block', '24 blocks', '1 of 141', '4 of 141', '0 of 141', '61 % of 9 220 L', '88 of 141']) expect(summary).toContain(words)
+    expect(summary.match(/A\d+ Apple/g)).toHaveLength(24)
+  })
+
+  it('lays the register down, and counts its pages through', () => {
+    expect(pdf.pages.length).toBeGreaterThan(4)
+    pdf.pages.forEach((text, index) => {
+      expect(plain(text)).toContain(`page ${index + 1} of ${pdf.pages.length}`)
+      expect(plain(text)).toContain('Check code of the season up to entry 1 842')
+    })
+    expect([...pdf.text.matchAll(/^2026-(\d{4})/gm)].length).toBe(60)
+  })
+
+  it('holds no summary in a later volume, and says which it is', async () => {
+    const { pages } = readPdf(await draw({ volume: 2, volumes: 3, blocks: [], language: 'es' }))
+    expect(plain(pages[0])).toContain('Volumen 2 de 3')
+    expect(pages.join(' ')).not.toContain('Resumen por parcela')
+  })
+
+  it('says that a season without records has none', async () => {
+    const { pages } = readPdf(await draw({ rows: [], blocks: [], head: null, figures: { ...buildSeasonReportData().figures, signed: 0, first: null, last: null, from: null, to: null, withdrawn: [] } }))
+    expect(pages).toHaveLength(1)
+    expect(plain(pages[0])).toContain('No record was signed for this season.')
+  })
+
+  it('is the same bytes for the same season', async () => {
+    expect((await draw()).equals(await draw())).toBe(true)
+  })
+})
+
+describe('the sheets of a season on paper', () => {
+  it('stand one after the other, each with its own code, over one count of pages', async () => {
+    const one = buildRecordReportData()
+    const two = { ...one, digest: 'b'.repeat(64), checkUrl: `${one.checkUrl.slice(0, -20)}${'b'.repeat(20)}` }
+    const { records, ...season } = { ...buildSeasonReportData(), records: [one, two] }
+    const pdf = readPdf(await drawReport({ kind: 'sheets', data: { ...season, records } }))
+    expect(pdf.check).toContain('No syntax or stream encoding errors')
+    expect(pdf.alts.filter((alt) => alt.includes('/check/'))).toHaveLength(2)
+    expect(plain(pdf.text)).toContain('BBBB BBBB BBBB BBBB BBBB')
+    pdf.pages.forEach((text, index) => { expect(plain(text)).toContain(`page ${index + 1} of ${pdf.pages.length}`) })
+  })
+})
