@@ -51,8 +51,9 @@ describe('giving a grant', () => {
   })
 
   it('tells who has an account where to read, and invites who has none, once', async () => {
-    await owner.post(at('/grants')).send(give()).expect(201)
-    const [told] = await house.mailTo(farm.accounts.certifier.email)
+    const known = (await house.makeFarm()).accounts.certifier
+    await owner.post(at('/grants')).send(give({ certifierEmail: known.email })).expect(201)
+    const [told] = await house.mailTo(known.email)
     expect(told?.subject).toContain('season 2026')
     expect(told?.text).toContain('/farms')
     const email = `reviewer-${uuidV7()}@review.example`
@@ -64,7 +65,8 @@ describe('giving a grant', () => {
     const token = /\/welcome\/([\w-]+)/.exec(letters[0]?.text ?? '')?.[1]
     const { default: supertest } = await import('supertest')
     const fresh = supertest.agent(house.app)
-    await fresh.post('/api/welcome').set('X-Requested-With', 'drenchleaf').send({ token, name: 'Mirel Achter', password: 'quite another password' }).expect(200)
+    await fresh.post('/api/welcome').set('X-Requested-With', 'drenchleaf').send({ token, name: 'Mirel Achter', password: PASSWORD }).expect(204)
+    await fresh.post('/api/session').set('X-Requested-With', 'drenchleaf').send({ email, password: PASSWORD }).expect(200)
     expect((await fresh.get('/api/my-farms').expect(200)).body.items).toMatchObject([{ farmId: farm.id, season: 2026, grantedTo: '2027-01-31' }])
     expect((await fresh.get(at('/journal'))).status).toBe(403)
   })

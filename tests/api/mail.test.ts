@@ -22,7 +22,8 @@ beforeEach(() => house.setNow(NOW))
 afterAll(() => house.close())
 
 let turn = 0
-const buildLetter = (changes: Partial<NewLetter> = {}): NewLetter => ({
+type Invitation = Extract<NewLetter, { kind: 'invitation' }>
+const buildLetter = (changes: Partial<Invitation> = {}): Invitation => ({
   farmId: mine.id, kind: 'invitation', params: { farm: 'Long Bank', by: 'Oda Verrill', role: 'manager', token: 'a-secret-of-this-letter', untilOn: '2026-06-19' },
   to: { email: `reader-${(turn += 1)}@farm.example`, name: null }, language: 'en', ...changes,
 })
