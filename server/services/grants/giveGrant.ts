@@ -37,7 +37,7 @@ export async function giveGrant(
     if (made) {
       const { organisation, seasons, endsOn } = stored
       await appendJournal(services, manager, actor, { action: 'grant.given', subjectId: given.id, detail: { name: organisation, seasons, endsOn, accountId: account.id } })
-      await tellOfGrant(services, manager, actor, { account, grant: stored })
+      await tellOfGrant(services, manager, actor, { account, email: certifierEmail, grant: stored })
     }
     return { made, grant: await presentGrant(services, manager, actor, stored) }
   })

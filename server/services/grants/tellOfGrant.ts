@@ -11,12 +11,12 @@ import { issueWelcome } from '../welcome.ts'
 const HOURS_TO_ACCEPT = 14 * 24
 
 /** Tells a certifier by letter what is open to them, in the transaction of the grant; who cannot sign in yet gets a link to make a password. */
-export async function tellOfGrant(services: Pick<Services, 'clock' | 'config'>, manager: EntityManager, actor: FarmActor, { account, grant }: { account: Account; grant: Grant }): Promise<void> {
+export async function tellOfGrant(services: Pick<Services, 'clock' | 'config'>, manager: EntityManager, actor: FarmActor, { account, email, grant }: { account: Account; email: string; grant: Grant }): Promise<void> {
   const { farmId, farmName, personName, zone } = actor
   const link = account.passwordHash === null ? await issueWelcome(services, manager, account.id, HOURS_TO_ACCEPT) : null
   await queueLetter(services, manager, {
     farmId, kind: 'grant', language: account.language,
-    to: { email: account.email, name: account.passwordHash === null ? null : account.name },
+    to: { email, name: account.passwordHash === null ? null : account.name },
     params: {
       farm: farmName, by: personName ?? '', organisation: grant.organisation, seasons: grant.seasons.join(', '), endsOn: grant.endsOn,
       token: link?.token ?? '', untilOn: link === null ? '' : civilDateIn(zone, link.expiresAt.toISOString()),
