@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { canonicalText } from '../../shared/evidence/canonicalText.ts'
 import { sha256Hex } from '../../shared/evidence/sha256Hex.ts'
-import type { Boundary } from '../../shared/geo/geometryTypes.ts'
+import { asBoundary } from '../../shared/geo/asBoundary.ts'
 import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
 import { calibrateSprayer } from '../../shared/mix/calibrateSprayer.ts'
 import { dilute } from '../../shared/mix/dilute.ts'
@@ -43,7 +43,7 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
   area: define(
     { args: '{geometry: Polygon | MultiPolygon}', answer: '{areaM2, perimeterM}' },
     z.strictObject({ geometry: geometrySchema }),
-    ({ geometry }) => measurePolygon(toBoundary(geometry)),
+    ({ geometry }) => measurePolygon(asBoundary(geometry)),
   ),
   convert: define(
     { args: '{value, from, to}', answer: 'number in the unit `to`' },
@@ -101,11 +101,4 @@ export const CALC_FUNCTIONS: Readonly<Record<string, CalcFunction>> = {
 function assertExists(quantity: Quantity): void {
   if (dimensionOf(quantity.unit) !== 'temperature') return
   if (!isWithin(quantity, ABOVE_ZERO)) throw new RangeError(`${quantity.value} ${quantity.unit} lies below absolute zero`)
-}
-
-function toBoundary(geometry: z.output<typeof geometrySchema>): Boundary {
-  const toRing = (ring: number[][]): [number, number][] => ring.map(([lon = 0, lat = 0]) => [lon, lat])
-  return geometry.type === 'Polygon'
-    ? { type: 'Polygon', coordinates: geometry.coordinates.map(toRing) }
-    : { type: 'MultiPolygon', coordinates: geometry.coordinates.map((rings) => rings.map(toRing)) }
 }

@@ -1,6 +1,7 @@
 import { bbox, feature, featureCollection, intersect } from '@turf/turf'
+import { asBoundary } from './asBoundary.ts'
 import { areTooFine } from './edgeMeetings.ts'
-import type { Boundary, Position, Ring } from './geometryTypes.ts'
+import type { Boundary } from './geometryTypes.ts'
 import { measurePolygon } from './measurePolygon.ts'
 
 export interface NamedBoundary { id: string; code: string; geometry: Boundary }
@@ -45,18 +46,11 @@ export function findOverlaps(geometry: Boundary, others: readonly NamedBoundary[
 /** Ground that two valid boundaries share, square metres on the ellipsoid; 0 where they only touch. Not for those that `areTooFine`. */
 export function sharedM2(a: Boundary, b: Boundary): number {
   const shared = intersect(featureCollection([feature(a), feature(b)]))
-  return shared === null ? 0 : measurePolygon(toBoundary(shared.geometry)).areaM2
+  return shared === null ? 0 : measurePolygon(asBoundary(shared.geometry)).areaM2
 }
 
 function doBoxesMeet(a: Boundary, b: Boundary): boolean {
   const [westA, southA, eastA, northA] = bbox(a)
   const [westB, southB, eastB, northB] = bbox(b)
   return westA <= eastB && westB <= eastA && southA <= northB && southB <= northA
-}
-
-function toBoundary(shape: { type: 'Polygon'; coordinates: number[][][] } | { type: 'MultiPolygon'; coordinates: number[][][][] }): Boundary {
-  const toRing = (ring: number[][]): Ring => ring.map(([lon = 0, lat = 0]): Position => [lon, lat])
-  return shape.type === 'Polygon'
-    ? { type: 'Polygon', coordinates: shape.coordinates.map(toRing) }
-    : { type: 'MultiPolygon', coordinates: shape.coordinates.map((rings) => rings.map(toRing)) }
 }

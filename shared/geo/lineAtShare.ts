@@ -2,6 +2,8 @@ import { boundaryParts } from './boundaryParts.ts'
 import type { CornerAt } from './boundaryCorners.ts'
 import { metresPerDegree } from './ellipsoid.ts'
 import type { Boundary, Position } from './geometryTypes.ts'
+import { toFlatRing } from './gridPoints.ts'
+import { signedArea } from './gridRing.ts'
 
 /** Metres along an edge, and away from it into the ground on its left. */
 type EdgePoint = readonly [along: number, away: number]
@@ -50,9 +52,9 @@ function distanceAtShare(rings: readonly EdgePoint[][], share: number): number {
   return (near + far) / 2
 }
 
-/** Area of the ground no farther away than this: outer rings run one way and holes the other, so that their areas add up. */
+/** Twice the area of the ground no farther away than this: outer rings run one way and holes the other, so that their areas add up. */
 function areaWithin(rings: readonly EdgePoint[][], most: number): number {
-  return rings.reduce((sum, ring) => sum + signedArea(clip(ring, most)), 0)
+  return rings.reduce((sum, ring) => sum + signedArea(toFlatRing(clip(ring, most))), 0)
 }
 
 function clip(ring: readonly EdgePoint[], most: number): EdgePoint[] {
@@ -63,11 +65,4 @@ function clip(ring: readonly EdgePoint[], most: number): EdgePoint[] {
     const share = (most - from[1]) / (to[1] - from[1])
     return [...kept, [from[0] + share * (to[0] - from[0]), most]]
   })
-}
-
-function signedArea(ring: readonly EdgePoint[]): number {
-  return ring.reduce((sum, [x, y], index) => {
-    const [nextX, nextY] = ring[(index + 1) % ring.length] ?? [x, y]
-    return sum + (x * nextY - nextX * y) / 2
-  }, 0)
 }

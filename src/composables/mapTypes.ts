@@ -1,4 +1,5 @@
 import type { CornerAt } from '../../shared/geo/boundaryCorners.ts'
+import type { Land } from '../../shared/contract/land.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 
 /** A block as the map draws it; every word is ready to read. */
@@ -13,6 +14,8 @@ export interface MapBlock {
   areaFigure: string
   /** "A3, Long Bank 3, 0.93 ha": said when the block is chosen. */
   spoken: string
+  /** How its land stands, where somebody said so. */
+  land?: Pick<Land, 'status'> | null
   /** Not there yet: a shape of a file that is being imported. */
   isComing?: boolean
 }

@@ -1,33 +1,22 @@
-import { randomUUID } from 'node:crypto'
-import type { BrowserContext, Locator, Page } from '@playwright/test'
+import type { Locator, Page } from '@playwright/test'
 import { blockSchema, type Block, type Boundary } from '../../shared/contract/block.ts'
 import { readText } from '../support/readPdf.ts'
 import { choose, field, segment } from './support/controls.ts'
-import { farmApi, OURS, type FarmApi } from './support/demoFarm.ts'
-import { openNewFarm } from './support/importForm.ts'
+import { OURS } from './support/demoFarm.ts'
+import { FIELD, makeField, openOwnFarm, TWICE } from './support/ownFarm.ts'
 import { expect, test } from './support/test.ts'
 import { listBlocks, makeSignedRecord, makeThings, square } from './support/things.ts'
 import { say } from './support/words.ts'
 
-const WEST = -123.3
-const SOUTH = 44.6
-const SIZE = 0.001
-
-/** A farm of its own, whose blocks nobody else draws on. */
-async function openFarm(context: BrowserContext): Promise<FarmApi> {
-  return farmApi(context.request, await openNewFarm(context))
-}
-const makeField = (farm: FarmApi, code: string, geometry: Boundary): Promise<Block> =>
-  farm.post('/blocks', { id: randomUUID(), code, name: `Field ${code}`, geometry }, blockSchema)
 const button = (page: Page, words: string): Locator => page.getByRole('button', { name: words, exact: true }).filter({ visible: true })
 const cornersOf = ({ geometry }: Block): string[] => (geometry.type === 'Polygon' ? geometry.coordinates : geometry.coordinates.flat()).flat().map(String)
 
 test('an outline drawn a hand short of its neighbour takes the neighbour’s corners, and no sliver stays', async ({ page, context }) => {
-  const farm = await openFarm(context)
-  const there = await makeField(farm, 'W', square({ west: WEST, south: SOUTH, size: SIZE }))
+  const farm = await openOwnFarm(context)
+  const there = await makeField(farm, 'W')
   // 0.7 m short in the west, and 0.5 m and 0.3 m off along it.
   const short: Boundary = { type: 'Polygon', coordinates: [[
-    [WEST + SIZE + 0.000009, SOUTH + 0.0000045], [WEST + 2 * SIZE, SOUTH], [WEST + 2 * SIZE, SOUTH + SIZE], [WEST + SIZE + 0.000009, SOUTH + SIZE - 0.0000027], [WEST + SIZE + 0.000009, SOUTH + 0.0000045],
+    [FIELD.west + FIELD.size + 0.000009, FIELD.south + 0.0000045], [FIELD.west + 2 * FIELD.size, FIELD.south], [FIELD.west + 2 * FIELD.size, FIELD.south + FIELD.size], [FIELD.west + FIELD.size + 0.000009, FIELD.south + FIELD.size - 0.0000027], [FIELD.west + FIELD.size + 0.000009, FIELD.south + 0.0000045],
   ]] }
   const block = await makeField(farm, 'E', short)
   await page.goto(`/blocks/${block.id}/shape?tool=snap`)
@@ -47,8 +36,8 @@ test('an outline drawn a hand short of its neighbour takes the neighbour’s cor
 })
 
 test('a block is split by a share, undone, split between two corners, and merged back', async ({ page, context }) => {
-  const farm = await openFarm(context)
-  const block = await makeField(farm, 'S', square({ west: WEST, south: SOUTH, size: SIZE }))
+  const farm = await openOwnFarm(context)
+  const block = await makeField(farm, 'S')
   const parts = async (): Promise<Block[]> => (await listBlocks(farm)).filter(({ fromIds }) => fromIds.includes(block.id))
   await page.goto(`/blocks/${block.id}/split`)
   await segment(page, say('shapes.split.byShare'))
@@ -85,9 +74,9 @@ test('a block is split by a share, undone, split between two corners, and merged
 })
 
 test('a record signed before the boundary changed still prints the old one', async ({ page, context }) => {
-  const farm = await openFarm(context)
+  const farm = await openOwnFarm(context)
   const things = await makeThings(farm)
-  const block = await makeField(farm, 'R', square({ west: WEST, south: SOUTH, size: SIZE }))
+  const block = await makeField(farm, 'R')
   const record = await makeSignedRecord(farm, { ...things, block })
   const print = async (id: string): Promise<string> => {
     const answer = await context.request.get(`/api/farms/${farm.farmId}/records/${id}/pdf`, { headers: OURS })
@@ -100,8 +89,7 @@ test('a record signed before the boundary changed still prints the old one', asy
   expect(before[1]).toBe('0.88')
 
   await page.goto(`/blocks/${block.id}/shape?tool=points`)
-  const twice = [[SOUTH, WEST], [SOUTH, WEST + 2 * SIZE], [SOUTH + SIZE, WEST + 2 * SIZE], [SOUTH + SIZE, WEST]]
-  await field(page, say('blocks.points.label')).fill(twice.map(([lat = 0, lon = 0]) => `${lat.toFixed(7)}, ${lon.toFixed(7)}`).join('\n'))
+  await field(page, say('blocks.points.label')).fill(TWICE)
   await button(page, say('shapes.reshape.save')).click()
   await expect(page).toHaveURL(new RegExp(`/blocks/${block.id}$`))
   await button(page, '2 boundaries').click()

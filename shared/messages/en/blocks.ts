@@ -35,6 +35,10 @@ export const blocks = {
     closing: 'edge to come',
     crossing: 'edges that cross',
     keepClear: 'keep clear',
+    foliar: 'foliar, last 3 days',
+    drench: 'drench, last 3 days',
+    transition: 'in transition',
+    uncertified: 'not certified',
   },
   list: {
     caption: 'Blocks of the farm, with their areas as drawn',

@@ -112,6 +112,8 @@ export const shapes = {
     banner: '{code}: {count} pieces | {code}: {count} pieces',
     bannerNone: '{code}: draw the line',
     clear: 'Clear the line',
+    add: 'Add point',
+    lineFirst: 'Split: draw the line first',
   },
   merge: {
     title: 'Merge blocks',

@@ -35,6 +35,10 @@ export const blocks = {
     closing: 'lado por venir',
     crossing: 'lados que se cruzan',
     keepClear: 'no acercarse',
+    foliar: 'foliar, últimos 3 días',
+    drench: 'al suelo, últimos 3 días',
+    transition: 'en transición',
+    uncertified: 'sin certificar',
   },
   list: {
     caption: 'Parcelas de la finca, con su superficie según el dibujo',

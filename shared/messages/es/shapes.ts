@@ -111,6 +111,8 @@ export const shapes = {
     saved: '{code} se ha dividido en {codes}.',
     banner: '{code}: {count} trozos | {code}: {count} trozos',
     bannerNone: '{code}: trace la línea',
+    add: 'Añadir punto',
+    lineFirst: 'Dividir: dibuje antes la línea',
     clear: 'Borrar la línea',
   },
   merge: {

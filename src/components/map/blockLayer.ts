@@ -4,13 +4,16 @@ import { polygonsOf, toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
 import { createManyLayer } from './manyLayer.ts'
 import type { MapBlock } from '../../composables/mapTypes.ts'
+import type { MapMarks } from '../../composables/useMapMarks.ts'
 
 /** Handles on more corners than this would hide the outline. */
 const MOST_HANDLES = 60
 
 /** The outlines of the blocks: casing, ground and line; the chosen one last and heavier. */
 export interface BlockLayer {
-  show(blocks: readonly MapBlock[], chosenId: string | null): void
+  show(blocks: readonly MapBlock[], chosenId: string | null, marks: MapMarks): void
+  /** Whether pictures of the ground lie under the blocks and are to be seen through them. */
+  setImagery(isThere: boolean): void
 }
 
 /**
@@ -21,23 +24,24 @@ export function createBlockLayer(map: LeafletMap, renderer: Renderer, onChoose: 
   const group = layerGroup().addTo(map)
   const many = createManyLayer(map, onChoose)
   return {
-    show(blocks, chosenId) {
+    setImagery: many.setImagery,
+    show(blocks, chosenId, marks) {
       group.clearLayers()
       if (areMany(blocks)) {
         many.show(blocks)
-        for (const block of blocks) if (block.id === chosenId) addBlock(group, renderer, block, true).on('click', () => onChoose(block.id))
+        for (const block of blocks) if (block.id === chosenId) addBlock(group, renderer, { block, isChosen: true, marks }).on('click', () => onChoose(block.id))
         return
       }
       many.clear()
       const chosenLast = [...blocks].sort((a, b) => Number(a.id === chosenId) - Number(b.id === chosenId))
       for (const block of chosenLast) {
-        addBlock(group, renderer, block, block.id === chosenId).on('click', () => onChoose(block.id))
+        addBlock(group, renderer, { block, isChosen: block.id === chosenId, marks }).on('click', () => onChoose(block.id))
       }
     },
   }
 }
 
-function addBlock(group: LayerGroup, renderer: Renderer, block: MapBlock, isChosen: boolean) {
+function addBlock(group: LayerGroup, renderer: Renderer, { block, isChosen, marks }: { block: MapBlock; isChosen: boolean; marks: MapMarks }) {
   const rings: LatLngTuple[][][] = polygonsOf(block.geometry).map((polygonRings) =>
     polygonRings.map((ring) => ring.map(toLatLng)),
   )
@@ -46,8 +50,22 @@ function addBlock(group: LayerGroup, renderer: Renderer, block: MapBlock, isChos
   group.addLayer(polygon(rings, { ...common, className: `map-case${chosen}`, interactive: false, fill: false }))
   const line = polygon(rings, { ...common, className: `map-block${block.isComing === true ? ' is-coming' : ''}${chosen}`, fill: true })
   group.addLayer(line)
+  addMarks(group, renderer, { block, rings, marks })
   if (isChosen) addHandles(group, rings)
   return line
+}
+
+/** The hatches of the last days' work over the ground, and the line inside an outline that is not certified. */
+function addMarks(group: LayerGroup, renderer: Renderer, { block, rings, marks }: { block: MapBlock; rings: LatLngTuple[][][]; marks: MapMarks }): void {
+  const common = { renderer, smoothFactor: 0.2, interactive: false }
+  const work = marks.work.get(block.id)
+  for (const kind of ['drench', 'foliar'] as const) {
+    if (work?.[kind] === true) group.addLayer(polygon(rings, { ...common, className: 'map-work', stroke: false, fillColor: `url(#map-${kind})`, fillOpacity: 1 }))
+  }
+  const inner = marks.inner.get(block.id)
+  if (inner === undefined) return
+  const lines = polygonsOf(inner.line).map((polygonRings) => polygonRings.map((ring) => ring.map(toLatLng)))
+  group.addLayer(polygon(lines, { ...common, className: `map-inner is-${inner.status}`, fill: false }))
 }
 
 function addHandles(group: LayerGroup, rings: LatLngTuple[][][]): void {

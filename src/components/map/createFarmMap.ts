@@ -7,6 +7,7 @@ import { createGroundView } from './groundView.ts'
 import { createLabelLayer } from './labelLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
+import type { MapMarks } from '../../composables/useMapMarks.ts'
 import type { MapGround } from '../../composables/mapGround.ts'
 import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
 
@@ -21,7 +22,7 @@ export interface FarmMapEvents extends EditEvents {
 
 /** The map of a farm: with its layers, the only modules that know Leaflet. */
 export interface FarmMap {
-  showBlocks(blocks: readonly MapBlock[], chosenId: string | null): void
+  showBlocks(blocks: readonly MapBlock[], chosenId: string | null, marks: MapMarks): void
   showDraft(draft: MapDraft | null): void
   showEdit(edit: MapEdit | null): void
   setDrawing(isDrawing: boolean): void
@@ -79,9 +80,9 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
   })
 
   return {
-    showBlocks(list, chosenId) {
+    showBlocks(list, chosenId, marks) {
       shown = { blocks: list, chosenId }
-      blocks.show(list, chosenId)
+      blocks.show(list, chosenId, marks)
       labels.show(list, chosenId)
       ground.setBlocks(list)
     },
@@ -94,6 +95,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
     showGround: ground.show,
     setImagery(imagery) {
       tiles?.remove()
+      blocks.setImagery(imagery !== null)
       tiles = imagery === null ? null : tileLayer(imagery.url, { maxZoom: MOST_ZOOM, maxNativeZoom: imagery.maxZoom }).addTo(map)
     },
     setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),

@@ -1,0 +1,45 @@
+import { computed, shallowRef, watch, type ComputedRef } from 'vue'
+import type { Boundary } from '../../shared/geo/geometryTypes.ts'
+import { useSession } from '../stores/session.ts'
+import { recentWork, type RecentWork } from './recentWork.ts'
+import type { MapBlock } from './mapTypes.ts'
+import { useClock } from './useClock.ts'
+import { useRecords } from './useRecords.ts'
+
+/** What the map draws on the blocks: the work of the last days, and a line inside the outline of those that are not certified. */
+export interface MapMarks {
+  work: ReadonlyMap<string, RecentWork>
+  inner: ReadonlyMap<string, { line: Boundary; status: 'transition' | 'uncertified' }>
+}
+
+/** More records than this of three days would not be told apart on a map. */
+const MOST_RECORDS = 100
+/** How far inside the outline the line lies. */
+const INSIDE_M = 5
+
+/** @param isWanted whether there are blocks to be marked at all. */
+export function useMapMarks(blocks: () => readonly MapBlock[], isWanted: () => boolean): ComputedRef<MapMarks> {
+  const session = useSession()
+  const { time } = useClock()
+  const records = useRecords(() => (isWanted() ? session.farmId : ''), { limit: MOST_RECORDS })
+  const inner = shallowRef<MapMarks['inner']>(new Map())
+  const marked = computed(() => blocks().flatMap((block) => (block.land?.status === 'transition' || block.land?.status === 'uncertified' ? [{ ...block, status: block.land.status }] : [])))
+
+  watch(marked, async (list) => {
+    if (list.length === 0) {
+      inner.value = new Map()
+      return
+    }
+    const { insetBoundary } = await import('../../shared/geo/insetBoundary.ts')
+    if (marked.value !== list) return
+    inner.value = new Map(list.flatMap(({ id, geometry, status }) => {
+      const line = insetBoundary(geometry, INSIDE_M)
+      return line === null ? [] : [[id, { line, status }] as const]
+    }))
+  }, { immediate: true })
+
+  const work = computed(() => recentWork(records.data.value?.pages[0]?.items ?? [], time.value))
+  return computed(() => ({ work: work.value, inner: inner.value }))
+}
+
+export const NO_MARKS: MapMarks = { work: new Map(), inner: new Map() }
