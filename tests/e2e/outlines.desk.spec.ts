@@ -3,9 +3,9 @@ import { blockSchema, type Block, type Boundary } from '../../shared/contract/bl
 import { readText } from '../support/readPdf.ts'
 import { choose, field, segment } from './support/controls.ts'
 import { OURS } from './support/demoFarm.ts'
-import { FIELD, makeField, openOwnFarm, TWICE } from './support/ownFarm.ts'
+import { makeField, openOwnFarm, ownPlace, twiceAsWide } from './support/ownFarm.ts'
 import { expect, test } from './support/test.ts'
-import { listBlocks, makeSignedRecord, makeThings, square } from './support/things.ts'
+import { listBlocks, makeSignedRecord, makeThings } from './support/things.ts'
 import { say } from './support/words.ts'
 
 const button = (page: Page, words: string): Locator => page.getByRole('button', { name: words, exact: true }).filter({ visible: true })
@@ -13,10 +13,12 @@ const cornersOf = ({ geometry }: Block): string[] => (geometry.type === 'Polygon
 
 test('an outline drawn a hand short of its neighbour takes the neighbour’s corners, and no sliver stays', async ({ page, context }) => {
   const farm = await openOwnFarm(context)
-  const there = await makeField(farm, 'W')
+  const place = ownPlace()
+  const { west, south, size } = place
+  const there = await makeField(farm, 'W', place)
   // 0.7 m short in the west, and 0.5 m and 0.3 m off along it.
   const short: Boundary = { type: 'Polygon', coordinates: [[
-    [FIELD.west + FIELD.size + 0.000009, FIELD.south + 0.0000045], [FIELD.west + 2 * FIELD.size, FIELD.south], [FIELD.west + 2 * FIELD.size, FIELD.south + FIELD.size], [FIELD.west + FIELD.size + 0.000009, FIELD.south + FIELD.size - 0.0000027], [FIELD.west + FIELD.size + 0.000009, FIELD.south + 0.0000045],
+    [west + size + 0.000009, south + 0.0000045], [west + 2 * size, south], [west + 2 * size, south + size], [west + size + 0.000009, south + size - 0.0000027], [west + size + 0.000009, south + 0.0000045],
   ]] }
   const block = await makeField(farm, 'E', short)
   await page.goto(`/blocks/${block.id}/shape?tool=snap`)
@@ -37,7 +39,8 @@ test('an outline drawn a hand short of its neighbour takes the neighbour’s cor
 
 test('a block is split by a share, undone, split between two corners, and merged back', async ({ page, context }) => {
   const farm = await openOwnFarm(context)
-  const block = await makeField(farm, 'S')
+  const place = ownPlace()
+  const block = await makeField(farm, 'S', place)
   const parts = async (): Promise<Block[]> => (await listBlocks(farm)).filter(({ fromIds }) => fromIds.includes(block.id))
   await page.goto(`/blocks/${block.id}/split`)
   await segment(page, say('shapes.split.byShare'))
@@ -68,15 +71,16 @@ test('a block is split by a share, undone, split between two corners, and merged
   await page.getByRole('checkbox', { name: new RegExp(`^${second?.code ?? ''},`) }).check()
   await button(page, say('shapes.merge.save')).click()
   await expect(page).toHaveURL(/\/blocks\/[0-9a-f-]{36}$/)
-  const [merged] = await listBlocks(farm)
+  const merged = (await listBlocks(farm)).find(({ fromIds }) => fromIds.includes(first?.id ?? ''))
   expect(merged?.areaM2).toBe(block.areaM2)
   expect(new Set(merged && cornersOf(merged))).toEqual(new Set(cornersOf(block)))
 })
 
 test('a record signed before the boundary changed still prints the old one', async ({ page, context }) => {
   const farm = await openOwnFarm(context)
+  const place = ownPlace()
   const things = await makeThings(farm)
-  const block = await makeField(farm, 'R')
+  const block = await makeField(farm, 'R', place)
   const record = await makeSignedRecord(farm, { ...things, block })
   const print = async (id: string): Promise<string> => {
     const answer = await context.request.get(`/api/farms/${farm.farmId}/records/${id}/pdf`, { headers: OURS })
@@ -89,7 +93,7 @@ test('a record signed before the boundary changed still prints the old one', asy
   expect(before[1]).toBe('0.88')
 
   await page.goto(`/blocks/${block.id}/shape?tool=points`)
-  await field(page, say('blocks.points.label')).fill(TWICE)
+  await field(page, say('blocks.points.label')).fill(twiceAsWide(place))
   await button(page, say('shapes.reshape.save')).click()
   await expect(page).toHaveURL(new RegExp(`/blocks/${block.id}$`))
   await button(page, '2 boundaries').click()
