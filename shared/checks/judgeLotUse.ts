@@ -1,15 +1,8 @@
 import type { Check } from '../contract/record.ts'
-import { civilDateIn } from '../time/civilDate.ts'
 import { buildCheck, words } from './buildCheck.ts'
+import { dayOfUse } from './dayOfUse.ts'
 import { labelSource } from './labelSource.ts'
 import type { FactLot, FactMaterial, RecordFacts } from './recordFacts.ts'
-
-/** The civil day of use: of the first start written, else of the judgement. */
-function dayOfUse({ content, zone, now }: RecordFacts): string {
-  const starts = content.lines.map((line) => line.startedAt).filter((start) => start !== null)
-  const first = starts.reduce<string | null>((early, start) => (early === null || Date.parse(start) < Date.parse(early) ? start : early), null)
-  return civilDateIn(zone, first ?? now)
-}
 
 /**
  * Whether a lot is used by its date. Past it, a bought lot of a labelled material is a stop, since the label is the law; any other

@@ -1,6 +1,7 @@
 import type { Check } from '../contract/record.ts'
 import { asUsed } from './asUsed.ts'
 import { buildCheck, words } from './buildCheck.ts'
+import { judgeCalibration } from './judgeCalibration.ts'
 import { judgeCounts } from './judgeCounts.ts'
 import { judgeDeltaT } from './judgeDeltaT.ts'
 import { judgePreHarvest, judgeReEntry } from './judgeHolds.ts'
@@ -66,6 +67,7 @@ export function recordChecks(facts: RecordFacts): Check[] {
     judgePreHarvest(facts, materials),
     judgeWind(facts.content),
     judgeDeltaT(facts.content),
+    judgeCalibration(facts),
     ...judgeCounts(facts),
     ...checksOfLots(facts),
   ]

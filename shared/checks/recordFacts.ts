@@ -1,3 +1,4 @@
+import type { CalibrationInForce } from '../contract/calibration.ts'
 import type { Lot, Material } from '../contract/input.ts'
 import type { KnownAmount } from '../contract/quantity.ts'
 import type { Method } from '../contract/recordContent.ts'
@@ -33,6 +34,8 @@ export interface RecordFacts {
   materials: readonly FactMaterial[]
   /** Each with what is left before this record takes its share. */
   lots: readonly FactLot[]
+  /** What it is sprayed with, and the calibration that was in force on that day. */
+  sprayer: { code: string; calibration: Pick<CalibrationInForce, 'on' | 'dueOn' | 'rateLPerHa'> | null } | null
   /** IANA time zone of the land. */
   zone: string
   /** Instant of the judgement, RFC 3339; the day of use where no start is written. */

@@ -3,6 +3,7 @@ import { bedSchema } from '../../shared/contract/bed.ts'
 import { blockSchema } from '../../shared/contract/block.ts'
 import { blocksChangedSchema } from '../../shared/contract/blockChanges.ts'
 import { blocksImportedSchema } from '../../shared/contract/blockImport.ts'
+import { calibrationSchema } from '../../shared/contract/calibration.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
 import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
@@ -11,6 +12,7 @@ import { plantingSchema } from '../../shared/contract/planting.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
 import { signManyAnswerSchema } from '../../shared/contract/recordChanges.ts'
 import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
+import { startSchema } from '../../shared/contract/start.ts'
 import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
 
@@ -43,6 +45,14 @@ const DOORS: Record<CommandKind, Door> = {
   'lot.create': { method: 'post', path: (farmId) => `/farms/${farmId}/lots`, answer: lotSchema },
   'lot.count': { method: 'post', path: (farmId, id) => `/farms/${farmId}/lots/${id}/count`, answer: lotSchema },
   'sprayer.create': { method: 'post', path: (farmId) => `/farms/${farmId}/sprayers`, answer: sprayerSchema },
+  'sprayer.update': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/sprayers/${id}`, answer: sprayerSchema },
+  'sprayer.retire': { method: 'post', path: (farmId, id) => `/farms/${farmId}/sprayers/${id}/retire`, answer: sprayerSchema },
+  'calibration.create': { method: 'post', path: (farmId) => `/farms/${farmId}/calibrations`, answer: calibrationSchema },
+  'calibration.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/calibrations/${id}/withdraw`, answer: calibrationSchema },
+  'farm.update': { method: 'patch', path: (farmId) => `/farms/${farmId}`, answer: farmSchema },
+  'start.update': { method: 'patch', path: (farmId) => `/farms/${farmId}/start`, answer: startSchema },
+  'practice.make': { method: 'post', path: () => '/practice-farm', answer: farmSchema },
+  'practice.away': { method: 'del', path: () => '/practice-farm', answer: z.undefined() },
   'record.create': { method: 'post', path: (farmId) => `/farms/${farmId}/records`, answer: recordSchema },
   'record.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/records/${id}`, answer: recordSchema },
   'record.sign': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/sign`, answer: recordSchema },

@@ -3,7 +3,9 @@ import type { Bed, createBedSchema, updateBedSchema } from '../../shared/contrac
 import type { Block, createBlockSchema } from '../../shared/contract/block.ts'
 import type { BlocksChanged, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema } from '../../shared/contract/blockChanges.ts'
 import type { BlocksImported, importBlocksSchema } from '../../shared/contract/blockImport.ts'
-import type { createFarmSchema, createSprayerSchema, Farm, Sprayer } from '../../shared/contract/farm.ts'
+import type { Calibration, createCalibrationSchema, retireSprayerSchema, withdrawCalibrationSchema } from '../../shared/contract/calibration.ts'
+import type { createFarmSchema, createSprayerSchema, Farm, Sprayer, updateSprayerSchema } from '../../shared/contract/farm.ts'
+import type { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
 import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
 import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
@@ -14,6 +16,7 @@ import type {
   amendRecordSchema, createRecordSchema, discardRecordSchema, reviewRecordSchema, SignManyAnswer, signManySchema, signRecordSchema, updateRecordSchema, withdrawRecordSchema,
 } from '../../shared/contract/recordChanges.ts'
 import type { createSavedFilterSchema, SavedFilter } from '../../shared/contract/savedFilter.ts'
+import type { Start, updateStartSchema } from '../../shared/contract/start.ts'
 
 /** What each kind of command carries. */
 export interface CommandBodies {
@@ -39,6 +42,14 @@ export interface CommandBodies {
   'lot.create': z.input<typeof createLotSchema>
   'lot.count': z.input<typeof countLotSchema>
   'sprayer.create': z.input<typeof createSprayerSchema>
+  'sprayer.update': z.input<typeof updateSprayerSchema>
+  'sprayer.retire': z.input<typeof retireSprayerSchema>
+  'calibration.create': z.input<typeof createCalibrationSchema>
+  'calibration.withdraw': z.input<typeof withdrawCalibrationSchema>
+  'farm.update': z.input<typeof updateFarmSchema>
+  'start.update': z.input<typeof updateStartSchema>
+  'practice.make': { id: string }
+  'practice.away': Record<string, never>
   'record.create': z.input<typeof createRecordSchema>
   'record.update': z.input<typeof updateRecordSchema>
   'record.sign': z.input<typeof signRecordSchema>
@@ -75,6 +86,14 @@ export interface CommandAnswers {
   'lot.create': Lot
   'lot.count': Lot
   'sprayer.create': Sprayer
+  'sprayer.update': Sprayer
+  'sprayer.retire': Sprayer
+  'calibration.create': Calibration
+  'calibration.withdraw': Calibration
+  'farm.update': Farm
+  'start.update': Start
+  'practice.make': Farm
+  'practice.away': undefined
   'record.create': ApplicationRecord
   'record.update': ApplicationRecord
   'record.sign': ApplicationRecord

@@ -32,6 +32,7 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
       blocks: stock.value.blocks,
       materials: stock.value.materials,
       lots: stock.value.lots,
+      sprayer: stock.value.sprayers.find(({ id }) => id === draft.value.sprayerId) ?? null,
       zone,
       now: time.value.toISOString(),
     })

@@ -88,7 +88,7 @@ function buildTemplate({ blocks, materials, lots, people }: SeedGround, zone: st
     notes: pick(NOTES, turn + 3),
     doneById: person.id,
   })
-  const stock = { blocks: onBlocks, materials: mixed, lots: lots.filter(({ id }) => content.components.some(({ lotId }) => lotId === id)), sprayer: null }
+  const stock = { blocks: onBlocks, materials: mixed, lots: lots.filter(({ id }) => content.components.some(({ lotId }) => lotId === id)), sprayer: null, calibration: null }
   const { sheet, computed, checks } = judgeRecord(content, stock, zone, new Date(END))
   const row = registerRow({ content, sheet, checks, ...stock, doneBy: person.name, signed: null })
   const record = { state: 'started' as const, content, computed, doneById: person.id, registerRow: row }

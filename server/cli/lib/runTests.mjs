@@ -64,7 +64,7 @@ async function runBrowser(context, database) {
   const { folder, lifecycle } = context
   try {
     const { url, password } = await startDemoServer({ folder, database, lifecycle })
-    return await runPlaywright({ ...context, env: { ...context.env, E2E_URL: url, E2E_PASSWORD: password } })
+    return await runPlaywright({ ...context, env: { ...context.env, E2E_URL: url, E2E_PASSWORD: password, E2E_DATABASE_URL: database.databaseUrl, E2E_DATABASE_OWNER_URL: database.databaseOwnerUrl } })
   } catch (error) {
     if (lifecycle.stopping) throw error
     return [{ name: 'e2e', counts: { passed: 0, failed: 1, skipped: 0 }, output: String(error) }]

@@ -22,6 +22,7 @@ export function judgeRecord(content: RecordContent, ground: RecordGround, zone: 
     blocks: ground.blocks,
     materials: ground.materials,
     lots: ground.lots.map((lot) => presentLot(lot, '')),
+    sprayer: ground.sprayer && { code: ground.sprayer.code, calibration: ground.calibration },
     zone,
     now: now.toISOString(),
   })

@@ -1,11 +1,15 @@
 import { In, type EntityManager } from 'typeorm'
+import type { CalibrationInForce } from '../../../shared/contract/calibration.ts'
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
+import { firstStart } from '../../../shared/records/registerRow.ts'
+import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
 import { Lot } from '../../entities/Lot.ts'
 import { Material } from '../../entities/Material.ts'
 import { Sprayer } from '../../entities/Sprayer.ts'
 import { invalid, type FieldError } from '../../errors.ts'
+import { listInForce } from '../farms/calibrationInForce.ts'
 
 /** What a record rests on, as it stands now; each in the order of the record. */
 export interface RecordGround {
@@ -13,6 +17,8 @@ export interface RecordGround {
   materials: Material[]
   lots: Lot[]
   sprayer: Sprayer | null
+  /** What the sprayer was measured at, up to the day of the work. */
+  calibration: CalibrationInForce | null
 }
 
 /**
@@ -22,7 +28,7 @@ export interface RecordGround {
  */
 export async function loadRecordGround(
   manager: EntityManager,
-  { farmId }: Pick<FarmActor, 'farmId'>,
+  { farmId, zone }: Pick<FarmActor, 'farmId' | 'zone'>,
   content: RecordContent,
   forSigning = false,
 ): Promise<RecordGround> {
@@ -35,12 +41,15 @@ export async function loadRecordGround(
     ...(forSigning && { lock: { mode: 'pessimistic_write' as const } }),
   })
   const sprayer = content.sprayerId === null ? null : await manager.findOneBy(Sprayer, { farmId, id: content.sprayerId })
+  const start = firstStart(content)
+  const calibration = sprayer === null ? null : (await listInForce(manager, [sprayer], start === null ? undefined : civilDateIn(zone, start))).get(sprayer.id) ?? null
   const inOrder = <Thing extends { id: string }>(things: Thing[], ids: (string | null)[]) => things.sort((a, b) => ids.indexOf(a.id) - ids.indexOf(b.id))
   const ground = {
     blocks: inOrder(blocks, content.lines.map(({ blockId }) => blockId)),
     materials: inOrder(materials, content.components.map(({ materialId }) => materialId)),
     lots: inOrder(lots, content.components.map(({ lotId }) => lotId)),
     sprayer,
+    calibration,
   }
   const errors = findUnknown(content, ground)
   if (errors.length > 0) throw invalid(errors)

@@ -13,5 +13,6 @@ export function restOn(ground: RecordGround, { blocks, materials, lots, sprayer 
     materials: then(ground.materials, materials),
     lots: then(ground.lots, lots),
     sprayer: ground.sprayer && ground.sprayer.id === sprayer?.id ? { ...ground.sprayer, ...sprayer } : ground.sprayer,
+    calibration: ground.calibration,
   }
 }

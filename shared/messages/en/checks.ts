@@ -89,6 +89,13 @@ export const checks = {
     within: '{low} to {high} {unit}. Worked out from air and humidity, Stull 2011.',
     source: 'common practice, 2 to 8 °C',
   },
+  calibration: {
+    title: 'Calibration of {code}',
+    none: '{code} was not calibrated up to that day: what goes out on a hectare is not known.',
+    off: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart. Change speed, pressure, nozzles or the rate, or calibrate again.',
+    past: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}; the next calibration was due on {dueOn}.',
+    within: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart.',
+  },
   counts: {
     title: 'How many on {code}',
     text: 'The mix is measured by count, and this line has none.',

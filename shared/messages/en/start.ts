@@ -39,6 +39,5 @@ export const start = {
     awayAsk: 'Put the practice farm away',
     awayText: 'Nobody opens it any more, and what was tried on it goes with it. You can open a new one at any time.',
     awayDone: 'The practice farm is put away.',
-    back: 'Back to your own farm',
   },
 }

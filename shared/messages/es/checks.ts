@@ -89,6 +89,13 @@ export const checks = {
     within: 'De {low} a {high} {unit}. Calculado con aire y humedad, Stull 2011.',
     source: 'práctica común, de 2 a 8 °C',
   },
+  calibration: {
+    title: 'Calibración de {code}',
+    none: '{code} no se había calibrado hasta ese día: no se sabe cuánto sale por hectárea.',
+    off: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia. Cambie velocidad, presión, boquillas o dosis, o calibre de nuevo.',
+    past: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}; la siguiente calibración tocaba el {dueOn}.',
+    within: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia.',
+  },
   counts: {
     title: 'Cuántos en {code}',
     text: 'La mezcla se mide por recuento, y esta línea no lo tiene.',

@@ -34,7 +34,7 @@ export const farm = {
   sprayerKept: 'Sin señal: el pulverizador {code} queda en este dispositivo y sale solo.',
   inForce: 'En vigor aquí',
   checks: {
-    law: { title: 'Reglas', text: 'En esta finca no hay ningún conjunto de reglas en vigor. Lo que pide la ley no se comprueba aquí.' },
+    law: { text: 'En esta finca no hay ningún conjunto de reglas en vigor. Lo que pide la ley no se comprueba aquí.' },
     sprayer: { title: 'Pulverizador', text: 'Aún no hay ninguno. Sin él, la mezcla no se reparte en cargas.' },
   },
   readFailed: 'No se pudo leer la finca.',

@@ -39,6 +39,5 @@ export const start = {
     awayAsk: 'Guardar la finca de práctica',
     awayText: 'Nadie la abrirá más, y lo probado en ella se va con ella. Puede abrir otra cuando quiera.',
     awayDone: 'La finca de práctica se ha guardado.',
-    back: 'Volver a su propia finca',
   },
 }

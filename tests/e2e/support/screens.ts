@@ -43,6 +43,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'farm', path: '/farm' },
     { name: 'people of the farm', path: '/farm/people' },
     { name: 'sprayers', path: '/farm/sprayers' },
+    { name: 'sprayer', path: `/farm/sprayers/${things.sprayer.id}` },
+    { name: 'first hour', path: '/start' },
     { name: 'nothing there', path: '/nothing-there' },
   ]
   return [

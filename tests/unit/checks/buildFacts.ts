@@ -39,6 +39,7 @@ export const buildFacts = (over: Partial<RecordFacts> = {}): RecordFacts => ({
   blocks: [{ id: 'b1', code: 'A3' }, { id: 'b2', code: 'A2' }],
   materials: [buildMaterial()],
   lots: [buildLot()],
+  sprayer: null,
   zone: 'America/New_York',
   now: '2026-06-16T12:00:00Z',
   ...over,
