@@ -1,9 +1,10 @@
 import { VueQueryPlugin } from '@tanstack/vue-query'
+import { localeContextKey } from 'element-plus/es/hooks/use-locale/index'
 import { createPinia } from 'pinia'
 import { createApp } from 'vue'
 import App from './App.vue'
 import { onSessionEnd } from './api/http.ts'
-import { i18n } from './plugins/i18n.ts'
+import { controlWords, i18n } from './plugins/i18n.ts'
 import { queryClient } from './plugins/queryClient.ts'
 import { readViewsWhenIdle } from './router/readViews.ts'
 import { router } from './router/router.ts'
@@ -18,6 +19,8 @@ import './styles/styles.ts'
 
 const app = createApp(App)
 app.use(createPinia()).use(i18n).use(VueQueryPlugin, { queryClient })
+// What the controls say of themselves, in the language shown.
+app.provide(localeContextKey, controlWords)
 
 const words = usePreferences().start()
 useOutbox().start()

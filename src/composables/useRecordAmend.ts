@@ -6,6 +6,7 @@ import { convertQuantity } from '../../shared/units/convertQuantity.ts'
 import { dimensionOf } from '../../shared/units/dimensionOf.ts'
 import { now } from '../plugins/clock.ts'
 import { useSession } from '../stores/session.ts'
+import { goToFault } from './goToFault.ts'
 import { contentOf } from './recordContent.ts'
 import { useAmendDraft } from './useAmendDraft.ts'
 import { keepSeconds } from './keepSeconds.ts'
@@ -80,6 +81,7 @@ export function useRecordAmend(id: string) {
 
   async function sign(): Promise<void> {
     tried.value = true
+    if (Object.keys(gaps.value).length > 0) await goToFault()
     if (Object.keys(gaps.value).length > 0 || signing.password.value === '' || reason.value.trim() === '') return
     const answer = await signing.run()
     if (answer === undefined || answer === 'kept') return
@@ -95,7 +97,8 @@ export function useRecordAmend(id: string) {
     ready: computed(() => filled.value && stockReady.value),
     signError: computed(() => {
       if (!tried.value) return ''
-      if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
+      const [gap] = Object.values(gaps.value)
+      if (gap !== undefined) return t('records.sign.notSigned', { reason: t(gap) })
       if (reason.value.trim() === '') return t('versions.amend.needReason')
       return signing.words.value || (signing.password.value === '' ? t('versions.act.needPassword') : '')
     }),

@@ -5,6 +5,7 @@ import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { now } from '../plugins/clock.ts'
 import { useFileQueue } from '../stores/fileQueue.ts'
+import { goToFault } from './goToFault.ts'
 import { askedFor } from './askedFor.ts'
 import { formErrors } from './formErrors.ts'
 import { contentOf } from './recordContent.ts'
@@ -67,6 +68,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
 
   async function sign(): Promise<void> {
     tried.value = true
+    if (Object.keys(gaps.value).length > 0) await goToFault()
     if (Object.keys(gaps.value).length > 0 || signing.password.value === '') return
     const answer = await signing.run()
     if (answer === undefined || answer === 'kept') return
@@ -91,7 +93,8 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
     startGap: computed(() => { const gap = startGap(facts()); return gap === null ? '' : t(gap) }),
     signError: computed(() => {
       if (!tried.value) return ''
-      if (Object.keys(gaps.value).length > 0) return t('records.sign.mend')
+      const [gap] = Object.values(gaps.value)
+      if (gap !== undefined) return t('records.sign.notSigned', { reason: t(gap) })
       return signing.words.value || (signing.password.value === '' ? t('records.sign.needPassword') : '')
     }),
     working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),

@@ -78,7 +78,7 @@ export function useSigning({ draft, stops, sign }: SigningOptions): Signing {
     if (error === null) return task.result.value === 'kept' ? t('records.sign.kept') : ''
     if (error instanceof ApiError && error.problem.code === 'session.wrong_password') return t('records.sign.wrongPassword')
     if (error instanceof ApiError && error.problem.code === 'stale') return t('records.sign.stale')
-    if (error instanceof FilesLeft) return t('files.notSent', { count: error.count })
+    if (error instanceof FilesLeft) return t('records.filesNotSent', { count: error.count })
     const first = error instanceof ApiError ? error.problem.errors[0]?.message : undefined
     return t('records.sign.notSigned', { reason: first ?? problem(error) })
   })

@@ -1,5 +1,10 @@
-import { ElMessage } from 'element-plus'
+import type { MessageParams } from 'element-plus'
 import { h } from 'vue'
+import { laterCode } from './laterPart.ts'
+
+const readMessage = laterCode(() => import('element-plus/es/components/message/index'))
+
+const show = (params: MessageParams) => readMessage().then(({ ElMessage }) => ElMessage(params))
 
 /** A short word at the edge of the screen about what has just been done. */
 export function useToast(): {
@@ -11,18 +16,18 @@ export function useToast(): {
   failed: (words: string) => void
 } {
   return {
-    done: (words) => { ElMessage({ message: words, type: 'success', duration: 5000, grouping: true }) },
+    done: (words) => { void show({ message: words, type: 'success', duration: 5000, grouping: true }) },
     withWay: (words, way, act) => {
       const press = (): void => {
-        shown.close()
+        void shown.then(({ close }) => { close() })
         act()
       }
-      const shown = ElMessage({
+      const shown = show({
         message: h('span', { class: 'toast-way' }, [words, ' ', h('button', { type: 'button', class: 'lnk', onClick: press }, way)]),
         type: 'success', duration: 20_000, showClose: true,
       })
     },
-    kept: (words) => { ElMessage({ message: words, type: 'warning', duration: 7000, grouping: true }) },
-    failed: (words) => { ElMessage({ message: words, type: 'error', duration: 9000, grouping: true, showClose: true }) },
+    kept: (words) => { void show({ message: words, type: 'warning', duration: 7000, grouping: true }) },
+    failed: (words) => { void show({ message: words, type: 'error', duration: 9000, grouping: true, showClose: true }) },
   }
 }

@@ -1,5 +1,6 @@
 import type { RouteRecordRaw } from 'vue-router'
 import type { Role } from '../../shared/contract/session.ts'
+import { withWords } from '../composables/laterPart.ts'
 
 declare module 'vue-router' {
   interface RouteMeta {
@@ -19,32 +20,32 @@ declare module 'vue-router' {
 const FARM_PEOPLE: Role[] = ['owner', 'manager', 'applicator']
 const MANAGERS: Role[] = ['owner', 'manager']
 
-/** Every address; views are read when they are first opened. */
+/** Every address; views are read when they are first opened, and the words of all screens with the first that is not on the way from sign-in to a new record. */
 export const routes: RouteRecordRaw[] = [
   { path: '/signin', name: 'sign-in', component: () => import('../views/sign-in/SignInView.vue'), meta: { open: true } },
-  { path: '/welcome/:token?', name: 'welcome', component: () => import('../views/welcome/WelcomeView.vue'), props: true, meta: { open: true } },
-  { path: '/check/:code?', name: 'check', component: () => import('../views/check/CheckView.vue'), props: true, meta: { open: true } },
+  { path: '/welcome/:token?', name: 'welcome', component: () => withWords(() => import('../views/welcome/WelcomeView.vue')), props: true, meta: { open: true } },
+  { path: '/check/:code?', name: 'check', component: () => withWords(() => import('../views/check/CheckView.vue')), props: true, meta: { open: true } },
   { path: '/', name: 'today', component: () => import('../views/today/TodayView.vue'), meta: { place: 'today', roles: FARM_PEOPLE } },
-  { path: '/blocks', name: 'blocks', component: () => import('../views/blocks/BlocksView.vue'), meta: { place: 'blocks' } },
-  { path: '/blocks/new', name: 'block-new', component: () => import('../views/blocks/BlockNewView.vue'), meta: { place: 'blocks', roles: MANAGERS } },
-  { path: '/blocks/ground', name: 'ground', component: () => import('../views/blocks/GroundView.vue'), meta: { place: 'blocks' } },
-  { path: '/blocks/ground/:id', name: 'ground-form', component: () => import('../views/blocks/GroundFormView.vue'), props: true, meta: { place: 'blocks', roles: MANAGERS } },
-  { path: '/blocks/import', name: 'block-import', component: () => import('../views/blocks/BlockImportView.vue'), meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
-  { path: '/blocks/merge', name: 'blocks-merge', component: () => import('../views/blocks/BlocksMergeView.vue'), meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
-  { path: '/blocks/:id/split', name: 'block-split', component: () => import('../views/blocks/BlockSplitView.vue'), props: true, meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
-  { path: '/blocks/:id/shape', name: 'block-shape', component: () => import('../views/blocks/BlockShapeView.vue'), props: true, meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
-  { path: '/blocks/:id', name: 'block', component: () => import('../views/blocks/BlockPageView.vue'), props: true, meta: { place: 'blocks' } },
-  { path: '/register', name: 'register', component: () => import('../views/register/RegisterView.vue'), meta: { place: 'register' } },
+  { path: '/blocks', name: 'blocks', component: () => withWords(() => import('../views/blocks/BlocksView.vue')), meta: { place: 'blocks' } },
+  { path: '/blocks/new', name: 'block-new', component: () => withWords(() => import('../views/blocks/BlockNewView.vue')), meta: { place: 'blocks', roles: MANAGERS } },
+  { path: '/blocks/ground', name: 'ground', component: () => withWords(() => import('../views/blocks/GroundView.vue')), meta: { place: 'blocks' } },
+  { path: '/blocks/ground/:id', name: 'ground-form', component: () => withWords(() => import('../views/blocks/GroundFormView.vue')), props: true, meta: { place: 'blocks', roles: MANAGERS } },
+  { path: '/blocks/import', name: 'block-import', component: () => withWords(() => import('../views/blocks/BlockImportView.vue')), meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
+  { path: '/blocks/merge', name: 'blocks-merge', component: () => withWords(() => import('../views/blocks/BlocksMergeView.vue')), meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
+  { path: '/blocks/:id/split', name: 'block-split', component: () => withWords(() => import('../views/blocks/BlockSplitView.vue')), props: true, meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
+  { path: '/blocks/:id/shape', name: 'block-shape', component: () => withWords(() => import('../views/blocks/BlockShapeView.vue')), props: true, meta: { place: 'blocks', roles: MANAGERS, ownFoot: true } },
+  { path: '/blocks/:id', name: 'block', component: () => withWords(() => import('../views/blocks/BlockPageView.vue')), props: true, meta: { place: 'blocks' } },
+  { path: '/register', name: 'register', component: () => withWords(() => import('../views/register/RegisterView.vue')), meta: { place: 'register' } },
   { path: '/register/new', name: 'record-new', component: () => import('../views/register/RecordFormView.vue'), meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
-  { path: '/register/:id/amend', name: 'record-amend', component: () => import('../views/register/RecordAmendView.vue'), props: true, meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
-  { path: '/register/:id', name: 'record', component: () => import('../views/register/RecordView.vue'), props: true, meta: { place: 'register' } },
-  { path: '/inputs', name: 'inputs', component: () => import('../views/inputs/InputsView.vue'), meta: { place: 'inputs' } },
-  { path: '/farm', name: 'farm', component: () => import('../views/farm/FarmView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },
-  { path: '/farm/people', name: 'farm-people', component: () => import('../views/farm/FarmPeopleView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },
-  { path: '/farm/sprayers', name: 'farm-sprayers', component: () => import('../views/farm/FarmSprayersView.vue'), meta: { place: 'farm', roles: FARM_PEOPLE } },
-  { path: '/farm/sprayers/:id', name: 'sprayer', component: () => import('../views/farm/SprayerView.vue'), props: true, meta: { place: 'farm', roles: FARM_PEOPLE } },
-  { path: '/start', name: 'start', component: () => import('../views/start/StartView.vue'), meta: { place: 'farm', roles: MANAGERS } },
-  { path: '/farms/new', name: 'farm-new', component: () => import('../views/farm-new/FarmNewView.vue'), meta: { cover: true } },
-  { path: '/farms', name: 'my-farms', component: () => import('../views/my-farms/MyFarmsView.vue'), meta: { place: 'my-farms', roles: ['certifier'] } },
-  { path: '/:rest(.*)*', name: 'not-found', component: () => import('../views/not-found/NotFoundView.vue') },
+  { path: '/register/:id/amend', name: 'record-amend', component: () => withWords(() => import('../views/register/RecordAmendView.vue')), props: true, meta: { place: 'register', roles: FARM_PEOPLE, ownFoot: true } },
+  { path: '/register/:id', name: 'record', component: () => withWords(() => import('../views/register/RecordView.vue')), props: true, meta: { place: 'register' } },
+  { path: '/inputs', name: 'inputs', component: () => withWords(() => import('../views/inputs/InputsView.vue')), meta: { place: 'inputs' } },
+  { path: '/farm', name: 'farm', component: () => withWords(() => import('../views/farm/FarmView.vue')), meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/farm/people', name: 'farm-people', component: () => withWords(() => import('../views/farm/FarmPeopleView.vue')), meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/farm/sprayers', name: 'farm-sprayers', component: () => withWords(() => import('../views/farm/FarmSprayersView.vue')), meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/farm/sprayers/:id', name: 'sprayer', component: () => withWords(() => import('../views/farm/SprayerView.vue')), props: true, meta: { place: 'farm', roles: FARM_PEOPLE } },
+  { path: '/start', name: 'start', component: () => withWords(() => import('../views/start/StartView.vue')), meta: { place: 'farm', roles: MANAGERS } },
+  { path: '/farms/new', name: 'farm-new', component: () => withWords(() => import('../views/farm-new/FarmNewView.vue')), meta: { cover: true } },
+  { path: '/farms', name: 'my-farms', component: () => withWords(() => import('../views/my-farms/MyFarmsView.vue')), meta: { place: 'my-farms', roles: ['certifier'] } },
+  { path: '/:rest(.*)*', name: 'not-found', component: () => withWords(() => import('../views/not-found/NotFoundView.vue')) },
 ]

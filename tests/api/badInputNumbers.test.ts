@@ -92,6 +92,13 @@ describe('units and figures that do not fit', () => {
     expect(over.body.errors.map(({ code }: { code: string }) => code)).toEqual(['record.stop'])
   })
 
+  it('B-34 more of a block than there is of it', () =>
+    expectRefused(house, farm, manager, {
+      what: 'a share above the whole', path: '/records',
+      body: () => ({ ...buildRecord(things), lines: buildRecord(things).lines.map((line) => ({ ...line, part: { kind: 'fraction', fraction: '1.3' } })) }),
+      errors: ['lines.0.part.fraction part.fraction'],
+    }))
+
   it('B-33 more on the land than the mix makes is asked about', async () => {
     const record = buildRecord(things)
     const lines = record.lines.map((line) => ({ ...line, amount: { value: '440', unit: 'L', known: 'measured' } }))

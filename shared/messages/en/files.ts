@@ -28,5 +28,4 @@ export const files = {
   saveOriginal: 'Save the original',
   originalHint: 'What you see is without place, time and camera. The original may hold them: think before you hand it on.',
   noRoom: 'This device has no room left to keep it. Leave this page open until it is sent.',
-  notSent: '{count} photo or paper is not sent yet. Look at it above, or sign without it: it then counts as added after the signature. | {count} photos and papers are not sent yet. Look at them above, or sign without them: they then count as added after the signature.',
 }

@@ -28,5 +28,4 @@ export const files = {
   saveOriginal: 'Guardar el original',
   originalHint: 'Lo que ve no lleva lugar, hora ni cámara. El original puede llevarlos: piénselo antes de entregarlo.',
   noRoom: 'Este dispositivo no tiene sitio para guardarlo. Deje esta página abierta hasta que se envíe.',
-  notSent: '{count} foto o papel aún no se envió. Mírelo arriba, o firme sin él: entonces cuenta como añadido después de la firma. | {count} fotos y papeles aún no se enviaron. Mírelos arriba, o firme sin ellos: entonces cuentan como añadidos después de la firma.',
 }

@@ -1,6 +1,7 @@
-import { readLanguage, showLanguage } from '../../../src/plugins/i18n.ts'
+import { readLanguage, readLaterWords, showLanguage } from '../../../src/plugins/i18n.ts'
 
 await Promise.all([readLanguage('en'), readLanguage('es')])
+await readLaterWords()
 showLanguage('en')
 
 // jsdom has no media queries: a desk with a pointer, unless a test says otherwise.

@@ -1,5 +1,5 @@
 import { flushPromises, mount } from '@vue/test-utils'
-import { beforeEach, describe, expect, it } from 'vitest'
+import { beforeEach, describe, expect, it, vi } from 'vitest'
 import RegisterFiles from '../../../../src/components/register/RegisterFiles.vue'
 import RegisterFilters from '../../../../src/components/register/RegisterFilters.vue'
 import { i18n } from '../../../../src/plugins/i18n.ts'
@@ -42,6 +42,8 @@ describe('RegisterFilters', () => {
 describe('RegisterFiles', () => {
   it('offers each volume where there are several', async () => {
     mount(RegisterFiles, { global, props: { open: true, what: '9 000 records', csvHref: '/csv', pdfHrefs: ['/pdf?volume=1', '/pdf?volume=2'], reading: false }, attachTo: document.body })
+    // The dialog itself is read when it is first shown.
+    await vi.dynamicImportSettled()
     await flushPromises()
     const links = [...document.querySelectorAll('a.take')].map((link) => [link.getAttribute('href'), link.textContent.trim()])
     expect(links).toEqual([['/csv', 'CSV for a spreadsheet'], ['/pdf?volume=1', 'Volume 1 of 2'], ['/pdf?volume=2', 'Volume 2 of 2']])

@@ -1,2 +1,2 @@
 export { default as controls } from 'element-plus/es/locale/lang/es'
-export { screens } from '../../shared/messages/es.ts'
+export { later } from '../../shared/messages/es/later.ts'

@@ -1,2 +1,2 @@
 export { default as controls } from 'element-plus/es/locale/lang/en'
-export { screens } from '../../shared/messages/en.ts'
+export { later } from '../../shared/messages/en/later.ts'

@@ -1,0 +1,14 @@
+import { checks } from './checks.ts'
+import { common } from './common.ts'
+import { fieldProblems } from './fieldProblems.ts'
+import { frame } from './frame.ts'
+import { inputs } from './inputs.ts'
+import { recordForm } from './recordForm.ts'
+import { records } from './records.ts'
+import { register } from './register.ts'
+import { session } from './session.ts'
+import { today } from './today.ts'
+import { units } from './units.ts'
+
+/** What a phone needs from signing in over Today to a new record; read before anything is shown. */
+export const first = { checks, common, frame, inputs, problems: fieldProblems, recordForm, records, register, session, today, units }

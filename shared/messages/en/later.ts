@@ -1,0 +1,18 @@
+import { blocks } from './blocks.ts'
+import { farm } from './farm.ts'
+import { files } from './files.ts'
+import { ground } from './ground.ts'
+import { growing } from './growing.ts'
+import { importing } from './importing.ts'
+import { journal } from './journal.ts'
+import { problems } from './problems.ts'
+import { profile } from './profile.ts'
+import { shapes } from './shapes.ts'
+import { sprayers } from './sprayers.ts'
+import { start } from './start.ts'
+import { versions } from './versions.ts'
+
+/** What the other screens say; read when the first page stands. */
+export const later = {
+  blocks, farm, files, ground, growing, importing, journal, problems, profile, shapes, sprayers, start, versions,
+}

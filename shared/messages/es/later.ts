@@ -1,0 +1,19 @@
+import type { LaterScreens } from '../en.ts'
+import { blocks } from './blocks.ts'
+import { farm } from './farm.ts'
+import { files } from './files.ts'
+import { ground } from './ground.ts'
+import { growing } from './growing.ts'
+import { importing } from './importing.ts'
+import { journal } from './journal.ts'
+import { problems } from './problems.ts'
+import { profile } from './profile.ts'
+import { shapes } from './shapes.ts'
+import { sprayers } from './sprayers.ts'
+import { start } from './start.ts'
+import { versions } from './versions.ts'
+
+/** What the other screens say, in Spanish. A missing key does not compile. */
+export const later: LaterScreens = {
+  blocks, farm, files, ground, growing, importing, journal, problems, profile, shapes, sprayers, start, versions,
+}

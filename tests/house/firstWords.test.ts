@@ -1,0 +1,36 @@
+import { existsSync, readFileSync } from 'node:fs'
+import { dirname, relative, resolve } from 'node:path'
+import { describe, expect, it } from 'vitest'
+import { en } from '../../shared/messages/en.ts'
+import { first } from '../../shared/messages/en/first.ts'
+
+/** What is shown before the words of every screen are asked for: these three views, and all they read at once. */
+const WAY = ['src/start.ts', 'src/views/sign-in/SignInView.vue', 'src/views/today/TodayView.vue', 'src/views/register/RecordFormView.vue']
+const IMPORT = /^(?:import|export)(?! type)[^'"]*?'(\.[^']+)'/gm
+const MESSAGE = /['`]([a-z]\w+(?:\.\w+)+)['`]/g
+
+describe('the words read first', () => {
+  it('hold every message that is named on the way from sign-in to a new record', () => {
+    const files = readOnTheWay()
+    expect(files.size).toBeGreaterThan(250)
+    const missing = [...files].flatMap(([file, source]) =>
+      [...source.matchAll(MESSAGE)].flatMap(([, id = '']) => (has(en, id) && !has(first, id) ? [`${relative('.', file)}: ${id}`] : [])))
+    expect(missing).toEqual([])
+  })
+})
+
+function readOnTheWay(): Map<string, string> {
+  const files = new Map<string, string>()
+  const read = (file: string): void => {
+    if (files.has(file) || file.includes('/shared/messages/e') || !existsSync(file)) return
+    const source = readFileSync(file, 'utf8')
+    files.set(file, source)
+    for (const [, path = ''] of source.matchAll(IMPORT)) read(resolve(dirname(file), path))
+  }
+  for (const file of WAY) read(resolve(file))
+  return files
+}
+
+function has(words: object, id: string): boolean {
+  return typeof id.split('.').reduce<unknown>((found, name) => (typeof found === 'object' && found !== null ? Object.entries(found).find(([key]) => key === name)?.[1] : undefined), words) === 'string'
+}
