@@ -39,7 +39,7 @@ export function useSignMany(lines: Ref<readonly RegisterLine[]>, wordsOf: (line:
 
   async function sign(): Promise<void> {
     if (task.running.value) return
-    gap.value = chosen.value.length === 0 ? t('records.many.choose') : password.value === '' ? t('records.sign.needPassword') : ''
+    gap.value = chosen.value.length === 0 ? t('recordForm.many.choose') : password.value === '' ? t('records.sign.needPassword') : ''
     if (gap.value !== '') return
     // What is signed leaves the list of what waits: its words are kept for the answer.
     asked.value = new Map(lines.value.map((line) => [line.id, wordsOf(line)]))
@@ -58,8 +58,8 @@ export function useSignMany(lines: Ref<readonly RegisterLine[]>, wordsOf: (line:
     results: computed(() => {
       const { signed = [], refused = [] } = task.result.value ?? {}
       return [
-        ...signed.map(({ id, number }) => ({ id, isSigned: true, words: t('records.many.signed', { what: what(id), number }) })),
-        ...refused.map(({ id, problem: why }) => ({ id, isSigned: false, words: t('records.many.refused', { what: what(id), reason: why.detail }) })),
+        ...signed.map(({ id, number }) => ({ id, isSigned: true, words: t('recordForm.many.signed', { what: what(id), number }) })),
+        ...refused.map(({ id, problem: why }) => ({ id, isSigned: false, words: t('recordForm.many.refused', { what: what(id), reason: why.detail }) })),
       ]
     }),
   }

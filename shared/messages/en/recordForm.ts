@@ -153,4 +153,17 @@ export const recordForm = {
     partNeeded: 'Which part was it?',
     countNeeded: 'How many? The mix is measured by them.',
   },
+  many: {
+    open: 'Sign several',
+    title: 'Sign several records',
+    text: 'Each gets its own number and its own signature. What asks for a reason is signed on its own page.',
+    none: 'Nothing waits for a signature that has its end written down.',
+    line: '{codes}, {preparation}, {day} {start}',
+    sign: 'Sign 1 record | Sign {count} records',
+    choose: 'Choose at least one.',
+    signed: '{what}: signed as {number}.',
+    refused: '{what}: not signed. {reason}',
+    look: 'Open it',
+    close: 'Close',
+  },
 }

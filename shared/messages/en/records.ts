@@ -292,17 +292,4 @@ export const records = {
     unknown: 'not written down',
   },
   filesNotSent: '{count} photo or paper is not sent yet. Look at it above, or sign without it: it then counts as added after the signature. | {count} photos and papers are not sent yet. Look at them above, or sign without them: they then count as added after the signature.',
-  many: {
-    open: 'Sign several',
-    title: 'Sign several records',
-    text: 'Each gets its own number and its own signature. What asks for a reason is signed on its own page.',
-    none: 'Nothing waits for a signature that has its end written down.',
-    line: '{codes}, {preparation}, {day} {start}',
-    sign: 'Sign 1 record | Sign {count} records',
-    choose: 'Choose at least one.',
-    signed: '{what}: signed as {number}.',
-    refused: '{what}: not signed. {reason}',
-    look: 'Open it',
-    close: 'Close',
-  },
 }

@@ -153,4 +153,17 @@ export const recordForm = {
     partNeeded: '¿Qué parte fue?',
     countNeeded: '¿Cuántos? La mezcla se mide por ellos.',
   },
+  many: {
+    open: 'Firmar varios',
+    title: 'Firmar varios registros',
+    text: 'Cada uno recibe su propio número y su propia firma. Lo que pide un motivo se firma en su propia página.',
+    none: 'No hay nada con su fin anotado que espere una firma.',
+    line: '{codes}, {preparation}, {day} {start}',
+    sign: 'Firmar 1 registro | Firmar {count} registros',
+    choose: 'Elija al menos uno.',
+    signed: '{what}: firmado como {number}.',
+    refused: '{what}: sin firmar. {reason}',
+    look: 'Abrirlo',
+    close: 'Cerrar',
+  },
 }

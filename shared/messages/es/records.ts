@@ -292,17 +292,4 @@ export const records = {
     unknown: 'sin anotar',
   },
   filesNotSent: '{count} foto o papel aún no se envió. Mírelo arriba, o firme sin él: entonces cuenta como añadido después de la firma. | {count} fotos y papeles aún no se enviaron. Mírelos arriba, o firme sin ellos: entonces cuentan como añadidos después de la firma.',
-  many: {
-    open: 'Firmar varios',
-    title: 'Firmar varios registros',
-    text: 'Cada uno recibe su propio número y su propia firma. Lo que pide un motivo se firma en su propia página.',
-    none: 'No hay nada con su fin anotado que espere una firma.',
-    line: '{codes}, {preparation}, {day} {start}',
-    sign: 'Firmar 1 registro | Firmar {count} registros',
-    choose: 'Elija al menos uno.',
-    signed: '{what}: firmado como {number}.',
-    refused: '{what}: sin firmar. {reason}',
-    look: 'Abrirlo',
-    close: 'Cerrar',
-  },
 }
