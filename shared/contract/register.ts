@@ -9,6 +9,10 @@ import { lineText } from './text.ts'
 export const REGISTER_SORTS = ['-when', 'when', '-number', 'number', '-area', 'area'] as const
 export type RegisterSort = (typeof REGISTER_SORTS)[number]
 
+/** Whether somebody has read the version that stands, and said so. */
+export const REVIEWS = ['waiting', 'done'] as const
+export type Review = (typeof REVIEWS)[number]
+
 const MOST_WORDS = 8
 
 /** Words that each stand in a record, whole or by their beginning. */
@@ -28,6 +32,8 @@ export const registerFilterSchema = z.strictObject({
   /** Who did the work. */
   person: idSchema.optional(),
   state: z.enum(RECORD_STATES).optional(),
+  /** Signed records that wait for a review, or have one. */
+  review: z.enum(REVIEWS).optional(),
   q: searchText.optional(),
 })
 export type RegisterFilter = z.infer<typeof registerFilterSchema>

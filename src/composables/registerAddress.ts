@@ -8,7 +8,7 @@ export interface RegisterChoice {
 /** An address as the router gives it: anybody can have typed it. */
 type AddressQuery = Record<string, unknown>
 
-export const FILTER_NAMES = ['q', 'season', 'block', 'method', 'material', 'person', 'state'] as const satisfies readonly (keyof RegisterFilter)[]
+export const FILTER_NAMES = ['q', 'season', 'block', 'method', 'material', 'person', 'state', 'review'] as const satisfies readonly (keyof RegisterFilter)[]
 const FIRST_SORT: RegisterSort = '-when'
 
 /** The choice that an address stands for; what cannot be read of it is left out. */

@@ -2,6 +2,7 @@ import { computed, type ComputedRef } from 'vue'
 import { useI18n } from 'vue-i18n'
 import { RECORD_STATES } from '../../shared/contract/record.ts'
 import { METHODS } from '../../shared/contract/recordContent.ts'
+import { REVIEWS } from '../../shared/contract/register.ts'
 import { useSession } from '../stores/session.ts'
 import { useBlocks } from './useBlocks.ts'
 import { useFarm } from './useFarm.ts'
@@ -9,7 +10,7 @@ import { useMaterials } from './useMaterials.ts'
 import { usePeople } from './usePeople.ts'
 
 interface Option { value: string; label: string }
-export type OptionName = 'season' | 'block' | 'method' | 'material' | 'person' | 'state'
+export type OptionName = 'season' | 'block' | 'method' | 'material' | 'person' | 'state' | 'review'
 
 /** Seasons that can be chosen, counted back from this one: records are kept that long. */
 const SEASONS = 10
@@ -35,6 +36,7 @@ export function useRegisterOptions(): ComputedRef<Partial<Record<OptionName, Opt
     ...(session.isOfFarm && {
       person: (people.value ?? []).map(({ id, name }) => ({ value: id, label: name })),
       state: RECORD_STATES.map((state) => ({ value: state, label: t(`register.filter.states.${state}`) })),
+      review: REVIEWS.map((review) => ({ value: review, label: t(`register.filter.reviews.${review}`) })),
     }),
   }))
 }

@@ -220,6 +220,8 @@ describe('amending', () => {
   it('keeps every one of twenty that come at once, one after the other', async () => {
     const lotId = await newLot('1000')
     const { id } = await signed(applicator, { lotId })
+    expect(await idsOf('done')).toContain(id)
+    expect(await idsOf('waiting')).not.toContain(id)
     const answers = await Promise.all(Array.from({ length: 20 }, (_, index) => {
       const agent = index % 2 === 0 ? applicator : manager
       return amend(agent, id, { reason: `Change ${index}`, water: { sizedFrom: 'water', value: String(100 + 20 * index), unit: 'L' } })
@@ -310,13 +312,18 @@ describe('the book of a lot', () => {
 })
 
 describe('reviewing', () => {
+  const idsOf = async (review: string): Promise<string[]> =>
+    (await manager.get(address()).query({ review, limit: 200 }).expect(200)).body.items.map(({ id }: { id: string }) => id)
+
   it('says who read which version, once a person and version, and changes nothing', async () => {
     const { id, body } = await signed(applicator)
+    expect(await idsOf('waiting')).toContain(id)
     const first = await send(manager, id, 'review', { note: 'Agrees with the tank book' }).expect(200)
     expect(first.body).toMatchObject({ version: 1, revision: body['revision'], digest: body['digest'], reviews: [{ version: 1, by: { id: farm.personIds.manager }, note: 'Agrees with the tank book' }] })
     const answers = await Promise.all(Array.from({ length: 20 }, () => send(manager, id, 'review', { version: 1 })))
     for (const answer of answers) expect(answer.body).toEqual(first.body)
     await amend(applicator, id, { reason: 'Slip', purpose: 'Soil life' }).expect(200)
+    expect(await idsOf('waiting')).toContain(id)
     expect(await send(manager, id, 'review', { version: 1 })).toMatchObject({ status: 409, body: { code: 'stale', current: { version: 2 } } })
     expect((await send(manager, id, 'review', { version: 2 }).expect(200)).body.reviews).toHaveLength(2)
     expect((await certifier.get(address(`/${id}`))).body.reviews).toMatchObject([{ version: 1 }, { version: 2 }])

@@ -36,7 +36,7 @@ function chosenFacts({ filter, names, sort, language }: RegisterReportData, say:
   const print = (id: string) => translate(language, `registerPrint.${id}`)
   const chosen: [string, string | number | null | undefined][] = [
     ['season', filter.season], ['block', names.block], ['method', filter.method && print(`method.${filter.method}`)], ['material', names.material],
-    ['person', names.person], ['state', filter.state && print(`state.${filter.state}`)], ['q', filter.q],
+    ['person', names.person], ['state', filter.state && print(`state.${filter.state}`)], ['review', filter.review && print(`review.${filter.review}`)], ['q', filter.q],
   ]
   const words = chosen.flatMap(([name, value]) => (value === undefined || value === null ? [] : [`${say(`filter.${name}`)}: ${value}`]))
   const key = say(`sort.${sort.replace('-', '')}`)

@@ -7,6 +7,7 @@ import { RecordReview } from '../../entities/RecordReview.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import type { Services } from '../services.ts'
+import { TERM } from '../register/recordTerms.ts'
 import { presentRecord } from './presentRecord.ts'
 
 /**
@@ -24,6 +25,12 @@ export async function reviewRecord(services: Services, actor: FarmActor, id: str
     const review = { farmId, recordId: id, version: record.version, reviewedById: personOf(actor) }
     if (await manager.existsBy(RecordReview, review)) return presentRecord(manager, record)
     await manager.insert(RecordReview, { ...review, id: uuidV7(), season: record.season, at: services.clock.now(), note })
+    await manager.query(
+      `WITH waiting AS (DELETE FROM record_terms WHERE farm_id = $1 AND record_id = $2 AND term = $3 RETURNING *)
+       INSERT INTO record_terms (farm_id, record_id, term, season, work_season, sort_at)
+       SELECT farm_id, record_id, $4, season, work_season, sort_at FROM waiting`,
+      [farmId, id, TERM.review('waiting'), TERM.review('done')],
+    )
     await appendJournal(services, manager, actor, { action: 'record.reviewed', subjectId: id, detail: { version: record.version } })
     return presentRecord(manager, record)
   })

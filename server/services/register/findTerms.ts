@@ -47,12 +47,13 @@ export async function findTerms(manager: EntityManager, actor: Pick<FarmActor, '
   }
 }
 
-function listTerms({ material, block, person, state, method }: RegisterFilter): string[] {
+function listTerms({ material, block, person, state, review, method }: RegisterFilter): string[] {
   return [
     ...(material === undefined ? [] : [TERM.material(material)]),
     ...(block === undefined ? [] : [TERM.block(block)]),
     ...(person === undefined ? [] : [TERM.person(person)]),
     ...(state === undefined || state === 'signed' ? [] : [TERM.state(state)]),
+    ...(review === undefined ? [] : [TERM.review(review)]),
     ...(method === undefined ? [] : [TERM.method(method)]),
     ...(state === 'signed' ? [TERM.state(state)] : []),
   ]

@@ -19,6 +19,7 @@ export const register = {
     q: 'Words', qHint: 'number, lot, block, note', wordsError: 'At most 8 words with a letter or a figure in them.',
     season: 'Season', block: 'Block', method: 'How', material: 'Preparation', person: 'Done by', state: 'State',
     states: { draft: 'draft', started: 'not signed yet', signed: 'signed', withdrawn: 'withdrawn' },
+    review: 'Review', reviews: { waiting: 'to review', done: 'reviewed' },
   },
   saved: {
     head: 'Kept:', keep: 'Keep this choice', forget: 'Forget {name}', title: 'Keep this choice', name: 'Name', save: 'Keep',

@@ -2,6 +2,7 @@
 export const registerPrint = {
   file: 'register',
   state: { draft: 'draft', started: 'not signed yet', signed: 'signed', withdrawn: 'withdrawn' },
+  review: { waiting: 'to review', done: 'reviewed' },
   method: { foliar: 'foliar spray', drench: 'soil drench', injected: 'injected drench', solid: 'solid spread' },
   part: {
     whole: 'whole', drawn: 'drawn part', fraction: '{percent} % of it', rows: 'rows {from} to {to} of {of}', beds: 'beds {from} to {to} of {of}',
@@ -26,7 +27,7 @@ export const registerPrint = {
     season: 'season {season}',
     allSeasons: 'all seasons',
     filter: {
-      season: 'Season', block: 'Block', method: 'Method', material: 'Preparation', person: 'Done by', state: 'State', q: 'With the words',
+      season: 'Season', block: 'Block', method: 'Method', material: 'Preparation', person: 'Done by', state: 'State', review: 'Review', q: 'With the words',
       none: 'Nothing left out', label: 'Chosen by', order: 'In the order of',
     },
     sort: { when: 'start', number: 'number', area: 'area', up: '{key}, upwards', down: '{key}, downwards' },

@@ -19,6 +19,7 @@ export const register = {
     q: 'Palabras', qHint: 'número, lote, parcela, nota', wordsError: 'Como máximo 8 palabras con alguna letra o cifra.',
     season: 'Campaña', block: 'Parcela', method: 'Cómo', material: 'Preparado', person: 'Hecho por', state: 'Estado',
     states: { draft: 'borrador', started: 'sin firmar', signed: 'firmado', withdrawn: 'retirado' },
+    review: 'Revisión', reviews: { waiting: 'por revisar', done: 'revisado' },
   },
   saved: {
     head: 'Guardado:', keep: 'Guardar esta elección', forget: 'Olvidar {name}', title: 'Guardar esta elección', name: 'Nombre', save: 'Guardar',

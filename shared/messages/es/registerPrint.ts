@@ -3,6 +3,7 @@ import type { Messages } from '../en.ts'
 export const registerPrint: Messages['registerPrint'] = {
   file: 'libro-de-registros',
   state: { draft: 'borrador', started: 'sin firmar', signed: 'firmado', withdrawn: 'retirado' },
+  review: { waiting: 'por revisar', done: 'revisado' },
   method: { foliar: 'aplicación foliar', drench: 'aplicación al suelo', injected: 'inyección en el suelo', solid: 'esparcido en sólido' },
   part: {
     whole: 'entera', drawn: 'parte dibujada', fraction: '{percent} % de ella', rows: 'hileras {from} a {to} de {of}', beds: 'bancales {from} a {to} de {of}',
@@ -27,7 +28,7 @@ export const registerPrint: Messages['registerPrint'] = {
     season: 'campaña {season}',
     allSeasons: 'todas las campañas',
     filter: {
-      season: 'Campaña', block: 'Parcela', method: 'Método', material: 'Preparado', person: 'Hecho por', state: 'Estado', q: 'Con las palabras',
+      season: 'Campaña', block: 'Parcela', method: 'Método', material: 'Preparado', person: 'Hecho por', state: 'Estado', review: 'Revisión', q: 'Con las palabras',
       none: 'No se ha dejado nada fuera', label: 'Elegido por', order: 'En el orden de',
     },
     sort: { when: 'inicio', number: 'número', area: 'superficie', up: '{key}, hacia arriba', down: '{key}, hacia abajo' },
