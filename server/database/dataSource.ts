@@ -14,11 +14,8 @@ import { WholeFarm1764642000000 } from '../../migrations/1764642000000-WholeFarm
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
 import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
-<<<<<<< Updated upstream
 import { WholePeople1764641000000 } from '../../migrations/1764641000000-WholePeople.ts'
-=======
 import { FindUnreviewed1764646000000 } from '../../migrations/1764646000000-FindUnreviewed.ts'
->>>>>>> Stashed changes
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
