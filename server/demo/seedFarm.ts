@@ -13,7 +13,7 @@ export async function seedFarm(services: Services, actor: FarmActor): Promise<vo
     revision: 1,
     certificate: { number: 'OKL-2019-0417', body: 'Oaklode Review', scope: 'Crops: orchard, vines, berries, herbs, vegetables', issuedOn: addDays(today, -201), expiresOn: addDays(today, 164) },
     contact: { person: 'Hesper Quill', address: 'Wennick Hollow, Brook Lane', phone: '555 0142', email: 'owner@demo.test' },
-    ruleSets: ['usOrganic', 'usProduceSafety', 'usWorkerProtection'],
+    units: 'metric', ruleSets: ['usOrganic', 'usProduceSafety', 'usWorkerProtection'],
   }))
   await updateStart(services, actor, { away: true })
 }

@@ -39,6 +39,6 @@ export const sprayers = {
     none: { text: '{code} was never calibrated here. What goes out on a hectare is not known.' },
     past: { text: '{code} was last calibrated on {on}; the next was due on {due}.' },
     soon: { text: '{code} is due on {due}, in {days} days.' },
-    ahead: { text: '{code} was calibrated on {on} at {rate} L/ha; next on {due}.' },
+    ahead: { text: '{code} was calibrated on {on} at {rate}; next on {due}.' },
   },
 }

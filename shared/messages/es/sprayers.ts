@@ -39,6 +39,6 @@ export const sprayers = {
     none: { text: '{code} nunca se calibró aquí. No se sabe cuánto sale por hectárea.' },
     past: { text: '{code} se calibró por última vez el {on}; la siguiente tocaba el {due}.' },
     soon: { text: '{code} toca el {due}, en {days} días.' },
-    ahead: { text: '{code} se calibró el {on} a {rate} L/ha; la próxima el {due}.' },
+    ahead: { text: '{code} se calibró el {on} a {rate}; la próxima el {due}.' },
   },
 }
