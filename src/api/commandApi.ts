@@ -7,12 +7,14 @@ import { calibrationSchema } from '../../shared/contract/calibration.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
 import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
+import { jobSchema } from '../../shared/contract/job.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
 import { plantingSchema } from '../../shared/contract/planting.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
 import { signManyAnswerSchema } from '../../shared/contract/recordChanges.ts'
 import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
 import { startSchema } from '../../shared/contract/start.ts'
+import { seasonPlanSchema } from '../../shared/contract/seasonPlan.ts'
 import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
 
@@ -61,6 +63,13 @@ const DOORS: Record<CommandKind, Door> = {
   'record.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/withdraw`, answer: recordSchema },
   'record.review': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/review`, answer: recordSchema },
   'record.discard': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/discard`, answer: z.undefined() },
+  'plan.create': { method: 'post', path: (farmId) => `/farms/${farmId}/season-plans`, answer: seasonPlanSchema },
+  'plan.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/season-plans/${id}`, answer: seasonPlanSchema },
+  'plan.end': { method: 'post', path: (farmId, id) => `/farms/${farmId}/season-plans/${id}/end`, answer: seasonPlanSchema },
+  'plan.reopen': { method: 'post', path: (farmId, id) => `/farms/${farmId}/season-plans/${id}/reopen`, answer: seasonPlanSchema },
+  'job.move': { method: 'post', path: (farmId, id) => `/farms/${farmId}/jobs/${id}/move`, answer: jobSchema },
+  'job.skip': { method: 'post', path: (farmId, id) => `/farms/${farmId}/jobs/${id}/skip`, answer: jobSchema },
+  'job.unskip': { method: 'post', path: (farmId, id) => `/farms/${farmId}/jobs/${id}/unskip`, answer: jobSchema },
   'filter.keep': { method: 'post', path: (farmId) => `/farms/${farmId}/saved-filters`, answer: savedFilterSchema },
   'filter.forget': { method: 'del', path: (farmId, id) => `/farms/${farmId}/saved-filters/${id}`, answer: z.undefined() },
 }

@@ -9,12 +9,14 @@ import type { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
 import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
 import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
+import type { Job, moveJobSchema, skipJobSchema, unskipJobSchema } from '../../shared/contract/job.ts'
 import type { putLandSchema } from '../../shared/contract/land.ts'
 import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import type {
   amendRecordSchema, createRecordSchema, discardRecordSchema, reviewRecordSchema, SignManyAnswer, signManySchema, signRecordSchema, updateRecordSchema, withdrawRecordSchema,
 } from '../../shared/contract/recordChanges.ts'
+import type { createPlanSchema, endPlanSchema, reopenPlanSchema, SeasonPlan, updatePlanSchema } from '../../shared/contract/seasonPlan.ts'
 import type { createSavedFilterSchema, SavedFilter } from '../../shared/contract/savedFilter.ts'
 import type { Start, updateStartSchema } from '../../shared/contract/start.ts'
 
@@ -60,6 +62,13 @@ export interface CommandBodies {
   'record.withdraw': z.input<typeof withdrawRecordSchema>
   'record.review': z.input<typeof reviewRecordSchema>
   'record.discard': z.input<typeof discardRecordSchema>
+  'plan.create': z.input<typeof createPlanSchema>
+  'plan.update': z.input<typeof updatePlanSchema>
+  'plan.end': z.input<typeof endPlanSchema>
+  'plan.reopen': z.input<typeof reopenPlanSchema>
+  'job.move': z.input<typeof moveJobSchema>
+  'job.skip': z.input<typeof skipJobSchema>
+  'job.unskip': z.input<typeof unskipJobSchema>
 }
 
 /** What the server answers to each. */
@@ -104,6 +113,13 @@ export interface CommandAnswers {
   'record.withdraw': ApplicationRecord
   'record.review': ApplicationRecord
   'record.discard': undefined
+  'plan.create': SeasonPlan
+  'plan.update': SeasonPlan
+  'plan.end': SeasonPlan
+  'plan.reopen': SeasonPlan
+  'job.move': Job
+  'job.skip': Job
+  'job.unskip': Job
 }
 
 export type CommandKind = keyof CommandBodies

@@ -47,6 +47,8 @@ export interface RecordDraft {
   weather: { wind: ReadingDraft; windFrom: (typeof WIND_POINTS)[number] | ''; air: ReadingDraft; humidity: ReadingDraft }
   /** Said of every stop that was sprayed all the same. */
   stop: { why: string; told: string; done: string }
+  /** Jobs of season plans that it was opened from. */
+  jobs: string[]
   /** The revision the server gave last; null before it has the record. */
   revision: number | null
 }
@@ -71,6 +73,7 @@ export const emptyRecord = (): RecordDraft => ({
     humidity: { value: '', unit: '%', kind: 'readHere' },
   },
   stop: { why: '', told: '', done: '' },
+  jobs: [],
   revision: null,
 })
 
@@ -103,6 +106,11 @@ export function draftLike(record: ApplicationRecord): RecordDraft {
     components: record.components.map(draftOfComponent),
     water: draftOfWater(record.water),
   }
+}
+
+/** A new form with the method, mix and rate of a plan's step. */
+export function draftOfPlan({ method, materialId, basis, water }: Pick<RecordComponent, 'materialId' | 'basis'> & { method: Method; water: Water | null }): RecordDraft {
+  return { ...emptyRecord(), method, components: [draftOfComponent({ materialId, basis, lotId: null, used: null })], water: draftOfWater(water) }
 }
 
 function draftOfWeather(weather: Weather): RecordDraft['weather'] {

@@ -8,6 +8,7 @@ const OF_FARM: Omit<Place, 'words'>[] = [
   { name: 'blocks', to: '/blocks', icon: 'blocks' },
   { name: 'register', to: '/register', icon: 'register' },
   { name: 'inputs', to: '/inputs', icon: 'inputs' },
+  { name: 'rounds', to: '/rounds', icon: 'rounds' },
   { name: 'farm', to: '/farm', icon: 'farm' },
 ]
 const OF_CERTIFIER: Omit<Place, 'words'>[] = [

@@ -27,7 +27,7 @@ import { useSigning } from './useSigning.ts'
 import { useTask } from './useTask.ts'
 
 /** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
-export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string; blockIds: readonly string[] }) {
+export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string; blockIds: readonly string[]; jobIds: readonly string[] }) {
   const { t } = useI18n()
   const { language } = useFigures()
   const { problem } = useMessages()

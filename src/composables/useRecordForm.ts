@@ -27,6 +27,8 @@ interface RecordFormOptions {
   likeId: string
   /** Blocks that a new record starts with. */
   blockIds: readonly string[]
+  /** Jobs of season plans that a fresh form is filled in from. */
+  jobIds: readonly string[]
   stock: Ref<RecordStock>
   stockReady: Ref<boolean>
 }
@@ -52,7 +54,7 @@ function firstDraft({ sprayers, blocks }: RecordStock, blockIds: readonly string
 const isOpen = ({ state }: ApplicationRecord): boolean => state === 'started' || state === 'draft'
 
 /** The form of a record: found on the device, else at the server, else empty; kept at every keystroke. */
-export function useRecordForm({ id, fresh, likeId, blockIds, stock, stockReady }: RecordFormOptions): RecordForm {
+export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stockReady }: RecordFormOptions): RecordForm {
   const drafts = useDrafts(() => stock.value.farmId, 'record')
   const draft = ref<RecordDraft>(emptyRecord())
   const state = ref<'loading' | 'ready' | 'signed'>('loading')
@@ -68,8 +70,15 @@ export function useRecordForm({ id, fresh, likeId, blockIds, stock, stockReady }
       begunAt.value = kept.begunAt
       return readKeptDraft(kept.content.typed)
     }
-    if (fresh && likeId === '') return firstDraft(stock.value, blockIds)
+    if (fresh && likeId === '') return (await findJobs()) ?? firstDraft(stock.value, blockIds)
     return (await findAtServer()) ?? firstDraft(stock.value, blockIds)
+  }
+
+  /** The form as the jobs fill it in that it was opened from; null without any, or where no plan has them any more. */
+  async function findJobs(): Promise<RecordDraft | null> {
+    if (jobIds.length === 0) return null
+    const { readJobDraft } = await import('./readJobDraft.ts')
+    return readJobDraft(stock.value, jobIds)
   }
 
   /** Whether the server says that a record it knows is open no more; without an answer the draft stays as it is. */

@@ -35,8 +35,8 @@ export function useRecordSend({ id, farmId, draft, content, sendFiles = () => Pr
   const { submit } = useSubmit()
 
   async function write(): Promise<'sent' | 'kept'> {
-    const body = { ...content(), deviceAt: now().toISOString() }
-    const { revision } = draft.value
+    const { revision, jobs } = draft.value
+    const body = { ...content(), deviceAt: now().toISOString(), ...(jobs.length > 0 && { jobs }) }
     const outcome = revision === null
       ? await submit({ kind: 'record.create', farmId: farmId(), id, body: { ...body, id } })
       : await submit({ kind: 'record.update', farmId: farmId(), id, body: { ...body, revision } })

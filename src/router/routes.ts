@@ -48,4 +48,6 @@ export const routes: RouteRecordRaw[] = [
   { path: '/farms/new', name: 'farm-new', component: () => withWords(() => import('../views/farm-new/FarmNewView.vue')), meta: { cover: true } },
   { path: '/farms', name: 'my-farms', component: () => withWords(() => import('../views/my-farms/MyFarmsView.vue')), meta: { place: 'my-farms', roles: ['certifier'] } },
   { path: '/:rest(.*)*', name: 'not-found', component: () => withWords(() => import('../views/not-found/NotFoundView.vue')) },
+  { path: '/rounds', name: 'rounds', component: () => withWords(() => import('../views/rounds/RoundsView.vue')), meta: { place: 'rounds', roles: FARM_PEOPLE } },
+  { path: '/rounds/plans/:id', name: 'season-plan', component: () => withWords(() => import('../views/rounds/PlanFormView.vue')), props: true, meta: { place: 'rounds', roles: MANAGERS } },
 ]

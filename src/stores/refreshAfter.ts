@@ -1,17 +1,20 @@
 import type { CommandKind } from '../api/commandTypes.ts'
 import { queryClient } from '../plugins/queryClient.ts'
 
+/** What follows from signed records and from plans. */
+const ROUNDS = ['season-sheet', 'jobs-waiting']
+
 /** Which reads a command makes old, by the first part of their key. */
 const STALE: Record<CommandKind, string[]> = {
   'farm.create': ['farm'],
-  'block.create': ['blocks', 'farm', 'start'],
+  'block.create': ['blocks', 'farm', 'start', 'season-sheet'],
   'block.update': ['blocks', 'farm', 'boundaries'],
-  'block.split': ['blocks', 'block', 'blocks-ended', 'farm'],
-  'block.merge': ['blocks', 'block', 'blocks-ended', 'farm'],
-  'block.reopen': ['blocks', 'block', 'blocks-ended', 'farm'],
+  'block.split': ['blocks', 'block', 'blocks-ended', 'farm', 'season-sheet'],
+  'block.merge': ['blocks', 'block', 'blocks-ended', 'farm', 'season-sheet'],
+  'block.reopen': ['blocks', 'block', 'blocks-ended', 'farm', 'season-sheet'],
   'block.land': ['blocks', 'block'],
-  'planting.create': ['plantings', 'blocks'],
-  'planting.update': ['plantings', 'blocks'],
+  'planting.create': ['plantings', 'blocks', 'season-sheet'],
+  'planting.update': ['plantings', 'blocks', 'season-sheet'],
   'bed.create': ['beds', 'blocks'],
   'bed.update': ['beds', 'blocks'],
   'event.create': ['farm-events'],
@@ -20,7 +23,7 @@ const STALE: Record<CommandKind, string[]> = {
   'site.change': ['sites'],
   'ground.create': ['ground'],
   'ground.change': ['ground'],
-  'block.import': ['blocks', 'farm'],
+  'block.import': ['blocks', 'farm', 'season-sheet'],
   'material.create': ['materials', 'start'],
   'lot.create': ['lots'],
   'lot.count': ['lots'],
@@ -33,16 +36,23 @@ const STALE: Record<CommandKind, string[]> = {
   'start.update': ['start'],
   'practice.make': [],
   'practice.away': [],
-  'record.create': ['records'],
-  'record.update': ['records'],
-  'record.sign': ['records', 'files', 'lots', 'start'],
+  'record.create': ['records', ...ROUNDS],
+  'record.update': ['records', ...ROUNDS],
+  'record.sign': ['records', 'files', 'lots', 'start', ...ROUNDS],
+  'plan.create': ['season-plans', ...ROUNDS],
+  'plan.update': ['season-plans', ...ROUNDS],
+  'plan.end': ['season-plans', ...ROUNDS],
+  'plan.reopen': ['season-plans', ...ROUNDS],
+  'job.move': ROUNDS,
+  'job.skip': ROUNDS,
+  'job.unskip': ROUNDS,
   'filter.keep': ['filters'],
   'filter.forget': ['filters'],
-  'record.signMany': ['records', 'files', 'lots'],
-  'record.amend': ['records', 'files', 'lots'],
-  'record.withdraw': ['records', 'files', 'lots'],
+  'record.signMany': ['records', 'files', 'lots', ...ROUNDS],
+  'record.amend': ['records', 'files', 'lots', ...ROUNDS],
+  'record.withdraw': ['records', 'files', 'lots', ...ROUNDS],
   'record.review': ['records'],
-  'record.discard': ['records'],
+  'record.discard': ['records', ...ROUNDS],
 }
 
 /** Reads again, in the background, what a command has changed. */

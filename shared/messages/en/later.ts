@@ -7,6 +7,7 @@ import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
+import { rounds } from './rounds.ts'
 import { shapes } from './shapes.ts'
 import { sprayers } from './sprayers.ts'
 import { start } from './start.ts'
@@ -14,5 +15,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, farm, files, ground, growing, importing, journal, problems, profile, shapes, sprayers, start, versions,
+  blocks, farm, files, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
 }

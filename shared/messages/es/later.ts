@@ -8,6 +8,7 @@ import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
+import { rounds } from './rounds.ts'
 import { shapes } from './shapes.ts'
 import { sprayers } from './sprayers.ts'
 import { start } from './start.ts'
@@ -15,5 +16,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, farm, files, ground, growing, importing, journal, problems, profile, shapes, sprayers, start, versions,
+  blocks, farm, files, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
 }

@@ -54,6 +54,7 @@ export type IconName =
   | 'job-done'
   | 'job-skipped'
   | 'inputs'
+  | 'rounds'
   | 'farm'
   | 'farms'
   | 'dawn'

@@ -16,7 +16,7 @@ const stock: RecordStock = { farmId: 'f1', farm: null, blocks: [], sprayers: [],
 const kept = (over: Partial<RecordDraft>): Kept => ({ begunAt: '2026-06-16T06:00:00.000Z', content: { typed: buildDraft(over) } })
 
 async function open() {
-  const form = effectScope().run(() => useRecordForm({ id: 'r1', fresh: false, likeId: '', blockIds: [], stock: ref(stock), stockReady: ref(true) }))
+  const form = effectScope().run(() => useRecordForm({ id: 'r1', fresh: false, likeId: '', blockIds: [], jobIds: [], stock: ref(stock), stockReady: ref(true) }))
   if (form === undefined) throw new TypeError('The form did not open')
   await flushPromises()
   return form

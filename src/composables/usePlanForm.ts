@@ -1,0 +1,115 @@
+import { computed, reactive, ref, type ComputedRef, type Ref } from 'vue'
+import { createPlanSchema, updatePlanSchema, type SeasonPlan } from '../../shared/contract/seasonPlan.ts'
+import type { Method } from '../../shared/contract/recordContent.ts'
+import { useSession } from '../stores/session.ts'
+import { fieldErrors } from './fieldErrors.ts'
+import { newId } from './newId.ts'
+import { numberOf } from './recordContent.ts'
+import { draftOfPlan, type ComponentDraft, type RecordDraft } from './recordDraft.ts'
+import { useMessages } from './useMessages.ts'
+import { useSchemaErrors } from './useSchemaErrors.ts'
+import { useSubmit } from './useSubmit.ts'
+import { useTask } from './useTask.ts'
+
+/** A step as typed; `water.sizedFrom` is empty where that is decided on the day. */
+export interface StepDraft {
+  id: string
+  method: Method
+  component: ComponentDraft
+  water: Omit<RecordDraft['water'], 'sizedFrom'> & { sizedFrom: RecordDraft['water']['sizedFrom'] | '' }
+  blockIds: string[]
+  everyDays: string
+  firstOn: string | null
+  lastOn: string | null
+  earlyDays: string
+  lateDays: string
+}
+
+export interface PlanForm {
+  draft: { name: string; note: string; steps: StepDraft[] }
+  /** Path of the field, `steps.0.everyDays`, to its sentence. */
+  errors: ComputedRef<Record<string, string>>
+  /** Why it was not saved, where no field is to blame. */
+  refusal: ComputedRef<string>
+  busy: Ref<boolean>
+  addStep: () => void
+  removeStep: (index: number) => void
+  /** Null where it was refused. */
+  save: () => Promise<'sent' | 'kept' | null>
+  end: (reason: string) => Promise<boolean>
+  reopen: () => Promise<boolean>
+}
+
+function emptyStep(): StepDraft {
+  const { method, components, water } = draftOfPlan({ method: 'foliar', materialId: '', basis: { kind: 'ratio', parts: '20', reading: 'to' }, water: null })
+  return {
+    id: newId(), method, component: components[0] as ComponentDraft, water: { ...water, sizedFrom: '' }, blockIds: [], everyDays: '14', firstOn: null, lastOn: null, earlyDays: '2', lateDays: '4',
+  }
+}
+
+function draftOfStep(step: SeasonPlan['steps'][number]): StepDraft {
+  const { components, water } = draftOfPlan(step)
+  return {
+    id: step.id, method: step.method, component: components[0] as ComponentDraft, water: step.water === null ? { ...water, sizedFrom: '' } : water, blockIds: [...step.blockIds],
+    everyDays: String(step.everyDays), firstOn: step.firstOn, lastOn: step.lastOn, earlyDays: String(step.earlyDays), lateDays: String(step.lateDays),
+  }
+}
+
+/** The form of a season plan: a new one, or one that is there. */
+export function usePlanForm(was: SeasonPlan | null): PlanForm {
+  const session = useSession()
+  const { submit } = useSubmit()
+  const { problem } = useMessages()
+  const schemaErrors = useSchemaErrors()
+  const id = was?.id ?? newId()
+  const draft = reactive<PlanForm['draft']>({ name: was?.name ?? '', note: was?.note ?? '', steps: was === null ? [emptyStep()] : was.steps.map(draftOfStep) })
+  const own = ref<Record<string, string>>({})
+  const task = useTask((command: Parameters<typeof submit>[0]) => submit(command))
+  const refused = computed(() => fieldErrors(task.error.value))
+  const revision = was?.revision ?? 1
+
+  async function save(): Promise<'sent' | 'kept' | null> {
+    if (task.running.value) return null
+    task.error.value = null
+    const content = { name: draft.name, note: draft.note.trim() === '' ? null : draft.note, steps: draft.steps.map(stepBody) }
+    const body = was === null ? { id, ...content } : { revision, ...content }
+    own.value = schemaErrors(was === null ? createPlanSchema : updatePlanSchema, body)
+    if (Object.keys(own.value).length > 0) return null
+    return (await task.run({ kind: was === null ? 'plan.create' : 'plan.update', farmId: session.farmId, id, body } as Parameters<typeof submit>[0]))?.state ?? null
+  }
+  const act = async (command: Parameters<typeof submit>[0]): Promise<boolean> => (await task.run(command)) !== undefined
+
+  return {
+    draft, busy: task.running, save,
+    errors: computed(() => ({ ...refused.value, ...own.value })),
+    refusal: computed(() => (task.error.value === null || Object.keys(refused.value).length > 0 ? '' : problem(task.error.value))),
+    addStep: () => { draft.steps.push({ ...emptyStep(), blockIds: [...(draft.steps.at(-1)?.blockIds ?? [])] }) },
+    removeStep: (index) => { draft.steps.splice(index, 1) },
+    end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id, body: { revision, reason } }),
+    reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id, body: { revision } }),
+  }
+}
+
+function stepBody(step: StepDraft): object {
+  const { kind, value, unit, each, reading, materialId } = step.component
+  const figure = numberOf(value)
+  const basis = kind === 'ratio' ? { kind, parts: figure, reading } : kind === 'perEach' ? { kind, value: figure, unit, each } : { kind, value: figure, unit }
+  return {
+    id: step.id, method: step.method, materialId, basis, water: waterBody(step), blockIds: step.blockIds, everyDays: wholeOf(step.everyDays),
+    firstOn: step.firstOn ?? '', lastOn: step.lastOn ?? '', earlyDays: wholeOf(step.earlyDays), lateDays: wholeOf(step.lateDays),
+  }
+}
+
+function waterBody({ method, water }: StepDraft): object | null {
+  if (water.sizedFrom === '' || method === 'solid') return null
+  const source = water.source.trim() === '' ? null : water.source
+  if (water.sizedFrom === 'none') return { sizedFrom: 'none' }
+  const typed = { sizedFrom: water.sizedFrom, value: numberOf(water.value), unit: water.unit, source }
+  return water.sizedFrom === 'perEach' ? { ...typed, each: water.each } : typed
+}
+
+/** The whole number of a text, or what stands there so that the contract says what is wrong with it. */
+function wholeOf(text: string): number | string {
+  const read = numberOf(text)
+  return read === '' ? text : Number(read)
+}

@@ -1,0 +1,103 @@
+import { keepPreviousData, useQuery } from '@tanstack/vue-query'
+import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import type { Block } from '../../shared/contract/block.ts'
+import type { Job, SeasonSheet } from '../../shared/contract/job.ts'
+import type { SeasonPlan } from '../../shared/contract/seasonPlan.ts'
+import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
+import { addDays } from '../../shared/time/calendar.ts'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import type { SheetMarks } from '../../shared/season/sheetPaths.ts'
+import { roundApi } from '../api/roundApi.ts'
+import { useSession } from '../stores/session.ts'
+import { readThrough } from './readThrough.ts'
+import { useBlocks } from './useBlocks.ts'
+import { useFarm } from './useFarm.ts'
+import { useFarmRead } from './useFarmRead.ts'
+
+export type SheetWork = SeasonSheet['works'][number] & { heldTo: string | null }
+
+/** A block's row of the sheet: what is on it. */
+export interface SheetRow {
+  block: Block
+  jobs: Job[]
+  works: SheetWork[]
+  harvests: { from: string; to: string }[]
+  /** Another kind of block begins: a firmer line over it. */
+  isFirstOfKind: boolean
+}
+
+export interface Sheet {
+  query: { isError: Ref<boolean>; error: Ref<Error | null>; refetch: () => unknown }
+  ready: ComputedRef<boolean>
+  season: ComputedRef<number | null>
+  turn: (seasons: number) => void
+  span: ComputedRef<SeasonSpan | null>
+  today: ComputedRef<string | null>
+  rows: ComputedRef<SheetRow[]>
+  marks: ComputedRef<SheetMarks>
+  plans: ComputedRef<SeasonPlan[]>
+  /** Empty: all of them. */
+  planId: Ref<string>
+  /** All jobs of the span, whichever plan is shown. */
+  jobs: ComputedRef<Job[]>
+}
+
+/** Plans of the farm; a certifier may not read them and does not ask. */
+export function usePlans(): ReturnType<typeof useFarmRead<SeasonPlan[]>> {
+  const session = useSession()
+  return useFarmRead('season-plans', () => session.farmId, (id) => roundApi.plans(id), () => session.isOfFarm)
+}
+
+/** A season of the open farm as its sheet shows it. */
+export function useSeasonSheet(): Sheet {
+  const session = useSession()
+  const { data: farm } = useFarm(() => session.farmId)
+  const { data: blocks } = useBlocks(() => session.farmId)
+  const plans = usePlans()
+  const turned = ref(0)
+  const planId = ref('')
+  const season = computed(() => (farm.value === undefined ? null : farm.value.currentSeason + turned.value))
+  const span = computed(() => (farm.value === undefined || season.value === null ? null : seasonSpan(season.value, farm.value.seasonStart)))
+  const query = useQuery({
+    queryKey: ['season-sheet', () => session.farmId, () => span.value?.from],
+    enabled: () => span.value !== null && session.isOfFarm,
+    placeholderData: keepPreviousData,
+    queryFn: () => {
+      const asked = span.value ?? { from: '', to: '' }
+      return readThrough(`${session.farmId}/season-sheet/${asked.from}`, session.user?.id ?? '', () => roundApi.sheet(session.farmId, asked))
+    },
+  })
+  const jobs = computed(() => query.data.value?.jobs ?? [])
+  const shown = computed(() => (planId.value === '' ? jobs.value : jobs.value.filter((job) => job.planId === planId.value)))
+  const works = computed<SheetWork[]>(() => (query.data.value?.works ?? []).map((work) => ({ ...work, heldTo: heldTo(work, farm.value?.zone ?? 'UTC') })))
+
+  const rows = computed<SheetRow[]>(() => (blocks.value ?? []).map((block, index, all) => ({
+    block,
+    jobs: shown.value.filter(({ blockId }) => blockId === block.id),
+    works: works.value.filter(({ blockId }) => blockId === block.id),
+    harvests: (query.data.value?.harvests ?? []).filter(({ blockId }) => blockId === block.id),
+    isFirstOfKind: index > 0 && kindOf(block) !== kindOf(all[index - 1]),
+  })))
+  return {
+    query, season, span, rows, planId, jobs,
+    ready: computed(() => query.data.value !== undefined && blocks.value !== undefined && plans.data.value !== undefined),
+    turn: (seasons) => { turned.value += seasons },
+    today: computed(() => query.data.value?.today ?? null),
+    plans: computed(() => plans.data.value ?? []),
+    marks: computed(() => ({
+      works: rows.value.flatMap((row, index) => row.works.map((work) => ({ ...work, row: index }))),
+      jobs: rows.value.flatMap((row, index) => row.jobs.map((job) => ({ ...job, row: index }))),
+      harvests: rows.value.flatMap((row, index) => row.harvests.map((harvest) => ({ ...harvest, row: index }))),
+    })),
+  }
+}
+
+/** Blocks are coded by kind: A1, A2, then P1. */
+const kindOf = (block: Block | undefined): string => /^\p{L}*/u.exec(block?.code ?? '')?.[0] ?? ''
+
+/** Last civil day on which the label of what was put on keeps people out or picking back; null where it does neither beyond the day itself. */
+function heldTo({ on, pickFrom, reEntryUntil }: SeasonSheet['works'][number], zone: string): string | null {
+  const days = [...(pickFrom === null ? [] : [addDays(pickFrom, -1)]), ...(reEntryUntil === null ? [] : [civilDateIn(zone, reEntryUntil)])].sort()
+  const last = days.at(-1)
+  return last === undefined || last <= on ? null : last
+}
