@@ -16,6 +16,7 @@ import { seedGrowing, seedRedrawn } from './seedGrowing.ts'
 import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
 import { seedCalibrations, seedSprayers } from './seedSprayers.ts'
+import { seedRounds } from './seedRounds.ts'
 
 const DAY_MS = 86_400_000
 /** History begins this long before the demo is opened. */
@@ -58,6 +59,7 @@ export async function seedDemo(services: Services, password: string): Promise<De
   await seedFarm(services, manager)
   const lots = await seedInputs(services, manager)
   await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
+  await seedRounds(services, { manager, blocks, lots })
   await seedRedrawn(services, manager, blocks.get('L1') ?? '')
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
   await services.database.inHouse((tx) => tx.query('INSERT INTO demo_seed (demo_farm_id, demo_neighbour_id) VALUES ($1, $2)', [farm.id, neighbourFarmId]))

@@ -1,5 +1,6 @@
 import type { Job } from './job.ts'
 import { sendLetters } from './sendLetters.ts'
+import { tellJobsDue } from './tellJobsDue.ts'
 
 /** All timed work. */
-export const JOBS: readonly Job[] = [sendLetters]
+export const JOBS: readonly Job[] = [sendLetters, tellJobsDue]

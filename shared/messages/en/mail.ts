@@ -22,4 +22,13 @@ export const mail = {
     until: 'The link works once, until {untilOn}.',
     stranger: 'If you do not know this farm, leave the letter alone: nothing happens without you.',
   },
+  jobsDue: {
+    subject: '{farm}: due today, {dueCount}',
+    subjectLate: '{farm}: late {lateCount}, due {dueCount}',
+    text: 'On {farm}, {todayOn}, these jobs of the season plans wait:',
+    late: 'Late: {preparation}',
+    due: 'Due: {preparation}',
+    action: 'Open the season sheet',
+    why: 'You get this because you lead the farm. It comes once a day, and not at all when nothing is due.',
+  },
 }

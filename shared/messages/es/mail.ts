@@ -22,4 +22,13 @@ export const mail = {
     until: 'El enlace sirve una sola vez, hasta el {untilOn}.',
     stranger: 'Si no conoce esta finca, no haga nada: sin usted no ocurre nada.',
   },
+  jobsDue: {
+    subject: '{farm}: pendientes hoy, {dueCount}',
+    subjectLate: '{farm}: atrasadas {lateCount}, pendientes {dueCount}',
+    text: 'En {farm}, {todayOn}, estas tareas de los planes de campaña esperan:',
+    late: 'Atrasada: {preparation}',
+    due: 'Pendiente: {preparation}',
+    action: 'Abrir la hoja de campaña',
+    why: 'Lo recibe porque dirige la finca. Llega una vez al día, y no llega cuando no hay nada pendiente.',
+  },
 }

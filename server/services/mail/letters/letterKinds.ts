@@ -1,9 +1,10 @@
 import type { z } from 'zod'
 import { grant } from './grant.ts'
 import { invitation } from './invitation.ts'
+import { jobsDue } from './jobsDue.ts'
 
 /** Every kind of letter, by the name under which it stands in the outbox. */
-export const LETTER_KINDS = { grant, invitation }
+export const LETTER_KINDS = { grant, invitation, jobsDue }
 
 export type LetterName = keyof typeof LETTER_KINDS
 
