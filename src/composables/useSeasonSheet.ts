@@ -58,8 +58,10 @@ export function useSeasonSheet(): Sheet {
   const planId = ref('')
   const season = computed(() => (farm.value === undefined ? null : farm.value.currentSeason + turned.value))
   const span = computed(() => (farm.value === undefined || season.value === null ? null : seasonSpan(season.value, farm.value.seasonStart)))
+  const farmId = computed(() => session.farmId)
+  const from = computed(() => span.value?.from ?? '')
   const query = useQuery({
-    queryKey: ['season-sheet', () => session.farmId, () => span.value?.from],
+    queryKey: ['season-sheet', farmId, from],
     enabled: () => span.value !== null && session.isOfFarm,
     placeholderData: keepPreviousData,
     queryFn: () => {

@@ -39,7 +39,7 @@ export function useSheetScroll({ box, days, dayWidth, stretch }: SheetScrollOpti
     onScroll()
   }
 
-  const names = (at: HTMLElement): number => at.querySelector<HTMLElement>('.names')?.offsetWidth ?? 0
+  const names = (at: HTMLElement): number => at.querySelector<HTMLElement>('.sheet-names')?.offsetWidth ?? 0
   const watcher = new ResizeObserver(onScroll)
   onMounted(() => { if (box.value !== null) watcher.observe(box.value); onScroll() })
   onScopeDispose(() => { watcher.disconnect() })

@@ -68,6 +68,7 @@ export const rounds = {
   },
   agenda: {
     late: 'Late', today: 'Today, {day}', empty: 'Nothing to do in the next eight weeks.', done: 'Done and skipped lately', doneNone: 'Nothing in the last two weeks.',
+    since: 'since {day}',
     until: 'until {day}',
   },
   plans: {

@@ -69,6 +69,7 @@ export const rounds: Messages['rounds'] = {
   },
   agenda: {
     late: 'Atrasadas', today: 'Hoy, {day}', empty: 'Nada que hacer en las próximas ocho semanas.', done: 'Hechas y saltadas hace poco', doneNone: 'Nada en las últimas dos semanas.',
+    since: 'desde el {day}',
     until: 'hasta el {day}',
   },
   plans: {

@@ -40,6 +40,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'record', path: `/register/${record.id}` },
     { name: 'new record', path: '/register/new' },
     { name: 'inputs', path: '/inputs' },
+    { name: 'season sheet', path: '/rounds' },
+    { name: 'new season plan', path: '/rounds/plans/new' },
     { name: 'farm', path: '/farm' },
     { name: 'people of the farm', path: '/farm/people' },
     { name: 'sprayers', path: '/farm/sprayers' },
