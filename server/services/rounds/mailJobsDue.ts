@@ -51,10 +51,12 @@ function tellFarm(services: Pick<Services, 'clock' | 'config' | 'database'>, { f
   })
 }
 
-async function readLeaders(manager: EntityManager, farmId: string): Promise<Pick<Account, 'email' | 'name' | 'language'>[]> {
+async function readLeaders(manager: EntityManager, farmId: string): Promise<(Pick<Account, 'name' | 'language'> & { email: string })[]> {
   const leaders = await manager.find(Person, { select: { accountId: true }, where: { farmId, active: true, role: In(['owner', 'manager']) } })
   const ids = leaders.flatMap(({ accountId }) => accountId ?? [])
-  return manager.find(Account, { select: { email: true, name: true, language: true }, where: { id: In(ids), deactivatedAt: IsNull() }, order: { email: 'ASC' } })
+  const accounts = await manager.find(Account, { select: { email: true, name: true, language: true }, where: { id: In(ids), deactivatedAt: IsNull() }, order: { email: 'ASC' } })
+  // Whoever has no address signs in on a phone of the farm, and sees the jobs there.
+  return accounts.flatMap(({ email, name, language }) => (email === null ? [] : [{ email, name, language }]))
 }
 
 /** A preparation and the blocks it is due on, in the order of their codes. */
