@@ -9,6 +9,7 @@ import { watchPages } from './support/watchPage.ts'
 import { say, saying } from './support/words.ts'
 
 test('opens every screen without one violation of the policy, error or lost file', async ({ page, context, manager }) => {
+  test.slow()
   const found = await watchPages(context)
   let who: string | null = null
   for (const screen of await listScreens(manager)) {

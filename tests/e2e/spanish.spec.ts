@@ -31,6 +31,7 @@ async function englishOn(page: Page): Promise<string[]> {
 }
 
 test('in Spanish no screen keeps an English word', async ({ page, isPhone, signInAs, manager }) => {
+  test.slow()
   const screens = await listScreens(manager)
   await page.goto('/signin')
   await page.getByRole('button', { name: say('frame.moreSheet.spanish') }).click()

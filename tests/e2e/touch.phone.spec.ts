@@ -50,6 +50,7 @@ test('a thumb meets everything of the main flow', async ({ page, isPhone, signIn
 })
 
 test('nothing is cut off or scrolls sideways at 390 and at 320', async ({ page, context, manager }) => {
+  test.slow()
   const found: string[] = []
   for (const { name, who, path } of await listScreens(manager)) {
     if (who !== null) await signInTo(context.request, who)
