@@ -113,7 +113,7 @@ export const shapes = {
     bannerNone: '{code}: draw the line',
     clear: 'Clear the line',
     add: 'Add point',
-    lineFirst: 'Split: draw the line first',
+    lineFirst: 'Draw the line first',
   },
   merge: {
     title: 'Merge blocks',

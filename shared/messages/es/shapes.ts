@@ -112,7 +112,7 @@ export const shapes = {
     banner: '{code}: {count} trozos | {code}: {count} trozos',
     bannerNone: '{code}: trace la línea',
     add: 'Añadir punto',
-    lineFirst: 'Dividir: dibuje antes la línea',
+    lineFirst: 'Dibuje antes la línea',
     clear: 'Borrar la línea',
   },
   merge: {
