@@ -28,9 +28,9 @@ export async function makePerson(
 /** Lets a certifier read seasons of a farm until a civil day. @returns the grant's id. */
 export async function makeGrant(
   manager: EntityManager,
-  { farmId, accountId, seasons, endsOn, createdAt }: Pick<Grant, 'farmId' | 'accountId' | 'seasons' | 'endsOn' | 'createdAt'>,
+  { farmId, accountId, seasons, endsOn, createdAt, organisation = '' }: Pick<Grant, 'farmId' | 'accountId' | 'seasons' | 'endsOn' | 'createdAt'> & Partial<Pick<Grant, 'organisation'>>,
 ): Promise<string> {
   const id = uuidV7()
-  await manager.insert(Grant, { farmId, id, accountId, seasons, endsOn, createdAt })
+  await manager.insert(Grant, { farmId, id, accountId, organisation, seasons, endsOn, createdAt })
   return id
 }

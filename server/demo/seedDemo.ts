@@ -17,6 +17,7 @@ import { seedInputs } from './seedInputs.ts'
 import { seedRecords } from './seedRecords.ts'
 import { seedCalibrations, seedSprayers } from './seedSprayers.ts'
 import { seedRounds } from './seedRounds.ts'
+import { seedTaken } from './seedTaken.ts'
 
 const DAY_MS = 86_400_000
 /** History begins this long before the demo is opened. */
@@ -60,6 +61,7 @@ export async function seedDemo(services: Services, password: string): Promise<De
   const lots = await seedInputs(services, manager)
   await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
   await seedRounds(services, { manager, blocks, lots })
+  await seedTaken(services, await actorOf(services, ids.certifier, farm.id))
   await seedRedrawn(services, manager, blocks.get('L1') ?? '')
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
   await services.database.inHouse((tx) => tx.query('INSERT INTO demo_seed (demo_farm_id, demo_neighbour_id) VALUES ($1, $2)', [farm.id, neighbourFarmId]))
@@ -90,7 +92,7 @@ async function makePeople(services: Services, farmId: string, ids: Record<Accoun
   return services.database.inFarm({ farmId, seasons: null }, async (manager) => {
     await makePerson(manager, { farmId, name: ACCOUNTS.manager.name, role: 'manager', accountId: ids.manager, createdAt })
     await makePerson(manager, { farmId, name: ACCOUNTS.applicator.name, role: 'applicator', accountId: ids.applicator, createdAt })
-    await makeGrant(manager, { farmId, accountId: ids.certifier, seasons: [season], endsOn, createdAt })
+    await makeGrant(manager, { farmId, accountId: ids.certifier, organisation: 'Oaklode Review', seasons: [season], endsOn, createdAt })
     return makePerson(manager, { farmId, name: 'Ruan Teal', role: 'applicator', accountId: null, createdAt })
   })
 }

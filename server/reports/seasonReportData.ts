@@ -1,3 +1,4 @@
+import type { Certificate } from '../../shared/contract/farmProfile.ts'
 import type { Boundary } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { BlockSummary, SeasonFigures } from '../../shared/season/summaryTypes.ts'
@@ -27,8 +28,8 @@ interface SeasonPart {
 
 /** All that a volume of the season report shows: plain data, no clock, no database. */
 export interface SeasonReportData extends SeasonPart {
-  /** Facts of the certificate by their names, as the farm wrote them; empty where none is written. */
-  certificate: { label: string; value: string }[]
+  /** As the farm wrote it down; null where it did not. */
+  certificate: Certificate | null
   /** First and last civil day of the season. */
   span: { from: string; to: string }
   figures: SeasonFigures

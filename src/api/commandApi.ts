@@ -6,6 +6,7 @@ import { blocksImportedSchema } from '../../shared/contract/blockImport.ts'
 import { calibrationSchema } from '../../shared/contract/calibration.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
+import { grantSchema } from '../../shared/contract/grant.ts'
 import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
 import { jobSchema } from '../../shared/contract/job.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
@@ -71,6 +72,9 @@ const DOORS: Record<CommandKind, Door> = {
   'job.skip': { method: 'post', path: (farmId, id) => `/farms/${farmId}/jobs/${id}/skip`, answer: jobSchema },
   'job.unskip': { method: 'post', path: (farmId, id) => `/farms/${farmId}/jobs/${id}/unskip`, answer: jobSchema },
   'filter.keep': { method: 'post', path: (farmId) => `/farms/${farmId}/saved-filters`, answer: savedFilterSchema },
+  'grant.give': { method: 'post', path: (farmId) => `/farms/${farmId}/grants`, answer: grantSchema },
+  'grant.change': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/grants/${id}`, answer: grantSchema },
+  'grant.end': { method: 'post', path: (farmId, id) => `/farms/${farmId}/grants/${id}/end`, answer: grantSchema },
   'filter.forget': { method: 'del', path: (farmId, id) => `/farms/${farmId}/saved-filters/${id}`, answer: z.undefined() },
 }
 

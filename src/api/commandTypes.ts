@@ -7,6 +7,7 @@ import type { Calibration, createCalibrationSchema, retireSprayerSchema, withdra
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer, updateSprayerSchema } from '../../shared/contract/farm.ts'
 import type { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
 import type { createFarmEventSchema, FarmEvent, withdrawFarmEventSchema } from '../../shared/contract/farmEvent.ts'
+import type { changeGrantSchema, endGrantSchema, giveGrantSchema, Grant } from '../../shared/contract/grant.ts'
 import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
 import type { Job, moveJobSchema, skipJobSchema, unskipJobSchema } from '../../shared/contract/job.ts'
@@ -57,6 +58,9 @@ export interface CommandBodies {
   'record.sign': z.input<typeof signRecordSchema>
   'filter.keep': z.input<typeof createSavedFilterSchema>
   'filter.forget': Record<string, never>
+  'grant.give': z.input<typeof giveGrantSchema>
+  'grant.change': z.input<typeof changeGrantSchema>
+  'grant.end': z.input<typeof endGrantSchema>
   'record.signMany': z.input<typeof signManySchema>
   'record.amend': z.input<typeof amendRecordSchema>
   'record.withdraw': z.input<typeof withdrawRecordSchema>
@@ -108,6 +112,9 @@ export interface CommandAnswers {
   'record.sign': ApplicationRecord
   'filter.keep': SavedFilter
   'filter.forget': undefined
+  'grant.give': Grant
+  'grant.change': Grant
+  'grant.end': Grant
   'record.signMany': SignManyAnswer
   'record.amend': ApplicationRecord
   'record.withdraw': ApplicationRecord

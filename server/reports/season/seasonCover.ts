@@ -40,13 +40,27 @@ export function drawSeasonCover(flow: Flow, part: Element, data: SeasonReportDat
   if (data.rows.length === 0) drawParagraph(flow, part, say('empty'), STYLES.head)
 }
 
-function farmFacts({ farm, certificate, isRunning, span, printedAt }: SeasonReportData, { say, day }: SeasonWords): Fact[] {
+function farmFacts({ farm, certificate, isRunning, span, printedAt }: SeasonReportData, words: SeasonWords): Fact[] {
+  const { say, day } = words
   const days = { from: day(span.from), to: day(span.to) }
   return [
     fact(say('cover.farm'), farm.name),
-    ...(certificate.length === 0 ? [fact(say('cover.certificate'), say('cover.noCertificate'))] : certificate.map(({ label, value }) => fact(label, value))),
+    ...certificateFacts(certificate, words),
     fact(say('cover.season'), isRunning ? say('cover.seasonOn', { ...days, today: day(civilDateIn(farm.zone, printedAt)) }) : say('cover.seasonText', days)),
     fact(say('cover.zone'), say('cover.zoneText', { zone: farm.zone })),
+  ]
+}
+
+/** The certificate as the farm wrote it down; when it runs out is said with it. */
+function certificateFacts(certificate: SeasonReportData['certificate'], { say, day }: SeasonWords): Fact[] {
+  if (certificate === null) return [fact(say('cover.certificate'), say('cover.noCertificate'))]
+  const { number, body, scope, issuedOn, expiresOn } = certificate
+  const days = [
+    ...(issuedOn === null ? [] : [say('cover.issued', { day: day(issuedOn) })]), expiresOn === null ? say('cover.noExpiry') : say('cover.expires', { day: day(expiresOn) }),
+  ]
+  return [
+    fact(say('cover.certificate'), say('cover.certificateText', { number, body, days: days.join(', ') })),
+    ...(scope === null ? [] : [fact(say('cover.scope'), scope)]),
   ]
 }
 

@@ -40,7 +40,7 @@ export function summaryTable(canvas: Canvas, data: SeasonReportData, words: Seas
   const rows = blocks.map((block, index): TableRow => ({
     hasHead: true,
     cells: [
-      [{ text: block.blockId === '' ? words.say('notShared') : block.code, style: bold }, { text: block.crop === null ? '' : `  ${block.crop}`, style: regular }],
+      [{ text: block.blockId === '' ? words.say('notShared') : block.code, style: bold }, { text: block.crop === null ? '' : `  ${block.crop.split(',')[0] ?? ''}`, style: regular }],
       ...set.map(({ cells }) => [{ text: cells[index] ?? '', style: regular }]),
       [],
       [{ text: block.lastOn === null ? '' : short(block.lastOn), style: regular }],

@@ -9,6 +9,7 @@ import type { BlockSummary, SeasonSummary } from '../../../shared/season/summary
 import { addDays } from '../../../shared/time/calendar.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
+import { Farm } from '../../entities/Farm.ts'
 import type { SeasonReportData, SummaryBlock } from '../../reports/seasonReportData.ts'
 import { publicAddress } from '../publicAddress.ts'
 import { collectVolume, countVolumes } from '../register/collectRegisterReport.ts'
@@ -42,11 +43,16 @@ export async function collectSeasonReport(services: Services, actor: FarmActor, 
     farm: { name: actor.farmName, zone: actor.zone },
     ...(await describeSeason(services, reader, season)),
     language, volume, volumes, rows, figures,
-    certificate: [],
+    certificate: await readCertificate(services, reader),
     span: seasonSpan(season, actor.seasonStart),
     blocks: volume === 1 ? await describeBlocks(services, reader, blocks) : [],
     checkPage: `${publicAddress(services.config)}/check`.replace(/^https?:\/\//, ''),
   }
+}
+
+async function readCertificate(services: Services, reader: FarmActor): Promise<SeasonReportData['certificate']> {
+  const farm = await services.database.inFarm(reader, (manager) => manager.findOneOrFail(Farm, { select: { id: true, certificate: true }, where: { id: reader.farmId } }))
+  return farm.certificate
 }
 
 async function addUpSeason(services: Services, reader: FarmActor, season: number): Promise<SeasonSummary> {

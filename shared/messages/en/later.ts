@@ -1,6 +1,7 @@
 import { blocks } from './blocks.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
+import { grants } from './grants.ts'
 import { ground } from './ground.ts'
 import { growing } from './growing.ts'
 import { importing } from './importing.ts'
@@ -15,5 +16,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, farm, files, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, farm, files, grants, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
 }

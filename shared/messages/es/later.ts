@@ -2,6 +2,7 @@ import type { LaterScreens } from '../en.ts'
 import { blocks } from './blocks.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
+import { grants } from './grants.ts'
 import { ground } from './ground.ts'
 import { growing } from './growing.ts'
 import { importing } from './importing.ts'
@@ -16,5 +17,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, farm, files, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, farm, files, grants, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
 }

@@ -14,4 +14,6 @@ export const farmTabs: readonly FarmTab[] = [
   { route: 'farm', words: 'farm.profile', roles: FARM_PEOPLE },
   { route: 'farm-people', words: 'farm.people', roles: FARM_PEOPLE },
   { route: 'farm-sprayers', words: 'farm.sprayers', roles: FARM_PEOPLE },
+  { route: 'farm-grants', words: 'grants.title', roles: ['owner'] },
+  { route: 'farm-journal', words: 'journal.title', roles: ['owner', 'manager'] },
 ]

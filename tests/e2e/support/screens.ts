@@ -52,6 +52,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
   return [
     ...open.map((screen) => ({ ...screen, who: null })),
     ...ofManager.map((screen) => ({ ...screen, who: 'manager' as const })),
+    { name: 'grants', who: 'owner', path: '/farm/grants' },
+    { name: 'journal', who: 'manager', path: '/farm/journal' },
     { name: 'my farms', who: 'certifier', path: '/farms' },
   ]
 }

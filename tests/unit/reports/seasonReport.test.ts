@@ -45,6 +45,12 @@ describe('a season on paper', () => {
     expect(pages.join(' ')).not.toContain('Resumen por parcela')
   })
 
+  it('prints the certificate as the farm wrote it down, and that no last day is', async () => {
+    const { pages } = readPdf(await draw({ certificate: { number: 'OR-118', body: 'Oaklode Review', scope: 'Apples and pears', issuedOn: '2026-01-05', expiresOn: null } }))
+    expect(plain(pages[0])).toContain('OR-118, Oaklode Review, issued 5 January 2026, no last day written down, as the farm wrote it down')
+    expect(plain(pages[0])).toContain('Apples and pears')
+  })
+
   it('says that a season without records has none', async () => {
     const { pages } = readPdf(await draw({ rows: [], blocks: [], head: null, figures: { ...buildSeasonReportData().figures, signed: 0, first: null, last: null, from: null, to: null, withdrawn: [] } }))
     expect(pages).toHaveLength(1)
