@@ -24,7 +24,7 @@ export const start = {
   },
   place: {
     latitude: 'Latitud', longitude: 'Longitud', hint: 'En grados; norte y este sobre cero: 44.6118 y -123.3142', map: 'Dónde está la finca',
-    mapHint: 'Pulse en el mapa, o muévalo con las flechas: con el botón se toma lo que está en su centro.', middle: 'Tomar el centro del mapa',
+    mapHint: 'Pulse en el mapa donde está la finca, o mueva la cruz con las flechas y fíjela con la barra espaciadora.', middle: 'Tomar el centro del mapa',
     latitudeWrong: 'Un número de -90 a 90.', longitudeWrong: 'Un número de -180 a 180.', kept: 'Desde ahora el mapa se abre ahí.',
   },
   profile: { kept: 'Campaña y unidades guardadas.' },
