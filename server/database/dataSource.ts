@@ -12,6 +12,7 @@ import { WholeBlocks1764610000000 } from '../../migrations/1764610000000-WholeBl
 import { AddGround1764620000000 } from '../../migrations/1764620000000-AddGround.ts'
 import { WholeFarm1764642000000 } from '../../migrations/1764642000000-WholeFarm.ts'
 import { WholeGrants1764643000000 } from '../../migrations/1764643000000-WholeGrants.ts'
+import { AddInvitations1764640001000 } from '../../migrations/1764640001000-AddInvitations.ts'
 import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
 import { WholePeople1764641000000 } from '../../migrations/1764641000000-WholePeople.ts'
@@ -55,6 +56,7 @@ export function createOwnerSource(url: string): DataSource {
       AddGround1764620000000,
       SayWhatReplaced1764630000000,
       AddMail1764640000000,
+      AddInvitations1764640001000,
       WholePeople1764641000000,
       WholeFarm1764642000000,
       WholeGrants1764643000000,

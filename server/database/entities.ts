@@ -13,6 +13,7 @@ import { FarmHead } from '../entities/FarmHead.ts'
 import { Grant } from '../entities/Grant.ts'
 import { GroundFeature } from '../entities/GroundFeature.ts'
 import { JobDigest } from '../entities/JobDigest.ts'
+import { Invitation } from '../entities/Invitation.ts'
 import { JournalEntry } from '../entities/JournalEntry.ts'
 import { Letter } from '../entities/Letter.ts'
 import { Lot } from '../entities/Lot.ts'
@@ -31,6 +32,7 @@ import { RecordTerm } from '../entities/RecordTerm.ts'
 import { RecordVersion } from '../entities/RecordVersion.ts'
 import { RecoveryCode } from '../entities/RecoveryCode.ts'
 import { RegisterEntry } from '../entities/RegisterEntry.ts'
+import { ResetAsk } from '../entities/ResetAsk.ts'
 import { SavedFilter } from '../entities/SavedFilter.ts'
 import { SeasonCounter } from '../entities/SeasonCounter.ts'
 import { SeasonHead } from '../entities/SeasonHead.ts'
@@ -56,6 +58,7 @@ export const ENTITIES = [
   Grant,
   GroundFeature,
   JobDigest,
+  Invitation,
   JournalEntry,
   Letter,
   Lot,
@@ -74,6 +77,7 @@ export const ENTITIES = [
   RecordVersion,
   RecoveryCode,
   RegisterEntry,
+  ResetAsk,
   SavedFilter,
   SeasonCounter,
   SeasonHead,

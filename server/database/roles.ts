@@ -44,6 +44,8 @@ export const APP_RIGHTS: Record<string, string> = {
   job_digests: 'SELECT, INSERT',
   journal: 'SELECT, INSERT',
   season_heads: 'SELECT, INSERT',
+  invitations: 'SELECT, INSERT, UPDATE',
+  reset_asks: 'SELECT, INSERT, UPDATE',
   letters: 'SELECT, INSERT, UPDATE (params, state, tries, next_try_at, claimed_until, sent_at, last_fault)',
   demo_seed: 'SELECT, INSERT',
 }

@@ -1,12 +1,8 @@
 import { z } from 'zod'
 import { configSchema } from '../../shared/contract/config.ts'
 import { checkCodeAnswerSchema } from '../../shared/contract/record.ts'
-import { passwordSchema } from '../../shared/contract/session.ts'
-import { lineText } from '../../shared/contract/text.ts'
 import { notFound } from '../errors.ts'
-import { logSecurity } from '../middleware/logSecurity.ts'
 import { findCheckCode } from '../services/findCheckCode.ts'
-import { acceptWelcome, readWelcome } from '../services/welcome.ts'
 import { defineRoute } from './defineRoute.ts'
 
 const wholeNumber = (max: number) => z.string().regex(/^\d{1,7}$/).transform(Number).pipe(z.number().max(max))
@@ -22,27 +18,12 @@ export const openRoutes = [
   defineRoute({
     method: 'get', path: '/config', summary: 'What this server offers to its pages.', roles: 'everybody',
     answer: configSchema,
-    run: async ({ services }) => ({ body: { imagery: services.tiles && { attribution: services.tiles.attribution, maxZoom: services.tiles.maxZoom }, demo: services.config.demo !== null } }),
+    run: async ({ services }) => ({ body: { imagery: services.tiles && { attribution: services.tiles.attribution, maxZoom: services.tiles.maxZoom }, demo: services.config.demo !== null, keepsMail: services.keptMail !== null } }),
   }),
   defineRoute({
     method: 'get', path: '/check/:code', summary: 'Whether a signed entry stands under a check code.', roles: 'everybody',
     params: z.strictObject({ code: z.string().max(80) }), answer: checkCodeAnswerSchema,
     run: async ({ services, params }) => ({ body: await findCheckCode(services, params.code) }),
-  }),
-  defineRoute({
-    method: 'get', path: '/welcome/:token', summary: 'Whom a one-time link is for.', roles: 'everybody',
-    params: z.strictObject({ token: z.string().max(80) }), answer: z.object({ email: z.string() }),
-    run: async ({ services, params }) => ({ body: await readWelcome(services, params.token) }),
-  }),
-  defineRoute({
-    method: 'post', path: '/welcome', summary: 'Spend a one-time link: take a name and a password.', roles: 'everybody',
-    guardsPassword: true, body: z.strictObject({ token: z.string().max(80), name: lineText(120), password: passwordSchema }),
-    answer: z.null(),
-    run: async ({ services, body, request }) => {
-      const accountId = await acceptWelcome(services, body)
-      logSecurity(services, request, 'password.changed', { accountId })
-      return { status: 204, body: null }
-    },
   }),
   defineRoute({
     method: 'get', path: '/tiles/:z/:x/:y', summary: 'A square of the imagery that this server is set up with.', roles: 'account',

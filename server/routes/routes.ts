@@ -7,6 +7,8 @@ import { groundRoutes } from './groundRoutes.ts'
 import { growingRoutes } from './growingRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
 import { journalRoutes } from './journalRoutes.ts'
+import { letterRoutes } from './letterRoutes.ts'
+import { linkRoutes } from './linkRoutes.ts'
 import { meRoutes } from './meRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { peopleRoutes } from './peopleRoutes.ts'
@@ -23,7 +25,7 @@ import { startRoutes } from './startRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
-  ...openRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
-  ...farmRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
+  ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
+  ...farmRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
   ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

@@ -1,76 +1,65 @@
-import { createHash, randomBytes } from 'node:crypto'
-import { IsNull, MoreThan, type EntityManager } from 'typeorm'
-import { v7 as uuidV7 } from 'uuid'
+import type { EntityManager } from 'typeorm'
+import type { Welcome } from '../../shared/contract/welcome.ts'
 import { Account } from '../entities/Account.ts'
-import { AccountToken } from '../entities/AccountToken.ts'
 import { AppError } from '../errors.ts'
+import { accountOf } from './accountOf.ts'
+import { describeInvitation, takeInvitation } from './invitations/takeInvitation.ts'
+import { endLinks, findLink, issueLink, spendLink } from './oneTimeLinks.ts'
 import { assertGoodPassword } from './passwordRules.ts'
 import { hashPassword } from './passwords.ts'
+import { tellOfPassword } from './mail/tellOfPassword.ts'
 import type { Services } from './services.ts'
+import { endSessionsOf } from './sessions/ownSessions.ts'
 
-const HOURS_VALID = 72
-
-type Parts = Pick<Services, 'clock' | 'database'>
-
-/** Makes the secret of an account's one-time link, in the caller's transaction. Only a digest is kept. @param hours how long it is good. */
-export async function issueWelcome({ clock }: Pick<Services, 'clock'>, manager: EntityManager, accountId: string, hours = HOURS_VALID): Promise<{ token: string; expiresAt: Date }> {
-  const token = randomBytes(32).toString('base64url')
-  const createdAt = clock.now()
-  const expiresAt = new Date(createdAt.getTime() + hours * 3_600_000)
-  await manager.insert(AccountToken, { tokenHash: hashToken(token), accountId, kind: 'welcome', createdAt, expiresAt, usedAt: null })
-  return { token, expiresAt }
-}
+type Parts = Pick<Services, 'clock' | 'config' | 'database'>
 
 /** Makes a one-time link's secret for an e-mail, and its account if there is none. */
-export async function inviteOwner(services: Parts, email: string): Promise<{ token: string; expiresAt: Date }> {
-  const createdAt = services.clock.now()
+export async function inviteOwner(services: Pick<Services, 'clock' | 'database'>, email: string): Promise<{ token: string; expiresAt: Date }> {
   return services.database.inHouse(async (manager) => {
-    const known = await manager.findOneBy(Account, { email: email.toLowerCase() })
-    const accountId = known?.id ?? uuidV7()
-    if (!known) {
-      await manager.insert(Account, { id: accountId, email: email.toLowerCase(), name: email, passwordHash: null, language: 'en', createdAt, deactivatedAt: null })
-    }
-    return issueWelcome(services, manager, accountId)
+    const { id: accountId } = await accountOf(services, manager, { email: email.toLowerCase(), name: email, language: 'en' })
+    return issueLink(services, manager, { accountId, kind: 'welcome' })
   })
 }
 
-/** Whom a link is for. @throws {AppError} `welcome.used_up` for a link that is spent, late or unknown: one text for all. */
-export async function readWelcome(services: Parts, token: string): Promise<{ email: string }> {
-  return services.database.inHouse(async (manager) => {
-    const found = await findToken(services, manager, token)
-    return { email: (await manager.findOneByOrFail(Account, { id: found.accountId })).email ?? '' }
-  })
+/** Whom a link is for, and onto which farm. @throws {AppError} `welcome.used_up`. */
+export async function readWelcome(services: Parts, token: string): Promise<Welcome> {
+  const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, token, ['welcome', 'invitation']))
+  const invitation = link.kind === 'invitation' ? await describeInvitation(services, link) : null
+  return { email: account.email ?? '', needsPassword: link.kind === 'welcome' || account.passwordHash === null, invitation }
 }
 
-/** Spends a link: the account takes its name and password; its other links and its sessions end. @returns the account's id. */
+/**
+ * Spends a link: the account takes its name and password, and the farm's invitation with them; its other links to a password and its
+ * sessions end. @returns the account's id.
+ * @throws {AppError} `welcome.used_up`, `welcome.has_account` for an invitation of somebody who signs in already, or a weak password.
+ */
 export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<string> {
-  const { accountId } = await services.database.inHouse((manager) => findToken(services, manager, input.token))
-  assertGoodPassword(input.password)
+  const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, input.token, ['welcome', 'invitation']))
+  if (link.kind === 'invitation' && account.passwordHash !== null) throw new AppError('conflict', 'welcome.has_account')
+  assertGoodPassword(input.password, { own: [account.email, input.name] })
   const passwordHash = await hashPassword(input.password)
-  return services.database.inHouse(async (manager) => {
-    const { tokenHash } = await findToken(services, manager, input.token)
-    const usedAt = services.clock.now()
-    const spent = await manager.update(AccountToken, { tokenHash, usedAt: IsNull() }, { usedAt })
-    if (spent.affected !== 1) throw usedUp()
-    await manager.update(AccountToken, { accountId, usedAt: IsNull() }, { usedAt })
-    await manager.update(Account, { id: accountId }, { name: input.name, passwordHash })
-    await manager.query("DELETE FROM sessions WHERE sess #>> '{passport,user}' = $1", [accountId])
-    return accountId
-  })
+  const work = async (manager: EntityManager): Promise<void> => {
+    await spendLink(services, manager, link)
+    await endLinks(services, manager, account.id, ['welcome', 'reset'])
+    await manager.update(Account, { id: account.id }, { name: input.name, passwordHash })
+    await endSessionsOf(manager, account.id)
+  }
+  if (link.kind === 'invitation') await takeInvitation(services, { link, account: { ...account, name: input.name } }, work)
+  else {
+    await services.database.inHouse(async (manager) => {
+      await work(manager)
+      if (account.passwordHash !== null) await tellOfPassword(services, manager, account)
+    })
+  }
+  return account.id
 }
 
-async function findToken(services: Parts, manager: EntityManager, token: string): Promise<AccountToken> {
-  const found = await manager.findOneBy(AccountToken, { tokenHash: hashToken(token), usedAt: IsNull(), expiresAt: MoreThan(services.clock.now()) })
-  if (!found) throw usedUp()
-  const isOpen = await manager.existsBy(Account, { id: found.accountId, deactivatedAt: IsNull() })
-  if (!isOpen) throw usedUp()
-  return found
-}
-
-function hashToken(token: string): string {
-  return createHash('sha256').update(token).digest('hex')
-}
-
-function usedUp(): AppError {
-  return new AppError('bad-request', 'welcome.used_up', { countsAsGuess: true })
+/**
+ * Takes an invitation with the account that is signed in. @returns the farm's id.
+ * @throws {AppError} `welcome.used_up`, `welcome.other_account` where it is for another e-mail.
+ */
+export async function acceptSignedIn(services: Parts, accountId: string, token: string): Promise<{ farmId: string }> {
+  const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, token, ['invitation']))
+  if (account.id !== accountId) throw new AppError('conflict', 'welcome.other_account')
+  return takeInvitation(services, { link, account }, (manager) => spendLink(services, manager, link))
 }

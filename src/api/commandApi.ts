@@ -5,6 +5,8 @@ import { blocksChangedSchema } from '../../shared/contract/blockChanges.ts'
 import { blocksImportedSchema } from '../../shared/contract/blockImport.ts'
 import { calibrationSchema } from '../../shared/contract/calibration.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
+import { invitationSchema } from '../../shared/contract/invitation.ts'
+import { letterSchema } from '../../shared/contract/letter.ts'
 import { farmEventSchema } from '../../shared/contract/farmEvent.ts'
 import { grantSchema } from '../../shared/contract/grant.ts'
 import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
@@ -56,6 +58,10 @@ const DOORS: Record<CommandKind, Door> = {
   'start.update': { method: 'patch', path: (farmId) => `/farms/${farmId}/start`, answer: startSchema },
   'practice.make': { method: 'post', path: () => '/practice-farm', answer: farmSchema },
   'practice.away': { method: 'del', path: () => '/practice-farm', answer: z.undefined() },
+  'invitation.create': { method: 'post', path: (farmId) => `/farms/${farmId}/invitations`, answer: invitationSchema },
+  'invitation.resend': { method: 'post', path: (farmId, id) => `/farms/${farmId}/invitations/${id}/resend`, answer: invitationSchema },
+  'invitation.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/invitations/${id}/withdraw`, answer: invitationSchema },
+  'letter.resend': { method: 'post', path: (farmId, id) => `/farms/${farmId}/letters/${id}/resend`, answer: letterSchema },
   'record.create': { method: 'post', path: (farmId) => `/farms/${farmId}/records`, answer: recordSchema },
   'record.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/records/${id}`, answer: recordSchema },
   'record.sign': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/sign`, answer: recordSchema },

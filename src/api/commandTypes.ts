@@ -11,7 +11,9 @@ import type { changeGrantSchema, endGrantSchema, giveGrantSchema, Grant } from '
 import type { changeGroundSchema, changeSiteSchema, createGroundSchema, createSiteSchema, GroundFeature, Site } from '../../shared/contract/ground.ts'
 import type { countLotSchema, createLotSchema, createMaterialSchema, Lot, Material } from '../../shared/contract/input.ts'
 import type { Job, moveJobSchema, skipJobSchema, unskipJobSchema } from '../../shared/contract/job.ts'
+import type { createInvitationSchema, Invitation, onInvitationSchema } from '../../shared/contract/invitation.ts'
 import type { putLandSchema } from '../../shared/contract/land.ts'
+import type { Letter, resendLetterSchema } from '../../shared/contract/letter.ts'
 import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import type {
@@ -53,6 +55,10 @@ export interface CommandBodies {
   'start.update': z.input<typeof updateStartSchema>
   'practice.make': { id: string }
   'practice.away': Record<string, never>
+  'invitation.create': z.input<typeof createInvitationSchema>
+  'invitation.resend': z.input<typeof onInvitationSchema>
+  'invitation.withdraw': z.input<typeof onInvitationSchema>
+  'letter.resend': z.input<typeof resendLetterSchema>
   'record.create': z.input<typeof createRecordSchema>
   'record.update': z.input<typeof updateRecordSchema>
   'record.sign': z.input<typeof signRecordSchema>
@@ -107,6 +113,10 @@ export interface CommandAnswers {
   'start.update': Start
   'practice.make': Farm
   'practice.away': undefined
+  'invitation.create': Invitation
+  'invitation.resend': Invitation
+  'invitation.withdraw': Invitation
+  'letter.resend': Letter
   'record.create': ApplicationRecord
   'record.update': ApplicationRecord
   'record.sign': ApplicationRecord

@@ -1,11 +1,10 @@
 import { z } from 'zod'
-import { sessionSchema, type Session } from '../../shared/contract/session.ts'
+import { welcomeSchema, type Welcome } from '../../shared/contract/welcome.ts'
 import { http } from './http.ts'
 
-/** The one-time link by which an invited person sets a password. */
+/** The one-time link of who was invited. */
 export const welcomeApi = {
-  read: (token: string): Promise<{ email: string }> =>
-    http.get(`/welcome/${encodeURIComponent(token)}`, z.object({ email: z.string() })),
-  accept: (token: string, name: string, password: string): Promise<Session> =>
-    http.post('/welcome', { token, name, password }, sessionSchema),
+  read: (token: string): Promise<Welcome> => http.get(`/welcome/${encodeURIComponent(token)}`, welcomeSchema),
+  accept: (token: string, name: string, password: string): Promise<unknown> => http.post('/welcome', { token, name, password }, z.unknown()),
+  take: (token: string): Promise<{ farmId: string }> => http.post('/welcome/accept', { token }, z.object({ farmId: z.string() })),
 }

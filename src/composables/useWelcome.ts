@@ -1,7 +1,9 @@
 import { computed, reactive, ref, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
+import type { Welcome } from '../../shared/contract/welcome.ts'
 import { ApiError } from '../api/errors.ts'
 import { welcomeApi } from '../api/welcomeApi.ts'
+import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { useMessages } from './useMessages.ts'
@@ -10,31 +12,50 @@ import { useTask, type Task } from './useTask.ts'
 /** Shortest password the server takes. */
 const SHORTEST = 12
 
-/** The one-time link: whom it is for, and accepting it, which signs in. */
+/** The one-time link: whom it is for, and what it opens. */
 export function useWelcome(): {
   /** Reading whom the link is for. */
-  opening: Task<[string], { email: string }>
+  opening: Task<[string], Welcome>
   /** True when the link is used up or was never valid. */
   gone: ComputedRef<boolean>
+  /** Takes a name and a password, and signs in with them. */
   accept: (token: string, name: string, password: string) => Promise<boolean>
+  /** Takes an invitation with the account that is signed in. */
+  take: (token: string) => Promise<boolean>
   errors: { name: string; password: string }
   refusal: Ref<string>
 } {
   const session = useSession()
+  const preferences = usePreferences()
   const messages = useMessages()
   const { t } = useI18n()
   const errors = reactive({ name: '', password: '' })
   const refusal = ref('')
-  const opening = useTask((token: string) => welcomeApi.read(token))
+  const opening = useTask(async (token: string) => {
+    const welcome = await welcomeApi.read(token)
+    // In the language of the letter; and who has an account takes it signed in.
+    if (welcome.invitation !== null) await preferences.offerLanguage(welcome.invitation.language)
+    if (!welcome.needsPassword) await session.load()
+    return welcome
+  })
   const gone = computed(() => opening.error.value instanceof ApiError)
 
   async function accept(token: string, name: string, password: string): Promise<boolean> {
     errors.name = name.trim() === '' ? t('session.welcome.nameNeeded') : ''
     errors.password = password.length < SHORTEST ? t('session.welcome.passwordShort') : ''
-    refusal.value = ''
     if (errors.name !== '' || errors.password !== '') return false
+    return attempt(async () => {
+      await welcomeApi.accept(token, name.trim(), password)
+      await session.signIn(opening.result.value?.email ?? '', password)
+    })
+  }
+
+  const take = (token: string): Promise<boolean> => attempt(async () => session.open((await welcomeApi.take(token)).farmId))
+
+  async function attempt(work: () => Promise<void>): Promise<boolean> {
+    refusal.value = ''
     try {
-      session.accept(await welcomeApi.accept(token, name.trim(), password))
+      await work()
       return true
     } catch (error) {
       const found = fieldErrors(error)
@@ -45,5 +66,5 @@ export function useWelcome(): {
     }
   }
 
-  return { opening, gone, accept, errors, refusal }
+  return { opening, gone, accept, take, errors, refusal }
 }

@@ -25,6 +25,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/signin', name: 'sign-in', component: () => import('../views/sign-in/SignInView.vue'), meta: { open: true } },
   { path: '/welcome/:token?', name: 'welcome', component: () => withWords(() => import('../views/welcome/WelcomeView.vue')), props: true, meta: { open: true } },
   { path: '/check/:code?', name: 'check', component: () => withWords(() => import('../views/check/CheckView.vue')), props: true, meta: { open: true } },
+  { path: '/reset/:token?', name: 'reset', component: () => withWords(() => import('../views/reset/ResetView.vue')), props: true, meta: { open: true } },
   { path: '/', name: 'today', component: () => import('../views/today/TodayView.vue'), meta: { place: 'today', roles: FARM_PEOPLE } },
   { path: '/blocks', name: 'blocks', component: () => withWords(() => import('../views/blocks/BlocksView.vue')), meta: { place: 'blocks' } },
   { path: '/blocks/new', name: 'block-new', component: () => withWords(() => import('../views/blocks/BlockNewView.vue')), meta: { place: 'blocks', roles: MANAGERS } },
@@ -52,4 +53,5 @@ export const routes: RouteRecordRaw[] = [
   { path: '/:rest(.*)*', name: 'not-found', component: () => withWords(() => import('../views/not-found/NotFoundView.vue')) },
   { path: '/rounds', name: 'rounds', component: () => withWords(() => import('../views/rounds/RoundsView.vue')), meta: { place: 'rounds', roles: FARM_PEOPLE } },
   { path: '/rounds/plans/:id', name: 'season-plan', component: () => withWords(() => import('../views/rounds/PlanFormView.vue')), props: true, meta: { place: 'rounds', roles: MANAGERS } },
+  { path: '/farm/mail', name: 'farm-mail', component: () => withWords(() => import('../views/farm/FarmMailView.vue')), meta: { place: 'farm', roles: ['owner'] } },
 ]

@@ -25,6 +25,8 @@ interface World {
   plantingId: string
   bedId: string
   eventId: string
+  invitationId: string
+  letterId: string
   planId: string
   jobId: string
   /** Somebody with a PIN. */
@@ -92,7 +94,10 @@ async function makeWorld(): Promise<World> {
   await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
   await owner.post(`/api/farms/${farm.id}/shared-phones`).send({ id: ids.phoneId, name: 'Barn phone', password: PASSWORD }).expect(201)
   const { body: grants } = await owner.get(`/api/farms/${farm.id}/grants`).expect(200)
-  return { farm, things, grantId: grants.items[0].id, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
+  const invitationId = uuidV7()
+  await owner.post(`/api/farms/${farm.id}/invitations`).send({ id: invitationId, email: `asked-${invitationId}@farm.example`, role: 'applicator', language: 'en' }).expect(201)
+  const { body: letters } = await owner.get(`/api/farms/${farm.id}/letters`).expect(200)
+  return { farm, things, invitationId, letterId: (letters as { items: { id: string }[] }).items[0]?.id ?? '', grantId: grants.items[0].id, jobId: `${step.id}.${things.blockId}.2`, recordId: input.id, fileId, siteId: site.id, groundId: feature.id, ...ids }
 }
 
 const buildStep = ({ materialId, blockId }: SeededThings) => ({
@@ -133,6 +138,10 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
     'post /farms/:farmId/lots/:id/count': () => ({ id: uuidV7(), revision: 1, left: { value: '90', unit: 'L' }, reason: 'Counted' }),
+    'post /farms/:farmId/invitations': () => ({ id: uuidV7(), email: `${tag}@farm.example`, role: 'applicator', language: 'en' }),
+    'post /farms/:farmId/invitations/:id/resend': () => ({ revision: 9 }),
+    'post /farms/:farmId/invitations/:id/withdraw': () => ({ revision: 9 }),
+    'post /farms/:farmId/letters/:id/resend': () => ({ id: uuidV7() }),
     'post /farms/:farmId/sprayers': () => ({ id: uuidV7(), code: tag, name: 'Drencher', tankL: '400' }),
     'patch /farms/:farmId/sprayers/:id': () => ({ revision: 9, name: tag }),
     'post /farms/:farmId/sprayers/:id/retire': () => ({ revision: 9, reason: 'Worn out' }),
@@ -171,7 +180,7 @@ function addressOf(route: Route, world: World, things: SeededThings | null, acto
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
     ['/people', world.personId], ['/shared-phones', world.phoneId],
-    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/invitations', world.invitationId], ['/letters', world.letterId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))
   const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN
@@ -226,7 +235,7 @@ describe('routes outside a farm', () => {
 
   it('are only these without any session', () => {
     expect(ROUTES.filter((route) => route.roles === 'everybody').map((route) => `${route.method} ${route.path}`)).toEqual([
-      'get /health', 'get /config', 'get /check/:code', 'get /welcome/:token', 'post /welcome', 'post /session', 'get /shared-phone', 'post /shared-phone/session',
+      'get /health', 'get /config', 'get /check/:code', 'get /welcome/:token', 'post /welcome', 'post /reset', 'get /reset/:token', 'post /reset/password', 'post /session', 'get /shared-phone', 'post /shared-phone/session',
     ])
   })
 

@@ -4,16 +4,16 @@ import type { FarmActor } from '../../database/actor.ts'
 import type { Account } from '../../entities/Account.ts'
 import type { Grant } from '../../entities/Grant.ts'
 import { queueLetter } from '../mail/queueLetter.ts'
+import { issueLink } from '../oneTimeLinks.ts'
 import type { Services } from '../services.ts'
-import { issueWelcome } from '../welcome.ts'
 
 /** A reviewer is not at the desk every day: two weeks. */
-const HOURS_TO_ACCEPT = 14 * 24
+const MINUTES_TO_ACCEPT = 14 * 24 * 60
 
 /** Tells a certifier by letter what is open to them, in the transaction of the grant; who cannot sign in yet gets a link to make a password. */
 export async function tellOfGrant(services: Pick<Services, 'clock' | 'config'>, manager: EntityManager, actor: FarmActor, { account, email, grant }: { account: Account; email: string; grant: Grant }): Promise<void> {
   const { farmId, farmName, personName, zone } = actor
-  const link = account.passwordHash === null ? await issueWelcome(services, manager, account.id, HOURS_TO_ACCEPT) : null
+  const link = account.passwordHash === null ? await issueLink(services, manager, { accountId: account.id, kind: 'welcome', minutes: MINUTES_TO_ACCEPT }) : null
   await queueLetter(services, manager, {
     farmId, kind: 'grant', language: account.language,
     to: { email, name: account.passwordHash === null ? null : account.name },

@@ -3,6 +3,7 @@ import type { Session } from '../../../shared/contract/session.ts'
 import { Account } from '../../entities/Account.ts'
 import { AppError, invalid, stale } from '../../errors.ts'
 import { describeUser } from '../describeSession.ts'
+import { tellOfPassword } from '../mail/tellOfPassword.ts'
 import { assertFitPin } from '../people/setPin.ts'
 import { assertGoodPassword } from '../passwordRules.ts'
 import { hashPassword, verifyPassword } from '../passwords.ts'
@@ -24,7 +25,7 @@ export async function changeMe(services: Services, accountId: string, { revision
 }
 
 /**
- * Takes another password, or PIN, for the one that is asked once more; all other sessions end.
+ * Takes another password, or PIN, for the one that is asked once more; all other sessions end, and its e-mail is told.
  * @throws {AppError} `session.wrong_password`, `session.wrong_pin`, or what is not fit about the new one.
  */
 export async function changePassword(services: Services, { accountId, sessionId }: Who, { password, newPassword }: { password: string; newPassword: string }): Promise<void> {
@@ -36,6 +37,7 @@ export async function changePassword(services: Services, { accountId, sessionId 
   await services.database.inHouse(async (manager) => {
     await updateRow(manager, Account, { id: accountId }, { passwordHash })
     await endSessionsOf(manager, accountId, sessionId)
+    await tellOfPassword(services, manager, account)
   })
 }
 

@@ -32,6 +32,8 @@ export const journal = {
     grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
     plan: { created: 'Made a season plan', updated: 'Changed a season plan', ended: 'Ended a season plan', reopened: 'Took the end of a season plan back' },
     job: { moved: 'Moved a job', skipped: 'Skipped a job', unskipped: 'Took the skip of a job back' },
+    invitation: { sent: 'Invited somebody', resent: 'Sent an invitation again', withdrawn: 'Took an invitation back', taken: 'Took an invitation and joined the farm' },
+    letter: { resent: 'Sent a letter again' },
     report: { downloaded: 'Downloaded a season report' },
   },
   kind: {

@@ -6,6 +6,7 @@ import { ground } from './ground.ts'
 import { growing } from './growing.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
+import { letters } from './letters.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
 import { rounds } from './rounds.ts'
@@ -16,5 +17,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, farm, files, grants, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
 }

@@ -31,4 +31,18 @@ export const mail = {
     action: 'Open the season sheet',
     why: 'You get this because you lead the farm. It comes once a day, and not at all when nothing is due.',
   },
+  passwordReset: {
+    subject: 'A new password for the register',
+    text: 'Somebody asked for a new password for {email}.',
+    action: 'Choose a new password',
+    until: 'The link works once, for {minutes} minutes.',
+    stranger: 'If it was not you, leave the letter alone: the password stays as it is.',
+  },
+  passwordChanged: {
+    subject: 'Your password was changed',
+    text: 'The password of {email} was changed on {dayOn} at {time} UTC.',
+    ended: 'Wherever you were signed in, you sign in anew.',
+    action: 'It was not you? Choose a new password',
+    stranger: 'Then tell the owner of your farm too: somebody may have read your mail.',
+  },
 }

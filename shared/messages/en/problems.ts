@@ -25,6 +25,7 @@ export const problems = {
   quota: 'This farm’s room for photos and papers, {megabytes} MB, is used up. The record itself is kept.',
   unknown_field: 'This field is not known here. Leave it out.',
   more: 'And {count} more.',
+  email: { format: 'Write one e-mail address, such as name@farm.example.' },
   id: { format: 'Give a UUID.' },
   cursor: { invalid: 'This list cannot be continued from there. Start it again.' },
   filters: { full: 'You keep {maximum} filters already. Forget one first.' },
@@ -59,7 +60,14 @@ export const problems = {
     season_fixed: 'The season stands in signed records or in what was written down for blocks, and none of them is rewritten. It stays as it is.',
     certificate_dates: 'It ends before it was issued.',
   },
-  welcome: { used_up: 'This link does not work any more. Ask for a new one.', password_short: 'Use at least 12 characters.', password_known: 'This is one of the first passwords anybody tries. Choose another.' },
+  welcome: { used_up: 'This link does not work any more. Ask for a new one.', password_short: 'Use at least 12 characters.', password_known: 'This is one of the first passwords anybody tries. Choose another.', has_account: 'This e-mail has an account here. Sign in with it to take the invitation.', other_account: 'This invitation is for another e-mail than the one you are signed in with.' },
+  invitation: {
+    on_farm: 'Somebody with this e-mail works on this farm already.',
+    open: 'An invitation to this e-mail waits already. Send that one again, or take it back first.',
+    too_many: 'Forty letters of invitation have gone out in a day. Go on tomorrow.',
+  },
+  reset: { too_many: 'A new password was asked for too often in an hour. Look through your mail, or try again later.' },
+  letter: { secret: 'A letter with a link in it is not sent again: the link works once. Send the invitation again instead.', waiting: 'This letter is still on its way.' },
   code: { taken: '{code} is already used on this farm. Choose another.' },
   name: { taken: '{name} is already there. Choose another name.' },
   file: {

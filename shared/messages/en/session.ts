@@ -12,6 +12,7 @@ export const session = {
   keepsNone: 'What you write is kept on this device at every keystroke and goes when the signal is back.',
   checkCode: 'Check a code',
   invited: 'I was invited',
+  forgot: 'Forgot the password?',
   emailNeeded: 'Write your e-mail.',
   passwordNeeded: 'Write your password.',
   wrong: 'E-mail and password do not match. Check both and try again.',

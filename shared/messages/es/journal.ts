@@ -33,6 +33,8 @@ export const journal: Messages['journal'] = {
     grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión' },
     plan: { created: 'Hizo un plan de campaña', updated: 'Cambió un plan de campaña', ended: 'Terminó un plan de campaña', reopened: 'Retiró el fin de un plan de campaña' },
     job: { moved: 'Movió una tarea', skipped: 'Saltó una tarea', unskipped: 'Retiró el salto de una tarea' },
+    invitation: { sent: 'Invitó a alguien', resent: 'Volvió a enviar una invitación', withdrawn: 'Retiró una invitación', taken: 'Aceptó una invitación y entró en la finca' },
+    letter: { resent: 'Volvió a enviar un mensaje' },
     report: { downloaded: 'Descargó un informe de campaña' },
   },
   kind: {

@@ -7,6 +7,7 @@ import { ground } from './ground.ts'
 import { growing } from './growing.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
+import { letters } from './letters.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
 import { rounds } from './rounds.ts'
@@ -17,5 +18,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, farm, files, grants, ground, growing, importing, journal, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
 }

@@ -31,4 +31,18 @@ export const mail = {
     action: 'Abrir la hoja de campaña',
     why: 'Lo recibe porque dirige la finca. Llega una vez al día, y no llega cuando no hay nada pendiente.',
   },
+  passwordReset: {
+    subject: 'Contraseña nueva para el registro',
+    text: 'Alguien pidió una contraseña nueva para {email}.',
+    action: 'Elegir una contraseña nueva',
+    until: 'El enlace sirve una sola vez, durante {minutes} minutos.',
+    stranger: 'Si no fue usted, no haga nada: la contraseña sigue como está.',
+  },
+  passwordChanged: {
+    subject: 'Su contraseña ha cambiado',
+    text: 'La contraseña de {email} cambió el {dayOn} a las {time} UTC.',
+    ended: 'Donde tuviera la sesión abierta, tendrá que entrar de nuevo.',
+    action: '¿No fue usted? Elija otra contraseña',
+    stranger: 'Avise además al titular de la finca: puede que alguien haya leído su correo.',
+  },
 }

@@ -25,6 +25,7 @@ export const problems = {
   quota: 'El espacio de esta finca para fotos y papeles, {megabytes} MB, está lleno. El registro mismo queda guardado.',
   unknown_field: 'Este campo no se conoce aquí. Quítelo.',
   more: 'Y {count} más.',
+  email: { format: 'Escriba una dirección de correo, como nombre@finca.example.' },
   id: { format: 'Indique un UUID.' },
   cursor: { invalid: 'La lista no puede seguir desde ahí. Empiécela de nuevo.' },
   filters: { full: 'Ya guarda {maximum} filtros. Olvide uno antes.' },
@@ -59,7 +60,14 @@ export const problems = {
     season_fixed: 'La campaña está escrita en registros firmados o en lo anotado para las parcelas, y nada de eso se reescribe. Se queda como está.',
     certificate_dates: 'Termina antes de haberse expedido.',
   },
-  welcome: { used_up: 'Este enlace ya no sirve. Pida uno nuevo.', password_short: 'Use al menos 12 caracteres.', password_known: 'Es una de las primeras contraseñas que prueba cualquiera. Elija otra.' },
+  welcome: { used_up: 'Este enlace ya no sirve. Pida uno nuevo.', password_short: 'Use al menos 12 caracteres.', password_known: 'Es una de las primeras contraseñas que prueba cualquiera. Elija otra.', has_account: 'Este correo ya tiene cuenta aquí. Entre con ella para aceptar la invitación.', other_account: 'Esta invitación es para otro correo, no para el de la sesión abierta.' },
+  invitation: {
+    on_farm: 'Alguien con este correo ya trabaja en la finca.',
+    open: 'Ya hay una invitación pendiente para este correo. Vuelva a enviar esa, o retírela antes.',
+    too_many: 'En un día han salido cuarenta invitaciones. Siga mañana.',
+  },
+  reset: { too_many: 'Se pidió una contraseña nueva demasiadas veces en una hora. Busque en su correo o inténtelo más tarde.' },
+  letter: { secret: 'Un mensaje con enlace no se repite: el enlace sirve una sola vez. Vuelva a enviar la invitación.', waiting: 'Este mensaje todavía está en camino.' },
   code: { taken: '{code} ya se usa en esta finca. Elija otro.' },
   name: { taken: '{name} ya existe. Elija otro nombre.' },
   file: {

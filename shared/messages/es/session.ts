@@ -12,6 +12,7 @@ export const session = {
   keepsNone: 'Lo que escribe se guarda en este dispositivo a cada tecla y sale cuando vuelve la señal.',
   checkCode: 'Comprobar un código',
   invited: 'Tengo una invitación',
+  forgot: '¿Olvidó la contraseña?',
   emailNeeded: 'Escriba su correo electrónico.',
   passwordNeeded: 'Escriba su contraseña.',
   wrong: 'El correo y la contraseña no coinciden. Revise los dos e inténtelo de nuevo.',

@@ -16,4 +16,5 @@ export const farmTabs: readonly FarmTab[] = [
   { route: 'farm-sprayers', words: 'farm.sprayers', roles: FARM_PEOPLE },
   { route: 'farm-grants', words: 'grants.title', roles: ['owner'] },
   { route: 'farm-journal', words: 'journal.title', roles: ['owner', 'manager'] },
+  { route: 'farm-mail', words: 'letters.tab', roles: ['owner'] },
 ]

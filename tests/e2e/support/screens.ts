@@ -20,6 +20,7 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
   const open = [
     { name: 'sign-in', path: '/signin' },
     { name: 'welcome', path: '/welcome' },
+    { name: 'a new password', path: '/reset' },
     { name: 'check a code', path: '/check' },
     { name: 'a code that agrees', path: `/check/${record.digest?.slice(0, 20) ?? ''}` },
   ]
@@ -54,6 +55,7 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     ...ofManager.map((screen) => ({ ...screen, who: 'manager' as const })),
     { name: 'grants', who: 'owner', path: '/farm/grants' },
     { name: 'journal', who: 'manager', path: '/farm/journal' },
+    { name: 'mail of the farm', who: 'owner', path: '/farm/mail' },
     { name: 'my farms', who: 'certifier', path: '/farms' },
   ]
 }

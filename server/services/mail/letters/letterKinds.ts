@@ -2,9 +2,11 @@ import type { z } from 'zod'
 import { grant } from './grant.ts'
 import { invitation } from './invitation.ts'
 import { jobsDue } from './jobsDue.ts'
+import { passwordChanged } from './passwordChanged.ts'
+import { passwordReset } from './passwordReset.ts'
 
 /** Every kind of letter, by the name under which it stands in the outbox. */
-export const LETTER_KINDS = { grant, invitation, jobsDue }
+export const LETTER_KINDS = { grant, invitation, jobsDue, passwordChanged, passwordReset }
 
 export type LetterName = keyof typeof LETTER_KINDS
 
