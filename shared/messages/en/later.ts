@@ -1,4 +1,5 @@
 import { blocks } from './blocks.ts'
+import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
 import { grants } from './grants.ts'
@@ -17,5 +18,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
 }

@@ -1,5 +1,6 @@
 import type { LaterScreens } from '../en.ts'
 import { blocks } from './blocks.ts'
+import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
 import { grants } from './grants.ts'
@@ -18,5 +19,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
 }
