@@ -29,5 +29,5 @@ export async function seedNeighbourPaper(services: Services, actor: FarmActor, r
 }
 
 async function add(services: Services, actor: FarmActor, recordId: string, { kind, name, bytes }: { kind: FileKind; name: string; bytes: Buffer }): Promise<void> {
-  await addFile(services, actor, recordId, { id: uuidV7(), kind }, { name, announced: '', bytes })
+  await addFile(services, actor, { about: 'record', id: recordId }, { id: uuidV7(), kind }, { name, announced: '', bytes })
 }

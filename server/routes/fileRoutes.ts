@@ -18,7 +18,7 @@ export const fileRoutes = [
     method: 'post', path: '/farms/:farmId/records/:id/files', summary: 'Add a photo or paper to a record: one file of at most 10 MB, JPEG, PNG, WebP or, as a paper, PDF.', roles: FARM_PEOPLE,
     params: thingParamsSchema, upload: true, body: addFileSchema, answer: attachmentSchema,
     run: async ({ services, actor, params, body, file }) => {
-      const { made, file: added } = await addFile(services, actor, params.id, body, file)
+      const { made, file: added } = await addFile(services, actor, { about: 'record', id: params.id }, body, file)
       return { status: made ? 201 : 200, body: added }
     },
   }),

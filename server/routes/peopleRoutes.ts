@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { farmParamsSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
-import { addPersonSchema, askFactorSchema, changePersonSchema, personSchema, proveOwnerSchema, setPinSchema } from '../../shared/contract/person.ts'
+import { addPersonSchema, askFactorSchema, changePersonSchema, factorAskedSchema, personSchema, proveOwnerSchema, setPinSchema } from '../../shared/contract/person.ts'
 import { logSecurity } from '../middleware/logSecurity.ts'
 import { addPerson } from '../services/people/addPerson.ts'
 import { askFactor, isFactorAsked } from '../services/people/askFactor.ts'
@@ -12,7 +12,6 @@ import { defineRoute } from './defineRoute.ts'
 import { FARM_PEOPLE } from './roleGroups.ts'
 
 const OWNER = ['owner'] as const
-const askedSchema = z.object({ asked: z.boolean() })
 
 export const peopleRoutes = [
   defineRoute({
@@ -66,12 +65,12 @@ export const peopleRoutes = [
   }),
   defineRoute({
     method: 'get', path: '/farms/:farmId/second-factor', summary: 'Whether the farm asks a second factor of owner, manager and certifier.', roles: FARM_PEOPLE,
-    params: farmParamsSchema, answer: askedSchema,
+    params: farmParamsSchema, answer: factorAskedSchema,
     run: async ({ services, actor }) => ({ body: await isFactorAsked(services, actor) }),
   }),
   defineRoute({
     method: 'put', path: '/farms/:farmId/second-factor', summary: 'Ask a second factor of owner, manager and certifier, or no longer.', roles: OWNER,
-    guardsPassword: true, params: farmParamsSchema, body: askFactorSchema, answer: askedSchema,
+    guardsPassword: true, params: farmParamsSchema, body: askFactorSchema, answer: factorAskedSchema,
     run: async ({ services, actor, body }) => ({ body: await askFactor(services, actor, body) }),
   }),
 ]

@@ -12,6 +12,7 @@ import { linkRoutes } from './linkRoutes.ts'
 import { meRoutes } from './meRoutes.ts'
 import { openRoutes } from './openRoutes.ts'
 import { peopleRoutes } from './peopleRoutes.ts'
+import { paperRoutes } from './paperRoutes.ts'
 import { phoneRoutes } from './phoneRoutes.ts'
 import { recordLifeRoutes } from './recordLifeRoutes.ts'
 import { recordRoutes } from './recordRoutes.ts'
@@ -25,7 +26,7 @@ import { startRoutes } from './startRoutes.ts'
 
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
-  ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes,
+  ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes, ...paperRoutes,
   ...farmRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
   ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

@@ -44,6 +44,7 @@ export type SetPin = z.infer<typeof setPinSchema>
 export const proveOwnerSchema = z.strictObject({ password: passwordSchema })
 
 /** Whether owner, manager and certifier need a second factor. */
+export const factorAskedSchema = z.object({ asked: z.boolean() })
 export const askFactorSchema = z.strictObject({ asked: z.boolean(), password: passwordSchema })
 
 export const PAPER_KINDS = ['training', 'licence'] as const

@@ -13,11 +13,13 @@ import { groundSchema, siteSchema } from '../../shared/contract/ground.ts'
 import { jobSchema } from '../../shared/contract/job.ts'
 import { lotSchema, materialSchema } from '../../shared/contract/input.ts'
 import { plantingSchema } from '../../shared/contract/planting.ts'
+import { factorAskedSchema, personPaperSchema, personSchema } from '../../shared/contract/person.ts'
 import { recordSchema } from '../../shared/contract/record.ts'
 import { signManyAnswerSchema } from '../../shared/contract/recordChanges.ts'
 import { savedFilterSchema } from '../../shared/contract/savedFilter.ts'
 import { startSchema } from '../../shared/contract/start.ts'
 import { seasonPlanSchema } from '../../shared/contract/seasonPlan.ts'
+import { sharedPhoneSchema } from '../../shared/contract/sharedPhone.ts'
 import type { Command, CommandAnswers, CommandKind } from './commandTypes.ts'
 import { http } from './http.ts'
 
@@ -62,6 +64,16 @@ const DOORS: Record<CommandKind, Door> = {
   'invitation.resend': { method: 'post', path: (farmId, id) => `/farms/${farmId}/invitations/${id}/resend`, answer: invitationSchema },
   'invitation.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/invitations/${id}/withdraw`, answer: invitationSchema },
   'letter.resend': { method: 'post', path: (farmId, id) => `/farms/${farmId}/letters/${id}/resend`, answer: letterSchema },
+  'person.add': { method: 'post', path: (farmId) => `/farms/${farmId}/people`, answer: personSchema },
+  'person.change': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/people/${id}`, answer: personSchema },
+  'person.pin': { method: 'put', path: (farmId, id) => `/farms/${farmId}/people/${id}/pin`, answer: personSchema },
+  'person.endSessions': { method: 'post', path: (farmId, id) => `/farms/${farmId}/people/${id}/end-sessions`, answer: z.undefined() },
+  'person.resetFactor': { method: 'post', path: (farmId, id) => `/farms/${farmId}/people/${id}/reset-factor`, answer: z.undefined() },
+  'farm.askFactor': { method: 'put', path: (farmId) => `/farms/${farmId}/second-factor`, answer: factorAskedSchema },
+  'phone.enrol': { method: 'post', path: (farmId) => `/farms/${farmId}/shared-phones`, answer: sharedPhoneSchema },
+  'phone.revoke': { method: 'post', path: (farmId, id) => `/farms/${farmId}/shared-phones/${id}/revoke`, answer: z.undefined() },
+  'paper.add': { method: 'post', path: (farmId) => `/farms/${farmId}/person-papers`, answer: personPaperSchema },
+  'paper.change': { method: 'put', path: (farmId, id) => `/farms/${farmId}/person-papers/${id}`, answer: personPaperSchema },
   'record.create': { method: 'post', path: (farmId) => `/farms/${farmId}/records`, answer: recordSchema },
   'record.update': { method: 'put', path: (farmId, id) => `/farms/${farmId}/records/${id}`, answer: recordSchema },
   'record.sign': { method: 'post', path: (farmId, id) => `/farms/${farmId}/records/${id}/sign`, answer: recordSchema },

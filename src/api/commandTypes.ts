@@ -14,6 +14,10 @@ import type { Job, moveJobSchema, skipJobSchema, unskipJobSchema } from '../../s
 import type { createInvitationSchema, Invitation, onInvitationSchema } from '../../shared/contract/invitation.ts'
 import type { putLandSchema } from '../../shared/contract/land.ts'
 import type { Letter, resendLetterSchema } from '../../shared/contract/letter.ts'
+import type {
+  addPaperSchema, addPersonSchema, askFactorSchema, changePaperSchema, changePersonSchema, Person, PersonPaper, proveOwnerSchema, setPinSchema,
+} from '../../shared/contract/person.ts'
+import type { enrolPhoneSchema, SharedPhone } from '../../shared/contract/sharedPhone.ts'
 import type { createPlantingSchema, Planting, updatePlantingSchema } from '../../shared/contract/planting.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import type {
@@ -59,6 +63,16 @@ export interface CommandBodies {
   'invitation.resend': z.input<typeof onInvitationSchema>
   'invitation.withdraw': z.input<typeof onInvitationSchema>
   'letter.resend': z.input<typeof resendLetterSchema>
+  'person.add': z.input<typeof addPersonSchema>
+  'person.change': z.input<typeof changePersonSchema>
+  'person.pin': z.input<typeof setPinSchema>
+  'person.endSessions': z.input<typeof proveOwnerSchema>
+  'person.resetFactor': z.input<typeof proveOwnerSchema>
+  'farm.askFactor': z.input<typeof askFactorSchema>
+  'phone.enrol': z.input<typeof enrolPhoneSchema>
+  'phone.revoke': Record<string, never>
+  'paper.add': z.input<typeof addPaperSchema>
+  'paper.change': z.input<typeof changePaperSchema>
   'record.create': z.input<typeof createRecordSchema>
   'record.update': z.input<typeof updateRecordSchema>
   'record.sign': z.input<typeof signRecordSchema>
@@ -117,6 +131,16 @@ export interface CommandAnswers {
   'invitation.resend': Invitation
   'invitation.withdraw': Invitation
   'letter.resend': Letter
+  'person.add': Person
+  'person.change': Person
+  'person.pin': Person
+  'person.endSessions': undefined
+  'person.resetFactor': undefined
+  'farm.askFactor': { asked: boolean }
+  'phone.enrol': SharedPhone
+  'phone.revoke': undefined
+  'paper.add': PersonPaper
+  'paper.change': PersonPaper
   'record.create': ApplicationRecord
   'record.update': ApplicationRecord
   'record.sign': ApplicationRecord

@@ -41,7 +41,7 @@ function request<Schema extends z.ZodType>(method: Method, path: string, body: u
 /** The answer of what is sent; sent once more where the session had ended and the person signed in again. */
 async function answered<Schema extends z.ZodType>(path: string, schema: Schema, sendIt: () => Promise<Response>): Promise<z.output<Schema>> {
   let response = await sendIt()
-  const sessionEnded = response.status === 401 && !path.startsWith('/session')
+  const sessionEnded = response.status === 401 && !path.startsWith('/session') && !path.startsWith('/shared-phone')
   if (sessionEnded && signInAgain !== null && (await signInAgain())) response = await sendIt()
   if (!response.ok) throw await refusalOf(response)
   const answer: unknown = response.status === 204 ? undefined : await jsonOf(response)

@@ -1,19 +1,26 @@
 import { computed, type ComputedRef } from 'vue'
 import { useI18n } from 'vue-i18n'
+import { measuresSchema } from '../../shared/contract/preferences.ts'
 import { inMeasures, type Measure, type Scoop } from '../../shared/units/inMeasures.ts'
 import type { UnitCode } from '../../shared/units/unitTable.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { useFigures } from './useFigures.ts'
+import { useMe } from './useMe.ts'
 
-/** The measures this person has at hand, kept on the device for their account. */
+/** The measures this person has at hand: they follow the account; without signal this device keeps them. */
 export function useMeasures(): { measures: ComputedRef<Measure[]>; keep: (measures: Measure[]) => void } {
   const session = useSession()
   const preferences = usePreferences()
+  const me = useMe()
   const account = computed(() => session.user?.id ?? '')
   return {
-    measures: computed(() => preferences.measuresOf(account.value)),
-    keep: (measures) => { preferences.keepMeasures(account.value, measures) },
+    measures: computed(() => preferences.measuresOf(account.value, session.user?.preferences.measures)),
+    keep: (measures) => {
+      const id = account.value
+      preferences.keepMeasures(id, measures)
+      me.change({ preferences: { measures: measuresSchema.parse(measures) } }).then(() => { preferences.keepMeasures(id, null) }, () => undefined)
+    },
   }
 }
 

@@ -180,11 +180,11 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
     return [read('wind', from), read('air'), read('humidity'), ...(air ? (['wetBulbC', 'deltaTC', 'dewPointC'] as const).map((name) => derived(name, air.method)) : [])]
   }
 
-  function peopleOf({ doneBy, enteredBy, signedBy, protection }: ApplicationRecord): ReadFact[] {
+  function peopleOf({ doneBy, enteredBy, signedBy, signedWith, protection }: ApplicationRecord): ReadFact[] {
     return [
       { name: t('records.happened.doneBy'), value: unknown(doneBy?.name ?? '') },
       { name: t('records.happened.enteredBy'), value: unknown(enteredBy?.name ?? '') },
-      { name: t('records.read.signed'), value: unknown(signedBy?.name ?? '') },
+      { name: t('records.read.signed'), value: unknown(signedBy !== null && signedWith === 'pin' ? t('people.signedByPin', { name: signedBy.name }) : signedBy?.name ?? '') },
       { name: t('versions.label.protection'), value: unknown(protection.map((piece) => t(`records.protection.${piece}`)).join(', ')) },
     ]
   }

@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/vue-query'
 import { computed, toValue, type ComputedRef, type MaybeRefOrGetter } from 'vue'
+import { useI18n } from 'vue-i18n'
 import type { Message } from '../../shared/contract/common.ts'
 import type { RecordVersions } from '../../shared/contract/recordVersions.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
@@ -33,6 +34,7 @@ export function useRecordVersions(
 ): { versions: ComputedRef<ReadVersion[]>; signed: ComputedRef<SignedRecord | null>; signerIds: ComputedRef<string[]> } {
   const [farm, id] = [computed(() => toValue(farmId)), computed(() => toValue(recordId))]
   const figures = useFigures()
+  const { t } = useI18n()
   const { render } = useMessages()
   const query = useQuery({
     queryKey: ['records', farm, 'versions', id],
@@ -48,11 +50,11 @@ export function useRecordVersions(
     versions: computed(() => {
       const { items = [], people = [] } = query.data.value ?? {}
       const nameOf = (person: string): string => people.find((one) => one.id === person)?.name ?? ''
-      return items.map(({ version, entry, reason, signedBy, signedAt, digest, signed, changes }, index): ReadVersion => {
+      return items.map(({ version, entry, reason, signedBy, signedAt, signedWith, digest, signed, changes }, index): ReadVersion => {
         const before = items[index - 1]?.signed
         const { zone } = signed.farm
         return {
-          version, entry, reason: reason ?? '', by: signedBy?.name ?? '', digest, signedAt,
+          version, entry, reason: reason ?? '', by: signedBy !== null && signedWith === 'pin' ? t('people.signedByPin', { name: signedBy.name }) : signedBy?.name ?? '', digest, signedAt,
           at: `${figures.day(civilDateIn(zone, signedAt))}, ${civilTimeIn(zone, signedAt)}`,
           rows: before ? pairVersions(before, signed, nameOf).map((row) => ({ path: row.path, label: said(row.label), before: said(row.before), after: said(row.after), isChanged: row.isChanged })) : [],
           changedCount: changes.length,

@@ -8,11 +8,13 @@ import { useSignalBack } from './useSignalBack.ts'
 
 /** Signing in from a form: what is missing at its fields, what was refused above them. */
 export interface SignIn {
-  errors: { email: string; password: string }
+  errors: { email: string; password: string; code: string }
+  /** The password was right, and the account has a second factor. */
+  asksCode: Ref<boolean>
   refusal: Ref<string>
   busy: Ref<boolean>
   /** Answers whether the person is signed in. */
-  signIn: (email: string, password: string) => Promise<boolean>
+  signIn: (email: string, password: string, code?: string) => Promise<boolean>
 }
 
 /** @param wrongWords what to say when e-mail and password do not match. */
@@ -21,24 +23,31 @@ export function useSignIn(wrongWords: () => string): SignIn {
   const preferences = usePreferences()
   const messages = useMessages()
   const { t } = useI18n()
-  const errors = reactive({ email: '', password: '' })
+  const errors = reactive({ email: '', password: '', code: '' })
+  const asksCode = ref(false)
   const refusal = ref('')
   const busy = ref(false)
   let lacksSignal = false
 
-  async function signIn(email: string, password: string): Promise<boolean> {
+  async function signIn(email: string, password: string, code = ''): Promise<boolean> {
     errors.email = email.trim() === '' ? t('session.emailNeeded') : ''
     errors.password = password === '' ? t('session.passwordNeeded') : ''
+    errors.code = asksCode.value && code.trim() === '' ? t('people.signIn.codeNeeded') : ''
     refusal.value = ''
     lacksSignal = false
-    if (errors.email !== '' || errors.password !== '' || busy.value) return false
+    if (Object.values(errors).some((words) => words !== '') || busy.value) return false
     busy.value = true
     try {
-      await session.signIn(email.trim(), password)
+      await session.signIn(email.trim(), password, asksCode.value ? code : undefined)
       if (session.user !== null) await preferences.offerLanguage(session.user.language)
+      preferences.offerLight(session.user?.preferences.light)
       return true
     } catch (error) {
       lacksSignal = error instanceof NetworkError
+      if (error instanceof ApiError && error.problem.code === 'session.code_needed') {
+        asksCode.value = true
+        return false
+      }
       refusal.value = isWrong(error) ? wrongWords() : messages.problem(error)
       return false
     } finally {
@@ -47,9 +56,9 @@ export function useSignIn(wrongWords: () => string): SignIn {
   }
 
   useSignalBack(() => { if (lacksSignal) refusal.value = '' })
-  return { errors, refusal, busy, signIn }
+  return { errors, asksCode, refusal, busy, signIn }
 }
 
 function isWrong(error: unknown): boolean {
-  return error instanceof ApiError && [401, 422].includes(error.problem.status)
+  return error instanceof ApiError && error.problem.code !== 'session.code_wrong' && [401, 422].includes(error.problem.status)
 }

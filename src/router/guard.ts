@@ -1,7 +1,7 @@
 import type { NavigationGuardReturn, RouteLocationNormalized } from 'vue-router'
 import { useSession } from '../stores/session.ts'
 
-/** Who is not signed in goes to the cover and comes back; a certifier starts at My farms; a wrong role finds nothing; who has no farm makes one. */
+/** Who is not signed in goes to the cover and comes back; a certifier starts at My farms; a wrong role finds nothing; who has no farm makes one; a farm that asks a second factor opens once there is one. */
 export async function guard(to: RouteLocationNormalized): Promise<NavigationGuardReturn> {
   const session = useSession()
   // Pages for anyone ask nothing: the server would answer that nobody is signed in.
@@ -9,6 +9,7 @@ export async function guard(to: RouteLocationNormalized): Promise<NavigationGuar
   await session.load()
   if (session.user === null) return { name: 'sign-in', query: to.fullPath === '/' ? {} : { next: to.fullPath } }
   if (session.role === null) return to.name === 'farm-new' ? true : { name: 'farm-new' }
+  if (session.membership?.factorNeeded === true && to.name !== 'farm-new') return to.name === 'second-factor' ? true : { name: 'second-factor' }
   const roles = to.meta.roles
   if (roles === undefined || roles.includes(session.role)) return true
   return to.name === 'today' ? { name: 'my-farms' } : { name: 'not-found', params: { rest: to.path.slice(1).split('/') } }

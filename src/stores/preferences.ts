@@ -1,8 +1,6 @@
 import { defineStore } from 'pinia'
 import { ref, watch } from 'vue'
-import { z } from 'zod'
-import { amountUnit, positiveDecimal } from '../../shared/contract/quantity.ts'
-import { lineText } from '../../shared/contract/text.ts'
+import { measuresSchema, type Preferences } from '../../shared/contract/preferences.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { Measure } from '../../shared/units/inMeasures.ts'
 import { readLanguage, showLanguage } from '../plugins/i18n.ts'
@@ -11,7 +9,6 @@ import { readSetting, writeSetting } from './settings.ts'
 /** Day, or dark for the cab before sunrise. */
 export type Light = 'day' | 'dawn'
 
-const measuresSchema = z.array(z.strictObject({ name: lineText(24).nullable(), value: positiveDecimal, unit: amountUnit })).max(20)
 const one = (unit: Measure['unit'], value = '1'): Measure => ({ name: null, value, unit })
 /** What stands in most mixing sheds and kitchens, until a person says otherwise. */
 const USUAL_MEASURES: Measure[] = [one('galUS'), one('qtUS'), one('cupUS'), one('tbspUS'), one('tspUS'), one('lb'), one('oz')]
@@ -40,6 +37,16 @@ export const usePreferences = defineStore('preferences', () => {
     } catch { /* It stays as it was; the choice is in the frame. */ }
   }
 
+  /** The account's own light, unless this device has been told another. */
+  function offerLight(value: Light | undefined): void {
+    if (value !== undefined && readSetting('light.chosen', ['yes']) === null) light.value = value
+  }
+
+  function chooseLight(value: Light): void {
+    light.value = value
+    writeSetting('light.chosen', 'yes')
+  }
+
   /** @throws where the words cannot be read, as without signal; the language then stays as it was. */
   async function chooseLanguage(value: Language): Promise<void> {
     await takeLanguage(value)
@@ -61,16 +68,18 @@ export const usePreferences = defineStore('preferences', () => {
   }
 
   const measures = ref<Record<string, Measure[]>>({})
-  /** The measures that this account has at hand. */
-  function measuresOf(accountId: string): Measure[] {
-    return measures.value[accountId] ?? readMeasures(accountId) ?? USUAL_MEASURES
+  /** The measures that an account has at hand: those this device keeps while the account could not be told, else the account's own. */
+  function measuresOf(accountId: string, own: Preferences['measures']): Measure[] {
+    return measures.value[accountId] ?? readMeasures(accountId) ?? own ?? USUAL_MEASURES
   }
-  function keepMeasures(accountId: string, chosen: Measure[]): void {
-    measures.value = { ...measures.value, [accountId]: chosen }
-    writeSetting(`measures.${accountId}`, JSON.stringify(chosen))
+  /** @param chosen null once the account holds them. */
+  function keepMeasures(accountId: string, chosen: Measure[] | null): void {
+    const others = Object.entries(measures.value).filter(([id]) => id !== accountId)
+    measures.value = { ...Object.fromEntries(others), ...(chosen && { [accountId]: chosen }) }
+    writeSetting(`measures.${accountId}`, chosen && JSON.stringify(chosen))
   }
 
-  return { language, light, offerLanguage, chooseLanguage, start, measuresOf, keepMeasures }
+  return { language, light, offerLanguage, offerLight, chooseLight, chooseLanguage, start, measuresOf, keepMeasures }
 })
 
 function languageOfDevice(): Language {

@@ -40,8 +40,17 @@ export const useSession = defineStore('session', () => {
     loaded.value = true
   }
 
-  async function signIn(email: string, password: string): Promise<void> {
-    const answer = await sessionApi.signIn(email, password)
+  /** @param code of the second factor, where the account has one. */
+  async function signIn(email: string, password: string, code?: string): Promise<void> {
+    enter(await sessionApi.signIn(email, password, code))
+  }
+
+  /** On a phone of the farm. */
+  async function signInByPin(personId: string, pin: string): Promise<void> {
+    enter(await sessionApi.signInByPin(personId, pin))
+  }
+
+  function enter(answer: Session): void {
     if (user.value !== null && user.value.id !== answer.user.id) queryClient.clear()
     accept(answer)
   }
@@ -66,6 +75,16 @@ export const useSession = defineStore('session', () => {
     void keepSession(answer)
   }
 
+  /** What the account says of itself now: changed on one's own page. */
+  function acceptUser(changed: Session['user']): void {
+    if (session.value !== null) accept({ ...session.value, user: changed })
+  }
+
+  /** Reads again who is signed in and what is open to them. */
+  async function reload(): Promise<void> {
+    accept(await sessionApi.read())
+  }
+
   /** Reads the memberships again and opens one of them: a farm just made. */
   async function open(id: string): Promise<void> {
     accept(await sessionApi.read())
@@ -79,6 +98,6 @@ export const useSession = defineStore('session', () => {
 
   return {
     session, loaded, user, memberships, membership, farmId, role, canManage, isOfFarm, canRecord,
-    load, signIn, signOut, forget, accept, open, chooseFarm,
+    load, signIn, signInByPin, acceptUser, reload, signOut, forget, accept, open, chooseFarm,
   }
 })

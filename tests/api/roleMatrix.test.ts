@@ -35,6 +35,7 @@ interface World {
   sprayerId: string
   calibrationId: string
   grantId: string
+  paperId: string
 }
 
 const MEASURED = { on: '2026-06-15', doneBy: 'Ada Rook', measured: { kind: 'plot', volumeL: '1', areaM2: '20' } }
@@ -82,7 +83,7 @@ async function makeWorld(): Promise<World> {
   const { site } = await createSite(house.services, ownerActor, buildSite())
   const { feature } = await createGround(house.services, ownerActor, buildGround())
   const owner = await house.as(farm.accounts.owner)
-  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), sprayerId: uuidV7(), calibrationId: uuidV7(), personId: uuidV7(), phoneId: uuidV7() }
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), sprayerId: uuidV7(), calibrationId: uuidV7(), personId: uuidV7(), phoneId: uuidV7(), paperId: uuidV7() }
   await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
   await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
@@ -93,6 +94,7 @@ async function makeWorld(): Promise<World> {
   await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
   await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
   await owner.post(`/api/farms/${farm.id}/shared-phones`).send({ id: ids.phoneId, name: 'Barn phone', password: PASSWORD }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/person-papers`).send({ id: ids.paperId, personId: ids.personId, kind: 'licence', title: 'Licence' }).expect(201)
   const { body: grants } = await owner.get(`/api/farms/${farm.id}/grants`).expect(200)
   const invitationId = uuidV7()
   await owner.post(`/api/farms/${farm.id}/invitations`).send({ id: invitationId, email: `asked-${invitationId}@farm.example`, role: 'applicator', language: 'en' }).expect(201)
@@ -134,6 +136,9 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/people/:id/end-sessions': () => ({ password: PASSWORD }),
     'post /farms/:farmId/people/:id/reset-factor': () => ({ password: PASSWORD }),
     'post /farms/:farmId/shared-phones': () => ({ id: uuidV7(), name: tag, password: PASSWORD }),
+    'post /farms/:farmId/person-papers': () => ({ id: uuidV7(), personId: world.personId, kind: 'training', title: tag }),
+    'put /farms/:farmId/person-papers/:id': () => ({ revision: 999, kind: 'training', title: tag }),
+    'post /farms/:farmId/person-papers/:id/files': () => ({ id: uuidV7(), kind: 'photo' }),
     'put /farms/:farmId/second-factor': () => ({ asked: false, password: PASSWORD }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
@@ -179,7 +184,7 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
 function addressOf(route: Route, world: World, things: SeededThings | null, actor: Actor): string {
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
-    ['/people', world.personId], ['/shared-phones', world.phoneId],
+    ['/people', world.personId], ['/shared-phones', world.phoneId], ['/person-papers', world.paperId],
     ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/invitations', world.invitationId], ['/letters', world.letterId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))

@@ -3,15 +3,14 @@ import { MOST_FILES, type AddFile, type Attachment as AttachmentAnswer } from '.
 import { fileLabel } from '../../../shared/files/fileLabel.ts'
 import { digestOfFile } from '../../adapters/files/fileStore.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
-import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Attachment } from '../../entities/Attachment.ts'
-import { invalid, notFound } from '../../errors.ts'
+import { invalid } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { digestOf, findRepeat } from '../insertOnce.ts'
-import { assertMayWrite } from '../records/assertMayWrite.ts'
 import type { Services } from '../services.ts'
 import { encodeImage, type EncodedImage } from './encodeImage.ts'
 import { assertRoom, forgetUnheld, keepBytes, lockFiles, orUnavailable } from './farmFiles.ts'
+import { findHolder, type FileHolder } from './findHolder.ts'
 import { judgeFile, type UploadedFile } from './judgeFile.ts'
 import { presentAttachments } from './presentAttachment.ts'
 
@@ -22,13 +21,13 @@ interface Prepared {
 }
 
 /**
- * Takes in a photo or paper of a record, signed or not, by whoever may write the record.
+ * Takes in a photo or paper of a record, signed or not, or the paper of a person, by whoever may write what it belongs to.
  * @returns it, and whether this call made it.
  * @throws {AppError} not-found, forbidden, wrong-type, invalid-input, or unavailable while the store is full or out of reach.
  */
-export async function addFile(services: Services, actor: FarmActor, recordId: string, command: AddFile, file: UploadedFile): Promise<{ made: boolean; file: AttachmentAnswer }> {
-  await services.database.inFarm(actor, async (manager) => { await findRecord(manager, actor, recordId) })
-  const prepared = await prepare(actor, recordId, command, file)
+export async function addFile(services: Services, actor: FarmActor, holder: FileHolder, command: AddFile, file: UploadedFile): Promise<{ made: boolean; file: AttachmentAnswer }> {
+  await services.database.inFarm(actor, async (manager) => { await findHolder(manager, actor, holder) })
+  const prepared = await prepare(actor, holder, command, file)
   const repeated = await services.database.inFarm(actor, async (manager) => {
     const present = await findRepeat(manager, Attachment, prepared.row)
     if (!present) await assertTaken(services, manager, prepared)
@@ -44,21 +43,14 @@ export async function addFile(services: Services, actor: FarmActor, recordId: st
   }
 }
 
-async function findRecord(manager: EntityManager, actor: FarmActor, id: string, lock = false): Promise<ApplicationRecord> {
-  const record = await manager.findOne(ApplicationRecord, { where: { farmId: actor.farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' } }) })
-  if (!record) throw notFound()
-  assertMayWrite(actor, record)
-  return record
-}
-
-async function prepare(actor: FarmActor, recordId: string, { id, kind }: AddFile, file: UploadedFile): Promise<Prepared> {
+async function prepare(actor: FarmActor, { about, id: recordId }: FileHolder, { id, kind }: AddFile, file: UploadedFile): Promise<Prepared> {
   const type = await judgeFile(file, kind)
   const digest = digestOfFile(file.bytes)
   const label = fileLabel(file.name, kind)
   const shown = type === 'application/pdf' ? null : await encodeImage(file.bytes, actor.zone)
   return {
     row: {
-      farmId: actor.farmId, id, about: 'record', recordId, kind, label, type, bytes: file.bytes.length, digest, ...describeShown(shown),
+      farmId: actor.farmId, id, about, recordId, kind, label, type, bytes: file.bytes.length, digest, ...describeShown(shown),
       uploadedById: personOf(actor), signedVersion: null, removedAt: null, creationDigest: digestOf({ id, recordId, kind, label, digest }),
     },
     contents: new Map([[digest, file.bytes], ...(shown ? [[digestOfFile(shown.bytes), shown.bytes] as const] : [])]),
@@ -81,7 +73,7 @@ async function assertTaken(services: Services, manager: EntityManager, { row, co
 async function store(services: Services, manager: EntityManager, actor: FarmActor, prepared: Prepared): Promise<{ made: boolean; file: AttachmentAnswer }> {
   const { row, contents } = prepared
   await lockFiles(manager, actor.farmId)
-  const record = await findRecord(manager, actor, row.recordId, true)
+  const { season } = await findHolder(manager, actor, { about: row.about, id: row.recordId }, true)
   const present = await findRepeat(manager, Attachment, row)
   if (present) return answer(manager, present, false)
   await assertTaken(services, manager, prepared)
@@ -90,7 +82,7 @@ async function store(services: Services, manager: EntityManager, actor: FarmActo
     const key = { farmId: actor.farmId, digest }
     if (!(await orUnavailable(services, services.files.has(key)))) await keepBytes(services, key, bytes)
   }
-  const stored = { ...row, uploadedAt: services.clock.now(), season: record.season }
+  const stored = { ...row, uploadedAt: services.clock.now(), season }
   await manager.insert(Attachment, stored)
   await appendJournal(services, manager, actor, { action: 'file.added', subjectId: row.id, detail: { recordId: row.recordId, digest: row.digest } })
   return answer(manager, stored, true)

@@ -1,11 +1,10 @@
 import type { FarmActor } from '../../database/actor.ts'
-import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Attachment } from '../../entities/Attachment.ts'
 import { AppError, notFound } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
-import { assertMayWrite } from '../records/assertMayWrite.ts'
 import type { Services } from '../services.ts'
 import { forgetUnheld, orUnavailable } from './farmFiles.ts'
+import { findHolder } from './findHolder.ts'
 
 /**
  * Takes a photo or paper back, while no signed version names it; taking it back again changes nothing. Its row stays, its
@@ -18,9 +17,7 @@ export async function removeFile(services: Services, actor: FarmActor, id: strin
     const found = await manager.findOneBy(Attachment, { farmId, id })
     if (!found) throw notFound()
     // A signature takes the same lock first, then names the files.
-    const record = await manager.findOne(ApplicationRecord, { where: { farmId, id: found.recordId }, lock: { mode: 'pessimistic_read' } })
-    if (!record) throw notFound()
-    assertMayWrite(actor, record)
+    await findHolder(manager, actor, { about: found.about, id: found.recordId }, true)
     const row = await manager.findOneOrFail(Attachment, { where: { farmId, id }, lock: { mode: 'pessimistic_write' } })
     if (row.signedVersion !== null) throw new AppError('conflict', 'file.signed')
     if (row.removedAt !== null) return []

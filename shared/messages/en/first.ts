@@ -3,6 +3,7 @@ import { common } from './common.ts'
 import { fieldProblems } from './fieldProblems.ts'
 import { frame } from './frame.ts'
 import { inputs } from './inputs.ts'
+import { pin } from './pin.ts'
 import { recordForm } from './recordForm.ts'
 import { records } from './records.ts'
 import { register } from './register.ts'
@@ -11,4 +12,4 @@ import { today } from './today.ts'
 import { units } from './units.ts'
 
 /** What a phone needs from signing in over Today to a new record; read before anything is shown. */
-export const first = { checks, common, frame, inputs, problems: fieldProblems, recordForm, records, register, session, today, units }
+export const first = { checks, common, frame, inputs, pin, problems: fieldProblems, recordForm, records, register, session, today, units }

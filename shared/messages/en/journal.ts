@@ -28,6 +28,7 @@ export const journal = {
       added: 'Took somebody in', renamed: 'Changed a person’s name', role_changed: 'Changed a person’s role', let_go: 'Let somebody go', taken_back: 'Took somebody in again',
       pin_set: 'Set a person’s PIN', sessions_ended: 'Ended a person’s sessions', factor_reset: 'Took a person’s second factor away',
     },
+    paper: { added: 'Wrote down a person’s training or licence', changed: 'Changed a person’s training or licence', ended: 'Took a person’s training or licence out of the list' },
     phone: { enrolled: 'Made a phone the farm’s', revoked: 'Took a phone away from the farm' },
     grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
     plan: { created: 'Made a season plan', updated: 'Changed a season plan', ended: 'Ended a season plan', reopened: 'Took the end of a season plan back' },

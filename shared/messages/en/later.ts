@@ -8,6 +8,7 @@ import { growing } from './growing.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { letters } from './letters.ts'
+import { people } from './people.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
 import { rounds } from './rounds.ts'
@@ -18,5 +19,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
 }

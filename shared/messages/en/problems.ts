@@ -47,6 +47,7 @@ export const problems = {
     has_email: 'This person signs in with an e-mail and a password; no PIN is needed.',
     not_here: 'This phone does not belong to a farm any more. Ask the owner or a manager to sign in on it.',
   },
+  paper: { days: 'It cannot run out before it was issued.' },
   factor: {
     own_first: 'Set up your own second factor before you ask it of others.',
     none: 'There is no second factor on this account.',

@@ -29,6 +29,7 @@ export const journal: Messages['journal'] = {
       added: 'Dio de alta a alguien', renamed: 'Cambió el nombre de una persona', role_changed: 'Cambió la función de una persona', let_go: 'Dio de baja a alguien', taken_back: 'Dio de alta otra vez a alguien',
       pin_set: 'Puso el PIN de una persona', sessions_ended: 'Cerró las sesiones de una persona', factor_reset: 'Quitó el segundo factor de una persona',
     },
+    paper: { added: 'Anotó la formación o licencia de una persona', changed: 'Cambió la formación o licencia de una persona', ended: 'Quitó de la lista la formación o licencia de una persona' },
     phone: { enrolled: 'Hizo de la finca un teléfono', revoked: 'Quitó un teléfono a la finca' },
     grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión' },
     plan: { created: 'Hizo un plan de campaña', updated: 'Cambió un plan de campaña', ended: 'Terminó un plan de campaña', reopened: 'Retiró el fin de un plan de campaña' },

@@ -9,6 +9,7 @@ import { growing } from './growing.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { letters } from './letters.ts'
+import { people } from './people.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
 import { rounds } from './rounds.ts'
@@ -19,5 +20,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
 }

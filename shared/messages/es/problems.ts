@@ -47,6 +47,7 @@ export const problems = {
     has_email: 'Esta persona entra con correo y contraseña; no necesita PIN.',
     not_here: 'Este teléfono ya no es de ninguna finca. Pida al titular o a un responsable que entre en él.',
   },
+  paper: { days: 'No puede caducar antes de expedirse.' },
   factor: {
     own_first: 'Ponga su propio segundo factor antes de pedirlo a otros.',
     none: 'Esta cuenta no tiene segundo factor.',

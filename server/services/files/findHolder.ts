@@ -1,0 +1,31 @@
+import type { EntityManager } from 'typeorm'
+import type { FarmActor } from '../../database/actor.ts'
+import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
+import type { Attachment } from '../../entities/Attachment.ts'
+import { PersonPaper } from '../../entities/PersonPaper.ts'
+import { forbidden, notFound } from '../../errors.ts'
+import { assertMayWrite } from '../records/assertMayWrite.ts'
+
+/** What a file belongs to. */
+export interface FileHolder { about: Attachment['about']; id: string }
+
+/**
+ * Holds that what a file belongs to is there and may be written by this person: a record by whoever may write it, a paper of a person
+ * by who leads the farm.
+ * @param lock holds it until the transaction ends.
+ * @returns the season under which a certifier may see the file; null for none.
+ * @throws {AppError} not-found, forbidden.
+ */
+export async function findHolder(manager: EntityManager, actor: FarmActor, { about, id }: FileHolder, lock = false): Promise<{ season: number | null }> {
+  const { farmId } = actor
+  const locked = lock ? { lock: { mode: 'pessimistic_read' as const } } : {}
+  if (about === 'person-paper') {
+    if (!(await manager.findOne(PersonPaper, { where: { farmId, id }, ...locked }))) throw notFound()
+    if (actor.role === 'applicator') throw forbidden()
+    return { season: null }
+  }
+  const record = await manager.findOne(ApplicationRecord, { where: { farmId, id }, ...locked })
+  if (!record) throw notFound()
+  assertMayWrite(actor, record)
+  return { season: record.season }
+}

@@ -1,0 +1,21 @@
+/** Words of signing in and signing by PIN, and of the code of a second factor. */
+export const pin = {
+  yours: 'Your PIN',
+  short: 'PIN',
+  who: 'Who are you?',
+  onPhone: '{phone}, {farm}',
+  pinOf: 'PIN of {name}',
+  another: 'Another name',
+  open: 'Open the register',
+  byEmail: 'Sign in with e-mail',
+  byPin: 'Sign in with a PIN',
+  nobody: 'Nobody has a PIN yet. The owner sets one on the people’s page.',
+  pinNeeded: 'Write your six figures.',
+  wrong: 'Name and PIN do not match. Try again.',
+  code: 'Code of the second factor',
+  codeHint: 'Six figures from your authenticator, or a recovery code.',
+  codeNeeded: 'Write the code.',
+  reentryTitle: 'Write your PIN to go on',
+  handOver: 'Hand over',
+  sessionHint: 'The session ends by itself after 12 hours.',
+}

@@ -1,0 +1,21 @@
+import { computed, type ComputedRef, type Ref } from 'vue'
+import { useQueryClient } from '@tanstack/vue-query'
+import { peopleApi } from '../api/peopleApi.ts'
+import { fieldErrors } from './fieldErrors.ts'
+import { newId } from './newId.ts'
+import { useMessages } from './useMessages.ts'
+import { useTask } from './useTask.ts'
+
+/** Adds the paper itself to what is written down of it. */
+export function usePaperFile(farmId: () => string): { add: (paperId: string, file: File) => Promise<unknown>; busy: Ref<boolean>; refusal: ComputedRef<string> } {
+  const client = useQueryClient()
+  const messages = useMessages()
+  const task = useTask(async (paperId: string, file: File) => {
+    await peopleApi.addPaperFile(farmId(), paperId, { id: newId(), file })
+    await client.invalidateQueries({ queryKey: ['person-papers', farmId()] })
+  })
+  return {
+    add: task.run, busy: task.running,
+    refusal: computed(() => (task.error.value === null ? '' : Object.values(fieldErrors(task.error.value))[0] ?? messages.problem(task.error.value))),
+  }
+}

@@ -1,0 +1,33 @@
+import { computed, type ComputedRef } from 'vue'
+import { useI18n } from 'vue-i18n'
+import { civilDateIn } from '../../shared/time/civilDate.ts'
+import { phoneApi } from '../api/phoneApi.ts'
+import { useSession } from '../stores/session.ts'
+import { useFarm } from './useFarm.ts'
+import { useFarmRead } from './useFarmRead.ts'
+import { useFigures } from './useFigures.ts'
+import { useSubmit } from './useSubmit.ts'
+import { useTask, type Task } from './useTask.ts'
+
+interface PhoneLine { id: string; name: string; since: string; used: string; gone: string }
+
+/** The farm's shared phones in words, and taking one away; who does not lead the farm does not ask for them. */
+export function usePhones(): { lines: ComputedRef<PhoneLine[] | undefined>; isError: ComputedRef<boolean>; refetch: () => unknown; revoke: Task<[string], unknown> } {
+  const { t } = useI18n()
+  const session = useSession()
+  const farm = useFarm(() => session.farmId)
+  const { day } = useFigures()
+  const { submit } = useSubmit()
+  const query = useFarmRead('shared-phones', () => session.farmId, (id) => phoneApi.list(id), () => session.canManage)
+  const dayOf = (instant: string): string => day(civilDateIn(farm.data.value?.zone ?? 'UTC', instant))
+  return {
+    lines: computed(() => query.data.value?.map(({ id, name, enrolledBy, enrolledAt, lastUsedAt, revokedAt }) => ({
+      id, name, since: t('people.phones.by', { day: dayOf(enrolledAt), name: enrolledBy }),
+      used: lastUsedAt === null ? t('people.phones.never') : dayOf(lastUsedAt),
+      gone: revokedAt === null ? '' : t('people.phones.revoked', { day: dayOf(revokedAt) }),
+    }))),
+    isError: computed(() => query.isError.value),
+    refetch: () => query.refetch(),
+    revoke: useTask((id: string) => submit({ kind: 'phone.revoke', farmId: session.farmId, id, body: {} })),
+  }
+}
