@@ -14,6 +14,7 @@ import { seedGround } from './seedGround.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
 import { seedGrowing, seedRedrawn } from './seedGrowing.ts'
 import { seedInputs } from './seedInputs.ts'
+import { seedPeople } from './seedPeople.ts'
 import { seedRecords } from './seedRecords.ts'
 import { seedCalibrations, seedSprayers } from './seedSprayers.ts'
 import { seedRounds } from './seedRounds.ts'
@@ -62,6 +63,7 @@ export async function seedDemo(services: Services, password: string): Promise<De
   await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
   await seedRounds(services, { manager, blocks, lots })
   await seedTaken(services, await actorOf(services, ids.certifier, farm.id))
+  await seedPeople(services, manager, { applicatorId: applicator.personId ?? '', ruanId })
   await seedRedrawn(services, manager, blocks.get('L1') ?? '')
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
   await services.database.inHouse((tx) => tx.query('INSERT INTO demo_seed (demo_farm_id, demo_neighbour_id) VALUES ($1, $2)', [farm.id, neighbourFarmId]))

@@ -36,6 +36,11 @@ export async function openFarm(request: APIRequestContext, who: Who): Promise<Fa
 
 /** The API as whoever is signed in, on one farm. */
 export function farmApi(request: APIRequestContext, farmId: string): FarmApi {
+  return apiOf(request, farmId)
+}
+
+/** The API of a farm as whoever is signed in with this request context. */
+export function apiOf(request: APIRequestContext, farmId: string): FarmApi {
   const path = (rest: string): string => `/api/farms/${farmId}${rest}`
   return {
     farmId,

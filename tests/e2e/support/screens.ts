@@ -48,6 +48,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'sprayers', path: '/farm/sprayers' },
     { name: 'sprayer', path: `/farm/sprayers/${things.sprayer.id}` },
     { name: 'first hour', path: '/start' },
+    { name: 'one’s own page', path: '/me' },
+    { name: 'second factor', path: '/second-factor' },
     { name: 'nothing there', path: '/nothing-there' },
   ]
   return [
@@ -56,6 +58,8 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'grants', who: 'owner', path: '/farm/grants' },
     { name: 'journal', who: 'manager', path: '/farm/journal' },
     { name: 'mail of the farm', who: 'owner', path: '/farm/mail' },
+    { name: 'people, to the owner', who: 'owner', path: '/farm/people' },
+    { name: 'a person', who: 'owner', path: `/farm/people/${record.signedBy?.id ?? ''}` },
     { name: 'my farms', who: 'certifier', path: '/farms' },
   ]
 }
