@@ -37,14 +37,14 @@ export function usePinSignIn(asks = true): PinSignIn {
 
   async function signIn(personId: string, pin: string): Promise<boolean> {
     forget()
-    if (!PIN.test(pin)) error.value = t('people.signIn.pinNeeded')
+    if (!PIN.test(pin)) error.value = t('pin.pinNeeded')
     if (error.value !== '' || busy.value) return false
     busy.value = true
     try {
       await session.signInByPin(personId, pin)
       return true
     } catch (cause) {
-      refusal.value = cause instanceof ApiError && cause.problem.code === 'pin.wrong' ? t('people.signIn.wrong') : messages.problem(cause)
+      refusal.value = cause instanceof ApiError && cause.problem.code === 'pin.wrong' ? t('pin.wrong') : messages.problem(cause)
       return false
     } finally {
       busy.value = false

@@ -32,7 +32,7 @@ export function useSignIn(wrongWords: () => string): SignIn {
   async function signIn(email: string, password: string, code = ''): Promise<boolean> {
     errors.email = email.trim() === '' ? t('session.emailNeeded') : ''
     errors.password = password === '' ? t('session.passwordNeeded') : ''
-    errors.code = asksCode.value && code.trim() === '' ? t('people.signIn.codeNeeded') : ''
+    errors.code = asksCode.value && code.trim() === '' ? t('pin.codeNeeded') : ''
     refusal.value = ''
     lacksSignal = false
     if (Object.values(errors).some((words) => words !== '') || busy.value) return false

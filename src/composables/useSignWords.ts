@@ -8,8 +8,8 @@ export function useSignWords(): { label: ComputedRef<string>; short: ComputedRef
   const session = useSession()
   const isPin = computed(() => session.user?.signsWith === 'pin')
   return {
-    label: computed(() => t(isPin.value ? 'people.yourPin' : 'records.sign.password')),
-    short: computed(() => t(isPin.value ? 'people.me.pin' : 'records.sign.passwordShort')),
+    label: computed(() => t(isPin.value ? 'pin.yours' : 'records.sign.password')),
+    short: computed(() => t(isPin.value ? 'pin.short' : 'records.sign.passwordShort')),
     inputmode: computed(() => (isPin.value ? 'numeric' : 'text')),
   }
 }

@@ -14,8 +14,6 @@ export const farm = {
   peopleCount: '{count} person | {count} people',
   personName: 'Name',
   personRole: 'Role',
-  personAccount: 'Account',
-  noAccount: 'no account; signs on a shared phone',
   left: 'left',
   noPeople: 'No people yet.',
   sprayers: 'Sprayers',

@@ -142,7 +142,6 @@ export const people = {
     holds: 'holds until {day}',
     over: 'ran out on {day}',
     always: 'no last day written down',
-    paper: 'Paper',
     addFile: 'Add the paper',
     unread: 'The papers could not be read.',
   },

@@ -14,8 +14,6 @@ export const farm = {
   peopleCount: '{count} persona | {count} personas',
   personName: 'Nombre',
   personRole: 'Función',
-  personAccount: 'Cuenta',
-  noAccount: 'sin cuenta; firma en un teléfono compartido',
   left: 'se fue',
   noPeople: 'Aún no hay personas.',
   sprayers: 'Pulverizadores',

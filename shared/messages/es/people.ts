@@ -144,7 +144,6 @@ export const people: Messages['people'] = {
     holds: 'vale hasta el {day}',
     over: 'caducó el {day}',
     always: 'sin último día anotado',
-    paper: 'Documento',
     addFile: 'Añadir el documento',
     unread: 'No se han podido leer los documentos.',
   },
