@@ -5,6 +5,7 @@ import { RecordForm } from './support/recordForm.ts'
 import { listScreens, openScreen } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
 import { makeThings } from './support/things.ts'
+import { watchPages } from './support/watchPage.ts'
 import { say } from './support/words.ts'
 
 const WIDE = [{ width: 1440, height: 900 }, { width: 1024, height: 768 }]
@@ -21,10 +22,10 @@ async function setLight(page: Page, light: 'day' | 'dawn'): Promise<void> {
   }, light)
 }
 
-test('axe finds nothing on any screen, by day and at dawn', async ({ page, context, isPhone, manager }) => {
+test('axe finds nothing on any screen, by day and at dawn, and none breaks the policy, errs or loses a file', async ({ page, context, isPhone, manager }) => {
   test.slow()
   const sizes = isPhone ? [PHONE] : WIDE
-  const found: string[] = []
+  const found = await watchPages(context)
   for (const { name, who, path } of await listScreens(manager)) {
     if (who !== null) await signInTo(context.request, who)
     await openScreen(page, path)

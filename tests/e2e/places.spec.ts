@@ -6,9 +6,11 @@ import { watchPages } from './support/watchPage.ts'
 
 const OPEN = ['/signin', '/check', '/welcome', '/reset']
 const EVERYBODY = ['/blocks', '/blocks/BLOCK', '/blocks/ground', '/register', '/register/RECORD', '/inputs']
-const OF_FARM = ['/', ...EVERYBODY, '/register/new', '/rounds', '/farm', '/farm/people', '/farm/sprayers']
+const OF_FARM = ['/', ...EVERYBODY, '/register/new', '/rounds', '/farm', '/farm/people', '/farm/sprayers', '/me']
 const OF_LEADERS = [...OF_FARM, '/start', '/farm/sprayers/SPRAYER', '/blocks/new?by=draw', '/blocks/new?by=points', '/blocks/BLOCK/shape', '/blocks/BLOCK/split', '/blocks/merge', '/blocks/ground/new?what=site', '/blocks/import', '/rounds/plans/new', '/farm/journal', '/farms/new']
-const PLACES: Record<Exclude<Who, 'neighbour'>, string[]> = { owner: [...OF_LEADERS, '/farm/mail', '/farm/grants'], manager: OF_LEADERS, applicator: OF_FARM, certifier: ['/farms', ...EVERYBODY] }
+/** An owner opens all that a manager does, and this: what differs by role. */
+const OF_OWNER = ['/', '/start', '/farm', '/farm/people', '/farm/sprayers', '/farm/journal', '/farm/mail', '/farm/grants']
+const PLACES: Record<Exclude<Who, 'neighbour'>, string[]> = { owner: OF_OWNER, manager: OF_LEADERS, applicator: OF_FARM, certifier: ['/farms', ...EVERYBODY] }
 
 test('who is not signed in opens the cover pages without one refused request or error', async ({ page, context }) => {
   const found = await watchPages(context, { strict: true })

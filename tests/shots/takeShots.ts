@@ -24,6 +24,10 @@ const PLACES = [
   { path: '/blocks/new?by=draw', names: { desk: 'd-block-new', tablet: 't-block-new', phone: 'm-block-new' } },
   { path: '/register', names: { desk: 'd-04-register', tablet: 't-register', phone: 'm-register' } },
   { path: '/inputs', names: { desk: 'd-inputs', tablet: 't-inputs', phone: 'm-inputs' } },
+  { path: '/rounds', names: { desk: 'd-05-season-sheet', tablet: 't-rounds', phone: 'm-rounds' } },
+  { path: '/farm/people', names: { desk: 'd-people', tablet: 't-people', phone: 'm-people' } },
+  { path: '/farm/journal', names: { desk: 'd-journal', tablet: 't-journal', phone: 'm-journal' } },
+  { path: '/me', names: { desk: 'd-me', tablet: 't-me', phone: 'm-me' } },
   { path: '/farm', names: { desk: 'd-farm', tablet: 't-farm', phone: 'm-farm' } },
 ] as const
 
@@ -92,24 +96,35 @@ async function shootCertifier(shooting: Shooting): Promise<void> {
   await withPage(shooting, { size: 'desk', who: 'certifier' }, async (page) => {
     await page.goto('/farms')
     await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
-    await shoot(page, shooting.folder, 'd-my-farms')
+    await shoot(page, shooting.folder, 'd-07-my-farms')
   })
 }
 
-/** The first page of a signed record as it prints. */
+/** The farm that the manager of the demo leads, as its address. */
+async function farmAddress(page: Page): Promise<string> {
+  const session = sessionSchema.parse(await (await page.request.get('/api/session')).json())
+  return `/api/farms/${session.memberships[0]?.farmId}`
+}
+
+/** A page of a PDF as it prints. */
+async function shootPage({ folder }: Shooting, page: Page, { address, number, name }: { address: string; number: number; name: string }): Promise<void> {
+  const pdf = await page.request.get(address)
+  expect(pdf.status()).toBe(200)
+  const file = join(folder, name)
+  await writeFile(`${file}.pdf`, await pdf.body())
+  await run('pdftoppm', ['-f', String(number), '-l', String(number), '-singlefile', '-png', '-scale-to-x', PAGE_PX.width, '-scale-to-y', PAGE_PX.height, `${file}.pdf`, file])
+  await rm(`${file}.pdf`)
+  process.stdout.write(`${name}.png\n`)
+}
+
+/** The first pages of a signed record and of the season report. */
 async function shootPaper(shooting: Shooting): Promise<void> {
   await withPage(shooting, { size: 'desk', who: 'manager' }, async (page) => {
-    const session = sessionSchema.parse(await (await page.request.get('/api/session')).json())
-    const records = `/api/farms/${session.memberships[0]?.farmId}/records`
-    const rows = pageOf(registerRowSchema).parse(await (await page.request.get(`${records}?limit=200`)).json()).items
+    const farm = await farmAddress(page)
+    const rows = pageOf(registerRowSchema).parse(await (await page.request.get(`${farm}/records?limit=200`)).json()).items
     const row = rows.find(({ state, preparations }) => state === 'signed' && preparations.includes('Potash soap'))
-    const pdf = await page.request.get(`${records}/${row?.id}/pdf`)
-    expect(pdf.status()).toBe(200)
-    const file = join(shooting.folder, 'p-01-record')
-    await writeFile(`${file}.pdf`, await pdf.body())
-    await run('pdftoppm', ['-f', '1', '-l', '1', '-singlefile', '-png', '-scale-to-x', PAGE_PX.width, '-scale-to-y', PAGE_PX.height, `${file}.pdf`, file])
-    await rm(`${file}.pdf`)
-    process.stdout.write('p-01-record.png\n')
+    await shootPage(shooting, page, { address: `${farm}/records/${row?.id}/pdf`, number: 1, name: 'p-01-record' })
+    await shootPage(shooting, page, { address: `${farm}/seasons/${row?.season}/pdf`, number: 1, name: 'p-02-season-report' })
   })
 }
 

@@ -5,12 +5,12 @@ import { personOf, type FarmActor } from '../../database/actor.ts'
 import { Grant } from '../../entities/Grant.ts'
 import { Person } from '../../entities/Person.ts'
 import { invalid } from '../../errors.ts'
+import { accountOf } from '../accountOf.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { assertPassword } from '../assertPassword.ts'
 import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
 import type { Services } from '../services.ts'
 import { assertLastDay } from './assertLastDay.ts'
-import { certifierAccount } from './certifierAccount.ts'
 import { presentGrant } from './presentGrants.ts'
 import { tellOfGrant } from './tellOfGrant.ts'
 
@@ -31,7 +31,7 @@ export async function giveGrant(
     const repeat = await findRepeat(manager, Grant, row)
     if (repeat) return { made: false, grant: await presentGrant(services, manager, actor, repeat) }
     assertLastDay(services, actor, given.endsOn)
-    const account = await certifierAccount(manager, certifierEmail, { language, createdAt })
+    const account = await accountOf(services, manager, { email: certifierEmail, name: certifierEmail, language })
     await assertOutsider(manager, actor, account.id)
     const { made, stored } = await insertOnce(manager, Grant, { ...row, accountId: account.id }, { path: 'id', code: 'idempotency.mismatch' })
     if (made) {

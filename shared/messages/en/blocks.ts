@@ -21,7 +21,7 @@ export const blocks = {
     zoomIn: 'Closer',
     zoomOut: 'Farther',
     all: 'All',
-    crowded: '{count} corners are in sight, too many to take hold of by hand: go closer, or choose one in the list.',
+    crowded: '{count} corner is in sight, too many to take hold of by hand: go closer, or choose one in the list. | {count} corners are in sight, too many to take hold of by hand: go closer, or choose one in the list.',
     show: 'Map',
     showList: 'List',
     switch: 'List or map',

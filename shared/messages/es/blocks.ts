@@ -21,7 +21,7 @@ export const blocks = {
     zoomIn: 'Acercar',
     zoomOut: 'Alejar',
     all: 'Todo',
-    crowded: 'Hay {count} esquinas a la vista, demasiadas para tomarlas con la mano: acérquese o elija una en la lista.',
+    crowded: 'Hay {count} esquina a la vista, demasiadas para tomarlas con la mano: acérquese o elija una en la lista. | Hay {count} esquinas a la vista, demasiadas para tomarlas con la mano: acérquese o elija una en la lista.',
     show: 'Mapa',
     showList: 'Lista',
     switch: 'Lista o mapa',
