@@ -1,4 +1,5 @@
-import { afterEach, describe, expect, it } from 'vitest'
+import { flushPromises } from '@vue/test-utils'
+import { afterEach, describe, expect, it, vi } from 'vitest'
 import RecordFiles from '../../../../src/components/files/RecordFiles.vue'
 import type { FileLine } from '../../../../src/composables/fileLine.ts'
 import { mountWithWords } from '../mountWithWords.ts'
@@ -30,6 +31,9 @@ describe('RecordFiles', () => {
     expect(parts.text()).toContain('Photo, 1.2 MB · Tam Lisk, Tue 16 Jun, 07:12')
     await parts.get('button[aria-label="Take back rows.jpg"]').trigger('click')
     expect(parts.emitted('remove')).toBeUndefined()
+    // The dialog itself is read when it is first shown.
+    await vi.dynamicImportSettled()
+    await flushPromises()
     const sure = [...document.body.querySelectorAll('button')].find(({ textContent }) => textContent?.trim() === 'Yes, take it back')
     sure?.click()
     expect(parts.emitted('remove')).toMatchObject([[{ id: 'a' }]])
