@@ -37,7 +37,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
     person: computed(() =>
       session.user === null || session.role === null
         ? ''
-        : t('frame.person', { name: session.user.name, role: t(`farm.role.${session.role}`).toLowerCase() }),
+        : t('frame.person', { name: session.user.name, role: t(`session.role.${session.role}`).toLowerCase() }),
     ),
     chooseFarm: session.chooseFarm,
     openKept: () => { keptOpen.value = true },

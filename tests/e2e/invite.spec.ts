@@ -41,7 +41,7 @@ test('an owner invites by letter, and somebody new takes the invitation in Spani
   const dialog = page.getByRole('dialog')
   await dialog.getByLabel(say('letters.invite.email'), { exact: true }).fill(email)
   await dialog.getByLabel(say('letters.invite.name')).fill('Ana')
-  await dialog.getByText(say('farm.role.manager'), { exact: true }).click()
+  await dialog.getByText(say('session.role.manager'), { exact: true }).click()
   await dialog.getByText('Español').click()
   await dialog.getByRole('button', { name: say('letters.invite.send') }).click()
   await expect(dialog.getByText(say('letters.invite.passwordNeeded'))).toBeVisible()

@@ -2,7 +2,6 @@
 export const farm = {
   title: 'Farm',
   tabs: 'Parts of the farm',
-  role: { owner: 'Owner', manager: 'Manager', applicator: 'Applicator', certifier: 'Certifier' },
   profile: 'Profile',
   name: 'Name',
   zone: 'Time zone',

@@ -58,4 +58,5 @@ export const session = {
     showsNot: 'It does not show that what the record says is true, nor that the work was lawful.',
     toSignIn: 'Sign in',
   },
+  role: { owner: 'Owner', manager: 'Manager', applicator: 'Applicator', certifier: 'Certifier' },
 }

@@ -2,7 +2,6 @@
 export const farm = {
   title: 'Finca',
   tabs: 'Partes de la finca',
-  role: { owner: 'Titular', manager: 'Responsable', applicator: 'Aplicador', certifier: 'Certificadora' },
   profile: 'Datos',
   name: 'Nombre',
   zone: 'Zona horaria',

@@ -58,4 +58,5 @@ export const session = {
     showsNot: 'No muestra que lo que dice el registro sea verdad, ni que el trabajo fuera lícito.',
     toSignIn: 'Entrar',
   },
+  role: { owner: 'Titular', manager: 'Responsable', applicator: 'Aplicador', certifier: 'Certificadora' },
 }
