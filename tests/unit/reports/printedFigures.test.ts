@@ -8,6 +8,7 @@ import { presentComputed } from '../../../shared/records/presentComputed.ts'
 import { sheetOf } from '../../../shared/records/sheetOf.ts'
 import { signFigures } from '../../../shared/records/signFigures.ts'
 import { decimalTextOf } from '../../../shared/units/decimalTextOf.ts'
+import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
 import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
 import { buildStrips } from '../../support/buildSampleRecords.ts'
 import { buildSignedRecord } from '../../support/buildSignedRecord.ts'
@@ -60,6 +61,9 @@ function sign({ method, lines, bases, water, tankL }: typeof records extends fc.
   return { computed, signed: buildSignedRecord({ content, blocks, sprayer, computed: signFigures(computed) }) }
 }
 
+/** A worked-out amount of a line is written down to a tenth of a millilitre, and printed from that. */
+const STORED_DECIMALS = 4
+
 /** Ways a figure may stand, more decimals than its size asks for among them: enough that its column comes to its total. */
 const ways = (write: (extra: number) => string): string[] => [0, 1, 2, 3].map((extra) => write(extra).replace(/\s+/g, ' '))
 const litres = (value: string | number | null, after = ''): string[][] =>
@@ -72,7 +76,7 @@ function figuresOf({ totalL, waterL, sprayLPerHa, loads, areaM2, lines, sprayPer
     ...litres(totalL, ' L'), ...litres(waterL, ' L'), ...litres(sprayLPerHa),
     ...components.flatMap(({ amount }) => litres(amount?.value ?? null, ` ${amount?.unit}`)),
     ways((extra) => words.hectares(areaM2, extra)),
-    ...lines.flatMap((line) => [ways((extra) => words.hectares(line.areaM2, extra)), ...litres(line.shareL, ' L worked out')]),
+    ...lines.flatMap((line) => [ways((extra) => words.hectares(line.areaM2, extra)), ...litres(line.shareL === null ? null : roundDecimal(decimalText(line.shareL), STORED_DECIMALS), ' L worked out')]),
     ...litres(sprayPerEach?.litres ?? null, ' L a plant'),
     ...(loads && loads.full > 0 ? [[`${loads.full === 1 ? 'one load' : `${loads.full} loads`} of ${words.tank(decimalTextOf(loads.tankL))} L`]] : []),
     ...(loads && loads.lastL > 0 ? litres(loads.lastL, ' L') : []),
