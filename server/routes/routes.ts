@@ -3,6 +3,7 @@ import type { Route } from './defineRoute.ts'
 import { farmRoutes } from './farmRoutes.ts'
 import { fileRoutes } from './fileRoutes.ts'
 import { grantRoutes } from './grantRoutes.ts'
+import { heldPaperRoutes } from './heldPaperRoutes.ts'
 import { groundRoutes } from './groundRoutes.ts'
 import { growingRoutes } from './growingRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
@@ -27,6 +28,6 @@ import { startRoutes } from './startRoutes.ts'
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
   ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes, ...paperRoutes,
-  ...farmRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes,
+  ...farmRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes, ...heldPaperRoutes,
   ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

@@ -147,11 +147,13 @@ describe('amending', () => {
   it('is not late for being mended late, and says of its times that they are its own', async () => {
     const { id } = await signed(applicator)
     house.setNow('2026-09-01T08:00:00Z')
-    const answer = await amend(await house.as(farm.accounts.applicator), id, { reason: 'The purpose was missing', purpose: 'Soil life', deviceAt: '2026-09-01T08:01:00Z' })
+    // The session of June is over by then.
+    const later = await house.as(farm.accounts.applicator)
+    const answer = await amend(later, id, { reason: 'The purpose was missing', purpose: 'Soil life', deviceAt: '2026-09-01T08:01:00Z' })
     expect(answer).toMatchObject({ status: 200, body: { signedAt: '2026-09-01T08:00:00.000Z' } })
-    const { items } = (await applicator.get(address(`/${id}/versions`))).body
+    const { items } = (await later.get(address(`/${id}/versions`))).body
     expect(items[1].signed.times).toMatchObject({ deviceAt: '2026-09-01T08:01:00.000Z', receivedAt: '2026-09-01T08:00:00.000Z' })
-    const rows = (await applicator.get(address('?limit=200'))).body.items as { id: string; lateHours: number | null }[]
+    const rows = (await later.get(address('?limit=200'))).body.items as { id: string; lateHours: number | null }[]
     expect(rows.find((row) => row.id === id)?.lateHours).toBeNull()
   })
 

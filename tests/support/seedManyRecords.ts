@@ -128,6 +128,6 @@ const SEED = `WITH template AS MATERIALIZED (
 )
 INSERT INTO record_terms (farm_id, record_id, term, season, work_season, sort_at)
 SELECT ($1::text)::uuid, id, term, season, work_season, started_at FROM made, LATERAL (
-  SELECT unnest(terms) UNION SELECT 's:' || state
+  SELECT unnest(terms) UNION SELECT 's:' || state UNION SELECT 'r:waiting' WHERE state = 'signed'
   UNION SELECT 'w:' || unnest(ARRAY[full_number, split_part(full_number, '-', 1), split_part(full_number, '-', 2), number::text]) WHERE season IS NOT NULL
 ) AS found (term)`

@@ -2,6 +2,9 @@ import type { EntityManager } from 'typeorm'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import type { Attachment } from '../../entities/Attachment.ts'
+import { Block } from '../../entities/Block.ts'
+import { Calibration } from '../../entities/Calibration.ts'
+import { Farm } from '../../entities/Farm.ts'
 import { PersonPaper } from '../../entities/PersonPaper.ts'
 import { forbidden, notFound } from '../../errors.ts'
 import { assertMayWrite } from '../records/assertMayWrite.ts'
@@ -10,8 +13,8 @@ import { assertMayWrite } from '../records/assertMayWrite.ts'
 export interface FileHolder { about: Attachment['about']; id: string }
 
 /**
- * Holds that what a file belongs to is there and may be written by this person: a record by whoever may write it, a paper of a person
- * by who leads the farm.
+ * Holds that what a file belongs to is there and may be written by this person: a record by whoever may write it, anything else by who
+ * leads the farm.
  * @param lock holds it until the transaction ends.
  * @returns the season under which a certifier may see the file; null for none.
  * @throws {AppError} not-found, forbidden.
@@ -19,8 +22,8 @@ export interface FileHolder { about: Attachment['about']; id: string }
 export async function findHolder(manager: EntityManager, actor: FarmActor, { about, id }: FileHolder, lock = false): Promise<{ season: number | null }> {
   const { farmId } = actor
   const locked = lock ? { lock: { mode: 'pessimistic_read' as const } } : {}
-  if (about === 'person-paper') {
-    if (!(await manager.findOne(PersonPaper, { where: { farmId, id }, ...locked }))) throw notFound()
+  if (about !== 'record') {
+    await assertThere(manager, actor, { about, id }, lock)
     if (actor.role === 'applicator') throw forbidden()
     return { season: null }
   }
@@ -28,4 +31,14 @@ export async function findHolder(manager: EntityManager, actor: FarmActor, { abo
   if (!record) throw notFound()
   assertMayWrite(actor, record)
   return { season: record.season }
+}
+
+/** That a thing which is no record is there on this farm. @throws {AppError} not-found. */
+export async function assertThere(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, { about, id }: FileHolder, lock = false): Promise<void> {
+  const how = { where: { farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' as const } }) }
+  const found = about === 'land' ? await manager.findOne(Block, how)
+    : about === 'calibration' ? await manager.findOne(Calibration, how)
+      : about === 'certificate' ? id === farmId && await manager.findOneBy(Farm, { id: farmId })
+        : await manager.findOne(PersonPaper, how)
+  if (!found) throw notFound()
 }

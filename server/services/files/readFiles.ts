@@ -8,6 +8,7 @@ import { forbidden, notFound } from '../../errors.ts'
 import type { Services } from '../services.ts'
 import { SERVED_TYPE, shrinkImage } from './encodeImage.ts'
 import { orUnavailable } from './farmFiles.ts'
+import { assertThere, type FileHolder } from './findHolder.ts'
 import { presentAttachments } from './presentAttachment.ts'
 
 /** A file to be sent: what it holds is read when it is asked for, so that nobody is sent what they have. */
@@ -26,6 +27,16 @@ export async function listFiles(services: Services, actor: FarmActor, recordId: 
   return services.database.inFarm(actor, async (manager) => {
     if (!(await manager.existsBy(ApplicationRecord, { farmId, id: recordId }))) throw notFound()
     const rows = await manager.find(Attachment, { where: { farmId, recordId, removedAt: IsNull() }, order: { uploadedAt: 'ASC', id: 'ASC' } })
+    return { items: await presentAttachments(manager, farmId, rows), next: null }
+  })
+}
+
+/** The papers of a thing that is no record, in the order they came. @throws {AppError} not-found. */
+export async function listHeldFiles(services: Services, actor: FarmActor, holder: FileHolder): Promise<{ items: AttachmentAnswer[]; next: null }> {
+  const { farmId } = actor
+  return services.database.inFarm(actor, async (manager) => {
+    await assertThere(manager, actor, holder)
+    const rows = await manager.find(Attachment, { where: { farmId, about: holder.about, recordId: holder.id, removedAt: IsNull() }, order: { uploadedAt: 'ASC', id: 'ASC' } })
     return { items: await presentAttachments(manager, farmId, rows), next: null }
   })
 }

@@ -28,4 +28,5 @@ export const files = {
   saveOriginal: 'Save the original',
   originalHint: 'What you see is without place, time and camera. The original may hold them: think before you hand it on.',
   noRoom: 'This device has no room left to keep it. Leave this page open until it is sent.',
+  heldFailed: 'The papers could not be read.',
 }

@@ -17,6 +17,7 @@ export const growing = {
   crop: { planted: '{crop}, planted {year}', more: '{crops}, and {count} more' },
   counted: { title: 'Counted', plants: '{count} plant | {count} plants', rows: '{count} row | {count} rows', beds: '{count} bed | {count} beds', rowM: '{figure} m of row' },
   land: {
+    papers: 'Proof, papers', papersOf: 'land of {code}',
     title: 'Land',
     edit: 'Change land',
     form: 'Land of {code}',

@@ -28,4 +28,5 @@ export const files = {
   saveOriginal: 'Guardar el original',
   originalHint: 'Lo que ve no lleva lugar, hora ni cámara. El original puede llevarlos: piénselo antes de entregarlo.',
   noRoom: 'Este dispositivo no tiene sitio para guardarlo. Deje esta página abierta hasta que se envíe.',
+  heldFailed: 'No se pudieron leer los documentos.',
 }

@@ -19,6 +19,7 @@ export const growing: Screens['growing'] = {
   crop: { planted: '{crop}, desde {year}', more: '{crops}, y {count} más' },
   counted: { title: 'Contado', plants: '{count} planta | {count} plantas', rows: '{count} hilera | {count} hileras', beds: '{count} bancal | {count} bancales', rowM: '{figure} m de hilera' },
   land: {
+    papers: 'Prueba, papeles', papersOf: 'terreno de {code}',
     title: 'Tierra',
     edit: 'Cambiar tierra',
     form: 'Tierra de {code}',
