@@ -12,7 +12,7 @@ beforeAll(async () => {
 afterAll(() => house.close())
 
 it('without a tile service there is no imagery to ask for', async () => {
-  expect((await applicator.get('/api/config').expect(200)).body).toEqual({ imagery: null, demo: false })
+  expect((await applicator.get('/api/config').expect(200)).body).toMatchObject({ imagery: null, demo: false })
   await applicator.get('/api/tiles/1/0/0').expect(404)
 })
 
