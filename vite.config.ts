@@ -26,6 +26,8 @@ export default defineConfig({
         // A piece packs the better the more of a kind is in it: what every phone reads from sign-in to a new record lies in few.
         codeSplitting: {
           groups: [
+            // What the page's own script needs before all else: it says how the policy stands before any schema is made.
+            { name: 'helper', test: /preload-helper/, priority: 1 },
             { name: 'libraries', test: /node_modules[\\/](@vue|vue|vue-router|pinia|@tanstack|vue-i18n|@intlify|zod|decimal\.js|temporal-polyfill|temporal-utils|idb|uuid)[\\/]/ },
             { name: 'common', test: /[\\/](src|shared)[\\/]/, minShareCount: 18 },
           ],

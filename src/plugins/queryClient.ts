@@ -1,8 +1,11 @@
-import { QueryClient } from '@tanstack/vue-query'
+import { QueryCache, QueryClient } from '@tanstack/vue-query'
 import { ApiError, NetworkError } from '../api/errors.ts'
+import { isNotFound } from '../composables/isNotFound.ts'
 
 /** What the server owns, kept while it is fresh. A refusal is never asked again by itself. */
 export const queryClient = new QueryClient({
+  // What is not there any more, or not for this reader, does not stay on the screen because it was read before.
+  queryCache: new QueryCache({ onError: (error, query) => { if (isNotFound(error)) query.setState({ data: undefined }) } }),
   defaultOptions: {
     queries: {
       staleTime: 30_000,
