@@ -68,7 +68,7 @@ async function namePeople(manager: EntityManager, { farm, people, record }: Sign
 
 async function findNeighbours(manager: EntityManager, { farm, blocks }: SignedRecord): Promise<RecordReportData['neighbours']> {
   const own = new Set(blocks.map(({ id }) => id))
-  const others = await manager.find(Block, { select: { id: true, code: true, geometry: true, fromIds: true }, where: { farmId: farm.id, endedOn: IsNull() } })
+  const others = await manager.find(Block, { select: { id: true, code: true, geometry: true, fromIds: true }, where: { farmId: farm.id, endedOn: IsNull() }, order: { code: 'ASC', id: 'ASC' } })
   return others
     .filter(({ id, geometry, fromIds }) => !own.has(id) && !fromIds.some((from) => own.has(from)) && blocks.some((block) => distanceKm(block.geometry, geometry) < NEIGHBOUR_KM))
     .map(({ code, geometry }) => ({ code, geometry }))
