@@ -12,7 +12,7 @@ export const fileRoutes = [
   defineRoute({
     method: 'get', path: '/farms/:farmId/records/:id/files', summary: 'Photos and papers of a record.', roles: EVERY_ROLE,
     params: thingParamsSchema, answer: z.object({ items: z.array(attachmentSchema), next: z.null() }),
-    run: async ({ services, actor, params }) => ({ body: await listFiles(services, actor, params.id) }),
+    run: async ({ services, actor, params }) => ({ body: await listFiles(services, actor, { about: 'record', id: params.id }) }),
   }),
   defineRoute({
     method: 'post', path: '/farms/:farmId/records/:id/files', summary: 'Add a photo or paper to a record: one file of at most 10 MB, JPEG, PNG, WebP or, as a paper, PDF.', roles: FARM_PEOPLE,

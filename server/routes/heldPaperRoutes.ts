@@ -3,7 +3,7 @@ import { addFileSchema, attachmentSchema } from '../../shared/contract/attachmen
 import { farmParamsSchema, thingParamsSchema } from '../../shared/contract/common.ts'
 import { addFile } from '../services/files/addFile.ts'
 import type { FileHolder } from '../services/files/findHolder.ts'
-import { listHeldFiles } from '../services/files/readFiles.ts'
+import { listFiles } from '../services/files/readFiles.ts'
 import { defineRoute, type Route } from './defineRoute.ts'
 import { FARM_PEOPLE, LEADERS } from './roleGroups.ts'
 
@@ -17,7 +17,7 @@ function papersOf(about: FileHolder['about'], path: string, what: string): Route
   return [
     defineRoute({
       method: 'get', path, summary: `Papers of ${what}.`, roles: FARM_PEOPLE, params, answer: listSchema,
-      run: async ({ services, actor, params: read }) => ({ body: await listHeldFiles(services, actor, { about, id: idOf(read) }) }),
+      run: async ({ services, actor, params: read }) => ({ body: await listFiles(services, actor, { about, id: idOf(read) }) }),
     }),
     defineRoute({
       method: 'post', path, summary: `Add a paper of ${what}: one file of at most 10 MB, JPEG, PNG, WebP or PDF.`, roles: LEADERS,

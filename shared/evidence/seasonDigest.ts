@@ -5,7 +5,7 @@ import { sha256Hex } from './sha256Hex.ts'
 export interface LogEntry { seq: number; digest: string }
 
 /**
- * The digest of all entries of a season up to one of them: any that is changed, taken out or slipped in before that one makes another.
+ * The digest of all entries of a season up to one of them: an entry changed, taken out or slipped in before that one makes another digest.
  * It says nothing of what comes after, nor whether what was written is true.
  * @param entries in the order of the log. @throws {RangeError} if they are not.
  * @source SHA-256 over RFC 8785 text.

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { attachmentSchema, type Attachment, type FileKind } from '../../shared/contract/attachment.ts'
+import { fileForm } from './fileForm.ts'
 import { http } from './http.ts'
 
 const listSchema = z.object({ items: z.array(attachmentSchema), next: z.null() })
@@ -17,13 +18,8 @@ export interface FileToSend {
 /** Photos and papers of records. */
 export const fileApi = {
   list: (farmId: string, recordId: string): Promise<z.infer<typeof listSchema>> => http.get(`/farms/${farmId}/records/${recordId}/files`, listSchema),
-  add: ({ id, farmId, recordId, kind, name, content }: FileToSend, onProgress: (share: number) => void): Promise<Attachment> => {
-    const form = new FormData()
-    form.append('id', id)
-    form.append('kind', kind)
-    form.append('file', content, name)
-    return http.upload(`/farms/${farmId}/records/${recordId}/files`, form, attachmentSchema, onProgress)
-  },
+  add: ({ farmId, recordId, ...file }: FileToSend, onProgress: (share: number) => void): Promise<Attachment> =>
+    http.upload(`/farms/${farmId}/records/${recordId}/files`, fileForm(file), attachmentSchema, onProgress),
   remove: (farmId: string, id: string): Promise<undefined> => http.del(`/farms/${farmId}/files/${id}`, z.undefined()),
   /** Where a browser finds it: as it is shown, small for a list, or as it came in. */
   address: (farmId: string, id: string, how: 'shown' | 'small' | 'original' = 'shown'): string =>

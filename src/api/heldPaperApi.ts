@@ -1,24 +1,23 @@
 import { z } from 'zod'
 import { attachmentSchema, type Attachment } from '../../shared/contract/attachment.ts'
+import { fileForm } from './fileForm.ts'
 import { http } from './http.ts'
 
-/** What papers can be of, beside records and people. */
+/** What papers can be of, beside records. */
 export type PaperHolder = { about: 'land' | 'calibration'; id: string } | { about: 'certificate' }
 
 const listSchema = z.object({ items: z.array(attachmentSchema), next: z.null() })
-const PLACES = { land: 'blocks', calibration: 'calibrations' } as const
 
-const addressOf = (farmId: string, holder: PaperHolder): string =>
-  holder.about === 'certificate' ? `/farms/${farmId}/certificate/papers` : `/farms/${farmId}/${PLACES[holder.about]}/${holder.id}/papers`
+function addressOf(farmId: string, holder: PaperHolder | { about: 'person-paper'; id: string }): string {
+  const farm = `/farms/${farmId}`
+  if (holder.about === 'land') return `${farm}/blocks/${holder.id}/papers`
+  if (holder.about === 'calibration') return `${farm}/calibrations/${holder.id}/papers`
+  return holder.about === 'certificate' ? `${farm}/certificate/papers` : `${farm}/person-papers/${holder.id}/files`
+}
 
-/** Papers of the land of a block, of a calibration, of the farm's certificate. */
+/** Papers of the land of a block, of a calibration, of the farm's certificate; those of a person come with what is written down of them. */
 export const heldPaperApi = {
   list: (farmId: string, holder: PaperHolder): Promise<Attachment[]> => http.get(addressOf(farmId, holder), listSchema).then(({ items }) => items),
-  add: (farmId: string, holder: PaperHolder, { id, file }: { id: string; file: File }): Promise<Attachment> => {
-    const form = new FormData()
-    form.append('id', id)
-    form.append('kind', 'paper')
-    form.append('file', file, file.name)
-    return http.upload(addressOf(farmId, holder), form, attachmentSchema, () => undefined)
-  },
+  add: (farmId: string, holder: Parameters<typeof addressOf>[1], { id, file }: { id: string; file: File }): Promise<Attachment> =>
+    http.upload(addressOf(farmId, holder), fileForm({ id, kind: 'paper', name: file.name, content: file }), attachmentSchema, () => undefined),
 }

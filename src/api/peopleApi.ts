@@ -1,4 +1,3 @@
-import { attachmentSchema, type Attachment } from '../../shared/contract/attachment.ts'
 import { factorAskedSchema, personPapersSchema, personSchema, type Person, type PersonPaper } from '../../shared/contract/person.ts'
 import { allPages } from './allPages.ts'
 import { http } from './http.ts'
@@ -8,11 +7,4 @@ export const peopleApi = {
   list: (farmId: string): Promise<Person[]> => allPages(`/farms/${farmId}/people`, personSchema),
   factorAsked: (farmId: string): Promise<boolean> => http.get(`/farms/${farmId}/second-factor`, factorAskedSchema).then(({ asked }) => asked),
   papers: (farmId: string): Promise<PersonPaper[]> => http.get(`/farms/${farmId}/person-papers`, personPapersSchema).then(({ items }) => items),
-  addPaperFile: (farmId: string, paperId: string, { id, file }: { id: string; file: File }): Promise<Attachment> => {
-    const form = new FormData()
-    form.append('id', id)
-    form.append('kind', 'paper')
-    form.append('file', file, file.name)
-    return http.upload(`/farms/${farmId}/person-papers/${paperId}/files`, form, attachmentSchema, () => undefined)
-  },
 }

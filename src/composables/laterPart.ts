@@ -18,7 +18,7 @@ export function laterCode<Loaded>(load: () => Promise<Loaded>): () => Promise<Lo
   return load
 }
 
-/** A part that a page does without until somebody opens it, read in the same way. */
+/** A part that a page does without until somebody opens it, read in the same way. Named beside a component, not in its setup: each instance would name it anew. */
 export function laterPart(load: () => Promise<{ default: Component }>): Component {
   const read = laterCode(load)
   return defineAsyncComponent({
@@ -27,7 +27,10 @@ export function laterPart(load: () => Promise<{ default: Component }>): Componen
   })
 }
 
-/** Reads all that comes later of everything that was read so far; what does not come now comes when it is used. */
+/** Reads all that comes later of everything that was read so far, and of what is read with it; what does not come now comes when it is used. */
 export async function readLaterParts(): Promise<void> {
-  await Promise.allSettled([...loads].map((load) => load()))
+  for (let known = 0; known < loads.size;) {
+    known = loads.size
+    await Promise.allSettled([...loads].map((load) => load()))
+  }
 }

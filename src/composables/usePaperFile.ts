@@ -1,6 +1,6 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { useQueryClient } from '@tanstack/vue-query'
-import { peopleApi } from '../api/peopleApi.ts'
+import { heldPaperApi } from '../api/heldPaperApi.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
 import { useMessages } from './useMessages.ts'
@@ -11,7 +11,7 @@ export function usePaperFile(farmId: () => string): { add: (paperId: string, fil
   const client = useQueryClient()
   const messages = useMessages()
   const task = useTask(async (paperId: string, file: File) => {
-    await peopleApi.addPaperFile(farmId(), paperId, { id: newId(), file })
+    await heldPaperApi.add(farmId(), { about: 'person-paper', id: paperId }, { id: newId(), file })
     await client.invalidateQueries({ queryKey: ['person-papers', farmId()] })
   })
   return {

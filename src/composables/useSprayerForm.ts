@@ -1,11 +1,9 @@
-import { reactive, ref, type Ref } from 'vue'
+import { reactive, type Ref } from 'vue'
 import { createSprayerSchema } from '../../shared/contract/farm.ts'
 import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
-import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
-import { useMessages } from './useMessages.ts'
+import { useDialogSend } from './useDialogSend.ts'
 import { useSchemaErrors } from './useSchemaErrors.ts'
-import { useSubmit } from './useSubmit.ts'
 
 /** The form of a new sprayer. */
 export interface SprayerForm {
@@ -21,46 +19,22 @@ export interface SprayerForm {
 
 /** Checks with the contract's own schema, then submits; errors stand at their fields. */
 export function useSprayerForm(farmId: () => string): SprayerForm {
-  const { submit } = useSubmit()
-  const messages = useMessages()
   const schemaErrors = useSchemaErrors()
   const draft = reactive({ code: '', name: '', tankL: '' })
-  const errors = reactive<Record<string, string>>({})
-  const refusal = ref('')
-  const busy = ref(false)
+  const { begin: beginSend, send, ...state } = useDialogSend()
   let id = newId()
-
-  function show(found: Record<string, string>): void {
-    for (const path of Object.keys(errors)) errors[path] = ''
-    Object.assign(errors, found)
-  }
 
   function begin(): void {
     id = newId()
     Object.assign(draft, { code: '', name: '', tankL: '' })
-    refusal.value = ''
-    show({})
+    beginSend()
   }
 
-  async function save(): Promise<'sent' | 'kept' | null> {
-    if (busy.value) return null
+  function save(): Promise<'sent' | 'kept' | null> {
     const tank = parseQuantityText(draft.tankL)
     const body = { id, code: draft.code, name: draft.name, tankL: tank.ok ? tank.value : draft.tankL }
-    const found = schemaErrors(createSprayerSchema, body)
-    refusal.value = ''
-    show(found)
-    if (Object.keys(found).length > 0) return null
-    busy.value = true
-    try {
-      return (await submit({ kind: 'sprayer.create', farmId: farmId(), id, body })).state
-    } catch (error) {
-      show(fieldErrors(error))
-      if (Object.keys(fieldErrors(error)).length === 0) refusal.value = messages.problem(error)
-      return null
-    } finally {
-      busy.value = false
-    }
+    return send(schemaErrors(createSprayerSchema, body), { kind: 'sprayer.create', farmId: farmId(), id, body })
   }
 
-  return { draft, errors, refusal, busy, begin, save }
+  return { draft, ...state, begin, save }
 }

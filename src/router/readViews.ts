@@ -17,8 +17,7 @@ export function readViewsWhenIdle(router: Router): void {
 
 async function readViews(): Promise<void> {
   const views = routes.flatMap(({ component }) => (typeof component === 'function' ? [component as () => Promise<unknown>] : []))
-  // What does not come now comes when it is opened. What the frame opens first, and what that is made of: signal may go any moment.
-  await readLaterParts()
+  // What does not come now comes when it is opened. What the frame opens first: signal may go any moment.
   await readLaterParts()
   // A view read says which parts of it come later.
   await Promise.allSettled(views.map((read) => read()))

@@ -1,4 +1,4 @@
-import type { EntityManager } from 'typeorm'
+import type { EntityManager, EntityTarget, ObjectLiteral } from 'typeorm'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import type { Attachment } from '../../entities/Attachment.ts'
@@ -33,12 +33,13 @@ export async function findHolder(manager: EntityManager, actor: FarmActor, { abo
   return { season: record.season }
 }
 
-/** That a thing which is no record is there on this farm. @throws {AppError} not-found. */
+/** That a thing is there on this farm. @throws {AppError} not-found. */
 export async function assertThere(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, { about, id }: FileHolder, lock = false): Promise<void> {
-  const how = { where: { farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' as const } }) }
-  const found = about === 'land' ? await manager.findOne(Block, how)
-    : about === 'calibration' ? await manager.findOne(Calibration, how)
-      : about === 'certificate' ? id === farmId && await manager.findOneBy(Farm, { id: farmId })
-        : await manager.findOne(PersonPaper, how)
-  if (!found) throw notFound()
+  if (about === 'certificate' && id !== farmId) throw notFound()
+  const how = { where: about === 'certificate' ? { id } : { farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' as const } }) }
+  if ((await manager.findOne<ObjectLiteral>(HOLDERS[about], how)) === null) throw notFound()
+}
+
+const HOLDERS: Record<Attachment['about'], EntityTarget<ObjectLiteral>> = {
+  record: ApplicationRecord, 'person-paper': PersonPaper, land: Block, calibration: Calibration, certificate: Farm,
 }

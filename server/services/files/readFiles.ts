@@ -2,7 +2,6 @@ import { IsNull } from 'typeorm'
 import type { Attachment as AttachmentAnswer, FileQuery } from '../../../shared/contract/attachment.ts'
 import { readWhole } from '../../adapters/files/fileStore.ts'
 import type { FarmActor } from '../../database/actor.ts'
-import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { Attachment } from '../../entities/Attachment.ts'
 import { forbidden, notFound } from '../../errors.ts'
 import type { Services } from '../services.ts'
@@ -21,18 +20,8 @@ export interface FileToSend {
   read(): Promise<Buffer>
 }
 
-/** The photos and papers of a record, in the order they came. @throws {AppError} not-found. */
-export async function listFiles(services: Services, actor: FarmActor, recordId: string): Promise<{ items: AttachmentAnswer[]; next: null }> {
-  const { farmId } = actor
-  return services.database.inFarm(actor, async (manager) => {
-    if (!(await manager.existsBy(ApplicationRecord, { farmId, id: recordId }))) throw notFound()
-    const rows = await manager.find(Attachment, { where: { farmId, recordId, removedAt: IsNull() }, order: { uploadedAt: 'ASC', id: 'ASC' } })
-    return { items: await presentAttachments(manager, farmId, rows), next: null }
-  })
-}
-
-/** The papers of a thing that is no record, in the order they came. @throws {AppError} not-found. */
-export async function listHeldFiles(services: Services, actor: FarmActor, holder: FileHolder): Promise<{ items: AttachmentAnswer[]; next: null }> {
+/** The photos and papers of a record or of another thing, in the order they came. @throws {AppError} not-found. */
+export async function listFiles(services: Services, actor: FarmActor, holder: FileHolder): Promise<{ items: AttachmentAnswer[]; next: null }> {
   const { farmId } = actor
   return services.database.inFarm(actor, async (manager) => {
     await assertThere(manager, actor, holder)
