@@ -4,15 +4,14 @@ import { useI18n } from 'vue-i18n'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { meApi } from '../api/meApi.ts'
 import { useSession } from '../stores/session.ts'
+import type { SeenLine } from './seenLine.ts'
 import { useFarm } from './useFarm.ts'
 import { useFigures } from './useFigures.ts'
 import { useTask, type Task } from './useTask.ts'
 
-export interface SessionLine { id: string; device: string; opened: string; seen: string; isThis: boolean }
-
 /** Where one is signed in, in words, and ending one or all others. */
 export function useOwnSessions(): {
-  lines: ComputedRef<SessionLine[] | undefined>
+  lines: ComputedRef<SeenLine[] | undefined>
   isError: ComputedRef<boolean>
   refetch: () => unknown
   end: Task<[string], unknown>
@@ -31,7 +30,8 @@ export function useOwnSessions(): {
   return {
     lines: computed(() => query.data.value?.map(({ id, device, onSharedPhone, openedAt, seenAt, isThis }) => {
       const words = device ?? t('people.me.unknownDevice')
-      return { id, isThis, device: onSharedPhone ? `${words}, ${t('people.me.onSharedPhone')}` : words, opened: moment(openedAt), seen: moment(seenAt) }
+      const [name, last] = [onSharedPhone ? `${words}, ${t('people.me.onSharedPhone')}` : words, moment(seenAt)]
+      return { id, name, first: moment(openedAt), last, note: isThis ? t('people.me.thisOne') : '', about: `${name}, ${last}` }
     })),
     isError: computed(() => query.isError.value),
     refetch: () => query.refetch(),

@@ -3,16 +3,15 @@ import { useI18n } from 'vue-i18n'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { phoneApi } from '../api/phoneApi.ts'
 import { useSession } from '../stores/session.ts'
+import type { SeenLine } from './seenLine.ts'
 import { useFarm } from './useFarm.ts'
 import { useFarmRead } from './useFarmRead.ts'
 import { useFigures } from './useFigures.ts'
 import { useSubmit } from './useSubmit.ts'
 import { useTask, type Task } from './useTask.ts'
 
-interface PhoneLine { id: string; name: string; since: string; used: string; gone: string }
-
 /** The farm's shared phones in words, and taking one away; who does not lead the farm does not ask for them. */
-export function usePhones(): { lines: ComputedRef<PhoneLine[] | undefined>; isError: ComputedRef<boolean>; refetch: () => unknown; revoke: Task<[string], unknown> } {
+export function usePhones(): { lines: ComputedRef<SeenLine[] | undefined>; isError: ComputedRef<boolean>; refetch: () => unknown; revoke: Task<[string], unknown> } {
   const { t } = useI18n()
   const session = useSession()
   const farm = useFarm(() => session.farmId)
@@ -22,9 +21,9 @@ export function usePhones(): { lines: ComputedRef<PhoneLine[] | undefined>; isEr
   const dayOf = (instant: string): string => day(civilDateIn(farm.data.value?.zone ?? 'UTC', instant))
   return {
     lines: computed(() => query.data.value?.map(({ id, name, enrolledBy, enrolledAt, lastUsedAt, revokedAt }) => ({
-      id, name, since: t('people.phones.by', { day: dayOf(enrolledAt), name: enrolledBy }),
-      used: lastUsedAt === null ? t('people.phones.never') : dayOf(lastUsedAt),
-      gone: revokedAt === null ? '' : t('people.phones.revoked', { day: dayOf(revokedAt) }),
+      id, name, about: name, first: t('people.phones.by', { day: dayOf(enrolledAt), name: enrolledBy }),
+      last: lastUsedAt === null ? t('people.phones.never') : dayOf(lastUsedAt),
+      note: revokedAt === null ? '' : t('people.phones.revoked', { day: dayOf(revokedAt) }),
     }))),
     isError: computed(() => query.isError.value),
     refetch: () => query.refetch(),
