@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { buildRecord } from '../../server/demo/buildThings.ts'
 import { FindInRegister1764602000000 } from '../../migrations/1764602000000-FindInRegister.ts'
+import { FindUnreviewed1764646000000 } from '../../migrations/1764646000000-FindUnreviewed.ts'
 import { createOwnerSource } from '../../server/database/dataSource.ts'
 import type { RegisterRow } from '../../shared/contract/record.ts'
 import { REGISTER_SORTS } from '../../shared/contract/register.ts'
@@ -154,7 +155,7 @@ describe('a query of the register', () => {
 })
 
 describe('records from before the register could be searched', () => {
-  it('are given the same entries and terms by the migration', async () => {
+  it('are given the same entries and terms by the migrations', async () => {
     const source = await createOwnerSource(house.ownerUrl).initialize()
     const runner = source.createQueryRunner()
     const read = async () => {
@@ -166,9 +167,9 @@ describe('records from before the register could be searched', () => {
     }
     await runner.startTransaction()
     const before = await read()
-    const migration = new FindInRegister1764602000000()
-    await migration.down(runner)
-    await migration.up(runner)
+    const migrations = [new FindInRegister1764602000000(), new FindUnreviewed1764646000000()]
+    for (const migration of migrations.toReversed()) await migration.down(runner)
+    for (const migration of migrations) await migration.up(runner)
     const after = await read()
     await runner.rollbackTransaction()
     await source.destroy()
