@@ -3,6 +3,7 @@ import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 /** Up to which entry of a season's log somebody took a report, and the code of all entries up to it; written once. */
 @Entity({ name: 'season_heads' })
 @Index('season_heads_account_idx', { synchronize: false })
+@Index('season_heads_code_idx', { synchronize: false })
 @ForeignKey('Farm', ['farmId'], ['id'], { name: 'season_heads_farm_fkey' })
 @ForeignKey('Account', ['accountId'], ['id'], { name: 'season_heads_account_fkey' })
 export class SeasonHead {

@@ -1,9 +1,10 @@
 import type { Writable } from 'node:stream'
 import { formatCheckCode } from '../../shared/evidence/checkCode.ts'
 import { addElement, openCanvas, type Canvas } from './parts/canvas.ts'
+import { certificateLine, workDays } from './parts/certificateLine.ts'
 import { drawFirstFoot, drawLaterFoot, footHeights, type PageFoot } from './parts/pageFoot.ts'
 import { startFlow, type Flow } from './parts/pageFlow.ts'
-import { drawRunningHead, type RunningHead } from './parts/runningHead.ts'
+import { drawRunningHead, headHeight, type RunningHead } from './parts/runningHead.ts'
 import { drawStampHead, type StampHead } from './parts/stampHead.ts'
 import { drawChecks, drawFiles, drawLongWords, drawMix, drawNotices, drawPlace, drawReasons, drawWeatherAndPeople, type Page } from './record/drawSections.ts'
 import { recordFigures } from './record/recordFigures.ts'
@@ -22,9 +23,10 @@ export function recordReport(data: RecordReportData, stream: Writable): void {
     language: data.language,
   }, stream)
   const foot = recordFoot(data)
-  const flow = startFlow(canvas, footHeights(canvas, foot))
+  const head = recordHead(data)
+  const flow = startFlow(canvas, footHeights(canvas, foot), headHeight(canvas, head))
   drawRecord(flow, data)
-  drawFrames(canvas, { head: recordHead(data), foot, pages: flow.pages })
+  drawFrames(canvas, { head, foot, pages: flow.pages })
   canvas.doc.end()
 }
 
@@ -57,7 +59,7 @@ function drawFrames(canvas: Canvas, { head, foot, pages }: { head: RunningHead; 
 }
 
 /** What stands at the head of each of its pages. */
-export function recordHead({ signed, state, language }: RecordReportData): RunningHead {
+export function recordHead({ signed, state, language, certificate, printedAt }: RecordReportData): RunningHead {
   const { say } = openWords(language, signed.farm.zone)
   const { number, version, season } = signed.record
   const document = version === 1 ? say('running.record', { number }) : say('running.recordVersion', { number, version })
@@ -65,6 +67,7 @@ export function recordHead({ signed, state, language }: RecordReportData): Runni
     farm: signed.farm.name,
     register: say('running.register', { season }),
     document: state === 'withdrawn' ? say('running.withdrawn', { document }) : document,
+    certificate: certificateLine({ certificate, farm: signed.farm, language, printedAt }, workDays(signed.farm.zone, [signed.times.startedAt, signed.times.endedAt])),
   }
 }
 

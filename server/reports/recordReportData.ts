@@ -1,3 +1,4 @@
+import type { Certificate } from '../../shared/contract/farmProfile.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
@@ -28,6 +29,8 @@ export interface RecordReportData {
   neighbours: readonly { code: string; geometry: Boundary }[]
   sites: readonly PlanSite[]
   state: 'signed' | 'withdrawn'
+  /** The farm's at the time of printing; null where none is written down. */
+  certificate: Certificate | null
   /** RFC 3339 instant. */
   printedAt: string
   /** Where the QR code leads. */

@@ -3,10 +3,11 @@ import { formatDay } from '../../shared/messages/formatDay.ts'
 import { translate } from '../../shared/messages/translate.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { addElement, openCanvas, type Canvas } from './parts/canvas.ts'
+import { certificateLine, workDays } from './parts/certificateLine.ts'
 import { drawLedgerTable } from './parts/ledgerTable.ts'
 import { startFlow } from './parts/pageFlow.ts'
 import { drawLaterFoot, type LaterFoot } from './parts/pageFoot.ts'
-import { drawRunningHead } from './parts/runningHead.ts'
+import { drawRunningHead, headHeight, type RunningHead } from './parts/runningHead.ts'
 import { drawRegisterCover } from './register/registerCover.ts'
 import { registerTable } from './register/registerTable.ts'
 import type { Say } from './register/say.ts'
@@ -21,11 +22,15 @@ export function registerReport(data: RegisterReportData, stream: Writable): void
   const say: Say = (id, params = {}, plural) => translate(language, `registerPrint.pdf.${id}`, params, plural)
   const title = volumes === 1 ? `${say('title')}, ${seasonWords(data, say)}` : `${say('title')}, ${seasonWords(data, say)}: ${say('volume', { volume, volumes })}`
   const canvas = openCanvas({ title: `${farm.name}, ${title}`, subject: title, keywords: '', createdAt: data.printedAt, language, isLying: true }, stream)
-  const flow = startFlow(canvas, { first: FOOT, later: FOOT })
+  const work = workDays(farm.zone, data.rows.flatMap(({ startedAt, endedAt }) => [startedAt, endedAt]))
+  const head: RunningHead = {
+    farm: farm.name, register: seasonWords(data, say), document: volumes === 1 ? say('document') : say('volume', { volume, volumes }), certificate: certificateLine(data, work),
+  }
+  const flow = startFlow(canvas, { first: FOOT, later: FOOT }, headHeight(canvas, head))
   const part = addElement(canvas, canvas.root, 'Sect')
   drawRegisterCover(flow, part, { data, say, seasons: seasonWords(data, say) })
   if (data.rows.length > 0) drawLedgerTable(flow, part, registerTable(canvas, data, say))
-  drawFrames(canvas, data, { say, pages: flow.pages })
+  drawFrames(canvas, data, { head, say, pages: flow.pages })
   canvas.doc.end()
 }
 
@@ -34,9 +39,8 @@ function seasonWords({ filter }: RegisterReportData, say: Say): string {
 }
 
 /** Running heads and feet, drawn last because only then the number of pages is known. */
-function drawFrames(canvas: Canvas, data: RegisterReportData, { say, pages }: { say: Say; pages: number }): void {
-  const { language, farm, volume, volumes, printedAt, checkPage } = data
-  const document = volumes === 1 ? say('document') : say('volume', { volume, volumes })
+function drawFrames(canvas: Canvas, data: RegisterReportData, { head, say, pages }: { head: RunningHead; say: Say; pages: number }): void {
+  const { language, farm, printedAt, checkPage } = data
   const moment = `${formatDay(language, civilDateIn(farm.zone, printedAt))}, ${civilTimeIn(farm.zone, printedAt)}`
   const foot: LaterFoot = {
     codeLabel: '', codeShort: say('foot', { page: checkPage }), printed: say('printed', { moment }),
@@ -44,7 +48,7 @@ function drawFrames(canvas: Canvas, data: RegisterReportData, { say, pages }: { 
   }
   for (let page = 1; page <= pages; page += 1) {
     canvas.doc.switchToPage(page - 1)
-    drawRunningHead(canvas, { farm: farm.name, register: seasonWords(data, say), document })
+    drawRunningHead(canvas, head)
     drawLaterFoot(canvas, { foot, page, pages })
   }
 }

@@ -1,3 +1,4 @@
+import type { Certificate } from '../../shared/contract/farmProfile.ts'
 import type { RegisterRow } from '../../shared/contract/record.ts'
 import type { RegisterFilter, RegisterSort, RegisterTotals } from '../../shared/contract/register.ts'
 import type { Language } from '../../shared/messages/translate.ts'
@@ -17,6 +18,8 @@ export interface RegisterReportData {
   sort: RegisterSort
   totals: RegisterTotals
   rows: readonly PrintedRow[]
+  /** The farm's at the time of printing; null where none is written down. */
+  certificate: Certificate | null
   /** RFC 3339 instant. */
   printedAt: string
   /** The address of the check page as a person types it. */

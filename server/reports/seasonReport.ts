@@ -3,8 +3,8 @@ import { translate } from '../../shared/messages/translate.ts'
 import { addElement, openCanvas } from './parts/canvas.ts'
 import { drawLedgerTable } from './parts/ledgerTable.ts'
 import { backTo, startFlow, turnTo } from './parts/pageFlow.ts'
-import { drawLaterFoot } from './parts/pageFoot.ts'
-import { drawRunningHead } from './parts/runningHead.ts'
+import { drawFirstFoot, drawLaterFoot, footHeights } from './parts/pageFoot.ts'
+import { drawRunningHead, headHeight } from './parts/runningHead.ts'
 import { registerTable } from './register/registerTable.ts'
 import type { Say } from './register/say.ts'
 import { drawSummary } from './season/drawSummary.ts'
@@ -22,7 +22,8 @@ export function seasonReport(data: SeasonReportData, stream: Writable): void {
   const { say } = words
   const title = volumes === 1 ? say('title', { season }) : `${say('title', { season })}: ${say('volume', { volume, volumes })}`
   const canvas = openCanvas({ title: `${farm.name}, ${title}`, subject: title, keywords: data.head?.digest ?? '', createdAt: data.printedAt, language }, stream)
-  const flow = startFlow(canvas, { first: FOOT, later: FOOT })
+  const { head, foot, hasCode } = seasonFrames(data, words, volumes === 1 ? say('document') : say('volume', { volume, volumes }))
+  const flow = startFlow(canvas, { first: hasCode ? footHeights(canvas, foot).first : FOOT, later: FOOT }, headHeight(canvas, head))
   const part = addElement(canvas, canvas.root, 'Sect')
   drawSeasonCover(flow, part, data, words)
   if (data.blocks.length > 0) drawSummary(flow, part, data, words)
@@ -32,11 +33,11 @@ export function seasonReport(data: SeasonReportData, stream: Writable): void {
     const sayRegister: Say = (id, params = {}, plural) => translate(language, `registerPrint.pdf.${id}`, params, plural)
     drawLedgerTable(flow, part, registerTable(canvas, data, sayRegister))
   }
-  const { head, foot } = seasonFrames(data, words, volumes === 1 ? say('document') : say('volume', { volume, volumes }))
   for (let page = 1; page <= flow.pages; page += 1) {
     backTo(flow, page)
     drawRunningHead(canvas, head)
-    drawLaterFoot(canvas, { foot, page, pages: flow.pages })
+    if (page === 1 && hasCode) drawFirstFoot(canvas, part, { foot, pages: flow.pages })
+    else drawLaterFoot(canvas, { foot, page, pages: flow.pages })
   }
   canvas.doc.end()
 }

@@ -38,6 +38,8 @@ export interface SeasonReportData extends SeasonPart {
   rows: readonly PrintedRow[]
   /** The address of the check page as a person types it. */
   checkPage: string
+  /** Where the QR code leads; null while the season has no entry. */
+  checkUrl: string | null
 }
 
 /** A volume of the sheets of a season's records, one after the other. */

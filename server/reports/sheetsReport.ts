@@ -2,7 +2,7 @@ import type { Writable } from 'node:stream'
 import { addElement, openCanvas } from './parts/canvas.ts'
 import { backTo, startFlow, turnPage } from './parts/pageFlow.ts'
 import { drawFirstFoot, drawLaterFoot, footHeights, type PageFoot } from './parts/pageFoot.ts'
-import { drawRunningHead, type RunningHead } from './parts/runningHead.ts'
+import { drawRunningHead, headHeight, type RunningHead } from './parts/runningHead.ts'
 import { drawRecord, recordFoot, recordHead } from './recordReport.ts'
 import { openSeasonWords } from './season/seasonWords.ts'
 import type { SheetsReportData } from './seasonReportData.ts'
@@ -19,17 +19,20 @@ export function sheetsReport(data: SheetsReportData, stream: Writable): void {
   let flow: ReturnType<typeof startFlow> | null = null
   for (const record of records) {
     const foot = recordFoot(record)
+    const head = recordHead(record)
     const heights = footHeights(canvas, foot)
+    const height = headHeight(canvas, head)
     if (flow === null) {
-      flow = startFlow(canvas, heights)
+      flow = startFlow(canvas, heights, height)
     } else {
       flow.footHeights = heights
+      flow.headHeight = height
       turnPage(flow)
       flow.firstPage = flow.pages
     }
     const from = flow.pages
     drawRecord(flow, record)
-    sheets.push({ from, to: flow.pages, head: recordHead(record), foot })
+    sheets.push({ from, to: flow.pages, head, foot })
   }
   const part = addElement(canvas, canvas.root, 'Sect')
   const pages = flow?.pages ?? 0

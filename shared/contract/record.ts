@@ -135,5 +135,12 @@ export const checkCodeAnswerSchema = z.object({
   /** The version that stands now, and whether the record was taken back. */
   latestVersion: z.number().int().nullable(),
   withdrawn: z.boolean().nullable(),
+  /** Where the code is that of a season report: up to which entry, when one was first made, and whether the log went on since. */
+  season: z.object({
+    season: z.number().int(), seq: z.number().int(), takenAt: z.string(),
+    /** False where an entry up to that one was changed, taken out or slipped in since. */
+    agrees: z.boolean(),
+    wentOn: z.boolean(),
+  }).nullable(),
 })
 export type CheckCodeAnswer = z.infer<typeof checkCodeAnswerSchema>

@@ -1,6 +1,7 @@
 import { PassThrough } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import { parse } from 'csv-parse/sync'
+import supertest from 'supertest'
 import { v7 as uuidV7 } from 'uuid'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
 import { buildRecord } from '../../server/demo/buildThings.ts'
@@ -65,7 +66,6 @@ describe('giving a grant', () => {
     const letters = await house.mailTo(email)
     expect(letters).toHaveLength(1)
     const token = /\/welcome\/([\w-]+)/.exec(letters[0]?.text ?? '')?.[1]
-    const { default: supertest } = await import('supertest')
     const fresh = supertest.agent(house.app)
     await fresh.post('/api/welcome').set('X-Requested-With', 'drenchleaf').send({ token, name: 'Mirel Achter', password: PASSWORD }).expect(204)
     await fresh.post('/api/session').set('X-Requested-With', 'drenchleaf').send({ email, password: PASSWORD }).expect(200)
@@ -135,7 +135,10 @@ describe('what a grant opens', () => {
       await client.query('COMMIT')
       expect(rowCount).toBe(1)
     }
+    const onPaper = async () => (await supertest(house.app).get(`/api/check/${before[0].head.checkCode}`).expect(200)).body
+    expect(await onPaper()).toMatchObject({ found: true, number: null, season: { season: 2026, seq: 1, agrees: true, wentOn: false } })
     await alter('"schemaVersion"', '"schemaVersiom"')
+    expect(await onPaper()).toMatchObject({ found: false, season: { agrees: false } })
     const after = (await certifier.get('/api/my-farms').expect(200)).body.items
     await alter('"schemaVersiom"', '"schemaVersion"')
     await client.end()

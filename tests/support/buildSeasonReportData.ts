@@ -19,6 +19,7 @@ export function buildSeasonReportData(overrides: Partial<SeasonReportData> = {})
     })),
     rows: Array.from({ length: 60 }, (_, turn) => buildPrintedRow(turn, turn === 7 ? { state: 'withdrawn' } : {})),
     printedAt: '2026-06-16T13:50:00Z', checkPage: 'drenchleaf.example/check',
+    checkUrl: 'https://drenchleaf.example/check/3f9a71c0e2b48d1657ee',
     ...overrides,
   }
 }

@@ -3,7 +3,7 @@ import { frameOf, PAGE, type Canvas, type Frame } from './canvas.ts'
 /** The frame of an upright page. */
 export const FRAME = frameOf(PAGE)
 export const FRAME_WIDTH = FRAME.width
-/** Running head with its rule and the white under it. */
+/** A running head of one line with its rule and the white under it. */
 const HEAD_HEIGHT = 26
 
 /** Where the next thing goes; `y` falls down the page. */
@@ -11,6 +11,8 @@ export interface Flow {
   canvas: Canvas
   y: number
   footHeights: { first: number; later: number }
+  /** Of the pages that are still to be turned to. */
+  headHeight: number
   pages: number
   /** The page that bears the first foot. */
   firstPage: number
@@ -18,9 +20,9 @@ export interface Flow {
   frames: Frame[]
 }
 
-/** Starts the first page. Foot heights are in points, measured up from the frame's bottom. */
-export function startFlow(canvas: Canvas, footHeights: Flow['footHeights']): Flow {
-  const flow: Flow = { canvas, y: 0, footHeights, pages: 0, firstPage: 1, frames: [] }
+/** Starts the first page. Heights of foot and head are in points, measured from the frame's bottom and top. */
+export function startFlow(canvas: Canvas, footHeights: Flow['footHeights'], headHeight = HEAD_HEIGHT): Flow {
+  const flow: Flow = { canvas, y: 0, footHeights, headHeight, pages: 0, firstPage: 1, frames: [] }
   turnPage(flow)
   return flow
 }
@@ -49,7 +51,7 @@ export function backTo({ canvas, frames }: Flow, page: number): void {
 function enterPage(flow: Flow): void {
   flow.pages += 1
   flow.frames.push(flow.canvas.frame)
-  flow.y = flow.canvas.frame.top + HEAD_HEIGHT
+  flow.y = flow.canvas.frame.top + flow.headHeight
 }
 
 /** What is left of the page, points. */
@@ -63,7 +65,7 @@ export function roomLeft({ canvas, pages, firstPage, footHeights, y }: Flow): nu
  */
 export function ensureRoom(flow: Flow, height: number): boolean {
   if (height <= roomLeft(flow)) return false
-  if (flow.y <= flow.canvas.frame.top + HEAD_HEIGHT) return false
+  if (flow.y <= flow.canvas.frame.top + flow.headHeight) return false
   turnPage(flow)
   return true
 }

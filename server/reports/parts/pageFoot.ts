@@ -27,13 +27,15 @@ export type LaterFoot = Pick<PageFoot, 'codeLabel' | 'codeShort' | 'printed' | '
 const QR_SIZE = (17 * 72) / 25.4
 const GAP = 12
 const PADDING = 6
+/** Four modules stay white around the QR code: of the 29 or more that an address needs, so this much. */
+const QUIET = (4 * QR_SIZE) / 29 + 0.4
 const WORDS_X = FRAME.left + QR_SIZE + GAP
 
 /** Heights of the first page's foot and of those after it, points, the rule and the white over it included. */
 export function footHeights(canvas: Canvas, foot: PageFoot): { first: number; later: number } {
   const { code, shows } = setWords(canvas, foot)
   const words = heightOf(code, STYLES.running.leading) + 2 + heightOf(shows, STYLES.note.leading)
-  return { first: Math.max(QR_SIZE, words) + PADDING + 8, later: STYLES.running.leading + PADDING + 8 }
+  return { first: Math.max(QR_SIZE, words) + QUIET + 8, later: STYLES.running.leading + PADDING + 8 }
 }
 
 /** Draws the first page's foot at its bottom: the QR code, the check code and what it shows. */
@@ -42,7 +44,7 @@ export function drawFirstFoot(canvas: Canvas, parent: Element, { foot, pages }: 
   const top = FRAME.bottom - height
   const { code, shows, width } = setWords(canvas, foot)
   drawRule(canvas, { x: FRAME.left, y: top, width: FRAME_WIDTH }, 0.6)
-  const y = top + PADDING
+  const y = top + QUIET
   const bbox: [number, number, number, number] = [FRAME.left, y, FRAME.left + QR_SIZE, y + QR_SIZE]
   addElement(canvas, parent, 'Figure', () => drawQr(canvas, foot.checkUrl, { x: FRAME.left, y }), { alt: foot.qrAlt, bbox, placement: 'Block' })
   addElement(canvas, parent, 'P', () => drawLines(canvas, code, { x: WORDS_X, width, y, leading: STYLES.running.leading }))

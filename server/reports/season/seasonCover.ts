@@ -35,8 +35,6 @@ export function drawSeasonCover(flow: Flow, part: Element, data: SeasonReportDat
   drawSeasonTitle(flow, part, say('title', { season }), volumes === 1 ? [] : [say('volume', { volume, volumes })])
   drawFacts(flow, part, { facts: [...farmFacts(data, words), ...countFacts(data, words), ...codeFacts(data, words)], box: { x: left, width, labelWidth: 120 } })
   flow.y += 10
-  drawParagraph(flow, part, say('shows'), STYLES.note)
-  flow.y += 4
   if (data.rows.length === 0) drawParagraph(flow, part, say('empty'), STYLES.head)
 }
 

@@ -3,9 +3,10 @@ import { formatDay } from '../../../shared/messages/formatDay.ts'
 import { translate } from '../../../shared/messages/translate.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import { formatNumber } from '../../../shared/units/formatQuantity.ts'
-import type { LaterFoot } from '../parts/pageFoot.ts'
+import { certificateLine } from '../parts/certificateLine.ts'
+import type { PageFoot } from '../parts/pageFoot.ts'
 import type { RunningHead } from '../parts/runningHead.ts'
-import type { SeasonReportData, SheetsReportData } from '../seasonReportData.ts'
+import type { SeasonReportData } from '../seasonReportData.ts'
 
 /** Words and figures of a season's report in its language. */
 export interface SeasonWords {
@@ -24,14 +25,19 @@ export function openSeasonWords({ language }: Pick<SeasonReportData, 'language'>
   }
 }
 
-/** What stands at the head and the foot of every page. */
-export function seasonFrames(data: SeasonReportData | SheetsReportData, { say, count, day }: SeasonWords, document: string): { head: RunningHead; foot: LaterFoot } {
-  const { farm, season, isRunning, head, printedAt } = data
+/** What stands at the head and the foot of every page; `hasCode` where the first page bears the QR code. */
+export function seasonFrames(data: SeasonReportData, { say, count, day }: SeasonWords, document: string): { head: RunningHead; foot: PageFoot; hasCode: boolean } {
+  const { farm, season, isRunning, head, printedAt, figures: { from, to }, checkPage, checkUrl } = data
+  const code = head === null ? '' : formatCheckCode(head.digest)
+  const work = from === null || to === null ? null : { from, to }
   const moment = `${day(civilDateIn(farm.zone, printedAt))}, ${civilTimeIn(farm.zone, printedAt)}`
   return {
-    head: { farm: farm.name, register: say(isRunning ? 'runningOn' : 'running', { season }), document },
+    hasCode: checkUrl !== null,
+    head: { farm: farm.name, register: say(isRunning ? 'runningOn' : 'running', { season }), document, certificate: certificateLine(data, work) },
     foot: {
-      codeLabel: '', codeShort: head === null ? say('footNone') : say('foot', { seq: count(head.seq), code: formatCheckCode(head.digest) }),
+      checkUrl: checkUrl ?? '', qrAlt: say('qrAlt', { url: checkUrl ?? '' }), shows: say('shows'),
+      codeLabel: '', codeText: head === null ? say('footNone') : say('footText', { seq: count(head.seq), code, page: checkPage }),
+      codeShort: head === null ? say('footNone') : say('foot', { seq: count(head.seq), code }),
       printed: say('printed', { moment }), pageWord: (page, pages) => say('page', { page, pages }),
     },
   }

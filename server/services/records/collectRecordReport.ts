@@ -10,6 +10,7 @@ import { RecordReview } from '../../entities/RecordReview.ts'
 import { RecordVersion } from '../../entities/RecordVersion.ts'
 import { AppError, notFound } from '../../errors.ts'
 import type { RecordReportData } from '../../reports/recordReportData.ts'
+import { readCertificate } from '../farms/readCertificate.ts'
 import { publicAddress } from '../publicAddress.ts'
 import type { Services } from '../services.ts'
 import { readSigned } from './readSigned.ts'
@@ -43,6 +44,7 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
       neighbours: await findNeighbours(manager, signed),
       sites: [],
       state: record.state,
+      certificate: await readCertificate(manager, actor),
       printedAt: services.clock.now().toISOString(),
       checkUrl: `${checkPage}/${printed.checkCode}`,
       checkPage: checkPage.replace(/^https?:\/\//, ''),

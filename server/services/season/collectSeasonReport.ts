@@ -2,6 +2,7 @@ import { In } from 'typeorm'
 import type { Computed, RegisterRow } from '../../../shared/contract/record.ts'
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import type { ReportVolumes } from '../../../shared/contract/seasonReport.ts'
+import { cutCheckCode } from '../../../shared/evidence/checkCode.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
 import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
 import { openSeasonSummary } from '../../../shared/season/openSeasonSummary.ts'
@@ -9,8 +10,8 @@ import type { BlockSummary, SeasonSummary } from '../../../shared/season/summary
 import { addDays } from '../../../shared/time/calendar.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
-import { Farm } from '../../entities/Farm.ts'
 import type { SeasonReportData, SummaryBlock } from '../../reports/seasonReportData.ts'
+import { readCertificate } from '../farms/readCertificate.ts'
 import { publicAddress } from '../publicAddress.ts'
 import { collectVolume, countVolumes } from '../register/collectRegisterReport.ts'
 import type { KeyedRow } from '../register/listRegister.ts'
@@ -39,20 +40,18 @@ export async function collectSeasonReport(services: Services, actor: FarmActor, 
   const reader = asReaderOf(actor, season)
   const { rows, volumes } = await collectVolume(services, reader, seasonPlace(season), { volume, language })
   const { figures, blocks } = await addUpSeason(services, reader, season)
+  const described = await describeSeason(services, reader, season)
+  const checkPage = `${publicAddress(services.config)}/check`
   return {
     farm: { name: actor.farmName, zone: actor.zone },
-    ...(await describeSeason(services, reader, season)),
+    ...described,
     language, volume, volumes, rows, figures,
-    certificate: await readCertificate(services, reader),
+    certificate: await services.database.inFarm(reader, (manager) => readCertificate(manager, reader)),
     span: seasonSpan(season, actor.seasonStart),
     blocks: volume === 1 ? await describeBlocks(services, reader, blocks) : [],
-    checkPage: `${publicAddress(services.config)}/check`.replace(/^https?:\/\//, ''),
+    checkPage: checkPage.replace(/^https?:\/\//, ''),
+    checkUrl: described.head && `${checkPage}/${cutCheckCode(described.head.digest)}`,
   }
-}
-
-async function readCertificate(services: Services, reader: FarmActor): Promise<SeasonReportData['certificate']> {
-  const farm = await services.database.inFarm(reader, (manager) => manager.findOneOrFail(Farm, { select: { id: true, certificate: true }, where: { id: reader.farmId } }))
-  return farm.certificate
 }
 
 async function addUpSeason(services: Services, reader: FarmActor, season: number): Promise<SeasonSummary> {

@@ -1,4 +1,5 @@
 import { blocks } from './blocks.ts'
+import { check } from './check.ts'
 import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
@@ -19,5 +20,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
 }

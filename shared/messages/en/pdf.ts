@@ -2,6 +2,7 @@
 export const pdf = {
   list: { and: '{first} and {last}', next: '{first}, {last}' },
   running: {
+    certificate: 'Certificate {number}, {body}, as of {day}',
     register: 'register of season {season}',
     record: 'Record {number}',
     recordVersion: 'Record {number}, version {version}',

@@ -40,6 +40,8 @@ export const seasonPrint = {
   registerPart: 'Register, volume {volume} of {volumes}',
   empty: 'No record was signed for this season.',
   foot: 'Check code of the season up to entry {seq}: {code}',
+  footText: 'Check code of the season {code}, up to entry {seq} of the log; look it up at {page}',
+  qrAlt: 'QR code of {url}',
   footNone: 'No entry in the log for this season',
   method: { foliar: 'foliar', drench: 'drench', solid: 'solid' },
   sheets: { file: 'record-sheets', title: 'Record sheets {season}', volume: 'Record sheets {season}, volume {volume} of {volumes}' },

@@ -43,7 +43,7 @@ export const session = {
   },
   check: {
     title: 'Check a code',
-    text: 'The code stands at the foot of a printed record, in groups of four.',
+    text: 'The code stands at the foot of a printed record or season report, in groups of four.',
     code: 'Check code',
     codeHint: 'As printed: letters a to f and figures, with or without spaces.',
     check: 'Check',

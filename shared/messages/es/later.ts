@@ -1,5 +1,6 @@
 import type { LaterScreens } from '../en.ts'
 import { blocks } from './blocks.ts'
+import { check } from './check.ts'
 import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
@@ -20,5 +21,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, people, problems, profile, rounds, shapes, sprayers, start, versions,
 }

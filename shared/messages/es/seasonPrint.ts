@@ -41,6 +41,8 @@ export const seasonPrint: Messages['seasonPrint'] = {
   registerPart: 'Libro de registros, volumen {volume} de {volumes}',
   empty: 'Para esta campaña no se firmó ningún registro.',
   foot: 'Código de control de la campaña hasta la entrada {seq}: {code}',
+  footText: 'Código de control de la campaña {code}, hasta la entrada {seq} del libro; búsquelo en {page}',
+  qrAlt: 'Código QR de {url}',
   footNone: 'Sin entradas de esta campaña en el libro',
   method: { foliar: 'foliar', drench: 'suelo', solid: 'sólido' },
   sheets: { file: 'hojas-de-registro', title: 'Hojas de registro {season}', volume: 'Hojas de registro {season}, volumen {volume} de {volumes}' },

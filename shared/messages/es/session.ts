@@ -43,7 +43,7 @@ export const session = {
   },
   check: {
     title: 'Comprobar un código',
-    text: 'El código está al pie de un registro impreso, en grupos de cuatro.',
+    text: 'El código está al pie de un registro o de un informe de campaña impresos, en grupos de cuatro.',
     code: 'Código de comprobación',
     codeHint: 'Como está impreso: letras de la a a la f y cifras, con o sin espacios.',
     check: 'Comprobar',

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
 import { buildChecks, buildSignedBlock, buildSignedRecord } from '../../support/buildSignedRecord.ts'
 import { contentOf, drawRecord, readPdf } from '../../support/readPdf.ts'
+import { readQr } from '../../support/readQr.ts'
 
 const base = buildSignedRecord()
 
@@ -91,6 +92,18 @@ describe('what it says', () => {
       'The farm runs this server itself.', 'Printed 16 June 2026, 09:15', 'page 1 of 1',
     ]) expect(flat).toContain(words)
     expect(flat).not.toMatch(/\bsafe\b|compliant/i)
+  })
+
+  it('bears a QR code that another reader reads, with white around it', async () => {
+    expect(readQr(await drawRecord(buildRecordReportData()))).toEqual({ text: 'https://drenchleaf.example/check/41d70b9e6a2fc85319e4', isQuiet: true })
+  })
+
+  it('names the certificate at the head where it ran on the day of the work, and makes room for a long one', async () => {
+    const certificate = { number: 'OR-118', body: 'Oaklode Review', scope: null, issuedOn: null, expiresOn: '2026-06-16' }
+    const pages = async (named: typeof certificate) => readPdf(await drawRecord(buildRecordReportData({ signed: buildLongRecord(), certificate: named }))).pages.map((page) => page.replace(/\s+/g, ' '))
+    for (const page of await pages(certificate)) expect(page).toContain('Certificate OR-118, Oaklode Review, as of 16 June 2026')
+    for (const page of await pages({ ...certificate, body: 'Review '.repeat(17).trim() })) expect(page).toMatch(/Review Review, as of 16 June 2026/)
+    for (const page of await pages({ ...certificate, expiresOn: '2026-06-15' })) expect(page).not.toContain('OR-118')
   })
 
   it('speaks Spanish with Spanish marks', async () => {

@@ -1,7 +1,8 @@
 import { beforeAll, describe, expect, it } from 'vitest'
 import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
 import { buildSeasonReportData } from '../../support/buildSeasonReportData.ts'
-import { drawReport, readPdf, type ReadPdf } from '../../support/readPdf.ts'
+import { drawReport, readPdf, readText, type ReadPdf } from '../../support/readPdf.ts'
+import { readQr } from '../../support/readQr.ts'
 
 const draw = (overrides: Parameters<typeof buildSeasonReportData>[0] = {}) => drawReport({ kind: 'season', data: buildSeasonReportData(overrides) })
 const plain = (text: string | undefined) => (text ?? '').replaceAll('\u00a0', ' ').replace(/\s+/g, ' ')
@@ -34,7 +35,7 @@ describe('a season on paper', () => {
     expect(pdf.pages.length).toBeGreaterThan(4)
     pdf.pages.forEach((text, index) => {
       expect(plain(text)).toContain(`page ${index + 1} of ${pdf.pages.length}`)
-      expect(plain(text)).toContain('Check code of the season up to entry 1 842')
+      expect(plain(text)).toMatch(index === 0 ? /Check code of the season 3F9A .* up to entry 1 842 of the log/ : /Check code of the season up to entry 1 842/)
     })
     expect([...pdf.text.matchAll(/^2026-(\d{4})/gm)].length).toBe(60)
   })
@@ -51,8 +52,24 @@ describe('a season on paper', () => {
     expect(plain(pages[0])).toContain('Apples and pears')
   })
 
+  it('names the certificate at the head of every page, as of the day of printing, and none that did not run on all days of the work', async () => {
+    const certificate = { number: 'OR-118', body: 'Oaklode Review', scope: null, issuedOn: '2026-03-09', expiresOn: '2026-06-16' }
+    const line = 'Certificate OR-118, Oaklode Review, as of 16 June 2026'
+    for (const page of readPdf(await draw({ certificate, rows: buildSeasonReportData().rows.slice(0, 2), blocks: [] })).pages) expect(plain(page)).toContain(line)
+    const other = await Promise.all([{ ...certificate, issuedOn: '2026-03-10' }, { ...certificate, expiresOn: '2026-06-15' }].map((late) => draw({ certificate: late, rows: [], blocks: [] })))
+    for (const drawn of other) expect(readText(drawn)).not.toContain(line)
+    expect(plain(pdf.text)).not.toContain('as of 16 June')
+  })
+
+  it('bears a QR code on its first page that leads to its check page, with white around it and the code in words beside it', async () => {
+    expect(readQr(await draw())).toEqual({ text: 'https://drenchleaf.example/check/3f9a71c0e2b48d1657ee', isQuiet: true })
+    expect(pdf.alts).toEqual(['QR code of https://drenchleaf.example/check/3f9a71c0e2b48d1657ee'])
+    expect(plain(pdf.pages[0])).toContain('Check code of the season 3F9A 71C0 E2B4 8D16 57EE, up to entry 1 842 of the log; look it up at drenchleaf.example/check')
+    expect(readPdf(await draw({ head: null, checkUrl: null })).alts).toEqual([])
+  })
+
   it('says that a season without records has none', async () => {
-    const { pages } = readPdf(await draw({ rows: [], blocks: [], head: null, figures: { ...buildSeasonReportData().figures, signed: 0, first: null, last: null, from: null, to: null, withdrawn: [] } }))
+    const { pages } = readPdf(await draw({ rows: [], blocks: [], head: null, checkUrl: null, figures: { ...buildSeasonReportData().figures, signed: 0, first: null, last: null, from: null, to: null, withdrawn: [] } }))
     expect(pages).toHaveLength(1)
     expect(plain(pages[0])).toContain('No record was signed for this season.')
   })
