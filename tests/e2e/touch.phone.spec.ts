@@ -1,6 +1,5 @@
-import { signInTo } from './support/demoFarm.ts'
 import { RecordForm } from './support/recordForm.ts'
-import { listScreens, openScreen } from './support/screens.ts'
+import { openScreen } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
 import { makeThings } from './support/things.ts'
 
@@ -47,20 +46,4 @@ test('a thumb meets everything of the main flow', async ({ page, isPhone, signIn
   await expect(form.password).toBeVisible()
   found.push(...(await page.evaluate(smallTargets, TARGET_PX)).map((target) => `happened: ${target}`))
   expect([...new Set(found)]).toEqual([])
-})
-
-test('nothing is cut off or scrolls sideways at 390 and at 320', async ({ page, context, manager }) => {
-  test.slow()
-  const found: string[] = []
-  for (const { name, who, path } of await listScreens(manager)) {
-    if (who !== null) await signInTo(context.request, who)
-    await openScreen(page, path)
-    for (const width of [390, 320]) {
-      await page.setViewportSize({ width, height: 844 })
-      const wide = await page.evaluate(() => [document.documentElement, ...document.querySelectorAll('#page, #page > .body, .panel, .label')]
-        .filter((element) => element.scrollWidth > element.clientWidth + 1).map((element) => `${element.tagName} ${element.className} ${element.scrollWidth} in ${element.clientWidth}`))
-      for (const element of wide) found.push(`${name}, ${width}: ${element}`)
-    }
-  }
-  expect(found).toEqual([])
 })

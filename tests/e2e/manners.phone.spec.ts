@@ -4,7 +4,9 @@ import { expect, test } from './support/test.ts'
 import { unique } from './support/unique.ts'
 import { say } from './support/words.ts'
 
-test('Back closes what lies over the page and leaves the page where it is', async ({ page, isPhone, signInAs }) => {
+test.use({ readsAhead: true })
+
+test('Back closes what lies over the page and leaves the page where it is', async ({ page, signInAs }) => {
   await signInAs('manager')
   await openScreen(page, '/blocks')
   await openScreen(page, '/inputs')
@@ -21,14 +23,12 @@ test('Back closes what lies over the page and leaves the page where it is', asyn
   await open()
   await dialog.getByRole('button', { name: say('inputs.cancel') }).click()
   await expect(dialog).toBeHidden()
-  if (isPhone) {
-    await page.getByRole('button', { name: say('frame.more'), exact: true }).click()
-    await dialog.getByRole('link', { name: say('frame.places.farm') }).click()
-    await expect(page).toHaveURL(/\/farm$/)
-    await expect(dialog).toBeHidden()
-    await page.goBack()
-    await expect(page).toHaveURL(/\/inputs$/)
-  }
+  await page.getByRole('button', { name: say('frame.more'), exact: true }).click()
+  await dialog.getByRole('link', { name: say('frame.places.farm') }).click()
+  await expect(page).toHaveURL(/\/farm$/)
+  await expect(dialog).toBeHidden()
+  await page.goBack()
+  await expect(page).toHaveURL(/\/inputs$/)
   await page.goBack()
   await expect(page).toHaveURL(/\/blocks$/)
 })

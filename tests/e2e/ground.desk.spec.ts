@@ -9,7 +9,7 @@ import { say, saying } from './support/words.ts'
 /** In the demo farm, west of its brook, where no block lies. */
 const WELL = { typed: '44.6060000, -123.3185000', at: [-123.3185, 44.606] }
 
-test('writes a well down by a typed point, with its distance, changes and ends it', async ({ page, isPhone, signInAs, manager }) => {
+test('writes a well down by a typed point, with its distance, changes and ends it', async ({ page, signInAs, manager }) => {
   await signInAs('manager')
   const name = unique('Well ')
   await page.goto('/blocks/ground/new?what=site')
@@ -30,7 +30,7 @@ test('writes a well down by a typed point, with its distance, changes and ends i
   await expect(row).toContainText('25')
   await page.reload()
   await expect(row).toContainText('25')
-  if (!isPhone) await expect(page.getByRole('application').getByText(name, { exact: true })).toBeAttached()
+  await expect(page.getByRole('application').getByText(name, { exact: true })).toBeAttached()
   const { items } = await manager.get('/sites?limit=200', pageOf(siteSchema))
   expect(items.find((site) => site.name === name)).toMatchObject({ kind: 'well', keepClearM: '25', geometry: { type: 'Point', coordinates: WELL.at } })
 
@@ -39,7 +39,7 @@ test('writes a well down by a typed point, with its distance, changes and ends i
   await form.getByLabel(say('ground.form.endedOn')).fill('2026-01-02')
   await form.getByRole('button', { name: say('ground.form.save'), exact: true }).click()
   await expect(row).toContainText(saying('ground.list.gone'))
-  if (!isPhone) await expect(page.getByRole('application').getByText(name, { exact: true })).toHaveCount(0)
+  await expect(page.getByRole('application').getByText(name, { exact: true })).toHaveCount(0)
 })
 
 test('opens the farm map on paper from the blocks', async ({ page, signInAs }) => {

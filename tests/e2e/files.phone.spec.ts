@@ -9,6 +9,8 @@ import { expect, test } from './support/test.ts'
 import { makeSignedRecord, makeThings } from './support/things.ts'
 import { say } from './support/words.ts'
 
+test.use({ readsAhead: true })
+
 const filesOf = async (api: FarmApi, recordId: string): Promise<Attachment[]> =>
   (await api.get(`/records/${recordId}/files`, z.object({ items: z.array(attachmentSchema), next: z.null() }))).items
 

@@ -76,7 +76,7 @@ test("the neighbour's things are not there for any role", async ({ page, context
   }
 })
 
-test('who has several farms goes from one to the other', async ({ page, context, isPhone }) => {
+test('who has several farms goes from one to the other', async ({ page, context }) => {
   await signInTo(context.request, 'owner')
   // After the demo farm in every list: who has several farms opens the first.
   const name = unique('Zell second ')
@@ -88,7 +88,7 @@ test('who has several farms goes from one to the other', async ({ page, context,
   await expect(page).toHaveURL(/\/$/)
   await openScreen(page, '/blocks')
   await expect(farms.locator('option:checked')).toHaveText(name)
-  if (!isPhone) await expect(page.getByText(say('blocks.empty.title'))).toBeVisible()
+  await expect(page.getByText(say('blocks.empty.title'))).toBeVisible()
   await farms.selectOption({ label: 'Wennick Hollow' })
   await openScreen(page, '/blocks')
   await expect(page.getByRole('rowheader', { name: /^A3 / })).toBeVisible()

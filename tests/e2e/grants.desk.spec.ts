@@ -25,7 +25,7 @@ async function makeFarm(request: APIRequestContext): Promise<{ id: string; name:
   return { id, name, season: currentSeason }
 }
 
-test('a certifier is let in for one season, takes its register away, and is out at the end', async ({ page, context, browser, baseURL, isPhone }) => {
+test('a certifier is let in for one season, takes its register away, and is out at the end', async ({ page, context, browser, baseURL }) => {
   const farm = await makeFarm(context.request)
   await context.addInitScript((farmId) => { localStorage.setItem('drenchleaf.farm', farmId) }, farm.id)
 
@@ -40,7 +40,7 @@ test('a certifier is let in for one season, takes its register away, and is out 
   await dialog.getByRole('button', { name: say('grants.form.save') }).click()
   await expect(page.getByRole('rowheader', { name: /Oaklode Review/ })).toBeVisible()
 
-  const other = await browser.newContext({ baseURL: baseURL ?? '', ...(isPhone && { viewport: page.viewportSize() }) })
+  const other = await browser.newContext({ baseURL: baseURL ?? '' })
   const reader = await other.newPage()
   await signInTo(other.request, 'certifier')
   await openScreen(reader, '/farms')

@@ -42,7 +42,6 @@ test('a plan is made; a job is moved, one is done from its record, another is sk
     return items.find(({ blockCode, ...each }) => blockCode === code && (state === undefined || each.state === state))
   }
 
-  if (!isPhone) await segment(page, say('rounds.view.list'))
   const card = page.getByRole('dialog')
   const openJob = async (code: string): Promise<void> => {
     await page.getByRole('main').getByRole('button', { name: new RegExp(`^${code} ${say('rounds.state.due')}`, 'i') }).first().click()
@@ -81,7 +80,6 @@ test('a plan is made; a job is moved, one is done from its record, another is sk
   expect(await job(one.code, 'done')).toMatchObject({ number: 1, done: { number } })
 
   await openScreen(page, '/rounds')
-  if (!isPhone) await segment(page, say('rounds.view.list'))
   await page.getByRole('main').getByRole('button', { name: new RegExp(`^${one.code} ${say('rounds.state.done')}`, 'i') }).first().click()
   await expect(card.getByRole('link', { name: say('rounds.panel.openRecord', { number }) })).toBeVisible()
 })
