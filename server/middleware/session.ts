@@ -3,11 +3,16 @@ import session from 'express-session'
 import type { Request, RequestHandler, Response } from 'express'
 import passport from 'passport'
 import { Strategy as LocalStrategy } from 'passport-local'
+import { AppError } from '../errors.ts'
 import { assertSecondStep } from '../services/factor/assertSecondStep.ts'
+import { findKnownDevice } from '../services/knownDevice.ts'
 import { readOpenSession, type OpenSession } from '../services/sessions/readOpenSession.ts'
-import { recordSession, spanOf, type SessionKind } from '../services/sessions/recordSession.ts'
-import { signIn } from '../services/signIn.ts'
+import { recordSession, type SessionKind } from '../services/sessions/recordSession.ts'
+import { longestSpan } from '../services/sessions/sessionLimits.ts'
+import { watchSignIns, type SeenSignIn } from '../services/sessions/watchSignIns.ts'
 import type { Services } from '../services/services.ts'
+import { signIn } from '../services/signIn.ts'
+import { emailOf } from './limitPasswords.ts'
 
 /** Judges a sign-in and opens its session. @returns the account's id, or null where e-mail and password do not match. */
 export type Authenticate = (request: Request, response: Response) => Promise<string | null>
@@ -72,7 +77,7 @@ export function useSessions(services: Services): Sessions {
       resave: false,
       saveUninitialized: false,
       proxy: secure,
-      cookie: { httpOnly: true, sameSite: 'lax', secure, maxAge: spanOf(null), path: '/' },
+      cookie: { httpOnly: true, sameSite: 'lax', secure, maxAge: longestSpan(false), path: '/' },
     }),
     authenticator.initialize(),
     authenticator.session(),
@@ -83,14 +88,25 @@ export function useSessions(services: Services): Sessions {
 
 /** Lets passport judge the e-mail and password of a request; then the second factor is asked, where there is one, and the session opens under a new id. */
 function authenticateWith(services: Services, authenticator: InstanceType<typeof passport.Passport>): Authenticate {
+  const watch = watchSignIns(services)
   return async (request, response) => {
+    const seen = seenIn(services, request)
     const user = await new Promise<Express.User | false>((resolve, reject) => {
       const judge = authenticator.authenticate('local', (error: unknown, found: Express.User | false) => (error ? reject(error as Error) : resolve(found))) as RequestHandler
       void judge(request, response, reject)
     })
-    if (!user) return null
-    await assertSecondStep(services, user.accountId, codeOf(request))
+    if (!user) {
+      await watch.refused(seen)
+      return null
+    }
+    try {
+      await assertSecondStep(services, user.accountId, codeOf(request))
+    } catch (refusal) {
+      if (refusal instanceof AppError && refusal.code === 'session.code_wrong') await watch.codeRefused(user.accountId, seen)
+      throw refusal
+    }
     await openSession(services, request, user.accountId, null)
+    await watch.opened(user.accountId, seen)
     return user.accountId
   }
 }
@@ -99,9 +115,14 @@ async function openSession(services: Services, request: Request, accountId: stri
   await new Promise<void>((resolve, reject) => {
     request.logIn({ accountId, open: null }, (fault: unknown) => (fault ? reject(fault as Error) : resolve()))
   })
-  request.session.cookie.maxAge = spanOf(kind)
+  request.session.cookie.maxAge = longestSpan(kind !== null)
   await new Promise<void>((resolve, reject) => request.session.save((fault: unknown) => (fault ? reject(fault as Error) : resolve())))
   await recordSession(services, { sid: request.sessionID, accountId, agent: request.get('User-Agent') ?? null, kind })
+}
+
+function seenIn({ config }: Services, request: Request): SeenSignIn {
+  const email = emailOf(request)
+  return { email, isKnown: findKnownDevice(config, request.get('Cookie'), email) !== null, agent: request.get('User-Agent'), address: request.ip }
 }
 
 function codeOf({ body }: Request): string | undefined {

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { emailSchema } from '../../shared/contract/email.ts'
 import { acceptSignedInSchema, acceptWelcomeSchema, linkParamsSchema, spendResetSchema, welcomeSchema } from '../../shared/contract/welcome.ts'
 import { logSecurity } from '../middleware/logSecurity.ts'
+import { rememberDevice } from '../middleware/rememberDevice.ts'
 import { askForReset, readReset, resetPassword } from '../services/resetPassword.ts'
 import { acceptSignedIn, acceptWelcome, readWelcome } from '../services/welcome.ts'
 import { defineRoute } from './defineRoute.ts'
@@ -16,9 +17,10 @@ export const linkRoutes = [
   defineRoute({
     method: 'post', path: '/welcome', summary: 'Spend a one-time link: take a name and a password.', roles: 'everybody',
     guardsPassword: true, body: acceptWelcomeSchema, answer: z.null(),
-    run: async ({ services, body, request }) => {
-      const accountId = await acceptWelcome(services, body)
+    run: async ({ services, body, request, response }) => {
+      const { accountId, email } = await acceptWelcome(services, body)
       logSecurity(services, request, 'password.changed', { accountId })
+      rememberDevice(services, response, email)
       return { status: 204, body: null }
     },
   }),

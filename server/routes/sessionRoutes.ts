@@ -2,11 +2,9 @@ import { z } from 'zod'
 import { sessionSchema, signInSchema } from '../../shared/contract/session.ts'
 import { AppError } from '../errors.ts'
 import { logSecurity } from '../middleware/logSecurity.ts'
+import { rememberDevice } from '../middleware/rememberDevice.ts'
 import { describeSession } from '../services/describeSession.ts'
-import { deviceCookieName, markDevice } from '../services/knownDevice.ts'
 import { defineRoute } from './defineRoute.ts'
-
-const YEAR_MS = 365 * 86_400_000
 
 const postSession = defineRoute({
   method: 'post',
@@ -19,15 +17,8 @@ const postSession = defineRoute({
   run: async (call) => {
     const accountId = await call.authenticate()
     if (accountId === null) throw new AppError('unauthenticated', 'session.wrong', { countsAsGuess: true })
-    const { config } = call.services
     logSecurity(call.services, call.request, 'sign-in.ok', { accountId })
-    call.response.cookie(deviceCookieName(config, call.body.email), markDevice(config.sessionSecret, call.body.email), {
-      httpOnly: true,
-      sameSite: 'lax',
-      secure: config.cookies.secure,
-      maxAge: YEAR_MS,
-      path: '/api/session',
-    })
+    rememberDevice(call.services, call.response, call.body.email)
     return { body: await describeSession(call.services, accountId) }
   },
 })

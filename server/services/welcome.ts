@@ -30,10 +30,10 @@ export async function readWelcome(services: Parts, token: string): Promise<Welco
 
 /**
  * Spends a link: the account takes its name and password, and the farm's invitation with them; its other links to a password and its
- * sessions end. @returns the account's id.
+ * sessions end. @returns the account's id, and the e-mail by which it signs in.
  * @throws {AppError} `welcome.used_up`, `welcome.has_account` for an invitation of somebody who signs in already, or a weak password.
  */
-export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<string> {
+export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<{ accountId: string; email: string }> {
   const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, input.token, ['welcome', 'invitation']))
   if (link.kind === 'invitation' && account.passwordHash !== null) throw new AppError('conflict', 'welcome.has_account')
   assertGoodPassword(input.password, { own: [account.email, input.name] })
@@ -51,7 +51,7 @@ export async function acceptWelcome(services: Parts, input: { token: string; nam
       if (account.passwordHash !== null) await tellOfPassword(services, manager, account)
     })
   }
-  return account.id
+  return { accountId: account.id, email: account.email ?? '' }
 }
 
 /**

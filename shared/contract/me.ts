@@ -24,8 +24,9 @@ export const ownSessionSchema = z.object({
   /** Whether it was opened by PIN on a phone of a farm. */
   onSharedPhone: z.boolean(),
   openedAt: z.string(),
-  /** Right to five minutes. */
+  /** Right to a minute. */
   seenAt: z.string(),
+  /** If it is not used again. */
   endsAt: z.string(),
   /** The one that asks. */
   isThis: z.boolean(),

@@ -73,7 +73,7 @@ describe('one’s own sessions', () => {
     const { body } = await manager.get('/api/me/sessions').expect(200)
     expect(body.items).toMatchObject([
       { isThis: true, openedAt: NOW, seenAt: '2026-06-16T16:00:00.000Z' },
-      { isThis: false, device: 'Firefox, Android', openedAt: NOW, seenAt: '2026-06-16T16:00:00.000Z', endsAt: '2026-07-16T14:00:00.000Z' },
+      { isThis: false, device: 'Firefox, Android', openedAt: NOW, seenAt: '2026-06-16T16:00:00.000Z', endsAt: '2026-06-30T16:00:00.000Z' },
     ])
     expect(Object.keys(body.items[0]).sort()).toEqual(['device', 'endsAt', 'id', 'isThis', 'onSharedPhone', 'openedAt', 'seenAt'])
     await manager.delete(`/api/me/sessions/${body.items[1].id}`).expect(204)
@@ -98,12 +98,5 @@ describe('one’s own sessions', () => {
     await house.as(farm.accounts.manager)
     const statuses = await Promise.all(agents.map(async (agent) => (await agent.get('/api/session')).status))
     expect(statuses).toEqual([200, 401, 200, 200, 200])
-  })
-
-  it('end after thirty days, whatever happens', async () => {
-    house.setNow('2026-07-16T13:59:00.000Z')
-    expect((await manager.get('/api/session')).status).toBe(200)
-    house.setNow('2026-07-16T14:00:01.000Z')
-    expect((await manager.get('/api/session')).status).toBe(401)
   })
 })

@@ -17,7 +17,7 @@ afterAll(() => house.close())
 const anybody = () => supertest.agent(house.app).set({ 'X-Requested-With': 'drenchleaf', 'X-Forwarded-Proto': 'https' })
 let turn = 0
 const ask = (email: string, from = `2001:db8::${(turn += 1)}`) => anybody().post('/api/reset').set('X-Forwarded-For', from).send({ email })
-const linkTo = async (email: string): Promise<string> => /https:\/\/register\.example\/reset\/([\w-]+)/.exec((await house.mailTo(email))[0]?.text ?? '')?.[1] ?? ''
+const linkTo = async (email: string): Promise<string> => /https:\/\/register\.example\/reset\/([\w-]+)/.exec((await house.mailTo(email)).find(({ text }) => text.includes('/reset/'))?.text ?? '')?.[1] ?? ''
 const spend = (token: string, password = NEW) => anybody().post('/api/reset/password').send({ token, password })
 const signIn = (email: string, password: string) => anybody().post('/api/session').send({ email, password })
 
@@ -33,8 +33,8 @@ describe('a forgotten password', () => {
     await anybody().get('/api/session').set('Cookie', before.map((cookie) => cookie.split(';')[0]).join('; ')).expect(401)
     await signIn(email, PASSWORD).expect(401)
     await signIn(email, NEW).expect(200)
-    const [told] = await house.mailTo(email)
-    expect(told).toMatchObject({ subject: 'Your password was changed', to: [email] })
+    const told = (await house.mailTo(email)).find(({ subject }) => subject === 'Your password was changed')
+    expect(told?.to).toEqual([email])
     expect(told?.text).toContain('16 June 2026 at 14:00 UTC')
   })
 

@@ -5,6 +5,7 @@ import type { FactorOffer, FactorState } from '../../../shared/contract/me.ts'
 import { Account } from '../../entities/Account.ts'
 import { RecoveryCode } from '../../entities/RecoveryCode.ts'
 import { AppError, invalid } from '../../errors.ts'
+import { tellOfFactor } from '../mail/tellOfFactor.ts'
 import { wrongSecret } from '../me/changeMe.ts'
 import { verifyPassword } from '../passwords.ts'
 import type { Services } from '../services.ts'
@@ -53,6 +54,9 @@ export async function confirmFactor(services: Services, { accountId, sessionId }
   return services.database.inHouse(async (manager) => {
     await updateRow(manager, Account, { id: accountId }, { totpSecret: account.totpPending, totpPending: null, totpStep: step, totpSince: now })
     await endSessionsOf(manager, accountId, sessionId)
+    // Password and code were just asked: the shorter session that a factor brings counts from here.
+    await manager.query('UPDATE sessions SET opened_at = $2, seen_at = $2 WHERE id = $1', [sessionId, now])
+    await tellOfFactor(services, manager, { accountId, news: 'set' })
     return renewRecoveryCodes(manager, accountId, now)
   })
 }
@@ -63,13 +67,17 @@ export async function removeFactor(services: Services, { accountId, sessionId }:
   await services.database.inHouse(async (manager) => {
     await dropFactor(manager, accountId, services.clock.now())
     await endSessionsOf(manager, accountId, sessionId)
+    await tellOfFactor(services, manager, { accountId, news: 'removed' })
   })
 }
 
 /** New recovery codes for the ones before. @throws {AppError} as `removeFactor`. */
 export async function renewCodes(services: Services, accountId: string, proof: { password: string; code: string }): Promise<string[]> {
   await proveFactor(services, accountId, proof)
-  return services.database.inHouse((manager) => renewRecoveryCodes(manager, accountId, services.clock.now()))
+  return services.database.inHouse(async (manager) => {
+    await tellOfFactor(services, manager, { accountId, news: 'codes' })
+    return renewRecoveryCodes(manager, accountId, services.clock.now())
+  })
 }
 
 /** Leaves nothing of a second factor on an account. */

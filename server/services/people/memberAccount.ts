@@ -4,6 +4,7 @@ import { invalid } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { assertPassword } from '../assertPassword.ts'
 import { dropFactor } from '../factor/ownFactor.ts'
+import { tellOfFactor } from '../mail/tellOfFactor.ts'
 import type { Services } from '../services.ts'
 import { endSessionsOf } from '../sessions/ownSessions.ts'
 import { lockPerson } from './lockPeople.ts'
@@ -27,6 +28,7 @@ export async function resetMemberFactor(services: Services, actor: FarmActor, id
     await appendJournal(services, manager, actor, { action: 'person.factor_reset', subjectId: id })
     await dropFactor(manager, accountId, services.clock.now())
     await endSessionsOf(manager, accountId)
+    await tellOfFactor(services, manager, { accountId, news: 'reset', farmId: actor.farmId })
   })
 }
 

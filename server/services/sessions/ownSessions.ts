@@ -3,6 +3,8 @@ import type { OwnSession } from '../../../shared/contract/me.ts'
 import { deviceWords } from '../../../shared/devices/deviceWords.ts'
 import { notFound } from '../../errors.ts'
 import type { Services } from '../services.ts'
+import { isAskedForFactor } from './readOpenSession.ts'
+import { sessionEnd } from './sessionLimits.ts'
 
 interface Row {
   id: string
@@ -11,22 +13,30 @@ interface Row {
   opened_at: Date
   seen_at: Date
   ends_at: Date
+  has_factor: boolean
 }
 
 /** An account, and the session by which it asks. */
 export interface Who { accountId: string; sessionId: string }
 
 /** The sessions of an account that stand, the one seen last first. */
-export async function listOwnSessions({ database, clock }: Services, { accountId, sessionId }: Who): Promise<OwnSession[]> {
-  const rows: Row[] = await database.inHouse((manager) => manager.query(
-    `SELECT id, agent, shared_phone, opened_at, seen_at, ends_at FROM sessions
-      WHERE account_id = $1 AND ends_at > $2 AND expire > now() ORDER BY seen_at DESC, opened_at DESC, id`,
-    [accountId, clock.now()],
+export async function listOwnSessions(services: Services, { accountId, sessionId }: Who): Promise<OwnSession[]> {
+  const now = services.clock.now()
+  const rows: Row[] = await services.database.inHouse((manager) => manager.query(
+    `SELECT s.id, s.agent, s.shared_phone, s.opened_at, s.seen_at, s.ends_at, a.totp_secret IS NOT NULL AS has_factor
+      FROM sessions s JOIN accounts a ON a.id = s.account_id
+      WHERE s.account_id = $1 AND s.expire > now() ORDER BY s.seen_at DESC, s.opened_at DESC, s.id`,
+    [accountId],
   ))
-  return rows.map((row) => ({
-    id: row.id, device: deviceWords(row.agent ?? undefined), onSharedPhone: row.shared_phone !== null, isThis: row.id === sessionId,
-    openedAt: row.opened_at.toISOString(), seenAt: row.seen_at.toISOString(), endsAt: row.ends_at.toISOString(),
-  }))
+  const isShort = rows.some((row) => row.has_factor) || (await isAskedForFactor(services, accountId))
+  return rows.map((row) => {
+    const onSharedPhone = row.shared_phone !== null
+    const endsAt = sessionEnd({ openedAt: row.opened_at, seenAt: row.seen_at, endsAt: row.ends_at, isByPin: onSharedPhone }, isShort)
+    return {
+      id: row.id, device: deviceWords(row.agent ?? undefined), onSharedPhone, isThis: row.id === sessionId,
+      openedAt: row.opened_at.toISOString(), seenAt: row.seen_at.toISOString(), endsAt: endsAt.toISOString(),
+    }
+  }).filter(({ endsAt }) => endsAt > now.toISOString())
 }
 
 /** Ends one session of an account. @throws {AppError} not-found for one that is not there or is somebody else's. */

@@ -1,4 +1,5 @@
 import type { Services } from '../services.ts'
+import { SEEN_EVERY_MS, sessionEnd } from './sessionLimits.ts'
 
 /** A session that stands, as the database says at this request. */
 export interface OpenSession {
@@ -10,25 +11,38 @@ export interface OpenSession {
 interface Row {
   id: string
   has_factor: boolean
+  opened_at: Date
   seen_at: Date
+  ends_at: Date
+  is_by_pin: boolean
 }
 
-/** How exact the time is at which a session was seen last. */
-const SEEN_EVERY_MS = 5 * 60_000
+type Parts = Pick<Services, 'database' | 'clock'>
 
 /** The session, where it has not ended and its account is open; asked at each request, so that ending either acts at once. */
-export async function readOpenSession(
-  { database, clock }: Pick<Services, 'database' | 'clock'>, { sid, accountId }: { sid: string; accountId: string },
-): Promise<OpenSession | null> {
+export async function readOpenSession({ database, clock }: Parts, { sid, accountId }: { sid: string; accountId: string }): Promise<OpenSession | null> {
   const now = clock.now()
-  return database.inHouse(async (manager) => {
-    const [row]: Row[] = await manager.query(
-      `SELECT s.id, s.seen_at, a.totp_secret IS NOT NULL AS has_factor FROM sessions s JOIN accounts a ON a.id = s.account_id
-        WHERE s.sid = $1 AND s.account_id = $2 AND s.ends_at > $3 AND a.deactivated_at IS NULL`,
-      [sid, accountId, now],
-    )
-    if (!row) return null
-    if (now.getTime() - row.seen_at.getTime() > SEEN_EVERY_MS) await manager.query('UPDATE sessions SET seen_at = $2 WHERE sid = $1', [sid, now])
-    return { id: row.id, hasFactor: row.has_factor }
-  })
+  const [row]: Row[] = await database.inHouse((manager) => manager.query(
+    `SELECT s.id, s.opened_at, s.seen_at, s.ends_at, s.shared_phone IS NOT NULL AS is_by_pin, a.totp_secret IS NOT NULL AS has_factor
+      FROM sessions s JOIN accounts a ON a.id = s.account_id WHERE s.sid = $1 AND s.account_id = $2 AND a.deactivated_at IS NULL`,
+    [sid, accountId],
+  ))
+  if (!row) return null
+  const times = { openedAt: row.opened_at, seenAt: row.seen_at, endsAt: row.ends_at, isByPin: row.is_by_pin }
+  const isPast = (isShort: boolean): boolean => sessionEnd(times, isShort) <= now
+  // What the farms ask is looked up only where the answer would end it.
+  if (isPast(false) || (isPast(true) && (row.has_factor || (await isAskedForFactor({ database, clock }, accountId))))) {
+    // Gone for good: were the farm to ask no factor tomorrow, it would stand again.
+    await database.inHouse((manager) => manager.query('DELETE FROM sessions WHERE sid = $1', [sid]))
+    return null
+  }
+  if (now.getTime() - row.seen_at.getTime() > SEEN_EVERY_MS) {
+    await database.inHouse((manager) => manager.query('UPDATE sessions SET seen_at = $2 WHERE sid = $1', [sid, now]))
+  }
+  return { id: row.id, hasFactor: row.has_factor }
+}
+
+/** Whether a farm asks a second factor of this account, for the role that it has there. */
+export async function isAskedForFactor({ database, clock }: Parts, accountId: string): Promise<boolean> {
+  return (await database.listAccess(accountId, clock.now())).some(({ asksFactor }) => asksFactor)
 }

@@ -1,21 +1,11 @@
 import type { Services } from '../services.ts'
+import { longestSpan } from './sessionLimits.ts'
 
-const HOUR_MS = 3_600_000
-const DAY_MS = 24 * HOUR_MS
-/** A session ends after this long, whatever happens; a phone in the rows is not asked every morning. */
-const BY_PASSWORD_MS = 30 * DAY_MS
-/** A working day on a phone that others hold tomorrow. */
-const BY_PIN_MS = 12 * HOUR_MS
 /** What a browser says of itself is cut here. */
 const MOST_AGENT = 300
 
 /** Where a session was opened by PIN; null where by password. */
 export type SessionKind = { farmId: string; phoneId: string } | null
-
-/** How long a session of a kind lasts, milliseconds. */
-export function spanOf(kind: SessionKind): number {
-  return kind === null ? BY_PASSWORD_MS : BY_PIN_MS
-}
 
 /** The name under which a session keeps the shared phone that it was opened on. */
 export function phoneKey({ farmId, phoneId }: NonNullable<SessionKind>): string {
@@ -28,7 +18,7 @@ export async function recordSession(
   { sid, accountId, agent, kind }: { sid: string; accountId: string; agent: string | null; kind: SessionKind },
 ): Promise<void> {
   const now = clock.now()
-  const endsAt = new Date(now.getTime() + spanOf(kind))
+  const endsAt = new Date(now.getTime() + longestSpan(kind !== null))
   await database.inHouse(async (manager) => {
     await manager.query(
       'UPDATE sessions SET account_id = $2, agent = $3, opened_at = $4, seen_at = $4, ends_at = $5, shared_phone = $6 WHERE sid = $1',

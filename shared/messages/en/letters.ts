@@ -14,7 +14,7 @@ export const letters = {
   sentAt: 'Taken by the mail server {at}',
   nextTry: 'Tried {tries} time, again {at} | Tried {tries} times, again {at}',
   state: { waiting: 'On its way', failing: 'Not taken yet', sent: 'Sent', dead: 'Given up' },
-  kind: { invitation: 'Invitation onto the farm', grant: 'Seasons opened to a certifier', jobsDue: 'Jobs due and late', other: 'Notice' },
+  kind: { invitation: 'Invitation onto the farm', grant: 'Seasons opened to a certifier', jobsDue: 'Jobs due and late', factorChanged: 'Second factor', other: 'Notice' },
   fault: {
     unreachable: 'The mail server cannot be reached.',
     refused: 'The mail server did not take it and answered {answer}.',

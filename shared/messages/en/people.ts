@@ -95,7 +95,7 @@ export const people = {
     end: 'End',
     endOthers: 'End all others',
     ended: 'Ended.',
-    most: 'At most five at a time; with the sixth the one not seen for longest ends.',
+    most: 'At most five at a time; with the sixth the one not seen for longest ends. A session ends after 14 days without use and after 30 in any case; with a second factor, or on a farm that asks one of you, after an hour without use and after a day.',
     sessionsUnread: 'Your sessions could not be read.',
   },
   factor: {

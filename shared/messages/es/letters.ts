@@ -14,7 +14,7 @@ export const letters = {
   sentAt: 'Aceptado por el servidor de correo: {at}',
   nextTry: '{tries} intento; otro: {at} | {tries} intentos; otro: {at}',
   state: { waiting: 'En camino', failing: 'Aún no aceptado', sent: 'Enviado', dead: 'Abandonado' },
-  kind: { invitation: 'Invitación a la finca', grant: 'Campañas abiertas a un certificador', jobsDue: 'Tareas pendientes y atrasadas', other: 'Aviso' },
+  kind: { invitation: 'Invitación a la finca', grant: 'Campañas abiertas a un certificador', jobsDue: 'Tareas pendientes y atrasadas', factorChanged: 'Segundo factor', other: 'Aviso' },
   fault: {
     unreachable: 'No se llega al servidor de correo.',
     refused: 'El servidor de correo no lo aceptó y respondió {answer}.',

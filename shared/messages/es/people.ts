@@ -97,7 +97,7 @@ export const people: Messages['people'] = {
     end: 'Cerrar',
     endOthers: 'Cerrar todas las demás',
     ended: 'Cerrada.',
-    most: 'Cinco a la vez como máximo; con la sexta se cierra la que lleva más tiempo sin verse.',
+    most: 'Cinco a la vez como máximo; con la sexta se cierra la que lleva más tiempo sin verse. Una sesión se cierra tras 14 días sin uso y a los 30 en todo caso; con segundo factor, o en una finca que se lo pide, tras una hora sin uso y al cabo de un día.',
     sessionsUnread: 'No se han podido leer sus sesiones.',
   },
   factor: {

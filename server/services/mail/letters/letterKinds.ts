@@ -1,12 +1,14 @@
 import type { z } from 'zod'
+import { factorChanged } from './factorChanged.ts'
 import { grant } from './grant.ts'
 import { invitation } from './invitation.ts'
 import { jobsDue } from './jobsDue.ts'
 import { passwordChanged } from './passwordChanged.ts'
 import { passwordReset } from './passwordReset.ts'
+import { signIn } from './signIn.ts'
 
 /** Every kind of letter, by the name under which it stands in the outbox. */
-export const LETTER_KINDS = { grant, invitation, jobsDue, passwordChanged, passwordReset }
+export const LETTER_KINDS = { factorChanged, grant, invitation, jobsDue, passwordChanged, passwordReset, signIn }
 
 export type LetterName = keyof typeof LETTER_KINDS
 
