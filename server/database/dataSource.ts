@@ -17,6 +17,7 @@ import { AddMail1764640000000 } from '../../migrations/1764640000000-AddMail.ts'
 import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds.ts'
 import { WholePeople1764641000000 } from '../../migrations/1764641000000-WholePeople.ts'
 import { FindUnreviewed1764646000000 } from '../../migrations/1764646000000-FindUnreviewed.ts'
+import { PruneLetters1764647000000 } from '../../migrations/1764647000000-PruneLetters.ts'
 import { FindSeasonCode1764648000000 } from '../../migrations/1764648000000-FindSeasonCode.ts'
 import { ENTITIES } from './entities.ts'
 
@@ -63,6 +64,7 @@ export function createOwnerSource(url: string): DataSource {
       WholeGrants1764643000000,
       AddRounds1764644000000,
       FindUnreviewed1764646000000,
+      PruneLetters1764647000000,
       FindSeasonCode1764648000000,
     ],
     migrationsTransactionMode: 'each',

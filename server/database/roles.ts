@@ -1,11 +1,11 @@
 /**
  * What the app role may do with each table. Evidence tables take inserts and nothing else; no table is deleted
- * from, save the projections of a record, which are rewritten with it, drafts (a trigger keeps what was signed), and sessions.
- * from, save the projections of a record, which are rewritten with it, a person's own saved filters, and sessions.
+ * from, save the projections of a record, which are rewritten with it, drafts (a trigger keeps what was signed), a person's own saved
+ * filters, sessions, and what `pruneOld` takes away.
  */
 export const APP_RIGHTS: Record<string, string> = {
   accounts: 'SELECT, INSERT, UPDATE',
-  account_tokens: 'SELECT, INSERT, UPDATE',
+  account_tokens: 'SELECT, INSERT, UPDATE, DELETE',
   recovery_codes: 'SELECT, INSERT, UPDATE',
   sessions: 'SELECT, INSERT, UPDATE, DELETE',
   farms: 'SELECT, INSERT, UPDATE',
@@ -45,8 +45,8 @@ export const APP_RIGHTS: Record<string, string> = {
   journal: 'SELECT, INSERT',
   season_heads: 'SELECT, INSERT',
   invitations: 'SELECT, INSERT, UPDATE',
-  reset_asks: 'SELECT, INSERT, UPDATE',
-  letters: 'SELECT, INSERT, UPDATE (params, state, tries, next_try_at, claimed_until, sent_at, last_fault)',
+  reset_asks: 'SELECT, INSERT, UPDATE, DELETE',
+  letters: 'SELECT, INSERT, UPDATE (params, state, tries, next_try_at, claimed_until, sent_at, last_fault), DELETE',
   demo_seed: 'SELECT, INSERT',
 }
 

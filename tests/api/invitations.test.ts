@@ -21,7 +21,7 @@ let turn = 0
 const buildInvitation = (changes: object = {}) => ({ id: uuidV7(), email: `new-${(turn += 1)}@farm.example`, name: 'Nia', role: 'applicator', language: 'en', ...changes })
 const invite = (body: object) => owner.post(`/api/farms/${farm.id}/invitations`).send(body)
 const open = async () => (await owner.get(`/api/farms/${farm.id}/invitations`).expect(200)).body.items as { id: string; email: string; revision: number; letter: string; isLate: boolean }[]
-const linkTo = async (email: string): Promise<string> => /\/welcome\/([\w-]+)/.exec((await house.mailTo(email))[0]?.text ?? '')?.[1] ?? ''
+const linkTo = async (email: string): Promise<string> => /\/welcome\/([\w-]+)/.exec((await house.mailTo(email)).find(({ text }) => text.includes('/welcome/'))?.text ?? '')?.[1] ?? ''
 const anybody = () => supertest.agent(house.app).set('X-Requested-With', 'drenchleaf')
 const later = (hours: number) => house.setNow(new Date(Date.parse(NOW) + hours * 3_600_000).toISOString())
 

@@ -19,7 +19,7 @@ export function readStart(services: Services, actor: FarmActor): Promise<Start> 
 /** Passes steps over, takes that back, or puts the whole away. */
 export function updateStart(services: Services, actor: FarmActor, { skipped, away }: UpdateStart): Promise<Start> {
   return services.database.inFarm(actor, async (manager) => {
-    const farm = await manager.findOne(Farm, { where: { id: actor.farmId }, lock: { mode: 'pessimistic_write' } })
+    const farm = await manager.findOne(Farm, { where: { id: actor.farmId }, lock: { mode: 'for_no_key_update' } })
     if (!farm) throw notFound()
     // In their own order and once each, so that the same wish is the same row.
     const changes = { startSkipped: START_STEPS.filter((step) => (skipped ?? farm.startSkipped).includes(step)), startAway: away ?? farm.startAway }

@@ -22,7 +22,7 @@ import { presentFarm } from './describeFarm.ts'
 export async function updateFarm(services: Services, actor: FarmActor, { revision, acknowledged = [], ...sent }: UpdateFarm): Promise<FarmAnswer> {
   const wanted = saidParts(sent)
   return services.database.inFarm(actor, async (manager) => {
-    const farm = await manager.findOne(Farm, { where: { id: actor.farmId }, lock: { mode: 'pessimistic_write' } })
+    const farm = await manager.findOne(Farm, { where: { id: actor.farmId }, lock: { mode: 'for_no_key_update' } })
     if (!farm) throw notFound()
     if (farm.revision !== revision) throw stale(await presentFarm(services, manager, farm))
     const faults = await findFaults(manager, farm, wanted)

@@ -16,7 +16,7 @@ export async function askFactor(services: Services, actor: FarmActor, { asked, p
   return services.database.inFarm(actor, async (manager) => {
     const own = await manager.findOneByOrFail(Account, { id: actor.accountId })
     if (asked && own.totpSecret === null) throw invalid([{ path: 'asked', code: 'factor.own_first' }])
-    const farm = await manager.findOneOrFail(Farm, { where: { id: actor.farmId }, lock: { mode: 'pessimistic_write' } })
+    const farm = await manager.findOneOrFail(Farm, { where: { id: actor.farmId }, lock: { mode: 'for_no_key_update' } })
     if (farm.asksSecondFactor === asked) return { asked }
     await updateRow(manager, Farm, { id: actor.farmId }, { asksSecondFactor: asked, revision: farm.revision + 1 })
     await appendJournal(services, manager, actor, { action: asked ? 'farm.factor_asked' : 'farm.factor_not_asked', subjectId: actor.farmId })

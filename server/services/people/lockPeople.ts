@@ -7,12 +7,13 @@ import { presentPerson } from './presentPeople.ts'
 
 /**
  * Locks a person and every owner of the farm, in the order of their ids, so that two owners who act on each other wait and do not
- * block each other.
+ * block each other. Keys stay open: a deed that only names one of them, and then asks whether its doer still has the role, holds a
+ * key of one and waits for the other.
  * @throws {AppError} not-found, `stale` over another revision than the one that was seen.
  */
 export async function lockPerson(manager: EntityManager, { farmId }: FarmActor, id: string, revision?: number): Promise<{ person: Person; owners: Person[] }> {
   const locked = await manager.find(Person, {
-    where: [{ farmId, id }, { farmId, role: 'owner' }], order: { id: 'ASC' }, lock: { mode: 'pessimistic_write' },
+    where: [{ farmId, id }, { farmId, role: 'owner' }], order: { id: 'ASC' }, lock: { mode: 'for_no_key_update' },
   })
   const person = locked.find((candidate) => candidate.id === id)
   if (!person) throw notFound()

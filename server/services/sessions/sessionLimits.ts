@@ -14,8 +14,6 @@ const BY_PIN: Limits = { span: 12 * HOUR_MS, idle: 12 * HOUR_MS }
 
 /** How exact the time is at which a session was seen last, milliseconds. */
 export const SEEN_EVERY_MS = MINUTE_MS
-/** After this long without use no session stands, whoever's it is; milliseconds. */
-export const LONGEST_IDLE_MS = BY_PASSWORD.idle
 
 export interface SessionTimes {
   openedAt: Date
@@ -25,11 +23,14 @@ export interface SessionTimes {
   isByPin: boolean
 }
 
+/** Which limits hold. @param isShort as for an account with a second factor. */
+export const limitsOf = ({ isByPin, isShort }: { isByPin: boolean; isShort: boolean }): Limits => (isByPin ? BY_PIN : isShort ? BY_FACTOR : BY_PASSWORD)
+
 /** How long a new session lasts at most, milliseconds; what is short only for some is judged at each request. */
-export const longestSpan = (isByPin: boolean): number => (isByPin ? BY_PIN : BY_PASSWORD).span
+export const longestSpan = (isByPin: boolean): number => limitsOf({ isByPin, isShort: false }).span
 
 /** When a session ends if it is not used again. @param isShort as for an account with a second factor. */
 export function sessionEnd({ openedAt, seenAt, endsAt, isByPin }: SessionTimes, isShort: boolean): Date {
-  const { span, idle } = isByPin ? BY_PIN : isShort ? BY_FACTOR : BY_PASSWORD
+  const { span, idle } = limitsOf({ isByPin, isShort })
   return new Date(Math.min(endsAt.getTime(), openedAt.getTime() + span, seenAt.getTime() + idle))
 }
