@@ -1,9 +1,14 @@
 import { farmParamsSchema, pageOf, pageQuerySchema, thingParamsSchema } from '../../shared/contract/common.ts'
 import { changeGrantSchema, endGrantSchema, giveGrantSchema, grantedSeasonsSchema, grantSchema } from '../../shared/contract/grant.ts'
+import { registerRowSchema } from '../../shared/contract/record.ts'
+import { filterQuerySchema, registerQuerySchema, registerTotalsSchema } from '../../shared/contract/register.ts'
 import { changeGrant, endGrant } from '../services/grants/changeGrant.ts'
 import { giveGrant } from '../services/grants/giveGrant.ts'
 import { listGrantedSeasons } from '../services/grants/listGrantedSeasons.ts'
 import { listGrants } from '../services/grants/listGrants.ts'
+import { seeAsGranted } from '../services/grants/seeAsGranted.ts'
+import { listRegister } from '../services/register/listRegister.ts'
+import { registerTotals } from '../services/register/registerTotals.ts'
 import { defineRoute } from './defineRoute.ts'
 
 const OWNER = ['owner'] as const
@@ -36,5 +41,15 @@ export const grantRoutes = [
     method: 'post', path: '/farms/:farmId/grants/:id/end', summary: 'End a grant now; the certifier’s next request finds nothing.', roles: OWNER,
     guardsPassword: true, params: thingParamsSchema, body: endGrantSchema, answer: grantSchema,
     run: async ({ services, actor, params, body }) => ({ body: await endGrant(services, actor, params.id, body) }),
+  }),
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/grants/:id/records', summary: 'The register as the certifier of a grant sees it now, for the owner.', roles: OWNER,
+    params: thingParamsSchema, query: registerQuerySchema, answer: pageOf(registerRowSchema),
+    run: async ({ services, actor, params, query }) => ({ body: await listRegister(services, await seeAsGranted(services, actor, params.id), query) }),
+  }),
+  defineRoute({
+    method: 'get', path: '/farms/:farmId/grants/:id/totals', summary: 'What the register adds up to as the certifier of a grant sees it now, for the owner.', roles: OWNER,
+    params: thingParamsSchema, query: filterQuerySchema, answer: registerTotalsSchema,
+    run: async ({ services, actor, params, query }) => ({ body: await registerTotals(services, await seeAsGranted(services, actor, params.id), query) }),
   }),
 ]

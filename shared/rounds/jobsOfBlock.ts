@@ -17,6 +17,8 @@ export interface RoundWork {
   on: string
   /** Of the job that its record was opened from; null where it was written without one. */
   number: number | null
+  /** Its record was taken back: it does no job any more, and keeps its place among the others. */
+  isWithdrawn?: boolean
 }
 
 /** What a person decided about one job. */
@@ -57,10 +59,18 @@ const MOST_JOBS = 400
  * One block's jobs of one step, in order. The first is for the first day; each next one counts from the day the one before was
  * done, from its target where it was skipped, and from the later of its planned day and today where it is still to be done.
  * A job is done by the record that was opened from it; else by the first work from its first day on that belongs to no job,
- * however late. Work before that day does none.
+ * however late. Work before that day does none. Work that was taken back leaves its job undone and moves no other: which job a work
+ * does is settled over all that was ever signed, so that a move or a skip stays on the job it was meant for.
  * @throws {RangeError} if a date is none or the rhythm is not at least a day.
  */
-export function jobsOfBlock({ rhythm, works, decisions, today, isClosed }: BlockRound): RoundJob[] {
+export function jobsOfBlock(round: BlockRound): RoundJob[] {
+  const { works } = round
+  if (!works.some(({ isWithdrawn }) => isWithdrawn)) return countJobs(round)
+  const placed = new Map(countJobs(round).flatMap(({ number, done }) => (done === null ? [] : [[done.recordId, number] as const])))
+  return countJobs({ ...round, works: works.filter(({ isWithdrawn }) => !isWithdrawn).map((work) => ({ ...work, number: placed.get(work.recordId) ?? null })) })
+}
+
+function countJobs({ rhythm, works, decisions, today, isClosed }: BlockRound): RoundJob[] {
   const { everyDays, earlyDays, lateDays } = rhythm
   if (!(everyDays >= 1)) throw new RangeError(`everyDays must be at least 1, not ${everyDays}`)
   const found = new WorkFinder(works)
@@ -92,6 +102,8 @@ function stateOn(now: number, opens: number, closes: number): JobState {
   return now < opens ? 'planned' : now <= closes ? 'due' : 'late'
 }
 
+const byDay = (a: RoundWork, b: RoundWork): number => a.on.localeCompare(b.on) || a.recordId.localeCompare(b.recordId)
+
 /** Gives each job its work: the one that names it, else the next that names none. */
 class WorkFinder {
   readonly lastNumber: number
@@ -100,12 +112,14 @@ class WorkFinder {
   private last = Number.NEGATIVE_INFINITY
 
   constructor(works: readonly RoundWork[]) {
-    const inOrder = [...works].sort((a, b) => a.on.localeCompare(b.on) || a.recordId.localeCompare(b.recordId))
+    // A record that stands does its job before one that was taken back.
+    const inOrder = [...works].sort((a, b) => Number(a.isWithdrawn ?? false) - Number(b.isWithdrawn ?? false) || byDay(a, b))
     for (const work of inOrder) {
       // Of two records opened from one job, the earlier does it; the other stands on its own.
       if (work.number === null || this.named.has(work.number)) this.free.push(work)
       else this.named.set(work.number, work)
     }
+    this.free.sort(byDay)
     this.lastNumber = Math.max(0, ...this.named.keys())
   }
 

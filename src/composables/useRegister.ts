@@ -1,15 +1,13 @@
 import { computed, ref, watch, type ComputedRef, type Ref } from 'vue'
-import { useI18n } from 'vue-i18n'
 import { sumRegisterRows, type RegisterSums } from '../../shared/register/sumRegisterRows.ts'
 import type { RegisterLine } from '../../shared/register/registerLine.ts'
-import { formatNumber, formatVolumeL } from '../../shared/units/formatQuantity.ts'
-import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { countChosen, type RegisterChoice } from './registerAddress.ts'
 import { useRecord } from './useRecord.ts'
 import { useRecords } from './useRecords.ts'
 import { useRegisterTotals } from './useRegisterTotals.ts'
 import { unsentDrafts, useRegisterLines, type RegisterWords } from './useRegisterLines.ts'
+import { useSumWords, type SumWords } from './useSumWords.ts'
 
 export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   rows: ReturnType<typeof useRecords>
@@ -24,16 +22,14 @@ export interface Register extends Pick<RegisterWords, 'place' | 'outlines'> {
   chosenId: Ref<string | null>
   chosen: ComputedRef<RegisterLine | null>
   sums: ComputedRef<RegisterSums>
-  sumWords: ComputedRef<{ words: string; hectares: string; litres: string; mass: string } | null>
+  sumWords: ComputedRef<SumWords | null>
   /** Message that heads the checks column. */
   headWords: ComputedRef<string>
 }
 
 /** The register page: the rows of a choice page by page, the chosen one with its checks, and the totals of all that was found. */
 export function useRegister(choice: () => RegisterChoice): Register {
-  const { t } = useI18n()
   const session = useSession()
-  const preferences = usePreferences()
   const farmId = computed(() => session.farmId)
   const rows = useRecords(farmId, () => ({ ...choice().filter, sort: choice().sort, limit: 50 }))
   const totals = useRegisterTotals(farmId, () => choice().filter)
@@ -56,19 +52,8 @@ export function useRegister(choice: () => RegisterChoice): Register {
     const all = totals.data.value
     return all === undefined ? sumRegisterRows(items.value) : { ...all, signed: all.records }
   })
-  const sumWords = computed(() => {
-    const { signed, withdrawn, areaHa, totalL, totalKg } = sums.value
-    if (items.value.length === 0) return null
-    const number = (count: number): string => formatNumber(count, { digits: 0 }, preferences.language)
-    const parts = [t('register.sum.signed', { number: number(signed) }, signed)]
-    if (withdrawn > 0) parts.push(t('register.sum.withdrawn', { number: number(withdrawn) }, withdrawn))
-    return {
-      words: parts.join(', '),
-      hectares: formatNumber(areaHa, { digits: 2 }, preferences.language),
-      litres: formatVolumeL(totalL, preferences.language, 0),
-      mass: Number(totalKg) === 0 ? '' : t('register.kilogramsUnit', { value: formatNumber(totalKg, { digits: 0 }, preferences.language) }),
-    }
-  })
+  const { wordsOf } = useSumWords()
+  const sumWords = computed(() => (items.value.length === 0 ? null : wordsOf(sums.value)))
 
   return {
     rows, record, lines, ready, found: computed(() => totals.data.value?.found ?? null), place, outlines, chosenId, chosen, sums, sumWords,

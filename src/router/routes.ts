@@ -49,6 +49,7 @@ export const routes: RouteRecordRaw[] = [
   { path: '/farm/sprayers', name: 'farm-sprayers', component: () => withWords(() => import('../views/farm/FarmSprayersView.vue')), meta: { place: 'farm', roles: FARM_PEOPLE } },
   { path: '/farm/sprayers/:id', name: 'sprayer', component: () => withWords(() => import('../views/farm/SprayerView.vue')), props: true, meta: { place: 'farm', roles: FARM_PEOPLE } },
   { path: '/farm/grants', name: 'farm-grants', component: () => withWords(() => import('../views/farm/FarmGrantsView.vue')), meta: { place: 'farm', roles: ['owner'] } },
+  { path: '/farm/grants/:id', name: 'grant-sight', component: () => withWords(() => import('../views/farm/GrantSightView.vue')), props: true, meta: { place: 'farm', roles: ['owner'] } },
   { path: '/farm/journal', name: 'farm-journal', component: () => withWords(() => import('../views/farm/FarmJournalView.vue')), meta: { place: 'farm', roles: MANAGERS } },
   { path: '/start', name: 'start', component: () => withWords(() => import('../views/start/StartView.vue')), meta: { place: 'farm', roles: MANAGERS } },
   { path: '/farms/new', name: 'farm-new', component: () => withWords(() => import('../views/farm-new/FarmNewView.vue')), meta: { cover: true } },

@@ -148,6 +148,39 @@ describe('what a grant opens', () => {
   })
 })
 
+describe('what the owner sees of it', () => {
+  it('is row by row and figure by figure what the certifier is answered, and a look in the journal', async () => {
+    await owner.post(at('/records')).send(buildRecord(things)).expect(201)
+    const { id } = await ownGrant()
+    const ask = async (reader: Agent, path: string, query: object = {}) => (await reader.get(at(path)).query(query).expect(200)).body as { items: { season: number }[]; records: number; found: number }
+    const own = await ask(owner, '/records')
+    for (const query of [{}, { sort: 'number' }, { season: 2025 }, { state: 'draft' }]) {
+      const seen = await ask(owner, `/grants/${id}/records`, query)
+      expect(seen).toEqual(await ask(certifier, '/records', query))
+      expect(seen.items.length).toBeLessThan(own.items.length)
+    }
+    expect((await ask(owner, `/grants/${id}/records`)).items.map(({ season }) => season)).toEqual([2026])
+    expect(await ask(owner, `/grants/${id}/totals`)).toEqual(await ask(certifier, '/register/totals'))
+    expect((await ask(owner, `/grants/${id}/totals`)).found).toBeLessThan((await ask(owner, '/register/totals')).found)
+    const looks = async () => (await journalOf({ subject: id })).filter(({ action }) => action === 'grant.viewed')
+    expect(await looks()).toMatchObject([{ isOutsider: false, by: { name: expect.stringContaining('owner') }, facts: [{ name: 'seasons', value: '2026' }] }])
+    house.setNow('2026-06-16T23:00:00Z')
+    await ask(owner, `/grants/${id}/records`)
+    expect(await looks()).toHaveLength(2)
+  })
+
+  it('is nothing once the grant opens nothing, and not for who leads the season', async () => {
+    const other = await house.makeFarm()
+    const { body: grant } = await owner.post(at('/grants')).send(give({ certifierEmail: other.accounts.certifier.email })).expect(201)
+    const manager = await house.as(farm.accounts.manager)
+    expect((await manager.get(at(`/grants/${grant.id}/records`))).status).toBe(403)
+    expect((await (await house.as(other.accounts.owner)).get(at(`/grants/${grant.id}/records`))).status).toBe(404)
+    expect((await owner.get(at(`/grants/${uuidV7()}/records`))).status).toBe(404)
+    await owner.post(at(`/grants/${grant.id}/end`)).send({ revision: grant.revision, password: PASSWORD }).expect(200)
+    expect((await owner.get(at(`/grants/${grant.id}/records`)).expect(409)).body.code).toBe('grant.ended')
+  })
+})
+
 describe('the end of a grant', () => {
   it('acts on the next request, and what was drawn before it is not delivered', async () => {
     const other = await house.makeFarm()

@@ -47,7 +47,7 @@ export function readSheet(services: Services, actor: FarmActor, { from, to }: Sh
     return {
       today: at.today, from, to,
       jobs: jobs.filter(({ earliestOn, latestOn, plannedOn, done }) => meets(earliestOn, latestOn) || meets(plannedOn, plannedOn) || (done !== null && meets(done.on, done.on))),
-      works: works.filter(({ on, pickFrom }) => meets(on, on) || (pickFrom !== null && meets(on, addDays(pickFrom, -1)))).map(({ materialIds: _ids, ...work }) => work),
+      works: works.filter(({ on, pickFrom }) => meets(on, on) || (pickFrom !== null && meets(on, addDays(pickFrom, -1)))).map(({ materialIds: _ids, isWithdrawn: _state, ...work }) => work),
       harvests: plantings.filter(({ removedOn }) => removedOn === null)
         .flatMap(({ blockId, harvests }) => harvests.filter((harvest) => meets(harvest.from, harvest.to)).map((harvest) => ({ blockId, from: harvest.from, to: harvest.to }))),
     }

@@ -55,7 +55,7 @@ export async function readJobs(manager: EntityManager, at: RoundsAt, only: { ste
   // A record that was opened from a job does it on whatever day.
   const days = [...steps.map(({ firstOn, earlyDays }) => addDays(firstOn, -earlyDays)), ...links.map(({ sort_at }) => civilDateIn(at.zone, sort_at.toISOString()))]
   const firstDay = days.sort()[0] ?? today
-  const works = await readWorks(manager, at, { from: firstDay, to: today })
+  const works = await readWorks(manager, at, { from: firstDay, to: today, withWithdrawn: true })
   const people = new Map(skippers.map(({ id, name }) => [id, name]))
   const jobs = steps.flatMap((step) => {
     const plan = plans.find(({ id }) => id === step.planId)
@@ -75,7 +75,7 @@ function jobsOn(ground: StepGround, today: string): Job[] {
   const { step, plan, block, works, decisions, links } = ground
   return jobsOfBlock({
     rhythm: step,
-    works: works.map(({ recordId, on }) => ({ recordId, on, number: links.find(({ record_id }) => record_id === recordId)?.number ?? null })),
+    works: works.map(({ recordId, on, isWithdrawn }) => ({ recordId, on, isWithdrawn, number: links.find(({ record_id }) => record_id === recordId)?.number ?? null })),
     decisions: decisions.map(({ number, plannedOn, skippedAt }) => ({ number, plannedOn, skipped: skippedAt !== null })),
     today,
     isClosed: plan.endedAt !== null || block.endedOn !== null,

@@ -14,6 +14,18 @@ export const grants = {
   taken: '{day}, season {season}, up to entry {seq}',
   change: 'Change',
   end: 'End now',
+  see: 'See what they see',
+  seen: {
+    title: 'Register, as {who} sees it',
+    band: 'As {who} sees it',
+    bandText: 'Season {seasons}, until {day}. Read only: this is what the server answers them now. That you looked stands in the journal.',
+    back: 'Back to the grants',
+    season: 'Season',
+    every: 'every season granted',
+    failed: 'What they see could not be read.',
+    empty: 'They see no record.',
+    emptyText: 'Nothing was signed in the seasons that are granted.',
+  },
   of: '{act}, {who}',
   form: {
     giveTitle: 'Grant seasons to a certifier',

@@ -30,7 +30,7 @@ export const journal = {
     },
     paper: { added: 'Wrote down a person’s training or licence', changed: 'Changed a person’s training or licence', ended: 'Took a person’s training or licence out of the list' },
     phone: { enrolled: 'Made a phone the farm’s', revoked: 'Took a phone away from the farm' },
-    grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant' },
+    grant: { given: 'Granted seasons to a certifier', changed: 'Changed a grant', ended: 'Ended a grant', viewed: 'Looked at what a certifier sees' },
     plan: { created: 'Made a season plan', updated: 'Changed a season plan', ended: 'Ended a season plan', reopened: 'Took the end of a season plan back' },
     job: { moved: 'Moved a job', skipped: 'Skipped a job', unskipped: 'Took the skip of a job back' },
     invitation: { sent: 'Invited somebody', resent: 'Sent an invitation again', withdrawn: 'Took an invitation back', taken: 'Took an invitation and joined the farm' },

@@ -14,6 +14,18 @@ export const grants: Messages['grants'] = {
   notTaken: 'aún ninguno',
   taken: '{day}, campaña {season}, hasta la entrada {seq}',
   change: 'Cambiar',
+  see: 'Ver lo que ve',
+  seen: {
+    title: 'Libro de registros, como lo ve {who}',
+    band: 'Como lo ve {who}',
+    bandText: 'Campaña {seasons}, hasta el {day}. Solo lectura: es lo que el servidor le contesta ahora. Que usted lo miró queda en el diario.',
+    back: 'Volver a las concesiones',
+    season: 'Campaña',
+    every: 'todas las concedidas',
+    failed: 'No se pudo leer lo que ve.',
+    empty: 'No ve ningún registro.',
+    emptyText: 'No se firmó nada en las campañas concedidas.',
+  },
   end: 'Terminar ahora',
   of: '{act}, {who}',
   form: {

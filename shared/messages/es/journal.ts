@@ -31,7 +31,7 @@ export const journal: Messages['journal'] = {
     },
     paper: { added: 'Anotó la formación o licencia de una persona', changed: 'Cambió la formación o licencia de una persona', ended: 'Quitó de la lista la formación o licencia de una persona' },
     phone: { enrolled: 'Hizo de la finca un teléfono', revoked: 'Quitó un teléfono a la finca' },
-    grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión' },
+    grant: { given: 'Concedió campañas a una certificadora', changed: 'Cambió una concesión', ended: 'Terminó una concesión', viewed: 'Miró lo que ve una certificadora' },
     plan: { created: 'Hizo un plan de campaña', updated: 'Cambió un plan de campaña', ended: 'Terminó un plan de campaña', reopened: 'Retiró el fin de un plan de campaña' },
     job: { moved: 'Movió una tarea', skipped: 'Saltó una tarea', unskipped: 'Retiró el salto de una tarea' },
     invitation: { sent: 'Invitó a alguien', resent: 'Volvió a enviar una invitación', withdrawn: 'Retiró una invitación', taken: 'Aceptó una invitación y entró en la finca' },

@@ -8,6 +8,7 @@ import { fromDayNumber, toDayNumber } from '../../../shared/time/dayNumber.ts'
 const RHYTHM = { firstOn: '2026-06-01', lastOn: '2026-07-15', everyDays: 14, earlyDays: 2, lateDays: 4 }
 const round = (change: Partial<BlockRound> = {}): BlockRound => ({ rhythm: RHYTHM, works: [], decisions: [], today: '2026-05-20', isClosed: false, ...change })
 const work = (on: string, number: number | null = null, recordId = `r${on}`): RoundWork => ({ recordId, on, number })
+const takenBack = (on: string, number: number | null = null): RoundWork => ({ ...work(on, number, `w${on}`), isWithdrawn: true })
 const moved = (number: number, plannedOn: string): JobDecision => ({ number, plannedOn, skipped: false })
 const skipped = (number: number): JobDecision => ({ number, plannedOn: null, skipped: true })
 /** "1 due 2026-06-01": number, state and the day it was or is to be done. */
@@ -34,6 +35,15 @@ describe('the jobs of one block', () => {
       name: 'stay in their places when an earlier record is withdrawn', given: { today: '2026-06-30', works: [work('2026-06-16', 2)], decisions: [skipped(3)] },
       jobs: ['1 late 2026-06-01', '2 done 2026-06-16', '3 skipped 2026-06-30', '4 planned 2026-07-14'],
     },
+    {
+      name: 'stay in their places when a record that named none is withdrawn', given: { today: '2026-06-30', works: [takenBack('2026-06-01'), work('2026-06-15')], decisions: [skipped(3)] },
+      jobs: ['1 late 2026-06-01', '2 done 2026-06-15', '3 skipped 2026-06-29', '4 planned 2026-07-13'],
+    },
+    {
+      name: 'are done by the record written in the place of the withdrawn one', given: { today: '2026-06-30', works: [takenBack('2026-06-01'), work('2026-06-02', null, 'again'), work('2026-06-15', null, 'b')], decisions: [moved(3, '2026-07-01')] },
+      jobs: ['1 done 2026-06-02', '2 done 2026-06-15', '3 due 2026-07-01', '4 planned 2026-07-15'],
+    },
+    { name: 'are done by the record opened anew from them', given: { today: '2026-06-20', works: [takenBack('2026-06-01', 1), work('2026-06-14', 1, 'again')] }, jobs: ['1 done 2026-06-14', '2 planned 2026-06-28', '3 planned 2026-07-12'] },
     { name: 'are only those done and skipped once nothing is to be done any more', given: { today: '2026-06-20', isClosed: true, works: [work('2026-06-02')], decisions: [skipped(2)] }, jobs: ['1 done 2026-06-02', '2 skipped 2026-06-16'] },
     { name: 'that are late stay so after the last day', given: { today: '2026-08-01', works: ['2026-06-01', '2026-06-15', '2026-06-29'].map((on) => work(on)) }, jobs: ['1 done 2026-06-01', '2 done 2026-06-15', '3 done 2026-06-29', '4 late 2026-07-13'] },
   ])('$name', ({ given, jobs }) => { expect(lines(given)).toEqual(jobs) })
@@ -90,6 +100,23 @@ describe('whatever is done, moved and skipped', () => {
       const open = jobsOfBlock(plain).filter(({ done }) => done === null)
       for (const job of open.slice(1)) expect(job.state).toBe('planned')
     }))
+  })
+
+  it('taking a record back leaves every other record on its job, and so every decision on its own', () => {
+    let others = 0
+    fc.assert(fc.property(aRound, fc.nat(7), (given, which) => {
+      const numbers = given.works.flatMap(({ number }) => number ?? [])
+      fc.pre(given.works.length > 0 && new Set(numbers).size === numbers.length)
+      const gone = given.works[which % given.works.length]
+      const after = jobsOfBlock({ ...given, works: given.works.map((each) => (each === gone ? { ...each, isWithdrawn: true } : each)) })
+      for (const { number, done } of jobsOfBlock(given)) {
+        if (done === null || done.recordId === gone?.recordId) continue
+        others += 1
+        expect(after.find((job) => job.done?.recordId === done.recordId)?.number).toBe(number)
+      }
+      expect(after.flatMap(({ done }) => done?.recordId ?? [])).not.toContain(gone?.recordId)
+    }))
+    expect(others).toBeGreaterThan(20)
   })
 
   it('the same facts in another order make the same jobs', () => {
