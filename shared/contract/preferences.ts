@@ -14,5 +14,7 @@ export const preferencesSchema = z.strictObject({
   units: z.enum(UNIT_SYSTEMS).optional(),
   /** Day, or dark for the cab before sunrise. */
   light: z.enum(['day', 'dawn']).optional(),
+  /** The morning letter of jobs due and late on farms that one leads: written unless this says `off`. */
+  jobsByMail: z.enum(['on', 'off']).optional(),
 })
 export type Preferences = z.infer<typeof preferencesSchema>

@@ -37,8 +37,24 @@ it('tells those who lead of a day once, from five in the morning on the farm, an
   expect((await letters()).at(-1)?.params).toMatchObject({ dueCount: 0, lateCount: 1, late: [{ preparation: 'Nettle ferment', blocks: 'B1' }] })
 })
 
+it('writes to nobody who chose on their own page to be left alone, and says in the letter where', async () => {
+  const owner = await house.as(farm.accounts.owner)
+  const choose = async (jobsByMail: 'on' | 'off') => {
+    const { body } = await owner.get('/api/session').expect(200)
+    await owner.patch('/api/me').send({ revision: body.user.revision, preferences: { jobsByMail } }).expect(200)
+  }
+  await choose('off')
+  expect(await at('2026-06-21T12:00:00Z')).toEqual({ farms: 1, letters: 1 })
+  expect((await letters()).at(-1)?.to_email).toBe(farm.accounts.manager.email)
+  const [letter] = (await house.mailTo(farm.accounts.manager.email)).filter(({ subject }) => subject.includes('late'))
+  expect(letter?.text).toContain('http://127.0.0.1:4310/me')
+  await choose('on')
+  expect(await at('2026-06-22T12:00:00Z')).toEqual({ farms: 1, letters: 2 })
+  await owner.patch('/api/me').send({ revision: 3, preferences: { jobsByMail: 'sometimes' } }).expect(422)
+})
+
 it('tells of a day once, though two processes look at the same time', async () => {
-  house.setNow('2026-06-20T13:00:00Z')
+  house.setNow('2026-06-23T13:00:00Z')
   const both = await Promise.all([mailJobsDue(house.services), mailJobsDue(house.services)])
   expect(both.map((counts) => counts.letters).sort()).toEqual([0, 2])
 })

@@ -11,15 +11,15 @@ import { isLetterName, LETTER_KINDS } from './letters/letterKinds.ts'
 /** A letter of the outbox as it goes out. @throws {RangeError} for a kind or content that this version does not know. */
 export function writeLetter({ config }: Pick<Services, 'config'>, letter: Letter): OutgoingMail {
   const { language } = letter
-  const say: Say = (id, params = {}) => renderMessage(language, { id, params })
-  const { action, ...text } = wordsOf(letter, say)
   const address = publicAddress(config)
+  const say: Say = (id, params = {}) => renderMessage(language, { id, params: { address, ...params } })
+  const { action, ...text } = wordsOf(letter, say)
   const laidOut: LaidOut = {
     ...text,
     language,
     greeting: letter.toName === null ? say('mail.greeting') : say('mail.greetingTo', { name: letter.toName }),
     ...(action && { action: { label: action.label, url: `${address}${action.path}` } }),
-    foot: [say('mail.foot', { address }), ...(letter.replyEmail === null ? [say('mail.noReply')] : [])],
+    foot: [say('mail.foot'), ...(letter.replyEmail === null ? [say('mail.noReply')] : [])],
   }
   return {
     messageId: letter.messageId, to: mailboxOf(letter.toEmail, letter.toName), replyTo: letter.replyEmail === null ? null : mailboxOf(letter.replyEmail, letter.replyName),

@@ -13,7 +13,8 @@ import { readJobs } from './readJobs.ts'
 const FROM = '05:00'
 
 /**
- * Tells those who lead each farm, once a day from five in the morning there, of the jobs that are due and late. Nothing due, no letter.
+ * Tells those who lead each farm and did not choose otherwise, once a day from five in the morning there, of the jobs that are due and late.
+ * Nothing due, no letter.
  * Safe to run twice, and in two processes: the farm's day is marked in the transaction that queues its letters.
  * @returns how many farms had a letter, and how many letters.
  */
@@ -54,9 +55,9 @@ function tellFarm(services: Pick<Services, 'clock' | 'config' | 'database'>, { f
 async function readLeaders(manager: EntityManager, farmId: string): Promise<(Pick<Account, 'name' | 'language'> & { email: string })[]> {
   const leaders = await manager.find(Person, { select: { accountId: true }, where: { farmId, active: true, role: In(['owner', 'manager']) } })
   const ids = leaders.flatMap(({ accountId }) => accountId ?? [])
-  const accounts = await manager.find(Account, { select: { email: true, name: true, language: true }, where: { id: In(ids), deactivatedAt: IsNull() }, order: { email: 'ASC' } })
+  const accounts = await manager.find(Account, { select: { email: true, name: true, language: true, preferences: true }, where: { id: In(ids), deactivatedAt: IsNull() }, order: { email: 'ASC' } })
   // Whoever has no address signs in on a phone of the farm, and sees the jobs there.
-  return accounts.flatMap(({ email, name, language }) => (email === null ? [] : [{ email, name, language }]))
+  return accounts.flatMap(({ email, name, language, preferences }) => (email === null || preferences.jobsByMail === 'off' ? [] : [{ email, name, language }]))
 }
 
 /** A preparation and the blocks it is due on, in the order of their codes. */

@@ -29,7 +29,7 @@ export const mail = {
     late: 'Late: {preparation}',
     due: 'Due: {preparation}',
     action: 'Open the season sheet',
-    why: 'You get this because you lead the farm. It comes once a day, and not at all when nothing is due.',
+    why: 'You get this because you lead the farm. It comes once a day, and not at all when nothing is due. You stop it on your own page: {address}/me',
   },
   passwordReset: {
     subject: 'A new password for the register',

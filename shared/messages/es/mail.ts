@@ -29,7 +29,7 @@ export const mail = {
     late: 'Atrasada: {preparation}',
     due: 'Pendiente: {preparation}',
     action: 'Abrir la hoja de campaña',
-    why: 'Lo recibe porque dirige la finca. Llega una vez al día, y no llega cuando no hay nada pendiente.',
+    why: 'Lo recibe porque dirige la finca. Llega una vez al día, y no llega cuando no hay nada pendiente. Puede dejar de recibirlo en su página: {address}/me',
   },
   passwordReset: {
     subject: 'Contraseña nueva para el registro',

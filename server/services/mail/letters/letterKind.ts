@@ -14,7 +14,7 @@ export interface LetterText {
   closing?: string[]
 }
 
-/** Words of the letter's language; see `renderMessage` for what happens to params. */
+/** Words of the letter's language; see `renderMessage` for what happens to params. `{address}` is where the register is reached. */
 export type Say = (id: MessageId, params?: Record<string, string | number>) => string
 
 /** One kind of letter. `params` is all it may say; `secrets` names those that are blanked once it is out, or given up. */
