@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import type { APIRequestContext, Browser, Page } from '@playwright/test'
 import { translate } from '../../shared/messages/translate.ts'
 import { OURS, PASSWORD, signInTo } from './support/demoFarm.ts'
+import { linkTo } from './support/letters.ts'
 import { expect, test } from './support/test.ts'
 import { unique } from './support/unique.ts'
 import { say } from './support/words.ts'
@@ -15,17 +16,6 @@ async function makeFarm(request: APIRequestContext): Promise<{ id: string; name:
   const farm = { id: randomUUID(), name: `Zz ${unique('farm ')}` }
   expect((await request.post('/api/farms', { headers: OURS, data: { ...farm, zone: 'America/Los_Angeles', seasonStart: '03-01' } })).status()).toBe(201)
   return farm
-}
-
-/** The path of the link in the newest letter to an e-mail, as the stand-in for a mail server kept it. */
-async function linkTo(request: APIRequestContext, email: string, subject: string): Promise<string> {
-  let link = ''
-  await expect.poll(async () => {
-    const { items } = (await (await request.get('/dev/mail', { headers: { Accept: 'application/json' } })).json()) as { items: { to: string[]; subject: string; text: string }[] }
-    link = /https?:\/\/[^/\s]+(\/(?:welcome|reset)\/[\w-]+)/.exec(items.find((item) => item.to.includes(email) && item.subject === subject)?.text ?? '')?.[1] ?? ''
-    return link
-  }).not.toBe('')
-  return link
 }
 
 async function openStranger(browser: Browser): Promise<Page> {
