@@ -9,6 +9,8 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
+          // Nothing here replaces a module: each is read once a worker, not once a file.
+          isolate: false,
           include: ['tests/{unit,reference,house,cli}/**/*.test.ts'],
           exclude: ['tests/unit/client/**'],
           setupFiles: ['shared/messages/everyLanguage.ts'],
@@ -32,6 +34,7 @@ export default defineConfig({
         test: {
           name: 'api',
           environment: 'node',
+          isolate: false,
           include: ['tests/api/**/*.test.ts'],
           globalSetup: ['tests/support/globalSetup.ts'],
           setupFiles: ['shared/messages/everyLanguage.ts'],

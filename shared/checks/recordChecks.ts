@@ -8,6 +8,7 @@ import { judgePreHarvest, judgeReEntry } from './judgeHolds.ts'
 import { judgeLabelRate } from './judgeLabelRate.ts'
 import { judgeLabelStrength } from './judgeLabelStrength.ts'
 import { judgeLotLeft } from './judgeLotLeft.ts'
+import { judgeLotThere } from './judgeLotThere.ts'
 import { judgeLotUse } from './judgeLotUse.ts'
 import { judgeStatus } from './judgeStatus.ts'
 import { judgeWind } from './judgeWind.ts'
@@ -33,6 +34,7 @@ function checksOfComponent(facts: RecordFacts, index: number): (Check | null)[] 
     judgeLabelRate(material, sheet, { share: most.share, code }, about),
     judgeLabelStrength(material, sheet, facts.sheet, about),
     judgeStatus(material, about),
+    lot ? judgeLotThere(facts, lot, material, about) : null,
     lot
       ? judgeLotUse(facts, lot, material, about)
       : buildCheck({

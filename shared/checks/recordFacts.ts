@@ -23,7 +23,7 @@ export interface FactContent {
 }
 
 export type FactMaterial = Pick<Material, 'id' | 'name' | 'organicStatus' | 'statusBasis' | 'label'>
-export type FactLot = Pick<Lot, 'id' | 'code' | 'origin' | 'expiresOn' | 'left'>
+export type FactLot = Pick<Lot, 'id' | 'code' | 'origin' | 'receivedOn' | 'expiresOn' | 'left'>
 
 /** Everything a record is judged by, as it stands at `now`. */
 export interface RecordFacts {

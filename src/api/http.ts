@@ -51,7 +51,8 @@ async function answered<Schema extends z.ZodType>(path: string, schema: Schema, 
 }
 
 async function send(method: Method, path: string, body: unknown): Promise<Response> {
-  const headers: Record<string, string> = { Accept: 'application/json' }
+  // The page's language, which a person may have chosen against the browser's.
+  const headers: Record<string, string> = { 'Accept': 'application/json', 'Accept-Language': document.documentElement.lang }
   if (method !== 'GET') headers['X-Requested-With'] = 'drenchleaf'
   if (body !== undefined) headers['Content-Type'] = 'application/json'
   const init: RequestInit = { method, headers, credentials: 'same-origin', signal: AbortSignal.timeout(PATIENCE_MS) }

@@ -16,6 +16,7 @@ export function sendForm(path: string, form: FormData, onProgress: (share: numbe
     request.onabort = fail
     request.open('POST', `/api${path}`)
     request.setRequestHeader('Accept', 'application/json')
+    request.setRequestHeader('Accept-Language', document.documentElement.lang)
     request.setRequestHeader('X-Requested-With', 'drenchleaf')
     request.send(form)
   })

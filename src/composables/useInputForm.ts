@@ -20,6 +20,8 @@ export interface InputFormOptions<Kind extends InputKind> {
   /** The thing the command is about, where that is not what is being made: the lot of a count. */
   aboutId?: () => string
   body: (id: string) => unknown
+  /** Where another may have changed it meanwhile: puts both sides together, and holds the form back while something has to be chosen. */
+  merge?: { meet: (error: unknown) => boolean; clashes: Ref<readonly unknown[]> }
   /** Sentence for the reader once the server has it. */
   done: (answer: CommandAnswers[Kind]) => string
 }
@@ -48,14 +50,17 @@ export function useInputForm<Kind extends InputKind>(options: InputFormOptions<K
   const task = useTask((command: Command<Kind>) => submit<Kind>(command))
 
   async function save(): Promise<boolean> {
-    if (task.running.value) return false
+    if (task.running.value || (options.merge?.clashes.value.length ?? 0) > 0) return false
     const body = options.body(id)
     own.value = check(options.schema, body)
     task.error.value = null
     if (Object.keys(own.value).length > 0) return false
     const command = { kind: options.kind, farmId: session.farmId, id: options.aboutId?.() ?? id, body } as Command<Kind>
     const sent = await task.run(command)
-    if (sent === undefined) return false
+    if (sent === undefined) {
+      if (options.merge?.meet(task.error.value) === true) task.error.value = null
+      return false
+    }
     toast.done(sent.state === 'sent' ? options.done(sent.answer) : t('inputs.kept'))
     return true
   }

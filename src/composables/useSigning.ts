@@ -77,6 +77,7 @@ export function useSigning({ draft, stops, sign }: SigningOptions): Signing {
     const error = task.error.value
     if (error === null) return task.result.value === 'kept' ? t('records.sign.kept') : ''
     if (error instanceof ApiError && error.problem.code === 'session.wrong_password') return t('records.sign.wrongPassword')
+    if (error instanceof ApiError && error.problem.code === 'session.wrong_pin') return t('records.sign.wrongPin')
     if (error instanceof ApiError && error.problem.code === 'stale') return t('records.sign.stale')
     if (error instanceof FilesLeft) return t('records.filesNotSent', { count: error.count })
     const first = error instanceof ApiError ? error.problem.errors[0]?.message : undefined

@@ -42,6 +42,8 @@ export interface Today {
   outlines: ComputedRef<ReadonlyMap<string, Boundary>>
   inputs: Inputs
   newest: ReturnType<typeof useRecords>
+  /** Records and the farm whose day it is have been read: without them nothing can be said to be none. */
+  isRead: ComputedRef<boolean>
   /** Everything the day line speaks of has been read. */
   ready: ComputedRef<boolean>
 }
@@ -82,6 +84,8 @@ export function useToday(): Today {
     return { block, last: { method: row.method, preparation: line.preparation, day: line.day } }
   }))
 
+  const isRead = computed(() => place.value !== null && newest.data.value !== undefined && started.data.value !== undefined)
+
   const sentences = computed(() => {
     const lots = endingLots.value
     return dayLine({
@@ -104,7 +108,8 @@ export function useToday(): Today {
     openCount: computed(() => open.value.own.length + open.value.others.length),
     doneLines, endingLots, blockLines, outlines, inputs, newest,
     rowsRead: computed(() => rowsOf(newest).length),
-    ready: computed(() => place.value !== null && newest.data.value !== undefined && started.data.value !== undefined && inputs.ready.value),
+    isRead,
+    ready: computed(() => isRead.value && inputs.ready.value),
   }
 }
 

@@ -1,6 +1,7 @@
 import { createRouter, createWebHistory } from 'vue-router'
 import { overlaysSettled, watchOverlays } from '../plugins/overlayHistory.ts'
 import { openNewBuild } from '../stores/newBuild.ts'
+import { confirmAccess } from './confirmAccess.ts'
 import { guard } from './guard.ts'
 import { routes } from './routes.ts'
 
@@ -16,4 +17,5 @@ export const router = createRouter({
 
 router.beforeEach(overlaysSettled)
 router.beforeEach(guard)
+confirmAccess(router)
 router.onError((_error, to) => { void openNewBuild(to.fullPath) })

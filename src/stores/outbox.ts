@@ -55,6 +55,8 @@ export const useOutbox = defineStore('outbox', () => {
     } catch (error) {
       if (mustWait(error)) return { state: 'kept' }
       await device.outbox.delete(item.key)
+      // Somebody else was first: the page behind shows theirs from now on.
+      if (error instanceof ApiError && error.problem.code === 'stale') refreshAfter(command)
       throw error
     } finally {
       inHand.delete(item.key)

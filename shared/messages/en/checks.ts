@@ -62,6 +62,10 @@ export const checks = {
     past: '{material}: past its use, {expiresOn}.',
     within: '{material}: use by {expiresOn}.',
   },
+  lotThere: {
+    title: 'Lot {lot} was not there yet',
+    later: '{material}: used on {usedOn}, and the lot came on {receivedOn}. One of the two days, or the lot, is wrong.',
+  },
   lotLeft: {
     title: 'Lot {lot}',
     enough: 'Takes {taken} of {left}\u00A0{unit}, leaves {rest}.',

@@ -44,7 +44,7 @@ export const farm = {
     seasonStart: 'The season begins on',
     seasonHint: 'A season is named by the year it begins in.',
     save: 'Make the farm',
-    none: 'No farm is open to you yet. Make your own, or ask the owner of one to let you in.',
+    none: 'No farm is open to you. Make your own, or ask the owner of one to let you in. Where one was open to you before, its owner says why it is not.',
   },
   myFarms: {
     title: 'My farms',

@@ -1,6 +1,5 @@
 /** Words of a block's page: its season, land, outlines, what grows there and what else is done. */
 export const growing = {
-  retry: 'Somebody changed this since you opened it. What you wrote stands here still; close it to see theirs.',
   notKnown: 'not known',
   change: 'Change',
   season: {

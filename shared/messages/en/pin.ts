@@ -11,7 +11,7 @@ export const pin = {
   byPin: 'Sign in with a PIN',
   nobody: 'Nobody has a PIN yet. The owner sets one on the people’s page.',
   pinNeeded: 'Write your six figures.',
-  wrong: 'Name and PIN do not match. Try again.',
+  wrong: 'Name and PIN do not match. Try again; if it stays so, ask the owner whether you are still among the farm’s people.',
   code: 'Code of the second factor',
   codeHint: 'Six figures from your authenticator, or a recovery code.',
   codeNeeded: 'Write the code.',

@@ -34,7 +34,7 @@ export const problems = {
   session: {
     wrong: 'E-mail and password do not match.',
     wrong_password: 'The password does not match. Nothing was signed or changed, and nothing was lost.',
-    wrong_pin: 'Not signed: the PIN does not match. Nothing was lost.',
+    wrong_pin: 'The PIN does not match. Nothing was signed or changed, and nothing was lost.',
     code_needed: 'Write the code of your second factor as well.',
     code_wrong: 'This code does not match, or it was used already. Wait for the next one.',
     factor_needed: 'This farm asks a second factor of you. Set it up on your own page first.',

@@ -210,6 +210,7 @@ export const records = {
     needMix: 'What went into the tank? Finish the mix under 1.',
     lotShort: 'It holds less than this takes. Correct its count under Inputs, or choose another lot.',
     wrongPassword: 'Not signed: the password does not match. Nothing was lost.',
+    wrongPin: 'Not signed: the PIN does not match. Nothing was lost.',
     notSigned: 'Not signed: {reason} Nothing was lost.',
     notStarted: 'Not started: {reason} Nothing was lost.',
     kept: 'No signal: it is kept on this device and goes out by itself. Sign it when there is signal; its number comes then.',

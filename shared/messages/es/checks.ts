@@ -62,6 +62,10 @@ export const checks = {
     past: '{material}: pasado de fecha, {expiresOn}.',
     within: '{material}: usar hasta el {expiresOn}.',
   },
+  lotThere: {
+    title: 'El lote {lot} aún no estaba',
+    later: '{material}: usado el {usedOn}, y el lote llegó el {receivedOn}. Uno de los dos días, o el lote, no es el que fue.',
+  },
   lotLeft: {
     title: 'Lote {lot}',
     enough: 'Toma {taken} de {left}\u00A0{unit}; quedan {rest}.',

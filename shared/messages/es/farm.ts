@@ -44,7 +44,7 @@ export const farm = {
     seasonStart: 'La campaña empieza el',
     seasonHint: 'Una campaña lleva el nombre del año en que empieza.',
     save: 'Crear la finca',
-    none: 'Aún no tiene acceso a ninguna finca. Cree la suya o pida acceso al titular de una.',
+    none: 'No tiene acceso a ninguna finca. Cree la suya o pida acceso al titular de una. Si antes tenía acceso a alguna, su titular le dirá por qué ya no.',
   },
   myFarms: {
     title: 'Mis fincas',

@@ -2,7 +2,6 @@ import type { Screens } from '../en.ts'
 
 /** Palabras de la página de una parcela: su campaña, tierra, contornos, lo que crece y lo demás que se hace. */
 export const growing: Screens['growing'] = {
-  retry: 'Alguien cambió esto desde que lo abrió. Lo que escribió sigue aquí; ciérrelo para ver lo de la otra persona.',
   notKnown: 'no se sabe',
   change: 'Cambiar',
   season: {

@@ -13,7 +13,7 @@ export const pin: Messages['pin'] = {
   byPin: 'Entrar con PIN',
   nobody: 'Nadie tiene PIN todavía. El titular lo pone en la página de personas.',
   pinNeeded: 'Escriba sus seis cifras.',
-  wrong: 'El nombre y el PIN no coinciden. Inténtelo otra vez.',
+  wrong: 'El nombre y el PIN no coinciden. Inténtelo otra vez; si sigue así, pregunte al titular si usted sigue entre las personas de la finca.',
   code: 'Código del segundo factor',
   codeHint: 'Seis cifras de su autenticador, o un código de recuperación.',
   codeNeeded: 'Escriba el código.',

@@ -34,7 +34,7 @@ export const problems = {
   session: {
     wrong: 'El correo y la contraseña no coinciden.',
     wrong_password: 'La contraseña no coincide. No se ha firmado ni cambiado nada, y no se ha perdido nada.',
-    wrong_pin: 'Sin firmar: el PIN no coincide. No se ha perdido nada.',
+    wrong_pin: 'El PIN no coincide. No se ha firmado ni cambiado nada, y no se ha perdido nada.',
     code_needed: 'Escriba también el código de su segundo factor.',
     code_wrong: 'Este código no coincide o ya se usó. Espere al siguiente.',
     factor_needed: 'Esta finca le pide un segundo factor. Póngalo primero en su propia página.',

@@ -210,6 +210,7 @@ export const records = {
     needMix: '¿Qué entró en el tanque? Termine la mezcla en el paso 1.',
     lotShort: 'Tiene menos de lo que esto toma. Corrija su recuento en Insumos o elija otro lote.',
     wrongPassword: 'Sin firmar: la contraseña no coincide. No se ha perdido nada.',
+    wrongPin: 'Sin firmar: el PIN no coincide. No se ha perdido nada.',
     notSigned: 'Sin firmar: {reason} No se ha perdido nada.',
     notStarted: 'Sin empezar: {reason} No se ha perdido nada.',
     kept: 'Sin señal: queda en este dispositivo y sale solo. Fírmelo cuando haya señal; entonces llega su número.',

@@ -12,7 +12,7 @@ export const buildMaterial = (over: Partial<FactMaterial> = {}): FactMaterial =>
 })
 
 export const buildLot = (over: Partial<FactLot> = {}): FactLot => ({
-  id: 'l1', code: '26-018', origin: 'bought', expiresOn: null, left: { value: '11.4', unit: 'L' }, ...over,
+  id: 'l1', code: '26-018', origin: 'bought', receivedOn: '2026-03-02', expiresOn: null, left: { value: '11.4', unit: 'L' }, ...over,
 })
 
 export const buildSheetComponent = (over: Partial<SheetComponent> = {}): SheetComponent => ({

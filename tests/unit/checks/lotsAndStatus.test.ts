@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { judgeLotLeft } from '../../../shared/checks/judgeLotLeft.ts'
+import { judgeLotThere } from '../../../shared/checks/judgeLotThere.ts'
 import { judgeLotUse } from '../../../shared/checks/judgeLotUse.ts'
 import { judgeStatus } from '../../../shared/checks/judgeStatus.ts'
 import { buildFacts, buildLabel, buildLot, buildMaterial, buildSheetComponent } from './buildFacts.ts'
@@ -40,6 +41,21 @@ describe('use by', () => {
 
   it('says nothing without a date', () => {
     expect(judgeLotUse(buildFacts(), buildLot(), labelled, 'component:0')).toBeNull()
+  })
+})
+
+describe('a lot that was not there yet', () => {
+  const startedAt = '2026-06-17T03:30:00Z' // 16 June on the farm
+  const facts = buildFacts({ content: { ...buildFacts().content, lines: [{ blockId: 'b1', startedAt, endedAt: null, amount: null }] } })
+
+  it('is a caution with both days', () => {
+    expect(judgeLotThere(facts, buildLot({ receivedOn: '2026-06-17' }), buildMaterial(), 'component:0')).toMatchObject({
+      code: 'lot.notThere', verdict: 'caution', rests: 'house', text: { params: { usedOn: '2026-06-16', receivedOn: '2026-06-17' } },
+    })
+  })
+
+  it.each(['2026-06-16', '2025-01-01'])('is none where it came on %s', (receivedOn) => {
+    expect(judgeLotThere(facts, buildLot({ receivedOn }), buildMaterial(), 'component:0')).toBeNull()
   })
 })
 
