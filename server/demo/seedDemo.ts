@@ -14,6 +14,7 @@ import { seedGround } from './seedGround.ts'
 import { seedNeighbour } from './seedNeighbour.ts'
 import { seedGrowing, seedRedrawn } from './seedGrowing.ts'
 import { seedInputs } from './seedInputs.ts'
+import { seedLetters } from './seedLetters.ts'
 import { seedPeople } from './seedPeople.ts'
 import { seedRecords } from './seedRecords.ts'
 import { seedCalibrations, seedSprayers } from './seedSprayers.ts'
@@ -31,6 +32,9 @@ const ACCOUNTS = {
   certifier: { email: 'certifier@demo.test', name: 'Mirel Achter' },
   neighbour: { email: 'neighbour@demo.test', name: 'Corin Vane' },
 }
+/** Who certifies the demo farm, and the last day they may read it. */
+const ORGANISATION = 'Oaklode Review'
+const grantedTo = (now: Date): string => new Date(now.getTime() + 90 * DAY_MS).toISOString().slice(0, 10)
 type AccountName = keyof typeof ACCOUNTS
 
 export interface Demo {
@@ -63,6 +67,7 @@ export async function seedDemo(services: Services, password: string): Promise<De
   await seedRecords(services, { manager, applicator, ruanId, blocks, sprayers, lots })
   await seedRounds(services, { manager, blocks, lots })
   await seedTaken(services, await actorOf(services, ids.certifier, farm.id))
+  await seedLetters(services, await actorOf(services, ids.owner, farm.id), { certifier: ACCOUNTS.certifier, organisation: ORGANISATION, endsOn: grantedTo(services.clock.now()) })
   await seedPeople(services, manager, { applicatorId: applicator.personId ?? '', ruanId })
   await seedRedrawn(services, manager, blocks.get('L1') ?? '')
   const neighbourFarmId = await seedNeighbour(past, ids.neighbour)
@@ -90,11 +95,10 @@ async function makeAccounts(services: Services, password: string, createdAt: Dat
 async function makePeople(services: Services, farmId: string, ids: Record<AccountName, string>, createdAt: Date): Promise<string> {
   const now = services.clock.now()
   const season = seasonOf(civilDateIn(DEMO_ZONE, now.toISOString()), '03-01')
-  const endsOn = new Date(now.getTime() + 90 * DAY_MS).toISOString().slice(0, 10)
   return services.database.inFarm({ farmId, seasons: null }, async (manager) => {
     await makePerson(manager, { farmId, name: ACCOUNTS.manager.name, role: 'manager', accountId: ids.manager, createdAt })
     await makePerson(manager, { farmId, name: ACCOUNTS.applicator.name, role: 'applicator', accountId: ids.applicator, createdAt })
-    await makeGrant(manager, { farmId, accountId: ids.certifier, organisation: 'Oaklode Review', seasons: [season], endsOn, createdAt })
+    await makeGrant(manager, { farmId, accountId: ids.certifier, organisation: ORGANISATION, seasons: [season], endsOn: grantedTo(now), createdAt })
     return makePerson(manager, { farmId, name: 'Ruan Teal', role: 'applicator', accountId: null, createdAt })
   })
 }

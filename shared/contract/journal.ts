@@ -2,7 +2,8 @@ import { z } from 'zod'
 import { JOURNAL_KINDS } from '../journal/journalActions.ts'
 import { civilDateSchema, idSchema, pageQuerySchema } from './common.ts'
 
-const filterSchema = z.strictObject({
+/** What the journal is filtered by; every part given must fit. */
+export const journalFilterSchema = z.strictObject({
   /** Who did it. */
   person: idSchema.optional(),
   kind: z.enum(JOURNAL_KINDS).optional(),
@@ -11,9 +12,9 @@ const filterSchema = z.strictObject({
   /** What it was about. */
   subject: idSchema.optional(),
 })
-export type JournalFilter = z.infer<typeof filterSchema>
-export const journalQuerySchema = pageQuerySchema.extend(filterSchema.shape)
-export const journalCsvQuerySchema = filterSchema.extend({ language: z.enum(['en', 'es']).optional() })
+export type JournalFilter = z.infer<typeof journalFilterSchema>
+export const journalQuerySchema = pageQuerySchema.extend(journalFilterSchema.shape)
+export const journalCsvQuerySchema = journalFilterSchema.extend({ language: z.enum(['en', 'es']).optional() })
 
 /** What an entry says beside the deed, by name. */
 export const journalFactSchema = z.object({

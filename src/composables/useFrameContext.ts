@@ -31,6 +31,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
   const frame: FrameContext = {
     farmName: computed(() => session.membership?.farmName ?? ''),
     season: computed(() => farm.data.value?.currentSeason ?? null),
+    practice: computed(() => farm.data.value?.practice === true),
     farms: computed(() => session.memberships.map((each) => ({ id: each.farmId, name: each.farmName }))),
     farmId: computed(() => session.farmId),
     sync,

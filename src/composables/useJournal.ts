@@ -1,7 +1,8 @@
 import { useInfiniteQuery } from '@tanstack/vue-query'
-import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import { computed, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
-import type { JournalEntry, JournalFilter } from '../../shared/contract/journal.ts'
+import { useRoute, useRouter } from 'vue-router'
+import { journalFilterSchema, type JournalEntry, type JournalFilter } from '../../shared/contract/journal.ts'
 import { JOURNAL_KINDS } from '../../shared/journal/journalActions.ts'
 import { journalApi } from '../api/journalApi.ts'
 import { usePreferences } from '../stores/preferences.ts'
@@ -10,6 +11,12 @@ import { usePeople } from './usePeople.ts'
 
 /** What is filtered by, as it stands in an address. */
 const chosenOf = (filter: JournalFilter): [string, string][] => Object.entries(filter).filter((pair): pair is [string, string] => pair[1] !== undefined)
+
+/** What an address asks for; what cannot be read of it is left out. */
+function readFilter(query: Record<string, unknown>): JournalFilter {
+  const read = (['person', 'kind', 'day', 'subject'] as const).map((name) => journalFilterSchema.safeParse({ [name]: query[name] }))
+  return Object.assign({}, ...read.map(({ data }) => Object.fromEntries(Object.entries(data ?? {}).filter(([, value]) => value !== undefined)))) as JournalFilter
+}
 
 interface Option { value: string; label: string }
 
@@ -29,7 +36,13 @@ export function useJournal(): Journal {
   const session = useSession()
   const preferences = usePreferences()
   const { data: people } = usePeople(() => session.farmId)
-  const filter = ref<JournalFilter>({})
+  const route = useRoute()
+  const router = useRouter()
+  /** Stands in the address, so that a page can lead to the deeds of its own thing. */
+  const filter = computed<JournalFilter>({
+    get: () => readFilter(route.query),
+    set: (wanted) => { void router.replace({ query: Object.fromEntries(chosenOf(wanted)) }) },
+  })
   const rows = useInfiniteQuery({
     queryKey: ['journal', computed(() => session.farmId), filter],
     enabled: () => session.farmId !== '',

@@ -1,4 +1,4 @@
-import { computed, reactive, ref, type ComputedRef, type Ref } from 'vue'
+import { computed, reactive, ref, watch, type ComputedRef, type Ref } from 'vue'
 import { createPlanSchema, updatePlanSchema, type SeasonPlan } from '../../shared/contract/seasonPlan.ts'
 import type { Method } from '../../shared/contract/recordContent.ts'
 import { useSession } from '../stores/session.ts'
@@ -6,6 +6,7 @@ import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
 import { numberOf } from './recordContent.ts'
 import { draftOfPlan, type ComponentDraft, type RecordDraft } from './recordDraft.ts'
+import { useKeptForm } from './useKeptForm.ts'
 import { useMessages } from './useMessages.ts'
 import { useSchemaErrors } from './useSchemaErrors.ts'
 import { useSubmit } from './useSubmit.ts'
@@ -25,8 +26,17 @@ export interface StepDraft {
   lateDays: string
 }
 
+/** A plan as typed; the id stays with it, so that sending twice makes one. */
+export interface PlanDraft { id: string; name: string; note: string; steps: StepDraft[] }
+
 export interface PlanForm {
-  draft: { name: string; note: string; steps: StepDraft[] }
+  draft: PlanDraft
+  /** False until the device has answered. */
+  ready: Ref<boolean>
+  /** It was begun earlier and is brought back. */
+  resumed: Ref<boolean>
+  /** Forgets what was typed. */
+  beginAnew: () => Promise<void>
   /** Path of the field, `steps.0.everyDays`, to its sentence. */
   errors: ComputedRef<Record<string, string>>
   /** Why it was not saved, where no field is to blame. */
@@ -39,6 +49,8 @@ export interface PlanForm {
   end: (reason: string) => Promise<boolean>
   reopen: () => Promise<boolean>
 }
+
+const copyOf = (typed: PlanDraft): PlanDraft => JSON.parse(JSON.stringify(typed)) as PlanDraft
 
 function emptyStep(): StepDraft {
   const { method, components, water } = draftOfPlan({ method: 'foliar', materialId: '', basis: { kind: 'ratio', parts: '20', reading: 'to' }, water: null })
@@ -61,8 +73,23 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
   const { submit } = useSubmit()
   const { problem } = useMessages()
   const schemaErrors = useSchemaErrors()
-  const id = was?.id ?? newId()
-  const draft = reactive<PlanForm['draft']>({ name: was?.name ?? '', note: was?.note ?? '', steps: was === null ? [emptyStep()] : was.steps.map(draftOfStep) })
+  const fresh: PlanDraft = { id: was?.id ?? newId(), name: was?.name ?? '', note: was?.note ?? '', steps: was === null ? [emptyStep()] : was.steps.map(draftOfStep) }
+  const draft = reactive<PlanDraft>(copyOf(fresh))
+  const kept = useKeptForm<PlanDraft>(fresh, {
+    // What was typed over another revision of the plan is not brought back.
+    farmId: computed(() => session.farmId), kind: 'plan', about: () => (was === null ? 'new' : `${was.id}@${was.revision}`), fresh: () => fresh,
+    isBegun: (typed) => JSON.stringify({ ...typed, id: '' }) !== JSON.stringify({ ...fresh, id: '' }),
+  })
+  let isTaking = false
+  function take(): void {
+    isTaking = true
+    Object.assign(draft, copyOf(kept.content.value))
+  }
+  watch(draft, () => {
+    if (!isTaking) kept.content.value = copyOf(draft)
+    isTaking = false
+  }, { deep: true })
+  watch(kept.ready, () => { if (kept.resumed.value) take() }, { immediate: true })
   const own = ref<Record<string, string>>({})
   const task = useTask((command: Parameters<typeof submit>[0]) => submit(command))
   const refused = computed(() => fieldErrors(task.error.value))
@@ -72,21 +99,28 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
     if (task.running.value) return null
     task.error.value = null
     const content = { name: draft.name, note: draft.note.trim() === '' ? null : draft.note, steps: draft.steps.map(stepBody) }
+    const { id } = draft
     const body = was === null ? { id, ...content } : { revision, ...content }
     own.value = schemaErrors(was === null ? createPlanSchema : updatePlanSchema, body)
     if (Object.keys(own.value).length > 0) return null
-    return (await task.run({ kind: was === null ? 'plan.create' : 'plan.update', farmId: session.farmId, id, body } as Parameters<typeof submit>[0]))?.state ?? null
+    const state = (await task.run({ kind: was === null ? 'plan.create' : 'plan.update', farmId: session.farmId, id, body } as Parameters<typeof submit>[0]))?.state ?? null
+    if (state !== null) await kept.discard()
+    return state
   }
   const act = async (command: Parameters<typeof submit>[0]): Promise<boolean> => (await task.run(command)) !== undefined
 
   return {
-    draft, busy: task.running, save,
+    draft, busy: task.running, save, ready: kept.ready, resumed: kept.resumed,
+    beginAnew: async () => {
+      await kept.discard()
+      take()
+    },
     errors: computed(() => ({ ...refused.value, ...own.value })),
     refusal: computed(() => (task.error.value === null || Object.keys(refused.value).length > 0 ? '' : problem(task.error.value))),
     addStep: () => { draft.steps.push({ ...emptyStep(), blockIds: [...(draft.steps.at(-1)?.blockIds ?? [])] }) },
     removeStep: (index) => { draft.steps.splice(index, 1) },
-    end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id, body: { revision, reason } }),
-    reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id, body: { revision } }),
+    end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id: fresh.id, body: { revision, reason } }),
+    reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id: fresh.id, body: { revision } }),
   }
 }
 

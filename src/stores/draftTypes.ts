@@ -1,5 +1,5 @@
 /** What a draft is of. */
-export type DraftKind = 'record' | 'block' | 'amendment' | 'shape' | 'split' | 'merge' | 'place'
+export type DraftKind = 'record' | 'block' | 'amendment' | 'shape' | 'split' | 'merge' | 'place' | 'plan'
 
 /** Something begun and not yet sent, kept on this device at every keystroke and read only by its account. */
 export interface Draft<Content = unknown> {

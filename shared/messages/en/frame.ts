@@ -13,6 +13,7 @@ export const frame = {
     farm: 'Farm',
     'my-farms': 'My farms',
   },
+  practice: 'Practice farm: nothing here counts',
   more: 'More',
   back: 'Back',
   pageTitle: '{page} – {brand}',

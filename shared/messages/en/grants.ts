@@ -16,7 +16,6 @@ export const grants = {
   end: 'End now',
   see: 'See what they see',
   seen: {
-    title: 'Register, as {who} sees it',
     band: 'As {who} sees it',
     bandText: 'Season {seasons}, until {day}. Read only: this is what the server answers them now. That you looked stands in the journal.',
     back: 'Back to the grants',

@@ -13,6 +13,7 @@ export const frame = {
     farm: 'Finca',
     'my-farms': 'Mis fincas',
   },
+  practice: 'Finca de práctica: nada de esto cuenta',
   more: 'Más',
   back: 'Volver',
   pageTitle: '{page} – {brand}',

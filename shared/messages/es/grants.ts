@@ -16,7 +16,6 @@ export const grants: Messages['grants'] = {
   change: 'Cambiar',
   see: 'Ver lo que ve',
   seen: {
-    title: 'Libro de registros, como lo ve {who}',
     band: 'Como lo ve {who}',
     bandText: 'Campaña {seasons}, hasta el {day}. Solo lectura: es lo que el servidor le contesta ahora. Que usted lo miró queda en el diario.',
     back: 'Volver a las concesiones',

@@ -6,6 +6,8 @@ export interface FrameContext {
   farmName: ComputedRef<string>
   /** Season of today on the open farm, null while not known. */
   season: ComputedRef<number | null>
+  /** The open farm is one to try things on. */
+  practice: ComputedRef<boolean>
   /** Farms to switch between; empty for who has one. */
   farms: ComputedRef<{ id: string; name: string }[]>
   farmId: ComputedRef<string>
