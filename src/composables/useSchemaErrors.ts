@@ -5,11 +5,21 @@ import { usePreferences } from '../stores/preferences.ts'
 /** A code of the contract's schemas: `text.required`, `number.format`. */
 const CODE = /^[a-z]+\.[a-z_]+$/
 
-/** What the library itself found, as a code of ours. */
-function codeOf({ code, message }: z.core.$ZodIssue): string {
-  if (CODE.test(message)) return message
-  if (code === 'invalid_value') return 'field.choose'
-  return code === 'invalid_type' ? 'field.required' : 'field.format'
+const isEmpty = (typed: unknown): boolean => typed === undefined || typed === null || typed === ''
+
+/** What stands at a path of a value. */
+const at = (value: unknown, path: readonly PropertyKey[]): unknown => path.reduce<unknown>((inside, key) => (inside as Record<PropertyKey, unknown> | null | undefined)?.[key], value)
+
+/** A finding in words for whoever types: an id is something chosen, and an empty field is empty, whatever it should have been. */
+function wordsOf(issue: z.core.$ZodIssue, typed: unknown): [code: string, params?: Record<string, number>] {
+  if (issue.message === 'id.format') return ['field.choose']
+  if (issue.message === 'date.invalid' && isEmpty(typed)) return ['field.required']
+  if (CODE.test(issue.message)) return [issue.message]
+  if (issue.code === 'invalid_value') return ['field.choose']
+  if (issue.code === 'invalid_type') return isEmpty(typed) ? ['field.required'] : [issue.expected === 'int' ? 'number.whole' : issue.expected === 'number' ? 'number.format' : 'field.required']
+  if (issue.code === 'too_small') return issue.origin === 'array' ? ['field.choose'] : ['field.too_small', { minimum: Number(issue.minimum) }]
+  if (issue.code === 'too_big' && issue.origin !== 'array') return ['field.too_big', { maximum: Number(issue.maximum) }]
+  return ['field.format']
 }
 
 /**
@@ -22,7 +32,10 @@ export function useSchemaErrors(): (schema: z.ZodType, value: unknown) => Record
     const read = schema.safeParse(value)
     if (read.success) return {}
     const errors: Record<string, string> = {}
-    for (const issue of read.error.issues) errors[issue.path.join('.')] ??= translate(preferences.language, `problems.${codeOf(issue)}`)
+    for (const issue of read.error.issues) {
+      const [code, params] = wordsOf(issue, at(value, issue.path))
+      errors[issue.path.join('.')] ??= translate(preferences.language, `problems.${code}`, params)
+    }
     return errors
   }
 }

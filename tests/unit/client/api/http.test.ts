@@ -32,6 +32,14 @@ describe('http', () => {
     expect(fetching.mock.calls[1]?.[1]?.headers).not.toHaveProperty('X-Requested-With')
   })
 
+  it('asks for the words in the language of the page, whatever the browser’s own is', async () => {
+    document.documentElement.lang = 'es'
+    const fetching = answers({ status: 200, body: { name: 'A3' } })
+    await http.get('/things', thing)
+    expect(fetching.mock.calls[0]?.[1]).toMatchObject({ headers: { 'Accept-Language': 'es' } })
+    document.documentElement.lang = ''
+  })
+
   it('throws what the server refused, with how long to wait', async () => {
     answers({ status: 429, body: problem(429, 'too_many'), headers: { 'Retry-After': '840' } })
     const error = await http.get('/things', thing).catch((cause: unknown) => cause)
