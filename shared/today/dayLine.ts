@@ -12,6 +12,9 @@ export interface DayFacts {
   started: readonly string[]
   /** The same of others, with whose work it is. */
   startedByOthers: readonly { codes: string; name: string }[]
+  /** Jobs whose last day is over, the longest late first. */
+  lateJobs: readonly { code: string; days: number }[]
+  dueJobs: number
   drafts: number
   signedToday: number
   /** Codes of lots past their last day that still hold something. */
@@ -21,12 +24,12 @@ export interface DayFacts {
 }
 
 /**
- * What the day comes to, most urgent first: started work, the reader's own before that of others, the lots that are past or end soon (the worse of both), drafts, what was signed.
+ * What the day comes to, most urgent first: started work, the reader's own before that of others, jobs late and due, the lots that are past or end soon (the worse of both), drafts, what was signed.
  * @returns at least one sentence; a day with nothing in it says so.
  */
 export function dayLine(facts: DayFacts): DaySentence[] {
   const ending = facts.pastLots.length > 0 ? pastSentence(facts) : soonSentence(facts)
-  const waiting = [...startedSentence(facts), ...othersSentence(facts), ...ending, ...draftSentence(facts)]
+  const waiting = [...startedSentence(facts), ...othersSentence(facts), ...lateSentence(facts), ...dueSentence(facts), ...ending, ...draftSentence(facts)]
   if (waiting.length === 0) waiting.push({ id: 'today.line.quiet', count: 0, figures: {} })
   return [...waiting, ...signedSentence(facts)]
 }
@@ -44,6 +47,17 @@ function othersSentence({ startedByOthers }: DayFacts): DaySentence[] {
   if (only === undefined) return []
   if (count > 1) return [{ id: 'today.line.othersMany', count, figures: { figure: { text: String(count), ink: 'wel' } } }]
   return [{ id: 'today.line.othersOne', count, figures: { codes: { text: only.codes, ink: 'wel' }, name: { text: only.name, ink: 'plain' } } }]
+}
+
+function lateSentence({ lateJobs }: DayFacts): DaySentence[] {
+  const [only] = lateJobs
+  if (only === undefined) return []
+  if (lateJobs.length > 1) return [{ id: 'today.line.lateMany', count: lateJobs.length, figures: { figure: { text: String(lateJobs.length), ink: 'mad' } } }]
+  return [{ id: 'today.line.lateOne', count: only.days, figures: { code: { text: only.code, ink: 'mad' }, figure: { text: String(only.days), ink: 'mad' } } }]
+}
+
+function dueSentence({ dueJobs }: DayFacts): DaySentence[] {
+  return dueJobs === 0 ? [] : [{ id: 'today.line.due', count: dueJobs, figures: { figure: { text: String(dueJobs), ink: 'wel' } } }]
 }
 
 function draftSentence({ drafts }: DayFacts): DaySentence[] {

@@ -9,4 +9,6 @@ export const roundApi = {
   sheet: (farmId: string, span: { from: string; to: string }): Promise<SeasonSheet> => http.get(`/farms/${farmId}/season-sheet`, seasonSheetSchema, span),
   /** Due and late, by their day. */
   waiting: (farmId: string): Promise<Job[]> => allPages(`/farms/${farmId}/jobs`, jobSchema, { state: 'waiting' }),
+  /** All jobs of a block. */
+  ofBlock: (farmId: string, blockId: string): Promise<Job[]> => allPages(`/farms/${farmId}/jobs`, jobSchema, { blockId }),
 }

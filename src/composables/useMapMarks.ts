@@ -1,14 +1,18 @@
 import { computed, shallowRef, watch, type ComputedRef } from 'vue'
+import type { Job } from '../../shared/contract/job.ts'
 import type { Boundary } from '../../shared/geo/geometryTypes.ts'
 import { useSession } from '../stores/session.ts'
 import { recentWork, type RecentWork } from './recentWork.ts'
 import type { MapBlock } from './mapTypes.ts'
 import { useClock } from './useClock.ts'
+import { useJobsWaiting } from './useJobsWaiting.ts'
 import { useRecords } from './useRecords.ts'
 
-/** What the map draws on the blocks: the work of the last days, and a line inside the outline of those that are not certified. */
+/** What the map draws on the blocks: the work of the last days, jobs that wait, and a line inside the outline of those that are not certified. */
 export interface MapMarks {
   work: ReadonlyMap<string, RecentWork>
+  /** By block: late where one of its jobs is. */
+  jobs: ReadonlyMap<string, 'due' | 'late'>
   inner: ReadonlyMap<string, { line: Boundary; status: 'transition' | 'uncertified' }>
 }
 
@@ -22,6 +26,7 @@ export function useMapMarks(blocks: () => readonly MapBlock[], isWanted: () => b
   const session = useSession()
   const { time } = useClock()
   const records = useRecords(() => (isWanted() ? session.farmId : ''), { limit: MOST_RECORDS })
+  const waiting = useJobsWaiting(isWanted)
   const inner = shallowRef<MapMarks['inner']>(new Map())
   const marked = computed(() => blocks().flatMap((block) => (block.land?.status === 'transition' || block.land?.status === 'uncertified' ? [{ ...block, status: block.land.status }] : [])))
 
@@ -39,7 +44,14 @@ export function useMapMarks(blocks: () => readonly MapBlock[], isWanted: () => b
   }, { immediate: true })
 
   const work = computed(() => recentWork(records.data.value?.pages[0]?.items ?? [], time.value))
-  return computed(() => ({ work: work.value, inner: inner.value }))
+  const jobs = computed(() => jobsByBlock(waiting.data.value ?? []))
+  return computed(() => ({ work: work.value, jobs: jobs.value, inner: inner.value }))
 }
 
-export const NO_MARKS: MapMarks = { work: new Map(), inner: new Map() }
+/** How the most urgent job of each block stands. */
+export function jobsByBlock(waiting: readonly Pick<Job, 'blockId' | 'state'>[]): MapMarks['jobs'] {
+  const late = new Set(waiting.filter(({ state }) => state === 'late').map(({ blockId }) => blockId))
+  return new Map(waiting.map(({ blockId }) => [blockId, late.has(blockId) ? 'late' : 'due']))
+}
+
+export const NO_MARKS: MapMarks = { work: new Map(), jobs: new Map(), inner: new Map() }

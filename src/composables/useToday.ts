@@ -2,15 +2,18 @@ import { computed, type ComputedRef } from 'vue'
 import { dayLine, type DaySentence } from '../../shared/today/dayLine.ts'
 import { partOpenWork, type OpenWork } from '../../shared/today/openWork.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
+import type { Job } from '../../shared/contract/job.ts'
 import type { Block, Boundary } from '../../shared/contract/block.ts'
 import type { RegisterRow } from '../../shared/contract/record.ts'
 import type { Method } from '../../shared/contract/recordContent.ts'
 import { lastOnBlocks } from '../../shared/register/lastOnBlocks.ts'
 import type { RegisterLine } from '../../shared/register/registerLine.ts'
+import { toDayNumber } from '../../shared/time/dayNumber.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { useBlocks } from './useBlocks.ts'
+import { useJobsWaiting } from './useJobsWaiting.ts'
 import { useInputs, type Inputs } from './useInputs.ts'
 import type { LotLine } from './useLotWords.ts'
 import { usePeople } from './usePeople.ts'
@@ -57,6 +60,7 @@ export function useToday(): Today {
   const started = useRecords(farmId, { limit: 50, state: 'started' })
   const inputs = useInputs()
   const { place, draftLines, present, outlines } = useRegisterLines()
+  const jobs = useJobsWaiting()
   const { today } = inputs
   const { data: blocks } = useBlocks(farmId)
   const { data: people } = usePeople(farmId)
@@ -85,12 +89,21 @@ export function useToday(): Today {
   }))
 
   const isRead = computed(() => place.value !== null && newest.data.value !== undefined && started.data.value !== undefined)
+  /** By the days since the last on which it could be done. */
+  const lateJobs = computed(() => {
+    const now = today.value
+    if (now === null) return []
+    const daysLate = ({ latestOn, plannedOn }: Job): number => toDayNumber(now) - toDayNumber(plannedOn > latestOn ? plannedOn : latestOn)
+    return (jobs.data.value ?? []).filter(({ state }) => state === 'late').map((job) => ({ code: job.blockCode, days: daysLate(job) })).sort((a, b) => b.days - a.days)
+  })
 
   const sentences = computed(() => {
     const lots = endingLots.value
     return dayLine({
       started: open.value.own.filter(({ onDevice }) => !onDevice).map(({ codes }) => codes),
       startedByOthers: open.value.others.map(({ codes, by }) => ({ codes, name: by })),
+      lateJobs: lateJobs.value,
+      dueJobs: jobs.data.value?.filter(({ state }) => state === 'due').length ?? 0,
       drafts: deviceLines.value.length,
       signedToday: doneLines.value.filter(({ line }) => line.state === 'signed').length,
       pastLots: lots.filter(({ standing }) => standing.useBy === 'past').map(({ lot }) => lot.code),
@@ -109,7 +122,7 @@ export function useToday(): Today {
     doneLines, endingLots, blockLines, outlines, inputs, newest,
     rowsRead: computed(() => rowsOf(newest).length),
     isRead,
-    ready: computed(() => isRead.value && inputs.ready.value),
+    ready: computed(() => isRead.value && inputs.ready.value && !jobs.isLoading.value),
   }
 }
 

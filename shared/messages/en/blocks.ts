@@ -37,6 +37,8 @@ export const blocks = {
     keepClear: 'keep clear',
     foliar: 'foliar, last 3 days',
     drench: 'drench, last 3 days',
+    due: 'job due',
+    late: 'job late',
     transition: 'in transition',
     uncertified: 'not certified',
   },

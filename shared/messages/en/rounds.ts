@@ -124,6 +124,7 @@ export const rounds = {
     endedSince: 'Ended: {reason}',
     missing: 'No such plan on this farm.',
   },
+  next: { label: 'Next job', more: '{count} more job waits here | {count} more jobs wait here' },
   today: {
     title: 'Jobs due and late',
     more: 'Season sheet',

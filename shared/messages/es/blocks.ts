@@ -37,6 +37,8 @@ export const blocks = {
     keepClear: 'no acercarse',
     foliar: 'foliar, últimos 3 días',
     drench: 'al suelo, últimos 3 días',
+    due: 'tarea pendiente',
+    late: 'tarea atrasada',
     transition: 'en transición',
     uncertified: 'sin certificar',
   },

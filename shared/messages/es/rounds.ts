@@ -125,6 +125,7 @@ export const rounds: Messages['rounds'] = {
     endedSince: 'Terminado: {reason}',
     missing: 'No hay tal plan en esta finca.',
   },
+  next: { label: 'Próxima tarea', more: '{count} tarea más espera aquí | {count} tareas más esperan aquí' },
   today: {
     title: 'Tareas pendientes y atrasadas',
     more: 'Hoja de campaña',

@@ -59,7 +59,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
   const draft = createDraftLayer(map)
   const edit = createEditLayer(map, events)
   const labels = createLabelLayer(map)
-  let shown: { blocks: readonly MapBlock[]; chosenId: string | null } = { blocks: [], chosenId: null }
+  let shown: { blocks: readonly MapBlock[]; chosenId: string | null; jobs: MapMarks['jobs'] } = { blocks: [], chosenId: null, jobs: new Map() }
   let tiles: ReturnType<typeof tileLayer> | null = null
 
   function move(act: () => void): void {
@@ -68,7 +68,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
     ownMove = false
   }
   map.on('move', () => events.moved(viewOf(map), !ownMove))
-  const label = (): void => labels.show(shown.blocks, shown.chosenId)
+  const label = (): void => labels.show(shown.blocks, shown.chosenId, shown.jobs)
   map.on('zoomend', () => { if (!areMany(shown.blocks)) label() })
   // Of very many, only those in view are named.
   map.on('moveend', () => { if (areMany(shown.blocks)) label() })
@@ -81,9 +81,9 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
 
   return {
     showBlocks(list, chosenId, marks) {
-      shown = { blocks: list, chosenId }
+      shown = { blocks: list, chosenId, jobs: marks.jobs }
       blocks.show(list, chosenId, marks)
-      labels.show(list, chosenId)
+      label()
       ground.setBlocks(list)
     },
     showDraft: draft.show,

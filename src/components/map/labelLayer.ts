@@ -7,16 +7,18 @@ import { areMany } from './manyBlocks.ts'
 import { findManyLabels } from './manyLabels.ts'
 import { boxOf, type PixelBox } from './pixelRing.ts'
 import { thinRing } from './thinRing.ts'
+import type { MapMarks } from '../../composables/useMapMarks.ts'
 import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
 
-/** Codes and areas on the map; each block shows as much as has room in it at this zoom. */
+/** Codes and areas on the map, in the trough of a job that waits; each block shows as much as has room in it at this zoom. */
 export interface LabelLayer {
-  show(blocks: readonly MapBlock[], chosenId: string | null): void
+  show(blocks: readonly MapBlock[], chosenId: string | null, jobs: MapMarks['jobs']): void
   /** Middles of the labels in the map's pixels, by block. */
   middles(): ReadonlyMap<string, Pixel>
 }
 
 interface Labels {
+  jobs: MapMarks['jobs']
   map: LeafletMap
   group: LayerGroup
   middles: Map<string, Pixel>
@@ -42,17 +44,17 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
   const group = layerGroup().addTo(map)
   let middles = new Map<string, Pixel>()
   return {
-    show(blocks, chosenId) {
+    show(blocks, chosenId, jobs) {
       group.clearLayers()
       middles = new Map()
       if (areMany(blocks)) {
         const found = findManyLabels(map, blocks, chosenId)
         middles = found.middles
-        for (const { block, at, isInside } of found.labels) setLabel({ map, group }, block, { form: isInside ? 'code' : 'outside', at, isChosen: block.id === chosenId })
+        for (const { block, at, isInside } of found.labels) setLabel({ map, group, jobs }, block, { form: isInside ? 'code' : 'outside', at, isChosen: block.id === chosenId })
         return
       }
       const shapes = blocks.flatMap(({ id, geometry }) => pixelRings(map, geometry).map((rings) => shapeOf(id, rings)))
-      const labels: Labels = { map, group, middles, taken: [], shapes }
+      const labels: Labels = { map, group, jobs, middles, taken: [], shapes }
       // Those with room of their own first, then the tiny ones between them.
       const largestFirst = [...blocks].sort((a, b) => b.areaM2 - a.areaM2)
       for (const block of largestFirst) addLabel(labels, block, block.id === chosenId)
@@ -61,7 +63,7 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
   }
 }
 
-function addLabel({ map, group, middles, taken, shapes }: Labels, block: MapBlock, isChosen: boolean): void {
+function addLabel({ map, group, jobs, middles, taken, shapes }: Labels, block: MapBlock, isChosen: boolean): void {
   const largest = largestShape(shapes.filter(({ id }) => id === block.id))
   if (largest === null) return
   const code = codeWidth(block.code)
@@ -79,11 +81,12 @@ function addLabel({ map, group, middles, taken, shapes }: Labels, block: MapBloc
   // The chosen one may lie on other labels, yet on no other block.
   const at = find(taken) ?? (isChosen ? find([]) : null)
   if (at === null) return
-  setLabel({ map, group }, block, { form, at, isChosen })
+  setLabel({ map, group, jobs }, block, { form, at, isChosen })
 }
 
-function setLabel({ map, group }: Pick<Labels, 'map' | 'group'>, block: MapBlock, { form, at, isChosen }: { form: LabelForm; at: Pixel; isChosen: boolean }): void {
-  const className = `map-label is-${form}${isChosen ? ' is-chosen' : ''}`
+function setLabel({ map, group, jobs }: Pick<Labels, 'map' | 'group' | 'jobs'>, block: MapBlock, { form, at, isChosen }: { form: LabelForm; at: Pixel; isChosen: boolean }): void {
+  const job = jobs.get(block.id)
+  const className = `map-label is-${form}${isChosen ? ' is-chosen' : ''}${job === undefined ? '' : ` job-${job}`}`
   group.addLayer(
     marker(map.unproject(point(at[0], at[1])), {
       icon: divIcon({ className, html: labelElement(block, form), iconSize: [0, 0] }),

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { dayLine, type DayFacts } from '../../../../shared/today/dayLine.ts'
 import { translate } from '../../../../shared/messages/translate.ts'
 
-const quiet: DayFacts = { started: [], startedByOthers: [], drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
+const quiet: DayFacts = { started: [], startedByOthers: [], lateJobs: [], dueJobs: 0, drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
 const ids = (facts: Partial<DayFacts>): string[] => dayLine({ ...quiet, ...facts }).map(({ id }) => id)
 
 describe('dayLine', () => {
@@ -31,6 +31,12 @@ describe('dayLine', () => {
     expect(dayLine({ ...quiet, pastLots: ['27', '28'] })[0]).toMatchObject({ id: 'today.line.pastMany', count: 2 })
   })
 
+  it('names a late job with its days before it counts those that are due, both before lots', () => {
+    expect(ids({ lateJobs: [{ code: 'V5', days: 1 }], dueJobs: 6, pastLots: ['27'] }).slice(0, 3)).toEqual(['today.line.lateOne', 'today.line.due', 'today.line.pastOne'])
+    expect(dayLine({ ...quiet, lateJobs: [{ code: 'V5', days: 1 }], dueJobs: 6 })[0]).toMatchObject({ count: 1, figures: { code: { text: 'V5', ink: 'mad' } } })
+    expect(dayLine({ ...quiet, lateJobs: [{ code: 'V5', days: 3 }, { code: 'V6', days: 1 }] })[0]).toMatchObject({ id: 'today.line.lateMany', figures: { figure: { text: '2' } } })
+  })
+
   it('lets lots past their use speak before lots that end soon', () => {
     expect(ids({ pastLots: ['27'], soonLots: [{ code: '31', day: '26 June' }] })).toEqual(['today.line.pastOne', 'today.line.noneSigned'])
   })
@@ -38,8 +44,8 @@ describe('dayLine', () => {
   it.each(['en', 'es'] as const)('has the words of every sentence in %s', (language) => {
     const all = [
       ...dayLine(quiet),
-      ...dayLine({ started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }], drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
-      ...dayLine({ started: ['V2', 'S1'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }, { codes: 'A4', name: 'Tam Lisk' }], drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
+      ...dayLine({ started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }], lateJobs: [{ code: 'V5', days: 1 }], dueJobs: 6, drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
+      ...dayLine({ started: ['V2', 'S1'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }, { codes: 'A4', name: 'Tam Lisk' }], lateJobs: [{ code: 'V5', days: 3 }, { code: 'V6', days: 1 }], dueJobs: 1, drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
     ]
     for (const { id, figures } of all) {
       const params = Object.fromEntries(Object.entries(figures).map(([name, { text }]) => [name, text]))

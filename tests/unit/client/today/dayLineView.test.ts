@@ -4,7 +4,7 @@ import { dayLine } from '../../../../shared/today/dayLine.ts'
 import DayLine from '../../../../src/components/today/DayLine.vue'
 import { i18n } from '../../../../src/plugins/i18n.ts'
 
-const facts = { started: ['V2'], startedByOthers: [], drafts: 1, signedToday: 3, pastLots: ['27', '28'], soonLots: [] }
+const facts = { started: ['V2'], startedByOthers: [], lateJobs: [], dueJobs: 0, drafts: 1, signedToday: 3, pastLots: ['27', '28'], soonLots: [] }
 const textIn = (language: 'en' | 'es', changed = {}): string => {
   i18n.global.locale.value = language
   return mount(DayLine, { global: { plugins: [i18n] }, props: { sentences: dayLine({ ...facts, ...changed }) } }).text().replace(/\s+/g, ' ')
@@ -13,7 +13,7 @@ const textIn = (language: 'en' | 'es', changed = {}): string => {
 describe('DayLine', () => {
   it('reads as sentences, one and many apart', () => {
     expect(textIn('en')).toBe('V2: started and not signed. 2 lots are past their use. 1 draft waits on this device. 3 records signed today.')
-    expect(textIn('en', { drafts: 2, signedToday: 1, pastLots: [] })).toBe('V2: started and not signed. 2 drafts wait on this device. 1 record signed today.')
+    expect(textIn('en', { lateJobs: [], dueJobs: 0, drafts: 2, signedToday: 1, pastLots: [] })).toBe('V2: started and not signed. 2 drafts wait on this device. 1 record signed today.')
   })
 
   it('reads as sentences in Spanish', () => {
