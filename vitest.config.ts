@@ -1,5 +1,13 @@
 import vue from '@vitejs/plugin-vue'
-import { defineConfig } from 'vitest/config'
+import { defineConfig, type TestProjectInlineConfiguration } from 'vitest/config'
+
+const ofClient: TestProjectInlineConfiguration['test'] = {
+  environment: 'jsdom',
+  setupFiles: ['tests/unit/client/setup.ts'],
+  // its modules import their own .css, which Node.js cannot
+  server: { deps: { inline: ['element-plus'] } },
+  testTimeout: 30_000,
+}
 
 export default defineConfig({
   test: {
@@ -18,18 +26,9 @@ export default defineConfig({
           hookTimeout: 60_000,
         },
       },
-      {
-        plugins: [vue()],
-        test: {
-          name: 'client',
-          environment: 'jsdom',
-          include: ['tests/unit/client/**/*.test.ts'],
-          setupFiles: ['tests/unit/client/setup.ts'],
-          // its modules import their own .css, which Node.js cannot
-          server: { deps: { inline: ['element-plus'] } },
-          testTimeout: 30_000,
-        },
-      },
+      { plugins: [vue()], test: { name: 'client', include: ['tests/unit/client/**/*.test.ts'], exclude: ['**/*.mocked.test.ts'], isolate: false, ...ofClient } },
+      // A module that a file replaces is replaced for that file alone.
+      { plugins: [vue()], test: { name: 'mocked', include: ['tests/unit/client/**/*.mocked.test.ts'], ...ofClient } },
       {
         test: {
           name: 'api',

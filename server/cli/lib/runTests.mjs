@@ -41,7 +41,7 @@ export async function runTests({ lifecycle, wish: { kinds, rest } }) {
   const [ofSource, ofCode] = await Promise.all([
     inOrder(wants('static') ? staticRuns(context).map((run) => () => show(run)) : []),
     inOrder([
-      ...(wants('unit') ? [() => show(() => runVitest('unit', ['unit', 'client'], context))] : []),
+      ...(wants('unit') ? [() => show(() => runVitest('unit', ['unit', 'client', 'mocked'], context))] : []),
       ...(wants('api') ? [() => show(() => runVitest('api', ['api'], context))] : []),
     ]),
   ])
