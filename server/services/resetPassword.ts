@@ -7,7 +7,7 @@ import { queueLetter } from './mail/queueLetter.ts'
 import { tellOfPassword } from './mail/tellOfPassword.ts'
 import { HOUSE } from './mail/house.ts'
 import { endLinks, findLink, issueLink, RESET_MINUTES, spendLink } from './oneTimeLinks.ts'
-import { assertGoodPassword } from './passwordRules.ts'
+import { assertGoodPassword, farmNames } from './passwordRules.ts'
 import { hashPassword } from './passwords.ts'
 import type { Services } from './services.ts'
 import { endSessionsOf } from './sessions/ownSessions.ts'
@@ -50,7 +50,7 @@ export async function readReset(services: Parts, token: string): Promise<{ email
  */
 export async function resetPassword(services: Parts, { token, password }: { token: string; password: string }): Promise<string> {
   const { account, link } = await services.database.inHouse((manager) => findLink(services, manager, token, ['reset']))
-  assertGoodPassword(password, { own: [account.email, account.name] })
+  assertGoodPassword(password, { own: [account.email, account.name, ...(await farmNames(services, account.id))] })
   const passwordHash = await hashPassword(password)
   await services.database.inHouse(async (manager) => {
     await spendLink(services, manager, link)

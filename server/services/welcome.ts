@@ -36,7 +36,8 @@ export async function readWelcome(services: Parts, token: string): Promise<Welco
 export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<{ accountId: string; email: string }> {
   const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, input.token, ['welcome', 'invitation']))
   if (link.kind === 'invitation' && account.passwordHash !== null) throw new AppError('conflict', 'welcome.has_account')
-  assertGoodPassword(input.password, { own: [account.email, input.name] })
+  const farm = link.kind === 'invitation' ? (await describeInvitation(services, link)).farm : null
+  assertGoodPassword(input.password, { own: [account.email, input.name, farm] })
   const passwordHash = await hashPassword(input.password)
   const work = async (manager: EntityManager): Promise<void> => {
     await spendLink(services, manager, link)

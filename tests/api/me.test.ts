@@ -55,6 +55,12 @@ describe('another password', () => {
     expect((await change({ newPassword })).body.errors).toMatchObject([{ path: 'newPassword', code }])
   })
 
+  it('is refused when it is its farm’s name with little beside, and beyond 256 signs', async () => {
+    const { body } = await manager.get(`/api/farms/${farm.id}`).expect(200)
+    expect((await change({ newPassword: `${body.name} 2026` })).body.errors).toMatchObject([{ path: 'newPassword', code: 'welcome.password_known' }])
+    expect((await change({ newPassword: 'x'.repeat(257) })).body.errors).toMatchObject([{ path: 'newPassword', code: 'text.too_long' }])
+  })
+
   it('is taken as typed: spaces, signs beyond the alphabet, 64 characters', async () => {
     const newPassword = `  Zwölf Frösche 🐸 ${'x'.repeat(44)}  `
     await change({ newPassword }).expect(204)

@@ -5,7 +5,7 @@ import { AppError, invalid, stale } from '../../errors.ts'
 import { describeUser } from '../describeSession.ts'
 import { tellOfPassword } from '../mail/tellOfPassword.ts'
 import { assertFitPin } from '../people/setPin.ts'
-import { assertGoodPassword } from '../passwordRules.ts'
+import { assertGoodPassword, farmNames } from '../passwordRules.ts'
 import { hashPassword, verifyPassword } from '../passwords.ts'
 import type { Services } from '../services.ts'
 import { endSessionsOf, type Who } from '../sessions/ownSessions.ts'
@@ -32,7 +32,7 @@ export async function changePassword(services: Services, { accountId, sessionId 
   const account = await services.database.inHouse((manager) => manager.findOneByOrFail(Account, { id: accountId }))
   if (!(await verifyPassword(account.passwordHash, password))) throw wrongSecret(account)
   if (account.kind === 'pin') assertPin(newPassword)
-  else assertGoodPassword(newPassword, { path: 'newPassword', own: [account.email, account.name] })
+  else assertGoodPassword(newPassword, { path: 'newPassword', own: [account.email, account.name, ...(await farmNames(services, accountId))] })
   const passwordHash = await hashPassword(newPassword)
   await services.database.inHouse(async (manager) => {
     await updateRow(manager, Account, { id: accountId }, { passwordHash })
