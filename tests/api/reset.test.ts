@@ -38,7 +38,7 @@ describe('a forgotten password', () => {
     expect(told?.text).toContain('16 June 2026 at 14:00 UTC')
   })
 
-  it('has a link that works once, for half an hour, for its own account, and refuses in one text', async () => {
+  it('B-120: has a link that works once, for half an hour, for its own account, and refuses in one text', async () => {
     const { email } = farm.accounts.owner
     await ask(email).expect(204)
     const token = await linkTo(email)
@@ -63,7 +63,7 @@ describe('a forgotten password', () => {
     await spend(token).expect(204)
   })
 
-  it('builds its link from the public address, whatever the request claims', async () => {
+  it('B-119: builds its link from the public address, whatever the request claims', async () => {
     const { email } = farm.accounts.certifier
     await ask(email).set({ Host: 'evil.example', 'X-Forwarded-Host': 'evil.example' }).expect(204)
     const [letter] = await house.mailTo(email)

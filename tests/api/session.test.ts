@@ -64,7 +64,7 @@ describe('signing in', () => {
     expect(ratio).toBeLessThan(1.25)
   })
 
-  it('gives a new session id and ends the one that was sent', async () => {
+  it('B-108: gives a new session id and ends the one that was sent', async () => {
     const agent = supertest.agent(house.app)
     const send = () => agent.post('/api/session').set('X-Requested-With', 'drenchleaf').send({ email: farm.accounts.owner.email, password: PASSWORD })
     const first = sessionCookie(await send())
@@ -75,14 +75,14 @@ describe('signing in', () => {
     expect((await supertest(house.app).get('/api/session').set('Cookie', second)).status).toBe(200)
   })
 
-  it('ends with signing out: the old cookie opens nothing', async () => {
+  it('B-107: ends with signing out: the old cookie opens nothing', async () => {
     const signedIn = await signIn(farm.accounts.owner.email, PASSWORD)
     const cookie = sessionCookie(signedIn)
     await supertest(house.app).delete('/api/session').set('X-Requested-With', 'drenchleaf').set('Cookie', cookie).expect(204)
     expect((await supertest(house.app).get('/api/session').set('Cookie', cookie)).status).toBe(401)
   })
 
-  it('ends at once for an account that was closed', async () => {
+  it('B-106: ends at once for an account that was closed', async () => {
     const other = await house.makeFarm()
     const agent = await house.as(other.accounts.manager)
     await house.services.database.inHouse((manager) => manager.query('UPDATE accounts SET deactivated_at = now() WHERE id = $1', [other.accounts.manager.id]))
@@ -111,7 +111,7 @@ describe('signing in', () => {
 })
 
 describe('guessing', () => {
-  it('is slowed by account and address; another address and a known device still get in', async () => {
+  it('B-122: is slowed by account and address; another address and a known device still get in', async () => {
     const guarded = await openHouse()
     const guardedFarm = await guarded.makeFarm()
     const { email } = guardedFarm.accounts.applicator
