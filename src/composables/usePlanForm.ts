@@ -1,5 +1,5 @@
 import { computed, reactive, ref, watch, type ComputedRef, type Ref } from 'vue'
-import { createPlanSchema, updatePlanSchema, type SeasonPlan } from '../../shared/contract/seasonPlan.ts'
+import { createPlanSchema, seasonPlanSchema, updatePlanSchema, type SeasonPlan } from '../../shared/contract/seasonPlan.ts'
 import type { Method } from '../../shared/contract/recordContent.ts'
 import { useSession } from '../stores/session.ts'
 import { fieldErrors } from './fieldErrors.ts'
@@ -7,6 +7,7 @@ import { newId } from './newId.ts'
 import { numberOf } from './recordContent.ts'
 import { draftOfPlan, type ComponentDraft, type RecordDraft } from './recordDraft.ts'
 import { useKeptForm } from './useKeptForm.ts'
+import { useMerge, type Merge } from './useMerge.ts'
 import { useMessages } from './useMessages.ts'
 import { useSchemaErrors } from './useSchemaErrors.ts'
 import { useSubmit } from './useSubmit.ts'
@@ -42,6 +43,8 @@ export interface PlanForm {
   /** Why it was not saved, where no field is to blame. */
   refusal: ComputedRef<string>
   busy: Ref<boolean>
+  /** Where another changed the plan meanwhile; null of a new one. */
+  merge: Merge<PlanDraft> | null
   addStep: () => void
   removeStep: (index: number) => void
   /** Null where it was refused. */
@@ -62,10 +65,13 @@ function emptyStep(): StepDraft {
 function draftOfStep(step: SeasonPlan['steps'][number]): StepDraft {
   const { components, water } = draftOfPlan(step)
   return {
-    id: step.id, method: step.method, component: components[0] as ComponentDraft, water: step.water === null ? { ...water, sizedFrom: '' } : water, blockIds: [...step.blockIds],
+    // Known by its step: two drafts of one plan differ in nothing.
+    id: step.id, method: step.method, component: { ...(components[0] as ComponentDraft), key: step.id }, water: step.water === null ? { ...water, sizedFrom: '' } : water, blockIds: [...step.blockIds],
     everyDays: String(step.everyDays), firstOn: step.firstOn, lastOn: step.lastOn, earlyDays: String(step.earlyDays), lateDays: String(step.lateDays),
   }
 }
+
+const draftOfSeasonPlan = ({ id, name, note, steps }: SeasonPlan): PlanDraft => ({ id, name, note: note ?? '', steps: steps.map(draftOfStep) })
 
 /** The form of a season plan: a new one, or one that is there. */
 export function usePlanForm(was: SeasonPlan | null): PlanForm {
@@ -73,8 +79,9 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
   const { submit } = useSubmit()
   const { problem } = useMessages()
   const schemaErrors = useSchemaErrors()
-  const fresh: PlanDraft = { id: was?.id ?? newId(), name: was?.name ?? '', note: was?.note ?? '', steps: was === null ? [emptyStep()] : was.steps.map(draftOfStep) }
+  const fresh: PlanDraft = was === null ? { id: newId(), name: '', note: '', steps: [emptyStep()] } : draftOfSeasonPlan(was)
   const draft = reactive<PlanDraft>(copyOf(fresh))
+  const merge = was === null ? null : useMerge<SeasonPlan, PlanDraft>({ draft: ref(draft), opened: was, schema: seasonPlanSchema, draftOf: draftOfSeasonPlan })
   const kept = useKeptForm<PlanDraft>(fresh, {
     // What was typed over another revision of the plan is not brought back.
     farmId: computed(() => session.farmId), kind: 'plan', about: () => (was === null ? 'new' : `${was.id}@${was.revision}`), fresh: () => fresh,
@@ -93,24 +100,25 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
   const own = ref<Record<string, string>>({})
   const task = useTask((command: Parameters<typeof submit>[0]) => submit(command))
   const refused = computed(() => fieldErrors(task.error.value))
-  const revision = was?.revision ?? 1
+  const revisionSeen = (): number => merge?.revision.value ?? 1
 
   async function save(): Promise<'sent' | 'kept' | null> {
-    if (task.running.value) return null
+    if (task.running.value || (merge?.clashes.value.length ?? 0) > 0) return null
     task.error.value = null
     const content = { name: draft.name, note: draft.note.trim() === '' ? null : draft.note, steps: draft.steps.map(stepBody) }
     const { id } = draft
-    const body = was === null ? { id, ...content } : { revision, ...content }
+    const body = was === null ? { id, ...content } : { revision: revisionSeen(), ...content }
     own.value = schemaErrors(was === null ? createPlanSchema : updatePlanSchema, body)
     if (Object.keys(own.value).length > 0) return null
     const state = (await task.run({ kind: was === null ? 'plan.create' : 'plan.update', farmId: session.farmId, id, body } as Parameters<typeof submit>[0]))?.state ?? null
     if (state !== null) await kept.discard()
+    else if (merge?.meet(task.error.value) === true) task.error.value = null
     return state
   }
   const act = async (command: Parameters<typeof submit>[0]): Promise<boolean> => (await task.run(command)) !== undefined
 
   return {
-    draft, busy: task.running, save, ready: kept.ready, resumed: kept.resumed,
+    draft, busy: task.running, merge, save, ready: kept.ready, resumed: kept.resumed,
     beginAnew: async () => {
       await kept.discard()
       take()
@@ -119,8 +127,8 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
     refusal: computed(() => (task.error.value === null || Object.keys(refused.value).length > 0 ? '' : problem(task.error.value))),
     addStep: () => { draft.steps.push({ ...emptyStep(), blockIds: [...(draft.steps.at(-1)?.blockIds ?? [])] }) },
     removeStep: (index) => { draft.steps.splice(index, 1) },
-    end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id: fresh.id, body: { revision, reason } }),
-    reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id: fresh.id, body: { revision } }),
+    end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id: fresh.id, body: { revision: revisionSeen(), reason } }),
+    reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id: fresh.id, body: { revision: revisionSeen() } }),
   }
 }
 
@@ -142,8 +150,9 @@ function waterBody({ method, water }: StepDraft): object | null {
   return water.sizedFrom === 'perEach' ? { ...typed, each: water.each } : typed
 }
 
-/** The whole number of a text, or what stands there so that the contract says what is wrong with it. */
+/** The whole number of a text, below 0 too, or what stands there: the contract says what is wrong with it. */
 function wholeOf(text: string): number | string {
   const read = numberOf(text)
-  return read === '' ? text : Number(read)
+  if (read !== '') return Number(read)
+  return /^\s*-\d+\s*$/.test(text) ? Number(text) : text
 }

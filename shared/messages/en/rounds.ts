@@ -79,6 +79,7 @@ export const rounds = {
     open: 'Open',
   },
   form: {
+    steps: 'Steps', stepShort: '{number}: every {days} days on {count} block | {number}: every {days} days on {count} blocks',
     newTitle: 'New season plan',
     editTitle: 'Season plan',
     loading: 'Reading the plan',

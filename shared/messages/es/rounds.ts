@@ -80,6 +80,7 @@ export const rounds: Messages['rounds'] = {
     open: 'Abrir',
   },
   form: {
+    steps: 'Pasos', stepShort: '{number}: cada {days} días en {count} parcela | {number}: cada {days} días en {count} parcelas',
     newTitle: 'Plan de campaña nuevo',
     editTitle: 'Plan de campaña',
     loading: 'Leyendo el plan',

@@ -22,3 +22,8 @@ export function laterAnswer<Answer>(answer: Answer): { promise: Promise<Answer>;
   let come = (): void => undefined
   return { promise: new Promise<Answer>((resolve) => { come = () => { resolve(answer) } }), come: () => { come() } }
 }
+
+/** A refusal because another was first, with what stands now. */
+export function staleWith(current: unknown): ApiError {
+  return new ApiError({ type: 'about:blank', title: 'stale', status: 409, code: 'stale', detail: 'stale', errors: [], requestId: 'r', current })
+}

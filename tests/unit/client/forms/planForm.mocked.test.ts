@@ -2,7 +2,7 @@ import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { nextTick, ref, shallowRef } from 'vue'
 import type { SeasonPlan } from '../../../../shared/contract/seasonPlan.ts'
 import { usePlanForm, type PlanDraft } from '../../../../src/composables/usePlanForm.ts'
-import { inSetup, laterAnswer, refusalOf } from './inSetup.ts'
+import { inSetup, laterAnswer, refusalOf, staleWith } from './inSetup.ts'
 
 const submit = vi.fn()
 vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
@@ -65,6 +65,25 @@ describe('a season plan', () => {
     expect(submit.mock.calls[0]?.[0]).toMatchObject({ kind: 'plan.update', id: PLAN.id, body: { revision: 5, name: 'Nettle', steps: [{ id: STEP.id, everyDays: 14 }] } })
     expect([form.errors.value, form.refusal.value]).toEqual([{ 'steps.0.everyDays': 'Too often.' }, ''])
     expect(drafts.remove).not.toHaveBeenCalled()
+  })
+})
+
+describe('a plan that another changed meanwhile', () => {
+  it('takes over what was not touched, is kept over the newer revision, and waits while something has to be chosen', async () => {
+    const form = inSetup(() => usePlanForm(PLAN))
+    form.draft.name = 'Nettle and more'
+    submit.mockRejectedValueOnce(staleWith({ ...PLAN, revision: 8, note: 'Early, before the wind' }))
+    expect(await form.save()).toBeNull()
+    expect([form.draft.name, form.draft.note, form.refusal.value]).toEqual(['Nettle and more', 'Early, before the wind', ''])
+    submit.mockRejectedValueOnce(staleWith({ ...PLAN, revision: 9, name: 'Theirs', note: 'Early, before the wind' }))
+    expect(await form.save()).toBeNull()
+    expect(submit.mock.lastCall?.[0]).toMatchObject({ body: { revision: 8, name: 'Nettle and more' } })
+    expect(await form.save()).toBeNull()
+    expect(submit).toHaveBeenCalledTimes(2)
+    form.merge?.choose('name', 'mine')
+    submit.mockResolvedValueOnce({ state: 'sent', answer: {} })
+    expect(await form.save()).toBe('sent')
+    expect(submit.mock.lastCall?.[0]).toMatchObject({ body: { revision: 9, name: 'Nettle and more' } })
   })
 })
 
