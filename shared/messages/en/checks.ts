@@ -12,7 +12,7 @@ export const checks = {
   },
   law: {
     title: 'Law',
-    none: 'No rule set is in force for this farm, so nothing of the law was looked at.',
+    none: 'No rule set is judged here yet, so nothing of the law was looked at.',
   },
   labelRate: {
     title: 'Rate',

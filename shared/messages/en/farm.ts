@@ -31,7 +31,7 @@ export const farm = {
   sprayerKept: 'No signal: sprayer {code} is kept on this device and goes by itself.',
   inForce: 'In force here',
   checks: {
-    law: { text: 'No rule set is in force on this farm. What the law asks is not checked here.' },
+    law: { text: 'No rule set is judged here yet. What the law asks is not checked.' },
     sprayer: { title: 'Sprayer', text: 'None yet. Without one a mix is not split into loads.' },
   },
   readFailed: 'The farm could not be read.',

@@ -11,7 +11,7 @@ export const letters = {
   how: 'How far',
   resend: 'Send again',
   resent: 'It is written anew and on its way.',
-  sentAt: 'Taken by the mail server {at}',
+  sentAt: 'Handed over {at}',
   nextTry: 'Tried {tries} time, again {at} | Tried {tries} times, again {at}',
   state: { waiting: 'On its way', failing: 'Not taken yet', sent: 'Sent', dead: 'Given up' },
   kind: { invitation: 'Invitation onto the farm', grant: 'Seasons opened to a certifier', jobsDue: 'Jobs due and late', factorChanged: 'Second factor', other: 'Notice' },

@@ -35,7 +35,7 @@ export const sprayers = {
   takeBack: 'Take back', takeBackOf: 'Take back the calibration of {day}', takeBackText: 'It stays readable, and the one before is in force again. Say why.', takenBack: 'Taken back.',
   show: 'Show the working', hide: 'Hide the working',
   checks: {
-    title: 'Calibration',
+    title: 'Calibration date',
     none: { text: '{code} was never calibrated here. What goes out on a hectare is not known.' },
     past: { text: '{code} was last calibrated on {on}; the next was due on {due}.' },
     soon: { text: '{code} is due on {due}, in {days} days.' },

@@ -12,7 +12,7 @@ export const checks = {
   },
   law: {
     title: 'Ley',
-    none: 'Sin conjunto de reglas en vigor aquí: no se miró nada de la ley.',
+    none: 'Aquí aún no se juzga ningún conjunto de reglas: no se miró nada de la ley.',
   },
   labelRate: {
     title: 'Dosis',

@@ -31,7 +31,7 @@ export const farm = {
   sprayerKept: 'Sin señal: el pulverizador {code} queda en este dispositivo y sale solo.',
   inForce: 'En vigor aquí',
   checks: {
-    law: { text: 'En esta finca no hay ningún conjunto de reglas en vigor. Lo que pide la ley no se comprueba aquí.' },
+    law: { text: 'Aquí aún no se juzga ningún conjunto de reglas. Lo que pide la ley no se comprueba.' },
     sprayer: { title: 'Pulverizador', text: 'Aún no hay ninguno. Sin él, la mezcla no se reparte en cargas.' },
   },
   readFailed: 'No se pudo leer la finca.',

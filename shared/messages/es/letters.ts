@@ -11,7 +11,7 @@ export const letters = {
   how: 'Cómo va',
   resend: 'Enviar otra vez',
   resent: 'Se ha escrito de nuevo y está en camino.',
-  sentAt: 'Aceptado por el servidor de correo: {at}',
+  sentAt: 'Entregado: {at}',
   nextTry: '{tries} intento; otro: {at} | {tries} intentos; otro: {at}',
   state: { waiting: 'En camino', failing: 'Aún no aceptado', sent: 'Enviado', dead: 'Abandonado' },
   kind: { invitation: 'Invitación a la finca', grant: 'Campañas abiertas a un certificador', jobsDue: 'Tareas pendientes y atrasadas', factorChanged: 'Segundo factor', other: 'Aviso' },

@@ -35,7 +35,7 @@ export const sprayers = {
   takeBack: 'Retirar', takeBackOf: 'Retirar la calibración del {day}', takeBackText: 'Sigue legible y vuelve a regir la anterior. Diga por qué.', takenBack: 'Retirada.',
   show: 'Mostrar el cálculo', hide: 'Ocultar el cálculo',
   checks: {
-    title: 'Calibración',
+    title: 'Fecha de calibración',
     none: { text: '{code} nunca se calibró aquí. No se sabe cuánto sale por hectárea.' },
     past: { text: '{code} se calibró por última vez el {on}; la siguiente tocaba el {due}.' },
     soon: { text: '{code} toca el {due}, en {days} días.' },
