@@ -15,7 +15,7 @@ const BY_PIN: Limits = { span: 12 * HOUR_MS, idle: 12 * HOUR_MS }
 /** How exact the time is at which a session was seen last, milliseconds. */
 export const SEEN_EVERY_MS = MINUTE_MS
 
-export interface SessionTimes {
+interface SessionTimes {
   openedAt: Date
   seenAt: Date
   /** Written when it was opened. */

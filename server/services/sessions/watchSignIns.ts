@@ -23,7 +23,7 @@ export interface SeenSignIn {
 }
 
 /** Watches sign-ins, and tells an account's e-mail what its person should know of. */
-export interface SignInWatch {
+interface SignInWatch {
   /** A password was wrong. Known and unknown e-mails are counted alike, and nothing is written. */
   refused(seen: SeenSignIn): Promise<void>
   /** The password was right and the code wrong. */

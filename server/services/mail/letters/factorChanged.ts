@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { defineLetter } from './letterKind.ts'
 
-export const FACTOR_NEWS = ['set', 'removed', 'codes', 'reset'] as const
+const FACTOR_NEWS = ['set', 'removed', 'codes', 'reset'] as const
 export type FactorNews = (typeof FACTOR_NEWS)[number]
 
 /** An account's second factor is another one now, is gone, or has other recovery codes. `time` is UTC, HH:MM. */

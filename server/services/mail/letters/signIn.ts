@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { defineLetter } from './letterKind.ts'
 
 /** What about a sign-in the account's e-mail is told. */
-export const SIGN_IN_NEWS = ['newDevice', 'codeWrong', 'afterFailures'] as const
+const SIGN_IN_NEWS = ['newDevice', 'codeWrong', 'afterFailures'] as const
 export type SignInNews = (typeof SIGN_IN_NEWS)[number]
 
 /** Somebody signed in from where nobody had, knew the password and not the code, or got in after many tries. `time` is UTC, HH:MM. */
