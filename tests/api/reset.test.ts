@@ -1,5 +1,6 @@
 import supertest from 'supertest'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { recordStatements } from '../bench/recordStatements.ts'
 import { NOW, openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 
 const NEW = 'another fine sentence here'
@@ -80,22 +81,13 @@ describe('a forgotten password', () => {
     await ask('no mail').expect(422)
   })
 
-  it('takes about as long where there is no such account', async () => {
-    house.setNow(NOW)
-    const times: { known: number[]; unknown: number[] } = { known: [], unknown: [] }
-    for (let turn = 0; turn < 50; turn += 1) {
-      for (const side of ['known', 'unknown'] as const) {
-        // Another hour each time, so that asking is never too often.
-        house.setNow(new Date(Date.parse(NOW) + turn * 3_700_000).toISOString())
-        const start = performance.now()
-        await ask(side === 'known' ? farm.accounts.owner.email : 'nobody@slow.example').expect(204)
-        times[side].push(performance.now() - start)
-      }
-    }
-    const middle = (list: number[]) => list.toSorted((one, other) => one - other)[Math.floor(list.length / 2)] ?? 0
-    const ratio = middle(times.known) / middle(times.unknown)
-    expect(ratio).toBeGreaterThan(0.8)
-    expect(ratio).toBeLessThan(1.25)
+  it('does the same work where there is no such account', async () => {
+    house.setNow(new Date(Date.parse(NOW) + 7_200_000).toISOString())
+    const asked = (email: string) => recordStatements(() => ask(email).expect(204))
+    const [known, unknown] = [await asked(farm.accounts.owner.email), await asked('nobody@slow.example')]
+    const texts = (list: typeof known) => list.map(({ text }) => text.replace(/^(RELEASE|ROLLBACK TO) SAVEPOINT/, 'END OF SAVEPOINT'))
+    expect(texts(unknown)).toEqual(texts(known))
+    expect(known.length).toBeGreaterThan(5)
   })
 
   it('is asked for five times an hour under one e-mail, known or not, and signing in goes on', async () => {
