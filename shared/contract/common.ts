@@ -19,7 +19,7 @@ export const instantSchema = z
 /** A civil date of the calendar, YYYY-MM-DD, year 1970 to 2199. */
 export const civilDateSchema = z.iso
   .date({ error: 'date.invalid', abort: true })
-  .refine((text) => YEARS.test(text), { error: 'date.invalid' })
+  .refine((text) => YEARS.test(text), { error: 'date.years' })
 
 /** What was unlikely and sent all the same, with the reason given. */
 export const acknowledgedSchema = z

@@ -10,13 +10,13 @@ export interface SheetStretch { from: string; days: number }
 /** What the sheet draws, each on the row of its block, counted from 0. */
 export interface SheetMarks {
   works: readonly { row: number; on: string; method: Method; heldTo: string | null }[]
-  jobs: readonly { row: number; method: Method; state: 'planned' | 'due' | 'late' | 'done' | 'skipped'; earliestOn: string; latestOn: string; plannedOn: string }[]
+  jobs: readonly { row: number; method: Method; state: 'planned' | 'due' | 'late' | 'done' | 'skipped'; earliestOn: string; latestOn: string; plannedOn: string; isKept?: boolean }[]
   harvests: readonly { row: number; from: string; to: string }[]
 }
 
 type Shape = 'foliar' | 'drench' | 'solid'
 /** One path for all marks of a kind: a stretch is a dozen elements, however much is on it. */
-export type SheetPaths = Record<'hold' | 'harvest' | 'planned' | 'due' | 'late' | 'skipped' | Shape | `${Shape}Planned`, string>
+export type SheetPaths = Record<'hold' | 'harvest' | 'planned' | 'due' | 'late' | 'skipped' | 'kept' | Shape | `${Shape}Planned`, string>
 
 const SHAPES: Record<Method, Shape> = { foliar: 'foliar', drench: 'drench', injected: 'drench', solid: 'solid' }
 /** Wide enough for marks of full size. */
@@ -25,7 +25,7 @@ const FULL_DAY = 16
 /** The paths of a stretch, its upper left corner at 0,0. Spans that run beyond it are drawn whole, to be cut by its edge. */
 export function sheetPaths(marks: SheetMarks, { from, days }: SheetStretch, scale: SheetScale): SheetPaths {
   const paths: SheetPaths = {
-    hold: '', harvest: '', planned: '', due: '', late: '', skipped: '', foliar: '', drench: '', solid: '', foliarPlanned: '', drenchPlanned: '', solidPlanned: '',
+    hold: '', harvest: '', planned: '', due: '', late: '', skipped: '', kept: '', foliar: '', drench: '', solid: '', foliarPlanned: '', drenchPlanned: '', solidPlanned: '',
   }
   const first = toDayNumber(from)
   const x = (day: string): number => (toDayNumber(day) - first) * scale.day
@@ -42,9 +42,10 @@ export function sheetPaths(marks: SheetMarks, { from, days }: SheetStretch, scal
     put(row, on, SHAPES[method], false)
     if (heldTo !== null && meets(on, heldTo)) paths.hold += box(x(on), x(heldTo) + scale.day, (row + 1) * scale.row - 7, 5)
   }
-  for (const { row, method, state, earliestOn, latestOn, plannedOn } of marks.jobs) {
+  for (const { row, method, state, earliestOn, latestOn, plannedOn, isKept } of marks.jobs) {
     if (state === 'done') continue
     if (meets(earliestOn, latestOn)) paths[state] += trough(x(earliestOn) + 1, x(latestOn) + scale.day - 1, row * scale.row, scale.row, state)
+    if (isKept && meets(plannedOn, plannedOn)) paths.kept += box(x(plannedOn) + 1.5, x(plannedOn) + scale.day - 1.5, row * scale.row + 3, scale.row - 6)
     if (state !== 'skipped') put(row, plannedOn, SHAPES[method], true)
   }
   for (const { row, from: start, to } of marks.harvests) {

@@ -1,6 +1,7 @@
 import { computed, reactive, type ComputedRef } from 'vue'
 import type { Job } from '../../shared/contract/job.ts'
 import { ApiError } from '../api/errors.ts'
+import { useOutbox } from '../stores/outbox.ts'
 import { useSession } from '../stores/session.ts'
 import { useMessages } from './useMessages.ts'
 import { useSubmit } from './useSubmit.ts'
@@ -16,6 +17,7 @@ export interface JobActs {
   /** Why it was not done. */
   problem: ComputedRef<string>
   busy: ComputedRef<boolean>
+  /** Something about the job waits on this device for signal. */
   kept: ComputedRef<boolean>
   begin: (mode: 'move' | 'skip', to?: string) => void
   cancel: () => void
@@ -28,13 +30,13 @@ const OUTSIDE = 'job.outside_window'
 
 export function useJobActs(job: () => Job): JobActs {
   const session = useSession()
+  const outbox = useOutbox()
   const { submit } = useSubmit()
   const { problem } = useMessages()
   const form = reactive<JobActs['form']>({ mode: 'none', to: null, reason: '', why: '', tried: false })
   const task = useTask(async (command: Parameters<typeof submit>[0]) => {
-    const outcome = await submit(command)
+    await submit(command)
     form.mode = 'none'
-    return outcome.state
   })
   const doubt = computed(() => {
     const error = task.error.value
@@ -50,7 +52,7 @@ export function useJobActs(job: () => Job): JobActs {
     form, doubt,
     needsReason: computed(() => form.tried && form.reason.trim() === ''),
     busy: computed(() => task.running.value),
-    kept: computed(() => task.result.value === 'kept'),
+    kept: computed(() => outbox.kept.some(({ command }) => command.kind.startsWith('job.') && command.id === job().id)),
     problem: computed(() => {
       if (task.error.value === null || doubt.value !== '') return ''
       const first = task.error.value instanceof ApiError ? task.error.value.problem.errors[0]?.message : undefined

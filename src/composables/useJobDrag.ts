@@ -7,7 +7,7 @@ export interface JobDragOptions<Job> {
   placeAt: (event: PointerEvent) => SheetPlace
   /** The job that can be dragged from there, or null. */
   jobAt: (place: SheetPlace) => Job | null
-  dropped: (job: Job, day: number) => void
+  dropped: (job: Job, to: SheetPlace) => void
   pressed: (place: SheetPlace) => void
 }
 
@@ -44,7 +44,7 @@ export function useJobDrag<Job>({ placeAt, jobAt, dropped, pressed }: JobDragOpt
       ghost.value = null
       if (was === null) return
       if (to === null) pressed(placeAt(event))
-      else if (was.job !== null && to.day !== was.from.day) dropped(was.job as Job, to.day)
+      else if (was.job !== null && to.day !== was.from.day) dropped(was.job as Job, to)
     },
     cancel: () => { held = null; ghost.value = null },
   }

@@ -42,7 +42,7 @@ export function usePersonDeed(farmId: () => string, person: () => Person, deed: 
     return doings[deed()]()
   }
 
-  const proof = useProof(send, ['name', 'pin', 'password'])
+  const proof = useProof(send, ['name', 'role', 'pin', 'password'])
   return {
     fields,
     proof: {

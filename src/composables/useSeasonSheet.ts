@@ -7,19 +7,24 @@ import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
 import { addDays } from '../../shared/time/calendar.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import type { SheetMarks } from '../../shared/season/sheetPaths.ts'
+import type { Command } from '../api/commandTypes.ts'
 import { roundApi } from '../api/roundApi.ts'
+import { useOutbox } from '../stores/outbox.ts'
 import { useSession } from '../stores/session.ts'
 import { readThrough } from './readThrough.ts'
 import { useBlocks } from './useBlocks.ts'
 import { useFarm } from './useFarm.ts'
 import { useFarmRead } from './useFarmRead.ts'
 
+/** A job; `isKept`: its move to that day waits on this device for signal. */
+export interface SheetJob extends Job { isKept: boolean }
+
 export type SheetWork = SeasonSheet['works'][number] & { heldTo: string | null }
 
 /** A block's row of the sheet: what is on it. */
 export interface SheetRow {
   block: Block
-  jobs: Job[]
+  jobs: SheetJob[]
   works: SheetWork[]
   harvests: { from: string; to: string }[]
   /** Another kind of block begins: a firmer line over it. */
@@ -39,7 +44,7 @@ export interface Sheet {
   /** Empty: all of them. */
   planId: Ref<string>
   /** All jobs of the span, whichever plan is shown. */
-  jobs: ComputedRef<Job[]>
+  jobs: ComputedRef<SheetJob[]>
 }
 
 /** Plans of the farm; a certifier may not read them and does not ask. */
@@ -69,7 +74,8 @@ export function useSeasonSheet(): Sheet {
       return readThrough(`${session.farmId}/season-sheet/${asked.from}`, session.user?.id ?? '', () => roundApi.sheet(session.farmId, asked))
     },
   })
-  const jobs = computed(() => query.data.value?.jobs ?? [])
+  const keptMoves = useKeptMoves()
+  const jobs = computed(() => (query.data.value?.jobs ?? []).map((job) => asKept(job, keptMoves.value.get(job.id))))
   const shown = computed(() => (planId.value === '' ? jobs.value : jobs.value.filter((job) => job.planId === planId.value)))
   const works = computed<SheetWork[]>(() => (query.data.value?.works ?? []).map((work) => ({ ...work, heldTo: heldTo(work, farm.value?.zone ?? 'UTC') })))
 
@@ -92,6 +98,17 @@ export function useSeasonSheet(): Sheet {
       harvests: rows.value.flatMap((row, index) => row.harvests.map((harvest) => ({ ...harvest, row: index }))),
     })),
   }
+}
+
+/** Days to which jobs were moved without signal, by job; null for one that goes back to its target. */
+function useKeptMoves(): ComputedRef<ReadonlyMap<string, string | null>> {
+  const outbox = useOutbox()
+  return computed(() => new Map(outbox.kept.flatMap(({ command }) => (command.kind === 'job.move' ? [[command.id, (command as Command<'job.move'>).body.to] as const] : []))))
+}
+
+/** A job on the day to which it was moved on this device: its window and state stay those that the farm knows. */
+export function asKept(job: Job, to: string | null | undefined): SheetJob {
+  return to === undefined ? { ...job, isKept: false } : { ...job, plannedOn: to ?? job.targetOn, isMoved: to !== null, isKept: true }
 }
 
 /** Blocks are coded by kind: A1, A2, then P1. */

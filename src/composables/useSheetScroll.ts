@@ -7,13 +7,15 @@ export interface SheetScrollOptions {
   dayWidth: () => number
   /** Days drawn at once. */
   stretch: number
+  /** The first Monday, as a day from 0. */
+  monday: () => number
 }
 
 /**
  * Which stretches of the sheet are in sight, and one more on each side. A scroll that stays inside them changes nothing, so most
  * frames of a scroll run no work of ours at all.
  */
-export function useSheetScroll({ box, days, dayWidth, stretch }: SheetScrollOptions): { shown: ComputedRef<number[]>; onScroll: () => void; show: (day: number, share?: number) => void } {
+export function useSheetScroll({ box, days, dayWidth, stretch, monday }: SheetScrollOptions): { shown: ComputedRef<number[]>; onScroll: () => void; show: (day: number, share?: number) => void } {
   const first = ref(0)
   const last = ref(1)
 
@@ -27,18 +29,22 @@ export function useSheetScroll({ box, days, dayWidth, stretch }: SheetScrollOpti
     if (to !== last.value) last.value = to
   }
 
-  /** Scrolls so that a day is in sight: at a share of the width where one is given, else no further than it must. */
+  /** Scrolls so that a day is in sight: at about a share of the width where one is given, so that a week begins at the edge, else no further than it must. */
   function show(day: number, share?: number): void {
     const at = box.value
     if (at === null) return
     const x = day * dayWidth()
     const room = at.clientWidth - names(at)
-    if (share !== undefined) at.scrollLeft = x - room * share
+    if (share !== undefined) at.scrollLeft = weekBefore(x - room * share)
     else if (x < at.scrollLeft) at.scrollLeft = x - dayWidth()
     else if (x + 2 * dayWidth() > at.scrollLeft + room) at.scrollLeft = x + 2 * dayWidth() - room
     onScroll()
   }
 
+  function weekBefore(left: number): number {
+    const [start, week] = [monday() * dayWidth(), 7 * dayWidth()]
+    return start + Math.floor((left - start) / week) * week
+  }
   const names = (at: HTMLElement): number => at.querySelector<HTMLElement>('.sheet-names')?.offsetWidth ?? 0
   const watcher = new ResizeObserver(onScroll)
   onMounted(() => { if (box.value !== null) watcher.observe(box.value); onScroll() })

@@ -110,6 +110,8 @@ export const useOutbox = defineStore('outbox', () => {
       try {
         await sendAndSettle(item.command)
         await device.outbox.delete(item.key)
+        // What was sent is not said to wait while others still do.
+        await refresh()
       } catch (error) {
         if (mustWait(error)) break
         if (!(error instanceof ApiError)) throw error

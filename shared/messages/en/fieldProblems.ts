@@ -32,7 +32,7 @@ export const fieldProblems = {
     needs_volume: 'This material is measured by volume. Choose a unit of volume.',
     needs_mass: 'This material is measured by mass. Choose a unit of mass.',
   },
-  date: { invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.', to_before_from: 'The last day must come after the first.', window_too_long: 'Ask about a year at most at once.' },
+  date: { years: 'A year from 1970 to 2199.', invalid: 'There is no such date. Write year, month and day, such as 2026-06-16.', to_before_from: 'The last day must come after the first.', window_too_long: 'Ask about a year at most at once.' },
   time: {
     zone_needed: 'Give the time with its offset, such as 2026-06-16T06:50:00-07:00.',
     range: 'This year is out of range.',

@@ -1,6 +1,6 @@
 /** Words of grants: the farm's own list, a certifier's list of farms, and what goes out of a season. */
 export const grants = {
-  title: 'Grants',
+  title: 'Certifiers',
   intro: 'Whom you let read which seasons, and until when. They read and download; they change nothing.',
   give: 'Grant seasons',
   none: 'Nobody from outside reads this farm.',
@@ -18,7 +18,7 @@ export const grants = {
   seen: {
     band: 'As {who} sees it',
     bandText: 'Season {seasons}, until {day}. Read only: this is what the server answers them now. That you looked stands in the journal.',
-    back: 'Back to the grants',
+    back: 'Back to the certifiers',
     season: 'Season',
     every: 'every season granted',
     failed: 'What they see could not be read.',
@@ -41,7 +41,6 @@ export const grants = {
     password: 'Your password',
     save: 'Grant seasons',
     saveChange: 'Change grant',
-    leave: 'Leave it',
     needPassword: 'Type your password.',
     given: '{who} may read season {seasons} until {day}.',
     changed: 'The grant of {who} is changed.',

@@ -14,6 +14,7 @@ export const ground = {
     well: 'well', spring: 'spring', watercourse: 'watercourse', pond: 'pond or lake', hives: 'hives', dwelling: 'dwelling', school: 'school', neighbourCrop: 'neighbour’s crop', other: 'other',
   },
   groundKind: { track: 'track or lane', water: 'water', building: 'building', hedge: 'hedge', other: 'other' },
+  missing: { site: 'No such place to keep clear of.', ground: 'No such piece of ground.', text: 'It is not on this farm, or the address is not whole.' },
   list: {
     sites: 'To keep clear of',
     sitesCaption: 'Sites to keep clear of, with their distances',

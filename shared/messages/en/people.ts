@@ -15,6 +15,8 @@ export const people = {
   yourPassword: 'Your password',
   yourPasswordHint: 'It is asked again because this changes who may do what.',
   person: {
+    missing: 'No such person on this farm.',
+    missingText: 'Nobody of this farm stands under that address, or the address is not whole.',
     email: 'E-mail',
     factor: 'Second factor',
     factorOn: 'set up',

@@ -32,7 +32,7 @@ export const fieldProblems = {
     needs_volume: 'Este material se mide por volumen. Elija una unidad de volumen.',
     needs_mass: 'Este material se mide por peso. Elija una unidad de peso.',
   },
-  date: { invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.', to_before_from: 'El último día debe ser posterior al primero.', window_too_long: 'Pida un año como máximo de una vez.' },
+  date: { years: 'Un año de 1970 a 2199.', invalid: 'Esa fecha no existe. Escriba año, mes y día, como 2026-06-16.', to_before_from: 'El último día debe ser posterior al primero.', window_too_long: 'Pida un año como máximo de una vez.' },
   time: {
     zone_needed: 'Indique la hora con su desfase, como 2026-06-16T06:50:00-07:00.',
     range: 'Ese año queda fuera de lo posible.',

@@ -1,7 +1,7 @@
 import type { Messages } from '../en.ts'
 
 export const grants: Messages['grants'] = {
-  title: 'Concesiones',
+  title: 'Certificadoras',
   intro: 'A quién deja leer qué campañas y hasta cuándo. Leen y descargan; no cambian nada.',
   give: 'Conceder campañas',
   none: 'Nadie de fuera lee esta finca.',
@@ -18,7 +18,7 @@ export const grants: Messages['grants'] = {
   seen: {
     band: 'Como lo ve {who}',
     bandText: 'Campaña {seasons}, hasta el {day}. Solo lectura: es lo que el servidor le contesta ahora. Que usted lo miró queda en el diario.',
-    back: 'Volver a las concesiones',
+    back: 'Volver a las certificadoras',
     season: 'Campaña',
     every: 'todas las concedidas',
     failed: 'No se pudo leer lo que ve.',
@@ -42,7 +42,6 @@ export const grants: Messages['grants'] = {
     password: 'Su contraseña',
     save: 'Conceder campañas',
     saveChange: 'Cambiar la concesión',
-    leave: 'Dejarlo',
     needPassword: 'Escriba su contraseña.',
     given: '{who} puede leer la campaña {seasons} hasta el {day}.',
     changed: 'La concesión de {who} está cambiada.',

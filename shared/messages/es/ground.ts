@@ -14,6 +14,7 @@ export const ground = {
     well: 'pozo', spring: 'manantial', watercourse: 'arroyo o río', pond: 'estanque o laguna', hives: 'colmenas', dwelling: 'vivienda', school: 'escuela', neighbourCrop: 'cultivo del vecino', other: 'otro',
   },
   groundKind: { track: 'camino', water: 'agua', building: 'edificio', hedge: 'seto', other: 'otro' },
+  missing: { site: 'Ese lugar que respetar no existe.', ground: 'Ese elemento del terreno no existe.', text: 'No está en esta finca, o la dirección no está completa.' },
   list: {
     sites: 'De qué guardar distancia',
     sitesCaption: 'Lugares de los que se guarda distancia, con sus metros',

@@ -17,6 +17,8 @@ export const people: Messages['people'] = {
   yourPassword: 'Su contraseña',
   yourPasswordHint: 'Se pide otra vez porque esto cambia quién puede hacer qué.',
   person: {
+    missing: 'Esa persona no está en esta finca.',
+    missingText: 'Nadie de esta finca tiene esa dirección, o la dirección no está completa.',
     email: 'Correo',
     factor: 'Segundo factor',
     factorOn: 'puesto',

@@ -20,6 +20,11 @@ describe('the paths of a stretch of the season sheet', () => {
     expect(sheetPaths(marks({ jobs: [job(state)] }), STRETCH, SCALE)[state]).toMatch(ends)
   })
 
+  it('frame the day to which a job was moved without signal, and no other', () => {
+    expect(sheetPaths(marks({ jobs: [job('due', { isKept: true })] }), STRETCH, SCALE).kept).toBe('M67.5 3H86.5v19H67.5Z')
+    expect(sheetPaths(marks({ jobs: [job('due'), job('done', { isKept: true })] }), STRETCH, SCALE).kept).toBe('')
+  })
+
   it('leave a done job to the mark of its work, and put no mark where a job is skipped', () => {
     const paths = sheetPaths(marks({ jobs: [job('done'), job('skipped')], works: [{ row: 0, on: '2026-06-04', method: 'foliar', heldTo: null }] }), STRETCH, SCALE)
     expect(paths.foliar).not.toBe('')
