@@ -3,6 +3,7 @@ import type { Welcome } from '../../shared/contract/welcome.ts'
 import { Account } from '../entities/Account.ts'
 import { AppError } from '../errors.ts'
 import { accountOf } from './accountOf.ts'
+import { describeGrant } from './grants/describeGrant.ts'
 import { describeInvitation, takeInvitation } from './invitations/takeInvitation.ts'
 import { endLinks, findLink, issueLink, spendLink } from './oneTimeLinks.ts'
 import { assertGoodPassword } from './passwordRules.ts'
@@ -21,11 +22,12 @@ export async function inviteOwner(services: Pick<Services, 'clock' | 'database'>
   })
 }
 
-/** Whom a link is for, and onto which farm. @throws {AppError} `welcome.used_up`. */
+/** Whom a link is for, onto which farm, and what it lets them read. @throws {AppError} `welcome.used_up`. */
 export async function readWelcome(services: Parts, token: string): Promise<Welcome> {
   const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, token, ['welcome', 'invitation']))
   const invitation = link.kind === 'invitation' ? await describeInvitation(services, link) : null
-  return { email: account.email ?? '', needsPassword: link.kind === 'welcome' || account.passwordHash === null, invitation }
+  const grant = await describeGrant(services, link)
+  return { email: account.email ?? '', needsPassword: link.kind === 'welcome' || account.passwordHash === null, invitation, grant }
 }
 
 /**

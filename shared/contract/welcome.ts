@@ -15,6 +15,8 @@ export const welcomeSchema = z.object({
   invitation: z.object({
     farmId: z.string(), farm: z.string(), by: z.string(), role: z.enum(INVITED_ROLES), language: z.enum(['en', 'es']), name: z.string().nullable(),
   }).nullable(),
+  /** What a certifier without an account was let in to read. */
+  grant: z.object({ farm: z.string(), seasons: z.array(z.number().int()), endsOn: z.string() }).nullable(),
 })
 export type Welcome = z.infer<typeof welcomeSchema>
 

@@ -67,6 +67,8 @@ describe('giving a grant', () => {
     expect(letters).toHaveLength(1)
     const token = /\/welcome\/([\w-]+)/.exec(letters[0]?.text ?? '')?.[1]
     const fresh = supertest.agent(house.app)
+    const welcome = async (): Promise<unknown> => (await fresh.get(`/api/welcome/${token}`).expect(200)).body
+    expect(await welcome()).toEqual({ email, needsPassword: true, invitation: null, grant: { farm: expect.stringMatching(/^Farm /), seasons: [2026], endsOn: '2027-01-31' } })
     await fresh.post('/api/welcome').set('X-Requested-With', 'drenchleaf').send({ token, name: 'Mirel Achter', password: PASSWORD }).expect(204)
     await fresh.post('/api/session').set('X-Requested-With', 'drenchleaf').send({ email, password: PASSWORD }).expect(200)
     expect((await fresh.get('/api/my-farms').expect(200)).body.items).toMatchObject([{ farmId: farm.id, season: 2026, grantedTo: '2027-01-31' }])

@@ -13,7 +13,7 @@ const MINUTES_TO_ACCEPT = 14 * 24 * 60
 /** Tells a certifier by letter what is open to them, in the transaction of the grant; who cannot sign in yet gets a link to make a password. */
 export async function tellOfGrant(services: Pick<Services, 'clock' | 'config'>, manager: EntityManager, actor: FarmActor, { account, email, grant }: { account: Account; email: string; grant: Grant }): Promise<void> {
   const { farmId, farmName, personName, zone } = actor
-  const link = account.passwordHash === null ? await issueLink(services, manager, { accountId: account.id, kind: 'welcome', minutes: MINUTES_TO_ACCEPT }) : null
+  const link = account.passwordHash === null ? await issueLink(services, manager, { accountId: account.id, kind: 'welcome', minutes: MINUTES_TO_ACCEPT, detail: { farmId, grantId: grant.id } }) : null
   await queueLetter(services, manager, {
     farmId, kind: 'grant', language: account.language,
     to: { email, name: account.passwordHash === null ? null : account.name },

@@ -50,6 +50,8 @@ export const letters = {
     withdrawn: 'Taken back: its link works no more.',
   },
   join: {
+    grantTitle: 'To read {farm}',
+    grantText: 'Season {seasons}, until {day}. You read and download; you change nothing. | Seasons {seasons}, until {day}. You read and download; you change nothing.',
     title: 'You are invited to {farm}',
     text: '{by} asks you to join. You would work as: {role}.',
     signIn: 'Sign in to take it',

@@ -50,6 +50,8 @@ export const letters = {
     withdrawn: 'Retirada: su enlace ya no sirve.',
   },
   join: {
+    grantTitle: 'Para leer {farm}',
+    grantText: 'Campaña {seasons}, hasta el {day}. Usted lee y descarga; no cambia nada. | Campañas {seasons}, hasta el {day}. Usted lee y descarga; no cambia nada.',
     title: 'Tiene una invitación a {farm}',
     text: '{by} le invita. Su función sería: {role}.',
     signIn: 'Entrar para aceptarla',

@@ -20,6 +20,9 @@ export interface FarmMapEvents extends EditEvents {
   moved(view: MapView, byHand: boolean): void
 }
 
+/** Pixels left free at each edge. */
+export interface MapRoom { top: number; right: number; bottom: number; left: number }
+
 /** The map of a farm: with its layers, the only modules that know Leaflet. */
 export interface FarmMap {
   showBlocks(blocks: readonly MapBlock[], chosenId: string | null, marks: MapMarks): void
@@ -31,8 +34,8 @@ export interface FarmMap {
   /** Imagery under everything, or paper with the farm's own ground where there is none. */
   setImagery(imagery: MapImagery | null): void
   setView(view: MapView): void
-  /** Shows all of these positions with a margin in pixels, another one below. */
-  fit(positions: readonly Position[], marginPx: number, bottomPx: number): void
+  /** Shows all of these positions with room round them. */
+  fit(positions: readonly Position[], room: MapRoom): void
   /** Moves as little as brings the position into view. */
   bringIntoView(position: Position): void
   pan(dx: number, dy: number): void
@@ -99,7 +102,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
       tiles = imagery === null ? null : tileLayer(imagery.url, { maxZoom: MOST_ZOOM, maxNativeZoom: imagery.maxZoom }).addTo(map)
     },
     setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),
-    fit: (positions, marginPx, bottomPx) => move(() => fitTo(map, positions, [marginPx, marginPx], [marginPx, bottomPx])),
+    fit: (positions, room) => move(() => fitTo(map, positions, room)),
     bringIntoView: (position) => move(() => map.panInside(toLatLng(position), { padding: EDGE_PX, animate: false })),
     pan: (dx, dy) => move(() => map.panBy([dx, dy], { animate: false })),
     view: () => viewOf(map),
@@ -118,10 +121,10 @@ function makeMap(host: HTMLElement): LeafletMap {
   }).setView(toLatLng(WORLD.centre), WORLD.zoom)
 }
 
-function fitTo(map: LeafletMap, positions: readonly Position[], topLeft: [number, number], bottomRight: [number, number]): void {
+function fitTo(map: LeafletMap, positions: readonly Position[], { top, right, bottom, left }: MapRoom): void {
   if (positions.length === 0) return
   const bounds = latLngBounds(positions.map(toLatLng))
-  map.fitBounds(bounds, { paddingTopLeft: topLeft, paddingBottomRight: bottomRight, maxZoom: MOST_FIT_ZOOM, animate: false })
+  map.fitBounds(bounds, { paddingTopLeft: [left, top], paddingBottomRight: [right, bottom], maxZoom: MOST_FIT_ZOOM, animate: false })
 }
 
 function viewOf(map: LeafletMap): MapView {
