@@ -1,6 +1,9 @@
 import type { Message } from '../contract/common.ts'
 import type { Water } from '../contract/recordContent.ts'
 import type { RecordSheet, SheetComponent } from '../mix/sheetTypes.ts'
+import { figureIn } from '../messages/readFigure.ts'
+import { readingUnit, type UnitSystem } from '../units/readingUnit.ts'
+import type { UnitCode } from '../units/unitTable.ts'
 import { settle } from './settle.ts'
 import { words } from './buildCheck.ts'
 
@@ -14,37 +17,51 @@ function shown(value: string | number): number {
   return exact.toDecimalPlaces(Math.min(MOST_DECIMALS, Math.max(0, DIGITS - whole))).toNumber()
 }
 
-function componentWorking(component: SheetComponent, name: string): Message | null {
+/** A figure that was worked out in a unit, as it is shown in the reader's. */
+type Read = (value: string | number, unit: UnitCode) => number
+interface Figures { read: Read; unit: (code: UnitCode) => UnitCode }
+
+const figuresFor = (units: UnitSystem): Figures => ({
+  read: (value, unit) => shown(figureIn(value, unit, units)),
+  unit: (code) => readingUnit(code, units),
+})
+
+function componentWorking(component: SheetComponent, name: string, { read, unit }: Figures): Message | null {
   const { amount, measure } = component
   if (amount === null) return null
-  const sum = { name, amount: shown(amount.value) }
+  const sum = { name, amount: read(amount.value, amount.unit), unit: unit(amount.unit), volumeUnit: unit('L') }
   const { params } = measure
-  const known = (key: string): number => shown(params[key] ?? 0)
+  const known = (key: string, code?: UnitCode): number => (code === undefined ? shown(params[key] ?? 0) : read(params[key] ?? 0, code))
   switch (measure.id) {
     case 'sheet.measure.ratio':
-      return words('records.working.ratio', { ...sum, water: known('waterL'), parts: known('parts') })
-    case 'sheet.measure.perArea':
-      return words('records.working.perArea', { ...sum, rate: known('value'), rateUnit: String(params['unit']), hectares: known('areaHa'), unit: amount.unit })
+      return words('records.working.ratio', { ...sum, water: known('waterL', 'L'), parts: known('parts') })
+    case 'sheet.measure.perArea': {
+      const rateUnit = String(params['unit']) as UnitCode
+      return words('records.working.perArea', { ...sum, rate: known('value', rateUnit), rateUnit: unit(rateUnit), area: known('areaHa', 'ha'), areaUnit: unit('ha') })
+    }
     case 'sheet.measure.ratioIn':
-      return words('records.working.ratioIn', { ...sum, total: known('totalL'), parts: known('parts') })
+      return words('records.working.ratioIn', { ...sum, total: known('totalL', 'L'), parts: known('parts') })
     case 'sheet.measure.perEach':
-      return words('records.working.perEach', { ...sum, value: known('value'), unit: amount.unit, count: known('count'), each: String(params['each']) })
+      return words('records.working.perEach', { ...sum, value: known('value', amount.unit), count: known('count'), each: String(params['each']) })
     case 'sheet.measure.total':
-      return words('records.working.inAll', { ...sum, unit: amount.unit })
+      return words('records.working.inAll', sum)
     case 'sheet.measure.perTank':
-      return words('records.working.perTank', { ...sum, value: known('value'), unit: amount.unit, count: known('loads') })
+      return words('records.working.perTank', { ...sum, value: known('value', amount.unit), count: known('loads') })
     default:
       return null
   }
 }
 
-function totalWorking({ totalL, waterL, sprayLPerHa, sprayPerEach, counts, areaHa }: RecordSheet, sizedFrom: Water['sizedFrom']): Message[] {
+function totalWorking({ totalL, waterL, sprayLPerHa, sprayPerEach, counts, areaHa }: RecordSheet, sizedFrom: Water['sizedFrom'], { read, unit }: Figures): Message[] {
   if (totalL === null || waterL === null || sprayLPerHa === null) return []
   const liquids = settle(totalL).minus(settle(waterL))
-  const figures = { water: shown(waterL), liquids: shown(liquids.toFixed()), total: shown(totalL), hectares: shown(areaHa), rate: shown(sprayLPerHa) }
+  const figures = {
+    water: read(waterL, 'L'), liquids: read(liquids.toFixed(), 'L'), total: read(totalL, 'L'), volumeUnit: unit('L'),
+    area: read(areaHa, 'ha'), areaUnit: unit('ha'), rate: read(sprayLPerHa, 'L/ha'), rateUnit: unit('L/ha'),
+  }
   if (sprayPerEach) {
     const { each, litres } = sprayPerEach
-    const byEach = { ...figures, each, litres: shown(litres), count: shown(counts[each] ?? 0) }
+    const byEach = { ...figures, each, litres: read(litres, 'L'), count: shown(counts[each] ?? 0) }
     return [words('records.working.perEachTotal', byEach), words('records.working.waterLeft', figures)]
   }
   return sizedFrom !== 'sprayRate'
@@ -52,26 +69,34 @@ function totalWorking({ totalL, waterL, sprayLPerHa, sprayPerEach, counts, areaH
     : [words('records.working.fromRate', figures), words('records.working.waterLeft', figures)]
 }
 
-function massWorking({ totalKg, kgPerHa, areaHa }: RecordSheet): Message[] {
+function massWorking({ totalKg, kgPerHa, areaHa }: RecordSheet, { read, unit }: Figures): Message[] {
   if (totalKg === null) return []
-  const figures = { total: shown(totalKg), hectares: shown(areaHa), rate: shown(kgPerHa ?? 0) }
+  const figures = {
+    total: read(totalKg, 'kg'), massUnit: unit('kg'), area: read(areaHa, 'ha'), areaUnit: unit('ha'), rate: read(kgPerHa ?? 0, 'kg/ha'), rateUnit: unit('kg/ha'),
+  }
   return [words('records.working.totalKg', figures), ...(kgPerHa === null ? [] : [words('records.working.kgPerHa', figures)])]
 }
 
-function loadsWorking({ loads, totalL }: RecordSheet): Message[] {
+function loadsWorking({ loads, totalL }: RecordSheet, { read, unit }: Figures): Message[] {
   if (loads === null || totalL === null) return []
-  return [words('records.working.loads', { total: shown(totalL), tank: shown(loads.tankL), full: loads.full, last: shown(loads.lastL) })]
+  return [words('records.working.loads', { total: read(totalL, 'L'), tank: read(loads.tankL, 'L'), full: loads.full, last: read(loads.lastL, 'L'), volumeUnit: unit('L') })]
 }
 
-/**
- * How the figures of a sheet were worked out, one sum a line, in the order they follow from each other.
- * @param names of the components, in the sheet's order.
- */
-export function workingLines(sheet: RecordSheet, { names, sizedFrom }: { names: readonly string[]; sizedFrom: Water['sizedFrom'] }): Message[] {
+interface WorkingOptions {
+  /** Of the components, in the sheet's order. */
+  names: readonly string[]
+  sizedFrom: Water['sizedFrom']
+  /** What the reader reads figures in. */
+  units: UnitSystem
+}
+
+/** How the figures of a sheet were worked out, one sum a line, in the order they follow from each other, every figure in the reader's measures. */
+export function workingLines(sheet: RecordSheet, { names, sizedFrom, units }: WorkingOptions): Message[] {
+  const figures = figuresFor(units)
   const components = sheet.components
-    .map((component, index) => componentWorking(component, names[index] ?? ''))
+    .map((component, index) => componentWorking(component, names[index] ?? '', figures))
     .filter((line) => line !== null)
-  const total = totalWorking(sheet, sizedFrom)
+  const total = totalWorking(sheet, sizedFrom, figures)
   const isTotalFirst = sizedFrom === 'sprayRate' || sizedFrom === 'perEach'
-  return [...(isTotalFirst ? [...total, ...components] : [...components, ...total]), ...massWorking(sheet), ...loadsWorking(sheet)]
+  return [...(isTotalFirst ? [...total, ...components] : [...components, ...total]), ...massWorking(sheet, figures), ...loadsWorking(sheet, figures)]
 }

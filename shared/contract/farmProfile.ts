@@ -1,10 +1,8 @@
 import { z } from 'zod'
+import { UNIT_SYSTEMS } from '../units/readingUnit.ts'
 import { acknowledgedSchema, civilDateSchema, revisionSchema } from './common.ts'
 import { seasonStartSchema } from './seasonStart.ts'
 import { lineText, noteText } from './text.ts'
-
-/** Which figures a farm reads first. */
-export const FARM_UNITS = ['metric', 'us'] as const
 
 /** Public law that a farm may say it works under; named only, nothing is judged by it yet. Titles and citations stand in the messages. */
 export const RULE_SETS = ['usOrganic', 'usProduceSafety', 'usWorkerProtection', 'euOrganic'] as const
@@ -38,7 +36,7 @@ export const placeSchema = z.tuple([z.number().min(-180).max(180), z.number().mi
 export const calibrationDaysSchema = z.number().int().min(1).max(1830)
 
 const profileFields = {
-  units: z.enum(FARM_UNITS),
+  units: z.enum(UNIT_SYSTEMS),
   certificate: certificateSchema.nullable(),
   contact: contactSchema.nullable(),
   ruleSets: z.array(z.enum(RULE_SETS)).max(RULE_SETS.length),

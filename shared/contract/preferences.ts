@@ -1,9 +1,7 @@
 import { z } from 'zod'
+import { UNIT_SYSTEMS } from '../units/readingUnit.ts'
 import { amountUnit, positiveDecimal } from './quantity.ts'
 import { lineText } from './text.ts'
-
-/** Systems of measure that figures can be read in. */
-export const UNIT_SYSTEMS = ['metric', 'us'] as const
 
 export const measuresSchema = z.array(z.strictObject({ name: lineText(24).nullable(), value: positiveDecimal, unit: amountUnit })).max(20)
 
@@ -11,6 +9,7 @@ export const measuresSchema = z.array(z.strictObject({ name: lineText(24).nullab
 export const preferencesSchema = z.strictObject({
   /** Measures at hand. */
   measures: measuresSchema.optional(),
+  /** What figures are read in; without a choice, as the farm reads them. */
   units: z.enum(UNIT_SYSTEMS).optional(),
   /** Day, or dark for the cab before sunrise. */
   light: z.enum(['day', 'dawn']).optional(),

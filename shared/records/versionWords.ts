@@ -23,7 +23,7 @@ export const amountWords = (amount: { value: string; unit: string } | null): Mes
   (amount === null ? [] : [words('versions.amount', { value: shownDecimal(amount.value), unit: amount.unit })])
 
 /** A figure that was worked out, to four decimals. */
-export const figureWords = (value: string | null, unit: string): Message[] => amountWords(value === null ? null : { value: roundDecimal(value, 4), unit })
+export const figureWords = (value: string | null, unit: string): Message[] => (value === null ? [] : [words('versions.figure.workedOut', { value: shownDecimal(roundDecimal(value, 4)), unit })])
 
 export const knownWords = (amount: { value: string; unit: string; known: 'measured' | 'counted' | 'workedOut' } | null): Message[] =>
   (amount === null ? [] : [...amountWords(amount), words(`records.known.${amount.known}`)])

@@ -5,12 +5,12 @@ import type { Sprayer } from '../contract/farm.ts'
 import { basisSchema, countsSchema, methodSchema, partSchema, waterSchema } from '../contract/recordContent.ts'
 import { partArea } from '../geo/partArea.ts'
 import { formatDayShort } from '../messages/formatDayShort.ts'
+import { areaFor, unitFor } from '../messages/readFigure.ts'
 import { recordSheet } from '../mix/recordSheet.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
 import { lineCounts } from '../records/lineCounts.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
-import { formatHectares, formatVolumeL } from '../units/formatQuantity.ts'
-import { presentRate, type RegisterPlace } from './presentRow.ts'
+import { presentRate, presentVolume, type RegisterPlace } from './presentRow.ts'
 import type { RegisterLine } from './registerLine.ts'
 
 /** Half-typed content of a record: whatever does not read is left out of the line. */
@@ -53,7 +53,8 @@ export interface FarmStock {
 }
 
 /** A draft of this device as a line of the register, its figures worked out as far as they are typed. */
-export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zone }: RegisterPlace): RegisterLine {
+export function presentDraft(draft: DraftFacts, stock: FarmStock, place: RegisterPlace): RegisterLine {
+  const { language, zone } = place
   const content = draftSchema.catch({ method: null, lines: [], components: [], water: null, sprayerId: null }).parse(draft.content)
   const blocks = content.lines.flatMap(({ blockId }) => stock.blocks.find(({ id }) => id === blockId) ?? [])
   const sheet = blocks.length === 0 ? null : sheetOf(content, stock)
@@ -73,10 +74,11 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, { language, zo
     lots: namesOf(content.components.map(({ lotId }) => lotId), stock.lots, 'code'),
     day: formatDayShort(language, civilDateIn(zone, at)),
     start: civilTimeIn(zone, at),
-    hectares: sheet === null ? '' : formatHectares(sheet.areaM2, language),
-    litres: totalL === null ? '' : formatVolumeL(totalL, language),
+    area: sheet === null ? '' : areaFor(place, sheet.areaM2),
+    areaText: sheet === null ? '' : `${areaFor(place, sheet.areaM2)}\u00A0${unitFor(place, 'ha')}`,
+    ...presentVolume(place, totalL),
     mass: '',
-    rate: presentRate(language, sheet?.sprayLPerHa ?? null),
+    rate: presentRate(place, sheet?.sprayLPerHa ?? null, 'L/ha'),
     by: draft.by,
     lateHours: null,
     tally: null,

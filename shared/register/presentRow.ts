@@ -1,12 +1,12 @@
 import type { RegisterRow } from '../contract/record.ts'
 import { formatDayShort } from '../messages/formatDayShort.ts'
-import { translate, type Language } from '../messages/translate.ts'
+import { figureFor, figureIn, quantityFor, unitFor, type Reader } from '../messages/readFigure.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
-import { formatNumber, formatRate, formatVolumeL } from '../units/formatQuantity.ts'
+import { formatNumber } from '../units/formatQuantity.ts'
+import type { UnitCode } from '../units/unitTable.ts'
 import type { RegisterLine } from './registerLine.ts'
 
-export interface RegisterPlace {
-  language: Language
+export interface RegisterPlace extends Reader {
   /** IANA zone of the farm. */
   zone: string
   /** Season whose numbers are printed without their year. */
@@ -17,7 +17,8 @@ export interface RegisterPlace {
 const WHOLE_FROM = 100
 
 /** A row of the register in words: times in the farm's zone, figures rounded for display. */
-export function presentRow(row: RegisterRow, { language, zone, season }: RegisterPlace): RegisterLine {
+export function presentRow(row: RegisterRow, place: RegisterPlace): RegisterLine {
+  const { language, zone, season } = place
   const at = row.startedAt
   return {
     id: row.id,
@@ -33,21 +34,28 @@ export function presentRow(row: RegisterRow, { language, zone, season }: Registe
     lots: row.lots.join(', '),
     day: at === null ? '' : formatDayShort(language, civilDateIn(zone, at)),
     start: at === null ? '' : civilTimeIn(zone, at),
-    hectares: formatNumber(row.areaHa, { digits: 2 }, language),
-    litres: row.totalL === null ? '' : formatVolumeL(row.totalL, language),
-    mass: row.totalKg === null ? '' : translate(language, 'register.kilogramsUnit', { value: formatNumber(row.totalKg, { digits: 1 }, language) }),
-    rate: presentRate(language, row.sprayLPerHa) || presentRate(language, row.kgPerHa, 'register.massRate'),
+    area: figureFor(place, row.areaHa, 'ha', { digits: 2 }),
+    areaText: quantityFor(place, row.areaHa, 'ha', { digits: 2 }),
+    ...presentVolume(place, row.totalL),
+    mass: row.totalKg === null ? '' : quantityFor(place, row.totalKg, 'kg', { digits: 1 }),
+    rate: presentRate(place, row.sprayLPerHa, 'L/ha') || presentRate(place, row.kgPerHa, 'kg/ha'),
     by: row.by,
     lateHours: row.lateHours,
     tally: row.tally,
   }
 }
 
-/** Litres (or, by another message, kilograms) a hectare with their unit, whole from 100 up, else three digits of it; empty where there is no rate. */
-export function presentRate(language: Language, perHa: string | number | null, message: 'register.rate' | 'register.massRate' = 'register.rate'): string {
+/** What was put on by volume, in words; empty where there is none. @param totalL litres. */
+export function presentVolume(reader: Reader, totalL: string | number | null): Pick<RegisterLine, 'volume' | 'volumeText'> {
+  if (totalL === null) return { volume: '', volumeText: '' }
+  return { volume: figureFor(reader, totalL, 'L', { digits: 1 }), volumeText: quantityFor(reader, totalL, 'L', { digits: 1 }) }
+}
+
+/** A rate with its unit, whole from 100 up, else three digits of it; empty where there is none. @param perHa litres or kilograms a hectare. */
+export function presentRate(reader: Reader, perHa: string | number | null, unit: Extract<UnitCode, 'L/ha' | 'kg/ha'>): string {
   if (perHa === null) return ''
-  const value = Number(perHa) >= WHOLE_FROM ? formatNumber(perHa, { digits: 0 }, language) : formatRate(perHa, language, 3)
-  return translate(language, message, { value })
+  const rate = figureIn(perHa, unit, reader.units)
+  return `${formatNumber(rate, Number(rate) >= WHOLE_FROM ? { digits: 0 } : { significant: 3 }, reader.language)}\u00A0${unitFor(reader, unit)}`
 }
 
 /** "0143" of "2026-0143". */

@@ -1,6 +1,6 @@
 import type { Method } from '../contract/recordContent.ts'
 
-/** What a line of the register shows, in words of a language; empty text where there is nothing to show. */
+/** What a line of the register shows, in the words and measures of a reader; empty text where there is nothing to show. */
 export interface RegisterLine {
   id: string
   state: 'draft' | 'started' | 'signed' | 'withdrawn'
@@ -18,8 +18,12 @@ export interface RegisterLine {
   lots: string
   day: string
   start: string
-  hectares: string
-  litres: string
+  /** Ground treated, a figure in hectares or acres; and the same with its unit. */
+  area: string
+  areaText: string
+  /** What was put on by volume, a figure in litres or US gallons; and the same with its unit. */
+  volume: string
+  volumeText: string
   /** With its unit: of what was spread solid. */
   mass: string
   rate: string

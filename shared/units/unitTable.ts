@@ -1,6 +1,6 @@
 /** What a unit measures; only units of one dimension convert into each other. */
 export type Dimension =
-  | 'volume' | 'mass' | 'area' | 'length' | 'speed' | 'temperature' | 'pressure' | 'volumePerArea' | 'massPerArea'
+  | 'volume' | 'mass' | 'area' | 'length' | 'speed' | 'temperature' | 'temperatureStep' | 'pressure' | 'volumePerArea' | 'massPerArea' | 'volumePerTime'
 
 /** SI (or stored) value = (value + `offset`) × `toSi[0]` ÷ `toSi[1]`, both exact decimals. */
 export interface UnitRow {
@@ -19,9 +19,9 @@ const ACRE_HA = '0.40468564224'
 
 /**
  * Every unit of the product with its exact factor: litres, kilograms, square metres, metres, metres a second, kelvin, pascal,
- * litres a hectare, kilograms a hectare.
+ * litres a hectare, kilograms a hectare, litres a minute.
  * @source defining constants: US gallon 231 in³, imperial gallon 4.54609 L, international foot 0.3048 m, acre 4046.8564224 m²
- * (international foot), pound 0.45359237 kg, knot 1852 m/h, standard gravity 9.80665 m/s² (NIST SP 811, Handbook 44 App. C).
+ * (international foot), mile 5280 ft, pound 0.45359237 kg, knot 1852 m/h, standard gravity 9.80665 m/s² (NIST SP 811, Handbook 44 App. C).
  */
 export const UNITS = {
   L: unit('volume', '1'),
@@ -42,7 +42,10 @@ export const UNITS = {
   m2: unit('area', '1'),
   ha: unit('area', '10000'),
   acre: unit('area', '4046.8564224'),
+  ft2: unit('area', '0.09290304'),
   m: unit('length', '1'),
+  km: unit('length', '1000'),
+  mi: unit('length', '1609.344'),
   ft: unit('length', '0.3048'),
   in: unit('length', '0.0254'),
   kmh: unit('speed', '1', '3.6'),
@@ -51,6 +54,9 @@ export const UNITS = {
   knot: unit('speed', '1852', '3600'),
   degC: unit('temperature', '1', '1', '273.15'),
   degF: unit('temperature', '5', '9', '459.67'),
+  /** How far apart two temperatures are, as of a delta T: no zero of its own. */
+  diffC: unit('temperatureStep', '1'),
+  diffF: unit('temperatureStep', '5', '9'),
   bar: unit('pressure', '100000'),
   psi: unit('pressure', '4.4482216152605', '0.00064516'),
   'L/ha': unit('volumePerArea', '1'),
@@ -61,6 +67,8 @@ export const UNITS = {
   'galImp/acre': unit('volumePerArea', '4.54609', ACRE_HA),
   'kg/ha': unit('massPerArea', '1'),
   'lb/acre': unit('massPerArea', '0.45359237', ACRE_HA),
+  'L/min': unit('volumePerTime', '1'),
+  'galUS/min': unit('volumePerTime', '3.785411784'),
 } as const satisfies Record<string, UnitRow>
 
 export type UnitCode = keyof typeof UNITS

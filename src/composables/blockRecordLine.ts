@@ -1,7 +1,8 @@
 import type { RegisterRow } from '../../shared/contract/record.ts'
 import type { Method } from '../../shared/contract/recordContent.ts'
 import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
-import { translate, type Language } from '../../shared/messages/translate.ts'
+import { figureIn, unitFor, type Reader } from '../../shared/messages/readFigure.ts'
+import { translate } from '../../shared/messages/translate.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
 
@@ -18,13 +19,15 @@ export interface BlockRecordLine {
   rate: string | null
 }
 
-/** Litres per hectare: whole from 100 up, one decimal below. */
-function rateText(language: Language, rate: string): string {
-  return formatNumber(rate, { digits: Number(rate) >= 100 ? 0 : 1 }, language)
+/** "510 L/ha": whole from 100 up, one decimal below. */
+function rateText(reader: Reader, lPerHa: string): string {
+  const rate = figureIn(lPerHa, 'L/ha', reader.units)
+  return `${formatNumber(rate, { digits: Number(rate) >= 100 ? 0 : 1 }, reader.language)}\u00A0${unitFor(reader, 'L/ha')}`
 }
 
 /** One register row as a line of its block's page. @param zone the farm's time zone. */
-export function blockRecordLine(language: Language, zone: string, row: RegisterRow): BlockRecordLine {
+export function blockRecordLine(reader: Reader, zone: string, row: RegisterRow): BlockRecordLine {
+  const { language } = reader
   const started = row.startedAt === null ? '' : formatDayShort(language, civilDateIn(zone, row.startedAt))
   const word = translate(language, 'blocks.page.started')
   const fullNumber = row.number ?? word
@@ -36,6 +39,6 @@ export function blockRecordLine(language: Language, zone: string, row: RegisterR
     day: started,
     method: row.method,
     preparation: row.preparations.join(', '),
-    rate: row.sprayLPerHa === null ? null : translate(language, 'blocks.page.rate', { figure: rateText(language, row.sprayLPerHa) }),
+    rate: row.sprayLPerHa === null ? null : rateText(reader, row.sprayLPerHa),
   }
 }

@@ -1,7 +1,7 @@
 import type { Block } from '../../shared/contract/block.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
-import { translate, type Language } from '../../shared/messages/translate.ts'
-import { formatHectares, formatNumber } from '../../shared/units/formatQuantity.ts'
+import { readingUnit } from '../../shared/units/readingUnit.ts'
+import { areaFor, quantityFor, unitFor, type Reader } from '../../shared/messages/readFigure.ts'
 
 /** A block with its figures in words, as list and map show it. */
 export interface BlockWords extends Block {
@@ -15,26 +15,36 @@ export interface BlockWords extends Block {
   spoken: string
 }
 
-/** Figures of a block in a person's language: hectares to 2 decimals (4 under 0.01 ha), metres whole. */
-export function blockWords(language: Language, block: Block): BlockWords {
-  const areaFigure = hectaresText(language, block.areaM2)
+/** Figures of a block as a person reads them: areas to 2 decimals (4 under 100 m²), lengths whole. */
+export function blockWords(reader: Reader, block: Block): BlockWords {
+  const areaFigure = areaText(reader, block.areaM2)
   return {
     ...block,
     areaFigure,
-    areaText: translate(language, 'blocks.hectares', { figure: areaFigure }),
-    perimeterText: metresText(language, block.perimeterM),
-    spoken: renderMessage(language, { id: 'blocks.spoken', params: { code: block.code, name: block.name, area: areaFigure } }),
+    areaText: areaWords(reader, block.areaM2),
+    perimeterText: lengthWords(reader, block.perimeterM),
+    spoken: spokenWords(reader, { code: block.code, name: block.name, area: areaFigure }),
   }
+}
+
+/** "A3, Long Bank 3, 0.93 ha". @param area its figure. */
+export function spokenWords(reader: Reader, { code, name, area }: { code: string; name: string; area: string }): string {
+  return renderMessage(reader.language, { id: 'blocks.spoken', params: { code, name, area, areaUnit: readingUnit('ha', reader.units) } })
 }
 
 const SMALL_M2 = 100
 
-/** Hectares of an area in square metres; small ones keep 4 decimals, a square metre. */
-export function hectaresText(language: Language, areaM2: number): string {
-  return formatHectares(areaM2, language, areaM2 < SMALL_M2 ? 4 : 2)
+/** The figure of an area in square metres; a small one keeps 4 decimals. */
+export function areaText(reader: Reader, areaM2: number): string {
+  return areaFor(reader, areaM2, areaM2 < SMALL_M2 ? 4 : 2)
+}
+
+/** "0.93 ha". */
+export function areaWords(reader: Reader, areaM2: number): string {
+  return `${areaText(reader, areaM2)}\u00A0${unitFor(reader, 'ha')}`
 }
 
 /** "414 m". */
-export function metresText(language: Language, metres: number): string {
-  return translate(language, 'blocks.page.metres', { figure: formatNumber(metres, { digits: 0 }, language) })
+export function lengthWords(reader: Reader, metres: number): string {
+  return quantityFor(reader, metres, 'm', { digits: 0 })
 }

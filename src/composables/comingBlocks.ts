@@ -1,21 +1,19 @@
 import { bbox, feature, featureCollection } from '@turf/turf'
-import { renderMessage } from '../../shared/messages/renderMessage.ts'
-import { translate, type Language } from '../../shared/messages/translate.ts'
-import { hectaresText } from './blockWords.ts'
+import type { Reader } from '../../shared/messages/readFigure.ts'
+import { areaText, areaWords, spokenWords } from './blockWords.ts'
 import type { ImportRow } from './importRows.ts'
 import type { MapBlock, MapView } from './mapTypes.ts'
 
 const PREFIX = 'shape '
 
 /** The shapes that come in, as the map draws them among the blocks that are there. */
-export function comingBlocks(language: Language, rows: readonly ImportRow[]): MapBlock[] {
+export function comingBlocks(reader: Reader, rows: readonly ImportRow[]): MapBlock[] {
   return rows.flatMap(({ number, code, name, geometry, areaM2, taken }) => {
     if (geometry === null || !taken) return []
-    const areaFigure = hectaresText(language, areaM2)
+    const areaFigure = areaText(reader, areaM2)
     return [{
       id: `${PREFIX}${number}`, code, geometry, areaM2, areaFigure, isComing: true,
-      areaText: translate(language, 'blocks.hectares', { figure: areaFigure }),
-      spoken: renderMessage(language, { id: 'blocks.spoken', params: { code, name, area: areaFigure } }),
+      areaText: areaWords(reader, areaM2), spoken: spokenWords(reader, { code, name, area: areaFigure }),
     }]
   })
 }

@@ -1,7 +1,7 @@
 import type { GroundFeature, Site, SiteKind } from '../../shared/contract/ground.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
+import { storedFor, type Reader } from '../../shared/messages/readFigure.ts'
 import { translate, type Language } from '../../shared/messages/translate.ts'
-import { formatNumber } from '../../shared/units/formatQuantity.ts'
 
 /** A row of the list, every word ready to read. */
 export interface GroundLine {
@@ -10,7 +10,7 @@ export interface GroundLine {
   kind: string
   mark: SiteKind | null
   /** The distance or the width, or that there is none. */
-  metres: string
+  length: string
   isKnown: boolean
   note: string
   /** Since when it is there no more; empty while it is. */
@@ -18,19 +18,21 @@ export interface GroundLine {
 }
 
 /** Sites in words, those that are gone last. */
-export function siteLines(language: Language, sites: readonly Site[]): GroundLine[] {
+export function siteLines(reader: Reader, sites: readonly Site[]): GroundLine[] {
+  const { language } = reader
   return goneLast(sites.map(({ id, kind, name, keepClearM, note, endedOn }) => ({
     id, name, kind: translate(language, `ground.siteKind.${kind}`), mark: kind, note: note ?? '',
-    metres: keepClearM === null ? translate(language, 'ground.list.noDistance') : formatNumber(keepClearM, {}, language),
+    length: keepClearM === null ? translate(language, 'ground.list.noDistance') : storedFor(reader, keepClearM, 'm'),
     isKnown: keepClearM !== null, gone: goneWords(language, endedOn),
   })))
 }
 
 /** The ground plan in words, what is gone last. */
-export function groundLines(language: Language, features: readonly GroundFeature[]): GroundLine[] {
+export function groundLines(reader: Reader, features: readonly GroundFeature[]): GroundLine[] {
+  const { language } = reader
   return goneLast(features.map(({ id, kind, name, widthM, endedOn }) => ({
     id, name: name ?? '', kind: translate(language, `ground.groundKind.${kind}`), mark: null, note: '',
-    metres: widthM === null ? '' : formatNumber(widthM, {}, language), isKnown: widthM !== null, gone: goneWords(language, endedOn),
+    length: widthM === null ? '' : storedFor(reader, widthM, 'm'), isKnown: widthM !== null, gone: goneWords(language, endedOn),
   })))
 }
 

@@ -5,8 +5,8 @@ import type { Planting } from '../../shared/contract/planting.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
 import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import { storedFor, unitFor, type Reader } from '../../shared/messages/readFigure.ts'
 import { translate, type Language } from '../../shared/messages/translate.ts'
-import { formatNumber } from '../../shared/units/formatQuantity.ts'
 
 /** A line of a list: what it is, and the rest of it in small words. */
 export interface GrowingLine {
@@ -57,9 +57,10 @@ export function bedName(language: Language, { kind, name, fromNumber, toNumber, 
   return join([translate(language, id, { from: String(fromNumber), to: String(toNumber) }), name])
 }
 
-export function bedLine(language: Language, bed: Bed): GrowingLine {
+export function bedLine(reader: Reader, bed: Bed): GrowingLine {
+  const { language } = reader
   const { id, lengthM, widthM, plants, endedOn } = bed
-  const figure = (value: string) => formatNumber(value, {}, language)
+  const figure = (metres: string) => `${storedFor(reader, metres, 'm')}\u00A0${unitFor(reader, 'm')}`
   return {
     id,
     title: bedName(language, bed),

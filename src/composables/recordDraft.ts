@@ -4,6 +4,7 @@ import type { Basis, Method, PROTECTION, RecordComponent, Water } from '../../sh
 import type { Weather, WIND_POINTS, WEATHER_KINDS } from '../../shared/contract/weather.ts'
 import { mapPlainFields, type PlainName } from '../../shared/records/plainFields.ts'
 import { draftOfLine, emptyAmount, type AmountDraft, type LineDraft } from './lineDraft.ts'
+import { readingUnit, type UnitSystem } from '../../shared/units/readingUnit.ts'
 import { newId } from './newId.ts'
 
 /** Everything below is as typed: numbers are text, and what is not chosen yet is empty. */
@@ -53,23 +54,23 @@ export interface RecordDraft {
   revision: number | null
 }
 
-export const emptyComponent = (): ComponentDraft => ({
-  key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: 'L', each: 'plant', reading: 'to', used: emptyAmount(),
+export const emptyComponent = (units: UnitSystem = 'metric'): ComponentDraft => ({
+  key: newId(), materialId: '', lotId: '', kind: 'ratio', value: '', unit: readingUnit('L', units), each: 'plant', reading: 'to', used: emptyAmount(),
 })
 
-/** A form with nothing in it yet. */
-export const emptyRecord = (): RecordDraft => ({
+/** A form with nothing in it yet. @param units whose units it begins with; another may be chosen beside each figure. */
+export const emptyRecord = (units: UnitSystem = 'metric'): RecordDraft => ({
   version: 2,
   step: 1,
   method: 'foliar',
   lines: [], plain: mapPlainFields(() => ''), protection: [], doneById: '', sprayerId: '',
-  components: [emptyComponent()],
-  water: { sizedFrom: 'water', value: '', unit: 'L', source: '', each: 'plant', component: 0 },
+  components: [emptyComponent(units)],
+  water: { sizedFrom: 'water', value: '', unit: readingUnit('L', units), source: '', each: 'plant', component: 0 },
   workedInOn: '',
   weather: {
-    wind: { value: '', unit: 'ms', kind: 'readHere' },
+    wind: { value: '', unit: readingUnit('ms', units), kind: 'readHere' },
     windFrom: '',
-    air: { value: '', unit: 'degC', kind: 'readHere' },
+    air: { value: '', unit: readingUnit('degC', units), kind: 'readHere' },
     humidity: { value: '', unit: '%', kind: 'readHere' },
   },
   stop: { why: '', told: '', done: '' },
@@ -89,38 +90,38 @@ const draftOfComponent = ({ materialId, lotId, basis }: RecordComponent): Compon
   ...emptyComponent(), materialId, lotId: lotId ?? '', ...draftOfBasis(basis),
 })
 
-function draftOfWater(water: Water | null): RecordDraft['water'] {
-  const { water: empty } = emptyRecord()
+function draftOfWater(water: Water | null, units: UnitSystem): RecordDraft['water'] {
+  const { water: empty } = emptyRecord(units)
   if (water === null) return empty
   return water.sizedFrom === 'none' ? { ...empty, sizedFrom: 'none' } : { ...empty, ...water, source: water.source ?? '' }
 }
 
 /** A new form with the mix, method, sprayer and those words of a record that carry over, for another block or another day. */
-export function draftLike(record: ApplicationRecord): RecordDraft {
+export function draftLike(record: ApplicationRecord, units: UnitSystem = 'metric'): RecordDraft {
   return {
-    ...emptyRecord(),
+    ...emptyRecord(units),
     method: record.method,
     plain: mapPlainFields(({ name, carriesOver }) => (carriesOver ? (record[name] ?? '') : '')),
     protection: [...record.protection],
     sprayerId: record.sprayerId ?? '',
     components: record.components.map(draftOfComponent),
-    water: draftOfWater(record.water),
+    water: draftOfWater(record.water, units),
   }
 }
 
 /** A new form with the method, mix and rate of a plan's step. */
-export function draftOfPlan({ method, materialId, basis, water }: Pick<RecordComponent, 'materialId' | 'basis'> & { method: Method; water: Water | null }): RecordDraft {
-  return { ...emptyRecord(), method, components: [draftOfComponent({ materialId, basis, lotId: null, used: null })], water: draftOfWater(water) }
+export function draftOfPlan({ method, materialId, basis, water }: Pick<RecordComponent, 'materialId' | 'basis'> & { method: Method; water: Water | null }, units: UnitSystem = 'metric'): RecordDraft {
+  return { ...emptyRecord(units), method, components: [draftOfComponent({ materialId, basis, lotId: null, used: null })], water: draftOfWater(water, units) }
 }
 
-function draftOfWeather(weather: Weather): RecordDraft['weather'] {
-  const { weather: empty } = emptyRecord()
+function draftOfWeather(weather: Weather, units: UnitSystem): RecordDraft['weather'] {
+  const { weather: empty } = emptyRecord(units)
   return { wind: weather.wind ?? empty.wind, windFrom: weather.windFrom ?? '', air: weather.air ?? empty.air, humidity: weather.humidity ?? empty.humidity }
 }
 
 /** The form of a record that was started: on this device or on another. */
-export function draftOfRecord(record: ApplicationRecord, zone: string): RecordDraft {
-  const like = draftLike(record)
+export function draftOfRecord(record: ApplicationRecord, zone: string, units: UnitSystem = 'metric'): RecordDraft {
+  const like = draftLike(record, units)
   return {
     ...like,
     step: record.state === 'started' ? 2 : 1,
@@ -129,7 +130,7 @@ export function draftOfRecord(record: ApplicationRecord, zone: string): RecordDr
     components: record.components.map((component) => ({ ...draftOfComponent(component), used: component.used ?? emptyAmount() })),
     workedInOn: record.workedInOn ?? '',
     doneById: record.doneById ?? '',
-    weather: record.weather === null ? like.weather : draftOfWeather(record.weather),
+    weather: record.weather === null ? like.weather : draftOfWeather(record.weather, units),
     revision: record.revision,
   }
 }

@@ -1,5 +1,6 @@
 import { ref, watch, type Ref } from 'vue'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
+import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { readKeptDraft } from './readKeptDraft.ts'
 import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
@@ -25,6 +26,7 @@ export interface AmendDraft {
 /** The form of an amendment; what was kept over a version that no longer stands is not brought back. @param id of the record. */
 export function useAmendDraft(id: string): AmendDraft {
   const session = useSession()
+  const preferences = usePreferences()
   const drafts = useDrafts(() => session.farmId, 'amendment')
   const key = `amend-${id}`
   const draft = ref<RecordDraft>(emptyRecord())
@@ -37,7 +39,7 @@ export function useAmendDraft(id: string): AmendDraft {
       draft.value = readKeptDraft(kept.typed)
       reason.value = kept.reason
     } else {
-      draft.value = { ...draftOfRecord(record, zone), step: 2 }
+      draft.value = { ...draftOfRecord(record, zone, preferences.units), step: 2 }
     }
     revision = record.revision
   }

@@ -24,7 +24,7 @@ export interface BlockGrowing {
   today: ComputedRef<string | null>
 }
 
-export function useBlockGrowing(id: () => string, { language }: BlocksPlace): BlockGrowing {
+export function useBlockGrowing(id: () => string, { language, reader }: BlocksPlace): BlockGrowing {
   const plantings = useBlockRead('plantings', id, growingApi.plantings)
   const beds = useBlockRead('beds', id, growingApi.beds)
   const events = useBlockRead('farm-events', id, growingApi.events)
@@ -35,7 +35,7 @@ export function useBlockGrowing(id: () => string, { language }: BlocksPlace): Bl
   return {
     plantings, beds, events, today,
     plantingLines: computed(() => standingFirst((plantings.data.value ?? []).map((planting) => plantingLine(language.value, planting)))),
-    bedLines: computed(() => standingFirst((beds.data.value ?? []).map((bed) => bedLine(language.value, bed)))),
+    bedLines: computed(() => standingFirst((beds.data.value ?? []).map((bed) => bedLine(reader.value, bed)))),
     eventLines: computed(() => (events.data.value ?? []).map((event) => eventLine(language.value, event))),
     mayTakeBack: computed(() => new Set((events.data.value ?? [])
       .filter(({ withdrawn, by }) => withdrawn === null && session.canRecord && (session.canManage || by.id === session.membership?.personId))

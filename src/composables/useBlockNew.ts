@@ -6,7 +6,7 @@ import { formatNumber } from '../../shared/units/formatQuantity.ts'
 import type { Submitted } from '../stores/outbox.ts'
 import type { Caution } from './blockCautions.ts'
 import type { OutlineBy } from './blockDraftContent.ts'
-import { hectaresText, metresText } from './blockWords.ts'
+import { areaWords, lengthWords } from './blockWords.ts'
 import { outlineWords } from './outlineWords.ts'
 import { countPoints } from './shape.ts'
 import type { FieldError } from './useAsked.ts'
@@ -39,7 +39,7 @@ export interface BlockNew {
 }
 
 export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
-  const { farmId, language, blocks, farm } = place
+  const { farmId, language, reader, blocks, farm } = place
   const { render, problem } = useMessages()
   const work = useBlockWork({
     farmId, by, language: () => language.value, others: () => blocks.value, farmPlace: () => farm.value?.place ?? null,
@@ -58,8 +58,8 @@ export function useBlockNew(by: OutlineBy, place: BlocksPlace): BlockNew {
   const figures = computed(() => {
     const measure = outline.measure.value
     return {
-      area: measure === null ? '' : translate(language.value, 'blocks.hectares', { figure: hectaresText(language.value, measure.areaM2) }),
-      perimeter: measure === null ? '' : metresText(language.value, measure.perimeterM),
+      area: measure === null ? '' : areaWords(reader.value, measure.areaM2),
+      perimeter: measure === null ? '' : lengthWords(reader.value, measure.perimeterM),
       points: formatNumber(points.value, { digits: 0 }, language.value),
     }
   })

@@ -30,11 +30,11 @@ export interface BlockPage {
 
 const LAST_RECORDS = 5
 
-export function useBlockPage(id: () => string, { farmId, farm, query, blocks, language }: BlocksPlace): BlockPage {
+export function useBlockPage(id: () => string, { farmId, farm, query, blocks, language, reader }: BlocksPlace): BlockPage {
   const listed = computed(() => blocks.value.find((each) => each.id === id()) ?? null)
   // A block that has ended is in no list any more; its page stays.
   const single = useBlockRead('block', () => (query.data.value !== undefined && listed.value === null ? id() : ''), blockApi.read)
-  const block = computed(() => listed.value ?? (single.data.value?.id === id() ? blockWords(language.value, single.data.value) : null))
+  const block = computed(() => listed.value ?? (single.data.value?.id === id() ? blockWords(reader.value, single.data.value) : null))
   const ground = useMapGround()
   const records = useRecords(farmId, computed(() => ({ block: id(), limit: LAST_RECORDS })))
   const zone = computed(() => farm.value?.zone ?? 'UTC')
@@ -48,7 +48,7 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
     isReading: computed(() => block.value === null && !isMissing.value && !query.isError.value && !single.isError.value),
     isFailed: computed(() => block.value === null && (query.isError.value || (single.isError.value && !isMissing.value))),
     retry: () => { void (query.isError.value ? query.refetch() : single.refetch()) },
-    lines: computed(() => rows.value.map((row) => blockRecordLine(language.value, zone.value, row))),
+    lines: computed(() => rows.value.map((row) => blockRecordLine(reader.value, zone.value, row))),
     lastOn: computed(() => {
       const started = rows.value.find(({ state, startedAt }) => state !== 'withdrawn' && startedAt !== null)?.startedAt
       return started === undefined || started === null ? '' : dayOf(started)

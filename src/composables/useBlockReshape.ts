@@ -5,11 +5,12 @@ import { cornersOfRing } from '../../shared/geo/boundaryCorners.ts'
 import { boundaryParts } from '../../shared/geo/boundaryParts.ts'
 import { formatPoints } from '../../shared/geo/formatPoints.ts'
 import { isSameOutline } from '../../shared/geo/isSameOutline.ts'
+import { quantityFor } from '../../shared/messages/readFigure.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
 import { ApiError } from '../api/errors.ts'
 import type { Submitted } from '../stores/outbox.ts'
 import { findCautions, type Caution } from './blockCautions.ts'
-import { hectaresText, metresText, type BlockWords } from './blockWords.ts'
+import { areaWords, lengthWords, type BlockWords } from './blockWords.ts'
 import { outlineWords } from './outlineWords.ts'
 import { boundaryOf, countPoints } from './shape.ts'
 import { useAsked, type Asked } from './useAsked.ts'
@@ -151,13 +152,13 @@ function useTypedRing(work: ShapeWork, draft: ShapeDraft, language: () => 'en' |
   }
 }
 
-function figuresOf({ language }: BlocksPlace, block: BlockWords | null, work: ShapeWork, points: number): { area: string; perimeter: string; points: string; difference: string } {
+function figuresOf({ language, reader }: BlocksPlace, block: BlockWords | null, work: ShapeWork, points: number): { area: string; perimeter: string; points: string; difference: string } {
   const measure = work.measure.value
   const count = formatNumber(points, { digits: 0 }, language.value)
   if (measure === null) return { area: '', perimeter: '', points: count, difference: '' }
   const moreM2 = Math.round(measure.areaM2 - (block?.areaM2 ?? 0))
   return {
-    area: `${hectaresText(language.value, measure.areaM2)} ha`, perimeter: metresText(language.value, measure.perimeterM), points: count,
-    difference: `${moreM2 < 0 ? '−' : '+'}${formatNumber(Math.abs(moreM2), { digits: 0 }, language.value)} m²`,
+    area: areaWords(reader.value, measure.areaM2), perimeter: lengthWords(reader.value, measure.perimeterM), points: count,
+    difference: `${moreM2 < 0 ? '−' : '+'}${quantityFor(reader.value, Math.abs(moreM2), 'm2', { digits: 0 })}`,
   }
 }

@@ -10,7 +10,7 @@ import { splitBoundary } from '../../shared/geo/splitBoundary.ts'
 import { uniteBoundaries } from '../../shared/geo/uniteBoundaries.ts'
 import { formatNumber } from '../../shared/units/formatQuantity.ts'
 import type { Submitted } from '../stores/outbox.ts'
-import { hectaresText, type BlockWords } from './blockWords.ts'
+import { areaWords, type BlockWords } from './blockWords.ts'
 import { newId } from './newId.ts'
 import { outlineWords } from './outlineWords.ts'
 import { cornersOfShape, shapeOf, type ShapeCorner } from './shape.ts'
@@ -66,7 +66,7 @@ const NOTHING: SplitContent = { by: 'line', drawn: [], from: '0', to: '2', edge:
 const LETTERS = 'abcdefghijklmnopqrstuvwxyz'
 
 export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit {
-  const { blocks, farmId, language } = place
+  const { blocks, farmId, language, reader } = place
   const { t } = useI18n()
   const { problem } = useMessages()
   const { submit } = useSubmit()
@@ -104,7 +104,7 @@ export function useBlockSplit(id: () => string, place: BlocksPlace): BlockSplit 
     const percent = formatNumber((areaM2 / (of?.areaM2 ?? areaM2)) * 100, { digits: 1 }, language.value)
     return {
       geometry, code: names.value[index]?.code ?? `${(of?.code ?? '').slice(0, CODE_LENGTH - 1)}${LETTERS[index % LETTERS.length] ?? ''}`, name: names.value[index]?.name ?? of?.name ?? '',
-      words: t('shapes.split.pieceWords', { area: t('blocks.hectares', { figure: hectaresText(language.value, areaM2) }), percent }),
+      words: t('shapes.split.pieceWords', { area: areaWords(reader.value, areaM2), percent }),
     }
   }))
 

@@ -8,7 +8,7 @@ import { totalAreaM2 } from '../../shared/geo/totalAreaM2.ts'
 import { uniteBoundaries } from '../../shared/geo/uniteBoundaries.ts'
 import type { Submitted } from '../stores/outbox.ts'
 import type { Caution } from './blockCautions.ts'
-import { hectaresText, type BlockWords } from './blockWords.ts'
+import { areaWords, type BlockWords } from './blockWords.ts'
 import { newId } from './newId.ts'
 import { outlineWords } from './outlineWords.ts'
 import { useAsked, type Asked } from './useAsked.ts'
@@ -45,7 +45,7 @@ export interface BlocksMerge {
 }
 
 /** @param first the block the page was opened for; null for none. */
-export function useBlocksMerge(first: string | null, { blocks, farmId, language }: BlocksPlace): BlocksMerge {
+export function useBlocksMerge(first: string | null, { blocks, farmId, language, reader }: BlocksPlace): BlocksMerge {
   const { t } = useI18n()
   const { problem } = useMessages()
   const { submit } = useSubmit()
@@ -108,7 +108,7 @@ export function useBlocksMerge(first: string | null, { blocks, farmId, language 
     united: computed(() => result.value?.geometry ?? null),
     summary: computed(() => {
       const areaM2 = result.value?.geometry ? measurePolygon(result.value.geometry).areaM2 : totalAreaM2(chosen.value)
-      return t('shapes.merge.chosen', { count: chosen.value.length, area: t('blocks.hectares', { figure: hectaresText(language.value, areaM2) }) }, chosen.value.length)
+      return t('shapes.merge.chosen', { count: chosen.value.length, area: areaWords(reader.value, areaM2) }, chosen.value.length)
     }),
     fault: computed(() => {
       const finding = result.value?.findings[0]

@@ -3,11 +3,13 @@ import type { Block } from '../../shared/contract/block.ts'
 import type { Farm } from '../../shared/contract/farm.ts'
 import { totalAreaM2 } from '../../shared/geo/totalAreaM2.ts'
 import { renderMessage } from '../../shared/messages/renderMessage.ts'
+import type { Reader } from '../../shared/messages/readFigure.ts'
 import type { Language } from '../../shared/messages/translate.ts'
+import { readingUnit } from '../../shared/units/readingUnit.ts'
 import type { MapView } from './mapTypes.ts'
 import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
-import { blockWords, hectaresText, type BlockWords } from './blockWords.ts'
+import { areaText, blockWords, type BlockWords } from './blockWords.ts'
 import { useBlocks } from './useBlocks.ts'
 import { useFarm } from './useFarm.ts'
 
@@ -16,6 +18,7 @@ export interface BlocksPlace {
   farmId: ComputedRef<string>
   farm: ComputedRef<Farm | null>
   language: ComputedRef<Language>
+  reader: ComputedRef<Reader>
   canManage: ComputedRef<boolean>
   canRecord: ComputedRef<boolean>
   query: ReturnType<typeof useBlocks>
@@ -41,7 +44,7 @@ export function useBlocksPlace(): BlocksPlace {
   const query = useBlocks(farmId)
   const farm = useFarm(farmId)
   const all = computed<readonly Block[]>(() => query.data.value ?? [])
-  const area = computed(() => hectaresText(language.value, totalAreaM2(all.value)))
+  const area = computed(() => areaText(preferences.reader, totalAreaM2(all.value)))
 
   function startView(): MapView | null {
     const last = lastViews.get(farmId.value)
@@ -52,18 +55,19 @@ export function useBlocksPlace(): BlocksPlace {
 
   return {
     farmId, language, query, area,
+    reader: computed(() => preferences.reader),
     farm: computed(() => farm.data.value ?? null),
     canManage: computed(() => session.canManage),
     canRecord: computed(() => session.canRecord),
-    blocks: computed(() => all.value.map((block) => blockWords(language.value, block))),
-    count: computed(() => countWords(language.value, all.value.length, area.value)),
+    blocks: computed(() => all.value.map((block) => blockWords(preferences.reader, block))),
+    count: computed(() => countWords(preferences.reader, all.value.length, area.value)),
     startAt: computed(startView),
     remember: (view) => { lastViews.set(farmId.value, view) },
     chosenId: ref<string | null>(null),
   }
 }
 
-function countWords(language: Language, count: number, area: string): string {
+function countWords(reader: Reader, count: number, area: string): string {
   if (count === 0) return ''
-  return renderMessage(language, { id: 'blocks.count', params: { count, area } })
+  return renderMessage(reader.language, { id: 'blocks.count', params: { count, area, areaUnit: readingUnit('ha', reader.units) } })
 }

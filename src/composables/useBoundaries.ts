@@ -14,5 +14,5 @@ export interface Boundaries {
 export function useBoundaries(id: () => string): Boundaries {
   const preferences = usePreferences()
   const query = useBlockRead('boundaries', id, blockApi.boundaries)
-  return { query, lines: computed(() => (query.data.value ?? []).map((version) => boundaryLine(preferences.language, version))) }
+  return { query, lines: computed(() => (query.data.value ?? []).map((version) => boundaryLine(preferences.reader, version))) }
 }

@@ -5,7 +5,8 @@ import { lineLengthM } from '../../shared/geo/lineLengthM.ts'
 import { measurePolygon } from '../../shared/geo/measurePolygon.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import { parseQuantityText } from '../../shared/units/parseQuantityText.ts'
-import { hectaresText, metresText } from './blockWords.ts'
+import { usePreferences } from '../stores/preferences.ts'
+import { areaWords, lengthWords } from './blockWords.ts'
 import type { MapGround } from './mapGround.ts'
 import type { MapDraft } from './mapTypes.ts'
 import { crossingEdges, outlineWords } from './outlineWords.ts'
@@ -35,6 +36,7 @@ const USUAL: Partial<Record<SiteKind | GroundKind, PlaceShape>> = { watercourse:
 
 export function useGroundEditor(subject: GroundSubject, language: () => Language): GroundEditor {
   const { t } = useI18n()
+  const preferences = usePreferences()
   const isSite = subject.what === 'site'
   const drawing = usePlaceDrawing({ geometry: subject.was?.geometry ?? null, shape: isSite ? 'point' : 'line' }, language)
   const form = useGroundForm(subject, drawing)
@@ -56,8 +58,8 @@ export function useGroundEditor(subject: GroundSubject, language: () => Language
     const count = points.value.length
     if (count === 0 || (geometry.value === null && shape.value === 'point')) return t('ground.form.none')
     if (geometry.value?.type === 'Point') return t('ground.form.pointAt')
-    const length = metresText(language(), geometry.value?.type === 'LineString' ? lineLengthM(geometry.value.coordinates) : 0)
-    const area = t('blocks.hectares', { figure: hectaresText(language(), geometry.value?.type === 'Polygon' ? measurePolygon(geometry.value).areaM2 : 0) })
+    const length = lengthWords(preferences.reader, geometry.value?.type === 'LineString' ? lineLengthM(geometry.value.coordinates) : 0)
+    const area = areaWords(preferences.reader, geometry.value?.type === 'Polygon' ? measurePolygon(geometry.value).areaM2 : 0)
     return t(shape.value === 'line' ? 'ground.form.lineOf' : 'ground.form.areaOf', { points: count, length, area }, count === 1 ? 1 : 2)
   })
 

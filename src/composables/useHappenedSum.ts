@@ -27,7 +27,7 @@ export function useHappenedSum({ draft, sheet, zone, lines }: SumOptions): {
   total: ComputedRef<string>
 } {
   const { t } = useI18n()
-  const { amount, unit } = useFigures()
+  const { mass, volume } = useFigures()
   const day = computed(() => draft.value.lines.find(({ start }) => start.date !== '')?.start.date ?? momentAt(zone(), now().toISOString()).date)
 
   /** A line that was worked on another day than the first keeps its own. */
@@ -60,7 +60,7 @@ export function useHappenedSum({ draft, sheet, zone, lines }: SumOptions): {
       if (!one) return ''
       sum = sum.plus(one)
     }
-    return sum.isZero() ? '' : `${amount(sum.toFixed())}\u00A0${unit(isVolume ? 'L' : 'kg')}`
+    return sum.isZero() ? '' : isVolume ? volume(sum.toFixed()) : mass(sum.toFixed())
   })
 
   return { day, setDay, lasted, total }

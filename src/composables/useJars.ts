@@ -18,7 +18,7 @@ export interface JarOffer {
 /** How far each lot in the mix goes, the scarcest first; empty while the mix is sized another way. */
 export function useJars({ draft, stock, rows }: { draft: Ref<RecordDraft>; stock: Ref<RecordStock>; rows: Ref<MixRow[]> }): ComputedRef<JarOffer[]> {
   const { t } = useI18n()
-  const { rate, amount, unit } = useFigures()
+  const { rate, unit, volume } = useFigures()
 
   const jars = (): (Jar & { code: string })[] => {
     const used = new Set(draft.value.components.map(({ lotId }) => lotId).filter((id) => id !== ''))
@@ -37,7 +37,7 @@ export function useJars({ draft, stock, rows }: { draft: Ref<RecordDraft>; stock
       chosen: water.component === reach.component && water.value === reach.amount.value && water.unit === reach.amount.unit,
       words: t('recordForm.jar.enough', {
         name: rows.value[reach.component]?.name ?? '', lot: lot?.code ?? '',
-        left: rate(lot?.left.value ?? null), unit: lot ? unit(lot.left.unit) : '', water: amount(reach.waterL),
+        left: rate(lot?.left.value ?? null), unit: lot ? unit(lot.left.unit) : '', water: volume(reach.waterL),
       }),
     }
   }

@@ -10,6 +10,7 @@ import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { endMoment, type LineDraft } from './lineDraft.ts'
 import { countsOf, instantOf, partOf } from './recordContent.ts'
 import type { RecordDraft } from './recordDraft.ts'
+import { readingUnit } from '../../shared/units/readingUnit.ts'
 import { useFigures } from './useFigures.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
@@ -27,7 +28,7 @@ export interface LineRow {
   part: string
   /** "12 000 plants, 40 beds". */
   counts: string
-  hectares: string
+  area: string
   /** The share of the mix, worked out, and its unit. */
   share: string
   shareUnit: string
@@ -104,15 +105,16 @@ export function useLineRows({ draft, sheet, stock, zone, errors }: LineRowsOptio
     const block = stock.value.blocks.find(({ id }) => id === line.blockId) ?? null
     const part = partOf(line)
     const { shareL, shareKg, areaHa } = sheet.value.lines[index] ?? { shareL: null, shareKg: null, areaHa: null }
-    const share = figures.amount(shareL ?? shareKg)
-    const shareUnit = shareL === null && shareKg !== null ? 'kg' : 'L'
+    const workedOutIn = shareL === null && shareKg !== null ? 'kg' : 'L'
+    const share = figures.amount(shareL ?? shareKg, workedOutIn)
+    const shareUnit = readingUnit(workedOutIn, figures.reader.value.units)
     const written = line.amount.known === 'workedOut' ? '' : line.amount.value.trim()
     return {
       key: line.key, line, index, block, share, shareUnit,
       state: stateOf(line),
       part: part === null ? t('recordForm.part.needed') : partWords(part),
       counts: countWords(line, part ?? { kind: 'whole' }),
-      hectares: areaHa === null || part === null ? '' : figures.hectares(areaHa * 10_000),
+      area: areaHa === null || part === null ? '' : figures.area(areaHa * 10_000),
       amount: written === '' ? (share === '' ? '' : `${share}\u00A0${figures.unit(shareUnit)}`) : `${written}\u00A0${figures.unit(line.amount.unit)}`,
       keepOut: keepOutOf(line),
       errors: index < 0 ? {} : errorsOf(errors.value, index),

@@ -7,6 +7,7 @@ import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { subtractDecimals } from '../../shared/units/subtractDecimals.ts'
 import { convertQuantity } from '../../shared/units/convertQuantity.ts'
 import { dimensionOf } from '../../shared/units/dimensionOf.ts'
+import { readingAmountUnit, readingUnit } from '../../shared/units/readingUnit.ts'
 import type { UnitCode } from '../../shared/units/unitTable.ts'
 import { now } from '../plugins/clock.ts'
 import { numberOf } from './recordContent.ts'
@@ -64,7 +65,7 @@ function useBasisWords(): (component: ComponentDraft) => string {
 /** The ingredients of a mix in the person's language, each with its lots ranked. */
 export function useMixRows({ draft, sheet, stock }: MixRowsOptions): { rows: ComputedRef<MixRow[]>; waterMeasure: ComputedRef<string> } {
   const { t } = useI18n()
-  const { amount, rate, plain, unit } = useFigures()
+  const { amount, rate, plain, unit, reader } = useFigures()
   const basisWords = useBasisWords()
   const measureWords = useMeasureWords()
 
@@ -91,16 +92,18 @@ export function useMixRows({ draft, sheet, stock }: MixRowsOptions): { rows: Com
     const lots = stock.value.lots.filter(({ materialId }) => materialId === component.materialId)
     const usedOn = draft.value.lines[0]?.start.date || civilDateIn(stock.value.farm?.zone ?? 'UTC', now().toISOString())
     const code = figures?.amount?.unit
+    const readIn = figures?.amount ? readingAmountUnit(figures.amount, reader.value.units) : undefined
+    const shown = (value: string | null | undefined): string => (value && code && readIn ? amount(convertQuantity({ value, unit: code }, readIn)) : '')
     return {
       key: component.key,
       name: material?.name ?? t('records.mix.unnamed', { number: index + 1 }),
       material,
       ...lotWords(lots.find(({ id }) => id === component.lotId)),
       measure: basisWords(component),
-      inAll: amount(figures?.amount?.value ?? null),
-      fullLoad: amount(figures?.perFullLoad ?? null),
-      lastLoad: amount(figures?.perLastLoad ?? null),
-      unit: code ? unit(code) : '',
+      inAll: shown(figures?.amount?.value),
+      fullLoad: shown(figures?.perFullLoad),
+      lastLoad: shown(figures?.perLastLoad),
+      unit: readIn ? unit(readIn) : '',
       byHand: { inAll: byHand(figures?.amount?.value, code), fullLoad: byHand(figures?.perFullLoad, code), lastLoad: byHand(figures?.perLastLoad, code) },
       difference: differenceOf(component, figures),
       ranked: rankLots(lots, { need: figures?.amount ?? null, usedOn }),
@@ -118,7 +121,7 @@ export function useMixRows({ draft, sheet, stock }: MixRowsOptions): { rows: Com
       const typed = { value: plain(read), unit: unit(code) }
       switch (sizedFrom) {
         case 'water':
-          return t('records.mix.typed')
+          return readingUnit(code as UnitCode, reader.value.units) === code ? t('records.mix.typed') : t('records.mix.typedAs', typed)
         case 'sprayRate':
           return t('records.mix.fromRate', { rate: typed.value, unit: typed.unit })
         case 'perEach':

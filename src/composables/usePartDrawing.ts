@@ -37,7 +37,7 @@ interface PartDrawing {
 /** Drawing or typing the part of a block that was treated. */
 export function usePartDrawing(block: Block, drawn: Boundary | null): PartDrawing {
   const { t } = useI18n()
-  const { hectares } = useFigures()
+  const { area, unitOf } = useFigures()
   const preferences = usePreferences()
   const language = computed(() => preferences.language)
   const content = ref<BlockDraftContent>({ ...emptyBlockDraft('draw'), ...(drawn === null ? {} : { shape: shapeOf(drawn) }) })
@@ -56,8 +56,8 @@ export function usePartDrawing(block: Block, drawn: Boundary | null): PartDrawin
 
   return {
     content, outline, typed, fault, language,
-    ground: computed(() => blockWords(language.value, block)),
-    summary: computed(() => (outline.measure.value === null ? '' : t('recordForm.part.measures', { hectares: hectares(outline.measure.value.areaM2), of: hectares(block.areaM2), code: block.code }))),
+    ground: computed(() => blockWords(preferences.reader, block)),
+    summary: computed(() => (outline.measure.value === null ? '' : t('recordForm.part.measures', { area: area(outline.measure.value.areaM2), of: area(block.areaM2), unit: unitOf('ha'), code: block.code }))),
     isOpen: computed(() => content.value.by === 'draw' && content.value.shape.open !== null),
     finish: () => { tried.value = !outline.finish() },
     setBy: (by) => { content.value = { ...content.value, by, typed: by === 'points' ? formatPoints([...firstRing(content.value.shape)]) : content.value.typed } },

@@ -1,6 +1,8 @@
 import { computed, reactive, ref, watch, type ComputedRef, type Ref } from 'vue'
 import { createPlanSchema, seasonPlanSchema, updatePlanSchema, type SeasonPlan } from '../../shared/contract/seasonPlan.ts'
 import type { Method } from '../../shared/contract/recordContent.ts'
+import type { UnitSystem } from '../../shared/units/readingUnit.ts'
+import { usePreferences } from '../stores/preferences.ts'
 import { useSession } from '../stores/session.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { newId } from './newId.ts'
@@ -55,8 +57,8 @@ export interface PlanForm {
 
 const copyOf = (typed: PlanDraft): PlanDraft => JSON.parse(JSON.stringify(typed)) as PlanDraft
 
-function emptyStep(): StepDraft {
-  const { method, components, water } = draftOfPlan({ method: 'foliar', materialId: '', basis: { kind: 'ratio', parts: '20', reading: 'to' }, water: null })
+function emptyStep(units: UnitSystem): StepDraft {
+  const { method, components, water } = draftOfPlan({ method: 'foliar', materialId: '', basis: { kind: 'ratio', parts: '20', reading: 'to' }, water: null }, units)
   return {
     id: newId(), method, component: components[0] as ComponentDraft, water: { ...water, sizedFrom: '' }, blockIds: [], everyDays: '14', firstOn: null, lastOn: null, earlyDays: '2', lateDays: '4',
   }
@@ -76,10 +78,11 @@ const draftOfSeasonPlan = ({ id, name, note, steps }: SeasonPlan): PlanDraft => 
 /** The form of a season plan: a new one, or one that is there. */
 export function usePlanForm(was: SeasonPlan | null): PlanForm {
   const session = useSession()
+  const { units } = usePreferences()
   const { submit } = useSubmit()
   const { problem } = useMessages()
   const schemaErrors = useSchemaErrors()
-  const fresh: PlanDraft = was === null ? { id: newId(), name: '', note: '', steps: [emptyStep()] } : draftOfSeasonPlan(was)
+  const fresh: PlanDraft = was === null ? { id: newId(), name: '', note: '', steps: [emptyStep(units)] } : draftOfSeasonPlan(was)
   const draft = reactive<PlanDraft>(copyOf(fresh))
   const merge = was === null ? null : useMerge<SeasonPlan, PlanDraft>({ draft: ref(draft), opened: was, schema: seasonPlanSchema, draftOf: draftOfSeasonPlan })
   const kept = useKeptForm<PlanDraft>(fresh, {
@@ -125,7 +128,7 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
     },
     errors: computed(() => ({ ...refused.value, ...own.value })),
     refusal: computed(() => (task.error.value === null || Object.keys(refused.value).length > 0 ? '' : problem(task.error.value))),
-    addStep: () => { draft.steps.push({ ...emptyStep(), blockIds: [...(draft.steps.at(-1)?.blockIds ?? [])] }) },
+    addStep: () => { draft.steps.push({ ...emptyStep(units), blockIds: [...(draft.steps.at(-1)?.blockIds ?? [])] }) },
     removeStep: (index) => { draft.steps.splice(index, 1) },
     end: (reason) => act({ kind: 'plan.end', farmId: session.farmId, id: fresh.id, body: { revision: revisionSeen(), reason } }),
     reopen: () => act({ kind: 'plan.reopen', farmId: session.farmId, id: fresh.id, body: { revision: revisionSeen() } }),

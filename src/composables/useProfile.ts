@@ -1,6 +1,7 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import type { ChangeMe } from '../../shared/contract/me.ts'
 import type { Language } from '../../shared/messages/translate.ts'
+import type { UnitSystem } from '../../shared/units/readingUnit.ts'
 import { usePreferences, type Light } from '../stores/preferences.ts'
 import { fieldErrors } from './fieldErrors.ts'
 import { useLanguageChoice } from './useLanguageChoice.ts'
@@ -17,6 +18,7 @@ export function useProfile(): {
   save: (changes: Omit<ChangeMe, 'revision'>) => Promise<boolean>
   chooseLanguage: (language: Language) => Promise<void>
   chooseLight: (light: Light) => Promise<void>
+  chooseUnits: (units: UnitSystem) => Promise<void>
 } {
   const preferences = usePreferences()
   const messages = useMessages()
@@ -32,6 +34,7 @@ export function useProfile(): {
       await choice.chooseLanguage(language)
       await save({ language })
     },
+    chooseUnits: async (units) => { await save({ preferences: { units } }) },
     chooseLight: async (light) => {
       preferences.chooseLight(light)
       await save({ preferences: { light } })

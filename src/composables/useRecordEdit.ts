@@ -29,7 +29,7 @@ import { useTask } from './useTask.ts'
 /** Everything the form of one record does: what is typed, worked out and judged, and how it is started and signed. */
 export function useRecordEdit(options: { id: string; fresh: boolean; likeId: string; blockIds: readonly string[]; jobIds: readonly string[] }) {
   const { t } = useI18n()
-  const { language } = useFigures()
+  const { language, reader } = useFigures()
   const { problem } = useMessages()
   const { stock, ready: stockReady, error: stockError, again } = useRecordStock()
   const form = useRecordForm({ ...options, stock, stockReady })
@@ -97,6 +97,6 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
       if (gap !== undefined) return t('records.sign.notSigned', { reason: t(gap) })
       return signing.words.value || (signing.password.value === '' ? t('records.sign.needPassword') : '')
     }),
-    working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom }).map((line) => renderMessage(language.value, line))),
+    working: computed(() => workingLines(sheet.value, { names: mix.rows.value.map(({ name }) => name), sizedFrom: draft.value.water.sizedFrom, units: reader.value.units }).map((line) => renderMessage(language.value, line))),
   }
 }

@@ -2,7 +2,9 @@ import { onScopeDispose, ref, shallowRef, watch, type Ref } from 'vue'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { ApiError, NetworkError } from '../api/errors.ts'
 import { recordApi } from '../api/recordApi.ts'
+import type { UnitSystem } from '../../shared/units/readingUnit.ts'
 import { now } from '../plugins/clock.ts'
+import { usePreferences } from '../stores/preferences.ts'
 import { isNotFound } from './isNotFound.ts'
 import { emptyLine } from './lineDraft.ts'
 import { readKeptDraft } from './readKeptDraft.ts'
@@ -45,10 +47,10 @@ export interface RecordForm {
 }
 
 /** An empty form on the blocks it was opened for; the only sprayer of a farm is chosen already. */
-function firstDraft({ sprayers, blocks }: RecordStock, blockIds: readonly string[]): RecordDraft {
+function firstDraft({ sprayers, blocks }: RecordStock, blockIds: readonly string[], units: UnitSystem): RecordDraft {
   const [only, ...others] = sprayers
   const lines = blockIds.filter((wanted) => blocks.some(({ id }) => id === wanted)).map(emptyLine)
-  return { ...emptyRecord(), lines, sprayerId: only !== undefined && others.length === 0 ? only.id : '' }
+  return { ...emptyRecord(units), lines, sprayerId: only !== undefined && others.length === 0 ? only.id : '' }
 }
 
 const isOpen = ({ state }: ApplicationRecord): boolean => state === 'started' || state === 'draft'
@@ -56,6 +58,7 @@ const isOpen = ({ state }: ApplicationRecord): boolean => state === 'started' ||
 /** The form of a record: found on the device, else at the server, else empty; kept at every keystroke. */
 export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stockReady }: RecordFormOptions): RecordForm {
   const drafts = useDrafts(() => stock.value.farmId, 'record')
+  const preferences = usePreferences()
   const draft = ref<RecordDraft>(emptyRecord())
   const state = ref<'loading' | 'ready' | 'signed'>('loading')
   const begunAt = shallowRef<string | null>(null)
@@ -70,8 +73,8 @@ export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stoc
       begunAt.value = kept.begunAt
       return readKeptDraft(kept.content.typed)
     }
-    if (fresh && likeId === '') return (await findJobs()) ?? firstDraft(stock.value, blockIds)
-    return (await findAtServer()) ?? firstDraft(stock.value, blockIds)
+    if (fresh && likeId === '') return (await findJobs()) ?? firstDraft(stock.value, blockIds, preferences.units)
+    return (await findAtServer()) ?? firstDraft(stock.value, blockIds, preferences.units)
   }
 
   /** The form as the jobs fill it in that it was opened from; null without any, or where no plan has them any more. */
@@ -95,9 +98,9 @@ export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stoc
   async function findAtServer(): Promise<RecordDraft | 'signed' | null> {
     const { farmId, farm } = stock.value
     try {
-      if (fresh) return draftLike(await recordApi.read(farmId, likeId))
+      if (fresh) return draftLike(await recordApi.read(farmId, likeId), preferences.units)
       const record = await recordApi.read(farmId, id)
-      return isOpen(record) ? draftOfRecord(record, farm?.zone ?? 'UTC') : 'signed'
+      return isOpen(record) ? draftOfRecord(record, farm?.zone ?? 'UTC', preferences.units) : 'signed'
     } catch (error) {
       if (error instanceof NetworkError || isNotFound(error)) return null
       throw error

@@ -7,11 +7,13 @@ import { PLAIN_FIELDS, type PlainName } from '../../shared/records/plainFields.t
 import { basisWords, countsWords, knownWords, momentWords, partWords, waterWords } from '../../shared/records/versionWords.ts'
 import { civilDateIn, civilTimeIn } from '../../shared/time/civilDate.ts'
 import { convertQuantity, type Quantity } from '../../shared/units/convertQuantity.ts'
-import { formatNumber } from '../../shared/units/formatQuantity.ts'
+import { readingAmountUnit } from '../../shared/units/readingUnit.ts'
 import { subtractDecimals } from '../../shared/units/subtractDecimals.ts'
+import type { UnitCode } from '../../shared/units/unitTable.ts'
 import type { RecordGround } from './recordGround.ts'
 import { useFigures } from './useFigures.ts'
 import { useMessages } from './useMessages.ts'
+import { useReadWeather } from './useReadWeather.ts'
 
 export interface ReadRow {
   name: string
@@ -73,6 +75,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   const { t } = useI18n()
   const figures = useFigures()
   const { render } = useMessages()
+  const weatherOf = useReadWeather()
   const said = (messages: readonly Message[]): string => messages.map(render).join(', ')
   const unknown = (text: string): string => text || t('records.read.unknown')
   const zone = computed(() => ground.value.zone)
@@ -94,11 +97,11 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
       return {
         code: block?.code ?? '', name: block?.name ?? '', geometry: block?.geometry ?? null,
         part: said(partWords(line.part)),
-        area: figures.hectares(share?.areaM2 ?? (line.part.kind === 'whole' ? (block?.areaM2 ?? null) : null)),
+        area: figures.area(share?.areaM2 ?? (line.part.kind === 'whole' ? (block?.areaM2 ?? null) : null)),
         counts: said(countsWords(line.counts)),
         stage: [line.stage ?? '', line.bbch === null ? '' : `BBCH ${line.bbch}`].filter((words) => words !== '').join(', '),
         when: unknown(span(line.startedAt, line.endedAt)),
-        amount: line.amount === null ? t('records.read.unknown') : `${figures.amount(line.amount.value)} ${figures.unit(line.amount.unit)}, ${t(`records.known.${line.amount.known}`)}`,
+        amount: line.amount === null ? t('records.read.unknown') : `${line.amount.known === 'workedOut' ? worked(line.amount) : asTyped(line.amount)}, ${t(`records.known.${line.amount.known}`)}`,
         keepOut: said(momentWords(share?.reEntryUntil ?? null, zone.value)),
         pickFrom: share?.pickFrom ? figures.day(share.pickFrom) : '',
       }
@@ -113,37 +116,44 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
         name: unknown(ground.value.materials.find(({ id }) => id === materialId)?.name ?? ''),
         lot: lot ? t('records.mix.lot', { code: lot.code }) : t('records.lots.none'),
         measure: said(basisWords(basis)),
-        inAll: amount ? `${figures.amount(amount.value)} ${figures.unit(amount.unit)}` : '',
+        inAll: amount ? worked(amount) : '',
         used: used === null ? '' : `${said(knownWords(used))}${amount ? differenceOf(used, amount) : ''}`,
       }
     })
   }
 
+  const asTyped = ({ value, unit }: Quantity): string => `${figures.amount(value)} ${figures.unit(unit)}`
+
+  /** An amount that was worked out, in the unit it is read in. */
+  function worked(amount: Quantity): string {
+    const readIn = readingAmountUnit(amount, figures.reader.value.units)
+    return `${figures.amount(convertQuantity(amount, readIn))} ${figures.unit(readIn)}`
+  }
+
   function differenceOf(used: Quantity, planned: Quantity): string {
     const more = subtractDecimals(convertQuantity(used, planned.unit), planned.value)
-    return Number(more) === 0 ? '' : ` (${more.startsWith('-') ? '' : '+'}${figures.plain(more)} ${figures.unit(planned.unit)})`
+    return Number(more) === 0 ? '' : ` (${more.startsWith('-') ? '' : '+'}${figures.plain(more, planned.unit)} ${figures.unitOf(planned.unit)})`
   }
 
   function waterOf(one: ApplicationRecord): RecordReading['water'] {
     if (one.method === 'solid') return null
     const name = (id: string): string => ground.value.materials.find((material) => material.id === id)?.name ?? ''
-    return { measure: unknown(said(waterWords(one.water, one, name))), inAll: figures.litres(one.computed.waterL) }
+    return { measure: unknown(said(waterWords(one.water, one, name))), inAll: figures.volume(one.computed.waterL) }
   }
 
   function totalOf({ totalL, totalKg }: ApplicationRecord['computed']): string {
-    const mass = totalKg === null ? '' : `${figures.amount(totalKg)}\u00A0${figures.unit('kg')}`
-    return [figures.litres(totalL), mass].filter((words) => words !== '').join(', ')
+    return [figures.volume(totalL), figures.mass(totalKg)].filter((words) => words !== '').join(', ')
   }
 
   function overOf({ sprayLPerHa, kgPerHa, sprayPerEach, areaM2 }: ApplicationRecord['computed']): string {
-    const rate = (value: number, unit: string): string => t('versions.read.over', { rate: figures.rate(value), unit: figures.unit(unit), hectares: figures.hectares(areaM2) })
-    if (sprayPerEach) return t(`versions.forEach.${sprayPerEach.each}`, { value: figures.rate(sprayPerEach.litres), unit: figures.unit('L') })
+    const rate = (value: number, unit: UnitCode): string => t('versions.read.over', { rate: figures.rate(value, unit), unit: figures.unitOf(unit), area: figures.area(areaM2), areaUnit: figures.unitOf('ha') })
+    if (sprayPerEach) return t(`versions.forEach.${sprayPerEach.each}`, { value: figures.rate(sprayPerEach.litres, 'L'), unit: figures.unitOf('L') })
     return sprayLPerHa !== null ? rate(sprayLPerHa, 'L/ha') : kgPerHa !== null ? rate(kgPerHa, 'kg/ha') : ''
   }
 
   function loadsOf({ loads }: ApplicationRecord['computed']): string {
     if (loads === null) return ''
-    const last = figures.amount(loads.lastL)
+    const last = figures.volume(loads.lastL)
     const minutes = loads.fullMinutes === null ? '' : `, ${t('versions.read.minutes', { minutes: figures.plain(Math.round(loads.fullMinutes)) })}`
     if (loads.full === 0) return t('records.sprayer.loadsPart', { last })
     return `${t(loads.lastL > 0 ? 'records.sprayer.loadsFullAndPart' : 'records.sprayer.loadsFull', { count: loads.full, last }, loads.full)}${minutes}`
@@ -166,18 +176,6 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
       { name: t('records.read.server'), value: when(receivedAt) },
       { name: t('records.read.signed'), value: unknown(when(signedAt)) },
     ]
-  }
-
-  function weatherOf({ weather, computed: { air } }: ApplicationRecord): ReadFact[] {
-    const read = (name: 'wind' | 'air' | 'humidity', more = ''): ReadFact => {
-      const value = weather?.[name]
-      const kind = value ? { note: t(`records.weather.kind.${value.kind}`) } : {}
-      return { name: t(`records.weather.${name}`), value: value ? `${figures.plain(value.value)} ${figures.unit(value.unit)}${more}` : t('records.weather.never'), ...kind }
-    }
-    const from = weather?.windFrom ? `, ${t('records.read.windFrom', { point: t(`records.weather.compass.${weather.windFrom}`) })}` : ''
-    const derived = (name: 'wetBulbC' | 'deltaTC' | 'dewPointC', method: 'stull' | 'psychrometer'): ReadFact =>
-      ({ name: t(`versions.read.${name}`), value: `${formatNumber(air?.[name] ?? 0, { digits: 1 }, figures.language.value)} ${figures.unit('degC')}`, note: t(`versions.read.${method}`) })
-    return [read('wind', from), read('air'), read('humidity'), ...(air ? (['wetBulbC', 'deltaTC', 'dewPointC'] as const).map((name) => derived(name, air.method)) : [])]
   }
 
   function peopleOf({ doneBy, enteredBy, signedBy, signedWith, protection }: ApplicationRecord): ReadFact[] {

@@ -44,7 +44,7 @@ export function useRegisterLines(): RegisterWords {
   const place = computed(() =>
     farm.value === undefined
       ? null
-      : { language: preferences.language, zone: farm.value.zone, season: farm.value.currentSeason },
+      : { ...preferences.reader, zone: farm.value.zone, season: farm.value.currentSeason },
   )
   const stock = computed(() => ({
     blocks: blocks.value ?? [], materials: materials.value ?? [], lots: lots.value ?? [], sprayers: sprayers.value ?? [],

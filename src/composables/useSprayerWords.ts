@@ -4,11 +4,12 @@ import { calibrationStanding } from '../../shared/mix/calibrationStanding.ts'
 import { nominalFlow } from '../../shared/mix/calibrationSheet.ts'
 import { NOZZLE_SIZES, NOZZLES, type NozzleSize } from '../../shared/mix/nozzleSizes.ts'
 import { convertQuantity } from '../../shared/units/convertQuantity.ts'
-import { useFarm } from './useFarm.ts'
 import { useFarmDay } from './useFarmDay.ts'
 import { useFigures } from './useFigures.ts'
-import { useSession } from '../stores/session.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
+
+/** Flows of nozzle sizes are named at 3 bar (ISO 10625). */
+const NOZZLE_BAR = 3
 
 /** What is fitted to sprayers and how they were measured, in words. */
 export function useSprayerWords(): {
@@ -16,30 +17,30 @@ export function useSprayerWords(): {
   nozzle: (fitting: Fitting) => string
   /** What each nozzle should give as it is driven; empty where it is not known. */
   nominal: (fitting: Fitting) => string
-  /** The two figures of a rate, the farm's own first. */
+  /** The two figures of a rate, the person's own measures first. */
   rates: (rateLPerHa: string) => [first: string, second: string]
   due: (calibration: Pick<CalibrationInForce, 'dueOn'>) => { words: string; standing: 'past' | 'soon' | 'ahead' }
   dayOf: (civilDate: string) => string
 } {
   const { t } = useI18n()
-  const session = useSession()
   const figures = useFigures()
-  const { data: farm } = useFarm(() => session.farmId)
   const { today } = useFarmDay()
   const dayOf = (civilDate: string): string => formatDay(figures.language.value, civilDate)
-  const sizeOf = (size: NozzleSize): string => t('sprayers.sizeOf', { size, colour: t(`sprayers.colour.${NOZZLES[size].colour}`), flow: figures.plain(NOZZLES[size].flowLPerMin) })
+  const flow = (figure: string): string => `${figure}\u00A0${figures.unitOf('L/min')}`
+  const pressure = (bar: string | number | null): string => `${figures.plain(bar, 'bar')}\u00A0${figures.unitOf('bar')}`
+  const sizeOf = (size: NozzleSize): string => t('sprayers.sizeOf', { size, colour: t(`sprayers.colour.${NOZZLES[size].colour}`), flow: flow(figures.plain(NOZZLES[size].flowLPerMin, 'L/min')), bar: pressure(NOZZLE_BAR) })
 
   return {
     sizes: () => NOZZLE_SIZES.map((value) => ({ value, label: sizeOf(value) })),
     nozzle: ({ nozzle }) => (nozzle === null ? '' : nozzle.kind === 'iso' ? sizeOf(nozzle.size) : nozzle.name),
     nominal: (fitting) => {
-      const flow = nominalFlow(fitting)
-      return flow === null ? '' : t('sprayers.nominalAt', { flow: figures.fixed(flow.toString(), 2), bar: figures.plain(fitting.pressureBar) })
+      const each = nominalFlow(fitting)
+      return each === null ? '' : t('sprayers.nominalAt', { flow: flow(figures.fixed(each.toFixed(), 2, 'L/min')), bar: pressure(fitting.pressureBar) })
     },
     rates: (rateLPerHa) => {
       const metric = `${figures.rate(rateLPerHa)} ${figures.unit('L/ha')}`
       const us = `${figures.rate(convertQuantity({ value: rateLPerHa, unit: 'L/ha' }, 'galUS/acre'))} ${figures.unit('galUS/acre')}`
-      return farm.value?.units === 'us' ? [us, metric] : [metric, us]
+      return figures.reader.value.units === 'us' ? [us, metric] : [metric, us]
     },
     due: ({ dueOn }) => {
       const { standing } = calibrationStanding(dueOn, today.value ?? dueOn)

@@ -1,8 +1,10 @@
 import { defineStore } from 'pinia'
-import { ref, watch } from 'vue'
+import { computed, ref, watch } from 'vue'
 import { measuresSchema, type Preferences } from '../../shared/contract/preferences.ts'
+import type { Reader } from '../../shared/messages/readFigure.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { Measure } from '../../shared/units/inMeasures.ts'
+import { UNIT_SYSTEMS, type UnitSystem } from '../../shared/units/readingUnit.ts'
 import { readLanguage, showLanguage } from '../plugins/i18n.ts'
 import { readSetting, writeSetting } from './settings.ts'
 
@@ -13,10 +15,14 @@ const one = (unit: Measure['unit'], value = '1'): Measure => ({ name: null, valu
 /** What stands in most mixing sheds and kitchens, until a person says otherwise. */
 const USUAL_MEASURES: Measure[] = [one('galUS'), one('qtUS'), one('cupUS'), one('tbspUS'), one('tspUS'), one('lb'), one('oz')]
 
-/** What a person chose for this device: language, light, and the measures at hand. */
+/** What a person chose: language, light, what figures are read in, and the measures at hand. */
 export const usePreferences = defineStore('preferences', () => {
   const language = ref<Language>(readSetting('language', ['en', 'es']) ?? languageOfDevice())
   const light = ref<Light>(readSetting('light', ['day', 'dawn']) ?? 'day')
+  /** What every figure on the screens is read in: `useOwnUnits` follows the person and the farm; this device has it until they are read. */
+  const units = ref<UnitSystem>(readSetting('units', UNIT_SYSTEMS) ?? 'metric')
+  const reader = computed<Reader>(() => ({ language: language.value, units: units.value }))
+  watch(units, (value) => { writeSetting('units', value) })
 
   watch(language, (value) => {
     writeSetting('language', value)
@@ -79,7 +85,7 @@ export const usePreferences = defineStore('preferences', () => {
     writeSetting(`measures.${accountId}`, chosen && JSON.stringify(chosen))
   }
 
-  return { language, light, offerLanguage, offerLight, chooseLight, chooseLanguage, start, measuresOf, keepMeasures }
+  return { language, light, units, reader, offerLanguage, offerLight, chooseLight, chooseLanguage, start, measuresOf, keepMeasures }
 })
 
 function languageOfDevice(): Language {

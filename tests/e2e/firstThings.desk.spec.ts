@@ -7,7 +7,7 @@ import { say } from './support/words.ts'
 
 /** What the page says of an outline of four corners; area in hectares, perimeter in metres. */
 function figuresOf({ area, perimeter }: { area: string; perimeter: string }): string {
-  return say('blocks.draw.figures', { area: say('blocks.hectares', { figure: area }), perimeter: say('blocks.page.metres', { figure: perimeter }), points: 4 })
+  return say('blocks.draw.figures', { area: `${area} ha`, perimeter: `${perimeter} m`, points: 4 })
 }
 
 test('draws a block by keyboard, with its live area, and saves it', async ({ page, signInAs, manager }) => {

@@ -21,7 +21,7 @@ test('draws a hedge by keyboard alone, and finds it on map and list after a relo
   await page.keyboard.press('Space')
   for (let tens = 0; tens < 6; tens += 1) await page.keyboard.press('Shift+ArrowRight')
   await page.keyboard.press('Space')
-  await expect(main.getByRole('status').getByText(say('blocks.page.metres', { figure: '60' }))).toBeVisible()
+  await expect(main.getByRole('status').getByText('60 m')).toBeVisible()
   await main.getByRole('button', { name: say('ground.form.save'), exact: true }).press('Enter')
 
   const list = page.getByRole('table', { name: say('ground.list.groundCaption') })

@@ -49,6 +49,10 @@ test('an owner invites by letter, and somebody new takes the invitation in Spani
   await invited.getByRole('button', { name: es('session.welcome.accept') }).click()
   await expect(invited).toHaveURL(/\/$/)
   await expect(invited.getByRole('navigation').first()).toContainText(es('frame.places.blocks'))
+  await invited.goto('/me')
+  await Promise.all([invited.waitForResponse((answer) => answer.url().endsWith('/api/me') && answer.ok()), invited.getByText(es('profile.unitsShort.us'), { exact: true }).click()])
+  await invited.goto('/register/new')
+  await expect(invited.getByLabel(es('common.unitOf', { label: es('records.weather.wind') }))).toHaveValue('mph')
   await invited.context().close()
 
   await page.goto('/farm/people')

@@ -34,7 +34,7 @@ describe('counts', () => {
     ['en', 1, '1 block, 0.94 ha'], ['en', 24, '24 blocks, 0.94 ha'], ['en', 0, '0 blocks, 0.94 ha'], ['es', 1, '1 parcela, 0.94 ha'], ['es', 2, '2 parcelas, 0.94 ha'],
   ] as const)('in %s, %d: %s', (language, count, words) => {
     expect(renderMessage(language, { id: 'blocks.count', params: { count, area: '0.94' } })).toBe(words)
-    expect(translate(language, 'blocks.count', { count, area: '0.94' })).toBe(words)
+    expect(translate(language, 'blocks.count', { count, area: '0.94', areaUnit: 'ha' })).toBe(words)
   })
 })
 

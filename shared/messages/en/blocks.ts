@@ -1,9 +1,8 @@
 /** Words of the Blocks place. */
 export const blocks = {
   title: 'Blocks',
-  count: '{count} block, {area} ha | {count} blocks, {area} ha',
-  hectares: '{figure} ha',
-  spoken: '{code}, {name}, {area} ha',
+  count: '{count} block, {area} {areaUnit} | {count} blocks, {area} {areaUnit}',
+  spoken: '{code}, {name}, {area} {areaUnit}',
   loading: 'Reading the blocks',
   failed: 'The blocks could not be read.',
   failedHolds: 'Nothing of yours is lost.',
@@ -46,7 +45,6 @@ export const blocks = {
     caption: 'Blocks of the farm, with their areas as drawn',
     block: 'Block',
     crop: 'Crop',
-    ha: 'ha',
     total: 'In all',
     noCrop: 'no crop written',
     draft: 'A block in the making',
@@ -61,7 +59,6 @@ export const blocks = {
   page: {
     area: 'Area, as drawn',
     perimeter: 'Perimeter',
-    metres: '{figure} m',
     all: 'All blocks',
     startRecord: 'New record',
     noRecordYet: 'Nothing signed on {code} yet',
@@ -75,7 +72,6 @@ export const blocks = {
     started: 'started',
     withdrawn: 'withdrawn',
     noRate: 'no rate',
-    rate: '{figure} L/ha',
     missing: 'Nothing here under that number.',
     missingText: 'The block is not on this farm, or the address is not whole.',
     plan: 'Outline of {code}, north up',

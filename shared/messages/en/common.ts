@@ -9,6 +9,7 @@ export const common = {
   nothingMatches: 'Nothing matches',
   showPassword: 'Show password',
   understoodAs: '{value} {unit}',
+  same: '= {value} {unit}',
   unitOf: 'Unit of {label}',
   less: 'Less, {label}',
   more: 'More, {label}',

@@ -22,7 +22,7 @@ export const importing = {
   swap: 'Latitude and longitude stand the wrong way round',
   thin: 'Thin lines of more than {points} points',
   thinNone: 'leave as they are',
-  thinBy: 'by at most {metres} m',
+  thinBy: 'by at most {distance}',
   table: {
     caption: 'Shapes of the file: what comes in, what does not and why',
     take: 'Take',
@@ -30,7 +30,6 @@ export const importing = {
     number: 'Shape {number}',
     code: 'Code of shape {number}',
     name: 'Name of shape {number}',
-    ha: 'ha',
     refused: 'Refused',
     all: 'Take all that can be taken',
     show: 'All shapes',

@@ -73,6 +73,7 @@ export const people = {
     language: 'Language',
     light: 'Light',
     followsYou: 'What you choose here follows you to every device; a device keeps its own choice where you made one there.',
+    units: 'Figures in', unitsHint: 'On every screen, on all your devices. What was typed stays as typed; files and PDFs do not change.',
     measures: 'Measures at hand',
     jobsByMail: 'Jobs due and late, by e-mail each morning',
     jobsByMailHint: 'For the farms that you lead; no letter on a day without jobs.',

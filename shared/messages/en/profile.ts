@@ -5,7 +5,7 @@ export const profile = {
   zoneChange: 'Records keep the times and days they have. Only what is written from now on follows the new zone.',
   zoneReason: 'Why the zone changes',
   units: 'Units', unitsOf: { metric: 'litres, hectares, kilometres an hour first', us: 'US gallons, acres, miles an hour first' }, unitsShort: { metric: 'Metric', us: 'US customary' },
-  unitsHint: 'Which of the two a calibration shows first. Everything else keeps the unit in which it was written.',
+  unitsHint: 'What its people read figures in until they choose for themselves, and which of two figures a calibration shows first. What was typed keeps its unit.',
   calibration: 'Calibrate sprayers every', days: 'days', daysOf: '{count} day | {count} days', calibrationHint: 'A common habit is once a season, and after nozzles are changed.',
   certificate: 'Organic certificate', certificateNone: 'none written down', certificateHas: 'The farm is certified', number: 'Number', body: 'Certifier', scope: 'Scope', scopeHint: 'In the words of the certificate.',
   issued: 'Issued', expires: 'Valid until', openEnd: 'no end printed',

@@ -29,7 +29,7 @@ export const recordForm = {
     redraw: 'Change the drawing',
     drawTitle: 'Draw the part of {code}',
     drawMore: 'Set at least three corners, then take it.',
-    measures: '{hectares} ha of the {of} ha of {code}, as drawn',
+    measures: '{area} {unit} of the {of} {unit} of {code}, as drawn',
     finished: 'Outline finished.',
     take: 'Take this part',
   },
@@ -82,7 +82,6 @@ export const recordForm = {
     totalSays: '{value} {unit} in all',
     fromJar: 'all {value} {unit} of {name}',
     noneText: 'Put on as it is: nothing is added to what is measured out below.',
-    massOver: '{rate} {unit} over {hectares} ha',
     spread: 'Spread',
     jarFixed: 'The jar that sizes the mix is measured by area, by count or in all, so it does not say how much water it takes. Choose another, or measure it in parts.',
     ratioNeedsWater: '1 part to N parts of water needs water. Size the mix from water, or measure this in all, by area or by count.',
@@ -92,7 +91,7 @@ export const recordForm = {
   jar: {
     which: 'Which jar sizes the mix',
     none: 'No jar in the mix depends on the water. Choose lots, and measure them in parts or by tank.',
-    enough: '{name} {lot} has {left} {unit}: enough for {water} L of water',
+    enough: '{name} {lot} has {left} {unit}: enough for {water} of water',
     amount: 'How much of {name}',
   },
   measures: {
@@ -125,7 +124,7 @@ export const recordForm = {
   weather: {
     head: 'Weather',
     deltaT: 'Delta T',
-    follows: 'Wet bulb {wetBulb} °C, dew point {dewPoint} °C, worked out ({method}).',
+    follows: 'Wet bulb {wetBulb} {unit}, dew point {dewPoint} {unit}, worked out ({method}).',
     method: { stull: 'Stull 2011, at sea level', psychrometer: 'psychrometer, at this height' },
     kind: { readHere: 'read here', felt: 'felt', station: 'station', model: 'model' },
     byFeel: 'No instrument? By feel',
@@ -136,8 +135,8 @@ export const recordForm = {
     light: 'Light, on the face',
     leaves: 'Leaves move',
     branches: 'Branches move',
-    range: '{low} to {high} m/s, Beaufort {from}',
-    rangeOfTwo: '{low} to {high} m/s, Beaufort {from} and {to}',
+    range: '{low} to {high} {unit}, Beaufort {from}',
+    rangeOfTwo: '{low} to {high} {unit}, Beaufort {from} and {to}',
     source: 'Beaufort scale, WMO. The middle of the range is written down, as felt.',
   },
   worn: {

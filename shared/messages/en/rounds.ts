@@ -18,7 +18,6 @@ export const rounds = {
     name: 'Season sheet: blocks down, days across. Arrows move, Enter opens the day.',
     block: 'Block',
     week: 'week {number}',
-    hectares: 'ha',
     dragged: '{code} to {day}',
   },
   cell: {

@@ -99,7 +99,7 @@ export const shapes = {
     from: 'From corner',
     to: 'To corner',
     edge: 'Parallel to the edge',
-    edgeWords: 'from corner {from} to {to}, {metres}',
+    edgeWords: 'from corner {from} to {to}, {length}',
     share: 'Share on that side, percent',
     shareWrong: 'Give a percentage between 1 and 99.',
     piece: 'Piece {number}',

@@ -2,6 +2,7 @@
 export const versions = {
   text: '{text}',
   amount: '{value} {unit}',
+  figure: { workedOut: '{value} {unit}' },
   moment: '{dayOn}, {time}',
   day: '{dayOn}',
   notSaid: 'not said',
@@ -25,7 +26,7 @@ export const versions = {
   withdrawnNotice: 'Withdrawn. It stays in the register with a line through it and counts nowhere.',
   becauseOf: 'Because: {reason}',
   read: {
-    over: '{rate} {unit} over {hectares} ha',
+    over: '{rate} {unit} over {area} {areaUnit}',
     minutes: 'about {minutes} min a full load',
     wetBulbC: 'Wet bulb',
     deltaTC: 'Delta T',
@@ -72,7 +73,7 @@ export const versions = {
   part: {
     whole: 'whole block',
     fraction: '{fraction} of the block',
-    drawn: 'a part as drawn, {hectares} ha, outline {outline}',
+    drawn: 'a part as drawn, {hectares} {areaUnit}, outline {outline}',
     rows: 'rows {from} to {to} of {of}',
     beds: 'beds {from} to {to} of {of}',
   },

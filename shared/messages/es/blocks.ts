@@ -1,9 +1,8 @@
 /** Words of the Blocks place. */
 export const blocks = {
   title: 'Parcelas',
-  count: '{count} parcela, {area} ha | {count} parcelas, {area} ha',
-  hectares: '{figure} ha',
-  spoken: '{code}, {name}, {area} ha',
+  count: '{count} parcela, {area} {areaUnit} | {count} parcelas, {area} {areaUnit}',
+  spoken: '{code}, {name}, {area} {areaUnit}',
   loading: 'Leyendo las parcelas',
   failed: 'No se pudieron leer las parcelas.',
   failedHolds: 'Nada de lo suyo se ha perdido.',
@@ -46,7 +45,6 @@ export const blocks = {
     caption: 'Parcelas de la finca, con su superficie según el dibujo',
     block: 'Parcela',
     crop: 'Cultivo',
-    ha: 'ha',
     total: 'En total',
     noCrop: 'sin cultivo anotado',
     draft: 'Una parcela a medio hacer',
@@ -61,7 +59,6 @@ export const blocks = {
   page: {
     area: 'Superficie, según el dibujo',
     perimeter: 'Perímetro',
-    metres: '{figure} m',
     all: 'Todas las parcelas',
     startRecord: 'Registro nuevo',
     noRecordYet: 'Aún no hay nada firmado en {code}',
@@ -75,7 +72,6 @@ export const blocks = {
     started: 'empezado',
     withdrawn: 'retirado',
     noRate: 'sin L/ha',
-    rate: '{figure} L/ha',
     missing: 'No hay nada aquí con ese número.',
     missingText: 'La parcela no es de esta finca o la dirección está incompleta.',
     plan: 'Contorno de {code}, norte arriba',

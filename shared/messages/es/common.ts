@@ -9,6 +9,7 @@ export const common = {
   nothingMatches: 'Nada coincide',
   showPassword: 'Mostrar la contraseña',
   understoodAs: '{value} {unit}',
+  same: '= {value} {unit}',
   unitOf: 'Unidad de {label}',
   less: 'Menos, {label}',
   more: 'Más, {label}',

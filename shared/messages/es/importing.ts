@@ -22,7 +22,7 @@ export const importing = {
   swap: 'La latitud y la longitud están intercambiadas',
   thin: 'Aligerar líneas de más de {points} puntos',
   thinNone: 'dejarlas como están',
-  thinBy: 'como mucho {metres} m',
+  thinBy: 'como mucho {distance}',
   table: {
     caption: 'Formas del archivo: qué entra, qué no y por qué',
     take: 'Tomar',
@@ -30,7 +30,6 @@ export const importing = {
     number: 'Forma {number}',
     code: 'Código de la forma {number}',
     name: 'Nombre de la forma {number}',
-    ha: 'ha',
     refused: 'Rechazada',
     all: 'Tomar todas las que se puedan',
     show: 'Todas las formas',

@@ -75,6 +75,7 @@ export const people: Messages['people'] = {
     language: 'Idioma',
     light: 'Luz',
     followsYou: 'Lo que elige aquí le sigue a cada dispositivo; un dispositivo conserva lo que usted eligió en él.',
+    units: 'Cifras en', unitsHint: 'En todas las pantallas, en todos sus dispositivos. Lo escrito se queda como se escribió; los archivos y los PDF no cambian.',
     measures: 'Medidas a mano',
     jobsByMail: 'Tareas pendientes y atrasadas, por correo cada mañana',
     jobsByMailHint: 'De las fincas que usted dirige; ningún mensaje el día en que no hay tareas.',

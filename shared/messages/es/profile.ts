@@ -5,7 +5,7 @@ export const profile = {
   zoneChange: 'Los registros conservan sus horas y días. Solo lo que se escriba desde ahora sigue la zona nueva.',
   zoneReason: 'Por qué cambia la zona',
   units: 'Unidades', unitsOf: { metric: 'primero litros, hectáreas y kilómetros por hora', us: 'primero galones de EE. UU., acres y millas por hora' }, unitsShort: { metric: 'Métricas', us: 'De EE. UU.' },
-  unitsHint: 'Cuál de las dos muestra primero una calibración. Todo lo demás conserva la unidad en que se escribió.',
+  unitsHint: 'En qué leen las cifras sus personas mientras no elijan otra cosa, y cuál de las dos cifras muestra primero una calibración. Lo escrito conserva su unidad.',
   calibration: 'Calibrar los pulverizadores cada', days: 'días', daysOf: '{count} día | {count} días', calibrationHint: 'Lo habitual es una vez por campaña y tras cambiar boquillas.',
   certificate: 'Certificado ecológico', certificateNone: 'ninguno anotado', certificateHas: 'La finca está certificada', number: 'Número', body: 'Certificadora', scope: 'Alcance', scopeHint: 'Con las palabras del certificado.',
   issued: 'Expedido', expires: 'Válido hasta', openEnd: 'sin fin impreso',

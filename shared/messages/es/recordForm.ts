@@ -29,7 +29,7 @@ export const recordForm = {
     redraw: 'Cambiar el dibujo',
     drawTitle: 'Dibujar la parte de {code}',
     drawMore: 'Ponga al menos tres esquinas y acéptela.',
-    measures: '{hectares} ha de las {of} ha de {code}, según el dibujo',
+    measures: '{area} {unit} de {of} {unit} de {code}, según el dibujo',
     finished: 'Contorno terminado.',
     take: 'Usar esta parte',
   },
@@ -82,7 +82,6 @@ export const recordForm = {
     totalSays: '{value} {unit} en total',
     fromJar: 'todo, {value} {unit} de {name}',
     noneText: 'Se aplica tal cual: no se añade nada a lo que se mide abajo.',
-    massOver: '{rate} {unit} en {hectares} ha',
     spread: 'Esparcido',
     jarFixed: 'El recipiente que calcula la mezcla se mide por superficie, por recuento o en total, y no dice cuánta agua lleva. Elija otro, o mídalo en partes.',
     ratioNeedsWater: '1 parte por N partes de agua necesita agua. Calcule la mezcla según el agua, o mida esto en total, por superficie o por recuento.',
@@ -92,7 +91,7 @@ export const recordForm = {
   jar: {
     which: 'Qué recipiente calcula la mezcla',
     none: 'Ningún recipiente de la mezcla depende del agua. Elija lotes y mídalos en partes o por tanque.',
-    enough: '{name} {lot} tiene {left} {unit}: llega para {water} L de agua',
+    enough: '{name} {lot} tiene {left} {unit}: llega para {water} de agua',
     amount: 'Cuánto de {name}',
   },
   measures: {
@@ -125,7 +124,7 @@ export const recordForm = {
   weather: {
     head: 'Tiempo',
     deltaT: 'Delta T',
-    follows: 'Bulbo húmedo {wetBulb} °C, punto de rocío {dewPoint} °C, calculados ({method}).',
+    follows: 'Bulbo húmedo {wetBulb} {unit}, punto de rocío {dewPoint} {unit}, calculados ({method}).',
     method: { stull: 'Stull 2011, a nivel del mar', psychrometer: 'psicrómetro, a esta altura' },
     kind: { readHere: 'leído aquí', felt: 'notado', station: 'estación', model: 'modelo' },
     byFeel: '¿Sin aparato? Por lo que se nota',
@@ -136,8 +135,8 @@ export const recordForm = {
     light: 'Suave, en la cara',
     leaves: 'Se mueven las hojas',
     branches: 'Se mueven las ramas',
-    range: '{low} a {high} m/s, Beaufort {from}',
-    rangeOfTwo: '{low} a {high} m/s, Beaufort {from} y {to}',
+    range: '{low} a {high} {unit}, Beaufort {from}',
+    rangeOfTwo: '{low} a {high} {unit}, Beaufort {from} y {to}',
     source: 'Escala de Beaufort, OMM. Se anota la mitad del intervalo, como notado.',
   },
   worn: {

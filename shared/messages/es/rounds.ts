@@ -19,7 +19,6 @@ export const rounds: Messages['rounds'] = {
     name: 'Hoja de campaña: parcelas hacia abajo, días a lo ancho. Las flechas mueven, Intro abre el día.',
     block: 'Parcela',
     week: 'semana {number}',
-    hectares: 'ha',
     dragged: '{code} al {day}',
   },
   cell: {

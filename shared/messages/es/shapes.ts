@@ -99,7 +99,7 @@ export const shapes = {
     from: 'Desde la esquina',
     to: 'Hasta la esquina',
     edge: 'Paralela al lado',
-    edgeWords: 'de la esquina {from} a la {to}, {metres}',
+    edgeWords: 'de la esquina {from} a la {to}, {length}',
     share: 'Parte de ese lado, en tanto por ciento',
     shareWrong: 'Indique un porcentaje entre 1 y 99.',
     piece: 'Trozo {number}',

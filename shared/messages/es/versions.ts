@@ -5,6 +5,7 @@ import type { versions as words } from '../en/versions.ts'
 export const versions: WordsLike<typeof words> = {
   text: '{text}',
   amount: '{value} {unit}',
+  figure: { workedOut: '{value} {unit}' },
   moment: '{dayOn}, {time}',
   day: '{dayOn}',
   notSaid: 'sin decir',
@@ -28,7 +29,7 @@ export const versions: WordsLike<typeof words> = {
   withdrawnNotice: 'Retirado. Queda en el libro de registros tachado y no cuenta en ninguna parte.',
   becauseOf: 'Porque: {reason}',
   read: {
-    over: '{rate} {unit} en {hectares} ha',
+    over: '{rate} {unit} en {area} {areaUnit}',
     minutes: 'unos {minutes} min por carga llena',
     wetBulbC: 'Bulbo húmedo',
     deltaTC: 'Delta T',
@@ -75,7 +76,7 @@ export const versions: WordsLike<typeof words> = {
   part: {
     whole: 'parcela entera',
     fraction: '{fraction} de la parcela',
-    drawn: 'una parte según el dibujo, {hectares} ha, contorno {outline}',
+    drawn: 'una parte según el dibujo, {hectares} {areaUnit}, contorno {outline}',
     rows: 'hileras {from} a {to} de {of}',
     beds: 'bancales {from} a {to} de {of}',
   },

@@ -1,6 +1,7 @@
 import { ref, watch, type Ref } from 'vue'
 import type { Check } from '../../../shared/contract/record.ts'
 import { renderMessage } from '../../../shared/messages/renderMessage.ts'
+import { useShownCheck } from '../../composables/useShownCheck.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
 
 const QUIET_MS = 1000
@@ -8,10 +9,12 @@ const QUIET_MS = 1000
 /** What has changed among live checks since the last time, in one short line; said at most once a second. */
 export function useSpokenChanges(checks: () => readonly Check[], language: () => Language): Ref<string> {
   const spoken = ref('')
-  let before = new Map(lines(checks(), language()))
+  const shown = useShownCheck()
+  const said = (): [string, string][] => lines(checks().map(shown), language())
+  let before = new Map(said())
   let timer: number | undefined
 
-  watch(() => lines(checks(), language()), (after, _old, onCleanup) => {
+  watch(said, (after, _old, onCleanup) => {
     window.clearTimeout(timer)
     timer = window.setTimeout(() => {
       spoken.value = after.filter(([key, line]) => before.get(key) !== line).map(([, line]) => line).join('. ')

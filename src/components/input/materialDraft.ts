@@ -18,10 +18,10 @@ export interface MaterialDraft {
   source: string
 }
 
-/** An empty form: measured by volume, status not known until someone says so. */
-export const emptyMaterial = (): MaterialDraft => ({
+/** An empty form with a unit for the label's rate: measured by volume, status not known until someone says so. */
+export const emptyMaterial = (maxRateUnit = 'L/ha'): MaterialDraft => ({
   name: '', kind: null, measuredIn: 'volume', organicStatus: 'unknown', statusBasis: '', hasLabel: false,
-  maxRate: '', maxRateUnit: 'L/ha', minStrengthPct: '', maxStrengthPct: '', reEntryHours: '', preHarvestDays: '', source: '',
+  maxRate: '', maxRateUnit, minStrengthPct: '', maxStrengthPct: '', reEntryHours: '', preHarvestDays: '', source: '',
 })
 
 const wordsOrNull = (text: string): string | null => (text.trim() === '' ? null : text)

@@ -1,5 +1,7 @@
 import type { Block, Boundary } from '../../../shared/contract/block.ts'
-import { niceScaleBar, toPlan, type Plan } from '../../../shared/geo/projectToPlan.ts'
+import { toPlan, type Plan } from '../../../shared/geo/projectToPlan.ts'
+import { scaleBar, type ScaleBar } from '../../../shared/geo/scaleBar.ts'
+import type { UnitSystem } from '../../../shared/units/readingUnit.ts'
 
 interface Frame { width: number; height: number }
 
@@ -13,9 +15,8 @@ export interface PlanDrawing {
   /** Outlines of what was treated. */
   fills: string[]
   neighbours: { code: string; path: string; x: number; y: number; isNamed: boolean }[]
-  /** Scale bar: metres and the pixels they take. */
-  barM: number
-  barPx: number
+  /** The scale bar and the pixels it takes. */
+  bar: ScaleBar & { px: number }
 }
 
 const MARGIN_PX = 20
@@ -25,7 +26,7 @@ const LABEL_PX = 14
 type Outlined = Pick<Block, 'code' | 'geometry'>
 
 /** Blocks laid on one sheet, north up, so that those treated fill it; the others as far as they show. */
-export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { width, height }: Frame, { also = [], fills }: { also?: readonly Outlined[]; fills?: readonly Boundary[] } = {}): PlanDrawing {
+export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { width, height }: Frame, { also = [], fills, units = 'metric' }: { also?: readonly Outlined[]; fills?: readonly Boundary[]; units?: UnitSystem } = {}): PlanDrawing {
   const plan = toPlan({ geometry: block.geometry })
   const treated = [plan, ...also.map(({ geometry }) => toPlan({ geometry, origin: plan.origin }))]
   const [minX, minY] = [Math.min(...treated.map((one) => one.minX)), Math.min(...treated.map((one) => one.minY))]
@@ -40,7 +41,7 @@ export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { wid
     const [x, y] = place(laid.minX + laid.widthM / 2, laid.minY + laid.heightM / 2)
     return { path: pathOf(laid, place), x, y }
   }
-  const barM = niceScaleBar((width * 0.4) / scale)
+  const bar = scaleBar((width * 0.4) / scale, units)
   return {
     ...lay(block.geometry),
     fills: (fills ?? [block, ...also].map(({ geometry }) => geometry)).map((geometry) => lay(geometry).path),
@@ -49,8 +50,7 @@ export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { wid
       .map(({ code, geometry }) => ({ code, ...lay(geometry) }))
       .filter(({ x, y }) => x > -width && x < 2 * width && y > -height && y < 2 * height)
       .map((one) => ({ ...one, isNamed: one.x > LABEL_PX && one.x < width - LABEL_PX && one.y > LABEL_PX && one.y < height - 2 * LABEL_PX })),
-    barM,
-    barPx: barM * scale,
+    bar: { ...bar, px: bar.metres * scale },
   }
 }
 

@@ -14,6 +14,8 @@ describe('constants exact by definition', () => {
     { value: '212', from: 'degF', to: 'degC', text: '100' },
     { value: '-40', from: 'degC', to: 'degF', text: '-40' },
     { value: '37', from: 'degC', to: 'degF', text: '98.6' },
+    { value: '5', from: 'diffC', to: 'diffF', text: '9' },
+    { value: '0', from: 'diffC', to: 'diffF', text: '0' },
   ] as const)('$value $from = $text $to (definition of the Fahrenheit scale)', ({ value, from, to, text }) => {
     expect(convertQuantity({ value, unit: from }, to)).toBe(text)
   })

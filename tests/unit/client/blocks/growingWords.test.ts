@@ -30,9 +30,9 @@ describe('a block’s crop line', () => {
 describe('lines', () => {
   it('say what was counted with its marks', () => {
     expect(plantingLine('en', planting())).toMatchObject({ title: 'Apple, Marl Pippin', note: 'planted 20 March 2014, 1\u00a0640 plants, MABSD', isPast: false })
-    expect(bedLine('en', bed())).toMatchObject({ title: 'Rows 1 to 16', note: '92.5 m long each' })
-    expect(bedLine('es', bed({ kind: 'bed', fromNumber: null, toNumber: null, name: 'Hierbas', count: 3, lengthM: null }))).toMatchObject({ title: 'Hierbas, 3 bancales', note: '' })
-    expect(bedLine('en', bed({ toNumber: 1, endedOn: '2026-06-01' }))).toMatchObject({ title: 'Row 1', isPast: true })
+    expect(bedLine({ language: 'en', units: 'metric' }, bed())).toMatchObject({ title: 'Rows 1 to 16', note: '92.5\u00a0m long each' })
+    expect(bedLine({ language: 'es', units: 'metric' }, bed({ kind: 'bed', fromNumber: null, toNumber: null, name: 'Hierbas', count: 3, lengthM: null }))).toMatchObject({ title: 'Hierbas, 3 bancales', note: '' })
+    expect(bedLine({ language: 'en', units: 'metric' }, bed({ toNumber: 1, endedOn: '2026-06-01' }))).toMatchObject({ title: 'Row 1', isPast: true })
   })
 
   it('keep harvests to come of what stands, earliest first', () => {
@@ -74,6 +74,6 @@ describe('what is sent', () => {
 
 describe('the difference of two outlines', () => {
   it.each([
-    [10_000, 9_950, '−50 m² (−0.50 %)'], [9_950, 10_000, '+50 m² (+0.50 %)'], [10_000, 10_000, '0 m² (0.00 %)'],
-  ])('from %d m² to %d m²: %s', (older, newer, words) => { expect(areaDifference('en', { areaM2: older }, { areaM2: newer })).toBe(words) })
+    [10_000, 9_950, '−50\u00a0m² (−0.50 %)'], [9_950, 10_000, '+50\u00a0m² (+0.50 %)'], [10_000, 10_000, '0\u00a0m² (0.00 %)'],
+  ])('from %d m² to %d m²: %s', (older, newer, words) => { expect(areaDifference({ language: 'en', units: 'metric' }, { areaM2: older }, { areaM2: newer })).toBe(words) })
 })

@@ -51,8 +51,8 @@ describe('rows of an import', () => {
 describe('the shapes on the map', () => {
   it('are those that come in, found again by their number, in a view that holds them', () => {
     const rows = importRows([candidate(1), refused(2), candidate(3)], new Map(), [])
-    const onMap = comingBlocks('en', rows)
-    expect(onMap.map(({ id, code, areaText, isComing }) => [shapeNumber(id), code, areaText, isComing])).toEqual([[1, 'P1', '0.80 ha', true], [3, 'P3', '0.80 ha', true]])
+    const onMap = comingBlocks({ language: 'en', units: 'metric' }, rows)
+    expect(onMap.map(({ id, code, areaText, isComing }) => [shapeNumber(id), code, areaText, isComing])).toEqual([[1, 'P1', '0.80\u00a0ha', true], [3, 'P3', '0.80\u00a0ha', true]])
     expect(shapeNumber('01a2324c-5ad8-7495-9b6c-97ad4b253bc4')).toBeNull()
     expect(viewOf(rows, 480)?.centre).toEqual([expect.closeTo(10.0005, 7), expect.closeTo(45.0005, 7)])
     expect(viewOf(importRows([refused(1)], new Map(), []), 480)).toBeNull()

@@ -19,8 +19,8 @@ describe('the block to scale', () => {
     const ys = numbers.filter((_, index) => index % 2 === 1)
     expect(Math.min(...ys)).toBeCloseTo(20, 0)
     expect(Math.max(...ys)).toBeCloseTo(162, 0)
-    expect([10, 20, 50, 100]).toContain(plan.barM)
-    expect(plan.barPx / plan.barM).toBeCloseTo(142 / 99.9, 2)
+    expect([10, 20, 50, 100]).toContain(plan.bar.value)
+    expect(plan.bar.px / plan.bar.metres).toBeCloseTo(142 / 99.9, 2)
     expect([plan.x, plan.y]).toEqual([expect.closeTo(107, 0), expect.closeTo(91, 0)])
   })
 

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { presentDraft, type FarmStock } from '../../../../shared/register/presentDraft.ts'
 
-const place = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as const
+const place = { language: 'en', units: 'metric', zone: 'America/Los_Angeles', season: 2026 } as const
 const stock: FarmStock = {
   blocks: [{
     id: 'b1', code: 'A3', name: 'Long Bank 3', crop: null, areaM2: 9700, perimeterM: 400, version: 1, revision: 1, createdAt: '2026-03-01T08:00:00Z',
@@ -31,18 +31,18 @@ describe('presentDraft', () => {
     })
     expect(line).toMatchObject({
       state: 'draft', number: null, method: 'foliar', codes: 'A3', preparation: 'Nettle ferment', lots: 'Batch 31',
-      hectares: '0.97', litres: '787.5', day: '16\u00a0Jun', start: '06:38', by: 'Oda Verrill', tally: null,
+      area: '0.97', volume: '787.5', day: '16\u00a0Jun', start: '06:38', by: 'Oda Verrill', tally: null,
     })
   })
 
   it.each([[null], ['junk'], [{}], [{ method: 'fly', lines: 'x', components: [{ basis: 5 }], water: { value: '' } }]])(
     'takes half-typed or unreadable content %j without a figure',
     (content) => {
-      expect(draft(content)).toMatchObject({ state: 'draft', codes: '', preparation: '', litres: '', rate: '' })
+      expect(draft(content)).toMatchObject({ state: 'draft', codes: '', preparation: '', volume: '', rate: '' })
     },
   )
 
   it('leaves out a block that is no longer there', () => {
-    expect(draft({ lines: [{ blockId: 'gone' }] })).toMatchObject({ codes: '', hectares: '', blockIds: [] })
+    expect(draft({ lines: [{ blockId: 'gone' }] })).toMatchObject({ codes: '', area: '', blockIds: [] })
   })
 })

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { presentRow } from '../../../../shared/register/presentRow.ts'
 import { buildRow } from './buildRow.ts'
 
-const place = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as const
+const place = { language: 'en', units: 'metric', zone: 'America/Los_Angeles', season: 2026 } as const
 
 describe('presentRow', () => {
   it('shows times of the farm, figures rounded once, blocks and lots as words', () => {
@@ -13,9 +13,9 @@ describe('presentRow', () => {
       codes: 'T1, T2',
       preparation: 'Leaf-mould brew',
       lots: 'Brew 34',
-      hectares: '0.14',
-      litres: '346.0',
-      rate: '2\u00a0470 L/ha',
+      area: '0.14',
+      volume: '346.0',
+      rate: '2\u00a0470\u00a0L/ha',
       fullNumber: '2026-0142',
       lateHours: null,
     })
@@ -33,16 +33,16 @@ describe('presentRow', () => {
 
   it('leaves what is not there empty and never shows 0 for it', () => {
     const line = presentRow(buildRow({ startedAt: null, totalL: null, sprayLPerHa: null, number: null, state: 'started' }), place)
-    expect(line).toMatchObject({ number: null, day: '', start: '', litres: '', rate: '' })
+    expect(line).toMatchObject({ number: null, day: '', start: '', volume: '', rate: '' })
   })
 
   it('shows what was spread solid by weight', () => {
     const line = presentRow(buildRow({ method: 'solid', totalL: null, sprayLPerHa: null, totalKg: '1250.4', kgPerHa: '625.2' }), place)
-    expect(line).toMatchObject({ litres: '', mass: '1\u00a0250.4 kg', rate: '625 kg/ha' })
+    expect(line).toMatchObject({ volume: '', mass: '1\u00a0250.4\u00a0kg', rate: '625\u00a0kg/ha' })
   })
 
   it('writes decimals as the language does', () => {
     const line = presentRow(buildRow({ areaHa: '1.25', totalL: '637.5', sprayLPerHa: '510' }), { ...place, language: 'es' })
-    expect(line).toMatchObject({ hectares: '1,25', litres: '637,5', rate: '510 L/ha', day: '16\u00a0jun' })
+    expect(line).toMatchObject({ area: '1,25', volume: '637,5', rate: '510\u00a0L/ha', day: '16\u00a0jun' })
   })
 })

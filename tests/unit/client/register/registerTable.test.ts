@@ -10,14 +10,14 @@ import RowTally from '../../../../src/components/register/RowTally.vue'
 import { i18n } from '../../../../src/plugins/i18n.ts'
 import { buildRow } from './buildRow.ts'
 
-const place = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as const
+const place = { language: 'en', units: 'metric', zone: 'America/Los_Angeles', season: 2026 } as const
 const line = (overrides: Partial<RegisterRow> = {}): RegisterLine => presentRow(buildRow(overrides), place)
 const global = { plugins: [i18n] }
 
 function mountTable(lines: RegisterLine[], chosenId: string | null = null, sort: RegisterSort = '-when'): VueWrapper {
   return mount(RegisterTable, {
     global,
-    props: { lines, outlines: new Map(), chosenId, sort, sums: { words: '2 signed', hectares: '1.25', litres: '983', mass: '' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
+    props: { lines, outlines: new Map(), chosenId, sort, sums: { words: '2 signed', area: '1.25', volume: '983', mass: '' }, hrefOf: ({ id }: RegisterLine) => `/register/${id}` },
   })
 }
 
@@ -50,7 +50,7 @@ describe('RegisterTable', () => {
 
   it('shows a dash for what is not there, never 0', () => {
     const row = mountTable([line({ id: 'x', totalL: null, sprayLPerHa: null })]).get('[data-row="x"]')
-    expect(row.get('.c-litres .line-if').text()).toBe('–')
+    expect(row.get('.c-volume .line-if').text()).toBe('–')
     expect(row.get('.c-rate').text()).toBe('–')
   })
 

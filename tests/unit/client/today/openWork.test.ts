@@ -5,7 +5,7 @@ import { presentRow } from '../../../../shared/register/presentRow.ts'
 import { buildRow } from '../register/buildRow.ts'
 import { mountWithWords } from '../mountWithWords.ts'
 
-const PLACE = { language: 'en', zone: 'America/Los_Angeles', season: 2026 } as const
+const PLACE = { language: 'en', units: 'metric', zone: 'America/Los_Angeles', season: 2026 } as const
 const started = (id: string, by: string) => presentRow(buildRow({ id, by, state: 'started', number: null, signedAt: null }), PLACE)
 const lines = [started('theirs', 'Ruan Teal'), started('mine', 'Tam Lisk')]
 
