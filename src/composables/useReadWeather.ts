@@ -3,7 +3,7 @@ import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { readingUnit } from '../../shared/units/readingUnit.ts'
 import type { UnitCode } from '../../shared/units/unitTable.ts'
 import { useFigures } from './useFigures.ts'
-import type { ReadFact } from './useRecordReading.ts'
+import type { ReadFact } from './readFact.ts'
 
 /** The weather of a record: what was read as it was read, with what that is in the reader's measures; and what follows from the air. */
 export function useReadWeather(): (record: Pick<ApplicationRecord, 'weather' | 'computed'>) => ReadFact[] {

@@ -10,6 +10,7 @@ import { convertQuantity, type Quantity } from '../../shared/units/convertQuanti
 import { readingAmountUnit } from '../../shared/units/readingUnit.ts'
 import { subtractDecimals } from '../../shared/units/subtractDecimals.ts'
 import type { UnitCode } from '../../shared/units/unitTable.ts'
+import type { ReadFact } from './readFact.ts'
 import type { RecordGround } from './recordGround.ts'
 import { useFigures } from './useFigures.ts'
 import { useMessages } from './useMessages.ts'
@@ -46,13 +47,6 @@ export interface ReadWords {
   words: string
   isLong: boolean
   isGiven: boolean
-}
-
-export interface ReadFact {
-  name: string
-  value: string
-  /** What kind of value it is, or more about it. */
-  note?: string
 }
 
 /** A record as a reader finds it: lines of text in the person's language and the farm's time; what is missing says so. */

@@ -1,3 +1,4 @@
+import { flushPromises } from '@vue/test-utils'
 import { createPinia, setActivePinia } from 'pinia'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { createMemoryHistory, createRouter, type Router } from 'vue-router'
@@ -45,7 +46,7 @@ describe('at each step to another place', () => {
     here.read.mockResolvedValue(sessionOf(membership('f', 'manager')))
     await router.push('/inputs')
     await vi.waitFor(() => { expect(here.read).toHaveBeenCalledTimes(2) })
-    await new Promise(process.nextTick)
+    await flushPromises()
     expect([kept(), router.currentRoute.value.path]).toEqual([['read before'], '/inputs'])
   })
 
@@ -72,7 +73,7 @@ describe('at each step to another place', () => {
     here.read.mockRejectedValue(new NetworkError())
     await router.push('/inputs')
     await vi.waitFor(() => { expect(here.read).toHaveBeenCalledTimes(2) })
-    await new Promise(process.nextTick)
+    await flushPromises()
     expect([kept(), useReentry().asking, router.currentRoute.value.path]).toEqual([['read before'], false, '/inputs'])
   })
 })
