@@ -75,8 +75,8 @@ test('a new owner comes from the one-time link to a first signed record, and ope
   await block.saveButton.click()
   await expect(page).toHaveURL(/\/blocks\/[0-9a-f-]{36}$/)
 
-  // What is done is seen wherever one comes back; what does not fit is passed over.
-  await page.goto('/start')
+  // The page that the step led to leads back; what does not fit is passed over.
+  await main.getByRole('link', { name: say('start.open') }).click()
   await expect(main.getByText(say('start.progress', { done: 3, all: 6 }))).toBeVisible()
   await makeInputs(page)
   const form = new RecordForm(page, isPhone)
