@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { emailSchema } from '../../shared/contract/email.ts'
 import { acceptSignedInSchema, acceptWelcomeSchema, linkParamsSchema, spendResetSchema, welcomeSchema } from '../../shared/contract/welcome.ts'
 import { logSecurity } from '../middleware/logSecurity.ts'
+import { originOf } from '../middleware/originOf.ts'
 import { rememberDevice } from '../middleware/rememberDevice.ts'
 import { askForReset, readReset, resetPassword } from '../services/resetPassword.ts'
 import { acceptSignedIn, acceptWelcome, readWelcome } from '../services/welcome.ts'
@@ -18,7 +19,7 @@ export const linkRoutes = [
     method: 'post', path: '/welcome', summary: 'Spend a one-time link: take a name and a password.', roles: 'everybody',
     guardsPassword: true, body: acceptWelcomeSchema, answer: z.null(),
     run: async ({ services, body, request, response }) => {
-      const { accountId, email } = await acceptWelcome(services, body)
+      const { accountId, email } = await acceptWelcome(services, body, originOf(request))
       logSecurity(services, request, 'password.changed', { accountId })
       rememberDevice(services, response, email)
       return { status: 204, body: null }
@@ -27,7 +28,7 @@ export const linkRoutes = [
   defineRoute({
     method: 'post', path: '/welcome/accept', summary: 'Take an invitation with the account that is signed in.', roles: 'account',
     guardsPassword: true, body: acceptSignedInSchema, answer: z.object({ farmId: z.string() }),
-    run: async ({ services, accountId, body }) => ({ body: await acceptSignedIn(services, accountId, body.token) }),
+    run: async ({ services, accountId, body, request }) => ({ body: await acceptSignedIn(services, accountId, body.token, originOf(request)) }),
   }),
   defineRoute({
     method: 'post', path: '/reset', summary: 'Ask for a new password by letter; the answer is the same for every e-mail.', roles: 'everybody',

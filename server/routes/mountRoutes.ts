@@ -1,14 +1,13 @@
 import { Router, type Request, type RequestHandler, type Response } from 'express'
 import type { z } from 'zod'
-import { deviceWords } from '../../shared/devices/deviceWords.ts'
 import { AppError, forbidden, notFound } from '../errors.ts'
 import type { FarmActor } from '../database/actor.ts'
+import { originOf } from '../middleware/originOf.ts'
 import type { Authenticate, OpenFor } from '../middleware/session.ts'
 import { readLanguage } from '../middleware/readLanguage.ts'
 import { readUpload } from '../middleware/readUpload.ts'
 import type { UploadedFile } from '../services/files/judgeFile.ts'
 import type { Services } from '../services/services.ts'
-import { truncateAddress } from '../services/truncateAddress.ts'
 import type { Route } from './defineRoute.ts'
 
 /** What the routes stand on. */
@@ -94,5 +93,5 @@ async function authorise(route: Route, services: Services, request: Request, par
   if (!actor) throw notFound()
   if (!route.roles.includes(actor.role)) throw forbidden()
   if (actor.asksFactor && request.user?.open?.hasFactor !== true) throw forbidden('session.factor_needed')
-  return { ...actor, origin: { network: truncateAddress(request.ip), device: deviceWords(request.get('User-Agent')) } }
+  return { ...actor, origin: originOf(request) }
 }

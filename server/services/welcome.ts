@@ -1,5 +1,6 @@
 import type { EntityManager } from 'typeorm'
 import type { Welcome } from '../../shared/contract/welcome.ts'
+import type { Origin } from '../database/actor.ts'
 import { Account } from '../entities/Account.ts'
 import { AppError } from '../errors.ts'
 import { accountOf } from './accountOf.ts'
@@ -35,7 +36,7 @@ export async function readWelcome(services: Parts, token: string): Promise<Welco
  * sessions end. @returns the account's id, and the e-mail by which it signs in.
  * @throws {AppError} `welcome.used_up`, `welcome.has_account` for an invitation of somebody who signs in already, or a weak password.
  */
-export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }): Promise<{ accountId: string; email: string }> {
+export async function acceptWelcome(services: Parts, input: { token: string; name: string; password: string }, origin: Origin): Promise<{ accountId: string; email: string }> {
   const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, input.token, ['welcome', 'invitation']))
   if (link.kind === 'invitation' && account.passwordHash !== null) throw new AppError('conflict', 'welcome.has_account')
   const farm = link.kind === 'invitation' ? (await describeInvitation(services, link)).farm : null
@@ -47,7 +48,7 @@ export async function acceptWelcome(services: Parts, input: { token: string; nam
     await manager.update(Account, { id: account.id }, { name: input.name, passwordHash })
     await endSessionsOf(manager, account.id)
   }
-  if (link.kind === 'invitation') await takeInvitation(services, { link, account: { ...account, name: input.name } }, work)
+  if (link.kind === 'invitation') await takeInvitation(services, { link, account: { ...account, name: input.name }, origin }, work)
   else {
     await services.database.inHouse(async (manager) => {
       await work(manager)
@@ -61,8 +62,8 @@ export async function acceptWelcome(services: Parts, input: { token: string; nam
  * Takes an invitation with the account that is signed in. @returns the farm's id.
  * @throws {AppError} `welcome.used_up`, `welcome.other_account` where it is for another e-mail.
  */
-export async function acceptSignedIn(services: Parts, accountId: string, token: string): Promise<{ farmId: string }> {
+export async function acceptSignedIn(services: Parts, accountId: string, token: string, origin: Origin): Promise<{ farmId: string }> {
   const { link, account } = await services.database.inHouse((manager) => findLink(services, manager, token, ['invitation']))
   if (account.id !== accountId) throw new AppError('conflict', 'welcome.other_account')
-  return takeInvitation(services, { link, account }, (manager) => spendLink(services, manager, link))
+  return takeInvitation(services, { link, account, origin }, (manager) => spendLink(services, manager, link))
 }

@@ -18,7 +18,7 @@ export const journalCsvQuerySchema = journalFilterSchema.extend({ language: z.en
 
 /** What an entry says beside the deed, by name. */
 export const journalFactSchema = z.object({
-  name: z.enum(['reason', 'version', 'season', 'seasons', 'endsOn', 'format', 'volume']),
+  name: z.enum(['reason', 'version', 'season', 'seasons', 'endsOn', 'format', 'volume', 'role', 'roleFrom', 'roleTo', 'dayFrom', 'dayTo']),
   value: z.string(),
 })
 export type JournalFact = z.infer<typeof journalFactSchema>

@@ -115,6 +115,23 @@ describe('somebody without e-mail', () => {
   })
 })
 
+describe('what was done to people', () => {
+  it('stands in the journal with whom it was done to, as they are called now, and from what to what', async () => {
+    await change(farm.personIds.manager, { role: 'applicator' }).expect(200)
+    await change(farm.personIds.manager, { revision: 2, name: 'Tessaly Orr' }).expect(200)
+    await change(farm.personIds.applicator, { active: false }).expect(200)
+    const { body } = await owner.get(`/api/farms/${farm.id}/journal?kind=person`).expect(200)
+    const entries = (body.items as { action: string; subject: string; facts: object[] }[]).map(({ action, subject, facts }) => ({ action, subject, facts }))
+    expect(entries).toEqual([
+      { action: 'person.let_go', subject: expect.stringContaining('applicator'), facts: [] },
+      { action: 'person.renamed', subject: 'Tessaly Orr', facts: [] },
+      { action: 'person.role_changed', subject: 'Tessaly Orr', facts: [{ name: 'roleFrom', value: 'manager' }, { name: 'roleTo', value: 'applicator' }] },
+    ])
+    const csv = await owner.get(`/api/farms/${farm.id}/journal/csv?kind=person`).expect(200)
+    expect(csv.text).toContain('from Manager; to Applicator')
+  })
+})
+
 describe('a lost phone', () => {
   it('is answered by ending every session of its owner', async () => {
     const [first, second] = [await house.as(farm.accounts.manager), await house.as(farm.accounts.manager)]

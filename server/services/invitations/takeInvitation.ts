@@ -3,6 +3,7 @@ import { v7 as uuidV7 } from 'uuid'
 import { z } from 'zod'
 import { IsNull, type EntityManager } from 'typeorm'
 import type { Welcome } from '../../../shared/contract/welcome.ts'
+import type { Origin } from '../../database/actor.ts'
 import type { Account } from '../../entities/Account.ts'
 import type { AccountToken } from '../../entities/AccountToken.ts'
 import { Farm } from '../../entities/Farm.ts'
@@ -34,7 +35,7 @@ export async function describeInvitation({ database }: Parts, link: AccountToken
  * @throws {AppError} `welcome.used_up` if it was taken or taken back meanwhile.
  */
 export async function takeInvitation(
-  services: Parts, { link, account }: { link: AccountToken; account: Account }, also: (manager: EntityManager) => Promise<void>,
+  services: Parts, { link, account, origin }: { link: AccountToken; account: Account; origin: Origin }, also: (manager: EntityManager) => Promise<void>,
 ): Promise<{ farmId: string }> {
   const { farmId, invitationId } = detailSchema.parse(link.detail)
   await services.database.inFarm({ farmId, seasons: null }, async (manager) => {
@@ -42,7 +43,7 @@ export async function takeInvitation(
     await also(manager)
     const personId = await putPerson(services, manager, { farmId, account, role: invitation.role })
     await manager.update(Invitation, { farmId, id: invitationId }, { acceptedAt: services.clock.now(), revision: invitation.revision + 1 })
-    await appendJournal(services, manager, { farmId, personId, accountId: account.id }, { action: 'invitation.taken', subjectId: personId, detail: { role: invitation.role } })
+    await appendJournal(services, manager, { farmId, personId, accountId: account.id, origin }, { action: 'invitation.taken', subjectId: personId, detail: { role: invitation.role } })
   })
   return { farmId }
 }

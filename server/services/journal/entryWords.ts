@@ -6,6 +6,7 @@ export const actionWords = (language: Language, action: string): string => trans
 
 /** A fact of a deed in words. */
 export function factWords(language: Language, { name, value }: JournalFact): string {
-  const text = name === 'format' ? translate(language, `journal.format.${value}`) : value
+  const isRole = name === 'role' || name === 'roleFrom' || name === 'roleTo'
+  const text = name === 'format' ? translate(language, `journal.format.${value}`) : isRole ? translate(language, `session.role.${value}`) : value
   return translate(language, `journal.fact.${name}`, { value: text })
 }

@@ -2,12 +2,20 @@ import { In, type EntityManager } from 'typeorm'
 import type { JournalEntry as EntryAnswer, JournalFact } from '../../../shared/contract/journal.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Account } from '../../entities/Account.ts'
-import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import type { JournalEntry } from '../../entities/JournalEntry.ts'
 import { Person } from '../../entities/Person.ts'
+import { readSubjectNames } from './subjectNames.ts'
 
 /** What a deed may say of its own: everything else in its detail is for the server. */
 const FACTS: readonly JournalFact['name'][] = ['reason', 'version', 'season', 'seasons', 'endsOn', 'format', 'volume']
+/** What a deed of one kind says besides, and under which key. */
+const FACTS_OF: Readonly<Record<string, readonly { name: JournalFact['name']; key: string }[]>> = {
+  'person.added': [{ name: 'role', key: 'role' }],
+  'person.role_changed': [{ name: 'roleFrom', key: 'from' }, { name: 'roleTo', key: 'to' }],
+  'invitation.sent': [{ name: 'role', key: 'role' }],
+  'invitation.taken': [{ name: 'role', key: 'role' }],
+  'job.moved': [{ name: 'dayFrom', key: 'from' }, { name: 'dayTo', key: 'to' }],
+}
 
 type Detail = Record<string, unknown>
 
@@ -15,7 +23,7 @@ type Detail = Record<string, unknown>
 export async function presentEntries(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, entries: readonly JournalEntry[]): Promise<EntryAnswer[]> {
   const people = await manager.find(Person, { select: { id: true, name: true }, where: { farmId, id: In(entries.flatMap(({ personId }) => personId ?? [])) } })
   const outsiders = await manager.find(Account, { select: { id: true, name: true }, where: { id: In(entries.flatMap(({ personId, accountId }) => (personId === null ? accountId ?? [] : []))) } })
-  const numbers = await readNumbers(manager, farmId, entries)
+  const names = await readSubjectNames(manager, farmId, entries)
   return entries.map((entry) => {
     const detail = entry.detail as Detail
     const isOutsider = entry.personId === null && entry.accountId !== null
@@ -27,21 +35,25 @@ export async function presentEntries(manager: EntityManager, { farmId }: Pick<Fa
       isOutsider,
       action: entry.action,
       subjectId: entry.subjectId,
-      subject: textOf(detail['number']) ?? textOf(detail['code']) ?? textOf(detail['name']) ?? textOf(detail['crop']) ?? numbers.get(entry.subjectId ?? '') ?? null,
-      facts: FACTS.flatMap((fact) => {
-        const value = textOf(detail[fact])
-        return value === null ? [] : [{ name: fact, value }]
-      }),
+      subject: textOf(detail['number']) ?? textOf(detail['code']) ?? textOf(detail['name']) ?? textOf(detail['crop']) ?? jobOf(detail) ?? names.get(entry.subjectId ?? '') ?? null,
+      facts: factsOf(entry.action, detail),
       from: { network: entry.fromNetwork, device: entry.fromDevice },
     }
   })
 }
 
-/** Numbers of the records that entries without a number of their own are about. */
-async function readNumbers(manager: EntityManager, farmId: string, entries: readonly JournalEntry[]): Promise<Map<string, string>> {
-  const ids = entries.flatMap(({ action, subjectId }) => (action.startsWith('record.') && subjectId !== null ? [subjectId] : []))
-  const records = await manager.find(ApplicationRecord, { select: { id: true, registerRow: true }, where: { farmId, id: In(ids) } })
-  return new Map(records.flatMap(({ id, registerRow: { number } }) => (number === null ? [] : [[id, number] as const])))
+/** A job has no name of its own: its block, and what is put on it. */
+function jobOf({ block, preparation }: Detail): string | null {
+  const words = [textOf(block), textOf(preparation)].filter((word) => word !== null)
+  return words.length === 0 ? null : words.join(', ')
+}
+
+function factsOf(action: string, detail: Detail): JournalFact[] {
+  const facts = [...FACTS.map((name) => ({ name, key: name })), ...(FACTS_OF[action] ?? [])]
+  return facts.flatMap(({ name, key }) => {
+    const value = textOf(detail[key])
+    return value === null ? [] : [{ name, value }]
+  })
 }
 
 function textOf(value: unknown): string | null {

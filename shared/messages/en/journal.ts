@@ -43,6 +43,7 @@ export const journal = {
   },
   fact: {
     reason: '“{value}”', version: 'version {value}', season: 'season {value}', seasons: 'seasons {value}', endsOn: 'until {value}', format: '{value}', volume: 'volume {value}',
+    role: 'as {value}', roleFrom: 'from {value}', roleTo: 'to {value}', dayFrom: 'from {value}', dayTo: 'to {value}',
   },
   format: { pdf: 'report as PDF', sheets: 'sheets as PDF', csv: 'register as CSV', register: 'register as PDF', registerCsv: 'register as CSV', record: 'PDF' },
   column: { at: 'When', by: 'Who', action: 'What', subject: 'About', facts: 'More', network: 'From', device: 'With' },

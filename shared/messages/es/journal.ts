@@ -44,6 +44,7 @@ export const journal: Messages['journal'] = {
   },
   fact: {
     reason: '«{value}»', version: 'versión {value}', season: 'campaña {value}', seasons: 'campañas {value}', endsOn: 'hasta {value}', format: '{value}', volume: 'volumen {value}',
+    role: 'con la función: {value}', roleFrom: 'de {value}', roleTo: 'a {value}', dayFrom: 'del {value}', dayTo: 'al {value}',
   },
   format: { pdf: 'informe en PDF', sheets: 'hojas en PDF', csv: 'libro en CSV', register: 'libro en PDF', registerCsv: 'libro en CSV', record: 'PDF' },
   column: { at: 'Cuándo', by: 'Quién', action: 'Qué', subject: 'Sobre qué', facts: 'Además', network: 'Desde', device: 'Con' },
