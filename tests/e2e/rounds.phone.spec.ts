@@ -30,7 +30,7 @@ test('a plan is made; a job is moved, one is done from its record, another is sk
   await picker.getByRole('button', { name: /^Add \d/ }).click()
   await form.getByLabel(say('rounds.form.first')).fill(dayFromNow(0))
   await form.getByRole('button', { name: say('rounds.form.save') }).click()
-  await expect(form.getByText(say('problems.date.invalid'))).toBeVisible()
+  await expect(form.getByText(say('problems.field.required'))).toBeVisible()
   await form.getByLabel(say('rounds.form.last')).fill(dayFromNow(60))
   await expect(form.getByText(/^5 rounds on 2 blocks/)).toBeVisible()
   await form.getByRole('button', { name: say('rounds.form.save') }).click()
