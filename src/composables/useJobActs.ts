@@ -52,7 +52,7 @@ export function useJobActs(job: () => Job): JobActs {
     form, doubt,
     needsReason: computed(() => form.tried && form.reason.trim() === ''),
     busy: computed(() => task.running.value),
-    kept: computed(() => outbox.kept.some(({ command }) => command.kind.startsWith('job.') && command.id === job().id)),
+    kept: computed(() => outbox.waiting.some(({ command }) => command.kind.startsWith('job.') && command.id === job().id)),
     problem: computed(() => {
       if (task.error.value === null || doubt.value !== '') return ''
       const first = task.error.value instanceof ApiError ? task.error.value.problem.errors[0]?.message : undefined

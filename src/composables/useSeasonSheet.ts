@@ -103,7 +103,7 @@ export function useSeasonSheet(): Sheet {
 /** Days to which jobs were moved without signal, by job; null for one that goes back to its target. */
 function useKeptMoves(): ComputedRef<ReadonlyMap<string, string | null>> {
   const outbox = useOutbox()
-  return computed(() => new Map(outbox.kept.flatMap(({ command }) => (command.kind === 'job.move' ? [[command.id, (command as Command<'job.move'>).body.to] as const] : []))))
+  return computed(() => new Map(outbox.waiting.flatMap(({ command }) => (command.kind === 'job.move' ? [[command.id, (command as Command<'job.move'>).body.to] as const] : []))))
 }
 
 /** A job on the day to which it was moved on this device: its window and state stay those that the farm knows. */

@@ -1,5 +1,5 @@
 import { defineStore } from 'pinia'
-import { computed, ref, shallowRef } from 'vue'
+import { computed, ref, shallowReactive, shallowRef } from 'vue'
 import { sendCommand } from '../api/commandApi.ts'
 import type { Command, CommandAnswers, CommandKind } from '../api/commandTypes.ts'
 import { ApiError, NetworkError } from '../api/errors.ts'
@@ -26,9 +26,13 @@ export const useOutbox = defineStore('outbox', () => {
   let flushing: Promise<void> | null = null
   /** Keys that are being sent at this moment: a retry in between leaves them alone. */
   const inHand = new Set<string>()
+  /** Keys whose first sending has not ended: nobody knows yet whether they will have to wait. */
+  const firstTries = shallowReactive(new Set<string>())
 
   const mine = computed(() => items.value.filter((item) => item.accountId === session.user?.id))
   const kept = computed(() => mine.value.filter((item) => item.state !== 'needsYou'))
+  /** What was tried and waits for signal. */
+  const waiting = computed(() => kept.value.filter(({ key }) => !firstTries.has(key)))
   const needsYou = computed(() => mine.value.filter((item) => item.state === 'needsYou'))
 
   async function refresh(): Promise<void> {
@@ -45,6 +49,7 @@ export const useOutbox = defineStore('outbox', () => {
     if ('password' in command.body) return { state: 'sent', answer: await sendAndSettle(command) }
     const item = keep(command)
     inHand.add(item.key)
+    firstTries.add(item.key)
     try {
       await device.outbox.put(item)
       await refresh()
@@ -61,6 +66,7 @@ export const useOutbox = defineStore('outbox', () => {
     } finally {
       inHand.delete(item.key)
       await refresh()
+      firstTries.delete(item.key)
     }
   }
 
@@ -145,7 +151,7 @@ export const useOutbox = defineStore('outbox', () => {
     void refresh().then(attempt)
   }
 
-  return { items: mine, kept, needsYou, sendingCount, lastSentAt, lastSent, online, submit, flush, discard, retry, start }
+  return { items: mine, kept, waiting, needsYou, sendingCount, lastSentAt, lastSent, online, submit, flush, discard, retry, start }
 })
 
 /** A second write of the same thing replaces the first that was not sent; two counts of a lot are two. */
