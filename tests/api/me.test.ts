@@ -76,9 +76,10 @@ describe('one’s own sessions', () => {
     await phone.post('/api/session').send({ email: farm.accounts.manager.email, password: PASSWORD }).expect(200)
     house.setNow('2026-06-16T16:00:00.000Z')
     await phone.get('/api/session').expect(200)
+    house.setNow('2026-06-16T16:10:00.000Z')
     const { body } = await manager.get('/api/me/sessions').expect(200)
     expect(body.items).toMatchObject([
-      { isThis: true, openedAt: NOW, seenAt: '2026-06-16T16:00:00.000Z' },
+      { isThis: true, openedAt: NOW, seenAt: '2026-06-16T16:10:00.000Z' },
       { isThis: false, device: 'Firefox, Android', openedAt: NOW, seenAt: '2026-06-16T16:00:00.000Z', endsAt: '2026-06-30T16:00:00.000Z' },
     ])
     expect(Object.keys(body.items[0]).sort()).toEqual(['device', 'endsAt', 'id', 'isThis', 'onSharedPhone', 'openedAt', 'seenAt'])

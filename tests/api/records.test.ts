@@ -334,7 +334,7 @@ describe('a check code', () => {
     const code = digest.slice(0, 20).replace(/(.{4})/g, '$1 ').trim()
     const { default: supertest } = await import('supertest')
     const found = await supertest(house.app).get(`/api/check/${encodeURIComponent(code)}`)
-    expect(found.body).toEqual({ found: true, number: body['number'], seq: body['seq'], version: 1, signedAt: body['signedAt'], digest, latestVersion: 1, withdrawn: false })
+    expect(found.body).toEqual({ found: true, number: body['number'], seq: body['seq'], version: 1, signedAt: body['signedAt'], digest, latestVersion: 1, withdrawn: false, season: null })
     await manager.post(address(`/${String(body['id'])}/withdraw`)).send({ reason: 'Entered twice' }).expect(200)
     const since = await supertest(house.app).get(`/api/check/${encodeURIComponent(code)}`)
     expect(since.body).toMatchObject({ found: true, version: 1, latestVersion: 2, withdrawn: true })

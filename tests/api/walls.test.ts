@@ -131,7 +131,7 @@ describe('a certifier', () => {
       expect((await certifier.get(`/api/farms/${farm.id}/records/${id}/versions`)).status).toBe(404)
     }
     house.setNow('2026-07-01T07:30:00Z')
-    const late = await certifier.get(`/api/farms/${farm.id}/records`)
+    const late = await (await house.as(farm.accounts.certifier)).get(`/api/farms/${farm.id}/records`)
     house.setNow('2026-06-16T14:00:00Z')
     expect(late.status).toBe(404)
   })
