@@ -60,8 +60,8 @@ export const useOutbox = defineStore('outbox', () => {
     } catch (error) {
       if (mustWait(error)) return { state: 'kept' }
       await device.outbox.delete(item.key)
-      // Somebody else was first: the page behind shows theirs from now on.
-      if (error instanceof ApiError && error.problem.code === 'stale') refreshAfter(command)
+      // Somebody else was first: the page behind shows theirs from now on. An outline is chosen between the two where it is drawn.
+      if (error instanceof ApiError && error.problem.code === 'stale' && command.kind !== 'block.update') refreshAfter(command)
       throw error
     } finally {
       inHand.delete(item.key)

@@ -16,7 +16,7 @@ test('an overlap is asked about, and saved with its reason', async ({ page, sign
   const code = unique('O')
   await form.name(code)
   await form.saveButton.click()
-  await expect(form.main.getByText(say('problems.geometry.overlap', { code: 'A3', areaHa: '0.94' })).filter({ visible: true }).first()).toBeVisible()
+  await expect(form.main.getByText(say('problems.geometry.overlap', { code: 'A3', areaHa: '0.94', areaUnit: 'ha' })).filter({ visible: true }).first()).toBeVisible()
   await form.saveButton.click()
   const reasons = form.main.getByRole('textbox', { name: say('blocks.unlikely.reason') })
   await expect(form.main.getByText(say('blocks.unlikely.reasonNeeded')).first()).toBeVisible()
