@@ -21,7 +21,7 @@ test('an outline that somebody else changed meanwhile is shown beside one’s ow
   const points = field(page, say('blocks.points.label'))
   await expect(points).not.toHaveValue('')
   await points.fill(twiceAsWide(place))
-  await expect(page.getByText(/^C reshape: 1\.76 ha/).first()).toBeAttached()
+  await expect(page.getByText(/^C reshape: 1\.76\s+ha/).first()).toBeAttached()
   const theirs = await farm.patch(`/blocks/${block.id}`, { revision: block.revision, geometry: square({ west, south, size: size / 2 }) }, blockSchema)
 
   await button(page, say('shapes.reshape.save')).click()

@@ -49,7 +49,6 @@ export const farm = {
     title: 'My farms',
     intro: 'Farms and seasons you were granted. You read; nothing you do here changes a record.',
     farm: 'Farm',
-    isOpen: 'open now',
     checksTitle: 'What you see',
     outside: 'Other seasons of these farms, and what was never written down, are not shown.',
     foot: 'A record shown here says what was written and signed. It says nothing about whether it is true.',

@@ -72,6 +72,10 @@ export const grants = {
     whole: 'A whole season',
     none: 'Nothing was signed for this season. The report says so.',
   },
+  short: {
+    title: 'Season {season} of {farm} in short', more: 'signed records, withdrawn ones not counted', look: 'Look at', area: 'Area, each time it was worked', amount: 'What went on', all: 'All methods',
+    signed: 'Signed records', withdrawn: 'Withdrawn', late: 'Entered more than a day after the work', lateOf: '{late} of {all}', notJudged: 'Counts, not verdicts: no rule set is judged here yet.',
+  },
   myFarms: {
     season: 'Season', records: 'Records', until: 'Granted to', head: 'Last report you took', code: 'Check code', report: 'Report', open: 'Open',
     withdrawn: '{records}, {withdrawn} withdrawn',

@@ -49,7 +49,6 @@ export const farm = {
     title: 'Mis fincas',
     intro: 'Fincas y campañas que se le han concedido. Usted lee; nada de lo que haga aquí cambia un registro.',
     farm: 'Finca',
-    isOpen: 'abierta ahora',
     checksTitle: 'Lo que usted ve',
     outside: 'Otras campañas de estas fincas, y lo que nunca se anotó, no se muestran.',
     foot: 'Un registro mostrado aquí dice lo que se anotó y se firmó. No dice si es verdad.',

@@ -73,6 +73,10 @@ export const grants: Messages['grants'] = {
     whole: 'Una campaña entera',
     none: 'Para esta campaña no se firmó nada. El informe lo dice.',
   },
+  short: {
+    title: 'La campaña {season} de {farm} en breve', more: 'registros firmados, sin los retirados', look: 'Mirar', area: 'Superficie, cada vez que se trabajó', amount: 'Lo aplicado', all: 'Todos los métodos',
+    signed: 'Registros firmados', withdrawn: 'Retirados', late: 'Anotados más de un día después del trabajo', lateOf: '{late} de {all}', notJudged: 'Recuentos, no dictámenes: aquí aún no se juzga ningún conjunto de reglas.',
+  },
   myFarms: {
     season: 'Campaña', records: 'Registros', until: 'Concedida hasta', head: 'Último informe que se llevó', code: 'Código de control', report: 'Informe', open: 'Abrir',
     withdrawn: '{records}, {withdrawn} retirados',
