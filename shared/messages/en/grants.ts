@@ -73,7 +73,7 @@ export const grants = {
     none: 'Nothing was signed for this season. The report says so.',
   },
   short: {
-    peek: '{signed} signed, {withdrawn} withdrawn, {late} entered late',
+    peek: '{signed} signed, {withdrawn} withdrawn',
     title: 'Season {season} of {farm} in short', more: 'signed records, withdrawn ones not counted', look: 'Look at', area: 'Area, each time it was worked', amount: 'What went on', all: 'All methods',
     signed: 'Signed records', withdrawn: 'Withdrawn', late: 'Entered more than a day after the work', lateOf: '{late} of {all}', notJudged: 'Counts, not verdicts: no rule set is judged here yet.',
   },

@@ -74,7 +74,7 @@ export const grants: Messages['grants'] = {
     none: 'Para esta campaña no se firmó nada. El informe lo dice.',
   },
   short: {
-    peek: '{signed} firmados, {withdrawn} retirados, {late} anotados tarde',
+    peek: '{signed} firmados, {withdrawn} retirados',
     title: 'La campaña {season} de {farm} en breve', more: 'registros firmados, sin los retirados', look: 'Mirar', area: 'Superficie, cada vez que se trabajó', amount: 'Lo aplicado', all: 'Todos los métodos',
     signed: 'Registros firmados', withdrawn: 'Retirados', late: 'Anotados más de un día después del trabajo', lateOf: '{late} de {all}', notJudged: 'Recuentos, no dictámenes: aquí aún no se juzga ningún conjunto de reglas.',
   },
