@@ -23,7 +23,7 @@ type Detail = Record<string, unknown>
 export async function presentEntries(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, entries: readonly JournalEntry[]): Promise<EntryAnswer[]> {
   const people = await manager.find(Person, { select: { id: true, name: true }, where: { farmId, id: In(entries.flatMap(({ personId }) => personId ?? [])) } })
   const outsiders = await manager.find(Account, { select: { id: true, name: true }, where: { id: In(entries.flatMap(({ personId, accountId }) => (personId === null ? accountId ?? [] : []))) } })
-  const names = await readSubjectNames(manager, farmId, entries)
+  const names = await readSubjectNames(manager, farmId, entries.filter(({ detail }) => ownWords(detail as Detail) === null))
   return entries.map((entry) => {
     const detail = entry.detail as Detail
     const isOutsider = entry.personId === null && entry.accountId !== null
@@ -35,12 +35,15 @@ export async function presentEntries(manager: EntityManager, { farmId }: Pick<Fa
       isOutsider,
       action: entry.action,
       subjectId: entry.subjectId,
-      subject: textOf(detail['number']) ?? textOf(detail['code']) ?? textOf(detail['name']) ?? textOf(detail['crop']) ?? jobOf(detail) ?? names.get(entry.subjectId ?? '') ?? null,
+      subject: ownWords(detail) ?? names.get(entry.subjectId ?? '') ?? null,
       facts: factsOf(entry.action, detail),
       from: { network: entry.fromNetwork, device: entry.fromDevice },
     }
   })
 }
+
+/** What a deed itself says of the thing it was about; null where the thing has to be asked. */
+const ownWords = (detail: Detail): string | null => textOf(detail['number']) ?? textOf(detail['code']) ?? textOf(detail['name']) ?? textOf(detail['crop']) ?? jobOf(detail)
 
 /** A job has no name of its own: its block, and what is put on it. */
 function jobOf({ block, preparation }: Detail): string | null {
