@@ -43,8 +43,11 @@ export function useKeptForm<Content>(empty: Content, { farmId, kind, about, fres
     }
     const kept = drafts.drafts.value.find(({ id }) => id === draftId())
     resumed.value = kept !== undefined
-    content.value = kept === undefined ? from : (kept.content as Content)
     ready.value = true
+    if (kept !== undefined) content.value = kept.content as Content
+    // A hand is faster than a slow device: what it did over the same beginning stays.
+    else if (from === empty && isBegun(content.value)) drafts.write(draftId(), kind, content.value)
+    else content.value = from
   }, { immediate: true })
 
   watch(content, (value) => {
