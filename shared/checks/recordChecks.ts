@@ -44,12 +44,15 @@ function checksOfComponent(facts: RecordFacts, index: number): (Check | null)[] 
   ]
 }
 
-/** One check a lot, however many components draw on it. */
+/** One check a lot, however many components draw on it; by what was really taken, where that was written. */
 function checksOfLots({ content, sheet, lots }: RecordFacts): Check[] {
   return lots.flatMap((lot) => {
     const first = content.components.findIndex((component) => component.lotId === lot.id)
     if (first < 0) return []
-    const drawing = sheet.components.filter((_, index) => content.components[index]?.lotId === lot.id)
+    const drawing = sheet.components.flatMap((component, index) => {
+      const written = content.components[index]
+      return written?.lotId === lot.id ? [asUsed(component, written.used)] : []
+    })
     return [judgeLotLeft(lot, drawing, `component:${first}`)]
   })
 }

@@ -1,5 +1,6 @@
 import { computed, ref, watch } from 'vue'
 import { useI18n } from 'vue-i18n'
+import { freshStops } from '../../shared/checks/freshStops.ts'
 import type { ApplicationRecord } from '../../shared/contract/record.ts'
 import { addDecimals } from '../../shared/units/addDecimals.ts'
 import { convertQuantity } from '../../shared/units/convertQuantity.ts'
@@ -8,6 +9,7 @@ import { now } from '../plugins/clock.ts'
 import { useSession } from '../stores/session.ts'
 import { goToFault } from './goToFault.ts'
 import { contentOf } from './recordContent.ts'
+import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
 import { useAmendDraft } from './useAmendDraft.ts'
 import { keepSeconds } from './keepSeconds.ts'
 import { signGaps } from './recordGaps.ts'
@@ -47,6 +49,8 @@ export function useRecordAmend(id: string) {
   const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
   const kept = useAmendDraft(id)
   const { draft, reason } = kept
+  /** What stands, as a form: judged over the same stock as what is typed, so that only what the amendment brings is new. */
+  const before = ref<RecordDraft>(emptyRecord())
   const tried = ref(false)
   const filled = ref(false)
   const amended = ref<ApplicationRecord | null>(null)
@@ -55,16 +59,17 @@ export function useRecordAmend(id: string) {
   watch([record, stockReady], ([one, ready]) => {
     if (one === null || !ready || standing.value !== null) return
     standing.value = one
+    before.value = draftOfRecord(one, zone.value)
     void kept.fill(one, zone.value).finally(() => { filled.value = true })
   }, { immediate: true })
 
   const sheet = useRecordSheet(draft, stock)
-  const checking = useRecordChecks(draft, stock, sheet)
+  const checking = useRecordChecks(draft, stock, sheet, () => true)
+  const stood = useRecordChecks(before, stock, useRecordSheet(before, stock), () => true)
   const mix = useMixRows({ draft, sheet, stock })
-  const known = computed(() => new Set(standing.value?.acknowledged.map(({ code }) => code) ?? []))
   /** A stop that was explained at the signature before asks no second time. */
-  const stops = computed(() => checking.reasoned.value.filter(({ code }) => !known.value.has(code) && !known.value.has('record.stop')))
-  const gaps = computed(() => signGaps({ draft: draft.value, sheet: sheet.value, zone: zone.value, hasStops: stops.value.length > 0 }))
+  const stops = computed(() => freshStops(checking.checks.value, stood.checks.value))
+  const gaps = computed(() => signGaps({ draft: draft.value, sheet: sheet.value, zone: zone.value, hasStops: signing.hasStops.value }))
 
   const signing = useSigning({
     draft, stops,
@@ -79,11 +84,18 @@ export function useRecordAmend(id: string) {
     gaps, live: computed(() => checking.shortLots.value), tried, refusals: [signing.error],
   })
 
+  /** The signature stands under both steps; what happened, and why in spite of a stop, is asked on the second. */
+  function showStepOf(paths: readonly string[]): void {
+    if (paths.some((path) => /^stop\.|\.(startedAt|endedAt|amount|used)$/.test(path))) draft.value.step = 2
+  }
+
   async function sign(): Promise<void> {
     tried.value = true
+    showStepOf(Object.keys(gaps.value))
     if (Object.keys(gaps.value).length > 0) await goToFault()
     if (Object.keys(gaps.value).length > 0 || signing.password.value === '' || reason.value.trim() === '') return
     const answer = await signing.run()
+    if (signing.doubts.value.length > 0) draft.value.step = 2
     if (answer === undefined || answer === 'kept') return
     await kept.discard()
     amended.value = answer

@@ -8,8 +8,11 @@ import type { RecordDraft } from './recordDraft.ts'
 import { useClock } from './useClock.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
-/** The checks of what is typed, by the same function that judges it again when it is signed. */
-export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>, sheet: Ref<RecordSheet>): {
+/**
+ * The checks of what is typed, by the same function that judges it again when it is signed.
+ * @param happened whether times and amounts are judged that say what happened; on the second step by itself.
+ */
+export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>, sheet: Ref<RecordSheet>, happened = (): boolean => draft.value.step === 2): {
   checks: ComputedRef<Check[]>
   tally: ComputedRef<Tally>
   /** Stops that are signed with a reason. */
@@ -20,12 +23,12 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
   const { time } = useClock()
   const checks = computed(() => {
     const zone = stock.value.farm?.zone ?? 'UTC'
-    const { method, lines } = contentOf(draft.value, { zone, happened: draft.value.step === 2 })
+    const { method, lines, components = [] } = contentOf(draft.value, { zone, happened: happened() })
     return recordChecks({
       content: {
         method,
         lines: lines.map(({ blockId, startedAt, endedAt, amount }) => ({ blockId, startedAt: startedAt ?? null, endedAt: endedAt ?? null, amount: amount ?? null })),
-        components: draft.value.components.map(({ materialId, lotId }) => ({ materialId, lotId: lotId === '' ? null : lotId })),
+        components: components.map(({ materialId, lotId, used }) => ({ materialId, lotId: lotId ?? null, used: used ?? null })),
         weather: weatherOf(draft.value),
       },
       sheet: sheet.value,

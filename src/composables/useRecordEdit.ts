@@ -47,7 +47,8 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
     content: () => contentOf(draft.value, { zone: zone.value, happened: draft.value.step === 2 }),
   })
   const facts = (): { draft: typeof draft.value; sheet: typeof sheet.value; zone: string } => ({ draft: draft.value, sheet: sheet.value, zone: zone.value })
-  const gaps = computed(() => signGaps({ ...facts(), hasStops: checking.reasoned.value.length > 0 }))
+  const signing = useSigning({ draft, stops: checking.reasoned, sign: send.sign })
+  const gaps = computed(() => signGaps({ ...facts(), hasStops: signing.hasStops.value }))
 
   /** The block that Start begins with: the first that was not begun. */
   const nextLine = computed(() => writtenLines(draft.value).find(({ start, end }) => start.time === '' && end.time === '') ?? null)
@@ -64,7 +65,6 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
       throw error
     }
   })
-  const signing = useSigning({ draft, stops: checking.reasoned, sign: send.sign })
 
   async function sign(): Promise<void> {
     tried.value = true

@@ -18,6 +18,7 @@ export interface Doubt {
 
 interface SigningOptions {
   draft: Ref<RecordDraft>
+  /** Stops that ask for a reason. */
   stops: Ref<Check[]>
   sign: (password: string, acknowledged: Acknowledged) => Promise<ApplicationRecord | 'kept'>
 }
@@ -27,12 +28,17 @@ export interface Signing {
   /** Reasons by the code of a doubt. */
   reasons: Ref<Record<string, string>>
   doubts: ComputedRef<Doubt[]>
+  /** A stop asks for its reason, found here or by the server alone. */
+  hasStops: ComputedRef<boolean>
   busy: Ref<boolean>
   /** Why it is not signed, in words; empty where nothing was tried. */
   words: ComputedRef<string>
   error: Ref<unknown>
   run: () => Promise<ApplicationRecord | 'kept' | undefined>
 }
+
+/** Under this the server asks about a stop. */
+export const STOP_DOUBT = 'record.stop'
 
 function doubtsOf(error: unknown): Doubt[] {
   if (!(error instanceof ApiError) || error.problem.acknowledgeable !== true) return []
@@ -47,11 +53,13 @@ export function useSigning({ draft, stops, sign }: SigningOptions): Signing {
   const reasons = ref<Record<string, string>>({})
   const doubts = ref<Doubt[]>([])
 
+  const isStopAsked = (): boolean => doubts.value.some(({ code }) => code === STOP_DOUBT)
+
   function acknowledged(): Acknowledged {
     const { why, told, done } = draft.value.stop
     const reason = t('records.stop.reason', { why: why.trim(), told: told.trim(), done: done.trim() })
-    const codes = new Set(stops.value.map(({ code }) => code))
-    const given = doubts.value.flatMap(({ code }) => ((reasons.value[code] ?? '').trim() === '' ? [] : [{ code, reason: reasons.value[code] ?? '' }]))
+    const codes = new Set([...stops.value.map(({ code }) => code), ...(isStopAsked() ? [STOP_DOUBT] : [])])
+    const given = doubts.value.filter(({ code }) => code !== STOP_DOUBT).flatMap(({ code }) => ((reasons.value[code] ?? '').trim() === '' ? [] : [{ code, reason: reasons.value[code] ?? '' }]))
     return [...[...codes].map((code) => ({ code, reason })), ...given]
   }
 
@@ -87,6 +95,7 @@ export function useSigning({ draft, stops, sign }: SigningOptions): Signing {
   return {
     password, reasons, busy: task.running, words,
     doubts: computed(() => doubts.value),
+    hasStops: computed(() => stops.value.length > 0 || isStopAsked()),
     error: task.error,
     // Two presses are one signature: the second finds the first at work.
     run: () => (task.running.value ? Promise.resolve(undefined) : task.run()),

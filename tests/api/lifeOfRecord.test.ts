@@ -126,6 +126,30 @@ describe('amending', () => {
     expect((await book(lotId)).left).toBe(5)
   })
 
+  it('asks about the stop that it brings, and carries what was said of the one that stood', async () => {
+    const of = async (material: object, lot: object) => {
+      const id = uuidV7()
+      await manager.post(`/api/farms/${farm.id}/materials`).send({ id, kind: 'mineral', measuredIn: 'volume', organicStatus: 'prohibited', statusBasis: 'Letter of 3 May', ...material }).expect(201)
+      const { id: lotId } = (await manager.post(`/api/farms/${farm.id}/lots`).send({ ...buildLot({ materialId: id }), code: id.slice(-8), ...lot }).expect(201)).body
+      return { materialId: id, lotId: lotId as string, basis: { kind: 'ratio', parts: '20', reading: 'to' } as const }
+    }
+    const copper = await of({ name: 'Copper wash' }, {})
+    const soap = await of(
+      { name: 'Potash soap', organicStatus: 'allowed', label: { maxRate: null, minStrengthPct: null, maxStrengthPct: null, reEntryHours: null, preHarvestDays: null, source: 'part 3' } },
+      { origin: 'bought', expiresOn: '2026-05-31' },
+    )
+    const id = await written(applicator, { components: [copper] })
+    const said = { code: 'record.stop', reason: 'The wrong drum was opened' }
+    await send(applicator, id, 'sign', { password: PASSWORD, acknowledged: [said] }).expect(200)
+    const change = { reason: 'The soap was left out', components: [copper, soap] }
+    const asked = await amend(applicator, id, change)
+    expect(asked).toMatchObject({ status: 422, body: { acknowledgeable: true, errors: [{ code: 'record.stop', path: 'component:1', params: { checkCode: 'lot.pastUse' } }] } })
+    expect(asked.body.errors).toHaveLength(1)
+    const late = { code: 'lot.pastUse', reason: 'Seen too late. The certifier was told.' }
+    const answer = await amend(applicator, id, { ...change, acknowledged: [late] }).expect(200)
+    expect(answer.body.acknowledged).toEqual([late, { code: 'certifier.status', reason: 'The wrong drum was opened' }])
+  })
+
   it('rests on what stood then, and takes what is new as it is now', async () => {
     const owner = await farm.actor('owner')
     const { block } = await createBlock(house.services, owner, buildBlock({ code: uuidV7().slice(-6), geometry: squareAt(7) }))
