@@ -6,6 +6,7 @@ import { Bed } from '../entities/Bed.ts'
 import { Block } from '../entities/Block.ts'
 import { BlockBoundary } from '../entities/BlockBoundary.ts'
 import { Calibration } from '../entities/Calibration.ts'
+import { Certificate } from '../entities/Certificate.ts'
 import { Farm } from '../entities/Farm.ts'
 import { FarmEvent } from '../entities/FarmEvent.ts'
 import { FarmEventBlock } from '../entities/FarmEventBlock.ts'
@@ -50,7 +51,7 @@ export const ENTITIES = [
   Bed,
   Block,
   BlockBoundary,
-  Calibration,
+  Calibration, Certificate,
   Farm,
   FarmEvent,
   FarmEventBlock,

@@ -26,6 +26,7 @@ export const APP_RIGHTS: Record<string, string> = {
   materials: 'SELECT, INSERT, UPDATE',
   lots: 'SELECT, INSERT, UPDATE',
   lot_entries: 'SELECT, INSERT',
+  certificates: 'SELECT, INSERT, UPDATE',
   sprayers: 'SELECT, INSERT, UPDATE',
   calibrations: 'SELECT, INSERT, UPDATE (withdrawn_at, withdrawn_by_id, withdrawn_reason)',
   application_records: 'SELECT, INSERT, UPDATE, DELETE',

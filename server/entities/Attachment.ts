@@ -10,7 +10,7 @@ import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm
 export class Attachment {
   @PrimaryColumn({ name: 'farm_id', type: 'uuid', primaryKeyConstraintName: 'attachments_pkey' }) farmId!: string
   @PrimaryColumn({ type: 'uuid', primaryKeyConstraintName: 'attachments_pkey' }) id!: string
-  /** What it belongs to: a record, or one of those whose id then stands in `recordId`: a paper of a person, the land of a block, a calibration, the farm for its certificate. */
+  /** What it belongs to: a record, or one of those whose id then stands in `recordId`: a paper of a person, the land of a block, a calibration, a certificate. */
   @Column({ type: 'text', default: 'record' }) about!: 'record' | 'person-paper' | 'land' | 'calibration' | 'certificate'
   /** A record, or one that was discarded before it was signed: no key binds it. */
   @Column({ name: 'record_id', type: 'uuid' }) recordId!: string

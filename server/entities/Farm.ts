@@ -1,5 +1,5 @@
 import { Check, Column, Entity, PrimaryColumn } from 'typeorm'
-import type { Certificate, Contact, RuleSet } from '../../shared/contract/farmProfile.ts'
+import type { Contact, RuleSet } from '../../shared/contract/farmProfile.ts'
 import type { StartStep } from '../../shared/contract/start.ts'
 
 @Entity({ name: 'farms' })
@@ -16,7 +16,6 @@ export class Farm {
   @Column({ name: 'asks_second_factor', type: 'boolean', default: false }) asksSecondFactor!: boolean
   /** Which figures are read first. */
   @Column({ type: 'text', default: 'metric' }) units!: 'metric' | 'us'
-  @Column({ type: 'jsonb', nullable: true }) certificate!: Certificate | null
   @Column({ type: 'jsonb', nullable: true }) contact!: Contact | null
   /** Public law that the farm says it works under. */
   @Column({ name: 'rule_sets', type: 'jsonb', default: [] }) ruleSets!: RuleSet[]

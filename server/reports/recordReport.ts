@@ -59,7 +59,7 @@ function drawFrames(canvas: Canvas, { head, foot, pages }: { head: RunningHead; 
 }
 
 /** What stands at the head of each of its pages. */
-export function recordHead({ signed, state, language, certificate, printedAt }: RecordReportData): RunningHead {
+export function recordHead({ signed, state, language, certificates, printedAt }: RecordReportData): RunningHead {
   const { say } = openWords(language, signed.farm.zone)
   const { number, version, season } = signed.record
   const document = version === 1 ? say('running.record', { number }) : say('running.recordVersion', { number, version })
@@ -67,7 +67,7 @@ export function recordHead({ signed, state, language, certificate, printedAt }: 
     farm: signed.farm.name,
     register: say('running.register', { season }),
     document: state === 'withdrawn' ? say('running.withdrawn', { document }) : document,
-    certificate: certificateLine({ certificate, farm: signed.farm, language, printedAt }, workDays(signed.farm.zone, [signed.times.startedAt, signed.times.endedAt])),
+    certificate: certificateLine({ certificates, farm: signed.farm, language, printedAt }, workDays(signed.farm.zone, [signed.times.startedAt, signed.times.endedAt])),
   }
 }
 

@@ -1,4 +1,4 @@
-import type { Certificate } from '../../shared/contract/farmProfile.ts'
+import type { Certificate } from '../../shared/contract/certificate.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
@@ -29,8 +29,8 @@ export interface RecordReportData {
   neighbours: readonly { code: string; geometry: Boundary }[]
   sites: readonly PlanSite[]
   state: 'signed' | 'withdrawn'
-  /** The farm's at the time of printing; null where none is written down. */
-  certificate: Certificate | null
+  /** All that are written down at the time of printing; what was in force on the days of the work is read off them. */
+  certificates: readonly Certificate[]
   /** RFC 3339 instant. */
   printedAt: string
   /** Where the QR code leads. */

@@ -1,4 +1,4 @@
-import type { Certificate } from '../../shared/contract/farmProfile.ts'
+import type { Certificate } from '../../shared/contract/certificate.ts'
 import type { RegisterRow } from '../../shared/contract/record.ts'
 import type { RegisterFilter, RegisterSort, RegisterTotals } from '../../shared/contract/register.ts'
 import type { Language } from '../../shared/messages/translate.ts'
@@ -18,8 +18,8 @@ export interface RegisterReportData {
   sort: RegisterSort
   totals: RegisterTotals
   rows: readonly PrintedRow[]
-  /** The farm's at the time of printing; null where none is written down. */
-  certificate: Certificate | null
+  /** All that are written down at the time of printing; what was in force on the days of the work is read off them. */
+  certificates: readonly Certificate[]
   /** RFC 3339 instant. */
   printedAt: string
   /** The address of the check page as a person types it. */

@@ -1,4 +1,4 @@
-import type { Certificate } from '../../shared/contract/farmProfile.ts'
+import type { Certificate } from '../../shared/contract/certificate.ts'
 import type { Boundary } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
 import type { BlockSummary, SeasonFigures } from '../../shared/season/summaryTypes.ts'
@@ -28,8 +28,8 @@ interface SeasonPart {
 
 /** All that a volume of the season report shows: plain data, no clock, no database. */
 export interface SeasonReportData extends SeasonPart {
-  /** As the farm wrote it down; null where it did not. */
-  certificate: Certificate | null
+  /** All that are written down at the time of printing; what was in force on the days of the work is read off them. */
+  certificates: readonly Certificate[]
   /** First and last civil day of the season. */
   span: { from: string; to: string }
   figures: SeasonFigures

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { addFileSchema, attachmentSchema } from '../../shared/contract/attachment.ts'
-import { farmParamsSchema, thingParamsSchema } from '../../shared/contract/common.ts'
+import { thingParamsSchema } from '../../shared/contract/common.ts'
 import { addFile } from '../services/files/addFile.ts'
 import type { FileHolder } from '../services/files/findHolder.ts'
 import { listFiles } from '../services/files/readFiles.ts'
@@ -11,19 +11,17 @@ const listSchema = z.object({ items: z.array(attachmentSchema), next: z.null() }
 
 /** Papers of one kind of thing: read by the farm's people, added by who leads the farm. */
 function papersOf(about: FileHolder['about'], path: string, what: string): Route[] {
-  const ofFarm = !path.includes(':id')
-  const params = ofFarm ? farmParamsSchema : thingParamsSchema
-  const idOf = (read: z.output<typeof farmParamsSchema> | z.output<typeof thingParamsSchema>): string => ('id' in read ? read.id : read.farmId)
+  const params = thingParamsSchema
   return [
     defineRoute({
       method: 'get', path, summary: `Papers of ${what}.`, roles: FARM_PEOPLE, params, answer: listSchema,
-      run: async ({ services, actor, params: read }) => ({ body: await listFiles(services, actor, { about, id: idOf(read) }) }),
+      run: async ({ services, actor, params: read }) => ({ body: await listFiles(services, actor, { about, id: read.id }) }),
     }),
     defineRoute({
       method: 'post', path, summary: `Add a paper of ${what}: one file of at most 10 MB, JPEG, PNG, WebP or PDF.`, roles: LEADERS,
       params, upload: true, body: addFileSchema, answer: attachmentSchema,
       run: async ({ services, actor, params: read, body, file }) => {
-        const { made, file: added } = await addFile(services, actor, { about, id: idOf(read) }, body, file)
+        const { made, file: added } = await addFile(services, actor, { about, id: read.id }, body, file)
         return { status: made ? 201 : 200, body: added }
       },
     }),
@@ -33,5 +31,5 @@ function papersOf(about: FileHolder['about'], path: string, what: string): Route
 export const heldPaperRoutes = [
   ...papersOf('land', '/farms/:farmId/blocks/:id/papers', 'how the land of a block stands, such as the proof of the last prohibited substance'),
   ...papersOf('calibration', '/farms/:farmId/calibrations/:id/papers', 'a calibration'),
-  ...papersOf('certificate', '/farms/:farmId/certificate/papers', 'the farm’s certificate'),
+  ...papersOf('certificate', '/farms/:farmId/certificates/:id/papers', 'a certificate'),
 ]

@@ -1,4 +1,5 @@
 import { blockRoutes } from './blockRoutes.ts'
+import { certificateRoutes } from './certificateRoutes.ts'
 import type { Route } from './defineRoute.ts'
 import { farmRoutes } from './farmRoutes.ts'
 import { fileRoutes } from './fileRoutes.ts'
@@ -28,6 +29,6 @@ import { startRoutes } from './startRoutes.ts'
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
   ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes, ...paperRoutes,
-  ...farmRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes, ...heldPaperRoutes,
+  ...farmRoutes, ...certificateRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes, ...heldPaperRoutes,
   ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

@@ -1,24 +1,13 @@
 import { z } from 'zod'
 import { UNIT_SYSTEMS } from '../units/readingUnit.ts'
-import { acknowledgedSchema, civilDateSchema, revisionSchema } from './common.ts'
+import { certificateSchema } from './certificate.ts'
+import { acknowledgedSchema, revisionSchema } from './common.ts'
 import { seasonStartSchema } from './seasonStart.ts'
 import { lineText, noteText } from './text.ts'
 
 /** Public law that a farm may say it works under; named only, nothing is judged by it yet. Titles and citations stand in the messages. */
 export const RULE_SETS = ['usOrganic', 'usProduceSafety', 'usWorkerProtection', 'euOrganic'] as const
 export type RuleSet = (typeof RULE_SETS)[number]
-
-/** The organic certificate as it is printed. */
-export const certificateSchema = z.strictObject({
-  number: lineText(60),
-  /** Who certifies: the body's own name. */
-  body: lineText(120),
-  /** What it covers, in the certificate's words. */
-  scope: noteText(500).nullable().default(null),
-  issuedOn: civilDateSchema.nullable().default(null),
-  expiresOn: civilDateSchema.nullable().default(null),
-})
-export type Certificate = z.output<typeof certificateSchema>
 
 /** Who is asked about the farm, and how. */
 export const contactSchema = z.strictObject({
@@ -37,7 +26,6 @@ export const calibrationDaysSchema = z.number().int().min(1).max(1830)
 
 const profileFields = {
   units: z.enum(UNIT_SYSTEMS),
-  certificate: certificateSchema.nullable(),
   contact: contactSchema.nullable(),
   ruleSets: z.array(z.enum(RULE_SETS)).max(RULE_SETS.length),
   calibrationDays: calibrationDaysSchema,
@@ -60,6 +48,8 @@ export type UpdateFarm = z.output<typeof updateFarmSchema>
 /** The profile as it is answered, beside the farm's name and season. */
 export const profileAnswer = {
   ...profileFields,
+  /** Oldest first, those taken back among them. */
+  certificates: z.array(certificateSchema),
   /** Where somebody set the map to open; null where nobody did. */
   home: placeSchema.nullable(),
   /** Made to try things on: nothing on it is a record of a farm. */

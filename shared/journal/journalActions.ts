@@ -8,7 +8,7 @@ export type JournalAction = { [Kind in JournalKind]: `${Kind}.${keyof Actions[Ki
 
 const KINDS: Record<JournalKind, true> = {
   record: true, file: true, block: true, planting: true, bed: true, event: true, site: true, ground: true,
-  material: true, lot: true, sprayer: true, calibration: true, farm: true, start: true, practice: true, grant: true, plan: true, job: true, report: true,
+  material: true, lot: true, sprayer: true, calibration: true, farm: true, certificate: true, start: true, practice: true, grant: true, plan: true, job: true, report: true,
   person: true, phone: true, paper: true, invitation: true, letter: true,
 }
 /** Every kind of thing that deeds are about. */

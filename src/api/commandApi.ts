@@ -4,6 +4,7 @@ import { blockSchema } from '../../shared/contract/block.ts'
 import { blocksChangedSchema } from '../../shared/contract/blockChanges.ts'
 import { blocksImportedSchema } from '../../shared/contract/blockImport.ts'
 import { calibrationSchema } from '../../shared/contract/calibration.ts'
+import { certificateSchema } from '../../shared/contract/certificate.ts'
 import { farmSchema, sprayerSchema } from '../../shared/contract/farm.ts'
 import { invitationSchema } from '../../shared/contract/invitation.ts'
 import { letterSchema } from '../../shared/contract/letter.ts'
@@ -56,6 +57,9 @@ const DOORS: Record<CommandKind, Door> = {
   'sprayer.retire': { method: 'post', path: (farmId, id) => `/farms/${farmId}/sprayers/${id}/retire`, answer: sprayerSchema },
   'calibration.create': { method: 'post', path: (farmId) => `/farms/${farmId}/calibrations`, answer: calibrationSchema },
   'calibration.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/calibrations/${id}/withdraw`, answer: calibrationSchema },
+  'certificate.add': { method: 'post', path: (farmId) => `/farms/${farmId}/certificates`, answer: certificateSchema },
+  'certificate.change': { method: 'patch', path: (farmId, id) => `/farms/${farmId}/certificates/${id}`, answer: certificateSchema },
+  'certificate.withdraw': { method: 'post', path: (farmId, id) => `/farms/${farmId}/certificates/${id}/withdraw`, answer: certificateSchema },
   'farm.update': { method: 'patch', path: (farmId) => `/farms/${farmId}`, answer: farmSchema },
   'start.update': { method: 'patch', path: (farmId) => `/farms/${farmId}/start`, answer: startSchema },
   'practice.make': { method: 'post', path: () => '/practice-farm', answer: farmSchema },

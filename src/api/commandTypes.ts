@@ -3,6 +3,7 @@ import type { Bed, createBedSchema, updateBedSchema } from '../../shared/contrac
 import type { Block, createBlockSchema } from '../../shared/contract/block.ts'
 import type { BlocksChanged, mergeBlocksSchema, reopenBlockSchema, splitBlockSchema, updateBlockSchema } from '../../shared/contract/blockChanges.ts'
 import type { BlocksImported, importBlocksSchema } from '../../shared/contract/blockImport.ts'
+import type { addCertificateSchema, Certificate, changeCertificateSchema, withdrawCertificateSchema } from '../../shared/contract/certificate.ts'
 import type { Calibration, createCalibrationSchema, retireSprayerSchema, withdrawCalibrationSchema } from '../../shared/contract/calibration.ts'
 import type { createFarmSchema, createSprayerSchema, Farm, Sprayer, updateSprayerSchema } from '../../shared/contract/farm.ts'
 import type { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
@@ -55,6 +56,9 @@ export interface CommandBodies {
   'sprayer.retire': z.input<typeof retireSprayerSchema>
   'calibration.create': z.input<typeof createCalibrationSchema>
   'calibration.withdraw': z.input<typeof withdrawCalibrationSchema>
+  'certificate.add': z.input<typeof addCertificateSchema>
+  'certificate.change': z.input<typeof changeCertificateSchema>
+  'certificate.withdraw': z.input<typeof withdrawCertificateSchema>
   'farm.update': z.input<typeof updateFarmSchema>
   'start.update': z.input<typeof updateStartSchema>
   'practice.make': { id: string }
@@ -123,6 +127,9 @@ export interface CommandAnswers {
   'sprayer.retire': Sprayer
   'calibration.create': Calibration
   'calibration.withdraw': Calibration
+  'certificate.add': Certificate
+  'certificate.change': Certificate
+  'certificate.withdraw': Certificate
   'farm.update': Farm
   'start.update': Start
   'practice.make': Farm

@@ -10,12 +10,6 @@ export interface ProfileDraft {
   seasonStart: string | null
   units: Farm['units']
   calibrationDays: string
-  isCertified: boolean
-  number: string
-  body: string
-  scope: string
-  issuedOn: string | null
-  expiresOn: string | null
   person: string
   address: string
   phone: string
@@ -23,10 +17,9 @@ export interface ProfileDraft {
   ruleSets: RuleSet[]
 }
 
-export function draftOfProfile({ name, zone, seasonStart, units, calibrationDays, certificate, contact, ruleSets }: Farm): ProfileDraft {
+export function draftOfProfile({ name, zone, seasonStart, units, calibrationDays, contact, ruleSets }: Farm): ProfileDraft {
   return {
-    name, zone, zoneReason: '', seasonStart, units, calibrationDays: String(calibrationDays), isCertified: certificate !== null,
-    number: certificate?.number ?? '', body: certificate?.body ?? '', scope: certificate?.scope ?? '', issuedOn: certificate?.issuedOn ?? null, expiresOn: certificate?.expiresOn ?? null,
+    name, zone, zoneReason: '', seasonStart, units, calibrationDays: String(calibrationDays),
     person: contact?.person ?? '', address: contact?.address ?? '', phone: contact?.phone ?? '', email: contact?.email ?? '', ruleSets: [...ruleSets],
   }
 }
@@ -36,7 +29,6 @@ export function bodyOfProfile(draft: ProfileDraft, revision: number): unknown {
   const contact = { person: typedWords(draft.person), address: typedWords(draft.address), phone: typedWords(draft.phone), email: typedWords(draft.email) }
   return {
     revision, name: draft.name, zone: draft.zone ?? '', seasonStart: draft.seasonStart ?? '', units: draft.units, calibrationDays: typedCount(draft.calibrationDays), ruleSets: draft.ruleSets,
-    certificate: draft.isCertified ? { number: draft.number, body: draft.body, scope: typedWords(draft.scope), issuedOn: draft.issuedOn, expiresOn: draft.expiresOn } : null,
     contact: Object.values(contact).some((words) => words !== null) ? contact : null,
     ...(draft.zoneReason.trim() !== '' && { acknowledged: [{ code: 'farm.zone_change', reason: draft.zoneReason }] }),
   }

@@ -1,5 +1,6 @@
 import { computed, type ComputedRef } from 'vue'
 import { dueSoon, type DueThing } from '../../shared/today/dueSoon.ts'
+import { certifiedUntil } from '../../shared/season/certificateRuns.ts'
 import { useSession } from '../stores/session.ts'
 import { useFarm } from './useFarm.ts'
 import { useFarmDay } from './useFarmDay.ts'
@@ -18,7 +19,7 @@ export function useDueSoon(): { things: ComputedRef<DueThing[]>; hrefOf: (thing:
   return {
     things: computed(() => (today.value === null ? [] : dueSoon({
       today: today.value,
-      certificate: session.canManage ? (farm.value?.certificate ?? null) : null,
+      certificate: session.canManage ? certifiedUntil(farm.value?.certificates ?? [], today.value) : null,
       sprayers: sprayers.value ?? [],
       papers: readable.value,
     }))),

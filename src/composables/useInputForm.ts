@@ -12,7 +12,7 @@ import { useSubmit } from './useSubmit.ts'
 import { useTask } from './useTask.ts'
 import { useToast } from './useToast.ts'
 
-type InputKind = Extract<CommandKind, 'material.create' | 'lot.create' | 'lot.count' | 'block.land' | 'planting.create' | 'planting.update' | 'bed.create' | 'bed.update' | 'event.create' | 'event.withdraw' | 'farm.update' | 'sprayer.update' | 'sprayer.retire' | 'calibration.create' | 'calibration.withdraw'>
+type InputKind = Extract<CommandKind, 'material.create' | 'lot.create' | 'lot.count' | 'block.land' | 'planting.create' | 'planting.update' | 'bed.create' | 'bed.update' | 'event.create' | 'event.withdraw' | 'farm.update' | 'sprayer.update' | 'sprayer.retire' | 'calibration.create' | 'calibration.withdraw' | 'certificate.add' | 'certificate.change' | 'certificate.withdraw'>
 
 export interface InputFormOptions<Kind extends InputKind> {
   kind: Kind

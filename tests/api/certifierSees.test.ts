@@ -11,7 +11,7 @@ import { seedThings, type SeededThings } from '../support/seedThings.ts'
 /** No phone or e-mail of anybody, no price, no account, no other farm. The contact that a farm writes on its own cover is not written in this one. */
 const ALLOWED = `
   about acknowledged air amount areaHa at band basis bbch beds blockId blockIds blocks by byMethod bytes calibration calibrationDays canonicalText
-  caution certificate changes checks clockSkewMinutes code components computed contact content coordinates count counts createdAt crop currentSeason
+  caution certificates changes checks clockSkewMinutes code components computed contact content coordinates count counts createdAt crop currentSeason
   deviceAt digest doneBy doneById drawnOn drench dueOn ediblePart endedAt endedBy endedOn enteredBy entry eppo expiresOn farm figure files fitting
   flowLPerMin found fromIds fromNumber geometry harvests height home id intoIds isRunning items keepClearM kgPerHa kind known label land late lateHours
   left lengthM licence lines loads lot lotId lots material materialId materialName materials measured measuredIn method name next note notes nozzle

@@ -24,15 +24,14 @@ describe('the profile of a farm', () => {
   beforeAll(fresh)
 
   it('is changed part by part, under its revision, with what stood before in the journal', async () => {
-    const certificate = { number: 'C-17', body: 'Thornfield Review', scope: 'Apples', issuedOn: '2026-02-01', expiresOn: '2027-01-31' }
-    const { body: first } = await patch({ revision: 1, certificate, ruleSets: ['usOrganic'] }).expect(200)
-    expect(first).toMatchObject({ certificate, ruleSets: ['usOrganic'], units: 'metric', contact: null, calibrationDays: 365, revision: 2 })
+    const { body: first } = await patch({ revision: 1, ruleSets: ['usOrganic'] }).expect(200)
+    expect(first).toMatchObject({ certificates: [], ruleSets: ['usOrganic'], units: 'metric', contact: null, calibrationDays: 365, revision: 2 })
     const { body: second } = await patch({ revision: 2, name: 'Otherfield', units: 'us', contact: { person: 'Ada' } }).expect(200)
-    expect(second).toMatchObject({ name: 'Otherfield', certificate, contact: { person: 'Ada', address: null, phone: null, email: null }, revision: 3 })
-    const { body: third } = await patch({ revision: 3, certificate: null }).expect(200)
-    expect(third).toMatchObject({ certificate: null, contact: { person: 'Ada' } })
+    expect(second).toMatchObject({ name: 'Otherfield', ruleSets: ['usOrganic'], contact: { person: 'Ada', address: null, phone: null, email: null }, revision: 3 })
+    const { body: third } = await patch({ revision: 3, contact: null }).expect(200)
+    expect(third).toMatchObject({ name: 'Otherfield', contact: null })
     const entries = await journal('farm.updated')
-    expect(entries.map(({ detail }) => detail)).toMatchObject([{ before: { certificate: null, ruleSets: [] } }, { before: { units: 'metric', contact: null } }, { before: { certificate } }])
+    expect(entries.map(({ detail }) => detail)).toMatchObject([{ before: { ruleSets: [] } }, { before: { units: 'metric', contact: null } }, { before: { contact: { person: 'Ada' } } }])
     const { body: seen } = await certifier.get(`/api/farms/${farm.id}`).expect(200)
     expect(seen).toEqual(third)
   })
@@ -44,12 +43,10 @@ describe('the profile of a farm', () => {
 
   it.each([
     [{ zone: 'Mars/Olympus' }, 'zone', 'farm.zone'],
-    [{ certificate: { number: '1', body: 'B', issuedOn: '2026-03-01', expiresOn: '2026-02-01' } }, 'certificate.expiresOn', 'farm.certificate_dates'],
     [{ seasonStart: '02-30' }, 'seasonStart', 'date.invalid'],
     [{ calibrationDays: 0 }, 'calibrationDays', undefined],
     [{ home: [200, 10] }, 'home.0', undefined],
     [{ ruleSets: ['nobody'] }, 'ruleSets.0', undefined],
-    [{ certificate: { number: ' ', body: 'B' } }, 'certificate.number', 'text.required'],
   ])('refuses %j', async (wrong, path, code) => {
     const { body } = await patch({ revision: 4, ...wrong }).expect(422)
     const [error] = (body as { errors: { path: string; code: string }[] }).errors

@@ -11,6 +11,7 @@ let things: SeededThings
 let manager: Agent
 let worker: Agent
 let certifier: Agent
+const certificateId = uuidV7()
 
 beforeAll(async () => {
   house = await openHouse()
@@ -20,6 +21,7 @@ beforeAll(async () => {
   manager = await house.as(farm.accounts.manager)
   worker = await house.as(farm.accounts.applicator)
   certifier = await house.as(farm.accounts.certifier)
+  await manager.post(`/api/farms/${farm.id}/certificates`).send({ id: certificateId, number: 'C-17', body: 'Thornfield Review', validFrom: '2026-02-01' }).expect(201)
 })
 afterAll(() => house.close())
 
@@ -28,7 +30,7 @@ const add = async (agent: Agent, address: string, id = uuidV7()) => agent.post(a
 
 describe('papers of what is no record', () => {
   it.each([
-    ['the land of a block', () => landOf(farm.id, things.blockId)], ['the certificate', () => `/api/farms/${farm.id}/certificate/papers`],
+    ['the land of a block', () => landOf(farm.id, things.blockId)], ['a certificate', () => `/api/farms/${farm.id}/certificates/${certificateId}/papers`],
   ])('%s: added once, read by the farm’s people, opened, taken back', async (_what, addressOf) => {
     const address = addressOf()
     const id = uuidV7()

@@ -34,11 +34,13 @@ interface World {
   phoneId: string
   sprayerId: string
   calibrationId: string
+  certificateId: string
   grantId: string
   paperId: string
 }
 
 const MEASURED = { on: '2026-06-15', doneBy: 'Ada Rook', measured: { kind: 'plot', volumeL: '1', areaM2: '20' } }
+const CERTIFICATE = { number: 'C-17', body: 'Thornfield Review', validFrom: '2026-02-01' }
 const PICTURE = await buildPicture('png')
 
 let house: TestHouse
@@ -83,13 +85,14 @@ async function makeWorld(): Promise<World> {
   const { site } = await createSite(house.services, ownerActor, buildSite())
   const { feature } = await createGround(house.services, ownerActor, buildGround())
   const owner = await house.as(farm.accounts.owner)
-  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), sprayerId: uuidV7(), calibrationId: uuidV7(), personId: uuidV7(), phoneId: uuidV7(), paperId: uuidV7() }
+  const ids = { otherBlockId: uuidV7(), plantingId: uuidV7(), bedId: uuidV7(), eventId: uuidV7(), planId: uuidV7(), sprayerId: uuidV7(), calibrationId: uuidV7(), certificateId: uuidV7(), personId: uuidV7(), phoneId: uuidV7(), paperId: uuidV7() }
   await owner.post(`/api/farms/${farm.id}/blocks`).send(buildBlock({ id: ids.otherBlockId, code: 'B2', geometry: squareAt(1) })).expect(201)
   await owner.post(`/api/farms/${farm.id}/plantings`).send({ id: ids.plantingId, blockId: things.blockId, crop: 'Apple' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/beds`).send({ id: ids.bedId, blockId: things.blockId, kind: 'row', fromNumber: 1, toNumber: 4, count: 4 }).expect(201)
   await applicator.post(`/api/farms/${farm.id}/farm-events`).send({ id: ids.eventId, kind: 'mown', blockIds: [things.blockId], on: '2026-06-15' }).expect(201)
   await owner.post(`/api/farms/${farm.id}/sprayers`).send({ id: ids.sprayerId, code: 'M1', name: 'Mister', tankL: '400' }).expect(201)
   await applicator.post(`/api/farms/${farm.id}/calibrations`).send({ id: ids.calibrationId, sprayerId: ids.sprayerId, ...MEASURED }).expect(201)
+  await owner.post(`/api/farms/${farm.id}/certificates`).send({ id: ids.certificateId, ...CERTIFICATE }).expect(201)
   const step = buildStep(things)
   await owner.post(`/api/farms/${farm.id}/season-plans`).send({ id: ids.planId, name: 'Rounds', steps: [step] }).expect(201)
   await owner.post(`/api/farms/${farm.id}/people`).send({ id: ids.personId, name: 'Wick Ansel', pin: '481902', password: PASSWORD }).expect(201)
@@ -141,7 +144,10 @@ function bodyFor(route: Route, world: World, place: number): object | undefined 
     'post /farms/:farmId/person-papers/:id/files': () => ({ id: uuidV7(), kind: 'photo' }),
     'post /farms/:farmId/blocks/:id/papers': () => ({ id: uuidV7(), kind: 'photo' }),
     'post /farms/:farmId/calibrations/:id/papers': () => ({ id: uuidV7(), kind: 'photo' }),
-    'post /farms/:farmId/certificate/papers': () => ({ id: uuidV7(), kind: 'photo' }),
+    'post /farms/:farmId/certificates': () => ({ id: uuidV7(), ...CERTIFICATE }),
+    'patch /farms/:farmId/certificates/:id': () => ({ revision: 1, ...CERTIFICATE }),
+    'post /farms/:farmId/certificates/:id/withdraw': () => ({ reason: 'A slip' }),
+    'post /farms/:farmId/certificates/:id/papers': () => ({ id: uuidV7(), kind: 'photo' }),
     'put /farms/:farmId/second-factor': () => ({ asked: false, password: PASSWORD }),
     'post /farms/:farmId/materials': () => buildMaterial({ name: tag }),
     'post /farms/:farmId/lots': () => buildLot({ materialId: things.materialId, code: tag }),
@@ -188,7 +194,7 @@ function addressOf(route: Route, world: World, things: SeededThings | null, acto
   const ids: [path: string, id: string | undefined][] = [
     ['/saved-filters', filterIds[actor]], ['/sites', world.siteId], ['/ground', world.groundId], ['/farms/:farmId/files', world.fileId],
     ['/people', world.personId], ['/shared-phones', world.phoneId], ['/person-papers', world.paperId],
-    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/invitations', world.invitationId], ['/letters', world.letterId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
+    ['/plantings', world.plantingId], ['/beds', world.bedId], ['/farm-events', world.eventId], ['/sprayers', world.sprayerId], ['/calibrations', world.calibrationId], ['/certificates', world.certificateId], ['/season-plans', world.planId], ['/jobs', world.jobId], ['/invitations', world.invitationId], ['/letters', world.letterId], ['/blocks', things?.blockId], ['/lots', things?.lotId], ['/grants', world.grantId],
   ]
   const found = ids.find(([path]) => route.path.includes(path))
   const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN

@@ -22,7 +22,7 @@ export function buildRecordReportData(overrides: Partial<RecordReportData> = {})
       { kind: 'well', name: 'Yard well', geometry: { type: 'Point', coordinates: [-123.3133517, 44.6089] } },
     ],
     state: 'signed',
-    certificate: null,
+    certificates: [],
     printedAt: '2026-06-16T16:15:00Z',
     checkUrl: `https://drenchleaf.example/check/${CODE}`,
     checkPage: 'drenchleaf.example/check',

@@ -27,7 +27,7 @@ export function buildRegisterReportData(overrides: Partial<RegisterReportData> =
     filter: { season: 2026, q: 'bank' }, names: { block: null, material: null, person: null }, sort: 'when',
     totals: { records: 141, areaHa: '130.65', totalL: '69844', totalKg: '120', found: 143, withdrawn: 1, unsigned: 1, late: 4, byMethod: {} },
     rows: Array.from({ length: 60 }, (_, turn) => buildPrintedRow(turn, turn === 7 ? { state: 'withdrawn' } : {})),
-    printedAt: '2026-06-16T16:15:00Z', checkPage: 'drenchleaf.example/check', certificate: null,
+    printedAt: '2026-06-16T16:15:00Z', checkPage: 'drenchleaf.example/check', certificates: [],
     ...overrides,
   }
 }

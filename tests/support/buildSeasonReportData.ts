@@ -7,7 +7,7 @@ const SQUARE = { type: 'Polygon' as const, coordinates: [[[-120.6, 46.6], [-120.
 export function buildSeasonReportData(overrides: Partial<SeasonReportData> = {}): SeasonReportData {
   return {
     farm: { name: 'Wennick Hollow', zone: 'America/Los_Angeles' }, language: 'en', season: 2026, isRunning: true, volume: 1, volumes: 1,
-    certificate: null, span: { from: '2026-03-01', to: '2027-02-28' }, head: { seq: 1842, digest: '3f9a71c0e2b48d1657ee'.padEnd(64, '0') },
+    certificates: [], span: { from: '2026-03-01', to: '2027-02-28' }, head: { seq: 1842, digest: '3f9a71c0e2b48d1657ee'.padEnd(64, '0') },
     figures: {
       signed: 141, withdrawn: ['2026-0127'], first: '2026-0001', last: '2026-0142', from: '2026-03-09', to: '2026-06-16',
       stops: 1, late: 4, veryLate: 0, unknown: 88, areaHa: '30.445', litres: '9219.7', litresMeasured: '5624', kg: '0',

@@ -1,4 +1,5 @@
 import { formatCheckCode } from '../../../shared/evidence/checkCode.ts'
+import { certificatesDuring, type CertificateRun } from '../../../shared/season/certificateRuns.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { addElement, type Element } from '../parts/canvas.ts'
 import { drawDoubleRule } from '../parts/drawRules.ts'
@@ -38,28 +39,28 @@ export function drawSeasonCover(flow: Flow, part: Element, data: SeasonReportDat
   if (data.rows.length === 0) drawParagraph(flow, part, say('empty'), STYLES.head)
 }
 
-function farmFacts({ farm, certificate, isRunning, span, printedAt }: SeasonReportData, words: SeasonWords): Fact[] {
+function farmFacts({ farm, certificates, isRunning, span, printedAt }: SeasonReportData, words: SeasonWords): Fact[] {
   const { say, day } = words
+  const today = civilDateIn(farm.zone, printedAt)
   const days = { from: day(span.from), to: day(span.to) }
   return [
     fact(say('cover.farm'), farm.name),
-    ...certificateFacts(certificate, words),
-    fact(say('cover.season'), isRunning ? say('cover.seasonOn', { ...days, today: day(civilDateIn(farm.zone, printedAt)) }) : say('cover.seasonText', days)),
+    ...certificateFacts(certificatesDuring(certificates, { from: span.from, to: isRunning && today >= span.from ? today : span.to }), words),
+    fact(say('cover.season'), isRunning ? say('cover.seasonOn', { ...days, today: day(today) }) : say('cover.seasonText', days)),
     fact(say('cover.zone'), say('cover.zoneText', { zone: farm.zone })),
   ]
 }
 
-/** The certificate as the farm wrote it down; when it runs out is said with it. */
-function certificateFacts(certificate: SeasonReportData['certificate'], { say, day }: SeasonWords): Fact[] {
-  if (certificate === null) return [fact(say('cover.certificate'), say('cover.noCertificate'))]
-  const { number, body, scope, issuedOn, expiresOn } = certificate
-  const days = [
-    ...(issuedOn === null ? [] : [say('cover.issued', { day: day(issuedOn) })]), expiresOn === null ? say('cover.noExpiry') : say('cover.expires', { day: day(expiresOn) }),
-  ]
-  return [
-    fact(say('cover.certificate'), say('cover.certificateText', { number, body, days: days.join(', ') })),
-    ...(scope === null ? [] : [fact(say('cover.scope'), scope)]),
-  ]
+/** The certificates that were in force during the season, as the farm wrote them down; when each runs out is said with it. */
+function certificateFacts(runs: readonly CertificateRun[], { say, day }: SeasonWords): Fact[] {
+  if (runs.length === 0) return [fact(say('cover.certificate'), say('cover.noCertificate'))]
+  return runs.flatMap(({ certificate: { number, body, scope }, from, until }) => {
+    const days = [...(from === null ? [] : [say('cover.validFrom', { day: day(from) })]), until === null ? say('cover.noExpiry') : say('cover.expires', { day: day(until) })]
+    return [
+      fact(say('cover.certificate'), say('cover.certificateText', { number, body, days: days.join(', ') })),
+      ...(scope === null ? [] : [fact(say('cover.scope'), scope)]),
+    ]
+  })
 }
 
 function countFacts({ figures }: SeasonReportData, { say, count, day, figure }: SeasonWords): Fact[] {

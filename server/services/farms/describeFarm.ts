@@ -7,6 +7,7 @@ import { Block } from '../../entities/Block.ts'
 import { Farm } from '../../entities/Farm.ts'
 import { IsNull, type EntityManager } from 'typeorm'
 import type { Services } from '../services.ts'
+import { readCertificates } from './certificates.ts'
 
 /** The farm as its people see it; its place is a corner of its first block, or where somebody set the map to open. */
 export async function describeFarm(services: Services, actor: FarmActor): Promise<FarmAnswer> {
@@ -15,10 +16,11 @@ export async function describeFarm(services: Services, actor: FarmActor): Promis
 
 /** A farm's row as it is answered. */
 export async function presentFarm({ clock }: Pick<Services, 'clock'>, manager: EntityManager, farm: Farm): Promise<FarmAnswer> {
-  const { id, name, zone, seasonStart, units, certificate, contact, ruleSets, calibrationDays, home, practice, revision } = farm
+  const { id, name, zone, seasonStart, units, contact, ruleSets, calibrationDays, home, practice, revision } = farm
   const [first] = await manager.find(Block, { select: { geometry: true }, where: { farmId: id, endedOn: IsNull() }, order: { createdAt: 'ASC', id: 'ASC' }, take: 1 })
   return {
-    id, name, zone, seasonStart, units, certificate, contact, ruleSets, calibrationDays, home, practice, revision,
+    id, name, zone, seasonStart, units, contact, ruleSets, calibrationDays, home, practice, revision,
+    certificates: await readCertificates(manager, { farmId: id }),
     currentSeason: seasonOf(civilDateIn(zone, clock.now().toISOString()), seasonStart),
     place: first ? (firstCorner(first.geometry) ?? null) : home,
   }

@@ -16,7 +16,7 @@ import { presentFarm } from './describeFarm.ts'
 
 /**
  * Changes the profile of a farm; what was said before stays in the journal.
- * @throws {AppError} `stale`, `farm.zone`, `farm.season_fixed` once a season is written into signed text, `certificate.dates`,
+ * @throws {AppError} `stale`, `farm.zone`, `farm.season_fixed` once a season is written into signed text,
  *   and unlikely `farm.zone_change` where records stand in the old zone.
  */
 export async function updateFarm(services: Services, actor: FarmActor, { revision, acknowledged = [], ...sent }: UpdateFarm): Promise<FarmAnswer> {
@@ -40,13 +40,11 @@ export async function updateFarm(services: Services, actor: FarmActor, { revisio
 
 type Wanted = Omit<UpdateFarm, 'revision' | 'acknowledged'>
 
-async function findFaults(manager: EntityManager, farm: Farm, { zone, seasonStart, certificate }: Wanted): Promise<FieldError[]> {
-  const { issuedOn = null, expiresOn = null } = certificate ?? {}
+async function findFaults(manager: EntityManager, farm: Farm, { zone, seasonStart }: Wanted): Promise<FieldError[]> {
   const isFixed = seasonStart !== undefined && seasonStart !== farm.seasonStart && (await hasSeason(manager, farm.id))
   return [
     ...(zone === undefined || isZone(zone) ? [] : [{ path: 'zone', code: 'farm.zone' }]),
     ...(isFixed ? [{ path: 'seasonStart', code: 'farm.season_fixed' }] : []),
-    ...(issuedOn !== null && expiresOn !== null && expiresOn < issuedOn ? [{ path: 'certificate.expiresOn', code: 'farm.certificate_dates' }] : []),
   ]
 }
 

@@ -4,7 +4,7 @@ import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import type { Attachment } from '../../entities/Attachment.ts'
 import { Block } from '../../entities/Block.ts'
 import { Calibration } from '../../entities/Calibration.ts'
-import { Farm } from '../../entities/Farm.ts'
+import { Certificate } from '../../entities/Certificate.ts'
 import { PersonPaper } from '../../entities/PersonPaper.ts'
 import { forbidden, notFound } from '../../errors.ts'
 import { assertMayWrite } from '../records/assertMayWrite.ts'
@@ -35,11 +35,10 @@ export async function findHolder(manager: EntityManager, actor: FarmActor, { abo
 
 /** That a thing is there on this farm. @throws {AppError} not-found. */
 export async function assertThere(manager: EntityManager, { farmId }: Pick<FarmActor, 'farmId'>, { about, id }: FileHolder, lock = false): Promise<void> {
-  if (about === 'certificate' && id !== farmId) throw notFound()
-  const how = { where: about === 'certificate' ? { id } : { farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' as const } }) }
+  const how = { where: { farmId, id }, ...(lock && { lock: { mode: 'pessimistic_read' as const } }) }
   if ((await manager.findOne<ObjectLiteral>(HOLDERS[about], how)) === null) throw notFound()
 }
 
 const HOLDERS: Record<Attachment['about'], EntityTarget<ObjectLiteral>> = {
-  record: ApplicationRecord, 'person-paper': PersonPaper, land: Block, calibration: Calibration, certificate: Farm,
+  record: ApplicationRecord, 'person-paper': PersonPaper, land: Block, calibration: Calibration, certificate: Certificate,
 }

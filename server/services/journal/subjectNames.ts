@@ -6,6 +6,7 @@ import type { JournalEntry } from '../../entities/JournalEntry.ts'
 const NAMES: Partial<Record<JournalKind, string>> = {
   record: "SELECT id, register_row->>'number' AS name FROM application_records WHERE farm_id = $1 AND id = ANY($2)",
   block: 'SELECT id, code AS name FROM blocks WHERE farm_id = $1 AND id = ANY($2)',
+  certificate: 'SELECT id, number AS name FROM certificates WHERE farm_id = $1 AND id = ANY($2)',
   sprayer: 'SELECT id, code AS name FROM sprayers WHERE farm_id = $1 AND id = ANY($2)',
   lot: 'SELECT id, code AS name FROM lots WHERE farm_id = $1 AND id = ANY($2)',
   material: 'SELECT id, name FROM materials WHERE farm_id = $1 AND id = ANY($2)',

@@ -10,7 +10,7 @@ import { RecordReview } from '../../entities/RecordReview.ts'
 import { RecordVersion } from '../../entities/RecordVersion.ts'
 import { AppError, notFound } from '../../errors.ts'
 import type { RecordReportData } from '../../reports/recordReportData.ts'
-import { readCertificate } from '../farms/readCertificate.ts'
+import { readCertificates } from '../farms/certificates.ts'
 import { publicAddress } from '../publicAddress.ts'
 import type { Services } from '../services.ts'
 import { readSigned } from './readSigned.ts'
@@ -44,7 +44,7 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
       neighbours: await findNeighbours(manager, signed),
       sites: [],
       state: record.state,
-      certificate: await readCertificate(manager, actor),
+      certificates: await readCertificates(manager, actor),
       printedAt: services.clock.now().toISOString(),
       checkUrl: `${checkPage}/${printed.checkCode}`,
       checkPage: checkPage.replace(/^https?:\/\//, ''),

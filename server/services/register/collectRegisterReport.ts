@@ -10,7 +10,7 @@ import { invalid } from '../../errors.ts'
 import { openCutter } from '../../reports/register/cutVolumes.ts'
 import { rowHeightBound } from '../../reports/register/rowHeight.ts'
 import type { RegisterReportData } from '../../reports/registerReportData.ts'
-import { readCertificate } from '../farms/readCertificate.ts'
+import { readCertificates } from '../farms/certificates.ts'
 import { publicAddress } from '../publicAddress.ts'
 import type { Services } from '../services.ts'
 import { cursorAfter, type KeyedRow, type RegisterPlaceQuery } from './listRegister.ts'
@@ -38,7 +38,7 @@ export async function collectRegisterReport(
     farm: { name: actor.farmName, zone: actor.zone },
     language, volume, volumes, filter: place.filter, sort: place.sort, rows,
     names: await services.database.inFarm(actor, (manager) => nameFilter(manager, actor, place.filter)),
-    certificate: await services.database.inFarm(actor, (manager) => readCertificate(manager, actor)),
+    certificates: await services.database.inFarm(actor, (manager) => readCertificates(manager, actor)),
     totals: await registerTotals(services, actor, place.filter),
     printedAt: services.clock.now().toISOString(),
     checkPage: `${publicAddress(services.config)}/check`.replace(/^https?:\/\//, ''),

@@ -11,7 +11,7 @@ import { addDays } from '../../../shared/time/calendar.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Block } from '../../entities/Block.ts'
 import type { SeasonReportData, SummaryBlock } from '../../reports/seasonReportData.ts'
-import { readCertificate } from '../farms/readCertificate.ts'
+import { readCertificates } from '../farms/certificates.ts'
 import { publicAddress } from '../publicAddress.ts'
 import { collectVolume, countVolumes } from '../register/collectRegisterReport.ts'
 import type { KeyedRow } from '../register/listRegister.ts'
@@ -46,7 +46,7 @@ export async function collectSeasonReport(services: Services, actor: FarmActor, 
     farm: { name: actor.farmName, zone: actor.zone },
     ...described,
     language, volume, volumes, rows, figures,
-    certificate: await services.database.inFarm(reader, (manager) => readCertificate(manager, reader)),
+    certificates: await services.database.inFarm(reader, (manager) => readCertificates(manager, reader)),
     span: seasonSpan(season, actor.seasonStart),
     blocks: volume === 1 ? await describeBlocks(services, reader, blocks) : [],
     checkPage: checkPage.replace(/^https?:\/\//, ''),

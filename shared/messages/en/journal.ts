@@ -4,6 +4,7 @@ export const journal = {
   intro: 'Who did what, when and from where. It is written by the deed itself and is never changed.',
   action: {
     farm: { created: 'Made the farm', factor_asked: 'Asked a second factor of who leads and certifies', factor_not_asked: 'Asked no second factor any more', updated: 'Changed the profile of the farm' },
+    certificate: { added: 'Wrote a certificate down', changed: 'Corrected a certificate', withdrawn: 'Took a certificate back' },
     start: { updated: 'Passed a step of the first hour over, or put it away' },
     practice: { put_away: 'Put the practice farm away' },
     block: {
@@ -39,7 +40,7 @@ export const journal = {
   },
   kind: {
     record: 'Records', file: 'Photos and papers', block: 'Blocks', planting: 'Plantings', bed: 'Beds and rows', event: 'Events', site: 'What is kept clear of', ground: 'Ground plan',
-    material: 'Materials', lot: 'Lots', sprayer: 'Sprayers', calibration: 'Calibrations', farm: 'Farm', start: 'First hour', practice: 'Practice farm', grant: 'Grants', plan: 'Season plans', job: 'Jobs', person: 'People', phone: 'Shared phones', paper: 'Training and licences', invitation: 'Invitations', letter: 'Letters', report: 'Reports',
+    material: 'Materials', lot: 'Lots', sprayer: 'Sprayers', calibration: 'Calibrations', farm: 'Farm', certificate: 'Certificates', start: 'First hour', practice: 'Practice farm', grant: 'Grants', plan: 'Season plans', job: 'Jobs', person: 'People', phone: 'Shared phones', paper: 'Training and licences', invitation: 'Invitations', letter: 'Letters', report: 'Reports',
   },
   fact: {
     reason: '“{value}”', version: 'version {value}', season: 'season {value}', seasons: 'seasons {value}', endsOn: 'until {value}', format: '{value}', volume: 'volume {value}',

@@ -2,7 +2,7 @@
 export const pdf = {
   list: { and: '{first} and {last}', next: '{first}, {last}' },
   running: {
-    certificate: 'Certificate {number}, {body}, as of {day}',
+    certificate: 'Certificate {named}, as of {day} | Certificates {named}; as of {day}', certificateFrom: 'from {day}', certificateUntil: 'until {day}',
     register: 'register of season {season}',
     record: 'Record {number}',
     recordVersion: 'Record {number}, version {version}',

@@ -59,7 +59,7 @@ export const problems = {
     too_many: 'One account owns at most {maximum} farms here. Ask whoever runs this server for more.',
     zone_change: 'This farm was in {before}, and records stand in it. They keep the times and days they have; new ones follow the new zone. Say why.',
     season_fixed: 'The season stands in signed records or in what was written down for blocks, and none of them is rewritten. It stays as it is.',
-    certificate_dates: 'It ends before it was issued.',
+    certificate_dates: 'It ends before it begins.',
   },
   welcome: { used_up: 'This link does not work any more. Ask for a new one.', password_short: 'Use at least 12 characters.', password_known: 'This is one of the first passwords anybody tries. Choose another.', has_account: 'This e-mail has an account here. Sign in with it to take the invitation.', other_account: 'This invitation is for another e-mail than the one you are signed in with.' },
   invitation: {
@@ -181,6 +181,7 @@ export const problems = {
   total: { inconsistent: '{applied} L went on the land, and the mix makes {total} L. Correct one of them, or say why.' },
   sprayer: { unknown: 'There is no such sprayer on this farm.', needed: 'An amount per tank needs the sprayer.', retired: 'This sprayer is out of use.' },
   calibration: { fewer_nozzles: 'More nozzles were caught than the sprayer has.', withdrawn: 'This calibration is taken back already.', not_yours: 'Only who wrote it, and managers, take a calibration back.' },
+  certificate: { withdrawn: 'This certificate is taken back already.' },
   practice: { making: 'A practice farm is being made. Try again in a moment.' },
   person: { unknown: 'There is no such person on this farm.', only_yourself: 'Record your own work; a manager records for others.',
     last_owner: 'This is the last owner who can open the farm. Make somebody else an owner first.',

@@ -7,8 +7,18 @@ export const profile = {
   units: 'Units', unitsOf: { metric: 'litres, hectares, kilometres an hour first', us: 'US gallons, acres, miles an hour first' }, unitsShort: { metric: 'Metric', us: 'US customary' },
   unitsHint: 'What its people read figures in until they choose for themselves, and which of two figures a calibration shows first. What was typed keeps its unit.',
   calibration: 'Calibrate sprayers every', days: 'days', daysOf: '{count} day | {count} days', calibrationHint: 'A common habit is once a season, and after nozzles are changed.',
-  certificate: 'Organic certificate', certificateNone: 'none written down', certificateHas: 'The farm is certified', number: 'Number', body: 'Certifier', scope: 'Scope', scopeHint: 'In the words of the certificate.',
-  issued: 'Issued', expires: 'Valid until', openEnd: 'no end printed',
+  certificate: 'Organic certificate', number: 'Number', body: 'Certifier', scope: 'Scope', scopeHint: 'In the words of the certificate.',
+  certificates: {
+    none: 'No certificate is written down.', noneText: 'Papers name the certificate that was in force on the day of the work. Write down the one the farm has.',
+    from: 'Valid from', until: 'Valid until', openEnd: 'no end printed', notSaid: 'not said', span: '{from} to {until}', spanOpen: 'from {from}', spanUntil: 'until {until}',
+    write: 'Write a certificate down', renew: 'Renew', correct: 'Correct', takeBack: 'Take back', papers: 'Its papers', hide: 'Hide its papers',
+    renewOf: 'Renew the certificate', correctOf: 'Correct certificate {number}', takeBackOf: 'Take certificate {number} back',
+    renewText: 'The one before stays, and papers of work done under it go on naming it.', correctText: 'For slips of the pen. For the next certificate choose Renew, so that papers of earlier work stay true.',
+    takeBackText: 'For one that never was the farm’s. It stays readable here and is printed nowhere. Say why.', reason: 'Why', takenBack: 'Taken back: {reason}',
+    fromHint: 'From this day on it stands in place of the one before.', untilHint: 'Leave it empty where none is printed.',
+    save: 'Write down', saveCorrected: 'Keep the correction', saved: 'Certificate {number} is written down, from {day}.', corrected: 'Certificate {number} is corrected.', wasTakenBack: 'Certificate {number} is taken back.',
+    others: 'Earlier and later ones', isNext: 'The next one.',
+  },
   contact: 'Contact', contactNone: 'nobody written down', person: 'Whom to ask', address: 'Address', phone: 'Telephone', email: 'E-mail',
   rules: 'Rules it works under', rulesNone: 'none named', rulesHint: 'Named here and in reports. Records are not judged by them yet: what the law asks is not checked.',
   ruleWithSource: '{title} ({source})',
@@ -20,6 +30,6 @@ export const profile = {
   },
   checks: {
     rules: { title: 'Rules', text: 'Named: {rules}. They are not judged yet, so what the law asks is not checked here.' },
-    certificate: { title: 'Certificate', none: 'No certificate is written down.', ended: 'Ended on {day}.', soon: 'Ends on {day}, in {days} days.', open: 'No end is written down.', valid: 'Valid until {day}.' },
+    certificate: { title: 'Certificate', none: 'No certificate is written down.', begins: 'None is in force; {number} begins on {day}.', ended: 'Ended on {day}.', soon: 'Ends on {day}, in {days} days.', open: 'No end is written down.', valid: 'Valid until {day}.' },
   },
 }

@@ -9,7 +9,7 @@ export const seasonPrint = {
   page: 'page {page} of {pages}',
   printed: 'Made {moment}',
   cover: {
-    farm: 'Farm', certificate: 'Certificate', noCertificate: 'none is written down here', certificateText: '{number}, {body}, {days}, as the farm wrote it down', issued: 'issued {day}', expires: 'runs until {day}', noExpiry: 'no last day written down', scope: 'It covers', season: 'Season', seasonText: '{from} to {to}', seasonOn: '{from} to {to}, running on {today}',
+    farm: 'Farm', certificate: 'Certificate', noCertificate: 'none is written down for these days', certificateText: '{number}, {body}, {days}, as the farm wrote it down', validFrom: 'valid from {day}', expires: 'runs until {day}', noExpiry: 'no last day written down', scope: 'It covers', season: 'Season', seasonText: '{from} to {to}', seasonOn: '{from} to {to}, running on {today}',
     records: 'Records counted', recordsText: '{signed}, numbers {first} to {last}', noRecords: 'none; nothing was written down for this season',
     withdrawn: 'Withdrawn', withdrawnText: '{count}: {numbers}', withdrawnMore: '{count}, among them {numbers}', noneWithdrawn: 'none',
     work: 'Work', workText: '{from} to {to}', totals: 'In all', totalsText: '{areaHa} ha passed over, {litres} L', totalsKg: '{totals}, {kg} kg by mass',

@@ -5,6 +5,7 @@ export const journal: Messages['journal'] = {
   intro: 'Quién hizo qué, cuándo y desde dónde. Lo escribe el propio acto y nunca se cambia.',
   action: {
     farm: { created: 'Creó la finca', factor_asked: 'Pidió un segundo factor a quien dirige y certifica', factor_not_asked: 'Dejó de pedir un segundo factor', updated: 'Cambió los datos de la finca' },
+    certificate: { added: 'Anotó un certificado', changed: 'Corrigió un certificado', withdrawn: 'Retiró un certificado' },
     start: { updated: 'Saltó un paso de la primera hora o la guardó' },
     practice: { put_away: 'Guardó la finca de práctica' },
     block: {
@@ -40,7 +41,7 @@ export const journal: Messages['journal'] = {
   },
   kind: {
     record: 'Registros', file: 'Fotos y documentos', block: 'Parcelas', planting: 'Plantaciones', bed: 'Bancales e hileras', event: 'Labores', site: 'De lo que se aparta', ground: 'Plano del terreno',
-    material: 'Insumos', lot: 'Lotes', sprayer: 'Pulverizadores', calibration: 'Calibraciones', farm: 'Finca', start: 'Primera hora', practice: 'Finca de práctica', grant: 'Concesiones', plan: 'Planes de campaña', job: 'Trabajos', person: 'Personas', phone: 'Teléfonos compartidos', paper: 'Formación y licencias', invitation: 'Invitaciones', letter: 'Cartas', report: 'Informes',
+    material: 'Insumos', lot: 'Lotes', sprayer: 'Pulverizadores', calibration: 'Calibraciones', farm: 'Finca', certificate: 'Certificados', start: 'Primera hora', practice: 'Finca de práctica', grant: 'Concesiones', plan: 'Planes de campaña', job: 'Trabajos', person: 'Personas', phone: 'Teléfonos compartidos', paper: 'Formación y licencias', invitation: 'Invitaciones', letter: 'Cartas', report: 'Informes',
   },
   fact: {
     reason: '«{value}»', version: 'versión {value}', season: 'campaña {value}', seasons: 'campañas {value}', endsOn: 'hasta {value}', format: '{value}', volume: 'volumen {value}',

@@ -2,7 +2,7 @@
 export const pdf = {
   list: { and: '{first} y {last}', next: '{first}, {last}' },
   running: {
-    certificate: 'Certificado {number}, {body}, según consta el {day}',
+    certificate: 'Certificado {named}, según consta el {day} | Certificados {named}; según consta el {day}', certificateFrom: 'desde el {day}', certificateUntil: 'hasta el {day}',
     register: 'libro de registros de la campaña {season}',
     record: 'Registro {number}',
     recordVersion: 'Registro {number}, versión {version}',

@@ -59,7 +59,7 @@ export const problems = {
     too_many: 'Una cuenta es dueña aquí de {maximum} fincas como máximo. Pida más a quien administra este servidor.',
     zone_change: 'La finca estaba en {before} y hay registros en esa zona. Conservan sus horas y días; los nuevos siguen la zona nueva. Diga por qué.',
     season_fixed: 'La campaña está escrita en registros firmados o en lo anotado para las parcelas, y nada de eso se reescribe. Se queda como está.',
-    certificate_dates: 'Termina antes de haberse expedido.',
+    certificate_dates: 'Termina antes de empezar.',
   },
   welcome: { used_up: 'Este enlace ya no sirve. Pida uno nuevo.', password_short: 'Use al menos 12 caracteres.', password_known: 'Es una de las primeras contraseñas que prueba cualquiera. Elija otra.', has_account: 'Este correo ya tiene cuenta aquí. Entre con ella para aceptar la invitación.', other_account: 'Esta invitación es para otro correo, no para el de la sesión abierta.' },
   invitation: {
@@ -181,6 +181,7 @@ export const problems = {
   total: { inconsistent: 'Se aplicaron {applied} L, y la mezcla da {total} L. Corrija uno de los dos, o diga por qué.' },
   sprayer: { unknown: 'Ese pulverizador no existe en esta finca.', needed: 'Una cantidad por tanque necesita el pulverizador.', retired: 'Este pulverizador está fuera de uso.' },
   calibration: { fewer_nozzles: 'Se recogió de más boquillas de las que tiene el pulverizador.', withdrawn: 'Esta calibración ya se retiró.', not_yours: 'Solo quien la anotó y los responsables retiran una calibración.' },
+  certificate: { withdrawn: 'Este certificado ya se retiró.' },
   practice: { making: 'Se está haciendo una finca de práctica. Inténtelo de nuevo en un momento.' },
   person: { unknown: 'Esa persona no existe en esta finca.', only_yourself: 'Anote su propio trabajo; el de otros lo anota un responsable.',
     last_owner: 'Es el último titular que puede abrir la finca. Haga antes titular a otra persona.',

@@ -7,8 +7,18 @@ export const profile = {
   units: 'Unidades', unitsOf: { metric: 'primero litros, hectáreas y kilómetros por hora', us: 'primero galones de EE. UU., acres y millas por hora' }, unitsShort: { metric: 'Métricas', us: 'De EE. UU.' },
   unitsHint: 'En qué leen las cifras sus personas mientras no elijan otra cosa, y cuál de las dos cifras muestra primero una calibración. Lo escrito conserva su unidad.',
   calibration: 'Calibrar los pulverizadores cada', days: 'días', daysOf: '{count} día | {count} días', calibrationHint: 'Lo habitual es una vez por campaña y tras cambiar boquillas.',
-  certificate: 'Certificado ecológico', certificateNone: 'ninguno anotado', certificateHas: 'La finca está certificada', number: 'Número', body: 'Certificadora', scope: 'Alcance', scopeHint: 'Con las palabras del certificado.',
-  issued: 'Expedido', expires: 'Válido hasta', openEnd: 'sin fin impreso',
+  certificate: 'Certificado ecológico', number: 'Número', body: 'Certificadora', scope: 'Alcance', scopeHint: 'Con las palabras del certificado.',
+  certificates: {
+    none: 'No hay ningún certificado anotado.', noneText: 'Los papeles nombran el certificado que estaba en vigor el día del trabajo. Anote el que tiene la finca.',
+    from: 'Válido desde', until: 'Válido hasta', openEnd: 'sin fin impreso', notSaid: 'no consta', span: 'del {from} al {until}', spanOpen: 'desde el {from}', spanUntil: 'hasta el {until}',
+    write: 'Anotar un certificado', renew: 'Renovar', correct: 'Corregir', takeBack: 'Retirar', papers: 'Sus papeles', hide: 'Ocultar sus papeles',
+    renewOf: 'Renovar el certificado', correctOf: 'Corregir el certificado {number}', takeBackOf: 'Retirar el certificado {number}',
+    renewText: 'El anterior se queda, y los papeles del trabajo hecho bajo él lo siguen nombrando.', correctText: 'Para errores al escribir. Para el certificado siguiente elija Renovar, y así los papeles del trabajo anterior siguen siendo ciertos.',
+    takeBackText: 'Para uno que nunca fue de la finca. Aquí se sigue leyendo y no se imprime en ningún papel. Diga por qué.', reason: 'Por qué', takenBack: 'Retirado: {reason}',
+    fromHint: 'Desde este día ocupa el lugar del anterior.', untilHint: 'Déjelo vacío si no hay ninguno impreso.',
+    save: 'Anotar', saveCorrected: 'Guardar la corrección', saved: 'Anotado el certificado {number}, desde el {day}.', corrected: 'Corregido el certificado {number}.', wasTakenBack: 'Retirado el certificado {number}.',
+    others: 'Anteriores y posteriores', isNext: 'El siguiente.',
+  },
   contact: 'Contacto', contactNone: 'nadie anotado', person: 'A quién preguntar', address: 'Dirección', phone: 'Teléfono', email: 'Correo',
   rules: 'Normas bajo las que trabaja', rulesNone: 'ninguna nombrada', rulesHint: 'Se nombran aquí y en los informes. Los registros aún no se juzgan por ellas: lo que pide la ley no se comprueba.',
   ruleWithSource: '{title} ({source})',
@@ -20,6 +30,6 @@ export const profile = {
   },
   checks: {
     rules: { title: 'Normas', text: 'Nombradas: {rules}. Aún no se juzgan, así que aquí no se comprueba lo que pide la ley.' },
-    certificate: { title: 'Certificado', none: 'No hay certificado anotado.', ended: 'Terminó el {day}.', soon: 'Termina el {day}, en {days} días.', open: 'No hay fin anotado.', valid: 'Válido hasta el {day}.' },
+    certificate: { title: 'Certificado', none: 'No hay certificado anotado.', begins: 'Ninguno en vigor; {number} empieza el {day}.', ended: 'Terminó el {day}.', soon: 'Termina el {day}, en {days} días.', open: 'No hay fin anotado.', valid: 'Válido hasta el {day}.' },
   },
 }

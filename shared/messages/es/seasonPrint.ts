@@ -10,7 +10,7 @@ export const seasonPrint: Messages['seasonPrint'] = {
   page: 'página {page} de {pages}',
   printed: 'Hecho {moment}',
   cover: {
-    farm: 'Finca', certificate: 'Certificado', noCertificate: 'aquí no hay ninguno anotado', certificateText: '{number}, {body}, {days}, como lo anotó la finca', issued: 'emitido el {day}', expires: 'vale hasta el {day}', noExpiry: 'sin último día anotado', scope: 'Abarca', season: 'Campaña', seasonText: 'del {from} al {to}', seasonOn: 'del {from} al {to}, en curso el {today}',
+    farm: 'Finca', certificate: 'Certificado', noCertificate: 'no hay ninguno anotado para estos días', certificateText: '{number}, {body}, {days}, como lo anotó la finca', validFrom: 'válido desde el {day}', expires: 'vale hasta el {day}', noExpiry: 'sin último día anotado', scope: 'Abarca', season: 'Campaña', seasonText: 'del {from} al {to}', seasonOn: 'del {from} al {to}, en curso el {today}',
     records: 'Registros contados', recordsText: '{signed}, números {first} a {last}', noRecords: 'ninguno; para esta campaña no se anotó nada',
     withdrawn: 'Retirados', withdrawnText: '{count}: {numbers}', withdrawnMore: '{count}, entre ellos {numbers}', noneWithdrawn: 'ninguno',
     work: 'Trabajo', workText: 'del {from} al {to}', totals: 'En total', totalsText: '{areaHa} ha recorridas, {litres} L', totalsKg: '{totals}, {kg} kg por peso',

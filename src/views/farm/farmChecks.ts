@@ -2,6 +2,7 @@ import { buildCheck } from '../../../shared/checks/buildCheck.ts'
 import type { Farm, Sprayer } from '../../../shared/contract/farm.ts'
 import type { Check } from '../../../shared/contract/record.ts'
 import type { Message } from '../../../shared/contract/common.ts'
+import { certificateRuns, certifiedUntil } from '../../../shared/season/certificateRuns.ts'
 import { calibrationStanding } from '../../../shared/mix/calibrationStanding.ts'
 
 const message = (id: string, params: Message['params'] = {}): Message => ({ id, params })
@@ -20,14 +21,19 @@ export function farmChecks(farm: Farm, sprayers: readonly Sprayer[] | undefined,
   return [law, certificateCheck(farm, today, words), ...(used?.length === 0 ? [noSprayer] : []), ...(used ?? []).map((sprayer) => sprayerCheck(sprayer, today, words))]
 }
 
-function certificateCheck({ certificate }: Farm, today: string, { dayOf }: DayWords): Check {
+function certificateCheck({ certificates }: Farm, today: string, { dayOf }: DayWords): Check {
   const base = { code: 'farm.certificate', rests: 'certifier', title: message('profile.checks.certificate.title') } as const
-  if (certificate === null) return buildCheck({ ...base, verdict: 'unknown', text: message('profile.checks.certificate.none') })
-  if (certificate.expiresOn === null) return buildCheck({ ...base, verdict: 'unknown', text: message('profile.checks.certificate.open') })
-  const { standing, daysLeft } = calibrationStanding(certificate.expiresOn, today)
-  const day = dayOf(certificate.expiresOn)
+  const unknown = (text: Message): Check => buildCheck({ ...base, verdict: 'unknown', text })
+  const held = certifiedUntil(certificates, today)
+  if (held === null) {
+    const [first] = certificateRuns(certificates)
+    if (first?.from == null) return unknown(message('profile.checks.certificate.none'))
+    return unknown(message('profile.checks.certificate.begins', { number: first.certificate.number, day: dayOf(first.from) }))
+  }
+  if (held.expiresOn === null) return unknown(message('profile.checks.certificate.open'))
+  const { standing, daysLeft } = calibrationStanding(held.expiresOn, today)
   const said = { past: 'ended', soon: 'soon', ahead: 'valid' } as const
-  return buildCheck({ ...base, verdict: standing === 'ahead' ? 'pass' : 'caution', text: message(`profile.checks.certificate.${said[standing]}`, { day, days: daysLeft }) })
+  return buildCheck({ ...base, verdict: standing === 'ahead' ? 'pass' : 'caution', text: message(`profile.checks.certificate.${said[standing]}`, { day: dayOf(held.expiresOn), days: daysLeft }) })
 }
 
 /** How the calibration of one sprayer stands. */

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { buildCertificate } from '../../support/buildCertificate.ts'
 import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
 import { buildChecks, buildSignedBlock, buildSignedRecord } from '../../support/buildSignedRecord.ts'
 import { contentOf, drawRecord, readPdf } from '../../support/readPdf.ts'
@@ -99,11 +100,11 @@ describe('what it says', () => {
   })
 
   it('names the certificate at the head where it ran on the day of the work, and makes room for a long one', async () => {
-    const certificate = { number: 'OR-118', body: 'Oaklode Review', scope: null, issuedOn: null, expiresOn: '2026-06-16' }
-    const pages = async (named: typeof certificate) => readPdf(await drawRecord(buildRecordReportData({ signed: buildLongRecord(), certificate: named }))).pages.map((page) => page.replace(/\s+/g, ' '))
+    const certificate = buildCertificate({ validFrom: null, validUntil: '2026-06-16' })
+    const pages = async (named: typeof certificate) => readPdf(await drawRecord(buildRecordReportData({ signed: buildLongRecord(), certificates: [named] }))).pages.map((page) => page.replace(/\s+/g, ' '))
     for (const page of await pages(certificate)) expect(page).toContain('Certificate OR-118, Oaklode Review, as of 16 June 2026')
     for (const page of await pages({ ...certificate, body: 'Review '.repeat(17).trim() })) expect(page).toMatch(/Review Review, as of 16 June 2026/)
-    for (const page of await pages({ ...certificate, expiresOn: '2026-06-15' })) expect(page).not.toContain('OR-118')
+    for (const page of await pages({ ...certificate, validUntil: '2026-06-15' })) expect(page).not.toContain('OR-118')
   })
 
   it('speaks Spanish with Spanish marks', async () => {

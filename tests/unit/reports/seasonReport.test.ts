@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest'
 import { buildRecordReportData } from '../../support/buildRecordReportData.ts'
+import { buildCertificate } from '../../support/buildCertificate.ts'
 import { buildSeasonReportData } from '../../support/buildSeasonReportData.ts'
 import { drawReport, readPdf, readText, type ReadPdf } from '../../support/readPdf.ts'
 import { readQr } from '../../support/readQr.ts'
@@ -21,7 +22,7 @@ describe('a season on paper', () => {
     const cover = plain(pdf.pages[0])
     for (const words of [
       'Season report 2026', '1 March 2026 to 28 February 2027, running on 16 June 2026', '141, numbers 2026-0001 to 2026-0142', '1: 2026-0127',
-      '30.45 ha passed over, 9 220 L', '3F9A 71C0 E2B4 8D16 57EE, up to entry 1 842 of the log', 'none is written down here', 'it does not show that what was entered is true',
+      '30.45 ha passed over, 9 220 L', '3F9A 71C0 E2B4 8D16 57EE, up to entry 1 842 of the log', 'none is written down for these days', 'it does not show that what was entered is true',
     ]) expect(cover).toContain(words)
   })
 
@@ -47,18 +48,29 @@ describe('a season on paper', () => {
   })
 
   it('prints the certificate as the farm wrote it down, and that no last day is', async () => {
-    const { pages } = readPdf(await draw({ certificate: { number: 'OR-118', body: 'Oaklode Review', scope: 'Apples and pears', issuedOn: '2026-01-05', expiresOn: null } }))
-    expect(plain(pages[0])).toContain('OR-118, Oaklode Review, issued 5 January 2026, no last day written down, as the farm wrote it down')
+    const { pages } = readPdf(await draw({ certificates: [buildCertificate({ scope: 'Apples and pears', validFrom: '2026-01-05', validUntil: null })] }))
+    expect(plain(pages[0])).toContain('OR-118, Oaklode Review, valid from 5 January 2026, no last day written down, as the farm wrote it down')
     expect(plain(pages[0])).toContain('Apples and pears')
   })
 
-  it('names the certificate at the head of every page, as of the day of printing, and none that did not run on all days of the work', async () => {
-    const certificate = { number: 'OR-118', body: 'Oaklode Review', scope: null, issuedOn: '2026-03-09', expiresOn: '2026-06-16' }
+  it('names the certificate at the head of every page, as of the day of printing, and none where on some day of the work none was in force', async () => {
+    const certificate = buildCertificate({ validFrom: '2026-03-09', validUntil: '2026-06-16' })
     const line = 'Certificate OR-118, Oaklode Review, as of 16 June 2026'
-    for (const page of readPdf(await draw({ certificate, rows: buildSeasonReportData().rows.slice(0, 2), blocks: [] })).pages) expect(plain(page)).toContain(line)
-    const other = await Promise.all([{ ...certificate, issuedOn: '2026-03-10' }, { ...certificate, expiresOn: '2026-06-15' }].map((late) => draw({ certificate: late, rows: [], blocks: [] })))
+    for (const page of readPdf(await draw({ certificates: [certificate], rows: buildSeasonReportData().rows.slice(0, 2), blocks: [] })).pages) expect(plain(page)).toContain(line)
+    const other = await Promise.all([{ ...certificate, validFrom: '2026-03-10' }, { ...certificate, validUntil: '2026-06-15' }].map((late) => draw({ certificates: [late], rows: [], blocks: [] })))
     for (const drawn of other) expect(readText(drawn)).not.toContain(line)
     expect(plain(pdf.text)).not.toContain('as of 16 June')
+  })
+
+  it('goes on naming what was in force in its season once the certificate is renewed, and both where it was renewed in it', async () => {
+    const held = buildCertificate({ validFrom: '2025-06-01', validUntil: '2026-06-16' })
+    const later = buildCertificate({ number: 'OR-119', validFrom: '2026-06-17', validUntil: '2027-06-16' })
+    const head = plain(readPdf(await draw({ certificates: [held, later], rows: [], blocks: [] })).pages[0])
+    expect(head).toContain('Certificate OR-118, Oaklode Review, as of 16 June 2026')
+    expect(head).not.toContain('OR-119')
+    const within = plain(readPdf(await draw({ certificates: [{ ...held, validUntil: '2026-12-31' }, { ...later, validFrom: '2026-05-01' }], rows: [], blocks: [], isRunning: false })).pages[0])
+    expect(within).toContain('Certificates OR-118, Oaklode Review, until 30 April 2026; OR-119, Oaklode Review, from 1 May 2026; as of 16 June 2026')
+    expect(within).toContain('OR-118, Oaklode Review, valid from 1 June 2025, runs until 30 April 2026, as the farm wrote it down')
   })
 
   it('bears a QR code on its first page that leads to its check page, with white around it and the code in words beside it', async () => {
