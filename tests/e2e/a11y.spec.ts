@@ -1,8 +1,7 @@
 import type { Page } from '@playwright/test'
-import { signInTo } from './support/demoFarm.ts'
 import { findFaults } from './support/axe.ts'
 import { RecordForm } from './support/recordForm.ts'
-import { listScreens, openScreen } from './support/screens.ts'
+import { listScreens, openScreen, walkScreens } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
 import { makeThings } from './support/things.ts'
 import { watchPages } from './support/watchPage.ts'
@@ -32,11 +31,13 @@ function findWide(): string[] {
 test('on every screen axe finds nothing, by day and at dawn, none breaks the policy or errs, none is cut off or scrolls sideways', async ({ page, context, isPhone, manager }) => {
   test.slow()
   const [first, ...others] = isPhone ? PHONES : DESKS
-  const found = await watchPages(context)
-  for (const { name, who, path } of await listScreens(manager)) {
-    if (who !== null) await signInTo(context.request, who)
-    await page.setViewportSize(first)
-    await openScreen(page, path)
+  const found = await watchPages(context, { strict: true })
+  const titles = new Map<string, string[]>()
+  const screens = await listScreens(manager)
+  await page.setViewportSize(first)
+  await walkScreens(page, screens, async ({ name }) => {
+    const title = await page.title()
+    titles.set(title, [...titles.get(title) ?? [], name])
     const note = (faults: string[], of: string): void => { for (const fault of faults) found.push(`${name}, ${of}: ${fault}`) }
     note(await findFaults(page), 'day')
     note(await page.evaluate(findWide), `${first.width}`)
@@ -44,13 +45,16 @@ test('on every screen axe finds nothing, by day and at dawn, none breaks the pol
       await page.setViewportSize(size)
       note(await page.evaluate(findWide), `${size.width}`)
     }
+    await page.setViewportSize(first)
     // A desk has the same colours; at dawn it is a phone that is out.
-    if (!isPhone) continue
+    if (!isPhone) return
     await setLight(page, 'dawn')
     note(await findFaults(page, 'color-contrast'), 'dawn')
     await setLight(page, 'day')
-  }
+  })
   expect(found).toEqual([])
+  expect([...titles.keys()].filter((title) => !title.endsWith(' – Drenchleaf'))).toEqual([])
+  expect([...titles.values()].filter((names) => names.length > 1), 'screens of one page').toEqual([['check a code', 'a code that agrees'], ['draw a block', 'type a block'], ['people of the farm', 'people, to the owner']])
 })
 
 test('axe finds nothing in a record being written, nor in the dialogs', async ({ page, isPhone, signInAs, manager }) => {

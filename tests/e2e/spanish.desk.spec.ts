@@ -1,9 +1,8 @@
 import type { Page } from '@playwright/test'
 import { en } from '../../shared/messages/en.ts'
 import { es } from '../../shared/messages/es.ts'
-import type { Who } from './support/demoFarm.ts'
 import { RecordForm } from './support/recordForm.ts'
-import { listScreens, openScreen } from './support/screens.ts'
+import { listScreens, openScreen, walkScreens } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
 import { say } from './support/words.ts'
 
@@ -39,13 +38,7 @@ test('in Spanish no screen keeps an English word', async ({ page, isPhone, signI
   const found: string[] = []
   const look = async (name: string): Promise<void> => { for (const text of await englishOn(page)) found.push(`${name}: ${text}`) }
   await look('sign-in')
-  let signedIn: Who | null = null
-  for (const { name, who, path } of screens) {
-    if (who !== null && who !== signedIn) await signInAs(who)
-    signedIn = who
-    await openScreen(page, path)
-    await look(name)
-  }
+  await walkScreens(page, screens, ({ name }) => look(name))
   await signInAs('manager')
   await page.goto('/register/new')
   await page.getByRole('button', { name: new RegExp(`^2\\s*${spanish.get('records.steps.happened')}`) }).click()

@@ -117,7 +117,8 @@ function makeMap(host: HTMLElement): LeafletMap {
   return leafletMap(host, {
     attributionControl: false, zoomControl: false, keyboard: false, fadeAnimation: false, boxZoom: false,
     zoomAnimation: !window.matchMedia('(prefers-reduced-motion: reduce)').matches,
-    zoomSnap: 0.1, minZoom: 2, maxZoom: MOST_ZOOM, maxBounds: [[-86, -200], [86, 200]],
+    // Its component watches the size. Leaflet's own watch ends a moment after a map that is gone, and errs.
+    trackResize: false, zoomSnap: 0.1, minZoom: 2, maxZoom: MOST_ZOOM, maxBounds: [[-86, -200], [86, 200]],
   }).setView(toLatLng(WORLD.centre), WORLD.zoom)
 }
 

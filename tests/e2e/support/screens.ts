@@ -1,9 +1,9 @@
 import type { Page } from '@playwright/test'
-import { expect } from '@playwright/test'
 import { pageOf } from '../../../shared/contract/common.ts'
 import { siteSchema } from '../../../shared/contract/ground.ts'
 import type { ApplicationRecord } from '../../../shared/contract/record.ts'
-import type { FarmApi, Who } from './demoFarm.ts'
+import { signInTo, type FarmApi, type Who } from './demoFarm.ts'
+import { settled } from './settled.ts'
 import { makeSignedRecord, makeThings } from './things.ts'
 
 /** A screen, who looks at it, and its address. */
@@ -47,6 +47,7 @@ export async function listScreens(manager: FarmApi): Promise<Screen[]> {
     { name: 'people of the farm', path: '/farm/people' },
     { name: 'sprayers', path: '/farm/sprayers' },
     { name: 'sprayer', path: `/farm/sprayers/${things.sprayer.id}` },
+    { name: 'a new farm', path: '/farms/new' },
     { name: 'first hour', path: '/start' },
     { name: 'one’s own page', path: '/me' },
     { name: 'second factor', path: '/second-factor' },
@@ -73,7 +74,26 @@ async function findSite(manager: FarmApi): Promise<string> {
 /** Opens a screen and waits until all it reads has come. */
 export async function openScreen(page: Page, path: string): Promise<void> {
   await page.goto(path)
-  await expect(page.getByRole('main')).toBeVisible()
-  await page.waitForLoadState('networkidle')
-  await expect(page.locator('[aria-busy="true"]')).toHaveCount(0)
+  await settled(page)
+}
+
+/** Goes on to a screen within the page that is open, as a link does, and waits until all it reads has come. */
+export async function goToScreen(page: Page, path: string): Promise<void> {
+  await page.evaluate((to) => {
+    history.pushState(null, '', to)
+    dispatchEvent(new PopStateEvent('popstate', { state: null }))
+  }, path)
+  await settled(page)
+}
+
+/** Walks screens in their order, and looks at each: within one page as long as the same person looks. */
+export async function walkScreens(page: Page, screens: readonly Screen[], look: (screen: Screen) => Promise<void>): Promise<void> {
+  let walker: Who | null | undefined
+  for (const screen of screens) {
+    const isSame = screen.who === walker
+    if (!isSame && screen.who !== null) await signInTo(page.context().request, screen.who)
+    await (isSame ? goToScreen : openScreen)(page, screen.path)
+    walker = screen.who
+    await look(screen)
+  }
 }

@@ -1,4 +1,5 @@
 import { test as base, expect } from '@playwright/test'
+import { countRequests } from './settled.ts'
 import { openFarm, signInTo, type FarmApi, type Who } from './demoFarm.ts'
 
 interface TestThings {
@@ -21,6 +22,7 @@ interface WorkerThings {
 export const test = base.extend<TestThings, WorkerThings>({
   readsAhead: [false, { option: true }],
   context: async ({ context, readsAhead }, use) => {
+    countRequests(context)
     if (!readsAhead) await context.addInitScript(() => { window.requestIdleCallback = () => 0 })
     await use(context)
   },
