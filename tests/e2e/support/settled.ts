@@ -10,7 +10,9 @@ export function countRequests(context: BrowserContext): void {
   const open = new Set<Request>()
   asked.set(context, open)
   context.on('request', (request) => { open.add(request) })
-  for (const event of ['requestfinished', 'requestfailed'] as const) context.on(event, (request) => { open.delete(request) })
+  const close = (request: Request): void => { open.delete(request) }
+  context.on('requestfinished', close)
+  context.on('requestfailed', close)
 }
 
 /** Waits until all that a page reads has come and is shown. Half a second of silence, the browser's own measure, is a third of a walk over all screens. */
