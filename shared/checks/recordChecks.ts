@@ -60,8 +60,9 @@ function checksOfLots({ content, sheet, lots }: RecordFacts): Check[] {
 /**
  * Every check of a record, as it is being written and again when it is signed, worst first within what each rests on. Pure: the
  * moment of the judgement is `facts.now`. A half-written record gives "not known" where a figure is missing, never a pass.
+ * @param likely `judgeLikely`, apart because a form does without it, and its words, until there is something to ask about.
  */
-export function recordChecks(facts: RecordFacts): Check[] {
+export function recordChecks(facts: RecordFacts, likely: (facts: RecordFacts) => Check[] = () => []): Check[] {
   const materials = facts.content.components
     .map(({ materialId }) => facts.materials.find((one) => one.id === materialId))
     .filter((one): one is FactMaterial => one !== undefined)
@@ -74,6 +75,7 @@ export function recordChecks(facts: RecordFacts): Check[] {
     judgeDeltaT(facts.content),
     judgeCalibration(facts),
     ...judgeCounts(facts),
+    ...likely(facts),
     ...checksOfLots(facts),
   ]
   return sortChecks(found.filter((check) => check !== null))

@@ -1,12 +1,15 @@
-import { computed, type ComputedRef, type Ref } from 'vue'
+import { computed, shallowRef, watch, type ComputedRef, type Ref } from 'vue'
 import { recordChecks } from '../../shared/checks/recordChecks.ts'
 import { tallyChecks, type Tally } from '../../shared/checks/tallyChecks.ts'
 import type { Check } from '../../shared/contract/record.ts'
 import type { RecordSheet } from '../../shared/mix/sheetTypes.ts'
+import { laterCode, withWords } from './laterPart.ts'
 import { contentOf, weatherOf } from './recordContent.ts'
 import type { RecordDraft } from './recordDraft.ts'
 import { useClock } from './useClock.ts'
 import type { RecordStock } from './useRecordStock.ts'
+
+const readLikely = laterCode(() => import('../../shared/checks/judgeLikely.ts'))
 
 /**
  * The checks of what is typed, by the same function that judges it again when it is signed.
@@ -21,6 +24,12 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
   shortLots: ComputedRef<Record<string, 'records.sign.lotShort'>>
 } {
   const { time } = useClock()
+  const likely = shallowRef<Parameters<typeof recordChecks>[1]>()
+  // Read once there is something to ask about; without a signal the server asks.
+  const stop = watch(() => happened() || weatherOf(draft.value) !== null, (isAsked) => {
+    if (!isAsked) return
+    void withWords(readLikely).then(({ judgeLikely }) => { likely.value = judgeLikely; stop() }, () => undefined)
+  }, { immediate: true })
   const checks = computed(() => {
     const zone = stock.value.farm?.zone ?? 'UTC'
     const { method, lines, components = [] } = contentOf(draft.value, { zone, happened: happened() })
@@ -38,7 +47,7 @@ export function useRecordChecks(draft: Ref<RecordDraft>, stock: Ref<RecordStock>
       sprayer: stock.value.sprayers.find(({ id }) => id === draft.value.sprayerId) ?? null,
       zone,
       now: time.value.toISOString(),
-    })
+    }, likely.value)
   })
   return {
     checks,

@@ -1,3 +1,4 @@
+import { judgeLikely } from '../../../shared/checks/judgeLikely.ts'
 import { recordChecks } from '../../../shared/checks/recordChecks.ts'
 import type { Check, Computed } from '../../../shared/contract/record.ts'
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
@@ -25,6 +26,6 @@ export function judgeRecord(content: RecordContent, ground: RecordGround, zone: 
     sprayer: ground.sprayer && { code: ground.sprayer.code, calibration: ground.calibration },
     zone,
     now: now.toISOString(),
-  })
+  }, judgeLikely)
   return { sheet, computed: presentComputed({ content, sheet, materials: ground.materials, zone }), checks }
 }

@@ -9,6 +9,7 @@ import { growing } from './growing.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { letters } from './letters.ts'
+import { likely } from './likely.ts'
 import { merge } from './merge.ts'
 import { people } from './people.ts'
 import { problems } from './problems.ts'
@@ -21,5 +22,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, merge, people, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, likely, merge, people, problems, profile, rounds, shapes, sprayers, start, versions,
 }

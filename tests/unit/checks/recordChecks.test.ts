@@ -128,7 +128,7 @@ describe('all checks of a record', () => {
       buildFacts({ materials: [buildMaterial({ label: full, organicStatus: 'prohibited', statusBasis: null })], lots: [buildLot({ left: { value: '1', unit: 'L' } })] }),
       buildFacts({ content: { ...buildFacts().content, weather: null, components: [{ materialId: 'm1', lotId: null }] } }),
     ]
-    const said = variants.flatMap(recordChecks).flatMap((check) => [check.title, check.text, check.figure, check.source])
+    const said = variants.flatMap((facts) => recordChecks(facts)).flatMap((check) => [check.title, check.text, check.figure, check.source])
     for (const language of LANGUAGES) {
       for (const message of said) {
         if (message === null) continue
