@@ -84,7 +84,7 @@ describe('the register as CSV', () => {
       'Area treated, ha': new Decimal(body.computed.areaM2).div(10_000).toDecimalPlaces(4).toFixed(),
       Start: '2026-06-16T06:00:00-07:00', End: '2026-06-16T06:40:00-07:00', 'Time zone': 'America/Los_Angeles',
       'Amount on this block': '420', Unit: 'L', 'How known': 'worked out', 'Preparations of the record': 'Nettle ferment, 20 L', 'Lots, in the same order': 'N-1',
-      'Mix of the record, L': '420', 'Carrier water from': 'Rain tank 2', For: '\'=HYPERLINK("http://x.example")', 'Check code': (body.digest ?? '').slice(0, 20),
+      'Share of the mix, L': '420', 'Carrier water from': 'Rain tank 2', For: '\'=HYPERLINK("http://x.example")', 'Check code': (body.digest ?? '').slice(0, 20),
     })
   })
 

@@ -8,11 +8,12 @@ import { mapPlainFields, PLAIN_FIELDS } from '../../../shared/records/plainField
 import { isoInZone } from '../../../shared/time/isoInZone.ts'
 import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
 import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
+import { roundParts } from '../../../shared/units/roundParts.ts'
 import type { KeyedRow } from './listRegister.ts'
 
 const FIGURES = [
   'record', 'version', 'state', 'season', 'method', 'block', 'part', 'areaHa', 'counts', 'stage', 'bbch', 'start', 'end', 'zone', 'amount', 'unit', 'known',
-  'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'totalL', 'totalKg', 'litresPerHa', 'kgPerHa', 'doneBy',
+  'mixL', 'massKg', 'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'litresPerHa', 'kgPerHa', 'doneBy',
   'signedAt', 'lateHours', 'stops', 'unknowns', 'checkCode',
 ] as const
 const WORDS = PLAIN_FIELDS.map(({ name }) => name)
@@ -55,8 +56,6 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
     preparations: content.components.map((component, index) => preparationWords(component, row.preparations[index] ?? '', computed.components[index]?.amount ?? null, place)).join('; '),
     lots: lotsInOrder(content.components, row.lots, say('noLot')).join('; '),
     water: content.water !== null && 'source' in content.water ? content.water.source ?? '' : '',
-    totalL: figure(row.totalL),
-    totalKg: figure(row.totalKg),
     litresPerHa: figure(row.sprayLPerHa),
     kgPerHa: figure(row.kgPerHa),
     doneBy: row.by,
@@ -66,7 +65,22 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
     unknowns: String(row.tally.unknown),
     checkCode: digest === null ? '' : cutCheckCode(digest),
   }
-  return content.lines.map((line, index) => ({ ...whole, ...lineCells(line, { row, computed, index }, place) }))
+  const parts = partsOf(row, computed)
+  return content.lines.map((line, index) => ({ ...whole, ...lineCells(line, { row, computed, index }, place), ...parts(index) }))
+}
+
+/** What a column is added up by: each block's own area and share of the mix, which come to those of the record. Figures of one line alone are the record's. */
+function partsOf(row: CsvRecord['register_row'], { lines }: Computed): (index: number) => Pick<CsvLine, 'areaHa' | 'mixL' | 'massKg'> {
+  const isAlone = lines.length === 0 && row.blocks.length === 1
+  const parts = (whole: string | null, shares: (string | null)[]): string[] => {
+    if (isAlone) return [figure(whole)]
+    const known = shares.filter((share) => share !== null)
+    return known.length === lines.length ? roundParts(known, DECIMALS) : []
+  }
+  const areas = parts(row.areaHa, lines.map(({ areaM2 }) => new ExactDecimal(areaM2).div(M2_PER_HA).toFixed()))
+  const litres = parts(row.totalL, lines.map(({ shareL }) => shareL))
+  const kilograms = parts(row.totalKg, lines.map(({ shareKg }) => shareKg))
+  return (index) => ({ areaHa: areas[index] ?? '', mixL: litres[index] ?? '', massKg: kilograms[index] ?? '' })
 }
 
 function lineCells(line: BlockLine, { row, computed, index }: { row: CsvRecord['register_row']; computed: Computed; index: number }, place: CsvPlace) {
@@ -74,7 +88,6 @@ function lineCells(line: BlockLine, { row, computed, index }: { row: CsvRecord['
   return {
     block: row.blocks[index]?.code ?? '',
     part: partWords(line.part, place),
-    areaHa: share === undefined ? (computed.lines.length === 0 && row.blocks.length === 1 ? figure(row.areaHa) : '') : figure(new ExactDecimal(share.areaM2).div(M2_PER_HA).toFixed()),
     counts: EACH.flatMap((each) => (line.counts[each] === undefined ? [] : [`${line.counts[each]} ${translate(place.language, `registerPrint.each.${each}`)}`])).join('; '),
     stage: line.stage ?? '',
     bbch: line.bbch ?? '',

@@ -11,8 +11,8 @@ const COLUMNS = 'd.state, d.register_row, d.content, d.computed, d.digest'
 
 /**
  * The register as CSV (RFC 4180, UTF-8 with its mark, CRLF), streamed. One line is one block of one record, which is what a certifier asks
- * by: what was on this block, when, how much. What belongs to the whole record (its preparations, lots and totals) is repeated on each
- * of its lines and must not be added up over them. Figures are those of the record, with a point and without grouping in every language, to
+ * by: what was on this block, when, how much. Area and mix are the block's share and come to those of the record; words and rates of
+ * the whole record stand on each of its lines, under heads that say so. Figures are those of the record, with a point and without grouping in every language, to
  * four decimals; instants carry the farm's offset. A cell that a spreadsheet would take for a formula begins with an apostrophe.
  * @param mayGoOn asked before each page of records is read, and breaks the table off by throwing.
  */

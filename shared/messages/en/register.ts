@@ -26,7 +26,7 @@ export const register = {
   },
   files: {
     open: 'CSV, PDF', title: 'Take out of the register', what: '{count} records, as chosen | {count} record, as chosen | {count} records, as chosen',
-    csv: 'CSV for a spreadsheet', csvText: 'One line a block of a record; what belongs to the whole record stands on each of its lines.',
+    csv: 'CSV for a spreadsheet', csvText: 'One line a block of a record, with its share of area and mix: those columns add up.',
     pdf: 'PDF to print', counting: 'Counting the pages', volumes: 'PDF to print, in {volumes} volumes of at most 150 pages:', volume: 'Volume {volume} of {volumes}',
   },
   caption: 'Records of the farm',

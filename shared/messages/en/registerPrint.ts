@@ -16,9 +16,9 @@ export const registerPrint = {
   csv: {
     record: 'Record', version: 'Version', state: 'State', season: 'Season', method: 'Method', block: 'Block', part: 'Part treated', areaHa: 'Area treated, ha',
     counts: 'Counted', stage: 'Growth stage', bbch: 'BBCH', start: 'Start', end: 'End', zone: 'Time zone', amount: 'Amount on this block', unit: 'Unit',
-    known: 'How known', keepOutUntil: 'Keep out until', pickFrom: 'Pick from', preparations: 'Preparations of the record', lots: 'Lots, in the same order',
-    water: 'Carrier water from', totalL: 'Mix of the record, L', totalKg: 'By mass in the record, kg', litresPerHa: 'L/ha', kgPerHa: 'kg/ha',
-    doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late', stops: 'Stops', unknowns: 'Not known', checkCode: 'Check code',
+    known: 'How known', mixL: 'Share of the mix, L', massKg: 'Share by mass, kg', keepOutUntil: 'Keep out until', pickFrom: 'Pick from', preparations: 'Preparations of the record', lots: 'Lots, in the same order',
+    water: 'Carrier water from', litresPerHa: 'L/ha of the record', kgPerHa: 'kg/ha of the record',
+    doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late, record', stops: 'Stops of the record', unknowns: 'Not known of the record', checkCode: 'Check code',
   },
   pdf: {
     title: 'Register',

@@ -26,7 +26,7 @@ export const register = {
   },
   files: {
     open: 'CSV, PDF', title: 'Sacar del libro de registros', what: '{count} registros, según lo elegido | {count} registro, según lo elegido | {count} registros, según lo elegido',
-    csv: 'CSV para una hoja de cálculo', csvText: 'Una línea por parcela de un registro; lo que es de todo el registro está en cada una de sus líneas.',
+    csv: 'CSV para una hoja de cálculo', csvText: 'Una línea por parcela de un registro, con su parte de superficie y mezcla: esas columnas se pueden sumar.',
     pdf: 'PDF para imprimir', counting: 'Contando las páginas', volumes: 'PDF para imprimir, en {volumes} volúmenes de 150 páginas como máximo:', volume: 'Volumen {volume} de {volumes}',
   },
   caption: 'Registros de la finca',

@@ -17,9 +17,9 @@ export const registerPrint: Messages['registerPrint'] = {
   csv: {
     record: 'Registro', version: 'Versión', state: 'Estado', season: 'Campaña', method: 'Método', block: 'Parcela', part: 'Parte tratada', areaHa: 'Superficie tratada, ha',
     counts: 'Contado', stage: 'Estado de crecimiento', bbch: 'BBCH', start: 'Inicio', end: 'Fin', zone: 'Zona horaria', amount: 'Cantidad en esta parcela', unit: 'Unidad',
-    known: 'Cómo se sabe', keepOutUntil: 'No entrar hasta', pickFrom: 'Cosechar desde', preparations: 'Preparados del registro', lots: 'Lotes, en el mismo orden',
-    water: 'Agua de', totalL: 'Mezcla del registro, L', totalKg: 'Por peso en el registro, kg', litresPerHa: 'L/ha', kgPerHa: 'kg/ha',
-    doneBy: 'Hecho por', signedAt: 'Firmado', lateHours: 'Horas de retraso', stops: 'Altos', unknowns: 'No se sabe', checkCode: 'Código de control',
+    known: 'Cómo se sabe', mixL: 'Parte de la mezcla, L', massKg: 'Parte por peso, kg', keepOutUntil: 'No entrar hasta', pickFrom: 'Cosechar desde', preparations: 'Preparados del registro', lots: 'Lotes, en el mismo orden',
+    water: 'Agua de', litresPerHa: 'L/ha del registro', kgPerHa: 'kg/ha del registro',
+    doneBy: 'Hecho por', signedAt: 'Firmado', lateHours: 'Horas de retraso, registro', stops: 'Altos del registro', unknowns: 'No se sabe del registro', checkCode: 'Código de control',
   },
   pdf: {
     title: 'Libro de registros',
