@@ -55,17 +55,19 @@ export function useBlockDraft(farmId: Ref<string>, by: OutlineBy): BlockDraft {
     if (newest !== undefined && !isHere() && !isBlockDraftBegun(content.value)) resume(newest as Draft<BlockDraftContent>)
     else if (!isHere() && isListed) beginAnew()
     isListed = isHere()
+    if (ready.value) return
     ready.value = true
+    // A hand is faster than a slow device.
+    if (!isListed && isBlockDraftBegun(content.value)) keep(content.value)
   }, { immediate: true })
 
-  watch(content, (value) => {
-    const text = JSON.stringify(value)
-    if (!ready.value || text === keptText) return
-    keptText = text
+  function keep(value: BlockDraftContent): void {
+    keptText = JSON.stringify(value)
     isListed = false
     if (isBlockDraftBegun(value)) drafts.write(id.value, 'block', value)
     else void drafts.remove(id.value)
-  })
+  }
+  watch(content, (value) => { if (ready.value && JSON.stringify(value) !== keptText) keep(value) })
 
   drafts.onTakenOver<BlockDraftContent>(id, ({ content: typed }) => { show(readBlockDraft(typed, by)) })
 

@@ -24,6 +24,7 @@ const followed = (): string => (drafts.onTakenOver.mock.calls.at(-1)?.[0] as Ref
 beforeEach(() => {
   vi.clearAllMocks()
   listed.value = []
+  drafts.ready.value = true
 })
 
 describe('a block in the making', () => {
@@ -46,6 +47,18 @@ describe('a block in the making', () => {
     await nextTick()
     expect([id.value, content.value.code, resumed.value, followed()]).toEqual(['d2', 'B', true, 'd2'])
     expect(drafts.write).not.toHaveBeenCalled()
+  })
+
+  it('keeps what was drawn before the device had answered', async () => {
+    drafts.ready.value = false
+    const { id, content } = open()
+    content.value = begun('early')
+    await nextTick()
+    expect(drafts.write).not.toHaveBeenCalled()
+    drafts.ready.value = true
+    await nextTick()
+    expect(content.value.code).toBe('early')
+    expect(drafts.write).toHaveBeenCalledWith(id.value, 'block', begun('early'))
   })
 
   it('leaves what is begun here alone', async () => {
