@@ -1,6 +1,6 @@
 import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 
-/** A record that was opened from a job; it does the job once it is signed. */
+/** The job that a record was opened from, or found to do when it was signed; it does it once it is signed. */
 @Entity({ name: 'plan_job_records' })
 @Index('plan_job_records_step_idx', ['farmId', 'stepId'])
 @ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'plan_job_records_record_fkey' })

@@ -144,6 +144,26 @@ describe('jobs', () => {
     expect((await lines()).slice(0, 2)).toEqual(['1 planned 2026-06-25', '2 planned 2026-07-09'])
   })
 
+  it('keep the record that did them, and what was decided on the next, when an earlier record is entered later', async () => {
+    const { stepId } = await newPlan({ firstOn: '2026-06-12', everyDays: 3, earlyDays: 1 })
+    const second = `${stepId}.${things.blockId}.2`
+    const done = recordOn('2026-06-14')
+    await sign(done)
+    await manager.post(at(`jobs/${second}/skip`)).send({ revision: 0, reason: 'Rain' }).expect(200)
+    await sign(recordOn('2026-06-12'))
+    expect((await jobs())[0]).toMatchObject({ number: 1, done: { recordId: done.id, on: '2026-06-14' } })
+    expect((await lines()).slice(0, 3)).toEqual(['1 done 2026-06-14', '2 skipped 2026-06-17', '3 planned 2026-06-20'])
+  })
+
+  it('keep the record that did them before the plan was made, once something is decided', async () => {
+    const done = recordOn('2026-06-14')
+    await sign(done)
+    const { stepId } = await newPlan({ firstOn: '2026-06-12', everyDays: 3, earlyDays: 1 })
+    await manager.post(at(`jobs/${stepId}.${things.blockId}.2/move`)).send({ revision: 0, to: '2026-06-18', acknowledged: [] }).expect(200)
+    await sign(recordOn('2026-06-12'))
+    expect((await lines()).slice(0, 2)).toEqual(['1 done 2026-06-14', '2 due 2026-06-18'])
+  })
+
   it('are forgotten with a discarded draft; a record names only jobs of its farm', async () => {
     const { first, stepId } = await newPlan()
     const record = recordOn('2026-06-16')

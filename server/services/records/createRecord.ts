@@ -5,6 +5,7 @@ import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
 import { linkJobs } from '../rounds/jobLinks.ts'
+import { roundsNow } from '../rounds/listJobs.ts'
 import type { Services } from '../services.ts'
 import { draftRecord } from './draftRecord.ts'
 import { presentRecord } from './presentRecord.ts'
@@ -39,7 +40,7 @@ export async function createRecord(services: Services, actor: FarmActor, input: 
     const { made, stored } = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
     if (!made) return { made, record: await presentRecord(manager, stored) }
     await storeProjections(manager, row, false)
-    if (jobs.length > 0) await linkJobs(manager, { farmId: actor.farmId, recordId: id }, jobs)
+    if (jobs.length > 0) await linkJobs(manager, roundsNow(services, actor), id, jobs)
     await appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id })
     return { made, record: await presentRecord(manager, row) }
   })

@@ -5,6 +5,8 @@ import { fillContent } from '../../../shared/records/fillStored.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
+import { holdNumbersAfter } from '../rounds/holdNumbers.ts'
+import { roundsNow } from '../rounds/listJobs.ts'
 import type { Services } from '../services.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
 import { drawLots } from './drawLots.ts'
@@ -39,7 +41,9 @@ export async function sealRecord(
     written: stored, ground, zone: actor.zone, now, firstSignedAt: now, sent: record, reasons: () => input.acknowledged,
   })
   await drawLots(manager, draws, { recordId: id, personId: personOf(actor), at: now })
-  return presentRecord(manager, await writeVersion(services, manager, actor, {
+  const signed = await writeVersion(services, manager, actor, {
     record, entry: 'signed', reason: null, content, ground, judged, acknowledged, deviceAt: record.deviceAt, firstSignedAt: now, now,
-  }))
+  })
+  await holdNumbersAfter(manager, roundsNow(services, actor), content)
+  return presentRecord(manager, signed)
 }

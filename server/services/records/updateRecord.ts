@@ -6,6 +6,7 @@ import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { linkJobs } from '../rounds/jobLinks.ts'
+import { roundsNow } from '../rounds/listJobs.ts'
 import type { Services } from '../services.ts'
 import { updateRow } from '../updateRow.ts'
 import { assertMayWrite } from './assertMayWrite.ts'
@@ -38,7 +39,7 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id }, changes)
     const written = { ...record, ...changes }
     await storeProjections(manager, written, true)
-    if (jobs !== undefined) await linkJobs(manager, { farmId: actor.farmId, recordId: id }, jobs)
+    if (jobs !== undefined) await linkJobs(manager, roundsNow(services, actor), id, jobs)
     await appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } })
     return presentRecord(manager, written)
   })

@@ -9,6 +9,7 @@ import { AppError, invalid, notFound, stale, unlikely, type FieldError } from '.
 import { appendJournal } from '../appendJournal.ts'
 import type { Services } from '../services.ts'
 import { updateRow } from '../updateRow.ts'
+import { holdNumbers } from './holdNumbers.ts'
 import { roundsNow } from './listJobs.ts'
 import { readJobs } from './readJobs.ts'
 
@@ -83,6 +84,7 @@ function decide(services: Services, actor: FarmActor, id: string, deed: Deed): P
     if (deed.stands(job)) return job
     if (job.revision !== deed.revision) throw stale(job)
     deed.judge(job, roundsNow(services, actor).today)
+    await holdNumbers(manager, roundsNow(services, actor), key.stepId)
     await writeDecision(manager, { farmId: actor.farmId, ...key }, deed.change)
     await appendJournal(services, manager, actor, { action: deed.action, subjectId: key.stepId, detail: { job: id, block: job.blockCode, preparation: job.preparation, ...deed.detail(job) } })
     const after = await findJob(services, manager, actor, key, id)
