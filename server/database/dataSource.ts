@@ -20,6 +20,7 @@ import { FindUnreviewed1764646000000 } from '../../migrations/1764646000000-Find
 import { PruneLetters1764647000000 } from '../../migrations/1764647000000-PruneLetters.ts'
 import { FindSeasonCode1764648000000 } from '../../migrations/1764648000000-FindSeasonCode.ts'
 import { KeepCertificates1764652000000 } from '../../migrations/1764652000000-KeepCertificates.ts'
+import { RememberGrants1764652001000 } from '../../migrations/1764652001000-RememberGrants.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -66,7 +67,7 @@ export function createOwnerSource(url: string): DataSource {
       AddRounds1764644000000,
       FindUnreviewed1764646000000,
       PruneLetters1764647000000,
-      FindSeasonCode1764648000000, KeepCertificates1764652000000,
+      FindSeasonCode1764648000000, KeepCertificates1764652000000, RememberGrants1764652001000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -53,6 +53,6 @@ export const APP_RIGHTS: Record<string, string> = {
 
 /** Functions the app role may call that look over farm borders; each answers only what its name says. */
 export const APP_FUNCTIONS = [
-  'account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'every_farm()', 'farm_asks_factor(uuid)', 'find_check_code(text)',
+  'account_access(uuid, timestamptz)', 'account_grants(uuid, timestamptz)', 'account_ended_grants(uuid, timestamptz)', 'every_farm()', 'farm_asks_factor(uuid)', 'find_check_code(text)',
   'find_season_code(text)',
 ]

@@ -2,6 +2,7 @@ import { IsNull } from 'typeorm'
 import type { Session } from '../../shared/contract/session.ts'
 import { Account } from '../entities/Account.ts'
 import { AppError } from '../errors.ts'
+import { listEndedGrants } from './grants/listEndedGrants.ts'
 import type { Services } from './services.ts'
 
 /** Who is signed in and which farms are open to them now. @throws {AppError} unauthenticated if the account is gone. */
@@ -16,6 +17,7 @@ export async function describeSession(services: Services, accountId: string): Pr
     memberships: access.map(({ farmId, farmName, role, personId, seasons, asksFactor }) => ({
       farmId, farmName, role, personId, seasons, factorNeeded: asksFactor && account.totpSecret === null,
     })),
+    hadGrants: access.length === 0 && (await listEndedGrants(services, accountId)).length > 0,
   }
 }
 

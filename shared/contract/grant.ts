@@ -72,4 +72,16 @@ export const grantedSeasonSchema = z.object({
   head: z.object({ seq: z.number().int(), checkCode: z.string(), takenAt: z.string(), agrees: z.boolean() }).nullable(),
 })
 export type GrantedSeason = z.infer<typeof grantedSeasonSchema>
-export const grantedSeasonsSchema = z.object({ items: z.array(grantedSeasonSchema) })
+
+/** What was granted to the caller and has ended. */
+const endedGrantSchema = z.object({
+  farmName: z.string(),
+  seasons: z.array(z.number().int()),
+  /** Last civil day on which it stood, in the farm's zone. */
+  endedOn: z.string(),
+  /** Who gave it; empty where the name is not known any more. */
+  givenBy: z.string(),
+})
+export type EndedGrant = z.infer<typeof endedGrantSchema>
+export const grantedSeasonsSchema = z.object({ items: z.array(grantedSeasonSchema), ended: z.array(endedGrantSchema) })
+export type GrantedSeasons = z.infer<typeof grantedSeasonsSchema>

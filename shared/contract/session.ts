@@ -40,6 +40,8 @@ export const sessionSchema = z.object({
     revision: z.number().int(),
   }),
   memberships: z.array(membershipSchema),
+  /** No farm is open, and seasons of one were: a certifier whose last grant ended. */
+  hadGrants: z.boolean().optional(),
 })
 export type Session = z.infer<typeof sessionSchema>
 export type Membership = z.infer<typeof membershipSchema>

@@ -1,4 +1,5 @@
 import { fromDayNumber, toDayNumber } from '../time/dayNumber.ts'
+import { openStateOn } from './openStateOn.ts'
 
 /** When a step comes round: every so many days from the day it was done, between two civil dates. */
 export interface RoundRhythm {
@@ -86,20 +87,17 @@ function countJobs({ rhythm, works, decisions, today, isClosed }: BlockRound): R
     const isSkipped = decision?.skipped === true
     const done = found.take(number, { from: earliest, isOpen: !isSkipped })
     const planned = decision?.plannedOn === undefined || decision.plannedOn === null ? target : toDayNumber(decision.plannedOn)
-    const state = done !== null ? 'done' : isSkipped ? 'skipped' : stateOn(now, Math.min(earliest, planned), Math.max(latest, planned))
+    const dates = { earliestOn: fromDayNumber(earliest), latestOn: fromDayNumber(latest), plannedOn: fromDayNumber(planned) }
+    const state = done !== null ? 'done' : isSkipped ? 'skipped' : openStateOn(today, dates)
     if (done !== null || isSkipped || !isClosed) {
       jobs.push({
-        number, state, done, targetOn: fromDayNumber(target), earliestOn: fromDayNumber(earliest), latestOn: fromDayNumber(latest), plannedOn: fromDayNumber(planned),
+        number, state, done, targetOn: fromDayNumber(target), ...dates,
       })
     }
     if (done !== null) target = toDayNumber(done.on) + everyDays
     else target = (isSkipped || number < lastSettled ? target : Math.max(planned, now)) + everyDays
   }
   return jobs
-}
-
-function stateOn(now: number, opens: number, closes: number): JobState {
-  return now < opens ? 'planned' : now <= closes ? 'due' : 'late'
 }
 
 const byDay = (a: RoundWork, b: RoundWork): number => a.on.localeCompare(b.on) || a.recordId.localeCompare(b.recordId)

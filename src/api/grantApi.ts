@@ -1,4 +1,4 @@
-import { grantedSeasonsSchema, grantSchema, type Grant, type GrantedSeason } from '../../shared/contract/grant.ts'
+import { grantedSeasonsSchema, grantSchema, type Grant, type GrantedSeasons } from '../../shared/contract/grant.ts'
 import { pageOf } from '../../shared/contract/common.ts'
 import { registerRowSchema } from '../../shared/contract/record.ts'
 import { registerTotalsSchema, type RegisterFilter, type RegisterTotals } from '../../shared/contract/register.ts'
@@ -14,5 +14,5 @@ export const grantApi = {
     http.get(`/farms/${farmId}/grants/${id}/records`, pageOf(registerRowSchema), { ...query, cursor }),
   seenTotals: (farmId: string, id: string, filter: RegisterFilter): Promise<RegisterTotals> =>
     http.get(`/farms/${farmId}/grants/${id}/totals`, registerTotalsSchema, { ...filter }),
-  mine: async (): Promise<GrantedSeason[]> => (await http.get('/my-farms', grantedSeasonsSchema)).items,
+  mine: (): Promise<GrantedSeasons> => http.get('/my-farms', grantedSeasonsSchema),
 }

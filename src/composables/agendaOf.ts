@@ -1,4 +1,5 @@
 import type { Job } from '../../shared/contract/job.ts'
+import { byBlock } from '../../shared/rounds/byBlock.ts'
 import { groupBy } from '../../shared/rounds/groupBy.ts'
 import { addDays } from '../../shared/time/calendar.ts'
 
@@ -27,5 +28,5 @@ export function agendaOf(jobs: readonly Job[], today: string): Agenda {
 const dayOf = ({ done, plannedOn }: Job): string => done?.on ?? plannedOn
 
 function groupsOf(jobs: readonly Job[]): AgendaGroup[] {
-  return [...groupBy(jobs, ({ stepId, state, done }) => `${stepId} ${done === null ? '' : state}`)].map(([key, those]) => ({ key, jobs: those }))
+  return [...groupBy(jobs, ({ stepId, state, done }) => `${stepId} ${done === null ? '' : state}`)].map(([key, those]) => ({ key, jobs: those.toSorted(byBlock) }))
 }

@@ -37,7 +37,7 @@ export function useFrameContext(): { frame: FrameContext; keptOpen: Ref<boolean>
     sync,
     person: computed(() =>
       session.user === null || session.role === null
-        ? ''
+        ? (session.user?.name ?? '')
         : t('frame.person', { name: session.user.name, role: t(`session.role.${session.role}`).toLowerCase() }),
     ),
     chooseFarm: session.chooseFarm,

@@ -21,7 +21,7 @@ export interface InputFormOptions<Kind extends InputKind> {
   aboutId?: () => string
   body: (id: string) => unknown
   /** Where another may have changed it meanwhile: puts both sides together, and holds the form back while something has to be chosen. */
-  merge?: { meet: (error: unknown) => boolean; clashes: Ref<readonly unknown[]> }
+  merge?: { meet: (error: unknown) => boolean; isHeld: Ref<boolean> }
   /** Sentence for the reader once the server has it. */
   done: (answer: CommandAnswers[Kind]) => string
 }
@@ -50,7 +50,7 @@ export function useInputForm<Kind extends InputKind>(options: InputFormOptions<K
   const task = useTask((command: Command<Kind>) => submit<Kind>(command))
 
   async function save(): Promise<boolean> {
-    if (task.running.value || (options.merge?.clashes.value.length ?? 0) > 0) return false
+    if (task.running.value || options.merge?.isHeld.value === true) return false
     const body = options.body(id)
     own.value = check(options.schema, body)
     task.error.value = null

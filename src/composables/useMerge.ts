@@ -1,4 +1,4 @@
-import { ref, type Ref } from 'vue'
+import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import type { z } from 'zod'
 import { ApiError } from '../api/errors.ts'
 
@@ -13,7 +13,9 @@ export interface Clash<Draft> {
 export interface Merge<Draft> {
   /** The revision that is written over: theirs, once it was met. */
   revision: Ref<number>
-  /** To be chosen before anything is sent. */
+  /** Something has to be chosen before anything is sent. */
+  isHeld: ComputedRef<boolean>
+  /** What is to be chosen. */
   clashes: Ref<Clash<Draft>[]>
   /** Fields that only the other changed: they stand in the form as the other wrote them. */
   taken: Ref<(keyof Draft & string)[]>
@@ -59,5 +61,5 @@ export function useMerge<Thing extends { revision: number }, Draft extends objec
     clashes.value = clashes.value.filter((each) => each !== clash)
   }
 
-  return { revision, clashes, taken, meet, choose }
+  return { revision, clashes, taken, meet, choose, isHeld: computed(() => clashes.value.length > 0) }
 }

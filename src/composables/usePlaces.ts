@@ -29,7 +29,7 @@ export function usePlaces(): ComputedRef<Place[]> {
   const waiting = useJobsWaiting()
   return computed(() => {
     const count = waiting.data.value?.length ?? 0
-    const places = session.role === 'certifier' ? OF_CERTIFIER : OF_FARM
+    const places = session.role === null ? OF_CERTIFIER.slice(0, 1) : session.role === 'certifier' ? OF_CERTIFIER : OF_FARM
     return places.map((place) => ({ ...place, words: t(`frame.places.${place.name}`), ...(WITH_JOBS.includes(place.name) && { count }) }))
   })
 }

@@ -106,7 +106,7 @@ export function usePlanForm(was: SeasonPlan | null): PlanForm {
   const revisionSeen = (): number => merge?.revision.value ?? 1
 
   async function save(): Promise<'sent' | 'kept' | null> {
-    if (task.running.value || (merge?.clashes.value.length ?? 0) > 0) return null
+    if (task.running.value || merge?.isHeld.value === true) return null
     task.error.value = null
     const content = { name: draft.name, note: draft.note.trim() === '' ? null : draft.note, steps: draft.steps.map(stepBody) }
     const { id } = draft

@@ -3,6 +3,7 @@ import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import type { Block } from '../../shared/contract/block.ts'
 import type { Job, SeasonSheet } from '../../shared/contract/job.ts'
 import type { SeasonPlan } from '../../shared/contract/seasonPlan.ts'
+import { openStateOn } from '../../shared/rounds/openStateOn.ts'
 import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
 import { addDays } from '../../shared/time/calendar.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
@@ -16,7 +17,7 @@ import { useBlocks } from './useBlocks.ts'
 import { useFarm } from './useFarm.ts'
 import { useFarmRead } from './useFarmRead.ts'
 
-/** A job; `isKept`: its move to that day waits on this device for signal. */
+/** A job; `isKept`: what was decided of it waits on this device for signal. */
 export interface SheetJob extends Job { isKept: boolean }
 
 export type SheetWork = SeasonSheet['works'][number] & { heldTo: string | null }
@@ -74,8 +75,9 @@ export function useSeasonSheet(): Sheet {
       return readThrough(`${session.farmId}/season-sheet/${asked.from}`, session.user?.id ?? '', () => roundApi.sheet(session.farmId, asked))
     },
   })
-  const keptMoves = useKeptMoves()
-  const jobs = computed(() => (query.data.value?.jobs ?? []).map((job) => asKept(job, keptMoves.value.get(job.id))))
+  const kept = useKeptDecisions()
+  const here = computed(() => ({ today: query.data.value?.today ?? '', by: { id: session.membership?.personId ?? '', name: session.user?.name ?? '' } }))
+  const jobs = computed(() => (query.data.value?.jobs ?? []).map((job) => asKept(job, kept.value.get(job.id), here.value)))
   const shown = computed(() => (planId.value === '' ? jobs.value : jobs.value.filter((job) => job.planId === planId.value)))
   const works = computed<SheetWork[]>(() => (query.data.value?.works ?? []).map((work) => ({ ...work, heldTo: heldTo(work, farm.value?.zone ?? 'UTC') })))
 
@@ -100,15 +102,39 @@ export function useSeasonSheet(): Sheet {
   }
 }
 
-/** Days to which jobs were moved without signal, by job; null for one that goes back to its target. */
-function useKeptMoves(): ComputedRef<ReadonlyMap<string, string | null>> {
+/** What this device decided of a job without signal: the day it was moved to, null for its target; the reason of a skip, null where one was taken back. */
+export interface KeptDecision { to?: string | null; skip?: string | null }
+
+/** What waits on this device for signal, by job; of two decisions on one thing the later. */
+function useKeptDecisions(): ComputedRef<ReadonlyMap<string, KeptDecision>> {
   const outbox = useOutbox()
-  return computed(() => new Map(outbox.waiting.flatMap(({ command }) => (command.kind === 'job.move' ? [[command.id, (command as Command<'job.move'>).body.to] as const] : []))))
+  return computed(() => {
+    const kept = new Map<string, KeptDecision>()
+    for (const { command } of outbox.waiting) {
+      const decided = decisionOf(command)
+      if (decided !== null) kept.set(command.id, { ...kept.get(command.id), ...decided })
+    }
+    return kept
+  })
 }
 
-/** A job on the day to which it was moved on this device: its window and state stay those that the farm knows. */
-export function asKept(job: Job, to: string | null | undefined): SheetJob {
-  return to === undefined ? { ...job, isKept: false } : { ...job, plannedOn: to ?? job.targetOn, isMoved: to !== null, isKept: true }
+function decisionOf(command: Command): KeptDecision | null {
+  switch (command.kind) {
+    case 'job.move': return { to: (command as Command<'job.move'>).body.to }
+    case 'job.skip': return { skip: (command as Command<'job.skip'>).body.reason }
+    case 'job.unskip': return { skip: null }
+    default: return null
+  }
+}
+
+/** A job as it was decided on this device: its window stays the one that the farm knows. @param by who decides here. */
+export function asKept(job: Job, kept: KeptDecision | undefined, { today, by }: { today: string; by: { id: string; name: string } }): SheetJob {
+  if (kept === undefined) return { ...job, isKept: false }
+  const { to, skip } = kept
+  const moved = to === undefined ? job : { ...job, plannedOn: to ?? job.targetOn, isMoved: to !== null }
+  if (skip === undefined) return { ...moved, isKept: true }
+  if (skip === null) return { ...moved, isKept: true, skip: null, state: openStateOn(today, moved) }
+  return { ...moved, isKept: true, state: 'skipped', skip: { reason: skip, by, at: '' } }
 }
 
 /** Blocks are coded by kind: A1, A2, then P1. */

@@ -146,7 +146,7 @@ describe('what a grant opens', () => {
     await client.end()
     expect(after).toMatchObject([{ head: { seq: 1, agrees: false } }])
     const outsider = await house.makeFarm()
-    expect((await (await house.as(outsider.accounts.owner)).get('/api/my-farms').expect(200)).body).toEqual({ items: [] })
+    expect((await (await house.as(outsider.accounts.owner)).get('/api/my-farms').expect(200)).body).toEqual({ items: [], ended: [] })
   })
 })
 
@@ -219,8 +219,13 @@ describe('the end of a grant', () => {
     // The last day goes to its end on the farm: 20 June, 23:30 in Los Angeles.
     house.setNow('2026-06-21T06:30:00Z')
     await certifier.get(at('/seasons/2026/csv')).expect(200)
+    expect((await certifier.get('/api/session').expect(200)).body.hadGrants).toBe(false)
     house.setNow('2026-06-21T07:00:00Z')
     await certifier.get(at('/seasons/2026/csv')).expect(404)
+    const { body } = await certifier.get('/api/my-farms').expect(200)
+    expect(body.items).toEqual([])
+    expect(body.ended[0]).toEqual({ farmName: expect.stringMatching(/^Farm /), seasons: [2025, 2026], endedOn: '2026-06-20', givenBy: expect.any(String) })
+    expect((await certifier.get('/api/session').expect(200)).body).toMatchObject({ memberships: [], hadGrants: true })
     house.setNow(NOW)
     await owner.patch(at(`/grants/${id}`)).send({ revision: revision + 1, endsOn: '2026-12-31', seasons: [2026], password: PASSWORD }).expect(200)
   })

@@ -58,3 +58,11 @@ it('tells of a day once, though two processes look at the same time', async () =
   const both = await Promise.all([mailJobsDue(house.services), mailJobsDue(house.services)])
   expect(both.map((counts) => counts.letters).sort()).toEqual([0, 2])
 })
+
+it('tells of no farm to practise on', async () => {
+  const practise = (practice: boolean) => house.services.database.inFarm({ farmId: farm.id, seasons: null }, (tx) => tx.query('UPDATE farms SET practice = $2 WHERE id = $1', [farm.id, practice]))
+  await practise(true)
+  expect(await at('2026-06-24T12:00:00Z')).toEqual({ farms: 0, letters: 0 })
+  await practise(false)
+  expect(await at('2026-06-24T12:00:00Z')).toEqual({ farms: 1, letters: 2 })
+})

@@ -62,11 +62,11 @@ it('gives the app role no power over the house', async () => {
   expect(evidence).toEqual([])
 })
 
-it('lets only six functions look over farm borders, each with a fixed search path', async () => {
+it('lets only seven functions look over farm borders, each with a fixed search path', async () => {
   const functions = await rows(`SELECT p.proname, p.proconfig FROM pg_proc p JOIN pg_namespace n ON n.oid = p.pronamespace
     WHERE n.nspname = 'public' AND p.prosecdef ORDER BY p.proname`)
   const searchPath = ['search_path=pg_catalog, public, pg_temp']
-  expect(functions.map(({ proname }) => proname)).toEqual(['account_access', 'account_grants', 'every_farm', 'farm_asks_factor', 'find_check_code', 'find_season_code'])
+  expect(functions.map(({ proname }) => proname)).toEqual(['account_access', 'account_ended_grants', 'account_grants', 'every_farm', 'farm_asks_factor', 'find_check_code', 'find_season_code'])
   expect(new Set(functions.map(({ proconfig }) => String(proconfig)))).toEqual(new Set(searchPath))
 })
 

@@ -1,15 +1,16 @@
 import type { EntityManager } from 'typeorm'
-import type { GrantedSeason } from '../../../shared/contract/grant.ts'
+import type { GrantedSeason, GrantedSeasons } from '../../../shared/contract/grant.ts'
 import { cutCheckCode } from '../../../shared/evidence/checkCode.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { SeasonHead } from '../../entities/SeasonHead.ts'
 import { readSeasonHead } from '../season/readSeasonHead.ts'
 import type { Services } from '../services.ts'
+import { listEndedGrants } from './listEndedGrants.ts'
 
 interface Granted { farm_id: string; season: number; ends_on: string }
 
-/** Every season of every farm that is granted to an account now, one by one: farms by name, the newest season first. */
-export async function listGrantedSeasons(services: Services, accountId: string): Promise<{ items: GrantedSeason[] }> {
+/** Every season of every farm that is granted to an account now, one by one: farms by name, the newest season first; and what has ended. */
+export async function listGrantedSeasons(services: Services, accountId: string): Promise<GrantedSeasons> {
   const at = services.clock.now()
   const farms = (await services.database.listAccess(accountId, at)).filter(({ role }) => role === 'certifier')
   const granted: Granted[] = await services.database.inHouse((manager) => manager.query('SELECT * FROM account_grants($1, $2)', [accountId, at]))
@@ -23,7 +24,7 @@ export async function listGrantedSeasons(services: Services, accountId: string):
     })
     items.push(...rows)
   }
-  return { items }
+  return { items, ended: await listEndedGrants(services, accountId) }
 }
 
 async function describeSeason(manager: EntityManager, farm: FarmActor, { season, grantedTo }: { season: number; grantedTo: string }): Promise<GrantedSeason> {

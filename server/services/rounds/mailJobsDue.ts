@@ -1,8 +1,10 @@
 import { In, IsNull, type EntityManager } from 'typeorm'
 import type { Job } from '../../../shared/contract/job.ts'
+import { byBlock } from '../../../shared/rounds/byBlock.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import type { FarmOnRound } from '../../database/database.ts'
 import { Account } from '../../entities/Account.ts'
+import { Farm } from '../../entities/Farm.ts'
 import { JobDigest } from '../../entities/JobDigest.ts'
 import { Person } from '../../entities/Person.ts'
 import { queueLetter } from '../mail/queueLetter.ts'
@@ -14,7 +16,7 @@ const FROM = '05:00'
 
 /**
  * Tells those who lead each farm and did not choose otherwise, once a day from five in the morning there, of the jobs that are due and late.
- * Nothing due, no letter.
+ * Nothing due, no letter; nor of a farm to practise on.
  * Safe to run twice, and in two processes: the farm's day is marked in the transaction that queues its letters.
  * @returns how many farms had a letter, and how many letters.
  */
@@ -32,6 +34,7 @@ export async function mailJobsDue(services: Pick<Services, 'clock' | 'config' | 
 
 function tellFarm(services: Pick<Services, 'clock' | 'config' | 'database'>, { farmId, farmName, zone }: FarmOnRound, today: string): Promise<number> {
   return services.database.inFarm({ farmId, seasons: null }, async (manager) => {
+    if (await manager.existsBy(Farm, { id: farmId, practice: true })) return 0
     if (await manager.existsBy(JobDigest, { farmId, onDay: today })) return 0
     const { jobs } = await readJobs(manager, { farmId, zone, today })
     const due = jobs.filter(({ state }) => state === 'due')
@@ -63,6 +66,6 @@ async function readLeaders(manager: EntityManager, farmId: string): Promise<(Pic
 /** A preparation and the blocks it is due on, in the order of their codes. */
 function linesOf(jobs: readonly Job[]): { preparation: string; blocks: string }[] {
   const byName = new Map<string, string[]>()
-  for (const { preparation, blockCode } of jobs) byName.set(preparation, [...(byName.get(preparation) ?? []), blockCode])
+  for (const { preparation, blockCode } of jobs.toSorted(byBlock)) byName.set(preparation, [...(byName.get(preparation) ?? []), blockCode])
   return [...byName].map(([preparation, codes]) => ({ preparation, blocks: codes.join(', ') }))
 }

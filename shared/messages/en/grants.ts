@@ -4,7 +4,7 @@ export const grants = {
   intro: 'Whom you let read which seasons, and until when. They read and download; they change nothing.',
   give: 'Grant seasons',
   none: 'Nobody from outside reads this farm.',
-  noneText: 'Let your certifier or an inspector in for the seasons they review, until a day you choose.',
+  noneText: 'A certifier or inspector whom you let in reads the signed records of the seasons you choose, until a day you choose, and takes reports away. They change nothing, and you see here what they took.',
   loading: 'Reading the grants',
   failed: 'The grants could not be read.',
   column: { who: 'Certifier', seasons: 'Seasons', until: 'Until', taken: 'Last report taken', acts: 'Change or end' },
@@ -85,5 +85,9 @@ export const grants = {
     loading: 'Reading your farms', failed: 'Your farms could not be read.',
     codeText: 'A code that agrees shows that no entry of that season up to the one you took was changed, taken out or slipped in since. It says nothing about the farm, or whether what was written is true.',
     count: '{count} season | {count} seasons',
+  },
+  endedOnes: {
+    title: 'Ended', on: 'Ended on', by: 'Whom to ask', owner: 'the owner',
+    none: 'Nothing is granted to you now.', noneText: 'What you were granted has ended. Ask whoever gave it; what they grant anew stands here at once. What you took away before, you keep.',
   },
 }

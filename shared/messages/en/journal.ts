@@ -40,7 +40,7 @@ export const journal = {
   },
   kind: {
     record: 'Records', file: 'Photos and papers', block: 'Blocks', planting: 'Plantings', bed: 'Beds and rows', event: 'Events', site: 'What is kept clear of', ground: 'Ground plan',
-    material: 'Materials', lot: 'Lots', sprayer: 'Sprayers', calibration: 'Calibrations', farm: 'Farm', certificate: 'Certificates', start: 'First hour', practice: 'Practice farm', grant: 'Grants', plan: 'Season plans', job: 'Jobs', person: 'People', phone: 'Shared phones', paper: 'Training and licences', invitation: 'Invitations', letter: 'Letters', report: 'Reports',
+    material: 'Materials', lot: 'Lots', sprayer: 'Sprayers', calibration: 'Calibrations', farm: 'Farm', certificate: 'Certificates', start: 'First hour', practice: 'Practice farm', grant: 'Certifiers', plan: 'Season plans', job: 'Jobs', person: 'People', phone: 'Shared phones', paper: 'Training and licences', invitation: 'Invitations', letter: 'Letters', report: 'Reports',
   },
   fact: {
     reason: '“{value}”', version: 'version {value}', season: 'season {value}', seasons: 'seasons {value}', endsOn: 'until {value}', format: '{value}', volume: 'volume {value}',

@@ -18,6 +18,7 @@ export const rounds = {
     name: 'Season sheet: blocks down, days across. Arrows move, Enter opens the day.',
     block: 'Block',
     week: 'week {number}',
+    keys: 'Arrows move, Enter opens.',
     dragged: '{code} to {day}',
   },
   cell: {

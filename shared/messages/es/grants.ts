@@ -5,7 +5,7 @@ export const grants: Messages['grants'] = {
   intro: 'A quién deja leer qué campañas y hasta cuándo. Leen y descargan; no cambian nada.',
   give: 'Conceder campañas',
   none: 'Nadie de fuera lee esta finca.',
-  noneText: 'Dé acceso a su certificadora o a un inspector a las campañas que revisan, hasta el día que usted elija.',
+  noneText: 'La certificadora o el inspector a quien dé acceso lee los registros firmados de las campañas que usted elija, hasta el día que elija, y se lleva informes. No cambia nada, y aquí ve usted lo que se llevó.',
   loading: 'Leyendo las concesiones',
   failed: 'No se pudieron leer las concesiones.',
   column: { who: 'Certificadora', seasons: 'Campañas', until: 'Hasta', taken: 'Último informe llevado', acts: 'Cambiar o terminar' },
@@ -86,5 +86,9 @@ export const grants: Messages['grants'] = {
     loading: 'Leyendo sus fincas', failed: 'No se pudieron leer sus fincas.',
     codeText: 'Un código que coincide muestra que, hasta la entrada que usted se llevó, ninguna de esa campaña se cambió, se quitó ni se coló desde entonces. No dice nada de la finca ni de si lo anotado es verdad.',
     count: '{count} campaña | {count} campañas',
+  },
+  endedOnes: {
+    title: 'Terminadas', on: 'Terminó el', by: 'A quién preguntar', owner: 'a quien lleva la finca',
+    none: 'Ahora no tiene nada concedido.', noneText: 'Lo que le concedieron ha terminado. Pregunte a quien se lo concedió; lo que conceda de nuevo aparece aquí enseguida. Lo que descargó antes, lo conserva.',
   },
 }

@@ -41,7 +41,7 @@ export const journal: Messages['journal'] = {
   },
   kind: {
     record: 'Registros', file: 'Fotos y documentos', block: 'Parcelas', planting: 'Plantaciones', bed: 'Bancales e hileras', event: 'Labores', site: 'De lo que se aparta', ground: 'Plano del terreno',
-    material: 'Insumos', lot: 'Lotes', sprayer: 'Pulverizadores', calibration: 'Calibraciones', farm: 'Finca', certificate: 'Certificados', start: 'Primera hora', practice: 'Finca de práctica', grant: 'Concesiones', plan: 'Planes de campaña', job: 'Trabajos', person: 'Personas', phone: 'Teléfonos compartidos', paper: 'Formación y licencias', invitation: 'Invitaciones', letter: 'Cartas', report: 'Informes',
+    material: 'Insumos', lot: 'Lotes', sprayer: 'Pulverizadores', calibration: 'Calibraciones', farm: 'Finca', certificate: 'Certificados', start: 'Primera hora', practice: 'Finca de práctica', grant: 'Certificadoras', plan: 'Planes de campaña', job: 'Trabajos', person: 'Personas', phone: 'Teléfonos compartidos', paper: 'Formación y licencias', invitation: 'Invitaciones', letter: 'Cartas', report: 'Informes',
   },
   fact: {
     reason: '«{value}»', version: 'versión {value}', season: 'campaña {value}', seasons: 'campañas {value}', endsOn: 'hasta {value}', format: '{value}', volume: 'volumen {value}',

@@ -19,6 +19,7 @@ export const rounds: Messages['rounds'] = {
     name: 'Hoja de campaña: parcelas hacia abajo, días a lo ancho. Las flechas mueven, Intro abre el día.',
     block: 'Parcela',
     week: 'semana {number}',
+    keys: 'Las flechas mueven, Intro abre.',
     dragged: '{code} al {day}',
   },
   cell: {

@@ -55,6 +55,15 @@ describe('guard', () => {
     expect(router.currentRoute.value.name).toBe('not-found')
   })
 
+  it.each([[false, '/', 'farm-new'], [false, '/farms', 'farm-new'], [true, '/', 'my-farms'], [true, '/register', 'my-farms'], [true, '/farms/new', 'farm-new']])(
+    'takes who has no farm, and had grants %s, at %s to %s', async (hadGrants, path, name) => {
+      here.read.mockResolvedValue({ user: buildUser(), memberships: [], hadGrants })
+      const router = openRouter()
+      await router.push(path)
+      expect(router.currentRoute.value.name).toBe(name)
+    },
+  )
+
   it.each([['applicator', '/blocks/new', 'not-found'], ['manager', '/blocks/new', 'block-new'], ['applicator', '/register/new', 'record-new'], ['manager', '/farms', 'not-found']] as const)(
     'takes the %s at %s to %s', async (role, path, name) => {
       here.read.mockResolvedValue(sessionOf(role))
