@@ -6,6 +6,8 @@ import { drawLines, wrapText, type Line, type Span } from './wrapText.ts'
 
 export interface Column {
   head: string
+  /** Drawn in place of the words of the head, which readers by ear are still given; y is the top of its last line. */
+  drawHead?: (at: { x: number; y: number }) => void
   /** Points, white at its sides included. */
   width: number
   align?: 'left' | 'right'
@@ -127,6 +129,8 @@ function drawHeads(flow: Flow, table: Table, { heads, head }: { heads: Line[][];
   const { canvas, y } = flow
   const height = headHeight(table, heads)
   const draw = (index: number): void => {
+    const own = table.columns[index]?.drawHead
+    if (own) { own({ x: innerBox(table, index).x, y: y + height - HEAD_PADDING.bottom - STYLES.columnHead.leading }); return }
     const lines = heads[index] ?? []
     const top = y + height - HEAD_PADDING.bottom - lines.length * STYLES.columnHead.leading
     drawLines(canvas, lines, { ...innerBox(table, index), y: top, leading: STYLES.columnHead.leading, align: table.columns[index]?.align ?? 'left' })
@@ -134,10 +138,10 @@ function drawHeads(flow: Flow, table: Table, { heads, head }: { heads: Line[][];
   const indices = table.columns.map((_column, index) => index)
   if (head) {
     const row = addElement(canvas, head, 'TR')
-    for (const index of indices) {
-      const name = table.columns[index]?.head ?? ''
+    for (const [index, column] of table.columns.entries()) {
+      const { head: name, drawHead } = column
       addElement(canvas, row, 'TH', table.showsHeads ? () => draw(index) : undefined, {
-        scope: 'Column', ...(!table.showsHeads && { actual: name }),
+        scope: 'Column', ...((!table.showsHeads || drawHead !== undefined) && { actual: name }),
       })
     }
   } else if (table.showsHeads) {

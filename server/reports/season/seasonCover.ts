@@ -54,11 +54,12 @@ function farmFacts({ farm, certificates, isRunning, span, printedAt }: SeasonRep
 /** The certificates that were in force during the season, as the farm wrote them down; when each runs out is said with it. */
 function certificateFacts(runs: readonly CertificateRun[], { say, day }: SeasonWords): Fact[] {
   if (runs.length === 0) return [fact(say('cover.certificate'), say('cover.noCertificate'))]
-  return runs.flatMap(({ certificate: { number, body, scope }, from, until }) => {
+  return runs.flatMap(({ certificate: { number, body, scope }, from, until }, index) => {
     const days = [...(from === null ? [] : [say('cover.validFrom', { day: day(from) })]), until === null ? say('cover.noExpiry') : say('cover.expires', { day: day(until) })]
     return [
       fact(say('cover.certificate'), say('cover.certificateText', { number, body, days: days.join(', ') })),
-      ...(scope === null ? [] : [fact(say('cover.scope'), scope)]),
+      // Said once of those that cover the same.
+      ...(scope === null || runs[index + 1]?.certificate.scope === scope ? [] : [fact(say('cover.scope'), scope)]),
     ]
   })
 }

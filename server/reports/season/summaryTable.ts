@@ -8,7 +8,7 @@ import { drawText, measureText } from '../parts/setText.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { SeasonReportData, SummaryBlock } from '../seasonReportData.ts'
 import type { SeasonWords } from './seasonWords.ts'
-import { drawBlockGlyph, drawSeasonStrip } from './seasonStripMark.ts'
+import { drawBlockGlyph, drawSeasonStrip, drawStripMonths } from './seasonStripMark.ts'
 
 const M2_PER_HA = 10_000
 const LEADING = 12
@@ -29,13 +29,16 @@ export function summaryTable(canvas: Canvas, data: SeasonReportData, words: Seas
   const short = (day: string) => formatDayShort(data.language, day)
   const figures = figureColumns(blocks)
   const stripWidth = canvas.frame.width - 104 - figures.reduce((sum, { width }) => sum + width, 0) - 48
+  const stripX = 104 + figures.reduce((sum, { width }) => sum + width, 0) + 6
   const columns: Column[] = [
     { head: words.say('column.block'), width: 104, indent: GLYPH + 6 },
     ...figures.map(({ name, width }, index): Column => ({ head: words.say(`column.${name}`), width, align: 'right', ...(index === 0 && { opensAccount: true }) })),
-    { head: words.say('column.strip', { from: short(span.from), to: short(span.to) }), width: stripWidth },
+    {
+      head: words.say('column.strip', { from: short(span.from), to: short(span.to) }), width: stripWidth,
+      drawHead: ({ y }) => drawStripMonths(canvas, span, { x: canvas.frame.left + stripX, y, width: stripWidth - 12 }, (day) => short(day).replace(/[\d\s.]/g, '')),
+    },
     { head: words.say('column.last'), width: 48, align: 'right' },
   ]
-  const stripX = 104 + figures.reduce((sum, { width }) => sum + width, 0) + 6
   const set = figures.map((figure) => setColumn(blocks, figure, words))
   const rows = blocks.map((block, index): TableRow => ({
     hasHead: true,
