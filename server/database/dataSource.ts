@@ -18,6 +18,7 @@ import { AddRounds1764644000000 } from '../../migrations/1764644000000-AddRounds
 import { WholePeople1764641000000 } from '../../migrations/1764641000000-WholePeople.ts'
 import { FindUnreviewed1764646000000 } from '../../migrations/1764646000000-FindUnreviewed.ts'
 import { PruneLetters1764647000000 } from '../../migrations/1764647000000-PruneLetters.ts'
+import { FindHolds1764651000000 } from '../../migrations/1764651000000-FindHolds.ts'
 import { FindSeasonCode1764648000000 } from '../../migrations/1764648000000-FindSeasonCode.ts'
 import { KeepCertificates1764652000000 } from '../../migrations/1764652000000-KeepCertificates.ts'
 import { RememberGrants1764652001000 } from '../../migrations/1764652001000-RememberGrants.ts'
@@ -67,7 +68,10 @@ export function createOwnerSource(url: string): DataSource {
       AddRounds1764644000000,
       FindUnreviewed1764646000000,
       PruneLetters1764647000000,
-      FindSeasonCode1764648000000, KeepCertificates1764652000000, RememberGrants1764652001000,
+      FindSeasonCode1764648000000,
+      FindHolds1764651000000,
+      KeepCertificates1764652000000,
+      RememberGrants1764652001000,
     ],
     migrationsTransactionMode: 'each',
   })

@@ -25,12 +25,12 @@ export async function seedInputs(services: Services, actor: FarmActor): Promise<
   for (const [name, { material, lots }] of Object.entries(DEMO_MATERIALS)) {
     const { material: made } = await createMaterial(services, actor, createMaterialSchema.parse({ id: uuidV7(), ...material }))
     const received: DemoLots['lots'] = []
-    for (const { code, origin, litres, daysAgo, keepsDays, source } of lots) {
+    for (const { code, origin, amount, daysAgo, keepsDays, source } of lots) {
       const receivedAt = new Date(now - daysAgo * DAY_MS)
       const expiresOn = keepsDays === null ? null : civilDateIn(DEMO_ZONE, new Date(now + (keepsDays - daysAgo) * DAY_MS).toISOString())
       const then = { ...services, clock: fixedClock(receivedAt.toISOString()) }
       const { lot } = await receiveLot(then, actor, buildLot({
-        materialId: made.id, code, origin, source, expiresOn, receivedOn: civilDateIn(DEMO_ZONE, receivedAt.toISOString()), quantity: { value: litres, unit: 'L' },
+        materialId: made.id, code, origin, source, expiresOn, receivedOn: civilDateIn(DEMO_ZONE, receivedAt.toISOString()), quantity: { value: amount, unit: made.measuredIn === 'mass' ? 'kg' : 'L' },
       }))
       received.push({ id: lot.id, receivedAt })
     }

@@ -3,6 +3,7 @@ import { Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 /** Projection of a record’s block lines, rewritten with it. */
 @Entity({ name: 'record_lines' })
 @Index('record_lines_block_idx', { synchronize: false })
+@Index('record_lines_held_idx', { synchronize: false })
 @ForeignKey('ApplicationRecord', ['farmId', 'recordId'], ['farmId', 'id'], { name: 'record_lines_record_fkey' })
 @ForeignKey('Block', ['farmId', 'blockId'], ['farmId', 'id'], { name: 'record_lines_block_fkey' })
 export class RecordLine {
@@ -12,4 +13,6 @@ export class RecordLine {
   @Column({ name: 'block_id', type: 'uuid' }) blockId!: string
   @Column({ type: 'integer', nullable: true }) season!: number | null
   @Column({ name: 'sort_at', type: 'timestamptz' }) sortAt!: Date
+  /** Last civil day on which the line of a signed record keeps people out or picking back; null where no label does. */
+  @Column({ name: 'held_to', type: 'date', nullable: true }) heldTo!: string | null
 }

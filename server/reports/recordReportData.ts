@@ -2,6 +2,7 @@ import type { Certificate } from '../../shared/contract/certificate.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
 import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
+import type { GroundPiece } from './parts/planTypes.ts'
 
 /** Something of the ground near a block that the plan shows for orientation. */
 export interface PlanSite {
@@ -27,6 +28,8 @@ export interface RecordReportData {
   /** The record's newest version; another than the one printed where an older one is asked for. */
   newest: { version: number; digest: string }
   neighbours: readonly { code: string; geometry: Boundary }[]
+  /** Ground plan and sites as they stood on the day of the work, for orientation. */
+  ground: readonly GroundPiece[]
   sites: readonly PlanSite[]
   state: 'signed' | 'withdrawn'
   /** All that are written down at the time of printing; what was in force on the days of the work is read off them. */

@@ -7,6 +7,7 @@ import { grantRoutes } from './grantRoutes.ts'
 import { heldPaperRoutes } from './heldPaperRoutes.ts'
 import { groundRoutes } from './groundRoutes.ts'
 import { growingRoutes } from './growingRoutes.ts'
+import { holdRoutes } from './holdRoutes.ts'
 import { inputRoutes } from './inputRoutes.ts'
 import { journalRoutes } from './journalRoutes.ts'
 import { letterRoutes } from './letterRoutes.ts'
@@ -29,6 +30,6 @@ import { startRoutes } from './startRoutes.ts'
 /** Every route under /api; router, OpenAPI, its page and the role × route matrix are made from this list. */
 export const ROUTES: Route[] = [
   ...openRoutes, ...linkRoutes, ...sessionRoutes, ...meRoutes, ...phoneRoutes, ...peopleRoutes, ...paperRoutes,
-  ...farmRoutes, ...certificateRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes, ...heldPaperRoutes,
+  ...farmRoutes, ...certificateRoutes, ...letterRoutes, ...startRoutes, ...sprayerRoutes, ...blockRoutes, ...holdRoutes, ...groundRoutes, ...growingRoutes, ...inputRoutes, ...recordRoutes, ...recordLifeRoutes, ...registerRoutes, ...reportRoutes, ...roundRoutes, ...fileRoutes, ...heldPaperRoutes,
   ...seasonRoutes, ...grantRoutes, ...journalRoutes,
 ]

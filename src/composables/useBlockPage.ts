@@ -1,14 +1,18 @@
 import { computed, type ComputedRef } from 'vue'
 import type { Check } from '../../shared/contract/record.ts'
 import { formatDay } from '../../shared/messages/formatDay.ts'
+import { renderMessage } from '../../shared/messages/renderMessage.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
 import { blockApi } from '../api/blockApi.ts'
-import { blockAllows } from './blockAllows.ts'
+import { blockAllows, type BlockHeld } from './blockAllows.ts'
 import { blockNearby } from './blockNearby.ts'
 import { blockRecordLine, type BlockRecordLine } from './blockRecordLine.ts'
 import { blockWords, type BlockWords } from './blockWords.ts'
+import { heldWords } from './heldWords.ts'
 import { isNotFound } from './isNotFound.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useFarmDay } from './useFarmDay.ts'
+import { useHolds } from './useHolds.ts'
 import { useMapGround } from './useMapGround.ts'
 import { useBlockRead } from './useBlockRead.ts'
 import { useRecords } from './useRecords.ts'
@@ -26,6 +30,8 @@ export interface BlockPage {
   /** Day of the last work in words; empty while there is none. */
   lastOn: ComputedRef<string>
   checks: ComputedRef<Check[]>
+  /** What holds it now in words, and the records whose labels say so; null where nothing that is signed does. */
+  held: ComputedRef<{ lines: string[]; records: { id: string; number: string }[] } | null>
 }
 
 const LAST_RECORDS = 5
@@ -36,6 +42,13 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
   const single = useBlockRead('block', () => (query.data.value !== undefined && listed.value === null ? id() : ''), blockApi.read)
   const block = computed(() => listed.value ?? (single.data.value?.id === id() ? blockWords(reader.value, single.data.value) : null))
   const ground = useMapGround()
+  const holds = useHolds()
+  const { today } = useFarmDay()
+  const heldNow = computed<BlockHeld | null | undefined>(() => {
+    if (holds.lines.value === undefined) return undefined
+    const held = holds.now.value.get(id())
+    return held === undefined ? null : { ...held, zone: zone.value }
+  })
   const records = useRecords(farmId, computed(() => ({ block: id(), limit: LAST_RECORDS })))
   const zone = computed(() => farm.value?.zone ?? 'UTC')
   const rows = computed(() => records.data.value?.pages[0]?.items.slice(0, LAST_RECORDS) ?? [])
@@ -53,6 +66,11 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
       const started = rows.value.find(({ state, startedAt }) => state !== 'withdrawn' && startedAt !== null)?.startedAt
       return started === undefined || started === null ? '' : dayOf(started)
     }),
-    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land, blockNearby(block.value.geometry, ground.value.sites)))),
+    checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land, blockNearby(block.value.geometry, ground.value.sites), heldNow.value))),
+    held: computed(() => {
+      if (!heldNow.value || today.value === null) return null
+      const named = new Map((holds.lines.value ?? []).filter(({ blockId }) => blockId === id()).map(({ recordId, number }) => [recordId, number]))
+      return { lines: heldWords(heldNow.value, zone.value, today.value).map((words) => renderMessage(language.value, words)), records: [...named].map(([recordId, number]) => ({ id: recordId, number })) }
+    }),
   }
 }

@@ -5,8 +5,10 @@ import type { Method } from '../../shared/contract/recordContent.ts'
 import { formatDayShort } from '../../shared/messages/formatDayShort.ts'
 import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
 import { civilDateIn } from '../../shared/time/civilDate.ts'
+import { holdApi } from '../api/holdApi.ts'
 import type { BlockGrowing } from './useBlockGrowing.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
+import { useBlockRead } from './useBlockRead.ts'
 import { useRecords } from './useRecords.ts'
 
 /** Work of a season as a mark on its strip. */
@@ -24,6 +26,7 @@ export interface BlockSeason {
   events: ComputedRef<StripEvent[]>
   jobs: ComputedRef<StripJob[]>
   harvests: ComputedRef<{ id: string; from: string; to: string }[]>
+  holds: ComputedRef<{ id: string; from: string; to: string; words: string }[]>
   /** "9 records". */
   count: ComputedRef<string>
   /** The strip in one sentence. */
@@ -45,6 +48,11 @@ export function useBlockSeason(block: () => { id: string; code: string }, { farm
     const words = [number ?? t('blocks.page.started'), formatDayShort(language.value, on), preparations.join(', ')].filter((part) => part !== '').join(', ')
     return [{ id: recordId, on, method, signed: state === 'signed', words }]
   }))
+  const spanKey = computed(() => (span.value === null ? '' : block().id))
+  const held = useBlockRead('block-holds', spanKey, (ofFarm, blockId) => holdApi.ofBlock(ofFarm, blockId, span.value ?? { from: '', to: '' }))
+  const holds = computed(() => (held.data.value ?? []).map(({ recordId, number, on, heldTo }, index) => ({
+    id: `${recordId} ${index}`, from: on, to: heldTo, words: t('growing.season.held', { number, from: formatDayShort(language.value, on), to: formatDayShort(language.value, heldTo) }),
+  })))
   const inSpan = ({ on }: { on: string }): boolean => span.value !== null && on >= span.value.from && on <= span.value.to
   const events = computed(() => (growing.events.data.value ?? []).filter((event) => event.withdrawn === null && inSpan(event))
     .map(({ id: eventId, kind, on }) => ({ id: eventId, on, words: `${t(`growing.events.kindOf.${kind}`)}, ${formatDayShort(language.value, on)}` })))
@@ -59,11 +67,11 @@ export function useBlockSeason(block: () => { id: string; code: string }, { farm
   })))
   const count = computed(() => t('growing.season.records', { count: works.value.length }, works.value.length))
   return {
-    records, season, span, works, events, harvests, jobs, count,
+    records, season, span, works, events, harvests, holds, jobs, count,
     spoken: computed(() => [t('growing.season.spoken', {
       season: season.value ?? '', code: block().code, records: count.value,
       events: t('growing.season.events', { count: events.value.length }, events.value.length),
       harvests: t('growing.season.harvests', { count: harvests.value.length }, harvests.value.length),
-    }), ...jobs.value.map(({ words }) => words)].join('; ')),
+    }), ...holds.value.map(({ words }) => words), ...jobs.value.map(({ words }) => words)].join('; ')),
   }
 }

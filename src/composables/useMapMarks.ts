@@ -1,16 +1,21 @@
 import { computed, shallowRef, watch, type ComputedRef } from 'vue'
 import type { Job } from '../../shared/contract/job.ts'
+import type { Held } from '../../shared/season/holdsNow.ts'
 import type { Boundary } from '../../shared/geo/geometryTypes.ts'
 import { useSession } from '../stores/session.ts'
 import { recentWork, type RecentWork } from './recentWork.ts'
 import type { MapBlock } from './mapTypes.ts'
+import { keepSame } from './keepSame.ts'
 import { useClock } from './useClock.ts'
+import { useHolds } from './useHolds.ts'
 import { useJobsWaiting } from './useJobsWaiting.ts'
 import { useRecords } from './useRecords.ts'
 
-/** What the map draws on the blocks: the work of the last days, jobs that wait, and a line inside the outline of those that are not certified. */
+/** What the map draws on the blocks: the work of the last days, what holds them, jobs that wait, and a line inside the outline of those that are not certified. */
 export interface MapMarks {
   work: ReadonlyMap<string, RecentWork>
+  /** Blocks that a label keeps people out of, or picking back from, now. */
+  holds: ReadonlyMap<string, Held>
   /** By block: late where one of its jobs is. */
   jobs: ReadonlyMap<string, 'due' | 'late'>
   inner: ReadonlyMap<string, { line: Boundary; status: 'transition' | 'uncertified' }>
@@ -27,6 +32,7 @@ export function useMapMarks(blocks: () => readonly MapBlock[], isWanted: () => b
   const { time } = useClock()
   const records = useRecords(() => (isWanted() ? session.farmId : ''), { limit: MOST_RECORDS })
   const waiting = useJobsWaiting(isWanted)
+  const holds = useHolds(isWanted)
   const inner = shallowRef<MapMarks['inner']>(new Map())
   const marked = computed(() => blocks().flatMap((block) => (block.land?.status === 'transition' || block.land?.status === 'uncertified' ? [{ ...block, status: block.land.status }] : [])))
 
@@ -43,9 +49,9 @@ export function useMapMarks(blocks: () => readonly MapBlock[], isWanted: () => b
     }))
   }, { immediate: true })
 
-  const work = computed(() => recentWork(records.data.value?.pages[0]?.items ?? [], time.value))
+  const work = computed<MapMarks['work']>((before) => keepSame(before, recentWork(records.data.value?.pages[0]?.items ?? [], time.value)))
   const jobs = computed(() => jobsByBlock(waiting.data.value ?? []))
-  return computed(() => ({ work: work.value, jobs: jobs.value, inner: inner.value }))
+  return computed(() => ({ work: work.value, holds: holds.now.value, jobs: jobs.value, inner: inner.value }))
 }
 
 /** How the most urgent job of each block stands. */
@@ -54,4 +60,4 @@ export function jobsByBlock(waiting: readonly Pick<Job, 'blockId' | 'state'>[]):
   return new Map(waiting.map(({ blockId }) => [blockId, late.has(blockId) ? 'late' : 'due']))
 }
 
-export const NO_MARKS: MapMarks = { work: new Map(), jobs: new Map(), inner: new Map() }
+export const NO_MARKS: MapMarks = { work: new Map(), holds: new Map(), jobs: new Map(), inner: new Map() }

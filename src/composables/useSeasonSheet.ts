@@ -4,9 +4,8 @@ import type { Block } from '../../shared/contract/block.ts'
 import type { Job, SeasonSheet } from '../../shared/contract/job.ts'
 import type { SeasonPlan } from '../../shared/contract/seasonPlan.ts'
 import { openStateOn } from '../../shared/rounds/openStateOn.ts'
+import { lastHeldDay } from '../../shared/season/lastHeldDay.ts'
 import { seasonSpan, type SeasonSpan } from '../../shared/season/seasonStrip.ts'
-import { addDays } from '../../shared/time/calendar.ts'
-import { civilDateIn } from '../../shared/time/civilDate.ts'
 import type { SheetMarks } from '../../shared/season/sheetPaths.ts'
 import type { Command } from '../api/commandTypes.ts'
 import { roundApi } from '../api/roundApi.ts'
@@ -141,8 +140,7 @@ export function asKept(job: Job, kept: KeptDecision | undefined, { today, by }: 
 const kindOf = (block: Block | undefined): string => /^\p{L}*/u.exec(block?.code ?? '')?.[0] ?? ''
 
 /** Last civil day on which the label of what was put on keeps people out or picking back; null where it does neither beyond the day itself. */
-function heldTo({ on, pickFrom, reEntryUntil }: SeasonSheet['works'][number], zone: string): string | null {
-  const days = [...(pickFrom === null ? [] : [addDays(pickFrom, -1)]), ...(reEntryUntil === null ? [] : [civilDateIn(zone, reEntryUntil)])].sort()
-  const last = days.at(-1)
-  return last === undefined || last <= on ? null : last
+function heldTo(work: SeasonSheet['works'][number], zone: string): string | null {
+  const last = lastHeldDay(work, zone)
+  return last === null || last <= work.on ? null : last
 }

@@ -2,7 +2,7 @@ import type { CommandKind } from '../api/commandTypes.ts'
 import { queryClient } from '../plugins/queryClient.ts'
 
 /** What follows from signed records and from plans. */
-const ROUNDS = ['season-sheet', 'jobs-waiting', 'block-jobs']
+const ROUNDS = ['season-sheet', 'jobs-waiting', 'block-jobs', 'holds', 'block-holds']
 
 /** Which reads a command makes old, by the first part of their key. */
 const STALE: Record<CommandKind, string[]> = {

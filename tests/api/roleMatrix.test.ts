@@ -199,7 +199,7 @@ function addressOf(route: Route, world: World, things: SeededThings | null, acto
   const found = ids.find(([path]) => route.path.includes(path))
   const unknown = route.path.includes('/jobs/') ? `${UNKNOWN}.${UNKNOWN}.1` : UNKNOWN
   const id = things === null ? unknown : found === undefined ? world.recordId : found[1] ?? UNKNOWN
-  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id).replace(':season', '2026')}${route.path.endsWith('/season-sheet') ? '?from=2026-06-01&to=2026-06-30' : ''}`
+  return `/api${route.path.replace(':farmId', world.farm.id).replace(':id', id).replace(':season', '2026')}${/season-sheet$|:id\/holds$/.test(route.path) ? '?from=2026-06-01&to=2026-06-30' : ''}`
 }
 
 let place = 10

@@ -2,6 +2,7 @@ import { SITE_MARKS } from '../../../shared/geo/siteMarks.ts'
 import { formatHectares, formatNumber } from '../../../shared/units/formatQuantity.ts'
 import type { FarmMapData } from '../farmMapReportData.ts'
 import { addElement, type Canvas, type Element } from '../parts/canvas.ts'
+import { drawGround } from '../parts/drawGround.ts'
 import { nameSurroundings, writeAt, writeBlock } from '../parts/planLabels.ts'
 import { fitPlan, type PlanBox } from '../parts/planScale.ts'
 import { toPageLines, toPageRings, tracePath } from '../parts/planShapes.ts'
@@ -10,7 +11,6 @@ import { drawScaleFoot, SCALE_FOOT_HEIGHT } from '../parts/scaleFoot.ts'
 import { measureText } from '../parts/setText.ts'
 import { ELDER, STYLES } from '../parts/styles.ts'
 import type { Say } from '../register/say.ts'
-import { drawGround } from './drawGround.ts'
 import { drawMapKey } from './drawMapKey.ts'
 import { nameMarks } from './nameMarks.ts'
 import type { PlanGround } from './planGround.ts'
@@ -32,7 +32,7 @@ export function drawFarmPlan(canvas: Canvas, parent: Element, { data, ground, fr
   addElement(canvas, parent, 'Figure', () => {
     const { doc } = canvas
     doc.save().rect(frame.x, frame.y, frame.width, frame.height).clip()
-    drawGround(drawing, data)
+    drawGround(drawing, data.ground)
     drawBlocks(drawing, data)
     drawSites(drawing, data, ground)
     nameAll(drawing, data, say)

@@ -4,7 +4,7 @@ import type { PlanBox } from '../parts/planScale.ts'
 import { drawText, measureText } from '../parts/setText.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { Say } from '../register/say.ts'
-import { BUILDING, GROUND_STROKES, HEDGE } from './drawGround.ts'
+import { BUILDING, GROUND_STROKES, HEDGE } from '../parts/drawGround.ts'
 
 const WORDS: TextStyle = { ...STYLES.small, leading: 10 }
 const SIGN = 16

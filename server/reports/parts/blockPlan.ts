@@ -4,10 +4,11 @@ import { toPlan } from '../../../shared/geo/projectToPlan.ts'
 import type { PlanSite } from '../recordReportData.ts'
 import { addElement, type Canvas, type Element } from './canvas.ts'
 import { fillTreated, type Ground } from './fillTreated.ts'
+import { drawGround } from './drawGround.ts'
 import { nameSurroundings, writeBlock } from './planLabels.ts'
 import { fitPlan, type PlanBox } from './planScale.ts'
 import { toPageLines, toPageRings, tracePath } from './planShapes.ts'
-import type { BlockPlan, Drawing } from './planTypes.ts'
+import type { BlockPlan, Drawing, GroundPiece } from './planTypes.ts'
 import { drawScaleFoot, SCALE_FOOT_HEIGHT } from './scaleFoot.ts'
 import { ELDER } from './styles.ts'
 
@@ -24,7 +25,7 @@ export function drawBlockPlan(canvas: Canvas, parent: Element, { plan, frame }: 
     const { doc } = canvas
     doc.save().rect(frame.x, frame.y, frame.width, frame.height).clip()
     drawSurroundings(drawing, plan)
-    nameSurroundings(drawing, plan)
+    nameSurroundings(drawing, { neighbours: plan.neighbours, sites: [...plan.ground.flatMap(named), ...plan.sites] })
     drawBlocks(drawing, plan)
     for (const block of plan.blocks) writeBlock(drawing, block, { isAlone: plan.blocks.length === 1 })
     doc.restore()
@@ -35,6 +36,8 @@ export function drawBlockPlan(canvas: Canvas, parent: Element, { plan, frame }: 
   return view.denominator
 }
 
+const named = ({ kind, name, geometry }: GroundPiece): PlanSite[] => (name === null ? [] : [{ kind, name, geometry }])
+
 function joinBoundaries(boundaries: readonly Boundary[]): Boundary {
   return {
     type: 'MultiPolygon',
@@ -42,9 +45,12 @@ function joinBoundaries(boundaries: readonly Boundary[]): Boundary {
   }
 }
 
-function drawSurroundings(drawing: Drawing, { sites, neighbours }: BlockPlan): void {
+function drawSurroundings(drawing: Drawing, { ground, sites, neighbours }: BlockPlan): void {
   const { doc } = drawing.canvas
-  for (const { geometry } of sites) drawSite(drawing, geometry)
+  drawGround(drawing, ground)
+  // What is drawn as ground is not drawn once more as a site.
+  const drawn = new Set(ground.map(({ name }) => name))
+  for (const { name, geometry } of sites) if (geometry.type === 'Point' || !drawn.has(name)) drawSite(drawing, geometry)
   doc.lineWidth(0.5)
   for (const { geometry } of neighbours) {
     tracePath(drawing.canvas, toPageRings(geometry, drawing), { closes: true })

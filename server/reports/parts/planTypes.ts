@@ -1,5 +1,6 @@
 import type { Method } from '../../../shared/contract/recordContent.ts'
-import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
+import type { GroundKind } from '../../../shared/contract/ground.ts'
+import type { Boundary, PlaceGeometry, Position } from '../../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
 import type { PlanSite } from '../recordReportData.ts'
 import type { Canvas } from './canvas.ts'
@@ -14,9 +15,13 @@ export interface PlanBlock {
   treated: 'whole' | readonly Boundary[]
 }
 
+/** A piece of the ground plan; without a width a line is drawn as thin as it can be seen. */
+export interface GroundPiece { kind: GroundKind; name: string | null; geometry: PlaceGeometry; widthM: number | null }
+
 export interface BlockPlan {
   blocks: readonly PlanBlock[]
   neighbours: readonly { code: string; geometry: Boundary }[]
+  ground: readonly GroundPiece[]
   sites: readonly PlanSite[]
   method: Method
   language: Language

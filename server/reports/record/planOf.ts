@@ -6,7 +6,7 @@ import { isCounted, partWords } from './partWords.ts'
 import type { ReportWords } from './reportWords.ts'
 
 /** The plan of the treated blocks, with the words around it. Several lines on one block are one block of the plan. */
-export function planOf({ signed, neighbours, sites, language }: RecordReportData, words: ReportWords): BlockPlan {
+export function planOf({ signed, neighbours, ground, sites, language }: RecordReportData, words: ReportWords): BlockPlan {
   const { say } = words
   const lines = pairBlocks(signed)
   const ids = [...new Set(lines.map(({ block }) => block.id))]
@@ -17,7 +17,7 @@ export function planOf({ signed, neighbours, sites, language }: RecordReportData
   }))
   return {
     blocks: ids.map((id) => planBlock(lines.filter(({ block }) => block.id === id), words)),
-    neighbours, sites, method: signed.content.method, language,
+    neighbours, ground, sites, method: signed.content.method, language,
     words: {
       north: say('plan.north'),
       scale: (denominator) => say('plan.scale', { denominator: scaleOf(denominator) }),

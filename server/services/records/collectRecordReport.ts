@@ -14,6 +14,7 @@ import { readCertificates } from '../farms/certificates.ts'
 import { publicAddress } from '../publicAddress.ts'
 import type { Services } from '../services.ts'
 import { readSigned } from './readSigned.ts'
+import { readSurroundings } from './readSurroundings.ts'
 
 /** Blocks whose middle lies further away are not drawn as neighbours. */
 const NEIGHBOUR_KM = 1
@@ -42,7 +43,7 @@ export async function collectRecordReport(services: Services, actor: FarmActor, 
       ...(await namePeople(manager, signed)),
       newest: { version: newest.version, digest: newest.digest },
       neighbours: await findNeighbours(manager, signed),
-      sites: [],
+      ...(await readSurroundings(manager, signed)),
       state: record.state,
       certificates: await readCertificates(manager, actor),
       printedAt: services.clock.now().toISOString(),

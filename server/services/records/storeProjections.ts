@@ -1,4 +1,5 @@
 import type { EntityManager } from 'typeorm'
+import { lastHeldDay } from '../../../shared/season/lastHeldDay.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { seasonOf } from '../../../shared/time/seasonOf.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
@@ -18,14 +19,19 @@ export async function storeProjections(manager: EntityManager, record: Applicati
   const key = { farmId: record.farmId, recordId: record.id }
   if (anew) await dropProjections(manager, key)
   const { season, sortAt, content, computed } = record
-  await manager.insert(RecordLine, content.lines.map(({ blockId }, position) => ({ ...key, position, blockId, season, sortAt })))
+  const { blockNames, workSeason, zone } = await readGround(manager, record)
+  // What is taken back, or not signed yet, holds nothing.
+  const heldTo = (position: number): string | null => {
+    const { reEntryUntil, pickFrom } = computed.lines[position] ?? {}
+    return record.state === 'signed' ? lastHeldDay({ reEntryUntil: reEntryUntil ?? null, pickFrom: pickFrom ?? null }, zone) : null
+  }
+  await manager.insert(RecordLine, content.lines.map(({ blockId }, position) => ({ ...key, position, blockId, season, sortAt, heldTo: heldTo(position) })))
   if (content.components.length > 0) {
     await manager.insert(RecordComponent, content.components.map(({ materialId, lotId }, position) => {
       const amount = computed.components[position]?.amount ?? null
       return { ...key, position, materialId, lotId, amount: amount?.value ?? null, unit: amount?.unit ?? null, season }
     }))
   }
-  const { blockNames, workSeason } = await readGround(manager, record)
   await manager.insert(RegisterEntry, buildRegisterEntry(record, workSeason))
   await manager.query(
     `INSERT INTO record_terms (farm_id, record_id, term, season, work_season, sort_at)
@@ -39,14 +45,14 @@ export async function dropProjections(manager: EntityManager, key: { farmId: str
   for (const projection of [RecordLine, RecordComponent, RegisterEntry, RecordTerm]) await manager.delete(projection, key)
 }
 
-async function readGround(manager: EntityManager, { farmId, season, sortAt, content }: ApplicationRecord): Promise<{ blockNames: string[]; workSeason: number }> {
+async function readGround(manager: EntityManager, { farmId, season, sortAt, content }: ApplicationRecord): Promise<{ blockNames: string[]; workSeason: number; zone: string }> {
   const [ground]: [{ zone: string; season_start: string; names: string[] | null }] = await manager.query(
     `SELECT f.zone, f.season_start, (SELECT array_agg(b.name) FROM blocks b WHERE b.farm_id = f.id AND b.id = ANY ($2)) AS names
      FROM farms f WHERE f.id = $1`,
     [farmId, content.lines.map(({ blockId }) => blockId)],
   )
   return {
-    blockNames: ground.names ?? [],
+    blockNames: ground.names ?? [], zone: ground.zone,
     workSeason: season ?? seasonOf(civilDateIn(ground.zone, sortAt.toISOString()), ground.season_start),
   }
 }

@@ -6,6 +6,7 @@ export const growing = {
     title: 'Season {season}',
     records: 'no record | {count} record | {count} records',
     spoken: 'Season {season} of {code}: {records}, {events}, {harvests}.',
+    held: 'held {from} to {to}, {number}',
     events: 'nothing else done | {count} other thing done | {count} other things done',
     harvests: 'no harvest planned | {count} harvest planned | {count} harvests planned',
     pick: 'pick',

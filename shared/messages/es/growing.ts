@@ -8,6 +8,7 @@ export const growing: Screens['growing'] = {
     title: 'Campaña {season}',
     records: 'ningún registro | {count} registro | {count} registros',
     spoken: 'Campaña {season} de {code}: {records}, {events}, {harvests}.',
+    held: 'en espera del {from} al {to}, {number}',
     events: 'nada más hecho | {count} labor más | {count} labores más',
     harvests: 'ninguna cosecha prevista | {count} cosecha prevista | {count} cosechas previstas',
     pick: 'cosecha',

@@ -2,6 +2,7 @@ import { layerGroup, polygon, type LatLngTuple, type LayerGroup, type Map as Lea
 import { handleMarker } from './handleMarker.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
+import { hatchesOf } from './hatches.ts'
 import { createManyLayer } from './manyLayer.ts'
 import type { MapBlock } from '../../composables/mapTypes.ts'
 import type { MapMarks } from '../../composables/useMapMarks.ts'
@@ -28,7 +29,7 @@ export function createBlockLayer(map: LeafletMap, renderer: Renderer, onChoose: 
     show(blocks, chosenId, marks) {
       group.clearLayers()
       if (areMany(blocks)) {
-        many.show(blocks)
+        many.show(blocks, marks)
         for (const block of blocks) if (block.id === chosenId) addBlock(group, renderer, { block, isChosen: true, marks }).on('click', () => onChoose(block.id))
         return
       }
@@ -55,12 +56,11 @@ function addBlock(group: LayerGroup, renderer: Renderer, { block, isChosen, mark
   return line
 }
 
-/** The hatches of the last days' work over the ground, and the line inside an outline that is not certified. */
+/** The hatches of the last days' work and of holds over the ground, and the line inside an outline that is not certified. */
 function addMarks(group: LayerGroup, renderer: Renderer, { block, rings, marks }: { block: MapBlock; rings: LatLngTuple[][][]; marks: MapMarks }): void {
   const common = { renderer, smoothFactor: 0.2, interactive: false }
-  const work = marks.work.get(block.id)
-  for (const kind of ['drench', 'foliar'] as const) {
-    if (work?.[kind] === true) group.addLayer(polygon(rings, { ...common, className: 'map-work', stroke: false, fillColor: `url(#map-${kind})`, fillOpacity: 1 }))
+  for (const hatch of hatchesOf(block.id, marks)) {
+    group.addLayer(polygon(rings, { ...common, className: 'map-hatch', stroke: false, fillColor: `url(#map-${hatch})`, fillOpacity: 1 }))
   }
   const inner = marks.inner.get(block.id)
   if (inner === undefined) return

@@ -1,12 +1,14 @@
-import { latLngBounds, map as leafletMap, svg, tileLayer, type Map as LeafletMap } from 'leaflet'
+import { latLngBounds, map as leafletMap, svg, tileLayer, type LatLngBounds, type LatLngExpression, type Map as LeafletMap } from 'leaflet'
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
 import { createBlockLayer } from './blockLayer.ts'
 import { createDraftLayer } from './draftLayer.ts'
 import { createEditLayer, type EditEvents } from './editLayer.ts'
 import { createGroundView } from './groundView.ts'
 import { createLabelLayer } from './labelLayer.ts'
-import { toLatLng } from './leafletGeometry.ts'
+import { pixelRings, toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
+import type { PixelBox } from './pixelRing.ts'
+import { roomBeside, type Fitting, type MapRoom } from './roomBeside.ts'
 import type { MapMarks } from '../../composables/useMapMarks.ts'
 import type { MapGround } from '../../composables/mapGround.ts'
 import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
@@ -16,12 +18,11 @@ export interface FarmMapEvents extends EditEvents {
   /** A tap or click on the ground. */
   tapped(position: Position): void
   chosen(blockId: string): void
+  /** What lies over the map and is to cover no block, in the map's pixels; null where nothing does. */
+  covered(): PixelBox | null
   /** The view has moved or changed scale; `byHand` unless the program moved it itself. */
   moved(view: MapView, byHand: boolean): void
 }
-
-/** Pixels left free at each edge. */
-export interface MapRoom { top: number; right: number; bottom: number; left: number }
 
 /** The map of a farm: with its layers, the only modules that know Leaflet. */
 export interface FarmMap {
@@ -48,6 +49,7 @@ export interface FarmMap {
 }
 
 const WORLD: MapView = { centre: [0, 20], zoom: 2 }
+const ZOOM_SNAP = 0.1
 const MOST_ZOOM = 22
 const MOST_FIT_ZOOM = 19
 const EDGE_PX: [number, number] = [56, 56]
@@ -56,12 +58,12 @@ const EDGE_PX: [number, number] = [56, 56]
 export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap {
   let ownMove = false
   const map = makeMap(host)
-  const ground = createGroundView(map, () => metresPerPixel(map))
   const renderer = svg({ padding: 0.5 })
   const blocks = createBlockLayer(map, renderer, events.chosen)
   const draft = createDraftLayer(map)
   const edit = createEditLayer(map, events)
   const labels = createLabelLayer(map)
+  const ground = createGroundView(map, { metresPerPixel: () => metresPerPixel(map), taken: () => labels.taken(), covered: events.covered })
   let shown: { blocks: readonly MapBlock[]; chosenId: string | null; jobs: MapMarks['jobs'] } = { blocks: [], chosenId: null, jobs: new Map() }
   let tiles: ReturnType<typeof tileLayer> | null = null
 
@@ -102,7 +104,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
       tiles = imagery === null ? null : tileLayer(imagery.url, { maxZoom: MOST_ZOOM, maxNativeZoom: imagery.maxZoom }).addTo(map)
     },
     setView: ({ centre, zoom }) => move(() => map.setView(toLatLng(centre), zoom, { animate: false })),
-    fit: (positions, room) => move(() => fitTo(map, positions, room)),
+    fit: (positions, room) => move(() => fitTo(map, positions, { room, blocks: shown.blocks, covered: events.covered() })),
     bringIntoView: (position) => move(() => map.panInside(toLatLng(position), { padding: EDGE_PX, animate: false })),
     pan: (dx, dy) => move(() => map.panBy([dx, dy], { animate: false })),
     view: () => viewOf(map),
@@ -118,14 +120,25 @@ function makeMap(host: HTMLElement): LeafletMap {
     attributionControl: false, zoomControl: false, keyboard: false, fadeAnimation: false, boxZoom: false,
     zoomAnimation: !window.matchMedia('(prefers-reduced-motion: reduce)').matches,
     // Its component watches the size. Leaflet's own watch ends a moment after a map that is gone, and errs.
-    trackResize: false, zoomSnap: 0.1, minZoom: 2, maxZoom: MOST_ZOOM, maxBounds: [[-86, -200], [86, 200]],
+    trackResize: false, zoomSnap: ZOOM_SNAP, minZoom: 2, maxZoom: MOST_ZOOM, maxBounds: [[-86, -200], [86, 200]],
   }).setView(toLatLng(WORLD.centre), WORLD.zoom)
 }
 
-function fitTo(map: LeafletMap, positions: readonly Position[], { top, right, bottom, left }: MapRoom): void {
+function fitTo(map: LeafletMap, positions: readonly Position[], { room, blocks, covered }: { room: MapRoom; blocks: readonly MapBlock[]; covered: PixelBox | null }): void {
   if (positions.length === 0) return
   const bounds = latLngBounds(positions.map(toLatLng))
+  const { top, right, bottom, left } = covered === null ? room : roomBeside(fittingOf(map, bounds, blocks), room, covered)
   map.fitBounds(bounds, { paddingTopLeft: [left, top], paddingBottomRight: [right, bottom], maxZoom: MOST_FIT_ZOOM, animate: false })
+}
+
+function fittingOf(map: LeafletMap, bounds: LatLngBounds, blocks: readonly MapBlock[]): Fitting {
+  const [low, high] = [map.project(bounds.getSouthWest(), 0), map.project(bounds.getNorthEast(), 0)]
+  const { x, y } = map.getSize()
+  const world = { project: (at: LatLngExpression) => map.project(at, 0) }
+  return {
+    polygons: blocks.flatMap(({ geometry }) => pixelRings(world, geometry)), bounds: { minX: low.x, maxX: high.x, minY: high.y, maxY: low.y },
+    size: [x, y], zoomSnap: ZOOM_SNAP, mostZoom: MOST_FIT_ZOOM,
+  }
 }
 
 function viewOf(map: LeafletMap): MapView {

@@ -1,4 +1,5 @@
 import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Renderer } from 'leaflet'
+import { cornerNumbers, numbered } from './cornerNumbers.ts'
 import { handleMarker } from './handleMarker.ts'
 import { toLatLng } from './leafletGeometry.ts'
 import type { MapDraft } from '../../composables/mapTypes.ts'
@@ -19,9 +20,19 @@ export function createDraftLayer(map: LeafletMap): DraftLayer {
   map.createPane(PANE).style.zIndex = PANE_LAYER
   const renderer = svg({ padding: 0.5, pane: PANE })
   const group = layerGroup().addTo(map)
+  const numbers = layerGroup().addTo(map)
+  let shown: MapDraft | null = null
+  function drawNumbers(): void {
+    numbers.clearLayers()
+    if (shown === null || shown.points.length > MOST_HANDLES) return
+    for (const each of cornerNumbers(map, numbered(shown.points, 1))) numbers.addLayer(each)
+  }
+  map.on('zoomend', drawNumbers)
   return {
     show(draft) {
+      shown = draft
       group.clearLayers()
+      drawNumbers()
       if (draft === null) return
       drawOutline(group, renderer, draft)
       drawCorners(group, draft)

@@ -1,7 +1,8 @@
-import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Marker } from 'leaflet'
+import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngBounds, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Marker } from 'leaflet'
 import type { CornerAt } from '../../../shared/geo/boundaryCorners.ts'
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
 import type { MapEdit } from '../../composables/mapTypes.ts'
+import { cornerNumbers, numbered, type NumberedCorner } from './cornerNumbers.ts'
 import { crossMarker } from './draftLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'
 
@@ -32,16 +33,15 @@ export function createEditLayer(map: LeafletMap, events: EditEvents): EditLayer 
   const renderer = svg({ padding: 0.5, pane: PANE })
   const lines = layerGroup().addTo(map)
   const handles = layerGroup().addTo(map)
+  const numbers = layerGroup().addTo(map)
   let shown: MapEdit | null = null
   let isDragging = false
 
   function drawHandles(): void {
     handles.clearLayers()
+    drawNumbers(numbers, map, shown)
     if (shown === null || !shown.handles) return events.crowded(0)
-    const bounds = map.getBounds().pad(0.1)
-    const corners = ringsOf(shown).flatMap(({ part, ring, points }) => points.map((position, corner) => ({
-      at: { part, ring, corner }, position, next: points[(corner + 1) % points.length] ?? position,
-    }))).filter(({ position }) => bounds.contains(toLatLng(position)))
+    const corners = cornersIn(shown, map.getBounds().pad(0.1))
     events.crowded(corners.length > MOST_HANDLES ? corners.length : 0)
     if (corners.length > MOST_HANDLES) return
     for (const { at, position, next } of corners) {
@@ -90,9 +90,34 @@ export function createEditLayer(map: LeafletMap, events: EditEvents): EditLayer 
       shown = edit
       lines.clearLayers()
       if (edit !== null) drawLines(lines, edit, renderer)
-      if (!isDragging) drawHandles()
+      if (isDragging) drawNumbers(numbers, map, shown)
+      else drawHandles()
     },
   }
+}
+
+/** Corners in sight, each with the one after it. */
+function cornersIn(edit: MapEdit, sight: LatLngBounds): { at: CornerAt; position: Position; next: Position }[] {
+  return ringsOf(edit).flatMap(({ part, ring, points }) => points.map((position, corner) => ({
+    at: { part, ring, corner }, position, next: points[(corner + 1) % points.length] ?? position,
+  }))).filter(({ position }) => sight.contains(toLatLng(position)))
+}
+
+/** Corners in sight with the numbers of the list, counted through all rings; where they are too many, the chosen one alone. */
+function numbersOf(edit: MapEdit, sight: LatLngBounds): NumberedCorner[] {
+  const { chosen } = edit
+  let first = 1
+  const corners = ringsOf(edit).flatMap(({ part, ring, points }) => {
+    const found = numbered(points, first).map((corner, index) => ({ ...corner, isChosen: chosen?.part === part && chosen.ring === ring && chosen.corner === index }))
+    first += points.length
+    return found
+  }).filter(({ position }) => sight.contains(toLatLng(position)))
+  return corners.length > MOST_HANDLES ? corners.filter(({ isChosen }) => isChosen) : corners
+}
+
+function drawNumbers(group: LayerGroup, map: LeafletMap, edit: MapEdit | null): void {
+  group.clearLayers()
+  for (const each of edit === null ? [] : cornerNumbers(map, numbersOf(edit, map.getBounds().pad(0.1)))) group.addLayer(each)
 }
 
 const ringsOf = ({ parts }: MapEdit) => parts.flatMap((rings, part) => rings.map((points, ring) => ({ part, ring, points })))

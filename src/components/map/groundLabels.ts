@@ -22,6 +22,8 @@ interface Shape { rings: readonly (readonly Position[])[]; box: PixelBox }
 const LETTER = 6.6
 const MARK_GAP = 11
 const LINE = 15
+/** A name may stand so much farther from its mark where another is in the way. */
+const FARTHER = 9
 /** The neatline lies over the map's edge. */
 const FRAME_PX = 8
 /** Where along a name it is asked what lies under it. */
@@ -31,13 +33,26 @@ const BROOK_M = 7
 /** From the edge of a line to the middle of the name beside it. */
 const BESIDE = 10
 
-export function createGroundLabels(map: LeafletMap, metresPerPixel: () => number): GroundLabels {
+/** What names have to keep clear of, and the scale. */
+export interface OverGround {
+  metresPerPixel(): number
+  /** Labels of blocks, in the pixels of the whole map at this zoom. */
+  taken(): readonly PixelBox[]
+  /** What lies over the map, in pixels of the part that is seen. */
+  covered(): PixelBox | null
+}
+
+export function createGroundLabels(map: LeafletMap, over: OverGround): GroundLabels {
   const group = layerGroup().addTo(map)
   let names: Named[] = []
   let shapes: Shape[] = []
   function replace(): void {
     group.clearLayers()
-    for (const named of names) addName({ map, group, shapes, mPerPx: metresPerPixel() }, named)
+    const { min } = map.getPixelBounds()
+    if (min === undefined) return
+    const covered = over.covered()
+    const taken = [...over.taken().map((box) => ({ minX: box.minX - min.x, maxX: box.maxX - min.x, minY: box.minY - min.y, maxY: box.maxY - min.y })), ...(covered === null ? [] : [covered])]
+    for (const named of names) addName({ map, group, shapes, taken, covered, mPerPx: over.metresPerPixel() }, named)
   }
   return {
     show(ground, blocks) {
@@ -67,7 +82,15 @@ function namesOf({ features, sites }: MapGround): Named[] {
   return [...found.values()]
 }
 
-interface Place { map: LeafletMap; group: LayerGroup; shapes: readonly Shape[]; mPerPx: number }
+interface Place {
+  map: LeafletMap
+  group: LayerGroup
+  shapes: readonly Shape[]
+  mPerPx: number
+  /** Ground in pixels that something to be read covers already; each name adds its own. */
+  taken: PixelBox[]
+  covered: PixelBox | null
+}
 
 function addName(place: Place, named: Named): void {
   const width = named.name.length * LETTER
@@ -77,47 +100,75 @@ function addName(place: Place, named: Named): void {
   }
   const [first] = named.geometries
   if (first?.type === 'Point') {
-    addLabel(place, named, { at: besideMark(place, toPixel(first.coordinates), width), turn: 0 })
+    const mark = toPixel(first.coordinates)
+    const at = isSeen(place, mark) ? besideMark(place, mark, width) : null
+    if (at !== null) addLabel(place, named, { at, turn: 0 })
     return
   }
   const outlines = named.geometries.filter((geometry) => geometry.type === 'Polygon')
   for (const { coordinates } of outlines) {
     const { minX, minY, maxX, maxY } = boxOf((coordinates[0] ?? []).map(toPixel))
-    if (maxX - minX < width + 4 || maxY - minY < BESIDE) continue
-    addLabel(place, named, { at: [(minX + maxX) / 2, (minY + maxY) / 2], turn: 0 })
+    const at: Pixel = [(minX + maxX) / 2, (minY + maxY) / 2]
+    if (maxX - minX < width + 4 || maxY - minY < BESIDE || !isFree(place, boxAt(at, width))) continue
+    addLabel(place, named, { at, turn: 0 })
     return
   }
   const lines = named.geometries.flatMap((geometry) => (geometry.type === 'LineString' ? [geometry.coordinates.map(toPixel)] : []))
-  const { x: across, y: down } = place.map.getSize()
-  const found = findLineLabel(lines, { x: 0, y: 0, width: across, height: down }, width)
-  if (found !== null) addLabel(place, named, besideLine(place, found, { width, widthPx: named.widthM / place.mPerPx }))
+  for (const frame of framesOf(place)) {
+    const found = findLineLabel(lines, frame, width)
+    const label = found === null ? null : besideLine(place, found, { width, widthPx: named.widthM / place.mPerPx })
+    if (label === null) continue
+    addLabel(place, named, label)
+    return
+  }
 }
 
-/** At the right of a mark, or left, over or under it: where the fewest blocks and the map's edge are least in the way. */
-function besideMark(place: Place, [x, y]: Pixel, width: number): Pixel {
+/** The whole map, then what is left of it over and beside what covers it. */
+function framesOf({ map, covered }: Place): { x: number; y: number; width: number; height: number }[] {
+  const { x: width, y: height } = map.getSize()
+  const whole = { x: 0, y: 0, width, height }
+  return covered === null ? [whole] : [whole, { ...whole, height: covered.minY }, { ...whole, width: covered.minX }]
+}
+
+const isSeen = ({ map }: Place, [x, y]: Pixel): boolean => x >= 0 && y >= 0 && x <= map.getSize().x && y <= map.getSize().y
+const boxAt = ([x, y]: Pixel, width: number): PixelBox => ({ minX: x - width / 2, maxX: x + width / 2, minY: y - LINE / 2, maxY: y + LINE / 2 })
+const isFree = ({ taken }: Place, box: PixelBox): boolean => !taken.some((other) => box.minX < other.maxX && other.minX < box.maxX && box.minY < other.maxY && other.minY < box.maxY)
+/** Small boxes in a row under a turned name. */
+function boxesAlong(along: readonly Pixel[], width: number): PixelBox[] {
+  return along.map((point) => boxAt(point, Math.max(LINE, width / along.length / 2)))
+}
+
+/** At the right of a mark, or left, over or under it: where the fewest blocks are in the way; null where other words or the map's edge are in each. */
+function besideMark(place: Place, [x, y]: Pixel, width: number): Pixel | null {
   const aside = MARK_GAP + width / 2
   const size = place.map.getSize()
   const within = Math.max(FRAME_PX + width / 2, Math.min(size.x - FRAME_PX - width / 2, x))
-  const spots: Pixel[] = [[x + aside, y], [x - aside, y], [within, y - MARK_GAP - LINE / 2], [within, y + MARK_GAP + LINE / 2]]
-  const inTheWay = ([midX, midY]: Pixel): number => {
-    const isOut = midX - width / 2 < FRAME_PX || midX + width / 2 > size.x - FRAME_PX || midY < FRAME_PX || midY > size.y - FRAME_PX
-    return (isOut ? 10 : 0) + SHARES.filter((share) => isOnBlock(place, [midX + width * share, midY])).length
-  }
-  return spots.reduce((best, spot) => (inTheWay(spot) < inTheWay(best) ? spot : best))
+  const over = MARK_GAP + LINE / 2
+  const spots: Pixel[] = [[x + aside, y], [x - aside, y], ...[over, over + FARTHER].flatMap((by): Pixel[] => [[within, y - by], [within, y + by]])]
+  const inTheWay = ([midX, midY]: Pixel): number => SHARES.filter((share) => isOnBlock(place, [midX + width * share, midY])).length
+  const isIn = ([midX, midY]: Pixel): boolean => midX - width / 2 >= FRAME_PX && midX + width / 2 <= size.x - FRAME_PX && midY >= FRAME_PX && midY <= size.y - FRAME_PX
+  const free = spots.filter((spot) => isIn(spot) && isFree(place, boxAt(spot, width)))
+  return free.reduce<Pixel | null>((best, spot) => (best === null || inTheWay(spot) < inTheWay(best) ? spot : best), null)
 }
 
-/** On the side of the line that has fewer blocks under the name; on the line itself where it is wide enough. */
-function besideLine(place: Place, { x, y, turn }: { x: number; y: number; turn: number }, { width, widthPx }: { width: number; widthPx: number }): { at: Pixel; turn: number } {
-  if (widthPx > 15) return { at: [x, y], turn }
+/** On the side of the line that has fewer blocks under the name; on the line itself where it is wide enough; null where other words are in the way. */
+function besideLine(place: Place, { x, y, turn }: { x: number; y: number; turn: number }, { width, widthPx }: { width: number; widthPx: number }): Label | null {
   const angle = (turn * Math.PI) / 180
+  const pointsAt = ([midX, midY]: Pixel): Pixel[] => SHARES.map((share): Pixel => [midX + Math.cos(angle) * width * share, midY + Math.sin(angle) * width * share])
+  const free = (at: Pixel): Label | null => {
+    const boxes = boxesAlong(pointsAt(at), width)
+    return boxes.every((box) => isFree(place, box)) ? { at, turn, boxes } : null
+  }
+  if (widthPx > 15) return free([x, y])
   const reach = widthPx / 2 + BESIDE
   const sides = [-1, 1].map((side): { at: Pixel; covered: number } => {
     const at: Pixel = [x - Math.sin(angle) * reach * side, y + Math.cos(angle) * reach * side]
-    const along = SHARES.map((share): Pixel => [at[0] + Math.cos(angle) * width * share, at[1] + Math.sin(angle) * width * share])
-    return { at, covered: along.filter((point) => isOnBlock(place, point)).length }
+    // By the letters' far edge: their middle may pass a block that they lie on.
+    const far: Pixel = [x - Math.sin(angle) * (reach + LINE / 2) * side, y + Math.cos(angle) * (reach + LINE / 2) * side]
+    return { at, covered: pointsAt(far).filter((point) => isOnBlock(place, point)).length }
   })
-  const [best] = sides.sort((a, b) => a.covered - b.covered)
-  return best === undefined || best.covered > 2 ? { at: [x, y], turn } : { at: best.at, turn }
+  const beside = sides.filter(({ covered }) => covered <= 2).sort((a, b) => a.covered - b.covered).map(({ at }) => free(at)).find((label) => label !== null)
+  return beside ?? free([x, y])
 }
 
 function isOnBlock({ map, shapes }: Place, [x, y]: Pixel): boolean {
@@ -125,7 +176,10 @@ function isOnBlock({ map, shapes }: Place, [x, y]: Pixel): boolean {
   return shapes.some(({ rings, box }) => lng >= box.minX && lng <= box.maxX && lat >= box.minY && lat <= box.maxY && isInside(rings, [lng, lat]))
 }
 
-function addLabel({ map, group }: Place, { name, kind }: Named, { at, turn }: { at: Pixel; turn: number }): void {
+interface Label { at: Pixel; turn: number; boxes?: PixelBox[] }
+
+function addLabel({ map, group, taken }: Place, { name, kind }: Named, { at, turn, boxes }: Label): void {
+  taken.push(...(boxes ?? [boxAt(at, name.length * LETTER)]))
   const html = document.createElement('span')
   html.textContent = name
   if (turn !== 0) html.style.transform = `translate(-50%, -50%) rotate(${turn.toFixed(1)}deg)`

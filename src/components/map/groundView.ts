@@ -1,7 +1,7 @@
 import type { Map as LeafletMap } from 'leaflet'
 import { NO_GROUND, type MapGround } from '../../composables/mapGround.ts'
 import type { MapBlock } from '../../composables/mapTypes.ts'
-import { createGroundLabels } from './groundLabels.ts'
+import { createGroundLabels, type OverGround } from './groundLabels.ts'
 import { createGroundLayer } from './groundLayer.ts'
 import { createSiteLayer } from './siteLayer.ts'
 
@@ -12,10 +12,10 @@ export interface GroundView {
   setBlocks(blocks: readonly MapBlock[]): void
 }
 
-export function createGroundView(map: LeafletMap, metresPerPixel: () => number): GroundView {
+export function createGroundView(map: LeafletMap, over: OverGround): GroundView {
   const layer = createGroundLayer(map)
   const sites = createSiteLayer(map)
-  const names = createGroundLabels(map, metresPerPixel)
+  const names = createGroundLabels(map, over)
   let shown: MapGround = NO_GROUND
   let blocks: readonly MapBlock[] = []
   map.on('zoomend', layer.rescale)

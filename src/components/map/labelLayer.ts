@@ -15,6 +15,8 @@ export interface LabelLayer {
   show(blocks: readonly MapBlock[], chosenId: string | null, jobs: MapMarks['jobs']): void
   /** Middles of the labels in the map's pixels, by block. */
   middles(): ReadonlyMap<string, Pixel>
+  /** Ground that labels cover, in the same pixels. */
+  taken(): readonly PixelBox[]
 }
 
 interface Labels {
@@ -43,10 +45,12 @@ const LEAST_BOX = 4
 export function createLabelLayer(map: LeafletMap): LabelLayer {
   const group = layerGroup().addTo(map)
   let middles = new Map<string, Pixel>()
+  let taken: PixelBox[] = []
   return {
     show(blocks, chosenId, jobs) {
       group.clearLayers()
       middles = new Map()
+      taken = []
       if (areMany(blocks)) {
         const found = findManyLabels(map, blocks, chosenId)
         middles = found.middles
@@ -54,12 +58,13 @@ export function createLabelLayer(map: LeafletMap): LabelLayer {
         return
       }
       const shapes = blocks.flatMap(({ id, geometry }) => pixelRings(map, geometry).map((rings) => shapeOf(id, rings)))
-      const labels: Labels = { map, group, jobs, middles, taken: [], shapes }
+      const labels: Labels = { map, group, jobs, middles, taken, shapes }
       // Those with room of their own first, then the tiny ones between them.
       const largestFirst = [...blocks].sort((a, b) => b.areaM2 - a.areaM2)
       for (const block of largestFirst) addLabel(labels, block, block.id === chosenId)
     },
     middles: () => middles,
+    taken: () => taken,
   }
 }
 

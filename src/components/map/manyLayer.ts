@@ -1,10 +1,16 @@
 import { canvas, layerGroup, polygon, type LatLngTuple, type Map as LeafletMap, type PathOptions } from 'leaflet'
 import type { MapBlock } from '../../composables/mapTypes.ts'
+import type { MapMarks } from '../../composables/useMapMarks.ts'
+import { canvasHatch } from './canvasHatches.ts'
+import { HATCHES, hatchesOf } from './hatches.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'
+
+/** What was painted last. */
+interface Shown extends Pick<MapMarks, 'work' | 'holds'> { blocks: readonly MapBlock[] }
 
 /** Very many blocks, painted once and moved as one picture. */
 export interface ManyLayer {
-  show(blocks: readonly MapBlock[]): void
+  show(blocks: readonly MapBlock[], marks: Pick<MapMarks, 'work' | 'holds'>): void
   clear(): void
   /** Whether pictures of the ground are to be seen through the blocks. */
   setImagery(isThere: boolean): void
@@ -14,15 +20,20 @@ export interface ManyLayer {
 export function createManyLayer(map: LeafletMap, onChoose: (id: string) => void): ManyLayer {
   const group = layerGroup().addTo(map)
   const renderer = canvas({ padding: 0.2 })
-  let shown: readonly MapBlock[] | null = null
+  let shown: Shown | null = null
   let isOverImagery = false
 
-  function paint(blocks: readonly MapBlock[]): void {
+  function paint({ blocks, work, holds }: Shown): void {
     group.clearLayers()
+    const hatches = new Map(HATCHES.map((hatch) => [hatch, canvasHatch(map.getContainer(), hatch)]))
     const style = { ...inksOf(map.getContainer(), isOverImagery), renderer, bubblingMouseEvents: false }
     for (const block of blocks) {
       const rings: LatLngTuple[][][] = polygonsOf(block.geometry).map((polygonRings) => polygonRings.map((ring) => ring.map(toLatLng)))
       group.addLayer(polygon(rings, block.isComing === true ? { ...style, dashArray: '5 4' } : style).on('click', () => { onChoose(block.id) }))
+      for (const hatch of hatchesOf(block.id, { work, holds })) {
+        const pattern = hatches.get(hatch) ?? null
+        if (pattern !== null) group.addLayer(polygon(rings, { renderer, interactive: false, stroke: false, fillOpacity: 1, fillColor: asFill(pattern) }))
+      }
     }
   }
   // A canvas keeps the ink it was painted with; the page's own light may change.
@@ -31,10 +42,10 @@ export function createManyLayer(map: LeafletMap, onChoose: (id: string) => void)
   map.on('unload', () => { light.disconnect() })
 
   return {
-    show(blocks) {
-      if (blocks === shown) return
-      shown = blocks
-      paint(blocks)
+    show(blocks, { work, holds }) {
+      if (blocks === shown?.blocks && work === shown.work && holds === shown.holds) return
+      shown = { blocks, work, holds }
+      paint(shown)
     },
     setImagery(isThere) {
       if (isThere === isOverImagery) return
@@ -47,6 +58,9 @@ export function createManyLayer(map: LeafletMap, onChoose: (id: string) => void)
     },
   }
 }
+
+/** The canvas is handed a fill as it is, so a pattern does where Leaflet's types know of colours alone. */
+const asFill = (pattern: CanvasPattern): string => pattern as unknown as string
 
 /** The inks that farmMap.css gives to blocks drawn as elements. */
 function inksOf(host: HTMLElement, isOverImagery: boolean): PathOptions {

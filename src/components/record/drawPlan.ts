@@ -1,12 +1,23 @@
 import type { Block, Boundary } from '../../../shared/contract/block.ts'
+import type { Position } from '../../../shared/geo/geometryTypes.ts'
 import { toPlan, type Plan } from '../../../shared/geo/projectToPlan.ts'
 import { scaleBar, type ScaleBar } from '../../../shared/geo/scaleBar.ts'
 import type { UnitSystem } from '../../../shared/units/readingUnit.ts'
 
 interface Frame { width: number; height: number }
 
+/** Where things lie on the drawing. */
+export interface PlanView {
+  /** The plan's 0, 0 on the ground. */
+  origin: Position
+  pxPerM: number
+  /** Metres of the plan as pixels. */
+  place: (x: number, y: number) => [number, number]
+}
+
 export interface PlanDrawing {
   path: string
+  view: PlanView
   /** Where the block's label stands, pixels. */
   x: number
   y: number
@@ -44,6 +55,7 @@ export function drawPlan(block: Outlined, neighbours: readonly Outlined[], { wid
   const bar = scaleBar((width * 0.4) / scale, units)
   return {
     ...lay(block.geometry),
+    view: { origin: plan.origin, pxPerM: scale, place },
     fills: (fills ?? [block, ...also].map(({ geometry }) => geometry)).map((geometry) => lay(geometry).path),
     also: also.map(({ code, geometry }) => ({ code, ...lay(geometry) })),
     neighbours: neighbours

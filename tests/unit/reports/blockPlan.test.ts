@@ -53,6 +53,17 @@ describe('block to scale', () => {
     expect((paperM(southEast, northEast) * scale) / ground(east, [east[0], east[1] + height])).toBeCloseTo(1, 3)
   })
 
+  it('lays a lane under it as wide as on the ground at the printed scale, and no site a second time', async () => {
+    const signed = buildSignedRecord({ blocks: [buildSignedBlock({ geometry: { type: 'Polygon', coordinates: [box([-123.33, 44.6], 0.0013, 0.0009)] } })], content: { ...base.content, lines: [base.content.lines[0]!] } })
+    const lane = { kind: 'track' as const, name: 'Hollow Lane', geometry: { type: 'LineString' as const, coordinates: [[-123.3303, 44.5995], [-123.3303, 44.6015]] as Position[] } }
+    const pdf = readPdf(await drawRecord(buildRecordReportData({ signed, neighbours: [], ground: [{ ...lane, widthM: 30 }], sites: [lane] })))
+    const strokes = contentOf(pdf).flatMap((line) => (/^[\d.]+ w$/.test(line) ? [Number(line.slice(0, -2))] : []))
+    const metre = 72 / 0.0254 / printedScale(pdf)
+    expect(strokes.some((width) => Math.abs(width - 30 * metre) < 0.01)).toBe(true)
+    // What a site that is no ground would be drawn with.
+    expect(strokes).not.toContain(3.8)
+  })
+
   it('draws every part and hole', async () => {
     const pdf = await drawBlock({
       type: 'MultiPolygon',

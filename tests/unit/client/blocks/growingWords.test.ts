@@ -55,6 +55,13 @@ describe('land', () => {
     expect(verdicts({ ...land, status: 'transition' })).toEqual(['caution', 'unknown'])
     expect(verdicts({ ...land, lastProhibited: { substance: 'x', on: '2016-04-01', proof: 'y' } })).toEqual([])
   })
+
+  it('says what a label holds, and never that nothing does', () => {
+    const holds = (held: Parameters<typeof blockAllows>[3]) => blockAllows('A3', null, null, held).filter(({ code }) => code === 'blocks.holds').map(({ verdict, text }) => [verdict, text.id])
+    expect(holds(undefined)).toEqual([['unknown', 'blocks.allows.holds.text']])
+    expect(holds(null)).toEqual([['unknown', 'blocks.allows.holds.none']])
+    expect(holds({ reEntryUntil: '2026-06-16T18:36:00Z', pickFrom: '2026-06-20', zone: 'America/Chicago' })).toEqual([['caution', 'checks.reEntry.until'], ['caution', 'checks.preHarvest.before']])
+  })
 })
 
 describe('what is sent', () => {

@@ -1,10 +1,8 @@
 import type { GroundKind } from '../../../shared/contract/ground.ts'
-import type { FarmMapData } from '../farmMapReportData.ts'
-import type { Canvas } from '../parts/canvas.ts'
-import { toPageLines, tracePath } from '../parts/planShapes.ts'
-import type { Drawing } from '../parts/planTypes.ts'
+import type { Canvas } from './canvas.ts'
+import { toPageLines, tracePath } from './planShapes.ts'
+import type { Drawing, GroundPiece } from './planTypes.ts'
 
-type Piece = FarmMapData['ground'][number]
 /** One stroke of a line: as wide as the thing and `over` points more, never under `least`. */
 interface Stroke { over: number; least: number; color: string }
 
@@ -17,7 +15,7 @@ export const BUILDING = '#3D3D3D'
 export const HEDGE = '#555555'
 
 /** Draws the ground plan: outlines first, then water, lanes, hedges and buildings, casings of all lanes under all lanes. */
-export function drawGround(drawing: Drawing, { ground }: FarmMapData): void {
+export function drawGround(drawing: Drawing, ground: readonly GroundPiece[]): void {
   const lines = ground.filter(({ geometry }) => geometry.type === 'LineString')
   for (const piece of ground) if (piece.geometry.type === 'Polygon' && piece.kind !== 'building') drawArea(drawing, piece)
   for (const kind of ['water', 'track', 'other'] as const) {
@@ -27,7 +25,7 @@ export function drawGround(drawing: Drawing, { ground }: FarmMapData): void {
   for (const piece of ground) if (piece.kind === 'building') drawArea(drawing, piece)
 }
 
-function drawArea(drawing: Drawing, { kind, geometry }: Piece): void {
+function drawArea(drawing: Drawing, { kind, geometry }: GroundPiece): void {
   const { canvas } = drawing
   const { doc } = canvas
   tracePath(canvas, toPageLines(geometry, drawing), { closes: true })
@@ -38,14 +36,14 @@ function drawArea(drawing: Drawing, { kind, geometry }: Piece): void {
   else doc.lineWidth(0.7).stroke('#555555')
 }
 
-function strokeLine(drawing: Drawing, { geometry, widthM }: Piece, { over, least, color }: Stroke): void {
+function strokeLine(drawing: Drawing, { geometry, widthM }: GroundPiece, { over, least, color }: Stroke): void {
   const { canvas, view } = drawing
   canvas.doc.lineJoin('round').lineCap('butt').lineWidth(Math.max(least, (widthM ?? 0) * view.pointsPerMetre + over))
   tracePath(canvas, toPageLines(geometry, drawing), { closes: false })
   canvas.doc.stroke(color)
 }
 
-function dot(drawing: Drawing, { geometry }: Piece): void {
+function dot(drawing: Drawing, { geometry }: GroundPiece): void {
   tracePath(drawing.canvas, toPageLines(geometry, drawing), { closes: false })
   startDots(drawing.canvas).stroke(HEDGE).undash().lineCap('butt')
 }
