@@ -2,7 +2,9 @@ import { v7 as uuidV7 } from 'uuid'
 import { afterAll, beforeAll, expect, it } from 'vitest'
 import { createOwnerSource } from '../../server/database/dataSource.ts'
 import { prepareDatabase } from '../../server/database/prepareDatabase.ts'
-import { openHouse, type TestFarm, type TestHouse } from '../support/openHouse.ts'
+import { buildRecord } from '../../server/demo/buildThings.ts'
+import { openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
+import { seedThings } from '../support/seedThings.ts'
 
 let house: TestHouse
 const farms: TestFarm[] = []
@@ -23,8 +25,9 @@ async function backAndForth(name: string): Promise<void> {
   await prepareDatabase(house.ownerUrl, 'drenchleaf_app')
 }
 
-const certificatesOf = (farm: TestFarm): Promise<unknown[]> => house.services.database.inFarm({ farmId: farm.id, seasons: null }, (manager) =>
-  manager.query('SELECT number, body, scope, valid_from::text, valid_until::text FROM certificates'))
+const rowsOf = (farm: TestFarm, sql: string): Promise<unknown[]> => house.services.database.inFarm({ farmId: farm.id, seasons: null }, (manager) => manager.query(sql))
+const certificatesOf = (farm: TestFarm): Promise<unknown[]> => rowsOf(farm, 'SELECT number, body, scope, valid_from::text, valid_until::text FROM certificates')
+const heldDaysOf = (farm: TestFarm): Promise<unknown[]> => rowsOf(farm, 'SELECT record_id, held_to::text FROM record_lines')
 
 // The owner of the tables is bound by the policies too: a migration that forgets so moves nothing, and says nothing.
 it('moves each farm’s certificate into rows, and back', async () => {
@@ -36,4 +39,21 @@ it('moves each farm’s certificate into rows, and back', async () => {
   expect(before.map((rows) => rows.length)).toEqual([1, 1])
   await backAndForth('KeepCertificates')
   expect(await Promise.all(farms.map(certificatesOf))).toEqual(before)
+})
+
+it('finds the days on which each farm’s signed records hold their blocks', async () => {
+  for (const farm of farms) {
+    house.setNow('2026-06-16T14:00:00Z')
+    const things = await seedThings(house, farm, {
+      material: { label: { maxRate: null, minStrengthPct: null, maxStrengthPct: null, reEntryHours: '36', preHarvestDays: 6, source: 'label, part 2' } },
+    })
+    const owner = await house.as(farm.accounts.owner)
+    const record = buildRecord({ ...things, startedAt: '2026-06-14T13:00:00Z', endedAt: '2026-06-14T13:40:00Z' })
+    await owner.post(`/api/farms/${farm.id}/records`).send(record).expect(201)
+    await owner.post(`/api/farms/${farm.id}/records/${record.id}/sign`).send({ password: PASSWORD }).expect(200)
+  }
+  const before = await Promise.all(farms.map(heldDaysOf))
+  expect(before).toMatchObject([[{ held_to: '2026-06-19' }], [{ held_to: '2026-06-19' }]])
+  await backAndForth('FindHolds')
+  expect(await Promise.all(farms.map(heldDaysOf))).toEqual(before)
 })
