@@ -10,7 +10,8 @@ export async function guard(to: RouteLocationNormalized): Promise<NavigationGuar
   if (session.user === null) return { name: 'sign-in', query: to.fullPath === '/' ? {} : { next: to.fullPath } }
   if (session.role === null) {
     const home = session.hadGrants ? 'my-farms' : 'farm-new'
-    return to.name === home || to.name === 'farm-new' ? true : { name: home }
+    const isOpen = to.name === home || to.name === 'farm-new' || (session.hadGrants && to.name === 'me')
+    return isOpen ? true : { name: home }
   }
   if (session.membership?.factorNeeded === true && to.name !== 'farm-new') return to.name === 'second-factor' ? true : { name: 'second-factor' }
   const roles = to.meta.roles

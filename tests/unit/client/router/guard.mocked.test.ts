@@ -55,7 +55,7 @@ describe('guard', () => {
     expect(router.currentRoute.value.name).toBe('not-found')
   })
 
-  it.each([[false, '/', 'farm-new'], [false, '/farms', 'farm-new'], [true, '/', 'my-farms'], [true, '/register', 'my-farms'], [true, '/farms/new', 'farm-new']])(
+  it.each([[false, '/', 'farm-new'], [false, '/farms', 'farm-new'], [true, '/', 'my-farms'], [true, '/register', 'my-farms'], [true, '/farms/new', 'farm-new'], [true, '/me', 'me'], [false, '/me', 'farm-new']])(
     'takes who has no farm, and had grants %s, at %s to %s', async (hadGrants, path, name) => {
       here.read.mockResolvedValue({ user: buildUser(), memberships: [], hadGrants })
       const router = openRouter()
