@@ -1,5 +1,5 @@
 import { v7 as uuidV7 } from 'uuid'
-import { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
+import { updateFarmSchema } from '../../shared/contract/farmChanges.ts'
 import { addDays } from '../../shared/time/calendar.ts'
 import type { FarmActor } from '../database/actor.ts'
 import { farmToday } from '../services/blocks/drawingDay.ts'

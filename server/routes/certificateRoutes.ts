@@ -1,4 +1,5 @@
-import { addCertificateSchema, certificateSchema, changeCertificateSchema, withdrawCertificateSchema } from '../../shared/contract/certificate.ts'
+import { certificateSchema } from '../../shared/contract/certificate.ts'
+import { addCertificateSchema, changeCertificateSchema, withdrawCertificateSchema } from '../../shared/contract/certificateChanges.ts'
 import { farmParamsSchema, thingParamsSchema } from '../../shared/contract/common.ts'
 import { addCertificate, changeCertificate, withdrawCertificate } from '../services/farms/certificates.ts'
 import { defineRoute } from './defineRoute.ts'

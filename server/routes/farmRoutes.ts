@@ -1,6 +1,6 @@
 import { farmParamsSchema } from '../../shared/contract/common.ts'
 import { createFarmSchema, farmSchema } from '../../shared/contract/farm.ts'
-import { updateFarmSchema } from '../../shared/contract/farmProfile.ts'
+import { updateFarmSchema } from '../../shared/contract/farmChanges.ts'
 import { createFarm } from '../services/farms/createFarm.ts'
 import { describeFarm } from '../services/farms/describeFarm.ts'
 import { updateFarm } from '../services/farms/updateFarm.ts'

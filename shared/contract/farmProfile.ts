@@ -1,8 +1,6 @@
 import { z } from 'zod'
 import { UNIT_SYSTEMS } from '../units/readingUnit.ts'
 import { certificateSchema } from './certificate.ts'
-import { acknowledgedSchema, revisionSchema } from './common.ts'
-import { seasonStartSchema } from './seasonStart.ts'
 import { lineText, noteText } from './text.ts'
 
 /** Public law that a farm may say it works under; named only, nothing is judged by it yet. Titles and citations stand in the messages. */
@@ -24,26 +22,12 @@ export const placeSchema = z.tuple([z.number().min(-180).max(180), z.number().mi
 /** Days from one calibration of a sprayer to the next. */
 export const calibrationDaysSchema = z.number().int().min(1).max(1830)
 
-const profileFields = {
+export const profileFields = {
   units: z.enum(UNIT_SYSTEMS),
   contact: contactSchema.nullable(),
   ruleSets: z.array(z.enum(RULE_SETS)).max(RULE_SETS.length),
   calibrationDays: calibrationDaysSchema,
 }
-
-/** What is not sent stays as it is. */
-export const updateFarmSchema = z.strictObject({
-  revision: revisionSchema,
-  name: lineText(120),
-  /** IANA time zone of the land. */
-  zone: z.string().max(60),
-  seasonStart: seasonStartSchema,
-  /** Where the map opens while no block is drawn. */
-  home: placeSchema,
-  ...profileFields,
-  acknowledged: acknowledgedSchema,
-}).partial().required({ revision: true })
-export type UpdateFarm = z.output<typeof updateFarmSchema>
 
 /** The profile as it is answered, beside the farm's name and season. */
 export const profileAnswer = {

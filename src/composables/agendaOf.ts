@@ -1,6 +1,5 @@
 import type { Job } from '../../shared/contract/job.ts'
-import { byBlock } from '../../shared/rounds/byBlock.ts'
-import { groupBy } from '../../shared/rounds/groupBy.ts'
+import { byBlock, groupBy } from '../../shared/rounds/groupBy.ts'
 import { addDays } from '../../shared/time/calendar.ts'
 
 /** Jobs of one day and step: what one record may be written for. */

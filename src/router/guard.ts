@@ -9,9 +9,9 @@ export async function guard(to: RouteLocationNormalized): Promise<NavigationGuar
   await session.load()
   if (session.user === null) return { name: 'sign-in', query: to.fullPath === '/' ? {} : { next: to.fullPath } }
   if (session.role === null) {
-    const home = session.hadGrants ? 'my-farms' : 'farm-new'
-    const isOpen = to.name === home || to.name === 'farm-new' || (session.hadGrants && to.name === 'me')
-    return isOpen ? true : { name: home }
+    const home = session.session?.hadGrants === true ? 'my-farms' : 'farm-new'
+    const open: unknown[] = home === 'farm-new' ? [home] : [home, 'farm-new', 'me']
+    return open.includes(to.name) || { name: home }
   }
   if (session.membership?.factorNeeded === true && to.name !== 'farm-new') return to.name === 'second-factor' ? true : { name: 'second-factor' }
   const roles = to.meta.roles

@@ -21,8 +21,6 @@ export const useSession = defineStore('session', () => {
   /** Empty while no farm is open. */
   const farmId = computed(() => membership.value?.farmId ?? '')
   const role = computed<Role | null>(() => membership.value?.role ?? null)
-  /** Lost the last farm that was granted. */
-  const hadGrants = computed(() => session.value?.hadGrants === true)
   /** May add blocks, inputs and sprayers. */
   const canManage = computed(() => role.value === 'owner' || role.value === 'manager')
   /** Works on the farm: no outsider. */
@@ -99,7 +97,7 @@ export const useSession = defineStore('session', () => {
   }
 
   return {
-    session, loaded, user, memberships, membership, farmId, role, hadGrants, canManage, isOfFarm, canRecord,
+    session, loaded, user, memberships, membership, farmId, role, canManage, isOfFarm, canRecord,
     load, signIn, signInByPin, acceptUser, reload, signOut, forget, accept, open, chooseFarm,
   }
 })

@@ -1,5 +1,6 @@
 import type { EntityManager } from 'typeorm'
-import type { AddCertificate, Certificate as CertificateAnswer, ChangeCertificate } from '../../../shared/contract/certificate.ts'
+import type { Certificate as CertificateAnswer } from '../../../shared/contract/certificate.ts'
+import type { AddCertificate, ChangeCertificate } from '../../../shared/contract/certificateChanges.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { Certificate } from '../../entities/Certificate.ts'
 import { AppError, invalid, notFound, stale } from '../../errors.ts'

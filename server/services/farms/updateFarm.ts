@@ -1,6 +1,6 @@
 import type { EntityManager } from 'typeorm'
 import type { Farm as FarmAnswer } from '../../../shared/contract/farm.ts'
-import type { UpdateFarm } from '../../../shared/contract/farmProfile.ts'
+import type { UpdateFarm } from '../../../shared/contract/farmChanges.ts'
 import { isZone } from '../../../shared/time/isZone.ts'
 import type { FarmActor } from '../../database/actor.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'

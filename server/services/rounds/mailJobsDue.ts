@@ -1,6 +1,6 @@
 import { In, IsNull, type EntityManager } from 'typeorm'
 import type { Job } from '../../../shared/contract/job.ts'
-import { byBlock } from '../../../shared/rounds/byBlock.ts'
+import { byBlock } from '../../../shared/rounds/groupBy.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import type { FarmOnRound } from '../../database/database.ts'
 import { Account } from '../../entities/Account.ts'
