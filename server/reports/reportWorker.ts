@@ -1,5 +1,6 @@
 import { Writable } from 'node:stream'
 import type { WorkerAnswer, WorkerOrder } from './reportMessages.ts'
+import { giveBack } from './giveBack.ts'
 import { renderReport } from './renderReport.ts'
 
 /** The drawing process: takes orders from the server by messages and answers with the document's bytes. */
@@ -22,6 +23,7 @@ async function draw({ id, job }: WorkerOrder): Promise<void> {
   } catch (error) {
     await tell({ kind: 'failed', id, message: error instanceof Error ? error.message : String(error) })
   }
+  giveBack()
 }
 
 process.on('message', (order: WorkerOrder) => void draw(order))

@@ -17,7 +17,7 @@ export function startWorker(): ChildProcess {
     env,
     serialization: 'advanced',
     stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
-    execArgv: ['--max-old-space-size=512', ...(isSource ? ['--import', sourceLoader()] : [])],
+    execArgv: ['--max-old-space-size=512', '--expose-gc', ...(isSource ? ['--import', sourceLoader()] : [])],
   })
 }
 

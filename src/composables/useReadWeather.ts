@@ -23,7 +23,7 @@ export function useReadWeather(): (record: Pick<ApplicationRecord, 'weather' | '
       const kind = value ? { note: [t(`records.weather.kind.${value.kind}`), inOwn(value)].filter((words) => words !== '').join(', ') } : {}
       return { name: t(`records.weather.${name}`), value: value ? `${figures.plain(value.value)} ${figures.unit(value.unit)}${more}` : t('records.weather.never'), ...kind }
     }
-    const from = weather?.windFrom ? `, ${t('records.read.windFrom', { point: t(`records.weather.compass.${weather.windFrom}`) })}` : ''
+    const from = weather?.windFrom ? `, ${t('recordRead.windFrom', { point: t(`records.weather.compass.${weather.windFrom}`) })}` : ''
     const derived = (name: 'wetBulbC' | 'deltaTC' | 'dewPointC', method: 'stull' | 'psychrometer'): ReadFact => {
       const unit = name === 'deltaTC' ? 'diffC' : 'degC'
       return { name: t(`versions.read.${name}`), value: `${figures.fixed(air?.[name] ?? 0, 1, unit)} ${figures.unitOf(unit)}`, note: t(`versions.read.${method}`) }

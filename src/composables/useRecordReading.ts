@@ -71,7 +71,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   const { render } = useMessages()
   const weatherOf = useReadWeather()
   const said = (messages: readonly Message[]): string => messages.map(render).join(', ')
-  const unknown = (text: string): string => text || t('records.read.unknown')
+  const unknown = (text: string): string => text || t('recordRead.unknown')
   const zone = computed(() => ground.value.zone)
   const time = (instant: string): string => civilTimeIn(zone.value, instant)
   const day = (instant: string): string => figures.day(civilDateIn(zone.value, instant))
@@ -95,7 +95,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
         counts: said(countsWords(line.counts)),
         stage: [line.stage ?? '', line.bbch === null ? '' : `BBCH ${line.bbch}`].filter((words) => words !== '').join(', '),
         when: unknown(span(line.startedAt, line.endedAt)),
-        amount: line.amount === null ? t('records.read.unknown') : `${line.amount.known === 'workedOut' ? worked(line.amount) : asTyped(line.amount)}, ${t(`records.known.${line.amount.known}`)}`,
+        amount: line.amount === null ? t('recordRead.unknown') : `${line.amount.known === 'workedOut' ? worked(line.amount) : asTyped(line.amount)}, ${t(`records.known.${line.amount.known}`)}`,
         keepOut: said(momentWords(share?.reEntryUntil ?? null, zone.value)),
         pickFrom: share?.pickFrom ? figures.day(share.pickFrom) : '',
       }
@@ -157,18 +157,18 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   function skewOf(minutes: number | null): { note?: string } {
     if (minutes === null || minutes === 0) return {}
     const apart = figures.plain(Math.abs(minutes))
-    return { note: t(minutes > 0 ? 'records.read.clockAhead' : 'records.read.clockBehind', { minutes: apart }, Math.abs(minutes)) }
+    return { note: t(minutes > 0 ? 'recordRead.clockAhead' : 'recordRead.clockBehind', { minutes: apart }, Math.abs(minutes)) }
   }
 
   function timesOf({ lines, deviceAt, receivedAt, signedAt, workedInOn, clockSkewMinutes }: ApplicationRecord): ReadFact[] {
     const starts = lines.flatMap(({ startedAt }) => startedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
     const ends = lines.flatMap(({ endedAt }) => endedAt ?? []).sort((a, b) => Date.parse(a) - Date.parse(b))
     return [
-      { name: t('records.read.worked'), value: unknown(span(starts[0] ?? null, ends.at(-1) ?? null)), note: t('records.read.zone', { zone: zone.value }) },
+      { name: t('recordRead.worked'), value: unknown(span(starts[0] ?? null, ends.at(-1) ?? null)), note: t('recordRead.zone', { zone: zone.value }) },
       ...(workedInOn === null ? [] : [{ name: t('versions.label.workedInOn'), value: figures.day(workedInOn) }]),
-      { name: t('records.read.device'), value: unknown(when(deviceAt)), ...skewOf(clockSkewMinutes) },
-      { name: t('records.read.server'), value: when(receivedAt) },
-      { name: t('records.read.signed'), value: unknown(when(signedAt)) },
+      { name: t('recordRead.device'), value: unknown(when(deviceAt)), ...skewOf(clockSkewMinutes) },
+      { name: t('recordRead.server'), value: when(receivedAt) },
+      { name: t('recordRead.signed'), value: unknown(when(signedAt)) },
     ]
   }
 
@@ -176,7 +176,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
     return [
       { name: t('records.happened.doneBy'), value: unknown(doneBy?.name ?? '') },
       { name: t('records.happened.enteredBy'), value: unknown(enteredBy?.name ?? '') },
-      { name: t('records.read.signed'), value: unknown(signedBy !== null && signedWith === 'pin' ? t('people.signedByPin', { name: signedBy.name }) : signedBy?.name ?? '') },
+      { name: t('recordRead.signed'), value: unknown(signedBy !== null && signedWith === 'pin' ? t('people.signedByPin', { name: signedBy.name }) : signedBy?.name ?? '') },
       { name: t('versions.label.protection'), value: unknown(protection.map((piece) => t(`records.protection.${piece}`)).join(', ')) },
     ]
   }

@@ -1,6 +1,6 @@
 import supertest from 'supertest'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { recordStatements } from '../bench/recordStatements.ts'
+import { recordStatements } from '../support/recordStatements.ts'
 import { NOW, openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 
 const NEW = 'another fine sentence here'

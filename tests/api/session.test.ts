@@ -3,7 +3,7 @@ import { Agent as HttpAgent, request as httpRequest } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import supertest from 'supertest'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { recordStatements } from '../bench/recordStatements.ts'
+import { recordStatements } from '../support/recordStatements.ts'
 import { openHouse, PASSWORD, type TestFarm, type TestHouse } from '../support/openHouse.ts'
 
 let house: TestHouse

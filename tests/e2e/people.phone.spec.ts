@@ -49,7 +49,7 @@ test('somebody without e-mail signs a record by PIN on a phone of the farm', asy
 
   const record = await makeEndedRecord(apiOf(context.request, owner.farmId), things)
   await openScreen(page, `/register/${record.id}`)
-  await page.getByRole('button', { name: say('records.read.goOn') }).click()
+  await page.getByRole('button', { name: say('recordRead.goOn') }).click()
   await field(page, say('pin.yours')).fill(PIN)
   await page.getByRole('button', { name: say('records.sign.sign'), exact: true }).click()
   await page.getByRole('button', { name: say('records.signed.open') }).click()

@@ -47,8 +47,8 @@ test('the certifier reads what is granted and can begin nothing', async ({ page,
   await expect(page.getByRole('link', { name: new RegExp(`${record.number?.slice(-4)}`) })).toBeVisible()
   await expect(page.getByRole('button', { name: say('register.newRecord') })).toHaveCount(0)
   await openScreen(page, `/register/${record.id}`)
-  await expect(page.getByRole('link', { name: say('records.read.openPdf') })).toBeVisible()
-  await expect(page.getByRole('button', { name: say('records.read.like') })).toHaveCount(0)
+  await expect(page.getByRole('link', { name: say('recordRead.openPdf') })).toBeVisible()
+  await expect(page.getByRole('button', { name: say('recordRead.like') })).toHaveCount(0)
   const pdf = await page.request.get(`/api/farms/${manager.farmId}/records/${record.id}/pdf`)
   expect(pdf.status()).toBe(200)
   for (const path of ['/register/new', '/blocks/new', '/farm']) {
@@ -68,7 +68,7 @@ test("the neighbour's things are not there for any role", async ({ page, context
     await page.goto(`/blocks/${block?.id}`)
     await expect(page.getByText(say('blocks.page.missing'))).toBeVisible()
     await page.goto(`/register/${record?.id}`)
-    await expect(page.getByText(say('records.read.notHere'))).toBeVisible()
+    await expect(page.getByText(say('recordRead.notHere'))).toBeVisible()
     for (const path of ['', '/blocks', `/blocks/${block?.id}`, `/records/${record?.id}`, `/records/${record?.id}/pdf`]) {
       const answer = await page.request.get(`/api/farms/${neighbour.farmId}${path}`)
       expect(answer.status(), `${who} ${path}`).toBe(404)

@@ -6,6 +6,7 @@ import { files } from './files.ts'
 import { grants } from './grants.ts'
 import { ground } from './ground.ts'
 import { growing } from './growing.ts'
+import { happened } from './happened.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { letters } from './letters.ts'
@@ -14,6 +15,7 @@ import { merge } from './merge.ts'
 import { people } from './people.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
+import { recordRead } from './recordRead.ts'
 import { rounds } from './rounds.ts'
 import { shapes } from './shapes.ts'
 import { sprayers } from './sprayers.ts'
@@ -22,5 +24,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, likely, merge, people, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, check, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
 }

@@ -7,6 +7,7 @@ import { files } from './files.ts'
 import { grants } from './grants.ts'
 import { ground } from './ground.ts'
 import { growing } from './growing.ts'
+import { happened } from './happened.ts'
 import { importing } from './importing.ts'
 import { journal } from './journal.ts'
 import { letters } from './letters.ts'
@@ -15,6 +16,7 @@ import { merge } from './merge.ts'
 import { people } from './people.ts'
 import { problems } from './problems.ts'
 import { profile } from './profile.ts'
+import { recordRead } from './recordRead.ts'
 import { rounds } from './rounds.ts'
 import { shapes } from './shapes.ts'
 import { sprayers } from './sprayers.ts'
@@ -23,5 +25,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, check, due, farm, files, grants, ground, growing, importing, journal, letters, likely, merge, people, problems, profile, rounds, shapes, sprayers, start, versions,
+  blocks, check, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
 }

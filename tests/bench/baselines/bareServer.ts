@@ -2,7 +2,7 @@ import connectPgSimple from 'connect-pg-simple'
 import express from 'express'
 import session from 'express-session'
 import pg from 'pg'
-import type { Recorded } from '../recordStatements.ts'
+import type { Recorded } from '../../support/recordStatements.ts'
 import { replay } from './replay.ts'
 
 /** What the bare server is told: the statements of ours, and what cannot be read from their rows. */

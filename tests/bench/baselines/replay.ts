@@ -1,6 +1,6 @@
 import type { PoolClient, QueryResultRow } from 'pg'
 import { v7 as uuidV7 } from 'uuid'
-import type { Recorded } from '../recordStatements.ts'
+import type { Recorded } from '../../support/recordStatements.ts'
 
 const UUID_V7 = /^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[0-9a-f]{4}-[0-9a-f]{12}$/
 

@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import type { PoolClient } from 'pg'
-import type { Recorded } from '../recordStatements.ts'
+import type { Recorded } from '../../support/recordStatements.ts'
 import { replay, type Swap } from './replay.ts'
 
 /** The statements that signed one record, and what was its own in them. */

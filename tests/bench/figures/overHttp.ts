@@ -3,7 +3,7 @@ import type { BarePlan } from '../baselines/bareServer.ts'
 import { openClient, type Client } from '../httpClient.ts'
 import { assertSame, measureRounds } from '../measureRounds.ts'
 import type { Field } from '../openField.ts'
-import { recordStatements } from '../recordStatements.ts'
+import { recordStatements } from '../../support/recordStatements.ts'
 import { startChild } from '../startChild.ts'
 import type { Summary } from '../statistics.ts'
 

@@ -38,7 +38,7 @@ export function measurePdfMemory(): { ours: number; baseline: number } {
 }
 
 function peakOf(volumes: number): number {
-  return Number(execFileSync(process.execPath, ['--import', 'tsx', 'tests/bench/drawVolumes.ts', String(volumes)], { encoding: 'utf8' }))
+  return Number(execFileSync(process.execPath, ['--expose-gc', '--import', 'tsx', 'tests/bench/drawVolumes.ts', String(volumes)], { encoding: 'utf8' }))
 }
 
 /** What a drawing sets, word for word; pages are counted from 0. */
