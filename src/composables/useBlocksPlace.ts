@@ -1,4 +1,4 @@
-import { computed, ref, type ComputedRef, type Ref } from 'vue'
+import { computed, customRef, ref, type ComputedRef, type Ref } from 'vue'
 import type { Block } from '../../shared/contract/block.ts'
 import type { Farm } from '../../shared/contract/farm.ts'
 import { totalAreaM2 } from '../../shared/geo/totalAreaM2.ts'
@@ -27,7 +27,8 @@ export interface BlocksPlace {
   count: ComputedRef<string>
   /** "23.82". */
   area: ComputedRef<string>
-  startAt: ComputedRef<MapView | null>
+  /** Where a map that is opened now looks. */
+  startAt: Readonly<Ref<MapView | null>>
   remember: (view: MapView) => void
   chosenId: Ref<string | null>
 }
@@ -61,7 +62,8 @@ export function useBlocksPlace(): BlocksPlace {
     canRecord: computed(() => session.canRecord),
     blocks: computed(() => all.value.map((block) => blockWords(preferences.reader, block))),
     count: computed(() => countWords(preferences.reader, all.value.length, area.value)),
-    startAt: computed(startView),
+    // Read anew by each map: where the last one looked is no news that anything should be drawn again for.
+    startAt: customRef(() => ({ get: startView, set: () => undefined })),
     remember: (view) => { lastViews.set(farmId.value, view) },
     chosenId: ref<string | null>(null),
   }

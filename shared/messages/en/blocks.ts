@@ -59,6 +59,7 @@ export const blocks = {
   },
   empty: {
     title: 'No block yet',
+    place: 'Type where it lies',
     text: 'The blocks of the farm stand here once their outlines are drawn or their points typed.',
     read: 'The blocks of the farm stand here once the owner or a manager has drawn them.',
   },
@@ -133,7 +134,7 @@ export const blocks = {
     finished: 'Outline finished. Now its code and name.',
     resumed: 'This is the block you began earlier. It was kept on this device.',
     startAnew: 'Start anew',
-    noPlace: 'The farm has no place on the map yet. Type the points, or move the map to your land.',
+    noPlace: 'The map does not know yet where the farm lies. Say where, type the points of a block, or move the map to your land.',
   },
   points: {
     label: 'Points, one a line: latitude, longitude',

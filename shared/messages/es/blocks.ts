@@ -58,6 +58,7 @@ export const blocks = {
     resume: 'Seguir dibujando',
   },
   empty: {
+    place: 'Escribir dónde está',
     title: 'Aún no hay parcelas',
     text: 'Las parcelas de la finca aparecen aquí cuando se dibuja su contorno o se escriben sus puntos.',
     read: 'Las parcelas de la finca aparecen aquí cuando el titular o un responsable las dibuja.',
@@ -133,7 +134,7 @@ export const blocks = {
     finished: 'Contorno terminado. Ahora su código y su nombre.',
     resumed: 'Esta es la parcela que empezó antes. Se guardó en este dispositivo.',
     startAnew: 'Empezar de nuevo',
-    noPlace: 'La finca aún no tiene lugar en el mapa. Escriba los puntos o mueva el mapa hasta su tierra.',
+    noPlace: 'El mapa aún no sabe dónde está la finca. Diga dónde, escriba los puntos de una parcela o mueva el mapa hasta su tierra.',
   },
   points: {
     label: 'Puntos, uno por línea: latitud, longitud',

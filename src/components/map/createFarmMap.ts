@@ -40,6 +40,8 @@ export interface FarmMap {
   /** Moves as little as brings the position into view. */
   bringIntoView(position: Position): void
   pan(dx: number, dy: number): void
+  /** Whether a position is in view. */
+  sees(position: Position): boolean
   view(): MapView
   metresPerPixel(): number
   /** Middles of the labels in the map's pixels, by block. */
@@ -107,6 +109,7 @@ export function createFarmMap(host: HTMLElement, events: FarmMapEvents): FarmMap
     fit: (positions, room) => move(() => fitTo(map, positions, { room, blocks: shown.blocks, covered: events.covered() })),
     bringIntoView: (position) => move(() => map.panInside(toLatLng(position), { padding: EDGE_PX, animate: false })),
     pan: (dx, dy) => move(() => map.panBy([dx, dy], { animate: false })),
+    sees: (position) => map.getBounds().contains(toLatLng(position)),
     view: () => viewOf(map),
     metresPerPixel: () => metresPerPixel(map),
     middles: labels.middles,
