@@ -5,6 +5,7 @@ import type { Boundary, GeometryFinding, Ring } from './geometryTypes.ts'
 import { fromGridRing, GRID_PER_DEGREE, toGridRing, type GridRing } from './gridRing.ts'
 import { measurePolygon } from './measurePolygon.ts'
 import { readRings } from './readRings.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
 export interface BoundaryCheck {
   /** The boundary cleaned and oriented, or null where anything impossible was found. */
@@ -49,7 +50,7 @@ export function checkBoundary(geometry: unknown): BoundaryCheck {
   if (findings.length > 0) return { geometry: null, findings }
   const boundary = toBoundary(whole, read.type)
   const { areaM2 } = measurePolygon(boundary)
-  if (areaM2 >= MIN_M2 && areaM2 <= MAX_HA * 10_000) return { geometry: boundary, findings: [] }
+  if (areaM2 >= MIN_M2 && areaM2 <= MAX_HA * M2_PER_HA) return { geometry: boundary, findings: [] }
   return { geometry: null, findings: [{ code: 'geometry.area_range', params: { areaM2, minM2: MIN_M2, maxHa: MAX_HA } }] }
 }
 

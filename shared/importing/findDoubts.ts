@@ -7,6 +7,7 @@ import { FAR_KM } from '../geo/isFarFrom.ts'
 import { looksSwapped } from '../geo/looksSwapped.ts'
 import { middleOf } from '../geo/middleOf.ts'
 import type { Candidate } from './importTypes.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
 /** A block with its box, so that distant ones are passed over at a glance. */
 export interface Placed extends NamedBoundary {
@@ -34,7 +35,7 @@ export function findDoubts(shape: Placed, blocks: readonly Placed[], before: rea
   const same = overlaps.find(({ share, id }) => share > SAME_SHARE && isAlike(shape, near.find((other) => other.id === id)))
   return {
     cautions: [
-      ...shared.map(({ code, areaM2 }) => caution('overlap', { code, areaHa: Number((areaM2 / 10_000).toFixed(2)) })),
+      ...shared.map(({ code, areaM2 }) => caution('overlap', { code, areaHa: Number((areaM2 / M2_PER_HA).toFixed(2)) })),
       ...tooFine.map(({ code }) => caution('overlap_unknown', { code })),
       ...farDoubts(shape, blocks, place),
     ],

@@ -1,4 +1,5 @@
 import { ExactDecimal } from '../units/exactDecimal.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
 export type CalibrateInput =
   /** Flow of one nozzle with its spacing, or of the whole boom with its swath. */
@@ -26,7 +27,7 @@ export function calibrateSprayer(input: CalibrateInput): Calibration {
     }
     case 'catch':
       return {
-        rateLPerHa: readPositive('volumeL', input.volumeL).times(10_000).div(readPositive('areaM2', input.areaM2)).toNumber(),
+        rateLPerHa: readPositive('volumeL', input.volumeL).times(M2_PER_HA).div(readPositive('areaM2', input.areaM2)).toNumber(),
       }
     case 'course':
       return { courseFt: new ExactDecimal('340.3125').times(12).div(readPositive('widthIn', input.widthIn)).toNumber() }

@@ -4,6 +4,7 @@ import { convertQuantity } from '../units/convertQuantity.ts'
 import { calibrateSprayer } from './calibrateSprayer.ts'
 import { flowAtPressure } from './flowAtPressure.ts'
 import { NOMINAL_BAR, NOZZLES } from './nozzleSizes.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
 /** A tip is worn when its flow is off by this much, percent. @source F1.13, Florida Pest Control Examinations p. 213 (common practice; others use 5). */
 export const WORN_PERCENT = 10
@@ -42,7 +43,7 @@ export function calibrationSheet(measured: Measured, fitting: Pick<Fitting, 'noz
     case 'flow':
       return { ...blank, ...rateOf(measured.flowLPerMin, measured), flowLPerMin: measured.flowLPerMin }
     case 'plot':
-      return { ...blank, ...inBothUnits(new ExactDecimal(positive(measured.volumeL)).times(10_000).div(positive(measured.areaM2))) }
+      return { ...blank, ...inBothUnits(new ExactDecimal(positive(measured.volumeL)).times(M2_PER_HA).div(positive(measured.areaM2))) }
     case 'course': {
       const course = calibrateSprayer({ kind: 'course', widthIn: Number(measured.widthIn) })
       if (!('courseFt' in course)) throw new RangeError('a course has a length')

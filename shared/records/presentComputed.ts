@@ -6,8 +6,8 @@ import type { RecordContent } from '../contract/recordContent.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
 import { ExactDecimal } from '../units/exactDecimal.ts'
 import { airOf } from '../weather/airOf.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
-const M2_PER_HA = 10_000
 
 /** The sheet's figures, the holds that follow and what the weather comes to, as the contract shows them. */
 export function presentComputed(

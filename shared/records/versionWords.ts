@@ -9,9 +9,9 @@ import { sha256Hex } from '../evidence/sha256Hex.ts'
 import { measurePolygon } from '../geo/measurePolygon.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { roundDecimal } from '../units/roundDecimal.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
 const OUTLINE_DIGITS = 6
-const M2_PER_HA = 10_000
 
 /** What somebody wrote, as it stands. */
 export const plainWords = (text: string | null): Message[] => (text === null || text === '' ? [] : [words('versions.text', { text })])

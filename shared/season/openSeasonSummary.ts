@@ -3,8 +3,8 @@ import type { Method, RecordContent } from '../contract/recordContent.ts'
 import { civilDateIn } from '../time/civilDate.ts'
 import { ExactDecimal } from '../units/exactDecimal.ts'
 import type { BlockSummary, SeasonFigures, SeasonSummary } from './summaryTypes.ts'
+import { M2_PER_HA } from '../units/hectare.ts'
 
-const M2_PER_HA = 10_000
 const WEEK_HOURS = 7 * 24
 
 /** What of a record the summary adds up. */

@@ -1,4 +1,5 @@
 import { ExactDecimal } from './exactDecimal.ts'
+import { M2_PER_HA } from './hectare.ts'
 
 export type NumberLocale = 'en' | 'es'
 /** `digits`: exactly so many decimals. `significant`: at most so many significant digits. Neither: at most four decimals. */
@@ -6,7 +7,6 @@ export interface Rounding { digits?: number; significant?: number }
 
 const GROUP = '\u00A0'
 const MINUS = '\u2212'
-const M2_PER_HA = 10_000
 
 /**
  * A number for reading, rounded half up; the one place where figures are rounded for display.

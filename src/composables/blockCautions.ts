@@ -5,6 +5,7 @@ import { distanceKm } from '../../shared/geo/distanceKm.ts'
 import { findOverlaps, type NamedBoundary } from '../../shared/geo/findOverlaps.ts'
 import { isFarFrom } from '../../shared/geo/isFarFrom.ts'
 import { looksSwapped } from '../../shared/geo/looksSwapped.ts'
+import { M2_PER_HA } from '../../shared/units/hectare.ts'
 
 /** Something unlikely, under the code by which it is acknowledged; its sentences are messages or ready words. */
 export interface Caution {
@@ -25,7 +26,7 @@ export function findCautions(geometry: Boundary, others: readonly NamedBoundary[
   if (overlaps.length > 0) {
     cautions.push({
       code: 'geometry.overlap',
-      sentences: overlaps.map(({ code, areaM2 }) => message('overlap', { code, areaHa: toShown(areaM2 / 10_000, 2) })),
+      sentences: overlaps.map(({ code, areaM2 }) => message('overlap', { code, areaHa: toShown(areaM2 / M2_PER_HA, 2) })),
     })
   }
   if (farmPlace === null || !isFarFrom(geometry, farmPlace)) return cautions

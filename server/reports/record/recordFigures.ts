@@ -1,6 +1,7 @@
 import type { SignedRecord } from '../../../shared/contract/signedRecord.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
 import { sheetOf } from '../../../shared/records/sheetOf.ts'
+import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 
 /** What the sheet gives for a signed record today, and whether it still gives what was signed. */
 export interface RecordFigures { sheet: RecordSheet; agrees: boolean }
@@ -46,7 +47,6 @@ function newerPairs(sheet: RecordSheet, computed: SignedRecord['computed']): Pai
   ]
 }
 
-const M2_PER_HA = 10_000
 
 /** Same to twelve digits, which is finer than anything that is printed. */
 function isSameFigure(...[a, b]: Pair): boolean {

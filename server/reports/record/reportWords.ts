@@ -7,10 +7,10 @@ import { isolate } from '../parts/placeRuns.ts'
 import { STYLES } from '../parts/styles.ts'
 import type { Span } from '../parts/wrapText.ts'
 import type { PlainName } from '../../../shared/records/plainFields.ts'
+import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 
 /** Under this an area needs four decimals of a hectare, square metres. */
 const SMALL_AREA_M2 = 1000
-const M2_PER_HA = 10_000
 
 /** A report's words and figures in its language and the farm's time zone. */
 export interface ReportWords {

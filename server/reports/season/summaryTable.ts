@@ -9,8 +9,8 @@ import { STYLES } from '../parts/styles.ts'
 import type { SeasonReportData, SummaryBlock } from '../seasonReportData.ts'
 import type { SeasonWords } from './seasonWords.ts'
 import { drawBlockGlyph, drawSeasonStrip, drawStripMonths } from './seasonStripMark.ts'
+import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 
-const M2_PER_HA = 10_000
 const LEADING = 12
 const GLYPH = 17
 const regular = { ...STYLES.small, leading: LEADING }

@@ -9,8 +9,8 @@ import { FAR_KM } from '../../../shared/geo/isFarFrom.ts'
 import { looksSwapped } from '../../../shared/geo/looksSwapped.ts'
 import { Block } from '../../entities/Block.ts'
 import { invalid, unlikely, type FieldError } from '../../errors.ts'
+import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 
-const HECTARE_M2 = 10_000
 /** A shared sliver under this part of the smaller block is drawing, not a mistake. */
 const OVERLAP_SHARE = 0.05
 
@@ -52,7 +52,7 @@ function findOverlapDoubts(geometry: Boundary, others: readonly NamedBoundary[],
   const shared = overlaps.filter(({ share }) => share > OVERLAP_SHARE).map(({ code, areaM2 }) => ({
     path,
     code: 'geometry.overlap',
-    params: { code, areaHa: Number((areaM2 / HECTARE_M2).toFixed(2)) },
+    params: { code, areaHa: Number((areaM2 / M2_PER_HA).toFixed(2)) },
   }))
   return [...shared, ...tooFine.map(({ code }) => ({ path, code: 'geometry.overlap_unknown', params: { code } }))]
 }

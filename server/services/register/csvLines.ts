@@ -10,6 +10,7 @@ import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
 import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
 import { roundParts } from '../../../shared/units/roundParts.ts'
 import type { KeyedRow } from './listRegister.ts'
+import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 
 const FIGURES = [
   'record', 'version', 'state', 'season', 'method', 'block', 'part', 'areaHa', 'counts', 'stage', 'bbch', 'start', 'end', 'zone', 'amount', 'unit', 'known',
@@ -38,7 +39,6 @@ export interface CsvRecord extends KeyedRow {
 interface CsvPlace { language: Language; zone: string }
 
 const DECIMALS = 4
-const M2_PER_HA = 10_000
 
 /** The lines of one record: one for each of its block lines, in their order. */
 export function csvLines({ state, register_row: row, content: stored, computed: storedFigures, digest }: CsvRecord, place: CsvPlace): CsvLine[] {
