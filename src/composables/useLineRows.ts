@@ -11,6 +11,7 @@ import { endMoment, type LineDraft } from './lineDraft.ts'
 import { countsOf, instantOf, partOf } from './recordContent.ts'
 import type { RecordDraft } from './recordDraft.ts'
 import { readingUnit } from '../../shared/units/readingUnit.ts'
+import { M2_PER_HA } from '../../shared/units/hectare.ts'
 import { useFigures } from './useFigures.ts'
 import type { RecordStock } from './useRecordStock.ts'
 
@@ -114,7 +115,7 @@ export function useLineRows({ draft, sheet, stock, zone, errors }: LineRowsOptio
       state: stateOf(line),
       part: part === null ? t('recordForm.part.needed') : partWords(part),
       counts: countWords(line, part ?? { kind: 'whole' }),
-      area: areaHa === null || part === null ? '' : figures.area(areaHa * 10_000),
+      area: areaHa === null || part === null ? '' : figures.area(areaHa * M2_PER_HA),
       amount: written === '' ? (share === '' ? '' : `${share}\u00A0${figures.unit(shareUnit)}`) : `${written}\u00A0${figures.unit(line.amount.unit)}`,
       keepOut: keepOutOf(line),
       errors: index < 0 ? {} : errorsOf(errors.value, index),
