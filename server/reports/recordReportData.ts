@@ -1,19 +1,8 @@
 import type { Certificate } from '../../shared/contract/certificate.ts'
 import type { SignedRecord } from '../../shared/contract/signedRecord.ts'
-import type { Boundary, Position } from '../../shared/geo/geometryTypes.ts'
+import type { Boundary } from '../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../shared/messages/translate.ts'
-import type { GroundPiece } from './parts/planTypes.ts'
-
-/** Something of the ground near a block that the plan shows for orientation. */
-export interface PlanSite {
-  kind: string
-  name: string
-  geometry:
-    | Boundary
-    | { type: 'LineString'; coordinates: Position[] }
-    | { type: 'MultiLineString'; coordinates: Position[][] }
-    | { type: 'Point'; coordinates: Position }
-}
+import type { GroundPiece, PlanSite } from './parts/planTypes.ts'
 
 /** All that the PDF of a record shows: plain data, no clock, no database. */
 export interface RecordReportData {

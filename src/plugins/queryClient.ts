@@ -1,6 +1,6 @@
 import { QueryCache, QueryClient, type Query } from '@tanstack/vue-query'
 import { ApiError, NetworkError } from '../api/errors.ts'
-import { isNotFound } from '../composables/isNotFound.ts'
+import { isNotFound } from '../composables/app/isNotFound.ts'
 
 /** What the server owns, kept while it is fresh. A refusal is never asked again by itself. */
 export const queryClient = new QueryClient({

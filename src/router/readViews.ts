@@ -1,5 +1,5 @@
 import type { Router } from 'vue-router'
-import { readLaterParts } from '../composables/laterPart.ts'
+import { readLaterParts } from '../composables/app/laterPart.ts'
 import { routes } from './routes.ts'
 
 /** Where a browser has no idle callback: after the first page has settled. */

@@ -1,6 +1,6 @@
 import type { RouteRecordRaw } from 'vue-router'
 import type { Role } from '../../shared/contract/session.ts'
-import { withWords } from '../composables/laterPart.ts'
+import { withWords } from '../composables/app/laterPart.ts'
 
 declare module 'vue-router' {
   interface RouteMeta {

@@ -1,9 +1,8 @@
 import { findLineLabel } from '../../../shared/geo/findLineLabel.ts'
-import type { PlanSite } from '../recordReportData.ts'
 import type { Canvas, TextStyle } from './canvas.ts'
 import { findLabelPlace, type Stretch } from './labelPlace.ts'
 import { toPageLines, toPageRings } from './planShapes.ts'
-import type { BlockPlan, Drawing, PlanBlock } from './planTypes.ts'
+import type { BlockPlan, Drawing, PlanBlock, PlanSite } from './planTypes.ts'
 import { drawText, measureText } from './setText.ts'
 import { ELDER, STYLES } from './styles.ts'
 

@@ -1,9 +1,9 @@
 import type { Boundary, Position } from '../../../shared/geo/geometryTypes.ts'
 import { toPlan } from '../../../shared/geo/projectToPlan.ts'
-import type { PlanSite } from '../recordReportData.ts'
 import type { Canvas } from './canvas.ts'
 import type { PagePoint } from './labelPlace.ts'
 import type { PlanView } from './planScale.ts'
+import type { PlanSite } from './planTypes.ts'
 
 /** Rings of a boundary as points of the page. */
 export function toPageRings(geometry: Boundary, { view, origin }: { view: PlanView; origin: Position }): PagePoint[][] {

@@ -2,7 +2,6 @@ import type { Method } from '../../../shared/contract/recordContent.ts'
 import type { GroundKind } from '../../../shared/contract/ground.ts'
 import type { Boundary, PlaceGeometry, Position } from '../../../shared/geo/geometryTypes.ts'
 import type { Language } from '../../../shared/messages/translate.ts'
-import type { PlanSite } from '../recordReportData.ts'
 import type { Canvas } from './canvas.ts'
 import type { PlanBox, PlanView } from './planScale.ts'
 
@@ -17,6 +16,9 @@ export interface PlanBlock {
 
 /** A piece of the ground plan; without a width a line is drawn as thin as it can be seen. */
 export interface GroundPiece { kind: GroundKind; name: string | null; geometry: PlaceGeometry; widthM: number | null }
+
+/** Something of the ground near a block that the plan shows for orientation. */
+export interface PlanSite { kind: string; name: string; geometry: PlaceGeometry | Boundary | { type: 'MultiLineString'; coordinates: Position[][] } }
 
 export interface BlockPlan {
   blocks: readonly PlanBlock[]

@@ -1,4 +1,4 @@
-import { laterPart } from '../../composables/laterPart.ts'
+import { laterPart } from '../../composables/app/laterPart.ts'
 
 // Named here, not in the setup of a component: read ahead with whatever may show them, before anything has.
 

@@ -1,5 +1,5 @@
 import type { Bed, BedKind } from '../../../shared/contract/bed.ts'
-import { understoodOrNull } from '../../composables/understood.ts'
+import { understoodOrNull } from '../../composables/form/understood.ts'
 import { wholeOrNull } from './plantingDraft.ts'
 
 /** Beds or rows as they are being typed. */

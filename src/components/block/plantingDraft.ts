@@ -1,5 +1,5 @@
 import type { Planting, SoilContact } from '../../../shared/contract/planting.ts'
-import { understood } from '../../composables/understood.ts'
+import { understood } from '../../composables/form/understood.ts'
 
 export interface HarvestDraft { from: string | null; to: string | null; note: string }
 

@@ -1,7 +1,7 @@
 import { ref, watch, type Ref } from 'vue'
 import type { Check } from '../../../shared/contract/record.ts'
 import { renderMessage } from '../../../shared/messages/renderMessage.ts'
-import { useShownCheck } from '../../composables/useShownCheck.ts'
+import { useShownCheck } from '../../composables/record/useShownCheck.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
 
 const QUIET_MS = 1000

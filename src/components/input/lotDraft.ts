@@ -1,5 +1,5 @@
 import type { CreateLot, Lot } from '../../../shared/contract/input.ts'
-import { understood } from '../../composables/understood.ts'
+import { understood } from '../../composables/form/understood.ts'
 
 /** A lot as it is being typed. */
 export interface LotDraft {

@@ -1,5 +1,5 @@
 import type { CreateMaterial, LabelLimits } from '../../../shared/contract/input.ts'
-import { understood, understoodOrNull } from '../../composables/understood.ts'
+import { understood, understoodOrNull } from '../../composables/form/understood.ts'
 
 /** A material as it is being typed: every figure is text. */
 export interface MaterialDraft {

@@ -4,8 +4,8 @@ import { polygonsOf, toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
 import { hatchesOf } from './hatches.ts'
 import { createManyLayer } from './manyLayer.ts'
-import type { MapBlock } from '../../composables/mapTypes.ts'
-import type { MapMarks } from '../../composables/useMapMarks.ts'
+import type { MapBlock } from '../../composables/map/mapTypes.ts'
+import type { MapMarks } from '../../composables/map/useMapMarks.ts'
 
 /** Handles on more corners than this would hide the outline. */
 const MOST_HANDLES = 60

@@ -1,6 +1,6 @@
 import { divIcon, marker, type Map as LeafletMap, type Marker } from 'leaflet'
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 import { toLatLng } from './leafletGeometry.ts'
 
 /** A corner with the number that it has in the list beside the map. */

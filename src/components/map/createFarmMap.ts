@@ -9,9 +9,9 @@ import { pixelRings, toLatLng } from './leafletGeometry.ts'
 import { areMany } from './manyBlocks.ts'
 import type { PixelBox } from './pixelRing.ts'
 import { roomBeside, type Fitting, type MapRoom } from './roomBeside.ts'
-import type { MapMarks } from '../../composables/useMapMarks.ts'
-import type { MapGround } from '../../composables/mapGround.ts'
-import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/mapTypes.ts'
+import type { MapMarks } from '../../composables/map/useMapMarks.ts'
+import type { MapGround } from '../../composables/map/mapGround.ts'
+import type { MapBlock, MapDraft, MapEdit, MapImagery, MapView, Pixel } from '../../composables/map/mapTypes.ts'
 
 /** What the map tells its component. */
 export interface FarmMapEvents extends EditEvents {

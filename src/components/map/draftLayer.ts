@@ -2,7 +2,7 @@ import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngTuple, 
 import { cornerNumbers, numbered } from './cornerNumbers.ts'
 import { handleMarker } from './handleMarker.ts'
 import { toLatLng } from './leafletGeometry.ts'
-import type { MapDraft } from '../../composables/mapTypes.ts'
+import type { MapDraft } from '../../composables/map/mapTypes.ts'
 
 /** Handles on more corners than this would hide the outline. */
 const MOST_HANDLES = 200

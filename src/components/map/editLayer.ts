@@ -1,7 +1,7 @@
 import { divIcon, layerGroup, marker, polygon, polyline, svg, type LatLngBounds, type LatLngTuple, type LayerGroup, type Map as LeafletMap, type Marker } from 'leaflet'
 import type { CornerAt } from '../../../shared/geo/boundaryCorners.ts'
 import type { Position } from '../../../shared/geo/geometryTypes.ts'
-import type { MapEdit } from '../../composables/mapTypes.ts'
+import type { MapEdit } from '../../composables/map/mapTypes.ts'
 import { cornerNumbers, numbered, type NumberedCorner } from './cornerNumbers.ts'
 import { crossMarker } from './draftLayer.ts'
 import { toLatLng } from './leafletGeometry.ts'

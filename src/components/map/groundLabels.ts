@@ -1,6 +1,6 @@
 import { divIcon, layerGroup, marker, type LayerGroup, type Map as LeafletMap } from 'leaflet'
-import type { MapGround } from '../../composables/mapGround.ts'
-import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
+import type { MapGround } from '../../composables/map/mapGround.ts'
+import type { MapBlock, Pixel } from '../../composables/map/mapTypes.ts'
 import { findLineLabel } from '../../../shared/geo/findLineLabel.ts'
 import type { PlaceGeometry, Position } from '../../../shared/geo/geometryTypes.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'

@@ -1,5 +1,5 @@
 import { layerGroup, polygon, polyline, svg, type LayerGroup, type Map as LeafletMap, type Path, type PathOptions } from 'leaflet'
-import type { MapGround, MapGroundFeature } from '../../composables/mapGround.ts'
+import type { MapGround, MapGroundFeature } from '../../composables/map/mapGround.ts'
 import type { GroundKind } from '../../../shared/contract/ground.ts'
 import type { PlaceGeometry } from '../../../shared/geo/geometryTypes.ts'
 import { toLatLng } from './leafletGeometry.ts'

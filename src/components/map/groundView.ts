@@ -1,6 +1,6 @@
 import type { Map as LeafletMap } from 'leaflet'
-import { NO_GROUND, type MapGround } from '../../composables/mapGround.ts'
-import type { MapBlock } from '../../composables/mapTypes.ts'
+import { NO_GROUND, type MapGround } from '../../composables/map/mapGround.ts'
+import type { MapBlock } from '../../composables/map/mapTypes.ts'
 import { createGroundLabels, type OverGround } from './groundLabels.ts'
 import { createGroundLayer } from './groundLayer.ts'
 import { createSiteLayer } from './siteLayer.ts'

@@ -1,4 +1,4 @@
-import type { MapMarks } from '../../composables/useMapMarks.ts'
+import type { MapMarks } from '../../composables/map/useMapMarks.ts'
 
 /** Hatches from the lowest up: a hold lies over the work that it follows. */
 export const HATCHES = ['drench', 'foliar', 'hold'] as const

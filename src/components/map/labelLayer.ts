@@ -7,8 +7,8 @@ import { areMany } from './manyBlocks.ts'
 import { findManyLabels } from './manyLabels.ts'
 import { boxOf, type PixelBox } from './pixelRing.ts'
 import { thinRing } from './thinRing.ts'
-import type { MapMarks } from '../../composables/useMapMarks.ts'
-import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
+import type { MapMarks } from '../../composables/map/useMapMarks.ts'
+import type { MapBlock, Pixel } from '../../composables/map/mapTypes.ts'
 
 /** Codes and areas on the map, in the trough of a job that waits; each block shows as much as has room in it at this zoom. */
 export interface LabelLayer {

@@ -1,4 +1,4 @@
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 import { boxOf, eachEdge } from './pixelRing.ts'
 import { hasEdgeIn, isInside } from './ringsAtBox.ts'
 import { thinRing } from './thinRing.ts'

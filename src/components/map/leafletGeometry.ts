@@ -1,6 +1,6 @@
 import type { LatLngTuple, Map as LeafletMap } from 'leaflet'
 import type { Boundary, Position, Ring } from '../../../shared/geo/geometryTypes.ts'
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 
 /** Leaflet writes latitude first. */
 export const toLatLng = ([lon, lat]: Position): LatLngTuple => [lat, lon]

@@ -1,6 +1,6 @@
 import type { Map as LeafletMap } from 'leaflet'
 import type { Boundary } from '../../../shared/geo/geometryTypes.ts'
-import type { MapBlock, Pixel } from '../../composables/mapTypes.ts'
+import type { MapBlock, Pixel } from '../../composables/map/mapTypes.ts'
 import { codeWidth } from './codeWidth.ts'
 import { pixelRings, polygonsOf, toLatLng } from './leafletGeometry.ts'
 import type { PixelBox } from './pixelRing.ts'

@@ -1,6 +1,6 @@
 import { canvas, layerGroup, polygon, type LatLngTuple, type Map as LeafletMap, type PathOptions } from 'leaflet'
-import type { MapBlock } from '../../composables/mapTypes.ts'
-import type { MapMarks } from '../../composables/useMapMarks.ts'
+import type { MapBlock } from '../../composables/map/mapTypes.ts'
+import type { MapMarks } from '../../composables/map/useMapMarks.ts'
 import { canvasHatch } from './canvasHatches.ts'
 import { HATCHES, hatchesOf } from './hatches.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'

@@ -1,4 +1,4 @@
-import type { MapMode } from '../../composables/mapTypes.ts'
+import type { MapMode } from '../../composables/map/mapTypes.ts'
 
 /** What a key does on the map. */
 export type MapKeyAction =

@@ -1,4 +1,4 @@
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 
 /**
  * The next block in a direction: the nearest whose middle lies within 60° of it.

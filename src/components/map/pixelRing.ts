@@ -1,4 +1,4 @@
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 
 /** Ground in pixels, its sides along the axes. */
 export interface PixelBox { minX: number; minY: number; maxX: number; maxY: number }

@@ -1,4 +1,4 @@
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 import { eachEdge, type PixelBox } from './pixelRing.ts'
 
 type Rings = readonly (readonly Pixel[])[]

@@ -1,4 +1,4 @@
-import type { Pixel } from '../../composables/mapTypes.ts'
+import type { Pixel } from '../../composables/map/mapTypes.ts'
 import type { PixelBox } from './pixelRing.ts'
 import { boxOf } from './pixelRing.ts'
 import { coversBox } from './ringsAtBox.ts'

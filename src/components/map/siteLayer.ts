@@ -1,5 +1,5 @@
 import { divIcon, layerGroup, marker, polygon, svg, type LayerGroup, type Map as LeafletMap } from 'leaflet'
-import type { MapSite } from '../../composables/mapGround.ts'
+import type { MapSite } from '../../composables/map/mapGround.ts'
 import type { SiteKind } from '../../../shared/contract/ground.ts'
 import { SITE_MARKS } from '../../../shared/geo/siteMarks.ts'
 import { polygonsOf, toLatLng } from './leafletGeometry.ts'

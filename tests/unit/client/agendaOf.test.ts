@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest'
 import type { Job } from '../../../shared/contract/job.ts'
-import { agendaOf } from '../../../src/composables/agendaOf.ts'
-import { sheetStep } from '../../../src/composables/sheetStep.ts'
+import { agendaOf } from '../../../src/composables/rounds/agendaOf.ts'
+import { sheetStep } from '../../../src/composables/rounds/sheetStep.ts'
 
 const job = (blockCode: string, state: Job['state'], plannedOn: string, change: Partial<Job> = {}): Job => ({
   id: blockCode, planId: 'p', stepId: 's1', blockId: blockCode, number: 1, method: 'foliar', materialId: 'm', preparation: 'Nettle', blockCode, targetOn: plannedOn,

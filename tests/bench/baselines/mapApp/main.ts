@@ -1,8 +1,8 @@
 import type { LatLngTuple } from 'leaflet'
 import { createApp } from 'vue'
 import FarmMap from '../../../../src/components/map/FarmMap.vue'
-import { NO_GROUND } from '../../../../src/composables/mapGround.ts'
-import type { MapBlock } from '../../../../src/composables/mapTypes.ts'
+import { NO_GROUND } from '../../../../src/composables/map/mapGround.ts'
+import type { MapBlock } from '../../../../src/composables/map/mapTypes.ts'
 import type { Position } from '../../../../shared/geo/geometryTypes.ts'
 import { drawBare, inkOf } from './bareMap.ts'
 

@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest'
 import type { Job } from '../../../../shared/contract/job.ts'
-import { asKept } from '../../../../src/composables/useSeasonSheet.ts'
+import { asKept } from '../../../../src/composables/rounds/useSeasonSheet.ts'
 
 const job: Job = {
   id: 's.b.1', planId: 'p', stepId: 's', blockId: 'b', number: 1, method: 'foliar', materialId: 'm', preparation: 'Nettle ferment', blockCode: 'A3',

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import type { Boundary, Position } from '../../../../shared/geo/geometryTypes.ts'
 import { renderMessage } from '../../../../shared/messages/renderMessage.ts'
-import { cautionsOf, findCautions } from '../../../../src/composables/blockCautions.ts'
-import { outlineWords } from '../../../../src/composables/outlineWords.ts'
+import { cautionsOf, findCautions } from '../../../../src/composables/block/blockCautions.ts'
+import { outlineWords } from '../../../../src/composables/block/outlineWords.ts'
 
 const FARM: Position = [-123.31, 44.6]
 function square(lon: number, lat: number, side = 0.001): Boundary {

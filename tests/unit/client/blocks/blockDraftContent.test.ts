@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { Position } from '../../../../shared/geo/geometryTypes.ts'
-import { begunShape, emptyBlockDraft, isBlockDraftBegun, readBlockDraft } from '../../../../src/composables/blockDraftContent.ts'
+import { begunShape, emptyBlockDraft, isBlockDraftBegun, readBlockDraft } from '../../../../src/composables/block/blockDraftContent.ts'
 
 const A: Position = [-123.312, 44.606]
 const B: Position = [-123.31, 44.606]

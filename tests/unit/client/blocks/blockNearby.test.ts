@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { blockAllows } from '../../../../src/composables/blockAllows.ts'
-import { blockNearby } from '../../../../src/composables/blockNearby.ts'
-import type { MapSite } from '../../../../src/composables/mapGround.ts'
+import { blockAllows } from '../../../../src/composables/block/blockAllows.ts'
+import { blockNearby } from '../../../../src/composables/block/blockNearby.ts'
+import type { MapSite } from '../../../../src/composables/map/mapGround.ts'
 import { bufferPlace } from '../../../../shared/geo/bufferPlace.ts'
 import type { Boundary } from '../../../../shared/geo/geometryTypes.ts'
 

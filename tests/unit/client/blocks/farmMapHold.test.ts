@@ -1,8 +1,8 @@
 import { mount } from '@vue/test-utils'
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest'
 import FarmMap from '../../../../src/components/map/FarmMap.vue'
-import { NO_GROUND } from '../../../../src/composables/mapGround.ts'
-import type { MapBlock, MapView } from '../../../../src/composables/mapTypes.ts'
+import { NO_GROUND } from '../../../../src/composables/map/mapGround.ts'
+import type { MapBlock, MapView } from '../../../../src/composables/map/mapTypes.ts'
 
 const SIZES = [['clientWidth', 600], ['clientHeight', 400]] as const
 /** No size changes here. */

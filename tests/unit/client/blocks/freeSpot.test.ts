@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { freeSpot, type TakenGround } from '../../../../src/components/map/freeSpot.ts'
 import { labelSpot } from '../../../../src/components/map/labelSpot.ts'
-import type { Pixel } from '../../../../src/composables/mapTypes.ts'
+import type { Pixel } from '../../../../src/composables/map/mapTypes.ts'
 
 const box = (x: number, y: number, width: number, height: number): Pixel[] => [
   [x, y], [x + width, y], [x + width, y + height], [x, y + height],

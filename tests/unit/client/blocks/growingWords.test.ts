@@ -5,9 +5,9 @@ import type { Planting } from '../../../../shared/contract/planting.ts'
 import { bedBody, bedDraft } from '../../../../src/components/block/bedDraft.ts'
 import { landBody, landDraft } from '../../../../src/components/block/landDraft.ts'
 import { plantingBody, plantingDraft } from '../../../../src/components/block/plantingDraft.ts'
-import { blockAllows } from '../../../../src/composables/blockAllows.ts'
-import { areaDifference } from '../../../../src/composables/boundaryWords.ts'
-import { bedLine, cropLine, harvestLines, landWords, plantingLine } from '../../../../src/composables/growingWords.ts'
+import { blockAllows } from '../../../../src/composables/block/blockAllows.ts'
+import { areaDifference } from '../../../../src/composables/block/boundaryWords.ts'
+import { bedLine, cropLine, harvestLines, landWords, plantingLine } from '../../../../src/composables/block/growingWords.ts'
 
 const planting = (over: Partial<Planting> = {}): Planting => ({
   id: 'p1', blockId: 'b1', part: null, crop: 'Apple', eppo: 'MABSD', variety: 'Marl Pippin', plantedOn: '2014-03-20', removedOn: null,

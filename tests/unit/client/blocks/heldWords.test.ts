@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest'
-import { heldWords } from '../../../../src/composables/heldWords.ts'
-import { keepSame } from '../../../../src/composables/keepSame.ts'
+import { heldWords } from '../../../../src/composables/block/heldWords.ts'
+import { keepSame } from '../../../../src/composables/app/keepSame.ts'
 import { hatchesOf } from '../../../../src/components/map/hatches.ts'
 import { renderMessage } from '../../../../shared/messages/renderMessage.ts'
 

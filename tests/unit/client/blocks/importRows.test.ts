@@ -1,8 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { Candidate } from '../../../../shared/importing/importTypes.ts'
-import { comingBlocks, shapeNumber, viewOf } from '../../../../src/composables/comingBlocks.ts'
-import { countRows, faultOfAll, importRows } from '../../../../src/composables/importRows.ts'
+import { comingBlocks, shapeNumber, viewOf } from '../../../../src/composables/block/comingBlocks.ts'
+import { countRows, faultOfAll, importRows } from '../../../../src/composables/block/importRows.ts'
 
 const square: Candidate['geometry'] = { type: 'Polygon', coordinates: [[[10, 45], [10.001, 45], [10.001, 45.001], [10, 45.001], [10, 45]]] }
 const candidate = (number: number, change: Partial<Candidate> = {}): Candidate => ({

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest'
-import { jobsByBlock } from '../../../../src/composables/useMapMarks.ts'
+import { jobsByBlock } from '../../../../src/composables/map/useMapMarks.ts'
 
 it('marks a block late where one of its jobs is, whichever comes first', () => {
   const jobs = jobsByBlock([

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { labelSpot } from '../../../../src/components/map/labelSpot.ts'
-import type { Pixel } from '../../../../src/composables/mapTypes.ts'
+import type { Pixel } from '../../../../src/composables/map/mapTypes.ts'
 
 const box = (x: number, y: number, width: number, height: number): Pixel[] => [
   [x, y], [x + width, y], [x + width, y + height], [x, y + height],

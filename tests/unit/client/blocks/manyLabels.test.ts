@@ -1,7 +1,7 @@
 import { bounds, CRS, latLng, point, type LatLngExpression } from 'leaflet'
 import { describe, expect, it } from 'vitest'
 import { findManyLabels } from '../../../../src/components/map/manyLabels.ts'
-import type { MapBlock } from '../../../../src/composables/mapTypes.ts'
+import type { MapBlock } from '../../../../src/composables/map/mapTypes.ts'
 
 /** A map of 800 by 600 pixels over the given place. */
 function mapAt(place: LatLngExpression, zoom: number) {

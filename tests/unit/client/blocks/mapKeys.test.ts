@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { mapKeyAction, type MapKey } from '../../../../src/components/map/mapKeyAction.ts'
 import { neighbourOf } from '../../../../src/components/map/neighbourOf.ts'
-import type { Pixel } from '../../../../src/composables/mapTypes.ts'
+import type { Pixel } from '../../../../src/composables/map/mapTypes.ts'
 
 const key = (name: string, held: Partial<MapKey> = {}): MapKey => ({
   key: name, shiftKey: false, altKey: false, ctrlKey: false, metaKey: false, ...held,

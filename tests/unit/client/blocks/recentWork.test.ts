@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { RegisterRow } from '../../../../shared/contract/record.ts'
-import { recentWork } from '../../../../src/composables/recentWork.ts'
+import { recentWork } from '../../../../src/composables/map/recentWork.ts'
 
 const NOW = new Date('2026-06-13T12:00:00Z')
 const row = (facts: Partial<RegisterRow>): RegisterRow => ({

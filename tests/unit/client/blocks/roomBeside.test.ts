@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { roomBeside, type Fitting } from '../../../../src/components/map/roomBeside.ts'
-import type { Pixel } from '../../../../src/composables/mapTypes.ts'
+import type { Pixel } from '../../../../src/composables/map/mapTypes.ts'
 
 const ROOM = { top: 10, right: 10, bottom: 10, left: 10 }
 const square = (x: number, y: number, side = 1): Pixel[][] => [[[x, y], [x + side, y], [x + side, y + side], [x, y + side]]]

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { ref } from 'vue'
-import { useTypedPoints } from '../../../../src/composables/useTypedPoints.ts'
+import { useTypedPoints } from '../../../../src/composables/block/useTypedPoints.ts'
 
 const read = (text: string) => useTypedPoints(() => text, () => 'en')
 

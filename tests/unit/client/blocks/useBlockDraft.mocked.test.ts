@@ -1,12 +1,12 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { effectScope, nextTick, ref, shallowRef, type Ref } from 'vue'
-import { emptyBlockDraft, type BlockDraftContent } from '../../../../src/composables/blockDraftContent.ts'
-import { useBlockDraft, type BlockDraft } from '../../../../src/composables/useBlockDraft.ts'
+import { emptyBlockDraft, type BlockDraftContent } from '../../../../src/composables/block/blockDraftContent.ts'
+import { useBlockDraft, type BlockDraft } from '../../../../src/composables/block/useBlockDraft.ts'
 
 type Kept = { id: string; content: BlockDraftContent }
 const listed = shallowRef<Kept[]>([])
 const drafts = { ready: ref(true), drafts: listed, write: vi.fn(), remove: vi.fn(() => Promise.resolve()), onTakenOver: vi.fn() }
-vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => drafts }))
+vi.mock('../../../../src/composables/form/useDrafts.ts', () => ({ useDrafts: () => drafts }))
 
 const begun = (code: string): BlockDraftContent => ({ ...emptyBlockDraft('draw'), code })
 function open(): BlockDraft {

@@ -1,7 +1,7 @@
 import { effectScope, nextTick } from 'vue'
 import { describe, expect, it } from 'vitest'
 import type { PlaceGeometry, Position } from '../../../../shared/geo/geometryTypes.ts'
-import { usePlaceDrawing, type PlaceDrawing, type PlaceShape } from '../../../../src/composables/usePlaceDrawing.ts'
+import { usePlaceDrawing, type PlaceDrawing, type PlaceShape } from '../../../../src/composables/block/usePlaceDrawing.ts'
 
 const A: Position = [-123.312, 44.606]
 const B: Position = [-123.31, 44.606]

@@ -4,9 +4,9 @@ import { shallowRef } from 'vue'
 import type { Position } from '../../../../shared/geo/geometryTypes.ts'
 import { measurePolygon } from '../../../../shared/geo/measurePolygon.ts'
 import { movePosition } from '../../../../shared/geo/movePosition.ts'
-import { cornersOfShape, countPoints, emptyShape, judgeShape, type Shape } from '../../../../src/composables/shape.ts'
-import { crossingEdges } from '../../../../src/composables/outlineWords.ts'
-import { useShape, type ShapeWork } from '../../../../src/composables/useShape.ts'
+import { cornersOfShape, countPoints, emptyShape, judgeShape, type Shape } from '../../../../src/composables/block/shape.ts'
+import { crossingEdges } from '../../../../src/composables/block/outlineWords.ts'
+import { useShape, type ShapeWork } from '../../../../src/composables/block/useShape.ts'
 
 const A: Position = [-123.312, 44.606]
 const B: Position = [-123.31, 44.606]

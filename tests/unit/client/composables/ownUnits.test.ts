@@ -3,7 +3,7 @@ import { mount } from '@vue/test-utils'
 import { createPinia, setActivePinia } from 'pinia'
 import { beforeEach, describe, expect, it } from 'vitest'
 import { defineComponent, nextTick } from 'vue'
-import { useFigures } from '../../../../src/composables/useFigures.ts'
+import { useFigures } from '../../../../src/composables/app/useFigures.ts'
 import { i18n } from '../../../../src/plugins/i18n.ts'
 import { usePreferences } from '../../../../src/stores/preferences.ts'
 

@@ -2,7 +2,7 @@ import { ref } from 'vue'
 import { z } from 'zod'
 import { describe, expect, it } from 'vitest'
 import { NetworkError } from '../../../../src/api/errors.ts'
-import { useMerge } from '../../../../src/composables/useMerge.ts'
+import { useMerge } from '../../../../src/composables/form/useMerge.ts'
 import { staleWith } from '../forms/inSetup.ts'
 
 const schema = z.object({ revision: z.number(), name: z.string(), phone: z.string().nullable(), rules: z.array(z.string()) })

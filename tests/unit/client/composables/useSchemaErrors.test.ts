@@ -3,7 +3,7 @@ import { z } from 'zod'
 import { beforeEach, describe, expect, it } from 'vitest'
 import { civilDateSchema, idSchema } from '../../../../shared/contract/common.ts'
 import { translate } from '../../../../shared/messages/translate.ts'
-import { useSchemaErrors } from '../../../../src/composables/useSchemaErrors.ts'
+import { useSchemaErrors } from '../../../../src/composables/form/useSchemaErrors.ts'
 
 const schema = z.object({ steps: z.array(z.object({
   materialId: idSchema, blockIds: z.array(idSchema).min(1), everyDays: z.number().int().min(1).max(400), firstOn: civilDateSchema, kind: z.enum(['a', 'b']), name: z.string().min(1, { error: 'text.required' }),

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { ApiError, NetworkError } from '../../../../src/api/errors.ts'
-import { fieldErrors } from '../../../../src/composables/fieldErrors.ts'
-import { problemWords } from '../../../../src/composables/problemWords.ts'
-import { useTask } from '../../../../src/composables/useTask.ts'
+import { fieldErrors } from '../../../../src/composables/form/fieldErrors.ts'
+import { problemWords } from '../../../../src/composables/app/problemWords.ts'
+import { useTask } from '../../../../src/composables/form/useTask.ts'
 
 const refusal = (status: number, retryAfterS: number | null = null) =>
   new ApiError({ type: 'about:blank', title: 'x', status, code: 'x', detail: 'Use another code.', errors: [{ path: 'code', code: 'code.taken', message: 'K1 is already used.' }], requestId: 'r' }, retryAfterS)

@@ -1,7 +1,7 @@
 import { flushPromises } from '@vue/test-utils'
 import { afterEach, describe, expect, it, vi } from 'vitest'
 import RecordFiles from '../../../../src/components/files/RecordFiles.vue'
-import type { FileLine } from '../../../../src/composables/fileLine.ts'
+import type { FileLine } from '../../../../src/composables/files/fileLine.ts'
 import { mountWithWords } from '../mountWithWords.ts'
 
 const line = (overrides: Partial<FileLine> = {}): FileLine => ({

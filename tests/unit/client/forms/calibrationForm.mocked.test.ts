@@ -1,11 +1,11 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { createCalibrationSchema } from '../../../../shared/contract/calibration.ts'
-import { bodyOfCalibration, newCalibration, type CalibrationDraft } from '../../../../src/composables/calibrationDraft.ts'
-import { useInputForm } from '../../../../src/composables/useInputForm.ts'
+import { bodyOfCalibration, newCalibration, type CalibrationDraft } from '../../../../src/composables/farm/calibrationDraft.ts'
+import { useInputForm } from '../../../../src/composables/form/useInputForm.ts'
 import { inSetup, laterAnswer } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 beforeEach(() => { submit.mockReset() })
 
 const SPRAYER = '01990000-0000-7000-8000-00000000000a'

@@ -1,10 +1,10 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import type { Grant } from '../../../../shared/contract/grant.ts'
-import { useGrantForm } from '../../../../src/composables/useGrantForm.ts'
+import { useGrantForm } from '../../../../src/composables/farm/useGrantForm.ts'
 import { inSetup, laterAnswer, refusalOf } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 beforeEach(() => { submit.mockReset() })
 
 const GRANT: Grant = {

@@ -1,9 +1,9 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
-import { useInviteForm } from '../../../../src/composables/useInviteForm.ts'
+import { useInviteForm } from '../../../../src/composables/people/useInviteForm.ts'
 import { inSetup, laterAnswer, refusalOf } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 beforeEach(() => { submit.mockReset() })
 
 const begun = () => {

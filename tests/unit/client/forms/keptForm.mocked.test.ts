@@ -1,12 +1,12 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { nextTick, ref, shallowRef } from 'vue'
-import { useKeptForm, type KeptForm } from '../../../../src/composables/useKeptForm.ts'
+import { useKeptForm, type KeptForm } from '../../../../src/composables/form/useKeptForm.ts'
 import { inSetup } from './inSetup.ts'
 
 interface Line { points: readonly number[] }
 const listed = shallowRef<{ id: string; content: Line }[]>([])
 const drafts = { ready: ref(false), drafts: listed, write: vi.fn(), remove: vi.fn(() => Promise.resolve()) }
-vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => drafts }))
+vi.mock('../../../../src/composables/form/useDrafts.ts', () => ({ useDrafts: () => drafts }))
 beforeEach(() => {
   vi.clearAllMocks()
   listed.value = []

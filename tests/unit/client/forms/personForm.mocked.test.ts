@@ -1,10 +1,10 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import type { Person } from '../../../../shared/contract/person.ts'
-import { deedsFor, usePersonDeed, type PersonDeed } from '../../../../src/composables/usePersonDeed.ts'
+import { deedsFor, usePersonDeed, type PersonDeed } from '../../../../src/composables/people/usePersonDeed.ts'
 import { inSetup, laterAnswer, refusalOf } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 beforeEach(() => { submit.mockReset() })
 
 const PERSON: Person = { id: 'p1', name: 'Ruan Teal', role: 'applicator', email: null, active: true, signsWith: 'pin', hasFactor: false, revision: 3 }

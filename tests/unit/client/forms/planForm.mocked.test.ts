@@ -1,15 +1,15 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { nextTick, ref, shallowRef } from 'vue'
 import type { SeasonPlan } from '../../../../shared/contract/seasonPlan.ts'
-import { usePlanForm, type PlanDraft } from '../../../../src/composables/usePlanForm.ts'
+import { usePlanForm, type PlanDraft } from '../../../../src/composables/rounds/usePlanForm.ts'
 import { inSetup, laterAnswer, refusalOf, staleWith } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 interface Kept { id: string; content: PlanDraft }
 const listed = shallowRef<Kept[]>([])
 const drafts = { ready: ref(true), drafts: listed, write: vi.fn(), remove: vi.fn(() => Promise.resolve()) }
-vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => drafts }))
+vi.mock('../../../../src/composables/form/useDrafts.ts', () => ({ useDrafts: () => drafts }))
 beforeEach(() => {
   vi.clearAllMocks()
   submit.mockReset()

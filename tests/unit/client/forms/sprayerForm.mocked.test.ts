@@ -1,9 +1,9 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
-import { useSprayerForm } from '../../../../src/composables/useSprayerForm.ts'
+import { useSprayerForm } from '../../../../src/composables/farm/useSprayerForm.ts'
 import { inSetup, laterAnswer } from './inSetup.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 beforeEach(() => { submit.mockReset() })
 
 const filled = (draft: object) => {

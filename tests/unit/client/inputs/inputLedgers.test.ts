@@ -6,7 +6,7 @@ import { judgeStatus } from '../../../../shared/checks/judgeStatus.ts'
 import type { Lot } from '../../../../shared/contract/input.ts'
 import LotLedger from '../../../../src/components/input/LotLedger.vue'
 import MaterialLedger from '../../../../src/components/input/MaterialLedger.vue'
-import { useLotWords, type LotLine } from '../../../../src/composables/useLotWords.ts'
+import { useLotWords, type LotLine } from '../../../../src/composables/input/useLotWords.ts'
 import { i18n } from '../../../../src/plugins/i18n.ts'
 import { buildLot, buildMaterial } from './buildInputs.ts'
 

@@ -1,7 +1,7 @@
 import type { Block } from '../../../../shared/contract/block.ts'
 import type { ApplicationRecord } from '../../../../shared/contract/record.ts'
-import { emptyLine, type LineDraft } from '../../../../src/composables/lineDraft.ts'
-import { emptyComponent, emptyRecord, type ComponentDraft, type RecordDraft } from '../../../../src/composables/recordDraft.ts'
+import { emptyLine, type LineDraft } from '../../../../src/composables/record/lineDraft.ts'
+import { emptyComponent, emptyRecord, type ComponentDraft, type RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
 
 /** A block of about a hectare, with its outline. */
 export const buildBlock = (over: Partial<Block> = {}): Block => ({

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { recordContentSchema } from '../../../../shared/contract/recordContent.ts'
-import { keepSeconds } from '../../../../src/composables/keepSeconds.ts'
+import { keepSeconds } from '../../../../src/composables/record/keepSeconds.ts'
 
 const [one, two] = ['01890000-0000-7000-8000-000000000001', '01890000-0000-7000-8000-000000000002'] as [string, string]
 const content = (lines: object[]) => recordContentSchema.parse({ method: 'foliar', lines })

@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import { recordContentSchema } from '../../../../shared/contract/recordContent.ts'
 import { recordSheet } from '../../../../shared/mix/recordSheet.ts'
-import { emptyPart } from '../../../../src/composables/lineDraft.ts'
-import { contentOf, sheetInputOf, weatherOf } from '../../../../src/composables/recordContent.ts'
-import type { RecordDraft } from '../../../../src/composables/recordDraft.ts'
+import { emptyPart } from '../../../../src/composables/record/lineDraft.ts'
+import { contentOf, sheetInputOf, weatherOf } from '../../../../src/composables/record/recordContent.ts'
+import type { RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
 import { buildComponent, buildDraft, buildLine } from './buildRecord.ts'
 
 const ID = '01978000-0000-7000-8000-000000000001'

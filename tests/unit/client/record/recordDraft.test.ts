@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { endAt, endMoment, momentAt } from '../../../../src/composables/lineDraft.ts'
-import { basisChoices, basisUnits, choiceOf, chosenBasis } from '../../../../src/composables/mixUnits.ts'
-import { readKeptDraft } from '../../../../src/composables/readKeptDraft.ts'
-import { draftLike, draftOfRecord, emptyRecord } from '../../../../src/composables/recordDraft.ts'
+import { endAt, endMoment, momentAt } from '../../../../src/composables/record/lineDraft.ts'
+import { basisChoices, basisUnits, choiceOf, chosenBasis } from '../../../../src/composables/record/mixUnits.ts'
+import { readKeptDraft } from '../../../../src/composables/record/readKeptDraft.ts'
+import { draftLike, draftOfRecord, emptyRecord } from '../../../../src/composables/record/recordDraft.ts'
 import { buildDraft, buildLine, buildRecord } from './buildRecord.ts'
 
 const zone = 'America/Los_Angeles'

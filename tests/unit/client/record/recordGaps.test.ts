@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import { recordSheet } from '../../../../shared/mix/recordSheet.ts'
-import { emptyPart, type LineDraft } from '../../../../src/composables/lineDraft.ts'
-import { sheetInputOf } from '../../../../src/composables/recordContent.ts'
-import { emptyRecord, type RecordDraft } from '../../../../src/composables/recordDraft.ts'
-import { signGaps, startGap, unreadable } from '../../../../src/composables/recordGaps.ts'
+import { emptyPart, type LineDraft } from '../../../../src/composables/record/lineDraft.ts'
+import { sheetInputOf } from '../../../../src/composables/record/recordContent.ts'
+import { emptyRecord, type RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
+import { signGaps, startGap, unreadable } from '../../../../src/composables/record/recordGaps.ts'
 import { buildComponent, buildDraft, buildLine } from './buildRecord.ts'
 
 const zone = 'America/Los_Angeles'

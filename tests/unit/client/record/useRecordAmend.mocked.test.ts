@@ -4,21 +4,21 @@ import { computed, nextTick, ref } from 'vue'
 import type { Material } from '../../../../shared/contract/input.ts'
 import type { ApplicationRecord } from '../../../../shared/contract/record.ts'
 import { ApiError } from '../../../../src/api/errors.ts'
-import { useRecordAmend } from '../../../../src/composables/useRecordAmend.ts'
-import type { RecordStock } from '../../../../src/composables/useRecordStock.ts'
+import { useRecordAmend } from '../../../../src/composables/record/useRecordAmend.ts'
+import type { RecordStock } from '../../../../src/composables/record/useRecordStock.ts'
 import { inSetup } from '../forms/inSetup.ts'
 import { buildBlock, buildComponent, buildRecord } from './buildRecord.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
-vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => ({ read: () => Promise.resolve(null), write: vi.fn(), remove: () => Promise.resolve() }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useDrafts.ts', () => ({ useDrafts: () => ({ read: () => Promise.resolve(null), write: vi.fn(), remove: () => Promise.resolve() }) }))
 const record = ref<ApplicationRecord>()
-vi.mock('../../../../src/composables/useRecord.ts', () => ({ useRecord: () => ({ data: record, error: ref(null), refetch: vi.fn() }) }))
+vi.mock('../../../../src/composables/record/useRecord.ts', () => ({ useRecord: () => ({ data: record, error: ref(null), refetch: vi.fn() }) }))
 const material = (id: string, organicStatus: Material['organicStatus']): Material => ({
   id, name: id, kind: 'mineral', measuredIn: 'volume', organicStatus, statusBasis: 'Letter of 3 May', label: null, note: null, revision: 1, createdAt: '2026-01-01T00:00:00Z',
 } as Material)
 const stock = computed<RecordStock>(() => ({ farmId: 'f1', farm: null, blocks: [buildBlock()], materials: [material('m1', 'prohibited'), material('m2', 'prohibited')], lots: [], sprayers: [], people: [] }))
-vi.mock('../../../../src/composables/useRecordStock.ts', () => ({ useRecordStock: () => ({ stock, ready: ref(true), error: ref(null), again: vi.fn() }) }))
+vi.mock('../../../../src/composables/record/useRecordStock.ts', () => ({ useRecordStock: () => ({ stock, ready: ref(true), error: ref(null), again: vi.fn() }) }))
 
 beforeEach(() => {
   submit.mockReset()

@@ -3,14 +3,14 @@ import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { effectScope, ref } from 'vue'
 import { NetworkError } from '../../../../src/api/errors.ts'
 import { recordApi } from '../../../../src/api/recordApi.ts'
-import type { RecordDraft } from '../../../../src/composables/recordDraft.ts'
-import { useRecordForm } from '../../../../src/composables/useRecordForm.ts'
-import type { RecordStock } from '../../../../src/composables/useRecordStock.ts'
+import type { RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
+import { useRecordForm } from '../../../../src/composables/record/useRecordForm.ts'
+import type { RecordStock } from '../../../../src/composables/record/useRecordStock.ts'
 import { buildDraft, buildRecord } from './buildRecord.ts'
 
 type Kept = { begunAt: string; content: { typed: RecordDraft } }
 const drafts = vi.hoisted(() => ({ read: vi.fn(), write: vi.fn(), flush: vi.fn(), remove: vi.fn(), onTakenOver: vi.fn() }))
-vi.mock('../../../../src/composables/useDrafts.ts', () => ({ useDrafts: () => drafts }))
+vi.mock('../../../../src/composables/form/useDrafts.ts', () => ({ useDrafts: () => drafts }))
 
 const stock: RecordStock = { farmId: 'f1', farm: null, blocks: [], sprayers: [], materials: [], lots: [], people: [] }
 const kept = (over: Partial<RecordDraft>): Kept => ({ begunAt: '2026-06-16T06:00:00.000Z', content: { typed: buildDraft(over) } })

@@ -2,12 +2,12 @@ import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { ref } from 'vue'
 import { ApiError } from '../../../../src/api/errors.ts'
 import { recordApi } from '../../../../src/api/recordApi.ts'
-import type { RecordDraft } from '../../../../src/composables/recordDraft.ts'
-import { useRecordSend } from '../../../../src/composables/useRecordSend.ts'
+import type { RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
+import { useRecordSend } from '../../../../src/composables/record/useRecordSend.ts'
 import { buildDraft, buildRecord } from './buildRecord.ts'
 
 const submit = vi.fn()
-vi.mock('../../../../src/composables/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
+vi.mock('../../../../src/composables/form/useSubmit.ts', () => ({ useSubmit: () => ({ submit }) }))
 
 const refusal = (over: { code: string; status: number; current?: unknown }): ApiError =>
   new ApiError({ type: 'about:blank', title: 'no', detail: 'no', requestId: 'q', errors: [{ path: 'id', code: over.code, message: 'no' }], ...over })

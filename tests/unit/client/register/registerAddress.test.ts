@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { countChosen, readAddress, writeAddress } from '../../../../src/composables/registerAddress.ts'
+import { countChosen, readAddress, writeAddress } from '../../../../src/composables/register/registerAddress.ts'
 
 const block = '01980000-0000-7000-8000-000000000001'
 

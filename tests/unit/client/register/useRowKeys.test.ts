@@ -1,7 +1,7 @@
 import { mount } from '@vue/test-utils'
 import { afterEach, describe, expect, it } from 'vitest'
 import { defineComponent, h, ref } from 'vue'
-import { useRowKeys } from '../../../../src/composables/useRowKeys.ts'
+import { useRowKeys } from '../../../../src/composables/register/useRowKeys.ts'
 
 const IDS = ['a', 'b', 'c']
 const opened: string[] = []
