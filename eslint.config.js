@@ -5,6 +5,11 @@ import tseslint from 'typescript-eslint'
 
 const CODE = ['src/**/*.{ts,vue}', 'server/**/*.{ts,mjs}', 'shared/**/*.ts', 'migrations/**/*.ts']
 const TESTS = ['tests/**/*.ts']
+const everyTest = [
+  { selector: "CallExpression[callee.property.name=/^(skip|only|todo|fixme)$/][callee.object.name=/^(it|test|describe)$/]", message: 'Every test runs.' },
+  { selector: "CallExpression[callee.property.name='waitForTimeout']", message: 'Wait for what is awaited, not for time.' },
+  { selector: "CallExpression[callee.name=/^(it|test)$/] > ArrowFunctionExpression[body.type='BlockStatement']:not(:has(CallExpression[callee.name=/^(expect|assert|check)/])):not(:has(MemberExpression[object.name=/^(assert|expect|fc)$/]))", message: 'A test asserts something.' },
+]
 
 /** The clock is injected: an instant that nobody can set makes a test that nobody can trust. */
 const clock = [
@@ -145,11 +150,11 @@ export default tseslint.config(
     files: TESTS,
     rules: {
       'max-lines-per-function': 'off',
-      'no-restricted-syntax': ['error',
-        { selector: "CallExpression[callee.property.name=/^(skip|only|todo|fixme)$/][callee.object.name=/^(it|test|describe)$/]", message: 'Every test runs.' },
-        { selector: "CallExpression[callee.property.name='waitForTimeout']", message: 'Wait for what is awaited, not for time.' },
-        { selector: "CallExpression[callee.name=/^(it|test)$/] > ArrowFunctionExpression[body.type='BlockStatement']:not(:has(CallExpression[callee.name=/^(expect|assert|check)/])):not(:has(MemberExpression[object.name=/^(assert|expect|fc)$/]))", message: 'A test asserts something.' },
-      ],
+      'no-restricted-syntax': ['error', ...everyTest],
     },
+  },
+  {
+    files: ['tests/**/*.test.ts'], ignores: ['**/*.mocked.test.ts'],
+    rules: { 'no-restricted-syntax': ['error', ...everyTest, { selector: "CallExpression[callee.object.name='vi'][callee.property.name=/^(mock|doMock)$/]", message: 'Name the file *.mocked.test.ts: the others share their modules.' }] },
   },
 )
