@@ -38,7 +38,7 @@ export const DEMO_MATERIALS: Record<string, { material: MaterialFacts; lots: { c
   sulphur: {
     material: {
       name: 'Wettable sulphur', kind: 'mineral', measuredIn: 'mass', organicStatus: 'restricted', statusBasis: 'System plan, line 16',
-      label: { maxRate: { value: '6', unit: 'kg/ha' }, reEntryHours: '24', preHarvestDays: 1, source: 'sulphur label, part 5' },
+      label: { maxRate: { value: '6', unit: 'kg/ha' }, reEntryHours: '24', preHarvestDays: 7, source: 'sulphur label, part 5' },
     },
     lots: [{ code: '26-007', origin: 'bought', amount: '40', daysAgo: 210, keepsDays: 900, source: 'Marrow & Daughters' }],
   },

@@ -31,6 +31,6 @@ export const DEMO_WORK: DemoWork[] = [
   { blocks: ['T1', 'T2'], method: 'drench', everyDays: 9, sprayer: 'D1', purpose: 'Soil life in the tunnel beds', water: litres('320'), components: [{ material: 'leafMould', basis: parts('20') }], minutes: 35, from: '05:05', lastDaysAgo: 0, by: 'ruan' },
   { blocks: ['H1'], method: 'drench', everyDays: 16, sprayer: 'D1', purpose: 'Feed after cutting', water: litres('300'), components: [{ material: 'comfrey', basis: parts('15') }], minutes: 30, from: '07:10', lastDaysAgo: 6, by: 'ruan' },
   { blocks: ['V6'], method: 'foliar', everyDays: 31, sprayer: 'M2', purpose: 'Aphids on shoot tips', water: rate('510'), components: [{ material: 'soap', basis: { kind: 'ratio', parts: '100' } }], minutes: 38, from: '18:30', lastDaysAgo: 4, strongOnce: '40', by: 'tam' },
-  // Its label keeps everybody out for a day: on the demo farm something is always held.
+  // Its label keeps everybody out for a day and picking back for a week: on the demo farm something is always held.
   { blocks: ['N1'], method: 'foliar', everyDays: 31, sprayer: 'M2', purpose: 'Scab on young leaves', water: rate('500'), components: [{ material: 'sulphur', basis: { kind: 'perArea', value: '4', unit: 'kg/ha' } }], minutes: 48, from: '18:20', lastDaysAgo: 1, by: 'tam' },
 ]
