@@ -1,3 +1,4 @@
+import { v7 as uuidV7 } from 'uuid'
 import { afterAll, beforeAll, beforeEach, expect, it } from 'vitest'
 import { buildBlock, buildRecord, squareAt } from '../../server/demo/buildThings.ts'
 import { openHouse, PASSWORD, type Agent, type TestFarm, type TestHouse } from '../support/openHouse.ts'
@@ -28,6 +29,11 @@ async function signed(day: string): Promise<string> {
   await owner.post(at('records')).send(record).expect(201)
   await owner.post(at(`records/${record.id}/sign`)).send({ password: PASSWORD }).expect(200)
   return record.id
+}
+
+const boxOf = (ring: [number, number][]): [number, number, number, number] => {
+  const [xs, ys] = [ring.map(([x]) => x), ring.map(([, y]) => y)]
+  return [Math.min(...xs), Math.min(...ys), Math.max(...xs), Math.max(...ys)]
 }
 
 it('are what the labels of signed records set, while they last', async () => {
@@ -65,6 +71,24 @@ it('are read of one block over a span of days, and of no block that is not there
   expect(await of(other.id, 'from=2026-03-01&to=2027-02-28')).toEqual([])
   await owner.get(at('blocks/0198a4f2-0000-7000-8000-000000000009/holds?from=2026-06-01&to=2026-06-30')).expect(404)
   await owner.get(at(`blocks/${things.blockId}/holds?from=2026-06-30&to=2026-06-01`)).expect(422)
+})
+
+it('lie on what came of a block that was split, and of parts that were merged', async () => {
+  await signed('2026-06-14')
+  const { body: block } = await owner.get(at(`blocks/${things.blockId}`)).expect(200)
+  const [west, south, east, north] = boxOf(block.geometry.coordinates[0])
+  const middle = (west + east) / 2
+  const part = (code: string, [from, to]: [number, number]) => ({ id: uuidV7(), code, name: code, geometry: { type: 'Polygon', coordinates: [[[from, south], [to, south], [to, north], [from, north], [from, south]]] } })
+  const parts = [part('B1a', [west, middle]), part('B1b', [middle, east])]
+  await owner.post(at(`blocks/${things.blockId}/split`)).send({ revision: block.revision, parts }).expect(200)
+  const heldNow = async () => (await holds() as { blockId: string }[]).map(({ blockId }) => blockId)
+  expect(await heldNow()).toEqual(expect.arrayContaining(parts.map(({ id }) => id)))
+  const { body: strip } = await owner.get(at(`blocks/${parts[0]?.id ?? ''}/holds?from=2026-06-01&to=2026-06-30`)).expect(200)
+  expect(strip.items).toMatchObject([{ blockId: parts[0]?.id, on: '2026-06-14', pickFrom: '2026-06-20' }])
+
+  const merged = { id: uuidV7(), code: 'B9', name: 'Again' }
+  await owner.post(at('blocks/merge')).send({ blocks: parts.map(({ id }) => ({ id, revision: 1 })), block: merged }).expect(200)
+  expect(await heldNow()).toContain(merged.id)
 })
 
 it('are seen by a certifier of that season alone', async () => {

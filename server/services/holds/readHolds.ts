@@ -33,13 +33,19 @@ export function listBlockHolds({ database }: Services, actor: FarmActor, blockId
   })
 }
 
+/** Each block that was worked, with itself and all that came of it by splitting and merging: a hold lies on the ground, whatever it is called since. */
+const GROUND = `WITH RECURSIVE ground AS (
+    SELECT block_id AS worked_id, block_id FROM record_lines WHERE farm_id = $1 AND held_to >= $2
+    UNION SELECT g.worked_id, next.id FROM ground g JOIN blocks b ON b.farm_id = $1 AND b.id = g.block_id JOIN blocks next ON next.farm_id = $1 AND next.id = ANY (b.into_ids)
+  )`
+
 async function readHolds(manager: EntityManager, { farmId, zone }: FarmActor, { from, to }: SheetQuery, blockId: string | null = null): Promise<Hold[]> {
   const rows: HoldRow[] = await manager.query(
-    `SELECT l.block_id, l.record_id, r.season, r.number, l.held_to::text,
+    `${GROUND} SELECT g.block_id, l.record_id, r.season, r.number, l.held_to::text,
        coalesce(r.content->'lines'->l.position->>'startedAt', to_json(l.sort_at)#>>'{}') AS started_at,
        r.computed->'lines'->l.position->>'reEntryUntil' AS re_entry_until, r.computed->'lines'->l.position->>'pickFrom' AS pick_from
-     FROM record_lines l JOIN application_records r ON r.farm_id = l.farm_id AND r.id = l.record_id
-     WHERE l.farm_id = $1 AND l.held_to >= $2 AND ($3::uuid IS NULL OR l.block_id = $3) ORDER BY l.sort_at, l.record_id, l.position`,
+     FROM ground g JOIN record_lines l ON l.farm_id = $1 AND l.block_id = g.worked_id JOIN application_records r ON r.farm_id = l.farm_id AND r.id = l.record_id
+     WHERE l.held_to >= $2 AND ($3::uuid IS NULL OR g.block_id = $3) ORDER BY l.sort_at, l.record_id, l.position`,
     [farmId, from, blockId],
   )
   return rows
