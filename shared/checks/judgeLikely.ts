@@ -13,6 +13,8 @@ const FAST = 2
 const MUCH = 3
 /** Less of a mix than this part on the land. */
 const LITTLE = 0.5
+/** More than a mix holds, as part of it: what goes beyond reading a mark is asked about here and at the signature. */
+export const MOST_OVER = 0.02
 /** No day for work outside. Wind from strong gale on, m/s; air, °C. @source Beaufort 9 begins at 20.8 m/s, WMO No. 8, table of wind speeds; air is a house rule. */
 const READINGS = { wind: { unit: 'ms', low: 0, high: 20.8 }, air: { unit: 'degC', low: -10, high: 45 } } as const
 
@@ -40,13 +42,16 @@ function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
   return worst.slice(0, 1).map(({ check }) => check)
 }
 
-/** Far less on the land than was mixed: an amount is missing, or the rest went somewhere. */
+/** Far less on the land than was mixed: an amount is missing, or the rest went somewhere. More than was mixed: a slip, or the wrong unit. */
 function askApplied({ sheet }: RecordFacts): Check[] {
   const { appliedL, totalL, appliedKg, totalKg } = sheet
-  const [applied, total] = totalL === null ? [appliedKg, totalKg] : [appliedL, totalL]
-  if (applied === null || total === null || Number(applied) >= total * LITTLE) return []
-  const figures = { applied: roundForReader(applied), total: roundForReader(total), unit: totalL === null ? 'kg' : 'L' }
-  return [ask('house.applied', 'line:0', { title: words('likely.applied.title'), text: words('likely.applied.text', { ...figures, rest: roundForReader(total - Number(applied)) }) })]
+  const [applied, total, unit] = totalL === null ? [appliedKg, totalKg, 'kg'] : [appliedL, totalL, 'L']
+  if (applied === null || total === null) return []
+  const figures = { applied: roundForReader(applied), total: roundForReader(total), unit }
+  const said = Number(applied) > total * (1 + MOST_OVER) ? words('likely.applied.over', figures)
+    : Number(applied) < total * LITTLE ? words('likely.applied.text', { ...figures, rest: roundForReader(total - Number(applied)) })
+    : null
+  return said === null ? [] : [ask('house.applied', 'line:0', { title: words('likely.applied.title'), text: said })]
 }
 
 /** What was really taken of an ingredient, far from what the mix makes it. */

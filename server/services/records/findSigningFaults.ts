@@ -1,3 +1,4 @@
+import { MOST_OVER } from '../../../shared/checks/judgeLikely.ts'
 import type { Acknowledged } from '../../../shared/contract/common.ts'
 import type { Check } from '../../../shared/contract/record.ts'
 import type { RecordContent } from '../../../shared/contract/recordContent.ts'
@@ -9,8 +10,6 @@ import type { FieldError } from '../../errors.ts'
 const DAY_MS = 86_400_000
 /** A record entered later than this needs a reason. */
 const LATE_DAYS = 30
-/** More than this part beyond the mix cannot have come out of it. */
-const MOST_OVER = 0.02
 
 /** What a record lacks before it can be signed: what happened must be said whole. */
 export function findMissing(content: RecordContent, sheet: RecordSheet): FieldError[] {

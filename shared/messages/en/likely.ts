@@ -9,6 +9,7 @@ export const likely = {
   applied: {
     title: 'On the land',
     text: '{applied} of {total}\u00A0{unit}: {rest}\u00A0{unit} are left over. Is an amount wrong?',
+    over: '{applied} of {total}\u00A0{unit} mixed: more went on than there was. Is the unit right?',
   },
   used: {
     title: '{material}, taken',

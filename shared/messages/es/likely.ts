@@ -10,6 +10,7 @@ export const likely: Messages['likely'] = {
   applied: {
     title: 'Sobre el terreno',
     text: '{applied} de {total}\u00A0{unit}: sobran {rest}\u00A0{unit}. ¿Hay una cantidad mal?',
+    over: '{applied} de {total}\u00A0{unit} mezclados: se aplicó más de lo que había. ¿Es esa la unidad?',
   },
   used: {
     title: '{material}, lo tomado',

@@ -2,6 +2,7 @@ import { computed, type ComputedRef } from 'vue'
 import type { Check } from '../../../shared/contract/record.ts'
 import { formatDay } from '../../../shared/messages/formatDay.ts'
 import { renderMessage } from '../../../shared/messages/renderMessage.ts'
+import { holdsNow } from '../../../shared/season/holdsNow.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { blockApi } from '../../api/blockApi.ts'
 import { blockAllows, type BlockHeld } from './blockAllows.ts'
@@ -10,6 +11,7 @@ import { blockRecordLine, type BlockRecordLine } from './blockRecordLine.ts'
 import { blockWords, type BlockWords } from './blockWords.ts'
 import { heldWords } from './heldWords.ts'
 import { isNotFound } from '../app/isNotFound.ts'
+import { useClock } from '../app/useClock.ts'
 import type { BlocksPlace } from './useBlocksPlace.ts'
 import { useFarmDay } from '../farm/useFarmDay.ts'
 import { useHolds } from './useHolds.ts'
@@ -44,6 +46,7 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
   const ground = useMapGround()
   const holds = useHolds()
   const { today } = useFarmDay()
+  const { time: now } = useClock()
   const heldNow = computed<BlockHeld | null | undefined>(() => {
     if (holds.lines.value === undefined) return undefined
     const held = holds.now.value.get(id())
@@ -68,9 +71,10 @@ export function useBlockPage(id: () => string, { farmId, farm, query, blocks, la
     }),
     checks: computed(() => (block.value === null ? [] : blockAllows(block.value.code, block.value.land, blockNearby(block.value.geometry, ground.value.sites), heldNow.value))),
     held: computed(() => {
-      if (!heldNow.value || today.value === null) return null
-      const named = new Map((holds.lines.value ?? []).filter(({ blockId }) => blockId === id()).map(({ recordId, number }) => [recordId, number]))
-      return { lines: heldWords(heldNow.value, zone.value, today.value).map((words) => renderMessage(language.value, words)), records: [...named].map(([recordId, number]) => ({ id: recordId, number })) }
+      const day = today.value
+      if (!heldNow.value || day === null) return null
+      const named = new Map((holds.lines.value ?? []).filter((line) => line.blockId === id() && holdsNow([line], now.value, day).size > 0).map(({ recordId, number }) => [recordId, number]))
+      return { lines: heldWords(heldNow.value, zone.value, day).map((words) => renderMessage(language.value, words)), records: [...named].map(([recordId, number]) => ({ id: recordId, number })) }
     }),
   }
 }

@@ -16,6 +16,7 @@ export function useLateEntry({ draft, zone }: { draft: Ref<RecordDraft>; zone: R
     const ends = writtenLines(draft.value).map((line) => instantOf(endMoment(line), zone.value))
     const last = Math.max(...ends.map((end) => (end?.ok ? Date.parse(end.instant) : Number.NaN)))
     const hours = Math.floor((time.value.getTime() - last) / HOUR_MS)
-    return hours >= LATE_HOURS ? t('recordForm.late', { hours }) : ''
+    // Where nothing has ended yet there is no hour to be late by.
+    return Number.isFinite(hours) && hours >= LATE_HOURS ? t('recordForm.late', { hours }) : ''
   })
 }

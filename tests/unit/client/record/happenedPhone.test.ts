@@ -36,6 +36,16 @@ describe('the next block, on a phone', () => {
     expect(wrapper.findAll('button.row').map((row) => row.attributes('aria-expanded'))).toEqual(['false', 'true'])
   })
 
+  it('is not ended by the second press of two on Start', async () => {
+    const { draft, wrapper } = shown([emptyLine('b1')])
+    await wrapper.get('.act').trigger('click')
+    await wrapper.setProps({ rows: wrapper.props('rows').map((row) => ({ ...row, state: 'going' as const })) })
+    await wrapper.get('.act').trigger('click', { detail: 2 })
+    expect([draft.value.lines[0]?.start.time === '', draft.value.lines[0]?.end.time]).toEqual([false, ''])
+    await wrapper.get('.act').trigger('click', { detail: 1 })
+    expect(draft.value.lines[0]?.end.time).not.toBe('')
+  })
+
   it('is asked for where no other waits', async () => {
     const { wrapper, press } = shown([buildLine()])
     await press('A3')
