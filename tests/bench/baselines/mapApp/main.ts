@@ -32,7 +32,7 @@ function blockAt(index: number): MapBlock {
 async function drawOurs(host: HTMLElement): Promise<string> {
   const place = host.appendChild(document.createElement('div'))
   const app = createApp(FarmMap, {
-    blocks, chosenId: null, draft: null, edit: null, mode: 'look', ground: NO_GROUND, imagery: null, startAt: null, footPx: 0, label: 'Map', describedBy: '',
+    blocks, chosenId: null, draft: null, edit: null, mode: 'look', ground: NO_GROUND, imagery: null, startAt: null, footPx: 0, leftPx: 0, covered: () => null, label: 'Map', describedBy: '',
   })
   app.mount(place)
   await round.painted()
