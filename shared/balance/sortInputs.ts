@@ -1,5 +1,6 @@
 import type { Lot, Material } from '../contract/input.ts'
 import { lotStanding } from './lotStanding.ts'
+import { compareCodes } from '../records/compareCodes.ts'
 
 /**
  * Lots with what needs eyes first: past their last day, soon there, nearly empty, the rest by last day, empty ones at the end.
@@ -8,7 +9,7 @@ import { lotStanding } from './lotStanding.ts'
 export function sortLots<Item extends Lot>(lots: readonly Item[], today: string): Item[] {
   const ranked = lots.map((lot) => ({ lot, rank: rankOfLot(lot, today) }))
   ranked.sort(
-    (a, b) => a.rank - b.rank || compareDays(a.lot.expiresOn, b.lot.expiresOn) || compareText(a.lot.code, b.lot.code),
+    (a, b) => a.rank - b.rank || compareDays(a.lot.expiresOn, b.lot.expiresOn) || compareCodes(a.lot.code, b.lot.code),
   )
   return ranked.map(({ lot }) => lot)
 }
@@ -38,5 +39,3 @@ function compareDays(a: string | null, b: string | null): number {
   if (a === null) return 1
   return b === null || a < b ? -1 : 1
 }
-
-const compareText = (a: string, b: string): number => a.localeCompare(b, 'en', { numeric: true })

@@ -1,8 +1,8 @@
 import type { Check } from '../contract/record.ts'
+import { canonicalText } from '../evidence/canonicalText.ts'
 
 /**
  * Stops that did not stand before, word for word, about the same line or ingredient: what was said of the others says nothing of these.
- * A lot that is short counts as any other; whoever compares over a ledger that others draw on as well leaves it out first.
  */
 export function freshStops(now: readonly Check[], before: readonly Check[]): Check[] {
   const isStop = ({ verdict }: Check): boolean => verdict === 'stop'
@@ -10,7 +10,4 @@ export function freshStops(now: readonly Check[], before: readonly Check[]): Che
   return now.filter(isStop).filter((stop) => !stood.has(asText(stop)))
 }
 
-/** Params in the order of their names: a check that was read from storage may have them in another one. */
-function asText({ code, about, text }: Check): string {
-  return JSON.stringify([code, about, text.id, Object.entries(text.params).sort(([one], [other]) => (one < other ? -1 : 1))])
-}
+const asText = ({ code, about, text }: Check): string => canonicalText({ code, about, text })

@@ -1,5 +1,6 @@
 import type { Block } from '../contract/block.ts'
 import type { RegisterRow } from '../contract/record.ts'
+import { compareCodes } from '../records/compareCodes.ts'
 
 export interface LastOnBlock {
   block: Block
@@ -22,7 +23,7 @@ export function lastOnBlocks(blocks: readonly Block[], rows: readonly RegisterRo
   }
   return blocks
     .map((block) => ({ block, row: last.get(block.id) ?? null }))
-    .sort((one, other) => startOf(one.row) - startOf(other.row) || one.block.code.localeCompare(other.block.code, 'en', { numeric: true }))
+    .sort((one, other) => startOf(one.row) - startOf(other.row) || compareCodes(one.block.code, other.block.code))
 }
 
 function startOf(row: RegisterRow | null): number {

@@ -1,3 +1,5 @@
+import { compareCodes } from '../records/compareCodes.ts'
+
 /** Things by a key of theirs, in the order in which the keys first came. */
 export function groupBy<Thing>(things: readonly Thing[], keyOf: (thing: Thing) => string): Map<string, Thing[]> {
   const groups = new Map<string, Thing[]>()
@@ -11,4 +13,4 @@ export function groupBy<Thing>(things: readonly Thing[], keyOf: (thing: Thing) =
 }
 
 /** Orders things by the code of their block as a farm counts them: V2 before V10. */
-export const byBlock = (one: { blockCode: string }, other: { blockCode: string }): number => one.blockCode.localeCompare(other.blockCode, 'en', { numeric: true })
+export const byBlock = (one: { blockCode: string }, other: { blockCode: string }): number => compareCodes(one.blockCode, other.blockCode)

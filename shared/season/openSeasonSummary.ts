@@ -4,6 +4,7 @@ import { civilDateIn } from '../time/civilDate.ts'
 import { ExactDecimal } from '../units/exactDecimal.ts'
 import type { BlockSummary, SeasonFigures, SeasonSummary } from './summaryTypes.ts'
 import { M2_PER_HA } from '../units/hectare.ts'
+import { compareCodes } from '../records/compareCodes.ts'
 
 const WEEK_HOURS = 7 * 24
 
@@ -47,7 +48,7 @@ export function openSeasonSummary(zone: string): OpenSummary {
         if (pass.on !== null) spread(figures, pass.on)
       }
     },
-    finish: () => ({ figures, blocks: [...blocks.values()].sort((one, other) => one.code.localeCompare(other.code, 'en', { numeric: true })) }),
+    finish: () => ({ figures, blocks: [...blocks.values()].sort((one, other) => compareCodes(one.code, other.code)) }),
   }
 }
 
