@@ -38,10 +38,11 @@ const common = {
 
 /**
  * The app role's data source. Import it in server/database only; everything else goes through `inFarm` or `inHouse`.
+ * Statements that do not wait for each other's answers are sent together (`pipeline`): see `together`.
  * @param onFault hears of idle connections that broke; the pool replaces them.
  */
 export function createAppSource(url: string, poolSize: number, onFault: (error: unknown) => void): DataSource {
-  return new DataSource({ ...common, url, poolSize, poolErrorHandler: onFault, extra: { application_name: 'drenchleaf' } })
+  return new DataSource({ ...common, url, poolSize, poolErrorHandler: onFault, extra: { application_name: 'drenchleaf', pipeline: true } })
 }
 
 /** The owner role's data source, for migrations and rights; one connection, closed after use. */

@@ -40,6 +40,8 @@ export interface Database {
   inFarm<T>(actor: Scope, work: (manager: EntityManager) => Promise<T>): Promise<T>
   /** Accounts, one-time links: what belongs to no farm. Farm tables show no row here. */
   inHouse<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>
+  /** One statement on what belongs to no farm, without the two journeys that a transaction of its own would cost. */
+  askHouse<T>(statement: string, values: readonly unknown[]): Promise<T>
   /** The letters of every farm and of the house, for whoever carries them out; farm tables show no row here. */
   inPost<T>(work: (manager: EntityManager) => Promise<T>): Promise<T>
   /** Every farm, for timed work: each is then entered by `inFarm`. */
@@ -56,6 +58,7 @@ export async function openDatabase(url: string, poolSize: number, onFault: (erro
   return {
     inFarm: (actor, work) => inFarm(source, actor, work),
     inHouse: (work) => source.transaction(work),
+    askHouse: (statement, values) => source.query(statement, [...values]),
     inPost: (work) => source.transaction(async (manager) => {
       await manager.query("SELECT set_config('app.post', 'on', true)")
       return work(manager)

@@ -20,7 +20,7 @@ const NOTHING: CheckCodeAnswer = { found: false, number: null, seq: null, versio
 export async function findCheckCode(services: Services, text: string): Promise<CheckCodeAnswer> {
   const code = parseCheckCode(text)
   if (code === null) return NOTHING
-  const [found]: FoundEntry[] = await services.database.inHouse((manager) => manager.query('SELECT * FROM find_check_code($1)', [code]))
+  const [found]: FoundEntry[] = await services.database.askHouse('SELECT * FROM find_check_code($1)', [code])
   if (!found) return findSeasonCode(services, code)
   const { number, seq, version, signed_at: signedAt, digest, latest, withdrawn } = found
   return { ...NOTHING, found: true, number, seq, version, signedAt: signedAt.toISOString(), digest, latestVersion: latest, withdrawn }
@@ -28,7 +28,7 @@ export async function findCheckCode(services: Services, text: string): Promise<C
 
 /** The same for the code of a season report, worked out anew from the signed texts. */
 async function findSeasonCode(services: Services, code: string): Promise<CheckCodeAnswer> {
-  const [found]: FoundHead[] = await services.database.inHouse((manager) => manager.query('SELECT * FROM find_season_code($1)', [code]))
+  const [found]: FoundHead[] = await services.database.askHouse('SELECT * FROM find_season_code($1)', [code])
   if (!found) return NOTHING
   const { farm_id: farmId, season, seq, digest, taken_at: takenAt } = found
   const [then, now] = await services.database.inFarm({ farmId, seasons: [season] }, async (manager) => [

@@ -1,7 +1,6 @@
 import type { Check } from '../contract/record.ts'
 import { ExactDecimal } from '../units/exactDecimal.ts'
 import { buildCheck, words } from './buildCheck.ts'
-import { dayOfUse } from './dayOfUse.ts'
 import type { RecordFacts } from './recordFacts.ts'
 import { roundForReader } from './roundForReader.ts'
 
@@ -11,19 +10,18 @@ const APART_PERCENT = 10
 /**
  * The rate a leaf spray is planned at, beside the rate its sprayer was last measured at. Both figures stand in the check, and so in
  * the signed text. A drench is poured, not driven, and has none.
- * @returns null where no sprayer is chosen or no rate is known yet.
+ * @param usedOn `dayOfUse`. @returns null where no sprayer is chosen or no rate is known yet.
  * @source house rule: 10 %, as for a nozzle (F1.13); due dates are the farm's own.
  */
-export function judgeCalibration(facts: RecordFacts): Check | null {
+export function judgeCalibration(facts: RecordFacts, usedOn: string): Check | null {
   const { sprayer, sheet, content } = facts
   if (content.method !== 'foliar' || sprayer === null || sheet.sprayLPerHa === null) return null
   const { code, calibration } = sprayer
-  const day = dayOfUse(facts)
   const base = { code: 'house.calibration', rests: 'house', title: words('checks.calibration.title', { code }), about: 'sprayer' } as const
-  if (calibration === null || calibration.on > day) return buildCheck({ ...base, verdict: 'unknown', text: words('checks.calibration.none', { code }) })
+  if (calibration === null || calibration.on > usedOn) return buildCheck({ ...base, verdict: 'unknown', text: words('checks.calibration.none', { code }) })
   const apart = new ExactDecimal(sheet.sprayLPerHa).div(calibration.rateLPerHa).minus(1).times(100).toDecimalPlaces(1)
   const isOff = apart.abs().gte(APART_PERCENT)
-  const isPast = calibration.dueOn < day
+  const isPast = calibration.dueOn < usedOn
   const said = isOff ? 'off' : isPast ? 'past' : 'within'
   return buildCheck({
     ...base,

@@ -1,15 +1,13 @@
 import type { Check } from '../contract/record.ts'
 import { buildCheck, words } from './buildCheck.ts'
-import { dayOfUse } from './dayOfUse.ts'
-import type { FactLot, FactMaterial, RecordFacts } from './recordFacts.ts'
+import type { FactLot, FactMaterial } from './recordFacts.ts'
 
 /**
  * A lot that was used before it was there: the day of the work, the lot or the day it came is wrong. A caution, since the work itself
  * may be right.
- * @returns null where the lot was there.
+ * @param usedOn `dayOfUse`. @returns null where the lot was there.
  */
-export function judgeLotThere(facts: RecordFacts, lot: FactLot, material: FactMaterial, about: string): Check | null {
-  const usedOn = dayOfUse(facts)
+export function judgeLotThere(usedOn: string, lot: FactLot, material: FactMaterial, about: string): Check | null {
   if (usedOn >= lot.receivedOn) return null
   return buildCheck({
     code: 'lot.notThere', verdict: 'caution', rests: 'house', about,

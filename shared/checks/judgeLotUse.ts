@@ -1,18 +1,17 @@
 import type { Check } from '../contract/record.ts'
 import { buildCheck, words } from './buildCheck.ts'
-import { dayOfUse } from './dayOfUse.ts'
 import { labelSource } from './labelSource.ts'
-import type { FactLot, FactMaterial, RecordFacts } from './recordFacts.ts'
+import type { FactLot, FactMaterial } from './recordFacts.ts'
 
 /**
  * Whether a lot is used by its date. Past it, a bought lot of a labelled material is a stop, since the label is the law; any other
  * lot is a caution, since the date is the farm's own.
- * @returns null where the lot has no such date.
+ * @param usedOn `dayOfUse`. @returns null where the lot has no such date.
  */
-export function judgeLotUse(facts: RecordFacts, lot: FactLot, material: FactMaterial, about: string): Check | null {
+export function judgeLotUse(usedOn: string, lot: FactLot, material: FactMaterial, about: string): Check | null {
   if (lot.expiresOn === null) return null
   const rests = lot.origin === 'bought' && material.label !== null ? 'label' : 'house'
-  const isPast = dayOfUse(facts) > lot.expiresOn
+  const isPast = usedOn > lot.expiresOn
   const late = rests === 'label' ? 'stop' : 'caution'
   return buildCheck({
     code: 'lot.pastUse',

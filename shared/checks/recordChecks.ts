@@ -1,6 +1,7 @@
 import type { Check } from '../contract/record.ts'
 import { asUsed } from './asUsed.ts'
 import { buildCheck, words } from './buildCheck.ts'
+import { dayOfUse } from './dayOfUse.ts'
 import { judgeCalibration } from './judgeCalibration.ts'
 import { judgeCounts } from './judgeCounts.ts'
 import { judgeDeltaT } from './judgeDeltaT.ts'
@@ -20,7 +21,7 @@ import { unevenShare } from './unevenShare.ts'
 const lawNotKnown = (): Check =>
   buildCheck({ code: 'law.rules', verdict: 'unknown', rests: 'law', title: words('checks.law.title'), text: words('checks.law.none') })
 
-function checksOfComponent(facts: RecordFacts, index: number): (Check | null)[] {
+function checksOfComponent(facts: RecordFacts, usedOn: string, index: number): (Check | null)[] {
   const written = facts.content.components[index]
   const planned = facts.sheet.components[index]
   const material = facts.materials.find((one) => one.id === written?.materialId)
@@ -34,9 +35,9 @@ function checksOfComponent(facts: RecordFacts, index: number): (Check | null)[] 
     judgeLabelRate(material, sheet, { share: most.share, code }, about),
     judgeLabelStrength(material, sheet, facts.sheet, about),
     judgeStatus(material, about),
-    lot ? judgeLotThere(facts, lot, material, about) : null,
+    lot ? judgeLotThere(usedOn, lot, material, about) : null,
     lot
-      ? judgeLotUse(facts, lot, material, about)
+      ? judgeLotUse(usedOn, lot, material, about)
       : buildCheck({
           code: 'lot.none', verdict: 'unknown', rests: 'house', about,
           title: words('checks.lotNone.title', { material: material.name }), text: words('checks.lotNone.text'),
@@ -66,14 +67,15 @@ export function recordChecks(facts: RecordFacts, likely: (facts: RecordFacts) =>
   const materials = facts.content.components
     .map(({ materialId }) => facts.materials.find((one) => one.id === materialId))
     .filter((one): one is FactMaterial => one !== undefined)
+  const usedOn = dayOfUse(facts)
   const found = [
     lawNotKnown(),
-    ...facts.content.components.flatMap((_, index) => checksOfComponent(facts, index)),
+    ...facts.content.components.flatMap((_, index) => checksOfComponent(facts, usedOn, index)),
     judgeReEntry(facts, materials),
     judgePreHarvest(facts, materials),
     judgeWind(facts.content),
     judgeDeltaT(facts.content),
-    judgeCalibration(facts),
+    judgeCalibration(facts, usedOn),
     ...judgeCounts(facts),
     ...likely(facts),
     ...checksOfLots(facts),

@@ -13,7 +13,7 @@ interface Granted { farm_id: string; season: number; ends_on: string }
 export async function listGrantedSeasons(services: Services, accountId: string): Promise<GrantedSeasons> {
   const at = services.clock.now()
   const farms = (await services.database.listAccess(accountId, at)).filter(({ role }) => role === 'certifier')
-  const granted: Granted[] = await services.database.inHouse((manager) => manager.query('SELECT * FROM account_grants($1, $2)', [accountId, at]))
+  const granted: Granted[] = await services.database.askHouse('SELECT * FROM account_grants($1, $2)', [accountId, at])
   const items: GrantedSeason[] = []
   for (const farm of farms) {
     const seasons = granted.filter(({ farm_id: id }) => id === farm.farmId).sort((one, other) => other.season - one.season)

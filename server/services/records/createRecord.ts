@@ -1,6 +1,7 @@
 import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract/record.ts'
 import type { CreateRecord } from '../../../shared/contract/recordChanges.ts'
 import { personOf, type FarmActor } from '../../database/actor.ts'
+import { together } from '../../database/together.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { appendJournal } from '../appendJournal.ts'
 import { digestOf, findRepeat, insertOnce } from '../insertOnce.ts'
@@ -39,9 +40,12 @@ export async function createRecord(services: Services, actor: FarmActor, input: 
     }
     const { made, stored } = await insertOnce(manager, ApplicationRecord, row, { path: 'id', code: 'idempotency.mismatch' })
     if (!made) return { made, record: await presentRecord(manager, stored) }
-    await storeProjections(manager, row, false)
     if (jobs.length > 0) await linkJobs(manager, roundsNow(services, actor), id, jobs)
-    await appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id })
-    return { made, record: await presentRecord(manager, row) }
+    const [record] = await together([
+      presentRecord(manager, row),
+      storeProjections(manager, row, false),
+      appendJournal(services, manager, actor, { action: `record.${row.state}`, subjectId: id }),
+    ])
+    return { made, record }
   })
 }

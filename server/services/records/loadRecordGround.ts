@@ -4,6 +4,7 @@ import type { RecordContent } from '../../../shared/contract/recordContent.ts'
 import { firstStart } from '../../../shared/records/registerRow.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import type { FarmActor } from '../../database/actor.ts'
+import { together } from '../../database/together.ts'
 import { Block } from '../../entities/Block.ts'
 import { Lot } from '../../entities/Lot.ts'
 import { Material } from '../../entities/Material.ts'
@@ -33,14 +34,16 @@ export async function loadRecordGround(
   forSigning = false,
 ): Promise<RecordGround> {
   const lotIds = unique(content.components.flatMap(({ lotId }) => (lotId === null ? [] : [lotId])))
-  const blocks = await manager.findBy(Block, { farmId, id: In(unique(content.lines.map(({ blockId }) => blockId))) })
-  const materials = await manager.findBy(Material, { farmId, id: In(unique(content.components.map(({ materialId }) => materialId))) })
-  const lots = lotIds.length === 0 ? [] : await manager.find(Lot, {
-    where: { farmId, id: In(lotIds) },
-    order: { id: 'ASC' },
-    ...(forSigning && { lock: { mode: 'pessimistic_write' as const } }),
-  })
-  const sprayer = content.sprayerId === null ? null : await manager.findOneBy(Sprayer, { farmId, id: content.sprayerId })
+  const [blocks, materials, lots, sprayer] = await together([
+    manager.findBy(Block, { farmId, id: In(unique(content.lines.map(({ blockId }) => blockId))) }),
+    manager.findBy(Material, { farmId, id: In(unique(content.components.map(({ materialId }) => materialId))) }),
+    lotIds.length === 0 ? [] : manager.find(Lot, {
+      where: { farmId, id: In(lotIds) },
+      order: { id: 'ASC' },
+      ...(forSigning && { lock: { mode: 'pessimistic_write' as const } }),
+    }),
+    content.sprayerId === null ? null : manager.findOneBy(Sprayer, { farmId, id: content.sprayerId }),
+  ])
   const start = firstStart(content)
   const calibration = sprayer === null ? null : (await listInForce(manager, [sprayer], start === null ? undefined : civilDateIn(zone, start))).get(sprayer.id) ?? null
   const inOrder = <Thing extends { id: string }>(things: Thing[], ids: (string | null)[]) => things.sort((a, b) => ids.indexOf(a.id) - ids.indexOf(b.id))

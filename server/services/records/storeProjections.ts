@@ -2,6 +2,7 @@ import type { EntityManager } from 'typeorm'
 import { lastHeldDay } from '../../../shared/season/lastHeldDay.ts'
 import { civilDateIn } from '../../../shared/time/civilDate.ts'
 import { seasonOf } from '../../../shared/time/seasonOf.ts'
+import { together } from '../../database/together.ts'
 import type { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { RecordComponent } from '../../entities/RecordComponent.ts'
 import { RecordLine } from '../../entities/RecordLine.ts'
@@ -25,24 +26,25 @@ export async function storeProjections(manager: EntityManager, record: Applicati
     const { reEntryUntil, pickFrom } = computed.lines[position] ?? {}
     return record.state === 'signed' ? lastHeldDay({ reEntryUntil: reEntryUntil ?? null, pickFrom: pickFrom ?? null }, zone) : null
   }
-  await manager.insert(RecordLine, content.lines.map(({ blockId }, position) => ({ ...key, position, blockId, season, sortAt, heldTo: heldTo(position) })))
-  if (content.components.length > 0) {
-    await manager.insert(RecordComponent, content.components.map(({ materialId, lotId }, position) => {
-      const amount = computed.components[position]?.amount ?? null
-      return { ...key, position, materialId, lotId, amount: amount?.value ?? null, unit: amount?.unit ?? null, season }
-    }))
-  }
-  await manager.insert(RegisterEntry, buildRegisterEntry(record, workSeason))
-  await manager.query(
-    `INSERT INTO record_terms (farm_id, record_id, term, season, work_season, sort_at)
-     SELECT $1, $2, term, $3, $4, $5 FROM unnest($6::text[]) AS term`,
-    [record.farmId, record.id, season, workSeason, sortAt, recordTerms(record, blockNames)],
-  )
+  const components = content.components.map(({ materialId, lotId }, position) => {
+    const amount = computed.components[position]?.amount ?? null
+    return { ...key, position, materialId, lotId, amount: amount?.value ?? null, unit: amount?.unit ?? null, season }
+  })
+  await together([
+    manager.insert(RecordLine, content.lines.map(({ blockId }, position) => ({ ...key, position, blockId, season, sortAt, heldTo: heldTo(position) }))),
+    components.length > 0 && manager.insert(RecordComponent, components),
+    manager.insert(RegisterEntry, buildRegisterEntry(record, workSeason)),
+    manager.query(
+      `INSERT INTO record_terms (farm_id, record_id, term, season, work_season, sort_at)
+       SELECT $1, $2, term, $3, $4, $5 FROM unnest($6::text[]) AS term`,
+      [record.farmId, record.id, season, workSeason, sortAt, recordTerms(record, blockNames)],
+    ),
+  ])
 }
 
 /** Takes away all that finds a record, as before a draft goes. */
 export async function dropProjections(manager: EntityManager, key: { farmId: string; recordId: string }): Promise<void> {
-  for (const projection of [RecordLine, RecordComponent, RegisterEntry, RecordTerm]) await manager.delete(projection, key)
+  await together([RecordLine, RecordComponent, RegisterEntry, RecordTerm].map((projection) => manager.delete(projection, key)))
 }
 
 async function readGround(manager: EntityManager, { farmId, season, sortAt, content }: ApplicationRecord): Promise<{ blockNames: string[]; workSeason: number; zone: string }> {

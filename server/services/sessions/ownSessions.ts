@@ -22,12 +22,12 @@ export interface Who { accountId: string; sessionId: string }
 /** The sessions of an account that stand, the one seen last first. */
 export async function listOwnSessions(services: Services, { accountId, sessionId }: Who): Promise<OwnSession[]> {
   const now = services.clock.now()
-  const rows: Row[] = await services.database.inHouse((manager) => manager.query(
+  const rows: Row[] = await services.database.askHouse(
     `SELECT s.id, s.agent, s.shared_phone, s.opened_at, s.seen_at, s.ends_at, a.totp_secret IS NOT NULL AS has_factor
       FROM sessions s JOIN accounts a ON a.id = s.account_id
       WHERE s.account_id = $1 AND s.expire > now() ORDER BY s.seen_at DESC, s.opened_at DESC, s.id`,
     [accountId],
-  ))
+  )
   const isShort = rows.some((row) => row.has_factor) || (await isAskedForFactor(services, accountId))
   return rows.map((row) => {
     const onSharedPhone = row.shared_phone !== null
@@ -41,7 +41,7 @@ export async function listOwnSessions(services: Services, { accountId, sessionId
 
 /** Ends one session of an account. @throws {AppError} not-found for one that is not there or is somebody else's. */
 export async function endOwnSession({ database }: Services, accountId: string, id: string): Promise<void> {
-  const [, count]: [unknown, number] = await database.inHouse((manager) => manager.query('DELETE FROM sessions WHERE account_id = $1 AND id = $2', [accountId, id]))
+  const [, count]: [unknown, number] = await database.askHouse('DELETE FROM sessions WHERE account_id = $1 AND id = $2', [accountId, id])
   if (count === 0) throw notFound()
 }
 

@@ -22,22 +22,22 @@ type Parts = Pick<Services, 'database' | 'clock'>
 /** The session, where it has not ended and its account is open; asked at each request, so that ending either acts at once. */
 export async function readOpenSession({ database, clock }: Parts, { sid, accountId }: { sid: string; accountId: string }): Promise<OpenSession | null> {
   const now = clock.now()
-  const [row]: Row[] = await database.inHouse((manager) => manager.query(
+  const [row]: Row[] = await database.askHouse(
     `SELECT s.id, s.opened_at, s.seen_at, s.ends_at, s.shared_phone IS NOT NULL AS is_by_pin, a.totp_secret IS NOT NULL AS has_factor
       FROM sessions s JOIN accounts a ON a.id = s.account_id WHERE s.sid = $1 AND s.account_id = $2 AND a.deactivated_at IS NULL`,
     [sid, accountId],
-  ))
+  )
   if (!row) return null
   const times = { openedAt: row.opened_at, seenAt: row.seen_at, endsAt: row.ends_at, isByPin: row.is_by_pin }
   const isPast = (isShort: boolean): boolean => sessionEnd(times, isShort) <= now
   // What the farms ask is looked up only where the answer would end it.
   if (isPast(false) || (isPast(true) && (row.has_factor || (await isAskedForFactor({ database, clock }, accountId))))) {
     // Gone for good: were the farm to ask no factor tomorrow, it would stand again.
-    await database.inHouse((manager) => manager.query('DELETE FROM sessions WHERE sid = $1', [sid]))
+    await database.askHouse('DELETE FROM sessions WHERE sid = $1', [sid])
     return null
   }
   if (now.getTime() - row.seen_at.getTime() > SEEN_EVERY_MS) {
-    await database.inHouse((manager) => manager.query('UPDATE sessions SET seen_at = $2 WHERE sid = $1', [sid, now]))
+    await database.askHouse('UPDATE sessions SET seen_at = $2 WHERE sid = $1', [sid, now])
   }
   return { id: row.id, hasFactor: row.has_factor }
 }

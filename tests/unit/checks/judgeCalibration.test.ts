@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest'
+import { dayOfUse } from '../../../shared/checks/dayOfUse.ts'
 import { judgeCalibration } from '../../../shared/checks/judgeCalibration.ts'
+import type { RecordFacts } from '../../../shared/checks/recordFacts.ts'
 import { buildFacts } from './buildFacts.ts'
 
 const MEASURED = { id: 'c', on: '2026-05-01', dueOn: '2027-05-01', rateLPerHa: '400' }
@@ -7,27 +9,28 @@ const facts = (sprayLPerHa: number | null, calibration: typeof MEASURED | null =
   const built = buildFacts()
   return { ...built, sheet: { ...built.sheet, sprayLPerHa }, sprayer: { code: 'M2', calibration } }
 }
+const judge = (given: RecordFacts) => judgeCalibration(given, dayOfUse(given))
 
 describe('the planned rate beside the calibrated one', () => {
   it.each([
     [400, 'pass', '0'], [439, 'pass', '+9.8'], [440, 'caution', '+10'], [360, 'caution', '-10'], [361, 'pass', '-9.8'], [500, 'caution', '+25'],
   ])('%d L/ha beside 400 is %s', (planned, verdict, figure) => {
-    expect(judgeCalibration(facts(planned))).toMatchObject({ verdict, figure: { params: { value: figure } } })
+    expect(judge(facts(planned))).toMatchObject({ verdict, figure: { params: { value: figure } } })
   })
 
   it('is not known before the first calibration, and before it was made', () => {
-    expect(judgeCalibration(facts(400, null))).toMatchObject({ verdict: 'unknown', figure: null })
-    expect(judgeCalibration(facts(400, { ...MEASURED, on: '2099-01-01' }))).toMatchObject({ verdict: 'unknown' })
+    expect(judge(facts(400, null))).toMatchObject({ verdict: 'unknown', figure: null })
+    expect(judge(facts(400, { ...MEASURED, on: '2099-01-01' }))).toMatchObject({ verdict: 'unknown' })
   })
 
   it('cautions when the next calibration was due', () => {
-    expect(judgeCalibration(facts(400, { ...MEASURED, dueOn: '2026-05-31' }))).toMatchObject({ verdict: 'caution', text: { id: 'checks.calibration.past' } })
+    expect(judge(facts(400, { ...MEASURED, dueOn: '2026-05-31' }))).toMatchObject({ verdict: 'caution', text: { id: 'checks.calibration.past' } })
   })
 
   it('is not asked of a drench, without a sprayer, or before a rate is known', () => {
     const foliar = facts(400)
-    expect(judgeCalibration({ ...foliar, content: { ...foliar.content, method: 'drench' } })).toBeNull()
-    expect(judgeCalibration({ ...foliar, sprayer: null })).toBeNull()
-    expect(judgeCalibration(facts(null))).toBeNull()
+    expect(judge({ ...foliar, content: { ...foliar.content, method: 'drench' } })).toBeNull()
+    expect(judge({ ...foliar, sprayer: null })).toBeNull()
+    expect(judge(facts(null))).toBeNull()
   })
 })

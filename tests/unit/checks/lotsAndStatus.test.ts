@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { judgeLotLeft } from '../../../shared/checks/judgeLotLeft.ts'
+import { dayOfUse } from '../../../shared/checks/dayOfUse.ts'
 import { judgeLotThere } from '../../../shared/checks/judgeLotThere.ts'
 import { judgeLotUse } from '../../../shared/checks/judgeLotUse.ts'
 import { judgeStatus } from '../../../shared/checks/judgeStatus.ts'
@@ -30,17 +31,17 @@ describe('use by', () => {
     { name: 'a bought lot without a label is a caution', expiresOn: '2026-06-15', origin: 'bought', material: buildMaterial(), verdict: 'caution', rests: 'house' },
     { name: 'a made lot is a caution', expiresOn: '2026-06-15', origin: 'made', material: labelled, verdict: 'caution', rests: 'house' },
   ] as const)('$name', ({ expiresOn, origin, material, verdict, rests }) => {
-    expect(judgeLotUse(buildFacts(), buildLot({ expiresOn, origin }), material, 'component:0')).toMatchObject({ code: 'lot.pastUse', verdict, rests })
+    expect(judgeLotUse(dayOfUse(buildFacts()), buildLot({ expiresOn, origin }), material, 'component:0')).toMatchObject({ code: 'lot.pastUse', verdict, rests })
   })
 
   it('goes by the first start written, in the farm’s zone, not by the day it is entered', () => {
     const startedAt = ['2026-06-17T05:00:00Z', '2026-06-17T03:30:00Z', null]
     const facts = buildFacts({ content: { ...buildFacts().content, lines: startedAt.map((start) => ({ blockId: 'b1', startedAt: start, endedAt: null, amount: null })) }, now: '2026-07-01T12:00:00Z' })
-    expect(judgeLotUse(facts, buildLot({ expiresOn: '2026-06-16' }), labelled, 'component:0')?.verdict).toBe('pass')
+    expect(judgeLotUse(dayOfUse(facts), buildLot({ expiresOn: '2026-06-16' }), labelled, 'component:0')?.verdict).toBe('pass')
   })
 
   it('says nothing without a date', () => {
-    expect(judgeLotUse(buildFacts(), buildLot(), labelled, 'component:0')).toBeNull()
+    expect(judgeLotUse(dayOfUse(buildFacts()), buildLot(), labelled, 'component:0')).toBeNull()
   })
 })
 
@@ -49,13 +50,13 @@ describe('a lot that was not there yet', () => {
   const facts = buildFacts({ content: { ...buildFacts().content, lines: [{ blockId: 'b1', startedAt, endedAt: null, amount: null }] } })
 
   it('is a caution with both days', () => {
-    expect(judgeLotThere(facts, buildLot({ receivedOn: '2026-06-17' }), buildMaterial(), 'component:0')).toMatchObject({
+    expect(judgeLotThere(dayOfUse(facts), buildLot({ receivedOn: '2026-06-17' }), buildMaterial(), 'component:0')).toMatchObject({
       code: 'lot.notThere', verdict: 'caution', rests: 'house', text: { params: { usedOn: '2026-06-16', receivedOn: '2026-06-17' } },
     })
   })
 
   it.each(['2026-06-16', '2025-01-01'])('is none where it came on %s', (receivedOn) => {
-    expect(judgeLotThere(facts, buildLot({ receivedOn }), buildMaterial(), 'component:0')).toBeNull()
+    expect(judgeLotThere(dayOfUse(facts), buildLot({ receivedOn }), buildMaterial(), 'component:0')).toBeNull()
   })
 })
 
