@@ -20,7 +20,7 @@ const READINGS = { wind: { unit: 'ms', low: 0, high: 20.8 }, air: { unit: 'degC'
 
 const ask = (code: string, about: string, parts: Pick<Check, 'title' | 'text'>): Check => buildCheck({ code, verdict: 'caution', rests: 'house', about, ...parts })
 
-/** Times of a line that cannot be what was meant: none at all, one that the sprayer is too slow for, or more than half a day. The worst line alone. */
+/** Times of a line that cannot be what was meant: none at all, one that the sprayer is too slow for, or more than half a day. One question, of the worst; its title names every block that is meant, the worst first. */
 function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
   const { fullMinutes, tankL } = sheet.loads ?? { fullMinutes: null, tankL: 0 }
   const flow = fullMinutes ? tankL / fullMinutes : null
@@ -30,16 +30,18 @@ function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
     const value = litres || Number(amountKg ?? shareKg ?? 0)
     const minutes = startedAt === null || endedAt === null ? -1 : (Date.parse(endedAt) - Date.parse(startedAt)) / MINUTE_MS
     const need = flow === null ? 0 : litres / flow
-    const said = minutes < 0 || value === 0 ? null : minutes === 0 ? 'none' : minutes > LONG_MIN ? 'long' : minutes * FAST < need ? 'fast' : null
+    const said = minutes < 0 || value === 0 ? null : minutes === 0 ? 'none' as const : minutes > LONG_MIN ? 'long' as const : minutes * FAST < need ? 'fast' as const : null
     if (said === null) return []
     const params = {
       code: blocks.find(({ id }) => id === blockId)?.code ?? '', value: roundForReader(value), unit: litres > 0 ? 'L' : 'kg', minutes: roundForReader(minutes), hours: roundForReader(minutes / 60),
       ...(flow !== null && { flow: roundForReader(flow), flowUnit: 'L', need: Math.ceil(need) }),
     }
-    return [{ said, check: ask('house.time', `line:${index}`, { title: words('likely.time.title', { code: params.code }), text: words(`likely.time.${said}`, params) }) }]
+    return [{ said, index, params }]
   })
-  const worst = ['none', 'fast', 'long'].flatMap((one) => found.filter(({ said }) => said === one))
-  return worst.slice(0, 1).map(({ check }) => check)
+  const worstFirst = (['none', 'fast', 'long'] as const).flatMap((one) => found.filter(({ said }) => said === one))
+  const codes = [...new Set(worstFirst.map(({ params }) => params.code))].join(', ')
+  return worstFirst.slice(0, 1).map(({ said, index, params }) =>
+    ask('house.time', `line:${index}`, { title: words('likely.time.title', { code: codes }), text: words(`likely.time.${said}`, params) }))
 }
 
 /** Far less on the land than was mixed: an amount is missing, or the rest went somewhere. More than was mixed: a slip, or the wrong unit. */

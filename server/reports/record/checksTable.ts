@@ -1,3 +1,4 @@
+import { tallyChecks } from '../../../shared/checks/tallyChecks.ts'
 import { RESTS, VERDICTS, type Check } from '../../../shared/contract/record.ts'
 import { renderMessage } from '../../../shared/messages/renderMessage.ts'
 import type { Canvas, TextStyle } from '../parts/canvas.ts'
@@ -14,13 +15,14 @@ export function groupChecks(checks: readonly Check[]): Check[] {
     RESTS.indexOf(a.rests) - RESTS.indexOf(b.rests) || VERDICTS.indexOf(a.verdict) - VERDICTS.indexOf(b.verdict))
 }
 
-/** What stands beside the head: stops, and what is not known; never how many passed. */
+/** What stands beside the head: stops, cautions and what is not known; never how many passed. */
 export function checksTally(checks: readonly Check[], { say }: ReportWords): string {
-  const stops = checks.filter(({ verdict }) => verdict === 'stop').length
-  const unknown = checks.filter(({ verdict }) => verdict === 'unknown').length
-  if (stops === 0) return unknown === 0 ? say('checks.noStop') : say('checks.noStopUnknown', { unknown })
-  const stop = stops === 1 ? say('checks.oneStop') : say('checks.stops', { stops })
-  return unknown === 0 ? stop : say('checks.stopUnknown', { stop, unknown })
+  const { stop, caution, unknown } = tallyChecks(checks)
+  return [
+    stop === 0 ? say('checks.noStop') : stop === 1 ? say('checks.oneStop') : say('checks.stops', { stops: stop }),
+    ...(caution === 0 ? [] : [caution === 1 ? say('checks.oneCaution') : say('checks.cautions', { cautions: caution })]),
+    ...(unknown === 0 ? [] : [say('checks.unknown', { unknown })]),
+  ].join('; ')
 }
 
 /** White at both sides of a cell's words, points. */

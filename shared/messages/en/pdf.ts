@@ -187,10 +187,11 @@ export const pdf = {
   checks: {
     title: 'Checks as they stood at signing',
     noStop: 'No stop found',
-    noStopUnknown: 'No stop found; {unknown} not known',
     oneStop: '1 stop, signed as it happened',
     stops: '{stops} stops, signed as it happened',
-    stopUnknown: '{stop}; {unknown} not known',
+    oneCaution: '1 caution',
+    cautions: '{cautions} cautions',
+    unknown: '{unknown} not known',
     none: 'Nothing was judged.',
     column: { rests: 'Rests on', verdict: 'Verdict', title: 'Check', figure: 'Figure', text: 'Working', source: 'Source' },
     rests: { law: 'Law', label: 'Label', certifier: 'Certifier', house: 'House rule', recipe: 'Recipe' },

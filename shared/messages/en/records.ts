@@ -178,7 +178,9 @@ export const records = {
   ready: {
     barred: '1 stop bars Start. | {count} stops bar Start.',
     noStop: 'No stop found.',
-    noStopUnknown: 'No stop found; {count} not known.',
+    noStopBut: 'No stop found; {found}.',
+    cautions: '1 caution | {count} cautions',
+    unknowns: '{count} not known',
     never: 'A stop would not bar signing either.',
     already: 'It was already applied: record it',
     alreadyDrench: 'It was already done: record it',

@@ -187,10 +187,11 @@ export const pdf = {
   checks: {
     title: 'Comprobaciones al firmar',
     noStop: 'Ningún alto encontrado',
-    noStopUnknown: 'Ningún alto encontrado; no se sabe: {unknown}',
     oneStop: '1 alto, firmado como ocurrió',
     stops: '{stops} altos, firmado como ocurrió',
-    stopUnknown: '{stop}; no se sabe: {unknown}',
+    oneCaution: '1 cuidado',
+    cautions: '{cautions} cuidados',
+    unknown: 'no se sabe: {unknown}',
     none: 'No se juzgó nada.',
     column: { rests: 'Se apoya en', verdict: 'Veredicto', title: 'Comprobación', figure: 'Cifra', text: 'Cálculo', source: 'Fuente' },
     rests: { law: 'Ley', label: 'Etiqueta', certifier: 'Certificadora', house: 'Regla de la casa', recipe: 'Receta' },

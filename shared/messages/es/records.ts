@@ -178,7 +178,9 @@ export const records = {
   ready: {
     barred: '1 alto impide empezar. | {count} altos impiden empezar.',
     noStop: 'Ningún alto encontrado.',
-    noStopUnknown: 'Ningún alto encontrado; no se sabe: {count}.',
+    noStopBut: 'Ningún alto encontrado; {found}.',
+    cautions: '1 cuidado | {count} cuidados',
+    unknowns: 'no se sabe: {count}',
     never: 'Un alto tampoco impediría firmar.',
     already: 'Ya se aplicó: anotarlo',
     alreadyDrench: 'Ya se hizo: anotarlo',

@@ -33,11 +33,11 @@ describe('the time on a block', () => {
     expect(timed('2026-06-16T10:18:00Z', { lines: [{ areaHa: 0.75, shareL: '750', shareKg: null, amountL: '300', amountKg: null }] })).toEqual([])
   })
 
-  it('names the worst line alone', () => {
+  it('asks once, of the worst line, and names all that are meant', () => {
     const [one] = buildSheet().lines
     const lines = [line('2026-06-16T22:30:00Z'), line('2026-06-16T10:00:00Z', 'b2')]
     const checks = judgeLikely(buildFacts({ content: content({ lines }), sheet: buildSheet({ lines: [one, one].flatMap((each) => each ?? []) }) }))
-    expect(checks.map(({ about, text }) => [about, text.id, text.params['code']])).toEqual([['line:1', 'likely.time.none', 'A2']])
+    expect(checks.map(({ about, title, text }) => [about, title.params['code'], text.id, text.params['code']])).toEqual([['line:1', 'A2, A3', 'likely.time.none', 'A2']])
   })
 })
 

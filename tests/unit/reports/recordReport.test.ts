@@ -89,7 +89,7 @@ describe('what it says', () => {
       'Aphids on shoot tips', 'A3 version 3 and A2 version 2', 'A3 whole 0.882 06:50 07:36 372.0 L measured', 'As drawn 1.88 791.3 L',
       'Lot NF-31 1:20 worked out 37.50 L 19.99 18.96 18.54', 'Spray: one load of 400.0 L and one of 391.3 L 791.3 L 421.8 400.0 391.3',
       '1.9 m/s, read here; from NW', 'Oda Verrill, 35 min after the end', '16 June 2026, 09:12:40, Oda Verrill, by password',
-      'No stop found; 1 not known', 'Check code 41D7 0B9E 6A2F C853 19E4, entry 1 844 of the log', 'look it up at drenchleaf.example/check',
+      'No stop found; 1 caution; 1 not known', 'Check code 41D7 0B9E 6A2F C853 19E4, entry 1 844 of the log', 'look it up at drenchleaf.example/check',
       'The farm runs this server itself.', 'Printed 16 June 2026, 09:15', 'page 1 of 1',
     ]) expect(flat).toContain(words)
     expect(flat).not.toMatch(/\bsafe\b|compliant/i)

@@ -30,7 +30,7 @@ describe('checksTally', () => {
   const unknown = buildCheck({ verdict: 'unknown' })
   it.each([
     [[buildCheck()], 'No stop found'],
-    [[unknown, buildCheck({ verdict: 'caution' })], 'No stop found; 1 not known'],
+    [[unknown, buildCheck({ verdict: 'caution' })], 'No stop found; 1 caution; 1 not known'],
     [[stop], '1 stop, signed as it happened'],
     [[stop, stop, unknown], '2 stops, signed as it happened; 1 not known'],
   ])('never counts what passed', (checks, tally) => {
