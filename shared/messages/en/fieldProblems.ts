@@ -47,7 +47,7 @@ export const fieldProblems = {
     missing_end: 'When did it end?',
   },
   part: {
-    fraction: 'Give a part above 0 and at most 1, such as 0.5.',
+    fraction: 'Give a part above 0 and at most 1, such as 0.5, 2/5 or 40\u00A0%.',
     span: 'From comes first, and both lie within how many there are.',
     outside_block: 'Part of this lies outside block {code}. Draw it inside.',
     more_than_block: 'The lines on block {code} add up to more than the block.',

@@ -47,7 +47,7 @@ export const fieldProblems = {
     missing_end: '¿Cuándo terminó?',
   },
   part: {
-    fraction: 'Indique una parte mayor que 0 y como máximo 1, como 0.5.',
+    fraction: 'Indique una parte mayor que 0 y como máximo 1, como 0.5, 2/5 o 40\u00A0%.',
     span: 'El primero va antes, y los dos caben en los que hay.',
     outside_block: 'Una parte queda fuera de la parcela {code}. Dibújela dentro.',
     more_than_block: 'Las líneas de la parcela {code} suman más que la parcela.',

@@ -7,6 +7,7 @@ import { lineCounts } from '../../../shared/records/lineCounts.ts'
 import { mapPlainFields } from '../../../shared/records/plainFields.ts'
 import type { SheetGround } from '../../../shared/records/sheetOf.ts'
 import { toInstant, type InstantResult } from '../../../shared/time/toInstant.ts'
+import { ExactDecimal, writeDecimal } from '../../../shared/units/exactDecimal.ts'
 import { parseQuantityText } from '../../../shared/units/parseQuantityText.ts'
 import { endMoment, type AmountDraft, type LineDraft, type MomentDraft, type PartDraft } from './lineDraft.ts'
 import { writtenLines, type ComponentDraft, type ReadingDraft, type RecordDraft } from './recordDraft.ts'
@@ -30,12 +31,19 @@ function instantText(moment: MomentDraft, zone: string): string | null {
   return read?.ok ? read.instant : null
 }
 
+/** A share as it is typed, `0.4`, `2/5` or `40 %`, as plain decimal text. */
+function shareOf(text: string): string {
+  const percent = /^(.*?)\s*%\s*$/.exec(text)?.[1]
+  const number = numberOf(percent ?? text)
+  return percent === undefined || !/^\d+(\.\d+)?$/.test(number) ? number : writeDecimal(new ExactDecimal(number).div(100))
+}
+
 const typedPart = ({ kind, fraction, from, to, of, geometry }: PartDraft): unknown => {
   switch (kind) {
     case 'whole':
       return { kind }
     case 'fraction':
-      return { kind, fraction: numberOf(fraction) }
+      return { kind, fraction: shareOf(fraction) }
     case 'drawn':
       return { kind, geometry }
     default:

@@ -53,7 +53,7 @@ export function useRecordActs(record: Ref<ApplicationRecord | null>, signerIds: 
       return {
         amend: isSigned && mayChange,
         withdraw: isSigned && mayChange,
-        review: session.canManage && one !== null && !isOpen && !isReviewed,
+        review: session.canManage && isSigned && !isReviewed,
         discard: isOpen && (session.canManage || (session.canRecord && isOwn)),
       }
     }),

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { recordContentSchema } from '../../../../shared/contract/recordContent.ts'
 import { recordSheet } from '../../../../shared/mix/recordSheet.ts'
 import { emptyPart } from '../../../../src/composables/record/lineDraft.ts'
-import { contentOf, sheetInputOf, weatherOf } from '../../../../src/composables/record/recordContent.ts'
+import { contentOf, partOf, sheetInputOf, weatherOf } from '../../../../src/composables/record/recordContent.ts'
 import type { RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
 import { buildComponent, buildDraft, buildLine } from './buildRecord.ts'
 
@@ -23,6 +23,12 @@ describe('a form as the record it is sent as', () => {
     expect(content.purpose).toBe('aphids')
     expect(content.weather).toBeNull()
   })
+
+  it.each([['0.4', '0.4'], ['2/5', '0.4'], ['40 %', '0.4'], ['12,5%', '0.125'], ['100 %', '1'], ['40', null], ['120 %', null], ['%', null], ['0 %', null]])(
+    'reads a share of the block typed %s', (fraction, read) => {
+      expect(partOf({ part: { ...emptyPart(), kind: 'fraction', fraction } })).toEqual(read === null ? null : { kind: 'fraction', fraction: read })
+    },
+  )
 
   it('leaves out the end, the amount and what was used while it is only planned', () => {
     const draft = full()
