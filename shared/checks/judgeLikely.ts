@@ -11,8 +11,8 @@ const LONG_MIN = 12 * 60
 /** Times as fast as the sprayer puts out, times as much or as little as the mix makes it: a slip of the hand. */
 const FAST = 2
 const MUCH = 3
-/** Less of a mix than this part on the land. */
-const LITTLE = 0.5
+/** Less of a mix than this part on the land: what stays in a tank and its hoses is less than a tenth. House rule. */
+const LITTLE = 0.9
 /** More than a mix holds, as part of it: what goes beyond reading a mark is asked about here and at the signature. */
 export const MOST_OVER = 0.02
 /** No day for work outside. Wind from strong gale on, m/s; air, °C. @source Beaufort 9 begins at 20.8 m/s, WMO No. 8, table of wind speeds; air is a house rule. */
@@ -44,7 +44,7 @@ function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
     ask('house.time', `line:${index}`, { title: words('likely.time.title', { code: codes }), text: words(`likely.time.${said}`, params) }))
 }
 
-/** Far less on the land than was mixed: an amount is missing, or the rest went somewhere. More than was mixed: a slip, or the wrong unit. */
+/** Less on the land than was mixed: an amount is missing, or the rest went somewhere. More than was mixed: a slip, or the wrong unit. */
 function askApplied({ sheet }: RecordFacts): Check[] {
   const { appliedL, totalL, appliedKg, totalKg } = sheet
   const [applied, total, unit] = totalL === null ? [appliedKg, totalKg, 'kg'] : [appliedL, totalL, 'L']

@@ -14,6 +14,7 @@ export const recordRead = {
   zone: 'Clock of {zone}',
   from: '{start} to {end}',
   water: 'Carrier water',
+  onLand: 'In all on the land',
   total: 'Whole mix',
   sprayer: 'Sprayer',
   loads: 'Loads',

@@ -162,7 +162,7 @@ export const records = {
     oneSignature: 'One signature. The number comes with it.',
   },
   stop: {
-    title: 'It was done with 1 stop: {first} | It was done with {count} stops: {first}',
+    title: 'It was done with 1 stop: {found} | It was done with {count} stops: {found}',
     text: 'Sign it as it happened.',
     why: 'Why',
     told: 'Whom you tell',

@@ -15,6 +15,7 @@ export const recordRead: Messages['recordRead'] = {
   zone: 'Reloj de {zone}',
   from: 'de {start} a {end}',
   water: 'Agua de mezcla',
+  onLand: 'En total sobre el terreno',
   total: 'Caldo',
   sprayer: 'Pulverizador',
   loads: 'Cargas',

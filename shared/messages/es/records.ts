@@ -162,7 +162,7 @@ export const records = {
     oneSignature: 'Una firma. Con ella llega el número.',
   },
   stop: {
-    title: 'Se hizo con 1 alto: {first} | Se hizo con {count} altos: {first}',
+    title: 'Se hizo con 1 alto: {found} | Se hizo con {count} altos: {found}',
     text: 'Fírmelo como ocurrió.',
     why: 'Por qué',
     told: 'A quién avisa',

@@ -8,7 +8,7 @@ import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
 import { lineCounts } from '../../../shared/records/lineCounts.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import { endMoment, type LineDraft } from './lineDraft.ts'
-import { countsOf, instantOf, partOf } from './recordContent.ts'
+import { countsOf, instantOf, numberOf, partOf } from './recordContent.ts'
 import type { RecordDraft } from './recordDraft.ts'
 import { readingUnit } from '../../../shared/units/readingUnit.ts'
 import { M2_PER_HA } from '../../../shared/units/hectare.ts'
@@ -96,7 +96,9 @@ export function useLineRows({ draft, sheet, stock, zone, errors }: LineRowsOptio
     const end = instantOf(endMoment(line), zone.value)
     const endedAt = end?.ok ? end.instant : null
     const { reEntryUntil } = lineHolds({ endedAt }, materials, zone.value)
-    if (endedAt === null || reEntryUntil === null) return ''
+    const start = instantOf(line.start, zone.value)
+    // An end before its start is asked about: nobody reads a keep-out from it.
+    if (endedAt === null || reEntryUntil === null || (start?.ok === true && Date.parse(start.instant) > Date.parse(endedAt))) return ''
     const on = civilDateIn(zone.value, reEntryUntil)
     const time = civilTimeIn(zone.value, reEntryUntil)
     return on === civilDateIn(zone.value, endedAt) ? time : `${figures.dayShort(on)} ${time}`
@@ -116,7 +118,7 @@ export function useLineRows({ draft, sheet, stock, zone, errors }: LineRowsOptio
       part: part === null ? t('recordForm.part.needed') : partWords(part),
       counts: countWords(line, part ?? { kind: 'whole' }),
       area: areaHa === null || part === null ? '' : figures.area(areaHa * M2_PER_HA),
-      amount: written === '' ? (share === '' ? '' : `${share}\u00A0${figures.unit(shareUnit)}`) : `${written}\u00A0${figures.unit(line.amount.unit)}`,
+      amount: written === '' ? (share === '' ? '' : `${share}\u00A0${figures.unit(shareUnit)}`) : `${figures.plain(numberOf(written)) || written}\u00A0${figures.unit(line.amount.unit)}`,
       keepOut: keepOutOf(line),
       errors: index < 0 ? {} : errorsOf(errors.value, index),
     }

@@ -3,6 +3,7 @@ import { useI18n } from 'vue-i18n'
 import type { Boundary } from '../../../shared/contract/block.ts'
 import type { Message } from '../../../shared/contract/common.ts'
 import type { ApplicationRecord } from '../../../shared/contract/record.ts'
+import { sumOnLand } from '../../../shared/records/sumOnLand.ts'
 import { PLAIN_FIELDS, type PlainName } from '../../../shared/records/plainFields.ts'
 import { basisWords, countsWords, knownWords, momentWords, partWords, waterWords } from '../../../shared/records/versionWords.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
@@ -56,6 +57,8 @@ export interface RecordReading {
   /** Null for a solid, which is spread dry. */
   water: { measure: string; inAll: string } | null
   total: string
+  /** What went on all the lines together; empty for one line, or where one says nothing. */
+  onLand: string
   over: string
   loads: string
   plain: ReadWords[]
@@ -184,9 +187,10 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   return computed(() => {
     const one = record.value
     if (one === null) return null
+    const onLand = one.lines.length > 1 ? sumOnLand(one.lines) : null
     return {
       lines: linesOf(one), rows: rowsOf(one), water: waterOf(one),
-      total: totalOf(one.computed), over: overOf(one.computed), loads: loadsOf(one.computed),
+      total: totalOf(one.computed), onLand: onLand === null ? '' : worked(onLand), over: overOf(one.computed), loads: loadsOf(one.computed),
       plain: PLAIN_FIELDS.map(({ name, isLong }) => ({
         name, isLong, label: t(`records.plain.${name}.label`), words: one[name] ?? t(`records.plain.${name}.none`), isGiven: one[name] !== null,
       })),

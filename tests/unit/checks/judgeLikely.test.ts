@@ -42,7 +42,7 @@ describe('the time on a block', () => {
 })
 
 describe('what went on the land', () => {
-  it.each([['374', 1], ['375', 0], ['750', 0], ['765', 0], ['766', 1], [null, 0]] as const)('%s L of 750 L asks %d questions', (appliedL, count) => {
+  it.each([['374', 1], ['674', 1], ['675', 0], ['750', 0], ['765', 0], ['766', 1], [null, 0]] as const)('%s L of 750 L asks %d questions', (appliedL, count) => {
     const checks = judgeLikely(buildFacts({ sheet: buildSheet({ appliedL }) }))
     expect(checks).toHaveLength(count)
     if (appliedL === '374') expect(checks[0]?.text).toEqual({ id: 'likely.applied.text', params: { applied: 374, total: 750, unit: 'L', rest: 376 } })
