@@ -80,14 +80,16 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   const day = (instant: string): string => figures.day(civilDateIn(zone.value, instant))
   const when = (instant: string | null): string => (instant === null ? '' : `${day(instant)}, ${time(instant)}`)
 
-  /** A span of the farm's clock; the day is named again where it ends on another. */
-  function span(startedAt: string | null, endedAt: string | null): string {
+  /** A span of the farm's clock; the day is named again where it ends on another. @param isSaid its day stands beside it already. */
+  function span(startedAt: string | null, endedAt: string | null, isSaid = false): string {
     if (startedAt === null) return ''
+    if (isSaid && endedAt !== null) return `${time(startedAt)} – ${time(endedAt)}`
     if (endedAt === null) return when(startedAt)
     return `${when(startedAt)} – ${day(startedAt) === day(endedAt) ? time(endedAt) : when(endedAt)}`
   }
 
   function linesOf({ lines, computed: sums }: ApplicationRecord): ReadLine[] {
+    const days = new Set(lines.flatMap(({ startedAt, endedAt }) => [startedAt ?? [], endedAt ?? []].flat()).map(day))
     return lines.map((line, index) => {
       const block = ground.value.blocks.find(({ id }) => id === line.blockId)
       const share = sums.lines[index]
@@ -97,7 +99,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
         area: figures.area(share?.areaM2 ?? (line.part.kind === 'whole' ? (block?.areaM2 ?? null) : null)),
         counts: said(countsWords(line.counts)),
         stage: [line.stage ?? '', line.bbch === null ? '' : `BBCH ${line.bbch}`].filter((words) => words !== '').join(', '),
-        when: unknown(span(line.startedAt, line.endedAt)),
+        when: unknown(span(line.startedAt, line.endedAt, lines.length > 1 && days.size === 1)),
         amount: line.amount === null ? t('recordRead.unknown') : `${line.amount.known === 'workedOut' ? worked(line.amount) : asTyped(line.amount)}, ${t(`records.known.${line.amount.known}`)}`,
         keepOut: said(momentWords(share?.reEntryUntil ?? null, zone.value)),
         pickFrom: share?.pickFrom ? figures.day(share.pickFrom) : '',
