@@ -83,6 +83,12 @@ export function unreadable(draft: RecordDraft): Gaps {
   }
 }
 
+/** What is said of words in the contract's own terms. */
+const OF_TEXT = ['too_long', 'too_many_lines', 'control', 'bidi_control'] as const
+function wordsOf(issue: string): MessageId {
+  const known = OF_TEXT.find((code) => issue === `text.${code}`)
+  return known === undefined ? 'records.gap.unfit' : `problems.text.${known}`
+}
 const WORDS_AND_WEATHER = new Set<string>(['weather', ...PLAIN_FIELDS.map(({ name }) => name)])
 
 /** What the contract itself refuses of the weather and the words: a humidity over 100, a note too long. */
@@ -90,7 +96,7 @@ function refused({ draft, zone }: GapFacts): Gaps {
   const read = recordContentSchema.safeParse(contentOf(draft, { zone, happened: draft.step === 2 }))
   if (read.success) return {}
   const issues = read.error.issues.filter(({ path }) => WORDS_AND_WEATHER.has(String(path[0])))
-  return Object.fromEntries(issues.map(({ path }) => [path.slice(0, 2).join('.'), 'records.gap.unfit' as const]))
+  return Object.fromEntries(issues.map(({ path, message }) => [path.slice(0, 2).join('.'), wordsOf(message)]))
 }
 
 /** Counts that the mix is sized by and a line lacks. */

@@ -42,6 +42,13 @@ describe('what keeps a record from being signed', () => {
     expect(signGaps({ ...factsOf(happened()), hasStops: false })).toEqual({})
   })
 
+  it.each([['a'.repeat(4001), 'problems.text.too_long'], ['a\n'.repeat(300), 'problems.text.too_many_lines'], ['stirred \u202Ebackwards', 'problems.text.bidi_control']])(
+    'is a note that cannot be kept, in the words of texts: %#', (notes, gap) => {
+      const draft = happened({}, { plain: { purpose: '', licence: '', notes } })
+      expect(signGaps({ ...factsOf(draft), hasStops: false })).toEqual({ notes: gap })
+    },
+  )
+
   it('is never a stop, only what is not said about it', () => {
     expect(Object.keys(signGaps({ ...factsOf(happened()), hasStops: true }))).toEqual(['stop.why', 'stop.told', 'stop.done'])
     expect(signGaps({ ...factsOf(happened({}, { stop: { why: 'a', told: 'b', done: 'c' } })), hasStops: true })).toEqual({})
