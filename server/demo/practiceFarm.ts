@@ -62,9 +62,9 @@ async function actorOn(services: Services, accountId: string, farmId: string): P
 /** One request makes it: the account is given the id if it still stands as it was read. */
 async function holdPlace({ database }: Services, { id, practiceFarmId }: Account, farmId: string): Promise<boolean> {
   if (practiceFarmId === farmId) return false
-  const held: [unknown[], number] = await database.inHouse((manager) => manager.query(
+  const held: [unknown[], number] = await database.askHouse(
     'UPDATE accounts SET practice_farm_id = $2 WHERE id = $1 AND practice_farm_id IS NOT DISTINCT FROM $3', [id, farmId, practiceFarmId],
-  ))
+  )
   return held[1] === 1
 }
 

@@ -18,6 +18,9 @@ export const MOST_OVER = 0.02
 /** No day for work outside. Wind from strong gale on, m/s; air, °C. @source Beaufort 9 begins at 20.8 m/s, WMO No. 8, table of wind speeds; air is a house rule. */
 const READINGS = { wind: { unit: 'ms', low: 0, high: 20.8 }, air: { unit: 'degC', low: -10, high: 45 } } as const
 
+/** What a time on a block can be asked about. */
+const TIME_WORST_FIRST = ['none', 'fast', 'long'] as const
+
 const ask = (code: string, about: string, parts: Pick<Check, 'title' | 'text'>): Check => buildCheck({ code, verdict: 'caution', rests: 'house', about, ...parts })
 
 /** Times of a line that cannot be what was meant: none at all, one that the sprayer is too slow for, or more than half a day. One question, of the worst; its title names every block that is meant, the worst first. */
@@ -30,7 +33,7 @@ function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
     const value = litres || Number(amountKg ?? shareKg ?? 0)
     const minutes = startedAt === null || endedAt === null ? -1 : (Date.parse(endedAt) - Date.parse(startedAt)) / MINUTE_MS
     const need = flow === null ? 0 : litres / flow
-    const said = minutes < 0 || value === 0 ? null : minutes === 0 ? 'none' as const : minutes > LONG_MIN ? 'long' as const : minutes * FAST < need ? 'fast' as const : null
+    const said: (typeof TIME_WORST_FIRST)[number] | null = minutes < 0 || value === 0 ? null : minutes === 0 ? 'none' : minutes > LONG_MIN ? 'long' : minutes * FAST < need ? 'fast' : null
     if (said === null) return []
     const params = {
       code: blocks.find(({ id }) => id === blockId)?.code ?? '', value: roundForReader(value), unit: litres > 0 ? 'L' : 'kg', minutes: roundForReader(minutes), hours: roundForReader(minutes / 60),
@@ -38,9 +41,9 @@ function askTime({ content, sheet, blocks }: RecordFacts): Check[] {
     }
     return [{ said, index, params }]
   })
-  const worstFirst = (['none', 'fast', 'long'] as const).flatMap((one) => found.filter(({ said }) => said === one))
-  const codes = [...new Set(worstFirst.map(({ params }) => params.code))].join(', ')
-  return worstFirst.slice(0, 1).map(({ said, index, params }) =>
+  const inOrder = TIME_WORST_FIRST.flatMap((one) => found.filter(({ said }) => said === one))
+  const codes = [...new Set(inOrder.map(({ params }) => params.code))].join(', ')
+  return inOrder.slice(0, 1).map(({ said, index, params }) =>
     ask('house.time', `line:${index}`, { title: words('likely.time.title', { code: codes }), text: words(`likely.time.${said}`, params) }))
 }
 

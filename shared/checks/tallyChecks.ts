@@ -1,10 +1,9 @@
 import type { Check } from '../contract/record.ts'
 
-export interface Tally {
-  stop: number
-  caution: number
-  unknown: number
-}
+/** The verdicts that are counted, worst first. */
+export const TALLIED = ['stop', 'caution', 'unknown'] as const
+
+export type Tally = Record<(typeof TALLIED)[number], number>
 
 /** How many stops, cautions and unknowns; passes are never counted. */
 export function tallyChecks(checks: readonly Pick<Check, 'verdict'>[]): Tally {

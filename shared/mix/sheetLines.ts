@@ -9,6 +9,8 @@ import type { ReadSheet } from './readSheet.ts'
 import { shareOut } from './shareOut.ts'
 import type { SheetFinding, SheetInput, SheetLine } from './sheetTypes.ts'
 
+type LineAmount = Pick<SheetLine, 'amountL' | 'amountKg'>
+
 /** Each line's area, its share of the mix and the amount written down on it. */
 export function sheetLines(
   input: SheetInput, sheet: ReadSheet, { totalL, totalKg }: { totalL: ExactDecimal | null; totalKg: ExactDecimal | null }, findings: SheetFinding[],
@@ -17,13 +19,11 @@ export function sheetLines(
   const litres = totalL && weights && shareOut(totalL, weights)
   const kilograms = totalKg && weights && shareOut(totalKg, weights)
   return sheet.lineAreasM2.map((areaM2, index) => {
-    const amount = readAmount(input.lines[index]?.amount, `lines.${index}.amount`, findings)
     return {
       areaHa: Number(writeDecimal(areaM2.div(UNITS.ha.toSi[0]))),
       shareL: litres?.[index]?.toFixed() ?? null,
       shareKg: kilograms?.[index]?.toFixed() ?? null,
-      amountL: amount?.dimension === 'volume' ? amount.si : null,
-      amountKg: amount?.dimension === 'mass' ? amount.si : null,
+      ...readAmount(input.lines[index]?.amount, `lines.${index}.amount`, findings),
     }
   })
 }
@@ -46,7 +46,7 @@ export function sizedByEach({ water, bases }: Pick<ReadSheet, 'water' | 'bases'>
 }
 
 /** Sum of what is written on the lines, one measure; null until each line says one. */
-export function sumAmounts(lines: readonly SheetLine[], key: 'amountL' | 'amountKg'): string | null {
+export function sumAmounts<Key extends keyof LineAmount>(lines: readonly Pick<LineAmount, Key>[], key: Key): string | null {
   if (lines.length === 0) return null
   let sum = new ExactDecimal(0)
   for (const line of lines) {
@@ -57,15 +57,15 @@ export function sumAmounts(lines: readonly SheetLine[], key: 'amountL' | 'amount
   return writeDecimal(sum)
 }
 
-function readAmount(
-  amount: SheetInput['lines'][number]['amount'], path: string, findings: SheetFinding[],
-): { si: string; dimension: 'volume' | 'mass' } | null {
-  if (!amount) return null
+/** What is written on a line, by its measure. */
+export function readAmount(amount: SheetInput['lines'][number]['amount'], path: string, findings: SheetFinding[]): LineAmount {
+  const none = { amountL: null, amountKg: null }
+  if (!amount) return none
   const dimension = Object.hasOwn(UNITS, amount.unit) ? dimensionOf(amount.unit as UnitCode) : null
   if (dimension !== 'volume' && dimension !== 'mass') {
     findings.push({ code: 'unit.not_allowed', params: { unit: amount.unit }, path })
-    return null
+    return none
   }
   const value = readPositive(amount.value)
-  return value && { si: writeDecimal(siValue(value, amount.unit as UnitCode)), dimension }
+  return value === null ? none : { ...none, [dimension === 'volume' ? 'amountL' : 'amountKg']: writeDecimal(siValue(value, amount.unit as UnitCode)) }
 }

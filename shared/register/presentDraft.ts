@@ -11,6 +11,7 @@ import type { RecordSheet } from '../mix/sheetTypes.ts'
 import { lineCounts } from '../records/lineCounts.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { presentRate, presentVolume, type RegisterPlace } from './presentRow.ts'
+import { presentBlocks } from './presentBlocks.ts'
 import type { RegisterLine } from './registerLine.ts'
 
 /** Half-typed content of a record: whatever does not read is left out of the line. */
@@ -68,8 +69,7 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, place: Registe
     onDevice: true,
     version: 1,
     method: content.method,
-    blockIds: blocks.map(({ id }) => id),
-    codes: blocks.map(({ code }) => code).join(', '),
+    ...presentBlocks(blocks),
     preparation: namesOf(content.components.map(({ materialId }) => materialId), stock.materials, 'name'),
     lots: namesOf(content.components.map(({ lotId }) => lotId), stock.lots, 'code'),
     day: formatDayShort(language, civilDateIn(zone, at)),

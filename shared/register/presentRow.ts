@@ -4,6 +4,7 @@ import { figureFor, figureIn, quantityFor, unitFor, type Reader } from '../messa
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { formatNumber } from '../units/formatQuantity.ts'
 import type { UnitCode } from '../units/unitTable.ts'
+import { presentBlocks } from './presentBlocks.ts'
 import type { RegisterLine } from './registerLine.ts'
 
 export interface RegisterPlace extends Reader {
@@ -28,8 +29,7 @@ export function presentRow(row: RegisterRow, place: RegisterPlace): RegisterLine
     onDevice: false,
     version: row.version,
     method: row.method,
-    blockIds: row.blocks.map(({ id }) => id),
-    codes: row.blocks.map(({ code }) => code).join(', '),
+    ...presentBlocks(row.blocks),
     preparation: row.preparations.join(', '),
     lots: row.lots.join(', '),
     day: at === null ? '' : formatDayShort(language, civilDateIn(zone, at)),

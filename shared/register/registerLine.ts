@@ -14,6 +14,8 @@ export interface RegisterLine {
   method: Method | null
   blockIds: string[]
   codes: string
+  /** As much of them as a narrow column holds. */
+  codesShort: string
   preparation: string
   lots: string
   day: string

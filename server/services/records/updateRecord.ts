@@ -2,6 +2,7 @@ import type { ApplicationRecord as RecordAnswer } from '../../../shared/contract
 import type { UpdateRecord } from '../../../shared/contract/recordChanges.ts'
 import { canonicalText } from '../../../shared/evidence/canonicalText.ts'
 import type { FarmActor } from '../../database/actor.ts'
+import { together } from '../../database/together.ts'
 import { ApplicationRecord } from '../../entities/ApplicationRecord.ts'
 import { AppError, notFound, stale } from '../../errors.ts'
 import { appendJournal } from '../appendJournal.ts'
@@ -38,9 +39,12 @@ export async function updateRecord(services: Services, actor: FarmActor, id: str
     const changes = { ...columns, revision: revision + 1 }
     await updateRow(manager, ApplicationRecord, { farmId: actor.farmId, id }, changes)
     const written = { ...record, ...changes }
-    await storeProjections(manager, written, true)
     if (jobs !== undefined) await linkJobs(manager, roundsNow(services, actor), id, jobs)
-    await appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } })
-    return presentRecord(manager, written)
+    const [answer] = await together([
+      presentRecord(manager, written),
+      storeProjections(manager, written, true),
+      appendJournal(services, manager, actor, { action: 'record.updated', subjectId: id, detail: { revision: written.revision } }),
+    ])
+    return answer
   })
 }

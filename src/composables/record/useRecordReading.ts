@@ -89,7 +89,7 @@ export function useRecordReading(record: Ref<ApplicationRecord | null>, ground: 
   }
 
   function linesOf({ lines, computed: sums }: ApplicationRecord): ReadLine[] {
-    const days = new Set(lines.flatMap(({ startedAt, endedAt }) => [startedAt ?? [], endedAt ?? []].flat()).map(day))
+    const days = new Set(lines.flatMap(({ startedAt, endedAt }) => [startedAt, endedAt]).filter((at) => at !== null).map(day))
     return lines.map((line, index) => {
       const block = ground.value.blocks.find(({ id }) => id === line.blockId)
       const share = sums.lines[index]
