@@ -1,5 +1,6 @@
 import type { Page } from '@playwright/test'
 import { findFaults } from './support/axe.ts'
+import { findWide } from './support/findWide.ts'
 import { RecordForm } from './support/recordForm.ts'
 import { listScreens, openScreen, walkScreens } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
@@ -21,12 +22,6 @@ async function setLight(page: Page, light: 'day' | 'dawn'): Promise<void> {
   }, light)
 }
 
-/** What is wider than where it stands, and so cut off or scrolled sideways. */
-function findWide(): string[] {
-  return [document.documentElement, ...document.querySelectorAll('#page, #page > .body, .panel, .label')]
-    .filter((element) => element.scrollWidth > element.clientWidth + 1).map((element) => `${element.tagName} ${element.className} ${element.scrollWidth} in ${element.clientWidth}`)
-}
-
 // One walk for all that every screen has to be: each page is opened once.
 test('on every screen axe finds nothing, by day and at dawn, none breaks the policy or errs, none is cut off or scrolls sideways', async ({ page, context, isPhone, manager }) => {
   test.slow()
@@ -40,10 +35,10 @@ test('on every screen axe finds nothing, by day and at dawn, none breaks the pol
     titles.set(title, [...titles.get(title) ?? [], name])
     const note = (faults: string[], of: string): void => { for (const fault of faults) found.push(`${name}, ${of}: ${fault}`) }
     note(await findFaults(page), 'day')
-    note(await page.evaluate(findWide), `${first.width}`)
+    note(await findWide(page), `${first.width}`)
     for (const size of others) {
       await page.setViewportSize(size)
-      note(await page.evaluate(findWide), `${size.width}`)
+      note(await findWide(page), `${size.width}`)
     }
     await page.setViewportSize(first)
     // A desk has the same colours; at dawn it is a phone that is out.

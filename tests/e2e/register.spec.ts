@@ -1,6 +1,8 @@
 import type { Page } from '@playwright/test'
+import type { RegisterRow } from '../../shared/contract/record.ts'
 import { readPdf } from '../support/readPdf.ts'
 import { choose, field } from './support/controls.ts'
+import { findWide } from './support/findWide.ts'
 import { registerRow } from './support/registerRow.ts'
 import { openScreen } from './support/screens.ts'
 import { expect, test } from './support/test.ts'
@@ -58,4 +60,27 @@ test('a record is found by words and by choice, the choice is kept, and what was
     expect(text).not.toContain(other.number ?? '')
   }
   expect(pdf.text).toContain(say('pdf.running.page', { page: 1, pages: 1 }))
+})
+
+/** As wide as a row can be: every field at its longest. */
+const WIDEST: Partial<RegisterRow> = {
+  version: 12, blocks: [{ id: 'a', code: 'WWWWWWWWWWWW' }, { id: 'b', code: 'MMMMMMMMMMMM' }], preparations: ['Wormwood and horsetail ferment', 'Wettable sulphur'],
+  lots: ['WORMWOOD-2026-LOT-000001', 'SULPHUR-0001'], areaHa: '123.45', totalL: '98765.4', sprayLPerHa: '12345', by: 'Wilhelmina Montgomery-Wentworth', lateHours: 1234,
+  tally: { stop: 0, caution: 0, unknown: 12 },
+}
+
+test('a row at its widest stays within the page', async ({ page, isPhone, signInAs, manager }) => {
+  const { number } = await makeSignedRecord(manager, await makeThings(manager))
+  await page.route(/\/records\?/, async (route) => {
+    const response = await route.fetch()
+    const { items, next } = await response.json() as { items: RegisterRow[]; next: string | null }
+    await route.fulfill({ response, json: { items: items.map((row) => (row.number === number ? { ...row, ...WIDEST } : row)), next } })
+  })
+  await signInAs('manager')
+  await openScreen(page, '/register')
+  await expect(registerRow(page, isPhone, number?.slice(-4) ?? '')).toContainText(WIDEST.by ?? '')
+  for (const width of isPhone ? [390, 320] : [1440, 1280, 1180, 1024]) {
+    await page.setViewportSize({ width, height: 844 })
+    expect(await findWide(page), String(width)).toEqual([])
+  }
 })

@@ -2,7 +2,7 @@ import { recordSchema } from '../../shared/contract/record.ts'
 import { field, segment } from './support/controls.ts'
 import { RecordForm } from './support/recordForm.ts'
 import { expect, test } from './support/test.ts'
-import { makeBlock, makeLot, makeMaterial, makeThings } from './support/things.ts'
+import { dayFromNow, makeBlock, makeLot, makeMaterial, makeThings } from './support/things.ts'
 import { say } from './support/words.ts'
 
 test('a spray with a stop, over two blocks and past midnight, is signed as it happened', async ({ page, isPhone, signInAs, manager }) => {
@@ -37,9 +37,8 @@ test('a spray with a stop, over two blocks and past midnight, is signed as it ha
     await form.main.getByRole('button', { name: say('recordForm.line.wasNextDay', { end: '00:20' }) }).click()
     await expect(question).toBeHidden()
   }
-  // Yesterday evening into this night.
-  const yesterday = new Date(Date.now() - 48 * 3_600_000).toISOString().slice(0, 10)
-  await form.setDay(yesterday)
+  // A night that is over, whatever hour it is.
+  await form.setDay(dayFromNow(-2))
   for (const name of ['why', 'told', 'done'] as const) await field(form.main, say(`records.stop.${name}`)).fill(`What stands under ${name}`)
   await expect(form.signButton).toHaveText(say('records.sign.asItHappened'))
   await form.sign()

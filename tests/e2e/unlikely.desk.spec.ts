@@ -1,4 +1,4 @@
-import { listBlocks, makeLot, makeMaterial, makeThings } from './support/things.ts'
+import { dayFromNow, listBlocks, makeLot, makeMaterial, makeThings } from './support/things.ts'
 import { BlockForm, extentOf, typedPoints } from './support/blockForm.ts'
 import { field } from './support/controls.ts'
 import { RecordForm } from './support/recordForm.ts'
@@ -58,6 +58,8 @@ test('a stop bars Start and never the signature: why, whom you tell, what was do
 
   await form.main.getByRole('button', { name: say('records.ready.alreadyDrench') }).click()
   await expect(form.step(2)).toHaveAttribute('aria-current', 'step')
+  // A day that is over, whatever hour it is.
+  await form.setDay(dayFromNow(-2))
   const [start, end] = [form.time('start', things.block.code), form.time('end', things.block.code)]
   await start.fill('00:10')
   await end.fill('00:40')

@@ -56,7 +56,7 @@ export const register = {
   tally: {
     stop: 'Stop, signed | {count} stops, signed',
     caution: 'Caution {number}',
-    unknown: 'No stop; {number} not known',
+    unknown: 'No stop; {number}\u00A0not\u00A0known',
     none: 'No stop',
     withdrawn: 'Withdrawn',
     started: 'Not signed yet',

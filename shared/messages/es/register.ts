@@ -56,7 +56,7 @@ export const register = {
   tally: {
     stop: 'Alto, firmado | {count} altos, firmado',
     caution: 'Cuidado {number}',
-    unknown: 'Ningún alto; no se sabe: {number}',
+    unknown: 'Ningún alto; no\u00A0se\u00A0sabe:\u00A0{number}',
     none: 'Ningún alto',
     withdrawn: 'Retirado',
     started: 'Aún sin firmar',
