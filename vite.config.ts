@@ -1,6 +1,7 @@
 import vue from '@vitejs/plugin-vue'
 import { defineConfig } from 'vite'
 import { leaveOut } from './vite/leaveOut.ts'
+import { cutPieces } from './vite/pieces.ts'
 
 /** Where the server answers while the client is served by Vite. */
 const apiUrl = process.env['API_URL'] ?? 'http://127.0.0.1:3000'
@@ -23,15 +24,9 @@ export default defineConfig({
     assetsInlineLimit: 0,
     rolldownOptions: {
       output: {
-        // A piece packs the better the more of a kind is in it: what every phone reads from sign-in to a new record lies in few.
-        codeSplitting: {
-          groups: [
-            // What the page's own script needs before all else: it says how the policy stands before any schema is made.
-            { name: 'helper', test: /preload-helper/, priority: 1 },
-            { name: 'libraries', test: /node_modules[\\/](@vue|vue|vue-router|pinia|@tanstack|vue-i18n|@intlify|zod|decimal\.js|temporal-polyfill|temporal-utils|idb|uuid)[\\/]/ },
-            { name: 'common', test: /[\\/](src|shared)[\\/]/, minShareCount: 18 },
-          ],
-        },
+        codeSplitting: { groups: cutPieces() },
+        // A shared piece would be named after all that share it.
+        chunkFileNames: ({ name }) => `assets/${name.split('~')[0] ?? name}-[hash].js`,
       },
     },
     // Every browser that runs this knows how to read modules ahead.

@@ -18,11 +18,20 @@ export function laterCode<Loaded>(load: () => Promise<Loaded>): () => Promise<Lo
   return load
 }
 
-/** A part that a page does without until somebody opens it, read in the same way. Named beside a component, not in its setup: each instance would name it anew. */
-export function laterPart(load: () => Promise<{ default: Component }>): Component {
+/**
+ * A part that a page does without until somebody opens it, read in the same way; of a piece with several parts, the one that is picked.
+ * Named beside a component, not in its setup: each instance would name it anew.
+ */
+export function laterPart(load: () => Promise<{ default: Component }>): Component
+export function laterPart<Parts>(load: () => Promise<Parts>, pick: (parts: Parts) => Component): Component
+export function laterPart<Parts extends { default?: Component }>(load: () => Promise<Parts>, pick = ({ default: part }: Parts) => part): Component {
   const read = laterCode(load)
   return defineAsyncComponent({
-    loader: () => withWords(read),
+    loader: async () => {
+      const part = pick(await withWords(read))
+      if (part === undefined) throw new Error('the piece has no such part')
+      return part
+    },
     onError: (_error, _retry, fail) => { void openNewBuild(window.location.href).finally(fail) },
   })
 }

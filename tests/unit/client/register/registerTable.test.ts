@@ -77,7 +77,7 @@ describe('RowTally', () => {
     [{ stop: 1, caution: 2, unknown: 1 }, 'Stop, signed'],
     [{ stop: 2, caution: 0, unknown: 0 }, '2 stops, signed'],
     [{ stop: 0, caution: 1, unknown: 3 }, 'Caution 1'],
-    [{ stop: 0, caution: 0, unknown: 1 }, 'No stop; 1 not known'],
+    [{ stop: 0, caution: 0, unknown: 1 }, 'No stop; 1\u00A0not\u00A0known'],
     [{ stop: 0, caution: 0, unknown: 0 }, 'No stop'],
   ])('of %j reads %s', (tally, words) => {
     expect(mount(RowTally, { global, props: { line: { state: 'signed', tally, onDevice: false } } }).text()).toBe(words)

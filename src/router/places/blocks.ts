@@ -1,0 +1,10 @@
+// The place of the blocks and of the ground. Read as one piece: a phone asks once for all of it.
+export { default as BlocksView } from '../../views/blocks/BlocksView.vue'
+export { default as BlockNewView } from '../../views/blocks/BlockNewView.vue'
+export { default as GroundView } from '../../views/blocks/GroundView.vue'
+export { default as GroundFormView } from '../../views/blocks/GroundFormView.vue'
+export { default as BlockImportView } from '../../views/blocks/BlockImportView.vue'
+export { default as BlocksMergeView } from '../../views/blocks/BlocksMergeView.vue'
+export { default as BlockSplitView } from '../../views/blocks/BlockSplitView.vue'
+export { default as BlockShapeView } from '../../views/blocks/BlockShapeView.vue'
+export { default as BlockPageView } from '../../views/blocks/BlockPageView.vue'
