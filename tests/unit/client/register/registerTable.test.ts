@@ -5,6 +5,7 @@ import type { RegisterSort } from '../../../../shared/contract/register.ts'
 import { presentRow } from '../../../../shared/register/presentRow.ts'
 import type { RegisterLine } from '../../../../shared/register/registerLine.ts'
 import RegisterFoot from '../../../../src/components/register/RegisterFoot.vue'
+import RegisterList from '../../../../src/components/register/RegisterList.vue'
 import RegisterTable from '../../../../src/components/register/RegisterTable.vue'
 import RowTally from '../../../../src/components/register/RowTally.vue'
 import { i18n } from '../../../../src/plugins/i18n.ts'
@@ -69,6 +70,17 @@ describe('RegisterTable', () => {
 
   it('ends in the totals it was given', () => {
     expect(mountTable([line()]).get('tfoot').text().replace(/\s+/g, ' ')).toContain('2 signed')
+  })
+})
+
+describe('RegisterList', () => {
+  it('strikes of a withdrawn record all that the table strikes, and of others nothing', () => {
+    const props = { outlines: new Map(), hrefOf: () => null }
+    const withdrawn = mount(RegisterList, { global, props: { ...props, lines: [line({ state: 'withdrawn', number: '2026-0127', totalKg: '12' })] } })
+    const struck = withdrawn.findAll('s').map((each) => each.text().replace(/\s+/g, ' '))
+    expect(struck).toEqual(['0127', 'T1, T2', 'Leaf-mould brew', '16 Jun 05:05', expect.stringMatching(/^346.* L$/), expect.stringMatching(/^12.* kg$/)])
+    expect(withdrawn.text()).toContain('Ruan Abel')
+    expect(mount(RegisterList, { global, props: { ...props, lines: [line()] } }).find('s').exists()).toBe(false)
   })
 })
 
