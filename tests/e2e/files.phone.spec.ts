@@ -83,11 +83,14 @@ test('what cannot be taken is said in a sentence, and the rest goes', async ({ p
   await page.locator('[data-add="photo"]').setInputFiles([
     { name: 'IMG_1.HEIC', mimeType: 'image/heic', buffer: Buffer.from('x') },
     { name: 'words.jpg', mimeType: 'image/jpeg', buffer: Buffer.from('only words, and enough of them') },
+    { name: 'cut.jpg', mimeType: 'image/jpeg', buffer: (await drawPhoto()).subarray(0, 2000) },
     { name: 'good.jpg', mimeType: 'image/jpeg', buffer: await drawPhoto() },
   ])
   await expect(page.getByText(`IMG_1.HEIC: ${say('problems.file.camera_only')}`)).toBeVisible()
-  await expect(row(page, 'words.jpg')).toContainText(say('problems.file.type'))
+  await expect(page.getByText(`words.jpg: ${say('problems.file.type')}`)).toBeVisible()
+  await expect(row(page, 'cut.jpg')).toContainText(say('problems.image.broken'))
   await expect(row(page, 'good.jpg')).toContainText(say('files.afterSignature'))
+  await expect(row(page, 'words.jpg')).toHaveCount(0)
   expect((await filesOf(manager, record.id)).map(({ label }) => label)).toEqual(['good.jpg'])
 })
 

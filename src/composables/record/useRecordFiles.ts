@@ -1,12 +1,13 @@
 import { useQuery } from '@tanstack/vue-query'
 import { computed, ref, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
-import { MOST_FILE_BYTES, type Attachment, type FileKind } from '../../../shared/contract/attachment.ts'
+import type { Attachment, FileKind } from '../../../shared/contract/attachment.ts'
 import { fileLabel } from '../../../shared/files/fileLabel.ts'
 import { fileApi } from '../../api/fileApi.ts'
 import { queryClient } from '../../plugins/queryClient.ts'
 import { useFileQueue } from '../../stores/fileQueue.ts'
 import type { FileLine } from '../files/fileLine.ts'
+import { judgeChosen } from '../files/judgeChosen.ts'
 import { newId } from '../form/newId.ts'
 import { useFileLines } from '../files/useFileLines.ts'
 import { useMessages } from '../app/useMessages.ts'
@@ -34,15 +35,6 @@ export interface RecordFiles {
   retry: (id: string) => Promise<void>
 }
 
-const CAMERA_ONLY = /\.(heic|heif|avif|tiff?|dng|cr2|cr3|nef|arw|raf|orf|rw2)$/i
-
-/** What is wrong with a chosen file before it is sent; the server judges the bytes themselves. */
-function faultOf({ name, size }: File): 'empty' | 'too_large' | 'camera_only' | null {
-  if (size === 0) return 'empty'
-  if (CAMERA_ONLY.test(name)) return 'camera_only'
-  return size > MOST_FILE_BYTES ? 'too_large' : null
-}
-
 /** The photos and papers of one record: seen, added, sent again, taken back. */
 export function useRecordFiles({ farmId, recordId, zone, isThere, isSigned }: RecordFilesOptions): RecordFiles {
   const { t } = useI18n()
@@ -59,7 +51,7 @@ export function useRecordFiles({ farmId, recordId, zone, isThere, isSigned }: Re
   const lines = useFileLines({ farmId, recordId, zone, isSigned, list: list.data })
 
   async function add(kind: FileKind, files: File[]): Promise<void> {
-    const judged = files.map((file) => ({ file, fault: faultOf(file) }))
+    const judged = await Promise.all(files.map(async (file) => ({ file, fault: await judgeChosen(file, kind) })))
     faults.value = judged.flatMap(({ file, fault }) => (fault === null ? [] : [`${file.name}: ${t(`problems.file.${fault}`)}`]))
     const taken = judged.filter(({ fault }) => fault === null).map(({ file }) => file)
     if (taken.length === 0) return
