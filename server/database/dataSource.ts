@@ -22,6 +22,7 @@ import { FindHolds1764651000000 } from '../../migrations/1764651000000-FindHolds
 import { FindSeasonCode1764648000000 } from '../../migrations/1764648000000-FindSeasonCode.ts'
 import { KeepCertificates1764652000000 } from '../../migrations/1764652000000-KeepCertificates.ts'
 import { RememberGrants1764652001000 } from '../../migrations/1764652001000-RememberGrants.ts'
+import { CountOnLand1764653000000 } from '../../migrations/1764653000000-CountOnLand.ts'
 import { ENTITIES } from './entities.ts'
 
 const DATE_TYPE = 1082
@@ -73,6 +74,7 @@ export function createOwnerSource(url: string): DataSource {
       FindHolds1764651000000,
       KeepCertificates1764652000000,
       RememberGrants1764652001000,
+      CountOnLand1764653000000,
     ],
     migrationsTransactionMode: 'each',
   })

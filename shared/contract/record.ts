@@ -113,10 +113,13 @@ export const registerRowSchema = z.object({
   preparations: z.array(z.string()),
   lots: z.array(z.string()),
   areaHa: z.string(),
+  /** What went on the land, where it was measured; else what was mixed. */
   totalL: z.string().nullable(),
   totalKg: z.string().nullable(),
   sprayLPerHa: z.string().nullable(),
   kgPerHa: z.string().nullable(),
+  /** Of a mix that was counted out: what went on each. */
+  sprayPerEach: z.object({ each: eachSchema, litres: z.string() }).nullable(),
   by: z.string(),
   /** Hours between the end of the work and the signature, where over 24. */
   lateHours: z.number().int().nullable(),

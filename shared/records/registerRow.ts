@@ -1,8 +1,8 @@
 import { tallyChecks } from '../checks/tallyChecks.ts'
 import type { Check, RegisterRow } from '../contract/record.ts'
 import type { RecordContent } from '../contract/recordContent.ts'
-import { decimalTextOf } from '../units/decimalTextOf.ts'
 import type { RecordSheet } from '../mix/sheetTypes.ts'
+import { landFigures } from './landFigures.ts'
 
 const HOUR_MS = 3_600_000
 /** Entered later than this after the work ended, a record carries how late. */
@@ -10,7 +10,7 @@ export const LATE_HOURS = 24
 
 export interface RowSource {
   content: RecordContent
-  sheet: Pick<RecordSheet, 'areaHa' | 'totalL' | 'totalKg' | 'sprayLPerHa' | 'kgPerHa'>
+  sheet: Pick<RecordSheet, 'areaHa' | 'totalL' | 'totalKg' | 'sprayPerEach'>
   checks: readonly Check[]
   blocks: readonly { id: string; code: string }[]
   materials: readonly { id: string; name: string }[]
@@ -35,8 +35,6 @@ function earliest(instants: readonly (string | null)[], direction = 1): string |
   return known.sort((a, b) => direction * (Date.parse(a) - Date.parse(b)))[0] ?? null
 }
 
-const textOf = (value: number | null): string | null => (value === null ? null : decimalTextOf(value))
-
 /** What the register shows of a record; hectares and litres as unrounded decimal text. */
 export function registerRow(source: RowSource): Omit<RegisterRow, 'id' | 'state'> {
   const { content, sheet, signed } = source
@@ -55,10 +53,7 @@ export function registerRow(source: RowSource): Omit<RegisterRow, 'id' | 'state'
     preparations: content.components.flatMap(({ materialId }) => nameOf(source.materials, materialId).map(({ name }) => name)),
     lots: content.components.flatMap(({ lotId }) => nameOf(source.lots, lotId).map(({ code }) => code)),
     areaHa: String(sheet.areaHa),
-    totalL: textOf(sheet.totalL),
-    totalKg: textOf(sheet.totalKg),
-    sprayLPerHa: textOf(sheet.sprayLPerHa),
-    kgPerHa: textOf(sheet.kgPerHa),
+    ...landFigures(content.lines, sheet),
     by: source.doneBy,
     lateHours: lateHours >= LATE_HOURS ? lateHours : null,
     tally: tallyChecks(source.checks),

@@ -11,7 +11,9 @@ import type { RecordSheet } from '../mix/sheetTypes.ts'
 import { lineCounts } from '../records/lineCounts.ts'
 import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { presentRate, presentVolume, type RegisterPlace } from './presentRow.ts'
+import { decimalTextOf } from '../units/decimalTextOf.ts'
 import { presentBlocks } from './presentBlocks.ts'
+import { presentEach } from './presentEach.ts'
 import type { RegisterLine } from './registerLine.ts'
 
 /** Half-typed content of a record: whatever does not read is left out of the line. */
@@ -60,6 +62,7 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, place: Registe
   const blocks = content.lines.flatMap(({ blockId }) => stock.blocks.find(({ id }) => id === blockId) ?? [])
   const sheet = blocks.length === 0 ? null : sheetOf(content, stock)
   const totalL = sheet?.totalL ?? null
+  const each = sheet?.sprayPerEach ?? null
   const at = content.lines[0]?.startedAt ?? draft.begunAt
   return {
     id: draft.id,
@@ -78,7 +81,7 @@ export function presentDraft(draft: DraftFacts, stock: FarmStock, place: Registe
     areaText: sheet === null ? '' : `${areaFor(place, sheet.areaM2)}\u00A0${unitFor(place, 'ha')}`,
     ...presentVolume(place, totalL),
     mass: '',
-    rate: presentRate(place, sheet?.sprayLPerHa ?? null, 'L/ha'),
+    rate: each ? presentEach(place, { each: each.each, litres: decimalTextOf(each.litres) }) : presentRate(place, sheet?.sprayLPerHa ?? null, 'L/ha'),
     by: draft.by,
     lateHours: null,
     tally: null,

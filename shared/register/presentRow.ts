@@ -5,6 +5,7 @@ import { civilDateIn, civilTimeIn } from '../time/civilDate.ts'
 import { formatNumber } from '../units/formatQuantity.ts'
 import type { UnitCode } from '../units/unitTable.ts'
 import { presentBlocks } from './presentBlocks.ts'
+import { presentEach } from './presentEach.ts'
 import type { RegisterLine } from './registerLine.ts'
 
 export interface RegisterPlace extends Reader {
@@ -38,7 +39,7 @@ export function presentRow(row: RegisterRow, place: RegisterPlace): RegisterLine
     areaText: quantityFor(place, row.areaHa, 'ha', { digits: 2 }),
     ...presentVolume(place, row.totalL),
     mass: row.totalKg === null ? '' : quantityFor(place, row.totalKg, 'kg', { digits: 1 }),
-    rate: presentRate(place, row.sprayLPerHa, 'L/ha') || presentRate(place, row.kgPerHa, 'kg/ha'),
+    rate: row.sprayPerEach ? presentEach(place, row.sprayPerEach) : presentRate(place, row.sprayLPerHa, 'L/ha') || presentRate(place, row.kgPerHa, 'kg/ha'),
     by: row.by,
     lateHours: row.lateHours,
     tally: row.tally,

@@ -5,6 +5,7 @@ import { ExactDecimal } from '../units/exactDecimal.ts'
 import type { BlockSummary, SeasonFigures, SeasonSummary } from './summaryTypes.ts'
 import { M2_PER_HA } from '../units/hectare.ts'
 import { compareCodes } from '../records/compareCodes.ts'
+import { landShares } from '../records/landFigures.ts'
 
 const WEEK_HOURS = 7 * 24
 
@@ -13,7 +14,7 @@ export interface SummarisedRecord {
   state: 'signed' | 'withdrawn'
   row: Omit<RegisterRow, 'id' | 'state'>
   content: Pick<RecordContent, 'lines'>
-  computed: Pick<Computed, 'lines'>
+  computed: Pick<Computed, 'totalL' | 'totalKg' | 'lines'>
 }
 
 /** A summary that records are added to one by one, so that no more than the blocks and their marks is held. */
@@ -70,14 +71,15 @@ function passesOf({ row, content, computed }: SummarisedRecord, zone: string): P
     const on = dayOf(row.startedAt)
     return [{ key: '', code: '', areaHa: row.areaHa, litres: row.totalL ?? '0', kg: row.totalKg ?? '0', isMeasured: false, on }]
   }
+  const onLand = landShares(content.lines, computed)
   return content.lines.map((line, index) => {
     const share = computed.lines[index]
     return {
       key: line.blockId,
       code: row.blocks.find(({ id }) => id === line.blockId)?.code ?? '',
       areaHa: share === undefined ? row.areaHa : new ExactDecimal(share.areaM2).div(M2_PER_HA).toFixed(),
-      litres: (share === undefined ? row.totalL : share.shareL) ?? '0',
-      kg: (share === undefined ? row.totalKg : share.shareKg) ?? '0',
+      litres: (share === undefined ? row.totalL : onLand[index]?.litres) ?? '0',
+      kg: (share === undefined ? row.totalKg : onLand[index]?.kg) ?? '0',
       isMeasured: line.amount?.known === 'measured',
       on: dayOf(line.startedAt ?? row.startedAt),
     }

@@ -13,7 +13,7 @@ export function buildPrintedRow(turn: number, overrides: Partial<PrintedRow> = {
     blocks: (turn % 5 === 0 ? ['A1', 'A2', 'A3', 'P1', 'P2', 'N1'] : ['A1']).map((code) => ({ id: code, code })),
     preparations, lots: preparations.map((_name, place) => `NF-${turn % 40}${place}`),
     areaHa: '0.9945', totalL: turn % 4 === 3 ? null : '419.3', totalKg: turn % 4 === 3 ? '120' : null,
-    sprayLPerHa: turn % 4 === 3 ? null : '421.6', kgPerHa: turn % 4 === 3 ? '120.6' : null,
+    sprayLPerHa: turn % 4 === 3 ? null : '421.6', kgPerHa: turn % 4 === 3 ? '120.6' : null, sprayPerEach: null,
     by: 'Oda Verrill', lateHours: turn % 23 === 0 ? 41 : null, tally: { stop: turn % 31 === 0 ? 1 : 0, caution: 0, unknown: turn % 3 },
     digest: '41d70b9e6a2fc85319e4'.padEnd(64, '0'),
     ...overrides,

@@ -1,6 +1,7 @@
 import { formatCheckCode } from '../../../shared/evidence/checkCode.ts'
 import { formatDay } from '../../../shared/messages/formatDay.ts'
 import { translate, type Language } from '../../../shared/messages/translate.ts'
+import { presentEach } from '../../../shared/register/presentEach.ts'
 import { civilDateIn, civilTimeIn } from '../../../shared/time/civilDate.ts'
 import { formatNumber, formatRate, formatVolumeL } from '../../../shared/units/formatQuantity.ts'
 import type { PrintedRow } from '../registerReportData.ts'
@@ -40,7 +41,7 @@ export function registerCells(row: PrintedRow, { language, zone }: PrintPlace): 
     row.lots.join(', ') || nothing,
     formatNumber(row.areaHa, { digits: Number(row.areaHa) < 0.1 ? 4 : 2 }, language),
     [row.totalL === null ? '' : `${formatVolumeL(row.totalL, language)}\u00a0L`, row.totalKg === null ? '' : `${formatNumber(row.totalKg, { digits: 1 }, language)}\u00a0kg`].filter((text) => text !== '').join('\n') || nothing,
-    [rate(row.sprayLPerHa, 'L', language), rate(row.kgPerHa, 'kg', language)].filter((text) => text !== '').join('\n') || nothing,
+    [row.sprayPerEach ? presentEach({ language, units: 'metric' }, row.sprayPerEach) : '', rate(row.sprayLPerHa, 'L', language), rate(row.kgPerHa, 'kg', language)].filter((text) => text !== '').join('\n') || nothing,
     row.lateHours === null ? row.by : say('late24', { name: row.by, hours: row.lateHours }),
     checkWords(row, say),
     row.digest === null ? '' : formatCheckCode(row.digest),

@@ -6,6 +6,7 @@ import { translate, type Language } from '../../../shared/messages/translate.ts'
 import { fillComputed, fillContent } from '../../../shared/records/fillStored.ts'
 import { mapPlainFields, PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 import { isoInZone } from '../../../shared/time/isoInZone.ts'
+import { decimalTextOf } from '../../../shared/units/decimalTextOf.ts'
 import { ExactDecimal } from '../../../shared/units/exactDecimal.ts'
 import { roundDecimal } from '../../../shared/units/roundDecimal.ts'
 import { roundParts } from '../../../shared/units/roundParts.ts'
@@ -70,7 +71,7 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
 }
 
 /** What a column is added up by: each block's own area and share of the mix, which come to those of the record. Figures of one line alone are the record's. */
-function partsOf(row: CsvRecord['register_row'], { lines }: Computed): (index: number) => Pick<CsvLine, 'areaHa' | 'mixL' | 'massKg'> {
+function partsOf(row: CsvRecord['register_row'], { lines, totalL, totalKg }: Computed): (index: number) => Pick<CsvLine, 'areaHa' | 'mixL' | 'massKg'> {
   const isAlone = lines.length === 0 && row.blocks.length === 1
   const parts = (whole: string | null, shares: (string | null)[]): string[] => {
     if (isAlone) return [figure(whole)]
@@ -78,8 +79,8 @@ function partsOf(row: CsvRecord['register_row'], { lines }: Computed): (index: n
     return known.length === lines.length ? roundParts(known, DECIMALS) : []
   }
   const areas = parts(row.areaHa, lines.map(({ areaM2 }) => new ExactDecimal(areaM2).div(M2_PER_HA).toFixed()))
-  const litres = parts(row.totalL, lines.map(({ shareL }) => shareL))
-  const kilograms = parts(row.totalKg, lines.map(({ shareKg }) => shareKg))
+  const litres = parts(textOf(totalL), lines.map(({ shareL }) => shareL))
+  const kilograms = parts(textOf(totalKg), lines.map(({ shareKg }) => shareKg))
   return (index) => ({ areaHa: areas[index] ?? '', mixL: litres[index] ?? '', massKg: kilograms[index] ?? '' })
 }
 
@@ -125,4 +126,5 @@ function lotsInOrder(components: readonly RecordComponent[], lots: readonly stri
 }
 
 const figure = (value: string | null): string => (value === null ? '' : roundDecimal(value, DECIMALS))
+const textOf = (value: number | null): string | null => (value === null ? null : decimalTextOf(value))
 const instant = (at: string | null, { zone }: CsvPlace): string => (at === null ? '' : isoInZone(zone, at))

@@ -53,6 +53,7 @@ export const register = {
     by: 'By',
     checks: 'Checks',
   },
+  perEach: { plant: '{amount}/plant', tree: '{amount}/tree', rowM: '{amount}/row\u00A0m', bed: '{amount}/bed', pot: '{amount}/pot' },
   tally: {
     stop: 'Stop, signed | {count} stops, signed',
     caution: 'Caution {number}',

@@ -17,7 +17,7 @@ export const registerPrint = {
     record: 'Record', version: 'Version', state: 'State', season: 'Season', method: 'Method', block: 'Block', part: 'Part treated', areaHa: 'Area treated, ha',
     counts: 'Counted', stage: 'Growth stage', bbch: 'BBCH', start: 'Start', end: 'End', zone: 'Time zone', amount: 'Amount on this block', unit: 'Unit',
     known: 'How known', mixL: 'Share of the mix, L', massKg: 'Share by mass, kg', keepOutUntil: 'Keep out until', pickFrom: 'Pick from', preparations: 'Preparations of the record', lots: 'Lots, in the same order',
-    water: 'Carrier water from', litresPerHa: 'L/ha of the record', kgPerHa: 'kg/ha of the record',
+    water: 'Carrier water from', litresPerHa: 'L/ha on the land, record', kgPerHa: 'kg/ha on the land, record',
     doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late, record', stops: 'Stops of the record', unknowns: 'Not known of the record', checkCode: 'Check code',
   },
   pdf: {
@@ -41,7 +41,7 @@ export const registerPrint = {
     rows: 'On these pages',
     rowsText: '{rows} of {found} records',
     empty: 'No record fits. Nothing was written down for this in the register.',
-    note: 'A line through a record says that it was withdrawn; it counts in no sum. Hectares are as drawn and count each pass. Litres, kilograms and rates are those of the record. A check code is made from every word and figure of a signed record; look it up at {page}.',
+    note: 'A line through a record says that it was withdrawn; it counts in no sum. Hectares are as drawn and count each pass. Litres, kilograms and rates are what went on the land; what stayed in the tank is in none. A check code is made from every word and figure of a signed record; look it up at {page}.',
     foot: 'Check codes: {page}',
     printed: 'Printed {moment}',
     zone: 'Times are those of {zone}.',

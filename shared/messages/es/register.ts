@@ -53,6 +53,7 @@ export const register = {
     by: 'Por',
     checks: 'Comprobaciones',
   },
+  perEach: { plant: '{amount}/planta', tree: '{amount}/árbol', rowM: '{amount}/m\u00A0hilera', bed: '{amount}/bancal', pot: '{amount}/maceta' },
   tally: {
     stop: 'Alto, firmado | {count} altos, firmado',
     caution: 'Cuidado {number}',

@@ -18,7 +18,7 @@ export const registerPrint: Messages['registerPrint'] = {
     record: 'Registro', version: 'Versión', state: 'Estado', season: 'Campaña', method: 'Método', block: 'Parcela', part: 'Parte tratada', areaHa: 'Superficie tratada, ha',
     counts: 'Contado', stage: 'Estado de crecimiento', bbch: 'BBCH', start: 'Inicio', end: 'Fin', zone: 'Zona horaria', amount: 'Cantidad en esta parcela', unit: 'Unidad',
     known: 'Cómo se sabe', mixL: 'Parte de la mezcla, L', massKg: 'Parte por peso, kg', keepOutUntil: 'No entrar hasta', pickFrom: 'Cosechar desde', preparations: 'Preparados del registro', lots: 'Lotes, en el mismo orden',
-    water: 'Agua de', litresPerHa: 'L/ha del registro', kgPerHa: 'kg/ha del registro',
+    water: 'Agua de', litresPerHa: 'L/ha sobre el terreno, registro', kgPerHa: 'kg/ha sobre el terreno, registro',
     doneBy: 'Hecho por', signedAt: 'Firmado', lateHours: 'Horas de retraso, registro', stops: 'Altos del registro', unknowns: 'No se sabe del registro', checkCode: 'Código de control',
   },
   pdf: {
@@ -42,7 +42,7 @@ export const registerPrint: Messages['registerPrint'] = {
     rows: 'En estas páginas',
     rowsText: '{rows} de {found} registros',
     empty: 'Ningún registro coincide. Para esto no se anotó nada en el libro.',
-    note: 'Una línea sobre un registro dice que fue retirado; no cuenta en ninguna suma. Las hectáreas son las dibujadas y cuentan cada pasada. Litros, kilos y dosis son los del registro. El código de control se hace con cada palabra y cifra de un registro firmado; se consulta en {page}.',
+    note: 'Una línea sobre un registro dice que fue retirado; no cuenta en ninguna suma. Las hectáreas son las dibujadas y cuentan cada pasada. Litros, kilos y dosis son lo que llegó al terreno; lo que quedó en el tanque no está en ninguno. El código de control se hace con cada palabra y cifra de un registro firmado; se consulta en {page}.',
     foot: 'Códigos de control: {page}',
     printed: 'Impreso {moment}',
     zone: 'Las horas son las de {zone}.',

@@ -2,24 +2,30 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { seasonDigest } from '../../../shared/evidence/seasonDigest.ts'
 import { openSeasonSummary, type SummarisedRecord } from '../../../shared/season/openSeasonSummary.ts'
+import { landFigures } from '../../../shared/records/landFigures.ts'
 import { sumRegisterRows } from '../../../shared/register/sumRegisterRows.ts'
 
-interface Line { block: string; areaM2: number; shareL: string; known: 'measured' | 'counted' | 'workedOut' | null }
+/** amountL: what was written on the line; its share of the mix where nothing else is said. */
+interface Line { block: string; areaM2: number; shareL: string; amountL?: string; known: 'measured' | 'counted' | 'workedOut' | null }
 const M2_PER_HA = 10_000
+const amountOf = ({ known, shareL, amountL }: Line) => ({ amount: known === null ? null : { value: amountL ?? shareL, unit: 'L' as const, known } })
+const sum = (values: readonly (number | string)[]): number => values.reduce<number>((total, value) => total + Number(value), 0)
 
-const buildRecord = (lines: readonly Line[], changes: Partial<SummarisedRecord['row']> = {}, state: SummarisedRecord['state'] = 'signed'): SummarisedRecord => ({
+const buildRecord = (lines: readonly Line[], changes: Partial<SummarisedRecord['row']> = {}, state: SummarisedRecord['state'] = 'signed', totalKg: number | null = null): SummarisedRecord => ({
   state,
   row: {
     number: '2026-0001', season: 2026, version: 1, method: 'foliar', startedAt: '2026-06-16T13:00:00Z', endedAt: '2026-06-16T14:00:00Z', signedAt: '2026-06-16T15:00:00Z',
     blocks: lines.map(({ block }) => ({ id: block, code: block })), preparations: [], lots: [],
-    areaHa: String(lines.reduce((sum, { areaM2 }) => sum + areaM2, 0) / M2_PER_HA), totalL: String(lines.reduce((sum, { shareL }) => sum + Number(shareL), 0)), totalKg: null,
-    sprayLPerHa: null, kgPerHa: null, by: 'Tam Lisk', lateHours: null, tally: { stop: 0, caution: 0, unknown: 0 }, ...changes,
+    areaHa: String(sum(lines.map(({ areaM2 }) => areaM2)) / M2_PER_HA),
+    ...landFigures(lines.map(amountOf), { areaHa: 1, totalL: sum(lines.map(({ shareL }) => shareL)), totalKg, sprayPerEach: null }), by: 'Tam Lisk', lateHours: null, tally: { stop: 0, caution: 0, unknown: 0 }, ...changes,
   },
-  content: { lines: lines.map(({ block, known }) => ({
-    blockId: block, part: { kind: 'whole' as const }, counts: {}, stage: null, bbch: null, startedAt: '2026-06-16T13:00:00Z', endedAt: '2026-06-16T14:00:00Z',
-    amount: known === null ? null : { value: '1', unit: 'L' as const, known },
+  content: { lines: lines.map((line) => ({
+    blockId: line.block, part: { kind: 'whole' as const }, counts: {}, stage: null, bbch: null, startedAt: '2026-06-16T13:00:00Z', endedAt: '2026-06-16T14:00:00Z', ...amountOf(line),
   })) },
-  computed: { lines: lines.map(({ areaM2, shareL }) => ({ areaM2, shareL, shareKg: null, reEntryUntil: null, pickFrom: null })) },
+  computed: {
+    totalL: sum(lines.map(({ shareL }) => shareL)), totalKg,
+    lines: lines.map(({ areaM2, shareL }) => ({ areaM2, shareL, shareKg: totalKg === null ? null : String(totalKg / lines.length), reEntryUntil: null, pickFrom: null })),
+  },
 })
 
 const summarise = (records: readonly SummarisedRecord[]) => {
@@ -29,12 +35,12 @@ const summarise = (records: readonly SummarisedRecord[]) => {
 }
 
 const line = fc.record({
-  block: fc.constantFrom('A1', 'A2', 'P1', 'N1'), areaM2: fc.integer({ min: 1, max: 50_000 }), shareL: fc.integer({ min: 0, max: 90_000 }).map((tenths) => String(tenths / 10)),
+  block: fc.constantFrom('A1', 'A2', 'P1', 'N1'), areaM2: fc.integer({ min: 1, max: 50_000 }), shareL: fc.integer({ min: 1, max: 90_000 }).map((tenths) => String(tenths / 10)), amountL: fc.integer({ min: 1, max: 90_000 }).map((tenths) => String(tenths / 10)),
   known: fc.constantFrom('measured' as const, 'workedOut' as const, null),
 })
-const record = fc.tuple(fc.array(line, { minLength: 1, maxLength: 6 }), fc.boolean(), fc.boolean()).map(([lines, isWithdrawn, isOld]) => {
-  const made = buildRecord(lines, {}, isWithdrawn ? 'withdrawn' : 'signed')
-  return isOld ? { ...made, computed: { lines: [] } } : made
+const record = fc.tuple(fc.array(line, { minLength: 1, maxLength: 6 }), fc.boolean(), fc.boolean(), fc.option(fc.integer({ min: 1, max: 500 }))).map(([lines, isWithdrawn, isOld, totalKg]) => {
+  const made = buildRecord(lines, {}, isWithdrawn ? 'withdrawn' : 'signed', totalKg)
+  return isOld ? { ...made, computed: { ...made.computed, lines: [] } } : made
 })
 
 describe('the summary of a season', () => {
@@ -42,11 +48,12 @@ describe('the summary of a season', () => {
     fc.assert(fc.property(fc.array(record, { maxLength: 30 }), (records) => {
       const { figures, blocks } = summarise(records)
       const sums = sumRegisterRows(records.map(({ state, row }) => ({ ...row, state })))
-      const total = (name: 'areaHa' | 'litres') => blocks.reduce((sum, block) => sum + Number(block[name]), 0)
+      const total = (name: 'areaHa' | 'litres' | 'kg') => blocks.reduce((sum, block) => sum + Number(block[name]), 0)
       expect(figures.signed).toBe(sums.signed)
       expect(figures.withdrawn).toHaveLength(sums.withdrawn)
       expect(total('areaHa')).toBeCloseTo(Number(sums.areaHa), 6)
       expect(total('litres')).toBeCloseTo(Number(sums.totalL), 4)
+      expect(total('kg')).toBeCloseTo(Number(sums.totalKg), 4)
       expect(Number(figures.areaHa)).toBeCloseTo(Number(sums.areaHa), 6)
       expect(Number(figures.litresMeasured)).toBeLessThanOrEqual(Number(figures.litres))
     }), { numRuns: 200 })

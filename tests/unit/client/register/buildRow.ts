@@ -19,6 +19,7 @@ export const buildRow = (overrides: Partial<RegisterRow> = {}): RegisterRow => (
   totalKg: null,
   sprayLPerHa: '2469.664',
   kgPerHa: null,
+  sprayPerEach: null,
   by: 'Ruan Abel',
   lateHours: null,
   tally: { stop: 0, caution: 0, unknown: 2 },

@@ -45,4 +45,10 @@ describe('presentRow', () => {
     const line = presentRow(buildRow({ areaHa: '1.25', totalL: '637.5', sprayLPerHa: '510' }), { ...place, language: 'es' })
     expect(line).toMatchObject({ area: '1,25', volume: '637,5', rate: '510\u00a0L/ha', day: '16\u00a0jun' })
   })
+
+  it.each([
+    ['plant', '0.2', 'en', '0.2\u00a0L/plant'], ['plant', '0.03', 'en', '30\u00a0mL/plant'], ['rowM', '0.1234', 'en', '0.123\u00a0L/row\u00a0m'], ['bed', '16', 'en', '16\u00a0L/bed'], ['pot', '0.25', 'es', '0,25\u00a0L/maceta'],
+  ] as const)('reads a rate for each %s of %s L in %s as %s', (each, litres, language, words) => {
+    expect(presentRow(buildRow({ sprayPerEach: { each, litres } }), { ...place, language }).rate).toBe(words)
+  })
 })
