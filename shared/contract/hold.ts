@@ -8,6 +8,8 @@ const holdSchema = z.object({
   number: z.string(),
   /** Civil day of the farm on which the work began. */
   on: z.string(),
+  /** When the work ended: the instant from which its labels hold. */
+  from: z.string(),
   /** Nobody goes in before that instant, and first civil day for picking; null where no label says so. */
   reEntryUntil: z.string().nullable(),
   pickFrom: z.string().nullable(),

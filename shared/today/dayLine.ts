@@ -15,6 +15,8 @@ export interface DayFacts {
   /** Jobs whose last day is over, the longest late first. */
   lateJobs: readonly { code: string; days: number }[]
   dueJobs: number
+  /** Blocks that nobody goes into yet, the first to end first: until what time, and on which day in words where that is not today. */
+  keepOut: readonly { code: string; time: string; day: string | null }[]
   drafts: number
   signedToday: number
   /** Codes of lots past their last day that still hold something. */
@@ -24,14 +26,14 @@ export interface DayFacts {
 }
 
 /**
- * What the day comes to, most urgent first: started work, the reader's own before that of others, jobs late and due, the lots that are past or end soon (the worse of both), drafts, what was signed.
+ * What the day comes to, most urgent first: started work, the reader's own before that of others, jobs late and due, the lots that are past or end soon (the worse of both), drafts, the blocks to keep out of, what was signed.
  * @returns at least one sentence; a day with nothing in it says so.
  */
 export function dayLine(facts: DayFacts): DaySentence[] {
   const ending = facts.pastLots.length > 0 ? pastSentence(facts) : soonSentence(facts)
   const waiting = [...startedSentence(facts), ...othersSentence(facts), ...lateSentence(facts), ...dueSentence(facts), ...ending, ...draftSentence(facts)]
   if (waiting.length === 0) waiting.push({ id: 'today.line.quiet', count: 0, figures: {} })
-  return [...waiting, ...signedSentence(facts)]
+  return [...waiting, ...keepOutSentence(facts), ...signedSentence(facts)]
 }
 
 function startedSentence({ started }: DayFacts): DaySentence[] {
@@ -84,6 +86,14 @@ function soonSentence({ soonLots }: DayFacts): DaySentence[] {
     count: 1,
     figures: { code: { text: only.code, ink: 'plain' }, figure: { text: only.day, ink: 'wel' } },
   }]
+}
+
+function keepOutSentence({ keepOut }: DayFacts): DaySentence[] {
+  const [only] = keepOut
+  if (only === undefined) return []
+  if (keepOut.length > 1) return [{ id: 'today.line.keepOutMany', count: keepOut.length, figures: { figure: { text: String(keepOut.length), ink: 'mad' } } }]
+  const figures = { code: { text: only.code, ink: 'mad' }, time: { text: only.time, ink: 'mad' } } as const
+  return [only.day === null ? { id: 'today.line.keepOutOne', count: 1, figures } : { id: 'today.line.keepOutOneOn', count: 1, figures: { ...figures, day: { text: only.day, ink: 'mad' } } }]
 }
 
 function signedSentence({ signedToday }: DayFacts): DaySentence[] {

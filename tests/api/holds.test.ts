@@ -42,7 +42,7 @@ it('are what the labels of signed records set, while they last', async () => {
   expect(await holds()).toEqual([])
   const id = await signed('2026-06-14')
   const held = {
-    blockId: things.blockId, recordId: id, number: '2026-0001', on: '2026-06-14', reEntryUntil: '2026-06-16T01:40:00Z', pickFrom: '2026-06-20', heldTo: '2026-06-19',
+    blockId: things.blockId, recordId: id, number: '2026-0001', on: '2026-06-14', from: '2026-06-14T13:40:00Z', reEntryUntil: '2026-06-16T01:40:00Z', pickFrom: '2026-06-20', heldTo: '2026-06-19',
   }
   expect(await holds()).toEqual([held])
   house.setNow('2026-06-19T23:00:00Z')

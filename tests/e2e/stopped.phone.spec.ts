@@ -8,7 +8,7 @@ import { say } from './support/words.ts'
 test('a spray with a stop, over two blocks and past midnight, is signed as it happened', async ({ page, isPhone, signInAs, manager }) => {
   const things = await makeThings(manager)
   const second = await makeBlock(manager)
-  const material = await makeMaterial(manager, { label: { maxStrengthPct: '2', reEntryHours: '12', source: 'part 3' } })
+  const material = await makeMaterial(manager, { label: { maxStrengthPct: '2', reEntryHours: '96', source: 'part 3' } })
   const first = { material, lot: await makeLot(manager, material.id) }
   await signInAs('manager')
   const form = new RecordForm(page, isPhone)
@@ -51,4 +51,9 @@ test('a spray with a stop, over two blocks and past midnight, is signed as it ha
   for (const { startedAt, endedAt } of record.lines) expect(Date.parse(endedAt ?? '') - Date.parse(startedAt ?? '')).toBe(30 * 60_000)
   expect(record.computed.lines.every(({ reEntryUntil }) => reEntryUntil !== null)).toBe(true)
   expect(record.checks.some(({ verdict, code }) => verdict === 'stop' && code === 'label.strength')).toBe(true)
+
+  await page.getByRole('navigation', { name: say('frame.placesLabel') }).getByRole('link', { name: say('frame.places.today') }).click()
+  const held = page.getByRole('region', { name: say('blocks.held.inForce') }).getByRole('listitem').filter({ hasText: things.block.code })
+  await expect(held).toContainText(second.code)
+  await expect(held).toContainText(/keep out until 00:20 on \d/)
 })

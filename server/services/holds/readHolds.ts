@@ -14,6 +14,7 @@ interface HoldRow {
   season: number
   number: number
   started_at: string
+  ended_at: string
   held_to: string
   re_entry_until: string | null
   pick_from: string | null
@@ -43,6 +44,7 @@ async function readHolds(manager: EntityManager, { farmId, zone }: FarmActor, { 
   const rows: HoldRow[] = await manager.query(
     `${GROUND} SELECT g.block_id, l.record_id, r.season, r.number, l.held_to::text,
        coalesce(r.content->'lines'->l.position->>'startedAt', to_json(l.sort_at)#>>'{}') AS started_at,
+       r.content->'lines'->l.position->>'endedAt' AS ended_at,
        r.computed->'lines'->l.position->>'reEntryUntil' AS re_entry_until, r.computed->'lines'->l.position->>'pickFrom' AS pick_from
      FROM ground g JOIN record_lines l ON l.farm_id = $1 AND l.block_id = g.worked_id JOIN application_records r ON r.farm_id = l.farm_id AND r.id = l.record_id
      WHERE l.held_to >= $2 AND ($3::uuid IS NULL OR g.block_id = $3) ORDER BY l.sort_at, l.record_id, l.position`,
@@ -50,7 +52,7 @@ async function readHolds(manager: EntityManager, { farmId, zone }: FarmActor, { 
   )
   return rows
     .map((row): Hold => ({
-      blockId: row.block_id, recordId: row.record_id, number: formatRecordNumber(row.season, row.number), on: civilDateIn(zone, row.started_at),
+      blockId: row.block_id, recordId: row.record_id, number: formatRecordNumber(row.season, row.number), on: civilDateIn(zone, row.started_at), from: row.ended_at,
       reEntryUntil: row.re_entry_until, pickFrom: row.pick_from, heldTo: row.held_to,
     }))
     .filter(({ on }) => on <= to)

@@ -61,7 +61,7 @@ export const ground = {
       line: 'Tap or click along it in order, or move the map under the cross and add points there.',
       area: 'Tap or click its corners in order, or move the map under the cross and add them there.',
     },
-    howKeys: 'By keyboard: go to the map, move the cross with the arrows, Space sets a point, Enter comes back here.',
+    howKeys: 'By keyboard: go to the map, move the cross with the arrows by 1 m (with Shift by 10 m, with Alt by 0.1 m), Space sets a point, Enter comes back here.',
     set: 'Set point here',
     bar: 'Points',
     none: 'No point set yet',

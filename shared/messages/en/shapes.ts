@@ -5,7 +5,7 @@ export const shapes = {
   reshape: {
     title: 'Reshape {code}',
     how: 'Drag a square to move a corner, a small circle to add one. Or choose a corner here and move it by metres.',
-    howKeys: 'By keyboard: go to the map, N goes from corner to corner, Space takes one up, arrows move it, Space lets go.',
+    howKeys: 'By keyboard: go to the map, N goes from corner to corner, Space takes one up, arrows move it by 1 m (with Shift by 10 m, with Alt by 0.1 m), Space lets go.',
     banner: '{code} reshape: {area}, perimeter {perimeter}, {points} points',
     bannerOpen: '{code}: {points} points',
     note: 'What the new outline rests on (optional)',
@@ -91,7 +91,7 @@ export const shapes = {
   split: {
     title: 'Split {code}',
     how: 'Draw a line across the block, from outside to outside. Or give it below without the map.',
-    howKeys: 'By keyboard: go to the map, move the cross with the arrows, Space sets a point of the line.',
+    howKeys: 'By keyboard: go to the map, move the cross with the arrows by 1 m (with Shift by 10 m, with Alt by 0.1 m), Space sets a point of the line.',
     by: 'How the line is given',
     byLine: 'Draw a line',
     byCorners: 'Between two corners',

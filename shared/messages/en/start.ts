@@ -24,7 +24,7 @@ export const start = {
   },
   place: {
     latitude: 'Latitude', longitude: 'Longitude', hint: 'In degrees, north and east above zero: 44.6118 and -123.3142', map: 'Where the farm lies',
-    mapHint: 'Press on the map where the farm lies, or move the cross with the arrow keys and set it with Space.', middle: 'Take the middle of the map',
+    mapHint: 'Press on the map where the farm lies, or move the cross with the arrow keys (with Shift in bigger steps) and set it with Space.', middle: 'Take the middle of the map',
     here: 'Where I am', refused: 'This browser does not tell where it is: it was not allowed to. Allow it in the browser’s settings, or type latitude and longitude.',
     unknown: 'This device does not know where it is. Type latitude and longitude, or press on the map.',
     latitudeWrong: 'A number from -90 to 90.', longitudeWrong: 'A number from -180 to 180.', kept: 'The map opens there from now on.',

@@ -61,7 +61,7 @@ export const ground = {
       line: 'Toque o haga clic a lo largo, en orden, o mueva el mapa bajo la cruz y añada ahí los puntos.',
       area: 'Toque sus esquinas en orden, o haga clic en ellas, o mueva el mapa bajo la cruz y añádalas ahí.',
     },
-    howKeys: 'Con el teclado: vaya al mapa, mueva la cruz con las flechas, Espacio pone un punto, Intro vuelve aquí.',
+    howKeys: 'Con el teclado: vaya al mapa, mueva la cruz con las flechas 1 m cada vez (con Mayús 10 m, con Alt 0,1 m), Espacio pone un punto, Intro vuelve aquí.',
     set: 'Poner punto aquí',
     bar: 'Puntos',
     none: 'Aún no hay puntos',

@@ -5,7 +5,7 @@ export const shapes = {
   reshape: {
     title: 'Modificar {code}',
     how: 'Arrastre un cuadrado para mover una esquina, o un círculo pequeño para añadir una. O elija aquí una esquina y muévala por metros.',
-    howKeys: 'Con el teclado: vaya al mapa; N va de esquina en esquina, Espacio toma una, las flechas la mueven y otro Espacio la suelta.',
+    howKeys: 'Con el teclado: vaya al mapa; N va de esquina en esquina, Espacio toma una, las flechas la mueven 1 m cada vez (con Mayús 10 m, con Alt 0,1 m) y otro Espacio la suelta.',
     banner: '{code}, modificación: {area}, perímetro {perimeter}, {points} puntos',
     bannerOpen: '{code}: {points} puntos',
     note: 'En qué se apoya el contorno nuevo (opcional)',
@@ -91,7 +91,7 @@ export const shapes = {
   split: {
     title: 'Dividir {code}',
     how: 'Trace una línea que cruce la parcela, de fuera a fuera. O indíquela abajo sin el mapa.',
-    howKeys: 'Con el teclado: vaya al mapa, mueva la cruz con las flechas; Espacio pone un punto de la línea.',
+    howKeys: 'Con el teclado: vaya al mapa, mueva la cruz con las flechas 1 m cada vez (con Mayús 10 m, con Alt 0,1 m); Espacio pone un punto de la línea.',
     by: 'Cómo se da la línea',
     byLine: 'Trazar una línea',
     byCorners: 'Entre dos esquinas',

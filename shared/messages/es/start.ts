@@ -24,7 +24,7 @@ export const start = {
   },
   place: {
     latitude: 'Latitud', longitude: 'Longitud', hint: 'En grados; norte y este sobre cero: 44.6118 y -123.3142', map: 'Dónde está la finca',
-    mapHint: 'Pulse en el mapa donde está la finca, o mueva la cruz con las flechas y fíjela con la barra espaciadora.', middle: 'Tomar el centro del mapa',
+    mapHint: 'Pulse en el mapa donde está la finca, o mueva la cruz con las flechas (con Mayús, a pasos mayores) y fíjela con la barra espaciadora.', middle: 'Tomar el centro del mapa',
     here: 'Donde estoy', refused: 'Este navegador no dice dónde está: no se le permitió. Permítalo en los ajustes del navegador o escriba latitud y longitud.',
     unknown: 'Este dispositivo no sabe dónde está. Escriba latitud y longitud o pulse en el mapa.',
     latitudeWrong: 'Un número de -90 a 90.', longitudeWrong: 'Un número de -180 a 180.', kept: 'Desde ahora el mapa se abre ahí.',

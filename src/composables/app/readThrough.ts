@@ -2,7 +2,7 @@ import { NetworkError } from '../../api/errors.ts'
 import { keepRead, keptRead } from '../../stores/reads.ts'
 
 /** Counts the shapes of what is kept: an answer of an older build, which lacks fields, is not read. */
-const SHAPE = 'v5'
+const SHAPE = 'v6'
 
 /**
  * Reads from the server and keeps the answer; without signal, gives the last answer kept on this device.

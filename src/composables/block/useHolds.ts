@@ -1,3 +1,4 @@
+import type { UseQueryReturnType } from '@tanstack/vue-query'
 import { computed, type ComputedRef } from 'vue'
 import type { Hold } from '../../../shared/contract/hold.ts'
 import { holdsNow, type Held } from '../../../shared/season/holdsNow.ts'
@@ -14,15 +15,17 @@ export interface Holds {
   lines: ComputedRef<readonly Hold[] | undefined>
   /** By block, as of this minute. */
   now: ComputedRef<ReadonlyMap<string, Held>>
+  query: UseQueryReturnType<Hold[], Error>
 }
 
 export function useHolds(isWanted: () => boolean = () => true): Holds {
   const session = useSession()
   const { time } = useClock()
   const { today } = useFarmDay()
-  const { data } = useFarmRead('holds', () => session.farmId, holdApi.today, isWanted)
+  const query = useFarmRead('holds', () => session.farmId, holdApi.today, isWanted)
   return {
-    lines: computed(() => data.value),
-    now: computed<ReadonlyMap<string, Held>>((before) => keepSame(before, today.value === null ? new Map() : holdsNow(data.value ?? [], time.value, today.value))),
+    lines: computed(() => query.data.value),
+    now: computed<ReadonlyMap<string, Held>>((before) => keepSame(before, today.value === null ? new Map() : holdsNow(query.data.value ?? [], time.value, today.value))),
+    query,
   }
 }

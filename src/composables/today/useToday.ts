@@ -17,6 +17,7 @@ import { useJobsWaiting } from '../rounds/useJobsWaiting.ts'
 import { useInputs, type Inputs } from '../input/useInputs.ts'
 import type { LotLine } from '../input/useLotWords.ts'
 import { usePeople } from '../people/usePeople.ts'
+import { useHoldsToday, type HoldsToday } from './useHoldsToday.ts'
 import { useRecords } from '../register/useRecords.ts'
 import { unsentDrafts, useRegisterLines } from '../register/useRegisterLines.ts'
 
@@ -44,6 +45,7 @@ export interface Today {
   rowsRead: ComputedRef<number>
   outlines: ComputedRef<ReadonlyMap<string, Boundary>>
   inputs: Inputs
+  held: HoldsToday
   newest: ReturnType<typeof useRecords>
   /** Records and the farm whose day it is have been read: without them nothing can be said to be none. */
   isRead: ComputedRef<boolean>
@@ -61,6 +63,7 @@ export function useToday(): Today {
   const inputs = useInputs()
   const { place, draftLines, present, outlines } = useRegisterLines()
   const jobs = useJobsWaiting()
+  const held = useHoldsToday()
   const { today } = inputs
   const { data: blocks } = useBlocks(farmId)
   const { data: people } = usePeople(farmId)
@@ -97,6 +100,13 @@ export function useToday(): Today {
     return (jobs.data.value ?? []).filter(({ state }) => state === 'late').map((job) => ({ code: job.blockCode, days: daysLate(job) })).sort((a, b) => b.days - a.days)
   })
 
+  /** The time on the farm, with its day where that is not today. */
+  const untilWords = (instant: string): { time: string; day: string | null } => {
+    const zone = place.value?.zone ?? 'UTC'
+    const day = civilDateIn(zone, instant)
+    return { time: civilTimeIn(zone, instant), day: day === today.value ? null : formatDay(preferences.language, day, { year: false }) }
+  }
+
   const sentences = computed(() => {
     const lots = endingLots.value
     return dayLine({
@@ -104,6 +114,7 @@ export function useToday(): Today {
       startedByOthers: open.value.others.map(({ codes, by }) => ({ codes, name: by })),
       lateJobs: lateJobs.value,
       dueJobs: jobs.data.value?.filter(({ state }) => state === 'due').length ?? 0,
+      keepOut: held.holds.value.filter(({ kind }) => kind === 'entry').flatMap(({ blocks: those, until }) => those.map(({ code }) => ({ code, ...untilWords(until) }))),
       drafts: deviceLines.value.length,
       signedToday: doneLines.value.filter(({ line }) => line.state === 'signed').length,
       pastLots: lots.filter(({ standing }) => standing.useBy === 'past').map(({ lot }) => lot.code),
@@ -119,10 +130,10 @@ export function useToday(): Today {
     sentences,
     open,
     openCount: computed(() => open.value.own.length + open.value.others.length),
-    doneLines, endingLots, blockLines, outlines, inputs, newest,
+    doneLines, endingLots, blockLines, outlines, inputs, held, newest,
     rowsRead: computed(() => rowsOf(newest).length),
     isRead,
-    ready: computed(() => isRead.value && inputs.ready.value && !jobs.isLoading.value),
+    ready: computed(() => isRead.value && inputs.ready.value && !jobs.isLoading.value && !held.isReading.value),
   }
 }
 

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { dayLine, type DayFacts } from '../../../../shared/today/dayLine.ts'
 import { translate } from '../../../../shared/messages/translate.ts'
 
-const quiet: DayFacts = { started: [], startedByOthers: [], lateJobs: [], dueJobs: 0, drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
+const quiet: DayFacts = { started: [], startedByOthers: [], lateJobs: [], dueJobs: 0, keepOut: [], drafts: 0, signedToday: 0, pastLots: [], soonLots: [] }
 const ids = (facts: Partial<DayFacts>): string[] => dayLine({ ...quiet, ...facts }).map(({ id }) => id)
 
 describe('dayLine', () => {
@@ -41,11 +41,19 @@ describe('dayLine', () => {
     expect(ids({ pastLots: ['27'], soonLots: [{ code: '31', day: '26 June' }] })).toEqual(['today.line.pastOne', 'today.line.noneSigned'])
   })
 
+  it('says of one block until when to keep out, with the day where that is not today, and counts several', () => {
+    const [today, later] = [{ code: 'V6', time: '09:01', day: null }, { code: 'V1', time: '10:00', day: '17 June' }]
+    expect(dayLine({ ...quiet, drafts: 1, keepOut: [today] }).map(({ id }) => id)).toEqual(['today.line.drafts', 'today.line.keepOutOne', 'today.line.noneSigned'])
+    expect(dayLine({ ...quiet, keepOut: [later] })[1]?.figures).toEqual({ code: { text: 'V1', ink: 'mad' }, time: { text: '10:00', ink: 'mad' }, day: { text: '17 June', ink: 'mad' } })
+    expect(dayLine({ ...quiet, keepOut: [today, later] })[1]).toMatchObject({ id: 'today.line.keepOutMany', count: 2 })
+  })
+
   it.each(['en', 'es'] as const)('has the words of every sentence in %s', (language) => {
     const all = [
       ...dayLine(quiet),
-      ...dayLine({ started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }], lateJobs: [{ code: 'V5', days: 1 }], dueJobs: 6, drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
-      ...dayLine({ started: ['V2', 'S1'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }, { codes: 'A4', name: 'Tam Lisk' }], lateJobs: [{ code: 'V5', days: 3 }, { code: 'V6', days: 1 }], dueJobs: 1, drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
+      ...dayLine({ ...quiet, keepOut: [{ code: 'V6', time: '09:01', day: '17 June' }] }),
+      ...dayLine({ started: ['V2'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }], lateJobs: [{ code: 'V5', days: 1 }], dueJobs: 6, keepOut: [{ code: 'V6', time: '09:01', day: null }], drafts: 2, signedToday: 1, pastLots: [], soonLots: [{ code: '31', day: '26 June' }] }),
+      ...dayLine({ started: ['V2', 'S1'], startedByOthers: [{ codes: 'A3', name: 'Ruan Teal' }, { codes: 'A4', name: 'Tam Lisk' }], lateJobs: [{ code: 'V5', days: 3 }, { code: 'V6', days: 1 }], dueJobs: 1, keepOut: [{ code: 'V6', time: '09:01', day: null }, { code: 'V1', time: '10:00', day: '17 June' }], drafts: 2, signedToday: 1, pastLots: ['27', '28'], soonLots: [] }),
     ]
     for (const { id, figures } of all) {
       const params = Object.fromEntries(Object.entries(figures).map(([name, { text }]) => [name, text]))

@@ -4,7 +4,7 @@ import { dayLine } from '../../../../shared/today/dayLine.ts'
 import DayLine from '../../../../src/components/today/DayLine.vue'
 import { i18n } from '../../../../src/plugins/i18n.ts'
 
-const facts = { started: ['V2'], startedByOthers: [], lateJobs: [], dueJobs: 0, drafts: 1, signedToday: 3, pastLots: ['27', '28'], soonLots: [] }
+const facts = { started: ['V2'], startedByOthers: [], lateJobs: [], dueJobs: 0, keepOut: [], drafts: 1, signedToday: 3, pastLots: ['27', '28'], soonLots: [] }
 const textIn = (language: 'en' | 'es', changed = {}): string => {
   i18n.global.locale.value = language
   return mount(DayLine, { global: { plugins: [i18n] }, props: { sentences: dayLine({ ...facts, ...changed }) } }).text().replace(/\s+/g, ' ')
