@@ -57,6 +57,9 @@ function rate(value: string | null, unit: string, language: Language): string {
 function checkWords({ state, tally }: PrintedRow, say: (id: string, params?: Record<string, string | number>) => string): string {
   if (state === 'withdrawn') return say('withdrawn')
   if (state !== 'signed') return say('unsigned')
-  const found = tally.stop === 0 ? say('noStop') : tally.stop === 1 ? say('stop') : say('stops', { stops: tally.stop })
+  const found = tally.stop === 1 ? say('stop')
+    : tally.stop > 1 ? say('stops', { stops: tally.stop })
+    : tally.caution > 0 ? say('caution', { cautions: tally.caution })
+    : say('noStop')
   return tally.unknown === 0 ? found : say('unknown', { found, unknown: tally.unknown })
 }

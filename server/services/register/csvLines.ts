@@ -16,7 +16,7 @@ import { M2_PER_HA } from '../../../shared/units/hectare.ts'
 const FIGURES = [
   'record', 'version', 'state', 'season', 'method', 'block', 'part', 'areaHa', 'counts', 'stage', 'bbch', 'start', 'end', 'zone', 'amount', 'unit', 'known',
   'mixL', 'massKg', 'keepOutUntil', 'pickFrom', 'preparations', 'lots', 'water', 'litresPerHa', 'kgPerHa', 'doneBy',
-  'signedAt', 'lateHours', 'stops', 'unknowns', 'checkCode',
+  'signedAt', 'lateHours', 'stops', 'cautions', 'unknowns', 'checkCode',
 ] as const
 const WORDS = PLAIN_FIELDS.map(({ name }) => name)
 /** The columns of the register as CSV, in their order; what was written in words stands last. */
@@ -63,6 +63,7 @@ export function csvLines({ state, register_row: row, content: stored, computed: 
     signedAt: instant(row.signedAt, place),
     lateHours: row.lateHours === null ? '' : String(row.lateHours),
     stops: String(row.tally.stop),
+    cautions: String(row.tally.caution),
     unknowns: String(row.tally.unknown),
     checkCode: digest === null ? '' : cutCheckCode(digest),
   }

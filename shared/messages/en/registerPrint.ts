@@ -18,7 +18,7 @@ export const registerPrint = {
     counts: 'Counted', stage: 'Growth stage', bbch: 'BBCH', start: 'Start', end: 'End', zone: 'Time zone', amount: 'Amount on this block', unit: 'Unit',
     known: 'How known', mixL: 'Share of the mix, L', massKg: 'Share by mass, kg', keepOutUntil: 'Keep out until', pickFrom: 'Pick from', preparations: 'Preparations of the record', lots: 'Lots, in the same order',
     water: 'Carrier water from', litresPerHa: 'L/ha on the land, record', kgPerHa: 'kg/ha on the land, record',
-    doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late, record', stops: 'Stops of the record', unknowns: 'Not known of the record', checkCode: 'Check code',
+    doneBy: 'Done by', signedAt: 'Signed', lateHours: 'Hours late, record', stops: 'Stops of the record', cautions: 'Cautions of the record', unknowns: 'Not known of the record', checkCode: 'Check code',
   },
   pdf: {
     title: 'Register',
@@ -50,7 +50,7 @@ export const registerPrint = {
     },
     kg: '{value} kg',
     late24: '{name}, {hours} h late',
-    stop: '1 stop, signed', stops: '{stops} stops, signed', noStop: 'No stop', unknown: '{found}; {unknown} not known',
+    stop: '1 stop, signed', stops: '{stops} stops, signed', noStop: 'No stop', caution: 'Caution {cautions}', unknown: '{found}; {unknown} not known',
     withdrawn: 'Withdrawn', unsigned: 'Not signed', nothing: '–', version: 'version {version}',
   },
 }

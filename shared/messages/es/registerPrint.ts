@@ -19,7 +19,7 @@ export const registerPrint: Messages['registerPrint'] = {
     counts: 'Contado', stage: 'Estado de crecimiento', bbch: 'BBCH', start: 'Inicio', end: 'Fin', zone: 'Zona horaria', amount: 'Cantidad en esta parcela', unit: 'Unidad',
     known: 'Cómo se sabe', mixL: 'Parte de la mezcla, L', massKg: 'Parte por peso, kg', keepOutUntil: 'No entrar hasta', pickFrom: 'Cosechar desde', preparations: 'Preparados del registro', lots: 'Lotes, en el mismo orden',
     water: 'Agua de', litresPerHa: 'L/ha sobre el terreno, registro', kgPerHa: 'kg/ha sobre el terreno, registro',
-    doneBy: 'Hecho por', signedAt: 'Firmado', lateHours: 'Horas de retraso, registro', stops: 'Altos del registro', unknowns: 'No se sabe del registro', checkCode: 'Código de control',
+    doneBy: 'Hecho por', signedAt: 'Firmado', lateHours: 'Horas de retraso, registro', stops: 'Altos del registro', cautions: 'Cuidados del registro', unknowns: 'No se sabe del registro', checkCode: 'Código de control',
   },
   pdf: {
     title: 'Libro de registros',
@@ -51,7 +51,7 @@ export const registerPrint: Messages['registerPrint'] = {
     },
     kg: '{value} kg',
     late24: '{name}, {hours} h tarde',
-    stop: '1 alto, firmado', stops: '{stops} altos, firmado', noStop: 'Ningún alto', unknown: '{found}; no se sabe: {unknown}',
+    stop: '1 alto, firmado', stops: '{stops} altos, firmado', noStop: 'Ningún alto', caution: 'Cuidado {cautions}', unknown: '{found}; no se sabe: {unknown}',
     withdrawn: 'Retirado', unsigned: 'Sin firmar', nothing: '–', version: 'versión {version}',
   },
 }
