@@ -99,6 +99,9 @@ export const checks = {
     off: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart. Change speed, pressure, nozzles or the rate, or calibrate again.',
     past: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}; the next calibration was due on {dueOn}.',
     within: 'Planned {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart.',
+    offOnLand: 'Put on {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart. Look at speed, pressure and nozzles, or calibrate again.',
+    pastOnLand: 'Put on {planned} {unit}, measured {rate} {unit} on {doneOn}; the next calibration was due on {dueOn}.',
+    withinOnLand: 'Put on {planned} {unit}, measured {rate} {unit} on {doneOn}: {apart} % apart.',
   },
   counts: {
     title: 'How many on {code}',

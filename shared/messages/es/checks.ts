@@ -99,6 +99,9 @@ export const checks = {
     off: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia. Cambie velocidad, presión, boquillas o dosis, o calibre de nuevo.',
     past: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}; la siguiente calibración tocaba el {dueOn}.',
     within: 'Previstos {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia.',
+    offOnLand: 'Aplicados {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia. Revise velocidad, presión y boquillas, o calibre de nuevo.',
+    pastOnLand: 'Aplicados {planned} {unit}, medidos {rate} {unit} el {doneOn}; la siguiente calibración tocaba el {dueOn}.',
+    withinOnLand: 'Aplicados {planned} {unit}, medidos {rate} {unit} el {doneOn}: {apart} % de diferencia.',
   },
   counts: {
     title: 'Cuántos en {code}',

@@ -11,11 +11,20 @@ const facts = (sprayLPerHa: number | null, calibration: typeof MEASURED | null =
 }
 const judge = (given: RecordFacts) => judgeCalibration(given, dayOfUse(given))
 
-describe('the planned rate beside the calibrated one', () => {
+describe('the rate beside the calibrated one', () => {
   it.each([
     [400, 'pass', '0'], [439, 'pass', '+9.8'], [440, 'caution', '+10'], [360, 'caution', '-10'], [361, 'pass', '-9.8'], [500, 'caution', '+25'],
   ])('%d L/ha beside 400 is %s', (planned, verdict, figure) => {
     expect(judge(facts(planned))).toMatchObject({ verdict, figure: { params: { value: figure } } })
+  })
+
+  it('is judged by what went on the land, once every line says it', () => {
+    const planned = facts(400)
+    const onLand = (appliedL: string | null) => judge({ ...planned, sheet: { ...planned.sheet, areaHa: 2, appliedL } })
+    expect(onLand(null)).toMatchObject({ verdict: 'pass', text: { id: 'checks.calibration.within', params: { planned: 400 } } })
+    // 600 L on 2 ha are 300 L/ha, a quarter under 400.
+    expect(onLand('600')).toMatchObject({ verdict: 'caution', text: { id: 'checks.calibration.offOnLand', params: { planned: 300, apart: 25 } }, figure: { params: { value: '-25' } } })
+    expect(onLand('800')).toMatchObject({ verdict: 'pass', text: { id: 'checks.calibration.withinOnLand' } })
   })
 
   it('is not known before the first calibration, and before it was made', () => {
