@@ -173,7 +173,10 @@ export interface CommandAnswers {
 
 export type CommandKind = keyof CommandBodies
 
+/** What a command is about, for whom finds it kept without the page it came from: its name, and the civil day it stood on. */
+export interface CommandAbout { name: string; day: string }
+
 /** Something to be written: `id` names the thing it is about (the lot of a count, the record of a signature, the farm of several). */
 export type Command<Kind extends CommandKind = CommandKind> = {
-  [K in Kind]: { kind: K; farmId: string; id: string; body: CommandBodies[K] }
+  [K in Kind]: { kind: K; farmId: string; id: string; body: CommandBodies[K]; about?: CommandAbout }
 }[Kind]

@@ -9,7 +9,7 @@ import { dayFromNow, makeBlock, makeThings } from './support/things.ts'
 import { unique } from './support/unique.ts'
 import { say } from './support/words.ts'
 
-test('a plan is made; a job is moved, one is done from its record, another is skipped with its reason', async ({ page, isPhone, signInAs, manager }) => {
+test('a plan is made; a job is moved, one is done from its record, another is skipped with its reason', async ({ page, context, isPhone, signInAs, manager }) => {
   const things = await makeThings(manager)
   const second = await makeBlock(manager)
   const [one, other] = [things.block, second]
@@ -64,6 +64,23 @@ test('a plan is made; a job is moved, one is done from its record, another is sk
   await card.getByRole('button', { name: say('rounds.job.skipSave') }).click()
   await expect(card.getByText(/^Skipped by .*: Picking all week$/)).toBeVisible()
   await page.keyboard.press('Escape')
+  await expect(card).toBeHidden()
+
+  // A day chosen without signal is judged when there is one; what was refused says which job it was of.
+  await openJob(one.code)
+  await context.setOffline(true)
+  await card.getByRole('button', { name: say('rounds.job.move') }).click()
+  await card.getByLabel(say('rounds.job.moveDay')).fill(dayFromNow(30))
+  await card.getByRole('button', { name: say('rounds.job.moveSave') }).click()
+  await expect(card.getByText(say('rounds.job.kept'))).toBeVisible()
+  await page.keyboard.press('Escape')
+  await expect(card).toBeHidden()
+  await context.setOffline(false)
+  await page.getByRole('button', { name: say('frame.sync.needsYou', { count: 1 }) }).filter({ visible: true }).click()
+  await expect(card).toContainText(`${one.code}, ${things.first.material.name}`)
+  await expect(card.getByText(/^From \d+ .* to \d+ /)).toBeVisible()
+  await expect(card).toContainText('outside the days of this job')
+  await card.getByRole('link', { name: say('rounds.kept.sheet') }).click()
   await expect(card).toBeHidden()
 
   await openJob(one.code)

@@ -126,6 +126,15 @@ export const rounds = {
     missing: 'No such plan on this farm.',
   },
   next: { label: 'Next job', more: '{count} more job waits here | {count} more jobs wait here' },
+  kept: {
+    move: 'From {from} to {to}',
+    moveTo: 'To {to}',
+    moveBack: 'Back to the day it falls due',
+    reason: 'Reason: {reason}',
+    goOnMove: 'Choose a day for it again on the season sheet: that takes the place of this one. Dropped here, the job stays on the day it has there.',
+    goOn: 'Look at it on the season sheet and decide again there. Dropped here, the job stays as it stands there.',
+    sheet: 'Open the season sheet',
+  },
   today: {
     title: 'Jobs due and late',
     more: 'Season sheet',

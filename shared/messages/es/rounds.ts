@@ -127,6 +127,15 @@ export const rounds: Messages['rounds'] = {
     missing: 'No hay tal plan en esta finca.',
   },
   next: { label: 'Próxima tarea', more: '{count} tarea más espera aquí | {count} tareas más esperan aquí' },
+  kept: {
+    move: 'Del {from} al {to}',
+    moveTo: 'Al {to}',
+    moveBack: 'De vuelta al día que le toca',
+    reason: 'Motivo: {reason}',
+    goOnMove: 'Elija de nuevo un día para ella en la hoja de campaña: ocupará el lugar de este cambio. Si lo descarta aquí, la tarea se queda en el día que tiene allí.',
+    goOn: 'Mírela en la hoja de campaña y decida de nuevo allí. Si lo descarta aquí, la tarea se queda como está allí.',
+    sheet: 'Abrir la hoja de campaña',
+  },
   today: {
     title: 'Tareas pendientes y atrasadas',
     more: 'Hoja de campaña',

@@ -42,7 +42,7 @@ export function useJobActs(job: () => Job): JobActs {
     const error = task.error.value
     return error instanceof ApiError && error.problem.acknowledgeable === true ? (error.problem.errors.find(({ code }) => code === OUTSIDE)?.message ?? '') : ''
   })
-  const about = () => ({ farmId: session.farmId, id: job().id })
+  const about = () => ({ farmId: session.farmId, id: job().id, about: { name: `${job().blockCode}, ${job().preparation}`, day: job().plannedOn } })
 
   async function send(command: Parameters<typeof submit>[0]): Promise<void> {
     if (!task.running.value) await task.run(command)
