@@ -9,7 +9,7 @@ export interface CertificateRun { certificate: Certificate; from: string | null;
  * the next begins. Those taken back run on no day.
  */
 export function certificateRuns(certificates: readonly Certificate[]): CertificateRun[] {
-  const standing = certificates.filter(({ withdrawn }) => withdrawn === null).sort((one, other) => (one.validFrom ?? '').localeCompare(other.validFrom ?? ''))
+  const standing = inOrder(certificates)
   return standing.flatMap((certificate, index) => {
     const { validFrom, validUntil } = certificate
     const next = standing[index + 1]?.validFrom ?? null
@@ -18,6 +18,25 @@ export function certificateRuns(certificates: readonly Certificate[]): Certifica
     return validFrom !== null && until !== null && until < validFrom ? [] : [{ certificate, from: validFrom, until }]
   })
 }
+
+/**
+ * Which certificates end before their own last day because the next begins, by id: the one that stands in their place, and from which day.
+ * `never`: both begin on the same day, so that the earlier one stands on none.
+ */
+export function certificatesReplaced(certificates: readonly Certificate[]): Map<string, { by: Certificate; from: string; never: boolean }> {
+  const standing = inOrder(certificates)
+  return new Map(standing.flatMap(({ id, validFrom, validUntil }, index) => {
+    const from = standing[index + 1]?.validFrom ?? null
+    // Of several that begin on that day the one written down last.
+    const by = standing.findLast((each) => each.validFrom === from)
+    if (by === undefined || from === null || (validUntil !== null && validUntil < from)) return []
+    return [[id, { by, from, never: validFrom === from }] as const]
+  }))
+}
+
+/** Those that were not taken back, by their first day. */
+const inOrder = (certificates: readonly Certificate[]): Certificate[] =>
+  certificates.filter(({ withdrawn }) => withdrawn === null).sort((one, other) => (one.validFrom ?? '').localeCompare(other.validFrom ?? ''))
 
 /** The runs that touch the civil days `from` to `to`, oldest first. */
 export function certificatesDuring(certificates: readonly Certificate[], { from, to }: { from: string; to: string }): CertificateRun[] {

@@ -68,6 +68,7 @@ export const frame = {
     allSent: 'Nothing waits. All that was written has arrived.',
     noSignal: 'No signal. Go on working: what is kept goes by itself when the signal is back.',
     waiting: 'The server has not answered yet. What is kept goes by itself.',
+    refused: 'The server has read this and refused it. It waits for you.',
     toSend: 'To send',
     needsYou: 'Needs you',
     since: 'kept {at}',

@@ -149,6 +149,10 @@ export const people = {
     holds: 'holds until {day}',
     over: 'ran out on {day}',
     always: 'no last day written down',
+    same: {
+      span: 'Holds on the same days as {other}, {from} to {until}.', from: 'Holds on the same days as {other}, from {from} on.',
+      until: 'Holds on the same days as {other}, until {until}.', open: 'Holds on the same days as {other}: no day is written on either.',
+    },
     addFile: 'Add the paper',
     unread: 'The papers could not be read.',
   },

@@ -17,7 +17,7 @@ export const profile = {
     takeBackText: 'For one that never was the farm’s. It stays readable here and is printed nowhere. Say why.', reason: 'Why', takenBack: 'Taken back: {reason}',
     fromHint: 'From this day on it stands in place of the one before.', untilHint: 'Leave it empty where none is printed.',
     save: 'Write down', saveCorrected: 'Keep the correction', saved: 'Certificate {number} is written down, from {day}.', corrected: 'Certificate {number} is corrected.', wasTakenBack: 'Certificate {number} is taken back.',
-    others: 'Earlier and later ones', isNext: 'The next one.',
+    others: 'Earlier and later ones', isNext: 'The next one.', replaced: 'From {day} on {number} stands in its place.', never: 'Stands on no day: {number} begins on the same day, {day}.',
   },
   contact: 'Contact', contactNone: 'nobody written down', person: 'Whom to ask', address: 'Address', phone: 'Telephone', email: 'E-mail',
   rules: 'Rules it works under', rulesNone: 'none named', rulesHint: 'Named here and in reports. Records are not judged by them yet: what the law asks is not checked.',

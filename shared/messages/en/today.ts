@@ -43,11 +43,13 @@ export const today = {
     startedBy: 'started {day} {time}, {name}',
   },
   done: {
-    title: 'So far today',
+    title: 'Signed today',
+    titleBack: 'Signed and withdrawn today',
     more: 'Register',
     empty: 'Nothing is signed today yet.',
     failed: 'What was signed today did not come.',
     row: '{codes}, {preparation}, by {name}',
+    workOf: 'work of {day}',
     at: 'signed at {time}',
   },
   ends: {

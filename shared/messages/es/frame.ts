@@ -68,6 +68,7 @@ export const frame = {
     allSent: 'Nada por enviar. Todo lo escrito ha llegado.',
     noSignal: 'Sin señal. Siga trabajando: lo guardado sale solo cuando vuelva la señal.',
     waiting: 'El servidor aún no ha respondido. Lo guardado sale solo.',
+    refused: 'El servidor lo leyó y lo rechazó. Espera a que usted decida.',
     toSend: 'Por enviar',
     needsYou: 'Le espera',
     since: 'guardado {at}',

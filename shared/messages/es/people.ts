@@ -151,6 +151,10 @@ export const people: Messages['people'] = {
     holds: 'vale hasta el {day}',
     over: 'caducó el {day}',
     always: 'sin último día anotado',
+    same: {
+      span: 'Vale los mismos días que {other}, del {from} al {until}.', from: 'Vale los mismos días que {other}, desde el {from}.',
+      until: 'Vale los mismos días que {other}, hasta el {until}.', open: 'Vale los mismos días que {other}: ninguno de los dos tiene un día anotado.',
+    },
     addFile: 'Añadir el documento',
     unread: 'No se han podido leer los documentos.',
   },

@@ -17,7 +17,7 @@ export const profile = {
     takeBackText: 'Para uno que nunca fue de la finca. Aquí se sigue leyendo y no se imprime en ningún papel. Diga por qué.', reason: 'Por qué', takenBack: 'Retirado: {reason}',
     fromHint: 'Desde este día ocupa el lugar del anterior.', untilHint: 'Déjelo vacío si no hay ninguno impreso.',
     save: 'Anotar', saveCorrected: 'Guardar la corrección', saved: 'Anotado el certificado {number}, desde el {day}.', corrected: 'Corregido el certificado {number}.', wasTakenBack: 'Retirado el certificado {number}.',
-    others: 'Anteriores y posteriores', isNext: 'El siguiente.',
+    others: 'Anteriores y posteriores', isNext: 'El siguiente.', replaced: 'Desde el {day} lo sustituye {number}.', never: 'No vale ningún día: {number} empieza el mismo día, {day}.',
   },
   contact: 'Contacto', contactNone: 'nadie anotado', person: 'A quién preguntar', address: 'Dirección', phone: 'Teléfono', email: 'Correo',
   rules: 'Normas bajo las que trabaja', rulesNone: 'ninguna nombrada', rulesHint: 'Se nombran aquí y en los informes. Los registros aún no se juzgan por ellas: lo que pide la ley no se comprueba.',

@@ -43,11 +43,13 @@ export const today = {
     startedBy: 'empezado el {day} {time}, {name}',
   },
   done: {
-    title: 'Hoy hasta ahora',
+    title: 'Firmado hoy',
+    titleBack: 'Firmado y retirado hoy',
     more: 'Registro',
     empty: 'Hoy aún no se ha firmado nada.',
     failed: 'Lo firmado hoy no llegó.',
     row: '{codes}, {preparation}, por {name}',
+    workOf: 'trabajo del {day}',
     at: 'firmado a las {time}',
   },
   ends: {

@@ -30,6 +30,9 @@ export interface BlockLine {
   last: { method: Method; preparation: string; day: string } | null
 }
 
+/** A record whose newest version was signed today. */
+export interface DoneLine { line: RegisterLine; signedAt: string; workOf: string }
+
 export interface Today {
   /** "Tuesday 16 June" at the farm; empty until the farm is read. */
   title: ComputedRef<string>
@@ -37,7 +40,8 @@ export interface Today {
   /** Started records and drafts of this device, the reader's own apart from those of others. */
   open: ComputedRef<OpenWork>
   openCount: ComputedRef<number>
-  doneLines: ComputedRef<{ line: RegisterLine; signedAt: string }[]>
+  /** Versions signed today, withdrawals among them, whenever the work was: its day in words, empty where that is today. */
+  doneLines: ComputedRef<DoneLine[]>
   endingLots: ComputedRef<LotLine[]>
   /** The last work on each block among the rows that were read, longest ago first. */
   blockLines: ComputedRef<BlockLine[]>
@@ -77,7 +81,7 @@ export function useToday(): Today {
     return signed
       .filter(({ at }) => civilDateIn(zone, at) === today.value)
       .sort((one, other) => Date.parse(other.at) - Date.parse(one.at))
-      .flatMap(({ row, at }) => present([row]).map((line) => ({ line, signedAt: civilTimeIn(zone, at) })))
+      .flatMap(({ row, at }) => present([row]).map((line) => ({ line, signedAt: civilTimeIn(zone, at), workOf: row.startedAt === null || civilDateIn(zone, row.startedAt) === today.value ? '' : line.day })))
   })
   const endingLots = computed(() => inputs.lotLines.value.filter(({ standing }) => isEnding(standing)))
 

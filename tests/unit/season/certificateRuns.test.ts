@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { certificateOn, certificateRuns, certificatesDuring, certifiedUntil, coverEveryDay } from '../../../shared/season/certificateRuns.ts'
+import { certificateOn, certificateRuns, certificatesDuring, certificatesReplaced, certifiedUntil, coverEveryDay } from '../../../shared/season/certificateRuns.ts'
 import { buildCertificate } from '../../support/buildCertificate.ts'
 
 const A = buildCertificate({ number: 'A', validFrom: '2025-03-01', validUntil: '2026-02-28' })
@@ -16,6 +16,18 @@ describe('certificates of a farm', () => {
     ['of two from one day the one written later', runs(A, { ...A, number: 'A2' }), [['A2', '2025-03-01', '2026-02-28']]],
     ['one taken back runs never', runs(A, taken), [['A', '2025-03-01', '2026-02-28']]],
   ])('%s', (_case, got, wanted) => { expect(got).toEqual(wanted) })
+
+  it.each([
+    ['one after the other: none', [A, B], []],
+    ['an early renewal, from its first day', [A, { ...B, id: 'b', validFrom: '2026-02-10' }], [['A', 'B', '2026-02-10', false]]],
+    ['one that has no end, by the next', [{ ...OPEN, id: 'o' }, B], [['open', 'B', '2026-03-01', false]]],
+    ['of two from one day the one written earlier, on all its days', [A, { ...A, id: 'a2', number: 'A2' }], [['A', 'A2', '2025-03-01', true]]],
+    ['one before two from one day, by the one that stands then', [A, { ...B, id: 'b', validFrom: '2026-02-10' }, { ...B, id: 'b2', number: 'B2', validFrom: '2026-02-10' }], [['A', 'B2', '2026-02-10', false], ['B', 'B2', '2026-02-10', true]]],
+    ['none by one taken back', [A, { ...taken, validFrom: '2026-02-10' }], []],
+  ])('replaced: %s', (_case, certificates, wanted) => {
+    const numbers = new Map(certificates.map(({ id, number }) => [id, number]))
+    expect([...certificatesReplaced(certificates)].map(([id, { by, from, never }]) => [numbers.get(id), by.number, from, never])).toEqual(wanted)
+  })
 
   it.each([
     ['2025-02-28', undefined], ['2025-03-01', 'A'], ['2026-02-28', 'A'], ['2026-03-01', 'B'], ['2027-03-01', undefined],

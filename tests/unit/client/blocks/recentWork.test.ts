@@ -5,7 +5,7 @@ import { recentWork } from '../../../../src/composables/map/recentWork.ts'
 const NOW = new Date('2026-06-13T12:00:00Z')
 const row = (facts: Partial<RegisterRow>): RegisterRow => ({
   id: 'r', state: 'signed', number: '2026-0001', season: 2026, version: 1, method: 'foliar', startedAt: '2026-06-12T06:00:00Z', endedAt: null, signedAt: null,
-  blocks: [{ id: 'a', code: 'A' }], preparations: [], lots: [], areaHa: '1', totalL: null, totalKg: null, sprayLPerHa: null, kgPerHa: null, by: 'Oda',
+  blocks: [{ id: 'a', code: 'A' }], preparations: [], lots: [], areaHa: '1', totalL: null, totalKg: null, sprayLPerHa: null, sprayPerEach: null, kgPerHa: null, by: 'Oda',
   lateHours: null, tally: { stop: 0, caution: 0, unknown: 0 }, ...facts,
 })
 

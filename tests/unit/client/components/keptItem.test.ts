@@ -7,7 +7,7 @@ import { mountWithWords } from '../mountWithWords.ts'
 
 const job = { farmId: 'f', id: 'step.block.2', about: { name: 'A3, Nettle ferment', day: '2026-06-18' } }
 const refused = 'That day has passed. Choose today, 22 June 2026, or a later day.'
-const problem = { type: 'about:blank', title: 'x', status: 422, code: 'invalid', detail: '', errors: [{ path: 'to', code: 'job.past_day', message: refused }], requestId: 'r' }
+const problem = { type: 'about:blank', title: 'x', status: 422, code: 'invalid', detail: refused, errors: [{ path: 'to', code: 'job.past_day', message: refused }], requestId: 'r' }
 const said = (command: Command, more: Partial<KeptCommand> = {}, language: 'en' | 'es' = 'en'): string => {
   i18n.global.locale.value = language
   return mountWithWords(KeptItem, { item: { key: 'k', accountId: 'oda', command, keptAt: '2026-06-16T06:00:00Z', state: 'needsYou', problem, ...more } }).text().replace(/\s+/g, ' ')
@@ -17,6 +17,7 @@ const move = (to: string | null): Command => ({ ...job, kind: 'job.move', body: 
 it('names the job of a refused move, the day it stood on and the one that was wanted, why it was refused, and how to go on', () => {
   const words = said(move('2026-06-20'))
   for (const part of ['Moved job, A3, Nettle ferment', 'From 18 June 2026 to 20 June 2026', refused, 'Choose a day for it again on the season sheet', 'Open the season sheet']) expect(words).toContain(part)
+  expect(words.split(refused)).toHaveLength(2)
   expect(said(move(null))).toContain('Back to the day it falls due')
   for (const part of ['Del 18 de junio de 2026 al 20 de junio de 2026', 'Abrir la hoja de campaña']) expect(said(move('2026-06-20'), {}, 'es')).toContain(part)
 })
