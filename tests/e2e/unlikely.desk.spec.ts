@@ -58,8 +58,13 @@ test('a stop bars Start and never the signature: why, whom you tell, what was do
 
   await form.main.getByRole('button', { name: say('records.ready.alreadyDrench') }).click()
   await expect(form.step(2)).toHaveAttribute('aria-current', 'step')
+  for (const [day, words] of [['2062-06-16', 'recordForm.gap.dayToCome'], ['1926-06-16', 'problems.date.years']] as const) {
+    await form.setDay(day)
+    await expect(form.main.getByRole('alert').filter({ hasText: say(words) })).toHaveCount(1)
+  }
   // A day that is over, whatever hour it is.
   await form.setDay(dayFromNow(-2))
+  await expect(form.main.getByText(say('problems.date.years'))).toHaveCount(0)
   const [start, end] = [form.time('start', things.block.code), form.time('end', things.block.code)]
   await start.fill('00:10')
   await end.fill('00:40')

@@ -1,12 +1,12 @@
 import type { Method, RecordContent } from '../../../shared/contract/recordContent.ts'
 import { firstStart } from '../../../shared/records/registerRow.ts'
+import { liesAhead } from '../../../shared/time/liesAhead.ts'
 import { dimensionOf } from '../../../shared/units/dimensionOf.ts'
 import type { FieldError } from '../../errors.ts'
 import { findBasisFaults, measureOf } from './findBasisFaults.ts'
 import { findPartFaults } from './findPartFaults.ts'
 import type { RecordGround } from './loadRecordGround.ts'
 
-const FUTURE_TOLERANCE_MS = 10 * 60_000
 const DAY_MS = 86_400_000
 const LONGEST_LINE_MS = DAY_MS
 
@@ -21,10 +21,9 @@ export function findRecordFaults(content: RecordContent, ground: RecordGround, n
 }
 
 function findTimeFaults({ startedAt, endedAt }: RecordContent['lines'][number], path: string, now: Date): FieldError[] {
-  const latest = now.getTime() + FUTURE_TOLERANCE_MS
   const faults: FieldError[] = []
   for (const [name, instant] of [['startedAt', startedAt], ['endedAt', endedAt]] as const) {
-    if (instant !== null && Date.parse(instant) > latest) faults.push({ path: `${path}.${name}`, code: 'time.future' })
+    if (instant !== null && liesAhead(instant, now)) faults.push({ path: `${path}.${name}`, code: 'time.future' })
   }
   if (startedAt === null || endedAt === null) return faults
   const lengthMs = Date.parse(endedAt) - Date.parse(startedAt)

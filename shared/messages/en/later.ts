@@ -1,5 +1,6 @@
 import { blocks } from './blocks.ts'
 import { check } from './check.ts'
+import { draftElsewhere } from './draftElsewhere.ts'
 import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
@@ -24,5 +25,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say; read when the first page stands. */
 export const later = {
-  blocks, check, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
+  blocks, check, draftElsewhere, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
 }

@@ -151,6 +151,7 @@ export const recordForm = {
     ratioZero: '1 part to 0 is no mix. Give a number above 0.',
     partNeeded: 'Which part was it?',
     countNeeded: 'How many? The mix is measured by them.',
+    dayToCome: 'By the clock of this device, this day is still to come. Only what was done is recorded.',
   },
   many: {
     open: 'Sign several',

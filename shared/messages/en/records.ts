@@ -3,6 +3,7 @@ export const records = {
   newTitle: 'New record',
   title: 'Record',
   draftSince: 'Draft on this device since {time}. It gets its number when it is signed.',
+  noDraftNow: 'This is no draft any more: here is the record as it stands.',
   draftSinceDay: 'Draft on this device since {day}, {time}. It gets its number when it is signed.',
   draftNew: 'It is kept on this device as you type. It gets its number when it is signed.',
   startedSince: 'Started {time}. It gets its number when it is signed.',

@@ -1,6 +1,7 @@
 import type { LaterScreens } from '../en.ts'
 import { blocks } from './blocks.ts'
 import { check } from './check.ts'
+import { draftElsewhere } from './draftElsewhere.ts'
 import { due } from './due.ts'
 import { farm } from './farm.ts'
 import { files } from './files.ts'
@@ -25,5 +26,5 @@ import { versions } from './versions.ts'
 
 /** What the other screens say, in Spanish. A missing key does not compile. */
 export const later: LaterScreens = {
-  blocks, check, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
+  blocks, check, draftElsewhere, due, farm, files, grants, ground, growing, happened, importing, journal, letters, likely, merge, people, problems, profile, recordRead, rounds, shapes, sprayers, start, versions,
 }

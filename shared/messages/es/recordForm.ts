@@ -151,6 +151,7 @@ export const recordForm = {
     ratioZero: '1 parte por 0 no es una mezcla. Dé un número mayor que 0.',
     partNeeded: '¿Qué parte fue?',
     countNeeded: '¿Cuántos? La mezcla se mide por ellos.',
+    dayToCome: 'Según el reloj de este dispositivo, ese día está por venir. Solo se registra lo que se hizo.',
   },
   many: {
     open: 'Firmar varios',

@@ -3,6 +3,7 @@ export const records = {
   newTitle: 'Registro nuevo',
   title: 'Registro',
   draftSince: 'Borrador en este dispositivo desde las {time}. Recibe su número al firmarse.',
+  noDraftNow: 'Ya no es un borrador: este es el registro tal como está.',
   draftSinceDay: 'Borrador en este dispositivo desde el {day}, {time}. Recibe su número al firmarse.',
   draftNew: 'Queda en este dispositivo según lo escribe. Recibe su número al firmarse.',
   startedSince: 'Empezado a las {time}. Recibe su número al firmarse.',

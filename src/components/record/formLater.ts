@@ -1,4 +1,5 @@
 // What a record's form does without until it is used. Read as one piece: a phone asks once for all of it.
+export { default as DraftElsewhere } from './DraftElsewhere.vue'
 export { default as LineEditor } from './LineEditor.vue'
 export { default as MeasuresDialog } from './MeasuresDialog.vue'
 export { default as MixTable } from './MixTable.vue'

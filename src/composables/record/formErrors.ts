@@ -1,7 +1,7 @@
 import { computed, type ComputedRef, type Ref } from 'vue'
 import { useI18n } from 'vue-i18n'
 import { fieldErrors } from '../form/fieldErrors.ts'
-import type { Gaps } from './recordGaps.ts'
+import type { Gaps } from './gaps.ts'
 
 interface ErrorSources {
   gaps: Ref<Gaps>

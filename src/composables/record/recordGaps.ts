@@ -4,12 +4,11 @@ import type { MessageId } from '../../../shared/messages/en.ts'
 import type { RecordSheet } from '../../../shared/mix/sheetTypes.ts'
 import { PLAIN_FIELDS } from '../../../shared/records/plainFields.ts'
 import { parseQuantityText } from '../../../shared/units/parseQuantityText.ts'
+import type { Gaps } from './gaps.ts'
 import { endMoment, type LineDraft } from './lineDraft.ts'
 import { contentOf, instantOf, partOf } from './recordContent.ts'
+import { yearFaults } from './timeFaults.ts'
 import { writtenLines, type ComponentDraft, type RecordDraft } from './recordDraft.ts'
-
-/** What is missing or cannot be read, by the path of the field in the record. */
-export type Gaps = Partial<Record<string, MessageId>>
 
 interface GapFacts {
   draft: RecordDraft
@@ -154,6 +153,7 @@ export function signGaps(facts: GapFacts & { hasStops: boolean }): Gaps {
     ...(!hasMix && { components: 'records.sign.needMix' }),
     ...countsNeeded(sheet),
     ...Object.assign({}, ...lines.map((line, index) => lineSignGaps(line, index, facts))) as Gaps,
+    ...yearFaults(draft),
     ...unreadable(draft),
     ...(hasStops && Object.fromEntries(
       (['why', 'told', 'done'] as const).filter((name) => draft.stop[name].trim() === '').map((name) => [`stop.${name}`, 'records.stop.needed' as const]),

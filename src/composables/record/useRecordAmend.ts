@@ -13,8 +13,10 @@ import { draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
 import { useAmendDraft } from './useAmendDraft.ts'
 import { keepSeconds } from './keepSeconds.ts'
 import { signGaps } from './recordGaps.ts'
+import { timeFaults } from './timeFaults.ts'
 import { formErrors } from './formErrors.ts'
 import { askedFor } from './askedFor.ts'
+import { useClock } from '../app/useClock.ts'
 import { useJars } from './useJars.ts'
 import { useLineRows } from './useLineRows.ts'
 import { useMixRows } from './useMixRows.ts'
@@ -46,6 +48,7 @@ export function useRecordAmend(id: string) {
   const record = computed(() => read.data.value ?? null)
   const standing = ref<ApplicationRecord | null>(null)
   const stock = computed(() => withOwnDraws(farmStock.value, standing.value))
+  const { time } = useClock()
   const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
   const kept = useAmendDraft(id)
   const { draft, reason } = kept
@@ -81,12 +84,12 @@ export function useRecordAmend(id: string) {
     },
   })
   const errors = formErrors({
-    gaps, live: computed(() => checking.shortLots.value), tried, refusals: [signing.error],
+    gaps, live: computed(() => ({ ...checking.shortLots.value, ...timeFaults(draft.value, zone.value, time.value) })), tried, refusals: [signing.error],
   })
 
   /** The signature stands under both steps; what happened, and why in spite of a stop, is asked on the second. */
   function showStepOf(paths: readonly string[]): void {
-    if (paths.some((path) => /^stop\.|\.(startedAt|endedAt|amount|used)$/.test(path))) draft.value.step = 2
+    if (paths.some((path) => /^stop\.|^workedInOn$|\.(day|startedAt|endedAt|amount|used)$/.test(path))) draft.value.step = 2
   }
 
   async function sign(): Promise<void> {

@@ -12,6 +12,8 @@ import { contentOf } from './recordContent.ts'
 import { momentAt } from './lineDraft.ts'
 import { writtenLines } from './recordDraft.ts'
 import { signGaps, startGap, unreadable } from './recordGaps.ts'
+import { timeFaults } from './timeFaults.ts'
+import { useClock } from '../app/useClock.ts'
 import { useFigures } from '../app/useFigures.ts'
 import { useJars } from './useJars.ts'
 import { useLateEntry } from './useLateEntry.ts'
@@ -34,6 +36,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
   const { stock, ready: stockReady, error: stockError, again } = useRecordStock()
   const form = useRecordForm({ ...options, stock, stockReady })
   const { draft } = form
+  const { time } = useClock()
   const zone = computed(() => stock.value.farm?.zone ?? 'UTC')
   const sheet = useRecordSheet(draft, stock)
   const checking = useRecordChecks(draft, stock, sheet)
@@ -77,7 +80,7 @@ export function useRecordEdit(options: { id: string; fresh: boolean; likeId: str
   }
 
   const errors = formErrors({
-    gaps, live: computed(() => ({ ...unreadable(draft.value), ...checking.shortLots.value })), tried, refusals: [starting.error, signing.error],
+    gaps, live: computed(() => ({ ...unreadable(draft.value), ...checking.shortLots.value, ...timeFaults(draft.value, zone.value, time.value) })), tried, refusals: [starting.error, signing.error],
   })
 
   return {

@@ -9,6 +9,7 @@ import { isNotFound } from '../app/isNotFound.ts'
 import { emptyLine } from './lineDraft.ts'
 import { readKeptDraft } from './readKeptDraft.ts'
 import { contentOf } from './recordContent.ts'
+import { saysNoMore } from './saysNoMore.ts'
 import { draftLike, draftOfRecord, emptyRecord, type RecordDraft } from './recordDraft.ts'
 import type { Draft } from '../../stores/draftTypes.ts'
 import { useDrafts } from '../form/useDrafts.ts'
@@ -37,8 +38,15 @@ interface RecordFormOptions {
 
 export interface RecordForm {
   draft: Ref<RecordDraft>
-  /** `signed`: somebody signed it already, it is only to be read. */
-  state: Ref<'loading' | 'ready' | 'signed'>
+  /**
+   * `signed`: somebody signed it already, it is only to be read. `notHere`: neither this device nor the farm has it.
+   * `unread`: this device has not got it, and the farm could not be asked.
+   */
+  state: Ref<'loading' | 'ready' | 'signed' | 'notHere' | 'unread'>
+  /** The record as it was signed meanwhile, where what is typed here says something else; else null. */
+  overtakenBy: Ref<ApplicationRecord | null>
+  /** Looks for it once more. */
+  lookAgain: () => Promise<void>
   /** When the draft was begun on this device; null before the first keystroke. */
   begunAt: Ref<string | null>
   flush: () => Promise<void>
@@ -60,14 +68,15 @@ export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stoc
   const drafts = useDrafts(() => stock.value.farmId, 'record')
   const preferences = usePreferences()
   const draft = ref<RecordDraft>(emptyRecord())
-  const state = ref<'loading' | 'ready' | 'signed'>('loading')
+  const state: RecordForm['state'] = ref('loading')
+  const overtakenBy = shallowRef<ApplicationRecord | null>(null)
   const begunAt = shallowRef<string | null>(null)
   let stopKeeping: (() => void) | null = null
   /** The form as the device has it: what another tab typed is not written back. */
   let keptText = ''
   let isDiscarded = false
 
-  async function find(): Promise<RecordDraft | 'signed'> {
+  async function find(): Promise<RecordDraft | 'signed' | 'notHere' | 'unread'> {
     const kept = await drafts.read<KeptContent>(id)
     if (kept) {
       begunAt.value = kept.begunAt
@@ -84,51 +93,61 @@ export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stoc
     return readJobDraft(stock.value, jobIds)
   }
 
-  /** Whether the server says that a record it knows is open no more; without an answer the draft stays as it is. */
-  async function isSigned({ revision }: RecordDraft): Promise<boolean> {
-    if (revision === null) return false
+  /** The record where the server says that it is open no more; without an answer the draft stays as it is. */
+  async function findClosed({ revision }: RecordDraft): Promise<ApplicationRecord | null> {
+    if (revision === null) return null
     try {
-      return !isOpen(await recordApi.read(stock.value.farmId, id))
+      const record = await recordApi.read(stock.value.farmId, id)
+      return isOpen(record) ? null : record
     } catch (error) {
-      if (error instanceof NetworkError || error instanceof ApiError) return false
+      if (error instanceof NetworkError || error instanceof ApiError) return null
       throw error
     }
   }
 
-  async function findAtServer(): Promise<RecordDraft | 'signed' | null> {
-    const { farmId, farm } = stock.value
+  async function findAtServer(): Promise<RecordDraft | 'signed' | 'notHere' | 'unread' | null> {
+    const { farmId } = stock.value
     try {
       if (fresh) return draftLike(await recordApi.read(farmId, likeId), preferences.units)
       const record = await recordApi.read(farmId, id)
-      return isOpen(record) ? draftOfRecord(record, farm?.zone ?? 'UTC', preferences.units) : 'signed'
+      return isOpen(record) ? draftOf(record) : 'signed'
     } catch (error) {
-      if (error instanceof NetworkError || isNotFound(error)) return null
+      if (isNotFound(error)) return fresh ? null : 'notHere'
+      if (error instanceof NetworkError || error instanceof ApiError) return 'unread'
       throw error
     }
   }
 
+  const zone = (): string => stock.value.farm?.zone ?? 'UTC'
+  const draftOf = (record: ApplicationRecord): RecordDraft => draftOfRecord(record, zone(), preferences.units)
+  const saidBy = (typed: RecordDraft): unknown => contentOf(typed, { zone: zone(), happened: true })
+
   function keep(): void {
-    const { farm } = stock.value
     const typed = draft.value
     const text = JSON.stringify(typed)
     if (text === keptText) return
     keptText = text
-    drafts.write(id, 'record', { ...contentOf(typed, { zone: farm?.zone ?? 'UTC', happened: true }), typed })
+    drafts.write(id, 'record', { ...contentOf(typed, { zone: zone(), happened: true }), typed })
     begunAt.value ??= now().toISOString()
   }
 
   async function load(): Promise<void> {
     const found = await find()
-    if (found === 'signed') { state.value = 'signed'; return }
+    if (typeof found === 'string') { state.value = found; return }
     show(found)
     state.value = 'ready'
     stopKeeping = watch(draft, keep, { deep: true })
     if (begunAt.value !== null) await leaveSigned()
   }
 
-  /** A weak signal does not hold up the form: it is open already, and is left when the answer says that the record is signed. */
+  /**
+   * A weak signal does not hold up the form: it is open already, and is left when the answer says that the record is signed. What was
+   * typed here and is not in the record stays until somebody has seen it.
+   */
   async function leaveSigned(): Promise<void> {
-    if (!(await isSigned(draft.value)) || isDiscarded) return
+    const closed = await findClosed(draft.value)
+    if (closed === null || isDiscarded) return
+    if (!saysNoMore(saidBy(draft.value), saidBy(draftOf(closed)))) { overtakenBy.value = closed; return }
     await discard()
     state.value = 'signed'
   }
@@ -157,7 +176,8 @@ export function useRecordForm({ id, fresh, likeId, blockIds, jobIds, stock, stoc
   onScopeDispose(stopWaiting)
 
   return {
-    draft, state, begunAt,
+    draft, state, begunAt, overtakenBy,
+    lookAgain: () => { state.value = 'loading'; return load() },
     flush: () => drafts.flush(),
     discard,
   }

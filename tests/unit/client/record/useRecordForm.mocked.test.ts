@@ -1,9 +1,9 @@
 import { flushPromises } from '@vue/test-utils'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { effectScope, ref } from 'vue'
-import { NetworkError } from '../../../../src/api/errors.ts'
+import { ApiError, NetworkError } from '../../../../src/api/errors.ts'
 import { recordApi } from '../../../../src/api/recordApi.ts'
-import type { RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
+import { draftOfRecord, type RecordDraft } from '../../../../src/composables/record/recordDraft.ts'
 import { useRecordForm } from '../../../../src/composables/record/useRecordForm.ts'
 import type { RecordStock } from '../../../../src/composables/record/useRecordStock.ts'
 import { buildDraft, buildRecord } from './buildRecord.ts'
@@ -25,12 +25,39 @@ async function open() {
 beforeEach(() => { vi.resetAllMocks() })
 
 describe('opening a draft', () => {
-  it.each(['signed', 'withdrawn'] as const)('drops it where its record is %s', async (state) => {
-    drafts.read.mockResolvedValue(kept({ revision: 3 }))
-    vi.spyOn(recordApi, 'read').mockResolvedValue(buildRecord({ state }))
+  it.each(['signed', 'withdrawn'] as const)('drops it where its record is %s and says all of it', async (state) => {
+    const record = buildRecord({ state })
+    drafts.read.mockResolvedValue(kept({ ...draftOfRecord(record, 'UTC'), lines: [], revision: 3 }))
+    vi.spyOn(recordApi, 'read').mockResolvedValue(record)
     const { state: shown } = await open()
     expect(shown.value).toBe('signed')
     expect(drafts.remove).toHaveBeenCalledWith('r1')
+  })
+
+  it('keeps what the signed record does not say, and says so', async () => {
+    const record = buildRecord({ state: 'signed' })
+    const typed = draftOfRecord(record, 'UTC')
+    drafts.read.mockResolvedValue(kept({ ...typed, plain: { ...typed.plain, notes: 'Typed after it was signed elsewhere' }, revision: 3 }))
+    vi.spyOn(recordApi, 'read').mockResolvedValue(record)
+    const { state, draft, overtakenBy } = await open()
+    expect([state.value, overtakenBy.value?.number, draft.value.plain.notes]).toEqual(['ready', record.number, 'Typed after it was signed elsewhere'])
+    expect(drafts.remove).not.toHaveBeenCalled()
+  })
+
+  it.each([
+    ['notHere', 'neither the device nor the farm has it', new ApiError({ type: 'about:blank', title: 'Not found', status: 404, code: 'not-found', detail: '', requestId: '', errors: [] })],
+    ['unread', 'the farm cannot be asked', new NetworkError()],
+  ] as const)('is no empty form but %s where %s', async (shown, _why, error) => {
+    drafts.read.mockResolvedValue(null)
+    const read = vi.spyOn(recordApi, 'read').mockRejectedValue(error)
+    const { state, lookAgain, draft } = await open()
+    expect(state.value).toBe(shown)
+    draft.value.sprayerId = 's9'
+    await flushPromises()
+    expect(drafts.write).not.toHaveBeenCalled()
+    read.mockResolvedValue(buildRecord({ state: 'started' }))
+    await lookAgain()
+    expect([state.value, draft.value.step]).toEqual(['ready', 2])
   })
 
   it('opens it as it is without signal', async () => {
