@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto'
 import type { Page } from '@playwright/test'
 import { pageOf } from '../../shared/contract/common.ts'
 import { registerRowSchema } from '../../shared/contract/record.ts'
@@ -64,6 +65,10 @@ test('the back button keeps the draft', async ({ page, isPhone, signInAs, manage
   await expect(page).toHaveURL(/\/register\/new\?draft=/)
   await expect(form.mixLine(things.first.material.name)).toBeVisible()
   await expect(form.startButton).toBeEnabled()
+  // An address of a draft that is nowhere opens no empty form.
+  await page.goto(`/register/new?draft=${randomUUID()}`)
+  await expect(page.getByText(say('draftElsewhere.notHere.title'))).toBeVisible()
+  await expect(form.startButton).toHaveCount(0)
 })
 
 test('without signal a draft stays, a block is kept, and both go on when the signal is back', async ({ page, context, isPhone, signInAs, manager }) => {
