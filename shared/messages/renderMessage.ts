@@ -28,8 +28,12 @@ function localise(language: Language, name: string, value: string | number): str
   if (typeof value === 'number') return formatNumber(value, { digits: decimalsOf(value) }, language)
   if (name.endsWith('On')) return formatDay(language, value)
   if (name === 'unit' || name.endsWith('Unit')) return translate(language, `units.${value}`)
-  return value
+  const signed = name === 'value' ? SIGNED.exec(value) : null
+  return signed ? `${signed[1] ?? ''}${localise(language, name, Number(signed[2]))}` : value
 }
+
+/** A difference, which says its sign. */
+const SIGNED = /^([+-])(\d+(?:\.\d+)?)$/
 
 /** Digits after the point that the number already carries: its maker has rounded it for display. */
 function decimalsOf(value: number): number {

@@ -27,6 +27,11 @@ describe('renderMessage', () => {
     expect(renderMessage('en', message)).toContain('26-018 has 1\u00a0234.5')
     expect(renderMessage('es', message)).toContain('1\u00a0234,5')
   })
+
+  it('gives them to a difference, too, and keeps its sign', () => {
+    const percent = (value: string) => renderMessage('es', { id: 'checks.figure.percent', params: { value } })
+    expect(['+22.4', '-9.8', '0'].map(percent)).toEqual(['+22,4\u00a0%', '-9,8\u00a0%', '0\u00a0%'])
+  })
 })
 
 describe('counts', () => {
