@@ -3,9 +3,8 @@ import { dirname, relative, resolve } from 'node:path'
 import { describe, expect, it } from 'vitest'
 import { en } from '../../shared/messages/en.ts'
 import { first } from '../../shared/messages/en/first.ts'
+import { FIELD_PATH } from '../../vite/pieces.ts'
 
-/** What is shown before the words of every screen are asked for: these three views, and all they read at once. */
-const WAY = ['src/start.ts', 'src/views/sign-in/SignInView.vue', 'src/views/today/TodayView.vue', 'src/views/register/RecordFormView.vue']
 const IMPORT = /^(?:import|export)(?! type)[^'"]*?'(\.[^']+)'/gm
 /** A whole id, or the beginning of one that is put together: what stands under it must all be there. */
 const MESSAGE = /['`]([a-z]\w+(?:\.\w+)+)(?:['`]|\.\$\{)/g
@@ -28,7 +27,7 @@ function readOnTheWay(): Map<string, string> {
     files.set(file, source)
     for (const [, path = ''] of source.matchAll(IMPORT)) read(resolve(dirname(file), path))
   }
-  for (const file of WAY) read(resolve(file))
+  for (const file of FIELD_PATH) read(resolve(file))
   return files
 }
 

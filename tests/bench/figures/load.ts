@@ -1,20 +1,16 @@
 import { gzipSync } from 'node:zlib'
 import vue from '@vitejs/plugin-vue'
 import { build, type Rolldown } from 'vite'
+import { FIELD_PATH } from '../../../vite/pieces.ts'
 
-/**
- * What stands on the way of a phone from sign-in over Today to a new record: the page, what it always reads at once, the words of one
- * language (English and Spanish weigh the same within a few hundred bytes), and the three views.
- */
-const FIELD_PATH = [
-  'src/start.ts', 'shared/messages/es/first.ts', 'src/views/sign-in/SignInView.vue', 'src/views/today/TodayView.vue', 'src/views/register/RecordFormView.vue',
-]
+/** The field path with the words of one language: English and Spanish weigh the same within a few hundred bytes. */
+const WEIGHED = [...FIELD_PATH, 'shared/messages/es/first.ts']
 
 /** Kilobytes of script, packed as the server packs them, of ours and of the least page of the same libraries. Exact: nothing is timed. */
 export async function measureLoad(): Promise<{ ours: number; baseline: number }> {
   const ours = await buildChunks({ build: { write: false } })
   const bare = await buildChunks({ root: 'tests/bench/baselines/bareApp', configFile: false, plugins: [vue()], build: { write: false } })
-  return { ours: weigh(ours, FIELD_PATH) / 1000, baseline: weigh(bare, []) / 1000 }
+  return { ours: weigh(ours, WEIGHED) / 1000, baseline: weigh(bare, []) / 1000 }
 }
 
 async function buildChunks(config: Parameters<typeof build>[0]): Promise<Rolldown.OutputChunk[]> {
